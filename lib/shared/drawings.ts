@@ -1,0 +1,91 @@
+import { z } from 'zod';
+import { PatchSchema, type Patch } from '@/diagram/document/patch';
+import type { Installation } from '@/diagram/document/schema';
+
+/** Requests and answers of the drawing routes; the same schema serves the screen and the handler. */
+
+export const uuid = z.uuid();
+
+/** One saved command: what was done, in words and as data. */
+export const ChangeSchema = z.strictObject({
+  /** made by the window that drew it; a retry with the same id is answered, not applied again */
+  saveId: uuid,
+  /** the revision the change starts from */
+  base: z.int().nonnegative(),
+  /** "Move Study fan to backup": what history shows */
+  label: z.string().min(1).max(160),
+  patch: PatchSchema,
+});
+export type Change = z.infer<typeof ChangeSchema>;
+
+export interface SavedChange {
+  rev: number;
+  saveId: string;
+  label: string;
+  patch: Patch;
+  /** who made it */
+  person: { id: string; name: string; initials: string };
+  /** ISO 8601, UTC */
+  at: string;
+}
+
+/** What the person who asks may do with a drawing. */
+export interface DrawingRights {
+  edit: boolean;
+  /** record a revision */
+  record: boolean;
+}
+
+export interface DrawingView {
+  id: string;
+  jobId: string;
+  rev: number;
+  document: Installation;
+  state: 'open' | 'submitted' | 'issued';
+  rights: DrawingRights;
+  /** for the title block */
+  titleBlock: TitleBlock;
+}
+
+export interface TitleBlock {
+  number: string;
+  title: string;
+  client: string;
+  address: string;
+  team: string;
+  drawnBy: string;
+  /** ISO date of the newest change */
+  drawnOn: string;
+  checkedBy: string | null;
+  /** letter of the newest recorded revision, or "-" */
+  revision: string;
+  state: string;
+}
+
+/** 200: saved (or had been saved before). */
+export interface SaveAnswer {
+  rev: number;
+}
+
+/** 409: somebody saved meanwhile. The client rebases, or asks when the same things were touched. */
+export interface StaleAnswer {
+  error: 'stale';
+  message: string;
+  rev: number;
+  since: SavedChange[];
+}
+
+export const RevisionSchema = z.strictObject({ note: z.string().trim().min(1, 'say in a few words what this revision is').max(200) });
+
+export interface RevisionView {
+  id: string;
+  /** A, B, C ... */
+  letter: string;
+  rev: number;
+  note: string;
+  state: 'draft' | 'submitted' | 'returned' | 'approved' | 'issued';
+  /** sha256 of the frozen document */
+  hash: string;
+  by: string;
+  at: string;
+}

@@ -1,0 +1,30 @@
+import plugin from 'tailwindcss/plugin';
+import type { Config } from 'tailwindcss';
+import { cores, dark, light, type Palette } from './diagram/symbols/palette';
+
+const variables = (palette: Palette, ground: 'light' | 'dark') =>
+  Object.fromEntries([
+    ...Object.entries(palette).map(([name, value]) => [`--${name}`, value]),
+    ...Object.entries(cores[ground]).map(([code, value]) => [`--core-${code}`, value]),
+    ['color-scheme', ground],
+  ]);
+
+export default {
+  content: ['./app/**/*.{ts,tsx}', './components/**/*.{ts,tsx}'],
+  theme: {
+    extend: {
+      colors: Object.fromEntries(Object.keys(light).map((name) => [name, `var(--${name})`])),
+      fontFamily: { mono: ['"JetBrains Mono"', 'ui-monospace', 'monospace'], sans: ['"JetBrains Mono"', 'ui-monospace', 'monospace'] },
+      fontSize: { small: ['11px', '16px'], body: ['12px', '16px'], head: ['13px', '16px'], title: ['20px', '24px'] },
+    },
+  },
+  plugins: [
+    plugin(({ addBase }) =>
+      addBase({
+        ':root': variables(light, 'light'),
+        ':root.dark': variables(dark, 'dark'),
+        '@media (prefers-color-scheme: dark)': { ':root:not(.light)': variables(dark, 'dark') },
+      }),
+    ),
+  ],
+} satisfies Config;
