@@ -1,0 +1,44 @@
+'use client';
+
+import { useEffect, useRef, type ReactNode } from 'react';
+import { Button } from '@/components/ui/button';
+
+interface MarginProps {
+  children: ReactNode;
+  label: string;
+  /** above: on a narrow screen it lies above the sheet; drawer: it comes in from the right edge */
+  narrow: 'above' | 'drawer';
+  open: boolean;
+  onClose(): void;
+}
+
+const beside = 'lap:static lap:visible lap:block lap:h-auto lap:w-[304px] lap:shrink-0 lap:overflow-y-auto lap:border-t-0 lap:border-r-0 lap:border-b-0 lap:border-l lap:border-rule lap:px-4 lap:py-4';
+const above = 'order-first border-b border-rule px-4 py-3 lap:order-none';
+
+/** What is to be answered on this sheet, at its right. */
+export function Margin({ children, label, narrow, open, onClose }: MarginProps) {
+  const box = useRef<HTMLElement>(null);
+  useEffect(() => {
+    if (open) box.current?.focus();
+  }, [open]);
+  if (narrow === 'above')
+    return (
+      <aside aria-label={label} className={`${above} ${beside}`}>
+        {children}
+      </aside>
+    );
+  return (
+    <aside
+      ref={box}
+      tabIndex={-1}
+      aria-label={label}
+      className={`fixed inset-y-0 right-0 z-20 w-[min(352px,100vw)] overflow-y-auto border-l-2 border-ink bg-paper p-4 outline-none ${open ? '' : 'invisible'} ${beside}`}
+      onKeyDown={(event) => event.key === 'Escape' && onClose()}
+    >
+      <div className="mb-4 flex justify-end lap:hidden">
+        <Button onClick={onClose}>Back to the sheet</Button>
+      </div>
+      {children}
+    </aside>
+  );
+}

@@ -1,0 +1,30 @@
+import Link from 'next/link';
+import type { Tab } from './types';
+
+export const tabName = (tab: Tab): string => (tab.number === undefined ? tab.label : `${tab.number} ${tab.label}`);
+
+/** The sheets of the set, as tabs on the paper's upper edge. */
+export function SheetTabs({ tabs, current }: { tabs: readonly Tab[]; current: string }) {
+  return (
+    <nav aria-label="Sheets of the set" className="hidden self-end lap:block">
+      <ul className="flex items-end gap-1">
+        {tabs.map((tab) => {
+          const open = tab.id === current;
+          return (
+            <li key={tab.id} className={tab.apart ? 'mr-2' : ''}>
+              <Link
+                href={tab.href}
+                aria-current={open ? 'page' : undefined}
+                className={`relative block border border-b-0 border-rule px-2 pt-[3px] pb-1 text-small text-ink no-underline ${
+                  open ? 'z-10 -mb-px bg-paper pb-[5px] font-bold' : 'bg-behind hover:bg-paper'
+                }`}
+              >
+                {tabName(tab)}
+              </Link>
+            </li>
+          );
+        })}
+      </ul>
+    </nav>
+  );
+}
