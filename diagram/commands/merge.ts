@@ -1,0 +1,120 @@
+import type { Face, Installation, Position } from '../document/schema';
+import { touched, type Patch } from '../document/patch';
+
+/**
+ * Two people on one drawing. A key (`parts:Q1`, `overview:Q1`, `title`) names the smallest thing that a change sets or
+ * removes; all judgements here are made key by key, so that one person's work never writes over the other's unseen.
+ */
+
+type Side = Record<string, unknown>;
+type Item = { id: string };
+const LISTS: ReadonlySet<string> = new Set(['places', 'parts', 'wires', 'cables', 'survey']);
+const isFace = (name: string): name is Face => name === 'overview' || name === 'connections';
+
+/** `parts:Q1` as its two halves; a field of the document has no second one. */
+export function splitKey(key: string): { name: string; id: string | null } {
+  const colon = key.indexOf(':');
+  return colon < 0 ? { name: key, id: null } : { name: key.slice(0, colon), id: key.slice(colon + 1) };
+}
+
+/** What the document holds at a key; undefined where it holds nothing. */
+export function valueAt(doc: Installation, key: string): unknown {
+  const { name, id } = splitKey(key);
+  if (id === null) return doc[name as keyof Installation];
+  if (isFace(name)) return doc.sheet?.[name]?.[id];
+  return (doc[name as 'parts'] as readonly Item[] | undefined)?.find((item) => item.id === id);
+}
+
+/** What a change leaves at a key that it touches; undefined where it removes. */
+export function valueIn(patch: Patch, key: string): unknown {
+  const { name, id } = splitKey(key);
+  const side = (patch.set as Side | undefined)?.[name];
+  if (id === null) return side;
+  if (isFace(name)) return (side as Record<string, Position> | undefined)?.[id];
+  return (side as readonly Item[] | undefined)?.find((item) => item.id === id);
+}
+
+const equal = (a: unknown, b: unknown): boolean => a === b || JSON.stringify(a) === JSON.stringify(b);
+
+/** The change without what it does at the given keys. */
+export function without(patch: Patch, keys: ReadonlySet<string>): Patch {
+  const strip = (side: Side | undefined): Side | undefined => {
+    if (!side) return undefined;
+    const kept: Side = {};
+    for (const [name, value] of Object.entries(side)) {
+      if (value === undefined) continue;
+      if (Array.isArray(value) && (LISTS.has(name) || isFace(name))) {
+        const rest = value.filter((item: string | Item) => !keys.has(`${name}:${typeof item === 'string' ? item : item.id}`));
+        if (rest.length > 0) kept[name] = rest;
+      } else if (isFace(name)) {
+        const rest = Object.entries(value as object).filter(([id]) => !keys.has(`${name}:${id}`));
+        if (rest.length > 0) kept[name] = Object.fromEntries(rest);
+      } else if (!keys.has(name)) kept[name] = value;
+    }
+    return Object.keys(kept).length > 0 ? kept : undefined;
+  };
+  const set = strip(patch.set);
+  const remove = strip(patch.remove);
+  return { ...(set && { set }), ...(remove && { remove }) } as Patch;
+}
+
+/** Ids of the parts that a change leaves wires ending at. */
+function partsNeeded(patch: Patch): Set<string> {
+  return new Set((patch.set?.wires ?? []).flatMap((wire) => [wire.from[0], wire.to[0]]));
+}
+
+/**
+ * The keys at which two changes from the same start cannot both stand: what both touch to different ends, and parts that
+ * one removes while the other wires them.
+ */
+export function conflicts(mine: Patch, theirs: Patch): string[] {
+  const ours = touched(mine);
+  const keys = new Set([...touched(theirs)].filter((key) => ours.has(key) && !equal(valueIn(mine, key), valueIn(theirs, key))));
+  const clash = (wiring: Patch, removing: Patch) => {
+    const needed = partsNeeded(wiring);
+    for (const id of removing.remove?.parts ?? []) if (needed.has(id)) keys.add(`parts:${id}`);
+  };
+  clash(mine, theirs);
+  clash(theirs, mine);
+  return [...keys].sort();
+}
+
+/**
+ * One's own change after somebody decided key by key: at a key of `theirs` the other person's stands, at all other keys
+ * mine does. A part of mine that they removed comes back when mine is kept; wires of mine to a part that stays removed go.
+ * @param doc the document with my change in it, to bring back what I had
+ */
+export function settle(mine: Patch, doc: Installation, contested: readonly string[], theirs: ReadonlySet<string>): Patch {
+  const dropped = new Set(contested.filter((key) => theirs.has(key)));
+  for (const wire of mine.set?.wires ?? [])
+    if (dropped.has(`parts:${wire.from[0]}`) || dropped.has(`parts:${wire.to[0]}`)) dropped.add(`wires:${wire.id}`);
+  const rest = without(mine, dropped);
+  const own = touched(rest);
+  const back = contested.filter((key) => !theirs.has(key) && !own.has(key) && key.startsWith('parts:'));
+  const parts = back.flatMap((key) => doc.parts.filter((part) => `parts:${part.id}` === key));
+  if (parts.length === 0) return rest;
+  return { ...rest, set: { ...rest.set, parts: [...(rest.set?.parts ?? []), ...parts] } };
+}
+
+/**
+ * The part of an undoing change that takes back only one's own step: keys that somebody has changed since the step stay as
+ * they are now, and a part that somebody has wired since stays.
+ * @param back what would undo the step
+ * @param step what the step itself left
+ */
+export function ownOnly(doc: Installation, back: Patch, step: Patch): Patch {
+  const foreign = new Set([...touched(back)].filter((key) => !equal(valueAt(doc, key), valueIn(step, key))));
+  const mine = without(back, foreign);
+  const going = new Set(mine.remove?.wires ?? []);
+  const moved = new Map((mine.set?.wires ?? []).map((wire) => [wire.id, wire]));
+  const held = new Set<string>();
+  for (const wire of doc.wires) {
+    if (going.has(wire.id)) continue;
+    const { from, to } = moved.get(wire.id) ?? wire;
+    held.add(from[0]).add(to[0]);
+  }
+  const kept = new Set<string>();
+  for (const id of mine.remove?.parts ?? [])
+    if (held.has(id)) for (const name of ['parts', 'overview', 'connections']) kept.add(`${name}:${id}`);
+  return kept.size === 0 ? mine : without(mine, kept);
+}
