@@ -230,14 +230,16 @@ export class Keeper {
       this.rev = change.rev;
     }
     this.pending = this.pending.filter((change) => !done.includes(change.saveId));
-    for (const change of this.pending) change.base = this.rev;
     const keys = new Set(this.pending.flatMap((mineChange) => theirs.flatMap((their) => conflicts(mineChange.patch, their.patch))));
+    // While somebody has to choose, the changes keep the revision they were drawn on: a reload then asks again.
+    if (keys.size === 0) for (const change of this.pending) change.base = this.rev;
+    const myDocument = this.store().getState().document;
     this.rebuild();
     if (done.length > 0) this.savedAt = Date.now();
     const newest = theirs.findLast((change) => change.rev > before && change.person.id !== this.drawer.personId);
     this.store().setState({
       ...(newest && { news: newest }),
-      ...(keys.size > 0 && { conflict: { keys: [...keys].sort(), theirs, theirDocument: this.base } }),
+      ...(keys.size > 0 && { conflict: { keys: [...keys].sort(), theirs, myDocument, theirDocument: this.base } }),
     });
     await this.rewrite(done);
     this.report();
@@ -257,17 +259,17 @@ export class Keeper {
    * lost.
    */
   async decide(theirs: ReadonlySet<string>): Promise<void> {
-    const { conflict, document, aside } = this.store().getState();
+    const { conflict, aside } = this.store().getState();
     if (!conflict) return;
     const gone: string[] = [];
     const kept: QueuedChange[] = [];
     const put: HistoryStep[] = [];
     for (const change of this.pending) {
-      const patch = settle(change.patch, document, conflict.keys, theirs);
+      const patch = settle(change.patch, conflict.myDocument, conflict.keys, theirs);
       const lost = without(change.patch, touched(patch));
       if (!isEmptyPatch(lost)) put.push({ label: change.label, step: lost, back: {}, at: Date.now() });
       if (isEmptyPatch(patch)) gone.push(change.saveId);
-      else kept.push({ ...change, patch });
+      else kept.push({ ...change, patch, base: this.rev });
     }
     this.pending = kept;
     this.store().setState({ conflict: null, aside: [...aside, ...put] });

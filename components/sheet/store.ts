@@ -20,6 +20,8 @@ export const NOTHING: Selection = { parts: [], wires: [], terminal: null };
 export interface Conflict {
   keys: readonly string[];
   theirs: readonly SavedChange[];
+  /** the document as I had it, before theirs came under it */
+  myDocument: Installation;
   /** the document as the other person left it, to show beside mine */
   theirDocument: Installation;
 }
