@@ -15,7 +15,7 @@ export type Feed = 'mains' | 'backup' | 'none';
 
 export interface SceneText extends Point {
   text: string;
-  /** 1/100 mm, height of the lettering: 250 is the body size */
+  /** 1/100 mm, height of the capitals (ISO 3098): 250 is the body size; the font size is `fontSize(size)` of `lettering.ts` */
   size: number;
   bold?: boolean;
   tone?: 'ink' | 'grey';
@@ -69,6 +69,15 @@ export interface SceneRun {
   hops: Point[];
 }
 
+/** The number of a way in its ring, on the run that leaves its device. */
+export interface SceneRing extends Point {
+  radius: number;
+  text: string;
+  /** id of the way's device */
+  part: string;
+  feed: Feed;
+}
+
 export interface SceneFrame extends Point {
   id: string;
   /** room: dashed, named at its foot; switchboard: solid box; lane: tinted ground of the backup source; brace: over a cable's cores */
@@ -90,6 +99,7 @@ export interface Scene {
   frames: SceneFrame[];
   parts: ScenePart[];
   runs: SceneRun[];
+  rings: SceneRing[];
   /** joints of conductors: drawn as filled circles */
   dots: (Point & { feed: Feed })[];
   texts: SceneText[];

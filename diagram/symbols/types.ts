@@ -16,7 +16,7 @@ export interface SymbolText {
   x: number;
   y: number;
   text: string;
-  /** 1/100 mm, height of the lettering */
+  /** 1/100 mm, height of the capitals */
   size: number;
   anchor?: 'start' | 'middle' | 'end';
 }
