@@ -6,7 +6,7 @@ import { Paper } from './paper';
 export function LoadingSheet({ children }: { children: ReactNode }) {
   return (
     <div className="flex h-dvh flex-col p-1 sm:px-2 sm:pb-2">
-      <div className="min-h-12 lap:h-6 lap:min-h-0" />
+      <div className="min-h-12 lap:h-8 lap:min-h-0" />
       <Paper>
         <div className="flex-1" />
         <div className="min-h-[72px] border-t-[1.6px] border-ink px-4 py-2">

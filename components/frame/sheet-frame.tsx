@@ -2,11 +2,12 @@
 
 import Link from 'next/link';
 import { useRouter } from 'next/navigation';
-import { useState, type ReactNode } from 'react';
+import { useEffect, useState, type ReactNode } from 'react';
 import type { PracticeId, Supply } from '@/diagram/document/schema';
 import type { TitleBlock } from '@/lib/shared/drawings';
 import { Button } from '@/components/ui/button';
 import { KeysHelp } from './keys-help';
+import { rememberSheet } from './last-sheet';
 import { Margin } from './margin';
 import { Paper } from './paper';
 import { SheetPicker } from './sheet-picker';
@@ -45,6 +46,8 @@ export interface SheetFrameProps {
   children: ReactNode;
 }
 
+const JOB_SHEET = /^\/jobs\/([^/]+)\/(?:survey|overview|connections)$/;
+
 const find = () => document.querySelector<HTMLElement>('[data-find]')?.focus();
 
 /** One sheet of the set: desk, tabs, paper with grid and border, margin, foot and title block. */
@@ -56,6 +59,11 @@ export function SheetFrame(props: SheetFrameProps) {
   const numbered = tabs.filter((tab) => tab.number !== undefined);
   const here = tabs.find((tab) => tab.id === current);
   const sheet = here?.number === undefined ? '-' : `${here.number} / ${numbered.length}`;
+
+  const jobId = here?.href.match(JOB_SHEET)?.[1];
+  useEffect(() => {
+    if (jobId) rememberSheet(jobId, current);
+  }, [jobId, current]);
 
   useSingleKeys({
     ...Object.fromEntries(numbered.map((tab) => [String(tab.number), () => router.push(tab.href)])),
@@ -72,7 +80,7 @@ export function SheetFrame(props: SheetFrameProps) {
   const height = fit === 'screen' ? 'h-dvh' : 'min-h-dvh lap:h-dvh';
   return (
     <div className={`flex flex-col p-1 sm:px-2 sm:pb-2 ${height}`}>
-      <header className="flex min-h-12 items-center gap-2 lap:min-h-0 lap:h-6 lap:items-end lap:px-4">
+      <header className="flex min-h-12 items-center gap-2 max-lap:pr-1 lap:h-8 lap:min-h-0 lap:items-end lap:px-4">
         <SheetPicker tabs={tabs} current={current} sheet={sheet} />
         <SheetTabs tabs={tabs} current={current} />
         {props.tools && <div className="flex gap-2 lap:hidden">{props.tools}</div>}
@@ -81,17 +89,17 @@ export function SheetFrame(props: SheetFrameProps) {
             {marginLabel}
           </Button>
         )}
-        <div className="ml-auto flex flex-wrap items-center justify-end gap-x-4 text-small lap:self-center">
+        <div className="ml-auto flex flex-wrap items-center justify-end gap-x-4 text-small lap:mb-1">
           {props.saveState}
           <Link href="/account" aria-label={`${who}, your account`} className="text-ink no-underline hover:underline">
             {who}
           </Link>
           {props.find && (
-            <button type="button" className="cursor-pointer hover:underline max-lap:hidden" onClick={find}>
+            <button type="button" className="cursor-pointer hover:underline max-sm:hidden" onClick={find}>
               find /
             </button>
           )}
-          <button type="button" className="cursor-pointer hover:underline max-lap:hidden" onClick={() => setHelpOpen(true)}>
+          <button type="button" className="cursor-pointer hover:underline max-sm:hidden" onClick={() => setHelpOpen(true)}>
             keys ?
           </button>
         </div>

@@ -52,10 +52,10 @@ export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: Tit
           {block.state}
         </Cell>
       </dl>
-      <div className="flex border-t border-ink leading-[15px]">
+      <div className="flex border-t border-ink text-small leading-[15px]">
         <p className="min-w-0 flex-1 px-2 py-[3px]">
           Design aid, not a permission. Isolate both sources, lock off, prove dead.{' '}
-          {stillLive ?? 'A backup source stays live after the main switch is off.'} Battery terminals are never dead.
+          {stillLive ?? 'Backup stays live with main switch off.'} Battery terminals are never dead.
         </p>
         {practice && (
           <p className="hidden w-[120px] shrink-0 border-l border-ink px-2 py-[3px] sm:block">

@@ -1,0 +1,70 @@
+import Link from 'next/link';
+import { ButtonLink } from '@/components/ui/button';
+import { Note } from '@/components/ui/note';
+import type { JobRow } from '@/lib/shared/jobs';
+import { shortDate } from '@/lib/shared/dates';
+import { findingWords, isLate } from './words';
+
+/** notes shown on a narrow screen, where they lie above the table */
+const FEW = 3;
+
+const heading = (job: JobRow): string => {
+  const what = job.waits.replace(/^you: /, '');
+  return `${what.charAt(0).toUpperCase()}${what.slice(1)}: ${job.number}`;
+};
+
+interface WaitsMarginProps {
+  rows: readonly JobRow[];
+  total: number;
+  who: string;
+  today: string;
+}
+
+const dueWord = (job: JobRow, today: string): string =>
+  job.due === null ? '' : `due ${shortDate(job.due, today)}${isLate(job, today) ? ', late' : ''}`;
+
+/** What waits for the person who reads, each with its one action; on a narrow screen three lines above the table. */
+export function WaitsMargin({ rows, total, who, today }: WaitsMarginProps) {
+  return (
+    <>
+      <div className="max-lap:hidden">
+        <h2 className="text-head font-bold">Waits for you, {who}</h2>
+        {rows.length === 0 && <p className="mt-2 text-grey">Nothing waits.</p>}
+        <ul className="mt-4 flex flex-col gap-8">
+          {rows.map((job, i) => (
+            <li key={job.id}>
+              <Note
+                tone={job.findings?.danger ? 'finding' : 'plain'}
+                inHand={i === 0}
+                heading={heading(job)}
+                meta={[dueWord(job, today), findingWords(job)].filter(Boolean).join('  ')}
+                actions={
+                  <ButtonLink href={`/jobs/${job.id}/overview`} tone={job.findings?.danger ? 'red' : 'ink'}>
+                    Open sheet 2
+                  </ButtonLink>
+                }
+              >
+                {job.title}, {job.client}
+              </Note>
+            </li>
+          ))}
+        </ul>
+        {total > rows.length && <p className="mt-4 text-grey">and {total - rows.length} more</p>}
+      </div>
+      <ul aria-label="Waits for you" className="lap:hidden">
+        {rows.length === 0 && <li className="text-grey">Nothing waits for you.</li>}
+        {rows.slice(0, FEW).map((job) => (
+          <li key={job.id}>
+            <Link
+              href={`/jobs/${job.id}/overview`}
+              className={`flex min-h-6 items-center gap-3 border-l-2 pl-3 no-underline pointer-coarse:min-h-11 ${job.findings?.danger ? 'border-red' : 'border-ink'}`}
+            >
+              <b className={`truncate ${job.findings?.danger ? 'text-red' : 'text-ink'}`}>{heading(job)}</b>
+              <span className="ml-auto shrink-0 text-small text-grey">{dueWord(job, today)}</span>
+            </Link>
+          </li>
+        ))}
+      </ul>
+    </>
+  );
+}
