@@ -61,12 +61,12 @@ export interface SocketPattern {
   memory: boolean;
 }
 
-/** What is counted of a group of loads: full up to `firstA` and for the largest ones, then a share of the rest. */
+/** What is counted of a group of loads: whole up to `firstA`, the largest by `ranked`, then a share of the rest. */
 export interface Allowance {
   /** A counted whole before `rest` applies to what is above */
   firstA?: number;
-  /** how many of the largest ways or loads are counted whole */
-  largest?: number;
+  /** shares of the largest, the second largest ... before `rest` applies */
+  ranked?: readonly number[];
   /** share of the rest, 0 to 1 */
   rest: number;
   /** A added for an outlet in the control unit */

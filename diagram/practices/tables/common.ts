@@ -30,10 +30,10 @@ export const household = (note?: string): Record<DemandGroup, Sourced<Allowance>
     lighting: of({ rest: 0.66 }),
     'heating-power': of({ firstA: 10, rest: 0.5 }),
     cooker: of({ firstA: 10, rest: 0.3, socketA: 5 }),
-    'instant-water': of({ largest: 2, rest: 0.25 }),
+    'instant-water': of({ ranked: [1, 1], rest: 0.25 }),
     'thermostatic-water': of({ rest: 1 }),
     'storage-heating': of({ rest: 1 }),
-    sockets: of({ largest: 1, rest: 0.4 }),
+    sockets: of({ ranked: [1], rest: 0.4 }),
   };
 };
 
