@@ -28,7 +28,7 @@ function Cell({ name, children, strong, className = '' }: { name: string; childr
 export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: TitleBlockPanelProps) {
   const drawn = [block.drawnBy, block.drawnOn.slice(0, 10)].filter(Boolean).join(' ');
   return (
-    <section aria-label="Title block" className="flex flex-col border-ink lap:w-[704px] lap:shrink-0 lap:border-l-[1.6px]">
+    <section aria-label="Title block" className="flex flex-col border-ink lap:w-[736px] lap:shrink-0 lap:border-l-[1.6px]">
       <dl className="grid flex-1 grid-cols-[minmax(0,1fr)_96px_96px] sm:grid-cols-[minmax(0,1fr)_80px_144px_72px_72px_64px_88px] lap:grid-cols-[minmax(0,1fr)_72px_144px_72px_72px_60px_92px]">
         <Cell name={kind} strong>
           {block.title}
@@ -54,11 +54,11 @@ export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: Tit
       </dl>
       <div className="flex border-t border-ink text-small leading-[15px]">
         <p className="min-w-0 flex-1 px-2 py-[3px]">
-          Design aid, not a permission. Isolate both sources, lock off, prove dead.{' '}
+          Design aid, not a permission. Isolate both sources, lock off, prove dead. <br className="max-lap:hidden" />
           {stillLive ?? 'Backup stays live with main switch off.'} Battery terminals are never dead.
         </p>
         {practice && (
-          <p className="hidden w-[120px] shrink-0 border-l border-ink px-2 py-[3px] sm:block">
+          <p className="hidden w-[136px] shrink-0 border-l border-ink px-2 py-[3px] sm:block">
             Practice {practice.id}
             <br />
             <span className="whitespace-nowrap">

@@ -8,7 +8,7 @@ import { ErrorLine } from '@/components/ui/error-line';
 import { callApi } from '@/lib/shared/api-client';
 import type { JobView } from '@/lib/shared/jobs';
 
-/** Puts a job away, or takes it out again; nothing of it is lost either way. */
+/** Puts a job into the archive, or takes it out again; nothing of it is lost either way. */
 export function ArchiveJob({ job }: { job: JobView }) {
   const router = useRouter();
   const [asking, setAsking] = useState(false);
@@ -26,23 +26,23 @@ export function ArchiveJob({ job }: { job: JobView }) {
   };
   return (
     <section>
-      <h2 className="text-head font-bold">{job.archived ? 'This job is put away' : 'Put the job away'}</h2>
+      <h2 className="text-head font-bold">{job.archived ? 'This job is in the archive' : 'Archive the job'}</h2>
       <p className="mt-1 mb-2">
         {job.archived
-          ? 'It may be read, not drawn in. Taken out, it goes on where it stopped.'
+          ? 'It may be read, not drawn in. Out of the archive it goes on where it stopped.'
           : 'It leaves the register and can be taken out again. Its drawing, revisions and history stay.'}
       </p>
       {asking ? (
         <ConfirmBar
-          question={`Put ${job.number} away? Nobody can draw in it until it is taken out.`}
-          yes="Put it away"
+          question={`Archive ${job.number}? Nobody can draw in it until it is taken out again.`}
+          yes="Archive it"
           busy={busy}
           onYes={() => void send(true)}
           onNo={() => setAsking(false)}
         />
       ) : (
         <Button disabled={busy} onClick={() => (job.archived ? void send(false) : setAsking(true))}>
-          {job.archived ? 'Take it out' : 'Put it away'}
+          {job.archived ? 'Take it out of the archive' : 'Archive it'}
         </Button>
       )}
       {refusal && (

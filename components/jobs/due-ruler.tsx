@@ -1,6 +1,6 @@
 import type { JobRow } from '@/lib/shared/jobs';
 import { addDays, dayOfMonth, daysBetween, monthName, shortDate } from '@/lib/shared/dates';
-import { isLate, waitsForMe } from './words';
+import { isDone, isLate } from './words';
 
 /** days on the ruler, from two before today */
 const BEFORE = 2;
@@ -20,13 +20,13 @@ interface Mark {
 }
 
 /** Puts each name on the lowest line on which it meets no other name. */
-function placeMarks(jobs: readonly JobRow[], today: string): Mark[] {
+function placeMarks(jobs: readonly JobRow[], mine: ReadonlySet<string>, today: string): Mark[] {
   const ends: number[] = [];
   const marks: Mark[] = [];
   for (const job of jobs) {
     const day = Math.max(0, daysBetween(today, job.due!) + BEFORE);
     if (day >= DAYS) continue;
-    const words = `${job.number}${isLate(job, today) ? ' late' : waitsForMe(job) ? ' you' : ''}`;
+    const words = `${job.number}${isLate(job, today) ? ' late' : mine.has(job.id) && !isDone(job) ? ' you' : ''}`;
     const x = LEFT + day * STEP;
     const free = ends.findIndex((end) => end <= x - 6);
     const level = free === -1 ? ends.length : free;
@@ -37,9 +37,9 @@ function placeMarks(jobs: readonly JobRow[], today: string): Mark[] {
 }
 
 /** What is due in the next weeks, on a ruler. The table says the same in words, so a screen reader is spared it. */
-export function DueRuler({ rows, today }: { rows: readonly JobRow[]; today: string }) {
+export function DueRuler({ rows, mine, today }: { rows: readonly JobRow[]; mine: ReadonlySet<string>; today: string }) {
   const due = rows.filter((job) => job.due !== null && job.state !== 'issued').sort((a, b) => (a.due! < b.due! ? -1 : 1));
-  const marks = placeMarks(due, today);
+  const marks = placeMarks(due, mine, today);
   if (marks.length === 0) return null;
   const todayX = LEFT + BEFORE * STEP;
   const width = LEFT + DAYS * STEP;
@@ -70,7 +70,7 @@ export function DueRuler({ rows, today }: { rows: readonly JobRow[]; today: stri
         <path d={`M${todayX} 30V${AXIS + 12}`} className="stroke-ink" strokeWidth="1.4" strokeDasharray="4 3" />
         {marks.map(({ job, x, level, words }) => {
           const late = isLate(job, today);
-          const mine = waitsForMe(job);
+          const waits = mine.has(job.id) && !isDone(job);
           return (
             <g key={job.id}>
               <path d={`M${x} ${AXIS - 5}V${AXIS - 18 - level * LEVEL}`} className="stroke-ink" strokeWidth="1" />
@@ -80,9 +80,9 @@ export function DueRuler({ rows, today }: { rows: readonly JobRow[]; today: stri
                 width="10"
                 height="10"
                 strokeWidth="1.4"
-                className={late ? 'fill-red stroke-red' : mine ? 'fill-ink stroke-ink' : 'fill-paper stroke-ink'}
+                className={late ? 'fill-red stroke-red' : waits ? 'fill-ink stroke-ink' : 'fill-paper stroke-ink'}
               />
-              <text x={x - 4} y={AXIS - 22 - level * LEVEL} className={`${late ? 'fill-red' : 'fill-ink'} ${late || mine ? 'font-bold' : ''}`}>
+              <text x={x - 4} y={AXIS - 22 - level * LEVEL} className={`${late ? 'fill-red' : 'fill-ink'} ${late || waits ? 'font-bold' : ''}`}>
                 {words}
               </text>
             </g>

@@ -17,8 +17,6 @@ interface JobSheetProps {
   today: string;
 }
 
-const SUPPLY_KEPT = 'What you do not know may stay empty: whatever needs it then says so, and nothing is guessed.';
-
 /** The sheet on which a job is begun or put right; the title block fills as one types. */
 export function JobSheet({ job, person, team, today }: JobSheetProps) {
   const form = useJobForm(job);
@@ -44,28 +42,26 @@ export function JobSheet({ job, person, team, today }: JobSheetProps) {
         drawnOn: today,
         checkedBy: job?.checkedBy ?? null,
         revision: job?.revision ?? '-',
-        state: job ? (job.archived ? 'put away' : job.state) : 'new',
+        state: job ? (job.archived ? 'archived' : job.state) : 'new',
       }}
       practice={{ id: values.practice, supply }}
-      narrowMargin="above"
       marginLabel="About this job"
       margin={
         <div className="flex flex-col gap-8">
-          <section className="max-lap:hidden">
+          <section>
             <h2 className="text-head font-bold">What the sheet needs to know</h2>
-            <p className="mt-1">{SUPPLY_KEPT}</p>
+            <p className="mt-1">What you do not know may stay empty: whatever needs it then says so, and nothing is guessed.</p>
             <p className="mt-2 text-grey">Supply values decide short-circuit currents, disconnection and volt drop of every way.</p>
           </section>
           {job && <ArchiveJob job={job} />}
           {!job && (
-            <section className="max-lap:hidden">
+            <section>
               <h2 className="text-head font-bold">What comes next</h2>
               <p className="mt-1">The survey: one row a room. From it the whole sheet is drafted.</p>
             </section>
           )}
         </div>
       }
-      foot={<p className="text-grey lap:hidden">{SUPPLY_KEPT}</p>}
     >
       <div className="px-4 py-4 lap:px-6">
         <h1 className="mb-4 text-title font-bold">{job ? `Job ${job.number}` : 'New job'}</h1>

@@ -63,7 +63,7 @@ export function RegisterHead(props: RegisterHeadProps) {
           { value: 'all', label: 'All' },
           { value: 'mine', label: `Waits for me ${counts.mine}` },
           { value: 'due', label: `Due this week ${counts.due}` },
-          { value: 'archived', label: 'Put away' },
+          { value: 'archived', label: 'Archived' },
         ]}
         onChange={onFilter}
       />

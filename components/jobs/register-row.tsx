@@ -5,11 +5,13 @@ import type { KeyboardEvent } from 'react';
 import { Stamp } from '@/components/ui/stamp';
 import type { JobRow } from '@/lib/shared/jobs';
 import { SetOfSheets } from './set-of-sheets';
-import { drawnChecked, dueWords, findingCount, findingWords, isLate, stampOf, waitsForMe } from './words';
+import { drawnChecked, dueWords, findingCount, findingWords, isDone, isLate, stampOf } from './words';
 
 interface RegisterRowProps {
   job: JobRow;
   today: string;
+  /** it waits for the person who reads */
+  mine: boolean;
   inHand: boolean;
   unfolded: boolean;
   /** id of the sheet that Enter opens */
@@ -24,7 +26,7 @@ interface RegisterRowProps {
 const cell = 'h-8 border-b border-hair px-2 align-middle group-data-open:border-b-0 group-data-open:border-t-2 group-data-open:border-t-ink pointer-coarse:h-11';
 
 /** A job in the register; in hand and unfolded, its set of sheets lies below it. */
-export function RegisterRow({ job, today, inHand, unfolded, sheet, mayEdit, onTake, onFold, onSheet, onKey }: RegisterRowProps) {
+export function RegisterRow({ job, today, mine, inHand, unfolded, sheet, mayEdit, onTake, onFold, onSheet, onKey }: RegisterRowProps) {
   const stamp = stampOf(job);
   const late = isLate(job, today);
   const count = findingCount(job);
@@ -69,9 +71,10 @@ export function RegisterRow({ job, today, inHand, unfolded, sheet, mayEdit, onTa
         </td>
         <td
           role="cell"
-          className={`${cell} max-w-0 truncate max-[700px]:col-span-2 max-[700px]:max-w-none max-[700px]:whitespace-normal ${waitsForMe(job) ? 'font-bold' : ''}`}
+          className={`${cell} max-w-0 truncate max-[700px]:col-span-2 max-[700px]:max-w-none max-[700px]:whitespace-normal ${isDone(job) ? 'text-grey' : mine ? 'font-bold' : ''}`}
         >
-          {job.waits || <span className="text-grey">nothing</span>}
+          {mine && !isDone(job) && 'you: '}
+          {job.waits || 'nothing'}
         </td>
         <td role="cell" className={`${cell} whitespace-nowrap max-[700px]:text-right ${late ? 'font-bold text-red' : ''}`}>
           {dueWords(job, today)}

@@ -9,6 +9,8 @@ interface RegisterTableProps {
   rows: readonly JobRow[];
   query: JobQuery;
   today: string;
+  /** ids of the jobs that wait for the person who reads */
+  mine: ReadonlySet<string>;
   mayEdit: boolean;
   onSort(sort: JobQuery['sort']): void;
 }
@@ -32,7 +34,7 @@ const columns: readonly Column[] = [
 ];
 
 /** The register as a table; the row in hand unfolds in place into its set of sheets. */
-export function RegisterTable({ rows, query, today, mayEdit, onSort }: RegisterTableProps) {
+export function RegisterTable({ rows, query, today, mine, mayEdit, onSort }: RegisterTableProps) {
   const hand = useRegisterHand(rows);
   return (
     <table role="table" aria-label="Register of drawings" className="w-full table-fixed border-collapse max-[700px]:block">
@@ -56,6 +58,7 @@ export function RegisterTable({ rows, query, today, mayEdit, onSort }: RegisterT
             key={job.id}
             job={job}
             today={today}
+            mine={mine.has(job.id)}
             inHand={hand.row === job.id}
             unfolded={hand.unfolded === job.id}
             sheet={hand.sheet}

@@ -18,7 +18,7 @@ import { WaitsMargin } from './waits-margin';
 export interface RegisterProps {
   page: JobPage;
   query: JobQuery;
-  /** what waits for the person, and how much falls due this week */
+  /** jobs of the person who reads in which something waits, and how many fall due this week */
   mine: JobPage;
   dueCount: number;
   person: { initials: string; roles: readonly PersonRole[] };
@@ -41,6 +41,7 @@ const keys: readonly KeyHelp[] = [
 export function Register({ page, query, mine, dueCount, person, team, mayCreate, today }: RegisterProps) {
   const router = useRouter();
   const asked = useRegisterQuery(query);
+  const mineIds = new Set(mine.rows.map((job) => job.id));
   const narrowed = query.search !== '' || query.filter !== 'all';
   useSingleKeys(mayCreate ? { n: () => router.push('/jobs/new') } : {});
 
@@ -84,7 +85,7 @@ export function Register({ page, query, mine, dueCount, person, team, mayCreate,
         />
         <div className="mt-4">
           {page.rows.length > 0 ? (
-            <RegisterTable rows={page.rows} query={query} today={today} mayEdit={mayCreate} onSort={asked.sort} />
+            <RegisterTable rows={page.rows} query={query} today={today} mine={mineIds} mayEdit={mayCreate} onSort={asked.sort} />
           ) : narrowed ? (
             <NoMatch query={query} all={page.all} onClear={asked.clear} />
           ) : (
@@ -104,7 +105,7 @@ export function Register({ page, query, mine, dueCount, person, team, mayCreate,
             </Button>
           </nav>
         )}
-        <DueRuler rows={page.rows} today={today} />
+        <DueRuler rows={page.rows} mine={mineIds} today={today} />
       </div>
     </SheetFrame>
   );
@@ -127,7 +128,7 @@ const nothingIn: Record<JobQuery['filter'], string> = {
   all: 'Nothing here.',
   mine: 'Nothing waits for you.',
   due: 'Nothing is due within a week.',
-  archived: 'Nothing has been put away.',
+  archived: 'The archive is empty.',
 };
 
 function NoMatch({ query, all, onClear }: { query: JobQuery; all: number; onClear(): void }) {

@@ -10,14 +10,14 @@ interface FieldsProps {
 }
 
 const practices = [
-  { value: 'IEC', label: 'IEC: brown, blue, green-yellow' },
-  { value: 'IN', label: 'IN: India, red, black, green' },
-  { value: 'GB', label: 'GB: Britain, ring circuits, BS 1363 outlets' },
+  { value: 'IEC', label: 'IEC: international' },
+  { value: 'IN', label: 'IN: India' },
+  { value: 'GB', label: 'GB: Great Britain' },
 ];
 const systems = [
-  { value: 'TN-S', label: "TN-S: the supplier's earth on a core of its own" },
-  { value: 'TN-C-S', label: "TN-C-S: earth taken from the supplier's neutral" },
-  { value: 'TT', label: 'TT: an electrode of the house’s own' },
+  { value: 'TN-S', label: 'TN-S: earth on its own core' },
+  { value: 'TN-C-S', label: 'TN-C-S: earth from the neutral' },
+  { value: 'TT', label: "TT: the house's own electrode" },
 ];
 
 /** Practice and supply, each with its unit and with where to read it. */

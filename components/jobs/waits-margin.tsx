@@ -8,10 +8,7 @@ import { findingWords, isLate } from './words';
 /** notes shown on a narrow screen, where they lie above the table */
 const FEW = 3;
 
-const heading = (job: JobRow): string => {
-  const what = job.waits.replace(/^you: /, '');
-  return `${what.charAt(0).toUpperCase()}${what.slice(1)}: ${job.number}`;
-};
+const heading = (job: JobRow): string => `${job.number}: ${job.waits}`;
 
 interface WaitsMarginProps {
   rows: readonly JobRow[];

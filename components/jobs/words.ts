@@ -18,8 +18,8 @@ export const isLate = (job: JobRow, today: string): boolean =>
 export const dueWords = (job: JobRow, today: string): string =>
   job.due === null ? '' : `${shortDate(job.due, today)}${isLate(job, today) ? ', late' : ''}`;
 
-/** Work that waits for the person who reads begins with "you". */
-export const waitsForMe = (job: JobRow): boolean => job.waits.startsWith('you');
+/** Nothing is left to do in the job for now. */
+export const isDone = (job: JobRow): boolean => job.waits === '' || job.waits.startsWith('nothing');
 
 export const findingCount = (job: JobRow): number | null =>
   job.findings && job.findings.danger + job.findings.defect + job.findings.advice;
