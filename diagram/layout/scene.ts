@@ -1,5 +1,6 @@
 import type { End, Face, Kind, Role } from '../document/schema';
 import type { Side } from '../symbols/types';
+import type { Feed } from '../terminals/feeds';
 
 /**
  * A face of the document as things to draw: the one source of screen, SVG, PNG and PDF. Lengths are 1/100 mm, integers,
@@ -10,8 +11,7 @@ export interface Point {
   y: number;
 }
 
-/** Which supply feeds a conductor or part: mains is one stroke, backup is cased (an outline with a light core). */
-export type Feed = 'mains' | 'backup' | 'none';
+export type { Feed };
 
 export interface SceneText extends Point {
   text: string;

@@ -1,0 +1,173 @@
+import type { Part } from '../document/schema';
+import type { Graph } from '../terminals/graph';
+import { pathTo, reach, reaches, type Reach } from '../terminals/reach';
+import { isOvercurrent, isPoint, isResidual } from '../terminals/roles-of-parts';
+import { listConditions, type Condition, type Conditions, type Source } from './conditions';
+import { findCrossedJoints, type CrossedJoint } from './crossed-joints';
+import { earthAnchors } from './earth';
+import type { Nature } from './natures';
+import { switchPositions, type Positions } from './positions';
+
+/** The home in one condition with its two-way and cross switches in one position. */
+export interface Stand {
+  position: number;
+  closed: Uint8Array;
+  /** by source of the condition: what its line reaches, and what its neutral reaches, never through a load */
+  line: Reach[];
+  neutral: Reach[];
+  /** line meets neutral or earth in this position: nothing else is to be read from it */
+  shorted: boolean;
+}
+
+/** How a lamp, fan, appliance or socket stands in a condition, in the best position of its switches. */
+export interface PointState {
+  part: Part;
+  /** line at one end and the same source's neutral at the other */
+  fed: boolean;
+  /** fed, but with line at N and neutral at L */
+  reversed: boolean;
+  /** the source whose line reaches it */
+  source: Source | null;
+  /** edges from the source's line to the point; empty without line */
+  lineEdges: number[];
+  /** edges from the source's neutral to the point; empty without a way back */
+  neutralEdges: number[];
+  /** ids of the devices, from the source on, that its line and its neutral pass */
+  lineDevices: string[];
+  neutralDevices: string[];
+  /** id of the nearest overcurrent device in its line */
+  overcurrent: string | null;
+  /** id of the nearest residual-current device in its line */
+  rcd: string | null;
+  /** node of the end at which the line arrives, and of the other */
+  lineEnd: number;
+  neutralEnd: number;
+}
+
+export interface Evaluated {
+  condition: Condition;
+  /** wires that join line, neutral and earth whatever the switches do; taken out of everything else here */
+  crossed: CrossedJoint[];
+  /** at least one; only the first without two-way and cross switches */
+  stands: Stand[];
+  points: ReadonlyMap<string, PointState>;
+}
+
+export interface Evaluation extends Conditions {
+  positions: Positions;
+  evaluated: Evaluated[];
+}
+
+const devicesOn = (graph: Graph, edges: readonly number[]): string[] => {
+  const ids = edges.flatMap((number) => {
+    const { kind, part } = graph.edges[number]!;
+    return kind === 'device' || kind === 'changeover' || kind === 'bypass' || kind === 'through' ? [part!] : [];
+  });
+  return [...new Set(ids)];
+};
+
+function stand(graph: Graph, condition: Condition, closed: Uint8Array, position: number, apart: (node: number) => boolean): Stand {
+  const line = condition.sources.map((source) => reach(graph, [source.line], closed));
+  const neutral = condition.sources.map((source) => reach(graph, [source.neutral], closed));
+  return { position, closed, line, neutral, shorted: line.some((walk) => walk.order.some(apart)) };
+}
+
+function pointState(graph: Graph, part: Part, condition: Condition, stands: readonly Stand[]): PointState {
+  const at = { L: graph.node(part.id, 'L')!, N: graph.node(part.id, 'N')! };
+  const none: PointState = {
+    part,
+    fed: false,
+    reversed: false,
+    source: null,
+    lineEdges: [],
+    neutralEdges: [],
+    lineDevices: [],
+    neutralDevices: [],
+    overcurrent: null,
+    rcd: null,
+    lineEnd: at.L,
+    neutralEnd: at.N,
+  };
+  const build = (s: Stand, i: number, reversed: boolean, fed: boolean): PointState => {
+    const lineEnd = reversed ? at.N : at.L;
+    const neutralEnd = reversed ? at.L : at.N;
+    const lineEdges = pathTo(graph, s.line[i]!, lineEnd);
+    const neutralEdges = fed ? pathTo(graph, s.neutral[i]!, neutralEnd) : [];
+    const lineDevices = devicesOn(graph, lineEdges);
+    const last = (wanted: (p: Part) => boolean) => lineDevices.findLast((id) => wanted(graph.parts.get(id)!)) ?? null;
+    return {
+      part,
+      fed,
+      reversed: reversed && fed,
+      source: condition.sources[i]!,
+      lineEdges,
+      neutralEdges,
+      lineDevices,
+      neutralDevices: devicesOn(graph, neutralEdges),
+      overcurrent: last(isOvercurrent),
+      rcd: last(isResidual),
+      lineEnd,
+      neutralEnd,
+    };
+  };
+  const usable = stands.filter((s) => !s.shorted);
+  let half: PointState | undefined;
+  for (const s of usable) {
+    for (let i = 0; i < condition.sources.length; i++) {
+      const lineAtL = reaches(s.line[i]!, at.L);
+      const lineAtN = reaches(s.line[i]!, at.N);
+      if (lineAtL && reaches(s.neutral[i]!, at.N)) return build(s, i, false, true);
+      if (lineAtN && reaches(s.neutral[i]!, at.L)) return build(s, i, true, true);
+      if (lineAtL || lineAtN) half ??= build(s, i, !lineAtL, false);
+    }
+  }
+  return half ?? none;
+}
+
+function evaluateCondition(graph: Graph, condition: Condition, positions: Positions, anchors: ReadonlyMap<number, Nature>): Evaluated {
+  const lineStarts = condition.sources.map(({ line }) => line);
+  const neutralStarts = [...anchors].filter(([, nature]) => nature === 'N').map(([node]) => node);
+  const notLine = (node: number) => anchors.has(node) && anchors.get(node) !== 'L';
+  const isEarth = (node: number) => anchors.get(node) === 'E';
+
+  let closed = condition.closed;
+  let crossed: CrossedJoint[] = [];
+  const touches = (starts: number[], apart: (node: number) => boolean) => reach(graph, starts, closed).order.some(apart);
+  if (touches(lineStarts, notLine) || touches(neutralStarts, isEarth)) {
+    crossed = findCrossedJoints(graph, closed, anchors);
+    closed = closed.slice();
+    for (const { edge } of crossed) closed[edge] = 0;
+  }
+
+  const stands: Stand[] = [];
+  for (let position = 0; position < positions.count; position++) {
+    let here = closed;
+    if (positions.sets.length > 0) {
+      here = closed.slice();
+      graph.edges.forEach((edge, number) => {
+        if (edge.kind === 'select' && positions.isClosed(edge, position)) here[number] = 1;
+      });
+    }
+    stands.push(stand(graph, condition, here, position, notLine));
+  }
+  const points = new Map<string, PointState>();
+  for (const part of graph.parts.values())
+    if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
+  return { condition, crossed, stands, points };
+}
+
+/** Works a home out in every condition: who is fed, from where, through what and back by which way. */
+export function evaluate(graph: Graph): Evaluation {
+  const conditions = listConditions(graph);
+  const positions = switchPositions(graph);
+  const anchors = new Map<number, Nature>();
+  for (const part of graph.parts.values()) {
+    if (part.kind !== 'supply' && part.kind !== 'inverter') continue;
+    const prefix = part.kind === 'supply' ? '' : 'out.';
+    anchors.set(graph.node(part.id, `${prefix}L`)!, 'L');
+    anchors.set(graph.node(part.id, `${prefix}N`)!, 'N');
+  }
+  for (const node of earthAnchors(graph)) anchors.set(node, 'E');
+  const evaluated = conditions.list.map((condition) => evaluateCondition(graph, condition, positions, anchors));
+  return { ...conditions, positions, evaluated };
+}
