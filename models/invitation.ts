@@ -10,6 +10,7 @@ export class Invitation extends Model<InferAttributes<Invitation>, InferCreation
   declare invitedBy: string;
   declare createdAt: CreationOptional<Date>;
   declare expiresAt: Date;
+  /** when it was used, or replaced by a newer one */
   declare usedAt: CreationOptional<Date | null>;
 }
 Invitation.init(

@@ -5,6 +5,7 @@ import type { Installation } from '@/diagram/document/schema';
 /** Requests and answers of the drawing routes; the same schema serves the screen and the handler. */
 
 export const uuid = z.uuid();
+export const DrawingParams = z.object({ drawingId: uuid });
 
 /** One saved command: what was done, in words and as data. */
 export const ChangeSchema = z.strictObject({

@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import { PracticeIdSchema, SupplySchema } from '@/diagram/document/schema';
 
+export const JobParams = z.object({ jobId: z.uuid() });
+
 export const JOB_SORTS = ['number', 'title', 'client', 'state', 'due', 'updated'] as const;
 
 export const JobQuerySchema = z.object({
@@ -24,6 +26,8 @@ export const JobInputSchema = z.strictObject({
   hoursWanted: z.number().min(0, 'Hours are 0 to 72.').max(72, 'Hours are 0 to 72.'),
   /** ISO date */
   due: z.iso.date().nullable(),
+  /** ids of the people the job is given to: an apprentice sees and draws in these jobs only */
+  given: z.array(z.uuid()).max(50).optional(),
 });
 export type JobInput = z.infer<typeof JobInputSchema>;
 

@@ -4,6 +4,8 @@ export const ROLES = ['apprentice', 'electrician', 'trainer', 'admin'] as const;
 export const RoleSchema = z.enum(ROLES);
 export type PersonRole = z.infer<typeof RoleSchema>;
 
+export const PersonParams = z.object({ personId: z.uuid() });
+
 export const PasswordSchema = z
   .string()
   .min(10, 'Take at least 10 characters; a short sentence is easiest to keep in mind.')
