@@ -1,0 +1,157 @@
+import { sizeCable } from '../../calculations/size-cable';
+import { LENGTH, POWER_FACTOR, ratingFor } from './assumptions';
+import type { BackupSize } from './backup-size';
+import { BACKUP_BOARD, BOARD, drawBars, drawGroup, type Pair } from './house';
+import type { WayBars } from './draw-way';
+import { HOUSE, groupIds } from './ids';
+import { BEFORE_BACKUP, type RunSize } from './size-run';
+import type { Sketch } from './sketch';
+
+/** The two-pole breaker of the inverter's feed, and the run to it. */
+export interface FeedPlan {
+  ratingA: number;
+  curve: 'B' | 'C';
+  size: RunSize;
+}
+
+/**
+ * Feed of the inverter: what passes through to the loads, and the charger. On TN the breaker itself must clear a fault in
+ * the run within the time of a distribution circuit; type C for the charger's inrush where the loop allows it, else type B.
+ * @param behindRcd true where a main rcd stands before it
+ * @returns null where neither clears, so that a main rcd is needed
+ */
+export function planFeed(sketch: Sketch, size: BackupSize, behindRcd: boolean): FeedPlan | null {
+  const { practice, supply, ambient } = sketch;
+  const { draft } = practice;
+  const amps = (size.load.va + size.chargeWatts / POWER_FACTOR.heater) / supply.voltage;
+  const ratingA = ratingFor(Math.max(amps, size.va / supply.voltage), practice.breakerRatingsA.value, 10);
+  for (const curve of ['C', 'B'] as const) {
+    const found = sizeCable({
+      practice,
+      device: { kind: 'mcb', ratingA, curve },
+      ibA: amps,
+      method: draft.method,
+      material: draft.material,
+      insulation: draft.insulation,
+      ambientC: ambient,
+      grouped: 1,
+      lengthM: LENGTH.boardToInverter,
+      voltage: supply.voltage,
+      dropLimitPercent: BEFORE_BACKUP.feed,
+      leastMm2: 2.5,
+      ...(!behindRcd && supply.ze !== undefined && { zsBeforeOhm: supply.ze, disconnectS: practice.disconnection.distributionTN.value }),
+    });
+    if (found) return { ratingA, curve, size: found };
+  }
+  return null;
+}
+
+function drawBattery(sketch: Sketch, size: BackupSize, place: string): void {
+  const { draft } = sketch.practice;
+  const { batteries, lead } = size;
+  sketch.part({ id: HOUSE.battery, kind: 'battery', place, ...batteries });
+  sketch.part({ id: HOUSE.batteryFuse, kind: 'fuse', place, rating: lead.fuseA, standard: 'dc' });
+  const cable = (id: string, length: number) =>
+    sketch.cable({ id, csa: lead.csaMm2, material: draft.material, insulation: draft.insulation, method: 'C', length, cores: 1 });
+  sketch.wire([HOUSE.battery, '+'], [HOUSE.batteryFuse, '1'], 'dc+', cable('battery-lead.fuse', LENGTH.batteryToFuse));
+  sketch.wire([HOUSE.batteryFuse, '2'], [HOUSE.inverter, 'bat.+'], 'dc+', cable('battery-lead.plus', LENGTH.fuseToInverter));
+  sketch.wire([HOUSE.battery, '-'], [HOUSE.inverter, 'bat.-'], 'dc-', cable('battery-lead.minus', LENGTH.batteryToFuse + LENGTH.fuseToInverter));
+}
+
+function drawInverter(sketch: Sketch, size: BackupSize, hours: number, place: string): void {
+  sketch.part({
+    id: HOUSE.inverter,
+    kind: 'inverter',
+    place,
+    va: size.va,
+    surge: size.surge,
+    charge: size.charge,
+    efficiency: size.efficiency,
+    transfer: size.transfer,
+    neutral: 'through',
+    bond: true,
+    cutoff: size.cutoff,
+    state: 'on',
+    ...(hours > 0 && { hoursWanted: hours }),
+  });
+}
+
+interface Need {
+  size: BackupSize;
+  feed: FeedPlan;
+  from: Pair;
+  /** where the board stands */
+  intake: string;
+  hours: number;
+  /** how many rcds the backed-up ways need */
+  groups: number;
+  icn: number;
+}
+
+/**
+ * The backup source: feed breaker at the board, inverter with its bond on battery, bank, dc fuse and leads; at its output a
+ * two-pole breaker and the rcds of the backed-up ways, so that the runs to the backup board are behind them; the bars there.
+ */
+export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
+  const { size, feed, intake, icn } = need;
+  const { practice, supply } = sketch;
+  const { draft } = practice;
+  const place = sketch.place({ id: HOUSE.backupPlace, name: 'Backup source', kind: 'passage', ventilated: true });
+  sketch.part({ id: HOUSE.feed, kind: 'mcb', label: 'Inverter feed', place: intake, board: BOARD, poles: 2, rating: feed.ratingA, curve: feed.curve, icn });
+  drawInverter(sketch, size, need.hours, place);
+  drawBattery(sketch, size, place);
+  const outputA = ratingFor(size.va / supply.voltage, practice.breakerRatingsA.value);
+  sketch.part({ id: HOUSE.output, kind: 'mcb', label: 'Backup output', place, poles: 2, rating: outputA, curve: 'C', icn });
+
+  const run = (id: string, runSize: RunSize) =>
+    sketch.cable({ id, csa: runSize.csaMm2, cpc: runSize.cpcMm2, material: draft.material, insulation: draft.insulation, method: draft.method, length: LENGTH.boardToInverter, cores: 3 });
+  const feedRun = run('inverter-feed.run', feed.size);
+  sketch.wire(need.from.line, [HOUSE.feed, '1'], 'line');
+  sketch.wire(need.from.neutral, [HOUSE.feed, '3'], 'neutral');
+  sketch.wire([HOUSE.feed, '2'], [HOUSE.inverter, 'in.L'], 'line', feedRun);
+  sketch.wire([HOUSE.feed, '4'], [HOUSE.inverter, 'in.N'], 'neutral', feedRun);
+  sketch.wire(sketch.nextOn(HOUSE.earthBar), [HOUSE.inverter, 'in.E'], 'earth', feedRun);
+  sketch.wire([HOUSE.inverter, 'out.L'], [HOUSE.output, '1'], 'line');
+  sketch.wire([HOUSE.inverter, 'out.N'], [HOUSE.output, '3'], 'neutral');
+
+  const end: Pair = { line: [HOUSE.output, '2'], neutral: [HOUSE.output, '4'] };
+  const taps = need.groups < 2 ? () => end : drawBars(sketch, end, { line: HOUSE.outputLine, neutral: HOUSE.outputNeutral, place, board: 'Inverter', ratingA: outputA });
+  const outputSize = outputRun(sketch, size, outputA);
+  return Array.from({ length: need.groups }, (_, i) => {
+    const cable = run(`${groupIds('backup', i + 1).rcd}.run`, outputSize);
+    if (i === 0) sketch.wire([HOUSE.inverter, 'out.E'], sketch.nextOn(HOUSE.earthBar), 'earth', cable);
+    return drawGroup(sketch, taps(), {
+      side: 'backup',
+      n: i + 1,
+      label: 'Backup ways',
+      ratingA: outputA,
+      icn,
+      rcdPlace: place,
+      rcdBoard: 'Inverter',
+      place: intake,
+      board: BACKUP_BOARD,
+      cable,
+    });
+  });
+}
+
+function outputRun(sketch: Sketch, size: BackupSize, ratingA: number): RunSize {
+  const { practice, supply, ambient } = sketch;
+  const { draft } = practice;
+  const found = sizeCable({
+    practice,
+    device: { kind: 'mcb', ratingA, curve: 'C' },
+    ibA: size.load.va / supply.voltage,
+    method: draft.method,
+    material: draft.material,
+    insulation: draft.insulation,
+    ambientC: ambient,
+    grouped: 1,
+    lengthM: LENGTH.boardToInverter,
+    voltage: supply.voltage,
+    dropLimitPercent: BEFORE_BACKUP.output,
+    leastMm2: 2.5,
+  });
+  if (!found) throw new RangeError(`no cable on sale carries ${ratingA} A over ${LENGTH.boardToInverter} m within ${BEFORE_BACKUP.output} %`);
+  return found;
+}
