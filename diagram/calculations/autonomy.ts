@@ -68,7 +68,7 @@ export function autonomyCurve(
   });
 }
 
-/** Hours when each named load is left out in turn, and with all of them on: what it is worth to drop the fans. */
+/** Hours when each named load is left out in turn: what it is worth to drop the fans. @throws RangeError naming the field */
 export function whatIfs(
   input: { bank: Bank; efficiency: number; temperatureC?: number; assumed?: Assumptions },
   loads: readonly { name: string; watts: number }[],
