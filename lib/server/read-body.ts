@@ -4,6 +4,12 @@ import { AppError } from '@/lib/server/errors';
 const tooLarge = (maxBytes: number) =>
   new AppError('too-large', `This is more than the ${Math.floor(maxBytes / 1024)} kB that are taken at once.`);
 
+/** A key that would reach an object's prototype has no business in any body; a schema would drop it in silence. */
+function refuseReserved(this: unknown, key: string, value: unknown): unknown {
+  if (key === '__proto__') throw new AppError('invalid', 'A name in the request is reserved.', { fields: { [key]: 'This name is reserved.' } });
+  return value;
+}
+
 /**
  * The JSON body of a request, refused before more than `maxBytes` of it are kept.
  * @throws AppError too-large or invalid
@@ -17,9 +23,11 @@ export async function readJson(request: Request, maxBytes: number): Promise<unkn
     if (bytes > maxBytes) throw tooLarge(maxBytes);
     chunks.push(chunk);
   }
+  const text = Buffer.concat(chunks).toString('utf8');
   try {
-    return JSON.parse(Buffer.concat(chunks).toString('utf8')) as unknown;
-  } catch {
+    return JSON.parse(text, text.includes('__proto__') ? refuseReserved : undefined) as unknown;
+  } catch (error) {
+    if (error instanceof AppError) throw error;
     throw new AppError('invalid', 'The request is not JSON.');
   }
 }

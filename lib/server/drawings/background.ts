@@ -60,7 +60,9 @@ export function afterSave(teamId: string, drawingId: string, rev: number): void 
   if (rev % SNAPSHOT_EVERY === 0) start(teamId, drawingId);
 }
 
-/** Resolves when nothing that was begun is still running. */
-export async function settled(): Promise<void> {
+/** Lets what is running end and drops what only waits: it is caught up with later. */
+export async function stopBackground(): Promise<void> {
+  for (const timer of waiting.values()) clearTimeout(timer);
+  waiting.clear();
   await Promise.all(running);
 }
