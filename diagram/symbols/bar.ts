@@ -30,28 +30,41 @@ export function barTerminal(kind: BarKind, n: number): TerminalPlace {
   return { x: END + pitchOf(kind) * n, y: BAR_AXIS, side: 'up' };
 }
 
-/** The dash of a bar, so that it is told apart without colour: neutral long, earth short. */
-const DASHES: Record<BarKind, Stroke['dash']> = { 'line-bar': undefined, 'neutral-bar': 'long', 'earth-bar': 'short', joint: undefined };
+/** Half the thickness of a bar. */
+const HALF = 72;
+/** Pieces of a bar, so that it is told apart without colour: line whole, neutral in long pieces, earth in short ones. */
+const PIECES: Record<BarKind, [piece: number, gap: number] | null> = { 'line-bar': null, 'neutral-bar': [750, 125], 'earth-bar': [375, 125], joint: null };
 
-function strokesOf(kind: BarKind, face: Face, length: number): Stroke[] {
-  if (kind === 'joint')
-    return face === 'overview' ? [circle(END / 2, END / 2, 110, 'ink')] : [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE)];
-  const dash = DASHES[kind];
-  const bar: Stroke = { d: `M0 ${BAR_AXIS}H${length}`, weight: 'heavy', ...(dash && { dash }) };
-  return face === 'overview' ? [bar] : [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE), bar];
+function barPath(kind: BarKind, from: number, to: number): string {
+  const piece = PIECES[kind];
+  const rect = (x: number, end: number) => `M${x} ${BAR_AXIS - HALF}H${end}V${BAR_AXIS + HALF}H${x}Z`;
+  if (!piece) return rect(from, to);
+  let d = '';
+  for (let x = from; x < to; x += piece[0] + piece[1]) d += rect(x, Math.min(x + piece[0], to));
+  return d;
 }
 
-/** The picture of a bar or joint of a given length; a joint on the overview is a dot. */
-export function barSymbol(kind: BarKind, face: Face, length: number): SymbolData {
+function strokesOf(kind: BarKind, face: Face, length: number, cased: boolean): Stroke[] {
+  if (kind === 'joint')
+    return face === 'overview' ? [circle(END / 2, END / 2, 110, 'ink')] : [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE)];
+  if (face === 'overview') return [{ d: barPath(kind, 0, length), fill: cased ? 'paper' : 'ink' }];
+  return [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE), { d: barPath(kind, 125, length - 125), fill: cased ? 'paper' : 'ink' }];
+}
+
+/**
+ * The picture of a bar or joint of a given length; a joint on the overview is a dot.
+ * @param cased a line bar behind an inverter: an outline with a light core
+ */
+export function barSymbol(kind: BarKind, face: Face, length: number, cased = false): SymbolData {
   const dot = kind === 'joint' && face === 'overview';
   return {
-    id: face === 'overview' ? kind : `${kind}.box`,
+    id: `${kind}${face === 'overview' ? '' : '.box'}${cased ? '.cased' : ''}`,
     name: NAMES[kind][0],
     standard: NAMES[kind][1],
     kinds: [kind satisfies Kind],
     width: dot ? END : length,
     height: dot ? END : BAR_HEIGHT,
-    strokes: strokesOf(kind, face, length),
+    strokes: strokesOf(kind, face, length, cased),
     terminals: {},
   };
 }

@@ -83,8 +83,8 @@ export function symbolFor(part: Pick<Part, 'kind'> & Partial<Part>, face: Face, 
 
 /** A symbol by the id a scene names; a bar is drawn as long as the scene part is wide. Never fails: the crossed box stands in. */
 export function symbolById(id: string, width = 0): SymbolData {
-  const kind = id.replace(/\.box$/, '');
-  if (isBarKind(kind)) return barSymbol(kind, id === kind ? 'overview' : 'connections', width);
+  const [kind = '', ...variants] = id.split('.');
+  if (isBarKind(kind)) return barSymbol(kind, variants.includes('box') ? 'connections' : 'overview', width, variants.includes('cased'));
   return byName.get(id) ?? unknownSymbol;
 }
 
