@@ -1,7 +1,7 @@
 import type { SurveyRoom } from '../document/schema';
 import { practices } from '../practices';
 import { SERVICE_RATINGS } from './drafting/assumptions';
-import { runOf, planWays } from './drafting/plan';
+import { planWays, runOf, wholeRoom } from './drafting/plan';
 import { DRAFT_AMBIENT, planHome, type HomeOptions } from './drafting/plan-home';
 import { USUAL_WATTS, type Column } from './columns';
 
@@ -96,7 +96,7 @@ function nameErrors(rooms: readonly SurveyRoom[]): SurveyError[] {
 
 /** A way that no cable on sale serves within the drop allowed: too far for its load. */
 function reachErrors(room: SurveyRoom, title: string, { practice, supply }: HomeOptions): SurveyError[] {
-  const ways = planWays([room], { practice: practices[practice], voltage: supply.voltage, ambientC: DRAFT_AMBIENT });
+  const ways = planWays([wholeRoom(room)], { practice: practices[practice], voltage: supply.voltage, ambientC: DRAFT_AMBIENT });
   const unserved = ways.find(({ size }) => !size);
   if (!unserved) return [];
   return [

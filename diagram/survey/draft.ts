@@ -1,13 +1,11 @@
-import { emptyDocument, type Installation, type PracticeId, type Supply, type SurveyRoom } from '../document/schema';
+import { applyPatch, diff, isEmptyPatch, type Patch } from '../document/patch';
+import { emptyDocument, type Installation, type Position, type PracticeId, type Supply, type SurveyRoom } from '../document/schema';
+import { placeAll } from '../layout/place';
 import { practices } from '../practices';
-import { soundRooms } from './check';
-import { drawBackupSource, planFeed } from './drafting/backup-source';
-import { drawWay, type WayBars } from './drafting/draw-way';
-import { BACKUP_BOARD, BOARD, drawGroup, drawOrigin, type GroupNeed } from './drafting/house';
-import { HOUSE } from './drafting/ids';
-import { drawNotices, drawPlaces, roomBoards } from './drafting/places';
-import type { WayPlan } from './drafting/plan';
-import { backupWays, intoGroups, mainsWays, mainSensitivityA, planHome } from './drafting/plan-home';
+import { drawnByPlace, drawnIn } from './drawn';
+import { draftHome } from './drafting/draft-home';
+import { extendHome } from './drafting/extend-home';
+import { wholeRoom, type Wish } from './drafting/plan';
 import { Sketch } from './drafting/sketch';
 
 export interface DraftOptions {
@@ -18,12 +16,34 @@ export interface DraftOptions {
   hoursWanted: number;
 }
 
-/** A, the smallest breaking capacity on sale that the supply asks for, the draft's usual one at least. */
-function breakingCapacity({ voltage, zln }: Supply, practice: PracticeId): number {
-  const { draft, breakingCapacitiesA, cMax } = practices[practice];
-  const prospective = zln === undefined ? 0 : (cMax.value * voltage) / zln;
-  const onSale = breakingCapacitiesA.value;
-  return onSale.find((icn) => icn >= prospective && icn >= draft.icnA) ?? onSale[onSale.length - 1]!;
+/** A room of which something stands on the sheet already is left to a later draft: its supply comes first. */
+function untouched(doc: Installation): (room: SurveyRoom) => Wish {
+  const places = drawnByPlace(doc);
+  const nothing = { lamps: [], fans: [], outlets: [], heavy: [], keptLamps: [], keptFans: [], keptOutlet: false };
+  return (room) => {
+    const { lamps, fans, outlets, heavy, keptOutlets } = drawnIn(places, room.id);
+    const drawn = [lamps, fans, outlets, heavy, keptOutlets].some((list) => list.length > 0);
+    return drawn ? { room, ...nothing } : wholeRoom(room);
+  };
+}
+
+/** Positions of parts that are gone from the drawing are dropped. */
+function withoutStrays(doc: Installation): Installation {
+  const ids = new Set(doc.parts.map(({ id }) => id));
+  const kept = (positions: Record<string, Position> = {}) => Object.fromEntries(Object.entries(positions).filter(([id]) => ids.has(id)));
+  return { ...doc, sheet: { overview: kept(doc.sheet?.overview), connections: kept(doc.sheet?.connections) } };
+}
+
+/** The document with what its survey asks for drawn: a whole home where it has no supply, else what is missing. */
+function drafted(doc: Installation, hoursWanted: number): Installation {
+  const options = { practice: doc.practice, supply: doc.supply, hoursWanted };
+  const sketch = new Sketch(doc, practices[doc.practice]);
+  if (doc.parts.some(({ kind }) => kind === 'supply')) extendHome(sketch, doc, options);
+  else draftHome(sketch, doc, options, untouched(doc));
+  const drawn = sketch.finish();
+  if (isEmptyPatch(diff(doc, drawn))) return doc;
+  const kept = withoutStrays(drawn);
+  return applyPatch(kept, placeAll(kept));
 }
 
 /**
@@ -31,57 +51,16 @@ function breakingCapacity({ voltage, zln }: Supply, practice: PracticeId): numbe
  * every core wired, cables sized. Rows with errors are left out. The same rooms give the same bytes.
  */
 export function draftDocument(rooms: readonly SurveyRoom[], options: DraftOptions): Installation {
+  const { title, practice, supply, hoursWanted } = options;
   const survey = [...rooms].sort((a, b) => a.order - b.order);
-  const practice = practices[options.practice];
-  const sound = soundRooms(survey, options);
-  const plan = planHome(sound, options);
-  const sketch = new Sketch({ ...emptyDocument(options.title, options.practice, options.supply), survey }, practice);
-  const intake = drawPlaces(sketch, sound);
-  const icn = breakingCapacity(options.supply, options.practice);
-  const mains = intoGroups(mainsWays(plan));
-  const backup = intoGroups(backupWays(plan));
-
-  const tt = options.supply.system === 'TT';
-  const feed = plan.backup && planFeed(sketch, plan.backup, tt);
-  const mainRcd = tt || (plan.backup !== null && feed === null);
-  const taps = drawOrigin(sketch, {
-    ratingA: plan.serviceA,
-    place: intake,
-    feeders: mains.length + (plan.backup ? 1 : 0),
-    mainSensitivityA: mainRcd ? mainSensitivityA(options.supply, practice.touchVolts.value) : null,
-  });
-  const boards = roomBoards(sketch, plan.ways);
-  const backupBars = plan.backup
-    ? drawBackupSource(sketch, {
-        size: plan.backup,
-        feed: feed ?? planFeed(sketch, plan.backup, true)!,
-        from: taps(),
-        intake,
-        hours: plan.hours,
-        groups: backup.length,
-        icn,
-      })
-    : [];
-  const mainsBars = mains.map((_, i) => drawGroup(sketch, taps(), mainsGroup(i + 1, mains.length > 1, plan.serviceA, icn, intake)));
-  drawWays(sketch, mains, mainsBars, boards);
-  drawWays(sketch, backup, backupBars, boards);
-  if (plan.backup) drawNotices(sketch, intake, [BOARD, BACKUP_BOARD], sketch.find(HOUSE.inverter)!.ref!);
-  return sketch.finish();
+  return drafted({ ...emptyDocument(title, practice, supply), survey }, hoursWanted);
 }
 
-/** The nth group of mains ways at the board. */
-const mainsGroup = (n: number, several: boolean, ratingA: number, icn: number, intake: string): GroupNeed => ({
-  side: 'mains',
-  n,
-  label: several ? `Mains ways ${n}` : 'Mains ways',
-  ratingA,
-  icn,
-  rcdPlace: intake,
-  rcdBoard: BOARD,
-  place: intake,
-  board: BOARD,
-});
-
-function drawWays(sketch: Sketch, groups: readonly WayPlan[][], bars: readonly WayBars[], boards: ReadonlyMap<string, string>): void {
-  groups.forEach((ways, i) => ways.forEach((way) => drawWay(sketch, way, bars[i]!, boards)));
+/**
+ * The change that draws what the survey of a document has and its drawing has not; empty where they are in step. What a
+ * person moved or changed by hand stays; rows with errors stay as drawn.
+ * @param hoursWanted h on battery that the job asks for; a room may ask for more
+ */
+export function draftPatch(doc: Installation, hoursWanted = 0): Patch {
+  return diff(doc, drafted(doc, hoursWanted));
 }

@@ -98,9 +98,9 @@ function drawKeptOutlet(sketch: Sketch, way: WayPlan, from: Taps): void {
 /** A heavy appliance behind its own two-pole switch; the earth passes the switch in a joint. */
 function drawHeavy(sketch: Sketch, way: WayPlan, from: Taps): void {
   const { room } = way.segments[0]!;
-  const { what, watts } = room.heavy[way.heavy!]!;
+  const { number, what, watts } = way.heavy!;
   const size = sizeOf(sketch, way);
-  const id = `${roomKey(room)}.heavy${way.heavy! + 1}`;
+  const id = `${roomKey(room)}.heavy${number}`;
   const motor = startsMotor(what);
   const place = room.id;
   const control = sketch.part({ id: `${id}.switch`, kind: 'switch-2pole', label: what, place, rating: ratingFor(way.ratingA, TWO_POLE_RATINGS) });

@@ -10,19 +10,29 @@ const placeOf = ({ id, name, kind }: SurveyRoom): Place => ({
   ...(kind === 'sleeping' && { sleeping: true }),
 });
 
-/** The rooms as places. @returns the place of the board: the survey's room for it, else one of its own */
+/** The rooms as places. @returns the place of the board: where it stands already, the survey's room for it, else one of its own */
 export function drawPlaces(sketch: Sketch, rooms: readonly SurveyRoom[]): string {
   for (const room of rooms) sketch.place(placeOf(room));
-  const own = rooms.find(({ kind }) => kind === 'intake');
-  return own?.id ?? sketch.place({ id: HOUSE.intake, name: 'Intake', kind: 'intake' });
+  const drawn = sketch.find(HOUSE.mainSwitch)?.place;
+  const own = drawn ?? rooms.find(({ kind }) => kind === 'intake')?.id;
+  return own ?? sketch.place({ id: HOUSE.intake, name: 'Intake', kind: 'intake' });
 }
 
-/** A switchboard a room that has switches: its name is a designation that nothing else bears. */
-export function roomBoards(sketch: Sketch, ways: readonly WayPlan[]): Map<string, string> {
-  const rooms = new Set(ways.filter(({ kind }) => kind === 'lamps' || kind === 'backup').flatMap(({ segments }) => segments.map(({ room }) => room)));
-  const inOrder = [...rooms].sort((a, b) => a.order - b.order);
-  sketch.outletsFrom = 10 * Math.ceil((BOARDS_FROM + inOrder.length - 1) / 10) + 1;
-  return new Map(inOrder.map(({ id }) => [id, sketch.nextRef('X', BOARDS_FROM)]));
+/** A switchboard a room that has switches: its name is a designation that nothing else bears. Those that are drawn keep theirs. */
+export function roomBoards(sketch: Sketch, rooms: readonly SurveyRoom[]): Map<string, string> {
+  const boards = new Map<string, string>();
+  for (const part of sketch.allParts())
+    if (part.kind === 'switch' && part.place !== undefined && part.board !== undefined && !boards.has(part.place)) boards.set(part.place, part.board);
+  for (const { id } of rooms) if (!boards.has(id)) boards.set(id, sketch.nextRef('X', BOARDS_FROM));
+  const last = Math.max(BOARDS_FROM, ...[...boards.values()].map((board) => Number(/^X(\d+)$/.exec(board)?.[1] ?? 0)));
+  sketch.outletsFrom = Math.max(sketch.outletsFrom, 10 * Math.ceil(last / 10) + 1);
+  return boards;
+}
+
+/** The rooms that ways bring switches to, in the order of the table. */
+export function roomsWithSwitches(ways: readonly WayPlan[]): SurveyRoom[] {
+  const rooms = ways.filter(({ kind }) => kind === 'lamps' || kind === 'backup').flatMap(({ segments }) => segments.map(({ room }) => room));
+  return [...new Map(rooms.map((room) => [room.id, room])).values()].sort((a, b) => a.order - b.order);
 }
 
 /** switchboards are X11 and on: X1 to X10 are left to bars */

@@ -5,7 +5,7 @@ import { practices } from '../../practices';
 import { SERVICE_RATINGS, WAYS_PER_RCD, ratingFor } from './assumptions';
 import { hoursWanted, keepsSomething, sizeBackup, type BackupSize } from './backup-size';
 import { surveyDemand } from './demand';
-import { isBackup, planWays, type WayPlan } from './plan';
+import { isBackup, planWays, wholeRoom, type WayPlan, type Wish } from './plan';
 
 export interface HomeOptions {
   practice: PracticeId;
@@ -31,15 +31,18 @@ export const DRAFT_AMBIENT = 30;
 
 const onMains = (room: SurveyRoom): SurveyRoom => ({ ...room, keepLamps: 0, keepFans: 0, keepOutletWatts: 0 });
 
-/** Everything a draft of these rooms decides before it draws. The rooms have no errors. */
-export function planHome(rooms: readonly SurveyRoom[], { practice: id, supply, hoursWanted: job }: HomeOptions): HomePlan {
+/**
+ * Everything a draft of these rooms decides before it draws. The rooms have no errors.
+ * @param wishFor what of a room is to be drawn; all of it where not given
+ */
+export function planHome(rooms: readonly SurveyRoom[], { practice: id, supply, hoursWanted: job }: HomeOptions, wishFor: (room: SurveyRoom) => Wish = wholeRoom): HomePlan {
   const practice = practices[id];
   const hours = hoursWanted(rooms, job);
   const wanted = rooms.some(keepsSomething);
   const backup = wanted ? sizeBackup(rooms, hours, practice, DRAFT_AMBIENT) : null;
   const backupTooLarge = wanted && !backup;
   const held = backupTooLarge ? rooms.map(onMains) : rooms;
-  const ways = planWays(held, { practice, voltage: supply.voltage, ambientC: DRAFT_AMBIENT });
+  const ways = planWays(held.map(wishFor), { practice, voltage: supply.voltage, ambientC: DRAFT_AMBIENT });
   const demand = surveyDemand(rooms, ways, backup?.chargeWatts ?? 0, practice, supply.voltage);
   return { ways, backup, hours, demand, serviceA: ratingFor(demand.demandA, SERVICE_RATINGS), backupTooLarge };
 }

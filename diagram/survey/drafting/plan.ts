@@ -16,7 +16,20 @@ import {
 import { sizeRun, type RunSize } from './size-run';
 import { USUAL_RUN } from '../columns';
 
-/** What of one room hangs on one way: numbers of its lamps, fans and outlets, from 1. */
+/** What is to be drawn in a room: numbers of lamps, fans and outlets that its parts are called by, from 1. */
+export interface Wish {
+  room: SurveyRoom;
+  lamps: number[];
+  fans: number[];
+  outlets: number[];
+  heavy: { number: number; what: string; watts: number }[];
+  /** of these, what stays on in an outage, besides the ones above */
+  keptLamps: number[];
+  keptFans: number[];
+  keptOutlet: boolean;
+}
+
+/** What of one room hangs on one way. */
 export interface Segment {
   room: SurveyRoom;
   lamps: number[];
@@ -33,8 +46,8 @@ export interface WayPlan {
   number: number;
   label: string;
   segments: Segment[];
-  /** which of the room's heavy appliances, from 0 */
-  heavy?: number;
+  /** of a heavy appliance's own way */
+  heavy?: Wish['heavy'][number];
   ring: boolean;
   ratingA: number;
   curve: 'B' | 'C' | 'D';
@@ -46,18 +59,31 @@ export interface WayPlan {
 
 export const isBackup = ({ kind }: Pick<WayPlan, 'kind'>): boolean => kind === 'backup' || kind === 'backup-outlet';
 
-interface Supply {
+export interface WaySupply {
   practice: Practice;
   voltage: number;
   ambientC: number;
 }
 
-interface Limit {
+export interface Limit {
   points: number;
   watts: number;
 }
 
-const numbers = (from: number, to: number): number[] => Array.from({ length: Math.max(0, to - from + 1) }, (_, i) => from + i);
+/** Whole numbers from one to another, both counted. */
+export const numbers = (from: number, to: number): number[] => Array.from({ length: Math.max(0, to - from + 1) }, (_, i) => from + i);
+
+/** All of a room, as a draft from nothing draws it: what stays on has the first numbers. */
+export const wholeRoom = (room: SurveyRoom): Wish => ({
+  room,
+  lamps: numbers(room.keepLamps + 1, room.lamps),
+  fans: numbers(room.keepFans + 1, room.fans),
+  outlets: numbers(1, room.outlets),
+  heavy: room.heavy.map((item, i) => ({ number: i + 1, ...item })),
+  keptLamps: numbers(1, room.keepLamps),
+  keptFans: numbers(1, room.keepFans),
+  keptOutlet: room.keepOutletWatts > 0,
+});
 
 export const segmentWatts = ({ room, lamps, fans }: Segment): number => lamps.length * room.lampWatts + fans.length * room.fanWatts;
 const pointsOf = ({ lamps, fans }: Segment): number => lamps.length + fans.length;
@@ -65,7 +91,8 @@ const fits = (segments: readonly Segment[], limit: Limit): boolean =>
   segments.reduce((sum, segment) => sum + pointsOf(segment), 0) <= limit.points &&
   segments.reduce((sum, segment) => sum + segmentWatts(segment), 0) <= limit.watts;
 
-function lightingLimit({ practice, voltage }: Supply, ratingA: number): Limit {
+/** Points and watts of one way of lamps and fans. */
+export function lightingLimit({ practice, voltage }: WaySupply, ratingA: number): Limit {
   const stated = practice.pointsLimits.find(({ value }) => value.of === 'lighting')?.value;
   const watts = WAY_FILL * ratingA * voltage * POWER_FACTOR.lamp;
   return { points: stated?.points ?? POINTS_PER_WAY, watts: Math.min(watts, stated?.watts ?? watts) };
@@ -111,7 +138,7 @@ function lampsLength(segments: readonly Segment[]): number {
 
 export const runOf = (room: SurveyRoom): number => room.run ?? USUAL_RUN;
 
-function lampWay(segments: Segment[], kind: 'lamps' | 'backup', supply: Supply): Omit<WayPlan, 'number'> {
+function lampWay(segments: Segment[], kind: 'lamps' | 'backup', supply: WaySupply): Omit<WayPlan, 'number'> {
   const draft = supply.practice.draft[kind === 'lamps' ? 'lighting' : 'backup'];
   const amps = segments.reduce((sum, segment) => sum + segmentWatts(segment), 0) / (supply.voltage * POWER_FACTOR.lamp);
   const ratingA = ratingFor(amps, supply.practice.breakerRatingsA.value, draft.ratingA);
@@ -120,7 +147,7 @@ function lampWay(segments: Segment[], kind: 'lamps' | 'backup', supply: Supply):
   return { kind, label: label(segments, what), segments, ring: false, ratingA, curve: draft.curve, amps, size };
 }
 
-function lampWays(rooms: readonly Segment[], kind: 'lamps' | 'backup', supply: Supply): Omit<WayPlan, 'number'>[] {
+function lampWays(rooms: readonly Segment[], kind: 'lamps' | 'backup', supply: WaySupply): Omit<WayPlan, 'number'>[] {
   const limit = lightingLimit(supply, supply.practice.draft[kind === 'lamps' ? 'lighting' : 'backup'].ratingA);
   const joined = joinRooms(rooms.map((room) => pieces(room, limit)), limit);
   return joined.flatMap((segments) => {
@@ -139,15 +166,15 @@ export function outletPattern(practice: Practice, watts: number, voltage: number
 /** m, along a row of outlets. */
 const outletsLength = (room: SurveyRoom, count: number): number => runOf(room) + (count - 1) * LENGTH.outletToOutlet;
 
-function outletWays(room: SurveyRoom, supply: Supply): Omit<WayPlan, 'number'>[] {
+function outletWays({ room, outlets: wanted }: Wish, supply: WaySupply): Omit<WayPlan, 'number'>[] {
   const { practice } = supply;
   const draft = practice.draft.outlets;
   const ring = practice.ring?.value;
-  const asRing = ring !== undefined && room.outlets >= RING_FROM;
+  const asRing = ring !== undefined && wanted.length >= RING_FROM;
   const most = asRing ? OUTLETS_PER_RING : OUTLETS_PER_RADIAL;
-  const ways = Math.ceil(room.outlets / most);
+  const ways = Math.ceil(wanted.length / most);
   return numbers(1, ways).map((way) => {
-    const outlets = numbers(Math.floor(((way - 1) * room.outlets) / ways) + 1, Math.floor((way * room.outlets) / ways));
+    const outlets = wanted.slice(Math.floor(((way - 1) * wanted.length) / ways), Math.floor((way * wanted.length) / ways));
     const amps = (outlets.length * OUTLET_WATTS) / supply.voltage;
     const segments = [{ room, lamps: [], fans: [], outlets }];
     const common = { kind: 'outlets' as const, label: label(segments, asRing ? 'outlets, ring' : 'outlets'), segments, ring: asRing, curve: draft.curve, amps };
@@ -162,21 +189,22 @@ function outletWays(room: SurveyRoom, supply: Supply): Omit<WayPlan, 'number'>[]
   });
 }
 
-function heavyWays(room: SurveyRoom, supply: Supply): Omit<WayPlan, 'number'>[] {
+function heavyWays({ room, heavy }: Wish, supply: WaySupply): Omit<WayPlan, 'number'>[] {
   const draft = supply.practice.draft.heavy;
-  return room.heavy.map(({ what, watts }, heavy) => {
+  return heavy.map((item) => {
+    const { what, watts } = item;
     const motor = startsMotor(what);
     const amps = watts / (supply.voltage * (motor ? POWER_FACTOR.motor : POWER_FACTOR.heater));
     const ratingA = ratingFor(amps, supply.practice.breakerRatingsA.value, draft.ratingA);
     const curve = motor ? 'C' : draft.curve;
     const segments = [{ room, lamps: [], fans: [], outlets: [] }];
     const size = sizeRun({ ...supply, ratingA, curve, amps, lengthM: runOf(room) + LENGTH.switchToAppliance, use: 'other', leastMm2: draft.csaMm2 });
-    return { kind: 'heavy', label: label(segments, what), segments, heavy, ring: false, ratingA, curve, amps, size };
+    return { kind: 'heavy', label: label(segments, what), segments, heavy: item, ring: false, ratingA, curve, amps, size };
   });
 }
 
-function backupOutletWay(room: SurveyRoom, supply: Supply): Omit<WayPlan, 'number'>[] {
-  if (room.keepOutletWatts === 0) return [];
+function backupOutletWay({ room, keptOutlet }: Wish, supply: WaySupply): Omit<WayPlan, 'number'>[] {
+  if (!keptOutlet) return [];
   const { practice, voltage } = supply;
   const pattern = outletPattern(practice, room.keepOutletWatts, voltage);
   const amps = room.keepOutletWatts / voltage;
@@ -187,29 +215,35 @@ function backupOutletWay(room: SurveyRoom, supply: Supply): Omit<WayPlan, 'numbe
   return [{ kind: 'backup-outlet', label: label(segments, 'outlet, backup'), segments, ring: false, ratingA, curve: draft.curve, amps, size }];
 }
 
-/** Counts ways of one kind that begin in the same room. */
-function numbered(ways: readonly Omit<WayPlan, 'number'>[]): WayPlan[] {
-  const counts = new Map<string, number>();
+/** Numbers the ways of one kind that begin in the same room, leaving out numbers that are taken. */
+function numbered(ways: readonly Omit<WayPlan, 'number'>[], taken: (way: WayPlan) => boolean): WayPlan[] {
+  const last = new Map<string, number>();
   return ways.map((way) => {
     const key = `${way.segments[0]!.room.id} ${way.kind}`;
-    const number = (counts.get(key) ?? 0) + 1;
-    counts.set(key, number);
+    let number = (last.get(key) ?? 0) + 1;
+    while (taken({ ...way, number })) number++;
+    last.set(key, number);
     return { ...way, number };
   });
 }
 
 /**
- * The ways that the rooms ask for, within the practice's limits: mains ways room by room (lamps and fans, outlets, heavy
+ * The ways that wishes ask for, within the practice's limits: mains ways room by room (lamps and fans, outlets, heavy
  * appliances), then backup ways. Small ways of lamps serve two neighbouring rooms; a heavy appliance has its own way.
+ * @param taken true for a way that is drawn already
  */
-export function planWays(rooms: readonly SurveyRoom[], supply: Supply): WayPlan[] {
-  const mains = rooms.map((room) => ({ room, lamps: numbers(room.keepLamps + 1, room.lamps), fans: numbers(room.keepFans + 1, room.fans), outlets: [] }));
-  const kept = rooms.map((room) => ({ room, lamps: numbers(1, room.keepLamps), fans: numbers(1, room.keepFans), outlets: [] }));
+export function planWays(wishes: readonly Wish[], supply: WaySupply, taken: (way: WayPlan) => boolean = () => false): WayPlan[] {
+  const none = { outlets: [] };
+  const mains = wishes.map(({ room, lamps, fans }) => ({ room, lamps, fans, ...none }));
+  const kept = wishes.map(({ room, keptLamps, keptFans }) => ({ room, lamps: keptLamps, fans: keptFans, ...none }));
   const lamps = lampWays(mains, 'lamps', supply);
   const backup = lampWays(kept, 'backup', supply);
-  const startingIn = (ways: readonly Omit<WayPlan, 'number'>[], room: SurveyRoom) => ways.filter(({ segments }) => segments[0]!.room.id === room.id);
-  return numbered([
-    ...rooms.flatMap((room) => [...startingIn(lamps, room), ...outletWays(room, supply), ...heavyWays(room, supply)]),
-    ...rooms.flatMap((room) => [...startingIn(backup, room), ...backupOutletWay(room, supply)]),
-  ]);
+  const startingIn = (ways: readonly Omit<WayPlan, 'number'>[], { room }: Wish) => ways.filter(({ segments }) => segments[0]!.room.id === room.id);
+  return numbered(
+    [
+      ...wishes.flatMap((wish) => [...startingIn(lamps, wish), ...outletWays(wish, supply), ...heavyWays(wish, supply)]),
+      ...wishes.flatMap((wish) => [...startingIn(backup, wish), ...backupOutletWay(wish, supply)]),
+    ],
+    taken,
+  );
 }

@@ -24,7 +24,7 @@ export function byRow(lamps: readonly number[], pairs: boolean): number[][] {
 export function cableOf(sketch: Sketch, id: string, size: RunSize, length: number, options: { cores?: number; fromBoard?: boolean } = {}): string {
   const { draft } = sketch.practice;
   return sketch.cable({
-    id,
+    id: sketch.freeId(id),
     csa: size.csaMm2,
     cpc: size.cpcMm2,
     material: draft.material,
@@ -59,7 +59,7 @@ export class RoomBox {
 
   /** Brings a run into the room's switchboard. @param way what the joints are called after: `lamps1` */
   static enter(sketch: Sketch, room: SurveyRoom, board: string, way: string, size: RunSize, from: Taps, run: string): RoomBox {
-    const joint = (what: string) => sketch.part({ id: `${roomKey(room)}.${way}.${what}`, kind: 'joint', place: room.id, board }, null);
+    const joint = (what: string) => sketch.part({ id: sketch.freeId(`${roomKey(room)}.${way}.${what}`), kind: 'joint', place: room.id, board }, null);
     const neutral = joint('n');
     const earth = joint('e');
     sketch.wire(from.neutral, sketch.nextOn(neutral), 'neutral', run);
@@ -143,8 +143,7 @@ export class RoomBox {
       board: this.board,
       rating: ratingFor(this.amps(watts), SWITCH_RATINGS, sketch.practice.draft.switchA),
     });
-    const leaving = this.run === undefined ? sketch.wiresAt(this.line).find((wire) => sketch.getWire(wire).from.join(' ') === this.line.join(' ')) : undefined;
-    if (leaving !== undefined) sketch.moveStart(leaving, [id, '1']);
+    if (this.run === undefined) for (const leaving of sketch.leaving(this.line)) sketch.moveStart(leaving.id, [id, '1']);
     sketch.wire(this.line, [id, '1'], 'line', this.run);
     this.line = [id, '1'];
     this.run = undefined;

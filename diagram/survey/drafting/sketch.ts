@@ -32,7 +32,6 @@ export class Sketch {
   private readonly refs = new Set<string>();
   private readonly conductors = new Map<string, Set<string>>();
   private readonly lastTerminal = new Map<string, number>();
-  private readonly nextNumber = new Map<string, number>();
 
   constructor(
     private readonly base: Installation,
@@ -105,6 +104,11 @@ export class Sketch {
     return cable.id;
   }
 
+  /** Draws another cable like one that is drawn. */
+  copyCable(like: string, id: string): string {
+    return this.cable({ ...this.cables.get(like)!, id: this.freeId(id) });
+  }
+
   /** Draws a wire in the practice's colour of its role. `to` is the end away from the source. */
   wire(from: End, to: End, role: Role, cable?: string): void {
     const id = this.freeWireId(`${to[0]}:${to[1].replace('+', 'plus')}`);
@@ -128,6 +132,12 @@ export class Sketch {
     return [...(this.conductors.get(`${part} ${mark}`) ?? [])];
   }
 
+  /** mm2 of a cable's cores; undefined for one that is not drawn. */
+  sizeOf(cable: string): { csaMm2: number; cpcMm2: number } | undefined {
+    const found = this.cables.get(cable);
+    return found && { csaMm2: found.csa, cpcMm2: found.cpc ?? found.csa };
+  }
+
   getWire(id: string): Wire {
     return this.wires.get(id)!;
   }
@@ -143,13 +153,68 @@ export class Sketch {
 
   /** The lowest free number behind a letter, from `first` on: `X21`. */
   nextRef(letter: string, first = FIRST[letter] ?? 1): string {
-    const key = `${letter}${first}`;
-    let n = this.nextNumber.get(key) ?? first;
+    let n = first;
     while (this.refs.has(`${letter}${n}`)) n++;
-    this.nextNumber.set(key, n + 1);
     const ref = `${letter}${n}`;
     this.refs.add(ref);
     return ref;
+  }
+
+  /** An id that nothing has: as wanted, or with a number behind it. */
+  freeId(wanted: string): string {
+    let id = wanted;
+    for (let n = 2; this.parts.has(id) || this.cables.has(id); n++) id = `${wanted}.${n}`;
+    return id;
+  }
+
+  /** Puts a part back as it was before it was drawn anew. */
+  restore(part: Part): void {
+    this.parts.set(part.id, part);
+    if (part.ref) this.refs.add(part.ref);
+  }
+
+  removePart(id: string): void {
+    const ref = this.parts.get(id)?.ref;
+    if (ref) this.refs.delete(ref);
+    this.parts.delete(id);
+  }
+
+  /** Takes a wire away, and its cable with its last core. */
+  removeWire(id: string): void {
+    const wire = this.wires.get(id);
+    if (!wire) return;
+    this.wires.delete(id);
+    for (const [part, mark] of [wire.from, wire.to]) this.conductors.get(`${part} ${mark}`)?.delete(id);
+    if (wire.cable !== undefined && ![...this.wires.values()].some(({ cable }) => cable === wire.cable)) this.cables.delete(wire.cable);
+  }
+
+  /** Lands the far end of a wire elsewhere. */
+  moveEnd(id: string, to: End): void {
+    const wire = this.wires.get(id)!;
+    this.conductors.get(`${wire.to[0]} ${wire.to[1]}`)?.delete(id);
+    const moved = { ...wire, to };
+    this.wires.set(id, moved);
+    this.count(moved);
+  }
+
+  /** The cores of a cable. */
+  wiresIn(cable: string): Wire[] {
+    return [...this.wires.values()].filter((wire) => wire.cable === cable);
+  }
+
+  /** The wires at any terminal of a part. */
+  wiresOn(part: string): Wire[] {
+    return [...this.wires.values()].filter(({ from, to }) => from[0] === part || to[0] === part);
+  }
+
+  /** The wire that arrives at a terminal from the side of the source. */
+  arriving([part, mark]: End): Wire | undefined {
+    return this.wiresAt([part, mark]).map((id) => this.wires.get(id)!).find(({ to }) => to[0] === part && to[1] === mark);
+  }
+
+  /** The wires that go on from a terminal. */
+  leaving([part, mark]: End): Wire[] {
+    return this.wiresAt([part, mark]).map((id) => this.wires.get(id)!).filter(({ from }) => from[0] === part && from[1] === mark);
   }
 
   finish(): Installation {
