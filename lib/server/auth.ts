@@ -80,7 +80,7 @@ export function authOptions(): NextAuthOptions {
       async jwt({ token, user, account, profile }) {
         if (!user) return token;
         const email = account?.provider === 'oidc' ? verifiedEmail(profile) : null;
-        const who = email ? await invitedPerson(email) : { teamId: (user as { teamId: string }).teamId, personId: user.id };
+        const who = email ? await invitedPerson(email) : { teamId: (user as unknown as { teamId: string }).teamId, personId: user.id };
         if (!who) throw new Error('not invited');
         return { ...(await beginSession(who)) };
       },

@@ -1,0 +1,10 @@
+import { sequelize } from '@/models';
+
+/** GET /api/health says whether the app and its database answer; nothing of what is in it. */
+export async function GET(): Promise<Response> {
+  const ok = await sequelize.query('select 1').then(
+    () => true,
+    () => false,
+  );
+  return Response.json({ ok }, { status: ok ? 200 : 503, headers: { 'cache-control': 'no-store' } });
+}
