@@ -61,7 +61,18 @@ export interface RuleMeta {
   practices?: readonly ('IEC' | 'IN' | 'GB')[];
 }
 
+/** A value that the drawing leaves out and a rule cannot judge without: `missing-data` says so, naming the rules that wait. */
+export interface Lack {
+  /** ids of the part or wire that lacks it; the supply part where the supply's data lack it */
+  parts: readonly string[];
+  wires?: readonly string[];
+  /** ends "... cannot be judged without": "the rated current of Q11" */
+  what: string;
+}
+
 export interface Rule {
   meta: RuleMeta;
   check(context: Context): Iterable<Violation>;
+  /** values that it waits for in this home; rules that need none leave it out. The same lack of several rules is one finding. */
+  lacks?(context: Context): Iterable<Lack>;
 }
