@@ -14,6 +14,6 @@ export const jobTabs = (jobId: string): Tab[] => [
 /** The team's own sheets, shown when no job is open: only those that this person may turn to. */
 export const teamTabs = (roles: readonly PersonRole[]): Tab[] => [
   jobs,
-  ...(roles.includes('admin') ? [{ id: 'people', label: 'People', href: '/people' }] : []),
+  ...(roles.some((role) => role !== 'apprentice') ? [{ id: 'people', label: 'People', href: '/people' }] : []),
   { id: 'rules', label: 'Rules', href: '/rules' },
 ];

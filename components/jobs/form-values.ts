@@ -17,6 +17,8 @@ export interface JobFormValues {
   ra: string;
   hoursWanted: string;
   due: string;
+  /** ids of the apprentices it is given to, sorted, a space between */
+  given: string;
 }
 export type JobFormField = keyof JobFormValues;
 
@@ -35,6 +37,7 @@ export const NEW_JOB: JobFormValues = {
   ra: '',
   hoursWanted: '0',
   due: '',
+  given: '',
 };
 
 const text = (value: number | undefined): string => (value === undefined ? '' : String(value));
@@ -54,6 +57,7 @@ export const valuesOf = (job: JobView): JobFormValues => ({
   ra: text(job.supply.ra),
   hoursWanted: text(job.hoursWanted),
   due: job.due ?? '',
+  given: [...(job.given ?? [])].sort().join(' '),
 });
 
 export type FieldErrors = Partial<Record<JobFormField, string>>;
@@ -99,6 +103,7 @@ export function readForm(values: JobFormValues, kept: Partial<Supply> = {}): { o
     supply: Object.fromEntries(Object.entries(supply).filter(([, value]) => value !== undefined)),
     hoursWanted: read('hoursWanted'),
     due: values.due === '' ? null : values.due,
+    given: values.given.split(' ').filter(Boolean),
   };
   const result = JobInputSchema.safeParse(raw);
   if (result.success && Object.keys(errors).length === 0) return { ok: true, input: result.data };

@@ -3,7 +3,8 @@
 import { useEffect, useRef, type ReactNode } from 'react';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { ErrorLine } from '@/components/ui/error-line';
-import { TextField } from '@/components/ui/field';
+import { CheckField, TextField } from '@/components/ui/field';
+import type { PersonRow } from '@/lib/shared/people';
 import { ClientField } from './client-field';
 import { SupplyFields } from './supply-fields';
 import type { JobFormState } from './use-job-form';
@@ -19,7 +20,7 @@ function Group({ title, children }: { title: string; children: ReactNode }) {
 }
 
 /** Client, place, practice, supply, backup: what a job begins with and what may be put right later. */
-export function JobForm({ form, isNew }: { form: JobFormState; isNew: boolean }) {
+export function JobForm({ form, isNew, apprentices }: { form: JobFormState; isNew: boolean; apprentices: readonly PersonRow[] }) {
   const { values, errors, set } = form;
   const element = useRef<HTMLFormElement>(null);
   const tried = useRef(false);
@@ -82,6 +83,24 @@ export function JobForm({ form, isNew }: { form: JobFormState; isNew: boolean })
           <TextField label="Due" optional type="date" {...text('due')} />
         </div>
       </Group>
+      {apprentices.length > 0 && (
+        <Group title="Given to">
+          <p className="mb-2 text-grey">An apprentice sees and draws in the jobs that are given to them, and in no other.</p>
+          <div className="flex flex-wrap gap-x-6 gap-y-2">
+            {apprentices.map(({ id, name }) => {
+              const given = values.given.split(' ').filter(Boolean);
+              return (
+                <CheckField
+                  key={id}
+                  label={name}
+                  checked={given.includes(id)}
+                  onChange={(event) => set('given', (event.target.checked ? [...given, id].sort() : given.filter((other) => other !== id)).join(' '))}
+                />
+              );
+            })}
+          </div>
+        </Group>
+      )}
       {form.theirs ? (
         <VersionConflict mine={values} theirs={form.theirs} onMine={form.keepMine} onTheirs={form.takeTheirs} />
       ) : (

@@ -4,7 +4,7 @@ import { SheetFrame } from '@/components/frame/sheet-frame';
 import { jobTabs, teamTabs } from '@/components/frame/tabs';
 import type { Supply } from '@/diagram/document/schema';
 import type { JobView } from '@/lib/shared/jobs';
-import type { PersonRole } from '@/lib/shared/people';
+import type { PersonRole, PersonRow } from '@/lib/shared/people';
 import { ArchiveJob } from './archive-job';
 import { JobForm } from './job-form';
 import { useJobForm } from './use-job-form';
@@ -12,13 +12,15 @@ import { useJobForm } from './use-job-form';
 interface JobSheetProps {
   /** null: a new one */
   job: JobView | null;
+  /** those it may be given to */
+  apprentices: readonly PersonRow[];
   person: { initials: string; roles: readonly PersonRole[] };
   team: string;
   today: string;
 }
 
 /** The sheet on which a job is begun or put right; the title block fills as one types. */
-export function JobSheet({ job, person, team, today }: JobSheetProps) {
+export function JobSheet({ job, apprentices, person, team, today }: JobSheetProps) {
   const form = useJobForm(job);
   const { values } = form;
   const supply: Supply = {
@@ -65,7 +67,7 @@ export function JobSheet({ job, person, team, today }: JobSheetProps) {
     >
       <div className="px-4 py-4 lap:px-6">
         <h1 className="mb-4 text-title font-bold">{job ? `Job ${job.number}` : 'New job'}</h1>
-        <JobForm form={form} isNew={job === null} />
+        <JobForm form={form} isNew={job === null} apprentices={apprentices} />
       </div>
     </SheetFrame>
   );

@@ -14,11 +14,12 @@ import { RegisterHead } from './register-head';
 import { RegisterTable } from './register-table';
 import { useRegisterQuery } from './use-register-query';
 import { WaitsMargin } from './waits-margin';
+import { isDone } from './words';
 
 export interface RegisterProps {
   page: JobPage;
   query: JobQuery;
-  /** jobs of the person who reads in which something waits, and how many fall due this week */
+  /** jobs of the person who reads, and how many of all fall due this week */
   mine: JobPage;
   dueCount: number;
   person: { initials: string; roles: readonly PersonRole[] };
@@ -42,6 +43,7 @@ export function Register({ page, query, mine, dueCount, person, team, mayCreate,
   const router = useRouter();
   const asked = useRegisterQuery(query);
   const mineIds = new Set(mine.rows.map((job) => job.id));
+  const waiting = mine.rows.filter((job) => !isDone(job));
   const narrowed = query.search !== '' || query.filter !== 'all';
   useSingleKeys(mayCreate ? { n: () => router.push('/jobs/new') } : {});
 
@@ -68,7 +70,7 @@ export function Register({ page, query, mine, dueCount, person, team, mayCreate,
       }}
       narrowMargin="above"
       marginLabel="What waits for you"
-      margin={<WaitsMargin rows={mine.rows} total={mine.total} who={person.initials} today={today} />}
+      margin={<WaitsMargin rows={waiting} who={person.initials} today={today} />}
       foot={<RegisterFoot query={query} mayCreate={mayCreate} today={today} />}
     >
       <div className="px-4 pt-4 pb-6 lap:px-6" aria-busy={asked.pending}>
@@ -126,7 +128,7 @@ function NoJob({ mayCreate }: { mayCreate: boolean }) {
 
 const nothingIn: Record<JobQuery['filter'], string> = {
   all: 'Nothing here.',
-  mine: 'Nothing waits for you.',
+  mine: 'No job is yours.',
   due: 'Nothing is due within a week.',
   archived: 'The archive is empty.',
 };

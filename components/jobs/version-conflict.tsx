@@ -17,7 +17,12 @@ const names: Record<JobFormField, string> = {
   ra: 'RA',
   hoursWanted: 'Hours wanted',
   due: 'Due',
+  given: 'Given to',
 };
+
+/** A value as one reads it; of the people it is given to, how many. */
+const show = (field: JobFormField, value: string): string =>
+  field === 'given' ? `${value.split(' ').filter(Boolean).length} apprentices` : value || '-';
 
 interface VersionConflictProps {
   mine: JobFormValues;
@@ -50,8 +55,8 @@ export function VersionConflict({ mine, theirs, onMine, onTheirs }: VersionConfl
                 <th scope="row" className="border-b border-hair py-1 pr-4 text-left font-normal">
                   {names[field]}
                 </th>
-                <td className="border-b border-hair pr-4">{saved[field] || '-'}</td>
-                <td className="border-b border-hair font-bold">{mine[field] || '-'}</td>
+                <td className="border-b border-hair pr-4">{show(field, saved[field])}</td>
+                <td className="border-b border-hair font-bold">{show(field, mine[field])}</td>
               </tr>
             ))}
           </tbody>

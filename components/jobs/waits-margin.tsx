@@ -7,12 +7,14 @@ import { findingWords, isLate } from './words';
 
 /** notes shown on a narrow screen, where they lie above the table */
 const FEW = 3;
+/** notes shown in the margin */
+const MANY = 6;
 
 const heading = (job: JobRow): string => `${job.number}: ${job.waits}`;
 
 interface WaitsMarginProps {
+  /** jobs of this person in which something waits */
   rows: readonly JobRow[];
-  total: number;
   who: string;
   today: string;
 }
@@ -21,14 +23,14 @@ const dueWord = (job: JobRow, today: string): string =>
   job.due === null ? '' : `due ${shortDate(job.due, today)}${isLate(job, today) ? ', late' : ''}`;
 
 /** What waits for the person who reads, each with its one action; on a narrow screen three lines above the table. */
-export function WaitsMargin({ rows, total, who, today }: WaitsMarginProps) {
+export function WaitsMargin({ rows, who, today }: WaitsMarginProps) {
   return (
     <>
       <div className="max-lap:hidden">
         <h2 className="text-head font-bold">Waits for you, {who}</h2>
         {rows.length === 0 && <p className="mt-2 text-grey">Nothing waits.</p>}
         <ul className="mt-4 flex flex-col gap-8">
-          {rows.map((job, i) => (
+          {rows.slice(0, MANY).map((job, i) => (
             <li key={job.id}>
               <Note
                 tone={job.findings?.danger ? 'finding' : 'plain'}
@@ -46,7 +48,7 @@ export function WaitsMargin({ rows, total, who, today }: WaitsMarginProps) {
             </li>
           ))}
         </ul>
-        {total > rows.length && <p className="mt-4 text-grey">and {total - rows.length} more</p>}
+        {rows.length > MANY && <p className="mt-4 text-grey">and {rows.length - MANY} more</p>}
       </div>
       <ul aria-label="Waits for you" className="lap:hidden">
         {rows.length === 0 && <li className="text-grey">Nothing waits for you.</li>}

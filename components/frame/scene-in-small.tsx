@@ -1,0 +1,93 @@
+import type { Scene, ScenePart, SceneRun } from '@/diagram/layout/scene';
+import { symbolById } from '@/diagram/symbols';
+import { SymbolGlyph } from './symbol-glyph';
+
+const turns = [0, 90, 180, 270] as const;
+
+function Part({ part }: { part: ScenePart }) {
+  const turned = part.turn % 2 === 1;
+  const symbol = symbolById(part.symbol, turned ? part.height : part.width);
+  // A turned symbol keeps its middle: the corner it is drawn from is that of the upright one.
+  const x = part.x + (part.width - symbol.width) / 2;
+  const y = part.y + (part.height - symbol.height) / 2;
+  return <SymbolGlyph symbol={{ ...symbol, texts: undefined }} x={x} y={y} turn={turns[part.turn]} />;
+}
+
+function Run({ run }: { run: SceneRun }) {
+  const d = `M${run.points.map((point) => `${point.x} ${point.y}`).join('L')}`;
+  const line = { d, fill: 'none', vectorEffect: 'non-scaling-stroke' } as const;
+  if (run.feed !== 'backup') return <path {...line} className="stroke-ink" strokeWidth={1} />;
+  return (
+    <>
+      <path {...line} className="stroke-ink" strokeWidth={3.4} />
+      <path {...line} className="stroke-paper" strokeWidth={1.6} />
+    </>
+  );
+}
+
+interface SceneInSmallProps {
+  scene: Scene;
+  /** id of the place in hand: its room is thickened */
+  inHand?: string | null;
+  /** ids of places with something to put right */
+  wrong?: ReadonlySet<string>;
+  onPlace?(place: string): void;
+  className?: string;
+}
+
+/** A face of the drawing from afar: no lettering but the rooms' names. */
+export function SceneInSmall({ scene, inHand, wrong, onPlace, className = '' }: SceneInSmallProps) {
+  const rooms = scene.frames.filter((frame) => frame.kind === 'room');
+  const size = scene.width / 48;
+  return (
+    <svg viewBox={`0 0 ${scene.width} ${scene.height}`} className={className} aria-hidden="true">
+      {scene.frames
+        .filter((frame) => frame.kind === 'switchboard')
+        .map((frame) => (
+          <rect
+            key={frame.id}
+            x={frame.x}
+            y={frame.y}
+            width={frame.width}
+            height={frame.height}
+            className="fill-paper stroke-ink"
+            strokeWidth={1}
+            vectorEffect="non-scaling-stroke"
+          />
+        ))}
+      {scene.runs.map((run) => (
+        <Run key={run.id} run={run} />
+      ))}
+      {scene.parts.map((part) => (
+        <Part key={part.id} part={part} />
+      ))}
+      {rooms.map((frame) => {
+        const strong = frame.place !== undefined && frame.place === inHand;
+        const bad = frame.place !== undefined && wrong?.has(frame.place);
+        return (
+          <g key={frame.id} className={onPlace ? 'cursor-pointer' : ''} onClick={() => frame.place && onPlace?.(frame.place)}>
+            <rect
+              x={frame.x}
+              y={frame.y}
+              width={frame.width}
+              height={frame.height}
+              fill="transparent"
+              className={bad ? 'stroke-red' : strong ? 'stroke-ink' : 'stroke-rule'}
+              strokeWidth={strong ? 2.6 : bad ? 2 : 1}
+              strokeDasharray={strong || bad ? undefined : '5 4'}
+              vectorEffect="non-scaling-stroke"
+            />
+            <text
+              x={frame.x + size / 4}
+              y={frame.y + frame.height + size * 1.1}
+              fontSize={size}
+              className={`${bad ? 'fill-red' : 'fill-ink'} ${strong ? 'font-bold' : ''}`}
+            >
+              {frame.texts[0]?.text}
+            </text>
+          </g>
+        );
+      })}
+    </svg>
+  );
+}
