@@ -33,7 +33,7 @@ function withHeaders(response: NextResponse, policy: string): NextResponse {
   headers.set('content-security-policy', policy);
   headers.set('x-content-type-options', 'nosniff');
   headers.set('x-frame-options', 'DENY');
-  headers.set('referrer-policy', 'no-referrer');
+  headers.set('referrer-policy', 'same-origin');
   headers.set('permissions-policy', 'camera=(), microphone=(), geolocation=()');
   headers.set('cross-origin-opener-policy', 'same-origin');
   headers.set('cross-origin-resource-policy', 'same-origin');

@@ -1,9 +1,13 @@
 import 'server-only';
+import { randomUUID } from 'node:crypto';
+import { diff } from '@/diagram/document/patch';
+import { emptyDocument } from '@/diagram/document/schema';
 import { hashPassword } from '@/lib/server/account/password';
 import { initialsOf, type Actor } from '@/lib/server/actor';
 import accounts from '@/lib/server/demo/accounts.json';
 import { demoHomes } from '@/lib/server/demo/homes';
 import { examineDrawing } from '@/lib/server/drawings/background';
+import { saveChange } from '@/lib/server/drawings/save-change';
 import { createJob } from '@/lib/server/jobs/create-job';
 import type { PersonRole } from '@/lib/shared/people';
 import { Login, Membership, Person, Team } from '@/models';
@@ -31,7 +35,11 @@ export async function seed(): Promise<void> {
     const { title, practice, supply } = document;
     const due = dueInDays === null ? null : inDays(dueInDays);
     const given = byApprentice ? [apprentice.personId] : [];
-    const job = await createJob(electrician, { title, client, address, practice, supply, hoursWanted, due, given }, document);
+    const job = await createJob(electrician, { title, client, address, practice, supply, hoursWanted, due, given });
+    // As a person does it: one change that draws the home from its survey, in the hand of whoever drew it.
+    const patch = diff(emptyDocument(title, practice, supply), document);
+    const hand = byApprentice ? apprentice : electrician;
+    await saveChange(hand, job.drawingId, { saveId: randomUUID(), base: 0, label: 'Draft the sheet', patch });
     await examineDrawing(team.id, job.drawingId);
   }
 }

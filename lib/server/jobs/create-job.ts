@@ -1,7 +1,7 @@
 import 'server-only';
 import { randomUUID } from 'node:crypto';
 import { QueryTypes } from 'sequelize';
-import { emptyDocument, type Installation } from '@/diagram/document/schema';
+import { emptyDocument } from '@/diagram/document/schema';
 import type { Actor } from '@/lib/server/actor';
 import { audit } from '@/lib/server/audit';
 import { sha256 } from '@/lib/server/drawings/hash';
@@ -12,11 +12,11 @@ import { authorize } from '@/lib/server/policies';
 import type { JobInput, JobView } from '@/lib/shared/jobs';
 import { Drawing, DrawingSnapshot, Job, sequelize } from '@/models';
 
-/** A new job with the next number of the team, and its drawing: an empty home, or the document that is given. */
-export async function createJob(actor: Actor, input: JobInput, document?: Installation): Promise<JobView> {
+/** A new job with the next number of the team, and its drawing: an empty home. */
+export async function createJob(actor: Actor, input: JobInput): Promise<JobView> {
   authorize(actor, 'job.create');
   const { teamId } = actor;
-  const body = JSON.stringify(document ?? emptyDocument(input.title, input.practice, input.supply));
+  const body = JSON.stringify(emptyDocument(input.title, input.practice, input.supply));
   const hash = sha256(body);
   const jobId = await sequelize.transaction(async (transaction) => {
     const clientId = await findOrMakeClient(actor, input, transaction);

@@ -1,0 +1,40 @@
+import { randomBytes } from 'node:crypto';
+import { buildIfChanged } from './build.mjs';
+import { explain } from './explain.mjs';
+import { migrate } from './migrate.mjs';
+import { seedDemo } from './seed-demo.mjs';
+import { serve } from './serve.mjs';
+import { throwawayCluster } from './throwaway.mjs';
+
+/**
+ * The app for the browser tests: built into a folder of its own, on a throwaway database with the demo in it. Runs until
+ * it is told to stop: node lib/scripts/browser-app.mjs PORT
+ */
+const port = Number(process.argv[2]);
+const address = `http://127.0.0.1:${port}`;
+const undo = [];
+const stop = async (status) => {
+  for (const step of undo.splice(0).reverse()) await step();
+  process.exit(status);
+};
+for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => void stop(0));
+try {
+  await buildIfChanged('.next-test');
+  const cluster = await throwawayCluster();
+  undo.push(cluster.stop);
+  await cluster.createDatabase('ohmstead');
+  await migrate(cluster.url('ohmstead', 'owner'));
+  const env = {
+    DATABASE_URL: cluster.url('ohmstead'),
+    NEXTAUTH_SECRET: randomBytes(32).toString('base64url'),
+    NEXTAUTH_URL: address,
+    OHMSTEAD_BUILD_DIR: '.next-test',
+  };
+  await seedDemo({ env, wanted: true });
+  const app = serve({ host: '127.0.0.1', port, env });
+  undo.push(app.stop);
+  await stop(await app.ended);
+} catch (error) {
+  console.error(explain(error));
+  await stop(1);
+}

@@ -1,0 +1,45 @@
+import { expect, test } from 'playwright/test';
+import accounts from '../../lib/server/demo/accounts.json' with { type: 'json' };
+import { signInAs } from './sign-in';
+
+test('a stranger is sent to the sign-in sheet and comes back to the page asked for', async ({ page }) => {
+  await page.goto('/jobs?sort=title');
+  await expect(page).toHaveURL(/\/signin\?next=/);
+  await page.getByLabel('E-mail').fill(accounts.people[0]!.email);
+  await page.getByLabel('Password', { exact: true }).fill(accounts.password);
+  await page.getByRole('button', { name: 'Open my sheets' }).click();
+  await expect(page).toHaveURL(/\/jobs\?sort=title/);
+});
+
+test('every page of the set carries its headers and runs no script without the nonce', async ({ page }) => {
+  const complaints: string[] = [];
+  page.on('console', (message) => {
+    if (/Content Security Policy/i.test(message.text())) complaints.push(message.text());
+  });
+  await signInAs(page, 'electrician');
+  for (const path of ['/signin', '/jobs', '/people', '/account', '/rules']) {
+    const answer = (await page.goto(path))!;
+    const headers = answer.headers();
+    expect(headers['content-security-policy'], path).toMatch(/script-src 'self' 'nonce-[^']+' 'strict-dynamic'/);
+    expect(headers['x-content-type-options'], path).toBe('nosniff');
+    expect(headers['x-powered-by'], path).toBeUndefined();
+    await page.waitForLoadState('networkidle');
+  }
+  expect(complaints).toEqual([]);
+});
+
+test('headers that pretend to come from the framework or a proxy open nothing', async ({ request }) => {
+  const tricks = [
+    { 'x-middleware-subrequest': 'proxy:proxy:proxy:proxy:proxy' },
+    { 'x-middleware-subrequest': 'src/proxy:src/proxy:src/proxy:src/proxy:src/proxy' },
+    { 'x-forwarded-host': 'elsewhere.example', 'x-forwarded-proto': 'https' },
+    { rsc: '1' },
+    { 'next-router-prefetch': '1', rsc: '1' },
+  ];
+  for (const headers of tricks) {
+    expect((await request.get('/api/jobs', { headers })).status()).toBe(401);
+    const page = await request.get('/jobs', { headers, maxRedirects: 0 });
+    expect([302, 303, 307, 308]).toContain(page.status());
+    expect(page.headers()['location'] ?? '').not.toContain('elsewhere.example');
+  }
+});
