@@ -2,30 +2,14 @@ import type { Installation, Part, Position } from '../document/schema';
 import { symbolFor } from '../symbols';
 import { MODULE } from '../symbols/types';
 import { traceFeeds } from '../terminals/feeds';
-import { placeEnds, endKey, type RunEnd } from './ends';
+import { placeEnds } from './ends';
 import { BODY } from './lettering';
 import { FOOT, ROOM, m } from './overview-metrics';
+import { overviewRoutes } from './overview-routes';
 import { planOverview, type OverviewPlan } from './overview-plan';
 import { byIdOf } from './scene-order';
-import type { Point, Scene, SceneFrame, ScenePart, SceneRun } from './scene';
+import type { Scene, SceneFrame, ScenePart, SceneRun } from './scene';
 import { designation, ratingLines } from './wording';
-
-const STEP: Record<RunEnd['side'], Point> = { up: { x: 0, y: -1 }, down: { x: 0, y: 1 }, left: { x: -1, y: 0 }, right: { x: 1, y: 0 } };
-
-/** A plain elbow between two ends. */
-function elbow(a: RunEnd, b: RunEnd): Point[] {
-  const p = { x: a.x + STEP[a.side].x * MODULE, y: a.y + STEP[a.side].y * MODULE };
-  const q = { x: b.x + STEP[b.side].x * MODULE, y: b.y + STEP[b.side].y * MODULE };
-  const raw = a.side === 'up' || a.side === 'down' ? [a, p, { x: q.x, y: p.y }, q, b] : [a, p, { x: p.x, y: q.y }, q, b];
-  const points: Point[] = [];
-  for (const { x, y } of raw) {
-    const [before, last] = [points.at(-2), points.at(-1)];
-    if (last && last.x === x && last.y === y) continue;
-    if (before && last && ((before.x === last.x && last.x === x) || (before.y === last.y && last.y === y))) points.pop();
-    points.push({ x, y });
-  }
-  return points.length > 1 ? points : [points[0]!, points[0]!];
-}
 
 /** The overview of any document. */
 export function overviewScene(doc: Installation, plan: OverviewPlan = planOverview(doc), stored: Record<string, Position> = doc.sheet?.overview ?? {}): Scene {
@@ -52,23 +36,24 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
       ...(frame && { frame: `room:${frame}` }),
     };
   });
+  const routed = overviewRoutes(graph, bodies, ends);
   const runs = graph.runs.map((run): SceneRun => ({
     id: run.id,
     wires: run.wires,
     ...(run.cable && { cable: run.cable }),
     from: run.from,
     to: run.to,
-    points: elbow(ends.get(endKey(run, run.from[0]))!, ends.get(endKey(run, run.to[0]))!),
+    points: routed.points.get(run.id)!,
     role: run.role,
     feed: feeds.wires.get(run.wires[0]!) ?? 'none',
     weight: 'normal',
     texts: [],
-    hops: [],
+    hops: routed.hops.get(run.id) ?? [],
   }));
   const frames = roomFrames(doc, plan, parts);
   const right = Math.max(m(40), ...parts.map((part) => part.x + part.width), ...frames.map((frame) => frame.x + frame.width)) + m(4);
   const bottom = Math.max(plan.levels.bottom, ...parts.map((part) => part.y + part.height + m(4)));
-  return { face: 'overview', width: right, height: bottom, bands: bandsOf(plan, parts, bottom), frames, parts: parts.sort(byIdOf), runs, rings: [], dots: [], texts: [] };
+  return { face: 'overview', width: right, height: bottom, bands: bandsOf(plan, parts, bottom), frames, parts: parts.sort(byIdOf), runs, rings: [], dots: routed.dots.map(({ x, y, run }) => ({ x, y, feed: feeds.wires.get(run) ?? 'none' })), texts: [] };
 }
 
 function partTexts(part: Part, body: { x: number; y: number; width: number; height: number }) {

@@ -1,0 +1,119 @@
+import { MODULE, type Side } from '../symbols/types';
+import type { Point } from './scene';
+
+/** The ground the router walks on: lines of the module near parts and terminals, none where nothing is. */
+
+export interface Box extends Point {
+  width: number;
+  height: number;
+}
+
+/** A part that no run may pass. */
+export interface Obstacle extends Box {
+  id: string;
+}
+
+/** Where a run ends: the terminal, and the sides on which it may be left, the best first. */
+export interface RouteEnd extends Point {
+  part: string;
+  sides: readonly Side[];
+  /** every side is as good: a joint */
+  even?: boolean;
+}
+
+export interface RouteRequest {
+  id: string;
+  /** runs of one net may share a stretch; different nets never do */
+  net: string;
+  from: RouteEnd;
+  to: RouteEnd;
+}
+
+/** Ground that costs extra to walk on: where lettering is to stand. */
+export interface Soft extends Box {
+  /** added per unit of length */
+  cost: number;
+}
+
+/** Lines this many modules beyond a part or terminal belong to the grid. */
+const REACH = 8;
+/** More nodes than this are not searched: the runs are drawn as plain elbows. */
+const MOST_NODES = 6_000_000;
+
+export interface Grid {
+  xs: Int32Array;
+  ys: Int32Array;
+  /** node number of a column and row: `row * columns + column` */
+  columns: number;
+  rows: number;
+  /** per node, the part that covers it: 0 none, -1 several, else its number in `parts` plus one */
+  covered: Int32Array;
+  parts: ReadonlyMap<string, number>;
+  /** per node, extra cost per unit of length */
+  soft: Float32Array;
+}
+
+function lines(spans: readonly (readonly [number, number])[], extra: readonly number[]): Int32Array {
+  const found = new Set<number>(extra);
+  for (const [from, to] of spans)
+    for (let at = Math.ceil(from / MODULE) * MODULE - REACH * MODULE; at <= to + REACH * MODULE; at += MODULE) found.add(at);
+  return Int32Array.from(found).sort();
+}
+
+/** Index of the first line at or after a coordinate. */
+export function lineAt(list: Int32Array, value: number): number {
+  let low = 0;
+  let high = list.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (list[middle]! < value) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
+/** Joins spans that touch, so that a long part gives its lines once. */
+function merged(spans: [number, number][]): [number, number][] {
+  const sorted = [...spans].sort((a, b) => a[0] - b[0] || a[1] - b[1]);
+  const out: [number, number][] = [];
+  for (const [from, to] of sorted) {
+    const last = out.at(-1);
+    if (last && from <= last[1]) last[1] = Math.max(last[1], to);
+    else out.push([from, to]);
+  }
+  return out;
+}
+
+/** The grid for these parts and runs, or null where it would be too large to search. */
+export function buildGrid(obstacles: readonly Obstacle[], requests: readonly RouteRequest[], softs: readonly Soft[]): Grid | null {
+  const ends = requests.flatMap((request) => [request.from, request.to]);
+  const xs = lines(merged([...obstacles.map((o): [number, number] => [o.x, o.x + o.width]), ...ends.map((e): [number, number] => [e.x, e.x])]), ends.map((e) => e.x));
+  const ys = lines(merged([...obstacles.map((o): [number, number] => [o.y, o.y + o.height]), ...ends.map((e): [number, number] => [e.y, e.y])]), ends.map((e) => e.y));
+  const columns = xs.length;
+  const rows = ys.length;
+  if (columns * rows > MOST_NODES) return null;
+  const grid: Grid = {
+    xs,
+    ys,
+    columns,
+    rows,
+    covered: new Int32Array(columns * rows),
+    parts: new Map(obstacles.map((obstacle, i) => [obstacle.id, i + 1])),
+    soft: new Float32Array(columns * rows),
+  };
+  const within = (box: Box, tell: (node: number) => void) => {
+    const [left, right] = [lineAt(xs, box.x), lineAt(xs, box.x + box.width + 1) - 1];
+    const [top, bottom] = [lineAt(ys, box.y), lineAt(ys, box.y + box.height + 1) - 1];
+    for (let row = top; row <= bottom; row++) for (let column = left; column <= right; column++) tell(row * columns + column);
+  };
+  obstacles.forEach((box, i) =>
+    within(box, (node) => {
+      grid.covered[node] = grid.covered[node] === 0 ? i + 1 : -1;
+    }),
+  );
+  for (const box of softs)
+    within(box, (node) => {
+      grid.soft[node]! += box.cost;
+    });
+  return grid;
+}

@@ -1,0 +1,185 @@
+import { byCode } from '../document/schema';
+import { MODULE, type Side } from '../symbols/types';
+import { buildGrid, type Grid, type Obstacle, type RouteEnd, type RouteRequest, type Soft } from './route-grid';
+import { Search, edgeFrom, emptyOccupancy, nodeAt, toPoints, type Occupancy } from './route-search';
+import type { Point } from './scene';
+
+/**
+ * The router: every run on its own way round the parts, the same for the same input. Short and straight runs go first,
+ * then each that crosses others may look once more for a better way.
+ */
+
+interface Routed {
+  request: RouteRequest;
+  net: number;
+  nodes: number[] | null;
+  cost: number;
+}
+
+/** How often all runs may look for a better way. */
+const ROUNDS = 2;
+
+const SPAN = (request: RouteRequest): number => Math.abs(request.from.x - request.to.x) + Math.abs(request.from.y - request.to.y);
+const isStraight = ({ from, to }: RouteRequest): boolean => from.x === to.x || from.y === to.y;
+
+/** The order in which runs are routed: those that can be straight, then by length, then by id. */
+const inOrder = (a: RouteRequest, b: RouteRequest): number =>
+  Number(isStraight(b)) - Number(isStraight(a)) || SPAN(a) - SPAN(b) || byCode(a.id, b.id);
+
+/** A terminal's own sides first, then the others. */
+const anySide = (end: RouteEnd): Side[] => [...new Set<Side>([...end.sides, 'right', 'left', 'down', 'up'])];
+
+class Router {
+  private readonly occupancy: Occupancy;
+  private readonly search: Search;
+  private readonly byNet = new Map<number, Routed[]>();
+
+  constructor(
+    private readonly grid: Grid,
+    private readonly terminals: ReadonlyMap<number, number>,
+  ) {
+    this.occupancy = emptyOccupancy(grid);
+    this.search = new Search(grid, this.occupancy);
+    for (const [node, net] of terminals) this.occupancy.corner[node] = net;
+  }
+
+  route(routed: Routed): void {
+    const others = this.byNet.get(routed.net) ?? [];
+    const found = this.look(routed, others.length > 0);
+    routed.nodes = found?.nodes ?? null;
+    routed.cost = found?.cost ?? Infinity;
+    others.push(routed);
+    this.byNet.set(routed.net, others);
+    this.mark(routed);
+  }
+
+  /** The best way by the terminals' own sides; where those are taken, by any side. */
+  private look({ request, net }: Routed, shares: boolean): { nodes: number[]; cost: number } | null {
+    const { from, to } = request;
+    return (
+      this.search.find(from, to, net, shares) ??
+      this.search.find({ ...from, sides: anySide(from) }, { ...to, sides: anySide(to) }, net, shares)
+    );
+  }
+
+  /** Takes a run off the grid, looks again, and keeps the better of the two ways. */
+  improve(routed: Routed): boolean {
+    const { nodes } = routed;
+    if (!nodes) return false;
+    this.lift(routed);
+    const found = this.look(routed, this.byNet.get(routed.net)!.length > 1);
+    const better = found !== null && found.nodes.join() !== nodes.join();
+    if (better) Object.assign(routed, found);
+    this.mark(routed);
+    return better;
+  }
+
+  crossings(routed: Routed): number {
+    let count = 0;
+    for (const node of routed.nodes ?? []) {
+      const [level, upright] = [this.occupancy.level[node]!, this.occupancy.upright[node]!];
+      if (level !== 0 && upright !== 0 && level !== upright) count++;
+    }
+    return count;
+  }
+
+  private mark(routed: Routed): void {
+    this.eachStep(routed, (node, edge, level, bend) => {
+      if (edge >= 0) (level ? this.occupancy.right : this.occupancy.down)[edge] = routed.net;
+      if (bend) this.occupancy.corner[node] = routed.net;
+      else (level ? this.occupancy.level : this.occupancy.upright)[node] = routed.net;
+    });
+  }
+
+  /** Clears what a run alone stood on; what others of its net share is set again. */
+  private lift(routed: Routed): void {
+    this.eachStep(routed, (node, edge, level) => {
+      if (edge >= 0) (level ? this.occupancy.right : this.occupancy.down)[edge] = 0;
+      if (this.occupancy.corner[node] === routed.net) this.occupancy.corner[node] = this.terminals.get(node) ?? 0;
+      if (this.occupancy.level[node] === routed.net) this.occupancy.level[node] = 0;
+      if (this.occupancy.upright[node] === routed.net) this.occupancy.upright[node] = 0;
+    });
+    for (const other of this.byNet.get(routed.net)!) if (other !== routed) this.mark(other);
+  }
+
+  /** Each node of a way with the edge that leaves it; ends and corners are told as bends. */
+  private eachStep(routed: Routed, tell: (node: number, edge: number, level: boolean, bend: boolean) => void): void {
+    const nodes = routed.nodes ?? [];
+    let before = -1;
+    for (let i = 0; i < nodes.length; i++) {
+      const node = nodes[i]!;
+      const next = nodes[i + 1];
+      if (next === undefined) {
+        tell(node, -1, false, true);
+        return;
+      }
+      const direction = next === node + 1 ? 1 : next === node - 1 ? 3 : next > node ? 2 : 0;
+      tell(node, edgeFrom(this.grid, node, direction), direction % 2 === 1, i === 0 || direction !== before);
+      before = direction;
+    }
+  }
+}
+
+const STEP: Record<Side, Point> = { up: { x: 0, y: -1 }, down: { x: 0, y: 1 }, left: { x: -1, y: 0 }, right: { x: 1, y: 0 } };
+
+/** The plain way, taken only where no free one exists: out of both terminals and square across. */
+export function elbow(from: RouteEnd, to: RouteEnd): Point[] {
+  const [a, b] = [from.sides[0] ?? 'up', to.sides[0] ?? 'up'];
+  const p = { x: from.x + STEP[a].x * MODULE, y: from.y + STEP[a].y * MODULE };
+  const q = { x: to.x + STEP[b].x * MODULE, y: to.y + STEP[b].y * MODULE };
+  const corner = a === 'up' || a === 'down' ? { x: q.x, y: p.y } : { x: p.x, y: q.y };
+  const points: Point[] = [];
+  for (const { x, y } of [from, p, corner, q, to]) {
+    const [before, last] = [points.at(-2), points.at(-1)];
+    if (last && last.x === x && last.y === y) continue;
+    if (before && last && ((before.x === last.x && last.x === x) || (before.y === last.y && last.y === y))) points.pop();
+    points.push({ x, y });
+  }
+  return points.length > 1 ? points : [{ x: from.x, y: from.y }, { x: to.x, y: to.y }];
+}
+
+export interface Routes {
+  points: Map<string, Point[]>;
+  /** ids of runs for which no free way was found: drawn as elbows */
+  forced: string[];
+}
+
+/** Routes all runs round all parts. Pure; the order of the arguments' lists does not matter. */
+export function routeAll(requests: readonly RouteRequest[], obstacles: readonly Obstacle[], softs: readonly Soft[] = []): Routes {
+  const sorted = [...requests].sort(inOrder);
+  const result: Routes = { points: new Map(), forced: [] };
+  const grid = buildGrid(obstacles, requests, softs);
+  const numbers = new Map<string, number>();
+  for (const net of [...new Set(requests.map((request) => request.net))].sort(byCode)) numbers.set(net, numbers.size + 1);
+  const all = sorted.map((request): Routed => ({ request, net: numbers.get(request.net)!, nodes: null, cost: Infinity }));
+  if (grid) {
+    const router = new Router(grid, terminalNodes(grid, all));
+    for (const routed of all) router.route(routed);
+    for (let round = 0; round < ROUNDS; round++) {
+      let changed = false;
+      for (const routed of all) if (router.crossings(routed) > 0) changed = router.improve(routed) || changed;
+      if (!changed) break;
+    }
+  }
+  for (const { request, nodes } of all) {
+    if (nodes) result.points.set(request.id, toPoints(grid!, nodes));
+    else {
+      result.points.set(request.id, elbow(request.from, request.to));
+      result.forced.push(request.id);
+    }
+  }
+  result.forced.sort(byCode);
+  return result;
+}
+
+/** Terminals are corners from the start: no run of another net passes over one. A terminal of several nets belongs to none. */
+function terminalNodes(grid: Grid, all: readonly Routed[]): Map<number, number> {
+  const nodes = new Map<number, number>();
+  for (const { request, net } of all)
+    for (const end of [request.from, request.to]) {
+      const node = nodeAt(grid, end);
+      const before = nodes.get(node);
+      nodes.set(node, before === undefined || before === net ? net : -1);
+    }
+  return nodes;
+}
