@@ -5,6 +5,7 @@ import { backupLoad } from '../calculations/backup-load';
 import type { SurveyRoom } from '../document/schema';
 import { OUTLET_WATTS } from './drafting/assumptions';
 import { backedLoads } from './drafting/backup-size';
+import { isBackup, type WayPlan } from './drafting/plan';
 import { planHome, type HomeOptions } from './drafting/plan-home';
 import { soundRooms } from './check';
 
@@ -70,7 +71,9 @@ export function surveyTotals(rooms: readonly SurveyRoom[], options: HomeOptions)
   const amps = (watts: number) => watts / options.supply.voltage;
   const byRoom = rooms.map((room): RoomTotals => {
     const { watts: backupWatts, va: backupVa } = backupLoad(backedLoads([room]));
-    const ways = plan.ways.flatMap(({ segments }, i) => (segments.some((segment) => segment.room.id === room.id) ? [i + 1] : []));
+    const reached = (way: WayPlan) => way.segments.some((segment) => segment.room.id === room.id);
+    // The feed of the inverter stands between the mains ways and the backed-up ones, and has a number too.
+    const ways = plan.ways.flatMap((way, i) => (reached(way) ? [i + (isBackup(way) ? 2 : 1)] : []));
     const watts = connectedWatts(room);
     return { room: room.id, waits: !counted.has(room.id), watts, amps: amps(watts), backupWatts, backupVa, ways };
   });

@@ -1,17 +1,19 @@
-import { sizeCable } from '../../calculations/size-cable';
+import { sizeCable, type CableSize } from '../../calculations/size-cable';
 import { LENGTH, POWER_FACTOR, ratingFor } from './assumptions';
 import type { BackupSize } from './backup-size';
 import { BACKUP_BOARD, BOARD, drawBars, drawGroup, type Pair } from './house';
 import type { WayBars } from './draw-way';
 import { HOUSE, groupIds } from './ids';
-import { BEFORE_BACKUP, type RunSize } from './size-run';
+import { BEFORE_BACKUP } from './size-run';
 import type { Sketch } from './sketch';
+
+type CoreSize = Pick<CableSize, 'csaMm2' | 'cpcMm2'>;
 
 /** The two-pole breaker of the inverter's feed, and the run to it. */
 export interface FeedPlan {
   ratingA: number;
   curve: 'B' | 'C';
-  size: RunSize;
+  size: CoreSize;
 }
 
 /**
@@ -103,7 +105,7 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
   const outputA = ratingFor(size.va / supply.voltage, practice.breakerRatingsA.value);
   sketch.part({ id: HOUSE.output, kind: 'mcb', label: 'Backup output', place, poles: 2, rating: outputA, curve: 'C', icn });
 
-  const run = (id: string, runSize: RunSize) =>
+  const run = (id: string, runSize: CoreSize) =>
     sketch.cable({ id, csa: runSize.csaMm2, cpc: runSize.cpcMm2, material: draft.material, insulation: draft.insulation, method: draft.method, length: LENGTH.boardToInverter, cores: 3 });
   const feedRun = run('inverter-feed.run', feed.size);
   sketch.wire(need.from.line, [HOUSE.feed, '1'], 'line');
@@ -135,7 +137,7 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
   });
 }
 
-function outputRun(sketch: Sketch, size: BackupSize, ratingA: number): RunSize {
+function outputRun(sketch: Sketch, size: BackupSize, ratingA: number): CoreSize {
   const { practice, supply, ambient } = sketch;
   const { draft } = practice;
   const found = sizeCable({

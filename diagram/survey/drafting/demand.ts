@@ -1,18 +1,9 @@
+import { demandGroup } from '../../calculations/demand-group';
 import { maximumDemand, type Demand, type DemandItem } from '../../calculations/maximum-demand';
 import type { SurveyRoom } from '../../document/schema';
 import type { DemandGroup, Practice } from '../../practices/types';
 import { OUTLET_WATTS, POWER_FACTOR, startsMotor } from './assumptions';
 import type { WayPlan } from './plan';
-
-/** Groups of the allowances by what people call an appliance; all else is heating and power. */
-const GROUP_WORDS: readonly (readonly [DemandGroup, RegExp])[] = [
-  ['cooker', /cooker|oven|hob|stove|range|tandoor/i],
-  ['instant-water', /shower|instant|tap/i],
-  ['thermostatic-water', /geyser|boiler|water|immersion|cylinder/i],
-  ['storage-heating', /storage|floor heat|underfloor/i],
-];
-
-export const demandGroup = (what: string): DemandGroup => GROUP_WORDS.find(([, words]) => words.test(what))?.[0] ?? 'heating-power';
 
 const item = (group: DemandGroup, watts: number, voltage: number, pf: number): DemandItem => ({ group, watts, currentA: watts / (voltage * pf) });
 

@@ -59,10 +59,10 @@ function removeRun(sketch: Sketch, line: Wire): void {
   if (sketch.find(from)?.kind === 'mcb' && sketch.wiresAt(line.from).length === 0) sketch.change<'mcb'>(from, { spare: true });
 }
 
-/** Takes a load off its way. The part is gone from the sketch until it is drawn anew. */
+/** Takes a load off its way. It is lifted from the sketch until it is drawn again. */
 export function detach(sketch: Sketch, load: string): void {
   const control = sketch.arriving([load, 'L'])?.from[0];
   for (const mark of ['L', 'N', 'E']) bridge(sketch, [load, mark]);
-  sketch.removePart(load);
+  sketch.lift(load);
   if (control !== undefined) removeControl(sketch, control);
 }

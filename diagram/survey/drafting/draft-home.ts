@@ -18,7 +18,7 @@ export function breakingCapacity({ voltage, zln }: Supply, { draft, breakingCapa
 }
 
 /** The nth group of mains ways at the board. */
-export const mainsGroup = (n: number, several: boolean, ratingA: number, icn: number, intake: string): GroupNeed => ({
+const mainsGroup = (n: number, several: boolean, ratingA: number, icn: number, intake: string): GroupNeed => ({
   side: 'mains',
   n,
   label: several ? `Mains ways ${n}` : 'Mains ways',

@@ -34,11 +34,11 @@ function startWay(sketch: Sketch, way: WayPlan, bars: WayBars): Taps {
   return { line: [id, '2'], neutral: sketch.nextOn(bars.neutralBar), earth: sketch.nextOn(bars.earthBar) };
 }
 
-/** The size of a way; a way that nothing on sale serves is drawn in its least size, and the examination says so. */
+/** The size of a way; a way that nothing on sale serves is drawn in the largest, and the examination says so. */
 const sizeOf = (sketch: Sketch, way: WayPlan): RunSize => {
   if (way.size) return way.size;
   const largest = sketch.practice.csaMm2[sketch.practice.csaMm2.length - 1]!;
-  return { csaMm2: largest, cpcMm2: sketch.practice.cpcMm2.value[largest] ?? largest };
+  return { csaMm2: largest, cpcMm2: sketch.practice.cpcMm2.value[largest] ?? largest, grouped: 1 };
 };
 
 function drawLamps(sketch: Sketch, way: WayPlan, from: Taps, boards: ReadonlyMap<string, string>): void {

@@ -3,13 +3,13 @@ import { findWays, type Way } from '../../terminals/ways';
 import { soundRooms } from '../check';
 import { drawnByPlace, drawnIn, type Drawn } from '../drawn';
 import { differenceOf, type Difference } from '../missing';
-import { LENGTH, OUTLET_WATTS } from './assumptions';
-import { sizeBackup } from './backup-size';
+import { LENGTH, OUTLET_WATTS, RCD_RATINGS, WAYS_PER_RCD } from './assumptions';
+import { hoursWanted, sizeBackup, type BackupSize } from './backup-size';
 import { drawBackupSource, planFeed } from './backup-source';
 import { detach } from './detach';
-import { breakingCapacity, mainsGroup } from './draft-home';
-import { drawOutlet, drawWay, outletPlace } from './draw-way';
-import { findGroups, roomiest, tapBeside, type Group } from './groups';
+import { breakingCapacity } from './draft-home';
+import { drawOutlet, drawWay, outletPlace, type WayBars } from './draw-way';
+import { canTapBeside, findGroups, roomiest, tapBeside, type Group } from './groups';
 import { BACKUP_BOARD, BOARD, drawGroup } from './house';
 import { HOUSE, breakerId, groupIds, roomKey } from './ids';
 import { drawNotices, drawPlaces, roomBoards, roomsWithSwitches } from './places';
@@ -34,37 +34,33 @@ const numberOf = (part: Part, room: SurveyRoom, what: string): number | undefine
 };
 
 /** Lamps or fans that change sides: taken off their way, to be drawn anew as they are. Those drawn by hand stay. */
-function moveSides(sketch: Sketch, room: SurveyRoom, what: 'lamp' | 'fan', parts: readonly Part[], count: number): { numbers: number[]; parts: Part[] } {
+function moveSides(sketch: Sketch, room: SurveyRoom, what: 'lamp' | 'fan', parts: readonly Part[], count: number): number[] {
   const drafted = parts.filter((part) => numberOf(part, room, what) !== undefined).slice(0, count);
   for (const part of drafted) detach(sketch, part.id);
-  return { numbers: drafted.map((part) => numberOf(part, room, what)!), parts: drafted };
+  return drafted.map((part) => numberOf(part, room, what)!);
 }
 
-/** What of a room is still to be drawn, and the parts that keep their values when drawn anew on the other side. */
-function wishFrom(sketch: Sketch, room: SurveyRoom, drawn: Drawn, difference: Difference): { wish: Wish; moved: Part[] } {
+/** What of a room is still to be drawn; lamps and fans that change sides are taken off their ways for it. */
+function wishFrom(sketch: Sketch, room: SurveyRoom, drawn: Drawn, difference: Difference): Wish {
   const onMains = <T extends Part>(all: readonly T[], kept: readonly T[]) => all.filter((part) => !kept.includes(part)).reverse();
   const lampsOut = moveSides(sketch, room, 'lamp', onMains(drawn.lamps, drawn.keptLamps), difference.lampsToBackup);
   const lampsBack = moveSides(sketch, room, 'lamp', [...drawn.keptLamps].reverse(), difference.lampsToMains);
   const fansOut = moveSides(sketch, room, 'fan', onMains(drawn.fans, drawn.keptFans), difference.fansToBackup);
   const fansBack = moveSides(sketch, room, 'fan', [...drawn.keptFans].reverse(), difference.fansToMains);
-  const busy = (moves: { numbers: number[] }[]) => new Set(moves.flatMap(({ numbers }) => numbers));
-  const fresh = (what: string, count: number, taken: Set<number>) =>
-    freeNumbers(sketch, room, what, count + taken.size).filter((n) => !taken.has(n)).slice(0, count);
-  const lamps = fresh('lamp', difference.lamps, busy([lampsOut, lampsBack]));
-  const fans = fresh('fan', difference.fans, busy([fansOut, fansBack]));
-  const heavy = fresh('heavy', difference.heavy.length, new Set());
+  const fresh = (what: string, count: number, taken: readonly number[] = []) =>
+    freeNumbers(sketch, room, what, count + taken.length).filter((n) => !taken.includes(n)).slice(0, count);
+  const lamps = fresh('lamp', difference.lamps, [...lampsOut, ...lampsBack]);
+  const fans = fresh('fan', difference.fans, [...fansOut, ...fansBack]);
+  const heavy = fresh('heavy', difference.heavy.length);
   return {
-    wish: {
-      room,
-      lamps: [...lamps.slice(difference.keptLamps), ...lampsBack.numbers],
-      fans: [...fans.slice(difference.keptFans), ...fansBack.numbers],
-      outlets: fresh('outlet', difference.outlets, new Set()),
-      heavy: difference.heavy.map((item, i) => ({ number: heavy[i]!, ...item })),
-      keptLamps: [...lamps.slice(0, difference.keptLamps), ...lampsOut.numbers],
-      keptFans: [...fans.slice(0, difference.keptFans), ...fansOut.numbers],
-      keptOutlet: difference.keptOutlet,
-    },
-    moved: [...lampsOut.parts, ...lampsBack.parts, ...fansOut.parts, ...fansBack.parts],
+    room,
+    lamps: [...lamps.slice(difference.keptLamps), ...lampsBack],
+    fans: [...fans.slice(difference.keptFans), ...fansBack],
+    outlets: fresh('outlet', difference.outlets),
+    heavy: difference.heavy.map((item, i) => ({ number: heavy[i]!, ...item })),
+    keptLamps: [...lamps.slice(0, difference.keptLamps), ...lampsOut],
+    keptFans: [...fans.slice(0, difference.keptFans), ...fansOut],
+    keptOutlet: difference.keptOutlet,
   };
 }
 
@@ -90,81 +86,59 @@ function hangOn(sketch: Sketch, doc: Installation, ways: readonly Way[], wish: W
   return { ...left, outlets };
 }
 
-/** One more rcd with bars beside one that is drawn. */
-function anotherGroup(sketch: Sketch, beside: Group, n: number): Group | null {
+/** One more rcd with bars beside one that is drawn; undefined where its feeders cannot be told. */
+function anotherGroup(sketch: Sketch, beside: Group): Group | undefined {
   const side = beside.backup ? 'backup' : 'mains';
   const { bars, rcd } = beside;
-  const from = tapBeside(sketch, rcd);
-  const place = rcd.place ?? bars.place;
-  if (!from) return null;
-  let number = n;
-  while (sketch.find(groupIds(side, number).rcd)) number++;
+  const from = tapBeside(sketch, beside);
+  if (!from) return undefined;
+  let n = 1;
+  while (sketch.find(groupIds(side, n).rcd)) n++;
   const run = sketch.arriving([bars.lineBar, '1'])?.cable;
-  const cable = run === undefined ? undefined : sketch.copyCable(run, `${groupIds(side, number).rcd}.run`);
-  const need = { ...mainsGroup(number, true, rcd.rating ?? 63, bars.icn, bars.place), side, rcdPlace: place, rcdBoard: rcd.board ?? BOARD, board: bars.board, ...(cable && { cable }) } as const;
-  const drawn = drawGroup(sketch, from, need);
-  return { rcd: sketch.find(groupIds(side, number).rcd) as Group['rcd'], backup: beside.backup, bars: drawn, ways: 0 };
+  const drawn = drawGroup(sketch, from, {
+    side,
+    n,
+    label: `${beside.backup ? 'Backup' : 'Mains'} ways ${n}`,
+    ratingA: rcd.rating ?? RCD_RATINGS[RCD_RATINGS.length - 1]!,
+    icn: bars.icn,
+    rcdPlace: rcd.place ?? bars.place,
+    rcdBoard: rcd.board ?? BOARD,
+    place: bars.place,
+    board: bars.board,
+    ...(run !== undefined && { cable: sketch.copyCable(run, `${groupIds(side, n).rcd}.run`) }),
+  });
+  return groupOf(sketch, drawn, side, n);
 }
 
-/** The backup source of a home that has none yet. @returns its groups of ways, none where it cannot be fed or sized */
-function firstBackup(sketch: Sketch, rooms: readonly SurveyRoom[], mains: readonly Group[], ways: number, intake: string, hours: number): Group[] {
-  const size = sizeBackup(rooms, hours, sketch.practice, DRAFT_AMBIENT);
-  const beside = mains[0];
-  const from = size && beside && tapBeside(sketch, beside.rcd);
-  if (!from) return [];
+const groupOf = (sketch: Sketch, bars: WayBars, side: 'mains' | 'backup', n: number): Group => ({
+  rcd: sketch.find(groupIds(side, n).rcd) as Group['rcd'],
+  backup: side === 'backup',
+  bars,
+  ways: 0,
+});
+
+/** The backup source of a home that has none yet. @returns its groups of ways */
+function firstBackup(sketch: Sketch, size: BackupSize, beside: Group, ways: number, intake: string, hours: number): Group[] {
+  const from = tapBeside(sketch, beside)!;
   const behindRcd = sketch.supply.system === 'TT' || sketch.find(HOUSE.mainRcd) !== undefined;
   const feed = planFeed(sketch, size, behindRcd) ?? planFeed(sketch, size, true)!;
   const icn = breakingCapacity(sketch.supply, sketch.practice);
-  const drawn = drawBackupSource(sketch, { size, feed, from, intake, hours, groups: Math.ceil(ways / 9), icn });
-  return drawn.map((bars, i) => ({ rcd: sketch.find(groupIds('backup', i + 1).rcd) as Group['rcd'], backup: true, bars, ways: 0 }));
+  const drawn = drawBackupSource(sketch, { size, feed, from, intake, hours, groups: Math.ceil(ways / WAYS_PER_RCD), icn });
+  return drawn.map((bars, i) => groupOf(sketch, bars, 'backup', i + 1));
 }
 
 /** Draws ways at the group with most room, with further rcds as they fill. */
 function drawAt(sketch: Sketch, ways: readonly WayPlan[], groups: Group[], boards: ReadonlyMap<string, string>): void {
   for (const way of ways) {
-    const first = groups[0];
     let group = roomiest(groups);
-    if (!group && first) {
-      group = anotherGroup(sketch, first, groups.length + 1) ?? first;
-      if (group !== first) groups.push(group);
+    if (!group) {
+      const another = anotherGroup(sketch, groups[0]!);
+      if (another) groups.push(another);
+      group = another ?? groups[0]!;
     }
-    if (!group) return;
     drawWay(sketch, way, group.bars, boards);
     group.ways += 1;
   }
-}
-
-/**
- * Draws what the survey has and the drawing has not: on ways that have room for it, else on new ones. What is drawn stays,
- * but for lamps and fans that the survey moves between mains and backup.
- */
-export function extendHome(sketch: Sketch, doc: Installation, options: HomeOptions): void {
-  const survey = soundRooms(doc.survey ?? [], options);
-  const places = drawnByPlace(doc);
-  const supply: WaySupply = { practice: sketch.practice, voltage: sketch.supply.voltage, ambientC: DRAFT_AMBIENT };
-  const groups = findGroups(doc, sketch);
-  const hasInverter = doc.parts.some(({ kind }) => kind === 'inverter');
-  const canKeep = !hasInverter || groups.some(({ backup }) => backup);
-  const changed = survey.flatMap((room) => {
-    const difference = reachable(differenceOf(room, drawnIn(places, room.id)), canKeep);
-    return isToDraw(difference) || !sketch.hasPlace(room.id) ? [{ room, difference }] : [];
-  });
-  if (changed.length === 0) return;
-  const intake = drawPlaces(sketch, survey);
-  const ways = findWays(doc);
-  const wishes = changed.map(({ room, difference }) => wishFrom(sketch, room, drawnIn(places, room.id), difference));
-  const left = wishes.map(({ wish }) => hangOn(sketch, doc, ways, wish, supply));
-  const planned = planWays(left, supply, (way) => sketch.find(breakerId(way)) !== undefined);
-  const boards = roomBoards(sketch, roomsWithSwitches(planned));
-  const mains = groups.filter(({ backup }) => !backup);
-  drawAt(sketch, planned.filter((way) => !isBackup(way)), mains, boards);
-  const kept = planned.filter(isBackup);
-  const hours = Math.max(options.hoursWanted, ...survey.map((room) => room.hours));
-  const backup = hasInverter || kept.length === 0 ? groups.filter((group) => group.backup) : firstBackup(sketch, survey, mains, kept.length, intake, hours);
-  drawAt(sketch, kept, backup, boards);
-  for (const part of wishes.flatMap(({ moved }) => moved)) sketch.restore(part);
-  const source = doc.parts.find(({ kind }) => kind === 'inverter') ?? sketch.find(HOUSE.inverter);
-  if (source) drawNotices(sketch, intake, hasInverter ? [] : [BOARD, BACKUP_BOARD], source.ref ?? 'the inverter');
 }
 
 const isToDraw = (difference: Difference): boolean =>
@@ -173,8 +147,48 @@ const isToDraw = (difference: Difference): boolean =>
   difference.lampsToBackup + difference.fansToBackup + difference.lampsToMains + difference.fansToMains > 0;
 
 /** Without bars to hang backed-up ways on, what should stay on is left to be drawn by hand. */
-function reachable(difference: Difference, canKeep: boolean): Difference {
+function drawable(difference: Difference, canKeep: boolean): Difference {
   if (canKeep) return difference;
   const { lamps, fans, keptLamps, keptFans } = difference;
   return { ...difference, lamps: lamps - keptLamps, fans: fans - keptFans, keptLamps: 0, keptFans: 0, keptOutlet: false, lampsToBackup: 0, fansToBackup: 0 };
+}
+
+/**
+ * Draws what the survey has and the drawing has not: on ways that have room for it, else on new ones. What is drawn stays,
+ * but for lamps and fans that the survey moves between mains and backup. A drawing whose board cannot be told (no 30 mA rcd
+ * with bars behind it) is left as it is.
+ */
+export function extendHome(sketch: Sketch, doc: Installation, options: HomeOptions): void {
+  const { practice, supply } = sketch;
+  const survey = soundRooms(doc.survey ?? [], options);
+  const groups = findGroups(doc, sketch);
+  const mains = groups.filter(({ backup }) => !backup);
+  if (mains.length === 0) return;
+  const inverter = doc.parts.find(({ kind }) => kind === 'inverter');
+  const hours = hoursWanted(survey, options.hoursWanted);
+  const size = inverter ? null : sizeBackup(survey, hours, practice, DRAFT_AMBIENT);
+  const canKeep = inverter ? mains.length < groups.length : size !== null && canTapBeside(sketch, mains[0]!);
+
+  const places = drawnByPlace(doc);
+  const changed = survey.flatMap((room) => {
+    const drawn = drawnIn(places, room.id);
+    const difference = drawable(differenceOf(room, drawn), canKeep);
+    return isToDraw(difference) || !sketch.hasPlace(room.id) ? [{ room, drawn, difference }] : [];
+  });
+  if (changed.length === 0) return;
+  const intake = drawPlaces(sketch, survey);
+  const ways = findWays(doc);
+  const waySupply: WaySupply = { practice, voltage: supply.voltage, ambientC: DRAFT_AMBIENT };
+  const wishes = changed.map(({ room, drawn, difference }) => wishFrom(sketch, room, drawn, difference));
+  const left = wishes.map((wish) => hangOn(sketch, doc, ways, wish, waySupply));
+  const planned = planWays(left, waySupply, (way) => sketch.find(breakerId(way)) !== undefined);
+  const kept = planned.filter(isBackup);
+  const boards = roomBoards(sketch, roomsWithSwitches(planned));
+  drawAt(sketch, planned.filter((way) => !isBackup(way)), mains, boards);
+  if (kept.length > 0) {
+    const backup = size ? firstBackup(sketch, size, mains[0]!, kept.length, intake, hours) : groups.filter((group) => group.backup);
+    drawAt(sketch, kept, backup, boards);
+  }
+  const source = inverter ?? sketch.find(HOUSE.inverter);
+  if (source) drawNotices(sketch, intake, inverter ? [] : [BOARD, BACKUP_BOARD], source.ref ?? 'the inverter');
 }

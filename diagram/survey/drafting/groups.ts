@@ -1,9 +1,9 @@
-import type { End, Installation, PartOf } from '../../document/schema';
+import type { End, Installation, PartOf, Wire } from '../../document/schema';
 import { isBar } from '../../document/kinds';
 import { traceFeeds } from '../../terminals/feeds';
-import { WAYS_PER_RCD } from './assumptions';
+import { RCD_RATINGS, WAYS_PER_RCD } from './assumptions';
 import type { WayBars } from './draw-way';
-import { drawBars, type Pair } from './house';
+import { BOARD, drawBars, type Pair } from './house';
 import { HOUSE } from './ids';
 import type { Sketch } from './sketch';
 
@@ -47,22 +47,33 @@ export function findGroups(doc: Installation, sketch: Sketch): Group[] {
 export const roomiest = (groups: readonly Group[]): Group | undefined =>
   groups.filter(({ ways }) => ways < WAYS_PER_RCD).sort((a, b) => a.ways - b.ways)[0];
 
-/**
- * A place to hang another feeder beside one that is drawn: the bars that feed it, or new bars put before it.
- * @returns null where its feeders cannot be told
- */
-export function tapBeside(sketch: Sketch, rcd: PartOf<'rcd'>): Pair | null {
+const isOnBar = (sketch: Sketch, { from }: Wire): boolean => isBar(sketch.find(from[0])!.kind);
+
+/** What feeds an rcd, where another feeder can be hung beside it; undefined where that cannot be told from the drawing. */
+function feedersOf(sketch: Sketch, rcd: PartOf<'rcd'>): { line: Wire; neutral: Wire; bars: boolean } | undefined {
   const line = sketch.arriving([rcd.id, '1']);
   const neutral = sketch.arriving([rcd.id, '3']);
-  if (!line || !neutral) return null;
-  const isOnBar = ({ from }: { from: End }) => isBar(sketch.find(from[0])!.kind);
-  if (isOnBar(line) && isOnBar(neutral)) return { line: sketch.nextOn(line.from[0]), neutral: sketch.nextOn(neutral.from[0]) };
-  if (isOnBar(line) || isOnBar(neutral) || rcd.place === undefined || sketch.find(HOUSE.lineBar)) return null;
-  const taps = drawBars(
-    sketch,
-    { line: line.from, neutral: neutral.from },
-    { line: HOUSE.lineBar, neutral: HOUSE.neutralBar, place: rcd.place, board: rcd.board ?? 'Board', ratingA: rcd.rating ?? 63 },
-  );
+  if (!line || !neutral || rcd.place === undefined) return undefined;
+  const bars = isOnBar(sketch, line);
+  const fits = bars === isOnBar(sketch, neutral) && (bars || !sketch.find(HOUSE.lineBar));
+  return fits ? { line, neutral, bars } : undefined;
+}
+
+export const canTapBeside = (sketch: Sketch, { rcd }: Group): boolean => feedersOf(sketch, rcd) !== undefined;
+
+/** A place to hang another feeder beside a group that is drawn: the bars that feed it, or new bars put before it. */
+export function tapBeside(sketch: Sketch, { rcd }: Group): Pair | undefined {
+  const feeders = feedersOf(sketch, rcd);
+  if (!feeders) return undefined;
+  const { line, neutral, bars } = feeders;
+  if (bars) return { line: sketch.nextOn(line.from[0]), neutral: sketch.nextOn(neutral.from[0]) };
+  const taps = drawBars(sketch, { line: line.from, neutral: neutral.from }, {
+    line: HOUSE.lineBar,
+    neutral: HOUSE.neutralBar,
+    place: rcd.place!,
+    board: rcd.board ?? BOARD,
+    ratingA: rcd.rating ?? RCD_RATINGS[RCD_RATINGS.length - 1]!,
+  });
   const moved = taps();
   sketch.moveStart(line.id, moved.line);
   sketch.moveStart(neutral.id, moved.neutral);

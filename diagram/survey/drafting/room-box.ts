@@ -31,7 +31,7 @@ export function cableOf(sketch: Sketch, id: string, size: RunSize, length: numbe
     insulation: draft.insulation,
     method: draft.method,
     length,
-    ...(options.fromBoard && draft.grouped > 1 && { grouped: draft.grouped }),
+    ...(options.fromBoard && size.grouped > 1 && { grouped: size.grouped }),
     cores: options.cores ?? 3,
   });
 }

@@ -30,13 +30,6 @@ function lastSwitch(doc: Installation, ids: ReadonlySet<string>, room: string, s
   return (fed.find((part) => !leads(part, () => true)) ?? fed.find((part) => leads(part, (_, place) => place !== room)))?.id;
 }
 
-/** The size of the cable that a wire at a part lies in. */
-function sizeAt(doc: Installation, part: string): RunSize | undefined {
-  const wire = doc.wires.find(({ from, to, cable }) => cable !== undefined && (from[0] === part || to[0] === part));
-  const cable = doc.cables.find(({ id }) => id === wire?.cable);
-  return cable && { csaMm2: cable.csa, cpcMm2: cable.cpc ?? cable.csa };
-}
-
 /**
  * The box of a way of lamps that has room for `watts` more in this room, mains or backup.
  * @returns undefined where the room has none: the addition needs a way of its own
@@ -53,7 +46,8 @@ export function openBox(sketch: Sketch, doc: Installation, ways: readonly Way[],
     const control = lastSwitch(doc, ids, room.id, sketch);
     const neutral = jointOf(doc, ids, room.id, 'neutral', sketch);
     const earth = jointOf(doc, ids, room.id, 'earth', sketch);
-    const size = neutral && sizeAt(doc, neutral);
+    const run = neutral && sketch.arrivingAt(neutral)?.cable;
+    const size = run && sketch.sizeOf(run);
     const board = control && sketch.find(control)?.board;
     if (!control || !neutral || !earth || !size || !board) continue;
     return RoomBox.reopen(sketch, room, board, size, [control, '1'], { neutral, earth });

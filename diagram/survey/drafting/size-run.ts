@@ -5,6 +5,8 @@ import type { Curve, Practice } from '../../practices/types';
 export interface RunSize {
   csaMm2: number;
   cpcMm2: number;
+  /** loaded circuits that leave the board together, this one counted */
+  grouped: number;
 }
 
 /**
@@ -29,23 +31,30 @@ interface Need {
   leastMm2: number;
 }
 
-/** The cable of a way behind an rcd, which clears a fault to earth: capacity and volt drop decide. Null where none on sale will do. */
+/**
+ * The cable of a way behind an rcd, which clears a fault to earth: capacity and volt drop decide. One that is too heavy to
+ * lie with others is run apart. Null where none on sale will do.
+ */
 export function sizeRun({ practice, voltage, ambientC, ratingA, curve, amps, lengthM, use, leastMm2 }: Need): RunSize | null {
   const { draft, voltDrop } = practice;
   const base = use === 'other' ? voltDrop.other.value : voltDrop.lighting.value;
   const limit = dropLimitPercent(base, lengthM, voltDrop.longRun.value);
-  return sizeCable({
-    practice,
-    device: { kind: 'mcb', ratingA, curve },
-    ibA: amps,
-    method: draft.method,
-    material: draft.material,
-    insulation: draft.insulation,
-    ambientC,
-    grouped: draft.grouped,
-    lengthM,
-    voltage,
-    dropLimitPercent: limit - SPARE - (use === 'backup' ? BEFORE_BACKUP.feed + BEFORE_BACKUP.output : 0),
-    leastMm2,
-  });
+  const sized = (grouped: number): RunSize | null => {
+    const found = sizeCable({
+      practice,
+      device: { kind: 'mcb', ratingA, curve },
+      ibA: amps,
+      method: draft.method,
+      material: draft.material,
+      insulation: draft.insulation,
+      ambientC,
+      grouped,
+      lengthM,
+      voltage,
+      dropLimitPercent: limit - SPARE - (use === 'backup' ? BEFORE_BACKUP.feed + BEFORE_BACKUP.output : 0),
+      leastMm2,
+    });
+    return found && { csaMm2: found.csaMm2, cpcMm2: found.cpcMm2, grouped };
+  };
+  return sized(draft.grouped) ?? sized(1);
 }

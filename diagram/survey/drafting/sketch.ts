@@ -31,6 +31,7 @@ export class Sketch {
   private readonly notices: Notice[];
   private readonly refs = new Set<string>();
   private readonly conductors = new Map<string, Set<string>>();
+  private readonly lifted = new Map<string, Part>();
   private readonly lastTerminal = new Map<string, number>();
 
   constructor(
@@ -82,13 +83,24 @@ export class Sketch {
     if (!this.notices.some(({ place, board }) => place === notice.place && board === notice.board)) this.notices.push(notice);
   }
 
-  /** Draws a part; bars, joints and the supply carry no designation unless `ref` is given. */
-  part(part: NewPart, ref: string | null = this.nextRef(REF_LETTER[part.kind])): string {
+  /**
+   * Draws a part with the next free designation; `ref` names another one, null leaves it without, as joints are. A part that
+   * was lifted comes back as it was.
+   */
+  part(part: NewPart, ref?: string | null): string {
     const { id, kind, ...rest } = part;
     if (this.parts.has(id)) throw new Error(`the sketch has a part ${id} already`);
-    this.parts.set(id, { id, kind, ...(ref !== null && { ref }), ...rest } as Part);
-    if (ref) this.refs.add(ref);
+    const lifted = this.lifted.get(id);
+    const name = ref === undefined && !lifted ? this.nextRef(REF_LETTER[kind]) : ref;
+    this.parts.set(id, lifted ?? ({ id, kind, ...(name && { ref: name }), ...rest } as Part));
+    this.lifted.delete(id);
     return id;
+  }
+
+  /** Takes a part off the sheet, to be drawn again elsewhere: its designation and values are kept for it. */
+  lift(id: string): void {
+    this.lifted.set(id, this.parts.get(id)!);
+    this.parts.delete(id);
   }
 
   /** Changes fields of a part that is drawn. */
@@ -133,9 +145,9 @@ export class Sketch {
   }
 
   /** mm2 of a cable's cores; undefined for one that is not drawn. */
-  sizeOf(cable: string): { csaMm2: number; cpcMm2: number } | undefined {
+  sizeOf(cable: string): { csaMm2: number; cpcMm2: number; grouped: number } | undefined {
     const found = this.cables.get(cable);
-    return found && { csaMm2: found.csa, cpcMm2: found.cpc ?? found.csa };
+    return found && { csaMm2: found.csa, cpcMm2: found.cpc ?? found.csa, grouped: found.grouped ?? 1 };
   }
 
   getWire(id: string): Wire {
@@ -165,12 +177,6 @@ export class Sketch {
     let id = wanted;
     for (let n = 2; this.parts.has(id) || this.cables.has(id); n++) id = `${wanted}.${n}`;
     return id;
-  }
-
-  /** Puts a part back as it was before it was drawn anew. */
-  restore(part: Part): void {
-    this.parts.set(part.id, part);
-    if (part.ref) this.refs.add(part.ref);
   }
 
   removePart(id: string): void {
@@ -210,6 +216,11 @@ export class Sketch {
   /** The wire that arrives at a terminal from the side of the source. */
   arriving([part, mark]: End): Wire | undefined {
     return this.wiresAt([part, mark]).map((id) => this.wires.get(id)!).find(({ to }) => to[0] === part && to[1] === mark);
+  }
+
+  /** The wire that feeds a joint. */
+  arrivingAt(joint: string): Wire | undefined {
+    return this.wiresOn(joint).find(({ to }) => to[0] === joint);
   }
 
   /** The wires that go on from a terminal. */
