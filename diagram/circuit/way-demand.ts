@@ -1,0 +1,83 @@
+import { allowedA } from '../calculations/allowance';
+import { demandGroup } from '../calculations/demand-group';
+import { maximumDemand, type Demand, type DemandItem } from '../calculations/maximum-demand';
+import type { DemandGroup, Practice } from '../practices/types';
+import type { Drawn } from './drawn';
+
+/** What one way asks for, by itself. */
+export interface WayLoad {
+  /** id of the way's device */
+  device: string;
+  drawn: readonly Drawn[];
+  /** all of it at once, W and A */
+  watts: number;
+  amps: number;
+  /** after the diversity that the practice allows on one way */
+  demandWatts: number;
+  demandA: number;
+  /** false while a load of it has no watts in the drawing */
+  known: boolean;
+}
+
+/** A charger runs for hours at its current: it is counted whole, as storage heating is. */
+function groupOf({ part }: Drawn): DemandGroup {
+  if (part.kind === 'socket') return 'sockets';
+  if (part.kind === 'lamp' || part.kind === 'fan') return 'lighting';
+  return part.kind === 'inverter' ? 'storage-heating' : demandGroup(part.label ?? '');
+}
+
+const add = (list: readonly Drawn[], of: (each: Drawn) => number): number => list.reduce((sum, each) => sum + of(each), 0);
+
+function byGroup(drawn: readonly Drawn[]): Map<DemandGroup, Drawn[]> {
+  const groups = new Map<DemandGroup, Drawn[]>();
+  for (const each of drawn) groups.set(groupOf(each), [...(groups.get(groupOf(each)) ?? []), each]);
+  return groups;
+}
+
+/** The load of each way, by its device. */
+export function wayLoads(drawn: readonly Drawn[], practice: Practice): Map<string, WayLoad> {
+  const members = new Map<string, Drawn[]>();
+  for (const each of drawn) if (each.way !== null) members.set(each.way, [...(members.get(each.way) ?? []), each]);
+  const loads = new Map<string, WayLoad>();
+  for (const [device, list] of members) {
+    let demandA = 0;
+    let demandWatts = 0;
+    for (const [group, same] of byGroup(list)) {
+      const amps = add(same, (each) => each.amps);
+      const allowed = practice.wayDiversity.includes(group)
+        ? allowedA(same.map((each) => each.amps), practice.diversity[group].value, { perItem: group === 'cooker' })
+        : amps;
+      demandA += allowed;
+      demandWatts += amps > 0 ? (add(same, (each) => each.watts) * allowed) / amps : 0;
+    }
+    loads.set(device, {
+      device,
+      drawn: list,
+      watts: add(list, (each) => each.watts),
+      amps: add(list, (each) => each.amps),
+      demandWatts,
+      demandA,
+      known: list.every((each) => each.known),
+    });
+  }
+  return loads;
+}
+
+/** Entries of the demand sheet: the outlets of a way are one, as the table counts standard circuits; all else stands alone. */
+function itemsOf({ drawn }: WayLoad): DemandItem[] {
+  const items: DemandItem[] = [];
+  for (const [group, same] of byGroup(drawn)) {
+    const one = (list: readonly Drawn[]) => ({
+      group,
+      watts: add(list, (each) => each.watts),
+      currentA: add(list, (each) => each.amps),
+    });
+    if (group === 'sockets') items.push(one(same));
+    else for (const each of same) items.push(one([each]));
+  }
+  return items.filter(({ watts }) => watts > 0);
+}
+
+/** The demand of several ways together, after the practice's allowances, line by line. */
+export const demandOf = (ways: readonly WayLoad[], practice: Practice): Demand =>
+  maximumDemand(ways.flatMap(itemsOf), practice);

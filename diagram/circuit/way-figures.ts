@@ -1,0 +1,138 @@
+import type { Demand } from '../calculations/maximum-demand';
+import type { Part } from '../document/schema';
+import type { Practice } from '../practices/types';
+import type { Graph } from '../terminals/graph';
+import type { Section } from '../terminals/ways';
+import { listDrawn, type Drawn } from './drawn';
+import type { Earth } from './earth';
+import { workOutEarthPaths, type EarthPaths } from './earth-paths';
+import type { Evaluation } from './evaluate';
+import { sectionCables, type SectionCable } from './way-cables';
+import { demandOf, wayLoads, type WayLoad } from './way-demand';
+import { earthFault, externalOhm, timeLimit, type EarthFault } from './way-faults';
+import { workOutPaths, type Fed, type Paths } from './way-paths';
+
+/** What one overcurrent device and the cables behind it come to. */
+export interface WayFigures {
+  section: Section;
+  device: Part;
+  /** A, the device's rating; null where not given */
+  inA: number | null;
+  /** what draws by this device first of all: its own points, and the charger of an inverter behind it */
+  drawn: readonly Drawn[];
+  /** A and W, all that passes the device, after diversity; null while a load of it has no watts */
+  ibA: number | null;
+  demandWatts: number | null;
+  connectedWatts: number;
+  cables: readonly SectionCable[];
+  /** the load at which most volts are lost, with its limit; null where none can be reckoned */
+  worstDrop: { at: Drawn; fed: Fed; percent: number } | null;
+  /** the largest loop of a fault to earth on mains; null where nothing earthed is fed, or a value is missing */
+  fault: EarthFault | null;
+  faultAt: Drawn | null;
+}
+
+/** Everything the rules and the schedules read of a home in numbers; worked out once. */
+export interface Figures {
+  practice: Practice;
+  drawn: readonly Drawn[];
+  loads: ReadonlyMap<string, WayLoad>;
+  paths: Paths;
+  earth: EarthPaths;
+  /** by id of the device, for every section */
+  ways: ReadonlyMap<string, WayFigures>;
+  /** ids of the ways behind a device, itself among them when it is one */
+  waysBehind(device: string): readonly string[];
+  /** demand of all that passes a device, after diversity */
+  demandBehind(device: string): Demand;
+  /** demand of the home on mains */
+  demand: Demand;
+}
+
+export interface FiguresInput {
+  graph: Graph;
+  evaluation: Evaluation;
+  sections: readonly Section[];
+  earth: Earth;
+  practice: Practice;
+}
+
+function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, ReadonlySet<string>> {
+  const behind = new Map<string, Set<string>>();
+  for (const { way, lineDevices } of drawn) {
+    if (way === null) continue;
+    for (const device of lineDevices) behind.set(device, (behind.get(device) ?? new Set()).add(way));
+  }
+  return behind;
+}
+
+/** Works out the figures of a home from what is known of its wiring. */
+export function workOutFigures({ graph, evaluation, sections, earth, practice }: FiguresInput): Figures {
+  const { supply } = graph.document;
+  const drawn = listDrawn(graph, evaluation);
+  const loads = wayLoads(drawn, practice);
+  const joints = evaluation.evaluated.flatMap(({ crossed, lineLoops }) => [...crossed, ...lineLoops]);
+  const apart = new Set(joints.map(({ edge }) => edge));
+  const paths = workOutPaths({ graph, practice, drawn, loads, apart });
+  const earthPaths = workOutEarthPaths(graph, earth);
+  const behind = indexBehind(drawn);
+  const waysBehind = (device: string) => [...(behind.get(device) ?? [])].sort();
+  const together = (ways: readonly string[]) => demandOf(ways.map((id) => loads.get(id)!), practice);
+
+  const external = externalOhm(supply);
+  const zsOf = (each: Drawn): number | null => {
+    const r1 = paths.fed.get(each.part.id)?.r1;
+    const r2 = earthPaths.r2(graph.node(each.part.id, each.isPoint ? 'E' : 'in.E'));
+    if (external === undefined || r1 === undefined || r1 === null || r2 === null || each.source?.kind !== 'mains') return null;
+    return external + r1 + r2;
+  };
+
+  function figuresOf(section: Section): WayFigures {
+    const { device } = section;
+    const own = loads.get(device.id);
+    const members = own?.drawn ?? [];
+    const ids = waysBehind(device.id);
+    const one = ids.length === 1 && ids[0] === device.id ? own : undefined;
+    const known = ids.every((id) => loads.get(id)!.known);
+    const demand = one ?? together(ids);
+    let worstDrop: WayFigures['worstDrop'] = null;
+    let farthest: { at: Drawn; zs: number } | null = null;
+    for (const each of members) {
+      const fed = paths.fed.get(each.part.id);
+      if (each.isPoint && fed && fed.dropV !== null) {
+        const percent = (100 * fed.dropV) / supply.voltage;
+        if (!worstDrop || percent > worstDrop.percent) worstDrop = { at: each, fed, percent };
+      }
+      const zs = zsOf(each);
+      if (zs !== null && (!farthest || zs > farthest.zs)) farthest = { at: each, zs };
+    }
+    const withinS = timeLimit(practice, supply, device, members);
+    return {
+      section,
+      device,
+      inA: 'rating' in device ? (device.rating ?? null) : null,
+      drawn: members,
+      ibA: known ? demand.demandA : null,
+      demandWatts: known ? demand.demandWatts : null,
+      connectedWatts: ids.reduce((sum, id) => sum + loads.get(id)!.watts, 0),
+      cables: sectionCables(graph, practice, section, drawn),
+      worstDrop,
+      fault: farthest && earthFault(graph, practice, farthest.at, farthest.zs, withinS),
+      faultAt: farthest?.at ?? null,
+    };
+  }
+
+  const ways = new Map(sections.map((section) => [section.device.id, figuresOf(section)] as const));
+  const onMains = new Set(drawn.flatMap(({ way, source }) => (way !== null && source?.kind === 'mains' ? [way] : [])));
+  return {
+    practice,
+    drawn,
+    loads,
+    paths,
+    earth: earthPaths,
+    ways,
+    waysBehind,
+    demandBehind: (device) => together(waysBehind(device)),
+    demand: together([...onMains].sort()),
+  };
+}
