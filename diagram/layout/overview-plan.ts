@@ -20,6 +20,10 @@ export interface OverviewPlan {
   ways: readonly Way[];
   /** id of the place of each part shown in a room; '' for a room without a place */
   roomOf: Map<string, string>;
+  /** left edge and width of each room, by id of its place */
+  rooms: ReadonlyMap<string, { x: number; width: number }>;
+  /** parts between the column and the backup bar: inverters, batteries and their devices */
+  lane: ReadonlySet<string>;
   /** parts that stand under the rooms or in the lane */
   backupBoard: Set<string>;
   tray: Part[];
@@ -36,6 +40,8 @@ const fedFromBelow = (node: TreeNode): boolean => node.via !== null && node.part
 class Planner {
   readonly positions = new Map<string, Position>();
   readonly backupBoard = new Set<string>();
+  readonly roomSpans = new Map<string, { x: number; width: number }>();
+  readonly lane = new Set<string>();
   /** lowest line reached so far, and the levels at which feeders of inverters leave */
   private readonly feeders: { node: TreeNode; x: number; y: number }[] = [];
   private readonly finals: { node: TreeNode; x: number; y: number }[] = [];
@@ -144,6 +150,7 @@ class Planner {
       const room = placeRoom(entries, (node) => own.has(this.content.entryOf.get(node)!), Math.max(m(10), least));
       for (const [id, at] of room.positions) this.positions.set(id, { x: x + at.x, y: at.y, ...(at.turn && { turn: at.turn }) });
       for (const [way, axis] of room.ways) axes.set(way, x + axis);
+      this.roomSpans.set(place, { x, width: room.width });
       x += room.width + ROOM.gap;
     }
     this.right = x - ROOM.gap;
@@ -217,6 +224,7 @@ class Planner {
       const end = Math.max(x + m(13) + m(8) + outWidth, this.right + m(1) - m(3));
       const inverterX = Math.max(x + m(13), end - outWidth - m(8));
       this.positions.set(root.part.id, { x: inverterX, y: level - m(3) });
+      for (const node of [root, ...battery, ...inLane]) this.lane.add(node.part.id);
       this.stackUp(battery, inverterX + m(4), level - m(3));
       let at = inverterX + m(8) + m(2);
       for (const node of inLane) {
@@ -385,6 +393,8 @@ export function planOverview(doc: Installation): OverviewPlan {
     tree,
     ways,
     roomOf,
+    rooms: planner.roomSpans,
+    lane: planner.lane,
     backupBoard: planner.backupBoard,
     tray: left,
     levels: { bar: planner.barLevel, rooms: planner.roomsTop, foot: planner.foot, bottom: left.length > 0 ? end : bottom },

@@ -2,7 +2,7 @@ import { isBar } from '../document/kinds';
 import { byCode } from '../document/schema';
 import type { Side } from '../symbols/types';
 import { endKey, type Body, type RunEnd } from './ends';
-import type { OverviewGraph } from './overview-graph';
+import type { OverviewGraph, OverviewRun } from './overview-graph';
 import { routeAll } from './route';
 import type { Obstacle, RouteEnd, RouteRequest, Soft } from './route-grid';
 import { findDots, findHops, type NetPath } from './route-marks';
@@ -49,13 +49,18 @@ export interface OverviewRoutes {
   forced: string[];
 }
 
+/** True for a cable from one place to another: it is drawn alone, for nothing branches from it on its way. */
+export function leavesPlace(graph: OverviewGraph, run: OverviewRun): boolean {
+  return run.cable !== undefined && graph.byId.get(run.from[0])?.place !== graph.byId.get(run.to[0])?.place;
+}
+
 export function overviewRoutes(graph: OverviewGraph, bodies: ReadonlyMap<string, Body>, ends: ReadonlyMap<string, RunEnd>, softs: readonly Soft[] = []): OverviewRoutes {
   const nets = netsOf(graph);
   const end = (key: string): RouteEnd => {
     const at = ends.get(key)!;
     return { part: at.part, x: at.x, y: at.y, ...(at.any ? { sides: ANY, even: true } : { sides: [at.side] }) };
   };
-  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: nets.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])) }));
+  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: leavesPlace(graph, run) ? run.id : nets.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])) }));
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height }));
   const { points, forced } = routeAll(requests, obstacles, softs);
   const paths = graph.runs.map((run): NetPath => ({ id: run.id, net: nets.get(run.id)!, points: points.get(run.id)! }));

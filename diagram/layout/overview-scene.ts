@@ -1,103 +1,167 @@
-import type { Installation, Part, Position } from '../document/schema';
+import { byCode, type Installation, type Part } from '../document/schema';
 import { symbolFor } from '../symbols';
-import { MODULE } from '../symbols/types';
-import { traceFeeds } from '../terminals/feeds';
-import { placeEnds } from './ends';
-import { BODY } from './lettering';
-import { FOOT, ROOM, m } from './overview-metrics';
-import { overviewRoutes } from './overview-routes';
+import { traceFeeds, type Feeds } from '../terminals/feeds';
+import { placeEnds, type Ends } from './ends';
+import { Ground, blockTexts, placeLabel, type Label } from './labels';
+import { textDescent, textWidth } from './lettering';
+import { actualLevels, bands, lanes, roomFrames } from './overview-frames';
+import { partLabel, takenBy } from './overview-labels';
+import { m } from './overview-metrics';
 import { planOverview, type OverviewPlan } from './overview-plan';
+import { overviewPositions } from './overview-positions';
+import { leavesPlace, overviewRoutes, type OverviewRoutes } from './overview-routes';
+import { cableLabel, ringOf, ticksOf, type Ticks } from './overview-ticks';
+import type { Box } from './route-grid';
+import type { Scene, SceneFrame, ScenePart, SceneRing, SceneRun, SceneText } from './scene';
 import { byIdOf } from './scene-order';
-import type { Scene, SceneFrame, ScenePart, SceneRun } from './scene';
-import { designation, ratingLines } from './wording';
+
+/** The box of a text on the sheet. */
+export function textBox(text: SceneText): Box {
+  const width = textWidth(text.text, text.size, text.spaced);
+  const x = text.anchor === 'end' ? text.x - width : text.anchor === 'middle' ? text.x - width / 2 : text.x;
+  return { x, y: text.y - text.size, width, height: text.size + textDescent(text.size) };
+}
 
 /** The overview of any document. */
-export function overviewScene(doc: Installation, plan: OverviewPlan = planOverview(doc), stored: Record<string, Position> = doc.sheet?.overview ?? {}): Scene {
-  const positions = new Map([...plan.positions].map(([id, at]) => [id, stored[id] ?? at]));
+export function overviewScene(doc: Installation, plan: OverviewPlan = planOverview(doc)): Scene {
+  const positions = overviewPositions(plan, doc.sheet?.overview ?? {});
   const { graph } = plan;
-  const { bodies, ends } = placeEnds(graph, positions);
+  const places = placeEnds(graph, positions);
   const feeds = traceFeeds(doc);
-  const parts = [...graph.parts.values()].map((part): ScenePart => {
-    const body = bodies.get(part.id)!;
-    const feed = feeds.parts.get(part.id) ?? 'none';
-    const frame = plan.roomOf.get(part.id);
+  const routes = overviewRoutes(graph, places.bodies, places.ends);
+  const frames = roomFrames(doc, plan, positions, places.bodies);
+  const levels = actualLevels(plan, positions);
+  const lettered = letter(doc, plan, places, routes, frames, feeds);
+
+  const parts = [...graph.parts.values()].map((part) => scenePart(plan, places, feeds, part, lettered.texts.get(part.id) ?? []));
+  const runs = graph.runs.map((run): SceneRun => {
+    const ticks = lettered.ticks.get(run.id);
     return {
-      id: part.id,
-      kind: part.kind,
-      symbol: `${symbolFor(part, 'overview').id}${part.kind === 'line-bar' && feed === 'backup' ? '.cased' : ''}`,
-      turn: body.turn,
-      x: body.x,
-      y: body.y,
-      width: body.width,
-      height: body.height,
-      feed,
-      terminals: body.terminals,
-      texts: part.kind === 'joint' ? [] : partTexts(part, body),
-      ...(frame && { frame: `room:${frame}` }),
+      id: run.id,
+      wires: run.wires,
+      ...(run.cable && { cable: run.cable }),
+      from: run.from,
+      to: run.to,
+      points: routes.points.get(run.id)!,
+      role: run.role,
+      feed: feeds.wires.get(run.wires[0] ?? '') ?? 'none',
+      weight: leavesPlace(graph, run) || !plan.roomOf.has(run.from[0]) ? 'heavy' : 'normal',
+      ...(ticks && { ticks: ticks.ticks }),
+      texts: lettered.texts.get(run.id) ?? [],
+      hops: routes.hops.get(run.id) ?? [],
     };
   });
-  const routed = overviewRoutes(graph, bodies, ends);
-  const runs = graph.runs.map((run): SceneRun => ({
-    id: run.id,
-    wires: run.wires,
-    ...(run.cable && { cable: run.cable }),
-    from: run.from,
-    to: run.to,
-    points: routed.points.get(run.id)!,
-    role: run.role,
-    feed: feeds.wires.get(run.wires[0]!) ?? 'none',
-    weight: 'normal',
-    texts: [],
-    hops: routed.hops.get(run.id) ?? [],
-  }));
-  const frames = roomFrames(doc, plan, parts);
-  const right = Math.max(m(40), ...parts.map((part) => part.x + part.width), ...frames.map((frame) => frame.x + frame.width)) + m(4);
-  const bottom = Math.max(plan.levels.bottom, ...parts.map((part) => part.y + part.height + m(4)));
-  return { face: 'overview', width: right, height: bottom, bands: bandsOf(plan, parts, bottom), frames, parts: parts.sort(byIdOf), runs, rings: [], dots: routed.dots.map(({ x, y, run }) => ({ x, y, feed: feeds.wires.get(run) ?? 'none' })), texts: [] };
-}
-
-function partTexts(part: Part, body: { x: number; y: number; width: number; height: number }) {
-  const lines = [designation(part), ...ratingLines(part)];
-  const below = part.kind === 'lamp' || part.kind === 'fan' || part.kind === 'socket' || part.kind === 'appliance';
-  return lines.map((text, i) =>
-    below
-      ? { text, x: body.x + body.width / 2, y: body.y + body.height + 500 + 400 * i, size: BODY, anchor: 'middle' as const, bold: i === 0 }
-      : { text, x: body.x + body.width + 125, y: body.y + body.height / 2 + 400 * i, size: BODY, bold: i === 0 },
-  );
-}
-
-function roomFrames(doc: Installation, plan: OverviewPlan, parts: readonly ScenePart[]): SceneFrame[] {
-  const frames: SceneFrame[] = [];
-  for (const place of doc.places) {
-    const inside = parts.filter((part) => plan.roomOf.get(part.id) === place.id);
-    if (inside.length === 0) continue;
-    const left = Math.min(...inside.map((part) => part.x)) - m(2);
-    const right = Math.max(...inside.map((part) => part.x + part.width)) + m(2);
-    const top = plan.levels.rooms;
-    frames.push({
-      id: `room:${place.id}`,
-      kind: 'room',
-      place: place.id,
-      x: left,
-      y: top,
-      width: right - left,
-      height: ROOM.height,
-      texts: [{ text: place.name.toUpperCase(), x: left + 250, y: top + ROOM.name, size: BODY, bold: true, spaced: true }],
-    });
-  }
-  return frames;
-}
-
-function bandsOf(plan: OverviewPlan, parts: readonly ScenePart[], bottom: number): Scene['bands'] {
-  const { bar, rooms, foot } = plan.levels;
-  const meter = parts.find((part) => part.kind === 'meter');
-  const edges: [string, number][] = [
-    ['SUPPLY', 0],
-    ...(meter ? ([['METER', meter.y - MODULE], ['MAIN PROTECTION', meter.y + meter.height + MODULE]] as [string, number][]) : []),
-    ['BOARD', bar - m(2)],
-    ['ROOMS', rooms - m(1)],
-    ...(plan.backupBoard.size > 0 ? ([['BACKUP BOARD', foot + m(1)]] as [string, number][]) : []),
-    ...(plan.tray.length > 0 ? ([['NOT PLACED', plan.backupBoard.size > 0 ? foot + FOOT.height + m(1) : foot + m(3)]] as [string, number][]) : []),
+  const reach = [
+    ...parts.map((part) => ({ x: part.x + part.width, y: part.y + part.height })),
+    ...frames.map((frame) => ({ x: frame.x + frame.width, y: frame.y + frame.height })),
+    ...runs.flatMap((run) => run.points),
+    ...[...lettered.texts.values()].flat().map((text) => ({ x: textBox(text).x + textBox(text).width, y: text.y })),
   ];
-  return edges.map(([name, y], i) => ({ name, y, height: (edges[i + 1]?.[1] ?? bottom) - y }));
+  const right = Math.max(m(60), ...reach.map(({ x }) => x)) + m(2);
+  const bottom = Math.max(levels.bottom, ...reach.map(({ y }) => y + m(2)));
+  return {
+    face: 'overview',
+    width: right,
+    height: bottom,
+    bands: bands(plan, places.bodies, levels, bottom),
+    frames: [...lanes(plan, places.bodies, levels, right), ...frames],
+    parts: parts.sort(byIdOf),
+    runs,
+    rings: lettered.rings,
+    dots: routes.dots.map(({ x, y, run }) => ({ x, y, feed: feeds.wires.get(run) ?? 'none' })),
+    texts: [],
+  };
+}
+
+function scenePart(plan: OverviewPlan, { bodies }: Ends, feeds: Feeds, part: Part, texts: SceneText[]): ScenePart {
+  const body = bodies.get(part.id)!;
+  const feed = feeds.parts.get(part.id) ?? 'none';
+  const room = plan.roomOf.get(part.id);
+  return {
+    id: part.id,
+    kind: part.kind,
+    symbol: `${symbolFor(part, 'overview').id}${part.kind === 'line-bar' && feed === 'backup' ? '.cased' : ''}`,
+    turn: body.turn,
+    x: body.x,
+    y: body.y,
+    width: body.width,
+    height: body.height,
+    feed,
+    terminals: body.terminals,
+    texts,
+    ...(room && { frame: `room:${room}` }),
+  };
+}
+
+interface Lettered {
+  /** by id of the part or run */
+  texts: Map<string, SceneText[]>;
+  ticks: Map<string, Ticks>;
+  rings: SceneRing[];
+}
+
+/** Places rings, ticks and all lettering, each clear of what stands there before. */
+function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes: OverviewRoutes, frames: readonly SceneFrame[], feeds: Feeds): Lettered {
+  const { graph } = plan;
+  const ground = new Ground();
+  for (const [id, body] of bodies) ground.add(takenBy(graph.byId.get(id)!, body));
+  for (const run of graph.runs) ground.addPath(routes.points.get(run.id)!, feeds.wires.get(run.wires[0] ?? '') === 'backup' ? 90 : 40);
+  for (const frame of frames) {
+    const { x, y, width: w, height: h } = frame;
+    ground.addPath([{ x, y }, { x: x + w, y }, { x: x + w, y: y + h }, { x, y: y + h }, { x, y }], 20);
+    for (const text of frame.texts) ground.add(textBox(text));
+  }
+  const ringed = new Map<string, SceneRing>();
+  for (const way of plan.ways) {
+    const run = graph.runs.find((r) => leavesDevice(r, way.device));
+    if (!run || !bodies.has(way.device)) continue;
+    const points = routes.points.get(run.id)!;
+    const ring = ringOf(way, run.from[0] === way.device ? points : [...points].reverse(), feeds.parts.get(way.device) ?? 'none');
+    if (!ring) continue;
+    ringed.set(run.id, ring);
+    ground.add({ x: ring.x - ring.radius, y: ring.y - ring.radius, width: 2 * ring.radius, height: 2 * ring.radius });
+  }
+  const ticks = new Map<string, Ticks>();
+  const labels: Label[] = [];
+  for (const run of graph.runs) {
+    if (!leavesPlace(graph, run)) continue;
+    const points = routes.points.get(run.id)!;
+    const fromSource = ringed.get(run.id)?.part === run.to[0] ? [...points].reverse() : points;
+    const found = ticksOf(run, fromSource, ringed.has(run.id), (box) => crowded(run.id, box, graph.runs, routes, bodies));
+    if (!found) continue;
+    ticks.set(run.id, found);
+    ground.add(found.box);
+    const label = cableLabel(doc, graph, run, found);
+    if (label) labels.push(label);
+  }
+  // parts first: their words have fewer places than a cable's
+  const named = [...graph.parts.values()].flatMap((part) => partLabel(doc, plan, part, bodies.get(part.id)!) ?? []);
+  const texts = new Map<string, SceneText[]>();
+  for (const label of [...named.sort((a, b) => rank(b) - rank(a) || byCode(a.owner, b.owner)), ...labels.sort((a, b) => byCode(a.owner, b.owner))]) {
+    const block = placeLabel(ground, label);
+    if (block) texts.set(label.owner, blockTexts(block));
+  }
+  return { texts, ticks, rings: [...ringed.values()].sort((a, b) => byCode(a.part, b.part)) };
+}
+
+/** Bigger lettering is placed first. */
+const rank = (label: Label): number => label.size;
+
+/** The device's outgoing run: the one at its lower terminal, or its only cable. */
+const leavesDevice = (run: { from: readonly [string, string]; to: readonly [string, string] }, device: string): boolean =>
+  (run.from[0] === device && run.from[1] === '2') || (run.to[0] === device && run.to[1] === '2');
+
+/** True where ticks would lie on another run or on a part. */
+function crowded(own: string, box: Box, runs: readonly { id: string }[], routes: OverviewRoutes, bodies: Ends['bodies']): boolean {
+  const hits = (b: Box) => b.x < box.x + box.width && b.x + b.width > box.x && b.y < box.y + box.height && b.y + b.height > box.y;
+  for (const body of bodies.values()) if (hits(body)) return true;
+  for (const run of runs) {
+    if (run.id === own) continue;
+    const points = routes.points.get(run.id)!;
+    for (let i = 0; i + 1 < points.length; i++) {
+      const [a, b] = [points[i]!, points[i + 1]!];
+      if (hits({ x: Math.min(a.x, b.x), y: Math.min(a.y, b.y), width: Math.abs(a.x - b.x), height: Math.abs(a.y - b.y) })) return true;
+    }
+  }
+  return false;
 }

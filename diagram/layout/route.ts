@@ -6,7 +6,7 @@ import type { Point } from './scene';
 
 /**
  * The router: every run on its own way round the parts, the same for the same input. Short and straight runs go first,
- * then each that crosses others may look once more for a better way.
+ * then each that bends may look again for a better way among the others.
  */
 
 interface Routed {
@@ -74,13 +74,12 @@ class Router {
     return better;
   }
 
-  crossings(routed: Routed): number {
-    let count = 0;
-    for (const node of routed.nodes ?? []) {
-      const [level, upright] = [this.occupancy.level[node]!, this.occupancy.upright[node]!];
-      if (level !== 0 && upright !== 0 && level !== upright) count++;
-    }
-    return count;
+  /** True where a run is not one straight line: only such a one can find a better way once others have moved. */
+  bends({ nodes }: Routed): boolean {
+    if (!nodes) return false;
+    const { columns } = this.grid;
+    const [first, last] = [nodes[0]!, nodes.at(-1)!];
+    return first % columns !== last % columns && Math.floor(first / columns) !== Math.floor(last / columns);
   }
 
   private mark(routed: Routed): void {
@@ -157,7 +156,7 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
     for (const routed of all) router.route(routed);
     for (let round = 0; round < ROUNDS; round++) {
       let changed = false;
-      for (const routed of all) if (router.crossings(routed) > 0) changed = router.improve(routed) || changed;
+      for (const routed of all) if (router.bends(routed)) changed = router.improve(routed) || changed;
       if (!changed) break;
     }
   }

@@ -1,0 +1,146 @@
+import { BODY, textDescent, textWidth } from './lettering';
+import type { Box } from './route-grid';
+import type { Point, SceneText } from './scene';
+
+/** The label placer: every text of a face finds a place where it lies on no other text, part, wire or frame. */
+
+export interface Span {
+  text: string;
+  bold?: boolean;
+  tone?: 'ink' | 'grey';
+}
+
+/** A few lines that belong together, and where they may stand: the best place first. */
+export interface Label {
+  /** whose label it is: labels are placed in this order, so that the result does not depend on the order of parts */
+  owner: string;
+  lines: readonly (readonly Span[])[];
+  size: number;
+  places: readonly Anchor[];
+}
+
+/** A place: a point of the block's edge, and which point of the block stands there. */
+export interface Anchor extends Point {
+  horizontal: 'start' | 'middle' | 'end';
+  /** which edge of the block lies at y */
+  vertical: 'top' | 'middle' | 'bottom';
+}
+
+/** Line pitch as a share of the capitals' height. */
+const LEADING = 1.6;
+/** 1/100 mm kept free round a text. */
+const CLEAR = 60;
+const CELL = 2000;
+/** How far a label may stray when all its places are taken, in steps of a line. */
+const STRAYS = [1, 2, 3, 4, 6, 8] as const;
+
+const lineWidth = (spans: readonly Span[], size: number): number => textWidth(spans.map((span) => span.text).join(' '), size);
+
+export interface Block extends Box {
+  label: Label;
+  horizontal: Anchor['horizontal'];
+}
+
+/** The block of a label at a place. */
+export function blockAt(label: Label, at: Anchor): Block {
+  const width = Math.max(...label.lines.map((spans) => lineWidth(spans, label.size)));
+  const height = Math.round(label.size * (1 + LEADING * (label.lines.length - 1))) + textDescent(label.size);
+  const x = at.horizontal === 'start' ? at.x : at.horizontal === 'end' ? at.x - width : Math.round(at.x - width / 2);
+  const y = at.vertical === 'top' ? at.y : at.vertical === 'bottom' ? at.y - height : Math.round(at.y - height / 2);
+  return { x, y, width, height, label, horizontal: at.horizontal };
+}
+
+/** What stands on the sheet already, found by place. */
+export class Ground {
+  private readonly cells = new Map<string, Box[]>();
+
+  add(box: Box): void {
+    this.each(box, (key) => {
+      const list = this.cells.get(key);
+      if (list) list.push(box);
+      else this.cells.set(key, [box]);
+    });
+  }
+
+  /** Adds the stretches of a polyline, as thin boxes. */
+  addPath(points: readonly Point[], half = 30): void {
+    for (let i = 0; i + 1 < points.length; i++) {
+      const [a, b] = [points[i]!, points[i + 1]!];
+      this.add({ x: Math.min(a.x, b.x) - half, y: Math.min(a.y, b.y) - half, width: Math.abs(a.x - b.x) + 2 * half, height: Math.abs(a.y - b.y) + 2 * half });
+    }
+  }
+
+  /** Area of what lies under a box, kept clear all round; 0 where it is free. */
+  overlap(box: Box, clear = CLEAR): number {
+    const grown = { x: box.x - clear, y: box.y - clear, width: box.width + 2 * clear, height: box.height + 2 * clear };
+    const seen = new Set<Box>();
+    let area = 0;
+    this.each(grown, (key) => {
+      for (const other of this.cells.get(key) ?? []) {
+        if (seen.has(other)) continue;
+        seen.add(other);
+        const w = Math.min(grown.x + grown.width, other.x + other.width) - Math.max(grown.x, other.x);
+        const h = Math.min(grown.y + grown.height, other.y + other.height) - Math.max(grown.y, other.y);
+        if (w > 0 && h > 0) area += w * h;
+      }
+    });
+    return area;
+  }
+
+  private each(box: Box, tell: (key: string) => void): void {
+    for (let x = Math.floor(box.x / CELL); x <= Math.floor((box.x + box.width) / CELL); x++)
+      for (let y = Math.floor(box.y / CELL); y <= Math.floor((box.y + box.height) / CELL); y++) tell(`${x} ${y}`);
+  }
+}
+
+/** The texts of a block, ready to draw. */
+export function blockTexts(block: Block): SceneText[] {
+  const { label } = block;
+  return label.lines.flatMap((spans, i) => {
+    const width = lineWidth(spans, label.size);
+    const free = block.width - width;
+    let x = block.x + (block.horizontal === 'start' ? 0 : block.horizontal === 'end' ? free : Math.round(free / 2));
+    const y = block.y + label.size + Math.round(label.size * LEADING * i);
+    return spans.map((span): SceneText => {
+      const at = x;
+      x += textWidth(`${span.text} `, label.size);
+      return { text: span.text, x: at, y, size: label.size, ...(span.bold && { bold: true }), ...(span.tone === 'grey' && { tone: 'grey' as const }) };
+    });
+  });
+}
+
+/** Places a little further off than the given ones, nearest first. */
+function* strays(places: readonly Anchor[], step: number): Generator<Anchor> {
+  for (const far of STRAYS)
+    for (const place of places)
+      for (const [dx, dy] of [[0, -1], [0, 1], [1, 0], [-1, 0], [1, -1], [1, 1], [-1, -1], [-1, 1]] as const)
+        yield { ...place, x: place.x + dx * far * step, y: place.y + dy * far * step };
+}
+
+/**
+ * Finds the first free place of a label and takes it.
+ * @returns the block, or null where nothing near is free, even for the first line in small lettering
+ */
+export function placeLabel(ground: Ground, label: Label): Block | null {
+  const lines = label.lines.filter((spans) => spans.some((span) => span.text !== ''));
+  if (lines.length === 0) return null;
+  const whole: Label = { ...label, lines };
+  const tries: Label[] = [whole];
+  if (label.size > 180) tries.push({ ...whole, size: 180 });
+  if (lines.length > 1) tries.push({ ...whole, size: Math.min(label.size, 180), lines: [lines[0]!] });
+  for (const candidate of label.places) {
+    const block = blockAt(whole, candidate);
+    if (ground.overlap(block) === 0) return take(ground, block);
+  }
+  for (const variant of tries)
+    for (const candidate of strays(label.places, Math.round(BODY * 0.8))) {
+      const block = blockAt(variant, candidate);
+      if (ground.overlap(block) === 0) return take(ground, block);
+    }
+  return null;
+}
+
+function take(ground: Ground, block: Block): Block {
+  ground.add(block);
+  return block;
+}
