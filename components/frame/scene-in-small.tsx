@@ -25,6 +25,10 @@ function Run({ run }: { run: SceneRun }) {
   );
 }
 
+/** px that it has on the page, about */
+const WIDE = 560;
+const HIGH = 300;
+
 interface SceneInSmallProps {
   scene: Scene;
   /** id of the place in hand: its room is thickened */
@@ -32,15 +36,20 @@ interface SceneInSmallProps {
   /** ids of places with something to put right */
   wrong?: ReadonlySet<string>;
   onPlace?(place: string): void;
+  /** name of the band it begins with */
+  from?: string;
   className?: string;
 }
 
 /** A face of the drawing from afar: no lettering but the rooms' names. */
-export function SceneInSmall({ scene, inHand, wrong, onPlace, className = '' }: SceneInSmallProps) {
+export function SceneInSmall({ scene, inHand, wrong, onPlace, from, className = '' }: SceneInSmallProps) {
   const rooms = scene.frames.filter((frame) => frame.kind === 'room');
-  const size = scene.width / 48;
+  const top = Math.min(scene.bands.find((band) => band.name === from)?.y ?? 0, ...rooms.map((frame) => frame.y));
+  const height = scene.height - top;
+  // Lettering keeps about its 11 px, whatever the size of the home.
+  const size = 11.5 / Math.min(WIDE / scene.width, HIGH / height);
   return (
-    <svg viewBox={`0 0 ${scene.width} ${scene.height}`} className={className} aria-hidden="true">
+    <svg viewBox={`0 ${top} ${scene.width} ${height}`} className={className} aria-hidden="true">
       {scene.frames
         .filter((frame) => frame.kind === 'switchboard')
         .map((frame) => (

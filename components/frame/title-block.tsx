@@ -28,8 +28,8 @@ function Cell({ name, children, strong, className = '' }: { name: string; childr
 export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: TitleBlockPanelProps) {
   const drawn = [block.drawnBy, block.drawnOn.slice(0, 10)].filter(Boolean).join(' ');
   return (
-    <section aria-label="Title block" className="flex flex-col border-ink lap:w-[736px] lap:shrink-0 lap:border-l-[1.6px]">
-      <dl className="grid flex-1 grid-cols-[minmax(0,1fr)_96px_96px] sm:grid-cols-[minmax(0,1fr)_80px_144px_72px_72px_64px_88px] lap:grid-cols-[minmax(0,1fr)_72px_144px_72px_72px_60px_92px]">
+    <section aria-label="Title block" className="flex flex-col border-ink lap:w-[784px] lap:shrink-0 lap:border-l-[1.6px]">
+      <dl className="grid flex-1 grid-cols-[minmax(0,1fr)_96px_96px] sm:grid-cols-[minmax(0,1fr)_80px_144px_72px_72px_64px_88px] lap:grid-cols-[minmax(0,1fr)_72px_144px_72px_72px_60px_140px]">
         <Cell name={kind} strong>
           {block.title}
         </Cell>
@@ -66,7 +66,7 @@ export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: Tit
             </span>
           </p>
         )}
-        <p className="hidden w-[92px] shrink-0 truncate border-l border-ink px-2 py-[3px] sm:block">
+        <p className="hidden w-[140px] shrink-0 truncate border-l border-ink px-2 py-[3px] sm:block">
           {block.team}
           <br />
           <b>Ohmstead</b>

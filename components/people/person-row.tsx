@@ -28,7 +28,7 @@ export function PersonRow({ person, state, mayManage, isMe, today }: PersonRowPr
   return (
     <>
       <tr role="row" className={`max-[700px]:grid max-[700px]:grid-cols-[1fr_auto] max-[700px]:border-b max-[700px]:border-hair max-[700px]:[&>*]:border-b-0 ${open ? 'bg-row font-bold' : ''}`}>
-        <th role="rowheader" scope="row" className={`${cell} text-left font-[inherit]`}>
+        <th role="rowheader" scope="row" className={`${cell} text-left ${open ? 'font-bold' : 'font-normal'}`}>
           {person.name}
           {isMe && <span className="font-normal text-grey"> (you)</span>}
         </th>

@@ -28,7 +28,7 @@ export const GROUPS: Record<GroupId, string> = {
 /** The columns that are typed, in the order of the Tab key. */
 export const TYPED: readonly TypedColumn[] = [
   { id: 'name', name: 'Name', unit: '', group: 'room', width: 14, numeric: false, spoken: 'name' },
-  { id: 'kind', name: 'Kind', unit: '', group: 'room', width: 10, numeric: false, spoken: 'kind' },
+  { id: 'kind', name: 'Kind', unit: '', group: 'room', width: 11, numeric: false, spoken: 'kind' },
   { id: 'run', name: 'Run', unit: 'm', group: 'room', width: 6, numeric: true, right: true, spoken: 'run from the board, metres' },
   { id: 'lamps', name: 'Lamps', unit: 'n × W', group: 'holds', width: 9, numeric: false, spoken: 'lamps, number and watts' },
   { id: 'fans', name: 'Fans', unit: 'n × W', group: 'holds', width: 9, numeric: false, spoken: 'fans, number and watts' },

@@ -5,7 +5,8 @@ import { Button } from '@/components/ui/button';
 import { Key } from '@/components/ui/key';
 import { Note } from '@/components/ui/note';
 import type { Installation } from '@/diagram/document/schema';
-import { draftOf, draftWords } from './draft';
+import { draftPatch } from '@/diagram/survey/draft';
+import { draftWords } from './draft-words';
 import type { Survey } from './use-survey';
 import { roomsWords } from './words';
 
@@ -90,10 +91,14 @@ export function DraftNote({ survey, document, hoursWanted, onDraft }: DraftNoteP
             <p className="mt-1">{MOVED}</p>
           </>
         )}
-        {waiting.length > 0 && <p className="mt-1">{waiting.map((step) => step.name).join(', ')} stays as drawn.</p>}
+        {waiting.length > 0 && (
+          <p className="mt-1">
+            {waiting.map((step) => step.name || 'a room without a name').join(', ')} {isFirst ? 'is left out until its cell is right.' : 'stays as drawn.'}
+          </p>
+        )}
         {previewed === document && (
           <p role="status" className="mt-2 bg-row px-2 py-1">
-            {draftWords(document, draftOf(document, hoursWanted)) || 'Nothing would change.'}
+            {draftWords(document, draftPatch(document, hoursWanted)) || 'Nothing would change.'}
           </p>
         )}
       </Note>

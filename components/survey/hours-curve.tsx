@@ -49,7 +49,8 @@ export function HoursCurve({ backup, rooms }: { backup: Backup; rooms: readonly 
     ...options,
     ...steps.slice(1).map((step) => ({ name: 'any load', watts: (maxWatts * step) / 5, hours: autonomyHours({ bank, efficiency, watts: (maxWatts * step) / 5 }) })),
   ];
-  const wishAbove = y(hoursWanted) > BOX.top + 20;
+  // Its words stand where the curve is not: at the left while the curve is still high, else at the right.
+  const wishLeft = autonomyHours({ bank, efficiency, watts: maxWatts * 0.45 }) > hoursWanted * 1.25;
 
   return (
     <section aria-labelledby="hours-curve" className="min-w-0">
@@ -81,7 +82,12 @@ export function HoursCurve({ backup, rooms }: { backup: Backup; rooms: readonly 
           W at once
         </text>
         <path d={`M${BOX.left} ${y(hoursWanted)}H${BOX.right}`} className="stroke-ink" strokeWidth="1.4" strokeDasharray="5 4" />
-        <text x={BOX.right} y={y(hoursWanted) + (wishAbove ? -6 : 14)} textAnchor="end" className="fill-ink">
+        <text
+          x={wishLeft ? BOX.left + 8 : BOX.right}
+          y={y(hoursWanted) + (wishLeft ? 14 : -6)}
+          textAnchor={wishLeft ? 'start' : 'end'}
+          className="fill-ink"
+        >
           {hoursWanted} h, the longest wish
         </text>
         {points.length > 1 && <path d={`M${path}`} className="stroke-ink" strokeWidth="2.4" strokeLinejoin="round" />}

@@ -21,8 +21,9 @@ export function RoomsInSmall({ survey, document }: { survey: Survey; document: I
           scene={scene}
           inHand={survey.inHand?.room}
           wrong={wrong}
+          from="BOARD"
           onPlace={(place) => focusCell(place, 'name')}
-          className="mt-2 max-h-[340px] w-full"
+          className="mt-2 max-h-[300px] w-full"
         />
       ) : (
         <p className="mt-2 text-grey">Nothing is drawn yet. The draft draws it from these rows.</p>

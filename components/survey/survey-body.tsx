@@ -24,7 +24,7 @@ function Pictures({ survey, document, totals }: Pick<SurveyBodyProps, 'survey' |
   return (
     <div className="grid gap-8 lg:grid-cols-[minmax(0,5fr)_minmax(0,4fr)]">
       <RoomsInSmall survey={survey} document={document} />
-      {totals.backup && <HoursCurve backup={totals.backup} rooms={survey.rooms} />}
+      {totals.backup && <HoursCurve backup={totals.backup} rooms={survey.rooms.filter((room) => !survey.problems.some((problem) => problem.room === room.id))} />}
     </div>
   );
 }

@@ -25,7 +25,10 @@ export function SurveyCell({ survey, room, column, problem, below, above, classN
   const [typed, setTyped] = useState<string | null>(null);
   const refused = survey.refused.get(refusedKey(room.id, id));
   const isBlank = room.id === survey.blank.id;
-  const shown = typed ?? refused?.text ?? (isBlank ? '' : showCell(id, room));
+  const [inHand, setInHand] = useState(false);
+  // `3 of 2` while nobody is in the cell; what was typed as soon as somebody is.
+  const marked = !inHand && problem?.cell ? problem.cell : undefined;
+  const shown = typed ?? refused?.text ?? marked ?? (isBlank ? '' : showCell(id, room));
 
   const commit = () => {
     if (typed !== null && typed !== (refused?.text ?? showCell(id, room))) survey.type(room.id, id, typed);
@@ -76,13 +79,19 @@ export function SurveyCell({ survey, room, column, problem, below, above, classN
       readOnly={!survey.mayEdit}
       value={shown}
       placeholder={isBlank ? { name: 'name', kind: 'kind' }[id as string] : emptyCell(id)}
-      className={`block h-full w-full min-w-0 bg-transparent px-2 placeholder:text-grey focus:outline-2 focus:-outline-offset-3 focus:outline-ink aria-invalid:font-bold aria-invalid:text-red aria-invalid:outline-2 aria-invalid:-outline-offset-3 aria-invalid:outline-red focus:aria-invalid:outline-3 ${column.right ? 'text-right' : ''} ${className}`}
+      className={`block h-full w-full min-w-0 bg-transparent px-2 max-lap:px-1 placeholder:text-grey focus:outline-2 focus:-outline-offset-3 focus:outline-ink aria-invalid:font-bold aria-invalid:text-red aria-invalid:outline-2 aria-invalid:-outline-offset-3 aria-invalid:outline-red focus:aria-invalid:outline-3 ${column.right ? 'text-right' : ''} ${className}`}
       onFocus={(event) => {
+        const cell = event.target;
+        setInHand(true);
         survey.take(room.id, id);
-        event.target.select();
+        // After the cell shows what was typed again.
+        requestAnimationFrame(() => document.activeElement === cell && cell.select());
       }}
       onChange={(event) => setTyped(event.target.value)}
-      onBlur={commit}
+      onBlur={() => {
+        setInHand(false);
+        commit();
+      }}
       onKeyDown={onKeyDown}
       onPaste={onPaste}
     />

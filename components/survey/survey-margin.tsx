@@ -106,7 +106,7 @@ function Demand({ survey }: { survey: Survey }) {
             <th scope="row" className="border-t border-ink text-left">
               sum
             </th>
-            <td className="border-t border-ink text-right tabular-nums">{demandAmps.toFixed(1)} A</td>
+            <td className="border-t border-ink text-right whitespace-nowrap tabular-nums">{demandAmps.toFixed(1)} A</td>
           </tr>
         </tfoot>
       </table>

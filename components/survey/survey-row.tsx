@@ -22,7 +22,7 @@ interface SurveyRowProps {
 }
 
 const cell = 'border-r border-b border-hair p-0 h-10 last:border-r-0';
-const figures = `${cell} px-2 text-right tabular-nums whitespace-nowrap`;
+const figures = `${cell} px-2 text-right max-lap:px-1 tabular-nums whitespace-nowrap`;
 
 /** A room: what is typed, then what it comes to. */
 export function SurveyRow({ survey, room, above, below, totals, step, problems, board }: SurveyRowProps) {
@@ -44,7 +44,7 @@ export function SurveyRow({ survey, room, above, below, totals, step, problems, 
         );
         const ground = column.group === 'keeps' ? `bg-row ${column.id === 'keepLamps' ? 'border-l-2 border-l-ink' : ''}` : '';
         return column.id === 'name' ? (
-          <th key={column.id} scope="row" className={`${cell} text-left font-[inherit]`}>
+          <th key={column.id} scope="row" className={`${cell} text-left ${inHand ? 'font-bold' : 'font-normal'}`}>
             {content}
           </th>
         ) : (
@@ -61,8 +61,8 @@ export function SurveyRow({ survey, room, above, below, totals, step, problems, 
           totals.backupWatts > 0 && `${Math.round(totals.backupWatts)}  ${Math.round(totals.backupVa)}`
         )}
       </td>
-      <td className={`${cell} px-2`}>{totals?.ways.join(' ')}</td>
-      <td className={`${cell} px-2 ${waits ? 'text-red' : ''}`}>
+      <td className={`${cell} px-2 max-lap:px-1`}>{totals?.ways.join(' ')}</td>
+      <td className={`${cell} px-2 max-lap:px-1 ${waits ? 'text-red' : ''}`}>
         {isBlank ? <span className="text-grey">new room</span> : [board, waits ? 'waits' : step?.words].filter(Boolean).join(' ')}
       </td>
     </tr>

@@ -8,8 +8,8 @@ import type { KeyHelp } from '@/components/frame/types';
 import { saveWords } from '@/components/sheet/save-state';
 import { useSheet, type Me } from '@/components/sheet/use-drawing';
 import { isEmptyPatch } from '@/diagram/document/patch';
+import { draftPatch } from '@/diagram/survey/draft';
 import type { DrawingView } from '@/lib/shared/drawings';
-import { draftOf } from './draft';
 import { DraftNote } from './draft-note';
 import { SurveyBody } from './survey-body';
 import { SurveyFoot } from './survey-foot';
@@ -50,7 +50,7 @@ export function SurveySheet({ view, me, hoursWanted }: SurveySheetProps) {
   const draft = () => {
     // A cell left by this very key is in the store already, not yet in this render.
     const now = drawing.store.getState().document;
-    const patch = draftOf(now, hoursWanted);
+    const patch = draftPatch(now, hoursWanted);
     if (isEmptyPatch(patch) || survey.toDraw.length === 0) return;
     opened.run(`Draft ${roomsWords(survey.toDraw.length)}`, patch);
     router.push(`/jobs/${view.jobId}/overview`);

@@ -6,9 +6,9 @@ import { SurveyRow } from './survey-row';
 import type { Survey } from './use-survey';
 import { roomsWords } from './words';
 
-const group = 'h-6 border-b border-rule px-2 text-left align-middle text-small font-semibold text-ink';
-const head = 'h-10 border-r border-b-2 border-r-hair border-b-ink px-2 pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey last:border-r-0';
-const sum = 'h-10 border-y-2 border-r border-y-ink border-r-hair px-2 font-bold tabular-nums last:border-r-0 whitespace-nowrap';
+const group = 'h-6 border-b border-rule px-2 text-left max-lap:px-1 align-middle text-small font-semibold text-ink';
+const head = 'h-10 border-r border-b-2 border-r-hair border-b-ink px-2 pb-1 max-lap:px-1 text-left align-bottom text-small leading-[14px] font-normal text-grey last:border-r-0';
+const sum = 'h-10 border-y-2 border-r border-y-ink border-r-hair px-2 font-bold max-lap:px-1 tabular-nums last:border-r-0 whitespace-nowrap';
 
 /** The rows with the blank one among them, where a new room would stand. */
 export const rowsOf = (survey: Survey): SurveyRoom[] =>
@@ -20,15 +20,15 @@ export function SurveyTable({ survey, boards }: { survey: Survey; boards: Readon
   const { totals } = survey;
   const count = (n: number) => (n === 0 ? '-' : String(n));
   return (
-    <table aria-label="Survey, room by room" className="w-full min-w-[1040px] table-fixed border-collapse">
+    <table aria-label="Survey, room by room" className="w-full min-w-[936px] table-fixed border-collapse">
       <colgroup>
         {TYPED.map((column) => (
           <col key={column.id} style={{ width: `${column.width}ch` }} />
         ))}
         <col style={{ width: '12ch' }} />
         <col style={{ width: '10ch' }} />
-        <col style={{ width: '10ch' }} />
-        <col style={{ width: '14ch' }} />
+        <col style={{ width: '12ch' }} />
+        <col style={{ width: '16ch' }} />
       </colgroup>
       <thead>
         <tr>

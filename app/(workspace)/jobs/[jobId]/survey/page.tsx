@@ -3,13 +3,13 @@ import { SurveySheet } from '@/components/survey/survey-sheet';
 import { openDrawing } from '@/lib/server/drawings/open-drawing';
 import { readJob } from '@/lib/server/jobs/read-job';
 import { requireActor } from '@/lib/server/session';
-import { found } from '../../../found';
+import { found, jobIdIn } from '../../../found';
 
 export const metadata: Metadata = { title: 'Survey' };
 
 export default async function SurveyPage({ params }: { params: Promise<{ jobId: string }> }) {
   const actor = await requireActor();
-  const { jobId } = await params;
+  const jobId = await jobIdIn(params);
   const [view, job] = await found(Promise.all([openDrawing(actor, { jobId }), readJob(actor, jobId)]));
   return <SurveySheet view={view} me={{ id: actor.personId, initials: actor.initials }} hoursWanted={job.hoursWanted} />;
 }

@@ -1,12 +1,5 @@
-import { diff, type Patch } from '@/diagram/document/patch';
+import type { Patch } from '@/diagram/document/patch';
 import type { Installation } from '@/diagram/document/schema';
-import { draftDocument } from '@/diagram/survey/draft';
-
-/** The change that draws what the survey has and the drawing has not; the first one draws the whole home. */
-export function draftOf(document: Installation, hoursWanted: number): Patch {
-  const { title, practice, supply } = document;
-  return diff(document, draftDocument(document.survey ?? [], { title, practice, supply, hoursWanted }));
-}
 
 const counted = (count: number, what: string) => `${count} ${what}${count === 1 ? '' : 's'}`;
 
