@@ -1,0 +1,20 @@
+import type { Drawn } from '../../circuit/drawn';
+import { workOutFigures } from '../../circuit/way-figures';
+import { practices } from '../../practices';
+import type { Context } from '../context';
+import { once } from './once';
+
+/** A home in numbers, by the practice it is judged by. */
+export const figuresOf = once(({ graph, evaluation, sections, earth, practice }) =>
+  workOutFigures({ graph, evaluation, sections, earth, practice: practices[practice] }),
+);
+
+/** Names of the conditions in which any of these is fed, in their order. */
+export const fedIn = ({ evaluated }: Context, drawn: readonly Drawn[]): string[] =>
+  evaluated
+    .filter(({ points }) => drawn.some(({ part }) => points.get(part.id)?.fed))
+    .map(({ condition }) => condition.name);
+
+/** Names of the conditions in which the supply is live. */
+export const onMains = ({ evaluated }: Context): string[] =>
+  evaluated.filter(({ condition }) => condition.base === 'mains').map(({ condition }) => condition.name);
