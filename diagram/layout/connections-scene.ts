@@ -47,13 +47,30 @@ function rows(parts: readonly Part[], counts: Map<string, number>): Map<string, 
   return positions;
 }
 
+/** Terminals each bar or joint is drawn with: as many as are wired, two at least. */
+function barCounts(doc: Installation): Map<string, number> {
+  const counts = new Map<string, number>();
+  for (const wire of doc.wires)
+    for (const [id, mark] of [wire.from, wire.to]) counts.set(id, Math.max(counts.get(id) ?? 2, Number(mark) || 0));
+  return counts;
+}
+
+/** Where every part stands on its page. */
+export function connectionPositions(doc: Installation): Map<string, Position> {
+  const counts = barCounts(doc);
+  const positions = new Map<string, Position>();
+  for (const { place } of connectionPages(doc)) {
+    const here = doc.parts.filter((part) => pageOf(doc, part) === place).sort((a, b) => byCode(a.id, b.id));
+    for (const [id, at] of rows(here, counts)) positions.set(id, doc.sheet?.connections?.[id] ?? at);
+  }
+  return positions;
+}
+
 /** One place with each core to each terminal. */
 export function connectionsScene(doc: Installation, place?: string): Scene {
   const page = place ?? connectionPages(doc)[0]?.place ?? '';
   const here = doc.parts.filter((part) => pageOf(doc, part) === page).sort((a, b) => byCode(a.id, b.id));
-  const counts = new Map<string, number>();
-  for (const wire of doc.wires)
-    for (const [id, mark] of [wire.from, wire.to]) counts.set(id, Math.max(counts.get(id) ?? 2, Number(mark) || 0));
+  const counts = barCounts(doc);
   const auto = rows(here, counts);
   const feeds = traceFeeds(doc);
   const parts = here.map((part): ScenePart => {

@@ -29,7 +29,7 @@ export interface Anchor extends Point {
 /** Line pitch as a share of the capitals' height. */
 const LEADING = 1.6;
 /** 1/100 mm kept free round a text. */
-const CLEAR = 60;
+const CLEAR = 80;
 const CELL = 2000;
 /** How far a label may stray when all its places are taken, in steps of a line. */
 const STRAYS = [1, 2, 3, 4, 6, 8] as const;

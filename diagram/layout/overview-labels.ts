@@ -1,3 +1,4 @@
+import { isBar } from '../document/kinds';
 import type { Installation, Part } from '../document/schema';
 import { BAR_AXIS } from '../symbols/bar';
 import type { Body } from './ends';
@@ -60,7 +61,12 @@ function barLabel(doc: Installation, plan: OverviewPlan, part: Part, body: Body)
     size: BODY,
     places: left
       ? [at(body.x + body.width, axis + 160, 'end', 'top'), at(body.x, axis + 160, 'start', 'top')]
-      : [at(body.x, axis - 150, 'start', 'bottom'), at(body.x + body.width, axis - 150, 'end', 'bottom'), at(body.x, axis + 160, 'start', 'top')],
+      : [
+          at(body.x, axis - 150, 'start', 'bottom'),
+          at(body.x + body.width, axis - 150, 'end', 'bottom'),
+          at(body.x - 120, axis, 'end', 'middle'),
+          at(body.x, axis + 160, 'start', 'top'),
+        ],
   };
 }
 
@@ -131,6 +137,7 @@ export function partLabel(doc: Installation, plan: OverviewPlan, part: Part, bod
 
 /** The parts' own boxes, for the label placer: of a device in line only the side where its blade stands is taken. */
 export function takenBy(part: Part, body: Body): { x: number; y: number; width: number; height: number } {
+  if (isBar(part.kind) && part.kind !== 'joint') return { x: body.x, y: body.y + BAR_AXIS - 72, width: body.width, height: 144 };
   const contact = part.kind === 'mcb' || part.kind === 'rcbo' || part.kind === 'isolator' || part.kind === 'rcd' || part.kind === 'fuse';
   if (!contact) return body;
   const lean = part.kind === 'fuse' ? 150 : part.kind === 'rcd' || part.kind === 'rcbo' ? 260 : 170;

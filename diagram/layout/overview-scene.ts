@@ -123,6 +123,7 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
   }
   const ticks = new Map<string, Ticks>();
   const labels: Label[] = [];
+  const named = new Set<string>();
   for (const run of graph.runs) {
     if (!leavesPlace(graph, run)) continue;
     const points = routes.points.get(run.id)!;
@@ -131,13 +132,16 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     if (!found) continue;
     ticks.set(run.id, found);
     ground.add(found.box);
-    const label = cableLabel(doc, graph, run, found);
-    if (label) labels.push(label);
+    // a cable drawn as several runs is named once
+    const label = named.has(run.cable!) ? null : cableLabel(doc, graph, run, found);
+    if (!label) continue;
+    named.add(run.cable!);
+    labels.push(label);
   }
   // parts first: their words have fewer places than a cable's
-  const named = [...graph.parts.values()].flatMap((part) => partLabel(doc, plan, part, bodies.get(part.id)!) ?? []);
+  const ofParts = [...graph.parts.values()].flatMap((part) => partLabel(doc, plan, part, bodies.get(part.id)!) ?? []);
   const texts = new Map<string, SceneText[]>();
-  for (const label of [...named.sort((a, b) => rank(b) - rank(a) || byCode(a.owner, b.owner)), ...labels.sort((a, b) => byCode(a.owner, b.owner))]) {
+  for (const label of [...ofParts.sort((a, b) => rank(b) - rank(a) || byCode(a.owner, b.owner)), ...labels.sort((a, b) => byCode(a.owner, b.owner))]) {
     const block = placeLabel(ground, label);
     if (block) texts.set(label.owner, blockTexts(block));
   }

@@ -92,8 +92,8 @@ export function cableLabel(doc: Installation, graph: OverviewGraph, run: Overvie
           { x: ticks.at.x - BESIDE, y: middle.y, horizontal: 'end', vertical: 'middle' },
         ]
       : [
-          { x: middle.x, y: box.y - 75, horizontal: 'middle', vertical: 'bottom' },
-          { x: middle.x, y: box.y + box.height + 75, horizontal: 'middle', vertical: 'top' },
+          { x: middle.x, y: box.y + box.height + 100, horizontal: 'middle', vertical: 'top' },
+          { x: middle.x, y: box.y - 100, horizontal: 'middle', vertical: 'bottom' },
         ],
   };
 }

@@ -96,7 +96,32 @@ export function waysAndRooms(doc: Installation, tree: OverviewTree, ways: readon
     if (root.part.place !== undefined && places.has(root.part.place) && !intake.has(root.part.place)) sort(root, false, undefined, null, true);
     else for (const node of walk(root)) tray.push(node.part);
   }
-  // mains entries first, then backup, each in the order of the ways
-  const sorted = [...rooms].map(([place, entries]) => ({ place, entries: [...entries.filter((e) => !e.backup), ...entries.filter((e) => e.backup)] }));
+  // mains first, then backup; what comes from a room further left stands first, the rest in the order of the ways
+  const roomOrder = new Map([...rooms.keys()].map((place, i) => [place, i]));
+  const fromLeft = (entry: Entry, place: string): boolean => {
+    const above = entry.node.parent && placeOf.get(entry.node.parent);
+    return above !== undefined && above !== null && roomOrder.get(above)! < roomOrder.get(place)! && !(entry.backup && entry.node.part.kind === 'joint');
+  };
+  const rank = (entry: Entry, place: string): number => (entry.backup ? 2 : 0) + (fromLeft(entry, place) ? 0 : 1);
+  const sorted = [...rooms].map(([place, entries]) => ({ place, entries: [...entries].sort((a, b) => rank(a, place) - rank(b, place)) }));
+  sortChildren(hanging, placeOf, roomOrder);
   return { hanging, rooms: sorted, entryOf, tray };
+}
+
+/** What leads into a room further left stands first in its own room, what leads further right last. */
+function sortChildren(hanging: readonly Hanging[], placeOf: ReadonlyMap<TreeNode, string>, roomOrder: ReadonlyMap<string, number>): void {
+  for (const item of hanging) {
+    const root = item.head ?? item.from.children.find((child) => child.part.id === item.id)!;
+    const leads = new Map<TreeNode, number>();
+    for (const node of [...walk(root)].reverse()) {
+      const own = placeOf.get(node);
+      let lead = 0;
+      for (const child of node.children) {
+        const place = placeOf.get(child);
+        lead = place === own ? lead || leads.get(child)! : lead || Math.sign((roomOrder.get(place ?? '') ?? 0) - (roomOrder.get(own ?? '') ?? 0));
+      }
+      leads.set(node, lead);
+      node.children.sort((a, b) => (placeOf.get(a) === own ? leads.get(a)! : 0) - (placeOf.get(b) === own ? leads.get(b)! : 0));
+    }
+  }
 }

@@ -1,16 +1,13 @@
 import type { Patch } from '../document/patch';
 import { byCode, type Face, type Installation, type Position } from '../document/schema';
-import { buildScene } from './build-scene';
-import { connectionPages } from './connections-scene';
+import { connectionPositions } from './connections-scene';
+import { planOverview } from './overview-plan';
+import { overviewPositions } from './overview-positions';
 
-/** Where every drawn part stands on a face, stored or worked out. */
+/** Where every drawn part stands on a face: stored, or worked out. No routing is done for it. */
 export function positionsOn(doc: Installation, face: Face): Map<string, Position> {
-  const pages = face === 'overview' ? [undefined] : connectionPages(doc).map((page) => page.place);
-  const positions = new Map<string, Position>();
-  for (const place of pages)
-    for (const part of buildScene(doc, face, place === undefined ? {} : { place }).parts)
-      positions.set(part.id, doc.sheet?.[face]?.[part.id] ?? { x: part.x, y: part.y, ...(part.turn && { turn: part.turn }) });
-  return positions;
+  if (face === 'connections') return connectionPositions(doc);
+  return overviewPositions(planOverview(doc), doc.sheet?.overview ?? {});
 }
 
 /** A change that gives every part a position on both faces; what has one keeps it. Empty where nothing is missing. */

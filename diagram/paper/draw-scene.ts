@@ -1,3 +1,4 @@
+import { BODY, textWidth } from '../layout/lettering';
 import type { Point, Scene, SceneRun, SceneText } from '../layout/scene';
 import { cores, light } from '../symbols/palette';
 import { symbolById } from '../symbols';
@@ -127,7 +128,10 @@ export function sceneGroups(scene: Scene): Group[] {
   for (const frame of scene.frames) if (frame.kind === 'lane') ground.push({ kind: 'path', d: rect(frame.x, frame.y, frame.width, frame.height), fill: light.lane });
   scene.bands.forEach((band, i) => {
     if (i > 0) ground.push({ kind: 'path', d: `M250 ${band.y}H${scene.width - 250}`, stroke: light.hair, width: STROKE.thin });
-    ground.push({ kind: 'text', x: 900, y: band.y + band.height / 2, text: band.name, size: 250, colour: light.grey, anchor: 'middle', turn: 3, spaced: true });
+    const spaced = textWidth(band.name, BODY, true) + 300 <= band.height;
+    const size = spaced || textWidth(band.name, BODY) + 200 <= band.height ? BODY : 180;
+    if (textWidth(band.name, size, spaced) <= band.height)
+      ground.push({ kind: 'text', x: 900, y: band.y + band.height / 2, text: band.name, size, colour: light.grey, anchor: 'middle', turn: 3, ...(spaced && { spaced }) });
   });
   for (const frame of scene.frames) {
     const box = rect(frame.x, frame.y, frame.width, frame.height);
