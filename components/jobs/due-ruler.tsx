@@ -11,6 +11,7 @@ const AXIS = 92;
 /** px that a letter takes at 11 px */
 const LETTER = 6.7;
 const LEVEL = 22;
+const LEVELS = 3;
 
 interface Mark {
   job: JobRow;
@@ -19,19 +20,23 @@ interface Mark {
   words: string;
 }
 
-/** Puts each name on the lowest line on which it meets no other name. */
+/**
+ * Puts each name on the lowest line on which it meets no other, from the right: a stem then rises left of every name
+ * below it and crosses none.
+ */
 function placeMarks(jobs: readonly JobRow[], mine: ReadonlySet<string>, today: string): Mark[] {
-  const ends: number[] = [];
+  const begins: number[] = [];
   const marks: Mark[] = [];
-  for (const job of jobs) {
+  for (const job of [...jobs].reverse()) {
     const day = Math.max(0, daysBetween(today, job.due!) + BEFORE);
     if (day >= DAYS) continue;
     const words = `${job.number}${isLate(job, today) ? ' late' : mine.has(job.id) && !isDone(job) ? ' you' : ''}`;
     const x = LEFT + day * STEP;
-    const free = ends.findIndex((end) => end <= x - 6);
-    const level = free === -1 ? ends.length : free;
-    ends[level] = x + words.length * LETTER + 4;
-    if (level < 3) marks.push({ job, x, level, words });
+    const end = x + words.length * LETTER + 6;
+    const free = begins.findIndex((begin) => begin >= end);
+    const level = free === -1 ? begins.length : free;
+    begins[level] = x;
+    if (level < LEVELS) marks.push({ job, x, level, words });
   }
   return marks;
 }

@@ -23,7 +23,7 @@ interface RegisterRowProps {
   onKey(event: KeyboardEvent): void;
 }
 
-const cell = 'h-8 border-b border-hair px-2 align-middle group-data-open:border-b-0 group-data-open:border-t-2 group-data-open:border-t-ink pointer-coarse:h-11';
+const cell = 'h-8 border-b border-hair px-2 align-middle group-data-open:border-b-0 group-data-open:border-t-2 group-data-open:border-t-ink max-[700px]:group-data-open:border-t-0 pointer-coarse:h-11';
 
 /** A job in the register; in hand and unfolded, its set of sheets lies below it. */
 export function RegisterRow({ job, today, mine, inHand, unfolded, sheet, mayEdit, onTake, onFold, onSheet, onKey }: RegisterRowProps) {

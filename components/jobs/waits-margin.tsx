@@ -10,6 +10,9 @@ const FEW = 3;
 /** notes shown in the margin */
 const MANY = 6;
 
+/** The sheet on which it is answered. */
+const sheetOf = (job: JobRow) => (job.waits.includes('survey') ? { number: 1, path: 'survey' } : { number: 2, path: 'overview' });
+
 const heading = (job: JobRow): string => `${job.number}: ${job.waits}`;
 
 interface WaitsMarginProps {
@@ -36,10 +39,15 @@ export function WaitsMargin({ rows, who, today }: WaitsMarginProps) {
                 tone={job.findings?.danger ? 'finding' : 'plain'}
                 inHand={i === 0}
                 heading={heading(job)}
-                meta={[dueWord(job, today), findingWords(job)].filter(Boolean).join('  ')}
+                meta={
+                  <>
+                    {job.due && <span className="mr-4">{dueWord(job, today)}</span>}
+                    {findingWords(job)}
+                  </>
+                }
                 actions={
-                  <ButtonLink href={`/jobs/${job.id}/overview`} tone={job.findings?.danger ? 'red' : 'ink'}>
-                    Open sheet 2
+                  <ButtonLink href={`/jobs/${job.id}/${sheetOf(job).path}`} tone={job.findings?.danger ? 'red' : 'ink'}>
+                    Open sheet {sheetOf(job).number}
                   </ButtonLink>
                 }
               >
@@ -55,7 +63,7 @@ export function WaitsMargin({ rows, who, today }: WaitsMarginProps) {
         {rows.slice(0, FEW).map((job) => (
           <li key={job.id}>
             <Link
-              href={`/jobs/${job.id}/overview`}
+              href={`/jobs/${job.id}/${sheetOf(job).path}`}
               className={`flex min-h-6 items-center gap-3 border-l-2 pl-3 no-underline pointer-coarse:min-h-11 ${job.findings?.danger ? 'border-red' : 'border-ink'}`}
             >
               <b className={`truncate ${job.findings?.danger ? 'text-red' : 'text-ink'}`}>{heading(job)}</b>

@@ -39,7 +39,7 @@ export function GivenLink({ given, onClose }: { given: Given; onClose(): void })
         readOnly
         aria-label={`One-time link for ${given.name}`}
         value={given.link}
-        className="mt-2 block w-full border border-rule bg-paper px-2 py-1 text-small"
+        className="mt-2 block w-full max-w-[760px] border border-rule bg-paper px-2 py-1 text-small"
         onFocus={(event) => event.target.select()}
       />
       <p role="status" className="min-h-4">

@@ -49,22 +49,19 @@ export function PeopleSheet({ people, mayManage, person, team, today }: PeopleSh
         state: 'live',
       }}
       keys={mayManage ? [{ keys: ['n'], does: 'invite a person' }] : []}
-      narrowMargin="above"
-      marginLabel="Roles and links"
+      marginLabel="Roles"
       margin={
-        <div className="flex flex-col gap-8">
-          {state.link && <GivenLink given={state.link} onClose={state.closeLink} />}
-          <section className={state.link ? 'max-lap:hidden' : ''}>
-            <h2 className="text-head font-bold">What a role may do</h2>
-            <dl className="mt-2 flex flex-col gap-1 lap:gap-2">
-              {ROLES.map((role) => (
-                <div key={role} className="lap:block">
-                  <dt className="inline font-bold lap:block">{role}</dt> <dd className="inline text-grey lap:block">{ROLE_WORDS[role]}</dd>
-                </div>
-              ))}
-            </dl>
-          </section>
-        </div>
+        <section>
+          <h2 className="text-head font-bold">What a role may do</h2>
+          <dl className="mt-2 flex flex-col gap-2">
+            {ROLES.map((role) => (
+              <div key={role}>
+                <dt className="font-bold">{role}</dt>
+                <dd className="text-grey">{ROLE_WORDS[role]}</dd>
+              </div>
+            ))}
+          </dl>
+        </section>
       }
       foot={
         mayManage ? (
@@ -89,6 +86,7 @@ export function PeopleSheet({ people, mayManage, person, team, today }: PeopleSh
             {waiting > 0 && `, ${waiting} invited`}
           </p>
         </header>
+        {state.link && <GivenLink given={state.link} onClose={state.closeLink} />}
         {inviting && <InviteForm state={state} onClose={() => setInviting(false)} />}
         {state.refusal && !inviting && <ErrorLine>{state.refusal}</ErrorLine>}
         <table role="table" aria-label="People of the team" className="w-full border-collapse max-[700px]:block">
