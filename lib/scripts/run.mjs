@@ -7,6 +7,8 @@ export const isRoot = () => process.getuid?.() === 0;
 
 /**
  * Runs a program to its end.
+ * @param {string} program
+ * @param {string[]} [args]
  * @param {{ env?: Record<string, string | undefined>, cwd?: string, show?: boolean, input?: string }} [options]
  *   `show` lets it write to this terminal; otherwise what it wrote is in the answer.
  * @returns {Promise<{ status: number, output: string }>} status 127 when there is no such program

@@ -29,7 +29,7 @@ test('every page of the set carries its headers and runs no script without the n
 });
 
 test('headers that pretend to come from the framework or a proxy open nothing', async ({ request }) => {
-  const tricks = [
+  const tricks: Record<string, string>[] = [
     { 'x-middleware-subrequest': 'proxy:proxy:proxy:proxy:proxy' },
     { 'x-middleware-subrequest': 'src/proxy:src/proxy:src/proxy:src/proxy:src/proxy' },
     { 'x-forwarded-host': 'elsewhere.example', 'x-forwarded-proto': 'https' },

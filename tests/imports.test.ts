@@ -1,0 +1,109 @@
+import { readFile, readdir } from 'node:fs/promises';
+import path from 'node:path';
+import { describe, expect, it } from 'vitest';
+
+const ROOT = path.resolve(import.meta.dirname, '..');
+
+/** The arrow of imports between the top-level folders: what a file of the folder at the left may import with `@/`. */
+const MAY_IMPORT: Record<string, readonly string[]> = {
+  diagram: [],
+  models: ['diagram'],
+  'lib/shared': ['diagram'],
+  'lib/server': ['lib/shared', 'models', 'diagram'],
+  components: ['lib/shared', 'diagram'],
+  app: ['components', 'lib/server', 'lib/shared', 'diagram'],
+};
+/** The same inside diagram. */
+const DIAGRAM: Record<string, readonly string[]> = {
+  document: [],
+  symbols: ['document'],
+  terminals: ['document', 'symbols'],
+  practices: ['document', 'symbols', 'terminals'],
+  calculations: ['document', 'symbols', 'terminals', 'practices'],
+  circuit: ['document', 'symbols', 'terminals', 'practices', 'calculations'],
+  rules: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit'],
+  layout: ['document', 'symbols', 'terminals'],
+  // A draft is placed on the sheet as well.
+  survey: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit', 'rules', 'layout'],
+  paper: ['document', 'symbols', 'terminals', 'layout'],
+  commands: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit', 'rules', 'survey', 'layout', 'paper'],
+};
+const PACKAGES: Record<string, RegExp> = {
+  diagram: /^zod$/,
+  models: /^(sequelize|zod)$/,
+  'lib/shared': /^(zod|idb|react)$/,
+};
+const IMPORT = /^\s*(?:import|export)\s[^'"`;]*?from\s+['"]([^'"]+)['"]|^\s*import\s+['"]([^'"]+)['"]|\bimport\(\s*['"]([^'"]+)['"]/gm;
+
+interface Import {
+  file: string;
+  from: string;
+  of: string;
+}
+
+async function importsOf(folder: string): Promise<Import[]> {
+  const names = await readdir(path.join(ROOT, folder), { recursive: true }).catch(() => []);
+  const files = names.filter((name) => /\.tsx?$/.test(name)).map((name) => path.posix.join(folder, name));
+  const found = await Promise.all(
+    files.map(async (file) => {
+      const text = await readFile(path.join(ROOT, file), 'utf8');
+      return [...text.matchAll(IMPORT)].map((match) => ({ file, from: match[1] ?? match[2] ?? match[3]!, of: folder }));
+    }),
+  );
+  return found.flat();
+}
+
+const folders = Object.keys(MAY_IMPORT);
+const all = (await Promise.all(folders.map(importsOf))).flat();
+const show = ({ file, from }: Import) => `${file} imports ${from}`;
+/** The top-level folder that an import leads to; undefined for a package. */
+const targetOf = ({ file, from }: Import): string | undefined => {
+  const place = from.startsWith('@/') ? from.slice(2) : from.startsWith('.') ? path.posix.join(path.posix.dirname(file), from) : null;
+  if (place === null) return undefined;
+  return folders.find((folder) => place === folder || place.startsWith(`${folder}/`)) ?? place;
+};
+
+describe('imports', () => {
+  it('are read at all', () => {
+    expect(all.length).toBeGreaterThan(100);
+    for (const folder of folders) expect(all.some(({ of }) => of === folder)).toBe(true);
+  });
+
+  it('go one way between the top-level folders', () => {
+    const wrong = all.filter((one) => {
+      const target = targetOf(one);
+      return target !== undefined && target !== one.of && !MAY_IMPORT[one.of]!.includes(target);
+    });
+    expect(wrong.map(show)).toEqual([]);
+  });
+
+  it('never leave a folder by a relative path', () => {
+    expect(all.filter((one) => one.from.startsWith('.') && targetOf(one) !== one.of).map(show)).toEqual([]);
+  });
+
+  it('take no package into the pure folders', () => {
+    const wrong = all.filter((one) => PACKAGES[one.of] && targetOf(one) === undefined && !PACKAGES[one.of]!.test(one.from));
+    expect(wrong.map(show)).toEqual([]);
+  });
+
+  it('go one way inside diagram', () => {
+    const inside = all.filter(({ of }) => of === 'diagram');
+    const folderOf = (place: string) => place.split('/')[1]!;
+    const wrong = inside.filter(({ file, from }) => {
+      if (!from.startsWith('.')) return false;
+      const [own, target] = [folderOf(file), folderOf(path.posix.join(path.posix.dirname(file), from))];
+      return own !== target && !DIAGRAM[own]?.includes(target);
+    });
+    expect(wrong.map(show)).toEqual([]);
+  });
+
+  it('name server-only first in every module of the server side that is more than a type', async () => {
+    const files = [...new Set(all.filter(({ of }) => of === 'lib/server').map(({ file }) => file))];
+    const without = [];
+    for (const file of files) {
+      const text = await readFile(path.join(ROOT, file), 'utf8');
+      if (!text.startsWith(`import 'server-only';`)) without.push(file);
+    }
+    expect(without).toEqual([]);
+  });
+});
