@@ -42,6 +42,7 @@ const GROUPS: readonly (readonly [DemandGroup, string])[] = [
   ['instant-water', 'Water heaters, instantaneous'],
   ['thermostatic-water', 'Water heaters with thermostat'],
   ['storage-heating', 'Storage and floor heating'],
+  ['charging', 'Charging of the backup source'],
 ];
 
 /**

@@ -19,11 +19,10 @@ export interface WayLoad {
   known: boolean;
 }
 
-/** A charger runs for hours at its current: it is counted whole, as storage heating is. */
 function groupOf({ part }: Drawn): DemandGroup {
   if (part.kind === 'socket') return 'sockets';
   if (part.kind === 'lamp' || part.kind === 'fan') return 'lighting';
-  return part.kind === 'inverter' ? 'storage-heating' : demandGroup(part.label ?? '');
+  return part.kind === 'inverter' ? 'charging' : demandGroup(part.label ?? '');
 }
 
 const add = (list: readonly Drawn[], of: (each: Drawn) => number): number => list.reduce((sum, each) => sum + of(each), 0);

@@ -33,6 +33,7 @@ export const household = (note?: string): Record<DemandGroup, Sourced<Allowance>
     'instant-water': of({ ranked: [1, 1], rest: 0.25 }),
     'thermostatic-water': of({ rest: 1 }),
     'storage-heating': of({ rest: 1 }),
+    charging: trade({ rest: 1 }, 'a charger runs for hours at its set current: counted whole, common practice'),
     sockets: of({ ranked: [1], rest: 0.4 }),
   };
 };
