@@ -1,5 +1,7 @@
 import type { Edge, Graph } from '../terminals/graph';
-import { closedEdges, reach, type Reach } from '../terminals/reach';
+import { closedEdges, reach, reaches, type Reach } from '../terminals/reach';
+import { spread } from '../terminals/spread';
+import { natureOfNode, type Nature } from './natures';
 
 /** Nodes that are earth by what they are: the supply's earth terminal (TN), electrodes, earth bars. */
 export function earthAnchors(graph: Graph): number[] {
@@ -23,23 +25,49 @@ export interface Earth {
   earthed: boolean;
 }
 
-/** Where the means of earthing is: the supply's earth on TN, electrodes on TT. */
-function meansOfEarthing(graph: Graph): number[] {
+interface Crossed {
+  edge: number;
+  between: readonly [Nature, Nature];
+}
+
+/** Neutral terminals before the home's first device or meter, where TN-C-S has its one joint of neutral and earth. */
+export function beforeOrigin(graph: Graph): (node: number) => boolean {
+  const starts = [...graph.parts.values()].filter(({ kind }) => kind === 'supply').map(({ id }) => graph.node(id, 'N')!);
+  const own = (node: number) => natureOfNode(graph, node) !== 'E' && graph.partOf[node]!.kind !== 'neutral-bar';
+  const { nodes } = spread(graph, starts, (edge) => edge.kind === 'wire', (node) => !own(node));
+  return (node) => nodes.has(node) && own(node);
+}
+
+/** True when a joint of neutral and earth is the supply's own, drawn: on TN-C-S, before the origin. */
+export function isSupplyJoint(graph: Graph, edge: number): boolean {
+  if (graph.document.supply.system !== 'TN-C-S') return false;
+  const before = beforeOrigin(graph);
+  return before(graph.edges[edge]!.a) || before(graph.edges[edge]!.b);
+}
+
+/** Where the means of earthing is: the supply's earth on TN (or its drawn joint on TN-C-S), electrodes on TT. */
+function meansOfEarthing(graph: Graph, crossed: readonly Crossed[]): number[] {
   const tt = graph.document.supply.system === 'TT';
-  return earthAnchors(graph).filter((node) => graph.partOf[node]!.kind === (tt ? 'electrode' : 'supply'));
+  const own = earthAnchors(graph).filter((node) => graph.partOf[node]!.kind === (tt ? 'electrode' : 'supply'));
+  const joints = crossed
+    .filter(({ edge, between }) => between.includes('N') && between.includes('E') && isSupplyJoint(graph, edge))
+    .flatMap(({ edge }) => [graph.edges[edge]!.a, graph.edges[edge]!.b])
+    .filter((node) => natureOfNode(graph, node) === 'E');
+  return [...new Set([...own, ...joints])];
 }
 
 /**
  * Follows the earth. Where the bar itself has no earth, what hangs on the bar still counts as reached, so that one
  * missing main earth is not said again at every part.
  */
-export function workOutEarth(graph: Graph, evaluation: { evaluated: readonly { crossed: readonly { edge: number }[] }[] }): Earth {
+export function workOutEarth(graph: Graph, evaluation: { evaluated: readonly { crossed: readonly Crossed[] }[] }): Earth {
+  const joints = evaluation.evaluated.flatMap(({ crossed }) => crossed);
   const closed = closedEdges(graph, (edge: Edge) => edge.kind === 'bond');
-  for (const { crossed } of evaluation.evaluated) for (const { edge } of crossed) closed[edge] = 0;
-  const means = meansOfEarthing(graph);
+  for (const { edge } of joints) closed[edge] = 0;
+  const means = meansOfEarthing(graph, joints);
   const fromMeans = reach(graph, means, closed);
   const bars = earthAnchors(graph).filter((node) => graph.partOf[node]!.kind === 'earth-bar');
-  const earthedBar = bars.find((node) => fromMeans.via[node] !== -2);
+  const earthedBar = bars.find((node) => reaches(fromMeans, node));
   const weight = (node: number) => reach(graph, [node], closed).order.length;
   const mainBar = earthedBar ?? bars.map((node) => ({ node, size: weight(node) })).sort((a, b) => b.size - a.size || a.node - b.node)[0]?.node;
   const starts = mainBar === undefined || earthedBar !== undefined ? means : [mainBar];

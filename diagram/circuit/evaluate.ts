@@ -6,6 +6,7 @@ import { listConditions, type Condition, type Conditions, type Source } from './
 import { findCrossedJoints, type CrossedJoint } from './crossed-joints';
 import { earthAnchors } from './earth';
 import type { Nature } from './natures';
+import { findParallelJoints, meetsDevice, type ParallelJoint } from './parallel-joints';
 import { switchPositions, type Positions } from './positions';
 
 /** The home in one condition with its two-way and cross switches in one position. */
@@ -48,9 +49,18 @@ export interface Evaluated {
   condition: Condition;
   /** wires that join line, neutral and earth whatever the switches do; taken out of everything else here */
   crossed: CrossedJoint[];
+  /**
+   * wires that close loops: lines of two devices joined, neutrals joined twice. They, and on battery those of `mains`, are
+   * taken out of `stands` and `points`, so that each point is read as it was meant; `whole` and `asDrawn` have them
+   */
+  lineLoops: ParallelJoint[];
+  neutralLoops: ParallelJoint[];
+  /** by edge: what is closed, loops included, two-way and cross switches open */
+  whole: Uint8Array;
   /** at least one; only the first without two-way and cross switches */
   stands: Stand[];
   points: ReadonlyMap<string, PointState>;
+  asDrawn: ReadonlyMap<string, PointState>;
 }
 
 export interface Evaluation extends Conditions {
@@ -124,7 +134,29 @@ function pointState(graph: Graph, part: Part, condition: Condition, stands: read
   return half ?? none;
 }
 
-function evaluateCondition(graph: Graph, condition: Condition, positions: Positions, anchors: ReadonlyMap<number, Nature>): Evaluated {
+function standsOf(graph: Graph, condition: Condition, positions: Positions, closed: Uint8Array, apart: (node: number) => boolean): Stand[] {
+  const stands: Stand[] = [];
+  for (let position = 0; position < positions.count; position++) {
+    let here = closed;
+    if (positions.sets.length > 0) {
+      here = closed.slice();
+      graph.edges.forEach((edge, number) => {
+        if (edge.kind === 'select' && positions.isClosed(edge, position)) here[number] = 1;
+      });
+    }
+    stands.push(stand(graph, condition, here, position, apart));
+  }
+  return stands;
+}
+
+/** @param onMains edges that close a loop on mains in the same positions of the changeovers */
+function evaluateCondition(
+  graph: Graph,
+  condition: Condition,
+  positions: Positions,
+  anchors: ReadonlyMap<number, Nature>,
+  onMains: readonly number[],
+): Evaluated {
   const lineStarts = condition.sources.map(({ line }) => line);
   const neutralStarts = [...anchors].filter(([, nature]) => nature === 'N').map(([node]) => node);
   const notLine = (node: number) => anchors.has(node) && anchors.get(node) !== 'L';
@@ -138,28 +170,25 @@ function evaluateCondition(graph: Graph, condition: Condition, positions: Positi
     closed = closed.slice();
     for (const { edge } of crossed) closed[edge] = 0;
   }
-
-  const stands: Stand[] = [];
-  for (let position = 0; position < positions.count; position++) {
-    let here = closed;
-    if (positions.sets.length > 0) {
-      here = closed.slice();
-      graph.edges.forEach((edge, number) => {
-        if (edge.kind === 'select' && positions.isClosed(edge, position)) here[number] = 1;
-      });
-    }
-    stands.push(stand(graph, condition, here, position, notLine));
-  }
-  const points = new Map<string, PointState>();
-  for (const part of graph.parts.values())
-    if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
-  return { condition, crossed, stands, points };
+  const whole = closed;
+  const lineLoops = findParallelJoints(graph, whole, lineStarts).filter((joint) => meetsDevice(graph, joint));
+  const neutralLoops = findParallelJoints(graph, whole, neutralStarts);
+  const loops = [...[...lineLoops, ...neutralLoops].map(({ edge }) => edge), ...onMains];
+  const states = (from: Uint8Array) => {
+    const stands = standsOf(graph, condition, positions, from, notLine);
+    const points = new Map<string, PointState>();
+    for (const part of graph.parts.values()) if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
+    return { stands, points };
+  };
+  const asDrawn = states(whole);
+  if (loops.length === 0) return { condition, crossed, lineLoops, neutralLoops, whole, ...asDrawn, asDrawn: asDrawn.points };
+  const apart = whole.slice();
+  for (const edge of loops) apart[edge] = 0;
+  return { condition, crossed, lineLoops, neutralLoops, whole, ...states(apart), asDrawn: asDrawn.points };
 }
 
-/** Works a home out in every condition: who is fed, from where, through what and back by which way. */
-export function evaluate(graph: Graph): Evaluation {
-  const conditions = listConditions(graph);
-  const positions = switchPositions(graph);
+/** Nodes that are line, neutral or earth by what they are: the poles of the sources, and the earth. */
+export function conductorAnchors(graph: Graph): Map<number, Nature> {
   const anchors = new Map<number, Nature>();
   for (const part of graph.parts.values()) {
     if (part.kind !== 'supply' && part.kind !== 'inverter') continue;
@@ -168,6 +197,20 @@ export function evaluate(graph: Graph): Evaluation {
     anchors.set(graph.node(part.id, `${prefix}N`)!, 'N');
   }
   for (const node of earthAnchors(graph)) anchors.set(node, 'E');
-  const evaluated = conditions.list.map((condition) => evaluateCondition(graph, condition, positions, anchors));
+  return anchors;
+}
+
+/** Works a home out in every condition: who is fed, from where, through what and back by which way. */
+export function evaluate(graph: Graph): Evaluation {
+  const conditions = listConditions(graph);
+  const positions = switchPositions(graph);
+  const anchors = conductorAnchors(graph);
+  const evaluated: Evaluated[] = [];
+  for (const condition of conditions.list) {
+    const places = JSON.stringify([...condition.positions]);
+    const mains = evaluated.find((other) => other.condition.base === 'mains' && JSON.stringify([...other.condition.positions]) === places);
+    const loops = mains ? [...mains.lineLoops, ...mains.neutralLoops].map(({ edge }) => edge) : [];
+    evaluated.push(evaluateCondition(graph, condition, positions, anchors, loops));
+  }
   return { ...conditions, positions, evaluated };
 }

@@ -40,12 +40,16 @@ export interface Section {
 
 const COLLECTORS = new Set(['neutral-bar', 'earth-bar', 'line-bar', 'supply', 'meter', 'isolator', 'mcb', 'rcd', 'rcbo', 'fuse', 'changeover', 'inverter']);
 
-/** The sections of a home. Where a drawing leaves the direction open (a device that no source reaches) there is none. */
-export function findSections(graph: Graph): Section[] {
+/**
+ * The sections of a home. Where a drawing leaves the direction open (a device that no source reaches) there is none.
+ * @param apart edges taken as open: wires that join what must stay apart
+ */
+export function findSections(graph: Graph, apart: ReadonlySet<number> = new Set()): Section[] {
   const lineStarts = (kind: 'supply' | 'inverter', mark: string) =>
     [...graph.parts.values()].filter((part) => part.kind === kind).map((part) => graph.node(part.id, mark)!);
   const blocked = (edge: Edge) => edge.kind === 'bypass' || edge.kind === 'through' || edge.kind === 'bond';
   const closed = closedEdges(graph, blocked);
+  for (const number of apart) closed[number] = 0;
   const mains = lineStarts('supply', 'L');
   const backup = lineStarts('inverter', 'out.L');
   const walk = reach(graph, [...mains, ...backup], closed);
@@ -59,7 +63,7 @@ export function findSections(graph: Graph): Section[] {
     const { a, b } = graph.edges[pole]!;
     if (!reaches(walk, a) || !reaches(walk, b)) continue;
     const [upstream, downstream] = walk.via[b] === pole ? [a, b] : walk.via[a] === pole ? [b, a] : [a, b];
-    const region = spread(graph, [downstream], (edge) => !blocked(edge) && !isDevice(edge));
+    const region = spread(graph, [downstream], (edge, number) => closed[number] !== 0 && !isDevice(edge));
     const points = new Map<string, Part>();
     const inverters = new Map<string, Part>();
     const next = new Set<string>();
@@ -101,10 +105,12 @@ function belongings(graph: Graph, section: Section): Pick<Way, 'parts' | 'wires'
     (edge) => edge.kind === 'wire' || edge.kind === 'switch' || edge.kind === 'select' || edge.kind === 'plug',
     (node) => COLLECTORS.has(graph.partOf[node]!.kind),
   );
+  const points = new Set(section.points);
   const parts = new Set<string>([section.device.id]);
   for (const node of [...section.nodes, ...back.nodes]) {
     const part = graph.partOf[node]!;
-    if (!COLLECTORS.has(part.kind)) parts.add(part.id);
+    const foreign = isPoint(part) && !points.has(part);
+    if (!COLLECTORS.has(part.kind) && !foreign) parts.add(part.id);
   }
   const wires = new Set<string>();
   for (const number of [...section.edges, ...back.edges]) {

@@ -1,0 +1,33 @@
+import { recalled } from './clauses';
+import type { Rule } from './types';
+
+/** No earth bar, or one that reaches neither the supply's earth nor an electrode. */
+export const noMainEarth: Rule = {
+  meta: {
+    id: 'no-main-earth',
+    severity: 'danger',
+    group: 'polarity',
+    title: 'The home has no main earth',
+    clauses: [recalled('IEC 60364-4-41', '411.3.1.1'), recalled('IEC 60364-5-54', '542.4.1')],
+    lesson:
+      'Every earth core in the home ends at one bar. If that bar hangs in the air, all cases in the home are joined to one ' +
+      'another and to nothing else: one faulty appliance makes them all live.',
+    remedy: 'Fit an earth bar and join it to the earth terminal of the supply, or on TT to an electrode.',
+  },
+  *check(context) {
+    const { graph, earth, document } = context;
+    const used = document.parts.some(({ kind }) => ['socket', 'lamp', 'fan', 'appliance', 'inverter'].includes(kind));
+    if (!used || earth.earthed) return;
+    const tt = document.supply.system === 'TT';
+    const bar = earth.mainBar === undefined ? undefined : graph.partOf[earth.mainBar]!;
+    const means = document.parts.filter(({ kind }) => kind === (tt ? 'electrode' : 'supply'));
+    const electrodes = tt ? 'an earth electrode' : 'the earth terminal of the supply';
+    yield {
+      heading: bar ? 'The earth bar has no earth' : 'There is no earth bar',
+      message:
+        (bar ? `${context.name(bar)} is not joined to ${electrodes}. ` : 'No earth bar is drawn. ') +
+        'A fault to any case makes every earthed case in the home live, and no overcurrent device clears it.',
+      parts: [...(bar ? [bar] : []), ...means].map(({ id }) => id),
+    };
+  },
+};

@@ -1,0 +1,80 @@
+import type { Source } from '../circuit/conditions';
+import { byDesignation } from '../document/names';
+import { isOvercurrent, isPoint } from '../terminals/roles-of-parts';
+import { reach } from '../terminals/reach';
+import { recalled } from './clauses';
+import type { Context } from './context';
+import { hasWire } from './readings/earth-gaps';
+import { once } from './readings/once';
+import type { Rule } from './types';
+import { capital, say, sayParts } from './readings/words';
+
+interface Bare {
+  source: Source;
+  points: Set<string>;
+  wires: Set<string>;
+  conditions: Set<string>;
+}
+
+/** What a source's line reaches before any overcurrent device, where that is used or leaves the source's own place. */
+const bareLines = once((context: Context): Bare[] => {
+  const { graph } = context;
+  const found = new Map<string, Bare>();
+  for (const { condition, whole, stands } of context.evaluated) {
+    for (const source of condition.sources) {
+      const entry = found.get(source.part.id) ?? { source, points: new Set(), wires: new Set(), conditions: new Set() };
+      for (const from of [whole, ...stands.map(({ closed }) => closed)]) {
+        const closed = from.slice();
+        graph.edges.forEach((edge, number) => {
+          if (edge.kind === 'device' && isOvercurrent(graph.parts.get(edge.part!)!)) closed[number] = 0;
+        });
+        const bare = reach(graph, [source.line], closed);
+        const fused = source.kind === 'mains' && bare.order.some((node) => graph.partOf[node]!.kind === 'fuse');
+        for (const node of bare.order) {
+          const part = graph.partOf[node]!;
+          if (isPoint(part)) entry.points.add(part.id);
+          const { wire, a, b } = graph.edges[bare.via[node]!] ?? {};
+          if (!wire || fused) continue;
+          const places = [graph.partOf[a!]!.place, graph.partOf[b!]!.place];
+          if (places.some((place) => place !== source.part.place)) entry.wires.add(wire.id);
+        }
+      }
+      if (entry.points.size === 0 && entry.wires.size === 0) continue;
+      entry.conditions.add(condition.name);
+      found.set(source.part.id, entry);
+    }
+  }
+  return [...found.values()];
+});
+
+/** A line conductor with no overcurrent device on its source side. */
+export const noOvercurrent: Rule = {
+  meta: {
+    id: 'no-overcurrent',
+    severity: 'danger',
+    group: 'overload',
+    title: 'Nothing limits the current of this conductor',
+    clauses: [recalled('IEC 60364-4-43', '433.2.1'), recalled('IEC 60364-4-43', '434.2')],
+    lesson:
+      'A conductor without fuse or breaker before it carries whatever a fault asks for, until something burns through. The inverter is no ' +
+      'fuse: it gives its full surge for seconds, and then again.',
+    remedy: 'Put a breaker or fuse at the source end of the conductor.',
+  },
+  *check(context) {
+    const { graph } = context;
+    for (const { source, points, wires, conditions } of bareLines(context)) {
+      const first = [...graph.parts.values()].filter((part) => isOvercurrent(part) && hasWire(context, graph.node(part.id, '1')!)).sort(byDesignation);
+      const what = points.size > 0 ? sayParts(context, points) : 'the line to the next device';
+      yield {
+        heading: `No overcurrent device after ${say(context, source.part.id)}`,
+        message:
+          source.kind === 'backup'
+            ? `On battery no fuse or breaker lies between ${say(context, source.part.id)} and ${what}. A fault there is fed until something burns through.`
+            : `${capital(what)} ${points.size === 1 || points.size === 0 ? 'hangs' : 'hang'} on the service with no fuse or breaker before ${points.size === 1 || points.size === 0 ? 'it' : 'them'}${first.length === 0 ? '; the drawing has none at all' : ''}.`,
+        parts: [source.part.id, ...points],
+        wires: [...wires],
+        conditions: [...conditions],
+      };
+    }
+  },
+};

@@ -1,0 +1,31 @@
+import { recalled } from './clauses';
+import { neutralFaultsOf } from './readings/neutral-faults';
+import type { Rule } from './types';
+import { capital, sayParts } from './readings/words';
+
+/** An rcd whose two poles do not carry the same current in normal use. */
+export const residualImbalance: Rule = {
+  meta: {
+    id: 'residual-imbalance',
+    severity: 'defect',
+    group: 'separation',
+    title: 'An rcd sees load current as a fault',
+    clauses: [recalled('IEC 60364-5-53', '531.3.1')],
+    lesson:
+      'An rcd compares what goes out with what comes back. If a neutral goes round it, every lamp that is switched on looks like a fault, ' +
+      'and the rcd trips until somebody bridges it out of annoyance.',
+    remedy: 'Take line and neutral of the load through the same rcd.',
+  },
+  *check(context) {
+    for (const { points, wires, devices, conditions } of neutralFaultsOf(context, 'imbalance')) {
+      const rcds = sayParts(context, devices);
+      yield {
+        heading: `${capital(rcds)} trips in normal use`,
+        message: `The line of ${sayParts(context, points)} passes ${rcds}, the neutral goes round it. As soon as current flows, ${rcds} sees it as a fault and trips.`,
+        parts: wires.length === 0 ? devices : [...devices, ...points],
+        wires,
+        conditions,
+      };
+    }
+  },
+};
