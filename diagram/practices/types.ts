@@ -74,7 +74,9 @@ export interface Allowance {
 }
 
 export type DemandGroup =
-  'lighting' | 'heating-power' | 'cooker' | 'instant-water' | 'thermostatic-water' | 'storage-heating' | 'sockets';
+  'lighting' | 'heating-power' | 'cooker' | 'instant-water' | 'thermostatic-water' | 'storage-heating'
+  | 'charging'
+  | 'sockets';
 
 /** Limits of points and watts of one way, by what it feeds. */
 export interface PointsLimit {
