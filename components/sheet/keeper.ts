@@ -99,7 +99,15 @@ export class Keeper {
     const order = Math.max(Date.now() * 1000, this.order + 1);
     this.order = order;
     const saveId = newUuid();
-    const change: QueuedChange = { saveId, drawingId: this.view.id, ...this.drawer, order, label, patch, base: this.rev };
+    const change: QueuedChange = {
+      saveId,
+      drawingId: this.view.id,
+      ...this.drawer,
+      order,
+      label,
+      patch,
+      base: this.rev,
+    };
     this.pending.push(change);
     this.unkept.add(saveId);
     this.writes.set(
@@ -126,8 +134,13 @@ export class Keeper {
   }
 
   private storageFailed(error: unknown): void {
-    const why = error instanceof DOMException && error.name === 'QuotaExceededError' ? 'its storage is full' : 'it refuses storage';
-    this.store().setState({ storageFailure: `This browser keeps nothing: ${why}. Stay here until the sheet says Saved, or get the file.` });
+    const why =
+      error instanceof DOMException && error.name === 'QuotaExceededError'
+        ? 'its storage is full'
+        : 'it refuses storage';
+    this.store().setState({
+      storageFailure: `This browser keeps nothing: ${why}. Stay here until the sheet says Saved, or get the file.`,
+    });
   }
 
   /** Sends the oldest change; the next follows when it is saved. */
@@ -230,7 +243,9 @@ export class Keeper {
       this.rev = change.rev;
     }
     this.pending = this.pending.filter((change) => !done.includes(change.saveId));
-    const keys = new Set(this.pending.flatMap((mineChange) => theirs.flatMap((their) => conflicts(mineChange.patch, their.patch))));
+    const keys = new Set(
+      this.pending.flatMap((mineChange) => theirs.flatMap((their) => conflicts(mineChange.patch, their.patch))),
+    );
     // While somebody has to choose, the changes keep the revision they were drawn on: a reload then asks again.
     if (keys.size === 0) for (const change of this.pending) change.base = this.rev;
     const myDocument = this.store().getState().document;
@@ -309,7 +324,11 @@ export class Keeper {
     const { undoSteps, redoSteps, aside } = this.store().getState();
     const { personId, windowId } = this.drawer;
     try {
-      await this.outbox?.writeHistory(this.view.id, personId, windowId, { undo: [...undoSteps], redo: [...redoSteps], aside: [...aside] });
+      await this.outbox?.writeHistory(this.view.id, personId, windowId, {
+        undo: [...undoSteps],
+        redo: [...redoSteps],
+        aside: [...aside],
+      });
     } catch (error) {
       this.storageFailed(error);
     }

@@ -92,7 +92,11 @@ export async function openOutbox(name = OUTBOX_NAME): Promise<Outbox> {
     },
     async replace(changes, gone = []) {
       const tx = db.transaction('changes', 'readwrite', strict);
-      await Promise.all([...gone.map((id) => tx.store.delete(id)), ...changes.map((change) => tx.store.put(change)), tx.done]);
+      await Promise.all([
+        ...gone.map((id) => tx.store.delete(id)),
+        ...changes.map((change) => tx.store.put(change)),
+        tx.done,
+      ]);
     },
     async remove(saveIds) {
       const tx = db.transaction('changes', 'readwrite');
@@ -107,7 +111,12 @@ export async function openOutbox(name = OUTBOX_NAME): Promise<Outbox> {
       return row && { undo: row.undo, redo: row.redo, aside: row.aside };
     },
     async writeHistory(drawingId, personId, windowId, history) {
-      await db.put('histories', { ...history, personId, key: historyKey(drawingId, personId, windowId), at: Date.now() });
+      await db.put('histories', {
+        ...history,
+        personId,
+        key: historyKey(drawingId, personId, windowId),
+        at: Date.now(),
+      });
     },
     async forgetSent(personId) {
       const tx = db.transaction('histories', 'readwrite');

@@ -74,7 +74,10 @@ export function stillThere(selection: Selection, document: Installation): Select
     wires: selection.wires.filter((id) => wires.has(id)),
     terminal: selection.terminal && parts.has(selection.terminal[0]) ? selection.terminal : null,
   };
-  const same = kept.parts.length === selection.parts.length && kept.wires.length === selection.wires.length && kept.terminal === selection.terminal;
+  const same =
+    kept.parts.length === selection.parts.length &&
+    kept.wires.length === selection.wires.length &&
+    kept.terminal === selection.terminal;
   return same ? selection : kept;
 }
 
@@ -144,7 +147,8 @@ export function createDrawingStore(view: DrawingView, keep: Keep): DrawingStore 
       },
 
       bringBack(step) {
-        if (get().run(`Bring back: ${step.label}`, step.step)) set({ aside: get().aside.filter((other) => other !== step) });
+        if (get().run(`Bring back: ${step.label}`, step.step))
+          set({ aside: get().aside.filter((other) => other !== step) });
       },
 
       select: (selection) => set({ selection: { ...get().selection, ...selection } }),

@@ -49,7 +49,9 @@ function open(view: DrawingView, me: Me): OpenDrawing & { close: () => void } {
     if (keeper.wouldLose) event.preventDefault();
   };
   const timer = setInterval(() => document.visibilityState === 'visible' && void keeper.poll(), POLL_EVERY);
-  if (channel) channel.onmessage = (event) => event.data?.drawingId === view.id && event.data.rev > store.getState().rev && void keeper.poll();
+  if (channel)
+    channel.onmessage = (event) =>
+      event.data?.drawingId === view.id && event.data.rev > store.getState().rev && void keeper.poll();
   document.addEventListener('visibilitychange', look);
   window.addEventListener('online', online);
   window.addEventListener('beforeunload', beforeUnload);

@@ -44,7 +44,9 @@ export function without(patch: Patch, keys: ReadonlySet<string>): Patch {
     for (const [name, value] of Object.entries(side)) {
       if (value === undefined) continue;
       if (Array.isArray(value) && (LISTS.has(name) || isFace(name))) {
-        const rest = value.filter((item: string | Item) => !keys.has(`${name}:${typeof item === 'string' ? item : item.id}`));
+        const rest = value.filter(
+          (item: string | Item) => !keys.has(`${name}:${typeof item === 'string' ? item : item.id}`),
+        );
         if (rest.length > 0) kept[name] = rest;
       } else if (isFace(name)) {
         const rest = Object.entries(value as object).filter(([id]) => !keys.has(`${name}:${id}`));
@@ -69,7 +71,9 @@ function partsNeeded(patch: Patch): Set<string> {
  */
 export function conflicts(mine: Patch, theirs: Patch): string[] {
   const ours = touched(mine);
-  const keys = new Set([...touched(theirs)].filter((key) => ours.has(key) && !equal(valueIn(mine, key), valueIn(theirs, key))));
+  const keys = new Set(
+    [...touched(theirs)].filter((key) => ours.has(key) && !equal(valueIn(mine, key), valueIn(theirs, key))),
+  );
   const clash = (wiring: Patch, removing: Patch) => {
     const needed = partsNeeded(wiring);
     for (const id of removing.remove?.parts ?? []) if (needed.has(id)) keys.add(`parts:${id}`);
@@ -84,7 +88,12 @@ export function conflicts(mine: Patch, theirs: Patch): string[] {
  * mine does. A part of mine that they removed comes back when mine is kept; wires of mine to a part that stays removed go.
  * @param doc the document with my change in it, to bring back what I had
  */
-export function settle(mine: Patch, doc: Installation, contested: readonly string[], theirs: ReadonlySet<string>): Patch {
+export function settle(
+  mine: Patch,
+  doc: Installation,
+  contested: readonly string[],
+  theirs: ReadonlySet<string>,
+): Patch {
   const dropped = new Set(contested.filter((key) => theirs.has(key)));
   for (const wire of mine.set?.wires ?? [])
     if (dropped.has(`parts:${wire.from[0]}`) || dropped.has(`parts:${wire.to[0]}`)) dropped.add(`wires:${wire.id}`);

@@ -59,7 +59,8 @@ export class FakeServer {
       if (this.answer) return this.answer;
       const known = this.log.find((saved) => saved.saveId === change.saveId);
       if (known) return { kind: 'saved', rev: known.rev };
-      if (base !== this.rev) return { kind: 'stale', since: structuredClone(this.log.filter((saved) => saved.rev > base)) };
+      if (base !== this.rev)
+        return { kind: 'stale', since: structuredClone(this.log.filter((saved) => saved.rev > base)) };
       this.write(structuredClone(change), this.person);
       if (this.loseAnswers > 0) {
         this.loseAnswers -= 1;

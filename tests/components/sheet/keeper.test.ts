@@ -16,7 +16,8 @@ const open = async (...args: Parameters<typeof openWindow>) => {
 const state = (w: TestWindow) => w.store.getState();
 const partIds = (w: TestWindow) => state(w).document.parts.map((part) => part.id);
 const settled = (w: TestWindow) => vi.waitFor(() => expect(state(w).saveState.kind).toBe('saved'), { timeout: 8000 });
-const reaches = (w: TestWindow, kind: string) => vi.waitFor(() => expect(state(w).saveState.kind).toBe(kind), { timeout: 8000 });
+const reaches = (w: TestWindow, kind: string) =>
+  vi.waitFor(() => expect(state(w).saveState.kind).toBe(kind), { timeout: 8000 });
 
 beforeEach(() => {
   server = new FakeServer(home());
@@ -158,7 +159,8 @@ describe('closed and killed windows', () => {
 });
 
 describe('two writers', () => {
-  const theirs = (label: string, patch: ReturnType<typeof setPart>) => server.write({ saveId: crypto.randomUUID(), label, patch });
+  const theirs = (label: string, patch: ReturnType<typeof setPart>) =>
+    server.write({ saveId: crypto.randomUUID(), label, patch });
 
   it('rebases over changes of other parts', async () => {
     const w = await open(server);

@@ -5,7 +5,8 @@ import { emptyDocument, type Installation, type Part } from '@/diagram/document/
 import type { Patch } from '@/diagram/document/patch';
 import { ANNA, type FakeServer } from './fake-server';
 
-export const home = (): Installation => emptyDocument('Kiln Row 3', 'IEC', { system: 'TN-S', voltage: 230, frequency: 50 });
+export const home = (): Installation =>
+  emptyDocument('Kiln Row 3', 'IEC', { system: 'TN-S', voltage: 230, frequency: 50 });
 
 export const setPart = (part: Part): Patch => ({ set: { parts: [part] } });
 export const lamp = (id: string, watts = 9): Part => ({ id, kind: 'lamp', watts });
