@@ -1,0 +1,89 @@
+import type { Part, PartOf } from '../document/schema';
+import { amps, exceeds } from './readings/amounts';
+import { recalled } from './clauses';
+import type { Context } from './context';
+import { figuresOf, onMains } from './readings/figures';
+import { lackOfRating } from './readings/lacking';
+import { once } from './readings/once';
+import { changePart } from './readings/remedies';
+import type { Rule } from './types';
+import { be, capital, sayParts } from './readings/words';
+
+/** Devices before the ways that carry what several of them take. */
+type Main = PartOf<'fuse' | 'meter' | 'isolator' | 'mcb' | 'rcd' | 'rcbo' | 'changeover'>;
+const MAINS: ReadonlySet<Part['kind']> = new Set(['fuse', 'meter', 'isolator', 'mcb', 'rcd', 'rcbo', 'changeover']);
+
+/** Every device that lies before a way, by id, with the chain it belongs to: devices in one line path are one chain. */
+const mainDevices = once((context: Context): Map<string, { device: Main; order: number }> => {
+  const { graph, ways } = context;
+  const own = new Set(ways.map(({ device }) => device));
+  const found = new Map<string, { device: Main; order: number }>();
+  for (const { lineDevices } of figuresOf(context).drawn)
+    lineDevices.forEach((id, order) => {
+      const device = graph.parts.get(id)!;
+      if (MAINS.has(device.kind) && !own.has(id)) found.set(id, { device: device as Main, order });
+    });
+  return found;
+});
+
+/** Overloaded devices in series together, the one nearest the source first: they carry the same excess. */
+export const overloadedMains = once((context: Context): { devices: Main[]; demandA: number }[] => {
+  const { demandBehind, drawn, waysBehind, loads } = figuresOf(context);
+  const over = new Map<string, { device: Main; order: number; demandA: number }>();
+  for (const [id, { device, order }] of mainDevices(context)) {
+    if (device.rating === undefined || waysBehind(id).some((way) => !loads.get(way)!.known)) continue;
+    const { demandA } = demandBehind(id);
+    if (exceeds(demandA, device.rating)) over.set(id, { device, order, demandA });
+  }
+  const groups: Set<string>[] = [];
+  for (const { lineDevices } of drawn) {
+    const here = lineDevices.filter((id) => over.has(id));
+    if (here.length === 0) continue;
+    const met = groups.filter((group) => here.some((id) => group.has(id)));
+    for (const group of met) groups.splice(groups.indexOf(group), 1);
+    groups.push(new Set([...met.flatMap((group) => [...group]), ...here]));
+  }
+  return groups.map((group) => {
+    const members = [...group].map((id) => over.get(id)!).sort((a, b) => a.order - b.order);
+    return { devices: members.map(({ device }) => device), demandA: members[0]!.demandA };
+  });
+});
+
+/** The home's demand, or that of a group of ways, above what stands before them. */
+export const overloadedMain: Rule = {
+  meta: {
+    id: 'overloaded-main',
+    severity: 'defect',
+    group: 'overload',
+    title: 'The home asks for more than its main devices are rated for',
+    clauses: [recalled('IEC 60364-1', '311.1'), recalled('BS 7671', '536.4.202')],
+    lesson:
+      'Main switch, meter, rcd and service fuse carry what all ways take together. Not everything runs at once, and the allowances say ' +
+      'how much of it may be left out; what remains must be within every one of them, or the one that nobody may open is the one that fails.',
+    remedy: 'Ask for a larger service and fit main devices for it, or take load off.',
+  },
+  *check(context) {
+    for (const { devices, demandA } of overloadedMains(context)) {
+      const ids = devices.map(({ id }) => id);
+      const least = Math.min(...devices.map(({ rating }) => rating!));
+      yield {
+        heading: `${capital(sayParts(context, ids, 4))} ${be(ids.length)} asked for ${amps(demandA)}`,
+        message: `After the allowances ${amps(demandA)} may flow at once; ${sayParts(context, ids)} ${be(ids.length)} rated from ${amps(least)}.`,
+        parts: ids,
+        conditions: onMains(context),
+        remedies: devices.length === 1 ? largerOf(context, devices[0]!, demandA) : [],
+      };
+    }
+  },
+  *lacks(context) {
+    for (const { device } of mainDevices(context).values()) if (device.rating === undefined) yield lackOfRating(context, device);
+  },
+};
+
+/** A main switch or rcd alone too small is exchanged; service fuse and meter are the supplier's. */
+function largerOf(context: Context, device: Main, demandA: number) {
+  if (device.kind !== 'isolator' && device.kind !== 'rcd') return [];
+  const { breakerRatingsA } = figuresOf(context).practice;
+  const rating = breakerRatingsA.value.find((each) => each >= demandA);
+  return rating === undefined ? [] : [changePart(`Fit one of ${rating} A`, device, { rating })];
+}
