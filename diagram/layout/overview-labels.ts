@@ -62,8 +62,8 @@ function barLabel(doc: Installation, plan: OverviewPlan, part: Part, body: Body)
     places: left
       ? [at(body.x + body.width, axis + 160, 'end', 'top'), at(body.x, axis + 160, 'start', 'top')]
       : [
-          at(body.x, axis - 150, 'start', 'bottom'),
-          at(body.x + body.width, axis - 150, 'end', 'bottom'),
+          at(body.x, axis - 180, 'start', 'bottom'),
+          at(body.x + body.width, axis - 180, 'end', 'bottom'),
           at(body.x - 120, axis, 'end', 'middle'),
           at(body.x, axis + 160, 'start', 'top'),
         ],

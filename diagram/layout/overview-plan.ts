@@ -103,7 +103,8 @@ class Planner {
       const column = node.children.filter((child) => child.column);
       const subs = column.filter((child) => !feedsInverter(child) && child.part.kind !== 'spd');
       for (const child of column) {
-        if (feedsInverter(child)) this.feeders.push({ node: child, x: axis, y: level });
+        const barEnd = isBar ? Math.max(axis, ...subs.map((sub) => groupX.get(sub) ?? axis)) : axis;
+        if (feedsInverter(child)) this.feeders.push({ node: child, x: barEnd, y: level });
         else if (child.part.kind === 'spd') this.hang(child, axis - m(9) - m(6) * spds++, level + MODULE, 0);
       }
       for (const child of [...subs].reverse()) stack.push({ node: child, x: subs.length > 1 ? (groupX.get(child) ?? axis) : axis, y: next });
@@ -175,7 +176,8 @@ class Planner {
     for (const { node } of this.finals) {
       let rise = 0;
       for (const other of this.finals) if (other.node !== node && isAbove(node, other.node)) rise += m(3);
-      this.positions.set(node.part.id, { x: LEFT, y: this.barLevel - rise - BAR_AXIS });
+      const own = this.content.hanging.filter((item) => item.from === node).map((item) => headX.get(item.id) ?? axes.get(item.id)!);
+      this.positions.set(node.part.id, { x: Math.min(...own) - m(2), y: this.barLevel - rise - BAR_AXIS });
     }
     this.roomsTop = this.barLevel + BAR.rooms + channel.mains;
     for (const id of inRooms) {
@@ -215,7 +217,7 @@ class Planner {
       const level = Math.max(feeder?.y ?? this.barLevel - m(5), free + above);
       free = level + m(5);
       // from the left: feeder's devices, inverter, output's devices
-      let x = (feeder?.x ?? COLUMN) + m(22);
+      let x = (feeder?.x ?? COLUMN) + (feeder && feeder.x > COLUMN ? m(8) : m(22));
       for (const node of before) {
         this.lie(node, x, level);
         x += laneStep(node.part);
@@ -340,6 +342,16 @@ function groupHeads(hanging: readonly Hanging[], axes: Map<string, number>, righ
   const headX = new Map<string, number>();
   const groupX = new Map<TreeNode, number>();
   if (groups.size <= 1) return { headX, groupX, channel: 0 };
+  const spans = [...groups].map(([from, items]) => {
+    const xs = items.map((item) => axes.get(item.id)!);
+    return { from, left: Math.min(...xs), right: Math.max(...xs) };
+  });
+  spans.sort((a, b) => a.left - b.left);
+  if (spans.every((span, i) => i === 0 || span.left - spans[i - 1]!.right >= m(5))) {
+    // each bar over its own rooms: every device stands straight above what it feeds
+    for (const { from, left, right: end } of spans) groupX.set(from, Math.floor((left + end) / 2 / MODULE) * MODULE);
+    return { headX, groupX, channel: 0 };
+  }
   const total = hanging.length * WAY_PITCH + (groups.size - 1) * WAY_PITCH;
   let x = LEFT + m(3) + Math.max(0, Math.floor((right - LEFT - m(6) - total) / 2 / MODULE) * MODULE);
   for (const [from, items] of groups) {

@@ -90,9 +90,11 @@ function itemOf(node: TreeNode, row: Row, backup: boolean): Item {
 function widen(column: Column, item: Item): void {
   const symbol = symbolFor(item.part, 'overview');
   const words = [designation(item.part), ...ratingLines(item.part)];
-  const half = item.row === 'loads' ? Math.max(...words.map((word) => textWidth(word, BODY))) / 2 + 75 : 0;
-  column.left = Math.max(column.left, item.axis, half, item.row === 'switches' ? 550 : 0);
-  column.right = Math.max(column.right, symbol.width - item.axis, half);
+  const half = item.row === 'loads' ? Math.max(...words.map((word) => textWidth(word, BODY))) / 2 + 40 : 0;
+  // a lever leans to the right; the designation of its switch stands left of the dot
+  const isSwitch = item.part.kind.startsWith('switch');
+  column.left = Math.max(column.left, isSwitch ? 500 : item.axis, half);
+  column.right = Math.max(column.right, isSwitch ? 400 : symbol.width - item.axis, half);
   column.items.push(item);
 }
 
@@ -138,7 +140,7 @@ export function placeRoom(entries: readonly Entry[], inside: (node: TreeNode) =>
   let before: Column | null = null;
   const lastWay = { mains: -WAY_PITCH, backup: -WAY_PITCH };
   for (const column of columns) {
-    axis = before ? up(axis + before.right + column.left + 100) : up(Math.max(ROOM.side, column.left + 250));
+    axis = before ? up(axis + before.right + column.left + 75) : up(Math.max(ROOM.side, column.left + 250));
     if (column.way) {
       const side = column.fromBelow ? 'backup' : 'mains';
       axis = Math.max(axis, lastWay[side] + WAY_PITCH);

@@ -60,7 +60,7 @@ export function overviewRoutes(graph: OverviewGraph, bodies: ReadonlyMap<string,
     const at = ends.get(key)!;
     return { part: at.part, x: at.x, y: at.y, ...(at.any ? { sides: ANY, even: true } : { sides: [at.side] }) };
   };
-  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: leavesPlace(graph, run) ? `cable ${run.id}` : nets.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])) }));
+  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: nets.get(run.id)!, strand: leavesPlace(graph, run) ? `cable ${run.id}` : nets.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])) }));
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height }));
   const { points, forced } = routeAll(requests, obstacles, softs);
   const paths = graph.runs.map((run): NetPath => ({ id: run.id, net: nets.get(run.id)!, points: points.get(run.id)! }));

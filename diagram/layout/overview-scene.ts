@@ -11,9 +11,12 @@ import { planOverview, type OverviewPlan } from './overview-plan';
 import { overviewPositions } from './overview-positions';
 import { leavesPlace, overviewRoutes, type OverviewRoutes } from './overview-routes';
 import { cableLabel, ringOf, ticksOf, type Ticks } from './overview-ticks';
-import type { Box } from './route-grid';
+import type { Box, Soft } from './route-grid';
 import type { Scene, SceneFrame, ScenePart, SceneRing, SceneRun, SceneText } from './scene';
 import { byIdOf } from './scene-order';
+
+/** Right edge of the names of the bands. */
+const BAND_NAMES = 1150;
 
 /** The box of a text on the sheet. */
 export function textBox(text: SceneText): Box {
@@ -28,8 +31,8 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
   const { graph } = plan;
   const places = placeEnds(graph, positions);
   const feeds = traceFeeds(doc);
-  const routes = overviewRoutes(graph, places.bodies, places.ends);
   const frames = roomFrames(doc, plan, positions, places.bodies);
+  const routes = overviewRoutes(graph, places.bodies, places.ends, spokenFor(plan, places, frames));
   const levels = actualLevels(plan, positions);
   const lettered = letter(doc, plan, places, routes, frames, feeds);
 
@@ -73,6 +76,16 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
   };
 }
 
+/** Ground where lettering is to stand: runs keep off it where they can. */
+function spokenFor(plan: OverviewPlan, { bodies }: Ends, frames: readonly SceneFrame[]): Soft[] {
+  const softs = frames.flatMap((frame) => frame.texts.map((text): Soft => ({ ...textBox(text), cost: 3 })));
+  for (const [id, body] of bodies) {
+    const { kind } = plan.graph.byId.get(id)!;
+    if (kind === 'lamp' || kind === 'fan' || kind === 'socket' || kind === 'appliance') softs.push({ x: body.x - 250, y: body.y + body.height, width: body.width + 500, height: m(4), cost: 2 });
+  }
+  return softs;
+}
+
 function scenePart(plan: OverviewPlan, { bodies }: Ends, feeds: Feeds, part: Part, texts: SceneText[]): ScenePart {
   const body = bodies.get(part.id)!;
   const feed = feeds.parts.get(part.id) ?? 'none';
@@ -104,6 +117,8 @@ interface Lettered {
 function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes: OverviewRoutes, frames: readonly SceneFrame[], feeds: Feeds): Lettered {
   const { graph } = plan;
   const ground = new Ground();
+  // the names of the bands stand here
+  ground.add({ x: -m(20), y: 0, width: m(20) + BAND_NAMES, height: Math.max(...[...bodies.values()].map((body) => body.y + body.height), 0) + m(20) });
   for (const [id, body] of bodies) ground.add(takenBy(graph.byId.get(id)!, body));
   for (const run of graph.runs) ground.addPath(routes.points.get(run.id)!, feeds.wires.get(run.wires[0] ?? '') === 'backup' ? 90 : 40);
   for (const frame of frames) {

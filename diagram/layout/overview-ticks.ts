@@ -14,7 +14,7 @@ import type { Way } from '../terminals/ways';
 const TICK_PITCH = 200;
 /** 1/100 mm from a run's axis to the end of its ticks, and to what is written beside them. */
 const TICK_REACH = 270;
-const BESIDE = 330;
+const BESIDE = 360;
 const RING_OFFSET = 500;
 
 interface Stretch {

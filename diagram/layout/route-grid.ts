@@ -23,7 +23,9 @@ export interface RouteEnd extends Point {
 
 export interface RouteRequest {
   id: string;
-  /** runs of one net may share a stretch; different nets never do */
+  /** runs of one strand may share a stretch; different strands never do */
+  strand: string;
+  /** strands of one net may meet where they end; strands of different nets never do */
   net: string;
   from: RouteEnd;
   to: RouteEnd;

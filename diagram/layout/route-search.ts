@@ -15,8 +15,10 @@ export const COST = {
   shared: 0.35,
 } as const;
 
-/** What stands on the grid: 0 is free, else the number of a net. */
+/** What stands on the grid: 0 is free, else the number of a strand. */
 export interface Occupancy {
+  /** the net of each strand */
+  netOf: readonly number[];
   /** per node, the edge to the right and the edge down */
   right: Int32Array;
   down: Int32Array;
@@ -27,9 +29,9 @@ export interface Occupancy {
   corner: Int32Array;
 }
 
-export const emptyOccupancy = (grid: Grid): Occupancy => {
+export const emptyOccupancy = (grid: Grid, netOf: readonly number[]): Occupancy => {
   const size = grid.columns * grid.rows;
-  return { right: new Int32Array(size), down: new Int32Array(size), level: new Int32Array(size), upright: new Int32Array(size), corner: new Int32Array(size) };
+  return { netOf, right: new Int32Array(size), down: new Int32Array(size), level: new Int32Array(size), upright: new Int32Array(size), corner: new Int32Array(size) };
 };
 
 const DIRECTIONS: readonly Side[] = ['up', 'right', 'down', 'left'];
@@ -70,6 +72,10 @@ const free = (occupancy: Occupancy, edge: number, level: boolean, net: number): 
   const on = level ? occupancy.right[edge]! : occupancy.down[edge]!;
   return on === 0 || on === net;
 };
+/** True when two strands are of one net, or one of them is none. */
+const joined = (occupancy: Occupancy, on: number, net: number): boolean => on === 0 || on === net || (on > 0 && occupancy.netOf[on] === occupancy.netOf[net]);
+/** The way out of a terminal may be shared by all that ends there. */
+const freeStub = (occupancy: Occupancy, edge: number, level: boolean, net: number): boolean => joined(occupancy, level ? occupancy.right[edge]! : occupancy.down[edge]!, net);
 
 /** The ways out of a terminal that nothing else has taken: straight through its own part to the first free node. */
 export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: number): Stub[] {
@@ -81,9 +87,9 @@ export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: numb
     do {
       const node = nodes.at(-1)!;
       const edge = edgeFrom(grid, node, direction);
-      if (edge < 0 || !free(occupancy, edge, isLevel(direction), net)) return;
+      if (edge < 0 || !freeStub(occupancy, edge, isLevel(direction), net)) return;
       const next = nextNode(grid, node, direction);
-      if (taken(occupancy.corner[next]!, net)) return;
+      if (!joined(occupancy, occupancy.corner[next]!, net)) return;
       if (grid.covered[next] !== 0 && grid.covered[next] !== own) return;
       nodes.push(next);
     } while (grid.covered[nodes.at(-1)!] !== 0);
@@ -107,7 +113,7 @@ export function straight(grid: Grid, occupancy: Occupancy, from: RouteEnd, to: R
       const edge = edgeFrom(grid, node, direction);
       if (edge < 0 || !free(occupancy, edge, isLevel(direction), net)) break;
       const next = nextNode(grid, node, direction);
-      if (next !== goal && (taken(occupancy.corner[next]!, net) || crosses(occupancy, next, isLevel(direction), net))) break;
+      if (next !== goal && (!joined(occupancy, occupancy.corner[next]!, net) || crosses(occupancy, next, isLevel(direction), net))) break;
       // two boxes may touch: a node that both cover lies between the terminals
       if (!allowed.has(grid.covered[next]!) && !(grid.covered[next] === -1 && next === goal)) break;
       nodes.push(next);
@@ -117,7 +123,6 @@ export function straight(grid: Grid, occupancy: Occupancy, from: RouteEnd, to: R
   return null;
 }
 
-const taken = (corner: number, net: number): boolean => corner !== 0 && corner !== net;
 const crosses = (occupancy: Occupancy, node: number, level: boolean, net: number): boolean => {
   const across = level ? occupancy.upright[node]! : occupancy.level[node]!;
   return across !== 0 && across !== net;
@@ -287,7 +292,7 @@ export class Search {
       const level = isLevel(direction);
       if (!free(occupancy, edge, level, net)) continue;
       const next = nextNode(grid, node, direction);
-      if (grid.covered[next] !== 0 || taken(occupancy.corner[next]!, net)) continue;
+      if (grid.covered[next] !== 0 || !joined(occupancy, occupancy.corner[next]!, net)) continue;
       const length = level ? Math.abs(grid.xs[next % grid.columns]! - grid.xs[node % grid.columns]!) : Math.abs(grid.ys[Math.floor(next / grid.columns)]! - grid.ys[Math.floor(node / grid.columns)]!);
       const onOwn = (level ? occupancy.right[edge] : occupancy.down[edge]) === net;
       reach(

@@ -37,8 +37,9 @@ class Router {
   constructor(
     private readonly grid: Grid,
     private readonly terminals: ReadonlyMap<number, number>,
+    netOf: readonly number[],
   ) {
-    this.occupancy = emptyOccupancy(grid);
+    this.occupancy = emptyOccupancy(grid, netOf);
     this.search = new Search(grid, this.occupancy);
     for (const [node, net] of terminals) this.occupancy.corner[node] = net;
   }
@@ -148,11 +149,13 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
   const sorted = [...requests].sort(inOrder);
   const result: Routes = { points: new Map(), forced: [] };
   const grid = buildGrid(obstacles, requests, softs);
-  const numbers = new Map<string, number>();
-  for (const net of [...new Set(requests.map((request) => request.net))].sort(byCode)) numbers.set(net, numbers.size + 1);
-  const all = sorted.map((request): Routed => ({ request, net: numbers.get(request.net)!, nodes: null, cost: Infinity }));
+  const strands = numbered(requests.map((request) => request.strand));
+  const nets = numbered(requests.map((request) => request.net));
+  const netOf: number[] = [0];
+  for (const request of requests) netOf[strands.get(request.strand)!] = nets.get(request.net)!;
+  const all = sorted.map((request): Routed => ({ request, net: strands.get(request.strand)!, nodes: null, cost: Infinity }));
   if (grid) {
-    const router = new Router(grid, terminalNodes(grid, all));
+    const router = new Router(grid, terminalNodes(grid, all, netOf), netOf);
     for (const routed of all) router.route(routed);
     for (let round = 0; round < ROUNDS; round++) {
       let changed = false;
@@ -171,14 +174,19 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
   return result;
 }
 
+/** Numbers from 1, by name. */
+function numbered(names: readonly string[]): Map<string, number> {
+  return new Map([...new Set(names)].sort(byCode).map((name, i) => [name, i + 1]));
+}
+
 /** Terminals are corners from the start: no run of another net passes over one. A terminal of several nets belongs to none. */
-function terminalNodes(grid: Grid, all: readonly Routed[]): Map<number, number> {
+function terminalNodes(grid: Grid, all: readonly Routed[], netOf: readonly number[]): Map<number, number> {
   const nodes = new Map<number, number>();
   for (const { request, net } of all)
     for (const end of [request.from, request.to]) {
       const node = nodeAt(grid, end);
       const before = nodes.get(node);
-      nodes.set(node, before === undefined || before === net ? net : -1);
+      nodes.set(node, before === undefined || before === net ? net : before > 0 && netOf[before] === netOf[net] ? before : -1);
     }
   return nodes;
 }

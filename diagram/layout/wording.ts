@@ -52,7 +52,7 @@ export function ratingLines(part: Part): string[] {
           ),
         ];
       case 'socket':
-        return [part.load ? wattsText(part.load) : (amps(part.rating) ?? '')];
+        return [amps(part.rating) ?? (part.load ? wattsText(part.load) : '')];
       case 'lamp':
       case 'fan':
       case 'appliance':
