@@ -1,6 +1,5 @@
-import { mkdir, readFile, rm } from 'node:fs/promises';
+import { access, mkdir, readFile, rm } from 'node:fs/promises';
 import path from 'node:path';
-import { access } from 'node:fs/promises';
 import { installPackages } from './debian.mjs';
 import { explain } from './explain.mjs';
 import { installDependencies } from './install.mjs';
@@ -32,7 +31,7 @@ const parts = {
   },
   async types() {
     // Types of pages that are gone stay behind and would not compile.
-    await rm('.next/types', { recursive: true, force: true });
+    for (const folder of ['.next/types', '.next/dev/types', '.next-test/types']) await rm(folder, { recursive: true, force: true });
     const made = await node(['node_modules/next/dist/bin/next', 'typegen']);
     return whole(made.status === 0 ? await node(['node_modules/typescript/bin/tsc', '--noEmit', '--incremental', 'false']) : made);
   },
