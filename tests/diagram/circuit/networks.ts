@@ -15,6 +15,8 @@ export interface TestNetwork {
   branches: TestBranch[];
   /** ideal sources from the reference */
   held: Map<number, { re: number; im: number }>;
+  /** A pushed into nodes from the reference */
+  pushed?: Map<number, number>;
 }
 
 /** Mulberry32: the same numbers from the same seed on every machine. */
@@ -29,7 +31,7 @@ export function random(seed: number): () => number {
 }
 
 /** The network as the solver takes it. */
-export function toNetwork({ size, branches, held }: TestNetwork): Network {
+export function toNetwork({ size, branches, held, pushed }: TestNetwork): Network {
   const square = (branch: TestBranch) => branch.ohm ** 2 + branch.reactance ** 2;
   return {
     size,
@@ -37,7 +39,7 @@ export function toNetwork({ size, branches, held }: TestNetwork): Network {
     to: Int32Array.from(branches, (branch) => branch.b),
     re: Float64Array.from(branches, (branch) => branch.ohm / square(branch)),
     im: Float64Array.from(branches, (branch) => -branch.reactance / square(branch)),
-    injectRe: new Float64Array(size),
+    injectRe: Float64Array.from({ length: size }, (_, node) => pushed?.get(node) ?? 0),
     injectIm: new Float64Array(size),
     held,
   };

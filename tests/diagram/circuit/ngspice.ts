@@ -21,12 +21,13 @@ const number = (value: number) => value.toPrecision(17);
 /** The networks side by side in one netlist, a zero-volt source in each branch as its ammeter. */
 function netlist(networks: readonly TestNetwork[], vectors: string): string {
   const lines = ['networks to compare'];
-  networks.forEach(({ branches, held }, w) => {
+  networks.forEach(({ branches, held, pushed }, w) => {
     const name = (node: number) => (node === REFERENCE ? '0' : `n${w}_${node}`);
     held.forEach(({ re, im }, node) => {
       const angle = (Math.atan2(im, re) * 180) / Math.PI;
       lines.push(`vs${w}_${node} ${name(node)} 0 dc 0 ac ${number(Math.hypot(re, im))} ${number(angle)}`);
     });
+    pushed?.forEach((amps, node) => lines.push(`is${w}_${node} 0 ${name(node)} dc 0 ac ${number(amps)} 0`));
     branches.forEach(({ a, b, ohm, reactance }, i) => {
       const id = `${w}_${i}`;
       lines.push(`va${id} ${name(a)} a${id} dc 0`);
