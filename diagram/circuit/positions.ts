@@ -15,6 +15,10 @@ export interface Positions {
   count: number;
   /** true when the contact is closed in this position */
   isClosed(edge: Edge, position: number): boolean;
+  /** by node, what is joined with all two-way and cross contacts open */
+  group: Int32Array;
+  /** true for line, neutral and earth before any of these switches: sets do not meet through them */
+  isRail(node: number): boolean;
 }
 
 /** More switches in one set than this share bits: 2^6 positions is the most that is looked at. */
@@ -28,7 +32,7 @@ const FIRST = new Set(['1', 'straight']);
  */
 export function switchPositions(graph: Graph): Positions {
   const selects = [...graph.parts.values()].filter(({ kind }) => kind === 'switch-2way' || kind === 'switch-cross');
-  if (selects.length === 0) return { sets: [], count: 1, isClosed: () => true };
+  if (selects.length === 0) return { sets: [], count: 1, isClosed: () => true, group: new Int32Array(), isRail: () => true };
   const closed = closedEdges(graph, (edge) => edge.kind === 'select' || edge.kind === 'bond');
   const rails: number[] = [];
   graph.partOf.forEach((part, node) => {
@@ -72,5 +76,7 @@ export function switchPositions(graph: Graph): Positions {
     sets,
     count: 2 ** bits,
     isClosed: (edge, position) => FIRST.has(edge.position!) === (((position >> bitOf.get(edge.part!)!) & 1) === 0),
+    group,
+    isRail: (node) => reaches(fixed, node),
   };
 }

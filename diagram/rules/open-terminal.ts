@@ -1,0 +1,96 @@
+import { polesOf } from '../document/kinds';
+import type { Part } from '../document/schema';
+import { COMMON_PRACTICE } from './clauses';
+import type { Context } from './context';
+import { hasWire } from './readings/earth-gaps';
+import { potentials } from './readings/potentials';
+import type { Rule } from './types';
+import { capital, say } from './readings/words';
+
+/** Terminals without which a part does not work; sets of which one must be complete are given as alternatives. */
+function needed(part: Part): readonly (readonly string[])[] {
+  switch (part.kind) {
+    case 'mcb':
+    case 'rcbo':
+      if (part.spare) return [];
+      return part.kind === 'mcb' && polesOf(part) === 1 ? [['1', '2']] : part.kind === 'mcb' ? [['1', '2'], ['3', '4']] : [['1', '2', '3', '4']];
+    case 'fuse':
+    case 'switch':
+    case 'regulator':
+      return [['1', '2']];
+    case 'isolator':
+    case 'switch-2pole':
+      return [['1', '2'], ['3', '4']];
+    case 'rcd':
+    case 'meter':
+    case 'switch-cross':
+      return [['1', '2', '3', '4']];
+    case 'switch-2way':
+      return [['C', '1'], ['C', '2']];
+    case 'changeover':
+      return [polesOf(part) === 2 ? ['A1', 'A3', 'B1', 'B3', '2', '4'] : ['A1', 'B1', '2']];
+    case 'inverter':
+      return [['in.L', 'in.N', 'out.L', 'out.N', 'bat.+', 'bat.-']];
+    case 'battery':
+      return [['+', '-']];
+    case 'supply':
+    case 'plug':
+      return [['L', 'N']];
+    case 'spd':
+      return [['L', 'N', 'E']];
+    default:
+      return [];
+  }
+}
+
+/** A rail that has line or neutral in some condition: what is missing beyond it starves nothing that is told elsewhere. */
+function isTold(context: Context, part: Part, missing: readonly string[]): boolean {
+  const { line, neutral } = potentials(context);
+  const starved = context.evaluated.some(({ points }) => [...points.values()].some(({ fed, source }) => !fed && source?.kind !== 'backup'));
+  if (!starved) return false;
+  const others = context.graph.contactsOf.get(part.id) ?? [];
+  const alive = (node: number) => line[node] === 1 || neutral[node] === 1;
+  // The dead side of a part on which points hang is the open line or open neutral of those points.
+  return others.some((number) => {
+    const { a, b } = context.graph.edges[number]!;
+    const ends = [a, b];
+    const open = ends.find((node) => missing.includes(context.graph.markOf[node]!));
+    const other = ends.find((node) => node !== open);
+    return open !== undefined && other !== undefined && !alive(other) && hasWire(context, other);
+  });
+}
+
+/** A terminal that must be connected for the part to work, and is not. */
+export const openTerminal: Rule = {
+  meta: {
+    id: 'open-terminal',
+    severity: 'defect',
+    group: 'polarity',
+    title: 'A terminal that must be wired is not',
+    clauses: [COMMON_PRACTICE],
+    lesson: 'A part with half its wires is either unfinished or wired from memory. The screw that is empty on the drawing is empty on the wall.',
+    remedy: 'Wire the terminal, or mark the way as spare.',
+  },
+  *check(context) {
+    const { graph } = context;
+    const wired = (part: Part, mark: string) => hasWire(context, graph.node(part.id, mark)!);
+    for (const part of graph.parts.values()) {
+      const sets = needed(part);
+      if (sets.length === 0) continue;
+      const marks = [...new Set(sets.flat())];
+      const touched = marks.filter((mark) => wired(part, mark));
+      if (touched.length === 0) continue;
+      // A pole is complete or not used at all; one pole at least must be complete.
+      const whole = sets.some((set) => set.every((mark) => wired(part, mark)));
+      const halves = sets.flatMap((set) => (set.some((mark) => wired(part, mark)) ? set.filter((mark) => !wired(part, mark)) : []));
+      const missing = part.kind === 'switch-2way' ? (whole ? [] : sets[0]!.filter((mark) => !wired(part, mark))) : halves;
+      const serving = part.kind === 'plug' && part.in === undefined;
+      if (missing.length === 0 || serving || isTold(context, part, missing)) continue;
+      yield {
+        heading: `${capital(say(context, part.id))} is not wired whole`,
+        message: `Terminal ${missing.join(' and ')} of ${say(context, part.id)} ${missing.length === 1 ? 'has' : 'have'} no wire: as drawn it cannot do its work.`,
+        parts: [part.id],
+      };
+    }
+  },
+};

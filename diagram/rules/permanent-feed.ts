@@ -1,0 +1,63 @@
+import type { Edge } from '../terminals/graph';
+import { reach, reaches } from '../terminals/reach';
+import { COMMON_PRACTICE } from './clauses';
+import type { Context } from './context';
+import { bypassedContacts } from './readings/bypassed';
+import { neutralContacts } from './readings/neutral-contacts';
+import { truthTables } from './readings/switch-sets';
+import type { Rule } from './types';
+import { capital, say } from './readings/words';
+
+/** A regulator turns down to off and a plug is pulled: both leave a person a way to have it dark. */
+const commands = (edge: Edge): boolean => edge.kind === 'switch' || edge.kind === 'select' || edge.kind === 'plug';
+
+/** Points whose unswitched line another rule has told already. */
+function told(context: Context): Set<string> {
+  const { graph } = context;
+  const points = new Set(neutralContacts(context).switched.flatMap((each) => each.points));
+  for (const { point, idle } of truthTables(context)) if (idle.length > 0) points.add(point);
+  // A bypassed switch makes everything on its stretch permanent.
+  const bypassed = new Set(bypassedContacts(context).flatMap(({ part }) => graph.contactsOf.get(part)!.flatMap((n) => [graph.edges[n]!.a, graph.edges[n]!.b])));
+  for (const { points: states } of context.evaluated)
+    for (const state of states.values()) {
+      const on = state.lineEdges.some((number) => bypassed.has(graph.edges[number]!.a) || bypassed.has(graph.edges[number]!.b));
+      if (on) points.add(state.part.id);
+    }
+  return points;
+}
+
+/** A lamp or fan with no control switch in its line. */
+export const permanentFeed: Rule = {
+  meta: {
+    id: 'permanent-feed',
+    severity: 'defect',
+    group: 'polarity',
+    title: 'A lamp or fan that nothing switches',
+    clauses: [COMMON_PRACTICE],
+    lesson: 'Its line comes straight from the way. It burns day and night, and whoever changes the lamp must go to the board to have it dead.',
+    remedy: 'Lead its line through a switch.',
+  },
+  *check(context) {
+    const { graph } = context;
+    const known = told(context);
+    const found = new Set<string>();
+    for (const { condition, stands, points } of context.evaluated) {
+      const closed = stands[0]!.closed.slice();
+      graph.edges.forEach((edge, number) => {
+        if (commands(edge)) closed[number] = 0;
+      });
+      const lines = condition.sources.map(({ line }) => reach(graph, [line], closed));
+      for (const state of points.values()) {
+        const { kind, id } = state.part;
+        if ((kind !== 'lamp' && kind !== 'fan') || !state.fed || known.has(id)) continue;
+        if (lines.some((walk) => reaches(walk, state.lineEnd))) found.add(id);
+      }
+    }
+    for (const id of found)
+      yield {
+        heading: `Nothing switches ${say(context, id)}`,
+        message: `${capital(say(context, id))} is joined to its way with no switch in the line: it is always on.`,
+        parts: [id],
+      };
+  },
+};

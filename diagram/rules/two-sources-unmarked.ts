@@ -1,0 +1,76 @@
+import { natureOfNode, natureOfRole } from '../circuit/natures';
+import type { Feed } from '../terminals/feeds';
+import { seen } from './clauses';
+import type { Context } from './context';
+import { sayBoard, switchboards, type Switchboard } from './readings/switchboards';
+import { once } from './readings/once';
+import type { Rule } from './types';
+import { capital } from './readings/words';
+
+/** Parts of a switchboard that hold line of a source: the first of each is enough to show it. */
+function sourcesIn(context: Context, { parts }: Switchboard): Map<Feed, string> {
+  const { graph, feeds } = context;
+  const found = new Map<Feed, string>();
+  for (const { id, kind } of parts) {
+    if (kind === 'neutral-bar' || kind === 'earth-bar') continue;
+    for (const node of nodesOf(context, id)) {
+      if (natureOfNode(graph, node) === 'D') continue;
+      for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
+        const { wire } = graph.edges[graph.around[k]!]!;
+        if (!wire || natureOfRole(wire.role) !== 'L') continue;
+        const feed = feeds.wires.get(wire.id)!;
+        if (feed !== 'none' && !found.has(feed)) found.set(feed, id);
+      }
+    }
+  }
+  return found;
+}
+
+const nodesByPart = once(({ graph }: Context) => {
+  const nodes = new Map<string, number[]>();
+  graph.partOf.forEach(({ id }, node) => nodes.set(id, [...(nodes.get(id) ?? []), node]));
+  return nodes;
+});
+const nodesOf = (context: Context, id: string): readonly number[] => nodesByPart(context).get(id)!;
+
+/** An enclosure with conductors of two sources and no warning notice. */
+export const twoSourcesUnmarked: Rule = {
+  meta: {
+    id: 'two-sources-unmarked',
+    severity: 'advice',
+    group: 'separation',
+    title: 'Two sources in one enclosure, and no notice',
+    clauses: [seen('BS 7671', '514.15.1')],
+    lesson: 'Whoever opens it switches off the breaker he knows. The other half is fed from the battery and stays live under his fingers.',
+    remedy: 'Fix a notice: two sources, isolate both.',
+  },
+  *check(context) {
+    if (context.parts('inverter').length === 0) return;
+    for (const board of switchboards(context)) {
+      const sources = sourcesIn(context, board);
+      if (!sources.has('mains') || !sources.has('backup')) continue;
+      const noticed = context.document.notices?.some(
+        (notice) => notice.place === board.place && (notice.board === undefined || notice.board === board.board) && notice.text.trim() !== '',
+      );
+      if (noticed) continue;
+      yield {
+        heading: `Two sources in ${sayBoard(context, board)}, no notice`,
+        message: `${capital(sayBoard(context, board))} holds conductors of mains and of backup, and no warning notice is fixed to it.`,
+        parts: [sources.get('mains')!, sources.get('backup')!],
+        remedies: [
+          {
+            label: 'Write the notice',
+            patch: {
+              set: {
+                notices: [
+                  ...(context.document.notices ?? []),
+                  { place: board.place, ...(board.board && { board: board.board }), text: 'Two sources: isolate the mains and the backup before work.' },
+                ],
+              },
+            },
+          },
+        ],
+      };
+    }
+  },
+};
