@@ -1,5 +1,5 @@
 import { readFile } from 'node:fs/promises';
-import { Stop, lastLine, run } from './run.mjs';
+import { Stop, run } from './run.mjs';
 
 /** Runs a TypeScript file of the server side, outside of the app's own server. */
 export const runServerScript = (file, args, env) =>
@@ -23,6 +23,6 @@ export async function seedDemo({ env, wanted }) {
   if (rows[0].demo > 0) return accounts;
   if (rows[0].teams > 0 || !wanted) return null;
   const { status, output } = await runServerScript('lib/scripts/seed.ts', [], env);
-  if (status !== 0) throw new Stop(`The demo could not be written: ${lastLine(output)}`);
+  if (status !== 0) throw new Stop(`The demo could not be written:\n${output.trim()}`);
   return accounts;
 }
