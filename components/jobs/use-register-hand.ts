@@ -6,7 +6,8 @@ import { lastSheet } from '@/components/frame/last-sheet';
 import { jobTabs } from '@/components/frame/tabs';
 import type { JobRow } from '@/lib/shared/jobs';
 
-const focusRow = (id: string) => document.querySelector<HTMLElement>(`[data-job="${CSS.escape(id)}"]`)?.focus();
+const focusRow = (id: string) =>
+  [...document.querySelectorAll<HTMLElement>('[data-job]')].find((row) => row.dataset.job === id)?.focus();
 
 export interface RegisterHand {
   row: string | undefined;

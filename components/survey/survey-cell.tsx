@@ -1,6 +1,6 @@
 'use client';
 
-import { useState, type ClipboardEvent, type KeyboardEvent } from 'react';
+import { useLayoutEffect, useRef, useState, type ClipboardEvent, type KeyboardEvent } from 'react';
 import type { SurveyRoom } from '@/diagram/document/schema';
 import { emptyCell, showCell, type TypedColumn } from './columns';
 import { cellName, focusCell } from './focus';
@@ -26,6 +26,11 @@ export function SurveyCell({ survey, room, column, problem, below, above, classN
   const refused = survey.refused.get(refusedKey(room.id, id));
   const isBlank = room.id === survey.blank.id;
   const [inHand, setInHand] = useState(false);
+  const input = useRef<HTMLInputElement>(null);
+  // Before the next key: the first letter typed replaces what stands there.
+  useLayoutEffect(() => {
+    if (inHand) input.current?.select();
+  }, [inHand]);
   // `3 of 2` while nobody is in the cell; what was typed as soon as somebody is.
   const marked = !inHand && problem?.cell ? problem.cell : undefined;
   const shown = typed ?? refused?.text ?? marked ?? (isBlank ? '' : showCell(id, room));
@@ -67,6 +72,7 @@ export function SurveyCell({ survey, room, column, problem, below, above, classN
 
   return (
     <input
+      ref={input}
       data-cell={cellName(room.id, id)}
       data-typing={typed === null ? undefined : ''}
       aria-label={`${isBlank ? 'New room' : room.name || 'Unnamed room'}, ${column.spoken}`}
@@ -80,12 +86,9 @@ export function SurveyCell({ survey, room, column, problem, below, above, classN
       value={shown}
       placeholder={isBlank ? { name: 'name', kind: 'kind' }[id as string] : emptyCell(id)}
       className={`block h-full w-full min-w-0 bg-transparent px-2 max-lap:px-1 placeholder:text-grey focus:outline-2 focus:-outline-offset-3 focus:outline-ink aria-invalid:font-bold aria-invalid:text-red aria-invalid:outline-2 aria-invalid:-outline-offset-3 aria-invalid:outline-red focus:aria-invalid:outline-3 ${column.right ? 'text-right' : ''} ${className}`}
-      onFocus={(event) => {
-        const cell = event.target;
+      onFocus={() => {
         setInHand(true);
         survey.take(room.id, id);
-        // After the cell shows what was typed again.
-        requestAnimationFrame(() => document.activeElement === cell && cell.select());
       }}
       onChange={(event) => setTyped(event.target.value)}
       onBlur={() => {

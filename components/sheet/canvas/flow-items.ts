@@ -1,0 +1,56 @@
+import { Position, type Edge, type Node } from 'reactflow';
+import type { ScenePart, SceneRun } from '@/diagram/layout/scene';
+import type { Side } from '@/diagram/symbols/types';
+import { px } from './units';
+
+export type PartNode = Node<{ part: ScenePart }, 'part'>;
+export type RunEdge = Edge<{ run: SceneRun }, 'run'>;
+
+const SIDE: Record<Side, Position> = { up: Position.Top, right: Position.Right, down: Position.Bottom, left: Position.Left };
+
+/** Made once per object of the scene: what did not change is the same node again. */
+const nodes = new WeakMap<ScenePart, PartNode>();
+const edges = new WeakMap<SceneRun, RunEdge>();
+
+/** A part as a node. Its size and its terminals are given from the symbol, never measured. */
+export function nodeOf(part: ScenePart): PartNode {
+  const known = nodes.get(part);
+  if (known) return known;
+  const size = { width: Math.round(px(part.width)), height: Math.round(px(part.height)) };
+  const node: PartNode = {
+    id: part.id,
+    type: 'part',
+    position: { x: px(part.x), y: px(part.y) },
+    ...size,
+    measured: size,
+    handles: part.terminals.map(({ mark, x, y, side }) => ({
+      id: mark,
+      type: 'source' as const,
+      position: SIDE[side],
+      x: px(x - part.x),
+      y: px(y - part.y),
+      width: 1,
+      height: 1,
+    })),
+    data: { part },
+  };
+  nodes.set(part, node);
+  return node;
+}
+
+/** A run as an edge; its path is finished before the canvas sees it. */
+export function edgeOf(run: SceneRun): RunEdge {
+  const known = edges.get(run);
+  if (known) return known;
+  const edge: RunEdge = {
+    id: run.id,
+    type: 'run',
+    source: run.from[0],
+    sourceHandle: run.from[1],
+    target: run.to[0],
+    targetHandle: run.to[1],
+    data: { run },
+  };
+  edges.set(run, edge);
+  return edge;
+}

@@ -1,0 +1,45 @@
+'use client';
+
+import { useEffect, useRef, useState } from 'react';
+import type { Installation } from '@/diagram/document/schema';
+import type { Examination } from '@/diagram/rules/examination';
+import { Examiner, browserExaminer } from './examiner';
+
+export interface ExaminationState {
+  /** of the newest document that was examined; null before the first */
+  examination: Examination | null;
+  /** the document has changed since */
+  stale: boolean;
+  failure: string | null;
+  /** ms the examination took in its worker */
+  ms: number;
+}
+
+/** Examines a document as it changes; null is not examined. */
+export function useExamination(document: Installation | null): ExaminationState {
+  const examiner = useRef<Examiner | null>(null);
+  const [state, setState] = useState<{ of: Installation | null; examination: Examination | null; failure: string | null; ms: number }>({
+    of: null,
+    examination: null,
+    failure: null,
+    ms: 0,
+  });
+  useEffect(() => {
+    const mine = browserExaminer();
+    examiner.current = mine;
+    return () => mine.close();
+  }, []);
+  useEffect(() => {
+    if (!document) return;
+    let wanted = true;
+    void examiner.current?.ask(document).then((answer) => {
+      if (!wanted || !answer) return;
+      if ('failure' in answer) setState((before) => ({ ...before, of: document, failure: answer.failure }));
+      else setState({ of: document, examination: answer.examination, failure: null, ms: answer.ms });
+    });
+    return () => {
+      wanted = false;
+    };
+  }, [document]);
+  return { examination: state.examination, stale: state.of !== document, failure: state.failure, ms: state.ms };
+}

@@ -1,0 +1,84 @@
+import { createStore, type StoreApi } from 'zustand/vanilla';
+import { useStore } from 'zustand';
+import { createContext, useContext } from 'react';
+import type { End, Face, Installation } from '@/diagram/document/schema';
+import type { Point } from '@/diagram/layout/scene';
+import type { Choice } from '@/diagram/commands/extend/types';
+
+/** What the hands are doing on the sheet. One thing at a time; Esc goes one step back. */
+export type Mode =
+  | { kind: 'rest' }
+  /** the slip of suggestions is open at a terminal */
+  | { kind: 'extend'; end: End; typed: string; index: number; open: boolean; choice: Choice }
+  /** a wire hangs from a terminal; arrows choose where it ends */
+  | { kind: 'wire'; from: End; index: number }
+  /** the parts in hand follow the arrows, in modules */
+  | { kind: 'move'; dx: number; dy: number }
+  /** a rating, designation or cable is written where it stands */
+  | { kind: 'edit'; part?: string; cable?: string; at: Point }
+  | { kind: 'find' }
+  | { kind: 'commands' }
+  | { kind: 'load'; loads: readonly string[] }
+  | { kind: 'tidy'; preview: Installation; moved: number }
+  | { kind: 'export' }
+  | { kind: 'history' };
+
+export type Condition = 'all' | 'mains' | 'outage' | 'main-off';
+
+export interface Camera {
+  all(): void;
+  zoom(by: number): void;
+  /** brings a point of the drawing, in 1/100 mm, to the middle unless it is in sight already */
+  show(point: Point, always?: boolean): void;
+  /** where a point of the drawing stands, in px of the canvas box */
+  onScreen(point: Point): Point;
+}
+
+export interface ViewState {
+  face: Face;
+  /** the page of the connections face; null: the first */
+  place: string | null;
+  mode: Mode;
+  /** the drawing as it would be: its new parts are shown dashed */
+  ghost: Installation | null;
+  condition: Condition;
+  severities: ReadonlySet<'danger' | 'defect' | 'advice'>;
+  /** key of the finding in hand */
+  finding: string | null;
+  camera: Camera | null;
+  /** phones open for reading */
+  editing: boolean;
+  setMode: (mode: Mode) => void;
+  set: (state: Partial<Omit<ViewState, 'setMode' | 'set'>>) => void;
+}
+
+export type View = StoreApi<ViewState>;
+
+export const REST: Mode = { kind: 'rest' };
+
+export const createView = (face: Face, place: string | null): View =>
+  createStore<ViewState>((set) => ({
+    face,
+    place,
+    mode: REST,
+    ghost: null,
+    condition: 'all',
+    severities: new Set(['danger', 'defect', 'advice']),
+    finding: null,
+    camera: null,
+    editing: true,
+    setMode: (mode) => set({ mode, ghost: null }),
+    set,
+  }));
+
+const ViewContext = createContext<View | null>(null);
+export const ViewProvider = ViewContext.Provider;
+
+/** The view of the sheet this component stands on. */
+export function useViewStore(): View {
+  const view = useContext(ViewContext);
+  if (!view) throw new Error('this component stands on a sheet');
+  return view;
+}
+
+export const useView = <T>(read: (state: ViewState) => T): T => useStore(useViewStore(), read);
