@@ -60,14 +60,27 @@ export function outletPlace(sketch: Sketch, room: SurveyRoom): string {
   return sketch.place({ id: dryPlaceId(room), name: `${room.name.slice(0, 55)}, outside the zones`, kind: 'room' });
 }
 
+interface OutletNeed {
+  id: string;
+  watts: number;
+  size: RunSize;
+  from: Taps;
+  /** m, of the cable that brings it */
+  length: number;
+  fromBoard: boolean;
+  /** name of its box, where that is to be told from the others of the room */
+  box?: string;
+}
+
 /** One more outlet of a row. @returns where the row goes on */
-export function drawOutlet(sketch: Sketch, room: SurveyRoom, id: string, watts: number, size: RunSize, from: Taps, length: number, fromBoard: boolean): Taps {
+export function drawOutlet(sketch: Sketch, room: SurveyRoom, need: OutletNeed): Taps {
+  const { id, watts, from } = need;
   const pattern = outletPattern(sketch.practice, watts, sketch.supply.voltage);
   sketch.part(
-    { id, kind: 'socket', place: outletPlace(sketch, room), rating: pattern.ratingA, pattern: pattern.id, load: watts },
+    { id, kind: 'socket', place: outletPlace(sketch, room), ...(need.box && { board: need.box }), rating: pattern.ratingA, pattern: pattern.id, load: watts },
     sketch.nextRef('X', sketch.outletsFrom),
   );
-  const cable = cableOf(sketch, `${id}.cable`, size, length, { fromBoard });
+  const cable = cableOf(sketch, `${id}.cable`, need.size, need.length, { fromBoard: need.fromBoard });
   sketch.wire(from.line, [id, 'L'], 'line', cable);
   sketch.wire(from.neutral, [id, 'N'], 'neutral', cable);
   sketch.wire(from.earth, [id, 'E'], 'earth', cable);
@@ -81,7 +94,14 @@ function drawOutlets(sketch: Sketch, way: WayPlan, from: Taps, bars: WayBars): v
   let taps = from;
   outlets.forEach((number, i) => {
     const first = i === 0;
-    taps = drawOutlet(sketch, room, `${roomKey(room)}.outlet${number}`, OUTLET_WATTS, size, taps, first ? runOf(room) : LENGTH.outletToOutlet, first);
+    taps = drawOutlet(sketch, room, {
+      id: `${roomKey(room)}.outlet${number}`,
+      watts: OUTLET_WATTS,
+      size,
+      from: taps,
+      length: first ? runOf(room) : LENGTH.outletToOutlet,
+      fromBoard: first,
+    });
   });
   if (!way.ring) return;
   const back = cableOf(sketch, `${roomKey(room)}.${wayKey(way)}.back`, size, runOf(room), { fromBoard: true });
@@ -92,7 +112,15 @@ function drawOutlets(sketch: Sketch, way: WayPlan, from: Taps, bars: WayBars): v
 
 function drawKeptOutlet(sketch: Sketch, way: WayPlan, from: Taps): void {
   const { room } = way.segments[0]!;
-  drawOutlet(sketch, room, `${roomKey(room)}.kept-outlet`, room.keepOutletWatts, sizeOf(sketch, way), from, runOf(room), true);
+  drawOutlet(sketch, room, {
+    id: `${roomKey(room)}.kept-outlet`,
+    watts: room.keepOutletWatts,
+    size: sizeOf(sketch, way),
+    from,
+    length: runOf(room),
+    fromBoard: true,
+    box: 'Backup outlet',
+  });
 }
 
 /** A heavy appliance behind its own two-pole switch; the earth passes the switch in a joint. */

@@ -80,7 +80,7 @@ function hangOn(sketch: Sketch, doc: Installation, ways: readonly Way[], wish: W
   const outlets: number[] = [];
   for (const number of wish.outlets) {
     const row = openRow(sketch, doc, ways, outletPlace(sketch, room), room, supply);
-    if (row) drawOutlet(sketch, room, `${roomKey(room)}.outlet${number}`, OUTLET_WATTS, row.size, row.taps, LENGTH.outletToOutlet, false);
+    if (row) drawOutlet(sketch, room, { id: `${roomKey(room)}.outlet${number}`, watts: OUTLET_WATTS, ...row, length: LENGTH.outletToOutlet, fromBoard: false });
     else outlets.push(number);
   }
   return { ...left, outlets };

@@ -56,7 +56,7 @@ export function openBox(sketch: Sketch, doc: Installation, ways: readonly Way[],
 }
 
 /** The end of a row of outlets that may go on: what the next one hangs on, and in which size. */
-export function openRow(sketch: Sketch, doc: Installation, ways: readonly Way[], place: string, room: SurveyRoom, supply: WaySupply): { taps: Taps; size: RunSize } | undefined {
+export function openRow(sketch: Sketch, doc: Installation, ways: readonly Way[], place: string, room: SurveyRoom, supply: WaySupply): { from: Taps; size: RunSize } | undefined {
   for (const way of ways) {
     const device = sketch.find(way.device);
     if (way.backup || device?.kind !== 'mcb' || device.rating === undefined) continue;
@@ -71,7 +71,7 @@ export function openRow(sketch: Sketch, doc: Installation, ways: readonly Way[],
     const lengthM = runOf(room) + (count - 1) * LENGTH.outletToOutlet;
     const needed = size && sizeRun({ ...supply, ratingA: device.rating, curve: device.curve ?? 'C', amps, lengthM, use: 'other', leastMm2: size.csaMm2 });
     if (!size || needed?.csaMm2 !== size.csaMm2) continue;
-    return { taps: { line: [last.id, 'L'], neutral: [last.id, 'N'], earth: [last.id, 'E'] }, size };
+    return { from: { line: [last.id, 'L'], neutral: [last.id, 'N'], earth: [last.id, 'E'] }, size };
   }
   return undefined;
 }
