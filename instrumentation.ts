@@ -3,4 +3,6 @@ export async function register(): Promise<void> {
   if (process.env.NEXT_RUNTIME !== 'nodejs') return;
   const { env } = await import('@/lib/server/env');
   env();
+  const { startSweeping } = await import('@/lib/server/drawings/sweep');
+  startSweeping();
 }

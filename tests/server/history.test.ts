@@ -1,5 +1,6 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import pg from 'pg';
+import { describe, expect, inject, it } from 'vitest';
 import { GET as open } from '@/app/api/drawings/[drawingId]/route';
 import { POST as save } from '@/app/api/drawings/[drawingId]/changes/route';
 import { GET as revisions, POST as record } from '@/app/api/drawings/[drawingId]/revisions/route';
@@ -10,6 +11,7 @@ import { sha256 } from '@/lib/server/drawings/hash';
 import { loadState, readSnapshot } from '@/lib/server/drawings/load-state';
 import { nextLetter } from '@/lib/server/drawings/record-revision';
 import { forget } from '@/lib/server/drawings/state-cache';
+import { sweepIdleDrawings } from '@/lib/server/drawings/sweep';
 import { Drawing, DrawingSnapshot } from '@/models';
 import { signedIn, type Browser } from './browser';
 import { SUPPLY, change, makeJob, makePerson, place } from './factories';
@@ -18,6 +20,16 @@ async function studio() {
   const person = await makePerson();
   const { drawingId } = await makeJob(person);
   return { teamId: person.teamId, params: { drawingId }, browser: await signedIn(person) };
+}
+
+/** Makes the changes of a team look a while old. The log cannot be rewritten, so the owner of the tables has to. */
+async function age(teamId: string): Promise<void> {
+  const owner = new pg.Client({ connectionString: inject('ownerUrl') });
+  await owner.connect();
+  await owner.query('alter table drawing_changes disable trigger drawing_changes_stay');
+  await owner.query(`update drawing_changes set at = at - interval '16 minutes' where team_id = $1`, [teamId]);
+  await owner.query('alter table drawing_changes enable trigger drawing_changes_stay');
+  await owner.end();
 }
 
 const id = fc.constantFrom('a', 'b', 'c', 'd', 'Q1', 'k-9', 'x.y', '0');
@@ -82,6 +94,21 @@ describe('a history', () => {
     const { body } = await browser.ask(open, { params });
     expect(body.rev).toBe(SNAPSHOT_EVERY + 3);
     expect(body.document.places.find((p: { id: string }) => p.id === 'p2').name).toBe('Room 202');
+  });
+
+  it('of a drawing that was left alone is frozen by the sweep, when it is worth it', async () => {
+    const { browser, params, teamId } = await studio();
+    const head = async () => (await Drawing.findOne({ where: { teamId, id: params.drawingId } }))!;
+    for (let i = 0; i < 19; i++) await browser.post(save, params, change(i, place(`p${i}`)));
+    await age(teamId);
+    await sweepIdleDrawings();
+    expect((await head()).snapshotRev).toBe(0);
+    await browser.post(save, params, change(19, place('p19')));
+    await sweepIdleDrawings();
+    expect((await head()).snapshotRev).toBe(0); // somebody draws in it right now
+    await age(teamId);
+    await sweepIdleDrawings();
+    expect((await head()).snapshotRev).toBe(20);
   });
 
   it('is not read past a gap', async () => {
