@@ -1,0 +1,53 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, test, type Page } from 'playwright/test';
+import { signInAs, type DemoRole } from './sign-in';
+
+const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
+
+async function expectNothing(page: Page, what: string) {
+  const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
+  const found = violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes.map(({ target }) => target.join(' ')).join('; ')}`);
+  expect(found).toEqual([]);
+}
+
+/** Each screen with the state in which there is most to find fault with. */
+const screens: { path: string; role: DemoRole | null; open?: (page: Page) => Promise<void> }[] = [
+  { path: '/signin', role: null },
+  { path: '/invitation#short', role: null },
+  { path: '/jobs', role: 'electrician', open: (page) => page.locator('[data-job]').first().press('Enter') },
+  { path: '/jobs?search=zzzz', role: 'electrician' },
+  { path: '/jobs/new', role: 'electrician', open: (page) => page.getByRole('button', { name: 'Begin the job' }).click() },
+  { path: '/people', role: 'admin', open: (page) => page.getByRole('button', { name: /^Change/ }).first().click() },
+  { path: '/account', role: 'trainer', open: (page) => page.getByRole('button', { name: 'Sign out everywhere' }).click() },
+  { path: '/rules', role: 'apprentice' },
+  { path: '/rules/backfeed', role: 'apprentice' },
+];
+
+for (const scheme of ['light', 'dark'] as const) {
+  for (const width of [1440, 390]) {
+    test(`axe finds nothing on the screens, ${scheme}, ${width} px`, async ({ browser, baseURL }) => {
+      test.setTimeout(180_000);
+      const contexts = new Map<DemoRole | null, Page>();
+      for (const { path, role, open } of screens) {
+        if (!contexts.has(role)) {
+          const context = await browser.newContext({ baseURL, colorScheme: scheme, viewport: { width, height: 844 }, reducedMotion: 'reduce' });
+          contexts.set(role, await context.newPage());
+          if (role) await signInAs(contexts.get(role)!, role);
+        }
+        const page = contexts.get(role)!;
+        await page.goto(path);
+        await page.waitForLoadState('networkidle');
+        await open?.(page);
+        await expectNothing(page, `${path} ${scheme} ${width}`);
+      }
+      const page = contexts.get('electrician')!;
+      await page.goto('/jobs');
+      await page.locator('[data-job]').first().press('Enter');
+      const survey = await page.getByRole('link', { name: /1 Survey/ }).getAttribute('href');
+      await page.goto(survey!);
+      await page.waitForLoadState('networkidle');
+      await expectNothing(page, `survey ${scheme} ${width}`);
+      for (const each of contexts.values()) await each.context().close();
+    });
+  }
+}
