@@ -1,70 +1,70 @@
 import { autonomyHours } from '../calculations/autonomy';
-import { backupLoad, currentAtCutoffA, type BackedLoad, type BackupLoad } from '../calculations/backup-load';
+import { backupLoad, currentAtCutoffA, type BackupLoad } from '../calculations/backup-load';
 import { ASSUMED, type Assumptions, type Bank } from '../calculations/battery-bank';
 import type { PartOf } from '../document/schema';
 import type { Graph } from '../terminals/graph';
-import type { Evaluated } from './evaluate';
-import { ASSUMED_EFFICIENCY, bankBehind, chargeWatts, takenBy } from './loads';
+import type { Drawn } from './drawn';
+import type { Evaluation } from './evaluate';
+import { ASSUMED_EFFICIENCY, bankBehind, chargeWatts } from './loads';
 
-/** What a backup source has to carry, and for how long it can. */
+/** What one backup source carries when the mains are gone, and how long. */
 export interface BackupFigures {
   inverter: PartOf<'inverter'>;
-  /** ids of the points that it feeds, in the condition in which they take most */
-  points: string[];
-  loads: BackedLoad[];
+  /** what it feeds in an outage, in the changeover positions that load it most */
+  drawn: readonly Drawn[];
+  /** running and starting; of what is known where `known` is false */
   load: BackupLoad;
-  /** false while a load that it feeds has no watts */
+  /** false while a load of it has no watts */
   known: boolean;
+  /** names of the outage conditions in which it feeds something */
+  conditions: string[];
   bank: Bank | null;
+  /** assumed of the bank's chemistry */
   assumed: Assumptions;
-  efficiency: number;
-  /** W from the mains while charging; null where charge or bank is not known */
+  /** W drawn from the mains while charging; null where charge or bank is not known */
   chargeWatts: number | null;
-  /** h at the running load; null where the bank is not known or nothing is fed */
-  autonomyHours: number | null;
-  /** A from the bank at full VA and cutoff; null without one of them */
+  /** h at the running load; null without bank, or without any load */
+  hours: number | null;
+  /** A dc at full output and cutoff; null where a rating is not given */
   dcAmps: number | null;
 }
 
-function fedBy({ points }: Evaluated, inverter: string): string[] {
-  return [...points].filter(([, state]) => state.fed && state.source?.part.id === inverter).map(([id]) => id);
-}
+const asBacked =
+  (voltage: number) =>
+  ({ part, watts, amps, startAmps }: Drawn) => ({
+    name: part.id,
+    watts,
+    pf: amps > 0 ? Math.min(1, watts / (amps * voltage)) : 1,
+    surge: amps > 0 ? startAmps / amps : 1,
+  });
 
-/** The figures of every inverter that is on and has a battery, its loads all running on battery at once. */
-export function backupFigures(
-  graph: Graph,
-  evaluated: readonly Evaluated[],
-  inverters: readonly PartOf<'inverter'>[],
-): BackupFigures[] {
-  return inverters.map((inverter) => {
-    const sets = evaluated
+/** Works out each backup source, by designation: all that it feeds on at once. */
+export function workOutBackups(graph: Graph, { backups, evaluated }: Evaluation, drawn: readonly Drawn[]): BackupFigures[] {
+  const { voltage } = graph.document.supply;
+  return backups.map((inverter) => {
+    const outages = evaluated
       .filter(({ condition }) => condition.base === 'outage')
-      .map((each) => fedBy(each, inverter.id));
-    const described = sets.map((points) => {
-      const parts = points.map((id) => graph.parts.get(id)!);
-      const taken = parts.map((part) => ({ part, wants: takenBy(part) }));
-      const loads = taken.flatMap(({ part, wants }) => (wants ? [{ name: part.id, ...wants }] : []));
-      return {
-        points,
-        loads,
-        load: backupLoad(loads),
-        known: taken.every(({ part, wants }) => wants !== null || part.kind === 'socket'),
-      };
-    });
-    const none = { points: [], loads: [], load: backupLoad([]), known: true };
-    const most = described.reduce((worst, each) => (each.load.va > worst.load.va ? each : worst), described[0] ?? none);
+      .map(({ condition, points }) => {
+        const fed = drawn.filter(({ part, isPoint }) => {
+          const state = isPoint ? points.get(part.id) : undefined;
+          return state !== undefined && state.fed && state.source?.part.id === inverter.id;
+        });
+        return { name: condition.name, fed, load: backupLoad(fed.map(asBacked(voltage))) };
+      });
+    const worst = outages.reduce((a, b) => (b.load.va > a.load.va ? b : a));
     const bank = bankBehind(graph, inverter);
     const efficiency = inverter.efficiency ?? ASSUMED_EFFICIENCY;
-    const hours = bank && most.load.watts > 0 ? autonomyHours({ bank, watts: most.load.watts, efficiency }) : null;
     const { va, cutoff } = inverter;
     return {
       inverter,
-      ...most,
+      drawn: worst.fed,
+      load: worst.load,
+      known: worst.fed.every((each) => each.known),
+      conditions: outages.filter(({ fed }) => fed.length > 0).map(({ name }) => name),
       bank,
       assumed: ASSUMED[bank?.chemistry ?? 'flooded'],
-      efficiency,
       chargeWatts: chargeWatts(graph, inverter),
-      autonomyHours: hours,
+      hours: bank && worst.load.watts > 0 ? autonomyHours({ bank, watts: worst.load.watts, efficiency }) : null,
       dcAmps: va === undefined || cutoff === undefined ? null : currentAtCutoffA({ va, efficiency, cutoffV: cutoff }),
     };
   });

@@ -1,3 +1,4 @@
+import { workOutBackups } from '../../circuit/backup-figures';
 import type { Drawn } from '../../circuit/drawn';
 import { workOutFigures } from '../../circuit/way-figures';
 import { practices } from '../../practices';
@@ -18,3 +19,6 @@ export const fedIn = ({ evaluated }: Context, drawn: readonly Drawn[]): string[]
 /** Names of the conditions in which the supply is live. */
 export const onMains = ({ evaluated }: Context): string[] =>
   evaluated.filter(({ condition }) => condition.base === 'mains').map(({ condition }) => condition.name);
+
+/** Each backup source in numbers, by designation. */
+export const backupsOf = once((context: Context) => workOutBackups(context.graph, context.evaluation, figuresOf(context).drawn));

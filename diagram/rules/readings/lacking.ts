@@ -1,6 +1,7 @@
+import { batteryStrings } from '../../circuit/loads';
 import { lacksCable } from '../../circuit/way-paths';
 import type { WayFigures } from '../../circuit/way-figures';
-import type { Part } from '../../document/schema';
+import type { Part, PartOf } from '../../document/schema';
 import type { Context } from '../context';
 import type { Lack } from '../types';
 import { say, sayWire } from './words';
@@ -31,4 +32,12 @@ export function* lackOfCables(context: Context, edges: Iterable<number>): Iterab
 /** A value of the supply's data. */
 export function* lackOfSupply(context: Context, what: string): Iterable<Lack> {
   for (const part of context.parts('supply')) yield { parts: [part.id], what: `${what} of the supply` };
+}
+
+/** What a bank cannot be reckoned without: volts and Ah of each battery behind an inverter. */
+export function* lackOfBattery(context: Context, inverter: PartOf<'inverter'>): Iterable<Lack> {
+  for (const battery of new Set(batteryStrings(context.graph, inverter).batteries.flat())) {
+    if (battery.volts === undefined) yield lackOf(context, battery, 'the volts');
+    if (battery.ah === undefined) yield lackOf(context, battery, 'the Ah');
+  }
 }
