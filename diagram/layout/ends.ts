@@ -96,7 +96,7 @@ function barBody(part: Part, at: Position, graph: OverviewGraph, ends: Map<strin
   }
   const xs = hanging.map(({ x }) => x);
   const left = Math.min(at.x, ...xs.map((x) => x - 2 * MODULE));
-  const right = Math.max(at.x + (runs.length > 0 ? 4 * MODULE : SHORT_BAR), ...xs.map((x) => x + 2 * MODULE));
+  const right = Math.max(at.x + (runs.length > 0 && part.kind === 'line-bar' ? 4 * MODULE : SHORT_BAR), ...xs.map((x) => x + 2 * MODULE));
   const terminals: SceneTerminal[] = [];
   const note = (run: OverviewRun, x: number, side: Side) => {
     ends.set(endKey(run, part.id), { part: part.id, x, y: axis, side, any: false });

@@ -17,6 +17,8 @@ export interface Label {
   lines: readonly (readonly Span[])[];
   size: number;
   places: readonly Anchor[];
+  /** left out where none of its places is free: it is written elsewhere too */
+  optional?: boolean;
 }
 
 /** A place: a point of the block's edge, and which point of the block stands there. */
@@ -132,6 +134,7 @@ export function placeLabel(ground: Ground, label: Label): Block | null {
     const block = blockAt(whole, candidate);
     if (ground.overlap(block) === 0) return take(ground, block);
   }
+  if (label.optional) return null;
   for (const variant of tries)
     for (const candidate of strays(label.places, Math.round(BODY * 0.8))) {
       const block = blockAt(variant, candidate);

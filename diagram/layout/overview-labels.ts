@@ -60,12 +60,12 @@ function barLabel(doc: Installation, plan: OverviewPlan, part: Part, body: Body)
     lines: [lines],
     size: BODY,
     places: left
-      ? [at(body.x + body.width, axis + 160, 'end', 'top'), at(body.x, axis + 160, 'start', 'top')]
+      ? [at(body.x + body.width, axis + 200, 'end', 'top'), at(body.x, axis + 200, 'start', 'top')]
       : [
           at(body.x, axis - 180, 'start', 'bottom'),
           at(body.x + body.width, axis - 180, 'end', 'bottom'),
           at(body.x - 120, axis, 'end', 'middle'),
-          at(body.x, axis + 160, 'start', 'top'),
+          at(body.x, axis + 200, 'start', 'top'),
         ],
   };
 }
@@ -113,7 +113,7 @@ export function partLabel(doc: Installation, plan: OverviewPlan, part: Part, bod
     case 'meter':
       return label([words(ref, ratings[0] ? { text: ratings[0] } : null)], [at(body.x + body.width + 120, body.y + body.height / 2, 'start', 'middle')]);
     case 'spd':
-      return label([words(ref), words(ratings[0] ? { text: ratings[0], tone: 'grey' } : null)], [...beside(axisX, body, 300, true), at(axisX, body.y + body.height + 120, 'middle', 'top')]);
+      return label([words(ref), words(ratings[0] ? { text: ratings[0], tone: 'grey' } : null)], [...beside(axisX, body, 300), at(axisX, body.y + body.height + 120, 'middle', 'top')]);
     case 'switch':
     case 'switch-2way':
     case 'switch-cross':
@@ -121,8 +121,13 @@ export function partLabel(doc: Installation, plan: OverviewPlan, part: Part, bod
     case 'regulator': {
       if (!ref) return null;
       const dot = { x: axisX, y: body.y + (part.kind === 'regulator' ? body.height / 2 : body.height / 2 + 60) };
-      const far = part.kind === 'regulator' ? 330 : 130;
-      return label([[{ ...ref, bold: false, tone: 'grey' }]], [at(dot.x - far, dot.y, 'end', 'middle'), at(dot.x + far, dot.y + 150, 'start', 'middle'), at(dot.x - far, dot.y + 350, 'end', 'middle')], 180);
+      const far = part.kind === 'regulator' ? 330 : 190;
+      return label([[{ ...ref, bold: false, tone: 'grey' }]], [
+        at(dot.x + far, dot.y + (part.kind === 'regulator' ? 0 : 60), 'start', part.kind === 'regulator' ? 'middle' : 'top'),
+        at(dot.x - far, dot.y + 60, 'end', 'top'),
+        at(dot.x - far, dot.y - 60, 'end', 'bottom'),
+        at(dot.x - far, dot.y + 350, 'end', 'middle'),
+      ], 180);
     }
     default: {
       // a device in line: its blade leans to one side, its words stand on the other

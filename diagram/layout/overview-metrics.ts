@@ -6,7 +6,7 @@ export const m = (modules: number): number => modules * MODULE;
 /** Left edge of the drawing proper; the names of the bands stand left of it. */
 export const LEFT = m(8);
 /** Axis of the column, right of the bars of neutral and earth. */
-export const COLUMN = m(48);
+export const COLUMN = m(56);
 
 /** From a line bar's axis down to what hangs from it. */
 export const BAR = {
@@ -55,7 +55,7 @@ export const FOOT = {
   /** baseline of the bar's name */
   name: m(14),
   /** axis of the neutral bar of the backup */
-  neutral: m(15),
+  neutral: m(16),
   height: m(18),
 } as const;
 

@@ -75,6 +75,7 @@ class Planner {
     const { mains } = this.tree;
     if (!mains) return;
     let spds = 0;
+    const leftmost = Math.min(COLUMN, ...groupX.values());
     const stack = [{ node: mains, x: COLUMN, y: MODULE }];
     for (let at = stack.pop(); at; at = stack.pop()) {
       const { node, x, y } = at;
@@ -102,10 +103,12 @@ class Planner {
       }
       const column = node.children.filter((child) => child.column);
       const subs = column.filter((child) => !feedsInverter(child) && child.part.kind !== 'spd');
+      // a bar that reaches further left than the arrester lies below it
+      if (!isBar && leftmost < COLUMN && column.some((child) => child.part.kind === 'spd')) next = level + m(8);
       for (const child of column) {
         const barEnd = isBar ? Math.max(axis, ...subs.map((sub) => groupX.get(sub) ?? axis)) : axis;
         if (feedsInverter(child)) this.feeders.push({ node: child, x: barEnd, y: level });
-        else if (child.part.kind === 'spd') this.hang(child, axis - m(9) - m(6) * spds++, level + MODULE, 0);
+        else if (child.part.kind === 'spd') this.hang(child, axis - m(10) - m(8) * spds++, level + MODULE, 0);
       }
       for (const child of [...subs].reverse()) stack.push({ node: child, x: subs.length > 1 ? (groupX.get(child) ?? axis) : axis, y: next });
     }
@@ -217,14 +220,16 @@ class Planner {
       const level = Math.max(feeder?.y ?? this.barLevel - m(5), free + above);
       free = level + m(5);
       // from the left: feeder's devices, inverter, output's devices
-      let x = (feeder?.x ?? COLUMN) + (feeder && feeder.x > COLUMN ? m(8) : m(22));
+      let x = (feeder?.x ?? COLUMN) + m(22);
       for (const node of before) {
         this.lie(node, x, level);
         x += laneStep(node.part);
       }
       const outWidth = inLane.reduce((sum, node) => sum + laneStep(node.part), 0);
-      const end = Math.max(x + m(13) + m(8) + outWidth, this.right + m(1) - m(3));
-      const inverterX = Math.max(x + m(13), end - outWidth - m(8));
+      // the last device ends right of the rooms, so that its run goes straight down beside them
+      const last = inLane.at(-1);
+      const reachOut = last ? m(10) + outWidth - laneStep(last.part) + symbolFor(last.part, 'overview').height : m(8);
+      const inverterX = Math.max(x + m(13), this.right + m(1) - reachOut);
       this.positions.set(root.part.id, { x: inverterX, y: level - m(3) });
       for (const node of [root, ...battery, ...inLane]) this.lane.add(node.part.id);
       this.stackUp(battery, inverterX + m(4), level - m(3));
@@ -233,7 +238,7 @@ class Planner {
         this.lie(node, at, level);
         at += laneStep(node.part);
       }
-      const drop = Math.max(at + m(1), this.right + m(2)) + m(2) * i;
+      const drop = inverterX + reachOut + m(1);
       this.right = Math.max(this.right, drop);
       for (const node of out) if (!inLane.includes(node)) bars.push({ node, drop });
     });

@@ -91,10 +91,10 @@ function widen(column: Column, item: Item): void {
   const symbol = symbolFor(item.part, 'overview');
   const words = [designation(item.part), ...ratingLines(item.part)];
   const half = item.row === 'loads' ? Math.max(...words.map((word) => textWidth(word, BODY))) / 2 + 40 : 0;
-  // a lever leans to the right; the designation of its switch stands left of the dot
+  // a lever leans to the right, over the designation of its switch
   const isSwitch = item.part.kind.startsWith('switch');
-  column.left = Math.max(column.left, isSwitch ? 500 : item.axis, half);
-  column.right = Math.max(column.right, isSwitch ? 400 : symbol.width - item.axis, half);
+  column.left = Math.max(column.left, isSwitch ? 250 : item.axis, half);
+  column.right = Math.max(column.right, isSwitch ? Math.max(400, 200 + textWidth(designation(item.part), 180)) : symbol.width - item.axis, half);
   column.items.push(item);
 }
 

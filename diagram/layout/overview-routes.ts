@@ -1,5 +1,5 @@
 import { isBar } from '../document/kinds';
-import { byCode } from '../document/schema';
+import { byCode, type End } from '../document/schema';
 import type { Side } from '../symbols/types';
 import { endKey, type Body, type RunEnd } from './ends';
 import type { OverviewGraph, OverviewRun } from './overview-graph';
@@ -10,12 +10,12 @@ import type { Point } from './scene';
 
 /** Routes of the overview's runs, and where they hop and join. */
 
-/** The net of each run: terminals that wires join, and all terminals of a bar or joint. The name of a net is its first run. */
-export function netsOf(graph: OverviewGraph): Map<string, string> {
+/** Names groups of runs that share ends; the name of a group is its first run. */
+function grouped(runs: readonly OverviewRun[], keysOf: (run: OverviewRun) => readonly string[]): Map<string, string> {
   const parent = new Map<string, string>();
   const find = (key: string): string => {
     let root = key;
-    while (parent.has(root) && parent.get(root) !== root) root = parent.get(root)!;
+    for (let up = parent.get(root); up !== undefined && up !== root; up = parent.get(root)) root = up;
     for (let at = key; at !== root; ) {
       const next = parent.get(at)!;
       parent.set(at, root);
@@ -23,22 +23,31 @@ export function netsOf(graph: OverviewGraph): Map<string, string> {
     }
     return root;
   };
-  const node = (part: string, mark: string): string => (isBar(graph.byId.get(part)!.kind) ? part : `${part} ${mark}`);
-  for (const run of graph.runs) {
-    const [a, b] = [find(node(...run.from)), find(node(...run.to))];
-    parent.set(a, a);
-    if (a !== b) parent.set(b, a);
+  for (const run of runs) {
+    const [first, ...rest] = keysOf(run);
+    for (const key of rest) {
+      const [a, b] = [find(first!), find(key)];
+      if (a !== b) parent.set(b, a);
+    }
   }
   const names = new Map<string, string>();
-  const nets = new Map<string, string>();
-  for (const run of [...graph.runs].sort((a, b) => byCode(a.id, b.id))) {
-    const root = find(node(...run.from));
+  const groups = new Map<string, string>();
+  for (const run of [...runs].sort((a, b) => byCode(a.id, b.id))) {
+    const root = find(keysOf(run)[0]!);
     if (!names.has(root)) names.set(root, run.id);
-    nets.set(run.id, names.get(root)!);
+    groups.set(run.id, names.get(root)!);
   }
-  return nets;
+  return groups;
 }
 
+/** The net of each run: terminals that wires join, and all terminals of a bar or joint. */
+export function netsOf(graph: OverviewGraph): Map<string, string> {
+  const node = ([part, mark]: End): string => (isBar(graph.byId.get(part)!.kind) ? part : `${part} ${mark}`);
+  return grouped(graph.runs, (run) => [node(run.from), node(run.to)]);
+}
+
+/** Conductors that end at one terminal part from each other at most so many modules before it. */
+const SHARED_REACH = 3;
 const ANY: readonly Side[] = ['up', 'down', 'right', 'left'];
 
 export interface OverviewRoutes {
@@ -54,13 +63,16 @@ export function leavesPlace(graph: OverviewGraph, run: OverviewRun): boolean {
   return run.cable !== undefined && graph.byId.get(run.from[0])?.place !== graph.byId.get(run.to[0])?.place;
 }
 
-export function overviewRoutes(graph: OverviewGraph, bodies: ReadonlyMap<string, Body>, ends: ReadonlyMap<string, RunEnd>, softs: readonly Soft[] = []): OverviewRoutes {
+export function overviewRoutes(graph: OverviewGraph, bodies: ReadonlyMap<string, Body>, ends: ReadonlyMap<string, RunEnd>, softs: readonly Soft[], backup: (run: OverviewRun) => boolean): OverviewRoutes {
   const nets = netsOf(graph);
+  const strandOf = (run: OverviewRun): string => (leavesPlace(graph, run) ? `cable ${run.id}` : nets.get(run.id)!);
+  // cables that end at one terminal of a device run on as one line there; at a joint each comes for itself
+  const families = grouped(graph.runs, (run) => [`strand ${strandOf(run)}`, ...[run.from, run.to].filter(([part]) => !isBar(graph.byId.get(part)!.kind)).map((e) => e.join(' '))]);
   const end = (key: string): RouteEnd => {
     const at = ends.get(key)!;
-    return { part: at.part, x: at.x, y: at.y, ...(at.any ? { sides: ANY, even: true } : { sides: [at.side] }) };
+    return { part: at.part, x: at.x, y: at.y, ...(at.any ? { sides: ANY, even: true } : { sides: [at.side], reach: SHARED_REACH }) };
   };
-  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: nets.get(run.id)!, strand: leavesPlace(graph, run) ? `cable ${run.id}` : nets.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])) }));
+  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: nets.get(run.id)!, strand: strandOf(run), family: families.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])), backup: backup(run) }));
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height }));
   const { points, forced } = routeAll(requests, obstacles, softs);
   const paths = graph.runs.map((run): NetPath => ({ id: run.id, net: nets.get(run.id)!, points: points.get(run.id)! }));

@@ -32,7 +32,7 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
   const places = placeEnds(graph, positions);
   const feeds = traceFeeds(doc);
   const frames = roomFrames(doc, plan, positions, places.bodies);
-  const routes = overviewRoutes(graph, places.bodies, places.ends, spokenFor(plan, places, frames));
+  const routes = overviewRoutes(graph, places.bodies, places.ends, spokenFor(plan, places, frames), (run) => feeds.wires.get(run.wires[0] ?? '') === 'backup');
   const levels = actualLevels(plan, positions);
   const lettered = letter(doc, plan, places, routes, frames, feeds);
 
@@ -79,6 +79,13 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
 /** Ground where lettering is to stand: runs keep off it where they can. */
 function spokenFor(plan: OverviewPlan, { bodies }: Ends, frames: readonly SceneFrame[]): Soft[] {
   const softs = frames.flatMap((frame) => frame.texts.map((text): Soft => ({ ...textBox(text), cost: 3 })));
+  // in a switchboard the mains keeps to the upper rail, the backup to the lower one
+  for (const frame of frames)
+    if (frame.kind === 'switchboard')
+      softs.push(
+        { x: frame.x, y: frame.y + m(1), width: frame.width, height: m(7), cost: 0.8, feed: 'mains' },
+        { x: frame.x, y: frame.y - m(1), width: frame.width, height: m(2), cost: 0.8, feed: 'backup' },
+      );
   for (const [id, body] of bodies) {
     const { kind } = plan.graph.byId.get(id)!;
     if (kind === 'lamp' || kind === 'fan' || kind === 'socket' || kind === 'appliance') softs.push({ x: body.x - 250, y: body.y + body.height, width: body.width + 500, height: m(4), cost: 2 });
@@ -148,7 +155,7 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     ticks.set(run.id, found);
     ground.add(found.box);
     // a cable drawn as several runs is named once
-    const label = named.has(run.cable!) ? null : cableLabel(doc, graph, run, found);
+    const label = named.has(run.cable!) ? null : cableLabel(doc, graph, run, found, ringed.has(run.id) || !plan.roomOf.has(run.from[0]));
     if (!label) continue;
     named.add(run.cable!);
     labels.push(label);

@@ -75,16 +75,19 @@ export function ticksOf(run: OverviewRun, points: readonly Point[], ringed: bool
 }
 
 /** Size and length of a run's cable, beside its ticks. */
-export function cableLabel(doc: Installation, graph: OverviewGraph, run: OverviewRun, { ticks, box }: Ticks): Label | null {
+export function cableLabel(doc: Installation, graph: OverviewGraph, run: OverviewRun, { ticks, box }: Ticks, ringed: boolean): Label | null {
   const cable = doc.cables.find((c) => c.id === run.cable);
   if (!cable || !leavesPlace(graph, run)) return null;
   const size = cableSize(cable, run.cores.length);
   const length = lengthText(cable.length);
   const middle = { x: box.x + box.width / 2, y: box.y + box.height / 2 };
   const upright = ticks.vertical;
+  const loop = !ringed;
   return {
     owner: run.id,
-    size: BODY,
+    // a loop from room to room is named in small, and only where there is room for it
+    size: loop && !upright ? 180 : BODY,
+    ...(loop && { optional: true }),
     lines: upright ? [[{ text: size }], [{ text: length }]] : [[{ text: size }, { text: length }]],
     places: upright
       ? [

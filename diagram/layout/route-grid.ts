@@ -19,22 +19,30 @@ export interface RouteEnd extends Point {
   sides: readonly Side[];
   /** every side is as good: a joint */
   even?: boolean;
+  /** how many modules beyond its part the way out may be shared with others that end here; 1 where left out */
+  reach?: number;
 }
 
 export interface RouteRequest {
   id: string;
-  /** runs of one strand may share a stretch; different strands never do */
+  /** runs of one strand may share a stretch, and it is cheap to do so */
   strand: string;
-  /** strands of one net may meet where they end; strands of different nets never do */
+  /** strands of one family end at the same terminals: they may share a stretch too, but gain nothing by it */
+  family: string;
+  /** strands of one net may touch where they end; those of different nets never touch */
   net: string;
   from: RouteEnd;
   to: RouteEnd;
+  /** fed by the backup: it keeps to ground of its own where there is a choice */
+  backup?: boolean;
 }
 
 /** Ground that costs extra to walk on: where lettering is to stand. */
 export interface Soft extends Box {
   /** added per unit of length */
   cost: number;
+  /** only for runs of this feed; for all where left out */
+  feed?: 'mains' | 'backup';
 }
 
 /** Lines this many modules beyond a part or terminal belong to the grid. */
@@ -51,8 +59,8 @@ export interface Grid {
   /** per node, the part that covers it: 0 none, -1 several, else its number in `parts` plus one */
   covered: Int32Array;
   parts: ReadonlyMap<string, number>;
-  /** per node, extra cost per unit of length */
-  soft: Float32Array;
+  /** per node, extra cost per unit of length, for runs of the mains and of the backup */
+  soft: { mains: Float32Array; backup: Float32Array };
 }
 
 function lines(spans: readonly (readonly [number, number])[], extra: readonly number[]): Int32Array {
@@ -101,7 +109,7 @@ export function buildGrid(obstacles: readonly Obstacle[], requests: readonly Rou
     rows,
     covered: new Int32Array(columns * rows),
     parts: new Map(obstacles.map((obstacle, i) => [obstacle.id, i + 1])),
-    soft: new Float32Array(columns * rows),
+    soft: { mains: new Float32Array(columns * rows), backup: new Float32Array(columns * rows) },
   };
   const within = (box: Box, tell: (node: number) => void) => {
     const [left, right] = [lineAt(xs, box.x), lineAt(xs, box.x + box.width + 1) - 1];
@@ -115,7 +123,8 @@ export function buildGrid(obstacles: readonly Obstacle[], requests: readonly Rou
   );
   for (const box of softs)
     within(box, (node) => {
-      grid.soft[node]! += box.cost;
+      if (box.feed !== 'backup') grid.soft.mains[node]! += box.cost;
+      if (box.feed !== 'mains') grid.soft.backup[node]! += box.cost;
     });
   return grid;
 }

@@ -1,4 +1,4 @@
-import type { Side } from '../symbols/types';
+import { MODULE, type Side } from '../symbols/types';
 import { lineAt, type Grid, type RouteEnd } from './route-grid';
 import type { Point } from './scene';
 
@@ -17,8 +17,9 @@ export const COST = {
 
 /** What stands on the grid: 0 is free, else the number of a strand. */
 export interface Occupancy {
-  /** the net of each strand */
+  /** the net and the family of each strand */
   netOf: readonly number[];
+  familyOf: readonly number[];
   /** per node, the edge to the right and the edge down */
   right: Int32Array;
   down: Int32Array;
@@ -29,9 +30,9 @@ export interface Occupancy {
   corner: Int32Array;
 }
 
-export const emptyOccupancy = (grid: Grid, netOf: readonly number[]): Occupancy => {
+export const emptyOccupancy = (grid: Grid, netOf: readonly number[], familyOf: readonly number[]): Occupancy => {
   const size = grid.columns * grid.rows;
-  return { netOf, right: new Int32Array(size), down: new Int32Array(size), level: new Int32Array(size), upright: new Int32Array(size), corner: new Int32Array(size) };
+  return { netOf, familyOf, right: new Int32Array(size), down: new Int32Array(size), level: new Int32Array(size), upright: new Int32Array(size), corner: new Int32Array(size) };
 };
 
 const DIRECTIONS: readonly Side[] = ['up', 'right', 'down', 'left'];
@@ -70,8 +71,10 @@ const isLevel = (direction: number): boolean => direction % 2 === 1;
 /** True when `net` may walk along an edge. */
 const free = (occupancy: Occupancy, edge: number, level: boolean, net: number): boolean => {
   const on = level ? occupancy.right[edge]! : occupancy.down[edge]!;
-  return on === 0 || on === net;
+  return same(occupancy, on, net);
 };
+/** True when a place is free for a strand or taken by one of its family. */
+const same = (occupancy: Occupancy, on: number, net: number): boolean => on === 0 || on === net || (on > 0 && occupancy.familyOf[on] === occupancy.familyOf[net]);
 /** True when two strands are of one net, or one of them is none. */
 const joined = (occupancy: Occupancy, on: number, net: number): boolean => on === 0 || on === net || (on > 0 && occupancy.netOf[on] === occupancy.netOf[net]);
 /** The way out of a terminal may be shared by all that ends there. */
@@ -93,7 +96,18 @@ export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: numb
       if (grid.covered[next] !== 0 && grid.covered[next] !== own) return;
       nodes.push(next);
     } while (grid.covered[nodes.at(-1)!] !== 0);
-    found.push({ nodes, direction, penalty: end.even ? 0 : place * COST.side });
+    const penalty = end.even ? 0 : place * COST.side;
+    found.push({ nodes: [...nodes], direction, penalty });
+    for (let more = 1; more < (end.reach ?? 1); more++) {
+      const node = nodes.at(-1)!;
+      const edge = edgeFrom(grid, node, direction);
+      if (edge < 0 || !freeStub(occupancy, edge, isLevel(direction), net)) return;
+      const next = nextNode(grid, node, direction);
+      if (grid.covered[next] !== 0 || !joined(occupancy, occupancy.corner[next]!, net)) return;
+      if (crosses(occupancy, next, isLevel(direction), net)) return;
+      nodes.push(next);
+      found.push({ nodes: [...nodes], direction, penalty: penalty + more * MODULE * COST.shared });
+    }
   });
   return found;
 }
@@ -125,7 +139,7 @@ export function straight(grid: Grid, occupancy: Occupancy, from: RouteEnd, to: R
 
 const crosses = (occupancy: Occupancy, node: number, level: boolean, net: number): boolean => {
   const across = level ? occupancy.upright[node]! : occupancy.level[node]!;
-  return across !== 0 && across !== net;
+  return !same(occupancy, across, net);
 };
 
 /** A binary heap of states by cost; equal costs leave in the order they came, so that the result is one. */
@@ -200,9 +214,10 @@ export class Search {
   /**
    * Nodes from one terminal to the other, or null where there is no way.
    * @param net number of the run's net, not 0
+   * @param backup which ground it keeps to
    * @param shares whether others of the net are drawn, whose stretches may be used
    */
-  find(from: RouteEnd, to: RouteEnd, net: number, shares: boolean): { nodes: number[]; cost: number } | null {
+  find(from: RouteEnd, to: RouteEnd, net: number, shares: boolean, backup = false): { nodes: number[]; cost: number } | null {
     const { grid } = this;
     const direct = straight(grid, this.occupancy, from, to, net);
     if (direct) return { nodes: direct, cost: Math.abs(from.x - to.x) + Math.abs(from.y - to.y) };
@@ -249,7 +264,7 @@ export class Search {
         found = state;
         foundCost = cost + goal.penalty;
       }
-      this.expand(node, heading, cost, net, reach, state);
+      this.expand(node, heading, cost, net, backup ? grid.soft.backup : grid.soft.mains, reach, state);
     }
     if (found < 0) return null;
     const middle: number[] = [];
@@ -266,7 +281,7 @@ export class Search {
     for (const stub of ends) {
       const node = stub.nodes.at(-1)!;
       const into = (stub.direction + 2) % 4;
-      const bendable = !crosses(this.occupancy, node, true, net) && !crosses(this.occupancy, node, false, net);
+      const bendable = joined(this.occupancy, this.occupancy.upright[node]!, net) && joined(this.occupancy, this.occupancy.level[node]!, net);
       for (let heading = 0; heading < 4; heading++) {
         if (heading === stub.direction || (heading !== into && !bendable)) continue;
         const penalty = stub.penalty + (heading === into ? 0 : COST.bend);
@@ -277,11 +292,13 @@ export class Search {
     return goals;
   }
 
-  private expand(node: number, heading: number, cost: number, net: number, reach: (state: number, cost: number, previous: number) => void, state: number): void {
+  private expand(node: number, heading: number, cost: number, net: number, soft: Float32Array, reach: (state: number, cost: number, previous: number) => void, state: number): void {
     const { grid, occupancy } = this;
     const here = isLevel(heading) ? occupancy.upright[node]! : occupancy.level[node]!;
     const along = isLevel(heading) ? occupancy.level[node]! : occupancy.upright[node]!;
-    const onOther = (here !== 0 && here !== net) || (along !== 0 && along !== net);
+    // where a run leaves its terminal's way out, what shares that way is no hindrance
+    const clear = (on: number): boolean => (this.from[state] === -1 ? joined(occupancy, on, net) : same(occupancy, on, net));
+    const onOther = !clear(here) || !clear(along);
     for (let direction = 0; direction < 4; direction++) {
       if ((direction + 2) % 4 === heading) continue;
       const bends = direction !== heading;
@@ -297,7 +314,7 @@ export class Search {
       const onOwn = (level ? occupancy.right[edge] : occupancy.down[edge]) === net;
       reach(
         next * 4 + direction,
-        cost + length * (onOwn ? COST.shared : 1 + grid.soft[next]!) + (bends ? COST.bend : 0) + (crosses(occupancy, next, level, net) ? COST.crossing : 0),
+        cost + length * (onOwn ? COST.shared : 1 + soft[next]!) + (bends ? COST.bend : 0) + (crosses(occupancy, next, level, net) ? COST.crossing : 0),
         state,
       );
     }

@@ -38,8 +38,9 @@ class Router {
     private readonly grid: Grid,
     private readonly terminals: ReadonlyMap<number, number>,
     netOf: readonly number[],
+    familyOf: readonly number[],
   ) {
-    this.occupancy = emptyOccupancy(grid, netOf);
+    this.occupancy = emptyOccupancy(grid, netOf, familyOf);
     this.search = new Search(grid, this.occupancy);
     for (const [node, net] of terminals) this.occupancy.corner[node] = net;
   }
@@ -58,8 +59,8 @@ class Router {
   private look({ request, net }: Routed, shares: boolean): { nodes: number[]; cost: number } | null {
     const { from, to } = request;
     return (
-      this.search.find(from, to, net, shares) ??
-      this.search.find({ ...from, sides: anySide(from) }, { ...to, sides: anySide(to) }, net, shares)
+      this.search.find(from, to, net, shares, request.backup) ??
+      this.search.find({ ...from, sides: anySide(from) }, { ...to, sides: anySide(to) }, net, shares, request.backup)
     );
   }
 
@@ -151,11 +152,16 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
   const grid = buildGrid(obstacles, requests, softs);
   const strands = numbered(requests.map((request) => request.strand));
   const nets = numbered(requests.map((request) => request.net));
+  const families = numbered(requests.map((request) => request.family));
   const netOf: number[] = [0];
-  for (const request of requests) netOf[strands.get(request.strand)!] = nets.get(request.net)!;
+  const familyOf: number[] = [0];
+  for (const { strand, net, family } of requests) {
+    netOf[strands.get(strand)!] = nets.get(net)!;
+    familyOf[strands.get(strand)!] = families.get(family)!;
+  }
   const all = sorted.map((request): Routed => ({ request, net: strands.get(request.strand)!, nodes: null, cost: Infinity }));
   if (grid) {
-    const router = new Router(grid, terminalNodes(grid, all, netOf), netOf);
+    const router = new Router(grid, terminalNodes(grid, all, netOf), netOf, familyOf);
     for (const routed of all) router.route(routed);
     for (let round = 0; round < ROUNDS; round++) {
       let changed = false;
