@@ -1,0 +1,299 @@
+import { execFileSync } from 'node:child_process';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { complex, lusolve, matrix, sparse, type Complex, type Matrix } from 'mathjs';
+import { REFERENCE, solveNetwork, type Network } from '@/diagram/circuit/solve';
+import { examine } from '@/diagram/rules/examine';
+import { draftDocument } from '@/diagram/survey/draft';
+import type { Installation, SurveyRoom } from '@/diagram/document/schema';
+
+/**
+ * npm run bench [-- --json]
+ * Each measure is a ratio of two times taken side by side in this run, medians of many, or a figure against its bar. With
+ * --json one object a line: { name, ratio, bar, holds }. Exits 1 when one does not hold.
+ */
+
+interface Measure {
+  name: string;
+  ratio: number;
+  bar: number;
+  /** the ratio must be at least the bar, or at most */
+  want: 'at least' | 'at most';
+  unit: string;
+}
+
+const median = (values: number[]): number => [...values].sort((a, b) => a - b)[Math.floor(values.length / 2)]!;
+
+function milliseconds(run: () => unknown, times: number): number {
+  const taken: number[] = [];
+  for (let i = 0; i < times; i++) {
+    const start = performance.now();
+    run();
+    taken.push(performance.now() - start);
+  }
+  return median(taken);
+}
+
+/** The same numbers in every run: mulberry32. */
+function seeded(seed: number): () => number {
+  let state = seed;
+  return () => {
+    state = (state + 0x6d2b79f5) >>> 0;
+    let t = Math.imul(state ^ (state >>> 15), 1 | state);
+    t = (t + Math.imul(t ^ (t >>> 7), 61 | t)) ^ t;
+    return ((t ^ (t >>> 14)) >>> 0) / 4294967296;
+  };
+}
+
+interface Branch {
+  a: number;
+  b: number;
+  ohm: number;
+  reactance: number;
+}
+
+/** A home's network of about so many nodes: bars, ways of line, neutral and earth, boxes, switched lamps, some rings. */
+function homeNetwork(nodes: number): { size: number; branches: Branch[] } {
+  const next = seeded(nodes);
+  const branches: Branch[] = [];
+  let size = 3;
+  const [line, neutral, earth] = [0, 1, 2];
+  const wire = (a: number, b: number, ohm: number) => branches.push({ a, b, ohm, reactance: 0 });
+  const load = (a: number, b: number) => {
+    const z = 230 ** 2 / (5 + 2000 * next() ** 3);
+    const pf = 0.6 + 0.4 * next();
+    branches.push({ a, b, ohm: z * pf, reactance: z * Math.sqrt(1 - pf * pf) });
+  };
+  wire(line, REFERENCE, 0.2);
+  wire(neutral, REFERENCE, 0.1);
+  wire(earth, REFERENCE, 0.2);
+  while (size < nodes) {
+    const top = size++;
+    wire(line, top, 1e-3);
+    let [l, n, e] = [top, neutral, earth];
+    const boxes = 3 + Math.floor(next() * 6);
+    for (let i = 0; i < boxes; i++) {
+      const run = 0.02 + 0.2 * next();
+      const [l2, n2, e2] = [size++, size++, size++];
+      wire(l, l2, run);
+      wire(n, n2, run);
+      wire(e, e2, run);
+      load(l2, n2);
+      const [contact, lamp] = [size++, size++];
+      wire(l2, contact, 1e-3);
+      wire(contact, lamp, run);
+      load(lamp, n2);
+      [l, n, e] = [l2, n2, e2];
+    }
+    if (next() < 0.2) wire(l, top, 0.2);
+  }
+  return { size, branches };
+}
+
+const AMPS = 230 / 0.2;
+
+function toNetwork({ size, branches }: ReturnType<typeof homeNetwork>): Network {
+  const square = ({ ohm, reactance }: Branch) => ohm * ohm + reactance * reactance;
+  const injectRe = new Float64Array(size);
+  injectRe[0] = AMPS;
+  return {
+    size,
+    from: Int32Array.from(branches, ({ a }) => a),
+    to: Int32Array.from(branches, ({ b }) => b),
+    re: Float64Array.from(branches, (branch) => branch.ohm / square(branch)),
+    im: Float64Array.from(branches, (branch) => -branch.reactance / square(branch)),
+    injectRe,
+    injectIm: new Float64Array(size),
+  };
+}
+
+/** The nodal matrix of the same network, as mathjs holds it. */
+function nodalMatrix({ size, from, to, re, im }: Network): { admittance: Matrix; current: Matrix } {
+  const entries = new Map<number, { re: number; im: number }>();
+  const add = (row: number, column: number, sign: number, i: number) => {
+    const key = row * size + column;
+    const entry = entries.get(key) ?? { re: 0, im: 0 };
+    entries.set(key, { re: entry.re + sign * re[i]!, im: entry.im + sign * im[i]! });
+  };
+  for (let i = 0; i < from.length; i++) {
+    const [a, b] = [from[i]!, to[i]!];
+    if (a >= 0) add(a, a, 1, i);
+    if (b >= 0) add(b, b, 1, i);
+    if (a >= 0 && b >= 0) {
+      add(a, b, -1, i);
+      add(b, a, -1, i);
+    }
+  }
+  const admittance = sparse();
+  admittance.resize([size, size]);
+  for (const [key, value] of entries) admittance.set([Math.floor(key / size), key % size], complex(value.re, value.im));
+  const current = matrix(Array.from({ length: size }, (_, node) => [complex(node === 0 ? AMPS : 0, 0)]));
+  return { admittance, current };
+}
+
+function againstMathjs(): Measure {
+  const network = toNetwork(homeNetwork(1000));
+  const { admittance, current } = nodalMatrix(network);
+  let theirs!: Matrix;
+  for (let i = 0; i < 50; i++) solveNetwork(network);
+  const theirMs = milliseconds(() => (theirs = lusolve(admittance, current) as Matrix), 3);
+  const ourMs = milliseconds(() => solveNetwork(network), 101);
+  const { re, im } = solveNetwork(network);
+  (theirs.toArray() as unknown as Complex[][]).forEach(([value], node) => {
+    const apart = Math.hypot(value!.re - re[node]!, value!.im - im[node]!);
+    if (apart > 1e-6 * 230) throw new Error(`node ${node}: the two answers are ${apart} V apart`);
+  });
+  return {
+    name: 'solve, against mathjs sparse LU at 1,000 unknowns',
+    ratio: theirMs / ourMs,
+    bar: 40,
+    want: 'at least',
+    unit: 'times',
+  };
+}
+
+/** The time that ngspice itself reports for one 50 Hz point, ms. */
+function ngspiceMs({ branches }: ReturnType<typeof homeNetwork>): number {
+  const name = (node: number) => (node === REFERENCE ? '0' : `n${node}`);
+  const lines = ['home', `is 0 n0 dc 0 ac ${AMPS}`];
+  branches.forEach(({ a, b, ohm, reactance }, i) => {
+    lines.push(`r${i} ${name(a)} ${reactance > 0 ? `m${i}` : name(b)} ${ohm}`);
+    if (reactance > 0) lines.push(`l${i} m${i} ${name(b)} ${reactance / (2 * Math.PI * 50)}`);
+  });
+  lines.push('.control', 'ac lin 1 50 50', 'rusage all', 'quit', '.endc', '.end');
+  const folder = mkdtempSync(join(tmpdir(), 'bench-'));
+  try {
+    const file = join(folder, 'home.cir');
+    writeFileSync(file, `${lines.join('\n')}\n`);
+    const said = execFileSync('ngspice', ['-b', '-n', file], {
+      encoding: 'utf8',
+      stdio: ['ignore', 'pipe', 'pipe'],
+      maxBuffer: 1e9,
+    });
+    const reported = /Total analysis time \(seconds\) = ([\d.e+-]+)/.exec(said);
+    if (!reported) throw new Error(`ngspice did not report its analysis time:\n${said.slice(-1500)}`);
+    return 1000 * Number(reported[1]);
+  } finally {
+    rmSync(folder, { recursive: true, force: true });
+  }
+}
+
+function againstNgspice(): Measure {
+  const home = homeNetwork(10_000);
+  const network = toNetwork(home);
+  for (let i = 0; i < 10; i++) solveNetwork(network);
+  const theirs: number[] = [];
+  const ours: number[] = [];
+  for (let i = 0; i < 3; i++) {
+    theirs.push(ngspiceMs(home));
+    ours.push(milliseconds(() => solveNetwork(network), 15));
+  }
+  return {
+    name: "solve, against ngspice's own analysis time at 10,000 unknowns",
+    ratio: median(theirs) / median(ours),
+    bar: 40,
+    want: 'at least',
+    unit: 'times',
+  };
+}
+
+/** A drafted home of about so many parts: as many rooms as it takes. */
+function homeOf(parts: number): Installation {
+  const room = (i: number): SurveyRoom => ({
+    id: `r${String(i).padStart(4, '0')}`,
+    order: i,
+    name: `Room ${i}`,
+    kind: 'room',
+    lamps: 4,
+    lampWatts: 9,
+    fans: 1,
+    fanWatts: 60,
+    outlets: 4,
+    heavy: i % 5 === 0 ? [{ what: 'Water heater', watts: 2000 }] : [],
+    keepLamps: i < 20 ? 2 : 0,
+    keepFans: 0,
+    keepOutletWatts: 0,
+    hours: i < 20 ? 2 : 0,
+  });
+  const draft = (rooms: number) =>
+    draftDocument(
+      Array.from({ length: rooms }, (_, i) => room(i)),
+      {
+        title: `${parts} parts`,
+        practice: 'IEC',
+        supply: { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.3, zln: 0.3 },
+        hoursWanted: 2,
+      },
+    );
+  let rooms = Math.max(1, Math.round(parts / 24));
+  let doc = draft(rooms);
+  for (let i = 0; i < 4 && Math.abs(doc.parts.length - parts) > 0.03 * parts; i++) {
+    rooms = Math.max(1, Math.round((rooms * parts) / doc.parts.length));
+    doc = draft(rooms);
+  }
+  return doc;
+}
+
+function growth(): Measure {
+  const sizes = [100, 1000, 5000].map(homeOf).map((doc) => ({ doc, parts: doc.parts.length }));
+  for (const { doc } of sizes.slice(0, 2)) for (let i = 0; i < 5; i++) examine(doc);
+  const points = sizes.map(({ doc, parts }) => ({
+    x: Math.log(parts),
+    y: Math.log(milliseconds(() => examine(doc), parts > 2000 ? 3 : 9)),
+  }));
+  const mean = (of: (point: { x: number; y: number }) => number) =>
+    points.reduce((sum, point) => sum + of(point), 0) / points.length;
+  const [mx, my] = [mean(({ x }) => x), mean(({ y }) => y)];
+  const slope =
+    points.reduce((sum, { x, y }) => sum + (x - mx) * (y - my), 0) /
+    points.reduce((sum, { x }) => sum + (x - mx) ** 2, 0);
+  return {
+    name: 'examination, growth from 100 to 1,000 to 5,000 parts',
+    ratio: slope,
+    bar: 1.2,
+    want: 'at most',
+    unit: 'exponent',
+  };
+}
+
+/** Resident memory that examining 5,000 parts adds to a process, MB: measured in one of its own. */
+function memory(): Measure {
+  const said = execFileSync(
+    process.execPath,
+    [
+      '--import',
+      'tsx',
+      ...process.execArgv.filter((arg) => arg.startsWith('--tsconfig')),
+      import.meta.filename,
+      '--memory',
+    ],
+    { encoding: 'utf8' },
+  );
+  return { name: 'memory, 5,000 parts examined', ratio: Number(said), bar: 200, want: 'at most', unit: 'MB' };
+}
+
+function measureMemory(): void {
+  const before = process.memoryUsage().rss;
+  examine(homeOf(5000));
+  const peak = process.resourceUsage().maxRSS * 1024;
+  process.stdout.write(String((peak - before) / 1e6));
+}
+
+function main(): void {
+  const json = process.argv.includes('--json');
+  let failed = false;
+  for (const measure of [againstMathjs, againstNgspice, growth, memory]) {
+    const { name, ratio, bar, want, unit } = measure();
+    const holds = want === 'at least' ? ratio >= bar : ratio <= bar;
+    failed ||= !holds;
+    const line = json
+      ? JSON.stringify({ name, ratio: Number(ratio.toPrecision(4)), bar, holds })
+      : `${holds ? 'holds' : 'MISSES'}  ${ratio.toPrecision(3)} ${unit}, ${want} ${bar}: ${name}`;
+    process.stdout.write(`${line}\n`);
+  }
+  process.exitCode = failed ? 1 : 0;
+}
+
+if (process.argv.includes('--memory')) measureMemory();
+else main();
