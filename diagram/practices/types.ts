@@ -74,7 +74,12 @@ export interface Allowance {
 }
 
 export type DemandGroup =
-  'lighting' | 'heating-power' | 'cooker' | 'instant-water' | 'thermostatic-water' | 'storage-heating'
+  | 'lighting'
+  | 'heating-power'
+  | 'cooker'
+  | 'instant-water'
+  | 'thermostatic-water'
+  | 'storage-heating'
   | 'charging'
   | 'sockets';
 
