@@ -1,11 +1,11 @@
 'use client';
 
-import { signIn } from 'next-auth/react';
 import { useState, useSyncExternalStore, type FormEvent } from 'react';
 import { Button } from '@/components/ui/button';
 import { ErrorLine } from '@/components/ui/error-line';
 import { callApi } from '@/lib/shared/api-client';
 import { PasswordSchema } from '@/lib/shared/people';
+import { signInByPassword } from '@/lib/shared/sign-in';
 import { PasswordCells } from './password-cells';
 
 const NO_TOKEN = 'This address is not whole: open the link as it was given to you.';
@@ -38,8 +38,8 @@ export function AcceptForm() {
       setRefusal(answer.refusal.fields?.token ? NO_TOKEN : answer.refusal.message);
       return;
     }
-    const signedIn = await signIn('credentials', { email: answer.data.email, password, redirect: false });
-    window.location.assign(signedIn?.ok && !signedIn.error ? '/jobs' : '/signin');
+    const signedIn = await signInByPassword(answer.data.email, password);
+    window.location.assign(signedIn.kind === 'in' ? '/jobs' : '/signin');
   };
 
   return (

@@ -4,6 +4,7 @@ import { signIn } from 'next-auth/react';
 import { useEffect, useId, useState, type FormEvent } from 'react';
 import { Button } from '@/components/ui/button';
 import { ErrorLine } from '@/components/ui/error-line';
+import { signInByPassword, type SignInAnswer } from '@/lib/shared/sign-in';
 import { entryInput } from './entry-input';
 import { PasswordCells } from './password-cells';
 import { useWait } from './use-wait';
@@ -18,11 +19,12 @@ interface SignInFormProps {
 }
 
 const WRONG = 'E-mail or password is not right. After 5 tries it waits a minute.';
-const UNREACHED = 'No network: the server did not answer. What you typed is still here.';
-const FAILED = 'Not signed in: the server answered with an error. Try again in a moment.';
-
-/** Seconds to wait, where that is what the answer says. */
-const waitIn = (error: string): number => Number(/^wait:(\d+)$/.exec(error)?.[1] ?? 0);
+const refusals: Record<Exclude<SignInAnswer['kind'], 'in'>, string> = {
+  wrong: WRONG,
+  wait: WRONG,
+  unreached: 'No network: the server did not answer. What you typed is still here.',
+  failed: 'Not signed in: the server answered with an error. Try again in a moment.',
+};
 
 /** The sign-in, as the title block's own fields. */
 export function SignInForm({ next, oidcName, notice }: SignInFormProps) {
@@ -48,19 +50,14 @@ export function SignInForm({ next, oidcName, notice }: SignInFormProps) {
     const typed = new FormData(event.currentTarget);
     setBusy(true);
     setRefusal('');
-    try {
-      const answer = await signIn('credentials', { email: typed.get('email'), password: typed.get('password'), redirect: false });
-      if (answer?.ok && !answer.error) {
-        // A whole page load: nothing of the person before stays in memory.
-        window.location.assign(next);
-        return;
-      }
-      const seconds = waitIn(answer?.error ?? '');
-      if (seconds > 0) wait.start(seconds);
-      setRefusal(answer?.error === 'CredentialsSignin' || seconds > 0 ? WRONG : FAILED);
-    } catch {
-      setRefusal(UNREACHED);
+    const answer = await signInByPassword(String(typed.get('email')), String(typed.get('password')));
+    if (answer.kind === 'in') {
+      // A whole page load: nothing of the person before stays in memory.
+      window.location.assign(next);
+      return;
     }
+    if (answer.kind === 'wait') wait.start(answer.seconds);
+    setRefusal(refusals[answer.kind]);
     setBusy(false);
   };
 

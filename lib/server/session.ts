@@ -13,8 +13,11 @@ import { sequelize } from '@/models';
 export const LONGEST_H = 12;
 const IDLE_H = 4;
 
-/** `__Host-` keeps the cookie from other hosts of the domain; browsers accept it over https only. */
-export const sessionCookie = () => (isHttps() ? '__Host-ohmstead' : 'ohmstead');
+/**
+ * `__Host-` keeps the cookie from other hosts of the domain; browsers accept it over https only. No other cookie's name
+ * begins with this one: next-auth would read that as a further piece of the session's.
+ */
+export const sessionCookie = () => (isHttps() ? '__Host-session.ohmstead' : 'session.ohmstead');
 
 /** What the cookie says, once its seal is checked: which row to read. */
 export const TokenSchema = z.object({ tid: z.uuid(), sid: z.uuid(), sub: z.uuid() });
