@@ -44,7 +44,7 @@ function withHeaders(response: NextResponse, policy: string): NextResponse {
 export function proxy(request: NextRequest): NextResponse {
   const { pathname, search } = request.nextUrl;
   const policy = contentPolicy(Buffer.from(crypto.randomUUID()).toString('base64'));
-  const hasCookie = request.cookies.has(isHttps ? '__Host-ohmstead' : 'ohmstead');
+  const hasCookie = request.cookies.has(isHttps ? '__Host-session.ohmstead' : 'session.ohmstead');
   const isPage = !pathname.startsWith('/api/') && !pathname.startsWith('/_next/') && !/\.[a-z0-9]+$/i.test(pathname);
   if (isPage && !isOpen(pathname) && !hasCookie) {
     const signin = new URL('/signin', process.env.NEXTAUTH_URL ?? request.url);
