@@ -1,5 +1,6 @@
 import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from 'playwright/test';
+import { openPage } from './open-page';
 import { signInAs, type DemoRole } from './sign-in';
 
 const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
@@ -35,17 +36,15 @@ for (const scheme of ['light', 'dark'] as const) {
           if (role) await signInAs(contexts.get(role)!, role);
         }
         const page = contexts.get(role)!;
-        await page.goto(path);
-        await page.waitForLoadState('networkidle');
+        await openPage(page, path);
         await open?.(page);
         await expectNothing(page, `${path} ${scheme} ${width}`);
       }
       const page = contexts.get('electrician')!;
-      await page.goto('/jobs');
+      await openPage(page, '/jobs');
       await page.locator('[data-job]').first().press('Enter');
       const survey = await page.getByRole('link', { name: /1 Survey/ }).getAttribute('href');
-      await page.goto(survey!);
-      await page.waitForLoadState('networkidle');
+      await openPage(page, survey!);
       await expectNothing(page, `survey ${scheme} ${width}`);
       for (const each of contexts.values()) await each.context().close();
     });

@@ -1,11 +1,12 @@
 import { expect, test } from 'playwright/test';
 import accounts from '../../lib/server/demo/accounts.json' with { type: 'json' };
+import { openPage } from './open-page';
 import { signInAs } from './sign-in';
 
 const email = accounts.people.find(({ roles }) => roles.includes('trainer'))!.email;
 
 test('a wrong password is told in words that say nothing of the address', async ({ page }) => {
-  await page.goto('/signin');
+  await openPage(page, '/signin');
   await expect(page.getByText('Isolate both sources, lock off, prove dead.')).toBeVisible();
   await page.getByLabel('E-mail').fill('nobody@elsewhere.example');
   await page.getByLabel('Password', { exact: true }).fill('not the right one');
@@ -15,7 +16,7 @@ test('a wrong password is told in words that say nothing of the address', async 
 });
 
 test('the password is shown on request', async ({ page }) => {
-  await page.goto('/signin');
+  await openPage(page, '/signin');
   const password = page.getByLabel('Password', { exact: true });
   await password.fill('a sentence');
   await page.getByRole('button', { name: 'Show password' }).click();
@@ -25,7 +26,7 @@ test('the password is shown on request', async ({ page }) => {
 });
 
 test('without a network the sign-in says so and keeps what was typed', async ({ page, context }) => {
-  await page.goto('/signin');
+  await openPage(page, '/signin');
   await page.getByLabel('E-mail').fill(email);
   await page.getByLabel('Password', { exact: true }).fill(accounts.password);
   await context.setOffline(true);
@@ -40,7 +41,7 @@ test('without a network the sign-in says so and keeps what was typed', async ({ 
 test('signing out ends the session, also for a copied cookie', async ({ page, browser, baseURL }) => {
   await signInAs(page, 'trainer');
   const copied = await page.context().storageState();
-  await page.goto('/account');
+  await openPage(page, '/account');
   await page.getByRole('button', { name: 'Sign out', exact: true }).click();
   await expect(page).toHaveURL(/\/signin/);
   await expect(page.getByText('You are signed out.')).toBeVisible();
@@ -53,7 +54,7 @@ test('signing out everywhere ends the other browser too, after a question', asyn
   const other = await browser.newContext({ baseURL });
   await signInAs(await other.newPage(), 'trainer');
   await signInAs(page, 'trainer');
-  await page.goto('/account');
+  await openPage(page, '/account');
   await page.getByRole('button', { name: 'Sign out everywhere' }).click();
   await page.keyboard.press('Escape');
   expect((await other.request.get('/api/jobs')).status()).toBe(200);
@@ -66,7 +67,7 @@ test('signing out everywhere ends the other browser too, after a question', asyn
 
 test('paper and single keys are kept for the browser', async ({ page }) => {
   await signInAs(page, 'trainer');
-  await page.goto('/account');
+  await openPage(page, '/account');
   await page.getByText('Dark paper').click();
   await page.getByLabel('Single keys act as shortcuts').uncheck();
   await page.reload();

@@ -1,4 +1,5 @@
 import { expect, test } from 'playwright/test';
+import { openPage } from './open-page';
 import { signInAs } from './sign-in';
 
 test('an admin invites, the person accepts once, gets another role and is switched off', async ({ page, browser, baseURL }) => {
@@ -6,7 +7,7 @@ test('an admin invites, the person accepts once, gets another role and is switch
   const email = `ruth.${Date.now()}@tillmere.example`;
   const password = 'three wires in a box';
   await signInAs(page, 'admin');
-  await page.goto('/people');
+  await openPage(page, '/people');
   await page.keyboard.press('n');
   await page.getByRole('button', { name: 'Invite and show the link' }).click();
   await expect(page.getByText('Name the person.')).toBeVisible();
@@ -20,7 +21,7 @@ test('an admin invites, the person accepts once, gets another role and is switch
   const path = `/invitation${new URL(link).hash}`;
   const guest = await browser.newContext({ baseURL });
   const theirs = await guest.newPage();
-  await theirs.goto(path);
+  await openPage(theirs, path);
   await theirs.getByLabel('Password', { exact: true }).fill('short');
   await theirs.getByLabel('The same again').fill('short');
   await theirs.getByRole('button', { name: 'Set it and open my sheets' }).click();
@@ -32,7 +33,7 @@ test('an admin invites, the person accepts once, gets another role and is switch
 
   const second = await browser.newContext({ baseURL });
   const again = await second.newPage();
-  await again.goto(path);
+  await openPage(again, path);
   await again.getByLabel('Password', { exact: true }).fill(password);
   await again.getByLabel('The same again').fill(password);
   await again.getByRole('button', { name: 'Set it and open my sheets' }).click();
@@ -44,7 +45,7 @@ test('an admin invites, the person accepts once, gets another role and is switch
   await page.getByLabel('electrician').check();
   await page.getByRole('button', { name: 'Save the roles' }).click();
   await expect(page.getByRole('row', { name: new RegExp(name) })).toContainText('apprentice, electrician');
-  await theirs.goto('/jobs');
+  await openPage(theirs, '/jobs');
   await expect(theirs.getByRole('link', { name: '+ New job' })).toBeVisible();
 
   await page.getByRole('button', { name: `Change ${name}` }).click();
@@ -58,7 +59,7 @@ test('an admin invites, the person accepts once, gets another role and is switch
 
 test('people who are no admin see no way to change anybody', async ({ page }) => {
   await signInAs(page, 'electrician');
-  await page.goto('/people');
+  await openPage(page, '/people');
   await expect(page.getByRole('table', { name: 'People of the team' })).toBeVisible();
   await expect(page.getByRole('button', { name: /^Change/ })).toHaveCount(0);
   await expect(page.getByRole('button', { name: /Invite/ })).toHaveCount(0);
@@ -66,7 +67,7 @@ test('people who are no admin see no way to change anybody', async ({ page }) =>
 
 test('the last admin cannot give the role away', async ({ page }) => {
   await signInAs(page, 'admin');
-  await page.goto('/people');
+  await openPage(page, '/people');
   await page.getByRole('row', { name: /\(you\)/ }).getByRole('button').click();
   await page.getByLabel('trainer').check();
   await page.getByLabel('admin').uncheck();

@@ -1,10 +1,11 @@
 import { readFile } from 'node:fs/promises';
 import { expect, test } from 'playwright/test';
+import { openPage } from './open-page';
 import { signInAs } from './sign-in';
 
 test('a job is found, unfolded and opened by keyboard', async ({ page }) => {
   await signInAs(page, 'electrician');
-  await page.goto('/jobs');
+  await openPage(page, '/jobs');
   const place = await page.locator('[data-job]').first().textContent();
   await page.keyboard.press('/');
   await page.keyboard.type(place!);
@@ -21,7 +22,7 @@ test('a job is found, unfolded and opened by keyboard', async ({ page }) => {
 
 test('a search that finds nothing says so and is cleared', async ({ page }) => {
   await signInAs(page, 'electrician');
-  await page.goto('/jobs?search=zzzz');
+  await openPage(page, '/jobs?search=zzzz');
   await expect(page.getByText('Nothing has "zzzz".')).toBeVisible();
   await page.getByRole('button', { name: 'Clear' }).click();
   await expect(page.locator('[data-job]').first()).toBeVisible();
@@ -29,13 +30,13 @@ test('a search that finds nothing says so and is cleared', async ({ page }) => {
 
 test('a job is edited, archived and taken out again; its cells are safe in a spreadsheet', async ({ page }) => {
   await signInAs(page, 'electrician');
-  await page.goto('/jobs/new');
+  await openPage(page, '/jobs/new');
   await page.getByLabel('Client', { exact: true }).fill('=HYPERLINK("http://elsewhere.example")');
   await page.getByLabel('Place', { exact: true }).fill('Sluice House');
   await page.getByRole('button', { name: 'Begin the job' }).click();
   await expect(page).toHaveURL(/\/survey$/);
 
-  await page.goto('/jobs?search=Sluice');
+  await openPage(page, '/jobs?search=Sluice');
   const download = page.waitForEvent('download');
   await page.getByRole('button', { name: 'Register as CSV' }).click();
   const text = await readFile((await (await download).path())!, 'utf8');
@@ -47,16 +48,16 @@ test('a job is edited, archived and taken out again; its cells are safe in a spr
   await page.getByRole('button', { name: 'Save' }).click();
   await expect(page).toHaveURL(/\/jobs$/);
 
-  await page.goto('/jobs?search=Sluice');
+  await openPage(page, '/jobs?search=Sluice');
   await page.locator('[data-job]').first().press('Enter');
   await page.getByRole('link', { name: 'Edit the job' }).click();
   await expect(page.getByLabel('Address')).toHaveValue('Sluice Lane');
   await page.getByRole('button', { name: 'Archive it' }).click();
   await page.getByRole('alertdialog').getByRole('button', { name: 'Archive it' }).click();
   await expect(page).toHaveURL(/\/jobs$/);
-  await page.goto('/jobs?search=Sluice');
+  await openPage(page, '/jobs?search=Sluice');
   await expect(page.getByText('Nothing has "Sluice".')).toBeVisible();
-  await page.goto('/jobs?search=Sluice&filter=archived');
+  await openPage(page, '/jobs?search=Sluice&filter=archived');
   await page.locator('[data-job]').first().press('Enter');
   await page.getByRole('link', { name: 'Edit the job' }).click();
   await page.getByRole('button', { name: 'Take it out of the archive' }).click();
@@ -65,17 +66,17 @@ test('a job is edited, archived and taken out again; its cells are safe in a spr
 
 test('an apprentice sees the jobs given to them and begins none', async ({ page }) => {
   await signInAs(page, 'apprentice');
-  await page.goto('/jobs');
+  await openPage(page, '/jobs');
   await expect(page.getByRole('link', { name: /New job/ })).toHaveCount(0);
-  await page.goto('/jobs/new');
+  await openPage(page, '/jobs/new');
   await expect(page).toHaveURL(/\/jobs$/);
-  await page.goto('/jobs/not-a-job/survey');
+  await openPage(page, '/jobs/not-a-job/survey');
   await expect(page.getByRole('heading', { name: 'There is no such sheet' })).toBeVisible();
 });
 
 test('the catalogue of rules is searched and a lesson opened', async ({ page }) => {
   await signInAs(page, 'apprentice');
-  await page.goto('/rules');
+  await openPage(page, '/rules');
   await page.keyboard.press('/');
   await page.keyboard.type('backfeed');
   await expect(page.getByRole('status').filter({ hasText: 'found' })).toBeVisible();

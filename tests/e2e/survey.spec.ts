@@ -1,9 +1,10 @@
 import { expect, test, type Page } from 'playwright/test';
+import { openPage } from './open-page';
 import { signInAs } from './sign-in';
 
 /** Begins a job and answers the address of its survey. */
 async function beginJob(page: Page, place: string): Promise<string> {
-  await page.goto('/jobs');
+  await openPage(page, '/jobs');
   await page.keyboard.press('n');
   await expect(page).toHaveURL(/\/jobs\/new$/);
   await page.getByLabel('Client', { exact: true }).fill('M. Orrin');
@@ -74,7 +75,7 @@ test('what is typed without a network is kept and sent when it is back', async (
   await expect(page.getByText('Not saved: kept on this device, 1 change')).toBeVisible({ timeout: 15_000 });
   await context.setOffline(false);
   await expect(page.getByText(/^Saved \d/)).toBeVisible({ timeout: 30_000 });
-  await page.goto(address);
+  await openPage(page, address);
   await expect(table(page).getByRole('textbox', { name: 'Loft, name' })).toBeVisible();
 });
 
