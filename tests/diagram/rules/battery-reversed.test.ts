@@ -1,0 +1,34 @@
+import { batteryReversed } from '@/diagram/rules/battery-reversed';
+import { backupHome } from '@/diagram/document/home';
+import { testRule } from '../rule-tester';
+
+const second = { volts: 12, ah: 200, hours: 20, chemistry: 'vrla' } as const;
+
+testRule(batteryReversed, {
+  valid: {
+    'plus to plus': backupHome(),
+    'two in series, minus of the one to plus of the other': backupHome()
+      .part('battery', 'G3', 'hall', second)
+      .cut('G2:-', 'G1:bat.-')
+      .wire('dc-', 'G2:-', 'G3:+', 'kd')
+      .wire('dc-', 'G3:-', 'G1:bat.-', 'kd'),
+  },
+  invalid: {
+    'both leads exchanged': {
+      drawing: backupHome()
+        .cut('G2:+', 'F2:1')
+        .cut('G2:-', 'G1:bat.-')
+        .wire('dc+', 'G2:-', 'F2:1', 'kd')
+        .wire('dc-', 'G2:+', 'G1:bat.-', 'kd'),
+      findings: [{ parts: ['G1', 'G2'], severity: 'danger' }],
+    },
+    'the second of a string turned': {
+      drawing: backupHome()
+        .part('battery', 'G3', 'hall', second)
+        .cut('G2:-', 'G1:bat.-')
+        .wire('dc-', 'G2:-', 'G3:-', 'kd')
+        .wire('dc-', 'G3:+', 'G1:bat.-', 'kd'),
+      findings: [{ parts: ['G1', 'G3'] }],
+    },
+  },
+});
