@@ -15,15 +15,28 @@ const isAccessory = (graph: Graph, node: number): boolean => {
   return isBar(kind) || kind === 'socket';
 };
 
+/** True for a line from outlet to outlet that no neutral goes with: a row of outlets is led on with both. */
+function isAlone(graph: Graph, { a, b }: Edge): boolean {
+  if (graph.markOf[a] !== 'L' || graph.markOf[b] !== 'L') return false;
+  const [from, to] = [a, b].map((node) => graph.node(graph.partOf[node]!.id, 'N'));
+  if (from === undefined || to === undefined) return false;
+  for (let k = graph.start[from]!; k < graph.start[from + 1]!; k++) {
+    const edge = graph.edges[graph.around[k]!]!;
+    if (edge.a === to || edge.b === to) return false;
+  }
+  return true;
+}
+
 /** How far an edge looks like an afterthought: fitting wires at devices first, loose links between joints last, plugs after all. */
-function oddness(graph: Graph, { a, b, wire, kind }: Edge): number {
+function oddness(graph: Graph, edge: Edge): number {
+  const { a, b, wire, kind } = edge;
   if (kind === 'plug') return 1000;
   if (!wire) return 0;
   const known = [natureOfRole(wire.role), natureOfNode(graph, a), natureOfNode(graph, b)].filter((nature) => nature !== undefined);
   const disagree = new Set(known).size - 1;
   const between = isAccessory(graph, a) && isAccessory(graph, b) ? 1 : 0;
   const unknown = 3 - known.length;
-  return 100 * disagree + 20 * between + 4 * unknown + (wire.cable ? 0 : 1);
+  return 100 * disagree + 20 * between + (isAlone(graph, edge) ? 10 : 0) + 4 * unknown + (wire.cable ? 0 : 1);
 }
 
 /** The starts that no earlier one reaches, and all that they reach. */

@@ -4,6 +4,7 @@ import { practices } from '../practices';
 import { recalled } from './clauses';
 import { sharedBy } from './readings/command';
 import type { Context } from './context';
+import { neutralFaultsOf } from './readings/neutral-faults';
 import { once } from './readings/once';
 import type { PointState } from '../circuit/evaluate';
 import type { Remedy, Rule } from './types';
@@ -23,12 +24,16 @@ function twoPoles({ graph, document }: Context, inverter: Part, device: Part | u
   return [{ label: 'Fit a two-pole breaker and lead the neutral through it', patch: { set: { parts: [part], wires: [into, onward] } } }];
 }
 
-/** By inverter: what it feeds on battery, with the names of those conditions. */
+/**
+ * By inverter: what it feeds on battery, with the names of those conditions. A load whose neutral is led astray goes round
+ * the output's switch for that reason alone, and is named by the rules of neutrals: it is left out.
+ */
 const fedByBackup = once((context: Context): Map<string, { states: PointState[]; conditions: Set<string> }> => {
   const found = new Map<string, { states: PointState[]; conditions: Set<string> }>();
+  const strays = new Set((['lost', 'behind'] as const).flatMap((kind) => neutralFaultsOf(context, kind).flatMap(({ points }) => points)));
   for (const { condition, points } of context.evaluated)
     for (const state of points.values()) {
-      if (!state.fed || state.source?.kind !== 'backup') continue;
+      if (!state.fed || state.source?.kind !== 'backup' || strays.has(state.part.id)) continue;
       const { id } = state.source.part;
       const entry = found.get(id) ?? { states: [], conditions: new Set<string>() };
       entry.states.push(state);
@@ -55,7 +60,8 @@ export const noBackupIsolation: Rule = {
     const poles = practices[context.practice].backupIsolationPoles.value;
     for (const [id, { states, conditions }] of fedByBackup(context)) {
       const shared = sharedBy(context, states);
-      const cutsBoth = shared.filter((device) => states.every(({ neutralDevices }) => neutralDevices.includes(device.id)));
+      // One neutral that is led past it is a crossed neutral and said as such; the device is there.
+      const cutsBoth = shared.filter((device) => states.some(({ neutralDevices }) => neutralDevices.includes(device.id)));
       if (poles === 1 ? shared.length > 0 : cutsBoth.length > 0) continue;
       const single = shared[0];
       const inverter = context.graph.parts.get(id)!;

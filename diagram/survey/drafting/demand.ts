@@ -22,6 +22,6 @@ export function surveyDemand(rooms: readonly SurveyRoom[], ways: readonly WayPla
   }
   for (const way of ways)
     if (way.kind === 'outlets') items.push(item('sockets', way.segments[0]!.outlets.length * OUTLET_WATTS, voltage, 1));
-  if (chargeWatts > 0) items.push(item('storage-heating', chargeWatts, voltage, 1));
+  if (chargeWatts > 0) items.push(item('charging', chargeWatts, voltage, 1));
   return maximumDemand(items, practice);
 }

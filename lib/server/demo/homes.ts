@@ -1,6 +1,8 @@
 import 'server-only';
-import type { Installation, Supply, SurveyRoom } from '@/diagram/document/schema';
-import { draftDocument } from '@/diagram/survey/draft';
+import type { Installation } from '@/diagram/document/schema';
+import { apprenticesHome } from '@/lib/server/demo/apprentice';
+import { weirFlat } from '@/lib/server/demo/flat';
+import { quarryHouse } from '@/lib/server/demo/house';
 
 export interface DemoHome {
   document: Installation;
@@ -12,14 +14,9 @@ export interface DemoHome {
   byApprentice: boolean;
 }
 
-const supply: Supply = { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.35, zln: 0.25 };
-const room = (order: number, name: string, over: Partial<SurveyRoom> = {}): SurveyRoom => ({
-  id: `r${order}`, order, name, kind: 'room', lamps: 2, lampWatts: 9, fans: 1, fanWatts: 60, outlets: 2, heavy: [], keepLamps: 0, keepFans: 0, keepOutletWatts: 0, hours: 0, ...over,
-});
-
+/** The three jobs of the demo: a flat without backup, a house with it, and the apprentice's drawing of that house with six mistakes. */
 export const demoHomes = (): DemoHome[] => [
-  {
-    document: draftDocument([room(1, 'Living room'), room(2, 'Kitchen', { heavy: [{ what: 'Oven', watts: 2400 }] })], { title: 'Heron Row 9', practice: 'IEC', supply, hoursWanted: 0 }),
-    client: 'O. Pell', address: 'Heron Row 9, Tillmere', hoursWanted: 0, dueInDays: 5, byApprentice: false,
-  },
+  { document: quarryHouse(), client: 'Iven Marlow', address: '3 Quarry Steps, Tillmere', hoursWanted: 4, dueInDays: 6, byApprentice: false },
+  { document: apprenticesHome(), client: 'Iven Marlow', address: '3 Quarry Steps, Tillmere', hoursWanted: 4, dueInDays: 2, byApprentice: true },
+  { document: weirFlat(), client: 'Dora Fenwick', address: 'Weir Court, flat 2, Tillmere', hoursWanted: 0, dueInDays: null, byApprentice: false },
 ];

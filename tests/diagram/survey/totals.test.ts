@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { examine } from '@/diagram/rules/examine';
 import { findWays } from '@/diagram/terminals/ways';
 import { draftDocument } from '@/diagram/survey/draft';
 import { surveyTotals } from '@/diagram/survey/totals';
@@ -35,6 +36,19 @@ describe('the sums of a survey', () => {
     // the largest way of outlets whole, 40 % of the others: 300 W, then 300, 300, 200, 100 and the kept 60
     expect(amps.sockets).toBeCloseTo((300 + 0.4 * (300 + 300 + 200 + 100 + 60)) / 230, 6);
     expect(demandAmps).toBeCloseTo(Object.values(amps).reduce((sum, value) => sum + value, 0), 9);
+  });
+
+  it('asks for the same as the drafted sheet does', () => {
+    for (const practice of ['IEC', 'IN', 'GB'] as const) {
+      const of = optionsOf(practice, 'TN-S', 4);
+      const totals = surveyTotals(sixRooms(), of);
+      const examined = examine(draftDocument(sixRooms(), of));
+      expect(examined.supply.demandAmps).toBeCloseTo(totals.demandAmps, 5);
+      expect(examined.supply.demandWatts).toBeCloseTo(totals.demandWatts, 4);
+      expect(examined.backup[0]!.autonomyHours).toBeCloseTo(totals.backup!.hours, 5);
+      expect(examined.backup[0]!.watts).toBe(totals.backup!.watts);
+      expect(examined.ways).toHaveLength(totals.ways + 1);
+    }
   });
 
   it('sizes the backup for the longest wish', () => {
