@@ -1,5 +1,7 @@
+import type { Drawn } from '../circuit/drawn';
 import { polesOf } from '../document/kinds';
 import type { Part, PartOf, Wire } from '../document/schema';
+import { isResidual } from '../terminals/roles-of-parts';
 import { recalled, seen } from './clauses';
 import type { Context } from './context';
 import { commanders } from './readings/command';
@@ -37,11 +39,14 @@ export const singlePoleMain: Rule = {
     remedy: 'Fit a two-pole main switch that opens line and neutral together.',
   },
   *check(context) {
+    const { graph } = context;
     const all = commanders(context);
     const main = all.find(({ id }) => id === context.mainSwitch?.id) ?? all[0];
     if (!main) return;
     const fed = figuresOf(context).drawn.filter(({ source, neutralEdges }) => source?.kind === 'mains' && neutralEdges.length > 0);
-    const past = fed.filter(({ neutralDevices }) => !neutralDevices.includes(main.id));
+    // A neutral that is led past an rcd of its line too is a crossed neutral, and said as such.
+    const crossed = (each: Drawn) => each.lineDevices.some((id) => isResidual(graph.parts.get(id)!) && !each.neutralDevices.includes(id) && id !== main.id);
+    const past = fed.filter((each) => !each.neutralDevices.includes(main.id) && (polesOf(main) === 1 || !crossed(each)));
     if (fed.length === 0 || past.length === 0) return;
     yield {
       heading: `${capital(say(context, main.id))} leaves the neutral on`,

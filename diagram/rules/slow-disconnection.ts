@@ -24,7 +24,7 @@ const bySupply = ({ document }: Context, { fault }: Slow): boolean => {
   return fault.zsMax !== null && external !== undefined && exceeds(external, fault.zsMax);
 };
 
-/** An rcbo where the mcb is, in the practice's usual type; on the same two terminals its neutral must be led through by hand. */
+/** A type that opens on less current, where the loop is small enough for it. */
 function quickerCurve({ device, fault }: Slow): Remedy[] {
   if (device.kind !== 'mcb' && device.kind !== 'rcbo') return [];
   const factor = { B: 1, C: 2, D: 4 } as const;
@@ -70,6 +70,7 @@ export const slowDisconnection: Rule = {
           `${ohms(Math.min(...shared.map(({ fault }) => fault.zsMax!)))} lets these devices open in time. Put the ways behind an rcd.`,
         parts: [...ids, ...(supply ? [supply.id] : [])],
         conditions: onMains(context),
+        remedies: shared.length === 1 ? quickerCurve(shared[0]!) : [],
       };
     }
     for (const way of slow.filter((each) => !shared.includes(each))) {

@@ -6,12 +6,19 @@ import { recalled, seen } from './clauses';
 import type { Context } from './context';
 import { figuresOf } from './readings/figures';
 import { changeCables } from './readings/remedies';
-import type { Rule } from './types';
+import type { Remedy, Rule } from './types';
 import { capital, say, sayParts, sayWire } from './readings/words';
 
+/** What a fault asks of the earth core of one cable. */
 interface Need {
+  cable: Cable;
   mm2: number;
-  why: string;
+  /** id of the device of the way that asks for most */
+  device: string;
+  /** true where the table decides, for want of the fault's heat */
+  byTable: boolean;
+  wires: Set<string>;
+  points: Set<string>;
 }
 
 /** Table 54.2 of IEC 60364-5-54 (54.7 of BS 7671): by the line conductor, where the heat of the fault is not known. */
@@ -20,37 +27,30 @@ export const tableMm2 = (lineMm2: number): number => (lineMm2 <= 16 ? lineMm2 : 
 /** Main bonding, mm2 copper: 10 on TN-C-S with a neutral up to 35 (BS 7671 Table 54.8, seen), else 6 at least (544.1.1, from memory). */
 const bondingMm2 = (system: string): number => (system === 'TN-C-S' ? 10 : 6);
 
-/** What a fault asks of each cable's protective core, by the cable's id: the most of all ways behind it. */
-function needs(context: Context): Map<string, { need: Need; wires: Set<string>; points: Set<string> }> {
+/** The need of every cable with an earth core on the way to something earthed: the most of all ways behind it. */
+function needs(context: Context): Need[] {
   const { graph } = context;
   const { ways, earth } = figuresOf(context);
-  const found = new Map<string, { need: Need; wires: Set<string>; points: Set<string> }>();
-  const ask = (edges: readonly number[], point: string, needOf: (cable: Cable) => Need | null) => {
-    for (const number of edges) {
-      const { wire } = graph.edges[number]!;
-      const cable = wire?.role === 'earth' && wire.cable !== undefined ? graph.cables.get(wire.cable) : undefined;
-      const need = cable && needOf(cable);
-      if (!wire || !cable || !need) continue;
-      const entry = found.get(cable.id) ?? { need, wires: new Set(), points: new Set() };
-      if (need.mm2 > entry.need.mm2) entry.need = need;
-      entry.wires.add(wire.id);
-      entry.points.add(point);
-      found.set(cable.id, entry);
-    }
-  };
-  for (const { drawn, fault, device } of ways.values())
+  const found = new Map<string, Need>();
+  for (const { drawn, fault, device } of ways.values()) {
+    // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
+    if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;
     for (const { part, isPoint } of drawn) {
-      const path = earth.path(graph.node(part.id, isPoint ? 'E' : 'in.E'));
-      if (!path) continue;
-      const energy = fault?.energyA2s;
-      ask(path, part.id, (cable) => {
-        if (energy !== undefined && Number.isFinite(energy))
-          return { mm2: adiabaticMm2(energy, kFactor(cable.material, cable.insulation, true)), why: `a fault behind ${say(context, device.id)} heats it` };
-        // A fault that nothing clears is the finding of `slow-disconnection`; its heat has no end.
-        return energy === undefined && sharesLine(context, cable) ? { mm2: tableMm2(cable.csa), why: 'the line core beside it asks for it' } : null;
-      });
+      for (const number of earth.path(graph.node(part.id, isPoint ? 'E' : 'in.E')) ?? []) {
+        const { wire } = graph.edges[number]!;
+        const cable = wire?.role === 'earth' && wire.cable !== undefined ? graph.cables.get(wire.cable) : undefined;
+        if (!wire || !cable || (!fault && !sharesLine(context, cable))) continue;
+        const asked = fault ? adiabaticMm2(fault.energyA2s, kFactor(cable.material, cable.insulation, true)) : tableMm2(cable.csa);
+        const known = found.get(cable.id);
+        const need = known ?? { cable, mm2: 0, device: device.id, byTable: !fault, wires: new Set(), points: new Set() };
+        if (asked > need.mm2) Object.assign(need, { mm2: asked, device: device.id, byTable: !fault });
+        need.wires.add(wire.id);
+        need.points.add(part.id);
+        found.set(cable.id, need);
+      }
     }
-  return found;
+  }
+  return [...found.values()];
 }
 
 /** A cable with a line core in it: the table goes by that core. */
@@ -59,10 +59,16 @@ const sharesLine = ({ document }: Context, { id }: Cable): boolean =>
 
 const sizeOf = ({ csa, cpc }: Cable): number => cpc ?? csa;
 
-const thicker = (practice: Practice, cable: Cable, need: number) => {
-  const cpc = practice.csaMm2.find((size) => size >= need);
-  return cpc === undefined ? [] : [changeCables(`Pull an earth core of ${cpc} mm2`, [{ ...cable, cpc, csa: Math.max(cable.csa, alone(cable) ? cpc : 0) }])];
-};
+/** Each earth core in the least size on sale that is enough for it. */
+function thicker({ csaMm2 }: Practice, thin: readonly { cable: Cable; need: number }[]): Remedy[] {
+  const cables = thin.map(({ cable, need }) => {
+    const cpc = csaMm2.find((size) => size >= need);
+    return cpc === undefined ? null : { ...cable, cpc, ...(alone(cable) && { csa: cpc }) };
+  });
+  if (!cables.every((cable) => cable !== null)) return [];
+  const sizes = [...new Set(cables.map(({ cpc }) => cpc))].sort((a, b) => a - b);
+  return [changeCables(`Pull an earth core of ${sizes.join(' and ')} mm2`, cables)];
+}
 
 /** A single core that is the earth itself: size and earth size are one. */
 const alone = ({ cores }: Cable): boolean => cores === 1;
@@ -99,16 +105,21 @@ export const thinEarth: Rule = {
   },
   *check(context) {
     const { practice } = figuresOf(context);
-    const { graph } = context;
-    for (const [id, { need, wires, points }] of needs(context)) {
-      const cable = graph.cables.get(id)!;
-      if (!exceeds(need.mm2, sizeOf(cable))) continue;
+    const thin = new Map<string, Need[]>();
+    for (const need of needs(context))
+      if (exceeds(need.mm2, sizeOf(need.cable))) thin.set(need.device, [...(thin.get(need.device) ?? []), need]);
+    for (const [device, list] of thin) {
+      const worst = list.reduce((a, b) => (sizeOf(b.cable) < sizeOf(a.cable) ? b : a));
+      const points = list.flatMap((each) => [...each.points]);
+      const why = worst.byTable ? 'the line core beside it asks for it' : `a fault behind ${say(context, device)} heats it`;
       yield {
         heading: `The earth of ${sayParts(context, points, 3)} is too thin`,
-        message: `The earth core of ${sayCable(cable)} has ${mm2(sizeOf(cable))}; ${need.why}, and ${mm2(Math.ceil(need.mm2 * 100) / 100)} is the least.`,
-        parts: [],
-        wires: [...wires],
-        remedies: thicker(practice, cable, need.mm2),
+        message:
+          `The earth core of ${sayCable(worst.cable)} has ${mm2(sizeOf(worst.cable))}; ${why}, and ` +
+          `${mm2(Math.ceil(worst.mm2 * 100) / 100)} is the least.`,
+        parts: [device],
+        wires: list.flatMap(({ wires }) => [...wires]),
+        remedies: thicker(practice, list.map(({ cable, mm2: need }) => ({ cable, need }))),
       };
     }
     const least = bondingMm2(context.document.supply.system);
@@ -119,7 +130,7 @@ export const thinEarth: Rule = {
         message: `The bonding conductor ${sayWire(context, wire.id)} has ${mm2(sizeOf(cable))}; ${mm2(least)} is the least on ${context.document.supply.system}.`,
         parts: [part],
         wires: [wire.id],
-        remedies: thicker(practice, cable, least),
+        remedies: thicker(practice, [{ cable, need: least }]),
       };
     }
   },

@@ -47,7 +47,7 @@ export const tooManyPoints: Rule = {
         if (!has || (has.points <= limit.points && !exceeds(has.watts, limit.watts))) continue;
         yield {
           heading: `${capital(say(context, id))} has more on it than one way should`,
-          message: `${has.points} ${NAME[limit.of]} of ${watts(has.watts)} hang on it; ${limit.points} or ${watts(limit.watts)} are the limit of one way.`,
+          message: `${capital(NAME[limit.of])} on it: ${has.points}, of ${watts(has.watts)}; ${limit.points} or ${watts(limit.watts)} are the limit of one way.`,
           parts: [id],
         };
       }
