@@ -154,9 +154,9 @@ function evaluateCondition(
   graph: Graph,
   condition: Condition,
   positions: Positions,
-  anchors: ReadonlyMap<number, Nature>,
   onMains: readonly number[],
 ): Evaluated {
+  const anchors = conductorAnchors(graph, condition);
   const lineStarts = condition.sources.map(({ line }) => line);
   const neutralStarts = [...anchors].filter(([, nature]) => nature === 'N').map(([node]) => node);
   const notLine = (node: number) => anchors.has(node) && anchors.get(node) !== 'L';
@@ -187,11 +187,11 @@ function evaluateCondition(
   return { condition, crossed, lineLoops, neutralLoops, whole, ...states(apart), asDrawn: asDrawn.points };
 }
 
-/** Nodes that are line, neutral or earth by what they are: the poles of the sources, and the earth. */
-export function conductorAnchors(graph: Graph): Map<number, Nature> {
+/** Nodes that are line, neutral or earth by what they are: the poles of the supply and of inverters on battery, and the earth. */
+export function conductorAnchors(graph: Graph, { onBattery }: Condition): Map<number, Nature> {
   const anchors = new Map<number, Nature>();
   for (const part of graph.parts.values()) {
-    if (part.kind !== 'supply' && part.kind !== 'inverter') continue;
+    if (part.kind !== 'supply' && !onBattery.has(part.id)) continue;
     const prefix = part.kind === 'supply' ? '' : 'out.';
     anchors.set(graph.node(part.id, `${prefix}L`)!, 'L');
     anchors.set(graph.node(part.id, `${prefix}N`)!, 'N');
@@ -204,13 +204,12 @@ export function conductorAnchors(graph: Graph): Map<number, Nature> {
 export function evaluate(graph: Graph): Evaluation {
   const conditions = listConditions(graph);
   const positions = switchPositions(graph);
-  const anchors = conductorAnchors(graph);
   const evaluated: Evaluated[] = [];
   for (const condition of conditions.list) {
     const places = JSON.stringify([...condition.positions]);
     const mains = evaluated.find((other) => other.condition.base === 'mains' && JSON.stringify([...other.condition.positions]) === places);
     const loops = mains ? [...mains.lineLoops, ...mains.neutralLoops].map(({ edge }) => edge) : [];
-    evaluated.push(evaluateCondition(graph, condition, positions, anchors, loops));
+    evaluated.push(evaluateCondition(graph, condition, positions, loops));
   }
   return { ...conditions, positions, evaluated };
 }

@@ -11,7 +11,7 @@ import {
   type Wire,
 } from './schema';
 
-type Ratings<K extends Part['kind']> = Partial<Omit<PartOf<K>, 'id' | 'kind'>>;
+type Ratings<K extends Part['kind']> = K extends Part['kind'] ? Partial<Omit<PartOf<K>, 'id' | 'kind'>> : never;
 
 /** Options of a drawing; a supply of 230 V, 50 Hz, TN-S with known loops where nothing is said. */
 export interface DrawingOptions {
@@ -48,7 +48,7 @@ export class Drawing {
   }
 
   /** Changes ratings of a part; an option set to undefined is taken away. */
-  set<K extends Part['kind']>(id: string, ratings: Ratings<K>): this {
+  set(id: string, ratings: Ratings<Part['kind']>): this {
     const next = { ...this.parts.get(id)!, ...ratings };
     this.parts.set(id, Object.fromEntries(Object.entries(next).filter(([, value]) => value !== undefined)) as Part);
     return this;

@@ -1,7 +1,7 @@
 import { Drawing, type DrawingOptions } from './builder';
 import type { Part, PartOf } from './schema';
 
-type Ratings<K extends Part['kind']> = Partial<Omit<PartOf<K>, 'id' | 'kind'>>;
+type Ratings<K extends Part['kind']> = K extends Part['kind'] ? Partial<Omit<PartOf<K>, 'id' | 'kind'>> : never;
 
 /** Options of a drawn home. */
 export interface HomeOptions extends DrawingOptions {
@@ -33,13 +33,19 @@ export class Home extends Drawing {
       .neutral('SUP:N', 'P1:2')
       .line('P1:4', 'Q1:1')
       .neutral('P1:3', 'Q1:3')
-      .line('Q1:2', 'LB0')
-      .neutral('Q1:4', 'NB0')
       .line('LB0', 'F9:L')
       .neutral('NB0', 'F9:N')
       .earth('F9:E', 'EB');
-    if (tt) this.part('electrode', 'XE', 'hall').earth('XE:E', 'EB');
-    else this.earth('SUP:E', 'EB');
+    // On TT nothing but an rcd clears a fault to earth, so one stands before everything.
+    if (tt)
+      this.part('electrode', 'XE', 'hall')
+        .earth('XE:E', 'EB')
+        .part('rcd', 'Q0', 'hall', { rating: 63, sensitivity: 0.3, type: 'A', delay: 'S' })
+        .line('Q1:2', 'Q0:1')
+        .neutral('Q1:4', 'Q0:3')
+        .line('Q0:2', 'LB0')
+        .neutral('Q0:4', 'NB0');
+    else this.earth('SUP:E', 'EB').line('Q1:2', 'LB0').neutral('Q1:4', 'NB0');
     if (options.rcd === false) this.line('LB0', 'LB').neutral('NB0', 'NB');
     else {
       const ratings = { rating: 63, sensitivity: 0.03, type: 'A', delay: 'none', ...(typeof options.rcd === 'object' && options.rcd) } as const;

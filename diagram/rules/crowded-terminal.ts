@@ -1,6 +1,5 @@
 import { isBar } from '../document/kinds';
 import { isControl, isPoint } from '../terminals/roles-of-parts';
-import { COMMON_PRACTICE } from './clauses';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
 

@@ -5,8 +5,9 @@ import type { Context } from './context';
 import { crossings } from './readings/crossings';
 import { earthGaps } from './readings/earth-gaps';
 import { neutralContacts } from './readings/neutral-contacts';
+import { openRegions } from './readings/open-regions';
 import { potentials } from './readings/potentials';
-import { reversals } from './readings/reversals';
+import { reversals, reversedNodes } from './readings/reversals';
 import type { Rule } from './types';
 import { sayParts, sayWire } from './readings/words';
 
@@ -17,6 +18,15 @@ function natureOf(context: Context, node: number): Nature | undefined {
   const { line, neutral, earth } = potentials(context);
   const natures = ([['L', line], ['N', neutral], ['E', earth]] as const).filter(([, at]) => at[node] === 1);
   return natures.length === 1 ? natures[0]![0] : undefined;
+}
+
+function wiresAt({ graph }: Context, node: number): string[] {
+  const ids: string[] = [];
+  for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
+    const { wire } = graph.edges[graph.around[k]!]!;
+    if (wire) ids.push(wire.id);
+  };
+  return ids;
 }
 
 /** Wires and parts that a rule of polarity speaks of already. */
@@ -31,6 +41,8 @@ function told(context: Context): { wires: Set<string>; parts: Set<string> } {
     if (on !== 'nothing') for (const id of at) parts.add(id);
   }
   for (const { points } of reversals(context)) for (const id of points) parts.add(id);
+  for (const { on, nodes } of openRegions(context))
+    if (on) for (const node of nodes) for (const id of wiresAt(context, node)) wires.add(id);
   return { wires, parts };
 }
 
@@ -49,13 +61,9 @@ export const lineRoleMismatch: Rule = {
     const { graph } = context;
     const known = told(context);
     const group = new Map<string, { wires: string[]; drawn: Nature; is: Nature; parts: Set<string> }>();
-    const reversed = new Set(
-      reversals(context).flatMap(({ points }) =>
-        context.evaluated.flatMap(({ points: states }) => points.flatMap((id) => [...states.get(id)!.lineEdges, ...states.get(id)!.neutralEdges])),
-      ),
-    );
-    graph.edges.forEach(({ wire, a, b }, number) => {
-      if (!wire || known.wires.has(wire.id) || reversed.has(number)) return;
+    const reversed = reversedNodes(context);
+    graph.edges.forEach(({ wire, a, b }) => {
+      if (!wire || known.wires.has(wire.id) || reversed.has(a) || reversed.has(b)) return;
       const drawn = natureOfRole(wire.role);
       const is = natureOf(context, a);
       if (is === undefined || is === drawn || drawn === 'D') return;

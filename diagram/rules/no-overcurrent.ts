@@ -6,6 +6,7 @@ import { recalled } from './clauses';
 import type { Context } from './context';
 import { hasWire } from './readings/earth-gaps';
 import { once } from './readings/once';
+import { reversedNodes, reversedPoints } from './readings/reversals';
 import type { Rule } from './types';
 import { capital, say, sayParts } from './readings/words';
 
@@ -20,6 +21,9 @@ interface Bare {
 const bareLines = once((context: Context): Bare[] => {
   const { graph } = context;
   const found = new Map<string, Bare>();
+  // Where line and neutral change places the fuses stand in the neutral; the crossing is the finding.
+  const turned = reversedPoints(context);
+  const crossed = reversedNodes(context);
   for (const { condition, whole, stands } of context.evaluated) {
     for (const source of condition.sources) {
       const entry = found.get(source.part.id) ?? { source, points: new Set(), wires: new Set(), conditions: new Set() };
@@ -32,9 +36,9 @@ const bareLines = once((context: Context): Bare[] => {
         const fused = source.kind === 'mains' && bare.order.some((node) => graph.partOf[node]!.kind === 'fuse');
         for (const node of bare.order) {
           const part = graph.partOf[node]!;
-          if (isPoint(part)) entry.points.add(part.id);
+          if (isPoint(part) && !turned.has(part.id)) entry.points.add(part.id);
           const { wire, a, b } = graph.edges[bare.via[node]!] ?? {};
-          if (!wire || fused) continue;
+          if (!wire || fused || crossed.has(a!) || crossed.has(b!)) continue;
           const places = [graph.partOf[a!]!.place, graph.partOf[b!]!.place];
           if (places.some((place) => place !== source.part.place)) entry.wires.add(wire.id);
         }

@@ -3,6 +3,7 @@ import type { Part } from '../document/schema';
 import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
 import { hasWire } from './readings/earth-gaps';
+import { openRegions } from './readings/open-regions';
 import { potentials } from './readings/potentials';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
@@ -43,20 +44,20 @@ function needed(part: Part): readonly (readonly string[])[] {
   }
 }
 
-/** A rail that has line or neutral in some condition: what is missing beyond it starves nothing that is told elsewhere. */
+/**
+ * True when an open line or open neutral is told already at this terminal: it lies in the dead stretch, or at the end of the
+ * live one beside it, in the place of a part that the finding names.
+ */
 function isTold(context: Context, part: Part, missing: readonly string[]): boolean {
+  const { graph } = context;
   const { line, neutral } = potentials(context);
-  const starved = context.evaluated.some(({ points }) => [...points.values()].some(({ fed, source }) => !fed && source?.kind !== 'backup'));
-  if (!starved) return false;
-  const others = context.graph.contactsOf.get(part.id) ?? [];
-  const alive = (node: number) => line[node] === 1 || neutral[node] === 1;
-  // The dead side of a part on which points hang is the open line or open neutral of those points.
-  return others.some((number) => {
-    const { a, b } = context.graph.edges[number]!;
-    const ends = [a, b];
-    const open = ends.find((node) => missing.includes(context.graph.markOf[node]!));
-    const other = ends.find((node) => node !== open);
-    return open !== undefined && other !== undefined && !alive(other) && hasWire(context, other);
+  return openRegions(context).some((region) => {
+    const near = [...region.gap, ...region.points].some((id) => graph.parts.get(id)!.place === part.place);
+    return missing.every((mark) => {
+      const node = graph.node(part.id, mark)!;
+      const ends = (region.side === 'L' ? line : neutral)[node] === 1 || part.kind === 'supply';
+      return region.nodes.has(node) || (ends && near);
+    });
   });
 }
 

@@ -4,6 +4,7 @@ import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
 import { bypassedContacts } from './readings/bypassed';
 import { neutralContacts } from './readings/neutral-contacts';
+import { reversedPoints } from './readings/reversals';
 import { truthTables } from './readings/switch-sets';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
@@ -14,7 +15,7 @@ const commands = (edge: Edge): boolean => edge.kind === 'switch' || edge.kind ==
 /** Points whose unswitched line another rule has told already. */
 function told(context: Context): Set<string> {
   const { graph } = context;
-  const points = new Set(neutralContacts(context).switched.flatMap((each) => each.points));
+  const points = new Set([...reversedPoints(context), ...neutralContacts(context).switched.flatMap((each) => each.points)]);
   for (const { point, idle } of truthTables(context)) if (idle.length > 0) points.add(point);
   // A bypassed switch makes everything on its stretch permanent.
   const bypassed = new Set(bypassedContacts(context).flatMap(({ part }) => graph.contactsOf.get(part)!.flatMap((n) => [graph.edges[n]!.a, graph.edges[n]!.b])));

@@ -24,11 +24,10 @@ export const crossings = once((context: Context): Crossing[] => {
     if (!entry.conditions.includes(condition)) entry.conditions.push(condition);
     found.set(wire, entry);
   };
-  const anchors = conductorAnchors(graph);
   for (const { condition, crossed, stands } of context.evaluated) {
     for (const { edge, between } of crossed) add(edge, between, condition.name, []);
     for (const stand of stands.filter(({ shorted }) => shorted)) {
-      for (const { edge, between } of findCrossedJoints(graph, stand.closed, anchors)) {
+      for (const { edge, between } of findCrossedJoints(graph, stand.closed, conductorAnchors(graph, condition))) {
         const { a, b } = graph.edges[edge]!;
         const beside = [a, b].map((node) => graph.partOf[node]!).filter(({ kind }) => kind === 'switch-2way' || kind === 'switch-cross');
         add(edge, between, condition.name, beside.map(({ id }) => id));

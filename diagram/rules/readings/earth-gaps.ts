@@ -45,9 +45,18 @@ export const earthGaps = once((context: Context): EarthGap[] => {
   const missing = [...graph.parts.values()]
     .filter((part) => needsEarth(context, part) && !reaches(earth.reached, earthNode(part)))
     .sort(byDesignation);
+  // A joint is what most of its wires are drawn as.
+  const isEarthJoint = (node: number) => {
+    const roles: boolean[] = [];
+    for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
+      const { wire } = graph.edges[graph.around[k]!]!;
+      if (wire) roles.push(natureOfRole(wire.role) === 'E');
+    }
+    return 2 * roles.filter(Boolean).length >= roles.length;
+  };
   const alien = (node: number) => {
     const nature = natureOfNode(graph, node);
-    return nature !== undefined && nature !== 'E';
+    return graph.partOf[node]!.kind === 'joint' ? !isEarthJoint(node) : nature !== undefined && nature !== 'E';
   };
   const follows = (edge: Edge, number: number) =>
     earth.closed[number] !== 0 &&
@@ -64,7 +73,7 @@ export const earthGaps = once((context: Context): EarthGap[] => {
     // A plug that hangs has its earth once it is put in.
     if (at.some((end) => end.part.kind === 'plug' && end.part.in === undefined && end.mark === 'E')) continue;
     const strays = at.filter(({ node }) => alien(node));
-    const joints = at.filter(({ part: { kind } }) => kind === 'joint' || kind === 'earth-bar').map((end) => end.part.id);
+    const joints = at.filter(({ node, part: { kind } }) => !alien(node) && (kind === 'joint' || kind === 'earth-bar')).map((end) => end.part.id);
     const loose = graph.loose.filter((wire) => at.some((end) => [wire.from, wire.to].some(([id, mark]) => graph.node(id, mark) === end.node)));
     const strayWires = [...region.edges]
       .map((number) => graph.edges[number]!)

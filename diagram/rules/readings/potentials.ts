@@ -14,10 +14,11 @@ const mark = (into: Uint8Array, walks: readonly Reach[]) => {
   for (const { order } of walks) for (const node of order) into[node] = 1;
 };
 
-/** Every node that is ever line, neutral or earth. */
-export const potentials = once(({ graph, evaluated, earth }: Context): Potentials => {
+/** Nodes that are line, neutral or earth in one of these conditions. */
+export function potentialsIn({ graph, evaluated, earth }: Context, names: readonly string[]): Potentials {
   const found = { line: new Uint8Array(graph.size), neutral: new Uint8Array(graph.size), earth: new Uint8Array(graph.size) };
-  for (const { stands } of evaluated) {
+  for (const { condition, stands } of evaluated) {
+    if (!names.includes(condition.name)) continue;
     for (const stand of stands) {
       if (stand.shorted) continue;
       mark(found.line, stand.line);
@@ -26,4 +27,7 @@ export const potentials = once(({ graph, evaluated, earth }: Context): Potential
   }
   mark(found.earth, [earth.reached]);
   return found;
-});
+}
+
+/** Every node that is ever line, neutral or earth. */
+export const potentials = once((context: Context): Potentials => potentialsIn(context, context.evaluated.map(({ condition }) => condition.name)));

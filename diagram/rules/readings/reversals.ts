@@ -47,3 +47,17 @@ export const reversals = once((context: Context): Reversal[] => {
 
 /** Ids of points that are the wrong way round in some condition. */
 export const reversedPoints = once((context: Context): ReadonlySet<string> => new Set(reversals(context).flatMap(({ points }) => points)));
+
+/** Nodes on the way out and back of points that are the wrong way round: there line and neutral are each other's. */
+export const reversedNodes = once((context: Context): ReadonlySet<number> => {
+  const nodes = new Set<number>();
+  for (const { points } of context.evaluated)
+    for (const state of points.values()) {
+      if (!state.reversed) continue;
+      for (const number of [...state.lineEdges, ...state.neutralEdges]) {
+        nodes.add(context.graph.edges[number]!.a);
+        nodes.add(context.graph.edges[number]!.b);
+      }
+    }
+  return nodes;
+});

@@ -1,5 +1,6 @@
 import { byDesignation } from '../../document/names';
 import type { Evaluated, PointState } from '../../circuit/evaluate';
+import type { Graph } from '../../terminals/graph';
 import type { Context } from '../context';
 import type { NeutralFault } from './neutral-faults';
 import { once } from './once';
@@ -40,6 +41,35 @@ const cableOwners = once((context: Context): Map<string, string> => {
 
 const placesWithBars = once(({ document }: Context) => new Set(document.parts.filter(({ kind }) => kind === 'neutral-bar').map(({ place }) => place)));
 
+/** True when an edge comes into a place from outside: in a cable, or from another place. */
+function entersBoard({ graph }: Context, number: number, at: number, place: string | undefined): boolean {
+  const { wire, a, b } = graph.edges[number]!;
+  return wire !== undefined && (wire.cable !== undefined || graph.partOf[a === at ? b : a]!.place !== place);
+}
+
+/** True when a joint stands where a neutral bar would: nothing but short wires lie between it and the next device. */
+function servesAsBar({ graph }: Context, state: PointState, joint: number): boolean {
+  let at = joint;
+  for (let i = pathIndex(graph, state, joint); i >= 0; i--) {
+    const edge = graph.edges[state.neutralEdges[i]!]!;
+    if (edge.kind !== 'wire') return edge.kind === 'device';
+    at = edge.a === at ? edge.b : edge.a;
+    if (edge.wire!.cable !== undefined || graph.partOf[at]!.kind === 'neutral-bar') return false;
+  }
+  return true;
+}
+
+/** Index of the edge that leads from a node of a point's way back towards the source. */
+function pathIndex(graph: Graph, state: PointState, node: number): number {
+  let at = state.neutralEnd;
+  for (let i = state.neutralEdges.length - 1; i >= 0; i--) {
+    if (at === node) return i;
+    const edge = graph.edges[state.neutralEdges[i]!]!;
+    at = edge.a === at ? edge.b : edge.a;
+  }
+  return -1;
+}
+
 /**
  * The neutral edges of a point that belong to its way alone: from the point up to the neutral bar of the board that its
  * device stands in, or to the first device. Beyond them ways share a bar rightly.
@@ -58,7 +88,9 @@ export function ownEdges(context: Context, state: PointState): number[] {
     at = edge.a === at ? edge.b : edge.a;
     const part = graph.partOf[at]!;
     if (part.kind === 'neutral-bar' && (part.place === place || part.place === undefined || place === undefined)) break;
-    if (!boardHasBar && part.place === place && part.id !== state.part.id && (part.kind === 'joint' || part.kind === 'socket')) break;
+    if (part.place !== place || part.id === state.part.id) continue;
+    if (!boardHasBar && (part.kind === 'joint' || part.kind === 'socket')) break;
+    if (part.kind === 'joint' && entersBoard(context, number, at, place) && servesAsBar(context, state, at)) break;
   }
   return edges;
 }

@@ -1,0 +1,96 @@
+import { isPoint } from '../../terminals/roles-of-parts';
+import type { Context } from '../context';
+import { deadRegions, type DeadRegion } from './dead-regions';
+import { earthGaps, hasWire } from './earth-gaps';
+import { once } from './once';
+import { potentials, potentialsIn } from './potentials';
+
+/** A gap in a line or neutral, with what lies behind it and when. */
+export interface OpenRegion extends DeadRegion {
+  side: 'L' | 'N';
+  /** all conditions where left out */
+  conditions?: string[];
+  /** the neutral ends on earth or on line instead of nowhere */
+  on?: 'earth' | 'line';
+  /** id of the inverter whose points are dead on mains only */
+  inverter?: string;
+}
+
+const partsOf = (context: Context, on: 'line' | 'neutral') => new Set(earthGaps(context).filter((gap) => gap.on === on).flatMap(({ parts }) => parts));
+
+/** Points that no condition brings line to, by their line end; parts joined to nothing are another rule's. */
+function neverFed(context: Context): OpenRegion[] {
+  const { graph } = context;
+  const { line, neutral, earth } = potentials(context);
+  const onLine = partsOf(context, 'line');
+  const ends = new Map<string, number>();
+  for (const part of graph.parts.values()) {
+    if (!isPoint(part)) continue;
+    const l = graph.node(part.id, 'L')!;
+    const n = graph.node(part.id, 'N')!;
+    if (context.evaluated.some(({ points }) => points.get(part.id)!.source !== null)) continue;
+    if (!hasWire(context, l) && !hasWire(context, n)) continue;
+    if (onLine.has(part.id) && earth[l] === 1) continue;
+    // With line and neutral changed over as well, the open end is the other one.
+    ends.set(part.id, neutral[l] === 1 && neutral[n] !== 1 ? n : l);
+  }
+  return deadRegions(context, ends, (node) => line[node] === 1).map((region) => ({ ...region, side: 'L' }));
+}
+
+/** Inverters whose backed-up points are dead on mains. */
+function deadOnMains(context: Context): OpenRegion[] {
+  const found = new Map<string, { points: Set<string>; conditions: Set<string> }>();
+  for (const { condition, points } of context.evaluated) {
+    if (condition.base !== 'outage') continue;
+    const mains = context.evaluated.find((other) => other.condition.name === `mains${condition.name.slice('outage'.length)}`)!;
+    for (const state of points.values()) {
+      if (state.source?.kind !== 'backup' || mains.points.get(state.part.id)!.source) continue;
+      const entry = found.get(state.source.part.id) ?? { points: new Set(), conditions: new Set() };
+      entry.points.add(state.part.id);
+      entry.conditions.add(mains.condition.name);
+      found.set(state.source.part.id, entry);
+    }
+  }
+  return [...found].map(([inverter, { points, conditions }]): OpenRegion => {
+    const { line } = potentialsIn(context, [...conditions]);
+    const [gap] = deadRegions(context, new Map([[inverter, context.graph.node(inverter, 'in.L')!]]), (node) => line[node] === 1);
+    return { ...gap!, side: 'L', inverter, points: [...points], conditions: [...conditions] };
+  });
+}
+
+/** Points with line but no neutral of any source. */
+function withoutNeutral(context: Context): OpenRegion[] {
+  const all = potentials(context);
+  const swapped = partsOf(context, 'neutral');
+  const found = new Map<string, { names: string[]; end: number }>();
+  for (const { condition, points } of context.evaluated) {
+    for (const state of points.values()) {
+      if (!state.source || state.fed) continue;
+      // A backed-up point whose neutral is there on mains and gone on battery is another matter: backup-neutral-lost.
+      if (condition.base !== 'mains' && all.neutral[state.neutralEnd] === 1) continue;
+      const entry = found.get(state.part.id) ?? { names: [], end: state.neutralEnd };
+      entry.names.push(condition.name);
+      found.set(state.part.id, entry);
+    }
+  }
+  const byConditions = new Map<string, Map<string, number>>();
+  for (const [id, { names, end }] of found) {
+    if (swapped.has(id) && all.earth[end] === 1) continue;
+    const key = names.join(' ');
+    byConditions.set(key, (byConditions.get(key) ?? new Map<string, number>()).set(id, end));
+  }
+  return [...byConditions].flatMap(([key, ends]) => {
+    const conditions = key.split(' ');
+    const { line, neutral, earth } = potentialsIn(context, conditions);
+    return deadRegions(context, ends, (node) => line[node] === 1 || neutral[node] === 1).map((region): OpenRegion => {
+      const end = ends.get(region.points[0]!)!;
+      const on = earth[end] === 1 ? 'earth' : line[end] === 1 ? 'line' : undefined;
+      return { ...region, side: 'N', conditions, ...(on && { on }) };
+    });
+  });
+}
+
+/** All gaps in line and neutral that starve a point; stretches that end in a hanging plug are only not plugged in. */
+export const openRegions = once((context: Context): OpenRegion[] =>
+  [...neverFed(context), ...deadOnMains(context), ...withoutNeutral(context)].filter(({ hanging }) => !hanging),
+);
