@@ -1,17 +1,11 @@
 import { rcdBand } from '../calculations/rcd-time';
-import { tripBand, type OvercurrentDevice, type TripBand } from '../calculations/trip-curve';
+import { tripBand, type TripBand } from '../calculations/trip-curve';
 import { nameOf } from '../document/names';
 import type { Part } from '../document/schema';
 import type { Graph } from '../terminals/graph';
 import { isOvercurrent, isResidual } from '../terminals/roles-of-parts';
 import type { Steady } from './steady';
-
-/** A protective device as its drawing says; null where rating or curve is missing. */
-export function overcurrentOf(part: Part): OvercurrentDevice | null {
-  if (!isOvercurrent(part) || part.rating === undefined) return null;
-  if (part.kind === 'fuse') return { kind: 'gG', ratingA: part.rating };
-  return part.curve === undefined ? null : { kind: 'mcb', ratingA: part.rating, curve: part.curve };
-}
+import { deviceOf } from './way-faults';
 
 /** What a device makes of the currents that now flow in it. */
 export interface Urge extends TripBand {
@@ -39,7 +33,7 @@ export function urges(graph: Graph, steady: Steady, opened: ReadonlySet<string>,
     const watched = part.kind === 'rcbo' && (part.poles ?? 1) === 1 ? poles.slice(0, 1) : poles;
     const amps = Math.max(...watched);
     const astrayAmps = poles.length > 1 && isResidual(part) ? steady.residualAmps(part.id) : 0;
-    const device = overcurrent ? overcurrentOf(part) : null;
+    const device = overcurrent ? deviceOf(part) : null;
     let band = device ? tripBand(device, amps) : NEVER;
     if (isResidual(part) && part.sensitivity !== undefined)
       band = sooner(
