@@ -36,7 +36,14 @@ function beside(scene: Scene, from: ScenePart, direction: Direction): ScenePart 
   for (const part of scene.parts) {
     if (part.id === from.id) continue;
     const to = middle(part);
-    const along = direction === 'left' ? at.x - to.x : direction === 'right' ? to.x - at.x : direction === 'up' ? at.y - to.y : to.y - at.y;
+    const along =
+      direction === 'left'
+        ? at.x - to.x
+        : direction === 'right'
+          ? to.x - at.x
+          : direction === 'up'
+            ? at.y - to.y
+            : to.y - at.y;
     const across = direction === 'left' || direction === 'right' ? Math.abs(to.y - at.y) : Math.abs(to.x - at.x);
     if (along <= 0 || across > 3 * along + 500) continue;
     const cost = along + 2 * across;
@@ -64,7 +71,9 @@ export function nextPart(doc: Installation, walk: Walk, scene: Scene, id: string
     if (below[0]) return below[0].part.id;
   }
   if ((direction === 'left' || direction === 'right') && above[0]) {
-    const siblings = neighbours(scene, above[0].part.id).filter((part) => depthOf(doc, walk, part.id) >= depth || part.id === id);
+    const siblings = neighbours(scene, above[0].part.id).filter(
+      (part) => depthOf(doc, walk, part.id) >= depth || part.id === id,
+    );
     const index = siblings.findIndex((part) => part.id === id);
     const next = siblings[index + (direction === 'left' ? -1 : 1)];
     if (index >= 0 && next) return next.id;

@@ -4,7 +4,6 @@ import { useCallback, useEffect, useMemo, useRef, useState, type MouseEvent as R
 import {
   ConnectionMode,
   ReactFlow,
-  ReactFlowProvider,
   SelectionMode,
   useReactFlow,
   useStore as useFlowStore,
@@ -63,12 +62,15 @@ function useCoarse(): boolean {
   return coarse;
 }
 
-function Flow({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
+/** The drawing as a canvas: a thin skin over a scene. It draws what it is given and says what was touched. */
+export function Canvas({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
   const { store } = hands;
   const view = useViewStore();
   const flow = useReactFlow<PartNode, RunEdge>();
   const selection = useSheet(store, (state) => state.selection);
-  const mayEdit = useSheet(store, (state) => state.rights.edit) && useView((state) => state.editing);
+  const rights = useSheet(store, (state) => state.rights);
+  const editing = useView((state) => state.editing);
+  const mayEdit = rights.edit && editing;
   const finding = useView((state) => state.finding);
   const dragIds = useDrag((drag) => drag.ids);
   const [moved, setMoved] = useState<ReadonlyMap<string, { x: number; y: number }>>(new Map());
@@ -180,18 +182,23 @@ function Flow({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
     [store, scene.runs],
   );
 
-  const onNodeDrag = useCallback(
-    (_: unknown, node: PartNode, group: PartNode[]) => {
-      const start = node.data.part;
-      useDrag.setState({ ids: new Set(group.map(({ id }) => id)), dx: node.position.x / PX - start.x, dy: node.position.y / PX - start.y });
-    },
-    [],
-  );
+  const onNodeDrag = useCallback((_: unknown, node: PartNode, group: PartNode[]) => {
+    const start = node.data.part;
+    useDrag.setState({
+      ids: new Set(group.map(({ id }) => id)),
+      dx: node.position.x / PX - start.x,
+      dy: node.position.y / PX - start.y,
+    });
+  }, []);
 
   const onNodeDragStop = useCallback(
     (_: unknown, node: PartNode, group: PartNode[]) => {
       const start = node.data.part;
-      hands.moveBy(group.map(({ id }) => id), node.position.x / PX - start.x, node.position.y / PX - start.y);
+      hands.moveBy(
+        group.map(({ id }) => id),
+        node.position.x / PX - start.x,
+        node.position.y / PX - start.y,
+      );
       setMoved(new Map());
       endDrag();
     },
@@ -219,7 +226,10 @@ function Flow({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
   );
 
   const onNodeDoubleClick = useCallback((_: unknown, node: PartNode) => hands.editPart(node.id), [hands]);
-  const onEdgeDoubleClick = useCallback((_: unknown, edge: RunEdge) => edge.data && hands.editRun(edge.data.run), [hands]);
+  const onEdgeDoubleClick = useCallback(
+    (_: unknown, edge: RunEdge) => edge.data && hands.editRun(edge.data.run),
+    [hands],
+  );
   const onMoveEnd = useCallback(() => {
     const { x, y, zoom } = flow.getViewport();
     if (x !== Math.round(x) || y !== Math.round(y)) void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
@@ -275,12 +285,3 @@ function Flow({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
 }
 
 const EMPTY: ReadonlySet<string> = new Set();
-
-/** The drawing as a canvas: a thin skin over a scene. It draws what it is given and says what was touched. */
-export function Canvas(props: CanvasProps) {
-  return (
-    <ReactFlowProvider>
-      <Flow {...props} />
-    </ReactFlowProvider>
-  );
-}

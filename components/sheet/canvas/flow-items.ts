@@ -6,7 +6,12 @@ import { px } from './units';
 export type PartNode = Node<{ part: ScenePart }, 'part'>;
 export type RunEdge = Edge<{ run: SceneRun }, 'run'>;
 
-const SIDE: Record<Side, Position> = { up: Position.Top, right: Position.Right, down: Position.Bottom, left: Position.Left };
+const SIDE: Record<Side, Position> = {
+  up: Position.Top,
+  right: Position.Right,
+  down: Position.Bottom,
+  left: Position.Left,
+};
 
 /** Made once per object of the scene: what did not change is the same node again. */
 const nodes = new WeakMap<ScenePart, PartNode>();

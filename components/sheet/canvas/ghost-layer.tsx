@@ -19,7 +19,14 @@ export const GhostLayer = memo(function GhostLayer({ scene, ghost }: { scene: Sc
     <Layer scene={ghost} level={3} name="ghost">
       <g className="sheet-ghost">
         {runs.map((run) => (
-          <path key={run.id} d={pathOf(run)} fill="none" stroke="var(--ghost)" strokeWidth={55} strokeDasharray="180 120" />
+          <path
+            key={run.id}
+            d={pathOf(run)}
+            fill="none"
+            stroke="var(--ghost)"
+            strokeWidth={55}
+            strokeDasharray="180 120"
+          />
         ))}
         {parts.map((part) => (
           <g key={part.id} transform={`translate(${part.x} ${part.y})`}>

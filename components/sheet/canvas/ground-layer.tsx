@@ -13,7 +13,15 @@ const Frame = memo(function Frame({ frame }: { frame: SceneFrame }) {
     case 'lane':
       return <rect {...box(frame)} fill="var(--lane)" />;
     case 'room':
-      return <rect {...box(frame)} fill="none" stroke="var(--rule)" strokeWidth={STROKE.normal * INK} strokeDasharray="190 125" />;
+      return (
+        <rect
+          {...box(frame)}
+          fill="none"
+          stroke="var(--rule)"
+          strokeWidth={STROKE.normal * INK}
+          strokeDasharray="190 125"
+        />
+      );
     case 'switchboard':
       return <rect {...box(frame)} fill="none" stroke="var(--ink)" strokeWidth={STROKE.normal * INK} />;
     case 'brace':
@@ -32,7 +40,11 @@ function BandName({ name, y, height }: { name: string; y: number; height: number
   const spaced = textWidth(name, BODY, true) + 300 <= height;
   const size = spaced || textWidth(name, BODY) + 200 <= height ? BODY : 200;
   if (textWidth(name, size, spaced) > height) return null;
-  return <Lettering text={{ x: 900, y: y + height / 2, text: name, size, tone: 'grey', anchor: 'middle', turn: 3, spaced }} />;
+  return (
+    <Lettering
+      text={{ x: 900, y: y + height / 2, text: name, size, tone: 'grey', anchor: 'middle', turn: 3, spaced }}
+    />
+  );
 }
 
 /** Bands, lanes, rooms and switchboards: the ground on which the drawing stands. */
@@ -45,7 +57,9 @@ export const GroundLayer = memo(function GroundLayer({ scene, names }: { scene: 
       ))}
       {scene.bands.map((band, i) => (
         <g key={band.name}>
-          {i > 0 && <path d={`M250 ${band.y}H${scene.width - 250}`} stroke="var(--hair)" strokeWidth={STROKE.thin * INK} />}
+          {i > 0 && (
+            <path d={`M250 ${band.y}H${scene.width - 250}`} stroke="var(--hair)" strokeWidth={STROKE.thin * INK} />
+          )}
           {names && <BandName {...band} />}
         </g>
       ))}

@@ -21,7 +21,14 @@ export const HeldLayer = memo(function HeldLayer({ scene, parts }: { scene: Scen
       {scene.parts
         .filter((part) => parts.has(part.id))
         .map((part) => (
-          <rect key={part.id} {...around(part)} fill="var(--marker)" stroke="var(--ink)" strokeWidth={30} strokeDasharray="120 90" />
+          <rect
+            key={part.id}
+            {...around(part)}
+            fill="var(--marker)"
+            stroke="var(--ink)"
+            strokeWidth={30}
+            strokeDasharray="120 90"
+          />
         ))}
     </Layer>
   );
@@ -65,7 +72,19 @@ export const HandLayer = memo(function HandLayer({ scene, terminal, candidates, 
     <Layer scene={scene} level={4} name="hand">
       {candidates.map((end) => {
         const at = endPoint(scene, end);
-        return at && <circle key={end.join(' ')} cx={at.x} cy={at.y} r={130} fill="var(--paper)" stroke="var(--grey)" strokeWidth={45} />;
+        return (
+          at && (
+            <circle
+              key={end.join(' ')}
+              cx={at.x}
+              cy={at.y}
+              r={130}
+              fill="var(--paper)"
+              stroke="var(--grey)"
+              strokeWidth={45}
+            />
+          )
+        );
       })}
       {from && to && (
         <path d={bend(from, to)} fill="none" stroke="var(--ghost)" strokeWidth={60} strokeDasharray="220 130" />

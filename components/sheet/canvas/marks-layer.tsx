@@ -63,7 +63,9 @@ export const MarksLayer = memo(function MarksLayer({ scene, letters }: { scene: 
             const symbol = symbolById(part.symbol, part.width);
             return (symbol.texts ?? []).map((text) => {
               const at = turnedPoint(text.x, text.y, symbol, part.turn);
-              return <Lettering key={`${part.id} ${text.text}`} text={{ ...text, x: part.x + at.x, y: part.y + at.y }} />;
+              return (
+                <Lettering key={`${part.id} ${text.text}`} text={{ ...text, x: part.x + at.x, y: part.y + at.y }} />
+              );
             });
           })}
           {scene.parts.map((part) => (

@@ -7,7 +7,15 @@ import { middle } from './pick';
 const SIDE = 420;
 
 /** Letters of the findings in red squares at their parts; the note in hand has a pencil circle as well. */
-export const NotesLayer = memo(function NotesLayer({ scene, notes, inHand }: { scene: Scene; notes: readonly MarkedNote[]; inHand: string | null }) {
+export const NotesLayer = memo(function NotesLayer({
+  scene,
+  notes,
+  inHand,
+}: {
+  scene: Scene;
+  notes: readonly MarkedNote[];
+  inHand: string | null;
+}) {
   const parts = new Map(scene.parts.map((part) => [part.id, part]));
   const perPart = new Map<string, number>();
   return (
@@ -22,7 +30,14 @@ export const NotesLayer = memo(function NotesLayer({ scene, notes, inHand }: { s
         return (
           <g key={note.key}>
             <rect x={x} y={y} width={SIDE} height={SIDE} fill="var(--red)" />
-            <text x={x + SIDE / 2} y={y + SIDE - 120} fontSize={330} fontWeight={700} textAnchor="middle" fill="var(--paper)">
+            <text
+              x={x + SIDE / 2}
+              y={y + SIDE - 120}
+              fontSize={330}
+              fontWeight={700}
+              textAnchor="middle"
+              fill="var(--paper)"
+            >
               {note.letter}
             </text>
           </g>
@@ -30,7 +45,9 @@ export const NotesLayer = memo(function NotesLayer({ scene, notes, inHand }: { s
       })}
       {notes
         .filter((note) => note.key === inHand)
-        .flatMap((note) => note.parts.map((id) => parts.get(id)).filter((part): part is ScenePart => part !== undefined))
+        .flatMap((note) =>
+          note.parts.map((id) => parts.get(id)).filter((part): part is ScenePart => part !== undefined),
+        )
         .map((part) => {
           const at = middle(part);
           return (

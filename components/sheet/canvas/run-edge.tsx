@@ -12,7 +12,13 @@ export const RunEdgeView = memo(function RunEdgeView({ data }: EdgeProps<RunEdge
   if (!data) return null;
   return (
     <g transform={`scale(${PX})`}>
-      <path className="react-flow__edge-interaction" d={pathOf(data.run)} fill="none" stroke="transparent" strokeWidth={REACH / PX} />
+      <path
+        className="react-flow__edge-interaction"
+        d={pathOf(data.run)}
+        fill="none"
+        stroke="transparent"
+        strokeWidth={REACH / PX}
+      />
     </g>
   );
 });

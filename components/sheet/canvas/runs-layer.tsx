@@ -75,7 +75,15 @@ export const RunsLayer = memo(function RunsLayer({ scene, hand }: { scene: Scene
   return (
     <Layer scene={scene} level={-1} name="runs">
       {held.map((run) => (
-        <path key={run.id} d={pathOf(run)} fill="none" stroke="var(--marker)" strokeWidth={340} strokeLinejoin="round" strokeLinecap="round" />
+        <path
+          key={run.id}
+          d={pathOf(run)}
+          fill="none"
+          stroke="var(--marker)"
+          strokeWidth={340}
+          strokeLinejoin="round"
+          strokeLinecap="round"
+        />
       ))}
       {plain.map((run) => line(run, 'plain'))}
       {cased.map((run) => line(run, 'outline'))}

@@ -48,7 +48,11 @@ export class Examiner {
   private ready(): ExamineWorker {
     if (this.worker) return this.worker;
     const worker = this.makeWorker();
-    worker.onmessage = ({ data }) => this.answer(data.id, 'failure' in data ? { failure: data.failure } : { examination: data.examination, ms: data.ms });
+    worker.onmessage = ({ data }) =>
+      this.answer(
+        data.id,
+        'failure' in data ? { failure: data.failure } : { examination: data.examination, ms: data.ms },
+      );
     worker.onerror = (event) => {
       const asked = this.running;
       this.close();
@@ -76,4 +80,6 @@ export class Examiner {
 }
 
 export const browserExaminer = (): Examiner =>
-  new Examiner(() => new Worker(new URL('./examine.worker.ts', import.meta.url), { type: 'module' }) as unknown as ExamineWorker);
+  new Examiner(
+    () => new Worker(new URL('./examine.worker.ts', import.meta.url), { type: 'module' }) as unknown as ExamineWorker,
+  );

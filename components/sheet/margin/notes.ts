@@ -15,7 +15,8 @@ export interface MarkedNote {
   grid: string | null;
 }
 
-export const keyOf = ({ rule, parts, wires }: Pick<Finding, 'rule' | 'parts' | 'wires'>): string => [rule, ...parts, ...wires].join(' ');
+export const keyOf = ({ rule, parts, wires }: Pick<Finding, 'rule' | 'parts' | 'wires'>): string =>
+  [rule, ...parts, ...wires].join(' ');
 
 /** a, b ... z, aa, ab ... */
 export function letterOf(index: number): string {
@@ -49,7 +50,9 @@ function gridOf(scene: Scene, id: string | undefined): string | null {
 }
 
 const holdsIn = (finding: Finding, condition: Condition): boolean =>
-  condition === 'all' || finding.conditions.length === 0 || finding.conditions.some((name) => name.split('/')[0] === condition);
+  condition === 'all' ||
+  finding.conditions.length === 0 ||
+  finding.conditions.some((name) => name.split('/')[0] === condition);
 
 const ORDER = { danger: 0, defect: 1, advice: 2 } as const;
 
@@ -59,7 +62,12 @@ export interface NoteFilter {
 }
 
 /** Findings as notes, the gravest first; those that somebody answers for come last and bear no letter on the sheet. */
-export function notesOf(findings: readonly Finding[], doc: Installation, scene: Scene, { condition, severities }: NoteFilter): MarkedNote[] {
+export function notesOf(
+  findings: readonly Finding[],
+  doc: Installation,
+  scene: Scene,
+  { condition, severities }: NoteFilter,
+): MarkedNote[] {
   const drawn = new Set(scene.parts.map((part) => part.id));
   const open = findings.filter((finding) => !finding.silenced);
   const sorted = [...open].sort((a, b) => ORDER[a.severity] - ORDER[b.severity]);

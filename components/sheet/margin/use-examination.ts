@@ -18,7 +18,12 @@ export interface ExaminationState {
 /** Examines a document as it changes; null is not examined. */
 export function useExamination(document: Installation | null): ExaminationState {
   const examiner = useRef<Examiner | null>(null);
-  const [state, setState] = useState<{ of: Installation | null; examination: Examination | null; failure: string | null; ms: number }>({
+  const [state, setState] = useState<{
+    of: Installation | null;
+    examination: Examination | null;
+    failure: string | null;
+    ms: number;
+  }>({
     of: null,
     examination: null,
     failure: null,

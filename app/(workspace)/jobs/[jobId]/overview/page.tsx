@@ -1,0 +1,22 @@
+import type { Metadata } from 'next';
+import { Sheet } from '@/components/sheet/sheet';
+import { openDrawing } from '@/lib/server/drawings/open-drawing';
+import { readJob } from '@/lib/server/jobs/read-job';
+import { requireActor } from '@/lib/server/session';
+import { found, jobIdIn } from '../../../found';
+
+export const metadata: Metadata = { title: 'Overview' };
+
+export default async function OverviewPage({ params }: { params: Promise<{ jobId: string }> }) {
+  const actor = await requireActor();
+  const jobId = await jobIdIn(params);
+  const [view, job] = await found(Promise.all([openDrawing(actor, { jobId }), readJob(actor, jobId)]));
+  return (
+    <Sheet
+      face="overview"
+      view={view}
+      me={{ id: actor.personId, initials: actor.initials }}
+      hoursWanted={job.hoursWanted}
+    />
+  );
+}

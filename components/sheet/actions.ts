@@ -1,0 +1,186 @@
+import type { KeyHelp } from '@/components/frame/types';
+import type { Hands } from './hands';
+
+/** Everything that can be done on the sheet: by its key, and by its words in the command list. */
+export interface Action {
+  id: string;
+  /** as the command list says it */
+  words: string;
+  /** as printed on the keys; absent where it is reached by words alone */
+  keys?: string;
+  /** single keys act only while the sheet has the focus and may be switched off */
+  does: (context: ActionContext) => void;
+  /** changes the drawing: not offered to readers */
+  edits?: boolean;
+}
+
+export interface ActionContext {
+  hands: Hands;
+  otherFace: () => void;
+  nextNote: (step: 1 | -1) => void;
+  page: (step: 1 | -1) => void;
+  tidy: () => void;
+}
+
+const camera = ({ hands }: ActionContext) => hands.view.getState().camera;
+const mode = ({ hands }: ActionContext) => hands.view.getState();
+
+export const ACTIONS: readonly Action[] = [
+  {
+    id: 'extend',
+    words: 'Extend: what comes next at the terminal in hand',
+    keys: 'e',
+    edits: true,
+    does: ({ hands }) => hands.extend(),
+  },
+  {
+    id: 'edit',
+    words: 'Edit the rating or designation where it is written',
+    keys: 'Enter',
+    edits: true,
+    does: ({ hands }) => hands.edit(),
+  },
+  {
+    id: 'edit-cable',
+    words: 'Edit the cable at the terminal in hand',
+    keys: 'l',
+    edits: true,
+    does: ({ hands }) => hands.editCable(),
+  },
+  {
+    id: 'wire',
+    words: 'Draw a wire from the terminal in hand',
+    keys: 'w',
+    edits: true,
+    does: ({ hands }) => hands.wire(),
+  },
+  {
+    id: 'move',
+    words: 'Move what is in hand by the module',
+    keys: 'm',
+    edits: true,
+    does: ({ hands }) => hands.startMove(),
+  },
+  {
+    id: 'load',
+    words: 'Move a load to another way, or between mains and backup',
+    keys: 'b',
+    edits: true,
+    does: ({ hands }) => hands.chooseWay(),
+  },
+  { id: 'delete', words: 'Delete what is in hand', keys: 'Delete', edits: true, does: ({ hands }) => hands.remove() },
+  {
+    id: 'undo',
+    words: 'Take back my last step',
+    keys: 'Ctrl Z',
+    edits: true,
+    does: ({ hands }) => hands.store.getState().undo(),
+  },
+  {
+    id: 'redo',
+    words: 'Do again what I took back',
+    keys: 'Ctrl Shift Z',
+    edits: true,
+    does: ({ hands }) => hands.store.getState().redo(),
+  },
+  { id: 'copy', words: 'Copy what is in hand', keys: 'Ctrl C', does: ({ hands }) => void hands.copy() },
+  { id: 'cut', words: 'Cut what is in hand', keys: 'Ctrl X', edits: true, does: ({ hands }) => void hands.copy(true) },
+  { id: 'paste', words: 'Paste', keys: 'Ctrl V', edits: true, does: ({ hands }) => void hands.paste() },
+  {
+    id: 'duplicate',
+    words: 'Duplicate what is in hand',
+    keys: 'Ctrl D',
+    edits: true,
+    does: ({ hands }) => hands.duplicate(),
+  },
+  { id: 'all', words: 'Take everything in hand', keys: 'Ctrl A', does: ({ hands }) => hands.selectAll() },
+  { id: 'next-note', words: 'Next finding', keys: 'n', does: ({ nextNote }) => nextNote(1) },
+  { id: 'last-note', words: 'Finding before', keys: 'Shift N', does: ({ nextNote }) => nextNote(-1) },
+  { id: 'face', words: 'Other face at the same place', keys: 'g', does: ({ otherFace }) => otherFace() },
+  {
+    id: 'find',
+    words: 'Find by name, number, kind or finding',
+    keys: '/',
+    does: (context) => mode(context).setMode({ kind: 'find' }),
+  },
+  {
+    id: 'commands',
+    words: 'List of all commands',
+    keys: 'Ctrl K',
+    does: (context) => mode(context).setMode({ kind: 'commands' }),
+  },
+  { id: 'larger', words: 'Larger', keys: '+', does: (context) => camera(context)?.zoom(1.25) },
+  { id: 'smaller', words: 'Smaller', keys: '-', does: (context) => camera(context)?.zoom(0.8) },
+  { id: 'whole', words: 'Whole sheet', keys: 'Home', does: (context) => camera(context)?.all() },
+  { id: 'page-on', words: 'Next rooms or next page', keys: '.', does: ({ page }) => page(1) },
+  { id: 'page-back', words: 'Rooms or page before', keys: ',', does: ({ page }) => page(-1) },
+  {
+    id: 'supply',
+    words: 'Place the supply, with meter, main switch, rcd and bars',
+    edits: true,
+    does: ({ hands }) => hands.placeSupply(),
+  },
+  {
+    id: 'supply-alone',
+    words: 'Place the service line alone',
+    edits: true,
+    does: ({ hands }) => hands.placeSupply(true),
+  },
+  { id: 'row', words: 'Align what is in hand in a row', edits: true, does: ({ hands }) => hands.align('row') },
+  { id: 'column', words: 'Align what is in hand in a column', edits: true, does: ({ hands }) => hands.align('column') },
+  {
+    id: 'unpin',
+    words: 'Let what is in hand be placed by the sheet again',
+    edits: true,
+    does: ({ hands }) => hands.unpin(),
+  },
+  {
+    id: 'tidy',
+    words: 'Tidy: place the parts in hand, or all, anew',
+    keys: 't',
+    edits: true,
+    does: ({ tidy }) => tidy(),
+  },
+  { id: 'renumber', words: 'Renumber designations', edits: true, does: ({ hands }) => hands.renumber() },
+  {
+    id: 'history',
+    words: 'History of my steps',
+    keys: 'h',
+    does: (context) => mode(context).setMode({ kind: 'history' }),
+  },
+  {
+    id: 'export',
+    words: 'Print, export, import, record a revision',
+    keys: 'x',
+    does: (context) => mode(context).setMode({ kind: 'export' }),
+  },
+  { id: 'rest', words: 'One step back', keys: 'Esc', does: ({ hands }) => hands.letGo() },
+];
+
+/** Keys of the sheet, for the list behind `?`. */
+export const KEYS_HELP: readonly KeyHelp[] = [
+  { keys: ['↑', '↓', '←', '→'], does: 'follow the conductor: up is towards the source' },
+  { keys: ['Tab'], does: 'next terminal of the part in hand' },
+  ...ACTIONS.filter((action) => action.keys).map((action) => ({ keys: [action.keys!], does: action.words })),
+];
+
+/** The key of an event as it is printed: "Ctrl Shift Z", "Shift N", "e". Letters by what is typed, by place where it is not Latin. */
+export function keyName(event: Pick<KeyboardEvent, 'key' | 'code' | 'ctrlKey' | 'metaKey' | 'shiftKey'>): string {
+  const latin =
+    event.key.length !== 1 || event.key <= '~'
+      ? event.key
+      : event.code.startsWith('Key')
+        ? event.code.slice(3).toLowerCase()
+        : event.key;
+  const ctrl = event.ctrlKey || event.metaKey;
+  const letter = /^[a-z]$/i.test(latin);
+  if (ctrl) return `Ctrl ${event.shiftKey && letter ? 'Shift ' : ''}${letter ? latin.toUpperCase() : latin}`;
+  if (letter) return event.shiftKey ? `Shift ${latin.toUpperCase()}` : latin.toLowerCase();
+  return latin === 'Escape' ? 'Esc' : latin === '=' ? '+' : latin;
+}
+
+const BY_KEY = new Map(ACTIONS.flatMap((action) => (action.keys ? [[action.keys, action] as const] : [])));
+if (BY_KEY.size !== ACTIONS.filter((action) => action.keys).length) throw new Error('two actions claim one key');
+
+export const actionFor = (key: string): Action | undefined =>
+  BY_KEY.get(key === 'Backspace' ? 'Delete' : key === 'Ctrl Y' ? 'Ctrl Shift Z' : key);

@@ -1,0 +1,138 @@
+'use client';
+
+import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { editCable, editName, editRating } from '@/diagram/commands/edit-in-place';
+import { cableText, ratingExample, ratingText } from '@/diagram/commands/rating-text';
+import { isRefusal, type Command, type Refusal } from '@/diagram/commands/types';
+import { KIND_NAME } from '@/diagram/document/kinds';
+import type { Hands } from './hands';
+import { REST, type Mode } from './view';
+
+interface FieldProps {
+  label: string;
+  value: string;
+  hint?: string;
+  first?: boolean;
+  /** does the edit; what is refused stays in the field with the reason below */
+  commit(text: string): Command | Refusal;
+  hands: Hands;
+  onDone(): void;
+}
+
+function EditField({ label, value, hint, first = false, commit, hands, onDone }: FieldProps) {
+  const [text, setText] = useState(value);
+  const [error, setError] = useState('');
+  const field = useRef<HTMLInputElement>(null);
+  useEffect(() => {
+    if (first) field.current?.select();
+  }, [first]);
+  /** @returns true when the field is as it should be */
+  const take = (): boolean => {
+    if (text.trim() === value) return true;
+    const outcome = commit(text);
+    if (isRefusal(outcome)) {
+      setError(outcome.refused);
+      return false;
+    }
+    hands.do(outcome);
+    return true;
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    event.stopPropagation();
+    if (event.key === 'Escape') onDone();
+    else if (event.key === 'Enter' && !event.nativeEvent.isComposing && take()) onDone();
+    else if (event.key === 'Tab' && !take()) event.preventDefault();
+  };
+  return (
+    <label className="block">
+      <span className="block text-small text-grey">{label}</span>
+      <input
+        ref={field}
+        value={text}
+        onChange={(event) => {
+          setText(event.target.value);
+          setError('');
+        }}
+        onKeyDown={onKeyDown}
+        placeholder={hint}
+        aria-invalid={error ? true : undefined}
+        className="w-full border-b border-ink bg-transparent px-1 font-bold outline-offset-0 placeholder:font-normal placeholder:text-grey aria-invalid:border-b-2 aria-invalid:border-red pointer-coarse:min-h-11"
+        autoComplete="off"
+        spellCheck={false}
+      />
+      {error && (
+        <span role="alert" className="block text-small text-red">
+          {error}
+        </span>
+      )}
+    </label>
+  );
+}
+
+/** The lettering of a part or cable, open for writing at its place. */
+export function EditPanel({
+  mode,
+  hands,
+  onDone,
+}: {
+  mode: Extract<Mode, { kind: 'edit' }>;
+  hands: Hands;
+  onDone(): void;
+}) {
+  const part = hands.doc.parts.find((candidate) => candidate.id === mode.part);
+  const cable = hands.doc.cables.find((candidate) => candidate.id === mode.cable);
+  const leave = () => {
+    hands.view.getState().setMode(REST);
+    onDone();
+  };
+  if (!part && !cable) return null;
+  const name = part ? (part.ref ?? KIND_NAME[part.kind]) : 'the cable';
+  return (
+    <div
+      role="dialog"
+      aria-label={`Edit ${name}`}
+      className="flex w-56 flex-col gap-2 border-2 border-ink bg-paper p-2"
+      onKeyDown={(event) => event.stopPropagation()}
+    >
+      {part && (
+        <>
+          <EditField
+            first
+            label={`Rating of ${name}`}
+            value={ratingText(part)}
+            hint={ratingExample(part)}
+            commit={(text) => editRating(hands.doc, part.id, text)}
+            hands={hands}
+            onDone={leave}
+          />
+          <EditField
+            label="Designation"
+            value={part.ref ?? ''}
+            commit={(text) => editName(hands.doc, part.id, 'ref', text)}
+            hands={hands}
+            onDone={leave}
+          />
+          <EditField
+            label="Label"
+            value={part.label ?? ''}
+            commit={(text) => editName(hands.doc, part.id, 'label', text)}
+            hands={hands}
+            onDone={leave}
+          />
+        </>
+      )}
+      {cable && (
+        <EditField
+          first
+          label="Cable"
+          value={cableText(cable)}
+          hint="3×2.5 24 m"
+          commit={(text) => editCable(hands.doc, cable.id, text)}
+          hands={hands}
+          onDone={leave}
+        />
+      )}
+      <p className="text-small text-grey">Enter takes, Esc leaves as it was.</p>
+    </div>
+  );
+}

@@ -1,0 +1,91 @@
+'use client';
+
+import { Button } from '@/components/ui/button';
+import type { Scene } from '@/diagram/layout/scene';
+import type { ActionContext } from '../actions';
+import { handWords } from '../hand-words';
+import type { MarkedNote } from '../margin/notes';
+import { useSheet, type OpenDrawing } from '../use-drawing';
+import { useView, useViewStore, type Mode } from '../view';
+import { Strip } from './strip';
+
+interface FootProps {
+  drawing: OpenDrawing;
+  context: ActionContext;
+  scene: Scene;
+  notes: readonly MarkedNote[];
+}
+
+/** What the hands may do next, in words: the foot's own line. */
+function hint(mode: Mode, held: string, mayEdit: boolean): string {
+  switch (mode.kind) {
+    case 'extend':
+      return 'Type to narrow, Enter to place. The ghost stands where the part would lie.';
+    case 'wire':
+      return 'Arrows choose where the wire ends, Enter draws it, Esc leaves.';
+    case 'move':
+      return `Arrows move by 2.5 mm: ${mode.dx}, ${mode.dy}. Enter leaves it there, Esc as it was.`;
+    case 'tidy':
+      return 'The dashed drawing is how it would stand.';
+    default:
+      return held || (mayEdit ? 'Arrows or a click take a part in hand; e extends it.' : 'You may read this drawing.');
+  }
+}
+
+export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
+  const view = useViewStore();
+  const mode = useView((state) => state.mode);
+  const editing = useView((state) => state.editing);
+  const document = useSheet(drawing.store, (state) => state.document);
+  const selection = useSheet(drawing.store, (state) => state.selection);
+  const notice = useSheet(drawing.store, (state) => state.notice);
+  const mayEdit = useSheet(drawing.store, (state) => state.rights.edit) && editing;
+  const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
+  const { undo } = drawing.store.getState();
+  return (
+    <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
+      <Strip scene={scene} notes={notes} />
+      <div className="flex min-w-0 flex-1 flex-col justify-between gap-1">
+        <p className="line-clamp-2 leading-[15px]">{hint(mode, handWords(document, selection), mayEdit)}</p>
+        <p role="status" className="truncate text-small leading-[14px] text-grey" title={notice}>
+          {notice}
+        </p>
+        <div className="flex flex-wrap gap-x-3 text-small leading-[14px]">
+          {mayEdit && (
+            <button
+              type="button"
+              className="cursor-pointer underline underline-offset-2 disabled:text-grey disabled:no-underline pointer-coarse:min-h-11"
+              disabled={!undoable}
+              onClick={undo}
+              title={undoable}
+            >
+              undo
+            </button>
+          )}
+          <FootWord onClick={() => view.getState().setMode({ kind: 'history' })}>history</FootWord>
+          <FootWord onClick={() => view.getState().setMode({ kind: 'commands' })}>commands</FootWord>
+          <FootWord onClick={() => view.getState().setMode({ kind: 'find' })}>find</FootWord>
+          {mayEdit && <FootWord onClick={context.tidy}>tidy</FootWord>}
+          <FootWord onClick={() => view.getState().setMode({ kind: 'export' })}>print, export</FootWord>
+        </div>
+      </div>
+      {mayEdit && selection.terminal && mode.kind === 'rest' && (
+        <Button className="self-start lap:hidden" solid onClick={() => context.hands.extend()}>
+          What comes next
+        </Button>
+      )}
+    </div>
+  );
+}
+
+function FootWord({ onClick, children }: { onClick(): void; children: string }) {
+  return (
+    <button
+      type="button"
+      className="cursor-pointer underline underline-offset-2 pointer-coarse:min-h-11"
+      onClick={onClick}
+    >
+      {children}
+    </button>
+  );
+}

@@ -1,0 +1,302 @@
+import { allowedFrom, joinTerminals } from '@/diagram/commands/join-terminals';
+import { copyParts, pasteClip, readClip, type Clip } from '@/diagram/commands/copy';
+import { deleteSelection } from '@/diagram/commands/delete-selection';
+import { marksOf, sameEnd } from '@/diagram/commands/ends';
+import { moveLoad } from '@/diagram/commands/move-load';
+import { alignParts, moveParts, unpinParts } from '@/diagram/commands/move-parts';
+import { placeSupply, placeSupplyAlone } from '@/diagram/commands/place-supply';
+import { renumber } from '@/diagram/commands/renumber';
+import { isRefusal, type Command, type NewId, type Refusal } from '@/diagram/commands/types';
+import { walkFromSources, type Walk } from '@/diagram/commands/walk';
+import { applyPatch } from '@/diagram/document/patch';
+import { MODULE } from '@/diagram/symbols/types';
+import type { End, Installation } from '@/diagram/document/schema';
+import type { Scene, SceneRun } from '@/diagram/layout/scene';
+import { isPoint } from '@/diagram/terminals/roles-of-parts';
+import { firstPart, handEnd, nextPart, type Direction } from './navigate';
+import { middle } from './canvas/pick';
+import type { DrawingStore } from './store';
+import { NOTHING } from './store';
+import { REST, type View } from './view';
+
+interface HandsTools {
+  store: DrawingStore;
+  view: View;
+  newId: NewId;
+}
+
+/**
+ * All that hands do on the sheet, by key, mouse or finger: the same few functions, each of which ends in one named command
+ * or in a change of what is in hand.
+ */
+export class Hands {
+  readonly store: DrawingStore;
+  readonly view: View;
+  readonly newId: NewId;
+  private shown: Scene | null = null;
+  private walked: { doc: Installation; walk: Walk } | null = null;
+  private clip: Clip | null = null;
+
+  constructor(tools: HandsTools) {
+    this.store = tools.store;
+    this.view = tools.view;
+    this.newId = tools.newId;
+  }
+
+  /** The canvas shows another scene: the hands act on that one from now on. */
+  show(scene: Scene): void {
+    this.shown = scene;
+  }
+
+  scene(): Scene {
+    if (!this.shown) throw new Error('no scene is on the canvas yet');
+    return this.shown;
+  }
+
+  private get state() {
+    return this.store.getState();
+  }
+
+  get doc(): Installation {
+    return this.state.document;
+  }
+
+  private get walk(): Walk {
+    if (this.walked?.doc !== this.doc) this.walked = { doc: this.doc, walk: walkFromSources(this.doc) };
+    return this.walked.walk;
+  }
+
+  get mayEdit(): boolean {
+    return this.state.rights.edit && this.view.getState().editing;
+  }
+
+  /** Does a command, or says why not. */
+  do(outcome: Command | Refusal): boolean {
+    if (!this.mayEdit) {
+      this.state.say('You may read this drawing.');
+      return false;
+    }
+    if (isRefusal(outcome)) {
+      this.state.say(outcome.refused);
+      return false;
+    }
+    if (!this.state.run(outcome.label, outcome.patch)) {
+      this.state.say('That would change nothing.');
+      return false;
+    }
+    if (outcome.next) this.state.select({ parts: [outcome.next[0]], wires: [], terminal: outcome.next });
+    else if (outcome.parts) this.state.select({ parts: outcome.parts, wires: [], terminal: null });
+    return true;
+  }
+
+  /** Takes a part in hand, at a terminal of it. */
+  take(id: string, end: End | null = handEnd(this.doc, this.walk, id)): void {
+    this.state.select({ parts: [id], wires: [], terminal: end });
+    const part = this.scene().parts.find((candidate) => candidate.id === id);
+    if (part) this.view.getState().camera?.show(middle(part));
+  }
+
+  letGo(): void {
+    const { mode, setMode } = this.view.getState();
+    if (mode.kind !== 'rest') setMode(REST);
+    else this.state.select(NOTHING);
+  }
+
+  /** A pointer on a part: takes it in hand, or ends the wire that hangs there. */
+  tap(end: End | null, id: string, finger: boolean): void {
+    const { mode, setMode } = this.view.getState();
+    if (mode.kind === 'wire' && end) {
+      this.endWire(end);
+      return;
+    }
+    if (finger && mode.kind === 'extend' && end && !sameEnd(end, mode.end)) {
+      setMode(REST);
+      this.do(joinTerminals(this.doc, mode.end, end, this.newId));
+      return;
+    }
+    if (mode.kind !== 'rest') setMode(REST);
+    this.state.select({ parts: [id], wires: [], terminal: end ?? handEnd(this.doc, this.walk, id) });
+    if (finger && this.mayEdit && end) this.extend();
+  }
+
+  arrow(direction: Direction): void {
+    const scene = this.scene();
+    const [id] = this.state.selection.parts;
+    const next = id ? nextPart(this.doc, this.walk, scene, id, direction) : firstPart(scene);
+    if (next) this.take(next);
+    else this.state.say('Nothing lies that way.');
+  }
+
+  /** The next terminal of the part in hand. @returns false past the last one: the focus may leave the sheet */
+  terminal(step: 1 | -1): boolean {
+    const { parts, terminal } = this.state.selection;
+    const part = this.doc.parts.find((candidate) => candidate.id === parts[0]);
+    if (!part) return false;
+    const marks = marksOf(this.doc, part);
+    const index = terminal ? marks.indexOf(terminal[1]) : -1;
+    const next = marks[index + step];
+    if (!next) return false;
+    this.state.select({ terminal: [part.id, next] });
+    return true;
+  }
+
+  extend(): void {
+    const { terminal } = this.state.selection;
+    if (!this.mayEdit) this.state.say('You may read this drawing.');
+    else if (!terminal) this.state.say('Take a terminal in hand first: arrows, or a click on a part.');
+    else this.view.getState().setMode({ kind: 'extend', end: terminal, typed: '', index: 0, open: false, choice: {} });
+  }
+
+  /** Terminals a wire from the one in hand may go to, in reading order. */
+  candidates(from: End): End[] {
+    const ends = this.scene().parts.flatMap((part) => part.terminals.map(({ mark }): End => [part.id, mark]));
+    return allowedFrom(this.doc, from, ends);
+  }
+
+  wire(): void {
+    const { terminal } = this.state.selection;
+    if (!this.mayEdit) this.state.say('You may read this drawing.');
+    else if (!terminal) this.state.say('Take a terminal in hand first: arrows, or a click on a part.');
+    else if (this.candidates(terminal).length === 0) this.state.say('No other terminal carries the same conductor.');
+    else this.view.getState().setMode({ kind: 'wire', from: terminal, index: 0 });
+  }
+
+  endWire(to?: End): void {
+    const { mode, setMode } = this.view.getState();
+    if (mode.kind !== 'wire') return;
+    const target = to ?? this.candidates(mode.from)[mode.index];
+    setMode(REST);
+    if (target) this.do(joinTerminals(this.doc, mode.from, target, this.newId));
+  }
+
+  /** Begins to move what is in hand, in modules. */
+  startMove(): void {
+    if (!this.mayEdit) this.state.say('You may read this drawing.');
+    else if (this.state.selection.parts.length === 0) this.state.say('Take a part in hand first.');
+    else this.view.getState().setMode({ kind: 'move', dx: 0, dy: 0 });
+  }
+
+  nudge(direction: Direction): void {
+    const { mode, setMode, set } = this.view.getState();
+    if (mode.kind !== 'move') return;
+    const dx = mode.dx + (direction === 'left' ? -1 : direction === 'right' ? 1 : 0);
+    const dy = mode.dy + (direction === 'up' ? -1 : direction === 'down' ? 1 : 0);
+    setMode({ kind: 'move', dx, dy });
+    const moved = moveParts(this.doc, this.view.getState().face, this.state.selection.parts, dx * MODULE, dy * MODULE);
+    set({ ghost: applyPatch(this.doc, moved.patch) });
+  }
+
+  endMove(): void {
+    const { mode, setMode } = this.view.getState();
+    if (mode.kind !== 'move') return;
+    setMode(REST);
+    if (mode.dx !== 0 || mode.dy !== 0) this.moveBy(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
+  }
+
+  /** Lengths in 1/100 mm. */
+  moveBy(ids: readonly string[], dx: number, dy: number): void {
+    const { terminal } = this.state.selection;
+    if (this.do(moveParts(this.doc, this.view.getState().face, ids, dx, dy)) && terminal)
+      this.state.select({ terminal });
+  }
+
+  align(along: 'row' | 'column'): void {
+    if (this.state.selection.parts.length < 2) this.state.say('Take at least two parts in hand.');
+    else this.do(alignParts(this.doc, this.view.getState().face, this.state.selection.parts, along));
+  }
+
+  unpin(): void {
+    this.do(unpinParts(this.doc, this.view.getState().face, this.state.selection.parts));
+  }
+
+  remove(): void {
+    const { parts, wires } = this.state.selection;
+    if (parts.length === 0 && wires.length === 0) this.state.say('Nothing is in hand.');
+    else this.do(deleteSelection(this.doc, parts, wires));
+  }
+
+  async copy(cut = false): Promise<void> {
+    const clip = copyParts(this.doc, this.state.selection.parts);
+    if (!clip) return this.state.say('Take parts in hand to copy them.');
+    this.clip = clip;
+    this.state.say(`Copied ${clip.parts.length} ${clip.parts.length === 1 ? 'part' : 'parts'}.`);
+    try {
+      await navigator.clipboard.writeText(JSON.stringify(clip));
+    } catch {
+      // The browser keeps its clipboard to itself: the copy can still be pasted in this window.
+      this.state.say(`Copied ${clip.parts.length} for this window only: the browser does not share its clipboard.`);
+    }
+    if (cut) this.remove();
+  }
+
+  async paste(text?: string): Promise<void> {
+    const given = text ?? (await navigator.clipboard.readText().catch(() => ''));
+    const clip = readClip(given) ?? this.clip;
+    if (clip) this.do(pasteClip(this.doc, clip, this.newId));
+    else this.state.say('The clipboard holds no piece of a drawing.');
+  }
+
+  duplicate(): void {
+    const clip = copyParts(this.doc, this.state.selection.parts);
+    if (clip) this.do(pasteClip(this.doc, clip, this.newId, 'Duplicate'));
+    else this.state.say('Take parts in hand to duplicate them.');
+  }
+
+  selectAll(): void {
+    this.state.select({ parts: this.scene().parts.map((part) => part.id), wires: [], terminal: null });
+  }
+
+  renumber(): void {
+    this.do(renumber(this.doc));
+  }
+
+  placeSupply(alone = false): void {
+    if (this.do(alone ? placeSupplyAlone(this.doc) : placeSupply(this.doc))) this.view.getState().camera?.all();
+  }
+
+  /** Opens the list of ways for the loads in hand. */
+  chooseWay(): void {
+    const loads = this.state.selection.parts.filter((id) =>
+      this.doc.parts.some((part) => part.id === id && isPoint(part)),
+    );
+    if (loads.length === 0) this.state.say('Take a lamp, fan, outlet or appliance in hand.');
+    else this.view.getState().setMode({ kind: 'load', loads });
+  }
+
+  moveLoad(loads: readonly string[], device: string): void {
+    this.view.getState().setMode(REST);
+    this.do(moveLoad(this.doc, loads, device, this.newId));
+  }
+
+  editPart(id: string): void {
+    const part = this.scene().parts.find((candidate) => candidate.id === id);
+    if (!part || !this.mayEdit) return;
+    this.state.select({ parts: [id], wires: [] });
+    this.view.getState().setMode({ kind: 'edit', part: id, at: { x: part.x + part.width + 200, y: part.y } });
+  }
+
+  editRun(run: SceneRun): void {
+    if (!this.mayEdit || !run.cable) return;
+    const at = run.ticks?.at ?? run.points[Math.floor(run.points.length / 2)]!;
+    this.view.getState().setMode({ kind: 'edit', cable: run.cable, at: { x: at.x + 400, y: at.y } });
+  }
+
+  /** Enter: writes where the thing in hand is written. */
+  edit(): void {
+    const { parts, wires } = this.state.selection;
+    if (parts[0]) return this.editPart(parts[0]);
+    const run = this.scene().runs.find((candidate) => candidate.wires.some((wire) => wires.includes(wire)));
+    if (run) this.editRun(run);
+  }
+
+  /** The cable at the terminal in hand, to edit it by key. */
+  editCable(): void {
+    const { terminal } = this.state.selection;
+    const run = this.scene().runs.find(
+      (candidate) =>
+        candidate.cable && terminal && (sameEnd(candidate.from, terminal) || sameEnd(candidate.to, terminal)),
+    );
+    if (run) this.editRun(run);
+    else this.state.say('No cable ends at the terminal in hand.');
+  }
+}

@@ -1,0 +1,235 @@
+'use client';
+
+import { useRouter } from 'next/navigation';
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import { ReactFlowProvider } from 'reactflow';
+import { SheetFrame } from '@/components/frame/sheet-frame';
+import { jobTabs } from '@/components/frame/tabs';
+import { Button } from '@/components/ui/button';
+import type { Face, Installation } from '@/diagram/document/schema';
+import { buildScene } from '@/diagram/layout/build-scene';
+import { connectionPages } from '@/diagram/layout/connections-scene';
+import type { Scene } from '@/diagram/layout/scene';
+import type { DrawingView } from '@/lib/shared/drawings';
+import { KEYS_HELP, type ActionContext } from './actions';
+import { middle } from './canvas/pick';
+import { stableScene } from './canvas/stable-scene';
+import { useSlip } from './extend/use-slip';
+import { SheetFoot } from './foot/sheet-foot';
+import { notesOf, type MarkedNote } from './margin/notes';
+import { SheetMargin } from './margin/sheet-margin';
+import { useExamination } from './margin/use-examination';
+import { SaveStateView } from './save-state-view';
+import { SheetSurface } from './surface';
+import { useTidy } from './tidy/use-tidy';
+import { TroubleStrip } from './trouble-strip';
+import { useDrawing, useSheet, type Me } from './use-drawing';
+import { useHands } from './use-hands';
+import { createView, useView, useViewStore, ViewProvider } from './view';
+
+interface SheetProps {
+  view: DrawingView;
+  me: Me;
+  face: Face;
+  /** page of the connections face that the address asks for */
+  place?: string | null;
+  /** h on battery that the job asks for */
+  hoursWanted: number;
+}
+
+const EMPTY_SCENE = {
+  face: 'overview',
+  width: 1,
+  height: 1,
+  bands: [],
+  frames: [],
+  parts: [],
+  runs: [],
+  rings: [],
+  dots: [],
+  texts: [],
+} satisfies Scene;
+
+/** A face as a scene; what did not change keeps its identity. */
+function useScene(document: Installation | null, face: Face, place: string | null): Scene | null {
+  const before = useRef<Scene | null>(null);
+  const scene = useMemo(
+    () => (document ? buildScene(document, face, place === null ? {} : { place }) : null),
+    [document, face, place],
+  );
+  // eslint-disable-next-line react-hooks/refs -- the scene before is a cache: reading it late costs drawing time, never correctness
+  const stable = useMemo(() => scene && stableScene(before.current, scene), [scene]);
+  useEffect(() => {
+    before.current = stable;
+  }, [stable]);
+  return stable;
+}
+
+const stillLive = (document: Installation): string | undefined => {
+  const inverter = document.parts.find((part) => part.kind === 'inverter');
+  const main = document.parts.find((part) => part.kind === 'isolator');
+  return inverter && main
+    ? `Live from ${inverter.ref ?? 'the inverter'} when ${main.ref ?? 'the main switch'} is off.`
+    : undefined;
+};
+
+function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
+  const router = useRouter();
+  const drawing = useDrawing(view, me);
+  const { store } = drawing;
+  const viewStore = useViewStore();
+  const document = useSheet(store, (state) => state.document);
+  const rights = useSheet(store, (state) => state.rights);
+  const titleBlock = useSheet(store, (state) => state.titleBlock);
+  const ghostDocument = useView((state) => state.ghost);
+  const condition = useView((state) => state.condition);
+  const severities = useView((state) => state.severities);
+  const wantedPlace = useView((state) => state.place);
+  const editing = useView((state) => state.editing);
+  const sheet = useRef<HTMLDivElement>(null);
+
+  const pages = useMemo(() => (face === 'connections' ? connectionPages(document) : []), [document, face]);
+  const page = pages.find((candidate) => candidate.place === wantedPlace) ?? pages[0] ?? null;
+  const place = face === 'connections' ? (page?.place ?? null) : null;
+  const scene = useScene(document, face, place) ?? EMPTY_SCENE;
+  const ghost = useScene(ghostDocument, face, place);
+  const hands = useHands(store, viewStore, scene);
+  const examined = useExamination(document);
+  const ghostExamined = useExamination(ghostDocument);
+  const slip = useSlip(hands, hoursWanted, examined.examination);
+  const notes = useMemo(
+    () => notesOf(examined.examination?.findings ?? [], document, scene, { condition, severities }),
+    [examined.examination, document, scene, condition, severities],
+  );
+
+  const focusSheet = useCallback(() => sheet.current?.focus({ preventScroll: true }), []);
+  const takeNote = useCallback(
+    (note: MarkedNote) => {
+      viewStore.getState().set({ finding: note.key });
+      const part = scene.parts.find((candidate) => candidate.id === note.parts[0]);
+      store.getState().select({ parts: note.parts.slice(0, 1), wires: note.finding.wires, terminal: null });
+      if (part) viewStore.getState().camera?.show(middle(part));
+      store.getState().say(`${note.letter}: ${note.finding.heading}`);
+    },
+    [viewStore, store, scene],
+  );
+
+  const tidy = useTidy(hands, face);
+  const context = useMemo<ActionContext>(
+    () => ({
+      hands,
+      tidy,
+      otherFace() {
+        const id = store.getState().selection.parts[0];
+        const at = hands.doc.parts.find((part) => part.id === id)?.place;
+        const other = face === 'overview' ? `connections${at ? `?place=${encodeURIComponent(at)}` : ''}` : 'overview';
+        router.push(`/jobs/${view.jobId}/${other}`);
+      },
+      nextNote(step) {
+        if (notes.length === 0) return store.getState().say('No finding.');
+        const index = notes.findIndex((note) => note.key === viewStore.getState().finding);
+        const next = index < 0 ? (step > 0 ? 0 : notes.length - 1) : (index + step + notes.length) % notes.length;
+        takeNote(notes[next]!);
+      },
+      page(step) {
+        if (face === 'overview') {
+          const rooms = scene.frames.filter((frame) => frame.kind === 'room').sort((a, b) => a.x - b.x);
+          const held = rooms.findIndex((room) => room.place !== undefined && room.place === viewStore.getState().place);
+          const room = rooms[Math.max(0, Math.min(rooms.length - 1, held + step))];
+          if (!room) return;
+          viewStore.getState().set({ place: room.place ?? null });
+          viewStore.getState().camera?.show({ x: room.x + room.width / 2, y: room.y }, true);
+        } else {
+          const index = pages.findIndex((candidate) => candidate.place === place);
+          const next = pages[(index + step + pages.length) % Math.max(1, pages.length)];
+          if (next) viewStore.getState().set({ place: next.place });
+        }
+      },
+    }),
+    [hands, tidy, store, face, router, view.jobId, notes, viewStore, takeNote, scene, pages, place],
+  );
+
+  useEffect(() => {
+    // Phones open for reading, so that a thumb moves nothing.
+    if (matchMedia('(max-width: 640px)').matches) viewStore.getState().set({ editing: false });
+  }, [viewStore]);
+
+  const open = examined.examination?.findings.filter((finding) => !finding.silenced).length ?? 0;
+  const { undo, redo } = store.getState();
+  return (
+    <SheetFrame
+      tabs={jobTabs(view.jobId)}
+      current={face}
+      who={me.initials}
+      kind={face === 'overview' ? 'Overview, single line' : `Connections, ${page?.name ?? 'no place yet'}`}
+      saveState={<SaveStateView drawing={drawing} />}
+      titleBlock={titleBlock}
+      practice={{ id: document.practice, supply: document.supply }}
+      stillLive={stillLive(document)}
+      fit="screen"
+      keys={KEYS_HELP}
+      strip={<TroubleStrip drawing={drawing} />}
+      marginLabel={open === 1 ? '1 finding' : `${open} findings`}
+      margin={
+        <SheetMargin
+          drawing={drawing}
+          hands={hands}
+          examined={examined}
+          ghostExamined={ghostDocument ? ghostExamined.examination : undefined}
+          notes={notes}
+          me={me}
+          rights={rights}
+          terminals={face === 'connections' && page ? page : null}
+          onTake={takeNote}
+        />
+      }
+      tools={
+        rights.edit && (
+          <>
+            <Button className="min-h-11" onClick={undo}>
+              Undo
+            </Button>
+            <Button className="min-h-11" onClick={redo}>
+              Redo
+            </Button>
+            <Button
+              className="min-h-11"
+              solid={editing}
+              aria-pressed={editing}
+              onClick={() => viewStore.getState().set({ editing: !editing })}
+            >
+              Edit
+            </Button>
+          </>
+        )
+      }
+      foot={<SheetFoot drawing={drawing} context={context} scene={scene} notes={notes} />}
+    >
+      <SheetSurface
+        sheet={sheet}
+        drawing={drawing}
+        context={context}
+        scene={scene}
+        ghost={ghost}
+        notes={notes}
+        slip={slip}
+        pages={pages}
+        place={place}
+        onNote={takeNote}
+        focusSheet={focusSheet}
+      />
+    </SheetFrame>
+  );
+}
+
+/** The drawing editor: one face of the drawing, with its margin and foot. */
+export function Sheet(props: SheetProps) {
+  const [view] = useState(() => createView(props.face, props.place ?? null));
+  return (
+    <ViewProvider value={view}>
+      <ReactFlowProvider>
+        <SheetOnView {...props} />
+      </ReactFlowProvider>
+    </ViewProvider>
+  );
+}

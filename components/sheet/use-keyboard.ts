@@ -1,0 +1,58 @@
+'use client';
+
+import { useCallback, type KeyboardEvent } from 'react';
+import { isTyping, useSingleKeysOn } from '@/components/frame/single-keys';
+import { actionFor, keyName, type ActionContext } from './actions';
+import type { Direction } from './navigate';
+
+const ARROWS: Record<string, Direction> = { ArrowUp: 'up', ArrowDown: 'down', ArrowLeft: 'left', ArrowRight: 'right' };
+
+/** Keys that work without letters: never switched off. */
+const isPlain = (key: string): boolean => key.length > 1;
+
+/**
+ * Keys of the sheet. They act while the sheet itself has the focus: never in a field, never while something is composed,
+ * and single letters not at all where the person has switched them off.
+ */
+export function useKeyboard(context: ActionContext): (event: KeyboardEvent) => void {
+  const singleKeys = useSingleKeysOn();
+  return useCallback(
+    (event: KeyboardEvent) => {
+      const { hands } = context;
+      if (event.nativeEvent.isComposing || event.altKey || isTyping(event.target)) return;
+      const key = keyName(event.nativeEvent);
+      const { mode } = hands.view.getState();
+      const direction = ARROWS[key];
+      const done = () => {
+        event.preventDefault();
+        event.stopPropagation();
+      };
+      if (direction && !event.ctrlKey && !event.metaKey) {
+        done();
+        if (mode.kind === 'wire') {
+          const count = hands.candidates(mode.from).length;
+          const step = direction === 'down' || direction === 'right' ? 1 : -1;
+          hands.view.getState().setMode({ ...mode, index: (mode.index + step + count) % count });
+        } else if (mode.kind === 'move') hands.nudge(direction);
+        else hands.arrow(direction);
+        return;
+      }
+      if (key === 'Tab') {
+        if (hands.terminal(event.shiftKey ? -1 : 1)) done();
+        return;
+      }
+      if (key === 'Enter' && (mode.kind === 'wire' || mode.kind === 'move')) {
+        done();
+        if (mode.kind === 'wire') hands.endWire();
+        else hands.endMove();
+        return;
+      }
+      if (!singleKeys && !isPlain(key)) return;
+      const action = actionFor(key);
+      if (!action) return;
+      done();
+      action.does(context);
+    },
+    [context, singleKeys],
+  );
+}
