@@ -1,4 +1,5 @@
 import { NextResponse, type NextRequest } from 'next/server';
+import { sessionCookieName } from '@/lib/shared/session-cookie';
 
 /**
  * Headers for every answer, and a kindness: whoever has no session cookie is shown the sign-in sheet at once. It is no
@@ -44,7 +45,7 @@ function withHeaders(response: NextResponse, policy: string): NextResponse {
 export function proxy(request: NextRequest): NextResponse {
   const { pathname, search } = request.nextUrl;
   const policy = contentPolicy(Buffer.from(crypto.randomUUID()).toString('base64'));
-  const hasCookie = request.cookies.has(isHttps ? '__Host-session.ohmstead' : 'session.ohmstead');
+  const hasCookie = request.cookies.has(sessionCookieName(isHttps));
   const isPage = !pathname.startsWith('/api/') && !pathname.startsWith('/_next/') && !/\.[a-z0-9]+$/i.test(pathname);
   if (isPage && !isOpen(pathname) && !hasCookie) {
     const signin = new URL('/signin', process.env.NEXTAUTH_URL ?? request.url);

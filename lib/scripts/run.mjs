@@ -5,6 +5,10 @@ export class Stop extends Error {}
 
 export const isRoot = () => process.getuid?.() === 0;
 
+const running = new Set();
+// A build or an installation that is still going on ends with us.
+process.on('exit', () => running.forEach((child) => child.kill()));
+
 /**
  * Runs a program to its end.
  * @param {string} program
@@ -20,6 +24,8 @@ export function run(program, args = [], { env, cwd, show = false, input } = {}) 
       env: env ? { ...process.env, ...env } : process.env,
       stdio: [input === undefined ? 'ignore' : 'pipe', show ? 'inherit' : 'pipe', show ? 'inherit' : 'pipe'],
     });
+    running.add(child);
+    child.once('close', () => running.delete(child));
     let output = '';
     child.stdout?.on('data', (text) => (output += text));
     child.stderr?.on('data', (text) => (output += text));

@@ -7,17 +7,14 @@ import { z } from 'zod';
 import { initialsOf, type Actor } from '@/lib/server/actor';
 import { env, isHttps } from '@/lib/server/env';
 import type { PersonRole } from '@/lib/shared/people';
+import { sessionCookieName } from '@/lib/shared/session-cookie';
 import { sequelize } from '@/models';
 
 /** A sign-in ends after this long whatever happens, and after `IDLE_H` without a request. */
 export const LONGEST_H = 12;
 const IDLE_H = 4;
 
-/**
- * `__Host-` keeps the cookie from other hosts of the domain; browsers accept it over https only. No other cookie's name
- * begins with this one: next-auth would read that as a further piece of the session's.
- */
-export const sessionCookie = () => (isHttps() ? '__Host-session.ohmstead' : 'session.ohmstead');
+export const sessionCookie = (): string => sessionCookieName(isHttps());
 
 /** What the cookie says, once its seal is checked: which row to read. */
 export const TokenSchema = z.object({ tid: z.uuid(), sid: z.uuid(), sub: z.uuid() });

@@ -3,8 +3,9 @@ import { openPage } from './open-page';
 import { signInAs } from './sign-in';
 
 test('an admin invites, the person accepts once, gets another role and is switched off', async ({ page, browser, baseURL }) => {
-  const name = 'Ruth Ferrow';
-  const email = `ruth.${Date.now()}@tillmere.example`;
+  const stamp = Date.now().toString(36);
+  const name = `Ruth Ferrow ${stamp}`;
+  const email = `ruth.${stamp}@tillmere.example`;
   const password = 'three wires in a box';
   await signInAs(page, 'admin');
   await openPage(page, '/people');
