@@ -1,109 +1,136 @@
 import { isBar } from '../document/kinds';
-import { byCode, type Installation, type Part, type Position } from '../document/schema';
-import { symbolFor, terminalAt } from '../symbols';
-import { barLength, barTerminal, type BarKind } from '../symbols/bar';
-import { turnedSize } from '../symbols/turn';
-import { traceFeeds } from '../terminals/feeds';
-import { BODY } from './lettering';
-import type { Scene, ScenePart, SceneRun, SceneTerminal } from './scene';
+import type { Installation, Part, Position, Wire } from '../document/schema';
+import { practices } from '../practices';
+import { symbolFor } from '../symbols';
+import { barSymbol, type BarKind } from '../symbols/bar';
+import type { Side } from '../symbols/types';
+import { traceFeeds, type Feeds } from '../terminals/feeds';
+import { barBodies, fixedBodies, placeCables, type PlacedCable, type Stub } from './connections-ends';
+import { connectionFrames } from './connections-frames';
+import { letterPage } from './connections-labels';
+import { connectionPages, readPage, type Page } from './connections-page';
+import { isLongBar, planPage, usedMarks } from './connections-place';
+import type { Body } from './ends';
+import { m } from './overview-metrics';
+import { planOverview } from './overview-plan';
+import { fillIn } from './positions';
+import { routeAll } from './route';
+import type { Obstacle, RouteEnd, RouteRequest } from './route-grid';
+import { findHops } from './route-marks';
+import type { Point, Scene, ScenePart, SceneRun } from './scene';
 import { byIdOf } from './scene-order';
-import { designation } from './wording';
 
-export interface ConnectionPage {
-  /** id of the place; '' for parts without one */
-  place: string;
-  name: string;
-}
+export { connectionPages, type ConnectionPage } from './connections-page';
 
-/** The pages of the connections face: the intake first, then the places in the document's order, each if it holds a part. */
-export function connectionPages(doc: Installation): ConnectionPage[] {
-  const held = new Set(doc.parts.map((part) => pageOf(doc, part)));
-  const places = [...doc.places].sort((a, b) => Number(b.kind === 'intake') - Number(a.kind === 'intake') || byCode(a.id, b.id));
-  const pages = places.filter((place) => held.has(place.id)).map((place) => ({ place: place.id, name: place.name }));
-  return held.has('') ? [...pages, { place: '', name: 'No place yet' }] : pages;
-}
-
-function pageOf(doc: Installation, part: Part): string {
-  return part.place !== undefined && doc.places.some((place) => place.id === part.place) ? part.place : '';
-}
-
-/** Parts of a page in rows, until the page has a better order. */
-function rows(parts: readonly Part[], counts: Map<string, number>): Map<string, Position> {
-  const positions = new Map<string, Position>();
-  let x = 2000;
-  let y = 4000;
-  let row = 0;
-  for (const part of parts) {
-    const symbol = symbolFor(part, 'connections', counts.get(part.id));
-    if (x + symbol.width > 40000) {
-      x = 2000;
-      y += row + 3000;
-      row = 0;
-    }
-    positions.set(part.id, { x, y });
-    row = Math.max(row, symbol.height);
-    x += symbol.width + 2500;
-  }
-  return positions;
-}
-
-/** Terminals each bar or joint is drawn with: as many as are wired, two at least. */
-function barCounts(doc: Installation): Map<string, number> {
-  const counts = new Map<string, number>();
-  for (const wire of doc.wires)
-    for (const [id, mark] of [wire.from, wire.to]) counts.set(id, Math.max(counts.get(id) ?? 2, Number(mark) || 0));
-  return counts;
-}
-
-/** Where every part stands on its page. */
+/** Where every part stands on its page of the connections face: stored, or worked out. */
 export function connectionPositions(doc: Installation): Map<string, Position> {
-  const counts = barCounts(doc);
-  const positions = new Map<string, Position>();
-  for (const { place } of connectionPages(doc)) {
-    const here = doc.parts.filter((part) => pageOf(doc, part) === place).sort((a, b) => byCode(a.id, b.id));
-    for (const [id, at] of rows(here, counts)) positions.set(id, doc.sheet?.connections?.[id] ?? at);
-  }
-  return positions;
+  const plan = planOverview(doc);
+  const all = new Map<string, Position>();
+  for (const { place } of connectionPages(doc)) for (const [id, at] of positionsOf(doc, readPage(doc, plan, place), planPage(doc, plan, readPage(doc, plan, place)))) all.set(id, at);
+  return all;
 }
 
-/** One place with each core to each terminal. */
-export function connectionsScene(doc: Installation, place?: string): Scene {
-  const page = place ?? connectionPages(doc)[0]?.place ?? '';
-  const here = doc.parts.filter((part) => pageOf(doc, part) === page).sort((a, b) => byCode(a.id, b.id));
-  const counts = barCounts(doc);
-  const auto = rows(here, counts);
-  const feeds = traceFeeds(doc);
-  const parts = here.map((part): ScenePart => {
-    const at = doc.sheet?.connections?.[part.id] ?? auto.get(part.id)!;
-    const count = counts.get(part.id) ?? 2;
-    const symbol = symbolFor(part, 'connections', count);
-    const marks = isBar(part.kind) ? Array.from({ length: count }, (_, i) => String(i + 1)) : Object.keys(symbol.terminals);
-    const size = isBar(part.kind) ? { width: barLength(part.kind as BarKind, count), height: symbol.height } : turnedSize(symbol, at.turn ?? 0);
-    const terminals = marks.flatMap((mark): SceneTerminal[] => {
-      const t = isBar(part.kind)
-        ? { ...barTerminal(part.kind as BarKind, Number(mark) - 1) }
-        : terminalAt(part, mark, { x: 0, y: 0, ...(at.turn && { turn: at.turn }) }, 'connections');
-      return t ? [{ mark, x: at.x + t.x, y: at.y + t.y, side: t.side }] : [];
-    });
-    return {
-      id: part.id, kind: part.kind, symbol: symbol.id, turn: at.turn ?? 0, x: at.x, y: at.y, ...size, feed: feeds.parts.get(part.id) ?? 'none', terminals,
-      texts: [{ text: designation(part), x: at.x, y: at.y - 150, size: BODY, bold: true }],
-    };
-  });
-  const at = new Map<string, SceneTerminal>(parts.flatMap((part) => part.terminals.map((t) => [`${part.id} ${t.mark}`, t] as const)));
-  const runs = doc.wires.flatMap((wire): SceneRun[] => {
-    const a = at.get(wire.from.join(' '));
-    const b = at.get(wire.to.join(' '));
-    if (!a && !b) return [];
-    const p = a ?? { x: b!.x, y: 500 };
-    const q = b ?? { x: a!.x, y: 500 };
-    return [{
-      id: `wire:${wire.id}`, wires: [wire.id], ...(wire.cable && { cable: wire.cable }), from: wire.from, to: wire.to, role: wire.role,
-      points: [{ x: p.x, y: p.y }, { x: q.x, y: p.y }, { x: q.x, y: q.y }],
-      feed: feeds.wires.get(wire.id) ?? 'none', ...(wire.colour && { colour: wire.colour }), weight: 'normal', texts: [], hops: [],
-    }];
-  });
-  const width = Math.max(20000, ...parts.map((part) => part.x + part.width)) + 2000;
-  const height = Math.max(10000, ...parts.map((part) => part.y + part.height)) + 2000;
-  return { face: 'connections', place: page, width, height, bands: [], frames: [], parts: parts.sort(byIdOf), runs: runs.sort(byIdOf), rings: [], dots: [], texts: [] };
+function positionsOf(doc: Installation, page: Page, planned: ReadonlyMap<string, Position>): Map<string, Position> {
+  const near = (id: string): string[] => page.inner.flatMap((wire) => (wire.from[0] === id ? [wire.to[0]] : wire.to[0] === id ? [wire.from[0]] : []));
+  const size = (id: string) => symbolFor(page.parts.find((part) => part.id === id)!, 'connections');
+  return fillIn(planned, doc.sheet?.connections ?? {}, near, size);
 }
+
+/** Ways out of a terminal: its own side, then those beside it. Bars and joints are left up or down alike. */
+function sidesOf(part: Part, side: Side): Pick<RouteEnd, 'sides' | 'even'> {
+  if (isLongBar(part.kind)) return { sides: ['down', 'up'], even: true };
+  if (part.kind === 'joint') return { sides: ['down', 'up'], even: true };
+  if (part.kind === 'socket') return { sides: ['up', 'down'] };
+  const beside: Side[] = side === 'up' || side === 'down' ? ['right', 'left'] : ['down', 'up'];
+  return { sides: [side, ...beside] };
+}
+
+/** One place with each core to each terminal; the first page where no place is named. */
+export function connectionsScene(doc: Installation, place?: string): Scene {
+  const plan = planOverview(doc);
+  const page = readPage(doc, plan, place ?? connectionPages(doc)[0]?.place ?? '');
+  const marks = usedMarks(doc);
+  const positions = positionsOf(doc, page, planPage(doc, plan, page));
+  const fixed = fixedBodies(page, positions, marks);
+  const cables = placeCables(page, fixed);
+  const bodies = barBodies(page, positions, fixed, cables, marks);
+  const feeds = traceFeeds(doc);
+  const frames = connectionFrames(doc, page, bodies, cables);
+  const routes = routeCores(page, bodies, cables, feeds);
+  const texts = letterPage(page, plan, bodies, cables, frames, routes.points);
+  const { colours } = practices[doc.practice].colourSchemes[0];
+
+  const parts = page.parts.map((part): ScenePart => {
+    const body = bodies.get(part.id)!;
+    const feed = feeds.parts.get(part.id) ?? 'none';
+    const symbol = isBar(part.kind) ? barSymbol(part.kind as BarKind, 'connections', body.width, feed === 'backup' && part.kind === 'line-bar').id : symbolFor(part, 'connections').id;
+    return { id: part.id, kind: part.kind, symbol, turn: body.turn, x: body.x, y: body.y, width: body.width, height: body.height, feed, terminals: body.terminals, texts: texts.parts.get(part.id) ?? [] };
+  });
+  const run = (wire: Wire): SceneRun => ({
+    id: `wire:${wire.id}`,
+    wires: [wire.id],
+    ...(wire.cable && { cable: wire.cable }),
+    from: wire.from,
+    to: wire.to,
+    points: routes.points.get(wire.id)!,
+    role: wire.role,
+    feed: feeds.wires.get(wire.id) ?? 'none',
+    colour: wire.colour ?? colours[wire.role].value[0],
+    weight: 'normal',
+    texts: texts.wires.get(wire.id) ?? [],
+    hops: routes.hops.get(wire.id) ?? [],
+  });
+  const runs = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map(run);
+  const reach: Point[] = [
+    ...parts.map((part) => ({ x: part.x + part.width, y: part.y + part.height })),
+    ...runs.flatMap((r) => r.points),
+    ...frames.map((frame) => ({ x: frame.x + frame.width, y: frame.y + frame.height })),
+    ...texts.reach,
+  ];
+  return {
+    face: 'connections',
+    place: page.place,
+    width: Math.max(m(60), ...reach.map(({ x }) => x)) + m(4),
+    height: Math.max(m(40), ...reach.map(({ y }) => y)) + m(4),
+    bands: [],
+    frames,
+    parts: parts.sort(byIdOf),
+    runs: runs.sort(byIdOf),
+    rings: [],
+    dots: [],
+    texts: texts.loose,
+  };
+}
+
+interface CoreRoutes {
+  /** by id of the wire */
+  points: Map<string, Point[]>;
+  hops: Map<string, Point[]>;
+}
+
+/** Every core for itself: cores meet at terminals and nowhere else. */
+function routeCores(page: Page, bodies: ReadonlyMap<string, Body>, cables: readonly PlacedCable[], feeds: Feeds): CoreRoutes {
+  const parts = new Map(page.parts.map((part) => [part.id, part]));
+  const stubs = new Map(cables.flatMap((cable) => cable.stubs.map((stub) => [stub.core.wire.id, stub] as const)));
+  const at = (end: readonly [string, string], stub?: Stub): RouteEnd | null => {
+    const part = parts.get(end[0]);
+    const body = bodies.get(end[0]);
+    if (part && body) {
+      const t = body.terminals.find((terminal) => terminal.mark === end[1]);
+      // a wire to a terminal that does not exist ends at the part's edge: the finding names it
+      return { part: part.id, x: t?.x ?? body.x, y: t?.y ?? body.y, ...sidesOf(part, t?.side ?? 'up') };
+    }
+    return stub ? { part: `stub ${stub.core.wire.id}`, x: stub.x, y: stub.y, sides: [stub.side] } : null;
+  };
+  const requests = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map((wire): RouteRequest => {
+    const stub = stubs.get(wire.id);
+    const from = at(wire.from, stub)!;
+    const to = at(wire.to, stub)!;
+    return { id: wire.id, strand: wire.id, family: wire.id, net: wire.id, from, to, backup: feeds.wires.get(wire.id) === 'backup' };
+  });
+  const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height, ...(isLongBar(parts.get(id)!.kind) && { crossable: true }) }));
+  const { points } = routeAll(requests, obstacles, [], { spread: true });
+  const paths = requests.map(({ id }) => ({ id, net: id, points: points.get(id)! }));
+  return { points, hops: findHops(paths) };
+}
+

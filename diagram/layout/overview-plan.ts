@@ -18,6 +18,8 @@ export interface OverviewPlan {
   graph: OverviewGraph;
   tree: OverviewTree;
   ways: readonly Way[];
+  /** what hangs from the column, room by room */
+  content: WaysAndRooms;
   /** id of the place of each part shown in a room; '' for a room without a place */
   roomOf: Map<string, string>;
   /** left edge and width of each room, by id of its place */
@@ -409,6 +411,7 @@ export function planOverview(doc: Installation): OverviewPlan {
     graph,
     tree,
     ways,
+    content,
     roomOf,
     rooms: planner.roomSpans,
     lane: planner.lane,

@@ -3,7 +3,6 @@ import { symbolFor } from '../symbols';
 import { traceFeeds, type Feeds } from '../terminals/feeds';
 import { placeEnds, type Ends } from './ends';
 import { Ground, blockTexts, placeLabel, type Label } from './labels';
-import { textDescent, textWidth } from './lettering';
 import { actualLevels, bands, lanes, roomFrames } from './overview-frames';
 import { partLabel, takenBy } from './overview-labels';
 import { m } from './overview-metrics';
@@ -14,16 +13,10 @@ import { cableLabel, ringOf, ticksOf, type Ticks } from './overview-ticks';
 import type { Box, Soft } from './route-grid';
 import type { Scene, SceneFrame, ScenePart, SceneRing, SceneRun, SceneText } from './scene';
 import { byIdOf } from './scene-order';
+import { textBox } from './text-box';
 
 /** Right edge of the names of the bands. */
 const BAND_NAMES = 1150;
-
-/** The box of a text on the sheet. */
-export function textBox(text: SceneText): Box {
-  const width = textWidth(text.text, text.size, text.spaced);
-  const x = text.anchor === 'end' ? text.x - width : text.anchor === 'middle' ? text.x - width / 2 : text.x;
-  return { x, y: text.y - text.size, width, height: text.size + textDescent(text.size) };
-}
 
 /** The overview of any document. */
 export function overviewScene(doc: Installation, plan: OverviewPlan = planOverview(doc)): Scene {

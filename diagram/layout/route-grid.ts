@@ -11,6 +11,8 @@ export interface Box extends Point {
 /** A part that no run may pass. */
 export interface Obstacle extends Box {
   id: string;
+  /** a bar: runs of others may cross it squarely, between its terminals, as conductors cross */
+  crossable?: boolean;
 }
 
 /** Where a run ends: the terminal, and the sides on which it may be left, the best first. */
@@ -50,13 +52,16 @@ const REACH = 8;
 /** More nodes than this are not searched: the runs are drawn as plain elbows. */
 const MOST_NODES = 6_000_000;
 
+/** Covered by a bar that may be crossed. */
+export const CROSSABLE = -2;
+
 export interface Grid {
   xs: Int32Array;
   ys: Int32Array;
   /** node number of a column and row: `row * columns + column` */
   columns: number;
   rows: number;
-  /** per node, the part that covers it: 0 none, -1 several, else its number in `parts` plus one */
+  /** per node, the part that covers it: 0 none, -1 several, {@link CROSSABLE} a bar, else its number in `parts` */
   covered: Int32Array;
   parts: ReadonlyMap<string, number>;
   /** per node, extra cost per unit of length, for runs of the mains and of the backup */
@@ -118,7 +123,7 @@ export function buildGrid(obstacles: readonly Obstacle[], requests: readonly Rou
   };
   obstacles.forEach((box, i) =>
     within(box, (node) => {
-      grid.covered[node] = grid.covered[node] === 0 ? i + 1 : -1;
+      grid.covered[node] = grid.covered[node] !== 0 ? -1 : box.crossable ? CROSSABLE : i + 1;
     }),
   );
   for (const box of softs)

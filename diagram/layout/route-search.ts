@@ -1,5 +1,5 @@
 import { MODULE, type Side } from '../symbols/types';
-import { lineAt, type Grid, type RouteEnd } from './route-grid';
+import { CROSSABLE, lineAt, type Grid, type RouteEnd } from './route-grid';
 import type { Point } from './scene';
 
 /** Shortest way between two terminals over the grid, by A*: length, bends, crossings, ground that is spoken for. */
@@ -13,6 +13,8 @@ export const COST = {
   side: 600,
   /** share of its length that a stretch along the same net costs */
   shared: 0.35,
+  /** share of its length that a stretch beside another run costs more */
+  close: 0.5,
 } as const;
 
 /** What stands on the grid: 0 is free, else the number of a strand. */
@@ -93,7 +95,7 @@ export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: numb
       if (edge < 0 || !freeStub(occupancy, edge, isLevel(direction), net)) return;
       const next = nextNode(grid, node, direction);
       if (!joined(occupancy, occupancy.corner[next]!, net)) return;
-      if (grid.covered[next] !== 0 && grid.covered[next] !== own) return;
+      if (grid.covered[next] !== 0 && grid.covered[next] !== own && !(grid.covered[next] === CROSSABLE && !isLevel(direction))) return;
       nodes.push(next);
     } while (grid.covered[nodes.at(-1)!] !== 0);
     const penalty = end.even ? 0 : place * COST.side;
@@ -129,7 +131,8 @@ export function straight(grid: Grid, occupancy: Occupancy, from: RouteEnd, to: R
       const next = nextNode(grid, node, direction);
       if (next !== goal && (!joined(occupancy, occupancy.corner[next]!, net) || crosses(occupancy, next, isLevel(direction), net))) break;
       // two boxes may touch: a node that both cover lies between the terminals
-      if (!allowed.has(grid.covered[next]!) && !(grid.covered[next] === -1 && next === goal)) break;
+      const bar = grid.covered[next] === CROSSABLE && !isLevel(direction);
+      if (!allowed.has(grid.covered[next]!) && !bar && !(grid.covered[next] === -1 && next === goal)) break;
       nodes.push(next);
     }
     if (nodes.at(-1) === goal) return nodes;
@@ -203,6 +206,8 @@ export class Search {
   constructor(
     private readonly grid: Grid,
     private readonly occupancy: Occupancy,
+    /** keep a free line between runs where there is room */
+    private readonly spread: boolean,
   ) {
     const size = grid.columns * grid.rows * 4;
     this.best = new Float64Array(size);
@@ -292,6 +297,13 @@ export class Search {
     return goals;
   }
 
+  /** How many of the two neighbouring lines are taken by others along an edge. */
+  private beside(edge: number, level: boolean, net: number): number {
+    const { right, down } = this.occupancy;
+    const [list, step] = level ? [right, this.grid.columns] : [down, 1];
+    return Number(!same(this.occupancy, list[edge - step] ?? 0, net)) + Number(!same(this.occupancy, list[edge + step] ?? 0, net));
+  }
+
   private expand(node: number, heading: number, cost: number, net: number, soft: Float32Array, reach: (state: number, cost: number, previous: number) => void, state: number): void {
     const { grid, occupancy } = this;
     const here = isLevel(heading) ? occupancy.upright[node]! : occupancy.level[node]!;
@@ -309,12 +321,15 @@ export class Search {
       const level = isLevel(direction);
       if (!free(occupancy, edge, level, net)) continue;
       const next = nextNode(grid, node, direction);
-      if (grid.covered[next] !== 0 || !joined(occupancy, occupancy.corner[next]!, net)) continue;
+      const over = grid.covered[next]!;
+      if (over !== 0 && !(over === CROSSABLE && !level)) continue;
+      if (bends && grid.covered[node] === CROSSABLE) continue;
+      if (!joined(occupancy, occupancy.corner[next]!, net)) continue;
       const length = level ? Math.abs(grid.xs[next % grid.columns]! - grid.xs[node % grid.columns]!) : Math.abs(grid.ys[Math.floor(next / grid.columns)]! - grid.ys[Math.floor(node / grid.columns)]!);
       const onOwn = (level ? occupancy.right[edge] : occupancy.down[edge]) === net;
       reach(
         next * 4 + direction,
-        cost + length * (onOwn ? COST.shared : 1 + soft[next]!) + (bends ? COST.bend : 0) + (crosses(occupancy, next, level, net) ? COST.crossing : 0),
+        cost + length * (onOwn ? COST.shared : 1 + soft[next]!) + (bends ? COST.bend : 0) + (crosses(occupancy, next, level, net) ? COST.crossing : 0) + (this.spread ? length * COST.close * this.beside(edge, level, net) : 0),
         state,
       );
     }

@@ -39,9 +39,10 @@ class Router {
     private readonly terminals: ReadonlyMap<number, number>,
     netOf: readonly number[],
     familyOf: readonly number[],
+    spread: boolean,
   ) {
     this.occupancy = emptyOccupancy(grid, netOf, familyOf);
-    this.search = new Search(grid, this.occupancy);
+    this.search = new Search(grid, this.occupancy, spread);
     for (const [node, net] of terminals) this.occupancy.corner[node] = net;
   }
 
@@ -145,8 +146,11 @@ export interface Routes {
   forced: string[];
 }
 
-/** Routes all runs round all parts. Pure; the order of the arguments' lists does not matter. */
-export function routeAll(requests: readonly RouteRequest[], obstacles: readonly Obstacle[], softs: readonly Soft[] = []): Routes {
+/**
+ * Routes all runs round all parts. Pure; the order of the arguments' lists does not matter.
+ * @param options.spread keep a free line between runs where there is room
+ */
+export function routeAll(requests: readonly RouteRequest[], obstacles: readonly Obstacle[], softs: readonly Soft[] = [], options: { spread?: boolean } = {}): Routes {
   const sorted = [...requests].sort(inOrder);
   const result: Routes = { points: new Map(), forced: [] };
   const grid = buildGrid(obstacles, requests, softs);
@@ -161,7 +165,7 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
   }
   const all = sorted.map((request): Routed => ({ request, net: strands.get(request.strand)!, nodes: null, cost: Infinity }));
   if (grid) {
-    const router = new Router(grid, terminalNodes(grid, all, netOf), netOf, familyOf);
+    const router = new Router(grid, terminalNodes(grid, all, netOf), netOf, familyOf, options.spread ?? false);
     for (const routed of all) router.route(routed);
     for (let round = 0; round < ROUNDS; round++) {
       let changed = false;

@@ -1,5 +1,5 @@
 import { BODY, textWidth } from '../layout/lettering';
-import type { Point, Scene, SceneRun, SceneText } from '../layout/scene';
+import type { Point, Scene, ScenePart, SceneRun, SceneText } from '../layout/scene';
 import { cores, light } from '../symbols/palette';
 import { symbolById } from '../symbols';
 import { turnedPoint, type Turn } from '../symbols/turn';
@@ -122,6 +122,13 @@ function tickMarks(run: SceneRun): Mark[] {
   });
 }
 
+function symbolGroup(part: ScenePart): Group {
+  const symbol = symbolById(part.symbol, part.width);
+  const origin = turnedPoint(0, 0, symbol, part.turn);
+  const ink = part.kind === 'neutral-bar' ? cores.light.BU! : part.kind === 'earth-bar' ? cores.light.GNYE! : light.ink;
+  return { x: part.x + origin.x, y: part.y + origin.y, scale: 1, ...(part.turn && { turn: part.turn }), marks: symbol.strokes.map((stroke) => symbolMark(stroke, ink)) };
+}
+
 /** Everything of a scene, in painting order. */
 export function sceneGroups(scene: Scene): Group[] {
   const ground: Mark[] = [];
@@ -136,18 +143,21 @@ export function sceneGroups(scene: Scene): Group[] {
   for (const frame of scene.frames) {
     const box = rect(frame.x, frame.y, frame.width, frame.height);
     if (frame.kind === 'room') ground.push({ kind: 'path', d: box, stroke: light.rule, width: STROKE.normal, dash: [190, 125] });
-    if (frame.kind === 'switchboard') ground.push({ kind: 'path', d: box, stroke: light.ink, width: STROKE.normal });
+    if (frame.kind === 'switchboard')
+      ground.push({ kind: 'path', d: box, stroke: scene.face === 'overview' ? light.ink : light.rule, width: STROKE.normal, ...(scene.face === 'connections' && { dash: [220, 150] as const }) });
     if (frame.kind === 'brace')
       ground.push({ kind: 'path', d: `M${frame.x} ${frame.y + frame.height}V${frame.y}H${frame.x + frame.width}V${frame.y + frame.height}`, stroke: light.ink, width: STROKE.normal });
   }
   const wires = runMarks(scene);
-  const groups: Group[] = [{ x: 0, y: 0, scale: 1, marks: [...ground, ...wires] }];
-  for (const part of scene.parts) {
-    const symbol = symbolById(part.symbol, part.width);
-    const origin = turnedPoint(0, 0, symbol, part.turn);
-    const bar = part.kind === 'neutral-bar' ? cores.light.BU! : part.kind === 'earth-bar' ? cores.light.GNYE! : light.ink;
-    groups.push({ x: part.x + origin.x, y: part.y + origin.y, scale: 1, ...(part.turn && { turn: part.turn }), marks: symbol.strokes.map((stroke) => symbolMark(stroke, bar)) });
-  }
+  const symbols = scene.parts.map((part) => ({ part, group: symbolGroup(part) }));
+  const isBar = (kind: string) => kind === 'line-bar' || kind === 'neutral-bar' || kind === 'earth-bar';
+  // cores cross a bar in sight: it lies under them; all other symbols cover the ends of their runs
+  const groups: Group[] = [
+    { x: 0, y: 0, scale: 1, marks: ground },
+    ...symbols.filter(({ part }) => isBar(part.kind)).map(({ group }) => group),
+    { x: 0, y: 0, scale: 1, marks: wires },
+    ...symbols.filter(({ part }) => !isBar(part.kind)).map(({ group }) => group),
+  ];
   const over: Mark[] = [];
   for (const run of scene.runs) over.push(...tickMarks(run));
   for (const dot of scene.dots) over.push({ kind: 'path', d: circle(dot, 95), fill: light.ink });

@@ -47,8 +47,7 @@ function barPath(kind: BarKind, from: number, to: number): string {
 function strokesOf(kind: BarKind, face: Face, length: number, cased: boolean): Stroke[] {
   if (kind === 'joint')
     return face === 'overview' ? [circle(END / 2, END / 2, 110, 'ink')] : [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE)];
-  if (face === 'overview') return [{ d: barPath(kind, 0, length), fill: cased ? 'paper' : 'ink' }];
-  return [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE), { d: barPath(kind, 125, length - 125), fill: cased ? 'paper' : 'ink' }];
+  return [{ d: barPath(kind, 0, length), fill: cased ? 'paper' : 'ink' }];
 }
 
 /**

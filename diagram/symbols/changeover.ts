@@ -12,16 +12,16 @@ const pole = (a: number, b: number, out: number, y: number): Stroke[] => [
 
 function boxed(marks: readonly (readonly [string, string, string])[]): Shape {
   const terminals: Record<string, TerminalPlace> = {};
-  const strokes: Stroke[] = [box(0, 0, 3000 * marks.length, 3250)];
+  const strokes: Stroke[] = [box(0, 0, 3000 * marks.length, 2500)];
   marks.forEach(([a, b, out], n) => {
     const x = 3000 * n;
-    strokes.push({ d: `M${x + 750} 500V1000M${x + 2250} 500V1000M${x + 1500} 2250V2750` }, ...pole(x + 750, x + 2250, x + 1500, 1000));
+    strokes.push({ d: `M${x + 750} 500V625M${x + 2250} 500V625M${x + 1500} 1875V2000` }, ...pole(x + 750, x + 2250, x + 1500, 625));
     terminals[a] = { x: x + 750, y: 500, side: 'up' };
     terminals[b] = { x: x + 2250, y: 500, side: 'up' };
-    terminals[out] = { x: x + 1500, y: 2750, side: 'down' };
+    terminals[out] = { x: x + 1500, y: 2000, side: 'down' };
   });
-  if (marks.length > 1) strokes.push({ d: 'M1125 1625H4125', weight: 'thin', dash: 'short' });
-  return { width: 3000 * marks.length, height: 3250, strokes, terminals };
+  if (marks.length > 1) strokes.push({ d: 'M1125 1250H4125', weight: 'thin', dash: 'short' });
+  return { width: 3000 * marks.length, height: 2500, strokes, terminals };
 }
 
 export const changeover: SymbolFamily = {

@@ -24,17 +24,17 @@ export const crossSwitch: SymbolFamily = {
   },
   connections: {
     width: 2500,
-    height: 3250,
+    height: 2500,
     strokes: [
-      box(0, 0, 2500, 3250),
-      { d: 'M500 500V1000L2000 2250V2750M2000 500V1000L500 2250V2750', dash: 'short' },
-      { d: 'M500 1000V2250M2000 1000V2250' },
+      box(0, 0, 2500, 2500),
+      { d: 'M500 500V750L2000 1750V2000M2000 500V750L500 1750V2000', dash: 'short' },
+      { d: 'M500 750V1750M2000 750V1750' },
     ],
     terminals: {
       '1': { x: 500, y: 500, side: 'up' },
       '3': { x: 2000, y: 500, side: 'up' },
-      '2': { x: 500, y: 2750, side: 'down' },
-      '4': { x: 2000, y: 2750, side: 'down' },
+      '2': { x: 500, y: 2000, side: 'down' },
+      '4': { x: 2000, y: 2000, side: 'down' },
     },
   },
 };

@@ -32,7 +32,7 @@ export const meter: SymbolFamily = {
   },
   connections: {
     ...faces,
-    strokes: [...faces.strokes.slice(0, -1), box(375, 1062, 2250, 1125), { d: 'M375 1375H2625' }],
-    texts: [{ x: 1500, y: 1900, text: 'kWh', size: 300, anchor: 'middle' }],
+    strokes: [...faces.strokes.slice(0, -1), box(375, 750, 2250, 1000), { d: 'M375 1031H2625' }],
+    texts: [{ x: 1500, y: 1525, text: 'kWh', size: 300, anchor: 'middle' }],
   },
 };

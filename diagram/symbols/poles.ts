@@ -7,7 +7,7 @@ import type { Stroke, TerminalPlace } from './types';
 export const POLE_PITCH = 1500;
 /** 1/100 mm from the box's edge to a terminal. */
 export const INSET = 500;
-const HEIGHT = 3250;
+const HEIGHT = 2500;
 const FIRST = POLE_PITCH / 2;
 
 export interface BoxedDevice {

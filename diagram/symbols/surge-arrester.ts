@@ -25,13 +25,13 @@ export const surgeArrester: SymbolFamily = {
   },
   connections: {
     width: 3000,
-    height: 3250,
+    height: 2750,
     strokes: [
-      box(0, 0, 3000, 3250),
-      { d: 'M750 500V750M2250 500V750M750 2000V2250H2250V2000M1500 2250V2750' },
-      ...gap(750, 750),
-      ...gap(2250, 750),
+      box(0, 0, 3000, 2750),
+      { d: 'M750 1750V1875H2250V1750M1500 1875V2250' },
+      ...gap(750, 500),
+      ...gap(2250, 500),
     ],
-    terminals: { L: { x: 750, y: 500, side: 'up' }, N: { x: 2250, y: 500, side: 'up' }, E: { x: 1500, y: 2750, side: 'down' } },
+    terminals: { L: { x: 750, y: 500, side: 'up' }, N: { x: 2250, y: 500, side: 'up' }, E: { x: 1500, y: 2250, side: 'down' } },
   },
 };

@@ -1,0 +1,142 @@
+import { byDesignation } from '../document/names';
+import { byCode, type Cable, type End, type Installation, type Part, type Wire } from '../document/schema';
+import { coreOf } from './overview-graph';
+import type { OverviewPlan } from './overview-plan';
+import { walk } from './overview-tree';
+import { lengthText, cableSize } from './wording';
+import { printedRef } from './overview-labels';
+
+/** What one page of the connections face holds: the parts of a place, their wires, and the cables that come or go. */
+
+export interface Core {
+  wire: Wire;
+  /** the end on this page, and the one elsewhere */
+  here: End;
+  far: End;
+  core: 'L' | 'N' | 'E';
+  /** what stands at its stub: the device or bar it comes from */
+  home: string;
+}
+
+export interface PageCable {
+  id: string;
+  cores: Core[];
+  /** feeds another place from here */
+  outgoing: boolean;
+  /** drawn at the foot: a way leaving its board */
+  atFoot: boolean;
+  /** written over its brace: the first line bold */
+  lines: string[];
+}
+
+export interface Page {
+  place: string;
+  parts: Part[];
+  inner: Wire[];
+  cables: PageCable[];
+}
+
+export interface ConnectionPage {
+  /** id of the place; '' for parts without one */
+  place: string;
+  name: string;
+}
+
+export function placeOf(places: ReadonlySet<string>, part: Part): string {
+  return part.place !== undefined && places.has(part.place) ? part.place : '';
+}
+
+const placeIds = (doc: Installation): Set<string> => new Set(doc.places.map((place) => place.id));
+
+/** The pages of the connections face: the intake first, then the places in the document's order, each if it holds a part. */
+export function connectionPages(doc: Installation): ConnectionPage[] {
+  const ids = placeIds(doc);
+  const held = new Set(doc.parts.map((part) => placeOf(ids, part)));
+  const places = [...doc.places].sort((a, b) => Number(b.kind === 'intake') - Number(a.kind === 'intake') || byCode(a.id, b.id));
+  const pages = places.filter((place) => held.has(place.id)).map((place) => ({ place: place.id, name: place.name }));
+  return held.has('') ? [...pages, { place: '', name: 'No place yet' }] : pages;
+}
+
+const CORE_ORDER = { L: 0, N: 1, E: 2 };
+
+/** Wires of the line tree, and whether the source lies at their far end as seen from a part. */
+function feedingWires(plan: OverviewPlan): Map<string, string> {
+  const child = new Map<string, string>();
+  const roots = [...(plan.tree.mains ? [plan.tree.mains] : []), ...plan.tree.backups, ...plan.tree.batteries, ...plan.tree.loose];
+  for (const root of roots) for (const node of walk(root)) for (const wire of node.via?.wires ?? []) child.set(wire, node.part.id);
+  return child;
+}
+
+/** The bar or device a core comes from: straight on through joints of its own kind. */
+function homes(doc: Installation, byId: ReadonlyMap<string, Part>): (wire: Wire, from: End) => string {
+  const at = new Map<string, Wire[]>();
+  for (const wire of doc.wires) for (const [id] of [wire.from, wire.to]) at.set(id, [...(at.get(id) ?? []), wire]);
+  return (wire, from) => {
+    const seen = new Set<string>();
+    let queue = [from[0]];
+    while (queue.length > 0) {
+      const next: string[] = [];
+      for (const id of queue) {
+        const part = byId.get(id);
+        if (!part || seen.has(id)) continue;
+        seen.add(id);
+        if (part.kind !== 'joint') return printedRef(part);
+        for (const other of at.get(id) ?? []) {
+          if (coreOf(other.role) !== coreOf(wire.role) || other.id === wire.id) continue;
+          next.push(other.from[0] === id ? other.to[0] : other.from[0]);
+        }
+      }
+      queue = next.sort(byCode);
+    }
+    return '';
+  };
+}
+
+/** Reads one page of a document. */
+export function readPage(doc: Installation, plan: OverviewPlan, place: string): Page {
+  const ids = placeIds(doc);
+  const byId = plan.graph.byId;
+  const onPage = (id: string): boolean => {
+    const part = byId.get(id);
+    return part !== undefined && placeOf(ids, part) === place;
+  };
+  const parts = [...byId.values()].filter((part) => placeOf(ids, part) === place);
+  const inner: Wire[] = [];
+  const groups = new Map<string, Core[]>();
+  const feeds = feedingWires(plan);
+  const homeOf = homes(doc, byId);
+  for (const wire of [...doc.wires].sort((a, b) => byCode(a.id, b.id))) {
+    const [from, to] = [onPage(wire.from[0]), onPage(wire.to[0])];
+    if (from && to) inner.push(wire);
+    if (from === to) continue;
+    const [here, far] = from ? [wire.from, wire.to] : [wire.to, wire.from];
+    const key = wire.cable ? `cable ${wire.cable}` : `to ${byId.get(far[0])?.place ?? far[0]} at ${here[0]}`;
+    const core: Core = { wire, here, far, core: coreOf(wire.role), home: homeOf(wire, far) };
+    groups.set(key, [...(groups.get(key) ?? []), core]);
+  }
+  const cables = [...groups].map(([id, cores]): PageCable => {
+    cores.sort((a, b) => CORE_ORDER[a.core] - CORE_ORDER[b.core] || byCode(a.wire.id, b.wire.id));
+    const live = cores.find(({ core }) => core === 'L');
+    // with the source at the far end it comes in
+    const outgoing = live !== undefined && feeds.get(live.wire.id) !== undefined && feeds.get(live.wire.id) !== live.here[0];
+    const head = live && plan.content.hanging.find((item) => item.head?.part.id === live.here[0]);
+    return { id, cores, outgoing, atFoot: outgoing && (head !== undefined || isBoardPart(byId.get(live.here[0]))), lines: cableLines(doc, plan, cores, outgoing) };
+  });
+  cables.sort((a, b) => byCode(a.id, b.id));
+  return { place, parts: parts.sort(byDesignation), inner, cables };
+}
+
+const isBoardPart = (part: Part | undefined): boolean =>
+  part !== undefined && ['mcb', 'rcbo', 'rcd', 'isolator', 'fuse', 'inverter', 'line-bar', 'changeover'].includes(part.kind);
+
+function cableLines(doc: Installation, plan: OverviewPlan, cores: readonly Core[], outgoing: boolean): string[] {
+  const first = cores[0]!;
+  const cable: Cable | undefined = doc.cables.find((c) => c.id === first.wire.cable);
+  const way = plan.ways.find((w) => cores.some((core) => w.wires.includes(core.wire.id)));
+  const far = plan.graph.byId.get(first.far[0]);
+  const room = doc.places.find((place) => place.id === far?.place)?.name;
+  const named = way ? `way ${way.number}${way.backup ? ', backup' : ''}` : (cable?.ref ?? '');
+  const data = cable ? [cableSize(cable, cores.length), lengthText(cable.length)].join(' ') : '';
+  const where = far ? [outgoing ? 'to' : 'from', room ?? printedRef(far)].join(' ') : 'to nowhere';
+  return [named, [data, where].filter(Boolean).join(' ')].filter(Boolean);
+}
