@@ -35,7 +35,10 @@ export function withstandS(input: { csaMm2: number; k: number; currentA: number 
   return ((input.k * input.csaMm2) / input.currentA) ** 2;
 }
 
-/** Let-through of energy class 3, A2 s, by prospective A: to 16 A and to 32 A, types B and C (EN 60898-1 Tables ZA.1 and ZA.2, from memory). */
+/**
+ * Let-through of energy class 3, A2 s, by prospective A: to 16 A and to 32 A, types B and C (EN 60898-1 Tables ZA.1 and
+ * ZA.2, from memory).
+ */
 const CLASS_3: readonly { uptoA: number; B16: number; C16: number; B32: number; C32: number }[] = [
   { uptoA: 3000, B16: 15000, C16: 17000, B32: 18000, C32: 20000 },
   { uptoA: 6000, B16: 35000, C16: 42000, B32: 45000, C32: 55000 },

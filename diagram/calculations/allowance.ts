@@ -3,7 +3,8 @@ import { requireNonNegative } from './requirements';
 
 /**
  * What an allowance counts of a group of currents. With `firstA` each current is counted whole up to it and by `rest`
- * above; with `ranked` the largest are counted by its shares; else all by `rest`. A current is never counted above itself,
+ * above; with `ranked` the largest are counted by its shares; else all by `rest`. A current is never counted above
+ * itself,
  * but for the outlet in a cooker's control unit.
  * @param currentsA A, each >= 0
  * @param options.perItem applies `firstA` to each current (a cooker) instead of to their sum (heating and power)

@@ -2,7 +2,8 @@ import { ASSUMED, type Assumptions, type Bank } from './battery-bank';
 import { requireFraction, requireNonNegative, requirePositive, requireWithin } from './requirements';
 
 /**
- * Peukert for a capacity stated at a discharge time: t = H (C / (I H))^k. The raw form C / I^k holds only for a capacity
+ * Peukert for a capacity stated at a discharge time: t = H (C / (I H))^k. The raw form C / I^k holds only for a
+ * capacity
  * stated at 1 A and is not used.
  * @param discharge.ah       C, Ah at the H-hour rate
  * @param discharge.hours    H
@@ -68,7 +69,10 @@ export function autonomyCurve(
   });
 }
 
-/** Hours when each named load is left out in turn: what it is worth to drop the fans. @throws RangeError naming the field */
+/**
+ * Hours when each named load is left out in turn: what it is worth to drop the fans. @throws RangeError naming the
+ * field
+ */
 export function whatIfs(
   input: { bank: Bank; efficiency: number; temperatureC?: number; assumed?: Assumptions },
   loads: readonly { name: string; watts: number }[],
@@ -99,7 +103,10 @@ export function rechargeHours(input: {
   return (input.bank.ah * takenShare) / (input.chargeA * assumed.chargeReturn);
 }
 
-/** Extra mains load while charging: charge current at the bank's nominal volts, through the charger. @returns W @throws RangeError naming the field */
+/**
+ * Extra mains load while charging: charge current at the bank's nominal volts, through the charger. @returns W @throws
+ * RangeError naming the field
+ */
 export function chargingWatts(input: { chargeA: number; bankVolts: number; efficiency: number }): number {
   requireNonNegative('chargeA', input.chargeA);
   requirePositive('bankVolts', input.bankVolts);

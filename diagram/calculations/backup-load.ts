@@ -18,7 +18,10 @@ export interface BackupLoad {
   starts: string | null;
 }
 
-/** Running watts and VA of what a backup source feeds, and the largest start among them. @throws RangeError naming the field */
+/**
+ * Running watts and VA of what a backup source feeds, and the largest start among them. @throws RangeError naming the
+ * field
+ */
 export function backupLoad(loads: readonly BackedLoad[]): BackupLoad {
   let watts = 0;
   let va = 0;

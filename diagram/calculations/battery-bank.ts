@@ -36,7 +36,8 @@ export interface Assumptions {
 }
 
 /**
- * Peukert: flooded 1.2 and agm 1.05 to 1.15 (BatteryGuy; sources disagree), lithium from memory. Depth 0.5 for lead, 0.9
+ * Peukert: flooded 1.2 and agm 1.05 to 1.15 (BatteryGuy; sources disagree), lithium from memory. Depth 0.5 for lead,
+ * 0.9
  * for lithium: common design practice, no standard (0.8 is claimed for tubular plates). Ageing 0.8: the end of life of
  * IEC 60896 and IEEE 485, from memory. Charge return and cold: makers' general advice, from memory.
  */
@@ -46,7 +47,10 @@ export const ASSUMED: Record<Chemistry, Assumptions> = {
   lfp: { peukert: 1.05, dischargeDepth: 0.9, ageing: 0.8, chargeReturn: 0.98, coldPerK: 0.005 },
 };
 
-/** Charge current in A per Ah that the bank takes: flooded 0.1 usual, 0.2 at most; under 0.05 it is never full. Makers' advice, from memory. */
+/**
+ * Charge current in A per Ah that the bank takes: flooded 0.1 usual, 0.2 at most; under 0.05 it is never full. Makers'
+ * advice, from memory.
+ */
 export const CHARGE_LIMIT: Record<Chemistry, { most: number; least: number }> = {
   flooded: { most: 0.2, least: 0.05 },
   vrla: { most: 0.25, least: 0.05 },

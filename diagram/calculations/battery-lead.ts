@@ -37,14 +37,18 @@ export interface BatteryLead {
   dropPercent: number;
 }
 
-/** The fuse for a current: the next on sale above it and a quarter; null where none is large enough. @throws RangeError naming currentA */
+/**
+ * The fuse for a current: the next on sale above it and a quarter; null where none is large enough. @throws RangeError
+ * naming currentA
+ */
 export function batteryFuseA(currentA: number): number | null {
   requirePositive('currentA', currentA);
   return DC_FUSES_A.find((rating) => rating >= FUSE_MARGIN * currentA) ?? null;
 }
 
 /**
- * The thinnest battery lead and the fuse for it: the lead carries at least the fuse and drops at most 2 % of the bank's volts.
+ * The thinnest battery lead and the fuse for it: the lead carries at least the fuse and drops at most 2 % of the bank's
+ * volts.
  * @param need.currentA A at full output and cutoff
  * @param need.lengthM  m, one way
  * @returns null where no size on sale does

@@ -58,7 +58,8 @@ export function ambientFactor(practice: Practice, laying: Pick<Laying, 'method' 
 
 /**
  * Cg. Side by side on a surface for method C, which is laid so by its definition; bunched for every other. A number of
- * circuits that is not printed takes the next printed one; past the table the last value falls with the root of the number.
+ * circuits that is not printed takes the next printed one; past the table the last value falls with the root of the
+ * number.
  * @throws RangeError naming grouped
  */
 export function groupingFactor(practice: Practice, laying: Pick<Laying, 'method' | 'grouped'>): number {
@@ -102,7 +103,9 @@ export function capacity(practice: Practice, csaMm2: number, laying: Laying): Ca
   };
 }
 
-/** It >= In / (Ca Cg Ci Cf): what the table must print for a device of `deviceA`. @throws RangeError naming the field */
+/**
+ * It >= In / (Ca Cg Ci Cf): what the table must print for a device of `deviceA`. @throws RangeError naming the field
+ */
 export function neededTableA(
   deviceA: number,
   factors: { ambient?: number; grouping?: number; insulation?: number; fuse?: number },

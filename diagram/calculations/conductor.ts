@@ -49,7 +49,8 @@ export const LIMIT_C: Record<Insulation, number> = { PVC: 70, XLPE: 90 };
 
 /**
  * Maximum d.c. resistance of one conductor at 20 degC.
- * Sizes that are not printed take resistivity over area and 7 % more, by which the printed maxima of copper exceed it at most.
+ * Sizes that are not printed take resistivity over area and 7 % more, by which the printed maxima of copper exceed it
+ * at most.
  * @returns ohm/m
  * @throws RangeError naming csaMm2
  */

@@ -30,7 +30,10 @@ export function rodsOhm(rods: { oneOhm: number; count: number; efficiency: numbe
   return rods.oneOhm / (rods.count * (rods.count === 1 ? 1 : rods.efficiency));
 }
 
-/** The metalwork's voltage to true earth while a current flows through the electrode. @returns V @throws RangeError naming the field */
+/**
+ * The metalwork's voltage to true earth while a current flows through the electrode. @returns V @throws RangeError
+ * naming the field
+ */
 export function electrodeVolts(fault: { currentA: number; electrodeOhm: number }): number {
   requireNonNegative('currentA', fault.currentA);
   requireNonNegative('electrodeOhm', fault.electrodeOhm);

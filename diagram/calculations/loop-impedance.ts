@@ -28,7 +28,10 @@ export function maximumLoopOhm(input: {
   return (input.cMin * input.voltage) / operatingCurrentA(input.device, input.withinS);
 }
 
-/** What a cold measured loop may read on the test sheet: 80 % of the limit. @returns ohm @throws RangeError naming the field */
+/**
+ * What a cold measured loop may read on the test sheet: 80 % of the limit. @returns ohm @throws RangeError naming the
+ * field
+ */
 export function measuredLimitOhm(limitOhm: number, share = 0.8): number {
   requirePositive('limitOhm', limitOhm);
   requireFraction('share', share);

@@ -46,7 +46,8 @@ const GROUPS: readonly (readonly [DemandGroup, string])[] = [
 ];
 
 /**
- * Maximum demand of a home, every allowance a line that can be checked by hand. Currents are added arithmetically, which
+ * Maximum demand of a home, every allowance a line that can be checked by hand. Currents are added arithmetically,
+ * which
  * is never less than their vector sum; the watts after an allowance keep the group's power factor.
  * @throws RangeError naming the field
  */

@@ -2,7 +2,8 @@ import { requirePositive } from './requirements';
 
 /**
  * I = c U0 / Z: the current of a bolted fault over a loop.
- * Greatest with cold conductors and c = Cmax, for breaking capacity; least with hot ones and c = Cmin, for disconnection;
+ * Greatest with cold conductors and c = Cmax, for breaking capacity; least with hot ones and c = Cmin, for
+ * disconnection;
  * c = 1 for what is printed as the prospective current at the origin.
  * @param fault.loopOhm ohm, the whole loop, > 0
  * @param fault.factor  voltage factor, above 0

@@ -19,7 +19,9 @@ export function interpolated(table: Table, at: number): number {
   return a.value + ((at - a.at) / (b.at - a.at)) * (b.value - a.value);
 }
 
-/** The row at this argument, else the next one above it: the safe reading of a table of counts. Past its end, the last. */
+/**
+ * The row at this argument, else the next one above it: the safe reading of a table of counts. Past its end, the last.
+ */
 export function nextAbove(table: Table, at: number): number {
   return (table.rows.find((row) => row.at >= at) ?? table.rows[table.rows.length - 1]!).value;
 }

@@ -3,7 +3,10 @@ import { requireNonNegative, requirePositive } from './requirements';
 import { INSTANT, tripBand, type OvercurrentDevice } from './trip-curve';
 import type { ResidualDevice } from './rcd-time';
 
-/** Least ratio of ratings at which two overcurrent devices in series are taken as selective on overload: common practice for gG, 1.6. */
+/**
+ * Least ratio of ratings at which two overcurrent devices in series are taken as selective on overload: common practice
+ * for gG, 1.6.
+ */
 export const LEAST_RATIO = 1.6;
 
 export interface Selectivity {

@@ -77,7 +77,8 @@ function judge(
       zsMaxOhm = maximumLoopOhm({ device, voltage, withinS: need.disconnectS, cMin: practice.cMin.value });
       if (zsOhm > zsMaxOhm) failed.push('zs');
       const energy = zsOhm > zsMaxOhm ? Infinity : letThroughA2s(device, voltage / zsOhm);
-      // A loop too long to trip the device is the failing of `zs`; the heat of a fault that never clears is not added to it.
+      // A loop too long to trip the device is the failing of `zs`; the heat of a fault that never clears is not added
+      // to it.
       if (Number.isFinite(energy)) {
         thermalMm2 = adiabaticMm2(energy, kFactor(material, insulation, true));
         if (cpcMm2 < thermalMm2) failed.push('adiabatic');

@@ -52,7 +52,8 @@ function nameOf(part: Part): string {
 }
 
 /**
- * What is bought for a drawing: metres of single core by size and colour, with wastage; metres of conduit or trunking where
+ * What is bought for a drawing: metres of single core by size and colour, with wastage; metres of conduit or trunking
+ * where
  * the method asks for it; devices and accessories by the piece. Supply and meter are the distributor's.
  * @param wastage share added to every length, 0.1 for a tenth
  * @throws RangeError naming wastage

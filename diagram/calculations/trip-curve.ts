@@ -15,14 +15,20 @@ export interface OvercurrentDevice {
   curve?: Curve;
 }
 
-/** Instantaneous band in multiples of In: holds at the lower, opens within 0.1 s at the upper (IEC 60898-1; sources in mcb.json). */
+/**
+ * Instantaneous band in multiples of In: holds at the lower, opens within 0.1 s at the upper (IEC 60898-1; sources in
+ * mcb.json).
+ */
 export const INSTANT: Record<Curve, { holds: number; trips: number }> = {
   B: { holds: 3, trips: 5 },
   C: { holds: 5, trips: 10 },
   D: { holds: 10, trips: 20 },
 };
 
-/** IEC 60898-1: 1.13 In must not trip within the conventional time, 1.45 In must (seen); 2.55 In within 1 to 60 s (from memory). */
+/**
+ * IEC 60898-1: 1.13 In must not trip within the conventional time, 1.45 In must (seen); 2.55 In within 1 to 60 s (from
+ * memory).
+ */
 export const HOLDS_FOREVER = 1.13;
 export const TRIPS_IN_TIME = 1.45;
 const TEST = 2.55;
@@ -39,8 +45,10 @@ function logLog(x: number, [x1, y1]: readonly [number, number], [x2, y2]: readon
 }
 
 /**
- * Band of a miniature circuit-breaker from cold. Between the points of IEC 60898-1 Table 7 a straight line on the log-log
- * chart; beyond 2.55 In at constant I2t, which meets the table's 45 s at 3 In, 15 s at 5 In, 4 s at 10 In (from memory).
+ * Band of a miniature circuit-breaker from cold. Between the points of IEC 60898-1 Table 7 a straight line on the
+ * log-log
+ * chart; beyond 2.55 In at constant I2t, which meets the table's 45 s at 3 In, 15 s at 5 In, 4 s at 10 In (from
+ * memory).
  */
 function mcbBand(multiple: number, ratingA: number, curve: Curve): TripBand {
   const { holds, trips } = INSTANT[curve];
@@ -58,7 +66,8 @@ function mcbBand(multiple: number, ratingA: number, curve: Curve): TripBand {
 }
 
 /**
- * Gates of gG fuse-links, IEC 60269-1 Table 3 (from memory): A that hold 10 s, that melt within 5 s, that hold 0.1 s, that
+ * Gates of gG fuse-links, IEC 60269-1 Table 3 (from memory): A that hold 10 s, that melt within 5 s, that hold 0.1 s,
+ * that
  * melt within 0.1 s. Below 16 A the table leaves the gates to the maker: the multiples of the 16 A link stand in.
  */
 const GATES: readonly (readonly [ratingA: number, hold10: number, melt5: number, hold01: number, melt01: number])[] = [
@@ -116,7 +125,8 @@ export function tripBand(device: OvercurrentDevice, currentA: number): TripBand 
 
 /**
  * Ia: the least current that surely opens the device within `withinS`.
- * An mcb takes its instantaneous limit 5, 10, 20 In; within 5 s or longer a type D takes 10 In, as BS 7671 Table 41.3(c) does.
+ * An mcb takes its instantaneous limit 5, 10, 20 In; within 5 s or longer a type D takes 10 In, as BS 7671 Table
+ * 41.3(c) does.
  * @returns A
  * @throws RangeError naming the field
  */

@@ -80,7 +80,10 @@ export function dropLimitPercent(
   return base + Math.min(longRun.atMost, Math.max(0, lengthM - longRun.fromM) * longRun.perMetre);
 }
 
-/** dU = mV/A/m x I x L / 1000, as handbooks reckon it from the printed table. @returns V @throws RangeError naming the field */
+/**
+ * dU = mV/A/m x I x L / 1000, as handbooks reckon it from the printed table. @returns V @throws RangeError naming the
+ * field
+ */
 export function tableDropV(input: { milliVoltPerAmpereMetre: number; currentA: number; lengthM: number }): number {
   requirePositive('milliVoltPerAmpereMetre', input.milliVoltPerAmpereMetre);
   requireNonNegative('currentA', input.currentA);

@@ -4,7 +4,7 @@ import { isPoint } from '../terminals/roles-of-parts';
 import type { Condition } from './conditions';
 import { chargeWatts, shortCircuitA, takenBy } from './loads';
 import { edgeOhm } from './resistance';
-import { REFERENCE, type Network } from './solve';
+import { REFERENCE, type Network } from './network';
 import { supplyModel } from './supply-model';
 
 /** A conductor that a fault adds: between two terminals, or to true earth. */
@@ -52,7 +52,10 @@ export interface Assembly {
   firstExtra: number;
 }
 
-/** S: insulation of each terminal to true earth, a gigohm. It decides only what nothing else does: where an island floats. */
+/**
+ * S: insulation of each terminal to true earth, a gigohm. It decides only what nothing else does: where an island
+ * floats.
+ */
 const INSULATION = 1e-9;
 /** ohm inside an inverter as long as it holds its voltage */
 export const STIFF_OHM = 1e-3;
@@ -80,8 +83,10 @@ function addLoad(branches: Branches, a: number, b: number, watts: number, pf: nu
 }
 
 /**
- * The network of a home in one standing: conductors at their temperature, loads as constant impedances, the supply behind
- * its external loop with the star point at true earth (the source electrode counts as 0), inverters on battery as sources
+ * The network of a home in one standing: conductors at their temperature, loads as constant impedances, the supply
+ * behind
+ * its external loop with the star point at true earth (the source electrode counts as 0), inverters on battery as
+ * sources
  * between their own two terminals. The reference is true earth.
  */
 export function assemble(graph: Graph, standing: Standing): Assembly {

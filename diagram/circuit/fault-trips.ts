@@ -22,7 +22,8 @@ const sooner = (a: TripBand, b: TripBand): TripBand => ({
 
 /**
  * The urge of every closed device. Overcurrent is watched in the poles that the device protects.
- * @param overcurrent false where the source's greatest current is not known: then only residual devices are held to clear
+ * @param overcurrent false where the source's greatest current is not known: then only residual devices are held to
+ * clear
  */
 export function urges(graph: Graph, steady: Steady, opened: ReadonlySet<string>, overcurrent: boolean): Urge[] {
   const found: Urge[] = [];

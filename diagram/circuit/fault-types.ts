@@ -12,7 +12,9 @@ export interface Fault {
   kind: FaultKind;
   /** id of the part at which it is */
   at: string;
-  /** id of the wire that opens, of `neutral-open`; all wires at the part's N where not given, the supplier's at a supply */
+  /**
+   * id of the wire that opens, of `neutral-open`; all wires at the part's N where not given, the supplier's at a supply
+   */
   wire?: string;
 }
 
@@ -47,7 +49,9 @@ export interface FaultStep {
   dark: string[];
 }
 
-/** The course of one fault or of several in sequence; the fields that `npm run fault` prints keep their names and units. */
+/**
+ * The course of one fault or of several in sequence; the fields that `npm run fault` prints keep their names and units.
+ */
 export interface FaultWalk {
   condition: string;
   steps: FaultStep[];

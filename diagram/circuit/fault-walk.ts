@@ -61,7 +61,8 @@ function isDead(graph: Graph, standing: Standing, node: number): boolean {
 }
 
 /**
- * Walks one fault, or several in sequence: each is put in when the home is still after the one before. All devices watch
+ * Walks one fault, or several in sequence: each is put in when the home is still after the one before. All devices
+ * watch
  * their currents; the one that must open first opens, as late as its curve allows, and the home is solved again, until
  * nothing more must open. What a device has endured already counts towards its time.
  * @param condition name of the condition; the first where not given

@@ -2,7 +2,8 @@ import { LIMIT_C, conductorOhm } from '../calculations/conductor';
 import type { Edge, Graph } from '../terminals/graph';
 
 /**
- * Ohm of a closed contact and of a wire without a cable, which the model takes as none: so little that no figure shows it,
+ * Ohm of a closed contact and of a wire without a cable, which the model takes as none: so little that no figure shows
+ * it,
  * and yet the current shares itself among several of them.
  */
 export const CONTACT_OHM = 1e-6;

@@ -1,7 +1,8 @@
 import type { Graph } from '../terminals/graph';
 import { assemble, STIFF_OHM, type Assembly, type Standing } from './assemble';
 import type { Evaluated } from './evaluate';
-import { solveNetwork, type Solution } from './solve';
+import { type Solution } from './network';
+import { solveNetwork } from './solve';
 
 /** A complex quantity, rms. */
 export interface Phasor {
@@ -32,11 +33,15 @@ export interface Steady {
   poleAmps(part: string): number[];
 }
 
-/** A source held to its greatest current: the inner resistance that makes it so is found in few rounds, as the network is linear. */
+/**
+ * A source held to its greatest current: the inner resistance that makes it so is found in few rounds, as the network
+ * is linear.
+ */
 const ROUNDS = 12;
 
 /**
- * Solves one standing. An inverter keeps its voltage up to the current it can drive, then lets the voltage fall; one whose
+ * Solves one standing. An inverter keeps its voltage up to the current it can drive, then lets the voltage fall; one
+ * whose
  * greatest current is not known is taken as stiff.
  */
 export function solveStanding(graph: Graph, standing: Standing): Steady {
@@ -99,7 +104,8 @@ function read(graph: Graph, standing: Standing, assembly: Assembly, solution: So
 }
 
 /**
- * Standings in which every point that can be fed is on: two-way and cross switches stand where the evaluation found each
+ * Standings in which every point that can be fed is on: two-way and cross switches stand where the evaluation found
+ * each
  * point fed. Points that ask one switch to stand both ways come in a standing of their own.
  * @returns each standing with the ids of the points it is to be read for
  */

@@ -14,8 +14,10 @@ export interface SupplyModel {
 const STIFF = 1e-4;
 
 /**
- * Splits `ze` and `zln`. Of `ze` the protective conductor has `zeEarth` where given, else half; the line has the rest; of
- * `zln` the neutral has what the line leaves. A value that is missing is taken from the other; on TT from `zln` by halves.
+ * Splits `ze` and `zln`. Of `ze` the protective conductor has `zeEarth` where given, else half; the line has the rest;
+ * of
+ * `zln` the neutral has what the line leaves. A value that is missing is taken from the other; on TT from `zln` by
+ * halves.
  */
 export function supplyModel(supply: Supply): SupplyModel {
   const { system, zln } = supply;

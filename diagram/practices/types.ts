@@ -51,7 +51,9 @@ export interface SocketPattern {
   name: string;
   ratingA: number;
   earthed: boolean;
-  /** on which side the line contact lies, seen from the front with the earth at the top; absent where it may be either */
+  /**
+   * on which side the line contact lies, seen from the front with the earth at the top; absent where it may be either
+   */
   lineSide?: 'left' | 'right';
   /** A, the fuse in the plug */
   plugFuseA?: number;
@@ -94,7 +96,10 @@ export interface PointsLimit {
 
 /** Where the practice asks for an rcd of at most this sensitivity. */
 export interface RcdDuty {
-  /** sockets: outlets up to `uptoA`; wet: any circuit of a wet place; lighting: luminaires in a dwelling; tt: any circuit on TT */
+  /**
+   * sockets: outlets up to `uptoA`; wet: any circuit of a wet place; lighting: luminaires in a dwelling; tt: any
+   * circuit on TT
+   */
   of: 'sockets' | 'wet' | 'lighting' | 'tt';
   uptoA?: number;
   /** A */

@@ -7,8 +7,10 @@ import { buildGraph } from '@/diagram/terminals/graph';
 
 /**
  * npm run -s fault -- FILE.json --at PART --kind KIND [--wire ID] [--condition NAME]
- * A second --at and --kind put in a second fault when the home is still after the first. Prints one JSON object and exits
- * 0; a file that is not a document, or a fault that cannot be walked, prints { errors: [{ path, message }] } and exits 2.
+ * A second --at and --kind put in a second fault when the home is still after the first. Prints one JSON object and
+ * exits
+ * 0; a file that is not a document, or a fault that cannot be walked, prints { errors: [{ path, message }] } and exits
+ * 2.
  */
 
 interface Request {

@@ -94,7 +94,8 @@ const MULTI = 'BS 7671 Table 4D2A (multicore, one two-core cable)';
 const TWIN = 'BS 7671 Table 4D5 (flat twin and earth), E. Palmer reference copy for 1 and 1.5 mm2';
 
 /**
- * BS 7671. Single-core in conduit for A1 and B1, multicore in conduit for A2 and B2. Method C is the flat twin-and-earth
+ * BS 7671. Single-core in conduit for A1 and B1, multicore in conduit for A2 and B2. Method C is the flat
+ * twin-and-earth
  * cable a house there is wired in (4D5) up to its largest size, 16 mm2, then multicore (4D2A). Buried ducts, 90 degC
  * insulation and aluminium: no British table was open; the IEC one stands in.
  */

@@ -23,7 +23,9 @@ export const trade = <T>(value: T, what = 'common practice, no source'): Sourced
 
 const WHITFIELD = 'J. Whitfield, The Electricians Guide, 5th ed., Table 6.2 (= IET GN1 Table H2)';
 
-/** Household allowances. Neither IEC 60364 nor IS 732 prints a table for homes: the British one stands in, and says so. */
+/**
+ * Household allowances. Neither IEC 60364 nor IS 732 prints a table for homes: the British one stands in, and says so.
+ */
 export const household = (note?: string): Record<DemandGroup, Sourced<Allowance>> => {
   const of = (value: Allowance) => said(value, WHITFIELD, note);
   return {

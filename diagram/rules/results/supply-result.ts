@@ -3,7 +3,10 @@ import type { SupplyResult } from '../examination';
 import { figuresOf } from '../readings/figures';
 import { round, roundOrNull } from './round';
 
-/** Demand of the home line by line, and the current of a fault at the origin: voltage over `zln`, without voltage factor. */
+/**
+ * Demand of the home line by line, and the current of a fault at the origin: voltage over `zln`, without voltage
+ * factor.
+ */
 export function supplyResult(context: Context): SupplyResult {
   const { demand } = figuresOf(context);
   const { voltage, zln } = context.document.supply;

@@ -224,7 +224,8 @@ describe('batteries', () => {
     expect(printed(settled.currentA, 2)).toBe(90.41);
   });
   example('WE28', () => {
-    // A maker's rule of thumb, 0.015 mm2 V per A and foot; exact copper at 20 degC asks for 42 mm2, so the rule is safe.
+    // A maker's rule of thumb, 0.015 mm2 V per A and foot; exact copper at 20 degC asks for 42 mm2, so the rule is
+    // safe.
     const amps = batteryCurrentA({ watts: 2000, efficiency: 1, volts: 12 });
     expect(printed((0.015 * amps * 12) / 0.5, 0)).toBe(published<{ csa_mm2: number }>('WE28').csa_mm2);
     const exact = (2 * 0.017241 * 12 * 0.3048 * amps) / 0.5;

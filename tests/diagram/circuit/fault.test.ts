@@ -76,7 +76,8 @@ describe('line to case against published and hand-solved networks', () => {
   const H05 = { csa: 2.5, cpc: 1.5, length: 20 };
   const tn = { ze: 0.35, zln: 0.35 };
   test('networks.json H05: 281 A, 131.6 V if the line had all of Ze, B32 opens at once, C32 does not', () => {
-    // The reference takes 1.20 for 70 degC and puts all of Ze before the line; here 1.1965, and half of Ze in the earth.
+    // The reference takes 1.20 for 70 degC and puts all of Ze before the line; here 1.1965, and half of Ze in the
+    // earth.
     const published = record('networks', 'H05').value as { branch_amp_from_to: { Ze: number } };
     const b32 = walk(oneWay({ ...tn, zeEarth: 1e-4 }, { rating: 32, curve: 'B' }, H05), {
       kind: 'line-to-case',
@@ -155,7 +156,13 @@ describe('neutral', () => {
     expect(found.steps.at(-1)!.event).toBe('no device opens');
   });
   test('TN-S: a lost supply neutral leaves cases at earth and the neutral at the line (networks.json H09)', () => {
-    const doc = oneWay({ ze: 0.35, zln: 0.35 }, { rating: 16, curve: 'B' }, { csa: 2.5, cpc: 2.5, length: 15 }, false, 1000);
+    const doc = oneWay(
+      { ze: 0.35, zln: 0.35 },
+      { rating: 16, curve: 'B' },
+      { csa: 2.5, cpc: 2.5, length: 15 },
+      false,
+      1000,
+    );
     const found = walk(doc, { kind: 'neutral-open', at: 'SUP' });
     expect(found.touchVolts).toBeLessThan(0.01);
     expect(found.steps[0]!.neutralVolts).toBeGreaterThan(225);

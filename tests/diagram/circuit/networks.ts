@@ -1,4 +1,4 @@
-import { REFERENCE, type Network } from '@/diagram/circuit/solve';
+import { REFERENCE, type Network } from '@/diagram/circuit/network';
 
 /** A branch of a test network: an impedance, between nodes or to the reference. */
 export interface TestBranch {

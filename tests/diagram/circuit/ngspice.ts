@@ -2,7 +2,7 @@ import { execFileSync } from 'node:child_process';
 import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { REFERENCE } from '@/diagram/circuit/solve';
+import { REFERENCE } from '@/diagram/circuit/network';
 import type { TestNetwork } from './networks';
 
 /** Hz */

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { FloatingNode, REFERENCE, solveNetwork } from '@/diagram/circuit/solve';
+import { FloatingNode, REFERENCE } from '@/diagram/circuit/network';
+import { solveNetwork } from '@/diagram/circuit/solve';
 import { reference } from '../reference';
 import { home, ladder, mesh, toNetwork, type TestNetwork } from './networks';
 import { spice } from './ngspice';
