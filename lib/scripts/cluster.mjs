@@ -29,34 +29,36 @@ async function installed() {
 function as(bin, program, args, options = {}) {
   const command = path.join(bin, program);
   if (!isRoot()) return run(command, args, options);
-  // The reduced environment and the root folder: user postgres may not be able to enter where we stand.
+  // From the root folder, because user postgres may not be able to enter where we stand.
   return run('runuser', ['-u', ROOT_RUNS_AS, '--', command, ...args], { ...options, cwd: '/' });
 }
 
 /**
  * Root in a home that user postgres may not enter: the folder becomes a link to one under /var/lib. Everybody else, and
  * root elsewhere, keeps the cluster where it was asked for.
+ * @returns where it is
  */
 async function makeReachable(folder) {
   await mkdir(path.dirname(folder), { recursive: true });
-  if (!isRoot() || (await exists(folder))) return;
+  if (!isRoot()) return folder;
+  if (await exists(folder)) return readlink(folder).catch(() => folder);
   const canEnter = await run('runuser', ['-u', ROOT_RUNS_AS, '--', 'test', '-x', path.dirname(folder)], { cwd: '/' });
-  if (canEnter.status === 0) return;
+  if (canEnter.status === 0) return folder;
   const real = path.join('/var/lib/ohmstead', randomBytes(6).toString('hex'));
   await mkdir(real, { recursive: true });
   await rm(folder, { force: true });
   await symlink(real, folder);
+  return real;
 }
 
 async function ownFolder(folder) {
-  const target = await readlink(folder).catch(() => folder);
-  await mkdir(target, { recursive: true, mode: 0o700 });
-  await chmod(target, 0o700);
+  await mkdir(folder, { recursive: true, mode: 0o700 });
+  await chmod(folder, 0o700);
   if (!isRoot()) return;
   const [uid, gid] = await Promise.all(
     ['-u', '-g'].map(async (flag) => Number((await run('id', [flag, ROOT_RUNS_AS])).output)),
   );
-  await chown(target, uid, gid);
+  await chown(folder, uid, gid);
 }
 
 async function initialise(bin, folder, passwords, durable) {
@@ -86,14 +88,14 @@ const THROWAWAY = { fsync: 'off', synchronous_commit: 'off', full_page_writes: '
  * @returns {Promise<{ port: number, url: (database: string, role?: 'owner' | 'app') => string, createDatabase: (name: string) => Promise<void>, stop: () => Promise<void> }>}
  * @throws {Stop} one line on what is wrong and what to do
  */
-export async function startCluster({ folder, port, passwords, durable = true }) {
+export async function startCluster({ folder: asked, port, passwords, durable = true }) {
   let versions = await installed();
   if (versions.size === 0) {
     await installPackages(['postgresql'], 'PostgreSQL');
     versions = await installed();
   }
   if (versions.size === 0) throw new Stop('PostgreSQL 15 or newer was not found, even after installing it.');
-  await makeReachable(folder);
+  const folder = await makeReachable(asked);
   const data = path.join(folder, 'data');
   const stamp = await readFile(path.join(data, 'PG_VERSION'), 'utf8').catch(() => null);
   const isNew = stamp === null;
