@@ -1,12 +1,11 @@
 import { listNames } from '../document/names';
 import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
-import { rules } from './index';
 import type { Lack, Rule } from './types';
 import { capital } from './readings/words';
 
 /** What the drawing leaves out, with the rules that wait for it; the same value is named once. */
-function lacking(context: Context): { lack: Lack; waiting: string[] }[] {
+function lacking(context: Context, rules: readonly Rule[]): { lack: Lack; waiting: string[] }[] {
   const found = new Map<string, { lack: Lack; waiting: string[] }>();
   for (const rule of rules) {
     if (rule.meta.practices && !rule.meta.practices.includes(context.practice)) continue;
@@ -31,8 +30,8 @@ export const missingData: Rule = {
     lesson: 'What is not known is not guessed. A rule that lacks a value says nothing, and silence looks like approval; so the lack itself is said.',
     remedy: 'Type the value, measured or from the plate.',
   },
-  *check(context) {
-    for (const { lack, waiting } of lacking(context)) {
+  *check(context, all) {
+    for (const { lack, waiting } of lacking(context, all)) {
       yield {
         heading: `${capital(lack.what)} is missing`,
         message: `${listNames(waiting)} cannot be judged without ${lack.what}.`,

@@ -1,7 +1,8 @@
+import { isLoad } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
-import { earthGaps } from './readings/earth-gaps';
+import { earthGaps, hasWire } from './readings/earth-gaps';
 import type { Rule } from './types';
-import { be, capital, sayParts } from './readings/words';
+import { be, capital, say, sayParts } from './readings/words';
 
 /** A socket, class 1 load or inverter whose earth does not reach the main earthing terminal. */
 export const missingEarth: Rule = {
@@ -31,6 +32,13 @@ export const missingEarth: Rule = {
         parts: [...parts, ...joints],
         wires,
       };
+    }
+  },
+  *lacks(context) {
+    for (const part of context.document.parts) {
+      if (!isLoad(part) || part.class !== undefined || hasWire(context, context.graph.node(part.id, 'E')!)) continue;
+      const wired = hasWire(context, context.graph.node(part.id, 'L')!);
+      if (wired) yield { parts: [part.id], what: `the protection class of ${say(context, part.id)}` };
     }
   },
 };

@@ -27,7 +27,7 @@ export function remediesFor(doc: Installation, finding: Finding, practice: Pract
   const context = buildContext(doc, practice);
   const rule = rules.find(({ meta }) => meta.id === finding.rule);
   if (!rule) return [];
-  const violation = violationsOf(context, rule).find((each) => {
+  const violation = violationsOf(context, rule, rules).find((each) => {
     const { parts, wires, message } = toFinding(context, rule, each);
     return message === finding.message && parts.join() === finding.parts.join() && wires.join() === finding.wires.join();
   });

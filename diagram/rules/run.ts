@@ -43,16 +43,16 @@ function silence(context: Context, finding: Finding): Finding {
   return answer ? { ...finding, silenced: { reason: answer.reason, by: answer.by } } : finding;
 }
 
-/** What a rule says about a home. */
-export function violationsOf(context: Context, rule: Rule): Violation[] {
+/** What a rule says about a home. @param all every rule of the run */
+export function violationsOf(context: Context, rule: Rule, all: readonly Rule[]): Violation[] {
   if (rule.meta.practices && !rule.meta.practices.includes(context.practice)) return [];
-  return [...rule.check(context)];
+  return [...rule.check(context, all)];
 }
 
 /** Runs rules over a home. */
 export function runRules(context: Context, rules: readonly Rule[]): Finding[] {
   return rules
-    .flatMap((rule) => violationsOf(context, rule).map((violation) => toFinding(context, rule, violation)))
+    .flatMap((rule) => violationsOf(context, rule, rules).map((violation) => toFinding(context, rule, violation)))
     .map((finding) => silence(context, finding))
     .sort(compareFindings);
 }

@@ -72,7 +72,8 @@ export interface Lack {
 
 export interface Rule {
   meta: RuleMeta;
-  check(context: Context): Iterable<Violation>;
+  /** @param all every rule of the run, for a rule that speaks of the others */
+  check(context: Context, all: readonly Rule[]): Iterable<Violation>;
   /** values that it waits for in this home; rules that need none leave it out. The same lack of several rules is one finding. */
   lacks?(context: Context): Iterable<Lack>;
 }

@@ -5,11 +5,11 @@ import { once } from './once';
 
 const CONTROLS: ReadonlySet<LinkKind | 'wire'> = new Set(['switch', 'select']);
 
-/** Control contacts whose two sides are joined without any control contact, with the wires that do it. */
+/** Control contacts whose two sides are joined by wires alone, with the wires that do it. Through a device it is a mixed feed. */
 export const bypassedContacts = once((context: Context): { part: string; wires: string[] }[] => {
   const { graph } = context;
   const crossed = new Set(context.evaluated.flatMap((each) => each.crossed.map(({ edge }) => edge)));
-  const closed = closedEdges(graph, (edge) => CONTROLS.has(edge.kind) || edge.kind === 'bond');
+  const closed = closedEdges(graph, (edge) => edge.kind !== 'wire' && edge.kind !== 'plug');
   for (const edge of crossed) closed[edge] = 0;
   const group = groups(graph, closed);
   const found = new Map<string, Set<string>>();
