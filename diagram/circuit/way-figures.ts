@@ -1,5 +1,5 @@
 import type { Demand } from '../calculations/maximum-demand';
-import type { Part } from '../document/schema';
+import { byCode, type Part } from '../document/schema';
 import type { Practice } from '../practices/types';
 import type { Graph } from '../terminals/graph';
 import type { Section } from '../terminals/ways';
@@ -43,6 +43,8 @@ export interface Figures {
   ways: ReadonlyMap<string, WayFigures>;
   /** ids of the ways behind a device, itself among them when it is one */
   waysBehind(device: string): readonly string[];
+  /** the first thing, by id, that draws through a device; undefined where nothing does */
+  firstBehind(device: string): Drawn | undefined;
   /** demand of all that passes a device, after diversity */
   demandBehind(device: string): Demand;
   /** demand of the home on mains */
@@ -57,11 +59,21 @@ export interface FiguresInput {
   practice: Practice;
 }
 
-function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, ReadonlySet<string>> {
-  const behind = new Map<string, Set<string>>();
-  for (const { way, lineDevices } of drawn) {
-    if (way === null) continue;
-    for (const device of lineDevices) behind.set(device, (behind.get(device) ?? new Set()).add(way));
+interface Behind {
+  first: Drawn;
+  ways: Set<string>;
+}
+
+/** What draws through each device, by its id. */
+function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, Behind> {
+  const behind = new Map<string, Behind>();
+  for (const each of drawn) {
+    if (each.way === null) continue;
+    for (const device of each.lineDevices) {
+      const entry = behind.get(device) ?? { first: each, ways: new Set<string>() };
+      entry.ways.add(each.way);
+      behind.set(device, entry);
+    }
   }
   return behind;
 }
@@ -76,7 +88,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
   const paths = workOutPaths({ graph, practice, drawn, loads, apart });
   const earthPaths = workOutEarthPaths(graph, earth);
   const behind = indexBehind(drawn);
-  const waysBehind = (device: string) => [...(behind.get(device) ?? [])].sort();
+  const waysBehind = (device: string) => [...(behind.get(device)?.ways ?? [])].sort(byCode);
   const together = (ways: readonly string[]) => demandOf(ways.map((id) => loads.get(id)!), practice);
 
   const external = externalOhm(supply);
@@ -115,7 +127,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
       ibA: known ? demand.demandA : null,
       demandWatts: known ? demand.demandWatts : null,
       connectedWatts: ids.reduce((sum, id) => sum + loads.get(id)!.watts, 0),
-      cables: sectionCables(graph, practice, section, drawn),
+      cables: sectionCables(graph, practice, section, members),
       worstDrop,
       fault: farthest && earthFault(graph, practice, farthest.at, farthest.zs, withinS),
       faultAt: farthest?.at ?? null,
@@ -132,7 +144,8 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
     earth: earthPaths,
     ways,
     waysBehind,
+    firstBehind: (device) => behind.get(device)?.first,
     demandBehind: (device) => together(waysBehind(device)),
-    demand: together([...onMains].sort()),
+    demand: together([...onMains].sort(byCode)),
   };
 }

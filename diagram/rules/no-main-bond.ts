@@ -1,3 +1,4 @@
+import { hasTerminal } from '../document/kinds';
 import type { Cable, Wire } from '../document/schema';
 import { reaches } from '../terminals/reach';
 import { recalled } from './clauses';
@@ -15,12 +16,12 @@ function bonding({ graph, earth, document }: Context, bond: string): Remedy[] {
   if (earth.mainBar === undefined) return [];
   const bar = graph.partOf[earth.mainBar]!;
   const used = document.wires.flatMap(({ from, to }) => [from, to]).filter(([id]) => id === bar.id);
-  const free = 1 + Math.max(0, ...used.map(([, mark]) => Number(mark)));
-  if ('count' in bar && bar.count !== undefined && free > bar.count) return [];
+  const free = String(1 + Math.max(0, ...used.map(([, mark]) => Number(mark))));
+  if (!hasTerminal(bar, free)) return [];
   const id = `${bond}.bonding`;
   if (graph.wires.has(id) || graph.cables.has(id)) return [];
   const cable: Cable = { id, csa: BOND_MM2, cpc: BOND_MM2, material: 'Cu', insulation: 'PVC', method: 'C', length: BOND_M, cores: 1 };
-  const wire: Wire = { id, from: [bar.id, String(free)], to: [bond, 'E'], role: 'earth', cable: id };
+  const wire: Wire = { id, from: [bar.id, free], to: [bond, 'E'], role: 'earth', cable: id };
   return [{ label: `Bond it to ${bar.ref ?? 'the earth bar'} with ${BOND_MM2} mm2`, patch: { set: { cables: [cable], wires: [wire] } } }];
 }
 

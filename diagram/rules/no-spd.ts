@@ -1,7 +1,26 @@
+import { hasTerminal, polesOf } from '../document/kinds';
 import { reaches } from '../terminals/reach';
 import { recalled } from './clauses';
 import { figuresOf, onMains } from './readings/figures';
-import type { Rule } from './types';
+import type { Context } from './context';
+import type { Part, Wire } from '../document/schema';
+import type { Remedy, Rule } from './types';
+
+/** An arrester beside the main switch, where the home's own conductors begin. */
+function arrester({ graph, mainSwitch, earth, document }: Context): Remedy[] {
+  const id = 'surge-arrester';
+  if (!mainSwitch || polesOf(mainSwitch) !== 2 || mainSwitch.kind === 'changeover' || earth.mainBar === undefined || graph.parts.has(id)) return [];
+  const bar = graph.partOf[earth.mainBar]!;
+  const used = document.wires.flatMap(({ from, to }) => [from, to]).filter(([part]) => part === bar.id);
+  const free = String(1 + Math.max(0, ...used.map(([, mark]) => Number(mark))));
+  if (!hasTerminal(bar, free)) return [];
+  const { place, board } = mainSwitch;
+  const part: Part = { id, kind: 'spd', class: 2, ...(place !== undefined && { place }), ...(board !== undefined && { board }) };
+  const wire = (mark: 'L' | 'N' | 'E', role: Wire['role'], from: Wire['from']): Wire => ({ id: `${id}.${mark}`, from, to: [id, mark], role });
+  const wires = [wire('L', 'line', [mainSwitch.id, '2']), wire('N', 'neutral', [mainSwitch.id, '4']), wire('E', 'earth', [bar.id, free])];
+  if (wires.some((each) => graph.wires.has(each.id))) return [];
+  return [{ label: 'Fit a surge arrester behind the main switch', patch: { set: { parts: [part], wires } } }];
+}
 
 /** No surge arrester that the mains line and the earth both reach. */
 export const noSpd: Rule = {
@@ -33,6 +52,7 @@ export const noSpd: Rule = {
       message: 'No arrester is joined to the line of the mains and to the earth. A surge from the street reaches everything that is plugged in.',
       parts: at ? [at.id] : [],
       conditions: onMains(context),
+      remedies: arrester(context),
     };
   },
 };

@@ -11,20 +11,23 @@ import type { Rule } from './types';
 import { capital, say } from './readings/words';
 
 type Overcurrent = PartOf<'fuse' | 'mcb' | 'rcbo'>;
+type Rcd = PartOf<'rcd'>;
 
-/** Overcurrent devices before an rcd on any path, and the first one after it on each. */
-function aroundOf(context: Context, rcd: string): { before: Overcurrent[]; after: Overcurrent[] } {
-  const before = new Set<Overcurrent>();
-  const after = new Set<Overcurrent>();
+/** Overcurrent devices before each rcd on any path, and the first one after it on each. */
+function around(context: Context): Map<Rcd, { before: Set<Overcurrent>; after: Set<Overcurrent> }> {
+  const found = new Map<Rcd, { before: Set<Overcurrent>; after: Set<Overcurrent> }>();
   for (const { lineDevices } of figuresOf(context).drawn) {
-    const at = lineDevices.indexOf(rcd);
-    if (at < 0) continue;
     const parts = lineDevices.map((id) => context.graph.parts.get(id)!);
-    for (const part of parts.slice(0, at)) if (isOvercurrent(part)) before.add(part);
-    const first = parts.slice(at + 1).find(isOvercurrent);
-    if (first) after.add(first);
+    parts.forEach((rcd, at) => {
+      if (rcd.kind !== 'rcd') return;
+      const entry = found.get(rcd) ?? { before: new Set(), after: new Set() };
+      for (const part of parts.slice(0, at)) if (isOvercurrent(part)) entry.before.add(part);
+      const first = parts.slice(at + 1).find(isOvercurrent);
+      if (first) entry.after.add(first);
+      found.set(rcd, entry);
+    });
   }
-  return { before: [...before], after: [...after] };
+  return found;
 }
 
 /** An rcd whose rated current neither a device before it nor the sum of the ways after it limits. */
@@ -43,9 +46,10 @@ export const rcdUnderrated: Rule = {
   *check(context) {
     const { practice } = figuresOf(context);
     const overloaded = new Set(overloadedMains(context).flatMap(({ devices }) => devices.map(({ id }) => id)));
-    for (const rcd of context.parts('rcd')) {
-      if (rcd.kind !== 'rcd' || rcd.rating === undefined || overloaded.has(rcd.id)) continue;
-      const { before, after } = aroundOf(context, rcd.id);
+    for (const [rcd, neighbours] of around(context)) {
+      if (rcd.rating === undefined || overloaded.has(rcd.id)) continue;
+      const before = [...neighbours.before];
+      const after = [...neighbours.after];
       const ratings = [...before, ...after].map(({ rating }) => rating);
       // A device that is not rated leaves the question open: nothing is guessed.
       if (after.length === 0 || ratings.includes(undefined)) continue;

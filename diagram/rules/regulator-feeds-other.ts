@@ -1,6 +1,8 @@
 import type { Graph } from '../terminals/graph';
 import { COMMON_PRACTICE } from './clauses';
-import type { Rule } from './types';
+import type { Context } from './context';
+import type { Wire } from '../document/schema';
+import type { Remedy, Rule } from './types';
 import { capital, say, sayParts } from './readings/words';
 
 /** Ids of the regulators that a line passes. */
@@ -9,6 +11,17 @@ function regulatorsOn(graph: Graph, edges: readonly number[]): string[] {
     const { kind, part } = graph.edges[number]!;
     return kind === 'switch' && graph.parts.get(part!)?.kind === 'regulator' ? [part!] : [];
   });
+}
+
+/** Everything but fans taken from before the regulator: the wires that leave it towards them begin at its other terminal. */
+function before({ graph, document }: Context, id: string): Remedy[] {
+  const onward = document.wires.filter(({ from, to }) => [from, to].some(([part, mark]) => part === id && mark === '2'));
+  const ends = onward.map((wire) => ({ wire, far: wire.from[0] === id ? wire.to : wire.from }));
+  const foreign = ends.filter(({ far }) => graph.parts.get(far[0])?.kind !== 'fan');
+  // A joint behind the regulator may lead to fans as well: what it feeds is for a person to sort out.
+  if (foreign.length === 0 || foreign.some(({ far }) => !['lamp', 'socket', 'appliance'].includes(graph.parts.get(far[0])?.kind ?? ''))) return [];
+  const wires = foreign.map(({ wire, far }): Wire => ({ ...wire, from: [id, '1'], to: far }));
+  return [{ label: 'Take it from before the regulator', patch: { set: { wires } } }];
 }
 
 /** A fan regulator before a socket, lamp or appliance. */
@@ -44,6 +57,7 @@ export const regulatorFeedsOther: Rule = {
         message: `The line of ${names} comes through ${say(context, id)}, which is made for a fan alone. Take it from before the regulator.`,
         parts: [id, ...points],
         conditions: [...conditions],
+        remedies: before(context, id),
       };
     }
   },

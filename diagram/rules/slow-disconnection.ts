@@ -5,6 +5,7 @@ import { recalled, seen } from './clauses';
 import type { Context } from './context';
 import { figuresOf, onMains } from './readings/figures';
 import { lackOf, lackOfCables, lackOfRating, lackOfSupply } from './readings/lacking';
+import { rcboInPlace } from './readings/rcbo-remedy';
 import { changePart } from './readings/remedies';
 import type { Remedy, Rule } from './types';
 import { capital, inOrder, say, sayParts } from './readings/words';
@@ -32,6 +33,8 @@ function quickerCurve({ device, fault }: Slow): Remedy[] {
   const fits = (['C', 'B'] as const).find((curve) => factor[curve] < slower && fault.zsMax !== null && fault.zs <= (fault.zsMax * slower) / factor[curve]);
   return fits ? [changePart(`Fit type ${fits}`, device, { curve: fits })] : [];
 }
+
+const remediesOf = (context: Context, way: Slow): Remedy[] => [...quickerCurve(way), ...rcboInPlace(context, way.device.id)];
 
 /**
  * Zs at the far end against the limit of the device: only on mains. On battery an inverter drives no more than a few times
@@ -70,7 +73,7 @@ export const slowDisconnection: Rule = {
           `${ohms(Math.min(...shared.map(({ fault }) => fault.zsMax!)))} lets these devices open in time. Put the ways behind an rcd.`,
         parts: [...ids, ...(supply ? [supply.id] : [])],
         conditions: onMains(context),
-        remedies: shared.length === 1 ? quickerCurve(shared[0]!) : [],
+        remedies: shared.length === 1 ? remediesOf(context, shared[0]!) : [],
       };
     }
     for (const way of slow.filter((each) => !shared.includes(each))) {
@@ -83,7 +86,7 @@ export const slowDisconnection: Rule = {
           `${told(way)}, and the case stays live.`,
         parts: [device.id, faultAt!.part.id],
         conditions: onMains(context),
-        remedies: quickerCurve(way),
+        remedies: remediesOf(context, way),
       };
     }
   },

@@ -32,6 +32,8 @@ function needs(context: Context): Need[] {
   const { graph } = context;
   const { ways, earth } = figuresOf(context);
   const found = new Map<string, Need>();
+  // By the table only beside a line core: its size is what the table goes by.
+  const shared = new Set(context.document.wires.flatMap(({ role, cable }) => (cable !== undefined && role !== 'earth' ? [cable] : [])));
   for (const { drawn, fault, device } of ways.values()) {
     // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
     if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;
@@ -39,7 +41,7 @@ function needs(context: Context): Need[] {
       for (const number of earth.path(graph.node(part.id, isPoint ? 'E' : 'in.E')) ?? []) {
         const { wire } = graph.edges[number]!;
         const cable = wire?.role === 'earth' && wire.cable !== undefined ? graph.cables.get(wire.cable) : undefined;
-        if (!wire || !cable || (!fault && !sharesLine(context, cable))) continue;
+        if (!wire || !cable || (!fault && !shared.has(cable.id))) continue;
         const asked = fault ? adiabaticMm2(fault.energyA2s, kFactor(cable.material, cable.insulation, true)) : tableMm2(cable.csa);
         const known = found.get(cable.id);
         const need = known ?? { cable, mm2: 0, device: device.id, byTable: !fault, wires: new Set(), points: new Set() };
@@ -52,10 +54,6 @@ function needs(context: Context): Need[] {
   }
   return [...found.values()];
 }
-
-/** A cable with a line core in it: the table goes by that core. */
-const sharesLine = ({ document }: Context, { id }: Cable): boolean =>
-  document.wires.some((wire) => wire.cable === id && (wire.role === 'line' || wire.role === 'switched'));
 
 const sizeOf = ({ csa, cpc }: Cable): number => cpc ?? csa;
 

@@ -26,7 +26,7 @@ const isBreaker = (part: Part): part is Breaker => part.kind === 'mcb' || part.k
 /** Breakers on the mains with the devices before them and the greatest current that a fault just after them may reach, A. */
 function* breakers(context: Context): Iterable<{ device: Breaker; before: Part[]; currentA: number }> {
   const { graph, document, sections } = context;
-  const { paths, practice, drawn } = figuresOf(context);
+  const { paths, practice, firstBehind } = figuresOf(context);
   const { voltage, zln, ze, system } = document.supply;
   if (zln === undefined) return;
   // The loop to earth is the smaller one on some supplies, and a breaker must break that current too.
@@ -34,7 +34,7 @@ function* breakers(context: Context): Iterable<{ device: Breaker; before: Part[]
   for (const { device, upstream } of sections) {
     const ohm = paths.coldOhm(upstream);
     if (!isBreaker(device) || ohm === undefined) continue;
-    const path = drawn.find(({ lineDevices, source }) => source?.kind === 'mains' && lineDevices.includes(device.id))?.lineDevices ?? [];
+    const path = firstBehind(device.id)?.lineDevices ?? [];
     const before = path.slice(0, path.indexOf(device.id)).map((id) => graph.parts.get(id)!);
     yield { device, before, currentA: prospectiveA({ voltage, loopOhm: external + 2 * ohm, factor: practice.cMax.value }) };
   }

@@ -1,5 +1,6 @@
 import { chargerOverload } from '@/diagram/rules/charger-overload';
 import { backupHome } from '@/diagram/document/home';
+import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 const flooded = (charge: number) =>
@@ -26,4 +27,8 @@ testRule(chargerOverload, {
       also: ['overloaded-way'],
     },
   },
+});
+
+testRemedies(chargerOverload, {
+  'a tenth of its Ah': { drawing: backupHome({ charge: 90 }), offers: ['Set the charger to 20 A'] },
 });

@@ -1,5 +1,6 @@
 import { noBackupIsolation } from '@/diagram/rules/no-backup-isolation';
 import { backupHome } from '@/diagram/document/home';
+import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 /** The output breaker and its rcd taken out: the bars hang on the inverter. */
@@ -41,5 +42,17 @@ testRule(noBackupIsolation, {
       findings: [{ parts: ['G1', 'Q4'] }],
       also: ['rcd-idle-on-backup', 'slow-disconnection', 'no-rcd'],
     },
+  },
+});
+
+testRemedies(noBackupIsolation, {
+  'two poles where one cuts the line alone': {
+    drawing: backupHome()
+      .drop('Q5')
+      .set('Q4', { poles: 1 })
+      .cut('G1:out.N', 'Q4:3')
+      .line('Q4:2', 'LB2')
+      .neutral('G1:out.N', 'NB2'),
+    offers: ['Fit a two-pole breaker and lead the neutral through it'],
   },
 });

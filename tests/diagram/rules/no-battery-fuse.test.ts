@@ -1,5 +1,6 @@
 import { noBatteryFuse } from '@/diagram/rules/no-battery-fuse';
 import { backupHome } from '@/diagram/document/home';
+import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 const bare = () => backupHome().drop('F2').wire('dc+', 'G2:+', 'G1:bat.+', 'kd');
@@ -42,4 +43,9 @@ testRule(noBatteryFuse, {
       findings: [{ parts: ['G3'] }],
     },
   },
+});
+
+testRemedies(noBatteryFuse, {
+  // 78.4 A at full output and cutoff, a quarter more is 98 A
+  'a fuse for the full current at its plus': { drawing: bare(), offers: ['Fit a dc fuse of 100 A at its plus'] },
 });

@@ -1,5 +1,6 @@
 import { Home, smallHome } from '@/diagram/document/home';
 import { noSpd } from '@/diagram/rules/no-spd';
+import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 testRule(noSpd, {
@@ -9,4 +10,9 @@ testRule(noSpd, {
     'one whose line is not joined': { drawing: smallHome().cut('LB0', 'F9:L'), findings: [{}], also: ['open-terminal'] },
     'one without earth': { drawing: smallHome().cut('F9:E', 'EB'), findings: [{}], also: ['open-terminal'] },
   },
+});
+
+testRemedies(noSpd, {
+  'an arrester behind the main switch': { drawing: smallHome().drop('F9'), offers: ['Fit a surge arrester behind the main switch'] },
+  'none without an earth to lead it to': { drawing: smallHome().drop('F9').drop('EB'), offers: [] },
 });

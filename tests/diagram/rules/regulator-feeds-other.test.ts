@@ -1,5 +1,6 @@
 import { backupHome, smallHome } from '@/diagram/document/home';
 import { regulatorFeedsOther } from '@/diagram/rules/regulator-feeds-other';
+import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 testRule(regulatorFeedsOther, {
@@ -16,5 +17,12 @@ testRule(regulatorFeedsOther, {
       drawing: backupHome().fan('M2', 'S9', 'R9', 'Q21').cut('JL21', 'X2:L').switched('R9:2', 'X2:L').cut('S2:2', 'E2:L').drop('S2').switched('R9:2', 'E2:L', 'cE2'),
       findings: [{ parts: ['R9', 'E2', 'X2'], conditions: ['mains', 'outage', 'main-off'] }],
     },
+  },
+});
+
+testRemedies(regulatorFeedsOther, {
+  'the outlet from before it': {
+    drawing: smallHome().fan('M1', 'S2', 'R2', 'Q11').cut('JL11', 'X1:L').switched('R2:2', 'X1:L'),
+    offers: ['Take it from before the regulator'],
   },
 });

@@ -19,7 +19,7 @@ const heated = (metres: number, device: object = { rating: 16, curve: 'B' }, opt
     .cable('cE5', 1.5, 0);
 
 /** RA 0.05 ohm is no electrode but a buried grid: only so does a breaker alone clear a fault on TT. */
-const onTt = (ra: number, device: object, rcd: Options['rcd'] = false) =>
+const onTt = (ra: number, device: object, rcd: boolean = false) =>
   heated(1, device, { rcd, supply: { system: 'TT', ra } }).drop('Q0').line('Q1:2', 'LB0').neutral('Q1:4', 'NB0');
 
 testRule(slowDisconnection, {
@@ -61,8 +61,12 @@ testRule(slowDisconnection, {
 });
 
 testRemedies(slowDisconnection, {
-  'type B where C is too slow': { drawing: heated(60, { rating: 16, curve: 'C' }), offers: ['Fit type B'] },
-  'none where B is too slow as well': { drawing: heated(90), offers: [] },
+  'type B where C is too slow': { drawing: heated(60, { rating: 16, curve: 'C' }), offers: ['Fit type B', 'Fit an rcbo of 30 mA, the neutral through it'] },
+  'an rcbo alone where B is too slow as well': { drawing: heated(90), offers: ['Fit an rcbo of 30 mA, the neutral through it'] },
+  'nothing for several ways behind a poor supply': {
+    drawing: heated(1, {}, { rcd: false, supply: { ze: 8 } }).way('Q13', 'study').lamp('E1', 'S1', 'Q13'),
+    offers: [],
+  },
 });
 
 it('names what it waits for', () => {

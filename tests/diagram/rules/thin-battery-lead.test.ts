@@ -1,5 +1,6 @@
 import { thinBatteryLead } from '@/diagram/rules/thin-battery-lead';
 import { backupHome } from '@/diagram/document/home';
+import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 // 700 VA at 10.5 V and 0.85: 78.4 A; the fuse is 100 A; 25 mm2 by method C carries 112 A, 16 mm2 85 A.
@@ -28,4 +29,9 @@ testRule(thinBatteryLead, {
       findings: [{ parts: ['G1'] }],
     },
   },
+});
+
+testRemedies(thinBatteryLead, {
+  'the size that carries current and fuse': { drawing: backupHome().cable('kd', 16, 0.3), offers: ['Fit leads of 25 mm2'] },
+  'the size that loses little enough': { drawing: backupHome().cable('kd', 16, 0.8), offers: ['Fit leads of 25 mm2'] },
 });
