@@ -18,8 +18,3 @@ export async function installPackages(packages, what) {
   const { status, output } = await run('apt-get', ['install', '-y', '-qq', '--no-install-recommends', ...packages], { env });
   if (status !== 0) throw new Stop(`Debian could not install ${packages.join(', ')}: ${lastLine(output)}. Try: ${line}`);
 }
-
-/** Installs a package when none of the programs that it brings is there. */
-export async function needProgram(path, packages, what) {
-  if (!(await exists(path))) await installPackages(packages, what);
-}

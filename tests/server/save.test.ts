@@ -106,6 +106,13 @@ describe('what a patch may hold', () => {
       expect((await Drawing.findOne({ where: { teamId, id: params.drawingId } }))!.rev).toBe(0);
     });
 
+  it('takes no field beside those of a change: not a mark, a state, an owner or a team', async () => {
+    const { browser, params, teamId } = await studio();
+    for (const field of ['mark', 'state', 'ownerId', 'teamId', 'personId', 'rev', 'hash', 'at'])
+      expect([field, (await browser.post(save, params, { ...change(0, place('p1')), [field]: 'x' })).status]).toEqual([field, 400]);
+    expect(await Drawing.findOne({ where: { teamId, id: params.drawingId } })).toMatchObject({ rev: 0, state: 'open' });
+  });
+
   it('refuses a key that would reach the prototype, wherever it stands', async () => {
     const { browser, params } = await studio();
     const raw = JSON.stringify(change(0, { set: { overview: {} } })).replace('"overview":{}', '"overview":{"__proto__":{"x":1,"y":1}}');

@@ -1,0 +1,54 @@
+import { describe, expect, it } from 'vitest';
+import { GET as json } from '@/app/api/drawings/[drawingId]/json/route';
+import { POST as save } from '@/app/api/drawings/[drawingId]/changes/route';
+import { readDocument } from '@/diagram/document/schema';
+import { fileName } from '@/lib/server/drawings/file-answer';
+import { signedIn } from './browser';
+import { change, makeJob, makePerson, place } from './factories';
+
+async function studio(title: string) {
+  const person = await makePerson();
+  const { drawingId } = await makeJob(person, { title });
+  return { params: { drawingId }, browser: await signedIn(person) };
+}
+
+describe('the document as a file', () => {
+  it('is the interchange file: what is read back is what was drawn', async () => {
+    const { browser, params } = await studio('Heron Row 9');
+    await browser.post(save, params, change(0, place('p1', 'Study')));
+    const { body, headers } = await browser.ask(json, { params });
+    const read = readDocument(body);
+    expect(read.ok && read.document.places).toEqual([{ id: 'p1', name: 'Study', kind: 'room' }]);
+    expect(headers.get('content-disposition')).toBe(`attachment; filename="OH-1 Heron Row 9.json"; filename*=UTF-8''OH-1%20Heron%20Row%209.json`);
+  });
+
+  it('keeps its name in any script, and no name breaks out of the header or runs as a page', async () => {
+    const title = 'Reihe "9"\\..//Fähre; filename=evil.html';
+    const { browser, params } = await studio(title);
+    const { headers, status } = await browser.ask(json, { params });
+    expect(status).toBe(200);
+    const disposition = headers.get('content-disposition')!;
+    expect(disposition).toMatch(/^attachment; filename="[^"\\/]+\.json"; filename\*=UTF-8''[\w%.-]+$/);
+    expect(decodeURIComponent(disposition.split("''")[1]!)).toContain('Fähre');
+    expect(headers.get('content-security-policy')).toMatch(/^sandbox; default-src 'none'/);
+    expect(headers.get('x-content-type-options')).toBe('nosniff');
+    expect(headers.get('cache-control')).toBe('no-store');
+  });
+
+  it.each([
+    [{ number: 'OH-1', title: 'a\r\nset-cookie: x', revision: 'B' }, 'OH-1 a set-cookie x, B.json'],
+    [{ number: 'OH-2', title: 'x'.repeat(200), revision: '-' }, `OH-2 ${'x'.repeat(115)}.json`],
+  ])('is named from %o', (block, name) => {
+    expect(fileName(block, 'json')).toBe(name);
+  });
+
+  it('is held back when asked for without end', async () => {
+    const { browser, params } = await studio('Heron Row 9');
+    const answers = [];
+    for (let i = 0; i < 32; i++) answers.push(await browser.ask(json, { params }));
+    expect(answers.filter(({ status }) => status === 200)).toHaveLength(30);
+    const last = answers.at(-1)!;
+    expect(last).toMatchObject({ status: 429, body: { error: 'too-many', wait: expect.any(Number) } });
+    expect(Number(last.headers.get('retry-after'))).toBe(last.body.wait);
+  });
+});
