@@ -1,7 +1,9 @@
 import type { SurveyRoom } from '../document/schema';
 import { practices } from '../practices';
 import { SERVICE_RATINGS } from './drafting/assumptions';
-import { planWays, runOf, wholeRoom } from './drafting/plan';
+import { planWays } from './drafting/plan';
+import { runOf } from './drafting/way-plan';
+import { wholeRoom } from './drafting/wish';
 import { DRAFT_AMBIENT, planHome, type HomeOptions } from './drafting/plan-home';
 import { USUAL_WATTS, type Column } from './columns';
 
@@ -74,7 +76,13 @@ function nameErrors(rooms: readonly SurveyRoom[]): SurveyError[] {
   rooms.forEach((room, i) => {
     const name = room.name.trim();
     if (name === '') {
-      errors.push({ room: room.id, column: 'name', cell: 'name?', heading: `Row ${i + 1} has no name`, message: LEFT_OUT });
+      errors.push({
+        room: room.id,
+        column: 'name',
+        cell: 'name?',
+        heading: `Row ${i + 1} has no name`,
+        message: LEFT_OUT,
+      });
       return;
     }
     if (seen.has(name.toLowerCase())) {
@@ -96,7 +104,11 @@ function nameErrors(rooms: readonly SurveyRoom[]): SurveyError[] {
 
 /** A way that no cable on sale serves within the drop allowed: too far for its load. */
 function reachErrors(room: SurveyRoom, title: string, { practice, supply }: HomeOptions): SurveyError[] {
-  const ways = planWays([wholeRoom(room)], { practice: practices[practice], voltage: supply.voltage, ambientC: DRAFT_AMBIENT });
+  const ways = planWays([wholeRoom(room)], {
+    practice: practices[practice],
+    voltage: supply.voltage,
+    ambientC: DRAFT_AMBIENT,
+  });
   const unserved = ways.find(({ size }) => !size);
   if (!unserved) return [];
   return [
@@ -115,7 +127,11 @@ export function roomErrors(rooms: readonly SurveyRoom[], options: HomeOptions): 
   const names = nameErrors(rooms);
   return rooms.flatMap((room, i) => {
     const title = titled(room, i);
-    const typed = [...names.filter((error) => error.room === room.id), ...keptErrors(room, title), ...wattErrors(room, title)];
+    const typed = [
+      ...names.filter((error) => error.room === room.id),
+      ...keptErrors(room, title),
+      ...wattErrors(room, title),
+    ];
     return typed.length > 0 ? typed : reachErrors(room, title, options);
   });
 }

@@ -38,7 +38,14 @@ export const USUAL_WATTS = { lamp: 9, fan: 55 } as const;
 /** m, from the board to a room, where the survey does not say. Common practice, no source. */
 export const USUAL_RUN = 12;
 
-export const ROOM_KINDS = ['room', 'sleeping', 'wet', 'passage', 'outdoor', 'intake'] as const satisfies readonly SurveyRoom['kind'][];
+export const ROOM_KINDS = [
+  'room',
+  'sleeping',
+  'wet',
+  'passage',
+  'outdoor',
+  'intake',
+] as const satisfies readonly SurveyRoom['kind'][];
 
 /** What people write for a kind; compared in lower case. */
 const KIND_WORDS: Record<SurveyRoom['kind'], readonly string[]> = {
@@ -108,7 +115,12 @@ function readOne(text: string, range: Range, values: (value: number) => Partial<
 }
 
 /** `3x9`, `3 9`, `3 × 9 W`, `3`: a count, and the watts of each where they are said. */
-function readEach(text: string, what: string, maxCount: number, maxWatts: number): { count: number; watts?: number } | string {
+function readEach(
+  text: string,
+  what: string,
+  maxCount: number,
+  maxWatts: number,
+): { count: number; watts?: number } | string {
   if (isNone(text)) return { count: 0 };
   const found = /^(\d+)(?:\s*[x×*]\s*|\s+)?(\d+(?:[.,]\d+)?)?\s*w?$/i.exec(text);
   const separated = found && (found[2] === undefined || /[\sx×*]/i.test(text));
@@ -130,7 +142,10 @@ function readHeavy(text: string): CellReading {
   for (const item of text.split(/[;\n]|,\s+(?=\D)/).map((piece) => piece.trim())) {
     if (item === '') continue;
     const found = /^(.*[a-z].*|[a-z])\s+(\d+(?:[.,]\d+)?)\s*(k?w)?$/i.exec(item);
-    if (!found) return bad(`Say what it is and its watts: ${/^\d/.test(item) ? 'oven' : item.replace(/\s*[\d.,]+.*$/, '') || 'oven'} 3000`);
+    if (!found)
+      return bad(
+        `Say what it is and its watts: ${/^\d/.test(item) ? 'oven' : item.replace(/\s*[\d.,]+.*$/, '') || 'oven'} 3000`,
+      );
     const what = found[1]!.trim();
     const watts = Number(found[2]!.replace(',', '.')) * (found[3]?.toLowerCase() === 'kw' ? 1000 : 1);
     if (what.length > 40) return bad('The name of an appliance has at most 40 letters');
@@ -165,11 +180,15 @@ export function readCell(column: Column, raw: string): CellReading {
       return readKind(text);
     case 'lamps': {
       const each = readEach(text, 'Lamps', 60, 2000);
-      return typeof each === 'string' ? bad(each) : good({ lamps: each.count, ...(each.watts !== undefined && { lampWatts: each.watts }) });
+      return typeof each === 'string'
+        ? bad(each)
+        : good({ lamps: each.count, ...(each.watts !== undefined && { lampWatts: each.watts }) });
     }
     case 'fans': {
       const each = readEach(text, 'Fans', 20, 1000);
-      return typeof each === 'string' ? bad(each) : good({ fans: each.count, ...(each.watts !== undefined && { fanWatts: each.watts }) });
+      return typeof each === 'string'
+        ? bad(each)
+        : good({ fans: each.count, ...(each.watts !== undefined && { fanWatts: each.watts }) });
     }
     case 'outlets':
       return readOne(text, { what: 'Outlets', max: 40, whole: true }, (outlets) => ({ outlets }));
@@ -180,7 +199,9 @@ export function readCell(column: Column, raw: string): CellReading {
     case 'keepFans':
       return readOne(text, { what: 'Fans kept on', max: 20, whole: true }, (keepFans) => ({ keepFans }));
     case 'keepOutletWatts':
-      return readOne(text, { what: 'Watts at the outlet', max: 3000, unit: 'W' }, (keepOutletWatts) => ({ keepOutletWatts }));
+      return readOne(text, { what: 'Watts at the outlet', max: 3000, unit: 'W' }, (keepOutletWatts) => ({
+        keepOutletWatts,
+      }));
     case 'hours':
       return readOne(text, { what: 'Hours', max: 72, unit: 'h' }, (hours) => ({ hours }));
     case 'run': {

@@ -1,11 +1,18 @@
 import { applyPatch, diff, isEmptyPatch, type Patch } from '../document/patch';
-import { emptyDocument, type Installation, type Position, type PracticeId, type Supply, type SurveyRoom } from '../document/schema';
+import {
+  emptyDocument,
+  type Installation,
+  type Position,
+  type PracticeId,
+  type Supply,
+  type SurveyRoom,
+} from '../document/schema';
 import { placeAll } from '../layout/place';
 import { practices } from '../practices';
 import { drawnByPlace, drawnIn } from './drawn';
 import { draftHome } from './drafting/draft-home';
 import { extendHome } from './drafting/extend-home';
-import { wholeRoom, type Wish } from './drafting/plan';
+import { wholeRoom, type Wish } from './drafting/wish';
 import { Sketch } from './drafting/sketch';
 
 export interface DraftOptions {
@@ -30,7 +37,8 @@ function untouched(doc: Installation): (room: SurveyRoom) => Wish {
 /** Positions of parts that are gone from the drawing are dropped. */
 function withoutStrays(doc: Installation): Installation {
   const ids = new Set(doc.parts.map(({ id }) => id));
-  const kept = (positions: Record<string, Position> = {}) => Object.fromEntries(Object.entries(positions).filter(([id]) => ids.has(id)));
+  const kept = (positions: Record<string, Position> = {}) =>
+    Object.fromEntries(Object.entries(positions).filter(([id]) => ids.has(id)));
   return { ...doc, sheet: { overview: kept(doc.sheet?.overview), connections: kept(doc.sheet?.connections) } };
 }
 

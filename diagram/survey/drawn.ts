@@ -14,7 +14,15 @@ export interface Drawn {
   keptOutlets: PartOf<'socket'>[];
 }
 
-const nothing = (): Drawn => ({ lamps: [], fans: [], outlets: [], heavy: [], keptLamps: [], keptFans: [], keptOutlets: [] });
+const nothing = (): Drawn => ({
+  lamps: [],
+  fans: [],
+  outlets: [],
+  heavy: [],
+  keptLamps: [],
+  keptFans: [],
+  keptOutlets: [],
+});
 
 function note(drawn: Drawn, part: Part, kept: boolean): void {
   if (part.kind === 'lamp') {

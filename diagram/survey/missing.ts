@@ -25,11 +25,16 @@ export interface Difference {
 
 const more = (a: number, b: number): number => Math.max(0, a - b);
 const counted = (n: number, what: string): string => `${n} ${what}${n === 1 ? '' : 's'}`;
-const countedAll = (counts: readonly (readonly [number, string])[]): string[] => counts.flatMap(([n, what]) => (n > 0 ? [counted(n, what)] : []));
-const sameName = (a: string | undefined, b: string): boolean => (a ?? '').trim().toLowerCase() === b.trim().toLowerCase();
+const countedAll = (counts: readonly (readonly [number, string])[]): string[] =>
+  counts.flatMap(([n, what]) => (n > 0 ? [counted(n, what)] : []));
+const sameName = (a: string | undefined, b: string): boolean =>
+  (a ?? '').trim().toLowerCase() === b.trim().toLowerCase();
 
 /** Appliances of the survey without one drawn of the same name, and the other way round. */
-function heavyDifference(room: SurveyRoom, drawn: Drawn): { missing: Difference['heavy']; extra: string[]; watts: string[] } {
+function heavyDifference(
+  room: SurveyRoom,
+  drawn: Drawn,
+): { missing: Difference['heavy']; extra: string[]; watts: string[] } {
   const left = [...drawn.heavy];
   const missing: Difference['heavy'] = [];
   const watts: string[] = [];
@@ -65,7 +70,9 @@ export function differenceOf(room: SurveyRoom, drawn: Drawn): Difference {
     [more(drawn.outlets.length, room.outlets), 'outlet'],
     [more(drawn.keptOutlets.length, keptOutlets), 'backup outlet'],
   ];
-  const kept = drawn.keptOutlets.map((part) => part.load).find((load) => load !== undefined && keptOutlets > 0 && load !== room.keepOutletWatts);
+  const kept = drawn.keptOutlets
+    .map((part) => part.load)
+    .find((load) => load !== undefined && keptOutlets > 0 && load !== room.keepOutletWatts);
   return {
     lamps,
     fans,

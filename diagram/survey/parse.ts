@@ -29,13 +29,23 @@ const HEADINGS: Record<Column, readonly string[]> = {
   heavy: ['heavy', 'heavyappliances', 'appliances', 'heavywhatw', 'loads'],
   keepLamps: ['lampskept', 'keeplamps', 'lampsstayon', 'lampson', 'backuplamps', 'lampsbackup'],
   keepFans: ['fanskept', 'keepfans', 'fansstayon', 'fanson', 'backupfans', 'fansbackup'],
-  keepOutletWatts: ['outletkeptw', 'outletkept', 'outletskept', 'keepoutlet', 'keepoutletwatts', 'outletswatts', 'outletsw', 'backupoutlet'],
+  keepOutletWatts: [
+    'outletkeptw',
+    'outletkept',
+    'outletskept',
+    'keepoutlet',
+    'keepoutletwatts',
+    'outletswatts',
+    'outletsw',
+    'backupoutlet',
+  ],
   hours: ['hours', 'hour', 'h', 'hourswanted', 'autonomy'],
   run: ['run', 'runm', 'metres', 'meters', 'length', 'm', 'distance'],
 };
 
 const plain = (text: string): string => text.toLowerCase().replace(/[^a-z]/g, '');
-const columnOf = (heading: string): Column | undefined => COLUMNS.find((column) => HEADINGS[column].includes(plain(heading)));
+const columnOf = (heading: string): Column | undefined =>
+  COLUMNS.find((column) => HEADINGS[column].includes(plain(heading)));
 
 /** Splits delimited text into rows of cells; a quoted cell may hold the delimiter, line ends and doubled quotes. */
 function cellsOf(text: string, delimiter: string): string[][] {
@@ -86,7 +96,14 @@ const unguarded = (text: string): string => (/^'+[=+\-@]/.test(text) ? text.slic
 
 /** A readable id for a room: `front-room`, or `front-room-2` where that is taken. */
 export function roomId(name: string, taken: ReadonlySet<string>): string {
-  const slug = name.toLowerCase().normalize('NFKD').replace(/[^a-z0-9]+/g, '-').replace(/^-|-$/g, '').slice(0, 24).replace(/-$/, '') || 'room';
+  const slug =
+    name
+      .toLowerCase()
+      .normalize('NFKD')
+      .replace(/[^a-z0-9]+/g, '-')
+      .replace(/^-|-$/g, '')
+      .slice(0, 24)
+      .replace(/-$/, '') || 'room';
   for (let n = 1; ; n++) {
     const id = n === 1 ? slug : `${slug}-${n}`;
     if (!taken.has(id)) return id;
@@ -94,7 +111,8 @@ export function roomId(name: string, taken: ReadonlySet<string>): string {
 }
 
 /** The order number that puts a new row last. */
-export const nextOrder = (rooms: readonly SurveyRoom[]): number => rooms.reduce((most, room) => Math.max(most, Math.floor(room.order) + 1), 0);
+export const nextOrder = (rooms: readonly SurveyRoom[]): number =>
+  rooms.reduce((most, room) => Math.max(most, Math.floor(room.order) + 1), 0);
 
 /**
  * Reads pasted rows as rooms: tab, comma or semicolon between cells, cells quoted or not, with a heading in any order of
@@ -115,7 +133,8 @@ export function parseSurvey(pasted: string, present: readonly SurveyRoom[] = [])
 
   heading?.forEach((column, i) => {
     const unknown = column === undefined && rows[0]![i];
-    if (unknown) errors.push({ row: 0, column: null, text: unknown, message: `No column is called ${unknown}: it is left out` });
+    if (unknown)
+      errors.push({ row: 0, column: null, text: unknown, message: `No column is called ${unknown}: it is left out` });
   });
   body.forEach((cells, row) => {
     if (present.length + rooms.length >= MAX_ROOMS) {

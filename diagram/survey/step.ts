@@ -44,7 +44,9 @@ function stepOf(doc: Installation, room: SurveyRoom, drawn: Drawn): Step {
 export function surveySteps(doc: Installation): Step[] {
   const survey = doc.survey ?? [];
   const places = drawnByPlace(doc);
-  const wrong = new Set(roomErrors(survey, { practice: doc.practice, supply: doc.supply, hoursWanted: 0 }).map(({ room }) => room));
+  const wrong = new Set(
+    roomErrors(survey, { practice: doc.practice, supply: doc.supply, hoursWanted: 0 }).map(({ room }) => room),
+  );
   const rows = survey.map((room): Step => {
     if (wrong.has(room.id)) return { room: room.id, name: room.name, state: 'waits', words: 'waits', difference: null };
     return stepOf(doc, room, drawnIn(places, room.id));
@@ -52,12 +54,19 @@ export function surveySteps(doc: Installation): Step[] {
   const known = new Set(survey.map(({ id }) => id));
   const others = doc.places
     .filter(({ id }) => places.has(id) && !known.has(id))
-    .map(({ id, name }): Step => ({ room: id, name, state: 'not-in-survey', words: 'drawn, not in the survey', difference: null }));
+    .map(({ id, name }): Step => ({
+      room: id,
+      name,
+      state: 'not-in-survey',
+      words: 'drawn, not in the survey',
+      difference: null,
+    }));
   return [...rows, ...others];
 }
 
 /** How many rows a draft would change: what the draft button says. */
-export const stepsToDraw = (steps: readonly Step[]): Step[] => steps.filter(({ state }) => state === 'to-draw' || state === 'not-drawn');
+export const stepsToDraw = (steps: readonly Step[]): Step[] =>
+  steps.filter(({ state }) => state === 'to-draw' || state === 'not-drawn');
 
 /** The watts that most of them have; the first of those where several do. */
 function usualWatts(parts: readonly { watts?: number }[], otherwise: number): number {
@@ -73,7 +82,8 @@ function usualWatts(parts: readonly { watts?: number }[], otherwise: number): nu
   return best;
 }
 
-const kindOf = (kind: z.infer<typeof PlaceKindSchema>, sleeping: boolean | undefined): SurveyRoom['kind'] => (kind === 'room' && sleeping ? 'sleeping' : kind);
+const kindOf = (kind: z.infer<typeof PlaceKindSchema>, sleeping: boolean | undefined): SurveyRoom['kind'] =>
+  kind === 'room' && sleeping ? 'sleeping' : kind;
 
 /**
  * Writes what is drawn in a room into its row of the survey; a place without a row gets one. What only the survey knows
@@ -98,10 +108,16 @@ export function takeIntoSurvey(doc: Installation, place: string): Patch {
     fans: Math.min(20, drawn.fans.length),
     fanWatts: Math.min(1000, usualWatts(drawn.fans, row.fanWatts || USUAL_WATTS.fan)),
     outlets: Math.min(40, drawn.outlets.length),
-    heavy: drawn.heavy.slice(0, 8).map(({ label, watts }) => ({ what: (label?.trim() || 'appliance').slice(0, 40), watts: Math.min(20_000, watts || 1) })),
+    heavy: drawn.heavy.slice(0, 8).map(({ label, watts }) => ({
+      what: (label?.trim() || 'appliance').slice(0, 40),
+      watts: Math.min(20_000, watts || 1),
+    })),
     keepLamps: Math.min(60, drawn.keptLamps.length),
     keepFans: Math.min(20, drawn.keptFans.length),
-    keepOutletWatts: Math.min(3000, drawn.keptOutlets.reduce((sum, { load }) => sum + (load ?? 0), 0)),
+    keepOutletWatts: Math.min(
+      3000,
+      drawn.keptOutlets.reduce((sum, { load }) => sum + (load ?? 0), 0),
+    ),
   };
   return { set: { survey: [taken] } };
 }

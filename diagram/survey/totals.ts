@@ -5,7 +5,7 @@ import { backupLoad } from '../calculations/backup-load';
 import type { SurveyRoom } from '../document/schema';
 import { OUTLET_WATTS } from './drafting/assumptions';
 import { backedLoads } from './drafting/backup-size';
-import { isBackup, type WayPlan } from './drafting/plan';
+import { isBackup, type WayPlan } from './drafting/way-plan';
 import { planHome, type HomeOptions } from './drafting/plan-home';
 import { soundRooms } from './check';
 

@@ -45,13 +45,23 @@ export interface BackupSize {
 /** What stays on in an outage, by load. */
 export function backedLoads(rooms: readonly SurveyRoom[]): BackedLoad[] {
   return rooms.flatMap((room) => [
-    ...Array.from({ length: room.keepLamps }, (_, i) => ({ name: `${room.name} lamp ${i + 1}`, watts: room.lampWatts, pf: POWER_FACTOR.lamp })),
-    ...Array.from({ length: room.keepFans }, (_, i) => ({ name: `${room.name} fan ${i + 1}`, watts: room.fanWatts, pf: POWER_FACTOR.fan, surge: START.fan })),
+    ...Array.from({ length: room.keepLamps }, (_, i) => ({
+      name: `${room.name} lamp ${i + 1}`,
+      watts: room.lampWatts,
+      pf: POWER_FACTOR.lamp,
+    })),
+    ...Array.from({ length: room.keepFans }, (_, i) => ({
+      name: `${room.name} fan ${i + 1}`,
+      watts: room.fanWatts,
+      pf: POWER_FACTOR.fan,
+      surge: START.fan,
+    })),
     ...(room.keepOutletWatts > 0 ? [{ name: `${room.name} outlet`, watts: room.keepOutletWatts, pf: 1 }] : []),
   ]);
 }
 
-export const keepsSomething = (room: SurveyRoom): boolean => room.keepLamps > 0 || room.keepFans > 0 || room.keepOutletWatts > 0;
+export const keepsSomething = (room: SurveyRoom): boolean =>
+  room.keepLamps > 0 || room.keepFans > 0 || room.keepOutletWatts > 0;
 
 /** h, the longest wish of the rooms that keep something on, or of the job. */
 export const hoursWanted = (rooms: readonly SurveyRoom[], job: number): number =>
@@ -63,7 +73,14 @@ export function inverterVa(load: BackupLoad): number | null {
 }
 
 function* banks(volts: number): Iterable<BackupSize['batteries']> {
-  const of = (block: number, ah: number) => ({ volts: block, ah, count: volts / block, arrangement: 'series' as const, chemistry: 'vrla' as const, hours: 20 });
+  const of = (block: number, ah: number) => ({
+    volts: block,
+    ah,
+    count: volts / block,
+    arrangement: 'series' as const,
+    chemistry: 'vrla' as const,
+    hours: 20,
+  });
   for (const ah of BLOCK_AH) yield of(12, ah);
   if (volts / 2 <= MOST_CELLS) for (const ah of CELL_AH) yield of(2, ah);
 }
@@ -73,7 +90,12 @@ function* banks(volts: number): Iterable<BackupSize['batteries']> {
  * where none does, and the examination says how short it is.
  * @returns null where the load is more than one inverter on sale carries
  */
-export function sizeBackup(rooms: readonly SurveyRoom[], wanted: number, practice: Practice, ambientC: number): BackupSize | null {
+export function sizeBackup(
+  rooms: readonly SurveyRoom[],
+  wanted: number,
+  practice: Practice,
+  ambientC: number,
+): BackupSize | null {
   const load = backupLoad(backedLoads(rooms));
   const va = inverterVa(load);
   if (va === null) return null;
@@ -91,7 +113,20 @@ export function sizeBackup(rooms: readonly SurveyRoom[], wanted: number, practic
       const charge = Math.round(bank.ah * (usual > va ? CHARGE.least : CHARGE.usual));
       const chargeWatts = chargingWatts({ chargeA: charge, bankVolts, efficiency: EFFICIENCY });
       const hours = autonomyHours({ bank, watts: load.watts, efficiency: EFFICIENCY });
-      const size = { load, va, surge: SURGE * va, efficiency: EFFICIENCY, transfer: TRANSFER, cutoff, charge, chargeWatts, batteries, bankVolts, lead, hours };
+      const size = {
+        load,
+        va,
+        surge: SURGE * va,
+        efficiency: EFFICIENCY,
+        transfer: TRANSFER,
+        cutoff,
+        charge,
+        chargeWatts,
+        batteries,
+        bankVolts,
+        lead,
+        hours,
+      };
       if (hours >= wanted) return size;
       if (!best || hours > best.hours) best = size;
     }

@@ -41,7 +41,11 @@ export function planFeed(sketch: Sketch, size: BackupSize, behindRcd: boolean): 
       voltage: supply.voltage,
       dropLimitPercent: BEFORE_BACKUP.feed,
       leastMm2: 2.5,
-      ...(!behindRcd && supply.ze !== undefined && { zsBeforeOhm: supply.ze, disconnectS: practice.disconnection.distributionTN.value }),
+      ...(!behindRcd &&
+        supply.ze !== undefined && {
+          zsBeforeOhm: supply.ze,
+          disconnectS: practice.disconnection.distributionTN.value,
+        }),
     });
     if (found) return { ratingA, curve, size: found };
   }
@@ -54,10 +58,28 @@ function drawBattery(sketch: Sketch, size: BackupSize, place: string): void {
   sketch.part({ id: HOUSE.battery, kind: 'battery', place, ...batteries });
   sketch.part({ id: HOUSE.batteryFuse, kind: 'fuse', place, rating: lead.fuseA, standard: 'dc' });
   const cable = (id: string, length: number) =>
-    sketch.cable({ id, csa: lead.csaMm2, material: draft.material, insulation: draft.insulation, method: 'C', length, cores: 1 });
+    sketch.cable({
+      id,
+      csa: lead.csaMm2,
+      material: draft.material,
+      insulation: draft.insulation,
+      method: 'C',
+      length,
+      cores: 1,
+    });
   sketch.wire([HOUSE.battery, '+'], [HOUSE.batteryFuse, '1'], 'dc+', cable('battery-lead.fuse', LENGTH.batteryToFuse));
-  sketch.wire([HOUSE.batteryFuse, '2'], [HOUSE.inverter, 'bat.+'], 'dc+', cable('battery-lead.plus', LENGTH.fuseToInverter));
-  sketch.wire([HOUSE.battery, '-'], [HOUSE.inverter, 'bat.-'], 'dc-', cable('battery-lead.minus', LENGTH.batteryToFuse + LENGTH.fuseToInverter));
+  sketch.wire(
+    [HOUSE.batteryFuse, '2'],
+    [HOUSE.inverter, 'bat.+'],
+    'dc+',
+    cable('battery-lead.plus', LENGTH.fuseToInverter),
+  );
+  sketch.wire(
+    [HOUSE.battery, '-'],
+    [HOUSE.inverter, 'bat.-'],
+    'dc-',
+    cable('battery-lead.minus', LENGTH.batteryToFuse + LENGTH.fuseToInverter),
+  );
 }
 
 function drawInverter(sketch: Sketch, size: BackupSize, hours: number, place: string): void {
@@ -99,14 +121,42 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
   const { practice, supply } = sketch;
   const { draft } = practice;
   const place = sketch.place({ id: HOUSE.backupPlace, name: 'Backup source', kind: 'passage', ventilated: true });
-  sketch.part({ id: HOUSE.feed, kind: 'mcb', label: 'Inverter feed', place: intake, board: BOARD, poles: 2, rating: feed.ratingA, curve: feed.curve, icn });
+  sketch.part({
+    id: HOUSE.feed,
+    kind: 'mcb',
+    label: 'Inverter feed',
+    place: intake,
+    board: BOARD,
+    poles: 2,
+    rating: feed.ratingA,
+    curve: feed.curve,
+    icn,
+  });
   drawInverter(sketch, size, need.hours, place);
   drawBattery(sketch, size, place);
   const outputA = ratingFor(size.va / supply.voltage, practice.breakerRatingsA.value);
-  sketch.part({ id: HOUSE.output, kind: 'mcb', label: 'Backup output', place, poles: 2, rating: outputA, curve: 'C', icn });
+  sketch.part({
+    id: HOUSE.output,
+    kind: 'mcb',
+    label: 'Backup output',
+    place,
+    poles: 2,
+    rating: outputA,
+    curve: 'C',
+    icn,
+  });
 
   const run = (id: string, runSize: CoreSize) =>
-    sketch.cable({ id, csa: runSize.csaMm2, cpc: runSize.cpcMm2, material: draft.material, insulation: draft.insulation, method: draft.method, length: LENGTH.boardToInverter, cores: 3 });
+    sketch.cable({
+      id,
+      csa: runSize.csaMm2,
+      cpc: runSize.cpcMm2,
+      material: draft.material,
+      insulation: draft.insulation,
+      method: draft.method,
+      length: LENGTH.boardToInverter,
+      cores: 3,
+    });
   const feedRun = run('inverter-feed.run', feed.size);
   sketch.wire(need.from.line, [HOUSE.feed, '1'], 'line');
   sketch.wire(need.from.neutral, [HOUSE.feed, '3'], 'neutral');
@@ -117,7 +167,16 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
   sketch.wire([HOUSE.inverter, 'out.N'], [HOUSE.output, '3'], 'neutral');
 
   const end: Pair = { line: [HOUSE.output, '2'], neutral: [HOUSE.output, '4'] };
-  const taps = need.groups < 2 ? () => end : drawBars(sketch, end, { line: HOUSE.outputLine, neutral: HOUSE.outputNeutral, place, board: 'Inverter', ratingA: outputA });
+  const taps =
+    need.groups < 2
+      ? () => end
+      : drawBars(sketch, end, {
+          line: HOUSE.outputLine,
+          neutral: HOUSE.outputNeutral,
+          place,
+          board: 'Inverter',
+          ratingA: outputA,
+        });
   const outputSize = outputRun(sketch, size, outputA);
   return Array.from({ length: need.groups }, (_, i) => {
     const cable = run(`${groupIds('backup', i + 1).rcd}.run`, outputSize);
@@ -154,6 +213,9 @@ function outputRun(sketch: Sketch, size: BackupSize, ratingA: number): CoreSize 
     dropLimitPercent: BEFORE_BACKUP.output,
     leastMm2: 2.5,
   });
-  if (!found) throw new RangeError(`no cable on sale carries ${ratingA} A over ${LENGTH.boardToInverter} m within ${BEFORE_BACKUP.output} %`);
+  if (!found)
+    throw new RangeError(
+      `no cable on sale carries ${ratingA} A over ${LENGTH.boardToInverter} m within ${BEFORE_BACKUP.output} %`,
+    );
   return found;
 }

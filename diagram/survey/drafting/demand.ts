@@ -3,15 +3,25 @@ import { maximumDemand, type Demand, type DemandItem } from '../../calculations/
 import type { SurveyRoom } from '../../document/schema';
 import type { DemandGroup, Practice } from '../../practices/types';
 import { OUTLET_WATTS, POWER_FACTOR, startsMotor } from './assumptions';
-import type { WayPlan } from './plan';
+import type { WayPlan } from './way-plan';
 
-const item = (group: DemandGroup, watts: number, voltage: number, pf: number): DemandItem => ({ group, watts, currentA: watts / (voltage * pf) });
+const item = (group: DemandGroup, watts: number, voltage: number, pf: number): DemandItem => ({
+  group,
+  watts,
+  currentA: watts / (voltage * pf),
+});
 
 /**
  * Maximum demand of what the survey holds. The charger of a backup source is counted whole, as a load that runs for hours.
  * @param chargeWatts W drawn by the charger
  */
-export function surveyDemand(rooms: readonly SurveyRoom[], ways: readonly WayPlan[], chargeWatts: number, practice: Practice, voltage: number): Demand {
+export function surveyDemand(
+  rooms: readonly SurveyRoom[],
+  ways: readonly WayPlan[],
+  chargeWatts: number,
+  practice: Practice,
+  voltage: number,
+): Demand {
   const items: DemandItem[] = [];
   for (const room of rooms) {
     const lighting = room.lamps * room.lampWatts + room.fans * room.fanWatts;

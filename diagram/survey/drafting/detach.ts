@@ -33,7 +33,10 @@ function removeControl(sketch: Sketch, id: string): void {
   const onward = sketch.leaving([id, '1']).find(({ cable }) => cable !== undefined);
   if (arriving?.cable !== undefined && onward) {
     // The run to the next room left from here and from nowhere else: its line goes on through a joint.
-    const joint = sketch.part({ id: sketch.freeId(`${id}.l`), kind: 'joint', place: part.place, board: part.board }, null);
+    const joint = sketch.part(
+      { id: sketch.freeId(`${id}.l`), kind: 'joint', place: part.place, board: part.board },
+      null,
+    );
     sketch.moveEnd(arriving.id, sketch.nextOn(joint));
     for (const wire of sketch.leaving([id, '1'])) sketch.moveStart(wire.id, sketch.nextOn(joint));
     sketch.removePart(id);
@@ -56,7 +59,8 @@ function removeRun(sketch: Sketch, line: Wire): void {
     sketch.removePart(joint.id);
   }
   const [from] = line.from;
-  if (sketch.find(from)?.kind === 'mcb' && sketch.wiresAt(line.from).length === 0) sketch.change<'mcb'>(from, { spare: true });
+  if (sketch.find(from)?.kind === 'mcb' && sketch.wiresAt(line.from).length === 0)
+    sketch.change<'mcb'>(from, { spare: true });
 }
 
 /** Takes a load off its way. It is lifted from the sketch until it is drawn again. */

@@ -6,7 +6,8 @@ import { drawWay, type WayBars } from './draw-way';
 import { BACKUP_BOARD, BOARD, drawGroup, drawOrigin, type GroupNeed } from './house';
 import { HOUSE } from './ids';
 import { drawNotices, drawPlaces, roomBoards, roomsWithSwitches } from './places';
-import type { WayPlan, Wish } from './plan';
+import type { WayPlan } from './way-plan';
+import type { Wish } from './wish';
 import { backupWays, intoGroups, mainSensitivityA, mainsWays, planHome, type HomeOptions } from './plan-home';
 import type { Sketch } from './sketch';
 
@@ -30,7 +31,12 @@ const mainsGroup = (n: number, several: boolean, ratingA: number, icn: number, i
   board: BOARD,
 });
 
-function drawWays(sketch: Sketch, groups: readonly WayPlan[][], bars: readonly WayBars[], boards: ReadonlyMap<string, string>): void {
+function drawWays(
+  sketch: Sketch,
+  groups: readonly WayPlan[][],
+  bars: readonly WayBars[],
+  boards: ReadonlyMap<string, string>,
+): void {
   groups.forEach((ways, i) => ways.forEach((way) => drawWay(sketch, way, bars[i]!, boards)));
 }
 
@@ -38,7 +44,12 @@ function drawWays(sketch: Sketch, groups: readonly WayPlan[][], bars: readonly W
  * Draws a home that has no supply yet: origin, board, ways, the backup source and its ways.
  * @param wishFor what of a room is not drawn yet
  */
-export function draftHome(sketch: Sketch, doc: Installation, options: HomeOptions, wishFor?: (room: Wish['room']) => Wish): void {
+export function draftHome(
+  sketch: Sketch,
+  doc: Installation,
+  options: HomeOptions,
+  wishFor?: (room: Wish['room']) => Wish,
+): void {
   const { practice, supply } = sketch;
   const rooms = soundRooms(doc.survey ?? [], options);
   const plan = planHome(rooms, options, wishFor);
@@ -58,7 +69,9 @@ export function draftHome(sketch: Sketch, doc: Installation, options: HomeOption
     mainSensitivityA: mainRcd ? mainSensitivityA(supply, practice.touchVolts.value) : null,
   });
   const boards = roomBoards(sketch, roomsWithSwitches(plan.ways));
-  const bars = mains.map((_, i) => drawGroup(sketch, taps(), mainsGroup(i + 1, mains.length > 1, plan.serviceA, icn, intake)));
+  const bars = mains.map((_, i) =>
+    drawGroup(sketch, taps(), mainsGroup(i + 1, mains.length > 1, plan.serviceA, icn, intake)),
+  );
   drawWays(sketch, mains, bars, boards);
   if (!plan.backup) return;
   const source = {

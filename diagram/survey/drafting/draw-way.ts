@@ -1,7 +1,8 @@
 import type { End, SurveyRoom } from '../../document/schema';
 import { LENGTH, OUTLET_WATTS, POWER_FACTOR, START, TWO_POLE_RATINGS, ratingFor, startsMotor } from './assumptions';
 import { breakerId, dryPlaceId, roomKey, wayKey } from './ids';
-import { isBackup, outletPattern, runOf, type WayPlan } from './plan';
+import { outletPattern } from './plan';
+import { isBackup, runOf, type WayPlan } from './way-plan';
 import { RoomBox, cableOf, type Taps } from './room-box';
 import type { RunSize } from './size-run';
 import type { Sketch } from './sketch';
@@ -47,7 +48,9 @@ function drawLamps(sketch: Sketch, way: WayPlan, from: Taps, boards: ReadonlyMap
   way.segments.forEach((segment, i) => {
     const { room } = segment;
     const key = wayKey(way);
-    const run = cableOf(sketch, `${roomKey(room)}.${key}.run`, size, i === 0 ? runOf(room) : LENGTH.roomToRoom, { fromBoard: i === 0 });
+    const run = cableOf(sketch, `${roomKey(room)}.${key}.run`, size, i === 0 ? runOf(room) : LENGTH.roomToRoom, {
+      fromBoard: i === 0,
+    });
     const box = RoomBox.enter(sketch, room, boards.get(room.id)!, i === 0 ? key : `${key}.on`, size, taps, run);
     box.fill(segment, isBackup(way));
     if (i + 1 < way.segments.length) taps = box.onward();
@@ -77,7 +80,15 @@ export function drawOutlet(sketch: Sketch, room: SurveyRoom, need: OutletNeed): 
   const { id, watts, from } = need;
   const pattern = outletPattern(sketch.practice, watts, sketch.supply.voltage);
   sketch.part(
-    { id, kind: 'socket', place: outletPlace(sketch, room), ...(need.box && { board: need.box }), rating: pattern.ratingA, pattern: pattern.id, load: watts },
+    {
+      id,
+      kind: 'socket',
+      place: outletPlace(sketch, room),
+      ...(need.box && { board: need.box }),
+      rating: pattern.ratingA,
+      pattern: pattern.id,
+      load: watts,
+    },
     sketch.nextRef('X', sketch.outletsFrom),
   );
   const cable = cableOf(sketch, `${id}.cable`, need.size, need.length, { fromBoard: need.fromBoard });
@@ -131,7 +142,13 @@ function drawHeavy(sketch: Sketch, way: WayPlan, from: Taps): void {
   const id = `${roomKey(room)}.heavy${number}`;
   const motor = startsMotor(what);
   const place = room.id;
-  const control = sketch.part({ id: `${id}.switch`, kind: 'switch-2pole', label: what, place, rating: ratingFor(way.ratingA, TWO_POLE_RATINGS) });
+  const control = sketch.part({
+    id: `${id}.switch`,
+    kind: 'switch-2pole',
+    label: what,
+    place,
+    rating: ratingFor(way.ratingA, TWO_POLE_RATINGS),
+  });
   const joint = sketch.part({ id: `${id}.e`, kind: 'joint', place }, null);
   sketch.part({
     id,

@@ -13,7 +13,9 @@ import { canTapBeside, findGroups, roomiest, tapBeside, type Group } from './gro
 import { BACKUP_BOARD, BOARD, drawGroup } from './house';
 import { HOUSE, breakerId, groupIds, roomKey } from './ids';
 import { drawNotices, drawPlaces, roomBoards, roomsWithSwitches } from './places';
-import { isBackup, planWays, type WayPlan, type WaySupply, type Wish } from './plan';
+import { planWays } from './plan';
+import { isBackup, type WayPlan, type WaySupply } from './way-plan';
+import type { Wish } from './wish';
 import { DRAFT_AMBIENT, type HomeOptions } from './plan-home';
 import { openBox, openRow } from './room-taps';
 import type { Sketch } from './sketch';
@@ -34,7 +36,13 @@ const numberOf = (part: Part, room: SurveyRoom, what: string): number | undefine
 };
 
 /** Lamps or fans that change sides: taken off their way, to be drawn anew as they are. Those drawn by hand stay. */
-function moveSides(sketch: Sketch, room: SurveyRoom, what: 'lamp' | 'fan', parts: readonly Part[], count: number): number[] {
+function moveSides(
+  sketch: Sketch,
+  room: SurveyRoom,
+  what: 'lamp' | 'fan',
+  parts: readonly Part[],
+  count: number,
+): number[] {
   const drafted = parts.filter((part) => numberOf(part, room, what) !== undefined).slice(0, count);
   for (const part of drafted) detach(sketch, part.id);
   return drafted.map((part) => numberOf(part, room, what)!);
@@ -42,13 +50,16 @@ function moveSides(sketch: Sketch, room: SurveyRoom, what: 'lamp' | 'fan', parts
 
 /** What of a room is still to be drawn; lamps and fans that change sides are taken off their ways for it. */
 function wishFrom(sketch: Sketch, room: SurveyRoom, drawn: Drawn, difference: Difference): Wish {
-  const onMains = <T extends Part>(all: readonly T[], kept: readonly T[]) => all.filter((part) => !kept.includes(part)).reverse();
+  const onMains = <T extends Part>(all: readonly T[], kept: readonly T[]) =>
+    all.filter((part) => !kept.includes(part)).reverse();
   const lampsOut = moveSides(sketch, room, 'lamp', onMains(drawn.lamps, drawn.keptLamps), difference.lampsToBackup);
   const lampsBack = moveSides(sketch, room, 'lamp', [...drawn.keptLamps].reverse(), difference.lampsToMains);
   const fansOut = moveSides(sketch, room, 'fan', onMains(drawn.fans, drawn.keptFans), difference.fansToBackup);
   const fansBack = moveSides(sketch, room, 'fan', [...drawn.keptFans].reverse(), difference.fansToMains);
   const fresh = (what: string, count: number, taken: readonly number[] = []) =>
-    freeNumbers(sketch, room, what, count + taken.length).filter((n) => !taken.includes(n)).slice(0, count);
+    freeNumbers(sketch, room, what, count + taken.length)
+      .filter((n) => !taken.includes(n))
+      .slice(0, count);
   const lamps = fresh('lamp', difference.lamps, [...lampsOut, ...lampsBack]);
   const fans = fresh('fan', difference.fans, [...fansOut, ...fansBack]);
   const heavy = fresh('heavy', difference.heavy.length);
@@ -80,7 +91,14 @@ function hangOn(sketch: Sketch, doc: Installation, ways: readonly Way[], wish: W
   const outlets: number[] = [];
   for (const number of wish.outlets) {
     const row = openRow(sketch, doc, ways, outletPlace(sketch, room), room, supply);
-    if (row) drawOutlet(sketch, room, { id: `${roomKey(room)}.outlet${number}`, watts: OUTLET_WATTS, ...row, length: LENGTH.outletToOutlet, fromBoard: false });
+    if (row)
+      drawOutlet(sketch, room, {
+        id: `${roomKey(room)}.outlet${number}`,
+        watts: OUTLET_WATTS,
+        ...row,
+        length: LENGTH.outletToOutlet,
+        fromBoard: false,
+      });
     else outlets.push(number);
   }
   return { ...left, outlets };
@@ -118,12 +136,27 @@ const groupOf = (sketch: Sketch, bars: WayBars, side: 'mains' | 'backup', n: num
 });
 
 /** The backup source of a home that has none yet. @returns its groups of ways */
-function firstBackup(sketch: Sketch, size: BackupSize, beside: Group, ways: number, intake: string, hours: number): Group[] {
+function firstBackup(
+  sketch: Sketch,
+  size: BackupSize,
+  beside: Group,
+  ways: number,
+  intake: string,
+  hours: number,
+): Group[] {
   const from = tapBeside(sketch, beside)!;
   const behindRcd = sketch.supply.system === 'TT' || sketch.find(HOUSE.mainRcd) !== undefined;
   const feed = planFeed(sketch, size, behindRcd) ?? planFeed(sketch, size, true)!;
   const icn = breakingCapacity(sketch.supply, sketch.practice);
-  const drawn = drawBackupSource(sketch, { size, feed, from, intake, hours, groups: Math.ceil(ways / WAYS_PER_RCD), icn });
+  const drawn = drawBackupSource(sketch, {
+    size,
+    feed,
+    from,
+    intake,
+    hours,
+    groups: Math.ceil(ways / WAYS_PER_RCD),
+    icn,
+  });
   return drawn.map((bars, i) => groupOf(sketch, bars, 'backup', i + 1));
 }
 
@@ -150,7 +183,16 @@ const isToDraw = (difference: Difference): boolean =>
 function drawable(difference: Difference, canKeep: boolean): Difference {
   if (canKeep) return difference;
   const { lamps, fans, keptLamps, keptFans } = difference;
-  return { ...difference, lamps: lamps - keptLamps, fans: fans - keptFans, keptLamps: 0, keptFans: 0, keptOutlet: false, lampsToBackup: 0, fansToBackup: 0 };
+  return {
+    ...difference,
+    lamps: lamps - keptLamps,
+    fans: fans - keptFans,
+    keptLamps: 0,
+    keptFans: 0,
+    keptOutlet: false,
+    lampsToBackup: 0,
+    fansToBackup: 0,
+  };
 }
 
 /**
@@ -184,9 +226,16 @@ export function extendHome(sketch: Sketch, doc: Installation, options: HomeOptio
   const planned = planWays(left, waySupply, (way) => sketch.find(breakerId(way)) !== undefined);
   const kept = planned.filter(isBackup);
   const boards = roomBoards(sketch, roomsWithSwitches(planned));
-  drawAt(sketch, planned.filter((way) => !isBackup(way)), mains, boards);
+  drawAt(
+    sketch,
+    planned.filter((way) => !isBackup(way)),
+    mains,
+    boards,
+  );
   if (kept.length > 0) {
-    const backup = size ? firstBackup(sketch, size, mains[0]!, kept.length, intake, hours) : groups.filter((group) => group.backup);
+    const backup = size
+      ? firstBackup(sketch, size, mains[0]!, kept.length, intake, hours)
+      : groups.filter((group) => group.backup);
     drawAt(sketch, kept, backup, boards);
   }
   const source = inverter ?? sketch.find(HOUSE.inverter);

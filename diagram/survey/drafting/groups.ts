@@ -67,13 +67,17 @@ export function tapBeside(sketch: Sketch, { rcd }: Group): Pair | undefined {
   if (!feeders) return undefined;
   const { line, neutral, bars } = feeders;
   if (bars) return { line: sketch.nextOn(line.from[0]), neutral: sketch.nextOn(neutral.from[0]) };
-  const taps = drawBars(sketch, { line: line.from, neutral: neutral.from }, {
-    line: HOUSE.lineBar,
-    neutral: HOUSE.neutralBar,
-    place: rcd.place!,
-    board: rcd.board ?? BOARD,
-    ratingA: rcd.rating ?? RCD_RATINGS[RCD_RATINGS.length - 1]!,
-  });
+  const taps = drawBars(
+    sketch,
+    { line: line.from, neutral: neutral.from },
+    {
+      line: HOUSE.lineBar,
+      neutral: HOUSE.neutralBar,
+      place: rcd.place!,
+      board: rcd.board ?? BOARD,
+      ratingA: rcd.rating ?? RCD_RATINGS[RCD_RATINGS.length - 1]!,
+    },
+  );
   const moved = taps();
   sketch.moveStart(line.id, moved.line);
   sketch.moveStart(neutral.id, moved.neutral);

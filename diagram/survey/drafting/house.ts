@@ -31,7 +31,15 @@ export function drawOrigin(sketch: Sketch, need: OriginNeed): () => Pair {
   sketch.part({ id: HOUSE.supply, kind: 'supply', place }, null);
   sketch.part({ id: HOUSE.serviceFuse, kind: 'fuse', place, rating: ratingA, standard: 'gG' });
   sketch.part({ id: HOUSE.meter, kind: 'meter', place, rating: ratingA });
-  sketch.part({ id: HOUSE.mainSwitch, kind: 'isolator', label: 'Main switch', ...here, poles: 2, rating: ratingA, state: 'closed' });
+  sketch.part({
+    id: HOUSE.mainSwitch,
+    kind: 'isolator',
+    label: 'Main switch',
+    ...here,
+    poles: 2,
+    rating: ratingA,
+    state: 'closed',
+  });
   sketch.part({ id: HOUSE.earthBar, kind: 'earth-bar', ...here }, sketch.nextRef('X'));
   sketch.wire([HOUSE.supply, 'L'], [HOUSE.serviceFuse, '1'], 'line');
   sketch.wire([HOUSE.serviceFuse, '2'], [HOUSE.meter, '1'], 'line');
@@ -48,7 +56,16 @@ export function drawOrigin(sketch: Sketch, need: OriginNeed): () => Pair {
   if (need.mainSensitivityA !== null) {
     const delay = need.mainSensitivityA >= 0.1 ? 'S' : 'none';
     const rating = ratingFor(ratingA, RCD_RATINGS);
-    sketch.part({ id: HOUSE.mainRcd, kind: 'rcd', label: 'Main rcd', ...here, rating, sensitivity: need.mainSensitivityA, type: sketch.practice.draft.rcdType, delay });
+    sketch.part({
+      id: HOUSE.mainRcd,
+      kind: 'rcd',
+      label: 'Main rcd',
+      ...here,
+      rating,
+      sensitivity: need.mainSensitivityA,
+      type: sketch.practice.draft.rcdType,
+      delay,
+    });
     sketch.wire(end.line, [HOUSE.mainRcd, '1'], 'line');
     sketch.wire(end.neutral, [HOUSE.mainRcd, '3'], 'neutral');
     end = { line: [HOUSE.mainRcd, '2'], neutral: [HOUSE.mainRcd, '4'] };
@@ -61,7 +78,16 @@ export function drawOrigin(sketch: Sketch, need: OriginNeed): () => Pair {
 function drawBond(sketch: Sketch, place: string): void {
   sketch.part({ id: HOUSE.bond, kind: 'bond', place, to: 'water' }, null);
   const { material, insulation } = sketch.practice.draft;
-  const cable = sketch.cable({ id: `${HOUSE.bond}.cable`, csa: 10, cpc: 10, material, insulation, method: 'C', length: LENGTH.mainBond, cores: 1 });
+  const cable = sketch.cable({
+    id: `${HOUSE.bond}.cable`,
+    csa: 10,
+    cpc: 10,
+    material,
+    insulation,
+    method: 'C',
+    length: LENGTH.mainBond,
+    cores: 1,
+  });
   sketch.wire(sketch.nextOn(HOUSE.earthBar), [HOUSE.bond, 'E'], 'earth', cable);
 }
 
@@ -114,13 +140,36 @@ export function drawGroup(sketch: Sketch, from: Pair, need: GroupNeed): WayBars 
   const ids = groupIds(need.side, need.n);
   const rating = ratingFor(need.ratingA, RCD_RATINGS);
   const place = { place: need.rcdPlace, board: need.rcdBoard };
-  sketch.part({ id: ids.rcd, kind: 'rcd', label: need.label, ...place, rating, sensitivity: 0.03, type: sketch.practice.draft.rcdType, delay: 'none' });
+  sketch.part({
+    id: ids.rcd,
+    kind: 'rcd',
+    label: need.label,
+    ...place,
+    rating,
+    sensitivity: 0.03,
+    type: sketch.practice.draft.rcdType,
+    delay: 'none',
+  });
   sketch.wire(from.line, [ids.rcd, '1'], 'line');
   sketch.wire(from.neutral, [ids.rcd, '3'], 'neutral');
   drawBars(
     sketch,
     { line: [ids.rcd, '2'], neutral: [ids.rcd, '4'] },
-    { line: ids.lineBar, neutral: ids.neutralBar, place: need.place, board: need.board, ratingA: rating, cable: need.cable },
+    {
+      line: ids.lineBar,
+      neutral: ids.neutralBar,
+      place: need.place,
+      board: need.board,
+      ratingA: rating,
+      cable: need.cable,
+    },
   );
-  return { lineBar: ids.lineBar, neutralBar: ids.neutralBar, earthBar: HOUSE.earthBar, place: need.place, board: need.board, icn: need.icn };
+  return {
+    lineBar: ids.lineBar,
+    neutralBar: ids.neutralBar,
+    earthBar: HOUSE.earthBar,
+    place: need.place,
+    board: need.board,
+    icn: need.icn,
+  };
 }

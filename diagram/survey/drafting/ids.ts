@@ -1,5 +1,5 @@
 import type { SurveyRoom } from '../../document/schema';
-import { isBackup, type WayPlan } from './plan';
+import { isBackup, type WayPlan } from './way-plan';
 
 /** Ids of drafted things: readable, and the same whenever the same room is drafted. */
 
@@ -13,13 +13,15 @@ function shortHash(text: string): string {
 }
 
 /** What the ids of everything in a room begin with. */
-export const roomKey = ({ id }: Pick<SurveyRoom, 'id'>): string => (id.length <= LONGEST ? id : `${id.slice(0, 24)}-${shortHash(id)}`);
+export const roomKey = ({ id }: Pick<SurveyRoom, 'id'>): string =>
+  id.length <= LONGEST ? id : `${id.slice(0, 24)}-${shortHash(id)}`;
 
 /** The place in which the outlets of a wet room stand: beyond its zones. */
 export const dryPlaceId = (room: Pick<SurveyRoom, 'id'>): string => `${roomKey(room)}.dry`;
 
 export const wayKey = (way: Pick<WayPlan, 'kind' | 'number'>): string => `${way.kind}${way.number}`;
-export const breakerId = (way: Pick<WayPlan, 'kind' | 'number' | 'segments'>): string => `${roomKey(way.segments[0]!.room)}.way-${wayKey(way)}`;
+export const breakerId = (way: Pick<WayPlan, 'kind' | 'number' | 'segments'>): string =>
+  `${roomKey(way.segments[0]!.room)}.way-${wayKey(way)}`;
 
 /** Ids of the parts of the house that belong to no room. */
 export const HOUSE = {

@@ -1,6 +1,6 @@
 import type { Place, SurveyRoom } from '../../document/schema';
 import { HOUSE } from './ids';
-import type { WayPlan } from './plan';
+import type { WayPlan } from './way-plan';
 import type { Sketch } from './sketch';
 
 const placeOf = ({ id, name, kind }: SurveyRoom): Place => ({
@@ -22,7 +22,8 @@ export function drawPlaces(sketch: Sketch, rooms: readonly SurveyRoom[]): string
 export function roomBoards(sketch: Sketch, rooms: readonly SurveyRoom[]): Map<string, string> {
   const boards = new Map<string, string>();
   for (const part of sketch.allParts())
-    if (part.kind === 'switch' && part.place !== undefined && part.board !== undefined && !boards.has(part.place)) boards.set(part.place, part.board);
+    if (part.kind === 'switch' && part.place !== undefined && part.board !== undefined && !boards.has(part.place))
+      boards.set(part.place, part.board);
   for (const { id } of rooms) if (!boards.has(id)) boards.set(id, sketch.nextRef('X', BOARDS_FROM));
   const last = Math.max(BOARDS_FROM, ...[...boards.values()].map((board) => Number(/^X(\d+)$/.exec(board)?.[1] ?? 0)));
   sketch.outletsFrom = Math.max(sketch.outletsFrom, 10 * Math.ceil(last / 10) + 1);
@@ -31,7 +32,9 @@ export function roomBoards(sketch: Sketch, rooms: readonly SurveyRoom[]): Map<st
 
 /** The rooms that ways bring switches to, in the order of the table. */
 export function roomsWithSwitches(ways: readonly WayPlan[]): SurveyRoom[] {
-  const rooms = ways.filter(({ kind }) => kind === 'lamps' || kind === 'backup').flatMap(({ segments }) => segments.map(({ room }) => room));
+  const rooms = ways
+    .filter(({ kind }) => kind === 'lamps' || kind === 'backup')
+    .flatMap(({ segments }) => segments.map(({ room }) => room));
   return [...new Map(rooms.map((room) => [room.id, room])).values()].sort((a, b) => a.order - b.order);
 }
 
@@ -50,5 +53,6 @@ export function drawNotices(sketch: Sketch, intake: string, boards: readonly str
     found.sides.add(part.id.includes('.backup'));
     sides.set(key, found);
   }
-  for (const { place, board, sides: both } of sides.values()) if (both.size === 2) sketch.notice({ place, board, text });
+  for (const { place, board, sides: both } of sides.values())
+    if (both.size === 2) sketch.notice({ place, board, text });
 }

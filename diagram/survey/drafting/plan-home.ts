@@ -5,7 +5,9 @@ import { practices } from '../../practices';
 import { SERVICE_RATINGS, WAYS_PER_RCD, ratingFor } from './assumptions';
 import { hoursWanted, keepsSomething, sizeBackup, type BackupSize } from './backup-size';
 import { surveyDemand } from './demand';
-import { isBackup, planWays, wholeRoom, type WayPlan, type Wish } from './plan';
+import { planWays } from './plan';
+import { isBackup, type WayPlan } from './way-plan';
+import { wholeRoom, type Wish } from './wish';
 
 export interface HomeOptions {
   practice: PracticeId;
@@ -35,7 +37,11 @@ const onMains = (room: SurveyRoom): SurveyRoom => ({ ...room, keepLamps: 0, keep
  * Everything a draft of these rooms decides before it draws. The rooms have no errors.
  * @param wishFor what of a room is to be drawn; all of it where not given
  */
-export function planHome(rooms: readonly SurveyRoom[], { practice: id, supply, hoursWanted: job }: HomeOptions, wishFor: (room: SurveyRoom) => Wish = wholeRoom): HomePlan {
+export function planHome(
+  rooms: readonly SurveyRoom[],
+  { practice: id, supply, hoursWanted: job }: HomeOptions,
+  wishFor: (room: SurveyRoom) => Wish = wholeRoom,
+): HomePlan {
   const practice = practices[id];
   const hours = hoursWanted(rooms, job);
   const wanted = rooms.some(keepsSomething);
@@ -50,7 +56,9 @@ export function planHome(rooms: readonly SurveyRoom[], { practice: id, supply, h
 /** Ways shared out evenly, in order, among as few rcds as their standing leakage allows. */
 export function intoGroups(ways: readonly WayPlan[]): WayPlan[][] {
   const count = Math.ceil(ways.length / WAYS_PER_RCD);
-  return Array.from({ length: count }, (_, i) => ways.slice(Math.floor((i * ways.length) / count), Math.floor(((i + 1) * ways.length) / count)));
+  return Array.from({ length: count }, (_, i) =>
+    ways.slice(Math.floor((i * ways.length) / count), Math.floor(((i + 1) * ways.length) / count)),
+  );
 }
 
 export const mainsWays = ({ ways }: HomePlan): WayPlan[] => ways.filter((way) => !isBackup(way));
@@ -63,5 +71,7 @@ const MAIN_SENSITIVITIES = [0.3, 0.1, 0.03] as const;
 export function mainSensitivityA({ ra }: Supply, touchVolts: number): number {
   if (ra === undefined) return MAIN_SENSITIVITIES[0];
   const most = maximumSensitivityA(ra, touchVolts);
-  return MAIN_SENSITIVITIES.find((sensitivity) => sensitivity <= most) ?? MAIN_SENSITIVITIES[MAIN_SENSITIVITIES.length - 1]!;
+  return (
+    MAIN_SENSITIVITIES.find((sensitivity) => sensitivity <= most) ?? MAIN_SENSITIVITIES[MAIN_SENSITIVITIES.length - 1]!
+  );
 }

@@ -1,7 +1,7 @@
 import type { End, SurveyRoom } from '../../document/schema';
 import { LENGTH, POWER_FACTOR, REGULATOR_RATINGS, START, SWITCH_RATINGS, ratingFor } from './assumptions';
 import { roomKey } from './ids';
-import type { Segment } from './plan';
+import type { Segment } from './way-plan';
 import type { RunSize } from './size-run';
 import type { Sketch } from './sketch';
 
@@ -17,11 +17,19 @@ export const MOST_SWITCHES = 4;
 /** Lamps by switch: each its own while there are few, else pairs and more in rows. */
 export function byRow(lamps: readonly number[], pairs: boolean): number[][] {
   const rows = Math.min(MOST_SWITCHES, pairs ? Math.ceil(lamps.length / 2) : lamps.length);
-  return Array.from({ length: rows }, (_, row) => lamps.slice(Math.floor((row * lamps.length) / rows), Math.floor(((row + 1) * lamps.length) / rows)));
+  return Array.from({ length: rows }, (_, row) =>
+    lamps.slice(Math.floor((row * lamps.length) / rows), Math.floor(((row + 1) * lamps.length) / rows)),
+  );
 }
 
 /** Draws cables of a way in its size; runs from the board are grouped with those that leave it together. */
-export function cableOf(sketch: Sketch, id: string, size: RunSize, length: number, options: { cores?: number; fromBoard?: boolean } = {}): string {
+export function cableOf(
+  sketch: Sketch,
+  id: string,
+  size: RunSize,
+  length: number,
+  options: { cores?: number; fromBoard?: boolean } = {},
+): string {
   const { draft } = sketch.practice;
   return sketch.cable({
     id: sketch.freeId(id),
@@ -58,8 +66,17 @@ export class RoomBox {
   }
 
   /** Brings a run into the room's switchboard. @param way what the joints are called after: `lamps1` */
-  static enter(sketch: Sketch, room: SurveyRoom, board: string, way: string, size: RunSize, from: Taps, run: string): RoomBox {
-    const joint = (what: string) => sketch.part({ id: sketch.freeId(`${roomKey(room)}.${way}.${what}`), kind: 'joint', place: room.id, board }, null);
+  static enter(
+    sketch: Sketch,
+    room: SurveyRoom,
+    board: string,
+    way: string,
+    size: RunSize,
+    from: Taps,
+    run: string,
+  ): RoomBox {
+    const joint = (what: string) =>
+      sketch.part({ id: sketch.freeId(`${roomKey(room)}.${way}.${what}`), kind: 'joint', place: room.id, board }, null);
     const neutral = joint('n');
     const earth = joint('e');
     sketch.wire(from.neutral, sketch.nextOn(neutral), 'neutral', run);
@@ -68,7 +85,14 @@ export class RoomBox {
   }
 
   /** The box of a way that is drawn already, to hang more on it. @param line a terminal on the way's unswitched line */
-  static reopen(sketch: Sketch, room: SurveyRoom, board: string, size: RunSize, line: End, joints: { neutral: string; earth: string }): RoomBox {
+  static reopen(
+    sketch: Sketch,
+    room: SurveyRoom,
+    board: string,
+    size: RunSize,
+    line: End,
+    joints: { neutral: string; earth: string },
+  ): RoomBox {
     return new RoomBox(sketch, room, board, size, line, joints.neutral, joints.earth, undefined);
   }
 
@@ -111,7 +135,16 @@ export class RoomBox {
       rating: ratingFor(this.amps(room.fanWatts), REGULATOR_RATINGS),
     });
     sketch.wire([control, '2'], [regulator, '1'], 'switched');
-    sketch.part({ id, kind: 'fan', place: room.id, watts: room.fanWatts, pf: POWER_FACTOR.fan, surge: START.fan, class: 1, fixed: true });
+    sketch.part({
+      id,
+      kind: 'fan',
+      place: room.id,
+      watts: room.fanWatts,
+      pf: POWER_FACTOR.fan,
+      surge: START.fan,
+      class: 1,
+      fixed: true,
+    });
     const cable = cableOf(sketch, `${id}.cable`, this.size, LENGTH.boxToPoint);
     sketch.wire([regulator, '2'], [id, 'L'], 'switched', cable);
     sketch.wire(sketch.nextOn(this.neutral), [id, 'N'], 'neutral', cable);
@@ -143,7 +176,8 @@ export class RoomBox {
       board: this.board,
       rating: ratingFor(this.amps(watts), SWITCH_RATINGS, sketch.practice.draft.switchA),
     });
-    if (this.run === undefined) for (const leaving of sketch.leaving(this.line)) sketch.moveStart(leaving.id, [id, '1']);
+    if (this.run === undefined)
+      for (const leaving of sketch.leaving(this.line)) sketch.moveStart(leaving.id, [id, '1']);
     sketch.wire(this.line, [id, '1'], 'line', this.run);
     this.line = [id, '1'];
     this.run = undefined;

@@ -35,7 +35,17 @@ interface Need {
  * The cable of a way behind an rcd, which clears a fault to earth: capacity and volt drop decide. One that is too heavy to
  * lie with others is run apart. Null where none on sale will do.
  */
-export function sizeRun({ practice, voltage, ambientC, ratingA, curve, amps, lengthM, use, leastMm2 }: Need): RunSize | null {
+export function sizeRun({
+  practice,
+  voltage,
+  ambientC,
+  ratingA,
+  curve,
+  amps,
+  lengthM,
+  use,
+  leastMm2,
+}: Need): RunSize | null {
   const { draft, voltDrop } = practice;
   const base = use === 'other' ? voltDrop.other.value : voltDrop.lighting.value;
   const limit = dropLimitPercent(base, lengthM, voltDrop.longRun.value);

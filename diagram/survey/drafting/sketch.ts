@@ -80,7 +80,8 @@ export class Sketch {
   }
 
   notice(notice: Notice): void {
-    if (!this.notices.some(({ place, board }) => place === notice.place && board === notice.board)) this.notices.push(notice);
+    if (!this.notices.some(({ place, board }) => place === notice.place && board === notice.board))
+      this.notices.push(notice);
   }
 
   /**
@@ -191,7 +192,8 @@ export class Sketch {
     if (!wire) return;
     this.wires.delete(id);
     for (const [part, mark] of [wire.from, wire.to]) this.conductors.get(`${part} ${mark}`)?.delete(id);
-    if (wire.cable !== undefined && ![...this.wires.values()].some(({ cable }) => cable === wire.cable)) this.cables.delete(wire.cable);
+    if (wire.cable !== undefined && ![...this.wires.values()].some(({ cable }) => cable === wire.cable))
+      this.cables.delete(wire.cable);
   }
 
   /** Lands the far end of a wire elsewhere. */
@@ -215,7 +217,9 @@ export class Sketch {
 
   /** The wire that arrives at a terminal from the side of the source. */
   arriving([part, mark]: End): Wire | undefined {
-    return this.wiresAt([part, mark]).map((id) => this.wires.get(id)!).find(({ to }) => to[0] === part && to[1] === mark);
+    return this.wiresAt([part, mark])
+      .map((id) => this.wires.get(id)!)
+      .find(({ to }) => to[0] === part && to[1] === mark);
   }
 
   /** The wire that feeds a joint. */
@@ -225,7 +229,9 @@ export class Sketch {
 
   /** The wires that go on from a terminal. */
   leaving([part, mark]: End): Wire[] {
-    return this.wiresAt([part, mark]).map((id) => this.wires.get(id)!).filter(({ from }) => from[0] === part && from[1] === mark);
+    return this.wiresAt([part, mark])
+      .map((id) => this.wires.get(id)!)
+      .filter(({ from }) => from[0] === part && from[1] === mark);
   }
 
   finish(): Installation {

@@ -30,7 +30,13 @@ export const MISTAKES: readonly Mistake[] = [
         set: {
           wires: [
             { ...feed, to: ['front-bedroom.lamp2', 'L'] },
-            { ...line, from: neutral.from, to: ['front-bedroom.lamp2.switch', '1'], role: 'neutral', colour: neutral.colour! },
+            {
+              ...line,
+              from: neutral.from,
+              to: ['front-bedroom.lamp2.switch', '1'],
+              role: 'neutral',
+              colour: neutral.colour!,
+            },
             { ...neutral, from: ['front-bedroom.lamp2.switch', '2'] },
           ],
         },
@@ -40,7 +46,9 @@ export const MISTAKES: readonly Mistake[] = [
   {
     // The neutral of a backed-up way is landed on the mains bar: it is gone when that rcd opens.
     rule: 'backup-neutral-lost',
-    patch: (doc) => ({ set: { wires: [{ ...wire(doc, 'back-bedroom.backup1.n:1'), from: freeOn(doc, 'rcd1.neutral-bar') }] } }),
+    patch: (doc) => ({
+      set: { wires: [{ ...wire(doc, 'back-bedroom.backup1.n:1'), from: freeOn(doc, 'rcd1.neutral-bar') }] },
+    }),
   },
   {
     // The earth core of the oven's tail hangs free in the switch box.
@@ -61,7 +69,18 @@ export const MISTAKES: readonly Mistake[] = [
     // Two rows of outlets joined at their ends: neither breaker makes them dead.
     rule: 'mixed-feeds',
     patch: () => ({
-      set: { wires: [{ id: 'link', from: ['front-bedroom.outlet3', 'L'], to: ['middle-bedroom.outlet2', 'L'], role: 'line', cable: 'middle-bedroom.outlet2.cable', colour: 'BN' }] },
+      set: {
+        wires: [
+          {
+            id: 'link',
+            from: ['front-bedroom.outlet3', 'L'],
+            to: ['middle-bedroom.outlet2', 'L'],
+            role: 'line',
+            cable: 'middle-bedroom.outlet2.cable',
+            colour: 'BN',
+          },
+        ],
+      },
     }),
   },
 ];

@@ -16,7 +16,28 @@ export interface DemoHome {
 
 /** The three jobs of the demo: a flat without backup, a house with it, and the apprentice's drawing of that house with six mistakes. */
 export const demoHomes = (): DemoHome[] => [
-  { document: quarryHouse(), client: 'Iven Marlow', address: '3 Quarry Steps, Tillmere', hoursWanted: 4, dueInDays: 6, byApprentice: false },
-  { document: apprenticesHome(), client: 'Iven Marlow', address: '3 Quarry Steps, Tillmere', hoursWanted: 4, dueInDays: 2, byApprentice: true },
-  { document: weirFlat(), client: 'Dora Fenwick', address: 'Weir Court, flat 2, Tillmere', hoursWanted: 0, dueInDays: null, byApprentice: false },
+  {
+    document: quarryHouse(),
+    client: 'Iven Marlow',
+    address: '3 Quarry Steps, Tillmere',
+    hoursWanted: 4,
+    dueInDays: 6,
+    byApprentice: false,
+  },
+  {
+    document: apprenticesHome(),
+    client: 'Iven Marlow',
+    address: '3 Quarry Steps, Tillmere',
+    hoursWanted: 4,
+    dueInDays: 2,
+    byApprentice: true,
+  },
+  {
+    document: weirFlat(),
+    client: 'Dora Fenwick',
+    address: 'Weir Court, flat 2, Tillmere',
+    hoursWanted: 0,
+    dueInDays: null,
+    byApprentice: false,
+  },
 ];

@@ -25,26 +25,44 @@ const drafted = (): Installation =>
     hoursWanted: 4,
   });
 
+/** The lowest number behind a letter that no part and no switchboard bears. */
+function freeRef(doc: Installation, letter: string, from: number): string {
+  const taken = new Set(doc.parts.flatMap(({ ref, board }) => [ref, board]));
+  let n = from;
+  while (taken.has(`${letter}${n}`)) n++;
+  return `${letter}${n}`;
+}
+
 /** The mains lamp of the hall, switched from both ends: the switch becomes a two-way pair with its strappers in a run between. */
 function twoWayHall(doc: Installation): Patch {
   const old = doc.parts.find(({ id }) => id === 'hall.lamp2.switch')!;
   const pair = (['a', 'b'] as const).map((end): Part => ({
     id: `hall.two-way-${end}`,
     kind: 'switch-2way',
-    ref: end === 'a' ? old.ref! : 'S91',
+    ref: end === 'a' ? old.ref! : freeRef(doc, 'S', 1),
     label: end === 'a' ? 'at the door' : 'at the bedrooms',
     place: 'hall',
-    board: end === 'a' ? old.board! : 'X20',
+    board: end === 'a' ? old.board! : freeRef(doc, 'X', 11),
     rating: 10,
     state: '1',
   }));
   const moved = doc.wires
     .filter(({ from, to }) => from[0] === old.id || to[0] === old.id)
     .map((wire): Wire => {
-      const end = ([part, mark]: Wire['from']): Wire['from'] => (part !== old.id ? [part, mark] : mark === '1' ? ['hall.two-way-a', 'C'] : ['hall.two-way-b', 'C']);
+      const end = ([part, mark]: Wire['from']): Wire['from'] =>
+        part !== old.id ? [part, mark] : mark === '1' ? ['hall.two-way-a', 'C'] : ['hall.two-way-b', 'C'];
       return { ...wire, from: end(wire.from), to: end(wire.to) };
     });
-  const run: Cable = { id: 'hall.two-way.run', csa: 1.5, cpc: 1.5, material: 'Cu', insulation: 'PVC', method: 'B1', length: 5, cores: 3 };
+  const run: Cable = {
+    id: 'hall.two-way.run',
+    csa: 1.5,
+    cpc: 1.5,
+    material: 'Cu',
+    insulation: 'PVC',
+    method: 'B1',
+    length: 5,
+    cores: 3,
+  };
   const strapper = (mark: '1' | '2', colour: string): Wire => ({
     id: `hall.two-way-b:${mark}`,
     from: ['hall.two-way-a', mark],
@@ -53,7 +71,10 @@ function twoWayHall(doc: Installation): Patch {
     cable: run.id,
     colour,
   });
-  return { set: { parts: pair, wires: [...moved, strapper('1', 'BK'), strapper('2', 'GY')], cables: [run] }, remove: { parts: [old.id], overview: [old.id], connections: [old.id] } };
+  return {
+    set: { parts: pair, wires: [...moved, strapper('1', 'BK'), strapper('2', 'GY')], cables: [run] },
+    remove: { parts: [old.id], overview: [old.id], connections: [old.id] },
+  };
 }
 
 /** What the electrician measured and wrote after the draft. */

@@ -15,12 +15,29 @@ import { Login, Membership, Person, Team } from '@/models';
 const DAY_MS = 86_400_000;
 const inDays = (days: number) => new Date(Date.now() + days * DAY_MS).toISOString().slice(0, 10);
 
-async function makePerson(team: Team, { name, email, roles }: { name: string; email: string; roles: string[] }): Promise<Actor> {
+async function makePerson(
+  team: Team,
+  { name, email, roles }: { name: string; email: string; roles: string[] },
+): Promise<Actor> {
   const person = await Person.create({ teamId: team.id, name });
   const held = roles as PersonRole[];
-  await Login.create({ email, teamId: team.id, personId: person.id, passwordHash: await hashPassword(accounts.password), passwordAt: new Date() });
+  await Login.create({
+    email,
+    teamId: team.id,
+    personId: person.id,
+    passwordHash: await hashPassword(accounts.password),
+    passwordAt: new Date(),
+  });
   await Membership.bulkCreate(held.map((role) => ({ teamId: team.id, personId: person.id, role })));
-  return { teamId: team.id, team: team.name, personId: person.id, sessionId: '', name, initials: initialsOf(name), roles: held };
+  return {
+    teamId: team.id,
+    team: team.name,
+    personId: person.id,
+    sessionId: '',
+    name,
+    initials: initialsOf(name),
+    roles: held,
+  };
 }
 
 /** The demo: one team, four people (one a role), and its jobs. Does nothing where there is a team already. */

@@ -18,7 +18,9 @@ export function cleanHomes(): Map<string, Installation> {
   homes.set('demo flat', weirFlat());
   homes.set('demo house', quarryHouse());
   for (const name of ['clean-flat', 'clean-backup-home']) {
-    const read = readDocument(JSON.parse(readFileSync(fileURLToPath(new URL(`../../fixtures/homes/${name}.json`, import.meta.url)), 'utf8')));
+    const read = readDocument(
+      JSON.parse(readFileSync(fileURLToPath(new URL(`../../fixtures/homes/${name}.json`, import.meta.url)), 'utf8')),
+    );
     if (!read.ok) throw new Error(`${name} is no valid document`);
     homes.set(name, read.document);
   }

@@ -7,8 +7,14 @@ import { demoHomes } from '@/lib/server/demo/homes';
 import { quarryHouse } from '@/lib/server/demo/house';
 import { surveySteps } from '@/diagram/survey/step';
 
-const serious = (doc: Installation): string[] => examine(doc).findings.filter(({ severity }) => severity !== 'advice').map(({ rule }) => rule);
-const advice = (doc: Installation): string[] => examine(doc).findings.filter(({ severity }) => severity === 'advice').map(({ rule }) => rule);
+const serious = (doc: Installation): string[] =>
+  examine(doc)
+    .findings.filter(({ severity }) => severity !== 'advice')
+    .map(({ rule }) => rule);
+const advice = (doc: Installation): string[] =>
+  examine(doc)
+    .findings.filter(({ severity }) => severity === 'advice')
+    .map(({ rule }) => rule);
 
 describe('the homes of the demo', () => {
   it('are valid documents, every part in its place on the sheet', () => {
@@ -20,11 +26,13 @@ describe('the homes of the demo', () => {
   });
 
   it('are right where the electrician drew them', () => {
-    for (const { document, byApprentice } of demoHomes()) if (!byApprentice) expect([document.title, serious(document)]).toEqual([document.title, []]);
+    for (const { document, byApprentice } of demoHomes())
+      if (!byApprentice) expect([document.title, serious(document)]).toEqual([document.title, []]);
   });
 
   it('are in step with their surveys', () => {
-    for (const { document } of demoHomes()) expect(new Set(surveySteps(document).map(({ state }) => state))).toEqual(new Set(['in-step']));
+    for (const { document } of demoHomes())
+      expect(new Set(surveySteps(document).map(({ state }) => state))).toEqual(new Set(['in-step']));
   });
 
   it('hold six mistakes of the apprentice, each found by its own rule and by no other', () => {
@@ -33,8 +41,11 @@ describe('the homes of the demo', () => {
     expect(advice(apprenticesHome())).toEqual(advice(quarryHouse()));
   });
 
-  it.each(MISTAKES.map((mistake) => [mistake.rule, mistake] as const))('has a single finding of %s for that mistake alone', (rule, mistake) => {
-    const home = quarryHouse();
-    expect(serious(applyPatch(home, mistake.patch(home)))).toEqual([rule]);
-  });
+  it.each(MISTAKES.map((mistake) => [mistake.rule, mistake] as const))(
+    'has a single finding of %s for that mistake alone',
+    (rule, mistake) => {
+      const home = quarryHouse();
+      expect(serious(applyPatch(home, mistake.patch(home)))).toEqual([rule]);
+    },
+  );
 });

@@ -1,5 +1,14 @@
 import { isBar } from '@/diagram/document/kinds';
-import { canonical, type End, type Installation, type Kind, type Part, type PartOf, type Role, type Wire } from '@/diagram/document/schema';
+import {
+  canonical,
+  type End,
+  type Installation,
+  type Kind,
+  type Part,
+  type PartOf,
+  type Role,
+  type Wire,
+} from '@/diagram/document/schema';
 import { findWays, type Way } from '@/diagram/terminals/ways';
 
 /** A clean home under the hand of somebody who makes one mistake: questions about it, and edits that each give a new home. */
@@ -47,7 +56,9 @@ export class Home {
 
   /** A terminal of a bar or joint that nothing is landed on. */
   freeOn(bar: string): End {
-    const used = this.wiresAt(bar).flatMap(({ from, to }) => [from, to].filter(([id]) => id === bar).map(([, mark]) => Number(mark)));
+    const used = this.wiresAt(bar).flatMap(({ from, to }) =>
+      [from, to].filter(([id]) => id === bar).map(([, mark]) => Number(mark)),
+    );
     return [bar, String(Math.max(0, ...used) + 1)];
   }
 
@@ -57,7 +68,9 @@ export class Home {
   }
 
   set<K extends Kind>(part: PartOf<K>, fields: Partial<PartOf<K>>): Home {
-    const next = Object.fromEntries(Object.entries({ ...part, ...fields }).filter(([, value]) => value !== undefined)) as Part;
+    const next = Object.fromEntries(
+      Object.entries({ ...part, ...fields }).filter(([, value]) => value !== undefined),
+    ) as Part;
     return this.with({ parts: this.doc.parts.map((one) => (one.id === part.id ? next : one)) });
   }
 
@@ -74,7 +87,9 @@ export class Home {
   }
 
   join(role: Role, from: End, to: End, more: Partial<Wire> = {}): Home {
-    return this.with({ wires: [...this.doc.wires, { id: `mistake-${this.doc.wires.length}`, from, to, role, ...more }] });
+    return this.with({
+      wires: [...this.doc.wires, { id: `mistake-${this.doc.wires.length}`, from, to, role, ...more }],
+    });
   }
 
   cut(...wires: Wire[]): Home {
@@ -93,7 +108,9 @@ export class Home {
       const source = this.far(first, part);
       wires = wires
         .filter(({ id }) => id !== first.id)
-        .map((wire) => (after.some(({ id }) => id === wire.id) ? { ...wire, from: source, to: this.far(wire, part) } : wire));
+        .map((wire) =>
+          after.some(({ id }) => id === wire.id) ? { ...wire, from: source, to: this.far(wire, part) } : wire,
+        );
     }
     const left = wires.filter(({ from, to }) => from[0] !== part && to[0] !== part);
     return this.with({ wires: left, parts: this.doc.parts.filter(({ id }) => id !== part) });
@@ -104,7 +121,10 @@ export class Home {
     const onward = { ...wire, id: `${wire.id}.onward`, from: [part.id, '2'] as End };
     return this.add(part).with({
       parts: [...this.doc.parts, part],
-      wires: [...this.doc.wires.map((one) => (one.id === wire.id ? { ...wire, to: [part.id, '1'] as End } : one)), onward],
+      wires: [
+        ...this.doc.wires.map((one) => (one.id === wire.id ? { ...wire, to: [part.id, '1'] as End } : one)),
+        onward,
+      ],
     });
   }
 

@@ -2,32 +2,46 @@ import type { Home, Mutation } from './edit';
 
 const MORE_LOAD = ['overloaded-main', 'high-drop', 'undersized-cable', 'backup-overload', 'rcd-underrated'];
 
-const cablesOf = (home: Home, wires: readonly string[]): string[] => [...new Set(home.doc.wires.filter(({ id }) => wires.includes(id)).flatMap(({ cable }) => (cable ? [cable] : [])))];
+const cablesOf = (home: Home, wires: readonly string[]): string[] => [
+  ...new Set(home.doc.wires.filter(({ id }) => wires.includes(id)).flatMap(({ cable }) => (cable ? [cable] : []))),
+];
 
 export const OVERLOAD: readonly Mutation[] = [
   {
     rule: 'no-overcurrent',
     mistake: 'no breaker at the output of the inverter',
     make: (home) =>
-      home.parts('inverter').flatMap(({ id }) => home.wiresAt(id, 'out.L').map((wire) => home.far(wire, id)[0])).flatMap((id) => (home.part(id).kind === 'mcb' ? [home.takeOut(id, ['1', '2'], ['3', '4'])] : [])),
+      home
+        .parts('inverter')
+        .flatMap(({ id }) => home.wiresAt(id, 'out.L').map((wire) => home.far(wire, id)[0]))
+        .flatMap((id) => (home.part(id).kind === 'mcb' ? [home.takeOut(id, ['1', '2'], ['3', '4'])] : [])),
     also: ['no-backup-isolation'],
   },
   {
     rule: 'overloaded-way',
     mistake: 'more load than the way was made for',
-    make: (home) => [...home.waysWith('lamp'), ...home.waysWith('appliance')].map(({ device, parts }) => home.set(parts[0]!, { watts: 1.3 * device.rating! * 230 })),
+    make: (home) =>
+      [...home.waysWith('lamp'), ...home.waysWith('appliance')].map(({ device, parts }) =>
+        home.set(parts[0]!, { watts: 5 * device.rating! * 230 }),
+      ),
     also: MORE_LOAD,
   },
   {
     rule: 'undersized-cable',
     mistake: 'a larger breaker on the same cable',
-    make: (home) => [...home.waysWith('lamp'), ...home.waysWith('appliance')].map(({ device }) => home.set(device, { rating: 63 })),
+    make: (home) =>
+      [...home.waysWith('lamp'), ...home.waysWith('appliance')].map(({ device }) => home.set(device, { rating: 63 })),
     also: ['slow-disconnection', 'thin-earth'],
   },
   {
     rule: 'high-drop',
     mistake: 'a run of kilometres',
-    make: (home) => [...home.waysWith('lamp'), ...home.waysWith('appliance')].flatMap(({ way }) => cablesOf(home, way.wires).slice(0, 1).map((id) => home.setCable(id, { length: 9999 }))),
+    make: (home) =>
+      [...home.waysWith('lamp'), ...home.waysWith('appliance')].flatMap(({ way }) =>
+        cablesOf(home, way.wires)
+          .slice(0, 1)
+          .map((id) => home.setCable(id, { length: 9999 })),
+      ),
     also: ['slow-disconnection'],
   },
   {
@@ -38,18 +52,29 @@ export const OVERLOAD: readonly Mutation[] = [
   {
     rule: 'overloaded-main',
     mistake: 'a service fuse of 2 A',
-    make: (home) => home.parts('fuse').filter(({ standard }) => standard === 'gG').map((fuse) => home.set(fuse, { rating: 2 })),
+    make: (home) =>
+      home
+        .parts('fuse')
+        .filter(({ standard }) => standard === 'gG')
+        .map((fuse) => home.set(fuse, { rating: 2 })),
   },
   {
     rule: 'rcd-underrated',
     mistake: 'an rcd rated below the fuse before it and the ways behind it',
     make: (home) =>
       home.parts('rcd').flatMap((rcd) => {
-        const bar = home.wiresAt(rcd.id, '2').map((wire) => home.far(wire, rcd.id)[0]).find((id) => home.part(id).kind === 'line-bar');
-        const behind = home.parts('mcb').filter(({ id }) => bar !== undefined && home.wiresAt(id, '1').some((wire) => home.far(wire, id)[0] === bar));
+        const bar = home
+          .wiresAt(rcd.id, '2')
+          .map((wire) => home.far(wire, rcd.id)[0])
+          .find((id) => home.part(id).kind === 'line-bar');
+        const behind = home
+          .parts('mcb')
+          .filter(({ id }) => bar !== undefined && home.wiresAt(id, '1').some((wire) => home.far(wire, id)[0] === bar));
         const fuse = home.parts('fuse').find(({ standard }) => standard === 'gG')!;
         const sum = behind.reduce((total, { rating }) => total + rating!, 0);
-        return behind.length > 1 && !home.ways.some(({ device, backup }) => backup && device === behind[0]!.id) ? [home.set(rcd, { rating: Math.min(sum, fuse.rating!) - 1 })] : [];
+        return behind.length > 1 && !home.ways.some(({ device, backup }) => backup && device === behind[0]!.id)
+          ? [home.set(rcd, { rating: Math.min(sum, fuse.rating!) - 1 })]
+          : [];
       }),
   },
   {
@@ -59,19 +84,31 @@ export const OVERLOAD: readonly Mutation[] = [
       home.parts('isolator').map((main) => {
         const [before] = home.wiresAt(main.id, '3');
         const source = home.far(before!, main.id);
-        const past = home.wiresAt(main.id, '4').reduce((drawn, wire) => drawn.setWire(wire, { from: source, to: home.far(wire, main.id) }), home.cut(before!));
+        const past = home
+          .wiresAt(main.id, '4')
+          .reduce(
+            (drawn, wire) => drawn.setWire(wire, { from: source, to: home.far(wire, main.id) }),
+            home.cut(before!),
+          );
         return past.set(main, { poles: 1 });
       }),
   },
   {
     rule: 'no-main-switch',
     mistake: 'no main switch, and several feeders behind the meter',
-    make: (home) => (home.doc.supply.system === 'TT' || home.parts('line-bar').length < 3 ? [] : home.parts('isolator').map(({ id }) => home.takeOut(id, ['1', '2'], ['3', '4']))),
+    make: (home) =>
+      home.doc.supply.system === 'TT' || home.parts('line-bar').length < 3
+        ? []
+        : home.parts('isolator').map(({ id }) => home.takeOut(id, ['1', '2'], ['3', '4'])),
   },
   {
     rule: 'no-selectivity',
     mistake: 'a main rcd without delay before the others',
-    make: (home) => home.parts('rcd').filter(({ delay }) => delay === 'S').map((rcd) => home.set(rcd, { delay: 'none' })),
+    make: (home) =>
+      home
+        .parts('rcd')
+        .filter(({ delay }) => delay === 'S')
+        .map((rcd) => home.set(rcd, { delay: 'none' })),
   },
   {
     rule: 'wrong-curve',
@@ -91,12 +128,20 @@ export const OVERLOAD: readonly Mutation[] = [
         const lamp = home.parts('lamp').find(({ id, place }) => place === regulator.place && home.only(id, 'L'));
         return lamp ? [home.setWire(home.only(lamp.id, 'L')!, { from: [regulator.id, '2'] })] : [];
       }),
-    also: ['open-terminal', 'mixed-feeds', 'borrowed-neutral', 'residual-imbalance', 'backup-neutral-lost', 'backup-neutral-behind-other-rcd'],
+    also: [
+      'open-terminal',
+      'mixed-feeds',
+      'borrowed-neutral',
+      'residual-imbalance',
+      'backup-neutral-lost',
+      'backup-neutral-behind-other-rcd',
+    ],
   },
   {
     rule: 'too-many-points',
     mistake: 'more watts on a way of lamps than the practice allows',
-    make: (home) => (home.doc.practice === 'IN' ? home.waysWith('lamp').map(({ parts }) => home.set(parts[0]!, { watts: 900 })) : []),
+    make: (home) =>
+      home.doc.practice === 'IN' ? home.waysWith('lamp').map(({ parts }) => home.set(parts[0]!, { watts: 900 })) : [],
   },
   {
     rule: 'no-spd',

@@ -1,7 +1,13 @@
 import type { Part } from '@/diagram/document/schema';
 import type { Home, Mutation } from './edit';
 
-const control = (place: string | undefined): Part => ({ id: 'mistake', kind: 'switch', ref: 'S99', rating: 16, ...(place && { place }) });
+const control = (place: string | undefined): Part => ({
+  id: 'mistake',
+  kind: 'switch',
+  ref: 'S99',
+  rating: 16,
+  ...(place && { place }),
+});
 const loads = (home: Home) => [...home.parts('lamp'), ...home.parts('fan'), ...home.parts('appliance')];
 const points = (home: Home) => [...loads(home), ...home.parts('socket')];
 const isEarthed = (part: Part) => part.kind === 'socket' || !('class' in part && part.class === 2);
@@ -18,14 +24,32 @@ export const POLARITY: readonly Mutation[] = [
   {
     rule: 'switched-neutral',
     mistake: 'a switch in the neutral of a load',
-    make: (home) => loads(home).flatMap((load) => home.wiresAt(load.id, 'N').filter(({ to }) => to[0] === load.id).map((wire) => home.insert(wire, control(load.place)))),
+    make: (home) =>
+      loads(home).flatMap((load) =>
+        home
+          .wiresAt(load.id, 'N')
+          .filter(({ to }) => to[0] === load.id)
+          .map((wire) => home.insert(wire, control(load.place))),
+      ),
   },
   {
     rule: 'fused-neutral',
     mistake: 'a fuse in the neutral of a load',
     make: (home) =>
       points(home).flatMap((load) =>
-        home.wiresAt(load.id, 'N').filter(({ to }) => to[0] === load.id).map((wire) => home.insert(wire, { id: 'mistake', kind: 'fuse', ref: 'F99', rating: 10, standard: 'gG', ...(load.place && { place: load.place }) })),
+        home
+          .wiresAt(load.id, 'N')
+          .filter(({ to }) => to[0] === load.id)
+          .map((wire) =>
+            home.insert(wire, {
+              id: 'mistake',
+              kind: 'fuse',
+              ref: 'F99',
+              rating: 10,
+              standard: 'gG',
+              ...(load.place && { place: load.place }),
+            }),
+          ),
       ),
   },
   {
@@ -33,40 +57,81 @@ export const POLARITY: readonly Mutation[] = [
     mistake: 'line and neutral crossed at a load',
     make: (home) =>
       points(home).map((load) => {
-        const cross = ([id, mark]: [string, string]): [string, string] => [id, id === load.id ? ({ L: 'N', N: 'L' }[mark] ?? mark) : mark];
-        return home.with({ wires: home.doc.wires.map((wire) => ({ ...wire, from: cross(wire.from), to: cross(wire.to) })) });
+        const cross = ([id, mark]: [string, string]): [string, string] => [
+          id,
+          id === load.id ? ({ L: 'N', N: 'L' }[mark] ?? mark) : mark,
+        ];
+        return home.with({
+          wires: home.doc.wires.map((wire) => ({ ...wire, from: cross(wire.from), to: cross(wire.to) })),
+        });
       }),
   },
   {
     rule: 'switched-earth',
     mistake: 'a switch in the earth of a load',
-    make: (home) => points(home).filter(isEarthed).flatMap((load) => home.wiresAt(load.id, 'E').filter(({ to }) => to[0] === load.id).map((wire) => home.insert(wire, control(load.place)))),
+    make: (home) =>
+      points(home)
+        .filter(isEarthed)
+        .flatMap((load) =>
+          home
+            .wiresAt(load.id, 'E')
+            .filter(({ to }) => to[0] === load.id)
+            .map((wire) => home.insert(wire, control(load.place))),
+        ),
   },
   {
     rule: 'missing-earth',
     mistake: 'an earth core not landed',
-    make: (home) => points(home).filter(isEarthed).flatMap((load) => home.wiresAt(load.id, 'E').filter(({ to }) => to[0] === load.id).map((wire) => home.cut(wire))),
+    make: (home) =>
+      points(home)
+        .filter(isEarthed)
+        .flatMap((load) =>
+          home
+            .wiresAt(load.id, 'E')
+            .filter(({ to }) => to[0] === load.id)
+            .map((wire) => home.cut(wire)),
+        ),
   },
   {
     rule: 'no-main-earth',
     mistake: 'the main earth not joined to its source',
-    make: (home) => [...home.parts('electrode'), ...(home.doc.supply.system === 'TT' ? [] : home.parts('supply'))].flatMap(({ id }) => home.wiresAt(id, 'E').map((wire) => home.cut(wire))),
+    make: (home) =>
+      [...home.parts('electrode'), ...(home.doc.supply.system === 'TT' ? [] : home.parts('supply'))].flatMap(({ id }) =>
+        home.wiresAt(id, 'E').map((wire) => home.cut(wire)),
+      ),
     also: ['no-earth-reference-on-backup'],
   },
   {
     rule: 'earth-neutral-joined',
     mistake: 'a neutral bar joined to the earth bar',
-    make: (home) => home.parts('neutral-bar').map(({ id }) => home.join('neutral', home.freeOn(id), home.freeOn(home.parts('earth-bar')[0]!.id))),
+    make: (home) =>
+      home
+        .parts('neutral-bar')
+        .map(({ id }) => home.join('neutral', home.freeOn(id), home.freeOn(home.parts('earth-bar')[0]!.id))),
   },
   {
     rule: 'open-neutral',
     mistake: 'a neutral core not landed',
-    make: (home) => loads(home).flatMap((load) => home.wiresAt(load.id, 'N').filter(({ to }) => to[0] === load.id).map((wire) => home.cut(wire))),
+    make: (home) =>
+      loads(home).flatMap((load) =>
+        home
+          .wiresAt(load.id, 'N')
+          .filter(({ to }) => to[0] === load.id)
+          .map((wire) => home.cut(wire)),
+      ),
   },
   {
     rule: 'open-line',
     mistake: 'a line core not landed',
-    make: (home) => loads(home).flatMap((load) => home.wiresAt(load.id, 'L').filter(({ to }) => to[0] === load.id).map((wire) => home.cut(wire))),
+    make: (home) =>
+      loads(home).flatMap((load) =>
+        home
+          .wiresAt(load.id, 'L')
+          .filter(({ to }) => to[0] === load.id)
+          .map((wire) => home.cut(wire)),
+      ),
+    // said of a two-way switch that stands in another room than its lamp
+    also: ['open-terminal'],
   },
   {
     rule: 'short-circuit',
@@ -90,14 +155,28 @@ export const POLARITY: readonly Mutation[] = [
     mistake: 'common and strapper exchanged at a two-way switch',
     make: (home) =>
       home.parts('switch-2way').map(({ id }) => {
-        const cross = ([part, mark]: [string, string]): [string, string] => [part, part === id ? ({ C: '1', 1: 'C' }[mark] ?? mark) : mark];
-        return home.with({ wires: home.doc.wires.map((wire) => ({ ...wire, from: cross(wire.from), to: cross(wire.to) })) });
+        const cross = ([part, mark]: [string, string]): [string, string] => [
+          part,
+          part === id ? ({ C: '1', 1: 'C' }[mark] ?? mark) : mark,
+        ];
+        return home.with({
+          wires: home.doc.wires.map((wire) => ({ ...wire, from: cross(wire.from), to: cross(wire.to) })),
+        });
       }),
   },
   {
     rule: 'line-role-mismatch',
     mistake: 'a neutral drawn as line',
-    make: (home) => home.doc.wires.filter(({ role, to }) => role === 'neutral' && home.part(to[0]).kind === 'lamp').map((wire) => home.with({ wires: home.doc.wires.map((one) => (one.id === wire.id ? { ...wire, role: 'line', colour: undefined } : one)) })),
+    make: (home) =>
+      home.doc.wires
+        .filter(({ role, to }) => role === 'neutral' && home.part(to[0]).kind === 'lamp')
+        .map((wire) =>
+          home.with({
+            wires: home.doc.wires.map((one) =>
+              one.id === wire.id ? { ...wire, role: 'line', colour: undefined } : one,
+            ),
+          }),
+        ),
   },
   {
     rule: 'open-terminal',
@@ -112,9 +191,17 @@ export const POLARITY: readonly Mutation[] = [
         const onward = home.wiresAt(socket.id, 'L').find(({ from }) => from[0] === socket.id);
         const next = onward && home.far(onward, socket.id)[0];
         if (!next || home.part(next).kind !== 'socket') return [];
-        const after = (['L', 'N', 'E'] as const).map((mark) => home.wiresAt(next, mark).find(({ from }) => from[0] === next));
+        const after = (['L', 'N', 'E'] as const).map((mark) =>
+          home.wiresAt(next, mark).find(({ from }) => from[0] === next),
+        );
         if (after.some((wire) => !wire) || home.wiresAt(socket.id, 'L').length < 2) return [];
-        return [home.with({ wires: home.doc.wires.map((wire) => (after.includes(wire) ? { ...wire, from: [socket.id, wire.from[1]] } : wire)) })];
+        return [
+          home.with({
+            wires: home.doc.wires.map((wire) =>
+              after.includes(wire) ? { ...wire, from: [socket.id, wire.from[1]] } : wire,
+            ),
+          }),
+        ];
       }),
   },
 ];

@@ -3,7 +3,10 @@ import type { Home, Mutation } from './edit';
 
 /** The neutral bar or other collector of a way: where the neutral of its first run starts. */
 const neutralRun = (home: Home, parts: readonly string[], wires: readonly string[]): Wire | undefined =>
-  home.doc.wires.find(({ id, role, from, to }) => role === 'neutral' && wires.includes(id) && !parts.includes(from[0]) && parts.includes(to[0]));
+  home.doc.wires.find(
+    ({ id, role, from, to }) =>
+      role === 'neutral' && wires.includes(id) && !parts.includes(from[0]) && parts.includes(to[0]),
+  );
 
 /** Every way of a side with the wire that brings its neutral from the bar. */
 const runs = (home: Home, backup: boolean) =>
@@ -21,8 +24,18 @@ const twoOutlets = (home: Home) => {
 /** A lead from an outlet of the backup to a plug. */
 const lead = (home: Home, inSocket: string | undefined): Home[] =>
   home.waysWith('socket', true).map(({ parts: [outlet] }) => {
-    const plugged = home.add({ id: 'mistake', kind: 'plug', ref: 'X99', ...(outlet!.place && { place: outlet!.place }), ...(inSocket && { in: inSocket }) });
-    return (['L', 'N', 'E'] as const).reduce((drawn, mark) => drawn.join(mark === 'L' ? 'line' : mark === 'N' ? 'neutral' : 'earth', [outlet!.id, mark], ['mistake', mark]), plugged);
+    const plugged = home.add({
+      id: 'mistake',
+      kind: 'plug',
+      ref: 'X99',
+      ...(outlet!.place && { place: outlet!.place }),
+      ...(inSocket && { in: inSocket }),
+    });
+    return (['L', 'N', 'E'] as const).reduce(
+      (drawn, mark) =>
+        drawn.join(mark === 'L' ? 'line' : mark === 'N' ? 'neutral' : 'earth', [outlet!.id, mark], ['mistake', mark]),
+      plugged,
+    );
   });
 
 export const SEPARATION: readonly Mutation[] = [
@@ -35,8 +48,20 @@ export const SEPARATION: readonly Mutation[] = [
   {
     rule: 'backfeed',
     mistake: 'a lead from the backup plugged into an outlet of the mains',
-    make: (home) => home.waysWith('socket').slice(0, 1).flatMap(({ parts }) => lead(home, parts[0]!.id)),
-    also: ['live-pins', 'mixed-feeds', 'backup-neutral-lost', 'borrowed-neutral', 'residual-imbalance', 'backup-neutral-behind-other-rcd', 'missing-data'],
+    make: (home) =>
+      home
+        .waysWith('socket')
+        .slice(0, 1)
+        .flatMap(({ parts }) => lead(home, parts[0]!.id)),
+    also: [
+      'live-pins',
+      'mixed-feeds',
+      'backup-neutral-lost',
+      'borrowed-neutral',
+      'residual-imbalance',
+      'backup-neutral-behind-other-rcd',
+      'missing-data',
+    ],
   },
   {
     rule: 'live-pins',
@@ -48,7 +73,9 @@ export const SEPARATION: readonly Mutation[] = [
     mistake: 'the neutral of a way led back through the joint of another way',
     make: (home) =>
       runs(home, false).flatMap(({ way, run, bar }) => {
-        const other = runs(home, false).find((one) => one.bar === bar && one.way.device !== way.device && home.part(one.run.to[0]).kind === 'joint');
+        const other = runs(home, false).find(
+          (one) => one.bar === bar && one.way.device !== way.device && home.part(one.run.to[0]).kind === 'joint',
+        );
         return other ? [home.setWire(run, { from: home.freeOn(other.run.to[0]) })] : [];
       }),
   },
@@ -61,18 +88,26 @@ export const SEPARATION: readonly Mutation[] = [
         const rcd = feeder && home.part(feeder.from[0]);
         const before = rcd?.kind === 'rcd' ? home.wiresAt(rcd.id, '3')[0] : undefined;
         const source = before && home.far(before, rcd!.id);
-        return source && home.part(source[0]).kind === 'neutral-bar' ? [home.setWire(run, { from: home.freeOn(source[0]) })] : [];
+        return source && home.part(source[0]).kind === 'neutral-bar'
+          ? [home.setWire(run, { from: home.freeOn(source[0]) })]
+          : [];
       }),
   },
   {
     rule: 'backup-neutral-behind-other-rcd',
     mistake: 'the neutral of a backed-up way landed at the inverter, before the rcd of its line',
-    make: (home) => runs(home, true).map(({ run }) => home.setWire(run, { from: [home.parts('inverter')[0]!.id, 'out.N'] })),
+    make: (home) =>
+      runs(home, true).map(({ run }) => home.setWire(run, { from: [home.parts('inverter')[0]!.id, 'out.N'] })),
   },
   {
     rule: 'backup-neutral-lost',
     mistake: 'the neutral of a backed-up way landed on a bar of the mains',
-    make: (home) => runs(home, true).flatMap(({ run }) => runs(home, false).slice(0, 1).map(({ bar }) => home.setWire(run, { from: home.freeOn(bar) }))),
+    make: (home) =>
+      runs(home, true).flatMap(({ run }) =>
+        runs(home, false)
+          .slice(0, 1)
+          .map(({ bar }) => home.setWire(run, { from: home.freeOn(bar) })),
+      ),
   },
   {
     rule: 'two-sources-unmarked',
@@ -90,7 +125,11 @@ export const SEPARATION: readonly Mutation[] = [
       return home.doc.supply.system === 'TT'
         ? []
         : home.parts('switch-2pole').flatMap((control) => {
-            const box = home.parts('switch').find(({ id, board }) => board !== undefined && barOf(id) !== undefined && barOf(id) !== barOf(control.id));
+            const box = home
+              .parts('switch')
+              .find(
+                ({ id, board }) => board !== undefined && barOf(id) !== undefined && barOf(id) !== barOf(control.id),
+              );
             return box ? [home.set(control, { place: box.place!, board: box.board! })] : [];
           });
     },

@@ -19,16 +19,32 @@ export const SHOCK: readonly Mutation[] = [
     rule: 'rcd-idle-on-backup',
     mistake: "the inverter fed from behind the mains' rcd, and none at its output",
     make: (home) => {
-      const feed = home.ways.find(({ device, parts }) => !parts.some((id) => id !== device) || home.part(device).label === 'Inverter feed');
+      const feed = home.ways.find(
+        ({ device, parts }) => !parts.some((id) => id !== device) || home.part(device).label === 'Inverter feed',
+      );
       const mains = guarding(home, false)[0];
       const backup = guarding(home, true)[0];
       if (!feed || !mains || !backup) return [];
       const neutralBar = home.wiresAt(mains.rcd.id, '4').map((wire) => home.far(wire, mains.rcd.id)[0])[0]!;
-      const moved = (id: string, mark: string, bar: string) => (drawn: Home) => drawn.setWire(drawn.wiresAt(id, mark)[0]!, { from: drawn.freeOn(bar) });
+      const moved = (id: string, mark: string, bar: string) => (drawn: Home) =>
+        drawn.setWire(drawn.wiresAt(id, mark)[0]!, { from: drawn.freeOn(bar) });
       const { id, place, board, ref, rating } = backup.rcd;
-      const plain = { id, kind: 'isolator' as const, poles: 2 as const, rating: rating!, ...(place && { place }), ...(board && { board }), ...(ref && { ref }) };
+      const plain = {
+        id,
+        kind: 'isolator' as const,
+        poles: 2 as const,
+        rating: rating!,
+        ...(place && { place }),
+        ...(board && { board }),
+        ...(ref && { ref }),
+      };
       const swapped = home.with({ parts: home.doc.parts.map((part) => (part.id === id ? plain : part)) });
-      return [[moved(feed.device, '1', mains.bar), moved(feed.device, '3', neutralBar)].reduce((drawn, move) => move(drawn), swapped)];
+      return [
+        [moved(feed.device, '1', mains.bar), moved(feed.device, '3', neutralBar)].reduce(
+          (drawn, move) => move(drawn),
+          swapped,
+        ),
+      ];
     },
     also: ['slow-disconnection'],
   },
@@ -40,13 +56,24 @@ export const SHOCK: readonly Mutation[] = [
   {
     rule: 'slow-disconnection',
     mistake: 'a supply whose loop is far above what was declared',
-    make: (home) => (home.doc.supply.system !== 'TT' && home.parts('inverter').length > 0 ? [home.with({ supply: { ...home.doc.supply, ze: 8 } })] : []),
+    make: (home) =>
+      home.doc.supply.system !== 'TT' && home.parts('inverter').length > 0
+        ? [home.with({ supply: { ...home.doc.supply, ze: 8 } })]
+        : [],
   },
   {
     rule: 'thin-earth',
     mistake: 'an earth core of 0.25 mm2 to the inverter, which no rcd guards',
     make: (home) =>
-      home.doc.supply.system === 'TT' ? [] : home.parts('inverter').flatMap(({ id }) => home.wiresAt(id, 'in.E').flatMap(({ cable }) => (cable === undefined ? [] : [home.setCable(cable, { cpc: 0.25 })]))),
+      home.doc.supply.system === 'TT'
+        ? []
+        : home
+            .parts('inverter')
+            .flatMap(({ id }) =>
+              home
+                .wiresAt(id, 'in.E')
+                .flatMap(({ cable }) => (cable === undefined ? [] : [home.setCable(cable, { cpc: 0.25 })])),
+            ),
   },
   {
     rule: 'no-main-bond',
@@ -57,6 +84,14 @@ export const SHOCK: readonly Mutation[] = [
   {
     rule: 'wet-place-socket',
     mistake: 'an outlet in the bath',
-    make: (home) => home.doc.places.filter(({ kind }) => kind === 'wet').flatMap((wet) => home.parts('socket').filter(({ place }) => place?.startsWith(wet.id)).map((socket) => home.set(socket, { place: wet.id }))),
+    make: (home) =>
+      home.doc.places
+        .filter(({ kind }) => kind === 'wet')
+        .flatMap((wet) =>
+          home
+            .parts('socket')
+            .filter(({ place }) => place?.startsWith(wet.id))
+            .map((socket) => home.set(socket, { place: wet.id })),
+        ),
   },
 ];

@@ -12,7 +12,7 @@ import { anySurvey, optionsOf } from './surveys';
 
 const PRACTICES = ['IEC', 'IN', 'GB'] as const;
 const SYSTEMS = ['TN-S', 'TN-C-S', 'TT'] as const;
-const RUNS = Number(process.env.DRAFT_RUNS ?? 12);
+const RUNS = Number(process.env.DRAFT_RUNS ?? 8);
 
 /** Rules whose finding a draft may have: each is said in the survey too, or is advice by its nature. */
 const serious = (doc: Installation) =>
@@ -44,13 +44,23 @@ function expectAllDrawn(doc: Installation, rooms: readonly SurveyRoom[], withBac
   const places = drawnByPlace(doc);
   for (const room of rooms) {
     const drawn = drawnIn(places, room.id);
-    expect([drawn.lamps.length, drawn.fans.length, drawn.outlets.length, drawn.heavy.length]).toEqual([room.lamps, room.fans, room.outlets, room.heavy.length]);
+    expect([drawn.lamps.length, drawn.fans.length, drawn.outlets.length, drawn.heavy.length]).toEqual([
+      room.lamps,
+      room.fans,
+      room.outlets,
+      room.heavy.length,
+    ]);
     if (withBackup)
-      expect([drawn.keptLamps.length, drawn.keptFans.length, drawn.keptOutlets.length]).toEqual([room.keepLamps, room.keepFans, room.keepOutletWatts > 0 ? 1 : 0]);
+      expect([drawn.keptLamps.length, drawn.keptFans.length, drawn.keptOutlets.length]).toEqual([
+        room.keepLamps,
+        room.keepFans,
+        room.keepOutletWatts > 0 ? 1 : 0,
+      ]);
   }
 }
 
-const homeErrors = (rooms: readonly SurveyRoom[], options: DraftOptions) => checkSurvey(rooms, options).filter(({ room }) => room === null);
+const homeErrors = (rooms: readonly SurveyRoom[], options: DraftOptions) =>
+  checkSurvey(rooms, options).filter(({ room }) => room === null);
 
 describe.each(PRACTICES)('a draft by the practice of %s', (practice) => {
   describe.each(SYSTEMS)('on %s', (system) => {
@@ -76,7 +86,13 @@ describe.each(PRACTICES)('a draft by the practice of %s', (practice) => {
           const doc = draftDocument(rooms, options);
           expect(JSON.stringify(draftDocument(rooms, options))).toBe(JSON.stringify(doc));
           expect(draftPatch(doc)).toEqual({});
-          expect(new Set(surveySteps(doc).map(({ state }) => state).filter((state) => state !== 'waits'))).toEqual(new Set(soundRooms(rooms, options).length > 0 ? ['in-step'] : []));
+          expect(
+            new Set(
+              surveySteps(doc)
+                .map(({ state }) => state)
+                .filter((state) => state !== 'waits'),
+            ),
+          ).toEqual(new Set(soundRooms(rooms, options).length > 0 ? ['in-step'] : []));
         }),
         { numRuns: Math.ceil(RUNS / 3) },
       );
@@ -98,8 +114,15 @@ describe.each(PRACTICES)('a draft by the practice of %s', (practice) => {
         expect(isEmptyPatch(draftPatch(next))).toBe(true);
         expect(JSON.stringify(applyPatch(next, invert(doc, patch)))).toBe(JSON.stringify(applyPatch(doc, {})));
         const kept = new Map(next.parts.map((part) => [part.id, part]));
-        for (const part of doc.parts) if (part.kind !== 'switch' && part.kind !== 'regulator' && part.kind !== 'joint' && part.kind !== 'mcb') expect(kept.get(part.id)).toEqual(part);
-        expect(serious(next).filter((finding) => !/^(backup-overload|overloaded-|charger-overload|thin-battery-lead|rcd-underrated)/.test(finding))).toEqual([]);
+        for (const part of doc.parts)
+          if (part.kind !== 'switch' && part.kind !== 'regulator' && part.kind !== 'joint' && part.kind !== 'mcb')
+            expect(kept.get(part.id)).toEqual(part);
+        expect(
+          serious(next).filter(
+            (finding) =>
+              !/^(backup-overload|overloaded-|charger-overload|thin-battery-lead|rcd-underrated)/.test(finding),
+          ),
+        ).toEqual([]);
       }),
       { numRuns: RUNS },
     );
@@ -121,7 +144,10 @@ function growing(before: SurveyRoom | undefined, after: SurveyRoom): SurveyRoom 
     keepLamps: Math.min(after.keepLamps, lamps),
     keepFans: Math.min(after.keepFans, fans),
     keepOutletWatts: before.keepOutletWatts || after.keepOutletWatts,
-    heavy: [...before.heavy, ...after.heavy.filter(({ what }) => !before.heavy.some((item) => item.what === what))].slice(0, 8),
+    heavy: [
+      ...before.heavy,
+      ...after.heavy.filter(({ what }) => !before.heavy.some((item) => item.what === what)),
+    ].slice(0, 8),
     kind: before.kind,
     ...(before.run !== undefined && { run: before.run }),
   };

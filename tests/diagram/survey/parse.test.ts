@@ -60,7 +60,14 @@ describe('a cell', () => {
   });
 
   it('guesses the kind from a name', () => {
-    expect(['Bath', 'Back bedroom', 'Hall', 'Study', 'Balcony', 'Bathurst'].map(kindFromName)).toEqual(['wet', 'sleeping', 'passage', 'room', 'outdoor', 'room']);
+    expect(['Bath', 'Back bedroom', 'Hall', 'Study', 'Balcony', 'Bathurst'].map(kindFromName)).toEqual([
+      'wet',
+      'sleeping',
+      'passage',
+      'room',
+      'outdoor',
+      'room',
+    ]);
   });
 });
 
@@ -69,13 +76,18 @@ describe('a paste', () => {
     const { rooms, errors } = parseSurvey('Hall\tpassage\t2x9\t-\t-\t-\t1\t-\t-\t3\nBath\t\t2 7\t\t\theater 2000');
     expect(errors).toEqual([]);
     expect(rooms[0]).toEqual(room('Hall', { kind: 'passage', lamps: 2, keepLamps: 1, hours: 3 }));
-    expect(rooms[1]).toEqual({ ...room('Bath', { kind: 'wet', lamps: 2, lampWatts: 7, heavy: [{ what: 'heater', watts: 2000 }] }), order: 1 });
+    expect(rooms[1]).toEqual({
+      ...room('Bath', { kind: 'wet', lamps: 2, lampWatts: 7, heavy: [{ what: 'heater', watts: 2000 }] }),
+      order: 1,
+    });
   });
 
   it('takes a heading in any order of known names, and says which column it does not know', () => {
     const { rooms, errors } = parseSurvey('Sockets;Room;Colour;Hours wanted\n4;Study;blue;2\n');
     expect(rooms).toEqual([room('Study', { outlets: 4, hours: 2 })]);
-    expect(errors).toEqual([{ row: 0, column: null, text: 'Colour', message: 'No column is called Colour: it is left out' }]);
+    expect(errors).toEqual([
+      { row: 0, column: null, text: 'Colour', message: 'No column is called Colour: it is left out' },
+    ]);
   });
 
   it('takes quoted cells with the delimiter, quotes and line ends in them', () => {
@@ -132,7 +144,9 @@ describe('the file of a survey', () => {
       fc.property(anySurvey(true), (rooms) => {
         const back = parseSurvey(surveyCsv(rooms));
         expect(back.errors).toEqual([]);
-        expect(back.rooms.map((row) => COLUMNS.map((column) => writeCell(column, row)))).toEqual(rooms.map((row) => COLUMNS.map((column) => writeCell(column, row))));
+        expect(back.rooms.map((row) => COLUMNS.map((column) => writeCell(column, row)))).toEqual(
+          rooms.map((row) => COLUMNS.map((column) => writeCell(column, row))),
+        );
       }),
       { numRuns: 100 },
     );

@@ -53,7 +53,15 @@ describe('the state of a row against the sheet', () => {
 
 describe('taking the sheet into the survey', () => {
   it('writes what is drawn into the row and keeps what only the survey knows', () => {
-    const doc = changeRow(fresh(), 'study', { lamps: 5, lampWatts: 20, outlets: 0, heavy: [{ what: 'x', watts: 1 }], keepFans: 0, hours: 7, run: 22 });
+    const doc = changeRow(fresh(), 'study', {
+      lamps: 5,
+      lampWatts: 20,
+      outlets: 0,
+      heavy: [{ what: 'x', watts: 1 }],
+      keepFans: 0,
+      hours: 7,
+      run: 22,
+    });
     const next = applyPatch(doc, takeIntoSurvey(doc, 'study'));
     expect(next.survey!.find(({ id }) => id === 'study')).toEqual({ ...sixRooms()[4], hours: 7, run: 22 });
     expect(wordsOf(next).study).toBe('in step');
@@ -62,7 +70,17 @@ describe('taking the sheet into the survey', () => {
   it('makes a row for a place that has none', () => {
     const doc = { ...fresh(), survey: sixRooms().slice(0, 5) };
     const next = applyPatch(doc, takeIntoSurvey(doc, 'bedroom'));
-    expect(next.survey![5]).toMatchObject({ id: 'bedroom', name: 'Bedroom', kind: 'sleeping', lamps: 2, fans: 1, outlets: 2, keepLamps: 1, keepFans: 1, order: 5 });
+    expect(next.survey![5]).toMatchObject({
+      id: 'bedroom',
+      name: 'Bedroom',
+      kind: 'sleeping',
+      lamps: 2,
+      fans: 1,
+      outlets: 2,
+      keepLamps: 1,
+      keepFans: 1,
+      order: 5,
+    });
     expect(isEmptyPatch(draftPatch(next))).toBe(true);
   });
 
@@ -103,7 +121,9 @@ describe('drafting what changed', () => {
     const doc = changeRow(fresh(), 'hall', { lamps: 3 });
     const hand: Installation = {
       ...doc,
-      parts: doc.parts.map((part) => (part.id === 'hall.lamp2' ? { ...part, label: 'over the stairs', watts: 11 } : part)) as Installation['parts'],
+      parts: doc.parts.map((part) =>
+        part.id === 'hall.lamp2' ? { ...part, label: 'over the stairs', watts: 11 } : part,
+      ) as Installation['parts'],
       sheet: { ...doc.sheet, overview: { ...doc.sheet!.overview, 'hall.lamp2': { x: 1250, y: 2500, pinned: true } } },
     };
     const next = applyPatch(hand, draftPatch(hand));
@@ -112,7 +132,11 @@ describe('drafting what changed', () => {
   });
 
   it('draws a new room on ways of its own, and a row with an error not at all', () => {
-    const rows = [...sixRooms(), room('Attic', { lamps: 2, outlets: 1, keepLamps: 1, order: 8 }), room('Cellar', { lamps: 1, keepLamps: 2, order: 9 })];
+    const rows = [
+      ...sixRooms(),
+      room('Attic', { lamps: 2, outlets: 1, keepLamps: 1, order: 8 }),
+      room('Cellar', { lamps: 1, keepLamps: 2, order: 9 }),
+    ];
     const doc = { ...fresh(), survey: rows };
     const next = applyPatch(doc, draftPatch(doc));
     expect(wordsOf(next)).toMatchObject({ attic: 'in step', cellar: 'waits' });
@@ -133,8 +157,17 @@ describe('drafting what changed', () => {
   });
 
   it('moves a fan to the mains, and makes the breaker of an emptied way a spare', () => {
-    const doc = draftDocument([room('Study', { fans: 1, keepFans: 1, hours: 2 }), room('Den', { lamps: 1, keepLamps: 1, order: 1, lampWatts: 1200 })], optionsOf());
-    const next = applyPatch(changeRow(doc, 'study', { keepFans: 0 }), draftPatch(changeRow(doc, 'study', { keepFans: 0 })));
+    const doc = draftDocument(
+      [
+        room('Study', { fans: 1, keepFans: 1, hours: 2 }),
+        room('Den', { lamps: 1, keepLamps: 1, order: 1, lampWatts: 1200 }),
+      ],
+      optionsOf(),
+    );
+    const next = applyPatch(
+      changeRow(doc, 'study', { keepFans: 0 }),
+      draftPatch(changeRow(doc, 'study', { keepFans: 0 })),
+    );
     expect(feedOf(next, 'study.fan1')).toBe('mains');
     expect(next.parts.find(({ id }) => id === 'study.way-backup1')).toMatchObject({ spare: true });
     expect(next.cables.some(({ id }) => id === 'study.backup1.run')).toBe(false);

@@ -19,7 +19,16 @@ describe('the sums of a survey', () => {
 
   it('adds the home, and leaves out of it a row with an error', () => {
     const totals = surveyTotals(sixRooms(), options);
-    expect([totals.lamps, totals.fans, totals.outlets, totals.heavy, totals.keepLamps, totals.keepFans, totals.keepOutletWatts, totals.watts]).toEqual([13, 3, 12, 2, 6, 3, 60, 6544]);
+    expect([
+      totals.lamps,
+      totals.fans,
+      totals.outlets,
+      totals.heavy,
+      totals.keepLamps,
+      totals.keepFans,
+      totals.keepOutletWatts,
+      totals.watts,
+    ]).toEqual([13, 3, 12, 2, 6, 3, 60, 6544]);
     const wrong = sixRooms().map((row) => (row.name === 'Kitchen' ? { ...row, keepLamps: 3 } : row));
     const without = surveyTotals(wrong, options);
     expect(without.watts).toBe(6544 - 3324);
@@ -35,7 +44,10 @@ describe('the sums of a survey', () => {
     expect(amps['heating-power']).toBeCloseTo(2000 / 230, 6);
     // the largest way of outlets whole, 40 % of the others: 300 W, then 300, 300, 200, 100 and the kept 60
     expect(amps.sockets).toBeCloseTo((300 + 0.4 * (300 + 300 + 200 + 100 + 60)) / 230, 6);
-    expect(demandAmps).toBeCloseTo(Object.values(amps).reduce((sum, value) => sum + value, 0), 9);
+    expect(demandAmps).toBeCloseTo(
+      Object.values(amps).reduce((sum, value) => sum + value, 0),
+      9,
+    );
   });
 
   it('asks for the same as the drafted sheet does', () => {
@@ -62,7 +74,9 @@ describe('the sums of a survey', () => {
     const rooms = sixRooms();
     const ways = findWays(draftDocument(rooms, options));
     for (const row of surveyTotals(rooms, options).rooms) {
-      const drawn = ways.filter(({ places }) => places.some((place) => place === row.room || place === `${row.room}.dry`)).map(({ number }) => number);
+      const drawn = ways
+        .filter(({ places }) => places.some((place) => place === row.room || place === `${row.room}.dry`))
+        .map(({ number }) => number);
       expect(row.ways, row.room).toEqual(drawn);
     }
   });
