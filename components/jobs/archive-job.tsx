@@ -2,10 +2,11 @@
 
 import { useRouter } from 'next/navigation';
 import { useState } from 'react';
+import { RefusalLine } from '@/components/frame/refusal-line';
 import { Button } from '@/components/ui/button';
 import { ConfirmBar } from '@/components/ui/confirm-bar';
-import { ErrorLine } from '@/components/ui/error-line';
 import { callApi } from '@/lib/shared/api-client';
+import type { ErrorAnswer } from '@/lib/shared/errors';
 import type { JobView } from '@/lib/shared/jobs';
 
 /** Puts a job into the archive, or takes it out again; nothing of it is lost either way. */
@@ -13,14 +14,14 @@ export function ArchiveJob({ job }: { job: JobView }) {
   const router = useRouter();
   const [asking, setAsking] = useState(false);
   const [busy, setBusy] = useState(false);
-  const [refusal, setRefusal] = useState('');
+  const [refusal, setRefusal] = useState<ErrorAnswer | null>(null);
   const send = async (archived: boolean) => {
     setBusy(true);
-    setRefusal('');
+    setRefusal(null);
     const answer = await callApi<JobView>('PATCH', `/api/jobs/${job.id}`, { version: job.version, archived });
     setBusy(false);
     setAsking(false);
-    if (!answer.ok) return setRefusal(answer.refusal.message);
+    if (!answer.ok) return setRefusal(answer.refusal);
     router.push(archived ? '/jobs' : `/jobs?filter=all&search=${encodeURIComponent(job.number)}`);
     router.refresh();
   };
@@ -47,7 +48,7 @@ export function ArchiveJob({ job }: { job: JobView }) {
       )}
       {refusal && (
         <div className="mt-2">
-          <ErrorLine>{refusal}</ErrorLine>
+          <RefusalLine refusal={refusal} />
         </div>
       )}
     </section>

@@ -1,8 +1,8 @@
 'use client';
 
 import { useEffect, useRef, type ReactNode } from 'react';
+import { RefusalLine } from '@/components/frame/refusal-line';
 import { Button, ButtonLink } from '@/components/ui/button';
-import { ErrorLine } from '@/components/ui/error-line';
 import { CheckField, TextField } from '@/components/ui/field';
 import type { PersonRow } from '@/lib/shared/people';
 import { ClientField } from './client-field';
@@ -104,7 +104,7 @@ export function JobForm({ form, isNew, apprentices }: { form: JobFormState; isNe
       {form.theirs ? (
         <VersionConflict mine={values} theirs={form.theirs} onMine={form.keepMine} onTheirs={form.takeTheirs} />
       ) : (
-        form.refusal && <ErrorLine>{form.refusal}</ErrorLine>
+        form.refusal && <RefusalLine refusal={form.refusal} />
       )}
       <div className="flex items-center gap-4">
         <Button type="submit" solid size="large" disabled={form.busy}>

@@ -3,6 +3,7 @@
 import { useRouter } from 'next/navigation';
 import { useEffect, useRef, useState } from 'react';
 import { callApi } from '@/lib/shared/api-client';
+import type { ErrorAnswer } from '@/lib/shared/errors';
 import type { JobView } from '@/lib/shared/jobs';
 import { NEW_JOB, formErrors, readForm, valuesOf, type FieldErrors, type JobFormField, type JobFormValues } from './form-values';
 
@@ -11,7 +12,7 @@ export function useJobForm(job: JobView | null) {
   const router = useRouter();
   const [values, setValues] = useState<JobFormValues>(job ? valuesOf(job) : NEW_JOB);
   const [errors, setErrors] = useState<FieldErrors>({});
-  const [refusal, setRefusal] = useState('');
+  const [refusal, setRefusal] = useState<ErrorAnswer | null>(null);
   const [busy, setBusy] = useState(false);
   /** the job as somebody else saved it meanwhile */
   const [theirs, setTheirs] = useState<JobView | null>(null);
@@ -33,7 +34,7 @@ export function useJobForm(job: JobView | null) {
 
   const save = async () => {
     const read = readForm(values, job?.supply);
-    setRefusal('');
+    setRefusal(null);
     if (!read.ok) {
       setErrors(read.errors);
       return;
@@ -50,7 +51,7 @@ export function useJobForm(job: JobView | null) {
       return;
     }
     setErrors(formErrors(answer.refusal.fields ?? {}));
-    setRefusal(answer.refusal.message);
+    setRefusal(answer.refusal);
     if (job && answer.refusal.error === 'conflict') {
       const newest = await callApi<JobView>('GET', `/api/jobs/${job.id}`);
       if (newest.ok) setTheirs(newest.data);
@@ -69,14 +70,14 @@ export function useJobForm(job: JobView | null) {
     keepMine() {
       if (theirs) version.current = theirs.version;
       setTheirs(null);
-      setRefusal('');
+      setRefusal(null);
     },
     takeTheirs() {
       if (!theirs) return;
       version.current = theirs.version;
       setValues(valuesOf(theirs));
       setTheirs(null);
-      setRefusal('');
+      setRefusal(null);
       setDirty(false);
     },
   };

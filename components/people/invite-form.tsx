@@ -1,8 +1,8 @@
 'use client';
 
 import { useState, type FormEvent } from 'react';
+import { RefusalLine } from '@/components/frame/refusal-line';
 import { Button } from '@/components/ui/button';
-import { ErrorLine } from '@/components/ui/error-line';
 import { TextField } from '@/components/ui/field';
 import { InviteSchema, type PersonRole } from '@/lib/shared/people';
 import { RoleBoxes } from './role-boxes';
@@ -36,7 +36,7 @@ export function InviteForm({ state, onClose }: { state: People; onClose(): void 
       </div>
       {state.refusal && (
         <div className="mt-3">
-          <ErrorLine>{state.refusal}</ErrorLine>
+          <RefusalLine refusal={state.refusal} />
         </div>
       )}
       <div className="mt-4 flex gap-2">

@@ -4,8 +4,8 @@ import { useState } from 'react';
 import { SheetFrame } from '@/components/frame/sheet-frame';
 import { useSingleKeys } from '@/components/frame/single-keys';
 import { teamTabs } from '@/components/frame/tabs';
+import { RefusalLine } from '@/components/frame/refusal-line';
 import { Button } from '@/components/ui/button';
-import { ErrorLine } from '@/components/ui/error-line';
 import { Key } from '@/components/ui/key';
 import { Heading } from '@/components/ui/table';
 import { ROLES, type PersonRole, type PersonRow as Person } from '@/lib/shared/people';
@@ -88,7 +88,7 @@ export function PeopleSheet({ people, mayManage, person, team, today }: PeopleSh
         </header>
         {state.link && <GivenLink given={state.link} onClose={state.closeLink} />}
         {inviting && <InviteForm state={state} onClose={() => setInviting(false)} />}
-        {state.refusal && !inviting && <ErrorLine>{state.refusal}</ErrorLine>}
+        {state.refusal && !inviting && <RefusalLine refusal={state.refusal} />}
         <table role="table" aria-label="People of the team" className="w-full border-collapse max-[700px]:block">
           <thead role="rowgroup" className="max-[700px]:sr-only">
             <tr role="row">

@@ -2,6 +2,7 @@
 
 import { useState } from 'react';
 import { callApi } from '@/lib/shared/api-client';
+import type { ErrorAnswer } from '@/lib/shared/errors';
 import type { PersonRole, PersonRow } from '@/lib/shared/people';
 
 /** A link that is shown this once, to be passed on by the person who asked for it. */
@@ -21,7 +22,7 @@ interface Invitation {
 export function usePeople(first: readonly PersonRow[]) {
   const [people, setPeople] = useState(first);
   const [link, setLink] = useState<GivenLink | null>(null);
-  const [refusal, setRefusal] = useState('');
+  const [refusal, setRefusal] = useState<ErrorAnswer | null>(null);
   const [fields, setFields] = useState<Record<string, string>>({});
   const [busy, setBusy] = useState<string | null>(null);
 
@@ -31,12 +32,12 @@ export function usePeople(first: readonly PersonRow[]) {
     );
   const ask = async <T>(who: string, path: string, method: 'POST' | 'PATCH', body?: unknown): Promise<T | null> => {
     setBusy(who);
-    setRefusal('');
+    setRefusal(null);
     setFields({});
     const answer = await callApi<T>(method, path, body);
     setBusy(null);
     if (answer.ok) return answer.data;
-    setRefusal(answer.refusal.message);
+    setRefusal(answer.refusal);
     setFields(answer.refusal.fields ?? {});
     return null;
   };
@@ -49,7 +50,7 @@ export function usePeople(first: readonly PersonRow[]) {
     busy,
     closeLink: () => setLink(null),
     refuse(message: Record<string, string>) {
-      setRefusal('');
+      setRefusal(null);
       setFields(message);
     },
     async invite(invitation: Invitation): Promise<boolean> {

@@ -29,7 +29,9 @@ export function ListPanel({ label, placeholder, items, onPick, onLeave, children
   const shown = items(typed);
   const chosen = Math.min(index, Math.max(0, shown.length - 1));
   useEffect(() => field.current?.focus(), []);
-  useEffect(() => document.getElementById(`${list}-${chosen}`)?.scrollIntoView({ block: 'nearest' }), [list, chosen]);
+  useEffect(() => {
+    document.getElementById(`${list}-${chosen}`)?.scrollIntoView({ block: 'nearest' });
+  }, [list, chosen]);
   const onKeyDown = (event: KeyboardEvent) => {
     event.stopPropagation();
     if (event.nativeEvent.isComposing) return;

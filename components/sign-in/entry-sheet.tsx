@@ -32,7 +32,7 @@ export function EntrySheet({ sheet, state, children }: EntrySheetProps) {
           </div>
           <div className="flex flex-col lap:w-[562px] lap:shrink-0">
             <div className="flex-1 px-4 py-6 lap:px-0 lap:pt-10">
-              <p className="text-[32px] leading-10 tracking-[-0.02em] lap:text-[48px] lap:leading-[56px]">Ohmstead</p>
+              <h1 className="text-[32px] leading-10 tracking-[-0.02em] lap:text-[48px] lap:leading-[56px]">Ohmstead</h1>
               <p className="mt-3 max-w-[480px] text-[14px] leading-[22px] lap:mt-4 lap:text-[16px] lap:leading-6">
                 Draw a home from the service line to the last lamp, both sources. Have it read, prove it by test, leave the file with the
                 house.

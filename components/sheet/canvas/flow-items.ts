@@ -1,23 +1,18 @@
 import { Position, type Edge, type Node } from 'reactflow';
 import type { ScenePart, SceneRun } from '@/diagram/layout/scene';
-import type { Side } from '@/diagram/symbols/types';
 import { px } from './units';
 
 export type PartNode = Node<{ part: ScenePart }, 'part'>;
 export type RunEdge = Edge<{ run: SceneRun }, 'run'>;
 
-const SIDE: Record<Side, Position> = {
-  up: Position.Top,
-  right: Position.Right,
-  down: Position.Bottom,
-  left: Position.Left,
-};
-
 /** Made once per object of the scene: what did not change is the same node again. */
 const nodes = new WeakMap<ScenePart, PartNode>();
 const edges = new WeakMap<SceneRun, RunEdge>();
 
-/** A part as a node. Its size and its terminals are given from the symbol, never measured. */
+/**
+ * A part as a node. Its size is given from the symbol, never measured; where runs end is the scene's business, so that one
+ * handle, of no account, is all that the canvas gets.
+ */
 export function nodeOf(part: ScenePart): PartNode {
   const known = nodes.get(part);
   if (known) return known;
@@ -28,15 +23,7 @@ export function nodeOf(part: ScenePart): PartNode {
     position: { x: px(part.x), y: px(part.y) },
     ...size,
     measured: size,
-    handles: part.terminals.map(({ mark, x, y, side }) => ({
-      id: mark,
-      type: 'source' as const,
-      position: SIDE[side],
-      x: px(x - part.x),
-      y: px(y - part.y),
-      width: 1,
-      height: 1,
-    })),
+    handles: [{ type: 'source', position: Position.Top, x: 0, y: 0, width: 1, height: 1 }],
     data: { part },
   };
   nodes.set(part, node);
@@ -51,9 +38,7 @@ export function edgeOf(run: SceneRun): RunEdge {
     id: run.id,
     type: 'run',
     source: run.from[0],
-    sourceHandle: run.from[1],
     target: run.to[0],
-    targetHandle: run.to[1],
     data: { run },
   };
   edges.set(run, edge);

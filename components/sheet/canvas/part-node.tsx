@@ -1,5 +1,5 @@
 import { memo } from 'react';
-import type { NodeProps } from 'reactflow';
+import { Handle, Position, type NodeProps } from 'reactflow';
 import type { ScenePart } from '@/diagram/layout/scene';
 import { symbolById } from '@/diagram/symbols';
 import { turnTransform } from '@/diagram/symbols/turn';
@@ -42,14 +42,17 @@ export function PartPicture({ part }: { part: ScenePart }) {
 /** One part on the canvas. Selection, terminals and lettering are layers of their own. */
 export const PartNodeView = memo(function PartNodeView({ data: { part } }: NodeProps<PartNode>) {
   return (
-    <svg
-      data-part={part.id}
-      viewBox={`0 0 ${part.width} ${part.height}`}
-      className="block h-full w-full overflow-visible"
-      aria-hidden="true"
-    >
-      <rect x={-125} y={-125} width={part.width + 250} height={part.height + 250} fill="transparent" />
-      <PartPicture part={part} />
-    </svg>
+    <>
+      <svg
+        data-part={part.id}
+        viewBox={`0 0 ${part.width} ${part.height}`}
+        className="block h-full w-full overflow-visible"
+        aria-hidden="true"
+      >
+        <rect x={-125} y={-125} width={part.width + 250} height={part.height + 250} fill="transparent" />
+        <PartPicture part={part} />
+      </svg>
+      <Handle type="source" position={Position.Top} isConnectable={false} className="invisible" />
+    </>
   );
 });

@@ -114,8 +114,9 @@ export function SlipPanel({ slip, name, onLeave }: SlipProps) {
   const list = useId();
   const line = slip.lines[slip.index];
   useEffect(() => field.current?.focus({ preventScroll: true }), [name]);
-  useEffect(
-    () => document.getElementById(`${list}-${slip.index}`)?.scrollIntoView({ block: 'nearest' }),
+  useEffect(() => {
+    document.getElementById(`${list}-${slip.index}`)?.scrollIntoView({ block: 'nearest' });
+  },
     [list, slip.index],
   );
 

@@ -42,11 +42,14 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
   const mayEdit = useSheet(drawing.store, (state) => state.rights.edit) && editing;
   const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
   const { undo } = drawing.store.getState();
+  const said = hint(mode, handWords(document, selection), mayEdit);
   return (
     <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
       <Strip scene={scene} notes={notes} />
       <div className="flex min-w-0 flex-1 flex-col justify-between gap-1">
-        <p className="line-clamp-2 leading-[15px]">{hint(mode, handWords(document, selection), mayEdit)}</p>
+        <p className="truncate leading-[15px]" title={said}>
+          {said}
+        </p>
         <p role="status" className="truncate text-small leading-[14px] text-grey" title={notice}>
           {notice}
         </p>

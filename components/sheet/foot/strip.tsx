@@ -43,7 +43,7 @@ export function Strip({ scene, notes }: { scene: Scene; notes: readonly MarkedNo
         ref={box}
         viewBox={`0 0 ${whole.width} ${HEIGHT}`}
         preserveAspectRatio="none"
-        className="h-8 w-full cursor-grab touch-none lap:w-[280px]"
+        className="block h-9 w-full cursor-grab touch-none lap:w-[240px]"
         onPointerDown={(event) => {
           event.currentTarget.setPointerCapture(event.pointerId);
           go(event);

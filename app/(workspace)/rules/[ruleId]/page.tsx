@@ -33,7 +33,7 @@ export default async function RuleDetailPage({ params }: { params: Params }) {
       margin={
         <nav aria-label="Rules of this group">
           <h2 className="text-head font-bold">{GROUPS[meta.group]}</h2>
-          <ul className="mt-2 flex flex-col gap-1">
+          <ul className="mt-2 flex flex-col">
             {metas
               .filter(({ group }) => group === meta.group)
               .map(({ id, title }) => (
@@ -41,7 +41,7 @@ export default async function RuleDetailPage({ params }: { params: Params }) {
                   <Link
                     href={`/rules/${id}`}
                     aria-current={id === meta.id ? 'page' : undefined}
-                    className={`text-ink ${id === meta.id ? 'font-bold no-underline' : 'underline underline-offset-[3px]'}`}
+                    className={`block py-1 text-ink pointer-coarse:py-3 ${id === meta.id ? 'font-bold no-underline' : 'underline underline-offset-[3px]'}`}
                   >
                     {title}
                   </Link>
