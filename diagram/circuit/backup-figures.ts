@@ -35,7 +35,7 @@ const asBacked =
     name: part.id,
     watts,
     pf: amps > 0 ? Math.min(1, watts / (amps * voltage)) : 1,
-    surge: amps > 0 ? startAmps / amps : 1,
+    surge: amps > 0 ? Math.min(20, Math.max(1, startAmps / amps)) : 1,
   });
 
 /** Works out each backup source, by designation: all that it feeds on at once. */
