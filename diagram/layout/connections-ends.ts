@@ -68,15 +68,27 @@ export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>): Plac
   const lowest = Math.max(TOP.first, ...[...bodies.values()].map((body) => body.y + body.height));
   const rowOf = (atFoot: boolean): PlacedCable[] => {
     const list = page.cables.filter((cable) => cable.atFoot === atFoot);
-    const first = (cable: PageCable): number => Math.min(...cable.cores.map((core) => wish(core) ?? Infinity));
-    list.sort((a, b) => first(a) - first(b) || (a.id < b.id ? -1 : 1));
+    const wishes = (cable: PageCable): number[] => cable.cores.flatMap((core) => wish(core) ?? []);
+    const first = (cable: PageCable): number => Math.min(Infinity, ...wishes(cable));
+    const coming = list.filter((cable) => !cable.outgoing);
+    // what leaves a room leaves right of the cable that feeds it there
+    const rank = (cable: PageCable): number =>
+      cable.outgoing && !atFoot
+        ? Math.max(first(cable), ...coming.filter((other) => first(other) <= first(cable) && Math.max(...wishes(other)) >= first(cable)).map((other) => Math.max(...wishes(other)) + 1))
+        : first(cable);
+    list.sort((a, b) => rank(a) - rank(b) || Number(a.outgoing) - Number(b.outgoing) || (a.id < b.id ? -1 : 1));
     let free = m(8);
     return list.map((cable): PlacedCable => {
       const pitch = atFoot ? FOOT_CORE : CORE_PITCH;
       const stubs: Stub[] = [];
       const words = Math.max(...cable.lines.map((line, i) => textWidth(line, i === 0 ? BODY : NAME)));
-      for (const core of cable.cores) {
-        const least = stubs.length > 0 ? stubs.at(-1)!.x + pitch : free + m(1);
+      const order = { L: 0, N: 1, E: 2 };
+      const cores = [...cable.cores].sort((a, b) => order[a.core] - order[b.core] || (wish(a) ?? 0) - (wish(b) ?? 0));
+      // neutral and earth of a way pass beside its device, not through it
+      const device = atFoot ? bodies.get(cable.cores.find((core) => core.core === 'L')?.here[0] ?? '') : undefined;
+      for (const core of cores) {
+        const beside = device && wish(core) === undefined ? device.x + device.width + m(1) : 0;
+        const least = Math.max(beside, stubs.length > 0 ? stubs.at(-1)!.x + pitch : free + m(1));
         const wanted = wish(core);
         const x = Math.max(least, wanted === undefined ? least : Math.round(wanted / MODULE) * MODULE);
         stubs.push({ core, x, y: atFoot ? lowest + FOOT.cores : TOP.cores, side: atFoot ? 'up' : 'down' });
@@ -129,7 +141,10 @@ function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodie
     terminals.push({ mark, x: place, y: axis, side });
     least = place + 2 * MODULE;
   }
-  beyond.sort((a, b) => Number(a) - Number(b)).forEach((mark, i) => terminals.push({ mark, x: at.x + 2 * MODULE + i * 3 * MODULE, y: axis, side: 'up' }));
+  // what feeds the bar comes to its left end, the rest beside it
+  beyond
+    .sort((a, b) => Number(a) - Number(b))
+    .forEach((mark, i) => terminals.push(i === 0 ? { mark, x: at.x, y: axis, side: 'left' } : { mark, x: at.x - MODULE + i * 3 * MODULE, y: axis, side: 'up' }));
   for (const mark of used) if (!terminals.some((t) => t.mark === mark)) terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
   const right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 2 * MODULE;
   let free = 1;

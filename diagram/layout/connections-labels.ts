@@ -4,8 +4,9 @@ import type { Page } from './connections-page';
 import { isLongBar } from './connections-place';
 import type { Body } from './ends';
 import { Ground, blockTexts, placeLabel, type Anchor, type Label } from './labels';
-import { BODY } from './lettering';
+import { BODY, breakLines } from './lettering';
 import { printedRef } from './overview-labels';
+import { m } from './overview-metrics';
 import type { OverviewPlan } from './overview-plan';
 import type { Point, SceneFrame, SceneText } from './scene';
 import { textBox } from './text-box';
@@ -23,6 +24,8 @@ export interface PageTexts {
 const RING = 150;
 const NAME = 200;
 const MARK = 180;
+/** Ratings are broken to lines of this width. */
+const LINE = 2100;
 const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: Anchor['vertical']): Anchor => ({ x, y, horizontal, vertical });
 
 function markPlaces(t: { x: number; y: number }): Anchor[] {
@@ -51,6 +54,8 @@ function namePlaces(body: Body, round: boolean): Anchor[] {
 /** Places all lettering of a page. */
 export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<string, Body>, cables: readonly PlacedCable[], frames: readonly SceneFrame[], routes: ReadonlyMap<string, Point[]>): PageTexts {
   const ground = new Ground();
+  // nothing is written outside the page
+  ground.add({ x: -m(200), y: -m(10), width: m(200) + 300, height: m(2000) });
   const inside: { box: Body; id: string }[] = [];
   for (const [id, body] of bodies) {
     const part = plan.graph.byId.get(id)!;
@@ -63,7 +68,7 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
   for (const { x, y, width: w, height: h, kind, texts } of frames) {
     if (kind === 'switchboard') ground.addPath([{ x, y }, { x: x + w, y }, { x: x + w, y: y + h }, { x, y: y + h }, { x, y }], 20);
     else ground.add({ x, y, width: w, height: h });
-    for (const text of texts) ground.add(textBox(text));
+    if (kind === 'brace') for (const text of texts) ground.add(textBox(text));
   }
   const texts: PageTexts = { parts: new Map(), wires: new Map(), loose: [], reach: [] };
   const keep = (map: Map<string, SceneText[]>, label: Label): void => {
@@ -86,11 +91,12 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
       if (wired) keep(texts.parts, { owner: part.id, size: MARK, lines: [[{ text: t.mark, tone: 'grey' }]], places: markPlaces(t), optional: true });
     }
   for (const { box } of inside) ground.add(box);
+  for (const frame of frames) if (frame.kind === 'switchboard') nameBoard(ground, frame);
   // designations and ratings: outside
   for (const part of [...page.parts].sort((a, b) => byCode(a.id, b.id))) {
     const body = bodies.get(part.id)!;
     const ref = printedRef(part);
-    const lines = [...(ref && part.kind !== 'joint' ? [[{ text: ref, bold: true }]] : []), ...ratingLines(part).slice(0, 2).map((text) => [{ text, tone: 'grey' as const }])];
+    const lines = [...(ref && part.kind !== 'joint' ? [[{ text: ref, bold: true }]] : []), ...ratingLines(part).slice(0, 2).flatMap((text) => breakLines(text, BODY, LINE)).map((text) => [{ text, tone: 'grey' as const }])];
     if (part.kind === 'joint' || lines.length === 0) continue;
     const round = part.kind === 'lamp' || part.kind === 'fan' || part.kind === 'appliance';
     const bar = isLongBar(part.kind);
@@ -100,6 +106,23 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
     keep(texts.parts, { owner: part.id, size: BODY, lines: bar ? barLine : lines, places: bar ? barPlaces : namePlaces(body, round) });
   }
   return texts;
+}
+
+/** The name of a switchboard stands at a corner of its frame, wherever there is room. */
+function nameBoard(ground: Ground, frame: SceneFrame): void {
+  const [name] = frame.texts;
+  if (!name) return;
+  const { x, y, width, height } = frame;
+  const places = [
+    at(x + 150, y - 100, 'start', 'bottom'),
+    at(x + 150, y + 150, 'start', 'top'),
+    at(x + width - 150, y - 100, 'end', 'bottom'),
+    at(x + width - 150, y + 150, 'end', 'top'),
+    at(x + 150, y + height + 150, 'start', 'top'),
+    at(x + width - 150, y + height + 150, 'end', 'top'),
+  ];
+  const block = placeLabel(ground, { owner: frame.id, size: BODY, lines: [[{ text: name.text, bold: true }]], places });
+  frame.texts = block ? blockTexts(block) : [];
 }
 
 const isAt = (end: readonly [string, string], part: string, mark: string): boolean => end[0] === part && end[1] === mark;

@@ -17,9 +17,11 @@ import type { Page } from './connections-page';
 export const TOP = { text: m(3), brace: m(7), cores: m(8), first: m(18) } as const;
 /** Between the terminals of a way's device and its neutral and earth cores. */
 export const FOOT_CORE = m(2);
+/** From one way's earth core to the next way's device: its designation stands there. */
+const FOOT_GAP = m(4);
 /** From a device's lower edge to where its way's cable leaves, and the brace below. */
 export const FOOT = { cores: m(10), brace: m(12) } as const;
-const LEFT = m(8);
+const LEFT = m(11);
 const ROW_GAP = m(6);
 const COLUMN_GAP = m(8);
 
@@ -43,6 +45,20 @@ export function sizeOf(part: Part, marks: ReadonlyMap<string, readonly string[]>
   return isBar(part.kind) ? { width: barLength(part.kind as BarKind, Math.max(2, marks.get(part.id)?.length ?? 2)), height: symbol.height } : { width: symbol.width, height: symbol.height };
 }
 
+/** One way's part of a room, before it has a place. */
+interface RoomBlock {
+  columns: TreeNode[][];
+  rows: ReadonlyMap<TreeNode, number>;
+  joints: readonly Part[];
+  top: (row: number) => number;
+  /** has switches or joints: stands in the switchboard */
+  controls: boolean;
+  /** upper edge of its loads as its own rows ask for; 0 where nothing does */
+  loadsTop: number;
+  /** its cable comes straight from a board */
+  way: boolean;
+}
+
 class PagePlanner {
   readonly positions = new Map<string, Position>();
   private readonly marks: ReadonlyMap<string, readonly string[]>;
@@ -62,10 +78,7 @@ class PagePlanner {
   run(): Map<string, Position> {
     this.board();
     this.lane();
-    for (const room of this.plan.content.rooms) {
-      const entries = room.entries.filter((entry) => this.own.has(entry.node.part.id));
-      for (const entry of entries) this.entry(entry, entry.node);
-    }
+    this.rooms();
     this.rest();
     return this.positions;
   }
@@ -125,14 +138,14 @@ class PagePlanner {
     const neutralOf = this.neutralBars(groups, chains);
     const above = [...this.page.parts].filter((part) => part.kind === 'neutral-bar' && ![...neutralOf.values()].flat().includes(part));
     const sideRow = side.length > 0 ? m(16) : 0;
-    let row = Math.max(TOP.first, trunkBottom - m(6) - (above.length + trunkBars.length) * m(5) - sideRow);
+    let row = Math.max(TOP.first, trunkBottom - m(6) - (above.length + trunkBars.length) * m(6) - sideRow);
     for (const part of above) {
       this.put(part, right, row);
-      row += m(5);
+      row += m(6);
     }
     for (const node of trunkBars) {
       this.put(node.part, right, row);
-      row += m(5);
+      row += m(6);
     }
     // feeders and arresters hang from the bars of the column at their left end
     let sideX = right + m(2);
@@ -142,23 +155,23 @@ class PagePlanner {
     row = chainTop + (chainRows > 0 || side.length > 0 ? Math.max(1, chainRows) * m(14) : 0);
     const earthRow = row;
     for (const part of this.page.parts) if (part.kind === 'earth-bar') this.put(part, right, row);
-    row += m(5);
+    row += m(6);
     const neutralRow = row;
     const neutralRows = Math.max(1, ...[...neutralOf.values()].map((list) => list.length));
-    row += m(5) * neutralRows;
+    row += m(6) * neutralRows;
     const lineRow = row;
-    const ways = lineRow + m(5);
+    const ways = lineRow + m(7);
     if (side.length > 0 && chainRows === 0) x = right;
     for (const [from, items] of groups) {
       const start = x;
       let cy = chainTop;
       for (const node of chains.get(from)!) cy = this.put(node.part, x, cy).bottom + m(4);
-      (neutralOf.get(from) ?? []).forEach((part, i) => this.put(part, start, neutralRow + m(5) * i));
+      (neutralOf.get(from) ?? []).forEach((part, i) => this.put(part, start, neutralRow + m(6) * i));
       if (this.here(from)) this.put(from.part, start, lineRow);
       let slot = start + m(2);
       for (const item of [...items].sort((a, b) => a.order - b.order)) {
         const { right: end } = this.put(item.head!.part, slot, ways);
-        slot = end + FOOT_CORE * 2 + m(2);
+        slot = end + m(1) + FOOT_CORE + FOOT_GAP;
       }
       x = Math.max(slot, start + m(16)) + m(6);
     }
@@ -208,10 +221,22 @@ class PagePlanner {
     });
   }
 
+  /** The ways of a room side by side: those with switches or joints first, so that the switchboard is one; all loads in one row. */
+  private rooms(): void {
+    const entries = this.plan.content.rooms
+      .flatMap((room) => room.entries)
+      .map((entry) => ({ entry, nodes: [...walk(entry.node)].filter((node) => this.here(node) && this.plan.content.entryOf.get(node) === entry) }))
+      .filter(({ nodes }) => nodes.length > 0);
+    const joints = this.jointsByEntry(entries.map(({ nodes }) => nodes));
+    const blocks = entries.map(({ entry, nodes }, i) => this.block(entry, nodes, joints[i]!));
+    const rank = (block: RoomBlock): number => (block.controls ? 0 : 2) + (block.way ? 0 : 1);
+    blocks.sort((a, b) => rank(a) - rank(b));
+    const loadsTop = Math.max(TOP.first + m(6), ...blocks.map((block) => block.loadsTop));
+    for (const block of blocks) this.putBlock(block, loadsTop);
+  }
+
   /** A way's part of a room: a column a load, what works it above; then the joints of its neutral and earth. */
-  private entry(entry: Entry, root: TreeNode): void {
-    const nodes = [...walk(root)].filter((node) => this.here(node) && this.plan.content.entryOf.get(node) === entry);
-    if (nodes.length === 0) return;
+  private block(entry: Entry, nodes: readonly TreeNode[], joints: readonly Part[]): RoomBlock {
     const columns: TreeNode[][] = [];
     const columnOf = new Map<TreeNode, TreeNode[]>();
     const rows = new Map<TreeNode, number>();
@@ -227,12 +252,16 @@ class PagePlanner {
       columnOf.set(node, column);
       rows.set(node, row);
     }
-    const joints = this.jointsOf(nodes);
     const control = [...rows.values()].filter((row) => row < LOADS);
     const hasRail = joints.length > 0 || control.includes(0);
     const most = Math.max(0, ...control);
     const top = (row: number): number => TOP.first + (row > 0 && hasRail ? m(8) : 0) + Math.max(0, row - 1) * (m(10) + ROW_GAP);
-    const loadsTop = most > 0 || control.length > 0 || hasRail ? top(Math.max(1, most + 1)) + m(4) + Math.min(12, joints.length * 2 + nodes.length) * MODULE : TOP.first + m(6);
+    const controls = control.length > 0 || joints.length > 0;
+    const loadsTop = controls ? top(Math.max(1, most + 1)) + m(4) + Math.min(12, joints.length * 2 + nodes.length) * MODULE : 0;
+    return { columns, rows, joints, top, controls, loadsTop, way: entry.way !== undefined };
+  }
+
+  private putBlock({ columns, rows, joints, top }: RoomBlock, loadsTop: number): void {
     let x = this.x;
     for (const column of columns) {
       let width = 0;
@@ -252,26 +281,35 @@ class PagePlanner {
     return Object.values(symbolFor(part, 'connections').terminals)[0]?.x ?? 0;
   }
 
-  /** Joints of neutral and earth that an entry's parts meet, neutral first. */
-  private jointsOf(nodes: readonly TreeNode[]): Part[] {
-    const reached = new Set(nodes.map((node) => node.part.id));
-    const joints: Part[] = [];
-    for (let grew = true; grew; ) {
-      grew = false;
-      for (const wire of this.page.inner)
-        for (const [a, b] of [
-          [wire.from[0], wire.to[0]],
-          [wire.to[0], wire.from[0]],
-        ] as const) {
-          const part = this.plan.graph.byId.get(b)!;
-          if (!reached.has(a) || reached.has(b) || part.kind !== 'joint' || this.positions.has(b)) continue;
-          reached.add(b);
-          joints.push(part);
+  /** Joints of neutral and earth by entry: those that its own cable brings first, then those its parts meet. */
+  private jointsByEntry(entries: readonly (readonly TreeNode[])[]): Part[][] {
+    const taken = new Set<string>();
+    const found = entries.map((): Part[] => []);
+    const cablesOf = (id: string): string[] => this.page.cables.filter((cable) => cable.cores.some((core) => core.here[0] === id)).map((cable) => cable.id);
+    const joints = this.page.parts.filter((part) => part.kind === 'joint' && !this.positions.has(part.id) && !entries.some((nodes) => nodes.some((node) => node.part.id === part.id)));
+    entries.forEach((nodes, i) => {
+      const own = new Set(nodes.flatMap((node) => cablesOf(node.part.id)));
+      for (const joint of joints)
+        if (!taken.has(joint.id) && cablesOf(joint.id).some((cable) => own.has(cable))) {
+          taken.add(joint.id);
+          found[i]!.push(joint);
+        }
+    });
+    entries.forEach((nodes, i) => {
+      const reached = new Set([...nodes.map((node) => node.part.id), ...found[i]!.map((part) => part.id)]);
+      for (let grew = true; grew; ) {
+        grew = false;
+        for (const joint of joints) {
+          if (taken.has(joint.id) || !this.page.inner.some((wire) => (wire.from[0] === joint.id && reached.has(wire.to[0])) || (wire.to[0] === joint.id && reached.has(wire.from[0])))) continue;
+          taken.add(joint.id);
+          reached.add(joint.id);
+          found[i]!.push(joint);
           grew = true;
         }
-    }
-    const isEarth = (part: Part): number => Number(this.page.inner.some((wire) => (wire.from[0] === part.id || wire.to[0] === part.id) && coreOf(wire.role) === 'E'));
-    return joints.sort((a, b) => isEarth(a) - isEarth(b));
+      }
+    });
+    const isEarth = (part: Part): number => Number([...this.page.inner, ...this.page.cables.flatMap((c) => c.cores.map((core) => core.wire))].some((wire) => (wire.from[0] === part.id || wire.to[0] === part.id) && coreOf(wire.role) === 'E'));
+    return found.map((list) => list.sort((a, b) => isEarth(a) - isEarth(b)));
   }
 
   /** What nothing leads to, in rows below all else. */

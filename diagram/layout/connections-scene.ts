@@ -19,6 +19,7 @@ import type { Obstacle, RouteEnd, RouteRequest } from './route-grid';
 import { findHops } from './route-marks';
 import type { Point, Scene, ScenePart, SceneRun } from './scene';
 import { byIdOf } from './scene-order';
+import { textBox } from './text-box';
 
 export { connectionPages, type ConnectionPage } from './connections-page';
 
@@ -38,7 +39,7 @@ function positionsOf(doc: Installation, page: Page, planned: ReadonlyMap<string,
 
 /** Ways out of a terminal: its own side, then those beside it. Bars and joints are left up or down alike. */
 function sidesOf(part: Part, side: Side): Pick<RouteEnd, 'sides' | 'even'> {
-  if (isLongBar(part.kind)) return { sides: ['down', 'up'], even: true };
+  if (isLongBar(part.kind)) return side === 'left' ? { sides: ['left'] } : { sides: ['down', 'up'], even: true };
   if (part.kind === 'joint') return { sides: ['down', 'up'], even: true };
   if (part.kind === 'socket') return { sides: ['up', 'down'] };
   const beside: Side[] = side === 'up' || side === 'down' ? ['right', 'left'] : ['down', 'up'];
@@ -86,6 +87,7 @@ export function connectionsScene(doc: Installation, place?: string): Scene {
     ...runs.flatMap((r) => r.points),
     ...frames.map((frame) => ({ x: frame.x + frame.width, y: frame.y + frame.height })),
     ...texts.reach,
+    ...frames.flatMap((frame) => frame.texts).map((text) => ({ x: textBox(text).x + textBox(text).width, y: text.y })),
   ];
   return {
     face: 'connections',

@@ -52,48 +52,65 @@ export function blockAt(label: Label, at: Anchor): Block {
   return { x, y, width, height, label, horizontal: at.horizontal };
 }
 
+interface Taken extends Box {
+  owner: string | undefined;
+  /** number of the last question that met it */
+  asked: number;
+}
+
 /** What stands on the sheet already, found by place. */
 export class Ground {
-  private readonly cells = new Map<string, Box[]>();
+  private readonly cells = new Map<number, Taken[]>();
+  private question = 0;
 
-  add(box: Box): void {
-    this.each(box, (key) => {
-      const list = this.cells.get(key);
-      if (list) list.push(box);
-      else this.cells.set(key, [box]);
-    });
+  /** @param owner by which it can be left out of a question */
+  add(box: Box, owner?: string): void {
+    const taken: Taken = { x: box.x, y: box.y, width: box.width, height: box.height, owner, asked: 0 };
+    const [left, right, top, bottom] = cellsOf(box.x, box.y, box.x + box.width, box.y + box.height);
+    for (let column = left; column <= right; column++)
+      for (let row = top; row <= bottom; row++) {
+        const key = column * ROWS + row;
+        const list = this.cells.get(key);
+        if (list) list.push(taken);
+        else this.cells.set(key, [taken]);
+      }
   }
 
   /** Adds the stretches of a polyline, as thin boxes. */
-  addPath(points: readonly Point[], half = 30): void {
+  addPath(points: readonly Point[], half = 30, owner?: string): void {
     for (let i = 0; i + 1 < points.length; i++) {
       const [a, b] = [points[i]!, points[i + 1]!];
-      this.add({ x: Math.min(a.x, b.x) - half, y: Math.min(a.y, b.y) - half, width: Math.abs(a.x - b.x) + 2 * half, height: Math.abs(a.y - b.y) + 2 * half });
+      this.add({ x: Math.min(a.x, b.x) - half, y: Math.min(a.y, b.y) - half, width: Math.abs(a.x - b.x) + 2 * half, height: Math.abs(a.y - b.y) + 2 * half }, owner);
     }
   }
 
-  /** Area of what lies under a box, kept clear all round; 0 where it is free. */
-  overlap(box: Box, clear = CLEAR): number {
-    const grown = { x: box.x - clear, y: box.y - clear, width: box.width + 2 * clear, height: box.height + 2 * clear };
-    const seen = new Set<Box>();
+  /** Area of what lies under a box, kept clear all round; 0 where it is free. `except` is left out. */
+  overlap(box: Box, clear = CLEAR, except?: string): number {
+    const [x0, y0, x1, y1] = [box.x - clear, box.y - clear, box.x + box.width + clear, box.y + box.height + clear];
+    const question = ++this.question;
+    const [left, right, top, bottom] = cellsOf(x0, y0, x1, y1);
     let area = 0;
-    this.each(grown, (key) => {
-      for (const other of this.cells.get(key) ?? []) {
-        if (seen.has(other)) continue;
-        seen.add(other);
-        const w = Math.min(grown.x + grown.width, other.x + other.width) - Math.max(grown.x, other.x);
-        const h = Math.min(grown.y + grown.height, other.y + other.height) - Math.max(grown.y, other.y);
-        if (w > 0 && h > 0) area += w * h;
-      }
-    });
+    for (let column = left; column <= right; column++)
+      for (let row = top; row <= bottom; row++)
+        for (const other of this.cells.get(column * ROWS + row) ?? []) {
+          if (other.asked === question || (except !== undefined && other.owner === except)) continue;
+          other.asked = question;
+          const w = Math.min(x1, other.x + other.width) - Math.max(x0, other.x);
+          const h = Math.min(y1, other.y + other.height) - Math.max(y0, other.y);
+          if (w > 0 && h > 0) area += w * h;
+        }
     return area;
   }
-
-  private each(box: Box, tell: (key: string) => void): void {
-    for (let x = Math.floor(box.x / CELL); x <= Math.floor((box.x + box.width) / CELL); x++)
-      for (let y = Math.floor(box.y / CELL); y <= Math.floor((box.y + box.height) / CELL); y++) tell(`${x} ${y}`);
-  }
 }
+
+/** More than the rows of cells that positions can span. */
+const ROWS = 1 << 20;
+const cellsOf = (x0: number, y0: number, x1: number, y1: number): [number, number, number, number] => [
+  Math.floor(x0 / CELL),
+  Math.floor(x1 / CELL),
+  Math.floor(y0 / CELL),
+  Math.floor(y1 / CELL),
+];
 
 /** The texts of a block, ready to draw. */
 export function blockTexts(block: Block): SceneText[] {

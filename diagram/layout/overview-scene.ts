@@ -126,9 +126,12 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     ground.addPath([{ x, y }, { x: x + w, y }, { x: x + w, y: y + h }, { x, y: y + h }, { x, y }], 20);
     for (const text of frame.texts) ground.add(textBox(text));
   }
+  const solid = new Ground();
+  for (const body of bodies.values()) solid.add(body);
+  for (const run of graph.runs) solid.addPath(routes.points.get(run.id)!, 0, run.id);
   const ringed = new Map<string, SceneRing>();
   for (const way of plan.ways) {
-    const run = graph.runs.find((r) => leavesDevice(r, way.device));
+    const run = graph.at.get(way.device)?.find((r) => leavesDevice(r, way.device));
     if (!run || !bodies.has(way.device)) continue;
     const points = routes.points.get(run.id)!;
     const ring = ringOf(way, run.from[0] === way.device ? points : [...points].reverse(), feeds.parts.get(way.device) ?? 'none');
@@ -143,7 +146,7 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     if (!leavesPlace(graph, run)) continue;
     const points = routes.points.get(run.id)!;
     const fromSource = ringed.get(run.id)?.part === run.to[0] ? [...points].reverse() : points;
-    const found = ticksOf(run, fromSource, ringed.has(run.id), (box) => crowded(run.id, box, graph.runs, routes, bodies));
+    const found = ticksOf(run, fromSource, ringed.has(run.id), (box) => solid.overlap(grown(box), 1, run.id) > 0);
     if (!found) continue;
     ticks.set(run.id, found);
     ground.add(found.box);
@@ -163,24 +166,11 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
   return { texts, ticks, rings: [...ringed.values()].sort((a, b) => byCode(a.part, b.part)) };
 }
 
+const grown = (box: Box): Box => ({ x: box.x - 1, y: box.y - 1, width: box.width + 2, height: box.height + 2 });
+
 /** Bigger lettering is placed first. */
 const rank = (label: Label): number => label.size;
 
 /** The device's outgoing run: the one at its lower terminal, or its only cable. */
 const leavesDevice = (run: { from: readonly [string, string]; to: readonly [string, string] }, device: string): boolean =>
   (run.from[0] === device && run.from[1] === '2') || (run.to[0] === device && run.to[1] === '2');
-
-/** True where ticks would lie on another run or on a part. */
-function crowded(own: string, box: Box, runs: readonly { id: string }[], routes: OverviewRoutes, bodies: Ends['bodies']): boolean {
-  const hits = (b: Box) => b.x < box.x + box.width && b.x + b.width > box.x && b.y < box.y + box.height && b.y + b.height > box.y;
-  for (const body of bodies.values()) if (hits(body)) return true;
-  for (const run of runs) {
-    if (run.id === own) continue;
-    const points = routes.points.get(run.id)!;
-    for (let i = 0; i + 1 < points.length; i++) {
-      const [a, b] = [points[i]!, points[i + 1]!];
-      if (hits({ x: Math.min(a.x, b.x), y: Math.min(a.y, b.y), width: Math.abs(a.x - b.x), height: Math.abs(a.y - b.y) })) return true;
-    }
-  }
-  return false;
-}

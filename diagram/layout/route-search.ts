@@ -147,51 +147,71 @@ const crosses = (occupancy: Occupancy, node: number, level: boolean, net: number
 
 /** A binary heap of states by cost; equal costs leave in the order they came, so that the result is one. */
 class Heap {
-  private readonly states: number[] = [];
-  private readonly costs: number[] = [];
-  private readonly turns: number[] = [];
-  private count = 0;
+  private states = new Int32Array(1024);
+  private costs = new Float64Array(1024);
+  private turns = new Int32Array(1024);
+  private turn = 0;
+  size = 0;
 
-  get size(): number {
-    return this.states.length;
+  clear(): void {
+    this.size = 0;
+    this.turn = 0;
   }
 
   push(state: number, cost: number): void {
-    let at = this.states.length;
-    const turn = this.count++;
-    this.states.push(state);
-    this.costs.push(cost);
-    this.turns.push(turn);
+    if (this.size === this.states.length) this.grow();
+    const turn = this.turn++;
+    let at = this.size++;
     while (at > 0) {
       const up = (at - 1) >> 1;
-      if (!this.before(at, up)) break;
-      this.swap(at, up);
+      if (this.costs[up]! <= cost) break;
+      this.move(up, at);
       at = up;
     }
+    this.set(at, state, cost, turn);
   }
 
   pop(): number {
     const top = this.states[0]!;
-    const last = this.states.length - 1;
-    this.swap(0, last);
-    this.states.pop();
-    this.costs.pop();
-    this.turns.pop();
-    for (let at = 0; ; ) {
-      let least = at;
-      for (const child of [2 * at + 1, 2 * at + 2]) if (child < last && this.before(child, least)) least = child;
-      if (least === at) return top;
-      this.swap(at, least);
-      at = least;
+    const last = --this.size;
+    const state = this.states[last]!;
+    const cost = this.costs[last]!;
+    const turn = this.turns[last]!;
+    let at = 0;
+    for (;;) {
+      let child = 2 * at + 1;
+      if (child >= last) break;
+      if (child + 1 < last && this.before(child + 1, child)) child++;
+      if (cost < this.costs[child]! || (cost === this.costs[child] && turn < this.turns[child]!)) break;
+      this.move(child, at);
+      at = child;
     }
+    if (last > 0) this.set(at, state, cost, turn);
+    return top;
   }
 
   private before(a: number, b: number): boolean {
     return this.costs[a]! < this.costs[b]! || (this.costs[a] === this.costs[b] && this.turns[a]! < this.turns[b]!);
   }
 
-  private swap(a: number, b: number): void {
-    for (const list of [this.states, this.costs, this.turns]) [list[a], list[b]] = [list[b]!, list[a]!];
+  private set(at: number, state: number, cost: number, turn: number): void {
+    this.states[at] = state;
+    this.costs[at] = cost;
+    this.turns[at] = turn;
+  }
+
+  private move(from: number, to: number): void {
+    this.set(to, this.states[from]!, this.costs[from]!, this.turns[from]!);
+  }
+
+  private grow(): void {
+    const states = new Int32Array(2 * this.states.length);
+    const costs = new Float64Array(2 * this.states.length);
+    const turns = new Int32Array(2 * this.states.length);
+    states.set(this.states);
+    costs.set(this.costs);
+    turns.set(this.turns);
+    Object.assign(this, { states, costs, turns });
   }
 }
 
@@ -201,6 +221,7 @@ export class Search {
   private readonly from: Int32Array;
   private readonly stamp: Int32Array;
   private readonly closed: Int32Array;
+  private readonly heap = new Heap();
   private run = 0;
 
   constructor(
@@ -232,15 +253,24 @@ export class Search {
     const goalNodes = [...new Set([...goals.keys()].map((state) => state >> 2))];
     const goalXs = goalNodes.map((node) => grid.xs[node % grid.columns]!);
     const goalYs = goalNodes.map((node) => grid.ys[Math.floor(node / grid.columns)]!);
+    const rate = shares ? COST.shared : 1;
+    // never more than what is left to go: the length, and a bend where the goal lies on neither line through the node
     const estimate = (node: number): number => {
-      const x = grid.xs[node % grid.columns]!;
-      const y = grid.ys[Math.floor(node / grid.columns)]!;
+      const column = node % grid.columns;
+      const x = grid.xs[column]!;
+      const y = grid.ys[(node - column) / grid.columns]!;
       let least = Infinity;
-      for (let i = 0; i < goalXs.length; i++) least = Math.min(least, Math.abs(goalXs[i]! - x) + Math.abs(goalYs[i]! - y));
-      return shares ? least * COST.shared : least;
+      for (let i = 0; i < goalXs.length; i++) {
+        const dx = Math.abs(goalXs[i]! - x);
+        const dy = Math.abs(goalYs[i]! - y);
+        const cost = (dx + dy) * rate + (dx > 0 && dy > 0 ? COST.bend : 0);
+        if (cost < least) least = cost;
+      }
+      return least;
     };
     this.run++;
-    const heap = new Heap();
+    const { heap } = this;
+    heap.clear();
     const reach = (state: number, cost: number, previous: number) => {
       if (this.stamp[state] === this.run && this.best[state]! <= cost) return;
       this.stamp[state] = this.run;

@@ -1,7 +1,7 @@
 import { byCode } from '../document/schema';
 import { MODULE, type Side } from '../symbols/types';
 import { buildGrid, type Grid, type Obstacle, type RouteEnd, type RouteRequest, type Soft } from './route-grid';
-import { Search, edgeFrom, emptyOccupancy, nodeAt, toPoints, type Occupancy } from './route-search';
+import { COST, Search, edgeFrom, emptyOccupancy, nodeAt, toPoints, type Occupancy } from './route-search';
 import type { Point } from './scene';
 
 /**
@@ -25,6 +25,12 @@ const isStraight = ({ from, to }: RouteRequest): boolean => from.x === to.x || f
 /** The order in which runs are routed: those that can be straight, then by length, then by id. */
 const inOrder = (a: RouteRequest, b: RouteRequest): number =>
   Number(isStraight(b)) - Number(isStraight(a)) || SPAN(a) - SPAN(b) || byCode(a.id, b.id);
+
+/** True where a run costs more than the shortest way with the fewest bends, which none can beat. */
+function couldBeBetter({ request: { from, to }, nodes, cost }: Routed): boolean {
+  const [dx, dy] = [Math.abs(from.x - to.x), Math.abs(from.y - to.y)];
+  return nodes !== null && cost > dx + dy + (dx > 0 && dy > 0 ? COST.bend : 0);
+}
 
 /** A terminal's own sides first, then the others. */
 const anySide = (end: RouteEnd): Side[] => [...new Set<Side>([...end.sides, 'right', 'left', 'down', 'up'])];
@@ -75,14 +81,6 @@ class Router {
     if (better) Object.assign(routed, found);
     this.mark(routed);
     return better;
-  }
-
-  /** True where a run is not one straight line: only such a one can find a better way once others have moved. */
-  bends({ nodes }: Routed): boolean {
-    if (!nodes) return false;
-    const { columns } = this.grid;
-    const [first, last] = [nodes[0]!, nodes.at(-1)!];
-    return first % columns !== last % columns && Math.floor(first / columns) !== Math.floor(last / columns);
   }
 
   private mark(routed: Routed): void {
@@ -169,7 +167,7 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
     for (const routed of all) router.route(routed);
     for (let round = 0; round < ROUNDS; round++) {
       let changed = false;
-      for (const routed of all) if (router.bends(routed)) changed = router.improve(routed) || changed;
+      for (const routed of all) if (couldBeBetter(routed)) changed = router.improve(routed) || changed;
       if (!changed) break;
     }
   }
