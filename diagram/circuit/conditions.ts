@@ -68,7 +68,11 @@ function combinations(changeovers: readonly Part[]): Map<string, 'A' | '0' | 'B'
     );
   }
   const all = (place: 'A' | 'B') => new Map<string, 'A' | '0' | 'B'>(changeovers.map(({ id }) => [id, place]));
-  const oneApart = changeovers.flatMap(({ id }) => [all('A').set(id, 'B'), all('A').set(id, '0'), all('B').set(id, 'A')]);
+  const oneApart = changeovers.flatMap(({ id }) => [
+    all('A').set(id, 'B'),
+    all('A').set(id, '0'),
+    all('B').set(id, 'A'),
+  ]);
   return [all('A'), all('B'), ...oneApart];
 }
 
@@ -85,9 +89,12 @@ export function listConditions(graph: Graph): Conditions {
   if (backups.length > 0) bases.push('outage');
   if (backups.length > 0 && mainSwitch) bases.push('main-off');
 
-  const mains = supplies.map(
-    (part): Source => ({ part, kind: 'mains', line: graph.node(part.id, 'L')!, neutral: graph.node(part.id, 'N')! }),
-  );
+  const mains = supplies.map((part): Source => ({
+    part,
+    kind: 'mains',
+    line: graph.node(part.id, 'L')!,
+    neutral: graph.node(part.id, 'N')!,
+  }));
   const isBackup = new Set(backups.map((part) => part.id));
 
   const build = (base: Base, positions: Map<string, 'A' | '0' | 'B'>): Condition => {
@@ -103,8 +110,16 @@ export function listConditions(graph: Graph): Conditions {
       // An inverter fed from before the open main switch still has mains: it passes them through.
       if (base === 'main-off') {
         const islanded = closedEdges(graph, (edge) => open(edge) || edge.kind === 'bypass');
-        const line = reach(graph, mains.map((source) => source.line), islanded);
-        const neutral = reach(graph, mains.map((source) => source.neutral), islanded);
+        const line = reach(
+          graph,
+          mains.map((source) => source.line),
+          islanded,
+        );
+        const neutral = reach(
+          graph,
+          mains.map((source) => source.neutral),
+          islanded,
+        );
         for (const id of isBackup)
           if (reaches(line, graph.node(id, 'in.L')) && reaches(neutral, graph.node(id, 'in.N'))) onBattery.delete(id);
       }
@@ -116,14 +131,12 @@ export function listConditions(graph: Graph): Conditions {
     });
     const batteries = backups
       .filter((part) => onBattery.has(part.id))
-      .map(
-        (part): Source => ({
-          part,
-          kind: 'backup',
-          line: graph.node(part.id, 'out.L')!,
-          neutral: graph.node(part.id, 'out.N')!,
-        }),
-      );
+      .map((part): Source => ({
+        part,
+        kind: 'backup',
+        line: graph.node(part.id, 'out.L')!,
+        neutral: graph.node(part.id, 'out.N')!,
+      }));
     const suffix = changeovers.map(({ id }) => positions.get(id)).join('');
     return {
       name: suffix ? `${base}/${suffix}` : base,

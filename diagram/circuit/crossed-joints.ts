@@ -13,7 +13,11 @@ export interface CrossedJoint {
  * @param closed contacts that are closed; wires not in it are left out
  * @param anchors nodes known to be line, neutral or earth
  */
-export function findCrossedJoints(graph: Graph, closed: Uint8Array, anchors: ReadonlyMap<number, Nature>): CrossedJoint[] {
+export function findCrossedJoints(
+  graph: Graph,
+  closed: Uint8Array,
+  anchors: ReadonlyMap<number, Nature>,
+): CrossedJoint[] {
   const parent = Int32Array.from({ length: graph.size }, (_, node) => node);
   const label = new Array<Nature | undefined>(graph.size);
   for (const [node, nature] of anchors) label[node] = nature;

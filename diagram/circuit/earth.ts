@@ -9,7 +9,8 @@ export function earthAnchors(graph: Graph): number[] {
   const nodes: number[] = [];
   graph.partOf.forEach((part, node) => {
     const mark = graph.markOf[node]!;
-    if (part.kind === 'earth-bar' || part.kind === 'electrode' || (part.kind === 'supply' && mark === 'E' && !tt)) nodes.push(node);
+    if (part.kind === 'earth-bar' || part.kind === 'electrode' || (part.kind === 'supply' && mark === 'E' && !tt))
+      nodes.push(node);
   });
   return nodes;
 }
@@ -32,9 +33,16 @@ interface Crossed {
 
 /** Neutral terminals before the home's first device or meter, where TN-C-S has its one joint of neutral and earth. */
 export function beforeOrigin(graph: Graph): (node: number) => boolean {
-  const starts = [...graph.parts.values()].filter(({ kind }) => kind === 'supply').map(({ id }) => graph.node(id, 'N')!);
+  const starts = [...graph.parts.values()]
+    .filter(({ kind }) => kind === 'supply')
+    .map(({ id }) => graph.node(id, 'N')!);
   const own = (node: number) => natureOfNode(graph, node) !== 'E' && graph.partOf[node]!.kind !== 'neutral-bar';
-  const { nodes } = spread(graph, starts, (edge) => edge.kind === 'wire', (node) => !own(node));
+  const { nodes } = spread(
+    graph,
+    starts,
+    (edge) => edge.kind === 'wire',
+    (node) => !own(node),
+  );
   return (node) => nodes.has(node) && own(node);
 }
 
@@ -60,7 +68,10 @@ function meansOfEarthing(graph: Graph, crossed: readonly Crossed[]): number[] {
  * Follows the earth. Where the bar itself has no earth, what hangs on the bar still counts as reached, so that one
  * missing main earth is not said again at every part.
  */
-export function workOutEarth(graph: Graph, evaluation: { evaluated: readonly { crossed: readonly Crossed[] }[] }): Earth {
+export function workOutEarth(
+  graph: Graph,
+  evaluation: { evaluated: readonly { crossed: readonly Crossed[] }[] },
+): Earth {
   const joints = evaluation.evaluated.flatMap(({ crossed }) => crossed);
   const closed = closedEdges(graph, (edge: Edge) => edge.kind === 'bond');
   for (const { edge } of joints) closed[edge] = 0;
@@ -69,7 +80,9 @@ export function workOutEarth(graph: Graph, evaluation: { evaluated: readonly { c
   const bars = earthAnchors(graph).filter((node) => graph.partOf[node]!.kind === 'earth-bar');
   const earthedBar = bars.find((node) => reaches(fromMeans, node));
   const weight = (node: number) => reach(graph, [node], closed).order.length;
-  const mainBar = earthedBar ?? bars.map((node) => ({ node, size: weight(node) })).sort((a, b) => b.size - a.size || a.node - b.node)[0]?.node;
+  const mainBar =
+    earthedBar ??
+    bars.map((node) => ({ node, size: weight(node) })).sort((a, b) => b.size - a.size || a.node - b.node)[0]?.node;
   const starts = mainBar === undefined || earthedBar !== undefined ? means : [mainBar];
   return { closed, reached: reach(graph, starts, closed), mainBar, earthed: earthedBar !== undefined };
 }

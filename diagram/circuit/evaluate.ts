@@ -76,7 +76,13 @@ const devicesOn = (graph: Graph, edges: readonly number[]): string[] => {
   return [...new Set(ids)];
 };
 
-function stand(graph: Graph, condition: Condition, closed: Uint8Array, position: number, apart: (node: number) => boolean): Stand {
+function stand(
+  graph: Graph,
+  condition: Condition,
+  closed: Uint8Array,
+  position: number,
+  apart: (node: number) => boolean,
+): Stand {
   const line = condition.sources.map((source) => reach(graph, [source.line], closed));
   const neutral = condition.sources.map((source) => reach(graph, [source.neutral], closed));
   return { position, closed, line, neutral, shorted: line.some((walk) => walk.order.some(apart)) };
@@ -134,7 +140,13 @@ function pointState(graph: Graph, part: Part, condition: Condition, stands: read
   return half ?? none;
 }
 
-function standsOf(graph: Graph, condition: Condition, positions: Positions, closed: Uint8Array, apart: (node: number) => boolean): Stand[] {
+function standsOf(
+  graph: Graph,
+  condition: Condition,
+  positions: Positions,
+  closed: Uint8Array,
+  apart: (node: number) => boolean,
+): Stand[] {
   const stands: Stand[] = [];
   for (let position = 0; position < positions.count; position++) {
     let here = closed;
@@ -164,7 +176,8 @@ function evaluateCondition(
 
   let closed = condition.closed;
   let crossed: CrossedJoint[] = [];
-  const touches = (starts: number[], apart: (node: number) => boolean) => reach(graph, starts, closed).order.some(apart);
+  const touches = (starts: number[], apart: (node: number) => boolean) =>
+    reach(graph, starts, closed).order.some(apart);
   if (touches(lineStarts, notLine) || touches(neutralStarts, isEarth)) {
     crossed = findCrossedJoints(graph, closed, anchors);
     closed = closed.slice();
@@ -177,11 +190,13 @@ function evaluateCondition(
   const states = (from: Uint8Array) => {
     const stands = standsOf(graph, condition, positions, from, notLine);
     const points = new Map<string, PointState>();
-    for (const part of graph.parts.values()) if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
+    for (const part of graph.parts.values())
+      if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
     return { stands, points };
   };
   const asDrawn = states(whole);
-  if (loops.length === 0) return { condition, crossed, lineLoops, neutralLoops, whole, ...asDrawn, asDrawn: asDrawn.points };
+  if (loops.length === 0)
+    return { condition, crossed, lineLoops, neutralLoops, whole, ...asDrawn, asDrawn: asDrawn.points };
   const apart = whole.slice();
   for (const edge of loops) apart[edge] = 0;
   return { condition, crossed, lineLoops, neutralLoops, whole, ...states(apart), asDrawn: asDrawn.points };
@@ -207,7 +222,9 @@ export function evaluate(graph: Graph): Evaluation {
   const evaluated: Evaluated[] = [];
   for (const condition of conditions.list) {
     const places = JSON.stringify([...condition.positions]);
-    const mains = evaluated.find((other) => other.condition.base === 'mains' && JSON.stringify([...other.condition.positions]) === places);
+    const mains = evaluated.find(
+      (other) => other.condition.base === 'mains' && JSON.stringify([...other.condition.positions]) === places,
+    );
     const loops = mains ? [...mains.lineLoops, ...mains.neutralLoops].map(({ edge }) => edge) : [];
     evaluated.push(evaluateCondition(graph, condition, positions, loops));
   }

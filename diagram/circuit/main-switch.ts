@@ -10,7 +10,9 @@ import { spread } from '../terminals/spread';
 export function originLine(graph: Graph): number[] {
   const parts = [...graph.parts.values()];
   const meters = parts.filter((part) => part.kind === 'meter').map((part) => graph.node(part.id, '4')!);
-  return meters.length > 0 ? meters : parts.filter((part) => part.kind === 'supply').map((part) => graph.node(part.id, 'L')!);
+  return meters.length > 0
+    ? meters
+    : parts.filter((part) => part.kind === 'supply').map((part) => graph.node(part.id, 'L')!);
 }
 
 const isSwitching = (part: Part): boolean => part.kind === 'isolator' || (part.kind === 'mcb' && polesOf(part) === 2);
@@ -22,7 +24,11 @@ function trunk(graph: Graph): Part[] {
   const isDoor = (edge: Edge) => edge.kind === 'device' || edge.kind === 'changeover' || edge.kind === 'bypass';
   let starts = originLine(graph);
   for (;;) {
-    const region = spread(graph, starts, (edge) => (edge.kind === 'wire' || passed.has(edge.part!)) && edge.kind !== 'bond');
+    const region = spread(
+      graph,
+      starts,
+      (edge) => (edge.kind === 'wire' || passed.has(edge.part!)) && edge.kind !== 'bond',
+    );
     const doors = new Set<string>();
     for (const node of region.nodes) {
       const part = graph.partOf[node]!;

@@ -10,7 +10,16 @@ export function natureOfRole(role: Role): Nature {
   return role === 'dc+' || role === 'dc-' ? 'D' : 'L';
 }
 
-const POLES: Readonly<Record<string, Nature>> = { '1': 'L', '2': 'L', '3': 'N', '4': 'N', A1: 'L', B1: 'L', A3: 'N', B3: 'N' };
+const POLES: Readonly<Record<string, Nature>> = {
+  '1': 'L',
+  '2': 'L',
+  '3': 'N',
+  '4': 'N',
+  A1: 'L',
+  B1: 'L',
+  A3: 'N',
+  B3: 'N',
+};
 
 /** What a terminal is made for; undefined where the kind leaves it open (joints, switches). */
 export function natureOfNode(graph: Graph, node: number): Nature | undefined {

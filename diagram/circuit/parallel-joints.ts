@@ -32,7 +32,9 @@ function oddness(graph: Graph, edge: Edge): number {
   const { a, b, wire, kind } = edge;
   if (kind === 'plug') return 1000;
   if (!wire) return 0;
-  const known = [natureOfRole(wire.role), natureOfNode(graph, a), natureOfNode(graph, b)].filter((nature) => nature !== undefined);
+  const known = [natureOfRole(wire.role), natureOfNode(graph, a), natureOfNode(graph, b)].filter(
+    (nature) => nature !== undefined,
+  );
   const disagree = new Set(known).size - 1;
   const between = isAccessory(graph, a) && isAccessory(graph, b) ? 1 : 0;
   const unknown = 3 - known.length;
@@ -56,7 +58,7 @@ function wayBetween(graph: Graph, from: number, to: number, closed: Uint8Array):
   const walk = reach(graph, [from], closed);
   if (!reaches(walk, to)) return undefined;
   const path: number[] = [];
-  for (let at = to; walk.via[at]! >= 0; ) {
+  for (let at = to; walk.via[at]! >= 0;) {
     const number = walk.via[at]!;
     path.push(number);
     const edge = graph.edges[number]!;
@@ -100,7 +102,10 @@ export function findParallelJoints(graph: Graph, closed: Uint8Array, starts: rea
       tree[number] = 1;
     }
   }
-  return closing.map((edge) => ({ edge, loop: wayBetween(graph, graph.edges[edge]!.a, graph.edges[edge]!.b, tree) ?? [] }));
+  return closing.map((edge) => ({
+    edge,
+    loop: wayBetween(graph, graph.edges[edge]!.a, graph.edges[edge]!.b, tree) ?? [],
+  }));
 }
 
 /** True when a loop of line conductors passes a device or a source: it is no ring of one way, but two feeds that meet. */
@@ -109,4 +114,3 @@ export const meetsDevice = (graph: Graph, { loop }: ParallelJoint): boolean =>
     const { kind } = graph.edges[number]!;
     return kind === 'device' || kind === 'bypass' || kind === 'changeover';
   });
-

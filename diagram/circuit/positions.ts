@@ -32,7 +32,8 @@ const FIRST = new Set(['1', 'straight']);
  */
 export function switchPositions(graph: Graph): Positions {
   const selects = [...graph.parts.values()].filter(({ kind }) => kind === 'switch-2way' || kind === 'switch-cross');
-  if (selects.length === 0) return { sets: [], count: 1, isClosed: () => true, group: new Int32Array(), isRail: () => true };
+  if (selects.length === 0)
+    return { sets: [], count: 1, isClosed: () => true, group: new Int32Array(), isRail: () => true };
   const closed = closedEdges(graph, (edge) => edge.kind === 'select' || edge.kind === 'bond');
   const rails: number[] = [];
   graph.partOf.forEach((part, node) => {

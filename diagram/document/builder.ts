@@ -41,9 +41,15 @@ export class Drawing {
   }
 
   /** Adds a part, with its id as designation unless `ref` is given; accessories and joints have none. */
-  part<K extends Part['kind']>(kind: K, id: string, place?: string, ratings: Ratings<K> = {}): this {
+  part<K extends Part['kind']>(kind: K, id: string, place?: string, ratings?: Ratings<K>): this {
     const unnamed = isBar(kind) || kind === 'supply';
-    this.parts.set(id, { id, kind, ...(place && { place }), ...(!unnamed && { ref: id }), ...ratings } as unknown as Part);
+    this.parts.set(id, {
+      id,
+      kind,
+      ...(place && { place }),
+      ...(!unnamed && { ref: id }),
+      ...ratings,
+    } as unknown as Part);
     return this;
   }
 
@@ -56,7 +62,8 @@ export class Drawing {
 
   drop(id: string): this {
     this.parts.delete(id);
-    for (const wire of [...this.wires.values()]) if (wire.from[0] === id || wire.to[0] === id) this.wires.delete(wire.id);
+    for (const wire of [...this.wires.values()])
+      if (wire.from[0] === id || wire.to[0] === id) this.wires.delete(wire.id);
     return this;
   }
 
@@ -127,7 +134,9 @@ export class Drawing {
 
   private between(from: string, to: string): Wire[] {
     return [...this.wires.values()].filter(
-      (wire) => (this.isAt(wire.from, from) && this.isAt(wire.to, to)) || (this.isAt(wire.from, to) && this.isAt(wire.to, from)),
+      (wire) =>
+        (this.isAt(wire.from, from) && this.isAt(wire.to, to)) ||
+        (this.isAt(wire.from, to) && this.isAt(wire.to, from)),
     );
   }
 

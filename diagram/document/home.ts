@@ -48,7 +48,13 @@ export class Home extends Drawing {
     else this.earth('SUP:E', 'EB').line('Q1:2', 'LB0').neutral('Q1:4', 'NB0');
     if (options.rcd === false) this.line('LB0', 'LB').neutral('NB0', 'NB');
     else {
-      const ratings = { rating: 63, sensitivity: 0.03, type: 'A', delay: 'none', ...(typeof options.rcd === 'object' && options.rcd) } as const;
+      const ratings = {
+        rating: 63,
+        sensitivity: 0.03,
+        type: 'A',
+        delay: 'none',
+        ...(typeof options.rcd === 'object' && options.rcd),
+      } as const;
       this.part('rcd', 'Q2', 'hall', ratings)
         .line('LB0', 'Q2:1')
         .neutral('NB0', 'Q2:3')
@@ -58,7 +64,12 @@ export class Home extends Drawing {
   }
 
   /** A way from an mcb to the joints of a room: `way('Q11', 'study')` draws Q11, cable k11 and JL11, JN11, JE11. */
-  way(id: string, place: string, ratings: Ratings<'mcb'> = {}, from: { bars?: string; csa?: number; length?: number } = {}): this {
+  way(
+    id: string,
+    place: string,
+    ratings: Ratings<'mcb'> = {},
+    from: { bars?: string; csa?: number; length?: number } = {},
+  ): this {
     const n = id.replace(/\D/g, '');
     const { bars = '', csa = 1.5, length = 9 } = from;
     return this.part('mcb', id, 'hall', { poles: 1, rating: 6, curve: 'B', icn: 6000, label: `Way ${n}`, ...ratings })
@@ -181,7 +192,11 @@ export class Home extends Drawing {
 
 /** A home of one study on way Q11: lamp E1 on switch S1, outlet X1. */
 export const smallHome = (options: HomeOptions = {}): Home =>
-  new Home(options).place('study', 'room', { name: 'Study' }).way('Q11', 'study').lamp('E1', 'S1', 'Q11').socket('X1', 'Q11');
+  new Home(options)
+    .place('study', 'room', { name: 'Study' })
+    .way('Q11', 'study')
+    .lamp('E1', 'S1', 'Q11')
+    .socket('X1', 'Q11');
 
 /** The small home with a backup source and a bedroom on it: way Q21, lamp E2 on switch S2, outlet X2. */
 export const backupHome = (ratings: Ratings<'inverter'> = {}, options: HomeOptions = {}): Home =>

@@ -20,7 +20,8 @@ export function compareDesignations(a: string, b: string): number {
 
 /** Parts with a designation first, in its order; then by id. */
 export function byDesignation(a: Part, b: Part): number {
-  if (a.ref !== undefined && b.ref !== undefined) return compareDesignations(a.ref, b.ref) || compareDesignations(a.id, b.id);
+  if (a.ref !== undefined && b.ref !== undefined)
+    return compareDesignations(a.ref, b.ref) || compareDesignations(a.id, b.id);
   if (a.ref !== undefined) return -1;
   if (b.ref !== undefined) return 1;
   return compareDesignations(a.id, b.id);

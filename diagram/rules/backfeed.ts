@@ -9,11 +9,22 @@ import { capital, say, sayParts } from './readings/words';
 
 /** Line terminals that only the mains may make live: from the supply up to the main switch. */
 const upstreamLine = once(({ graph, mainSwitch }: Context): Set<number> => {
-  const closed = closedEdges(graph, (edge) => edge.kind === 'bypass' || edge.kind === 'changeover' || edge.kind === 'bond' || (edge.kind !== 'wire' && edge.part === mainSwitch?.id));
-  const starts = [...graph.parts.values()].filter(({ kind }) => kind === 'supply').map(({ id }) => graph.node(id, 'L')!);
+  const closed = closedEdges(
+    graph,
+    (edge) =>
+      edge.kind === 'bypass' ||
+      edge.kind === 'changeover' ||
+      edge.kind === 'bond' ||
+      (edge.kind !== 'wire' && edge.part === mainSwitch?.id),
+  );
+  const starts = [...graph.parts.values()]
+    .filter(({ kind }) => kind === 'supply')
+    .map(({ id }) => graph.node(id, 'L')!);
   const walk = reach(graph, starts, closed);
   // Without a main switch the walk runs on into the home: only the service itself counts then.
-  return new Set(mainSwitch ? walk.order : walk.order.filter((node) => ['supply', 'meter'].includes(graph.partOf[node]!.kind)));
+  return new Set(
+    mainSwitch ? walk.order : walk.order.filter((node) => ['supply', 'meter'].includes(graph.partOf[node]!.kind)),
+  );
 });
 
 /** On outage the mains line is live from a backup source; the same joint puts the source on live mains when they return. */
@@ -49,7 +60,9 @@ export const backfeed: Rule = {
       }
     }
     for (const [inverter, { conditions, path }] of found) {
-      const joints = lineLoops(context).filter(({ loop }) => loop.some((n) => graph.edges[n]!.kind === 'bypass' && graph.edges[n]!.part === inverter));
+      const joints = lineLoops(context).filter(({ loop }) =>
+        loop.some((n) => graph.edges[n]!.kind === 'bypass' && graph.edges[n]!.part === inverter),
+      );
       const plugs = path.flatMap((n) => (graph.edges[n]!.kind === 'plug' ? [graph.edges[n]!.part!] : []));
       const sockets = plugs.flatMap((id) => {
         const plug = graph.parts.get(id)!;
@@ -60,7 +73,12 @@ export const backfeed: Rule = {
         plugs.length > 0
           ? `through ${sayParts(context, plugs)} in ${sayParts(context, sockets)}`
           : wires.length > 0
-            ? `over the joint at ${sayParts(context, joints.flatMap(({ edge }) => [graph.edges[edge]!.a, graph.edges[edge]!.b].map((n) => graph.partOf[n]!.id)))}`
+            ? `over the joint at ${sayParts(
+                context,
+                joints.flatMap(({ edge }) =>
+                  [graph.edges[edge]!.a, graph.edges[edge]!.b].map((n) => graph.partOf[n]!.id),
+                ),
+              )}`
             : 'over its output';
       yield {
         heading: `${capital(say(context, inverter))} feeds the street`,

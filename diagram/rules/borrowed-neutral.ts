@@ -24,7 +24,9 @@ export const borrowedNeutral: Rule = {
       const isLink = points.every((id) => ['joint', 'neutral-bar'].includes(context.graph.parts.get(id)!.kind));
       const through = `${ways.length === devices.length ? 'the neutral of ' : ''}${sayParts(context, devices)}`;
       yield {
-        heading: isLink ? 'Two neutrals are joined' : `${capital(names)} ${points.length === 1 ? 'borrows' : 'borrow'} a neutral`,
+        heading: isLink
+          ? 'Two neutrals are joined'
+          : `${capital(names)} ${points.length === 1 ? 'borrows' : 'borrow'} a neutral`,
         message: isLink
           ? `A wire joins the neutrals of ${sayParts(context, devices)}, so that each carries current of the other: opened at one, it is still live from the other.`
           : `${capital(names)} ${points.length === 1 ? 'gets its' : 'get their'} line from one way and ${points.length === 1 ? 'returns' : 'return'} through ${through}. With that way switched off its neutral still carries this current.`,

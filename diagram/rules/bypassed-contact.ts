@@ -1,6 +1,6 @@
-import { isControl } from '../terminals/roles-of-parts';
 import { COMMON_PRACTICE } from './clauses';
 import { bypassedContacts } from './readings/bypassed';
+import { neutralContacts } from './readings/neutral-contacts';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
 
@@ -12,12 +12,15 @@ export const bypassedContact: Rule = {
     group: 'polarity',
     title: 'A switch that switches nothing',
     clauses: [COMMON_PRACTICE],
-    lesson: 'Both terminals of the switch are joined by another way, so whatever its lever says, the circuit stays closed. Somebody will trust the lever.',
+    lesson:
+      'Both terminals of the switch are joined by another way, so whatever its lever says, the circuit stays closed. Somebody will trust the lever.',
     remedy: 'Take out the wire that joins its two sides.',
   },
   *check(context) {
+    // A two-pole switch whose line pole is bridged opens the neutral alone: the danger is said, not this.
+    const dangerous = new Set(neutralContacts(context).switched.flatMap(({ contacts }) => contacts));
     for (const { part, wires } of bypassedContacts(context)) {
-      if (!isControl(context.graph.parts.get(part)!)) continue;
+      if (dangerous.has(part)) continue;
       yield {
         heading: `${capital(say(context, part))} switches nothing`,
         message: `The two sides of ${say(context, part)} are joined past it: open or closed, what it should switch stays on.`,

@@ -42,7 +42,9 @@ export interface Context {
 export function buildContext(doc: Installation, practice: PracticeId = doc.practice): Context {
   const graph = buildGraph(doc);
   const evaluation = evaluate(graph);
-  const apart = new Set(evaluation.evaluated.flatMap(({ crossed, lineLoops }) => [...crossed, ...lineLoops].map(({ edge }) => edge)));
+  const apart = new Set(
+    evaluation.evaluated.flatMap(({ crossed, lineLoops }) => [...crossed, ...lineLoops].map(({ edge }) => edge)),
+  );
   const sections = findSections(graph, apart);
   const byKind = new Map<Part['kind'], Part[]>();
   for (const part of graph.document.parts) byKind.set(part.kind, [...(byKind.get(part.kind) ?? []), part]);

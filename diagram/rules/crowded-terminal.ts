@@ -13,7 +13,8 @@ export const crowdedTerminal: Rule = {
     group: 'polarity',
     title: 'Too many conductors under one screw',
     clauses: [{ document: 'IEC 60364-5-52', clause: '526.2', memory: true }],
-    lesson: 'A third conductor under a screw made for two sits on the others, not under the screw. It loosens, warms, and one day arcs.',
+    lesson:
+      'A third conductor under a screw made for two sits on the others, not under the screw. It loosens, warms, and one day arcs.',
     remedy: 'Join them in a connector behind the accessory and lead one wire to the terminal.',
   },
   *check(context) {

@@ -15,7 +15,8 @@ export const earthNeutralJoined: Rule = {
     lesson:
       'Neutral and earth meet once, at the source. Where they meet again, load current runs in the earth cores and in the cases joined ' +
       'to them; an rcd before the joint trips for no visible reason, and if the neutral breaks, the cases carry it all.',
-    remedy: 'Take the joint out. The only joints allowed are inside the supply and the one an inverter makes for itself on battery.',
+    remedy:
+      'Take the joint out. The only joints allowed are inside the supply and the one an inverter makes for itself on battery.',
   },
   *check(context) {
     const { graph } = context;

@@ -14,7 +14,8 @@ export const fusedNeutral: Rule = {
     lesson:
       'When the fuse in the neutral blows before the one in the line, the circuit stops working and looks dead, but all of it ' +
       'stands at line voltage. A fuse or single breaker belongs in the line only; what opens the neutral must open the line with it.',
-    remedy: 'Join the neutral straight to its bar and put the protection in the line, or fit a linked two-pole breaker.',
+    remedy:
+      'Join the neutral straight to its bar and put the protection in the line, or fit a linked two-pole breaker.',
   },
   *check(context) {
     for (const { contacts, points, wires, conditions } of neutralContacts(context).fused) {

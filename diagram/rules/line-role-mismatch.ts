@@ -16,7 +16,13 @@ const WORD: Record<Nature, string> = { L: 'line', N: 'neutral', E: 'earth', D: '
 /** What a wire turns out to be; undefined where it is dead, or more than one thing as switches move. */
 function natureOf(context: Context, node: number): Nature | undefined {
   const { line, neutral, earth } = potentials(context);
-  const natures = ([['L', line], ['N', neutral], ['E', earth]] as const).filter(([, at]) => at[node] === 1);
+  const natures = (
+    [
+      ['L', line],
+      ['N', neutral],
+      ['E', earth],
+    ] as const
+  ).filter(([, at]) => at[node] === 1);
   return natures.length === 1 ? natures[0]![0] : undefined;
 }
 
@@ -25,7 +31,7 @@ function wiresAt({ graph }: Context, node: number): string[] {
   for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
     const { wire } = graph.edges[graph.around[k]!]!;
     if (wire) ids.push(wire.id);
-  };
+  }
   return ids;
 }
 
@@ -54,7 +60,8 @@ export const lineRoleMismatch: Rule = {
     group: 'polarity',
     title: 'A wire is not what it is drawn as',
     clauses: [COMMON_PRACTICE],
-    lesson: 'The colour follows the role. A core drawn as neutral that carries line gets the neutral colour, and the next person takes it for harmless.',
+    lesson:
+      'The colour follows the role. A core drawn as neutral that carries line gets the neutral colour, and the next person takes it for harmless.',
     remedy: 'Draw the wire as what it is, or lead it to where it belongs.',
   },
   *check(context) {

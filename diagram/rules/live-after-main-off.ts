@@ -16,7 +16,8 @@ export const liveAfterMainOff: Rule = {
     lesson:
       'Everybody has learned: main switch off, home dead. With a battery that is no longer so. Whoever does not know it opens a ' +
       'switchboard with one hand on a live bar.',
-    remedy: 'Fix the notice at the board, write the order of isolation into the file, and switch the backup output off as well.',
+    remedy:
+      'Fix the notice at the board, write the order of isolation into the file, and switch the backup output off as well.',
   },
   *check(context) {
     const { graph, mainSwitch } = context;
@@ -35,13 +36,24 @@ export const liveAfterMainOff: Rule = {
       }
       const ways = context.ways.filter(({ device }) => live.has(device) && device !== inverter.id);
       const points = [...live].filter((id) => isPoint(graph.parts.get(id)!));
-      if (ways.length + points.length === 0) continue;
-      const places = listNames([...new Set(inOrder(context, live).map(({ place }) => graph.places.get(place ?? '')?.name))].filter((name) => name !== undefined));
+      if (points.length === 0) continue;
+      const places = listNames(
+        [...new Set(inOrder(context, live).map(({ place }) => graph.places.get(place ?? '')?.name))].filter(
+          (name) => name !== undefined,
+        ),
+      );
       const sockets = points.filter((id) => graph.parts.get(id)!.kind === 'socket');
       yield {
         heading: `With ${say(context, mainSwitch!.id)} off, ${say(context, inverter.id)} is still there`,
         message:
-          `With the main switch off these stay live from ${say(context, inverter.id)}: ${ways.length > 0 ? `ways ${ways.map(({ number }) => number).join(', ')} (${sayParts(context, ways.map(({ device }) => device))})` : 'its output'}` +
+          `With the main switch off these stay live from ${say(context, inverter.id)}: ${
+            ways.length > 0
+              ? `ways ${ways.map(({ number }) => number).join(', ')} (${sayParts(
+                  context,
+                  ways.map(({ device }) => device),
+                )})`
+              : 'its output'
+          }` +
           `${sockets.length > 0 ? `, ${sayParts(context, sockets)}` : ''}${places ? `; in ${places}` : ''}. Isolate both before work.`,
         parts: [inverter.id, ...ways.map(({ device }) => device), ...inOrder(context, sockets).map(({ id }) => id)],
         conditions,

@@ -15,7 +15,8 @@ export const livePins: Rule = {
     lesson:
       'A socket hides its contacts, a plug shows them. A plug may be fed only by the socket it stands in; if anything behind it can make ' +
       'its pins live, a child who pulls it out holds them.',
-    remedy: 'Let the source end in a socket and the load in a plug; wire an inverter so that nothing returns through its input plug.',
+    remedy:
+      'Let the source end in a socket and the load in a plug; wire an inverter so that nothing returns through its input plug.',
   },
   *check(context) {
     for (const { plug, pins, through, conditions } of readPins(context)) {

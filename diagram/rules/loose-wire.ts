@@ -11,13 +11,15 @@ export const looseWire: Rule = {
     group: 'drawing',
     title: 'A wire ends nowhere',
     clauses: [COMMON_PRACTICE],
-    lesson: 'The file names a terminal that no part has. Until somebody says where the wire goes, it joins nothing, and whatever it was to feed is dead.',
+    lesson:
+      'The file names a terminal that no part has. Until somebody says where the wire goes, it joins nothing, and whatever it was to feed is dead.',
     remedy: 'Lead the end to an existing terminal, or take the wire away.',
   },
   *check(context) {
     const { graph } = context;
     const isThere = ([part, mark]: End) => graph.node(part, mark) !== undefined;
-    const where = ([part, mark]: End) => (graph.parts.has(part) ? `terminal ${mark} of ${say(context, part)}` : `a part that is not drawn`);
+    const where = ([part, mark]: End) =>
+      graph.parts.has(part) ? `terminal ${mark} of ${say(context, part)}` : `a part that is not drawn`;
     for (const wire of graph.loose) {
       const missing = [wire.from, wire.to].filter((end) => !isThere(end));
       yield {

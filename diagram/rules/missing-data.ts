@@ -27,7 +27,8 @@ export const missingData: Rule = {
     group: 'drawing',
     title: 'A value is missing, so something is not judged',
     clauses: [COMMON_PRACTICE],
-    lesson: 'What is not known is not guessed. A rule that lacks a value says nothing, and silence looks like approval; so the lack itself is said.',
+    lesson:
+      'What is not known is not guessed. A rule that lacks a value says nothing, and silence looks like approval; so the lack itself is said.',
     remedy: 'Type the value, measured or from the plate.',
   },
   *check(context, all) {

@@ -22,9 +22,11 @@ export const missingEarth: Rule = {
       const names = sayParts(context, parts);
       const verb = parts.length === 1 ? 'has' : 'have';
       const what = {
-        nothing: 'The earth contact ends before the earth bar: a fault to the case makes it live, and nothing clears it.',
+        nothing:
+          'The earth contact ends before the earth bar: a fault to the case makes it live, and nothing clears it.',
         line: 'The earth contact is joined to the line: the case stands at full voltage as drawn.',
-        neutral: 'The earth contact is joined to the neutral, not to earth: a break of that neutral makes the case live.',
+        neutral:
+          'The earth contact is joined to the neutral, not to earth: a break of that neutral makes the case live.',
       }[on];
       yield {
         heading: on === 'line' ? `The case of ${names} ${be(parts.length)} live` : `${capital(names)} ${verb} no earth`,

@@ -15,7 +15,8 @@ export const mixedFeeds: Rule = {
     lesson:
       'Somebody switches off the breaker of the room and proves dead at the wrong point, or trusts it: the other breaker still feeds it. ' +
       'And the cable may carry the sum of both before either opens.',
-    remedy: 'Take out the link, so that each conductor hangs on one device; to move loads between sources use a changeover.',
+    remedy:
+      'Take out the link, so that each conductor hangs on one device; to move loads between sources use a changeover.',
   },
   *check(context) {
     const { graph } = context;
@@ -31,16 +32,26 @@ export const mixedFeeds: Rule = {
       if (!wire && bothSources) continue;
       if (devices.length === 0) continue;
       const nearest = [...new Set([devices[0]!, devices.at(-1)!])];
-      const by = wire ? `The wire ${sayWire(context, wire.id)}` : `The lead plugged in at ${say(context, graph.partOf[b]!.id)}`;
+      const by = wire
+        ? `The wire ${sayWire(context, wire.id)}`
+        : `The lead plugged in at ${say(context, graph.partOf[b]!.id)}`;
       const when = switches.length > 0 ? ', in some positions of the two-way switches' : '';
       yield {
-        heading: bothSources ? 'Mains and backup meet on one conductor' : `${capital(sayParts(context, nearest))} ${nearest.length === 1 ? 'is bridged' : 'feed one conductor'}`,
+        heading: bothSources
+          ? 'Mains and backup meet on one conductor'
+          : `${capital(sayParts(context, nearest))} ${nearest.length === 1 ? 'is bridged' : 'feed one conductor'}`,
         message:
           (nearest.length === 1
             ? `${by} leads round ${say(context, nearest[0]!)}${when}: switched off, it makes nothing dead, and it does not see the current.`
             : `${by} joins what ${sayParts(context, nearest)} feed${when}. With either off, both stay live from the other.`) +
           (bothSources ? ' In an outage the battery feeds back into the mains.' : ''),
-        parts: [...new Set([...nearest, ...(part ? [part] : []), ...[a, b].map((node) => graph.partOf[node]!.id).filter((id) => !part || id !== part)])],
+        parts: [
+          ...new Set([
+            ...nearest,
+            ...(part ? [part] : []),
+            ...[a, b].map((node) => graph.partOf[node]!.id).filter((id) => !part || id !== part),
+          ]),
+        ],
         wires: wire ? [wire.id] : [],
         conditions,
       };

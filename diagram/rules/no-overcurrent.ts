@@ -67,7 +67,9 @@ export const noOvercurrent: Rule = {
   *check(context) {
     const { graph } = context;
     for (const { source, points, wires, conditions } of bareLines(context)) {
-      const first = [...graph.parts.values()].filter((part) => isOvercurrent(part) && hasWire(context, graph.node(part.id, '1')!)).sort(byDesignation);
+      const first = [...graph.parts.values()]
+        .filter((part) => isOvercurrent(part) && hasWire(context, graph.node(part.id, '1')!))
+        .sort(byDesignation);
       const what = points.size > 0 ? sayParts(context, points) : 'the line to the next device';
       yield {
         heading: `No overcurrent device after ${say(context, source.part.id)}`,

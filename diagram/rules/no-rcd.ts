@@ -17,7 +17,8 @@ interface Unguarded {
 /** Points that must lie behind an rcd on mains and do not, together where the same duty and severity asks for it. */
 function unguarded(context: Context): Unguarded[] {
   const found = new Map<string, Unguarded>();
-  const told = (duty: Duty): Severity => (duty.of === 'wet' || context.document.supply.system === 'TT' ? 'danger' : 'defect');
+  const told = (duty: Duty): Severity =>
+    duty.of === 'wet' || context.document.supply.system === 'TT' ? 'danger' : 'defect';
   for (const { condition, points } of context.evaluated) {
     if (condition.base !== 'mains') continue;
     for (const state of points.values()) {
@@ -54,7 +55,11 @@ export const noRcd: Rule = {
     severity: 'defect',
     group: 'shock',
     title: 'No rcd guards this circuit',
-    clauses: [recalled('IEC 60364-4-41', '411.3.3'), recalled('BS 7671', '411.3.4'), recalled('IEC 60364-4-41', '411.5.3')],
+    clauses: [
+      recalled('IEC 60364-4-41', '411.3.3'),
+      recalled('BS 7671', '411.3.4'),
+      recalled('IEC 60364-4-41', '411.5.3'),
+    ],
     lesson:
       'A breaker opens at many amperes; a heart stops at some hundredths of one. Only an rcd of 30 mA sees the current that flows ' +
       'through a person, and on TT it is the only device that clears a fault to earth at all.',

@@ -36,7 +36,10 @@ export const openNeutral: Rule = {
           message: `The neutral of ${who} is joined to the earth, which is no way back: load current runs in the earth, and an rcd trips as soon as it is switched on.`,
         };
       else if (on === 'line')
-        yield { ...violation, message: `Both ends of ${who} are joined to line: no neutral leads back to the source, and nothing works.` };
+        yield {
+          ...violation,
+          message: `Both ends of ${who} are joined to line: no neutral leads back to the source, and nothing works.`,
+        };
       else yield violation;
     }
   },

@@ -14,20 +14,33 @@ function needed(part: Part): readonly (readonly string[])[] {
     case 'mcb':
     case 'rcbo':
       if (part.spare) return [];
-      return part.kind === 'mcb' && polesOf(part) === 1 ? [['1', '2']] : part.kind === 'mcb' ? [['1', '2'], ['3', '4']] : [['1', '2', '3', '4']];
+      return part.kind === 'mcb' && polesOf(part) === 1
+        ? [['1', '2']]
+        : part.kind === 'mcb'
+          ? [
+              ['1', '2'],
+              ['3', '4'],
+            ]
+          : [['1', '2', '3', '4']];
     case 'fuse':
     case 'switch':
     case 'regulator':
       return [['1', '2']];
     case 'isolator':
     case 'switch-2pole':
-      return [['1', '2'], ['3', '4']];
+      return [
+        ['1', '2'],
+        ['3', '4'],
+      ];
     case 'rcd':
     case 'meter':
     case 'switch-cross':
       return [['1', '2', '3', '4']];
     case 'switch-2way':
-      return [['C', '1'], ['C', '2']];
+      return [
+        ['C', '1'],
+        ['C', '2'],
+      ];
     case 'changeover':
       return [polesOf(part) === 2 ? ['A1', 'A3', 'B1', 'B3', '2', '4'] : ['A1', 'B1', '2']];
     case 'inverter':
@@ -69,7 +82,8 @@ export const openTerminal: Rule = {
     group: 'polarity',
     title: 'A terminal that must be wired is not',
     clauses: [COMMON_PRACTICE],
-    lesson: 'A part with half its wires is either unfinished or wired from memory. The screw that is empty on the drawing is empty on the wall.',
+    lesson:
+      'A part with half its wires is either unfinished or wired from memory. The screw that is empty on the drawing is empty on the wall.',
     remedy: 'Wire the terminal, or mark the way as spare.',
   },
   *check(context) {
@@ -83,8 +97,11 @@ export const openTerminal: Rule = {
       if (touched.length === 0) continue;
       // A pole is complete or not used at all; one pole at least must be complete.
       const whole = sets.some((set) => set.every((mark) => wired(part, mark)));
-      const halves = sets.flatMap((set) => (set.some((mark) => wired(part, mark)) ? set.filter((mark) => !wired(part, mark)) : []));
-      const missing = part.kind === 'switch-2way' ? (whole ? [] : sets[0]!.filter((mark) => !wired(part, mark))) : halves;
+      const halves = sets.flatMap((set) =>
+        set.some((mark) => wired(part, mark)) ? set.filter((mark) => !wired(part, mark)) : [],
+      );
+      const missing =
+        part.kind === 'switch-2way' ? (whole ? [] : sets[0]!.filter((mark) => !wired(part, mark))) : halves;
       const serving = part.kind === 'plug' && part.in === undefined;
       if (missing.length === 0 || serving || isTold(context, part, missing)) continue;
       yield {

@@ -1,5 +1,5 @@
 import type { Edge } from '../terminals/graph';
-import { reach, reaches } from '../terminals/reach';
+import { closedEdges, groups, reach, reaches } from '../terminals/reach';
 import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
 import { bypassedContacts } from './readings/bypassed';
@@ -15,15 +15,23 @@ const commands = (edge: Edge): boolean => edge.kind === 'switch' || edge.kind ==
 /** Points whose unswitched line another rule has told already. */
 function told(context: Context): Set<string> {
   const { graph } = context;
-  const points = new Set([...reversedPoints(context), ...neutralContacts(context).switched.flatMap((each) => each.points)]);
+  const points = new Set([
+    ...reversedPoints(context),
+    ...neutralContacts(context).switched.flatMap((each) => each.points),
+  ]);
   for (const { point, idle } of truthTables(context)) if (idle.length > 0) points.add(point);
   // A bypassed switch makes everything on its stretch permanent.
-  const bypassed = new Set(bypassedContacts(context).flatMap(({ part }) => graph.contactsOf.get(part)!.flatMap((n) => [graph.edges[n]!.a, graph.edges[n]!.b])));
+  const stretch = groups(
+    graph,
+    closedEdges(graph, ({ kind }) => kind !== 'wire' && kind !== 'plug'),
+  );
+  const bypassed = new Set(
+    bypassedContacts(context).flatMap(({ part }) =>
+      graph.contactsOf.get(part)!.map((n) => stretch[graph.edges[n]!.a]!),
+    ),
+  );
   for (const { points: states } of context.evaluated)
-    for (const state of states.values()) {
-      const on = state.lineEdges.some((number) => bypassed.has(graph.edges[number]!.a) || bypassed.has(graph.edges[number]!.b));
-      if (on) points.add(state.part.id);
-    }
+    for (const { part, lineEnd } of states.values()) if (bypassed.has(stretch[lineEnd]!)) points.add(part.id);
   return points;
 }
 
@@ -35,7 +43,8 @@ export const permanentFeed: Rule = {
     group: 'polarity',
     title: 'A lamp or fan that nothing switches',
     clauses: [COMMON_PRACTICE],
-    lesson: 'Its line comes straight from the way. It burns day and night, and whoever changes the lamp must go to the board to have it dead.',
+    lesson:
+      'Its line comes straight from the way. It burns day and night, and whoever changes the lamp must go to the board to have it dead.',
     remedy: 'Lead its line through a switch.',
   },
   *check(context) {

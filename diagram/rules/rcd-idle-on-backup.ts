@@ -37,7 +37,11 @@ export const rcdIdleOnBackup: Rule = {
         severity: sockets ? 'danger' : 'defect',
         heading: `${capital(sayParts(context, points))} without rcd on battery`,
         message: `On battery no rcd lies between ${say(context, inverter)} and ${sayParts(context, points)}. A fault or a touch that trips on mains trips nothing then.`,
-        parts: [inverter, ...inOrder(context, ways).map(({ id }) => id), ...inOrder(context, points).map(({ id }) => id)],
+        parts: [
+          inverter,
+          ...inOrder(context, ways).map(({ id }) => id),
+          ...inOrder(context, points).map(({ id }) => id),
+        ],
         conditions: [...conditions],
       };
     }

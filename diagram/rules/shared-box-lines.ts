@@ -8,7 +8,10 @@ import { capital, sayParts } from './readings/words';
 
 /** Opens both conductors of all that follows. */
 const isolates = (part: Part): boolean =>
-  part.kind === 'isolator' || part.kind === 'rcd' || part.kind === 'rcbo' || (part.kind === 'mcb' && polesOf(part) === 2);
+  part.kind === 'isolator' ||
+  part.kind === 'rcd' ||
+  part.kind === 'rcbo' ||
+  (part.kind === 'mcb' && polesOf(part) === 2);
 
 /** Devices before a way that isolate it, the main switch apart. */
 function isolatorsOf(context: Context, device: string): Set<string> {
@@ -29,7 +32,8 @@ export const sharedBoxLines: Rule = {
     group: 'separation',
     title: 'Two ways in one switchboard, with nothing to isolate both',
     clauses: [recalled('IEC 60364-5-53', '536.2.1.1')],
-    lesson: 'The breaker of the lamps is off and the box is opened. Behind the next switch sits the line of another way, live.',
+    lesson:
+      'The breaker of the lamps is off and the box is opened. Behind the next switch sits the line of another way, live.',
     remedy: 'Give both ways one rcd or isolator, or keep them in separate boxes.',
   },
   *check(context) {
@@ -47,7 +51,10 @@ export const sharedBoxLines: Rule = {
       if (common) continue;
       yield {
         heading: `${ways.length} ways in ${sayBoard(context, board)}`,
-        message: `${capital(sayBoard(context, board))} holds lines of ${sayParts(context, ways.map(({ device }) => device))}, and nothing but the main switch isolates them together.`,
+        message: `${capital(sayBoard(context, board))} holds lines of ${sayParts(
+          context,
+          ways.map(({ device }) => device),
+        )}, and nothing but the main switch isolates them together.`,
         parts: ways.map(({ device }) => device),
       };
     }

@@ -15,7 +15,8 @@ export const switchedNeutral: Rule = {
       'The lamp goes dark when the switch opens, so everybody takes it for dead. But its line is still there: whoever ' +
       'changes the lamp holds the live contact, and the way back is through him. A switch belongs in the line, where opening it ' +
       'takes the voltage away and not only the current.',
-    remedy: 'Lead the line through the switch and the neutral straight to the lamp, or fit a switch that opens both poles.',
+    remedy:
+      'Lead the line through the switch and the neutral straight to the lamp, or fit a switch that opens both poles.',
   },
   *check(context) {
     for (const { contacts, points, conditions, wires } of neutralContacts(context).switched) {

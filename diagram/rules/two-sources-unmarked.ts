@@ -41,7 +41,8 @@ export const twoSourcesUnmarked: Rule = {
     group: 'separation',
     title: 'Two sources in one enclosure, and no notice',
     clauses: [seen('BS 7671', '514.15.1')],
-    lesson: 'Whoever opens it switches off the breaker he knows. The other half is fed from the battery and stays live under his fingers.',
+    lesson:
+      'Whoever opens it switches off the breaker he knows. The other half is fed from the battery and stays live under his fingers.',
     remedy: 'Fix a notice: two sources, isolate both.',
   },
   *check(context) {
@@ -50,7 +51,10 @@ export const twoSourcesUnmarked: Rule = {
       const sources = sourcesIn(context, board);
       if (!sources.has('mains') || !sources.has('backup')) continue;
       const noticed = context.document.notices?.some(
-        (notice) => notice.place === board.place && (notice.board === undefined || notice.board === board.board) && notice.text.trim() !== '',
+        (notice) =>
+          notice.place === board.place &&
+          (notice.board === undefined || notice.board === board.board) &&
+          notice.text.trim() !== '',
       );
       if (noticed) continue;
       yield {
@@ -64,7 +68,11 @@ export const twoSourcesUnmarked: Rule = {
               set: {
                 notices: [
                   ...(context.document.notices ?? []),
-                  { place: board.place, ...(board.board && { board: board.board }), text: 'Two sources: isolate the mains and the backup before work.' },
+                  {
+                    place: board.place,
+                    ...(board.board && { board: board.board }),
+                    text: 'Two sources: isolate the mains and the backup before work.',
+                  },
                 ],
               },
             },

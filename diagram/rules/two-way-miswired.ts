@@ -15,7 +15,8 @@ export const twoWayMiswired: Rule = {
     lesson:
       'Either switch must change the lamp, whatever the other says. If a strapper sits on the common terminal, the stair is lit ' +
       'only for those who remember how they left the other switch.',
-    remedy: 'Line to the common of the first, strappers from 1 to 1 and 2 to 2, the lamp to the common of the last; cross switches between.',
+    remedy:
+      'Line to the common of the first, strappers from 1 to 1 and 2 to 2, the lamp to the common of the last; cross switches between.',
   },
   *check(context) {
     const bypassed = new Set(bypassedContacts(context).map(({ part }) => part));
@@ -30,7 +31,9 @@ export const twoWayMiswired: Rule = {
     }
     for (const { switches, points, idle } of bySet.values()) {
       const { graph } = context;
-      const wires = [...graph.wires.values()].filter(({ from, to }) => switches.includes(from[0]) && switches.includes(to[0]));
+      const wires = [...graph.wires.values()].filter(
+        ({ from, to }) => switches.includes(from[0]) && switches.includes(to[0]),
+      );
       yield {
         heading: `${capital(sayParts(context, points))} cannot be changed from everywhere`,
         message: `In some position of the others, ${sayParts(context, idle)} does not change ${sayParts(context, points)}.`,

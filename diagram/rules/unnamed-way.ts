@@ -10,7 +10,8 @@ export const unnamedWay: Rule = {
     group: 'drawing',
     title: 'A way without a name',
     clauses: [seen('BS 7671', '514.1.2')],
-    lesson: 'In the dark, with something smoking, nobody traces wires. The chart on the door must say what each breaker feeds.',
+    lesson:
+      'In the dark, with something smoking, nobody traces wires. The chart on the door must say what each breaker feeds.',
     remedy: 'Write what the way feeds.',
   },
   *check(context) {

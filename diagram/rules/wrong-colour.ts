@@ -5,10 +5,12 @@ import { seen } from './clauses';
 import type { Rule } from './types';
 import { sayWire } from './readings/words';
 
-const allows = (scheme: ColourScheme, role: Role, colour: string): boolean => scheme.colours[role].value.includes(colour);
+const allows = (scheme: ColourScheme, role: Role, colour: string): boolean =>
+  scheme.colours[role].value.includes(colour);
 
 /** Colours that a practice keeps for the earth, in any of its schemes. */
-const isEarthColour = (schemes: readonly ColourScheme[], colour: string): boolean => schemes.some((scheme) => allows(scheme, 'earth', colour));
+const isEarthColour = (schemes: readonly ColourScheme[], colour: string): boolean =>
+  schemes.some((scheme) => allows(scheme, 'earth', colour));
 
 /** The scheme that fits most of the stated colours: a home is judged by the one it is wired in. */
 function schemeOf(schemes: readonly ColourScheme[], wires: readonly (Wire & { colour: string })[]): ColourScheme {
@@ -24,7 +26,8 @@ export const wrongColour: Rule = {
     group: 'drawing',
     title: 'A core has the wrong colour',
     clauses: [seen('BS 7671', '514.3'), { document: 'IEC 60445', clause: '6.2', memory: true }],
-    lesson: 'People trust colour before they trust a tester. A green-yellow core that carries line will one day be screwed to a case.',
+    lesson:
+      'People trust colour before they trust a tester. A green-yellow core that carries line will one day be screwed to a case.',
     remedy: 'Take a core of the right colour, or sleeve it at both ends where the practice allows.',
   },
   *check(context) {

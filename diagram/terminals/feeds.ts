@@ -41,7 +41,8 @@ function walkSides(graph: Graph): Sides {
   graph.partOf.forEach((part, node) => {
     const mark = graph.markOf[node]!;
     if (part.kind === 'supply' && (mark === 'L' || mark === 'N')) mainsStarts.push(node);
-    if (part.kind === 'inverter' && (mark === 'out.L' || mark === 'out.N' || mark.startsWith('bat'))) backupStarts.push(node);
+    if (part.kind === 'inverter' && (mark === 'out.L' || mark === 'out.N' || mark.startsWith('bat')))
+      backupStarts.push(node);
   });
   const inside = new Set(['bypass', 'through', 'ground', 'bond']);
   const earth = (edge: Graph['edges'][number]) => edge.wire?.role === 'earth';

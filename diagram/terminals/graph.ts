@@ -1,5 +1,13 @@
 import { hasTerminal, isBar, terminalsOf } from '../document/kinds';
-import { canonical, type Cable, type End, type Installation, type Part, type Place, type Wire } from '../document/schema';
+import {
+  canonical,
+  type Cable,
+  type End,
+  type Installation,
+  type Part,
+  type Place,
+  type Wire,
+} from '../document/schema';
 import { linksOf, type LinkKind } from './links';
 
 /** A joint between two nodes: a wire, or a contact inside a part. */

@@ -12,7 +12,8 @@ import type { Part } from '../document/schema';
  * - `bond`: an inverter's out.N-out.E, closed on battery only; never a neutral
  * - `plug`: a pin in its socket
  */
-export type LinkKind = 'device' | 'switch' | 'select' | 'changeover' | 'bypass' | 'through' | 'ground' | 'bond' | 'plug';
+export type LinkKind =
+  'device' | 'switch' | 'select' | 'changeover' | 'bypass' | 'through' | 'ground' | 'bond' | 'plug';
 
 export interface Link {
   kind: LinkKind;

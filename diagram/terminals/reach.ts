@@ -40,7 +40,7 @@ export const reaches = (walk: Reach, node: number | undefined): boolean => node 
 /** Edges from the start of the walk to `node`, in that order; empty at a start. `node` must have been reached. */
 export function pathTo(graph: Graph, walk: Reach, node: number): number[] {
   const path: number[] = [];
-  for (let at = node; walk.via[at]! >= 0; ) {
+  for (let at = node; walk.via[at]! >= 0;) {
     const number = walk.via[at]!;
     path.push(number);
     const edge = graph.edges[number]!;

@@ -38,7 +38,20 @@ export interface Section {
   next: string[];
 }
 
-const COLLECTORS = new Set(['neutral-bar', 'earth-bar', 'line-bar', 'supply', 'meter', 'isolator', 'mcb', 'rcd', 'rcbo', 'fuse', 'changeover', 'inverter']);
+const COLLECTORS = new Set([
+  'neutral-bar',
+  'earth-bar',
+  'line-bar',
+  'supply',
+  'meter',
+  'isolator',
+  'mcb',
+  'rcd',
+  'rcbo',
+  'fuse',
+  'changeover',
+  'inverter',
+]);
 
 /**
  * The sections of a home. Where a drawing leaves the direction open (a device that no source reaches) there is none.
@@ -53,7 +66,11 @@ export function findSections(graph: Graph, apart: ReadonlySet<number> = new Set(
   const mains = lineStarts('supply', 'L');
   const backup = lineStarts('inverter', 'out.L');
   const walk = reach(graph, [...mains, ...backup], closed);
-  const fromBackup = reach(graph, backup, closedEdges(graph, (edge) => blocked(edge) || edge.kind === 'changeover'));
+  const fromBackup = reach(
+    graph,
+    backup,
+    closedEdges(graph, (edge) => blocked(edge) || edge.kind === 'changeover'),
+  );
   const isDevice = (edge: Edge) => edge.kind === 'device' && isOvercurrent(graph.parts.get(edge.part!)!);
 
   const sections: Section[] = [];
@@ -126,7 +143,11 @@ function belongings(graph: Graph, section: Section): Pick<Way, 'parts' | 'wires'
 }
 
 /** The ways of a home, numbered from 1: mains ways in order of designation, then backup ways. */
-export function findWays(doc: Installation, graph: Graph = buildGraph(doc), sections: Section[] = findSections(graph)): Way[] {
+export function findWays(
+  doc: Installation,
+  graph: Graph = buildGraph(doc),
+  sections: Section[] = findSections(graph),
+): Way[] {
   const ways = sections.filter(isWay);
   ways.sort((a, b) => Number(a.backup) - Number(b.backup) || byDesignation(a.device, b.device));
   return ways.map((section, i) => ({

@@ -17,7 +17,10 @@ function checkFile(file: string, practice: PracticeId | undefined): Answer {
   try {
     data = JSON.parse(readFileSync(file, 'utf8'));
   } catch (error) {
-    const message = error instanceof SyntaxError ? `this is not JSON: ${error.message}` : `this file cannot be read: ${String(error instanceof Error ? error.message : error)}`;
+    const message =
+      error instanceof SyntaxError
+        ? `this is not JSON: ${error.message}`
+        : `this file cannot be read: ${String(error instanceof Error ? error.message : error)}`;
     return invalid(file, [{ path: '(file)', message }]);
   }
   const read = readDocument(data);

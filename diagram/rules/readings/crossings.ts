@@ -29,8 +29,15 @@ export const crossings = once((context: Context): Crossing[] => {
     for (const stand of stands.filter(({ shorted }) => shorted)) {
       for (const { edge, between } of findCrossedJoints(graph, stand.closed, conductorAnchors(graph, condition))) {
         const { a, b } = graph.edges[edge]!;
-        const beside = [a, b].map((node) => graph.partOf[node]!).filter(({ kind }) => kind === 'switch-2way' || kind === 'switch-cross');
-        add(edge, between, condition.name, beside.map(({ id }) => id));
+        const beside = [a, b]
+          .map((node) => graph.partOf[node]!)
+          .filter(({ kind }) => kind === 'switch-2way' || kind === 'switch-cross');
+        add(
+          edge,
+          between,
+          condition.name,
+          beside.map(({ id }) => id),
+        );
       }
     }
   }

@@ -25,7 +25,11 @@ export interface DeadRegion {
  * @param ends the node of each point that should be joined to something
  * @param stops nodes at which the stretch has met a conductor again
  */
-export function deadRegions(context: Context, ends: ReadonlyMap<string, number>, stops: (node: number) => boolean): DeadRegion[] {
+export function deadRegions(
+  context: Context,
+  ends: ReadonlyMap<string, number>,
+  stops: (node: number) => boolean,
+): DeadRegion[] {
   const { graph } = context;
   const taken = new Set<string>();
   const regions: DeadRegion[] = [];
@@ -48,7 +52,8 @@ export function deadRegions(context: Context, ends: ReadonlyMap<string, number>,
       if (stops(node)) {
         if (!isPoint(part)) open.add(part.id);
       } else if (isBar(part.kind)) (part.kind === 'joint' ? joints : bars).add(part.id);
-      else if (!isPoint(part) && part.kind !== 'spd' && part.kind !== 'plug' && !hasWire(context, node)) open.add(part.id);
+      else if (!isPoint(part) && part.kind !== 'spd' && part.kind !== 'plug' && !hasWire(context, node))
+        open.add(part.id);
     }
     const loose = graph.loose.filter((wire) =>
       [wire.from, wire.to].some(([part, mark]) => {
@@ -56,7 +61,9 @@ export function deadRegions(context: Context, ends: ReadonlyMap<string, number>,
         return node !== undefined && nodes.has(node);
       }),
     );
-    const astray = [...edges].map((number) => graph.edges[number]!).filter((edge) => edge.wire && (isEarth(edge.a) || isEarth(edge.b)));
+    const astray = [...edges]
+      .map((number) => graph.edges[number]!)
+      .filter((edge) => edge.wire && (isEarth(edge.a) || isEarth(edge.b)));
     const gap = open.size > 0 ? open : bars.size > 0 ? bars : joints;
     regions.push({
       points,

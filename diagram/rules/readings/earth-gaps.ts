@@ -30,11 +30,13 @@ export function needsEarth(context: Context, part: Part): boolean {
   return part.class === 1;
 }
 
-const isTwoPin = (pattern: string | undefined): boolean => pattern !== undefined && /two-pin|2-pin|IS1293-2\.5|shaver/i.test(pattern);
+const isTwoPin = (pattern: string | undefined): boolean =>
+  pattern !== undefined && /two-pin|2-pin|IS1293-2\.5|shaver/i.test(pattern);
 
 export function hasWire(context: Context, node: number): boolean {
   const { graph } = context;
-  for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) if (graph.edges[graph.around[k]!]!.kind === 'wire') return true;
+  for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++)
+    if (graph.edges[graph.around[k]!]!.kind === 'wire') return true;
   return false;
 }
 
@@ -60,7 +62,11 @@ export const earthGaps = once((context: Context): EarthGap[] => {
   };
   const follows = (edge: Edge, number: number) =>
     earth.closed[number] !== 0 &&
-    (edge.wire ? natureOfRole(edge.wire.role) === 'E' || natureOfNode(graph, edge.a) === 'E' || natureOfNode(graph, edge.b) === 'E' : edge.kind !== 'bond');
+    (edge.wire
+      ? natureOfRole(edge.wire.role) === 'E' ||
+        natureOfNode(graph, edge.a) === 'E' ||
+        natureOfNode(graph, edge.b) === 'E'
+      : edge.kind !== 'bond');
 
   const taken = new Set<string>();
   const gaps: EarthGap[] = [];
@@ -73,14 +79,20 @@ export const earthGaps = once((context: Context): EarthGap[] => {
     // A plug that hangs has its earth once it is put in.
     if (at.some((end) => end.part.kind === 'plug' && end.part.in === undefined && end.mark === 'E')) continue;
     const strays = at.filter(({ node }) => alien(node));
-    const joints = at.filter(({ node, part: { kind } }) => !alien(node) && (kind === 'joint' || kind === 'earth-bar')).map((end) => end.part.id);
-    const loose = graph.loose.filter((wire) => at.some((end) => [wire.from, wire.to].some(([id, mark]) => graph.node(id, mark) === end.node)));
+    const joints = at
+      .filter(({ node, part: { kind } }) => !alien(node) && (kind === 'joint' || kind === 'earth-bar'))
+      .map((end) => end.part.id);
+    const loose = graph.loose.filter((wire) =>
+      at.some((end) => [wire.from, wire.to].some(([id, mark]) => graph.node(id, mark) === end.node)),
+    );
     const strayWires = [...region.edges]
       .map((number) => graph.edges[number]!)
       .filter((edge) => edge.wire && (alien(edge.a) || alien(edge.b)))
       .map((edge) => edge.wire!.id);
     const live = context.evaluated.some(({ stands }) =>
-      stands.some(({ line, shorted }) => !shorted && line.some((walk) => [...region.nodes].some((node) => reaches(walk, node)))),
+      stands.some(
+        ({ line, shorted }) => !shorted && line.some((walk) => [...region.nodes].some((node) => reaches(walk, node))),
+      ),
     );
     const onNeutral = context.evaluated.some(({ stands }) =>
       stands.some(({ neutral }) => neutral.some((walk) => [...region.nodes].some((node) => reaches(walk, node)))),

@@ -27,7 +27,9 @@ export const lineLoops = once((context: Context): LineLoop[] => {
       if (stand.shorted) continue;
       for (const joint of findParallelJoints(graph, stand.closed, starts)) {
         if (!meetsDevice(graph, joint)) continue;
-        const switches = joint.loop.flatMap((number) => (graph.edges[number]!.kind === 'select' ? [graph.edges[number]!.part!] : []));
+        const switches = joint.loop.flatMap((number) =>
+          graph.edges[number]!.kind === 'select' ? [graph.edges[number]!.part!] : [],
+        );
         add(joint.edge, joint.loop, condition.name, [...new Set(switches)].sort());
       }
     }

@@ -17,7 +17,11 @@ export interface LivePin {
  * Groups that stand at line voltage with the plug out: what a source's line reaches, and what a load ties to it while
  * nothing ties it to earth. A source whose neutral has lost the earth is itself lifted by a load between its line and earth.
  */
-function liveGroups(context: Context, { condition }: Evaluated, closed: Uint8Array): { direct: Set<number>; all: Set<number>; group: Int32Array } {
+function liveGroups(
+  context: Context,
+  { condition }: Evaluated,
+  closed: Uint8Array,
+): { direct: Set<number>; all: Set<number>; group: Int32Array } {
   const { graph, earth } = context;
   const joined = closed.slice();
   graph.edges.forEach((edge, number) => {
@@ -32,17 +36,22 @@ function liveGroups(context: Context, { condition }: Evaluated, closed: Uint8Arr
   const all = new Set(direct);
   const neutrals = new Set(condition.sources.map(({ neutral }) => group[neutral]!));
   const floating = condition.sources.filter(({ neutral }) => !earthed.has(group[neutral]!));
-  const loads = [...graph.parts.values()].filter(isPoint).map(({ id }) => [group[graph.node(id, 'L')!]!, group[graph.node(id, 'N')!]!] as const);
+  const loads = [...graph.parts.values()]
+    .filter(isPoint)
+    .map(({ id }) => [group[graph.node(id, 'L')!]!, group[graph.node(id, 'N')!]!] as const);
   for (const [l, n] of loads) {
     for (const { line, neutral } of floating) {
       const [from, to] = group[line] === l ? [l, n] : [n, l];
       if (from === group[line] && earthed.has(to)) all.add(group[neutral]!);
     }
   }
-  for (let before = -1; before !== all.size; ) {
+  for (let before = -1; before !== all.size;) {
     before = all.size;
     for (const [l, n] of loads) {
-      for (const [from, to] of [[l, n], [n, l]] as const)
+      for (const [from, to] of [
+        [l, n],
+        [n, l],
+      ] as const)
         if (all.has(from) && !earthed.has(to) && !neutrals.has(to)) all.add(to);
     }
   }
@@ -65,7 +74,9 @@ export const livePins = once((context: Context): LivePin[] => {
         const node = graph.node(plug.id, pin)!;
         const here = group[node]!;
         if (!all.has(here)) continue;
-        const straight = direct.has(here) && evaluated.condition.sources.some(({ line }) => reaches(reach(graph, [line], closed), node));
+        const straight =
+          direct.has(here) &&
+          evaluated.condition.sources.some(({ line }) => reaches(reach(graph, [line], closed), node));
         if (straight) entry.through = false;
         if (!entry.pins.includes(pin)) entry.pins.push(pin);
         if (!entry.conditions.includes(evaluated.condition.name)) entry.conditions.push(evaluated.condition.name);

@@ -24,7 +24,13 @@ const isSingle = (part: Part): boolean =>
 const isFuse = (part: Part): boolean =>
   (part.kind === 'fuse' && part.standard !== 'dc') || (part.kind === 'mcb' && polesOf(part) === 1);
 
-function collect(into: Map<string, NeutralContact>, contacts: string[], point: string, wires: string[], condition: string) {
+function collect(
+  into: Map<string, NeutralContact>,
+  contacts: string[],
+  point: string,
+  wires: string[],
+  condition: string,
+) {
   const key = contacts.join(' ');
   const entry = into.get(key) ?? { contacts, points: [], wires: [], conditions: [] };
   if (!entry.points.includes(point)) entry.points.push(point);
@@ -50,7 +56,8 @@ export const neutralContacts = once((context: Context) => {
         let found = false;
         graph.edges.forEach((edge, number) => {
           const part = partAt(number);
-          if (edge.kind === 'wire' || !part || !(isSingle(part) || isFuse(part) || part.kind === 'switch-2pole')) return;
+          if (edge.kind === 'wire' || !part || !(isSingle(part) || isFuse(part) || part.kind === 'switch-2pole'))
+            return;
           opened[number] = 0;
           found ||= reaches(neutral, edge.a) && reaches(neutral, edge.b);
         });

@@ -51,7 +51,8 @@ function judge(context: Context, evaluated: Evaluated, state: PointState): Verdi
     const losing = foreign.filter((id) => isLostWithout(context, evaluated, state, id));
     if (losing.length > 0) return { kind: 'lost', devices: losing, foreign: true };
     const residual = foreign.filter((id) => ['rcd', 'rcbo'].includes(context.graph.parts.get(id)!.kind));
-    if (residual.length + missed.length > 0) return { kind: 'behind', devices: [...residual, ...missed], foreign: residual.length > 0 };
+    if (residual.length + missed.length > 0)
+      return { kind: 'behind', devices: [...residual, ...missed], foreign: residual.length > 0 };
     return undefined;
   }
   const devices = foreign.filter((id) => context.graph.parts.get(id)!.kind !== 'plug');
@@ -72,7 +73,8 @@ function worst(context: Context): Map<string, Verdict & { first: Evaluated; cond
       const id = state.part.id;
       const before = found.get(id);
       const name = evaluated.condition.name;
-      if (!before || rank(verdict.kind) < rank(before.kind)) found.set(id, { ...verdict, first: evaluated, conditions: [name] });
+      if (!before || rank(verdict.kind) < rank(before.kind))
+        found.set(id, { ...verdict, first: evaluated, conditions: [name] });
       else if (verdict.kind === before.kind) before.conditions.push(name);
     }
   }

@@ -7,7 +7,9 @@ import { once } from './once';
 
 /** Devices that open line and neutral together. */
 const opensBoth = (part: Part): boolean =>
-  part.kind === 'rcd' || part.kind === 'rcbo' || ((part.kind === 'mcb' || part.kind === 'isolator') && polesOf(part) === 2);
+  part.kind === 'rcd' ||
+  part.kind === 'rcbo' ||
+  ((part.kind === 'mcb' || part.kind === 'isolator') && polesOf(part) === 2);
 
 /** How the way back of a point differs from its way out. */
 export interface WayBack {

@@ -16,7 +16,12 @@ export interface OpenRegion extends DeadRegion {
   inverter?: string;
 }
 
-const partsOf = (context: Context, on: 'line' | 'neutral') => new Set(earthGaps(context).filter((gap) => gap.on === on).flatMap(({ parts }) => parts));
+const partsOf = (context: Context, on: 'line' | 'neutral') =>
+  new Set(
+    earthGaps(context)
+      .filter((gap) => gap.on === on)
+      .flatMap(({ parts }) => parts),
+  );
 
 /** Points that no condition brings line to, by their line end; parts joined to nothing are another rule's. */
 function neverFed(context: Context): OpenRegion[] {
@@ -42,7 +47,9 @@ function deadOnMains(context: Context): OpenRegion[] {
   const found = new Map<string, { points: Set<string>; conditions: Set<string> }>();
   for (const { condition, points } of context.evaluated) {
     if (condition.base !== 'outage') continue;
-    const mains = context.evaluated.find((other) => other.condition.name === `mains${condition.name.slice('outage'.length)}`)!;
+    const mains = context.evaluated.find(
+      (other) => other.condition.name === `mains${condition.name.slice('outage'.length)}`,
+    )!;
     for (const state of points.values()) {
       if (state.source?.kind !== 'backup' || mains.points.get(state.part.id)!.source) continue;
       const entry = found.get(state.source.part.id) ?? { points: new Set(), conditions: new Set() };
@@ -53,7 +60,11 @@ function deadOnMains(context: Context): OpenRegion[] {
   }
   return [...found].map(([inverter, { points, conditions }]): OpenRegion => {
     const { line } = potentialsIn(context, [...conditions]);
-    const [gap] = deadRegions(context, new Map([[inverter, context.graph.node(inverter, 'in.L')!]]), (node) => line[node] === 1);
+    const [gap] = deadRegions(
+      context,
+      new Map([[inverter, context.graph.node(inverter, 'in.L')!]]),
+      (node) => line[node] === 1,
+    );
     return { ...gap!, side: 'L', inverter, points: [...points], conditions: [...conditions] };
   });
 }

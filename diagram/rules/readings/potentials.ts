@@ -16,7 +16,11 @@ const mark = (into: Uint8Array, walks: readonly Reach[]) => {
 
 /** Nodes that are line, neutral or earth in one of these conditions. */
 export function potentialsIn({ graph, evaluated, earth }: Context, names: readonly string[]): Potentials {
-  const found = { line: new Uint8Array(graph.size), neutral: new Uint8Array(graph.size), earth: new Uint8Array(graph.size) };
+  const found = {
+    line: new Uint8Array(graph.size),
+    neutral: new Uint8Array(graph.size),
+    earth: new Uint8Array(graph.size),
+  };
   for (const { condition, stands } of evaluated) {
     if (!names.includes(condition.name)) continue;
     for (const stand of stands) {
@@ -30,4 +34,9 @@ export function potentialsIn({ graph, evaluated, earth }: Context, names: readon
 }
 
 /** Every node that is ever line, neutral or earth. */
-export const potentials = once((context: Context): Potentials => potentialsIn(context, context.evaluated.map(({ condition }) => condition.name)));
+export const potentials = once((context: Context): Potentials =>
+  potentialsIn(
+    context,
+    context.evaluated.map(({ condition }) => condition.name),
+  ),
+);

@@ -36,7 +36,9 @@ function ttLimit({ document, practice }: Context): number {
 
 /** Residual-current devices that both the line and the neutral of a point pass, from the source on. */
 export function guardsOf({ graph }: Context, state: PointState): Part[] {
-  return state.lineDevices.map((id) => graph.parts.get(id)!).filter((part) => isResidual(part) && (!state.fed || state.neutralDevices.includes(part.id)));
+  return state.lineDevices
+    .map((id) => graph.parts.get(id)!)
+    .filter((part) => isResidual(part) && (!state.fed || state.neutralDevices.includes(part.id)));
 }
 
 /** True when a device is sensitive enough for the duty; a device whose sensitivity is not stated is given the doubt. */

@@ -30,7 +30,9 @@ export const reversals = once((context: Context): Reversal[] => {
   for (const { condition, points } of context.evaluated) {
     for (const state of points.values()) {
       if (!state.reversed) continue;
-      const wires = [lastRight(context, state.lineEdges, 'L'), lastRight(context, state.neutralEdges, 'N')].filter((id) => id !== undefined);
+      const wires = [lastRight(context, state.lineEdges, 'L'), lastRight(context, state.neutralEdges, 'N')].filter(
+        (id) => id !== undefined,
+      );
       const key = wires.length === 2 ? wires.join(' ') : state.part.id;
       const entry = found.get(key) ?? { points: new Set(), wires, conditions: new Set() };
       entry.points.add(state.part.id);
@@ -39,14 +41,19 @@ export const reversals = once((context: Context): Reversal[] => {
     }
   }
   return [...found.values()].map(({ points, wires, conditions }) => ({
-    points: [...points].map((id) => context.graph.parts.get(id)!).sort(byDesignation).map(({ id }) => id),
+    points: [...points]
+      .map((id) => context.graph.parts.get(id)!)
+      .sort(byDesignation)
+      .map(({ id }) => id),
     wires,
     conditions: [...conditions],
   }));
 });
 
 /** Ids of points that are the wrong way round in some condition. */
-export const reversedPoints = once((context: Context): ReadonlySet<string> => new Set(reversals(context).flatMap(({ points }) => points)));
+export const reversedPoints = once(
+  (context: Context): ReadonlySet<string> => new Set(reversals(context).flatMap(({ points }) => points)),
+);
 
 /** Nodes on the way out and back of points that are the wrong way round: there line and neutral are each other's. */
 export const reversedNodes = once((context: Context): ReadonlySet<number> => {

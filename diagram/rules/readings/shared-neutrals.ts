@@ -8,7 +8,8 @@ import { once } from './once';
 /** Overcurrent devices before each overcurrent device. */
 const forebears = once(({ sections }: Context): Map<string, Set<string>> => {
   const parents = new Map<string, string[]>();
-  for (const { device, next } of sections) for (const id of next) parents.set(id, [...(parents.get(id) ?? []), device.id]);
+  for (const { device, next } of sections)
+    for (const id of next) parents.set(id, [...(parents.get(id) ?? []), device.id]);
   const all = new Map<string, Set<string>>();
   for (const { device } of sections) {
     const seen = new Set<string>();
@@ -33,13 +34,18 @@ const cableOwners = once((context: Context): Map<string, string> => {
       const cable = graph.edges[number]!.wire?.cable;
       if (cable) lines.set(cable, (lines.get(cable) ?? new Set<string>()).add(section.device.id));
     }
-  for (const { cable, role } of graph.wires.values()) if (cable && role === 'neutral') neutrals.set(cable, (neutrals.get(cable) ?? 0) + 1);
+  for (const { cable, role } of graph.wires.values())
+    if (cable && role === 'neutral') neutrals.set(cable, (neutrals.get(cable) ?? 0) + 1);
   const owners = new Map<string, string>();
-  for (const [cable, devices] of lines) if (devices.size === 1 && neutrals.get(cable) === 1) owners.set(cable, [...devices][0]!);
+  for (const [cable, devices] of lines)
+    if (devices.size === 1 && neutrals.get(cable) === 1) owners.set(cable, [...devices][0]!);
   return owners;
 });
 
-const placesWithBars = once(({ document }: Context) => new Set(document.parts.filter(({ kind }) => kind === 'neutral-bar').map(({ place }) => place)));
+const placesWithBars = once(
+  ({ document }: Context) =>
+    new Set(document.parts.filter(({ kind }) => kind === 'neutral-bar').map(({ place }) => place)),
+);
 
 /** True when an edge comes into a place from outside: in a cable, or from another place. */
 function entersBoard({ graph }: Context, number: number, at: number, place: string | undefined): boolean {
@@ -121,7 +127,9 @@ function waysOfEdges(context: Context, { points }: Evaluated): Map<number, Map<s
 }
 
 function ownerOf(context: Context, edges: readonly number[], ways: ReadonlyMap<string, string[]>): string {
-  const byCable = edges.map((number) => cableOwners(context).get(context.graph.edges[number]!.wire?.cable ?? '')).find((id) => id !== undefined && ways.has(id));
+  const byCable = edges
+    .map((number) => cableOwners(context).get(context.graph.edges[number]!.wire?.cable ?? ''))
+    .find((id) => id !== undefined && ways.has(id));
   if (byCable !== undefined) return byCable;
   const devices = [...ways.keys()].map((id) => context.graph.parts.get(id)!).sort(byDesignation);
   return devices.reduce((best, device) => (ways.get(device.id)!.length > ways.get(best.id)!.length ? device : best)).id;
@@ -146,7 +154,14 @@ export const sharedNeutrals = once((context: Context): NeutralFault[] => {
       const lone = own.filter((number) => !shared.has(number)).map((number) => context.graph.edges[number]!.wire?.id);
       const wire = lone.findLast((id) => id !== undefined);
       const key = `${owner} ${state.overcurrent}`;
-      const fault = found.get(key) ?? { kind: 'borrowed', points: [], wires: [], devices: [owner], foreign: true, conditions: [] };
+      const fault = found.get(key) ?? {
+        kind: 'borrowed',
+        points: [],
+        wires: [],
+        devices: [owner],
+        foreign: true,
+        conditions: [],
+      };
       if (!fault.points.includes(state.part.id)) fault.points.push(state.part.id);
       if (wire !== undefined && !fault.wires.includes(wire)) fault.wires.push(wire);
       if (!fault.conditions.includes(evaluated.condition.name)) fault.conditions.push(evaluated.condition.name);

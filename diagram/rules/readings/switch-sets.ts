@@ -26,7 +26,10 @@ export const truthTables = once((context: Context): TruthTable[] => {
     for (const { condition, stands } of context.evaluated) {
       const fed = stands.map(
         ({ line, neutral, shorted }) =>
-          !shorted && line.some((walk, i) => (reaches(walk, l) && reaches(neutral[i]!, n)) || (reaches(walk, n) && reaches(neutral[i]!, l))),
+          !shorted &&
+          line.some(
+            (walk, i) => (reaches(walk, l) && reaches(neutral[i]!, n)) || (reaches(walk, n) && reaches(neutral[i]!, l)),
+          ),
       );
       if (!fed.includes(true) || (!fed.includes(false) && !touchesSet(context, part.id))) continue;
       const set = sets.find(({ switches }) => touches(context, part.id, switches));
@@ -49,7 +52,9 @@ function touches(context: Context, point: string, switches: readonly string[]): 
   const rails = evaluation.positions.isRail;
   const ends = ['L', 'N'].map((mark) => graph.node(point, mark)!).filter((node) => !rails(node));
   const at = new Set(
-    switches.flatMap((id) => graph.contactsOf.get(id)!.flatMap((number) => [graph.edges[number]!.a, graph.edges[number]!.b])).map((node) => group[node]!),
+    switches
+      .flatMap((id) => graph.contactsOf.get(id)!.flatMap((number) => [graph.edges[number]!.a, graph.edges[number]!.b]))
+      .map((node) => group[node]!),
   );
   return ends.some((node) => at.has(group[node]!));
 }

@@ -14,7 +14,9 @@ export interface Switchboard {
 
 /** Parts that sit in an enclosure with others; lamps, fans, appliances, sources and plugs stand by themselves. */
 const isEnclosed = (part: Part): boolean =>
-  isControl(part) || isBar(part.kind) || ['socket', 'mcb', 'rcd', 'rcbo', 'fuse', 'isolator', 'changeover'].includes(part.kind);
+  isControl(part) ||
+  isBar(part.kind) ||
+  ['socket', 'mcb', 'rcd', 'rcbo', 'fuse', 'isolator', 'changeover'].includes(part.kind);
 
 /** Switchboards by place and board. */
 export const switchboards = once((context: Context): Switchboard[] => {

@@ -30,19 +30,41 @@ const lead = () =>
 testRule(backfeed, {
   valid: {
     'a backup source that ends at its own ways': backupHome(),
-    'a two-pole changeover that excludes it': changeover(2).neutral('NB', 'Q8:A3').neutral('NB2', 'Q8:B3').neutral('Q8:4', 'X8:N', 'k8'),
+    'a two-pole changeover that excludes it': changeover(2)
+      .neutral('NB', 'Q8:A3')
+      .neutral('NB2', 'Q8:B3')
+      .neutral('Q8:4', 'X8:N', 'k8'),
     'an inverter fed by a plug in a mains outlet': backupHome()
       .part('plug', 'PL1', 'hall', { in: 'X5' })
       .part('socket', 'X5', 'hall', { rating: 10 })
-      .cut('Q3:2', 'G1:in.L').cut('Q3:4', 'G1:in.N').cut('EB', 'G1:in.E')
-      .line('Q3:2', 'X5:L').neutral('Q3:4', 'X5:N').earth('EB', 'X5:E')
-      .line('PL1:L', 'G1:in.L').neutral('PL1:N', 'G1:in.N').earth('PL1:E', 'G1:in.E')
-      .move('LB0', 'Q3:1', 'LB').move('NB0', 'Q3:3', 'NB'),
+      .cut('Q3:2', 'G1:in.L')
+      .cut('Q3:4', 'G1:in.N')
+      .cut('EB', 'G1:in.E')
+      .line('Q3:2', 'X5:L')
+      .neutral('Q3:4', 'X5:N')
+      .earth('EB', 'X5:E')
+      .line('PL1:L', 'G1:in.L')
+      .neutral('PL1:N', 'G1:in.N')
+      .earth('PL1:E', 'G1:in.E')
+      .move('LB0', 'Q3:1', 'LB')
+      .move('NB0', 'Q3:3', 'NB'),
   },
   invalid: {
-    'a lead from the backup output in a mains outlet': { drawing: lead(), findings: [{ parts: ['G1', 'PL9', 'X3'], severity: 'danger', conditions: ['outage'] }], also: ['live-pins'] },
-    'mains and backup ways joined in a switchboard': { drawing: backupHome().line('JL11', 'JL21'), findings: [{ parts: ['G1'], conditions: ['outage'] }], also: ['mixed-feeds'] },
-    'the bars joined': { drawing: backupHome().line('LB', 'LB2'), findings: [{ parts: ['G1'] }], also: ['mixed-feeds'] },
+    'a lead from the backup output in a mains outlet': {
+      drawing: lead(),
+      findings: [{ parts: ['G1', 'PL9', 'X3'], severity: 'danger', conditions: ['outage'] }],
+      also: ['live-pins'],
+    },
+    'mains and backup ways joined in a switchboard': {
+      drawing: backupHome().line('JL11', 'JL21'),
+      findings: [{ parts: ['G1'], conditions: ['outage'] }],
+      also: ['mixed-feeds'],
+    },
+    'the bars joined': {
+      drawing: backupHome().line('LB', 'LB2'),
+      findings: [{ parts: ['G1'] }],
+      also: ['mixed-feeds'],
+    },
     'before the main switch: in both conditions': {
       drawing: backupHome().line('P1:4', 'LB2'),
       findings: [{ conditions: ['outage', 'main-off'] }],

@@ -11,11 +11,26 @@ testRule(earthNeutralJoined, {
     'a surge arrester between them': smallHome(),
   },
   invalid: {
-    'a link between the bars': { drawing: smallHome().neutral('NB', 'EB'), findings: [{ parts: ['NB', 'EB'], severity: 'danger' }] },
-    'a link between the bars drawn as earth': { drawing: smallHome().earth('NB0', 'EB'), findings: [{ parts: ['NB0', 'EB'] }] },
+    'a link between the bars': {
+      drawing: smallHome().neutral('NB', 'EB'),
+      findings: [{ parts: ['NB', 'EB'], severity: 'danger' }],
+    },
+    'a link between the bars drawn as earth': {
+      drawing: smallHome().earth('NB0', 'EB'),
+      findings: [{ parts: ['NB0', 'EB'] }],
+    },
     'a link behind an outlet': { drawing: smallHome().earth('X1:N', 'X1:E'), findings: [{ parts: ['X1'] }] },
-    'a link in the home on TN-C-S': { drawing: smallHome({ supply: { system: 'TN-C-S' } }).neutral('NB', 'EB'), findings: [{ parts: ['NB', 'EB'] }] },
-    'a link on TT': { drawing: smallHome({ supply: { system: 'TT', ra: 40 } }).neutral('NB', 'EB'), findings: [{ parts: ['NB', 'EB'] }] },
-    'a link on the backup bar': { drawing: backupHome().neutral('NB2', 'EB'), findings: [{ parts: ['NB2', 'EB'], conditions: ['mains', 'outage', 'main-off'] }] },
+    'a link in the home on TN-C-S': {
+      drawing: smallHome({ supply: { system: 'TN-C-S' } }).neutral('NB', 'EB'),
+      findings: [{ parts: ['NB', 'EB'] }],
+    },
+    'a link on TT': {
+      drawing: smallHome({ supply: { system: 'TT', ra: 40 } }).neutral('NB', 'EB'),
+      findings: [{ parts: ['NB', 'EB'] }],
+    },
+    'a link on the backup bar': {
+      drawing: backupHome().neutral('NB2', 'EB'),
+      findings: [{ parts: ['NB2', 'EB'], conditions: ['mains', 'outage', 'main-off'] }],
+    },
   },
 });

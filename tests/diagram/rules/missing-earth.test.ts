@@ -7,16 +7,40 @@ testRule(missingEarth, {
     'every case earthed': smallHome(),
     'a class 2 lamp': smallHome().cut('JE11', 'E1:E').set('E1', { class: 2 }),
     'a class 2 outlet': smallHome().cut('JE11', 'X1:E').set('X1', { class: 2 }),
-    'an outlet earthed through the next outlet': smallHome().socket('X9', 'Q11').cut('JE11', 'X9:E').earth('X1:E', 'X9:E'),
-    'a second earth bar on the first': smallHome().part('earth-bar', 'EB2', 'study').cable('ke', 4, 9).earth('EB', 'EB2', 'ke').cut('JE11', 'X1:E').earth('EB2', 'X1:E'),
-    'a class 1 appliance on a lead': smallHome().part('plug', 'PL1', 'study', { in: 'X1' }).part('appliance', 'E9', 'study', { watts: 60, pf: 1, class: 1 })
-      .cable('kl', 1, 2).line('PL1:L', 'E9:L', 'kl').neutral('PL1:N', 'E9:N', 'kl').earth('PL1:E', 'E9:E', 'kl'),
-    'a class 1 appliance on a lead that hangs': smallHome().part('plug', 'PL1', 'study').part('appliance', 'E9', 'study', { watts: 60, pf: 1, class: 1 })
-      .cable('kl', 1, 2).line('PL1:L', 'E9:L', 'kl').neutral('PL1:N', 'E9:N', 'kl').earth('PL1:E', 'E9:E', 'kl'),
-    'no main earth at all is one finding of its own': { drawing: smallHome().cut('SUP:E', 'EB'), also: ['no-main-earth', 'slow-disconnection'] },
+    'an outlet earthed through the next outlet': smallHome()
+      .socket('X9', 'Q11')
+      .cut('JE11', 'X9:E')
+      .earth('X1:E', 'X9:E'),
+    'a second earth bar on the first': smallHome()
+      .part('earth-bar', 'EB2', 'study')
+      .cable('ke', 4, 9)
+      .earth('EB', 'EB2', 'ke')
+      .cut('JE11', 'X1:E')
+      .earth('EB2', 'X1:E'),
+    'a class 1 appliance on a lead': smallHome()
+      .part('plug', 'PL1', 'study', { in: 'X1' })
+      .part('appliance', 'E9', 'study', { watts: 60, pf: 1, class: 1 })
+      .cable('kl', 1, 2)
+      .line('PL1:L', 'E9:L', 'kl')
+      .neutral('PL1:N', 'E9:N', 'kl')
+      .earth('PL1:E', 'E9:E', 'kl'),
+    'a class 1 appliance on a lead that hangs': smallHome()
+      .part('plug', 'PL1', 'study')
+      .part('appliance', 'E9', 'study', { watts: 60, pf: 1, class: 1 })
+      .cable('kl', 1, 2)
+      .line('PL1:L', 'E9:L', 'kl')
+      .neutral('PL1:N', 'E9:N', 'kl')
+      .earth('PL1:E', 'E9:E', 'kl'),
+    'no main earth at all is one finding of its own': {
+      drawing: smallHome().cut('SUP:E', 'EB'),
+      also: ['no-main-earth', 'slow-disconnection'],
+    },
   },
   invalid: {
-    'the earth wire of an outlet': { drawing: smallHome().cut('JE11', 'X1:E'), findings: [{ parts: ['X1'], severity: 'danger' }] },
+    'the earth wire of an outlet': {
+      drawing: smallHome().cut('JE11', 'X1:E'),
+      findings: [{ parts: ['X1'], severity: 'danger' }],
+    },
     'the earth core of a way: one finding for the parts behind': {
       drawing: smallHome().cut('EB', 'JE11'),
       findings: [{ parts: ['E1', 'X1', 'JE11'] }],

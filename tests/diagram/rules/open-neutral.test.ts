@@ -11,9 +11,16 @@ const sixLamps = () => {
 testRule(openNeutral, {
   valid: {
     'all neutrals there': sixLamps(),
-    'no line either: that is open-line': { drawing: smallHome().cut('JN11', 'E1').cut('JL11', 'S1'), also: ['open-line'] },
-    'an appliance on a lead that hangs': smallHome().part('plug', 'PL1', 'study').part('appliance', 'E9', 'study', { watts: 60, pf: 1, class: 2 })
-      .cable('kl', 1, 2).line('PL1:L', 'E9:L', 'kl').neutral('PL1:N', 'E9:N', 'kl'),
+    'no line either: that is open-line': {
+      drawing: smallHome().cut('JN11', 'E1').cut('JL11', 'S1'),
+      also: ['open-line'],
+    },
+    'an appliance on a lead that hangs': smallHome()
+      .part('plug', 'PL1', 'study')
+      .part('appliance', 'E9', 'study', { watts: 60, pf: 1, class: 2 })
+      .cable('kl', 1, 2)
+      .line('PL1:L', 'E9:L', 'kl')
+      .neutral('PL1:N', 'E9:N', 'kl'),
     'neutral lost on battery only: backup-neutral-lost': {
       drawing: backupHome({ neutral: 'separate' }).move('NB2', 'JN21', 'NB0'),
       also: ['backup-neutral-lost', 'residual-imbalance'],

@@ -10,8 +10,22 @@ testRule(rcdIdleOnBackup, {
   valid: {
     'an rcd in the backup output': backupHome(),
     'only lamps on battery, TN, IEC': behindMainsRcd().drop('X2'),
-    'an rcbo at the way': behindMainsRcd().drop('Q21').part('rcbo', 'Q22', 'hall', { poles: 1, rating: 6, curve: 'B', icn: 6000, sensitivity: 0.03, type: 'A', label: 'Bedroom' })
-      .line('LB2', 'Q22:1').neutral('NB2', 'Q22:3').line('Q22:2', 'JL21', 'k21').cut('NB2', 'JN21').neutral('Q22:4', 'JN21', 'k21'),
+    'an rcbo at the way': behindMainsRcd()
+      .drop('Q21')
+      .part('rcbo', 'Q22', 'hall', {
+        poles: 1,
+        rating: 6,
+        curve: 'B',
+        icn: 6000,
+        sensitivity: 0.03,
+        type: 'A',
+        label: 'Bedroom',
+      })
+      .line('LB2', 'Q22:1')
+      .neutral('NB2', 'Q22:3')
+      .line('Q22:2', 'JL21', 'k21')
+      .cut('NB2', 'JN21')
+      .neutral('Q22:4', 'JN21', 'k21'),
   },
   invalid: {
     'an outlet whose rcd stands before the inverter': {
@@ -23,7 +37,11 @@ testRule(rcdIdleOnBackup, {
       findings: [{ severity: 'defect' }],
       also: ['slow-disconnection'],
     },
-    'an rcd of 300 mA serves no outlet': { drawing: backupHome().set('Q5', { sensitivity: 0.3 }), findings: [{ severity: 'danger' }], also: ['no-rcd'] },
+    'an rcd of 300 mA serves no outlet': {
+      drawing: backupHome().set('Q5', { sensitivity: 0.3 }),
+      findings: [{ severity: 'danger' }],
+      also: ['no-rcd'],
+    },
     'household lighting in Great Britain': {
       drawing: behindMainsRcd(backupHome({}, { practice: 'GB' })).drop('X2'),
       findings: [{ parts: ['G1', 'Q21', 'E2'], severity: 'defect' }],

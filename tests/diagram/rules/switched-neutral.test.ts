@@ -4,7 +4,13 @@ import { testRule } from '../rule-tester';
 
 /** Line straight to the lamp, its neutral through the switch. */
 const swap = (home: Home) =>
-  home.cut('JL11', 'S1').cut('S1', 'E1').cut('JN11', 'E1').line('JL11', 'E1:L').neutral('JN11', 'S1:1').neutral('S1:2', 'E1:N');
+  home
+    .cut('JL11', 'S1')
+    .cut('S1', 'E1')
+    .cut('JN11', 'E1')
+    .line('JL11', 'E1:L')
+    .neutral('JN11', 'S1:1')
+    .neutral('S1:2', 'E1:N');
 
 const carter = () =>
   smallHome()
@@ -35,13 +41,26 @@ testRule(switchedNeutral, {
     },
   },
   invalid: {
-    'a switch in the neutral of a lamp': { drawing: swap(smallHome()), findings: [{ parts: ['S1'], severity: 'danger', conditions: ['mains'] }] },
+    'a switch in the neutral of a lamp': {
+      drawing: swap(smallHome()),
+      findings: [{ parts: ['S1'], severity: 'danger', conditions: ['mains'] }],
+    },
     'on battery too': {
-      drawing: backupHome().cut('JL21', 'S2').cut('S2', 'E2').cut('JN21', 'E2').line('JL21', 'E2:L').neutral('JN21', 'S2:1').neutral('S2:2', 'E2:N'),
+      drawing: backupHome()
+        .cut('JL21', 'S2')
+        .cut('S2', 'E2')
+        .cut('JN21', 'E2')
+        .line('JL21', 'E2:L')
+        .neutral('JN21', 'S2:1')
+        .neutral('S2:2', 'E2:N'),
       findings: [{ parts: ['S2'], conditions: ['mains', 'outage', 'main-off'] }],
     },
     'a switch before an outlet': {
-      drawing: smallHome().part('switch', 'S9', 'study').cut('JN11', 'X1').neutral('JN11', 'S9:1').neutral('S9:2', 'X1:N'),
+      drawing: smallHome()
+        .part('switch', 'S9', 'study')
+        .cut('JN11', 'X1')
+        .neutral('JN11', 'S9:1')
+        .neutral('S9:2', 'X1:N'),
       findings: [{ parts: ['S9'] }],
     },
     'one pole of a two-pole switch, the line led past it': {
@@ -49,7 +68,12 @@ testRule(switchedNeutral, {
       findings: [{ parts: ['S5'] }],
     },
     'a regulator in the neutral': {
-      drawing: smallHome().fan('M1', 'S2', 'R2', 'Q11').move('R2:1', 'S2:2', 'M1:L').cut('R2:2', 'M1:L').move('M1:N', 'JN11', 'R2:1').neutral('R2:2', 'M1:N'),
+      drawing: smallHome()
+        .fan('M1', 'S2', 'R2', 'Q11')
+        .move('R2:1', 'S2:2', 'M1:L')
+        .cut('R2:2', 'M1:L')
+        .move('M1:N', 'JN11', 'R2:1')
+        .neutral('R2:2', 'M1:N'),
       findings: [{ parts: ['R2'] }],
     },
     'a two-way switch that sends line or neutral: the neutral is switched in some position': {
@@ -58,7 +82,11 @@ testRule(switchedNeutral, {
       also: ['two-way-miswired', 'reversed-polarity', 'line-role-mismatch', 'short-circuit'],
     },
     'two switches in series in one neutral are one finding': {
-      drawing: swap(smallHome()).part('switch', 'S8', 'study').cut('S1:1', 'JN11').neutral('JN11', 'S8:1').neutral('S8:2', 'S1:1'),
+      drawing: swap(smallHome())
+        .part('switch', 'S8', 'study')
+        .cut('S1:1', 'JN11')
+        .neutral('JN11', 'S8:1')
+        .neutral('S8:2', 'S1:1'),
       findings: [{ parts: ['S1', 'S8'] }],
     },
     'three lamps behind one switch in the neutral are one finding': {
