@@ -26,14 +26,26 @@ const DIAGRAM: Record<string, readonly string[]> = {
   // A draft is placed on the sheet as well.
   survey: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit', 'rules', 'layout'],
   paper: ['document', 'symbols', 'terminals', 'layout'],
-  commands: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit', 'rules', 'survey', 'layout', 'paper'],
+  commands: [
+    'document',
+    'symbols',
+    'terminals',
+    'practices',
+    'calculations',
+    'circuit',
+    'rules',
+    'survey',
+    'layout',
+    'paper',
+  ],
 };
 const PACKAGES: Record<string, RegExp> = {
   diagram: /^zod$/,
   models: /^(sequelize|zod)$/,
   'lib/shared': /^(zod|idb|react)$/,
 };
-const IMPORT = /^\s*(?:import|export)\s[^'"`;]*?from\s+['"]([^'"]+)['"]|^\s*import\s+['"]([^'"]+)['"]|\bimport\(\s*['"]([^'"]+)['"]/gm;
+const IMPORT =
+  /^\s*(?:import|export)\s[^'"`;]*?from\s+['"]([^'"]+)['"]|^\s*import\s+['"]([^'"]+)['"]|\bimport\(\s*['"]([^'"]+)['"]/gm;
 
 interface Import {
   file: string;
@@ -58,7 +70,11 @@ const all = (await Promise.all(folders.map(importsOf))).flat();
 const show = ({ file, from }: Import) => `${file} imports ${from}`;
 /** The top-level folder that an import leads to; undefined for a package. */
 const targetOf = ({ file, from }: Import): string | undefined => {
-  const place = from.startsWith('@/') ? from.slice(2) : from.startsWith('.') ? path.posix.join(path.posix.dirname(file), from) : null;
+  const place = from.startsWith('@/')
+    ? from.slice(2)
+    : from.startsWith('.')
+      ? path.posix.join(path.posix.dirname(file), from)
+      : null;
   if (place === null) return undefined;
   return folders.find((folder) => place === folder || place.startsWith(`${folder}/`)) ?? place;
 };
@@ -82,7 +98,9 @@ describe('imports', () => {
   });
 
   it('take no package into the pure folders', () => {
-    const wrong = all.filter((one) => PACKAGES[one.of] && targetOf(one) === undefined && !PACKAGES[one.of]!.test(one.from));
+    const wrong = all.filter(
+      (one) => PACKAGES[one.of] && targetOf(one) === undefined && !PACKAGES[one.of]!.test(one.from),
+    );
     expect(wrong.map(show)).toEqual([]);
   });
 

@@ -7,7 +7,15 @@ import { Stop, run } from './run.mjs';
 /** What ends up in the built app. */
 const SOURCES = [
   ...['app', 'components', 'diagram', 'lib/server', 'lib/shared', 'models', 'public'],
-  ...['proxy.ts', 'instrumentation.ts', 'next.config.mjs', 'tailwind.config.ts', 'postcss.config.mjs', 'tsconfig.json', 'package-lock.json'],
+  ...[
+    'proxy.ts',
+    'instrumentation.ts',
+    'next.config.mjs',
+    'tailwind.config.ts',
+    'postcss.config.mjs',
+    'tsconfig.json',
+    'package-lock.json',
+  ],
 ];
 
 async function filesUnder(place) {
@@ -17,7 +25,11 @@ async function filesUnder(place) {
     throw error;
   });
   if (entries === null) return [place];
-  const nested = await Promise.all(entries.map((entry) => (entry.isDirectory() ? filesUnder(path.join(place, entry.name)) : [path.join(place, entry.name)])));
+  const nested = await Promise.all(
+    entries.map((entry) =>
+      entry.isDirectory() ? filesUnder(path.join(place, entry.name)) : [path.join(place, entry.name)],
+    ),
+  );
   return nested.flat();
 }
 
@@ -25,7 +37,11 @@ async function filesUnder(place) {
 export async function fingerprint(sources = SOURCES) {
   const files = (await Promise.all(sources.map(filesUnder))).flat().sort();
   const hash = createHash('sha256');
-  for (const file of files) hash.update(`${file}\n`).update(await readFile(file)).update('\n');
+  for (const file of files)
+    hash
+      .update(`${file}\n`)
+      .update(await readFile(file))
+      .update('\n');
   return hash.digest('hex');
 }
 

@@ -1,5 +1,17 @@
 import { randomBytes } from 'node:crypto';
-import { access, chmod, chown, mkdir, readFile, readdir, readlink, rm, stat, symlink, writeFile } from 'node:fs/promises';
+import {
+  access,
+  chmod,
+  chown,
+  mkdir,
+  readFile,
+  readdir,
+  readlink,
+  rm,
+  stat,
+  symlink,
+  writeFile,
+} from 'node:fs/promises';
 import path from 'node:path';
 import { installPackages } from './debian.mjs';
 import { Stop, isRoot, lastLine, run } from './run.mjs';
@@ -11,12 +23,19 @@ const APP = 'ohmstead_app';
 const ROOT_RUNS_AS = 'postgres';
 const VERSIONS = '/usr/lib/postgresql';
 
-const exists = (file) => access(file).then(() => true, () => false);
+const exists = (file) =>
+  access(file).then(
+    () => true,
+    () => false,
+  );
 
 /** @returns {Promise<Map<number, string>>} folders of server programs by major version, newest last */
 async function installed() {
   const names = await readdir(VERSIONS).catch(() => []);
-  const versions = names.map(Number).filter((version) => version >= 15).sort((a, b) => a - b);
+  const versions = names
+    .map(Number)
+    .filter((version) => version >= 15)
+    .sort((a, b) => a - b);
   const found = new Map();
   for (const version of versions) {
     const bin = path.join(VERSIONS, String(version), 'bin');
@@ -100,10 +119,15 @@ export async function startCluster({ folder: asked, port, passwords, durable = t
   const stamp = await readFile(path.join(data, 'PG_VERSION'), 'utf8').catch(() => null);
   const isNew = stamp === null;
   if (isNew && (await readdir(folder).catch(() => [])).length > 0)
-    throw new Stop(`The database folder ${folder} is broken: data/PG_VERSION is missing. Put back a copy, or move it away to begin anew: mv ${folder} ${folder}-broken`);
+    throw new Stop(
+      `The database folder ${folder} is broken: data/PG_VERSION is missing. Put back a copy, or move it away to begin anew: mv ${folder} ${folder}-broken`,
+    );
   const version = isNew ? [...versions.keys()].at(-1) : Number(stamp);
   const bin = versions.get(version);
-  if (!bin) throw new Stop(`The drawings in ${folder} belong to PostgreSQL ${stamp.trim()}, which is not installed: apt-get install -y postgresql-${stamp.trim()}`);
+  if (!bin)
+    throw new Stop(
+      `The drawings in ${folder} belong to PostgreSQL ${stamp.trim()}, which is not installed: apt-get install -y postgresql-${stamp.trim()}`,
+    );
   if (isNew) await initialise(bin, folder, passwords, durable);
 
   const log = path.join(folder, 'server.log');
@@ -114,9 +138,12 @@ export async function startCluster({ folder: asked, port, passwords, durable = t
     password_encryption: 'scram-sha-256',
     max_connections: 60,
   };
-  const options = Object.entries({ port, ...settings }).map(([name, value]) => `-c ${name}=${value}`).join(' ');
+  const options = Object.entries({ port, ...settings })
+    .map(([name, value]) => `-c ${name}=${value}`)
+    .join(' ');
   const start = () => as(bin, 'pg_ctl', ['-D', data, '-w', '-t', '60', '-l', log, '-o', options, 'start']);
-  const ready = async () => (await run(path.join(bin, 'pg_isready'), ['-q', '-h', '127.0.0.1', '-p', String(port)])).status === 0;
+  const ready = async () =>
+    (await run(path.join(bin, 'pg_isready'), ['-q', '-h', '127.0.0.1', '-p', String(port)])).status === 0;
   let started = await start();
   if (started.status !== 0 && !(await ready())) {
     // A killed server leaves its lock file; `pg_ctl status` misleads then, so only the answer on the port decides.
@@ -126,19 +153,27 @@ export async function startCluster({ folder: asked, port, passwords, durable = t
   }
   if (started.status !== 0) {
     const reason = lastLine(await readFile(log, 'utf8').catch(() => started.output));
-    throw new Stop(`The database in ${folder} does not start: ${reason} (its log: ${log}). Nothing was changed; to begin anew move it away: mv ${folder} ${folder}-broken`);
+    throw new Stop(
+      `The database in ${folder} does not start: ${reason} (its log: ${log}). Nothing was changed; to begin anew move it away: mv ${folder} ${folder}-broken`,
+    );
   }
 
   const url = (database, role = 'app') =>
     `postgres://${role === 'owner' ? OWNER : APP}:${passwords[role]}@127.0.0.1:${port}/${database}`;
   const psql = async (database, sql) => {
     const where = ['-h', '127.0.0.1', '-p', String(port), '-U', OWNER, '-d', database];
-    const { status, output } = await run(path.join(bin, 'psql'), ['-X', '-q', '-A', '-t', '-v', 'ON_ERROR_STOP=1', ...where], {
-      input: sql,
-      env: { PGPASSWORD: passwords.owner },
-    });
+    const { status, output } = await run(
+      path.join(bin, 'psql'),
+      ['-X', '-q', '-A', '-t', '-v', 'ON_ERROR_STOP=1', ...where],
+      {
+        input: sql,
+        env: { PGPASSWORD: passwords.owner },
+      },
+    );
     if (status === 0) return output.trim();
-    throw new Stop(`The database refused to be set up: ${lastLine(output)}. If .data/secrets.json was changed, put it back.`);
+    throw new Stop(
+      `The database refused to be set up: ${lastLine(output)}. If .data/secrets.json was changed, put it back.`,
+    );
   };
   if ((await psql('postgres', `select count(*) from pg_roles where rolname = '${APP}'`)) === '0')
     await psql('postgres', `create role ${APP} login password '${passwords.app}'`);

@@ -2,7 +2,8 @@ import { Stop } from './run.mjs';
 
 const KNOWN = {
   ENOSPC: 'The disk is full. Make room and start again; nothing that was saved is lost.',
-  EACCES: (error) => `This user may not write ${error.path}. Give the folder to the user who runs npm, or run as its owner.`,
+  EACCES: (error) =>
+    `This user may not write ${error.path}. Give the folder to the user who runs npm, or run as its owner.`,
   EROFS: (error) => `${error.path} lies on a disk that cannot be written.`,
 };
 

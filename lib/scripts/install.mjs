@@ -29,7 +29,11 @@ export async function installDependencies() {
   const { status, output } = npm ? await run(process.execPath, [npm, ...args]) : await run('npm', args);
   if (status === 0) return;
   const said = (pattern) => output.split('\n').find((line) => pattern.test(line));
-  const reason = said(/npm error (Invalid|Missing):/) ?? said(/npm error (?!code|A complete log)\S/) ?? lastLine(output);
-  if (/ENOSPC/.test(output)) throw new Stop('The disk filled up while dependencies were installed. Make room and start again.');
-  throw new Stop(`npm could not install the dependencies: ${reason.replace(/^npm error\s*/, '')}. Is the network there? Try: npm ci`);
+  const reason =
+    said(/npm error (Invalid|Missing):/) ?? said(/npm error (?!code|A complete log)\S/) ?? lastLine(output);
+  if (/ENOSPC/.test(output))
+    throw new Stop('The disk filled up while dependencies were installed. Make room and start again.');
+  throw new Stop(
+    `npm could not install the dependencies: ${reason.replace(/^npm error\s*/, '')}. Is the network there? Try: npm ci`,
+  );
 }

@@ -23,7 +23,7 @@ export async function holdLock(folder, address) {
     } catch (error) {
       if (error.code !== 'EEXIST') throw error;
     }
-    const other = JSON.parse(await readFile(file, 'utf8').catch(() => '{}') || '{}');
+    const other = JSON.parse((await readFile(file, 'utf8').catch(() => '{}')) || '{}');
     if (other.pid !== process.pid && (await runs(other.pid)))
       throw new Stop(`Ohmstead runs already, at ${other.address} (process ${other.pid}). Stop that one first.`);
     await rm(file, { force: true }); // left by one that was killed

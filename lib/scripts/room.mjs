@@ -8,5 +8,8 @@ import { Stop } from './run.mjs';
 export async function needRoom(folder, megabytes) {
   const { bavail, bsize } = await statfs(folder);
   const free = Math.floor((bavail * bsize) / 1_000_000);
-  if (free < megabytes) throw new Stop(`The disk is full: ${megabytes} MB are needed here and ${free} MB are free. Make room and start again.`);
+  if (free < megabytes)
+    throw new Stop(
+      `The disk is full: ${megabytes} MB are needed here and ${free} MB are free. Make room and start again.`,
+    );
 }

@@ -23,7 +23,9 @@ export async function loadSecrets(folder) {
   });
   if (text === null) {
     if ((await readdir(folder)).includes('postgres'))
-      throw new Stop(`${fileIn(folder)} is missing, and without it the database beside it cannot be opened. Put it back from a copy, or move ${folder} away to begin anew.`);
+      throw new Stop(
+        `${fileIn(folder)} is missing, and without it the database beside it cannot be opened. Put it back from a copy, or move ${folder} away to begin anew.`,
+      );
     const made = { auth: secret(), passwords: { owner: secret(), app: secret() } };
     await write(folder, made);
     return made;

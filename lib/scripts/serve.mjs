@@ -12,7 +12,16 @@ const READY_MS = 60_000;
 export function serve({ dev = false, host, port, env, show = true }) {
   const child = spawn(
     process.execPath,
-    ['--import', new URL('./trusted-headers.mjs', import.meta.url).href, NEXT, dev ? 'dev' : 'start', '-H', host, '-p', String(port)],
+    [
+      '--import',
+      new URL('./trusted-headers.mjs', import.meta.url).href,
+      NEXT,
+      dev ? 'dev' : 'start',
+      '-H',
+      host,
+      '-p',
+      String(port),
+    ],
     {
       env: { ...process.env, ...env, NODE_ENV: dev ? 'development' : 'production', NEXT_TELEMETRY_DISABLED: '1' },
       // Its own banner would stand before ours; faults come on the error stream.
@@ -40,7 +49,8 @@ export function serve({ dev = false, host, port, env, show = true }) {
       const until = Date.now() + READY_MS;
       const local = `http://${host === '0.0.0.0' ? '127.0.0.1' : host}:${port}/api/health`;
       while (Date.now() < until) {
-        if (status !== null) throw new Stop(`The server ended at once with status ${status}; what it said stands above.`);
+        if (status !== null)
+          throw new Stop(`The server ended at once with status ${status}; what it said stands above.`);
         const answer = await fetch(local).catch(() => null);
         if (answer?.ok) return;
         await new Promise((resolve) => setTimeout(resolve, 100));

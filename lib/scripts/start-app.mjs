@@ -17,7 +17,8 @@ const DATA = path.resolve('.data');
 /** What a person may set: where to listen, how others reach it, and a database they have already. */
 function settings() {
   const port = Number(process.env.PORT ?? 3000);
-  if (!Number.isInteger(port) || port < 1 || port > 65535) throw new Stop(`PORT=${process.env.PORT} is not a port. Give a number like PORT=3100.`);
+  if (!Number.isInteger(port) || port < 1 || port > 65535)
+    throw new Stop(`PORT=${process.env.PORT} is not a port. Give a number like PORT=3100.`);
   const host = process.env.HOST ?? '127.0.0.1';
   const address = process.env.NEXTAUTH_URL ?? `http://${host === '0.0.0.0' ? 'localhost' : host}:${port}`;
   return { port, host, address, given: process.env.DATABASE_URL };
@@ -45,7 +46,10 @@ export async function start({ dev }) {
   };
   try {
     const { port, host, address, given } = settings();
-    if (!(await isFree(port, host))) throw new Stop(`Port ${port} is taken, by another program or an Ohmstead that runs already. Stop it, or take another: PORT=${port + 1} npm start`);
+    if (!(await isFree(port, host)))
+      throw new Stop(
+        `Port ${port} is taken, by another program or an Ohmstead that runs already. Stop it, or take another: PORT=${port + 1} npm start`,
+      );
     await needRoom('.', 200);
     undo.push(await holdLock(DATA, address));
     await installDependencies();
@@ -73,7 +77,8 @@ export async function start({ dev }) {
     console.log(welcome({ address, demo, given, seconds: (Date.now() - began) / 1000 }));
     const ended = await Promise.race([child.ended, signalled]);
     await shutDown();
-    if (typeof ended === 'number') throw new Stop(`The server ended by itself with status ${ended}; what it said stands above.`);
+    if (typeof ended === 'number')
+      throw new Stop(`The server ended by itself with status ${ended}; what it said stands above.`);
     console.log('Stopped. Your drawings are kept in .data/.');
     process.exit(0);
   } catch (error) {

@@ -8,7 +8,9 @@ if (!name || !person || !email) {
   process.exit(2);
 }
 createTeam(name, { name: person, email })
-  .then(({ link, expiresAt }) => console.log(`${name} is made. ${person} sets a password here until ${expiresAt.slice(0, 10)}:\n${link}`))
+  .then(({ link, expiresAt }) =>
+    console.log(`${name} is made. ${person} sets a password here until ${expiresAt.slice(0, 10)}:\n${link}`),
+  )
   .catch((error: unknown) => {
     console.error(error instanceof Error ? error.message : error);
     process.exitCode = 1;

@@ -31,9 +31,12 @@ const parts = {
   },
   async types() {
     // Types of pages that are gone stay behind and would not compile.
-    for (const folder of ['.next/types', '.next/dev/types', '.next-test/types']) await rm(folder, { recursive: true, force: true });
+    for (const folder of ['.next/types', '.next/dev/types', '.next-test/types'])
+      await rm(folder, { recursive: true, force: true });
     const made = await node(['node_modules/next/dist/bin/next', 'typegen']);
-    return whole(made.status === 0 ? await node(['node_modules/typescript/bin/tsc', '--noEmit', '--incremental', 'false']) : made);
+    return whole(
+      made.status === 0 ? await node(['node_modules/typescript/bin/tsc', '--noEmit', '--incremental', 'false']) : made,
+    );
   },
   async vitest() {
     const report = path.join(REPORTS, 'vitest.json');
@@ -74,7 +77,9 @@ try {
     });
     totals.passed += passed;
     totals.failed += failed;
-    lines.push(`${name.padEnd(8)} ${String(passed).padStart(6)} passed ${String(failed).padStart(4)} failed ${((Date.now() - began) / 1000).toFixed(0).padStart(5)} s`);
+    lines.push(
+      `${name.padEnd(8)} ${String(passed).padStart(6)} passed ${String(failed).padStart(4)} failed ${((Date.now() - began) / 1000).toFixed(0).padStart(5)} s`,
+    );
   }
   console.log(`\n${lines.join('\n')}\n`);
   console.log(`${totals.passed} passed, ${totals.failed} failed`);

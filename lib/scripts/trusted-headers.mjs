@@ -5,8 +5,21 @@ import http from 'node:http';
  * and the address is written from the connection. Behind a proxy of one's own, TRUST_PROXY=1 takes the last address that
  * this proxy has added. Headers that only the framework may set for itself are dropped as well.
  */
-const CLAIMS = ['x-forwarded-for', 'x-forwarded-host', 'x-forwarded-proto', 'x-forwarded-port', 'x-real-ip', 'forwarded'];
-const INTERNAL = ['x-middleware-subrequest', 'x-middleware-prefetch', 'x-nextjs-data', 'x-now-route-matches', 'x-matched-path'];
+const CLAIMS = [
+  'x-forwarded-for',
+  'x-forwarded-host',
+  'x-forwarded-proto',
+  'x-forwarded-port',
+  'x-real-ip',
+  'forwarded',
+];
+const INTERNAL = [
+  'x-middleware-subrequest',
+  'x-middleware-prefetch',
+  'x-nextjs-data',
+  'x-now-route-matches',
+  'x-matched-path',
+];
 
 const behindProxy = process.env.TRUST_PROXY === '1';
 const emit = http.Server.prototype.emit;

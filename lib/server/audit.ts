@@ -15,5 +15,8 @@ export async function audit(
   detail: Detail = {},
   transaction?: Transaction,
 ): Promise<void> {
-  await AuditEntry.create({ teamId: who.teamId, personId: who.personId, action, subjectId, detail }, { transaction, returning: false });
+  await AuditEntry.create(
+    { teamId: who.teamId, personId: who.personId, action, subjectId, detail },
+    { transaction, returning: false },
+  );
 }

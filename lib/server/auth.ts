@@ -80,7 +80,9 @@ export function authOptions(): NextAuthOptions {
       async jwt({ token, user, account, profile }) {
         if (!user) return token;
         const email = account?.provider === 'oidc' ? verifiedEmail(profile) : null;
-        const who = email ? await invitedPerson(email) : { teamId: (user as unknown as { teamId: string }).teamId, personId: user.id };
+        const who = email
+          ? await invitedPerson(email)
+          : { teamId: (user as unknown as { teamId: string }).teamId, personId: user.id };
         if (!who) throw new Error('not invited');
         return { ...(await beginSession(who)) };
       },
@@ -98,7 +100,11 @@ export function authOptions(): NextAuthOptions {
       },
     },
     logger: {
-      error: (code, detail) => log('auth.error', { code, error: detail instanceof Error ? detail.message : String((detail as { message?: string })?.message ?? '') }),
+      error: (code, detail) =>
+        log('auth.error', {
+          code,
+          error: detail instanceof Error ? detail.message : String((detail as { message?: string })?.message ?? ''),
+        }),
       warn: () => undefined,
       debug: () => undefined,
     },

@@ -29,4 +29,5 @@ export class AppError extends Error {
 }
 
 /** The same words whether a thing is not there or belongs to somebody else. */
-export const missing = (what: string) => new AppError('missing', `There is no such ${what}, or it is not yours to see.`);
+export const missing = (what: string) =>
+  new AppError('missing', `There is no such ${what}, or it is not yours to see.`);

@@ -7,4 +7,6 @@ export function log(event: string, detail: Record<string, unknown> = {}): void {
 
 /** What a fault says of itself, for the log. */
 export const describeFault = (error: unknown) =>
-  error instanceof Error ? { error: error.message, stack: error.stack?.split('\n').slice(1, 6) } : { error: String(error) };
+  error instanceof Error
+    ? { error: error.message, stack: error.stack?.split('\n').slice(1, 6) }
+    : { error: String(error) };

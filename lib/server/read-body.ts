@@ -6,7 +6,10 @@ const tooLarge = (maxBytes: number) =>
 
 /** A key that would reach an object's prototype has no business in any body; a schema would drop it in silence. */
 function refuseReserved(this: unknown, key: string, value: unknown): unknown {
-  if (key === '__proto__') throw new AppError('invalid', 'A name in the request is reserved.', { fields: { [key]: 'This name is reserved.' } });
+  if (key === '__proto__')
+    throw new AppError('invalid', 'A name in the request is reserved.', {
+      fields: { [key]: 'This name is reserved.' },
+    });
   return value;
 }
 

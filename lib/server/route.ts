@@ -56,12 +56,16 @@ function parseQuery(url: string): Record<string, string> {
 
 function answerFault(error: unknown, request: Request): Response {
   const known = error instanceof AppError;
-  if (!known) log('route.failed', { method: request.method, path: new URL(request.url).pathname, ...describeFault(error) });
+  if (!known)
+    log('route.failed', { method: request.method, path: new URL(request.url).pathname, ...describeFault(error) });
   const answer = known ? error : new AppError('failed', 'The server could not do this. Nothing was lost; try again.');
   const wait = answer.more.wait;
   return Response.json(
     { error: answer.code, message: answer.message, ...answer.more },
-    { status: STATUS[answer.code], headers: { ...HEADERS, ...(typeof wait === 'number' && { 'retry-after': String(wait) }) } },
+    {
+      status: STATUS[answer.code],
+      headers: { ...HEADERS, ...(typeof wait === 'number' && { 'retry-after': String(wait) }) },
+    },
   );
 }
 

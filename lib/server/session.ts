@@ -42,7 +42,9 @@ export async function actorOf({ tid, sid, sub }: SessionToken): Promise<Actor | 
   );
   if (!row) return null;
   if (row.stale)
-    await sequelize.query('update auth_sessions set seen_at = now() where team_id = $1 and id = $2', { bind: [tid, sid] });
+    await sequelize.query('update auth_sessions set seen_at = now() where team_id = $1 and id = $2', {
+      bind: [tid, sid],
+    });
   const { personId, name, team, roles } = row;
   return { teamId: tid, team, personId, sessionId: sid, name, initials: initialsOf(name), roles };
 }

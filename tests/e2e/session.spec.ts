@@ -1,13 +1,20 @@
 import { expect, test } from 'playwright/test';
 import { signInAs } from './sign-in';
 
-test('a copied cookie is dead after signing out, and the cookie cannot be read by scripts', async ({ page, playwright, baseURL }) => {
+test('a copied cookie is dead after signing out, and the cookie cannot be read by scripts', async ({
+  page,
+  playwright,
+  baseURL,
+}) => {
   await signInAs(page, 'electrician');
   const cookies = await page.context().cookies();
   const session = cookies.find(({ name }) => name === 'session.ohmstead')!;
   expect(session).toMatchObject({ httpOnly: true, sameSite: 'Lax', path: '/' });
 
-  const thief = await playwright.request.newContext({ baseURL, extraHTTPHeaders: { cookie: `${session.name}=${session.value}` } });
+  const thief = await playwright.request.newContext({
+    baseURL,
+    extraHTTPHeaders: { cookie: `${session.name}=${session.value}` },
+  });
   expect((await thief.get('/api/jobs')).status()).toBe(200);
   const { csrfToken } = (await (await page.request.get('/api/auth/csrf')).json()) as { csrfToken: string };
   await page.request.post('/api/auth/signout', { form: { csrfToken, json: 'true' }, headers: { origin: baseURL! } });
@@ -33,7 +40,10 @@ test('signing in from another site, or with a forged host, gets nowhere', async 
   expect(leads).not.toContain('elsewhere.example');
 });
 
-test('a sixth guess within a minute is told to wait, whatever address the request claims to come from', async ({ request, baseURL }) => {
+test('a sixth guess within a minute is told to wait, whatever address the request claims to come from', async ({
+  request,
+  baseURL,
+}) => {
   const { csrfToken } = (await (await request.get('/api/auth/csrf')).json()) as { csrfToken: string };
   const answers = [];
   for (let i = 0; i < 6; i++) {

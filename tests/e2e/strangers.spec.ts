@@ -30,11 +30,17 @@ test('every page of the set carries its headers and runs no script without the n
   expect(complaints).toEqual([]);
 });
 
-test('no page shows anything to a cookie that is nobody\u2019s: each reads the session itself', async ({ browser, page, baseURL }) => {
+test('no page shows anything to a cookie that is nobody\u2019s: each reads the session itself', async ({
+  browser,
+  page,
+  baseURL,
+}) => {
   await signInAs(page, 'electrician');
   const { rows } = (await (await page.request.get('/api/jobs')).json()) as { rows: { id: string; title: string }[] };
   const context = await browser.newContext({ baseURL, extraHTTPHeaders: { cookie: 'session.ohmstead=forged' } });
-  const sheets = rows.flatMap(({ id }) => ['', '/survey', '/overview', '/connections'].map((sheet) => `/jobs/${id}${sheet}`));
+  const sheets = rows.flatMap(({ id }) =>
+    ['', '/survey', '/overview', '/connections'].map((sheet) => `/jobs/${id}${sheet}`),
+  );
   for (const path of ['/jobs', '/jobs/new', '/people', '/account', ...sheets]) {
     const answer = await context.request.get(path, { maxRedirects: 0 });
     const text = await answer.text();

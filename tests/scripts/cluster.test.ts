@@ -44,7 +44,9 @@ describe('the cluster of the drawings', () => {
       data_checksums: 'on',
       listen_addresses: '127.0.0.1',
     });
-    await expect(ask(cluster.url('ohmstead').replace(passwords.app, 'a-guess'), 'select 1')).rejects.toThrow(/password authentication failed/);
+    await expect(ask(cluster.url('ohmstead').replace(passwords.app, 'a-guess'), 'select 1')).rejects.toThrow(
+      /password authentication failed/,
+    );
 
     const pid = Number((await readFile(path.join(folder, 'data/postmaster.pid'), 'utf8')).split('\n')[0]);
     process.kill(pid, 'SIGKILL');
@@ -59,10 +61,14 @@ describe('the cluster of the drawings', () => {
     const broken = path.join(parent, 'broken');
     await mkdir(path.join(broken, 'data'), { recursive: true });
     await writeFile(path.join(broken, 'data/base'), 'something of a person');
-    await expect(startCluster({ folder: broken, port: await freePort(), passwords })).rejects.toThrow(/PG_VERSION is missing.*mv /);
+    await expect(startCluster({ folder: broken, port: await freePort(), passwords })).rejects.toThrow(
+      /PG_VERSION is missing.*mv /,
+    );
     expect(await readFile(path.join(broken, 'data/base'), 'utf8')).toBe('something of a person');
     await writeFile(path.join(broken, 'data/PG_VERSION'), '9\n');
-    await expect(startCluster({ folder: broken, port: await freePort(), passwords })).rejects.toThrow(/belong to PostgreSQL 9, which is not installed/);
+    await expect(startCluster({ folder: broken, port: await freePort(), passwords })).rejects.toThrow(
+      /belong to PostgreSQL 9, which is not installed/,
+    );
   }, 30_000);
 
   it('that does not start tells why and where its log is', async () => {

@@ -66,7 +66,9 @@ describe('dependencies', () => {
   });
 
   it('of this very checkout are fresh', async () => {
-    expect(await isInstalled(path.join(ROOT, 'package-lock.json'), path.join(ROOT, 'node_modules/.package-lock.json'))).toBe(true);
+    expect(
+      await isInstalled(path.join(ROOT, 'package-lock.json'), path.join(ROOT, 'node_modules/.package-lock.json')),
+    ).toBe(true);
   });
 });
 
@@ -88,7 +90,10 @@ describe('the fingerprint of the sources', () => {
 
 describe('the lock', () => {
   it('is taken over from a process that is gone, and not from one that runs', async () => {
-    await writeFile(path.join(folder, 'running.json'), JSON.stringify({ pid: 2 ** 22 - 1, address: 'http://127.0.0.1:1' }));
+    await writeFile(
+      path.join(folder, 'running.json'),
+      JSON.stringify({ pid: 2 ** 22 - 1, address: 'http://127.0.0.1:1' }),
+    );
     const release = await holdLock(folder, 'http://127.0.0.1:3000');
     expect(JSON.parse(await readFile(path.join(folder, 'running.json'), 'utf8')).pid).toBe(process.pid);
     await release();
@@ -98,8 +103,13 @@ describe('the lock', () => {
     const { spawn } = await import('node:child_process');
     const child = spawn(process.execPath, [other]);
     try {
-      await writeFile(path.join(folder, 'running.json'), JSON.stringify({ pid: child.pid, address: 'http://127.0.0.1:3000' }));
-      await expect(holdLock(folder, 'http://127.0.0.1:3100')).rejects.toThrow(/runs already, at http:\/\/127\.0\.0\.1:3000/);
+      await writeFile(
+        path.join(folder, 'running.json'),
+        JSON.stringify({ pid: child.pid, address: 'http://127.0.0.1:3000' }),
+      );
+      await expect(holdLock(folder, 'http://127.0.0.1:3100')).rejects.toThrow(
+        /runs already, at http:\/\/127\.0\.0\.1:3000/,
+      );
     } finally {
       child.kill();
     }
@@ -122,7 +132,9 @@ describe('what a person is told', () => {
     expect(explain(new Stop('Say it.'))).toBe('\nSay it.');
     expect(explain(new Stop(''))).toBe('');
     expect(explain(Object.assign(new Error('write'), { code: 'ENOSPC' }))).toMatch(/disk is full/);
-    expect(explain(Object.assign(new Error('open'), { code: 'EACCES', path: '/data' }))).toMatch(/may not write \/data/);
+    expect(explain(Object.assign(new Error('open'), { code: 'EACCES', path: '/data' }))).toMatch(
+      /may not write \/data/,
+    );
     expect(explain(new TypeError('x is undefined'))).toMatch(/x is undefined\n\s+at /);
     await expect(needRoom(folder, 1e9)).rejects.toThrow(/disk is full: 1000000000 MB are needed/);
     await expect(needRoom(folder, 1)).resolves.toBeUndefined();
@@ -132,21 +144,33 @@ describe('what a person is told', () => {
     const server = net.createServer().listen(0, '127.0.0.1');
     await new Promise((resolve) => server.once('listening', resolve));
     const { port } = server.address() as net.AddressInfo;
-    const { status, output } = await run(process.execPath, [path.join(ROOT, 'lib/scripts/start.mjs')], { cwd: folder, env: { PORT: String(port) } });
+    const { status, output } = await run(process.execPath, [path.join(ROOT, 'lib/scripts/start.mjs')], {
+      cwd: folder,
+      env: { PORT: String(port) },
+    });
     server.close();
     expect(status).toBe(1);
-    expect(output.trim()).toBe(`Port ${port} is taken, by another program or an Ohmstead that runs already. Stop it, or take another: PORT=${port + 1} npm start`);
+    expect(output.trim()).toBe(
+      `Port ${port} is taken, by another program or an Ohmstead that runs already. Stop it, or take another: PORT=${port + 1} npm start`,
+    );
   });
 
   it('when PORT is no port says so', async () => {
-    const { status, output } = await run(process.execPath, [path.join(ROOT, 'lib/scripts/start.mjs')], { cwd: folder, env: { PORT: 'web' } });
+    const { status, output } = await run(process.execPath, [path.join(ROOT, 'lib/scripts/start.mjs')], {
+      cwd: folder,
+      env: { PORT: 'web' },
+    });
     expect([status, output.trim()]).toEqual([1, 'PORT=web is not a port. Give a number like PORT=3100.']);
   });
 
   it('by a Node that is too old is told as well', async () => {
     const old = path.join(folder, 'old.mjs');
     await writeFile(old, `Object.defineProperty(process.versions, 'node', { value: '18.20.4' });`);
-    const { status, output } = await run(process.execPath, ['--import', old, path.join(ROOT, 'lib/scripts/start.mjs')], { cwd: folder });
+    const { status, output } = await run(
+      process.execPath,
+      ['--import', old, path.join(ROOT, 'lib/scripts/start.mjs')],
+      { cwd: folder },
+    );
     expect(status).toBe(1);
     expect(output).toMatch(/^Ohmstead needs Node 20\.19 or newer/);
   });

@@ -11,10 +11,15 @@ const stop: (() => void)[] = [];
 afterEach(() => stop.splice(0).forEach((end) => end()));
 
 /** A server of the kind that is loaded after the hook, and what it sees of a request's headers. */
-async function seen(headers: Record<string, string>, env: Record<string, string> = {}): Promise<Record<string, string>> {
+async function seen(
+  headers: Record<string, string>,
+  env: Record<string, string> = {},
+): Promise<Record<string, string>> {
   const child = spawn(process.execPath, ['--import', HOOK, '-e', SERVER], { env: { ...process.env, ...env } });
   stop.push(() => child.kill());
-  const port = await new Promise<string>((resolve) => child.stdout.once('data', (text) => resolve(String(text).trim())));
+  const port = await new Promise<string>((resolve) =>
+    child.stdout.once('data', (text) => resolve(String(text).trim())),
+  );
   return (await (await fetch(`http://127.0.0.1:${port}/`, { headers })).json()) as Record<string, string>;
 }
 

@@ -29,16 +29,27 @@ export const ACCESS: Record<string, Row> = {
   'GET /api/jobs': { gets: [200, 200, 200, 200, 200, 200, 401] },
   'POST /api/jobs': { body: () => jobInput(), gets: [201, 403, 403, 403, 403, 201, 401] },
   'GET /api/jobs/[jobId]': { params: ofJob, gets: READ_DRAWING },
-  'PATCH /api/jobs/[jobId]': { params: ofJob, body: () => ({ version: 0, title: 'Heron Row 11' }), gets: [200, 403, 404, 403, 403, 404, 401] },
+  'PATCH /api/jobs/[jobId]': {
+    params: ofJob,
+    body: () => ({ version: 0, title: 'Heron Row 11' }),
+    gets: [200, 403, 404, 403, 403, 404, 401],
+  },
   'GET /api/clients': { gets: [200, 403, 403, 403, 200, 200, 401] },
   'GET /api/people': { gets: [200, 403, 403, 200, 200, 200, 401] },
   'POST /api/people': {
     body: () => ({ name: 'Rae Holt', email: `${randomUUID()}@example.org`, roles: ['apprentice'] }),
     gets: [403, 403, 403, 403, 201, 201, 401],
   },
-  'PATCH /api/people/[personId]': { params: ofPerson, body: () => ({ active: false }), gets: [403, 403, 403, 403, 200, 404, 401] },
+  'PATCH /api/people/[personId]': {
+    params: ofPerson,
+    body: () => ({ active: false }),
+    gets: [403, 403, 403, 403, 200, 404, 401],
+  },
   'POST /api/people/[personId]/link': { params: ofPerson, gets: [403, 403, 403, 403, 201, 404, 401] },
-  'POST /api/account/password': { body: () => ({ current: 'not the right one', next: 'a kettle and four cups' }), gets: [400, 400, 400, 400, 400, 400, 401] },
+  'POST /api/account/password': {
+    body: () => ({ current: 'not the right one', next: 'a kettle and four cups' }),
+    gets: [400, 400, 400, 400, 400, 400, 401],
+  },
   'POST /api/account/sign-out-everywhere': { gets: [200, 200, 200, 200, 200, 200, 401] },
   'POST /api/invitations/accept': {
     body: () => ({ token: 'x'.repeat(64), password: 'a kettle and four cups' }),
@@ -53,7 +64,11 @@ export const ACCESS: Record<string, Row> = {
     gets: [200, 200, 404, 403, 403, 404, 401],
   },
   'GET /api/drawings/[drawingId]/revisions': { params: ofDrawing, gets: READ_DRAWING },
-  'POST /api/drawings/[drawingId]/revisions': { params: ofDrawing, body: () => ({ note: 'First draft' }), gets: [201, 201, 404, 403, 403, 404, 401] },
+  'POST /api/drawings/[drawingId]/revisions': {
+    params: ofDrawing,
+    body: () => ({ note: 'First draft' }),
+    gets: [201, 201, 404, 403, 403, 404, 401],
+  },
   'GET /api/drawings/[drawingId]/json': { params: ofDrawing, gets: READ_DRAWING },
   'GET /api/health': { gets: [200, 200, 200, 200, 200, 200, 200], open: 'says only whether the server answers' },
 };

@@ -24,7 +24,8 @@ async function findRoutes(): Promise<Found[]> {
     const address = `/api/${path.dirname(file)}`;
     if (NOT_OURS.includes(address)) continue;
     const handlers = (await import(path.join(ROOT, 'app/api', file))) as Record<string, unknown>;
-    for (const method of METHODS) if (handlers[method]) found.push({ name: `${method} ${address}`, method, address, handler: handlers[method] });
+    for (const method of METHODS)
+      if (handlers[method]) found.push({ name: `${method} ${address}`, method, address, handler: handlers[method] });
   }
   return found.sort((a, b) => (a.name < b.name ? -1 : 1));
 }
@@ -36,7 +37,8 @@ const asked = (world: World, method: string, row: Row): Asked => ({
   params: row.params?.(world) ?? {},
   body: row.body?.(world),
 });
-const browserOf = (world: World, who: (typeof ASKING)[number]) => (who === 'anonymous' ? new Browser() : world.browsers[who]);
+const browserOf = (world: World, who: (typeof ASKING)[number]) =>
+  who === 'anonymous' ? new Browser() : world.browsers[who];
 
 describe('the table', () => {
   it('has a row for every method of every route, and no other', () => {
@@ -51,14 +53,18 @@ describe('the table', () => {
 describe.each(routes)('$name', ({ name, method, handler }) => {
   const row = ACCESS[name]!;
 
-  it.each(ASKING.map((who, i) => [who, row.gets[i]!] as const))('%s gets %i, and a refusal changes nothing', async (who, status) => {
-    const world = await makeWorld();
-    const before = await fingerprint(world.team.id);
-    const answer: Answer = await browserOf(world, who).ask(handler, asked(world, method, row));
-    expect(answer.status).toBe(status);
-    if (status >= 400) expect(answer.body).toMatchObject({ error: expect.any(String), message: expect.any(String) });
-    if (status >= 400 || !CHANGES.has(method) || who === 'stranger') expect(await fingerprint(world.team.id)).toBe(before);
-  });
+  it.each(ASKING.map((who, i) => [who, row.gets[i]!] as const))(
+    '%s gets %i, and a refusal changes nothing',
+    async (who, status) => {
+      const world = await makeWorld();
+      const before = await fingerprint(world.team.id);
+      const answer: Answer = await browserOf(world, who).ask(handler, asked(world, method, row));
+      expect(answer.status).toBe(status);
+      if (status >= 400) expect(answer.body).toMatchObject({ error: expect.any(String), message: expect.any(String) });
+      if (status >= 400 || !CHANGES.has(method) || who === 'stranger')
+        expect(await fingerprint(world.team.id)).toBe(before);
+    },
+  );
 
   if (!CHANGES.has(method)) return;
 
@@ -101,7 +107,11 @@ describe.each(routes.filter(({ name }) => ACCESS[name]!.params))('$name', ({ nam
     const world = await makeWorld();
     const body = row.body?.(world);
     const [field] = Object.keys(row.params!(world));
-    const foreign = { jobId: world.foreign.jobId, drawingId: world.foreign.drawingId, personId: world.foreign.personId }[field!]!;
+    const foreign = {
+      jobId: world.foreign.jobId,
+      drawingId: world.foreign.drawingId,
+      personId: world.foreign.personId,
+    }[field!]!;
     for (const who of ASKING.filter((_, i) => row.gets[i]! < 300))
       for (const id of [foreign, '00000000-0000-4000-8000-000000000000', `${foreign}'--`, '1', '../..']) {
         const { status } = await browserOf(world, who).ask(handler, { method, params: { [field!]: id }, body });

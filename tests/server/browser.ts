@@ -29,9 +29,15 @@ export interface Answer {
 export class Browser {
   constructor(readonly jar = new Jar()) {}
 
-  async ask(handler: unknown, { method = 'GET', path = '/', params = {}, body, raw, headers = {} }: Asked = {}): Promise<Answer> {
+  async ask(
+    handler: unknown,
+    { method = 'GET', path = '/', params = {}, body, raw, headers = {} }: Asked = {},
+  ): Promise<Answer> {
     const sends = method !== 'GET' && method !== 'HEAD';
-    const given = { ...(sends && { origin: ORIGIN, 'sec-fetch-site': 'same-origin', 'content-type': 'application/json' }), ...headers };
+    const given = {
+      ...(sends && { origin: ORIGIN, 'sec-fetch-site': 'same-origin', 'content-type': 'application/json' }),
+      ...headers,
+    };
     const kept = Object.entries(given).filter((pair): pair is [string, string] => pair[1] !== null);
     const request = new Request(ORIGIN + path, {
       method,

@@ -13,7 +13,11 @@ let hashed: Promise<string> | undefined;
 export const makeTeam = (name = 'Reedbank Electrics'): Promise<Team> => Team.create({ name });
 
 /** A person with a password; of a new team where none is given. */
-export async function makePerson(roles: PersonRole[] = ['electrician'], team?: Team, name = 'Tilda Brook'): Promise<Person> {
+export async function makePerson(
+  roles: PersonRole[] = ['electrician'],
+  team?: Team,
+  name = 'Tilda Brook',
+): Promise<Person> {
   const { id: teamId } = team ?? (await makeTeam());
   const person = await Person.create({ teamId, name });
   hashed ??= hashPassword(PASSWORD);
@@ -59,4 +63,9 @@ export const makeJob = async (electrician: Person, over: Partial<JobInput> = {})
 /** A place, as the smallest change that a drawing can take. */
 export const place = (id: string, name = id) => ({ set: { places: [{ id, name, kind: 'room' as const }] } });
 
-export const change = (base: number, patch: object, saveId: string = randomUUID(), label = 'Add a place') => ({ saveId, base, label, patch });
+export const change = (base: number, patch: object, saveId: string = randomUUID(), label = 'Add a place') => ({
+  saveId,
+  base,
+  label,
+  patch,
+});

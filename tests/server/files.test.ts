@@ -19,7 +19,9 @@ describe('the document as a file', () => {
     const { body, headers } = await browser.ask(json, { params });
     const read = readDocument(body);
     expect(read.ok && read.document.places).toEqual([{ id: 'p1', name: 'Study', kind: 'room' }]);
-    expect(headers.get('content-disposition')).toBe(`attachment; filename="OH-1 Heron Row 9.json"; filename*=UTF-8''OH-1%20Heron%20Row%209.json`);
+    expect(headers.get('content-disposition')).toBe(
+      `attachment; filename="OH-1 Heron Row 9.json"; filename*=UTF-8''OH-1%20Heron%20Row%209.json`,
+    );
   });
 
   it('keeps its name in any script, and no name breaks out of the header or runs as a page', async () => {

@@ -43,9 +43,17 @@ const anyPatch: fc.Arbitrary<Patch> = fc.record(
     set: fc.record(
       {
         places: fc.uniqueArray(fc.record({ id, name: text, kind: fc.constantFrom('room', 'wet') }), uniqueBy),
-        parts: fc.uniqueArray(fc.record({ id, kind: fc.constant('mcb' as const), rating: fc.constantFrom(6, 10, 16.5) }), uniqueBy),
+        parts: fc.uniqueArray(
+          fc.record({ id, kind: fc.constant('mcb' as const), rating: fc.constantFrom(6, 10, 16.5) }),
+          uniqueBy,
+        ),
         wires: fc.uniqueArray(
-          fc.record({ id, from: fc.tuple(id, fc.constant('1')), to: fc.tuple(id, fc.constant('2')), role: fc.constantFrom('line', 'neutral') }),
+          fc.record({
+            id,
+            from: fc.tuple(id, fc.constant('1')),
+            to: fc.tuple(id, fc.constant('2')),
+            role: fc.constantFrom('line', 'neutral'),
+          }),
           uniqueBy,
         ),
         overview: fc.dictionary(id, position, { minKeys: 1, maxKeys: 3 }),
@@ -55,7 +63,10 @@ const anyPatch: fc.Arbitrary<Patch> = fc.record(
       },
       { requiredKeys: [] },
     ),
-    remove: fc.record({ places: ids, parts: ids, wires: ids, overview: ids, notices: fc.constant(true as const) }, { requiredKeys: [] }),
+    remove: fc.record(
+      { places: ids, parts: ids, wires: ids, overview: ids, notices: fc.constant(true as const) },
+      { requiredKeys: [] },
+    ),
   },
   { requiredKeys: [] },
 ) as fc.Arbitrary<Patch>;
@@ -63,32 +74,39 @@ const anyPatch: fc.Arbitrary<Patch> = fc.record(
 describe('a history', () => {
   it('read back from snapshot and tail is the state built directly, byte for byte', async () => {
     await fc.assert(
-      fc.asyncProperty(fc.array(anyPatch, { minLength: 1, maxLength: 25 }), fc.integer({ min: 1, max: 25 }), async (patches, cut) => {
-        const { browser, params, teamId } = await studio();
-        let direct: Installation = emptyDocument('Heron Row 9', 'IEC', SUPPLY);
-        for (const [base, patch] of patches.entries()) {
-          expect((await browser.post(save, params, change(base, patch))).status).toBe(200);
-          direct = applyPatch(direct, patch);
-          if (base === cut) await snapshotIfDue(teamId, params.drawingId, 1);
-        }
-        const kept = JSON.stringify((await loadState(teamId, params.drawingId)).document);
-        forget(teamId, params.drawingId);
-        const read = JSON.stringify((await loadState(teamId, params.drawingId)).document);
-        // Through JSON once: what the server got was what the window sent.
-        const sent = JSON.stringify(JSON.parse(JSON.stringify(direct)));
-        expect(read).toBe(kept);
-        expect(JSON.parse(read)).toEqual(JSON.parse(sent));
-        expect(DocumentSchema.safeParse(JSON.parse(read)).success).toBe(true);
-      }),
+      fc.asyncProperty(
+        fc.array(anyPatch, { minLength: 1, maxLength: 25 }),
+        fc.integer({ min: 1, max: 25 }),
+        async (patches, cut) => {
+          const { browser, params, teamId } = await studio();
+          let direct: Installation = emptyDocument('Heron Row 9', 'IEC', SUPPLY);
+          for (const [base, patch] of patches.entries()) {
+            expect((await browser.post(save, params, change(base, patch))).status).toBe(200);
+            direct = applyPatch(direct, patch);
+            if (base === cut) await snapshotIfDue(teamId, params.drawingId, 1);
+          }
+          const kept = JSON.stringify((await loadState(teamId, params.drawingId)).document);
+          forget(teamId, params.drawingId);
+          const read = JSON.stringify((await loadState(teamId, params.drawingId)).document);
+          // Through JSON once: what the server got was what the window sent.
+          const sent = JSON.stringify(JSON.parse(JSON.stringify(direct)));
+          expect(read).toBe(kept);
+          expect(JSON.parse(read)).toEqual(JSON.parse(sent));
+          expect(DocumentSchema.safeParse(JSON.parse(read)).success).toBe(true);
+        },
+      ),
       { numRuns: 25 },
     );
   }, 120_000);
 
   it('is frozen every 200 changes, without holding up a save, and opens from there', async () => {
     const { browser, params, teamId } = await studio();
-    for (let i = 0; i < SNAPSHOT_EVERY + 3; i++) await browser.post(save, params, change(i, place(`p${i % 40}`, `Room ${i}`)));
+    for (let i = 0; i < SNAPSHOT_EVERY + 3; i++)
+      await browser.post(save, params, change(i, place(`p${i % 40}`, `Room ${i}`)));
     await expect
-      .poll(async () => (await Drawing.findOne({ where: { teamId, id: params.drawingId } }))!.snapshotRev, { timeout: 10_000 })
+      .poll(async () => (await Drawing.findOne({ where: { teamId, id: params.drawingId } }))!.snapshotRev, {
+        timeout: 10_000,
+      })
       .toBeGreaterThanOrEqual(SNAPSHOT_EVERY);
     forget(teamId, params.drawingId);
     const { body } = await browser.ask(open, { params });
@@ -121,13 +139,24 @@ describe('a history', () => {
 });
 
 describe('revisions', () => {
-  const note = (browser: Browser, params: { drawingId: string }, text = 'As surveyed') => browser.post(record, params, { note: text });
+  const note = (browser: Browser, params: { drawingId: string }, text = 'As surveyed') =>
+    browser.post(record, params, { note: text });
 
   it('freeze the drawing under the next letter, with the hash of the frozen bytes', async () => {
     const { browser, params, teamId } = await studio();
     await browser.post(save, params, change(0, place('p1', 'Study')));
     const a = await note(browser, params);
-    expect(a).toMatchObject({ status: 201, body: { letter: 'A', rev: 1, note: 'As surveyed', state: 'draft', by: 'T. B.', hash: expect.stringMatching(/^[0-9a-f]{64}$/) } });
+    expect(a).toMatchObject({
+      status: 201,
+      body: {
+        letter: 'A',
+        rev: 1,
+        note: 'As surveyed',
+        state: 'draft',
+        by: 'T. B.',
+        hash: expect.stringMatching(/^[0-9a-f]{64}$/),
+      },
+    });
     await browser.post(save, params, change(1, place('p1', 'Office')));
     await note(browser, params, 'After the visit');
     const { body } = await browser.ask(revisions, { params });
@@ -148,10 +177,18 @@ describe('revisions', () => {
   it('and the changes they hold cannot be taken away', async () => {
     const { browser, params, teamId } = await studio();
     await note(browser, params);
-    await expect(DrawingSnapshot.destroy({ where: { teamId, drawingId: params.drawingId } })).rejects.toThrow(/foreign key/);
+    await expect(DrawingSnapshot.destroy({ where: { teamId, drawingId: params.drawingId } })).rejects.toThrow(
+      /foreign key/,
+    );
   });
 
-  it.each([[null, 'A'], ['A', 'B'], ['Z', 'AA'], ['AZ', 'BA'], ['ZZ', 'AAA']])('after %s comes %s', (letter, next) => {
+  it.each([
+    [null, 'A'],
+    ['A', 'B'],
+    ['Z', 'AA'],
+    ['AZ', 'BA'],
+    ['ZZ', 'AAA'],
+  ])('after %s comes %s', (letter, next) => {
     expect(nextLetter(letter)).toBe(next);
   });
 });

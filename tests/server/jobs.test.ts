@@ -16,21 +16,47 @@ async function office() {
   const person = await makePerson(['electrician'], team);
   return { team, person, browser: await signedIn(person) };
 }
-const patch = (browser: Browser, jobId: string, body: object) => browser.ask(edit, { method: 'PATCH', params: { jobId }, body });
-const page = async (browser: Browser, query = ''): Promise<JobPage> => (await browser.ask(list, { path: `/?${query}` })).body;
+const patch = (browser: Browser, jobId: string, body: object) =>
+  browser.ask(edit, { method: 'PATCH', params: { jobId }, body });
+const page = async (browser: Browser, query = ''): Promise<JobPage> =>
+  (await browser.ask(list, { path: `/?${query}` })).body;
 
 describe('a new job', () => {
   it('has the next number of its team, an empty drawing in its practice, and what was typed', async () => {
     const { browser } = await office();
-    const input = jobInput({ practice: 'IN', hoursWanted: 4, due: '2027-01-15', clientPhone: '0123', clientEmail: 'o@example.org' });
+    const input = jobInput({
+      practice: 'IN',
+      hoursWanted: 4,
+      due: '2027-01-15',
+      clientPhone: '0123',
+      clientEmail: 'o@example.org',
+    });
     const first = await browser.post(create, {}, input);
-    expect(first).toMatchObject({ status: 201, body: { ...input, number: 'OH-1', revision: '-', state: 'draft', waits: 'the survey', version: 0, rights: { edit: true, draw: true } } });
+    expect(first).toMatchObject({
+      status: 201,
+      body: {
+        ...input,
+        number: 'OH-1',
+        revision: '-',
+        state: 'draft',
+        waits: 'the survey',
+        version: 0,
+        rights: { edit: true, draw: true },
+      },
+    });
     expect((await browser.post(create, {}, input)).body.number).toBe('OH-2');
     const { body } = await browser.ask(open, { params: { drawingId: first.body.drawingId } });
     expect(body).toMatchObject({
       rev: 0,
       document: { title: input.title, practice: 'IN', supply: SUPPLY, parts: [] },
-      titleBlock: { number: 'OH-1', client: 'O. Pell', team: 'Reedbank Electrics', drawnBy: 'T. B.', revision: '-', state: 'draft' },
+      titleBlock: {
+        number: 'OH-1',
+        client: 'O. Pell',
+        team: 'Reedbank Electrics',
+        drawnBy: 'T. B.',
+        revision: '-',
+        state: 'draft',
+      },
     });
   });
 
@@ -75,7 +101,10 @@ describe('a new job', () => {
   it('is given to people of the team only', async () => {
     const { browser } = await office();
     const outsider = await makePerson(['apprentice']);
-    expect(await browser.post(create, {}, jobInput({ given: [outsider.id] }))).toMatchObject({ status: 400, body: { fields: { given: expect.any(String) } } });
+    expect(await browser.post(create, {}, jobInput({ given: [outsider.id] }))).toMatchObject({
+      status: 400,
+      body: { fields: { given: expect.any(String) } },
+    });
   });
 });
 
@@ -83,9 +112,18 @@ describe('editing a job', () => {
   it('is refused on an older version, and loses nothing of the first', async () => {
     const { browser, person } = await office();
     const { id } = await makeJob(person);
-    expect((await patch(browser, id, { version: 0, address: 'First' })).body).toMatchObject({ address: 'First', version: 1 });
-    expect(await patch(browser, id, { version: 0, address: 'Second', client: 'Somebody new' })).toMatchObject({ status: 409, body: { error: 'conflict' } });
-    expect((await browser.ask(read, { params: { jobId: id } })).body).toMatchObject({ address: 'First', client: 'O. Pell' });
+    expect((await patch(browser, id, { version: 0, address: 'First' })).body).toMatchObject({
+      address: 'First',
+      version: 1,
+    });
+    expect(await patch(browser, id, { version: 0, address: 'Second', client: 'Somebody new' })).toMatchObject({
+      status: 409,
+      body: { error: 'conflict' },
+    });
+    expect((await browser.ask(read, { params: { jobId: id } })).body).toMatchObject({
+      address: 'First',
+      client: 'O. Pell',
+    });
   });
 
   it('puts practice, supply and title into the drawing, as a change that an open sheet can take in', async () => {
@@ -93,9 +131,13 @@ describe('editing a job', () => {
     const { id, drawingId } = await makeJob(person);
     await browser.post(save, { drawingId }, change(0, place('p1')));
     const supply = { ...SUPPLY, system: 'TT' as const, ra: 20 };
-    expect((await patch(browser, id, { version: 0, practice: 'GB', supply, title: 'Heron Row 11' })).body).toMatchObject({ practice: 'GB', supply, title: 'Heron Row 11' });
+    expect(
+      (await patch(browser, id, { version: 0, practice: 'GB', supply, title: 'Heron Row 11' })).body,
+    ).toMatchObject({ practice: 'GB', supply, title: 'Heron Row 11' });
     const late = await browser.post(save, { drawingId }, change(1, place('p2')));
-    expect(late.body.since).toMatchObject([{ label: 'Change the job', patch: { set: { title: 'Heron Row 11', practice: 'GB', supply } } }]);
+    expect(late.body.since).toMatchObject([
+      { label: 'Change the job', patch: { set: { title: 'Heron Row 11', practice: 'GB', supply } } },
+    ]);
     const { body } = await browser.ask(open, { params: { drawingId } });
     expect(body).toMatchObject({ rev: 2, document: { practice: 'GB', title: 'Heron Row 11', places: [{ id: 'p1' }] } });
   });
@@ -110,10 +152,19 @@ describe('editing a job', () => {
   it('archives it and takes it back; an archived one is not drawn in', async () => {
     const { browser, person } = await office();
     const { id, drawingId } = await makeJob(person);
-    expect((await patch(browser, id, { version: 0, archived: true })).body).toMatchObject({ archived: true, rights: { edit: true, draw: false } });
-    expect(await browser.post(save, { drawingId }, change(0, place('p1')))).toMatchObject({ status: 409, body: { error: 'conflict' } });
+    expect((await patch(browser, id, { version: 0, archived: true })).body).toMatchObject({
+      archived: true,
+      rights: { edit: true, draw: false },
+    });
+    expect(await browser.post(save, { drawingId }, change(0, place('p1')))).toMatchObject({
+      status: 409,
+      body: { error: 'conflict' },
+    });
     expect(await patch(browser, id, { version: 1, practice: 'GB' })).toMatchObject({ status: 409 });
-    expect((await patch(browser, id, { version: 1, archived: false, practice: 'GB' })).body).toMatchObject({ archived: false, practice: 'GB' });
+    expect((await patch(browser, id, { version: 1, archived: false, practice: 'GB' })).body).toMatchObject({
+      archived: false,
+      practice: 'GB',
+    });
     expect((await browser.post(save, { drawingId }, change(1, place('p1')))).status).toBe(200);
   });
 
@@ -153,10 +204,25 @@ describe('the register', () => {
   it('sorts by each heading, both ways, with nothing due last', async () => {
     const { browser } = await shelf();
     expect(await titles(browser, '')).toEqual(['Salt Quay 3', '100% House', 'apple yard', 'Old Store, loft']);
-    expect(await titles(browser, 'sort=due&direction=desc')).toEqual(['apple yard', '100% House', 'Salt Quay 3', 'Old Store, loft']);
+    expect(await titles(browser, 'sort=due&direction=desc')).toEqual([
+      'apple yard',
+      '100% House',
+      'Salt Quay 3',
+      'Old Store, loft',
+    ]);
     expect(await titles(browser, 'sort=title')).toEqual(['100% House', 'apple yard', 'Old Store, loft', 'Salt Quay 3']);
-    expect(await titles(browser, 'sort=number&direction=desc')).toEqual(['apple yard', '100% House', 'Old Store, loft', 'Salt Quay 3']);
-    expect(await titles(browser, 'sort=client')).toEqual(['apple yard', 'Salt Quay 3', '100% House', 'Old Store, loft']);
+    expect(await titles(browser, 'sort=number&direction=desc')).toEqual([
+      'apple yard',
+      '100% House',
+      'Old Store, loft',
+      'Salt Quay 3',
+    ]);
+    expect(await titles(browser, 'sort=client')).toEqual([
+      'apple yard',
+      'Salt Quay 3',
+      '100% House',
+      'Old Store, loft',
+    ]);
     for (const sort of ['state', 'updated']) expect(await titles(browser, `sort=${sort}`)).toHaveLength(4);
   });
 
@@ -177,7 +243,11 @@ describe('the register', () => {
     expect(await titles(browser, 'filter=mine')).toHaveLength(4);
     expect(await titles(colleague, 'filter=mine')).toEqual([]);
     await Job.update({ archivedAt: new Date() }, { where: { teamId: team.id, number: 1 } });
-    expect(await page(browser, 'filter=archived')).toMatchObject({ total: 1, all: 3, rows: [{ title: 'Salt Quay 3', archived: true }] });
+    expect(await page(browser, 'filter=archived')).toMatchObject({
+      total: 1,
+      all: 3,
+      rows: [{ title: 'Salt Quay 3', archived: true }],
+    });
     expect((await page(browser)).total).toBe(3);
     expect(person.teamId).toBe(team.id);
   });
@@ -190,16 +260,27 @@ describe('the register', () => {
     expect((await page(browser, 'page=9')).rows).toEqual([]);
   });
 
-  it.each(['sort=password', 'direction=asc;drop', 'page=0', 'page=1e9', 'sort=due&sort=title', 'filter=everything'])('refuses %s', async (query) => {
-    const { browser } = await office();
-    expect((await browser.ask(list, { path: `/?${query}` })).status).toBe(400);
-  });
+  it.each(['sort=password', 'direction=asc;drop', 'page=0', 'page=1e9', 'sort=due&sort=title', 'filter=everything'])(
+    'refuses %s',
+    async (query) => {
+      const { browser } = await office();
+      expect((await browser.ask(list, { path: `/?${query}` })).status).toBe(400);
+    },
+  );
 
   it('shows what was found when the drawing was last examined', async () => {
     const { browser, person, team } = await office();
     const { drawingId } = await makeJob(person);
     expect((await page(browser)).rows[0]).toMatchObject({ findings: null });
-    const bare = { set: { parts: [{ id: 'E1', kind: 'lamp', watts: 9 }, { id: 'G1', kind: 'supply' }], wires: [{ id: 'w1', from: ['G1', 'L'], to: ['E1', 'L'], role: 'line' }] } };
+    const bare = {
+      set: {
+        parts: [
+          { id: 'E1', kind: 'lamp', watts: 9 },
+          { id: 'G1', kind: 'supply' },
+        ],
+        wires: [{ id: 'w1', from: ['G1', 'L'], to: ['E1', 'L'], role: 'line' }],
+      },
+    };
     await browser.post(save, { drawingId }, change(0, bare));
     await examineDrawing(team.id, drawingId);
     const { findings, waits } = (await page(browser)).rows[0]!;

@@ -83,7 +83,9 @@ describe('migrations', () => {
     );
     const columns = rows.map((row) => `${row.table_name}.${row.column_name}`).sort();
     const fields = Object.values(models.sequelize.models)
-      .flatMap((model) => Object.values(model.getAttributes()).map(({ field }) => `${model.getTableName() as string}.${field}`))
+      .flatMap((model) =>
+        Object.values(model.getAttributes()).map(({ field }) => `${model.getTableName() as string}.${field}`),
+      )
       .sort();
     expect(fields).toEqual(columns);
   });
@@ -92,7 +94,9 @@ describe('migrations', () => {
     const app = new pg.Client({ connectionString: inject('databaseUrl') });
     await app.connect();
     try {
-      const { rows } = await app.query(`select count(*)::int as owned from pg_class c join pg_roles r on r.oid = c.relowner where r.rolname = current_user`);
+      const { rows } = await app.query(
+        `select count(*)::int as owned from pg_class c join pg_roles r on r.oid = c.relowner where r.rolname = current_user`,
+      );
       expect(rows[0].owned).toBe(0);
       await expect(app.query('create table mine (id int)')).rejects.toThrow(/permission denied/);
       await expect(app.query('alter table audit_entries disable trigger all')).rejects.toThrow(/must be owner/);

@@ -32,7 +32,14 @@ describe('an invitation', () => {
       headers: { host: 'elsewhere.example', 'x-forwarded-host': 'elsewhere.example', 'x-forwarded-proto': 'https' },
     });
     expect(status).toBe(201);
-    expect(body.person).toMatchObject({ name: 'Ida Brook', initials: 'I. B.', roles: ['trainer'], status: 'waiting', active: true, lastSeen: null });
+    expect(body.person).toMatchObject({
+      name: 'Ida Brook',
+      initials: 'I. B.',
+      roles: ['trainer'],
+      status: 'waiting',
+      active: true,
+      lastSeen: null,
+    });
     const url = new URL(body.link);
     expect(url.origin + url.pathname).toBe('http://127.0.0.1:3000/invitation');
     expect(Buffer.from(tokenOf(body.link), 'base64url').length - 16).toBeGreaterThanOrEqual(16);
@@ -47,9 +54,13 @@ describe('an invitation', () => {
 
   it('is taken up once, and the person signs in with the password then', async () => {
     const { email, token, admin, personId } = await office();
-    const answers = await Promise.all(Array.from({ length: 5 }, () => new Browser().post(accept, {}, { token, password: NEXT })));
+    const answers = await Promise.all(
+      Array.from({ length: 5 }, () => new Browser().post(accept, {}, { token, password: NEXT })),
+    );
     expect(answers.map(({ status }) => status).sort()).toEqual([200, 404, 404, 404, 404]);
-    expect((await new Browser().post(accept, {}, { token, password: 'another good sentence' })).body).toMatchObject({ error: 'missing' });
+    expect((await new Browser().post(accept, {}, { token, password: 'another good sentence' })).body).toMatchObject({
+      error: 'missing',
+    });
     expect(await withJar(new Jar(), () => signIn(email, NEXT, '10.2.0.1'))).toMatchObject({ who: { personId } });
     const row = (await admin.ask(list)).body.find((person: { id: string }) => person.id === personId);
     expect(row).toMatchObject({ status: 'active', roles: ['apprentice', 'electrician'] });
@@ -57,7 +68,10 @@ describe('an invitation', () => {
 
   it('runs out', async () => {
     const { team, token } = await office();
-    await sequelize.query(`update invitations set created_at = now() - interval '8 days', expires_at = now() - interval '1 day' where team_id = $1`, { bind: [team.id] });
+    await sequelize.query(
+      `update invitations set created_at = now() - interval '8 days', expires_at = now() - interval '1 day' where team_id = $1`,
+      { bind: [team.id] },
+    );
     expect((await new Browser().post(accept, {}, { token, password: NEXT })).status).toBe(404);
   });
 
@@ -88,7 +102,9 @@ describe('an invitation', () => {
 
   it('refuses a password that is guessed early before the link is used up', async () => {
     const { token } = await office();
-    expect((await new Browser().post(accept, {}, { token, password: 'password1234' })).body).toMatchObject({ fields: { password: expect.any(String) } });
+    expect((await new Browser().post(accept, {}, { token, password: 'password1234' })).body).toMatchObject({
+      fields: { password: expect.any(String) },
+    });
     expect((await new Browser().post(accept, {}, { token, password: NEXT })).status).toBe(200);
   });
 });
@@ -97,9 +113,20 @@ describe('people', () => {
   it('take no other field than those named', async () => {
     const { admin, team, personId } = await office();
     const other = await makeTeam();
-    const extra = { teamId: other.id, id: randomUUID(), createdAt: '2020-01-01', passwordHash: 'x', email: 'x@example.org', memberships: [] };
+    const extra = {
+      teamId: other.id,
+      id: randomUUID(),
+      createdAt: '2020-01-01',
+      passwordHash: 'x',
+      email: 'x@example.org',
+      memberships: [],
+    };
     for (const [field, value] of Object.entries(extra)) {
-      const answer = await admin.ask(change, { method: 'PATCH', params: { personId }, body: { active: true, [field]: value } });
+      const answer = await admin.ask(change, {
+        method: 'PATCH',
+        params: { personId },
+        body: { active: true, [field]: value },
+      });
       expect([field, answer.status]).toEqual([field, 400]);
     }
     expect(await Membership.count({ where: { teamId: team.id, personId } })).toBe(2);
@@ -115,7 +142,10 @@ describe('people', () => {
   it('and what is done to them is written down, and cannot be rewritten', async () => {
     const { team, admin, personId } = await office();
     await admin.ask(change, { method: 'PATCH', params: { personId }, body: { roles: ['trainer'] } });
-    const entries = await AuditEntry.findAll({ where: { teamId: team.id, subjectId: personId }, order: [['id', 'ASC']] });
+    const entries = await AuditEntry.findAll({
+      where: { teamId: team.id, subjectId: personId },
+      order: [['id', 'ASC']],
+    });
     expect(entries.map(({ action, detail }) => [action, detail])).toEqual([
       ['people.invite', { roles: ['apprentice', 'electrician'] }],
       ['people.change', { roles: ['trainer'] }],

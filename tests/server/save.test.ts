@@ -13,15 +13,29 @@ async function studio() {
   const person = await makePerson(['electrician'], team);
   const { drawingId } = await makeJob(person);
   const teamId = team.id;
-  return { teamId, person, params: { drawingId }, browser: await signedIn(person), second: await signedIn(await makePerson(['electrician'], team, 'Ada Finch')) };
+  return {
+    teamId,
+    person,
+    params: { drawingId },
+    browser: await signedIn(person),
+    second: await signedIn(await makePerson(['electrician'], team, 'Ada Finch')),
+  };
 }
 
 describe('saving', () => {
   it('takes a change on the newest revision and gives it back', async () => {
     const { browser, params } = await studio();
-    expect(await browser.post(save, params, change(0, place('p1', 'Study')))).toMatchObject({ status: 200, body: { rev: 1 } });
+    expect(await browser.post(save, params, change(0, place('p1', 'Study')))).toMatchObject({
+      status: 200,
+      body: { rev: 1 },
+    });
     const { body } = await browser.ask(open, { params });
-    expect(body).toMatchObject({ rev: 1, state: 'open', rights: { edit: true, record: true }, document: { places: [{ id: 'p1', name: 'Study' }] } });
+    expect(body).toMatchObject({
+      rev: 1,
+      state: 'open',
+      rights: { edit: true, record: true },
+      document: { places: [{ id: 'p1', name: 'Study' }] },
+    });
   });
 
   it('answers a retry of a lost answer as before and applies nothing twice', async () => {
@@ -47,7 +61,14 @@ describe('saving', () => {
     const { browser, second, params } = await studio();
     await browser.post(save, params, change(0, place('p1', 'Study')));
     const late = await second.post(save, params, change(0, place('p2', 'Kitchen')));
-    expect(late).toMatchObject({ status: 409, body: { error: 'stale', rev: 1, since: [{ rev: 1, label: 'Add a place', patch: place('p1', 'Study'), person: { initials: 'T. B.' } }] } });
+    expect(late).toMatchObject({
+      status: 409,
+      body: {
+        error: 'stale',
+        rev: 1,
+        since: [{ rev: 1, label: 'Add a place', patch: place('p1', 'Study'), person: { initials: 'T. B.' } }],
+      },
+    });
     const rebased = await second.post(save, params, change(late.body.rev, place('p2', 'Kitchen')));
     expect(rebased.body).toEqual({ rev: 2 });
     const { body } = await browser.ask(open, { params });
@@ -58,9 +79,12 @@ describe('saving', () => {
     const { browser, second, params } = await studio();
     for (let round = 0; round < 20; round++) {
       const racers = [browser, second, browser, second];
-      const answers = await Promise.all(racers.map((who, i) => who.post(save, params, change(round, place(`r${round}-${i}`)))));
+      const answers = await Promise.all(
+        racers.map((who, i) => who.post(save, params, change(round, place(`r${round}-${i}`)))),
+      );
       expect(answers.map(({ status }) => status).sort()).toEqual([200, 409, 409, 409]);
-      for (const { status, body } of answers) if (status === 409) expect(body).toMatchObject({ error: 'stale', rev: round + 1 });
+      for (const { status, body } of answers)
+        if (status === 409) expect(body).toMatchObject({ error: 'stale', rev: round + 1 });
     }
     expect((await browser.ask(open, { params })).body.document.places).toHaveLength(20);
   });
@@ -75,7 +99,10 @@ describe('saving', () => {
 
   it('refuses a base ahead of the drawing', async () => {
     const { browser, params } = await studio();
-    expect(await browser.post(save, params, change(7, place('p1')))).toMatchObject({ status: 409, body: { rev: 0, since: [] } });
+    expect(await browser.post(save, params, change(7, place('p1')))).toMatchObject({
+      status: 409,
+      body: { rev: 0, since: [] },
+    });
   });
 
   it('draws nothing in an archived job or a submitted drawing', async () => {
@@ -109,15 +136,24 @@ describe('what a patch may hold', () => {
   it('takes no field beside those of a change: not a mark, a state, an owner or a team', async () => {
     const { browser, params, teamId } = await studio();
     for (const field of ['mark', 'state', 'ownerId', 'teamId', 'personId', 'rev', 'hash', 'at'])
-      expect([field, (await browser.post(save, params, { ...change(0, place('p1')), [field]: 'x' })).status]).toEqual([field, 400]);
+      expect([field, (await browser.post(save, params, { ...change(0, place('p1')), [field]: 'x' })).status]).toEqual([
+        field,
+        400,
+      ]);
     expect(await Drawing.findOne({ where: { teamId, id: params.drawingId } })).toMatchObject({ rev: 0, state: 'open' });
   });
 
   it('refuses a key that would reach the prototype, wherever it stands', async () => {
     const { browser, params } = await studio();
-    const raw = JSON.stringify(change(0, { set: { overview: {} } })).replace('"overview":{}', '"overview":{"__proto__":{"x":1,"y":1}}');
+    const raw = JSON.stringify(change(0, { set: { overview: {} } })).replace(
+      '"overview":{}',
+      '"overview":{"__proto__":{"x":1,"y":1}}',
+    );
     const answer = await browser.ask(save, { method: 'POST', params, raw });
-    expect(answer).toMatchObject({ status: 400, body: { error: 'invalid', fields: { ['__proto__']: 'This name is reserved.' } } });
+    expect(answer).toMatchObject({
+      status: 400,
+      body: { error: 'invalid', fields: { ['__proto__']: 'This name is reserved.' } },
+    });
   });
 
   it('refuses a request of more than 640 kB before reading it, and a patch of more than 512 kB', async () => {
@@ -127,7 +163,9 @@ describe('what a patch may hold', () => {
     const parts = Array.from({ length: 6_000 }, (_, i) => ({ id: `p${i}`, kind: 'joint', label: 'x'.repeat(60) }));
     const most = await browser.post(save, params, change(0, { set: { parts } }));
     expect(most).toMatchObject({ status: 413, body: { error: 'too-large' } });
-    expect(await browser.post(save, params, change(0, { set: { parts: parts.slice(0, 4_000) } }))).toMatchObject({ status: 200 });
+    expect(await browser.post(save, params, change(0, { set: { parts: parts.slice(0, 4_000) } }))).toMatchObject({
+      status: 200,
+    });
   });
 
   it('refuses what would make the drawing too large', async () => {
@@ -165,7 +203,13 @@ describe('the log', () => {
     const { browser, params, teamId } = await studio();
     const { drawingId } = params;
     const snapshot = (await DrawingSnapshot.findOne({ where: { teamId, drawingId } }))!;
-    await DrawingSnapshot.create({ teamId, drawingId, rev: 1, body: snapshot.body.replace('Heron', 'Horen'), sha256: snapshot.sha256 });
+    await DrawingSnapshot.create({
+      teamId,
+      drawingId,
+      rev: 1,
+      body: snapshot.body.replace('Heron', 'Horen'),
+      sha256: snapshot.sha256,
+    });
     await Drawing.update({ rev: 1, snapshotRev: 1 }, { where: { teamId, id: drawingId } });
     forget(teamId, drawingId);
     const { status, body } = await browser.ask(open, { params });

@@ -45,14 +45,18 @@ describe('a copied session cookie is dead at once', () => {
     expect((await one.post(password, {}, { current: PASSWORD, next: 'eleven quiet herons' })).status).toBe(200);
     expect(await Promise.all([one, other].map(seesJobs))).toEqual([200, 401]);
     expect(await withJar(new Jar(), () => signIn(emailOf(person), PASSWORD, '10.0.0.1'))).toBeNull();
-    expect(await withJar(new Jar(), () => signIn(emailOf(person), 'eleven quiet herons', '10.0.0.1'))).toMatchObject({ who: { personId: person.id } });
+    expect(await withJar(new Jar(), () => signIn(emailOf(person), 'eleven quiet herons', '10.0.0.1'))).toMatchObject({
+      who: { personId: person.id },
+    });
   });
 
   it('after an admin switches the person off; nobody signs in then', async () => {
     const team = await makeTeam();
     const [admin, person] = [await makePerson(['admin'], team), await makePerson(['electrician'], team)];
     const copy = copyOf(await signedIn(person));
-    const answer = await (await signedIn(admin)).ask(changePerson, { method: 'PATCH', params: { personId: person.id }, body: { active: false } });
+    const answer = await (
+      await signedIn(admin)
+    ).ask(changePerson, { method: 'PATCH', params: { personId: person.id }, body: { active: false } });
     expect(answer.body).toMatchObject({ status: 'off', active: false });
     expect(await seesJobs(copy)).toBe(401);
     expect(await withJar(new Jar(), () => signIn(emailOf(person), PASSWORD, '10.0.0.2'))).toBeNull();
@@ -64,16 +68,23 @@ describe('a copied session cookie is dead at once', () => {
     const copy = copyOf(await signedIn(person));
     const given = await (await signedIn(admin)).post(link, { personId: person.id });
     const token = new URL(given.body.link).hash.slice(1);
-    expect((await new Browser().post(accept, {}, { token, password: 'eleven quiet herons' })).body).toEqual({ email: emailOf(person) });
+    expect((await new Browser().post(accept, {}, { token, password: 'eleven quiet herons' })).body).toEqual({
+      email: emailOf(person),
+    });
     expect(await seesJobs(copy)).toBe(401);
   });
 
   it('after twelve hours whatever happens, and after four without a request', async () => {
     const person = await makePerson();
-    for (const age of [`created_at = now() - interval '13 hours', expires_at = now() - interval '1 hour'`, `seen_at = now() - interval '4 hours 1 minute'`]) {
+    for (const age of [
+      `created_at = now() - interval '13 hours', expires_at = now() - interval '1 hour'`,
+      `seen_at = now() - interval '4 hours 1 minute'`,
+    ]) {
       const browser = await signedIn(person);
       expect(await seesJobs(browser)).toBe(200);
-      await sequelize.query(`update auth_sessions set ${age} where team_id = $1 and ended_at is null`, { bind: [person.teamId] });
+      await sequelize.query(`update auth_sessions set ${age} where team_id = $1 and ended_at is null`, {
+        bind: [person.teamId],
+      });
       expect(await seesJobs(browser)).toBe(401);
     }
   });
@@ -84,7 +95,8 @@ describe('rights', () => {
     const team = await makeTeam();
     const [admin, person] = [await makePerson(['admin'], team), await makePerson(['admin', 'electrician'], team)];
     const browser = await signedIn(person);
-    const asks = () => browser.ask(changePerson, { method: 'PATCH', params: { personId: admin.id }, body: { roles: ['admin'] } });
+    const asks = () =>
+      browser.ask(changePerson, { method: 'PATCH', params: { personId: admin.id }, body: { roles: ['admin'] } });
     expect((await asks()).status).toBe(200);
     await Membership.destroy({ where: { teamId: team.id, personId: person.id, role: 'admin' } });
     expect((await asks()).status).toBe(403);
@@ -95,7 +107,13 @@ describe('rights', () => {
     const admins = [await makePerson(['admin'], team), await makePerson(['admin'], team)];
     const browsers = await Promise.all(admins.map(signedIn));
     const answers = await Promise.all(
-      browsers.map((browser, i) => browser.ask(changePerson, { method: 'PATCH', params: { personId: admins[1 - i]!.id }, body: { active: false } })),
+      browsers.map((browser, i) =>
+        browser.ask(changePerson, {
+          method: 'PATCH',
+          params: { personId: admins[1 - i]!.id },
+          body: { active: false },
+        }),
+      ),
     );
     expect(answers.map(({ status }) => status).sort()).not.toEqual([200, 200]);
     expect(await Person.count({ where: { teamId: team.id, active: true } })).toBe(1);
@@ -104,7 +122,11 @@ describe('rights', () => {
 
 describe('a cookie', () => {
   const forged: Record<string, () => Promise<string>> = {
-    'sealed with another secret': () => encode({ token: { sub: crypto.randomUUID(), tid: crypto.randomUUID(), sid: crypto.randomUUID() }, secret: 'x'.repeat(40) }),
+    'sealed with another secret': () =>
+      encode({
+        token: { sub: crypto.randomUUID(), tid: crypto.randomUUID(), sid: crypto.randomUUID() },
+        secret: 'x'.repeat(40),
+      }),
     'that is no token': async () => 'not.a.token',
     'that names nothing': () => encode({ token: { sub: 'me' }, secret: process.env.NEXTAUTH_SECRET! }),
     'that is an unsigned token': async () => `${btoa('{"alg":"none"}')}.${btoa('{"sub":"x"}')}.`,
@@ -120,7 +142,10 @@ describe('a cookie', () => {
     const [one, other] = [await makePerson(['electrician'], team), await makePerson(['admin'], team)];
     const token = await beginSession({ teamId: team.id, personId: one.id });
     const jar = new Jar();
-    jar.set(sessionCookie(), await encode({ token: { ...token, sub: other.id }, secret: process.env.NEXTAUTH_SECRET! }));
+    jar.set(
+      sessionCookie(),
+      await encode({ token: { ...token, sub: other.id }, secret: process.env.NEXTAUTH_SECRET! }),
+    );
     expect(await seesJobs(new Browser(jar))).toBe(401);
   });
 
@@ -136,7 +161,9 @@ describe('a cookie', () => {
       jar.set(sessionCookie(), value);
       expect(await seesJobs(new Browser(jar))).toBe(401);
       if (value.length >= 20 && value.length <= 100)
-        expect((await new Browser().post(accept, {}, { token: value, password: 'eleven quiet herons' })).status).toBe(404);
+        expect((await new Browser().post(accept, {}, { token: value, password: 'eleven quiet herons' })).status).toBe(
+          404,
+        );
     }
   });
 });
@@ -160,20 +187,35 @@ describe('the redirect after signing in', () => {
 
 describe('single sign-on', () => {
   const check = authOptions().callbacks!.signIn!;
-  const ask = (profile: object) => check({ account: { provider: 'oidc', type: 'oauth', providerAccountId: 'x' }, profile, user: { id: 'x' } } as never);
+  const ask = (profile: object) =>
+    check({
+      account: { provider: 'oidc', type: 'oauth', providerAccountId: 'x' },
+      profile,
+      user: { id: 'x' },
+    } as never);
 
   it('lets in people who were invited, by a confirmed address only', async () => {
     const person = await makePerson();
     const email = emailOf(person);
     expect(await ask({ sub: '1', email, email_verified: true })).toBe(true);
     expect(await ask({ sub: '1', email: email.toUpperCase(), email_verified: true })).toBe(true);
-    for (const profile of [{ email }, { email, email_verified: false }, { email, email_verified: 'true' }, { email: 'nobody@example.org', email_verified: true }, {}])
+    for (const profile of [
+      { email },
+      { email, email_verified: false },
+      { email, email_verified: 'true' },
+      { email: 'nobody@example.org', email_verified: true },
+      {},
+    ])
       expect(await ask({ sub: '1', ...profile })).toBe('/signin?error=NotInvited');
   });
 
   it('takes no look-alike of an address for the address', async () => {
     const person = await makePerson();
-    for (const email of [emailOf(person).replace('@', '\uFF20'), emailOf(person).replace('example', 'ex\u0430mple'), `${emailOf(person)}, x@example.org`])
+    for (const email of [
+      emailOf(person).replace('@', '\uFF20'),
+      emailOf(person).replace('example', 'ex\u0430mple'),
+      `${emailOf(person)}, x@example.org`,
+    ])
       expect(await ask({ sub: '1', email, email_verified: true })).toBe('/signin?error=NotInvited');
   });
 

@@ -6,7 +6,8 @@ import { signedIn } from './browser';
 import { PASSWORD, emailOf, makePerson } from './factories';
 import { Jar, withJar } from './jar';
 
-const attempt = (email: string, typed: string, address: string, jar = new Jar()) => withJar(jar, () => signIn(email, typed, address));
+const attempt = (email: string, typed: string, address: string, jar = new Jar()) =>
+  withJar(jar, () => signIn(email, typed, address));
 let network = 0;
 /** An address that no other test has used. */
 const newAddress = () => `10.1.${Math.floor(++network / 250)}.${network % 250}`;
@@ -14,7 +15,9 @@ const newAddress = () => `10.1.${Math.floor(++network / 250)}.${network % 250}`;
 describe('signing in', () => {
   it('takes the right password, whatever the capitals of the address', async () => {
     const person = await makePerson();
-    expect(await attempt(` ${emailOf(person).toUpperCase()} `, PASSWORD, newAddress())).toEqual({ who: { teamId: person.teamId, personId: person.id } });
+    expect(await attempt(` ${emailOf(person).toUpperCase()} `, PASSWORD, newAddress())).toEqual({
+      who: { teamId: person.teamId, personId: person.id },
+    });
   });
 
   it('compares the password exactly and whole', async () => {
@@ -73,11 +76,15 @@ describe('guessing', () => {
     const addresses = Array.from({ length: 50 }, newAddress);
     let reached = 0;
     for (let round = 0; round < 20; round++) {
-      const answers = await Promise.all(addresses.map((address) => attempt(emailOf(person), `guess ${round}`, address)));
+      const answers = await Promise.all(
+        addresses.map((address) => attempt(emailOf(person), `guess ${round}`, address)),
+      );
       reached += answers.filter((answer) => answer === null).length;
     }
     expect(reached).toBeLessThanOrEqual(20);
-    expect(await attempt(emailOf(person), PASSWORD, addresses[0]!, own)).toMatchObject({ who: { personId: person.id } });
+    expect(await attempt(emailOf(person), PASSWORD, addresses[0]!, own)).toMatchObject({
+      who: { personId: person.id },
+    });
     // A mark of another person's browser is worth nothing here.
     const others = new Jar();
     const other = await makePerson();
@@ -87,24 +94,29 @@ describe('guessing', () => {
 
   it('does not count a class that signs in behind one router', async () => {
     const address = newAddress();
-    for (let i = 0; i < 70; i++) expect(await attempt(emailOf(await makePerson()), PASSWORD, address)).toMatchObject({ who: {} });
+    for (let i = 0; i < 70; i++)
+      expect(await attempt(emailOf(await makePerson()), PASSWORD, address)).toMatchObject({ who: {} });
   });
 
   it('at the old password of a borrowed browser is held back as well', async () => {
     const person = await makePerson();
     const browser = await signedIn(person);
     const tries = [];
-    for (let i = 0; i < 7; i++) tries.push((await browser.post(password, {}, { current: `guess ${i}`, next: 'eleven quiet herons' })).status);
+    for (let i = 0; i < 7; i++)
+      tries.push((await browser.post(password, {}, { current: `guess ${i}`, next: 'eleven quiet herons' })).status);
     expect(tries).toEqual([400, 400, 400, 400, 400, 429, 429]);
   });
 });
 
 describe('a new password', () => {
-  it.each(['password123', 'Qwertyuiop!', 'aaaaaaaaaaaa', '1234567890', 'Tilda Brook', 'electrician2026', 'short one'])('is not %s', async (next) => {
-    const browser = await signedIn(await makePerson());
-    const answer = await browser.post(password, {}, { current: PASSWORD, next });
-    expect(answer).toMatchObject({ status: 400, body: { fields: { next: expect.any(String) } } });
-  });
+  it.each(['password123', 'Qwertyuiop!', 'aaaaaaaaaaaa', '1234567890', 'Tilda Brook', 'electrician2026', 'short one'])(
+    'is not %s',
+    async (next) => {
+      const browser = await signedIn(await makePerson());
+      const answer = await browser.post(password, {}, { current: PASSWORD, next });
+      expect(answer).toMatchObject({ status: 400, body: { fields: { next: expect.any(String) } } });
+    },
+  );
 
   it('may be a long sentence in any script', async () => {
     const browser = await signedIn(await makePerson());

@@ -57,6 +57,12 @@ export async function fingerprint(teamId: string): Promise<string> {
     const row = table === 'auth_sessions' ? `(x.id, x.ended_at)::text` : 'x::text';
     return `select '${table}' as name, md5(coalesce(string_agg(${row}, '\n' order by ${row}), '')) as sum from ${table} x where ${key} = $1`;
   });
-  const rows = await sequelize.query<{ name: string; sum: string }>(parts.join(' union all '), { bind: [teamId], type: QueryTypes.SELECT });
-  return rows.map(({ name, sum }) => `${name} ${sum}`).sort().join('\n');
+  const rows = await sequelize.query<{ name: string; sum: string }>(parts.join(' union all '), {
+    bind: [teamId],
+    type: QueryTypes.SELECT,
+  });
+  return rows
+    .map(({ name, sum }) => `${name} ${sum}`)
+    .sort()
+    .join('\n');
 }

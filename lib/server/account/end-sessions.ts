@@ -20,6 +20,9 @@ export async function endSessions(
 
 /** Ends one session: signing out on this browser. */
 export async function endSession({ tid, sid, sub }: SessionToken): Promise<void> {
-  await AuthSession.update({ endedAt: new Date(), endedBy: 'sign-out' }, { where: { teamId: tid, id: sid, endedAt: null } });
+  await AuthSession.update(
+    { endedAt: new Date(), endedBy: 'sign-out' },
+    { where: { teamId: tid, id: sid, endedAt: null } },
+  );
   await audit({ teamId: tid, personId: sub }, 'account.sign-out', sub);
 }

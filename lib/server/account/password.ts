@@ -18,9 +18,31 @@ export async function isPassword(passwordHash: string | null | undefined, passwo
 
 /** Passwords of ten characters and more that stand in every list of the commonest (from memory). */
 const COMMON = [
-  'password', 'passw0rd', 'qwertyuiop', 'qwerty12345', 'asdfghjkl', 'zxcvbnm', '1234567890', '0123456789', '9876543210',
-  'iloveyou', 'letmein', 'welcome', 'sunshine', 'princess', 'football', 'baseball', 'superman', 'administrator',
-  'changeme', 'trustno1', '1q2w3e4r', '1qaz2wsx', 'abcdefghij', 'electrician', 'ohmstead',
+  'password',
+  'passw0rd',
+  'qwertyuiop',
+  'qwerty12345',
+  'asdfghjkl',
+  'zxcvbnm',
+  '1234567890',
+  '0123456789',
+  '9876543210',
+  'iloveyou',
+  'letmein',
+  'welcome',
+  'sunshine',
+  'princess',
+  'football',
+  'baseball',
+  'superman',
+  'administrator',
+  'changeme',
+  'trustno1',
+  '1q2w3e4r',
+  '1qaz2wsx',
+  'abcdefghij',
+  'electrician',
+  'ohmstead',
 ];
 
 /** What is left of a password without the digits and signs that people add at its ends. */
@@ -37,7 +59,9 @@ export function checkPassword(password: string, own: readonly string[], field: s
   const left = core(password);
   const weak =
     new Set(lower).size < 4 ||
-    COMMON.some((common) => lower === common || (left !== '' && (left === core(common) || left === core(common).repeat(2)))) ||
+    COMMON.some(
+      (common) => lower === common || (left !== '' && (left === core(common) || left === core(common).repeat(2))),
+    ) ||
     own.some((text) => left.length > 2 && (core(text) === left || core(text.split('@')[0]!) === left));
   if (weak)
     throw new AppError('invalid', 'That password is one of the first that are tried.', {

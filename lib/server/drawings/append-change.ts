@@ -39,6 +39,9 @@ export async function appendChange(
     { bind: [who.teamId, drawingId, state.rev, hash, state.hash], type: QueryTypes.SELECT, transaction },
   );
   if (moved.length === 0) return null;
-  await DrawingChange.create({ teamId: who.teamId, ...change, prevHash: state.hash, hash }, { transaction, returning: false });
+  await DrawingChange.create(
+    { teamId: who.teamId, ...change, prevHash: state.hash, hash },
+    { transaction, returning: false },
+  );
   return { rev, hash, document };
 }

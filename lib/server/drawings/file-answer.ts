@@ -11,7 +11,10 @@ export const fileName = (titleBlock: { number: string; title: string; revision: 
 /** A file to keep, under a name that also carries letters beyond ASCII (RFC 6266). Never shown as a page of the app. */
 export function fileAnswer(body: BodyInit, type: string, name: string): Response {
   const plain = name.normalize('NFKD').replace(/[^\x20-\x7e]/g, '');
-  const exact = encodeURIComponent(name).replace(/['()*]/g, (sign) => `%${sign.charCodeAt(0).toString(16).toUpperCase()}`);
+  const exact = encodeURIComponent(name).replace(
+    /['()*]/g,
+    (sign) => `%${sign.charCodeAt(0).toString(16).toUpperCase()}`,
+  );
   return new Response(body, {
     headers: {
       'content-type': type,

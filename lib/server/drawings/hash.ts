@@ -17,5 +17,7 @@ export interface ChangeFacts {
 /** The link of a change in its drawing's chain: altering any field of any earlier change breaks all later ones. */
 export function changeHash(prevHash: string, change: ChangeFacts): string {
   const { drawingId, rev, saveId, personId, at, label, patch } = change;
-  return sha256([prevHash, drawingId, rev, saveId, personId, at.toISOString(), JSON.stringify(label), patch].join('\n'));
+  return sha256(
+    [prevHash, drawingId, rev, saveId, personId, at.toISOString(), JSON.stringify(label), patch].join('\n'),
+  );
 }

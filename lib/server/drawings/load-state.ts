@@ -11,7 +11,12 @@ import { Drawing, DrawingChange, DrawingSnapshot } from '@/models';
  * The document frozen at a revision of the drawing.
  * @throws Error when the stored bytes are not the ones that were written
  */
-export async function readSnapshot(teamId: string, drawingId: string, rev: number, transaction?: Transaction): Promise<Installation> {
+export async function readSnapshot(
+  teamId: string,
+  drawingId: string,
+  rev: number,
+  transaction?: Transaction,
+): Promise<Installation> {
   const snapshot = await DrawingSnapshot.findOne({ where: { teamId, drawingId, rev }, transaction });
   if (!snapshot || sha256(snapshot.body) !== snapshot.sha256)
     throw new Error(`The snapshot ${rev} of drawing ${drawingId} is ${snapshot ? 'damaged' : 'missing'}.`);
@@ -35,7 +40,8 @@ export async function loadState(teamId: string, drawingId: string, transaction?:
     order: [['rev', 'ASC']],
     transaction,
   });
-  if (tail.length !== head.rev - from.rev) throw new Error(`Drawing ${drawingId} lacks changes between ${from.rev} and ${head.rev}.`);
+  if (tail.length !== head.rev - from.rev)
+    throw new Error(`Drawing ${drawingId} lacks changes between ${from.rev} and ${head.rev}.`);
   const document = tail.reduce((doc, { patch }) => applyPatch(doc, JSON.parse(patch) as Patch), from.document);
   const state = { rev: head.rev, hash: head.headHash, document };
   // Inside a transaction the head may be one that is never committed.

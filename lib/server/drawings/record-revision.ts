@@ -27,12 +27,14 @@ export async function recordRevision(actor: Actor, drawingId: string, note: stri
     if (!head) throw missing('drawing');
     authorize(actor, 'drawing.record', await findJob(actor, { drawingId }, transaction));
     const newest = await Revision.findOne({ where: { teamId, drawingId }, order: [['rev', 'DESC']], transaction });
-    if (newest?.rev === head.rev)
-      throw new AppError('conflict', `Nothing was drawn since revision ${newest.letter}.`);
+    if (newest?.rev === head.rev) throw new AppError('conflict', `Nothing was drawn since revision ${newest.letter}.`);
     const state = await loadState(teamId, drawingId, transaction);
     const sha256 = await writeSnapshot(teamId, drawingId, state, transaction);
     const letter = nextLetter(newest?.letter ?? null);
-    const made = await Revision.create({ teamId, drawingId, letter, rev: state.rev, note, sha256, personId }, { transaction });
+    const made = await Revision.create(
+      { teamId, drawingId, letter, rev: state.rev, note, sha256, personId },
+      { transaction },
+    );
     await audit(actor, 'drawing.record', drawingId, { letter, rev: state.rev }, transaction);
     return made;
   });

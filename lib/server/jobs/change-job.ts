@@ -16,7 +16,8 @@ import { authorize } from '@/lib/server/policies';
 import type { JobPatch, JobView } from '@/lib/shared/jobs';
 import { Client, Job, sequelize } from '@/models';
 
-const changedMeanwhile = () => new AppError('conflict', 'Somebody else changed this job meanwhile. Look at it again; nothing of yours was saved.');
+const changedMeanwhile = () =>
+  new AppError('conflict', 'Somebody else changed this job meanwhile. Look at it again; nothing of yours was saved.');
 
 /** Edits a job on the version that the person saw. Practice, supply and title go into the drawing as a saved change. */
 export async function changeJob(actor: Actor, jobId: string, patch: JobPatch): Promise<JobView> {
@@ -53,11 +54,22 @@ async function changeRow(actor: Actor, jobId: string, patch: JobPatch, transacti
 }
 
 /** The client that the job is for after the edit; undefined when the edit says nothing of a client. */
-async function clientAfter(actor: Actor, jobId: string, patch: JobPatch, transaction: Transaction): Promise<string | undefined> {
+async function clientAfter(
+  actor: Actor,
+  jobId: string,
+  patch: JobPatch,
+  transaction: Transaction,
+): Promise<string | undefined> {
   const { client, clientPhone, clientEmail } = patch;
   if (client === undefined && clientPhone === undefined && clientEmail === undefined) return undefined;
   const { teamId } = actor;
-  const name = client ?? (await Job.findOne({ where: { teamId, id: jobId }, include: [{ model: Client, as: 'client', where: { teamId } }], transaction }))!.client!.name;
+  const name =
+    client ??
+    (await Job.findOne({
+      where: { teamId, id: jobId },
+      include: [{ model: Client, as: 'client', where: { teamId } }],
+      transaction,
+    }))!.client!.name;
   return findOrMakeClient(actor, { client: name, clientPhone, clientEmail }, transaction);
 }
 
@@ -77,7 +89,13 @@ async function changeDrawing(
   });
   if (isEmptyPatch(patch)) return null;
   authorize(actor, 'drawing.edit', await findJob(actor, { drawingId }, transaction));
-  const next = await appendChange(actor, drawingId, state, { saveId: randomUUID(), label: 'Change the job', patch }, transaction);
+  const next = await appendChange(
+    actor,
+    drawingId,
+    state,
+    { saveId: randomUUID(), label: 'Change the job', patch },
+    transaction,
+  );
   if (!next) throw changedMeanwhile();
   return next.rev;
 }

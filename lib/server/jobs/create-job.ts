@@ -26,7 +26,17 @@ export async function createJob(actor: Actor, input: JobInput): Promise<JobView>
     );
     const { title, address, hoursWanted, due } = input;
     const job = await Job.create(
-      { teamId, id: randomUUID(), number: counter!.number, title, clientId, address, hoursWanted, due, createdBy: actor.personId },
+      {
+        teamId,
+        id: randomUUID(),
+        number: counter!.number,
+        title,
+        clientId,
+        address,
+        hoursWanted,
+        due,
+        createdBy: actor.personId,
+      },
       { transaction },
     );
     if (input.given) await giveJob(actor, job.id, input.given, transaction);

@@ -26,7 +26,11 @@ export async function findJob(
                      where g.team_id = j.team_id and g.job_id = j.id and m.role = 'apprentice') as taught
        from jobs j join drawings d on d.team_id = j.team_id and d.job_id = j.id
       where j.team_id = $1 and ${column} = $2`,
-    { bind: [actor.teamId, 'jobId' in by ? by.jobId : by.drawingId, actor.personId], type: QueryTypes.SELECT, transaction },
+    {
+      bind: [actor.teamId, 'jobId' in by ? by.jobId : by.drawingId, actor.personId],
+      type: QueryTypes.SELECT,
+      transaction,
+    },
   );
   return row ?? null;
 }

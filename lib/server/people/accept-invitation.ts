@@ -6,10 +6,17 @@ import { AppError } from '@/lib/server/errors';
 import { readToken } from '@/lib/server/people/invitation-token';
 import { Invitation, Login, Person, sequelize } from '@/models';
 
-const gone = () => new AppError('missing', 'This link has been used or has run out. Ask the admin of your team for a new one.');
+const gone = () =>
+  new AppError('missing', 'This link has been used or has run out. Ask the admin of your team for a new one.');
 
 /** Sets the password of the person whom a one-time link was given to, and ends what sessions they had. */
-export async function acceptInvitation({ token, password }: { token: string; password: string }): Promise<{ email: string }> {
+export async function acceptInvitation({
+  token,
+  password,
+}: {
+  token: string;
+  password: string;
+}): Promise<{ email: string }> {
   const read = readToken(token);
   if (!read) throw gone();
   const { teamId, tokenHash } = read;
@@ -24,7 +31,10 @@ export async function acceptInvitation({ token, password }: { token: string; pas
   const passwordHash = await hashPassword(password);
   await sequelize.transaction(async (transaction) => {
     // One statement decides who was first, however often the link is sent at once.
-    const [used] = await Invitation.update({ usedAt: new Date() }, { where: { teamId, id: open.id, usedAt: null }, transaction });
+    const [used] = await Invitation.update(
+      { usedAt: new Date() },
+      { where: { teamId, id: open.id, usedAt: null }, transaction },
+    );
     if (used === 0) throw gone();
     await login.update({ passwordHash, passwordAt: new Date() }, { transaction });
     await endSessions({ teamId, personId: person.id }, 'password', { transaction });

@@ -26,19 +26,37 @@ export async function changePerson(
     if (active !== undefined) await person.update({ active }, { transaction });
     if (active === false) await endSessions({ teamId, personId }, 'admin', { transaction });
     await refuseWithoutAdmin(teamId, transaction);
-    await audit(actor, 'people.change', personId, { ...(roles && { roles }), ...(active !== undefined && { active }) }, transaction);
+    await audit(
+      actor,
+      'people.change',
+      personId,
+      { ...(roles && { roles }), ...(active !== undefined && { active }) },
+      transaction,
+    );
   });
   const [row] = await readPeople(teamId, personId);
   return row!;
 }
 
-async function setRoles(teamId: string, personId: string, roles: PersonRole[], transaction: Transaction): Promise<void> {
+async function setRoles(
+  teamId: string,
+  personId: string,
+  roles: PersonRole[],
+  transaction: Transaction,
+): Promise<void> {
   await Membership.destroy({ where: { teamId, personId }, transaction });
-  await Membership.bulkCreate([...new Set(roles)].map((role) => ({ teamId, personId, role })), { transaction });
+  await Membership.bulkCreate(
+    [...new Set(roles)].map((role) => ({ teamId, personId, role })),
+    { transaction },
+  );
 }
 
 async function refuseWithoutAdmin(teamId: string, transaction: Transaction): Promise<void> {
   const admins = await Membership.findAll({ where: { teamId, role: 'admin' }, transaction });
-  const active = await Person.count({ where: { teamId, active: true, id: admins.map(({ personId }) => personId) }, transaction });
-  if (active === 0) throw new AppError('conflict', 'The team would have no admin left. Make somebody else admin first.');
+  const active = await Person.count({
+    where: { teamId, active: true, id: admins.map(({ personId }) => personId) },
+    transaction,
+  });
+  if (active === 0)
+    throw new AppError('conflict', 'The team would have no admin left. Make somebody else admin first.');
 }

@@ -15,7 +15,11 @@ export interface OneTimeLink {
 }
 
 /** Makes a one-time link with which the person sets a password; links given before stop working. */
-export async function giveLink(actor: Pick<Actor, 'teamId' | 'personId'>, personId: string, transaction: Transaction): Promise<OneTimeLink> {
+export async function giveLink(
+  actor: Pick<Actor, 'teamId' | 'personId'>,
+  personId: string,
+  transaction: Transaction,
+): Promise<OneTimeLink> {
   const { teamId } = actor;
   const { token, tokenHash } = makeToken(teamId);
   const expiresAt = new Date(Date.now() + DAYS * 86_400_000);

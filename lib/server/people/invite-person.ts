@@ -25,7 +25,10 @@ export async function invitePerson(
     const { personId, link } = await sequelize.transaction(async (transaction) => {
       const person = await Person.create({ teamId, name }, { transaction });
       await Login.create({ email, teamId, personId: person.id }, { transaction });
-      await Membership.bulkCreate([...new Set(roles)].map((role) => ({ teamId, personId: person.id, role })), { transaction });
+      await Membership.bulkCreate(
+        [...new Set(roles)].map((role) => ({ teamId, personId: person.id, role })),
+        { transaction },
+      );
       await audit(actor, 'people.invite', person.id, { roles }, transaction);
       return { personId: person.id, link: await giveLink(actor, person.id, transaction) };
     });
@@ -33,9 +36,11 @@ export async function invitePerson(
     return { person: person!, ...link };
   } catch (error) {
     // Also when another team has the address; which of the two it is, is nobody's business here.
-    if (error instanceof UniqueConstraintError) throw refusedAddress('This address is taken. Each person signs in with one of their own.');
+    if (error instanceof UniqueConstraintError)
+      throw refusedAddress('This address is taken. Each person signs in with one of their own.');
     throw error;
   }
 }
 
-const refusedAddress = (reason: string) => new AppError('invalid', 'Nobody was invited.', { fields: { email: reason } });
+const refusedAddress = (reason: string) =>
+  new AppError('invalid', 'Nobody was invited.', { fields: { email: reason } });

@@ -12,6 +12,7 @@ export const GET = route({ params: DrawingParams, query: Query }, ({ actor, para
 );
 
 /** POST /api/drawings/:drawingId/changes saves one command; 409 with the changes since, when its base is not the newest. */
-export const POST = route({ params: DrawingParams, body: ChangeSchema, maxBytes: 640 * 1024 }, ({ actor, params, body }) =>
-  saveChange(actor, params.drawingId, body),
+export const POST = route(
+  { params: DrawingParams, body: ChangeSchema, maxBytes: 640 * 1024 },
+  ({ actor, params, body }) => saveChange(actor, params.drawingId, body),
 );
