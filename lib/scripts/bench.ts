@@ -204,8 +204,9 @@ function memory(): Measure {
 }
 
 function measureMemory(): void {
+  const doc = homeOf(5000);
   const before = process.memoryUsage().rss;
-  examine(homeOf(5000));
+  examine(doc);
   const peak = process.resourceUsage().maxRSS * 1024;
   process.stdout.write(String((peak - before) / 1e6));
 }

@@ -7,6 +7,8 @@ import type { TestNetwork } from './networks';
 
 /** Hz */
 export const FREQUENCY = 50;
+/** networks in one process */
+const BATCH = 10;
 const OMEGA = 2 * Math.PI * FREQUENCY;
 
 export interface SpiceAnswer {
@@ -65,10 +67,17 @@ function readRaw(path: string): Map<string, { re: number; im: number }> {
 }
 
 /**
- * Solves networks by Debian's ngspice, all of them in one process.
+ * Solves networks by Debian's ngspice, some of them in each process: its ordering takes longer than in proportion.
  * @throws when ngspice is missing: install it, the comparison is not to be skipped
  */
 export function spice(networks: readonly TestNetwork[]): SpiceAnswer[] {
+  const batches = Array.from({ length: Math.ceil(networks.length / BATCH) }, (_, i) =>
+    networks.slice(i * BATCH, (i + 1) * BATCH),
+  );
+  return batches.flatMap(batch);
+}
+
+function batch(networks: readonly TestNetwork[]): SpiceAnswer[] {
   const folder = mkdtempSync(join(tmpdir(), 'networks-'));
   try {
     const raw = join(folder, 'answer.raw');

@@ -3,8 +3,15 @@ import fc from 'fast-check';
 import { OhmNet, type OhmBranch } from '@/diagram/circuit/ohm-net';
 
 /** Solves the node equations of a small net by plain elimination: V below the root, for given currents drawn. */
-function plain(branches: readonly OhmBranch[], root: number, size: number, drawn: ReadonlyMap<number, number>): number[] {
-  const rows = Array.from({ length: size }, (_, i) => Array.from({ length: size + 1 }, (_v, j) => (j === size ? (drawn.get(i) ?? 0) : 0)));
+function plain(
+  branches: readonly OhmBranch[],
+  root: number,
+  size: number,
+  drawn: ReadonlyMap<number, number>,
+): number[] {
+  const rows = Array.from({ length: size }, (_, i) =>
+    Array.from({ length: size + 1 }, (_v, j) => (j === size ? (drawn.get(i) ?? 0) : 0)),
+  );
   for (const { a, b, ohm } of branches) {
     if (a === b) continue;
     rows[a]![a]! += 1 / ohm;
@@ -14,7 +21,9 @@ function plain(branches: readonly OhmBranch[], root: number, size: number, drawn
   }
   rows[root] = Array.from({ length: size + 1 }, (_, j) => (j === root ? 1 : 0));
   for (let k = 0; k < size; k++) {
-    const pivot = rows.findIndex((row, i) => i >= k && Math.abs(row[k]!) === Math.max(...rows.slice(k).map((each) => Math.abs(each[k]!))));
+    const pivot = rows.findIndex(
+      (row, i) => i >= k && Math.abs(row[k]!) === Math.max(...rows.slice(k).map((each) => Math.abs(each[k]!))),
+    );
     [rows[k], rows[pivot]] = [rows[pivot]!, rows[k]!];
     for (let i = 0; i < size; i++) {
       if (i === k) continue;
@@ -27,10 +36,24 @@ function plain(branches: readonly OhmBranch[], root: number, size: number, drawn
 
 describe('a net of conductors', () => {
   it('adds resistances in series and shares them in parallel', () => {
-    const line = new OhmNet([{ a: 0, b: 1, ohm: 2 }, { a: 1, b: 2, ohm: 3 }], 0);
+    const line = new OhmNet(
+      [
+        { a: 0, b: 1, ohm: 2 },
+        { a: 1, b: 2, ohm: 3 },
+      ],
+      0,
+    );
     expect(line.ohmTo(2)).toBeCloseTo(5, 12);
     // A ring: halfway round, two legs of 1 + 1 ohm in parallel.
-    const ring = new OhmNet([[0, 1], [1, 2], [2, 3], [3, 0]].map(([a, b]) => ({ a: a!, b: b!, ohm: 1 })), 0);
+    const ring = new OhmNet(
+      [
+        [0, 1],
+        [1, 2],
+        [2, 3],
+        [3, 0],
+      ].map(([a, b]) => ({ a: a!, b: b!, ohm: 1 })),
+      0,
+    );
     expect(ring.ohmTo(2)).toBeCloseTo(1, 12);
     expect(ring.ohmTo(1)).toBeCloseTo(0.75, 12);
   });
@@ -47,7 +70,14 @@ describe('a net of conductors', () => {
   });
 
   it('joins what lies at 0 ohm, and knows what it does not reach', () => {
-    const net = new OhmNet([{ a: 0, b: 1, ohm: 0 }, { a: 1, b: 2, ohm: 4 }, { a: 8, b: 9, ohm: 1 }], 0);
+    const net = new OhmNet(
+      [
+        { a: 0, b: 1, ohm: 0 },
+        { a: 1, b: 2, ohm: 4 },
+        { a: 8, b: 9, ohm: 1 },
+      ],
+      0,
+    );
     expect(net.ohmTo(1)).toBe(0);
     expect(net.ohmTo(2)).toBeCloseTo(4, 12);
     expect(net.ohmTo(9)).toBeUndefined();
@@ -56,12 +86,17 @@ describe('a net of conductors', () => {
   });
 
   it('gives the resistances and drops of plain elimination, for any net', () => {
-    const branch = (size: number) => fc.record({ a: fc.nat(size - 1), b: fc.nat(size - 1), ohm: fc.double({ min: 0.01, max: 50, noNaN: true }) });
+    const branch = (size: number) =>
+      fc.record({ a: fc.nat(size - 1), b: fc.nat(size - 1), ohm: fc.double({ min: 0.01, max: 50, noNaN: true }) });
     const net = fc.integer({ min: 2, max: 12 }).chain((size) =>
       fc.record({
         size: fc.constant(size),
         // A tree first, so that everything is joined; then what closes rings.
-        tree: fc.tuple(...Array.from({ length: size - 1 }, (_, i) => fc.record({ a: fc.nat(i), b: fc.constant(i + 1), ohm: fc.double({ min: 0.01, max: 50, noNaN: true }) }))),
+        tree: fc.tuple(
+          ...Array.from({ length: size - 1 }, (_, i) =>
+            fc.record({ a: fc.nat(i), b: fc.constant(i + 1), ohm: fc.double({ min: 0.01, max: 50, noNaN: true }) }),
+          ),
+        ),
         more: fc.array(branch(size), { maxLength: 10 }),
         amps: fc.array(fc.double({ min: 0, max: 30, noNaN: true }), { minLength: size, maxLength: size }),
       }),
