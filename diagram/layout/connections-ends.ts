@@ -5,17 +5,14 @@ import { BAR_AXIS, BAR_HEIGHT, barTerminal, type BarKind } from '../symbols/bar'
 import { turnedSize } from '../symbols/turn';
 import { MODULE, type Side } from '../symbols/types';
 import type { Body } from './ends';
-import { BODY, textWidth } from './lettering';
 import { m } from './overview-metrics';
+import { CABLE_GAP, CORE_PITCH, wordsWidth } from './connections-cables';
 import type { Core, Page, PageCable } from './connections-page';
 import { FOOT, FOOT_CORE, TOP, isLongBar, sizeOf } from './connections-place';
 import type { SceneTerminal } from './scene';
 
 /** Where cores end on a page: at terminals, and at the stubs of cables that come from or go to another place. */
 
-const CORE_PITCH = m(5);
-const CABLE_GAP = m(6);
-const NAME = 200;
 
 export interface Stub {
   core: Core;
@@ -63,8 +60,10 @@ function terminalsOn(part: Part, at: Position, used: readonly string[]): SceneTe
 }
 
 /** Lines up the cores of cables over (or under) the terminals they go to, in the order L, N, PE, and keeps cables apart. */
-export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>): PlacedCable[] {
-  const wish = (core: Core): number | undefined => bodies.get(core.here[0])?.terminals.find((t) => t.mark === core.here[1])?.x;
+export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>, positions: ReadonlyMap<string, Position>): PlacedCable[] {
+  const bars = new Map(page.parts.filter((part) => part.kind === 'line-bar').map((part) => [part.id, positions.get(part.id)!.x - m(3)]));
+  // over the terminal itself, or just left of the line bar it feeds
+  const wish = (core: Core): number | undefined => bodies.get(core.here[0])?.terminals.find((t) => t.mark === core.here[1])?.x ?? bars.get(core.here[0]);
   const lowest = Math.max(TOP.first, ...[...bodies.values()].map((body) => body.y + body.height));
   const rowOf = (atFoot: boolean): PlacedCable[] => {
     const list = page.cables.filter((cable) => cable.atFoot === atFoot);
@@ -81,7 +80,7 @@ export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>): Plac
     return list.map((cable): PlacedCable => {
       const pitch = atFoot ? FOOT_CORE : CORE_PITCH;
       const stubs: Stub[] = [];
-      const words = Math.max(...cable.lines.map((line, i) => textWidth(line, i === 0 ? BODY : NAME)));
+      const words = wordsWidth(cable);
       const order = { L: 0, N: 1, E: 2 };
       const cores = [...cable.cores].sort((a, b) => order[a.core] - order[b.core] || (wish(a) ?? 0) - (wish(b) ?? 0));
       // neutral and earth of a way pass beside its device, not through it

@@ -10,6 +10,7 @@ import { feedsInverter, walk, type TreeNode } from './overview-tree';
 import type { Entry } from './overview-rooms';
 import type { Hanging } from './overview-ways';
 import type { Page } from './connections-page';
+import { CABLE_GAP, CORE_PITCH, wordsWidth } from './connections-cables';
 
 /** Places the parts of one page of the connections face: boards by their bars, rooms by their ways, the loads at the foot. */
 
@@ -168,7 +169,7 @@ class PagePlanner {
       for (const node of chains.get(from)!) cy = this.put(node.part, x, cy).bottom + m(4);
       (neutralOf.get(from) ?? []).forEach((part, i) => this.put(part, start, neutralRow + m(6) * i));
       if (this.here(from)) this.put(from.part, start, lineRow);
-      let slot = start + m(2);
+      let slot = start + m(4);
       for (const item of [...items].sort((a, b) => a.order - b.order)) {
         const { right: end } = this.put(item.head!.part, slot, ways);
         slot = end + m(1) + FOOT_CORE + FOOT_GAP;
@@ -213,7 +214,8 @@ class PagePlanner {
         y = at.bottom + m(5);
         right = Math.max(right, at.right);
       }
-      const level = this.positions.get(root.part.id)?.y ?? TOP.first;
+      // the fuse's lower terminal on the level of the inverter's positive one
+      const level = (this.positions.get(root.part.id)?.y ?? TOP.first) - m(2);
       let bx = right + m(6);
       for (const node of battery) bx = this.put(node.part, bx, level).right + m(6);
       this.x = Math.max(bx, right) + m(6);
@@ -274,6 +276,10 @@ class PagePlanner {
       x += width + (column.some((node) => node.part.kind === 'socket') ? m(5) : COLUMN_GAP);
     }
     for (const part of joints) x = this.put(part, x, TOP.first).right + m(4);
+    // the cables that go on to other rooms leave here
+    const own = new Set([...columns.flat().map((node) => node.part.id), ...joints.map((part) => part.id)]);
+    for (const cable of this.page.cables)
+      if (cable.outgoing && !cable.atFoot && cable.cores.some((core) => own.has(core.here[0]))) x += Math.max(CORE_PITCH * cable.cores.length + m(2), Math.ceil(wordsWidth(cable) / MODULE) * MODULE) + CABLE_GAP;
     this.x = x + m(8);
   }
 

@@ -53,7 +53,7 @@ export function connectionsScene(doc: Installation, place?: string): Scene {
   const marks = usedMarks(doc);
   const positions = positionsOf(doc, page, planPage(doc, plan, page));
   const fixed = fixedBodies(page, positions, marks);
-  const cables = placeCables(page, fixed);
+  const cables = placeCables(page, fixed, positions);
   const bodies = barBodies(page, positions, fixed, cables, marks);
   const feeds = traceFeeds(doc);
   const frames = connectionFrames(doc, page, bodies, cables);
@@ -131,8 +131,20 @@ function routeCores(page: Page, bodies: ReadonlyMap<string, Body>, cables: reado
     return { id: wire.id, strand: wire.id, family: wire.id, net: wire.id, from, to, backup: feeds.wires.get(wire.id) === 'backup' };
   });
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height, ...(isLongBar(parts.get(id)!.kind) && { crossable: true }) }));
-  const { points } = routeAll(requests, obstacles, [], { spread: true });
+  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], [], { spread: true });
   const paths = requests.map(({ id }) => ({ id, net: id, points: points.get(id)! }));
   return { points, hops: findHops(paths) };
 }
 
+
+/** Nothing is led through the names of the cables: above the cores at the head, below those at the foot. */
+function edgesOfPage(requests: readonly RouteRequest[], cables: readonly PlacedCable[]): Obstacle[] {
+  const xs = requests.flatMap(({ from, to }) => [from.x, to.x]);
+  const [left, right] = [Math.min(...xs) - m(40), Math.max(...xs) + m(40)];
+  const head = cables.find(({ cable }) => !cable.atFoot)?.stubs[0];
+  const foot = cables.find(({ cable }) => cable.atFoot)?.stubs[0];
+  return [
+    ...(head ? [{ id: 'head', x: left, y: head.y - m(20), width: right - left, height: m(20) - 1 }] : []),
+    ...(foot ? [{ id: 'foot', x: left, y: foot.y + 1, width: right - left, height: m(20) }] : []),
+  ];
+}
