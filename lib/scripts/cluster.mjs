@@ -100,6 +100,10 @@ async function initialise(bin, folder, passwords, durable) {
 const LASTING = { fsync: 'on', synchronous_commit: 'on', full_page_writes: 'on' };
 const THROWAWAY = { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'off' };
 
+/** The address of a database in a cluster of ours, for one of its two roles. */
+export const clusterUrl = ({ port, passwords }, database, role = 'app') =>
+  `postgres://${role === 'owner' ? OWNER : APP}:${passwords[role]}@127.0.0.1:${port}/${database}`;
+
 /**
  * Starts the cluster in `folder`, making it first where there is none.
  * @param {{ folder: string, port: number, passwords: { owner: string, app: string }, durable?: boolean }} wanted
@@ -158,8 +162,7 @@ export async function startCluster({ folder: asked, port, passwords, durable = t
     );
   }
 
-  const url = (database, role = 'app') =>
-    `postgres://${role === 'owner' ? OWNER : APP}:${passwords[role]}@127.0.0.1:${port}/${database}`;
+  const url = (database, role = 'app') => clusterUrl({ port, passwords }, database, role);
   const psql = async (database, sql) => {
     const where = ['-h', '127.0.0.1', '-p', String(port), '-U', OWNER, '-d', database];
     const { status, output } = await run(

@@ -20,8 +20,11 @@ function settings() {
   if (!Number.isInteger(port) || port < 1 || port > 65535)
     throw new Stop(`PORT=${process.env.PORT} is not a port. Give a number like PORT=3100.`);
   const host = process.env.HOST ?? '127.0.0.1';
-  const address = process.env.NEXTAUTH_URL ?? `http://${host === '0.0.0.0' ? 'localhost' : host}:${port}`;
-  return { port, host, address, given: process.env.DATABASE_URL };
+  const address = process.env.NEXTAUTH_URL ?? `http://${host}:${port}`;
+  const own = ['127.0.0.1', 'localhost'].includes(host);
+  if (!own && !process.env.NEXTAUTH_URL)
+    throw new Stop(`Say how others reach it: HOST=${host} NEXTAUTH_URL=http://name-of-this-machine:${port} npm start`);
+  return { port, host, own, address, given: process.env.DATABASE_URL };
 }
 
 /** The database: the person's own, or a cluster under .data that is made the first time. */
@@ -45,7 +48,7 @@ export async function start({ dev }) {
     for (const step of undo.reverse()) await step();
   };
   try {
-    const { port, host, address, given } = settings();
+    const { port, host, own, address, given } = settings();
     if (!(await isFree(port, host)))
       throw new Stop(
         `Port ${port} is taken, by another program or an Ohmstead that runs already. Stop it, or take another: PORT=${port + 1} npm start`,
@@ -69,12 +72,12 @@ export async function start({ dev }) {
       NEXTAUTH_SECRET: process.env.NEXTAUTH_SECRET ?? secrets.auth,
       NEXTAUTH_URL: address,
     };
-    const demo = await unlessSignalled(seedDemo({ env, wanted: !given && host === '127.0.0.1' }));
+    const demo = await unlessSignalled(seedDemo({ env, wanted: !given && own }));
     if (!dev) await unlessSignalled(buildIfChanged('.next'));
     child = serve({ dev, host, port, env });
     undo.push(child.stop);
     await unlessSignalled(child.ready(address));
-    console.log(welcome({ address, demo, given, seconds: (Date.now() - began) / 1000 }));
+    console.log(welcome({ address, demo, own, seconds: (Date.now() - began) / 1000 }));
     const ended = await Promise.race([child.ended, signalled]);
     await shutDown();
     if (typeof ended === 'number')
@@ -89,13 +92,18 @@ export async function start({ dev }) {
   }
 }
 
-function welcome({ address, demo, given, seconds }) {
+function welcome({ address, demo, own, seconds }) {
   const lines = ['', `Ohmstead is ready at ${address}  (${seconds.toFixed(1)} s)`, ''];
   if (demo) {
     lines.push(`  Demo team ${demo.team}. Password of all four: ${demo.password}`);
     for (const { roles, email } of demo.people) lines.push(`    ${roles.join(', ').padEnd(12)} ${email}`);
+    if (!own)
+      lines.push(
+        '',
+        '  Others can reach this and the password above is no secret: switch these people off on the sheet People.',
+      );
     lines.push('');
-  } else if (given) lines.push('  The first team: npm run team -- "Name of the firm" "Your name" you@example.org', '');
+  } else lines.push('  A first team is made with: npm run team -- "Name of the firm" "Your name" you@example.org', '');
   lines.push('  Stop with Ctrl-C.', '');
   return lines.join('\n');
 }

@@ -42,7 +42,7 @@ const parts = {
     const report = path.join(REPORTS, 'vitest.json');
     const { status } = await node([
       ...['node_modules/vitest/vitest.mjs', 'run', '--config', 'tests/vitest.config.mts'],
-      ...['--reporter=dot', '--reporter=json', `--outputFile.json=${report}`],
+      ...['--reporter=default', '--reporter=json', `--outputFile.json=${report}`],
     ]);
     const { numPassedTests, numFailedTests, testResults } = await readReport('vitest.json');
     // A file that cannot even be loaded has no test that could fail.
