@@ -10,6 +10,8 @@ import { SupplyFields } from './supply-fields';
 import type { JobFormState } from './use-job-form';
 import { VersionConflict } from './version-conflict';
 
+const FORM = 'job';
+
 function Group({ title, children }: { title: string; children: ReactNode }) {
   return (
     <fieldset className="border-t-2 border-ink pt-4">
@@ -20,7 +22,7 @@ function Group({ title, children }: { title: string; children: ReactNode }) {
 }
 
 /** Client, place, practice, supply, backup: what a job begins with and what may be put right later. */
-export function JobForm({ form, isNew, apprentices }: { form: JobFormState; isNew: boolean; apprentices: readonly PersonRow[] }) {
+export function JobForm({ form, apprentices }: { form: JobFormState; apprentices: readonly PersonRow[] }) {
   const { values, errors, set } = form;
   const element = useRef<HTMLFormElement>(null);
   const tried = useRef(false);
@@ -41,6 +43,7 @@ export function JobForm({ form, isNew, apprentices }: { form: JobFormState; isNe
   return (
     <form
       ref={element}
+      id={FORM}
       noValidate
       className="flex max-w-[760px] flex-col gap-6"
       onSubmit={(event) => {
@@ -101,19 +104,26 @@ export function JobForm({ form, isNew, apprentices }: { form: JobFormState; isNe
           </div>
         </Group>
       )}
-      {form.theirs ? (
-        <VersionConflict mine={values} theirs={form.theirs} onMine={form.keepMine} onTheirs={form.takeTheirs} />
-      ) : (
-        form.refusal && <RefusalLine refusal={form.refusal} />
-      )}
-      <div className="flex items-center gap-4">
-        <Button type="submit" solid size="large" disabled={form.busy}>
-          {form.busy ? 'Saving' : isNew ? 'Begin the job' : 'Save'}
-        </Button>
-        <ButtonLink href="/jobs" size="large">
-          Leave
-        </ButtonLink>
-      </div>
+      {form.theirs && <VersionConflict mine={values} theirs={form.theirs} onMine={form.keepMine} onTheirs={form.takeTheirs} />}
     </form>
+  );
+}
+
+/** The one action of the form, in the foot of the sheet where it is always in sight. */
+export function JobFormActions({ form, isNew }: { form: JobFormState; isNew: boolean }) {
+  return (
+    <div className="flex flex-wrap items-center gap-x-4 gap-y-2">
+      <Button type="submit" form={FORM} solid size="large" disabled={form.busy}>
+        {form.busy ? 'Saving' : isNew ? 'Begin the job' : 'Save'}
+      </Button>
+      <ButtonLink href="/jobs" size="large">
+        Leave
+      </ButtonLink>
+      {form.refusal && !form.theirs && (
+        <div className="min-w-0 flex-1 basis-64">
+          <RefusalLine refusal={form.refusal} />
+        </div>
+      )}
+    </div>
   );
 }

@@ -6,7 +6,7 @@ import type { Supply } from '@/diagram/document/schema';
 import type { JobView } from '@/lib/shared/jobs';
 import type { PersonRole, PersonRow } from '@/lib/shared/people';
 import { ArchiveJob } from './archive-job';
-import { JobForm } from './job-form';
+import { JobForm, JobFormActions } from './job-form';
 import { useJobForm } from './use-job-form';
 
 interface JobSheetProps {
@@ -47,6 +47,7 @@ export function JobSheet({ job, apprentices, person, team, today }: JobSheetProp
         state: job ? (job.archived ? 'archived' : job.state) : 'new',
       }}
       practice={{ id: values.practice, supply }}
+      foot={<JobFormActions form={form} isNew={job === null} />}
       marginLabel="About this job"
       margin={
         <div className="flex flex-col gap-8">
@@ -67,7 +68,7 @@ export function JobSheet({ job, apprentices, person, team, today }: JobSheetProp
     >
       <div className="px-4 py-4 lap:px-6">
         <h1 className="mb-4 text-title font-bold">{job ? `Job ${job.number}` : 'New job'}</h1>
-        <JobForm form={form} isNew={job === null} apprentices={apprentices} />
+        <JobForm form={form} apprentices={apprentices} />
       </div>
     </SheetFrame>
   );

@@ -1,3 +1,6 @@
+'use client';
+
+import { useEffect, useRef } from 'react';
 import { Button } from '@/components/ui/button';
 import type { JobView } from '@/lib/shared/jobs';
 import { valuesOf, type JobFormField, type JobFormValues } from './form-values';
@@ -33,10 +36,12 @@ interface VersionConflictProps {
 
 /** Two people edited one job: both versions side by side, nothing written over in silence. */
 export function VersionConflict({ mine, theirs, onMine, onTheirs }: VersionConflictProps) {
+  const box = useRef<HTMLElement>(null);
+  useEffect(() => box.current?.scrollIntoView?.({ block: 'nearest' }), []);
   const saved = valuesOf(theirs);
   const differing = (Object.keys(names) as JobFormField[]).filter((field) => saved[field] !== mine[field]);
   return (
-    <section role="alert" className="border-l-4 border-red bg-row py-3 pr-3 pl-4">
+    <section ref={box} role="alert" className="border-l-4 border-red bg-row py-3 pr-3 pl-4">
       <h2 className="text-head font-bold text-red">Somebody saved this job while you typed</h2>
       {differing.length === 0 ? (
         <p className="mt-1">They typed the same as you.</p>

@@ -28,24 +28,24 @@ export function PersonRow({ person, state, mayManage, isMe, today }: PersonRowPr
   return (
     <>
       <tr role="row" className={`max-[700px]:grid max-[700px]:grid-cols-[1fr_auto] max-[700px]:items-center max-[700px]:py-1 max-[700px]:[&>*]:py-1 max-[700px]:border-b max-[700px]:border-hair max-[700px]:[&>*]:border-b-0 ${open ? 'bg-row font-bold' : ''}`}>
-        <th role="rowheader" scope="row" className={`${cell} text-left ${open ? 'font-bold' : 'font-normal'}`}>
+        <th role="rowheader" scope="row" className={`${cell} text-left max-[700px]:col-start-1 max-[700px]:row-start-1 ${open ? 'font-bold' : 'font-normal'}`}>
           {person.name}
           {isMe && <span className="font-normal text-grey"> (you)</span>}
         </th>
-        <td role="cell" className={`${cell} break-all max-[700px]:row-start-2`}>
+        <td role="cell" className={`${cell} break-all max-[700px]:col-start-1 max-[700px]:row-start-2`}>
           {person.email}
         </td>
-        <td role="cell" className={`${cell} max-[700px]:row-start-3`}>
+        <td role="cell" className={`${cell} max-[700px]:col-span-2 max-[700px]:row-start-3`}>
           {person.roles.join(', ')}
         </td>
-        <td role="cell" className={`${cell} max-[700px]:row-start-2 max-[700px]:text-right`}>
+        <td role="cell" className={`${cell} max-[700px]:col-start-2 max-[700px]:row-start-2 max-[700px]:text-right`}>
           <Stamp shape={status.shape}>{status.word}</Stamp>
         </td>
         <td role="cell" className={`${cell} whitespace-nowrap max-[700px]:hidden`}>
           {person.lastSeen ? shortDate(person.lastSeen, today) : 'never'}
         </td>
         {mayManage && (
-          <td role="cell" className={`${cell} text-right max-[700px]:row-span-1 max-[700px]:row-start-1`}>
+          <td role="cell" className={`${cell} text-right max-[700px]:col-start-2 max-[700px]:row-start-1`}>
             <Button aria-expanded={open} aria-label={`Change ${person.name}`} onClick={() => setOpen(!open)}>
               Change
             </Button>

@@ -14,7 +14,6 @@ import type { End, Installation } from '@/diagram/document/schema';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
 import { firstPart, handEnd, nextPart, type Direction } from './navigate';
-import { middle } from './canvas/pick';
 import type { DrawingStore } from './store';
 import { NOTHING } from './store';
 import { REST, type View } from './view';
@@ -92,8 +91,6 @@ export class Hands {
   /** Takes a part in hand, at a terminal of it. */
   take(id: string, end: End | null = handEnd(this.doc, this.walk, id)): void {
     this.state.select({ parts: [id], wires: [], terminal: end });
-    const part = this.scene().parts.find((candidate) => candidate.id === id);
-    if (part) this.view.getState().camera?.show(middle(part));
   }
 
   letGo(): void {

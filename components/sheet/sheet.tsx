@@ -106,12 +106,10 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
   const takeNote = useCallback(
     (note: MarkedNote) => {
       viewStore.getState().set({ finding: note.key });
-      const part = scene.parts.find((candidate) => candidate.id === note.parts[0]);
       store.getState().select({ parts: note.parts.slice(0, 1), wires: note.finding.wires, terminal: null });
-      if (part) viewStore.getState().camera?.show(middle(part));
       store.getState().say(`${note.letter}: ${note.finding.heading}`);
     },
-    [viewStore, store, scene],
+    [viewStore, store],
   );
 
   const tidy = useTidy(hands, face);
@@ -148,6 +146,14 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
     }),
     [hands, tidy, store, face, router, view.jobId, notes, viewStore, takeNote, scene, pages, place],
   );
+
+  const held = useSheet(store, (state) => (state.selection.parts.length === 1 ? state.selection.parts[0] : undefined));
+  const camera = useView((state) => state.camera);
+  const heldPart = scene.parts.find((part) => part.id === held);
+  useEffect(() => {
+    // What is taken in hand, by whatever way, is in sight.
+    if (heldPart) camera?.show(middle(heldPart));
+  }, [camera, heldPart]);
 
   useEffect(() => {
     // Phones open for reading, so that a thumb moves nothing.

@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useMemo, useState, type KeyboardEvent } from 'react';
+import { useEffect, useMemo, useState, type KeyboardEvent } from 'react';
 import { SheetFrame } from '@/components/frame/sheet-frame';
 import { jobTabs } from '@/components/frame/tabs';
 import type { KeyHelp } from '@/components/frame/types';
@@ -46,6 +46,14 @@ export function SurveySheet({ view, me, hoursWanted }: SurveySheetProps) {
   const saved = useSheet(drawing.store, (state) => saveWords(state.saveState));
   const [pasting, setPasting] = useState(false);
   const boards = useMemo(() => new Map(document.parts.flatMap((part) => (part.place && part.board ? [[part.place, part.board]] : []))), [document.parts]);
+
+  const begins = survey.mayEdit && survey.rooms.length === 0;
+  const { toBlank } = survey;
+  useEffect(() => {
+    if (begins) toBlank('name');
+    // Once, as the sheet opens: an empty survey has its caret in Name.
+    // eslint-disable-next-line react-hooks/exhaustive-deps
+  }, []);
 
   const draft = () => {
     // A cell left by this very key is in the store already, not yet in this render.

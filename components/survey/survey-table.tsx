@@ -104,7 +104,7 @@ export function SurveyTable({ survey, boards }: { survey: Survey; boards: Readon
           <td className={`${sum} bg-row`}>{count(totals.keepOutletWatts)}</td>
           <td className={`${sum} bg-row text-right`}>{totals.backup ? totals.backup.hoursWanted : '-'}</td>
           <td className={`${sum} border-l-2 border-l-ink text-right`}>
-            {Math.round(totals.watts)}  {totals.amps.toFixed(1)}
+            {totals.watts > 0 ? `${Math.round(totals.watts)}  ${totals.amps.toFixed(1)}` : '-'}
           </td>
           <td className={`${sum} text-right`}>{totals.backup ? `${Math.round(totals.backup.watts)}  ${Math.round(totals.backup.va)}` : '-'}</td>
           <td className={sum}>{count(totals.ways)}</td>

@@ -17,7 +17,7 @@ export const GhostLayer = memo(function GhostLayer({ scene, ghost }: { scene: Sc
   }, [scene, ghost]);
   return (
     <Layer scene={ghost} level={3} name="ghost">
-      <g className="sheet-ghost">
+      <g>
         {runs.map((run) => (
           <path
             key={run.id}
@@ -30,7 +30,7 @@ export const GhostLayer = memo(function GhostLayer({ scene, ghost }: { scene: Sc
         ))}
         {parts.map((part) => (
           <g key={part.id} transform={`translate(${part.x} ${part.y})`}>
-            <PartPicture part={part} />
+            <PartPicture part={part} ink="var(--ghost)" />
           </g>
         ))}
         {parts.map((part) => (

@@ -7,11 +7,14 @@ import { endPoint } from './pick';
 
 const REACH = 200;
 
+/** A bar is thinner than the box it stands in. */
+const inset = (part: ScenePart): number => (part.kind.endsWith('-bar') ? part.height / 4 : 0);
+
 const around = (part: ScenePart) => ({
   x: part.x - REACH,
-  y: part.y - REACH,
+  y: part.y + inset(part) - REACH,
   width: part.width + 2 * REACH,
-  height: part.height + 2 * REACH,
+  height: part.height - 2 * inset(part) + 2 * REACH,
 });
 
 /** The marker behind what is in hand. */

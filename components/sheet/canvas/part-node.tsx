@@ -28,10 +28,10 @@ function Line({ stroke }: { stroke: Stroke }) {
 }
 
 /** The picture of a part: its own strokes in one svg, in 1/100 mm. */
-export function PartPicture({ part }: { part: ScenePart }) {
+export function PartPicture({ part, ink = inkOf(part) }: { part: ScenePart; ink?: string }) {
   const symbol = symbolById(part.symbol, part.turn % 2 === 1 ? part.height : part.width);
   return (
-    <g transform={turnTransform(0, 0, symbol, part.turn)} style={{ color: inkOf(part) }}>
+    <g transform={turnTransform(0, 0, symbol, part.turn)} style={{ color: ink }}>
       {symbol.strokes.map((stroke, i) => (
         <Line key={i} stroke={stroke} />
       ))}

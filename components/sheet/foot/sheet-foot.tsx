@@ -69,7 +69,7 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
           <FootWord onClick={() => view.getState().setMode({ kind: 'commands' })}>commands</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'find' })}>find</FootWord>
           {mayEdit && <FootWord onClick={context.tidy}>tidy</FootWord>}
-          <FootWord onClick={() => view.getState().setMode({ kind: 'export' })}>print, export</FootWord>
+          <FootWord onClick={() => view.getState().setMode({ kind: 'export' })}>print</FootWord>
         </div>
       </div>
       {mayEdit && selection.terminal && mode.kind === 'rest' && (

@@ -43,7 +43,7 @@ export function Strip({ scene, notes }: { scene: Scene; notes: readonly MarkedNo
         ref={box}
         viewBox={`0 0 ${whole.width} ${HEIGHT}`}
         preserveAspectRatio="none"
-        className="block h-9 w-full cursor-grab touch-none lap:w-[240px]"
+        className="block h-9 w-full cursor-grab touch-none lap:w-[208px]"
         onPointerDown={(event) => {
           event.currentTarget.setPointerCapture(event.pointerId);
           go(event);
