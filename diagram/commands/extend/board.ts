@@ -1,6 +1,6 @@
 import type { Role } from '../../document/schema';
 import { sizeBackup } from '../../survey/drafting/backup-size';
-import { drawBackupSource, planFeed } from '../../survey/drafting/backup-source';
+import { drawBackupSource } from '../../survey/drafting/backup-source';
 import { breakingCapacity } from '../../survey/drafting/draft-home';
 import { canTapBeside, findGroups, tapBeside } from '../../survey/drafting/groups';
 import { BACKUP_BOARD, BOARD } from '../../survey/drafting/house';
@@ -98,13 +98,10 @@ export const backupSource: Recipe = function* (at) {
     const kept = (at.doc.survey ?? []).filter((row) => row.keepLamps + row.keepFans + row.keepOutletWatts > 0);
     const size = sizeBackup(kept.length > 0 ? kept : [SMALL], at.hoursWanted || 3, at.practice, DRAFT_AMBIENT);
     if (!group || !size || !s.sketch.find(HOUSE.earthBar)) return null;
-    const behindRcd = at.doc.supply.system === 'TT';
-    const feed = planFeed(s.sketch, size, behindRcd) ?? planFeed(s.sketch, size, true)!;
     const from = tapBeside(s.sketch, group)!;
     const intake = group.bars.place;
     drawBackupSource(s.sketch, {
       size,
-      feed,
       from,
       intake,
       hours: at.hoursWanted || 3,

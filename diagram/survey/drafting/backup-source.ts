@@ -1,56 +1,14 @@
 import { sizeCable, type CableSize } from '../../calculations/size-cable';
-import { LENGTH, POWER_FACTOR, ratingFor } from './assumptions';
+import { LENGTH, ratingFor } from './assumptions';
 import type { BackupSize } from './backup-size';
-import { BACKUP_BOARD, BOARD, drawBars, drawGroup, type Pair } from './house';
+import { BACKUP_BOARD, drawBars, drawGroup, type Pair } from './house';
 import type { WayBars } from './draw-way';
+import { drawFeed } from './feed';
 import { HOUSE, groupIds } from './ids';
 import { BEFORE_BACKUP } from './size-run';
 import type { Sketch } from './sketch';
 
 type CoreSize = Pick<CableSize, 'csaMm2' | 'cpcMm2'>;
-
-/** The two-pole breaker of the inverter's feed, and the run to it. */
-export interface FeedPlan {
-  ratingA: number;
-  curve: 'B' | 'C';
-  size: CoreSize;
-}
-
-/**
- * Feed of the inverter: what passes through to the loads, and the charger. On TN the breaker itself must clear a fault in
- * the run within the time of a distribution circuit; type C for the charger's inrush where the loop allows it, else type B.
- * @param behindRcd true where a main rcd stands before it
- * @returns null where neither clears, so that a main rcd is needed
- */
-export function planFeed(sketch: Sketch, size: BackupSize, behindRcd: boolean): FeedPlan | null {
-  const { practice, supply, ambient } = sketch;
-  const { draft } = practice;
-  const amps = (size.load.va + size.chargeWatts / POWER_FACTOR.heater) / supply.voltage;
-  const ratingA = ratingFor(Math.max(amps, size.va / supply.voltage), practice.breakerRatingsA.value, 10);
-  for (const curve of ['C', 'B'] as const) {
-    const found = sizeCable({
-      practice,
-      device: { kind: 'mcb', ratingA, curve },
-      ibA: amps,
-      method: draft.method,
-      material: draft.material,
-      insulation: draft.insulation,
-      ambientC: ambient,
-      grouped: 1,
-      lengthM: LENGTH.boardToInverter,
-      voltage: supply.voltage,
-      dropLimitPercent: BEFORE_BACKUP.feed,
-      leastMm2: 2.5,
-      ...(!behindRcd &&
-        supply.ze !== undefined && {
-          zsBeforeOhm: supply.ze,
-          disconnectS: practice.disconnection.distributionTN.value,
-        }),
-    });
-    if (found) return { ratingA, curve, size: found };
-  }
-  return null;
-}
 
 function drawBattery(sketch: Sketch, size: BackupSize, place: string): void {
   const { draft } = sketch.practice;
@@ -102,7 +60,6 @@ function drawInverter(sketch: Sketch, size: BackupSize, hours: number, place: st
 
 interface Need {
   size: BackupSize;
-  feed: FeedPlan;
   from: Pair;
   /** where the board stands */
   intake: string;
@@ -113,26 +70,16 @@ interface Need {
 }
 
 /**
- * The backup source: feed breaker at the board, inverter with its bond on battery, bank, dc fuse and leads; at its output a
+ * The backup source: its feed from the board, inverter with its bond on battery, bank, dc fuse and leads; at its output a
  * two-pole breaker and the rcds of the backed-up ways, so that the runs to the backup board are behind them; the bars there.
  */
 export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
-  const { size, feed, intake, icn } = need;
+  const { size, intake, icn } = need;
   const { practice, supply } = sketch;
   const { draft } = practice;
   const place = sketch.place({ id: HOUSE.backupPlace, name: 'Backup source', kind: 'passage', ventilated: true });
-  sketch.part({
-    id: HOUSE.feed,
-    kind: 'mcb',
-    label: 'Inverter feed',
-    place: intake,
-    board: BOARD,
-    poles: 2,
-    rating: feed.ratingA,
-    curve: feed.curve,
-    icn,
-  });
   drawInverter(sketch, size, need.hours, place);
+  drawFeed(sketch, size, need.from, intake, icn);
   drawBattery(sketch, size, place);
   const outputA = ratingFor(size.va / supply.voltage, practice.breakerRatingsA.value);
   sketch.part({
@@ -157,12 +104,6 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
       length: LENGTH.boardToInverter,
       cores: 3,
     });
-  const feedRun = run('inverter-feed.run', feed.size);
-  sketch.wire(need.from.line, [HOUSE.feed, '1'], 'line');
-  sketch.wire(need.from.neutral, [HOUSE.feed, '3'], 'neutral');
-  sketch.wire([HOUSE.feed, '2'], [HOUSE.inverter, 'in.L'], 'line', feedRun);
-  sketch.wire([HOUSE.feed, '4'], [HOUSE.inverter, 'in.N'], 'neutral', feedRun);
-  sketch.wire(sketch.nextOn(HOUSE.earthBar), [HOUSE.inverter, 'in.E'], 'earth', feedRun);
   sketch.wire([HOUSE.inverter, 'out.L'], [HOUSE.output, '1'], 'line');
   sketch.wire([HOUSE.inverter, 'out.N'], [HOUSE.output, '3'], 'neutral');
 

@@ -1,7 +1,7 @@
 import type { Installation, Supply } from '../../document/schema';
 import type { Practice } from '../../practices/types';
 import { soundRooms } from '../check';
-import { drawBackupSource, planFeed } from './backup-source';
+import { drawBackupSource } from './backup-source';
 import { drawWay, type WayBars } from './draw-way';
 import { BACKUP_BOARD, BOARD, drawGroup, drawOrigin, type GroupNeed } from './house';
 import { HOUSE } from './ids';
@@ -59,14 +59,11 @@ export function draftHome(
   const backup = intoGroups(backupWays(plan));
   if (mains.length === 0) mains.push([]);
 
-  const tt = supply.system === 'TT';
-  const feed = plan.backup && planFeed(sketch, plan.backup, tt);
-  const mainRcd = tt || (plan.backup !== null && feed === null);
   const taps = drawOrigin(sketch, {
     ratingA: plan.serviceA,
     place: intake,
     feeders: mains.length + (plan.backup ? 1 : 0),
-    mainSensitivityA: mainRcd ? mainSensitivityA(supply, practice.touchVolts.value) : null,
+    mainSensitivityA: supply.system === 'TT' ? mainSensitivityA(supply, practice.touchVolts.value) : null,
   });
   const boards = roomBoards(sketch, roomsWithSwitches(plan.ways));
   const bars = mains.map((_, i) =>
@@ -76,7 +73,6 @@ export function draftHome(
   if (!plan.backup) return;
   const source = {
     size: plan.backup,
-    feed: feed ?? planFeed(sketch, plan.backup, true)!,
     from: taps(),
     intake,
     hours: plan.hours,

@@ -5,7 +5,7 @@ import { drawnByPlace, drawnIn, type Drawn } from '../drawn';
 import { differenceOf, type Difference } from '../missing';
 import { LENGTH, OUTLET_WATTS, RCD_RATINGS, WAYS_PER_RCD } from './assumptions';
 import { hoursWanted, sizeBackup, type BackupSize } from './backup-size';
-import { drawBackupSource, planFeed } from './backup-source';
+import { drawBackupSource } from './backup-source';
 import { detach } from './detach';
 import { breakingCapacity } from './draft-home';
 import { drawOutlet, drawWay, outletPlace, type WayBars } from './draw-way';
@@ -145,12 +145,9 @@ function firstBackup(
   hours: number,
 ): Group[] {
   const from = tapBeside(sketch, beside)!;
-  const behindRcd = sketch.supply.system === 'TT' || sketch.find(HOUSE.mainRcd) !== undefined;
-  const feed = planFeed(sketch, size, behindRcd) ?? planFeed(sketch, size, true)!;
   const icn = breakingCapacity(sketch.supply, sketch.practice);
   const drawn = drawBackupSource(sketch, {
     size,
-    feed,
     from,
     intake,
     hours,

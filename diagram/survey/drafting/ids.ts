@@ -38,6 +38,7 @@ export const HOUSE = {
   earthBar: 'earth-bar',
   lineBar: 'main-line-bar',
   neutralBar: 'main-neutral-bar',
+  feedRcd: 'inverter-feed-rcd',
   feed: 'inverter-feed',
   inverter: 'inverter',
   battery: 'battery',

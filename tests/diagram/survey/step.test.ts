@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { applyPatch, isEmptyPatch, type Patch } from '@/diagram/document/patch';
 import type { Installation, SurveyRoom } from '@/diagram/document/schema';
+import { examine } from '@/diagram/rules/examine';
 import { draftDocument, draftPatch } from '@/diagram/survey/draft';
 import { stepsToDraw, surveySteps, takeIntoSurvey } from '@/diagram/survey/step';
 import { traceFeeds } from '@/diagram/terminals/feeds';
@@ -182,6 +183,19 @@ describe('drafting what changed', () => {
     expect(feedOf(next, 'study.lamp1')).toBe('mains');
     expect(next.notices!.length).toBeGreaterThanOrEqual(2);
     expect(draftPatch(next)).toEqual({});
+  });
+
+  it('guards the feed of an inverter whose breaker the loop of the supply would not open', () => {
+    // C and B of 40 A and more ask for 0.55 and 1.09 ohm or less (BS 7671 Table 41.3); the loop is 1.2 ohm before the run.
+    const options = { ...optionsOf('IEC', 'TN-S', 0), supply: { ...optionsOf('IEC', 'TN-S').supply, ze: 1.2 } };
+    const rows = [room('Study', { lamps: 4, lampWatts: 1000, keepLamps: 4, hours: 1 })];
+    const doc = draftDocument(rows, options);
+    expect(doc.parts.find(({ id }) => id === 'inverter-feed-rcd')).toMatchObject({ sensitivity: 0.3, delay: 'S' });
+    expect(draftDocument(rows, optionsOf('IEC', 'TT', 0)).parts.some(({ id }) => id === 'inverter-feed-rcd')).toBe(
+      false,
+    );
+    const serious = examine(doc).findings.filter(({ severity }) => severity !== 'advice');
+    expect(serious.map(({ rule }) => rule)).toEqual([]);
   });
 
   it('touches only the room that changed', () => {
