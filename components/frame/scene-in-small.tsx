@@ -28,6 +28,8 @@ function Run({ run }: { run: SceneRun }) {
 /** px that it has on the page, about */
 const WIDE = 560;
 const HIGH = 300;
+/** 1/100 mm left free round the drawing, so that no stroke is cut */
+const EDGE = 150;
 
 interface SceneInSmallProps {
   scene: Scene;
@@ -49,7 +51,7 @@ export function SceneInSmall({ scene, inHand, wrong, onPlace, from, className = 
   // Lettering keeps about its 11 px, whatever the size of the home.
   const size = 11.5 / Math.min(WIDE / scene.width, HIGH / height);
   return (
-    <svg viewBox={`0 ${top} ${scene.width} ${height}`} className={className} aria-hidden="true">
+    <svg viewBox={`${-EDGE} ${top - EDGE} ${scene.width + 2 * EDGE} ${height + 2 * EDGE}`} className={className} aria-hidden="true">
       {scene.frames
         .filter((frame) => frame.kind === 'switchboard')
         .map((frame) => (

@@ -15,7 +15,7 @@ interface FieldFrame {
 }
 
 const box =
-  'block w-full border-b border-ink bg-transparent px-2 py-1 text-[14px] leading-6 text-ink placeholder:text-grey focus:bg-paper aria-invalid:border-b-2 aria-invalid:border-red [&[readonly]]:border-transparent disabled:border-transparent pointer-coarse:min-h-11';
+  'block w-full border-b border-ink bg-transparent px-2 py-1 text-[14px] leading-6 text-ink placeholder:text-grey focus-visible:-outline-offset-2 aria-invalid:border-b-2 aria-invalid:border-red [&[readonly]]:border-transparent disabled:border-transparent pointer-coarse:min-h-11';
 
 function useFieldIds(hint: ReactNode, error: string | undefined) {
   const id = useId();
