@@ -27,7 +27,7 @@ export const DC_FUSES_A = [10, 16, 20, 25, 32, 40, 50, 63, 80, 100, 125, 160, 20
 /** The fuse stands above the greatest steady current by a quarter: common practice, no source. */
 const FUSE_MARGIN = 1.25;
 /** mm2 of battery leads on sale */
-const LEADS_MM2 = [4, 6, 10, 16, 25, 35, 50, 70, 95] as const;
+export const LEADS_MM2 = [4, 6, 10, 16, 25, 35, 50, 70, 95] as const;
 /** percent of the bank's volts, both leads: the rule `thin-battery-lead` */
 export const LEAD_DROP_PERCENT = 2;
 

@@ -39,7 +39,11 @@ const asBacked =
   });
 
 /** Works out each backup source, by designation: all that it feeds on at once. */
-export function workOutBackups(graph: Graph, { backups, evaluated }: Evaluation, drawn: readonly Drawn[]): BackupFigures[] {
+export function workOutBackups(
+  graph: Graph,
+  { backups, evaluated }: Evaluation,
+  drawn: readonly Drawn[],
+): BackupFigures[] {
   const { voltage } = graph.document.supply;
   return backups.map((inverter) => {
     const outages = evaluated

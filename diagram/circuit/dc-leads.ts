@@ -14,12 +14,19 @@ export interface DcString {
 
 /** Edges between two nodes over wires and devices; null where nothing joins them. */
 function between(graph: Graph, from: number, to: number): number[] | null {
-  const walk = reach(graph, [from], closedEdges(graph, ({ kind }) => kind !== 'wire' && kind !== 'device'));
+  const walk = reach(
+    graph,
+    [from],
+    closedEdges(graph, ({ kind }) => kind !== 'wire' && kind !== 'device'),
+  );
   return reaches(walk, to) ? pathTo(graph, walk, to) : null;
 }
 
 /** The strings of an inverter's bank with their leads, and batteries that stand in them the wrong way round. */
-export function dcStrings(graph: Graph, inverter: PartOf<'inverter'>): { strings: DcString[]; reversed: PartOf<'battery'>[] } {
+export function dcStrings(
+  graph: Graph,
+  inverter: PartOf<'inverter'>,
+): { strings: DcString[]; reversed: PartOf<'battery'>[] } {
   const { batteries, reversed } = batteryStrings(graph, inverter);
   const turned = new Set(reversed);
   const strings = batteries.flatMap((list): DcString[] => {

@@ -35,7 +35,9 @@ export interface Drawn {
 
 /** Sockets with a plug in them: what the plug feeds counts in the place of the load assumed at the socket. */
 function plugged(graph: Graph): Set<string> {
-  return new Set([...graph.parts.values()].flatMap((part) => (part.kind === 'plug' && part.in !== undefined ? [part.in] : [])));
+  return new Set(
+    [...graph.parts.values()].flatMap((part) => (part.kind === 'plug' && part.in !== undefined ? [part.in] : [])),
+  );
 }
 
 function load(part: Part, voltage: number, taken: Set<string>): Pick<Drawn, 'watts' | 'amps' | 'startAmps' | 'known'> {
@@ -98,10 +100,14 @@ export function listDrawn(graph: Graph, { evaluated, backups }: Evaluation): Dra
   const drawn: Drawn[] = [];
   for (const part of graph.parts.values()) {
     if (!isPoint(part)) continue;
-    const states = evaluated.map(({ condition, points }) => ({ condition: condition.name, state: points.get(part.id)! }));
+    const states = evaluated.map(({ condition, points }) => ({
+      condition: condition.name,
+      state: points.get(part.id)!,
+    }));
     const best = states.find(({ state }) => state.fed) ?? states.find(({ state }) => state.source !== null);
     const state = best?.state ?? states[0]!.state;
-    const { source, lineEdges, neutralEdges, lineDevices, neutralDevices, lineEnd, neutralEnd, overcurrent, rcd } = state;
+    const { source, lineEdges, neutralEdges, lineDevices, neutralDevices, lineEnd, neutralEnd, overcurrent, rcd } =
+      state;
     drawn.push({
       part,
       isPoint: true,

@@ -18,7 +18,8 @@ export function workOutEarthPaths(graph: Graph, { closed, reached, mainBar, eart
   if (root === undefined) return { r2: () => null, path: () => null };
   const branches: OhmBranch[] = starts.slice(1).map((node) => ({ a: root, b: node, ohm: 0 }));
   graph.edges.forEach(({ a, b }, number) => {
-    if (closed[number] !== 0 && reaches(reached, a) && reaches(reached, b)) branches.push({ a, b, ohm: ohmOf(graph, number) });
+    if (closed[number] !== 0 && reaches(reached, a) && reaches(reached, b))
+      branches.push({ a, b, ohm: ohmOf(graph, number) });
   });
   const net = new OhmNet(branches, root);
   const path = (node: number | undefined) => (reaches(reached, node) ? pathTo(graph, reached, node!) : null);

@@ -36,7 +36,10 @@ export class OhmNet {
     this.root = this.find(root);
     const net = new Map<number, Map<number, number>>([[this.root, new Map()]]);
     const join = (a: number, b: number, siemens: number) => {
-      for (const [x, y] of [[a, b], [b, a]] as const) {
+      for (const [x, y] of [
+        [a, b],
+        [b, a],
+      ] as const) {
         const around = net.get(x) ?? new Map<number, number>();
         net.set(x, around.set(y, (around.get(y) ?? 0) + siemens));
       }
@@ -81,7 +84,10 @@ export class OhmNet {
     return at;
   }
 
-  private eliminate(net: Map<number, Map<number, number>>, join: (a: number, b: number, siemens: number) => void): void {
+  private eliminate(
+    net: Map<number, Map<number, number>>,
+    join: (a: number, b: number, siemens: number) => void,
+  ): void {
     const small: number[] = [];
     const isSmall = (node: number) => node !== this.root && net.get(node)!.size <= 2;
     for (const node of net.keys()) if (isSmall(node)) small.push(node);
@@ -121,7 +127,11 @@ export class OhmNet {
     for (const { node, sum, neighbours, shares } of [...this.steps].reverse()) {
       if (neighbours.length === 0 || !joined(neighbours[0]!)) continue;
       const row = new Map<number, number>();
-      for (const i of neighbours) row.set(i, neighbours.reduce((total, j, k) => total + shares[k]! * entry(j, i), 0));
+      for (const i of neighbours)
+        row.set(
+          i,
+          neighbours.reduce((total, j, k) => total + shares[k]! * entry(j, i), 0),
+        );
       row.set(node, 1 / sum + neighbours.reduce((total, i, k) => total + shares[k]! * row.get(i)!, 0));
       this.inverse.set(node, row);
     }

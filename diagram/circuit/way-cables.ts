@@ -45,7 +45,9 @@ export function ringEdges(graph: Graph, section: Section): Set<number> {
     around.get(other)!.delete(edge);
     if (around.get(other)!.size === 1) ends.push(other);
   }
-  return around.get(section.downstream)?.size ? new Set([...around.values()].flatMap((edges) => [...edges])) : new Set();
+  return around.get(section.downstream)?.size
+    ? new Set([...around.values()].flatMap((edges) => [...edges]))
+    : new Set();
 }
 
 const ratingOf = (device: Part): number | undefined => ('rating' in device ? device.rating : undefined);
@@ -54,19 +56,26 @@ const ratingOf = (device: Part): number | undefined => ('rating' in device ? dev
  * The cables of a section with what each must carry. Where the practice has ring final circuits, a leg of one, and a spur
  * of it to a single point, may be rated below the device.
  */
-export function sectionCables(graph: Graph, practice: Practice, section: Section, drawn: readonly Drawn[]): SectionCable[] {
+export function sectionCables(
+  graph: Graph,
+  practice: Practice,
+  section: Section,
+  drawn: readonly Drawn[],
+): SectionCable[] {
   const rating = ratingOf(section.device);
   const ring = practice.ring?.value;
   const onRing = ring && rating !== undefined && rating <= ring.deviceA ? ringEdges(graph, section) : new Set<number>();
   const behind = new Map<number, number>();
-  if (onRing.size > 0) for (const { lineEdges } of drawn) for (const edge of lineEdges) behind.set(edge, (behind.get(edge) ?? 0) + 1);
+  if (onRing.size > 0)
+    for (const { lineEdges } of drawn) for (const edge of lineEdges) behind.set(edge, (behind.get(edge) ?? 0) + 1);
 
   const cables = new Map<string, SectionCable>();
   for (const number of section.edges) {
     const { wire } = graph.edges[number]!;
     const cable = wire?.cable === undefined ? undefined : graph.cables.get(wire.cable);
     if (!wire || !cable) continue;
-    const eased = ring && onRing.size > 0 && cable.csa >= ring.legCsaMm2 && (onRing.has(number) || (behind.get(number) ?? 0) <= 1);
+    const eased =
+      ring && onRing.size > 0 && cable.csa >= ring.legCsaMm2 && (onRing.has(number) || (behind.get(number) ?? 0) <= 1);
     const needA = rating === undefined ? null : eased ? Math.min(rating, ring.legIzAtLeastA) : rating;
     const entry = cables.get(cable.id);
     if (!entry) cables.set(cable.id, { cable, wires: [wire.id], capacity: capacityOf(graph, practice, cable), needA });

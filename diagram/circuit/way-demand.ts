@@ -25,7 +25,8 @@ function groupOf({ part }: Drawn): DemandGroup {
   return part.kind === 'inverter' ? 'charging' : demandGroup(part.label ?? '');
 }
 
-const add = (list: readonly Drawn[], of: (each: Drawn) => number): number => list.reduce((sum, each) => sum + of(each), 0);
+const add = (list: readonly Drawn[], of: (each: Drawn) => number): number =>
+  list.reduce((sum, each) => sum + of(each), 0);
 
 function byGroup(drawn: readonly Drawn[]): Map<DemandGroup, Drawn[]> {
   const groups = new Map<DemandGroup, Drawn[]>();
@@ -44,7 +45,11 @@ export function wayLoads(drawn: readonly Drawn[], practice: Practice): Map<strin
     for (const [group, same] of byGroup(list)) {
       const amps = add(same, (each) => each.amps);
       const allowed = practice.wayDiversity.includes(group)
-        ? allowedA(same.map((each) => each.amps), practice.diversity[group].value, { perItem: group === 'cooker' })
+        ? allowedA(
+            same.map((each) => each.amps),
+            practice.diversity[group].value,
+            { perItem: group === 'cooker' },
+          )
         : amps;
       demandA += allowed;
       demandWatts += amps > 0 ? (add(same, (each) => each.watts) * allowed) / amps : 0;

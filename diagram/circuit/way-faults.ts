@@ -53,7 +53,13 @@ export function timeLimit(practice: Practice, supply: Supply, device: Part, draw
 }
 
 /** Judges a loop of `zs` ohm behind the devices of `path`. */
-export function earthFault(graph: Graph, practice: Practice, path: Pick<Drawn, 'way' | 'lineDevices'>, zs: number, withinS: number): EarthFault {
+export function earthFault(
+  graph: Graph,
+  practice: Practice,
+  path: Pick<Drawn, 'way' | 'lineDevices'>,
+  zs: number,
+  withinS: number,
+): EarthFault {
   const { voltage, system } = graph.document.supply;
   const loop = Math.max(zs, STIFFEST_OHM);
   const faultA = (practice.cMin.value * voltage) / loop;
@@ -66,12 +72,18 @@ export function earthFault(graph: Graph, practice: Practice, path: Pick<Drawn, '
   const rcdS = Math.min(...rcds.map((rcd) => rcdBand(rcd, faultA).latestS), Infinity);
   const overcurrentS = device ? tripBand(device, faultA * HAIR).latestS : Infinity;
   const byDevice = device ? maximumLoopOhm({ device, voltage, withinS, cMin: practice.cMin.value }) : null;
-  const byRcd = rcds.length > 0 ? maximumElectrodeOhm(Math.min(...rcds.map(({ sensitivityA }) => sensitivityA)), practice.touchVolts.value) : null;
+  const byRcd =
+    rcds.length > 0
+      ? maximumElectrodeOhm(Math.min(...rcds.map(({ sensitivityA }) => sensitivityA)), practice.touchVolts.value)
+      : null;
   const clearedS = Math.min(overcurrentS, rcdS);
   const overcurrentHolds = byDevice !== null && zs <= byDevice * HAIR;
   // Heat is reckoned at the nominal voltage, as published examples do; the rcd ends what the breaker leaves on.
   const heatA = voltage / loop;
-  const energyA2s = Math.min(device ? letThroughA2s(device, heatA) : Infinity, Number.isFinite(rcdS) ? heatA ** 2 * rcdS : Infinity);
+  const energyA2s = Math.min(
+    device ? letThroughA2s(device, heatA) : Infinity,
+    Number.isFinite(rcdS) ? heatA ** 2 * rcdS : Infinity,
+  );
   return {
     zs,
     faultA,

@@ -89,13 +89,18 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
   const earthPaths = workOutEarthPaths(graph, earth);
   const behind = indexBehind(drawn);
   const waysBehind = (device: string) => [...(behind.get(device)?.ways ?? [])].sort(byCode);
-  const together = (ways: readonly string[]) => demandOf(ways.map((id) => loads.get(id)!), practice);
+  const together = (ways: readonly string[]) =>
+    demandOf(
+      ways.map((id) => loads.get(id)!),
+      practice,
+    );
 
   const external = externalOhm(supply);
   const zsOf = (each: Drawn): number | null => {
     const r1 = paths.fed.get(each.part.id)?.r1;
     const r2 = earthPaths.r2(graph.node(each.part.id, each.isPoint ? 'E' : 'in.E'));
-    if (external === undefined || r1 === undefined || r1 === null || r2 === null || each.source?.kind !== 'mains') return null;
+    if (external === undefined || r1 === undefined || r1 === null || r2 === null || each.source?.kind !== 'mains')
+      return null;
     return external + r1 + r2;
   };
 

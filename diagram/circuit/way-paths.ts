@@ -46,7 +46,12 @@ const isSelector = (graph: Graph, node: number): boolean => {
 };
 
 /** The paths of one pole, and the wires that close rings among them. */
-function branchesOf({ graph, apart }: FedInput, paths: readonly (readonly number[])[], outside: ReadonlySet<number>, temperatureC?: number): OhmBranch[] {
+function branchesOf(
+  { graph, apart }: FedInput,
+  paths: readonly (readonly number[])[],
+  outside: ReadonlySet<number>,
+  temperatureC?: number,
+): OhmBranch[] {
   const used = new Set(paths.flat());
   const nodes = new Set([...used].flatMap((number) => [graph.edges[number]!.a, graph.edges[number]!.b]));
   graph.edges.forEach(({ a, b, wire }, number) => {
@@ -98,23 +103,33 @@ function diversityOfEdges({ practice, drawn, loads }: FedInput): (edge: number) 
     for (const edges of [lineEdges, neutralEdges])
       for (const edge of edges) behind.set(edge, (behind.get(edge) ?? new Set()).add(way));
   }
-  const known = new Map<string, number>();
+  const ofWays = new Map<string, number>();
+  const ofEdge = new Map<number, number>();
+  const shareOf = (ways: ReadonlySet<string>): number => {
+    const ids = [...ways].sort(byCode);
+    const key = ids.join(' ');
+    const list = ids.map((id) => loads.get(id)!);
+    const sum = list.reduce((total, way) => total + way.demandA, 0);
+    const share = ofWays.get(key) ?? (sum > 0 ? demandOf(list, practice).demandA / sum : 1);
+    ofWays.set(key, share);
+    return share;
+  };
   return (edge) => {
     const ways = behind.get(edge);
     if (!ways || ways.size < 2) return 1;
-    const ids = [...ways].sort(byCode);
-    const key = ids.join(' ');
-    if (!known.has(key)) {
-      const list = ids.map((id) => loads.get(id)!);
-      const sum = list.reduce((total, way) => total + way.demandA, 0);
-      known.set(key, sum > 0 ? demandOf(list, practice).demandA / sum : 1);
-    }
-    return known.get(key)!;
+    const share = ofEdge.get(edge) ?? shareOf(ways);
+    ofEdge.set(edge, share);
+    return share;
   };
 }
 
 /** V lost in each edge of a path that begins at `from`; 0 where nothing is lost. */
-function lossesAlong(graph: Graph, from: number, edges: readonly number[], drops: (node: number) => number): [number, number][] {
+function lossesAlong(
+  graph: Graph,
+  from: number,
+  edges: readonly number[],
+  drops: (node: number) => number,
+): [number, number][] {
   let at = from;
   return edges.map((number) => {
     const { a, b } = graph.edges[number]!;
@@ -140,7 +155,14 @@ export function workOutPaths(input: FedInput): Paths {
     const here = drawn.filter((each) => each.source?.part.id === id);
     const lines = here.map(({ lineEdges }) => lineEdges);
     const line = new OhmNet(branchesOf(input, lines, outside), source.line);
-    const neutral = new OhmNet(branchesOf(input, here.map(({ neutralEdges }) => neutralEdges), outside), source.neutral);
+    const neutral = new OhmNet(
+      branchesOf(
+        input,
+        here.map(({ neutralEdges }) => neutralEdges),
+        outside,
+      ),
+      source.neutral,
+    );
     if (source.kind === 'mains') cold ??= new OhmNet(branchesOf(input, lines, outside, COLD_C), source.line);
 
     const designA = ({ way, amps }: Drawn) => {

@@ -14,8 +14,9 @@ export const backupOverload: Rule = {
     title: 'More stays on than the inverter gives',
     clauses: [recalled('IEC 60364-5-55', '551.2'), COMMON_PRACTICE],
     lesson:
-      'An inverter asked for more than its rating shuts down after some seconds and takes every lamp with it, in the very hour it was ' +
-      'bought for. Its VA count, not the watts alone: a fan takes more current than its watts say.',
+      'An inverter asked for more than its rating shuts down after some seconds and takes every lamp with it, in ' +
+      'the very hour it was bought for. Its VA count, not the watts alone: a fan takes more current than its ' +
+      'watts say.',
     remedy: 'Move loads back to the mains, or fit a larger inverter with its fuse and leads.',
   },
   *check(context) {

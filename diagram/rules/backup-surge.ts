@@ -14,15 +14,23 @@ export const backupSurge: Rule = {
     title: 'A start may stop the inverter',
     clauses: [COMMON_PRACTICE],
     lesson:
-      'A motor takes two to six times its running current for the moment it starts. If that, on top of what already runs, is more than ' +
-      'the inverter gives for a second, everything goes dark whenever the pump comes on.',
+      'A motor takes two to six times its running current for the moment it starts. If that, on top of what ' +
+      'already runs, is more than the inverter gives for a second, everything goes dark whenever the pump comes ' +
+      'on.',
     remedy: 'Keep motors with hard starts on the mains, or fit an inverter with a larger surge.',
   },
   *check(context) {
     for (const { inverter, load, known, conditions } of backupsOf(context)) {
       const overloaded = inverter.va !== undefined && exceeds(load.va, inverter.va);
       // What is too much already while it runs is the finding of `backup-overload`.
-      if (inverter.surge === undefined || !known || overloaded || load.starts === null || !exceeds(load.surgeVa, inverter.surge)) continue;
+      if (
+        inverter.surge === undefined ||
+        !known ||
+        overloaded ||
+        load.starts === null ||
+        !exceeds(load.surgeVa, inverter.surge)
+      )
+        continue;
       yield {
         heading: `${capital(say(context, inverter.id))} may stop when ${sayParts(context, [load.starts])} starts`,
         message: `With the rest running, that start takes ${voltAmps(load.surgeVa)}; ${say(context, inverter.id)} gives ${voltAmps(inverter.surge)} for a moment.`,

@@ -12,8 +12,8 @@ export const batteryPlace: Rule = {
     title: 'A flooded battery stands where people sleep or no air moves',
     clauses: [recalled('IEC 62485-2', 'clause 7'), recalled('IEC 60364-5-55', '551.8'), COMMON_PRACTICE],
     lesson:
-      'A flooded battery gives off hydrogen while it charges, and a mist of acid with it. In a cupboard the gas gathers until a contact ' +
-      'sparks; in a bedroom the mist is breathed all night.',
+      'A flooded battery gives off hydrogen while it charges, and a mist of acid with it. In a cupboard the gas ' +
+      'gathers until a contact sparks; in a bedroom the mist is breathed all night.',
     remedy: 'Stand it in a ventilated place where nobody sleeps, or fit a sealed battery.',
   },
   *check(context) {
@@ -35,7 +35,13 @@ export const batteryPlace: Rule = {
       if (battery.kind !== 'battery' || battery.place === undefined) continue;
       const place = context.graph.places.get(battery.place);
       if (battery.chemistry === undefined) yield lackOf(context, battery, 'the chemistry');
-      else if (battery.chemistry === 'flooded' && place && place.kind !== 'outdoor' && !place.sleeping && place.ventilated === undefined)
+      else if (
+        battery.chemistry === 'flooded' &&
+        place &&
+        place.kind !== 'outdoor' &&
+        !place.sleeping &&
+        place.ventilated === undefined
+      )
         yield { parts: [battery.id], what: `whether ${place.name} is ventilated` };
     }
   },

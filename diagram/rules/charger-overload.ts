@@ -19,8 +19,8 @@ export const chargerOverload: Rule = {
     title: 'The charger does not fit the bank',
     clauses: [COMMON_PRACTICE],
     lesson:
-      'Charged too hard a battery boils dry, bulges, or burns; charged too softly it is never full, its plates turn hard, and the second ' +
-      'outage of the evening finds it empty.',
+      'Charged too hard a battery boils dry, bulges, or burns; charged too softly it is never full, its plates ' +
+      'turn hard, and the second outage of the evening finds it empty.',
     remedy: "Set the charge current to about a tenth of the bank's Ah, or as its maker says.",
   },
   *check(context) {
@@ -37,7 +37,9 @@ export const chargerOverload: Rule = {
           `${amps(charge)} into a bank of ${bank.ah} Ah: ${amps(least * bank.ah)} to ${amps(most * bank.ah)} is what a ` +
           `${bank.chemistry === 'lfp' ? 'lithium' : bank.chemistry === 'vrla' ? 'sealed lead' : 'flooded lead'} bank takes, unless its maker says otherwise.`,
         parts: [inverter.id],
-        conditions: context.evaluated.filter(({ condition }) => condition.base === 'mains').map(({ condition }) => condition.name),
+        conditions: context.evaluated
+          .filter(({ condition }) => condition.base === 'mains')
+          .map(({ condition }) => condition.name),
         remedies: usual > 0 ? [changePart(`Set the charger to ${usual} A`, inverter, { charge: usual })] : [],
       };
     }

@@ -14,7 +14,8 @@ import { be, capital, say, sayParts } from './readings/words';
 const ratingOf = (context: Context, socket: PartOf<'socket'>): number | undefined =>
   socket.rating ?? practices[context.practice].sockets.find(({ id }) => id === socket.pattern)?.ratingA;
 
-const socketsOn = ({ drawn }: WayFigures): PartOf<'socket'>[] => drawn.flatMap(({ part }) => (part.kind === 'socket' ? [part] : []));
+const socketsOn = ({ drawn }: WayFigures): PartOf<'socket'>[] =>
+  drawn.flatMap(({ part }) => (part.kind === 'socket' ? [part] : []));
 
 /** The way's device as large as the outlets say, where the cables carry it. */
 function largerDevice({ device, cables }: WayFigures, rating: number, onSale: readonly number[]): Remedy[] {
@@ -33,8 +34,8 @@ export const heavySocketOnLightWay: Rule = {
     title: 'An outlet promises more than its way gives',
     clauses: [recalled('IS 732', 'power sub-circuits'), COMMON_PRACTICE],
     lesson:
-      'Whoever sees a 16 A outlet plugs a 16 A heater into it. On a way of lamps the breaker opens, the lamps go with it, and the next ' +
-      'thing to be exchanged is the breaker.',
+      'Whoever sees a 16 A outlet plugs a 16 A heater into it. On a way of lamps the breaker opens, the lamps go ' +
+      'with it, and the next thing to be exchanged is the breaker.',
     remedy: 'Give heavy outlets their own way with a device of their rating, or fit outlets that fit the way.',
   },
   *check(context) {
@@ -56,6 +57,7 @@ export const heavySocketOnLightWay: Rule = {
   },
   *lacks(context) {
     for (const figures of figuresOf(context).ways.values())
-      for (const socket of socketsOn(figures)) if (ratingOf(context, socket) === undefined) yield lackOfRating(context, socket);
+      for (const socket of socketsOn(figures))
+        if (ratingOf(context, socket) === undefined) yield lackOfRating(context, socket);
   },
 };

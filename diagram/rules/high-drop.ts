@@ -47,7 +47,10 @@ function thicker(context: Context, cable: Cable, dim: readonly Dim[]): Remedy[] 
   const { graph, document } = context;
   const { practice } = figuresOf(context);
   const lost = ({ fed }: Dim) =>
-    [...fed.losses].reduce((sum, [number, volts]) => sum + (graph.edges[number]!.wire!.cable === cable.id ? volts : 0), 0);
+    [...fed.losses].reduce(
+      (sum, [number, volts]) => sum + (graph.edges[number]!.wire!.cable === cable.id ? volts : 0),
+      0,
+    );
   const enough = (csa: number) =>
     dim.every((each) => {
       // Resistance falls with the area a little more than in proportion: a size that is enough by area is enough.
@@ -69,8 +72,8 @@ export const highDrop: Rule = {
     title: 'Too many volts are lost on the way',
     clauses: [recalled('IEC 60364-5-52', '525, Table G.52.1'), recalled('BS 7671', '525, Appendix 4 section 6.4')],
     lesson:
-      'A long thin run heats itself with the volts it takes. Lamps dim when a heater starts, motors labour and run hot, and the ' +
-      'current of a fault at the far end is small as well.',
+      'A long thin run heats itself with the volts it takes. Lamps dim when a heater starts, motors labour and ' +
+      'run hot, and the current of a fault at the far end is small as well.',
     remedy: 'Pull a thicker cable where most is lost, shorten the run, or share the load between two ways.',
   },
   *check(context) {
@@ -86,8 +89,14 @@ export const highDrop: Rule = {
           `${percent(worst.dropPercent)} is lost up to ${sayParts(context, [worst.each.part.id])}, ${percent(worst.limitPercent)} is allowed; ` +
           `most of it in ${sayCable(cable)} of ${cable.length} m.`,
         parts: [...ways, worst.each.part.id],
-        wires: [...worst.fed.losses.keys()].map((number) => graph.edges[number]!.wire!).filter((wire) => wire.cable === id).map((wire) => wire.id),
-        conditions: fedIn(context, dim.map(({ each }) => each)),
+        wires: [...worst.fed.losses.keys()]
+          .map((number) => graph.edges[number]!.wire!)
+          .filter((wire) => wire.cable === id)
+          .map((wire) => wire.id),
+        conditions: fedIn(
+          context,
+          dim.map(({ each }) => each),
+        ),
         remedies: thicker(context, cable, dim),
       };
     }
@@ -95,7 +104,10 @@ export const highDrop: Rule = {
   *lacks(context) {
     const { drawn, ways } = figuresOf(context);
     const edges = new Set(drawn.flatMap(({ lineEdges, neutralEdges }) => [...lineEdges, ...neutralEdges]));
-    yield* lackOfCables(context, [...edges].sort((a, b) => a - b));
+    yield* lackOfCables(
+      context,
+      [...edges].sort((a, b) => a - b),
+    );
     for (const figures of ways.values()) yield* lackOfWatts(context, figures);
   },
 };

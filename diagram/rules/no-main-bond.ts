@@ -20,9 +20,23 @@ function bonding({ graph, earth, document }: Context, bond: string): Remedy[] {
   if (!hasTerminal(bar, free)) return [];
   const id = `${bond}.bonding`;
   if (graph.wires.has(id) || graph.cables.has(id)) return [];
-  const cable: Cable = { id, csa: BOND_MM2, cpc: BOND_MM2, material: 'Cu', insulation: 'PVC', method: 'C', length: BOND_M, cores: 1 };
+  const cable: Cable = {
+    id,
+    csa: BOND_MM2,
+    cpc: BOND_MM2,
+    material: 'Cu',
+    insulation: 'PVC',
+    method: 'C',
+    length: BOND_M,
+    cores: 1,
+  };
   const wire: Wire = { id, from: [bar.id, free], to: [bond, 'E'], role: 'earth', cable: id };
-  return [{ label: `Bond it to ${bar.ref ?? 'the earth bar'} with ${BOND_MM2} mm2`, patch: { set: { cables: [cable], wires: [wire] } } }];
+  return [
+    {
+      label: `Bond it to ${bar.ref ?? 'the earth bar'} with ${BOND_MM2} mm2`,
+      patch: { set: { cables: [cable], wires: [wire] } },
+    },
+  ];
 }
 
 /** An extraneous part that is not joined to the main earth bar. */
@@ -34,8 +48,8 @@ export const noMainBond: Rule = {
     title: 'A pipe is not bonded to the main earth',
     clauses: [recalled('IEC 60364-4-41', '411.3.1.2'), recalled('BS 7671', '544.1.1')],
     lesson:
-      'A water or gas pipe brings the earth of the street into the home. While a fault lifts the cases of the home, an unbonded pipe ' +
-      'stays where it was: whoever holds a kettle and a tap is the bond.',
+      'A water or gas pipe brings the earth of the street into the home. While a fault lifts the cases of the ' +
+      'home, an unbonded pipe stays where it was: whoever holds a kettle and a tap is the bond.',
     remedy: 'Join the pipe to the main earth bar where it enters, with a bonding conductor.',
   },
   *check(context) {

@@ -12,8 +12,9 @@ export const noMainSwitch: Rule = {
     title: 'Nothing switches the whole home off',
     clauses: [seen('BS 7671', '462.1.201'), recalled('IEC 60364-4-46', '462.1')],
     lesson:
-      'Somebody who smells burning must be able to make the home dead with one hand and without a key. A row of breakers is no main ' +
-      'switch: one is always forgotten, and the fuse before the meter belongs to the supplier.',
+      'Somebody who smells burning must be able to make the home dead with one hand and without a key. A row of ' +
+      'breakers is no main switch: one is always forgotten, and the fuse before the meter belongs to the ' +
+      'supplier.',
     remedy: 'Put a two-pole main switch behind the meter, before anything branches off.',
   },
   *check(context) {
@@ -22,7 +23,8 @@ export const noMainSwitch: Rule = {
     const meter = context.parts('meter')[0] ?? context.parts('supply')[0];
     yield {
       heading: 'There is no main switch',
-      message: 'No one switch, breaker or rcd lies before everything that the mains feed: the home cannot be made dead in one action.',
+      message:
+        'No one switch, breaker or rcd lies before everything that the mains feed: the home cannot be made dead in one action.',
       parts: meter ? [meter.id] : [],
       conditions: onMains(context),
     };

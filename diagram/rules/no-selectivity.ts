@@ -8,7 +8,11 @@ import type { Rule } from './types';
 import { capital, inOrder, say, sayParts } from './readings/words';
 
 /** Pairs of devices next to one another in a line path that meet a test, the lower ones by the upper. */
-function pairs(context: Context, isOne: (part: Part) => boolean, together: (upper: Part, lower: Part) => boolean): Map<string, Set<string>> {
+function pairs(
+  context: Context,
+  isOne: (part: Part) => boolean,
+  together: (upper: Part, lower: Part) => boolean,
+): Map<string, Set<string>> {
   const { graph } = context;
   const found = new Map<string, Set<string>>();
   for (const { lineDevices } of figuresOf(context).drawn) {
@@ -29,7 +33,8 @@ const tooClose = (upper: Part, lower: Part): boolean => {
 };
 
 const tripTogether = (upper: Part, lower: Part): boolean => {
-  if (!isResidual(upper) || !isResidual(lower) || upper.sensitivity === undefined || lower.sensitivity === undefined) return false;
+  if (!isResidual(upper) || !isResidual(lower) || upper.sensitivity === undefined || lower.sensitivity === undefined)
+    return false;
   const device = ({ sensitivity, delay }: typeof upper) => ({ sensitivityA: sensitivity!, delay });
   return !residualSelective(device(upper), device(lower));
 };
@@ -43,9 +48,10 @@ export const noSelectivity: Rule = {
     title: 'A fault behind one device opens the one before it too',
     clauses: [recalled('IEC 60364-5-53', '536.4'), recalled('BS 7671', '536.4.1.4'), recalled('IEC 60364-1', '314.1')],
     lesson:
-      'When the breaker of one lamp takes the main one with it, the whole home goes dark for a fault in one room, and whoever comes to ' +
-      'look for it has no light to look by.',
-    remedy: 'Keep ratings in series at least 1.6 apart; before a 30 mA rcd use one of type S with three times its sensitivity.',
+      'When the breaker of one lamp takes the main one with it, the whole home goes dark for a fault in one ' +
+      'room, and whoever comes to look for it has no light to look by.',
+    remedy:
+      'Keep ratings in series at least 1.6 apart; before a 30 mA rcd use one of type S with three times its sensitivity.',
   },
   *check(context) {
     for (const [upper, lower] of pairs(context, isOvercurrent, tooClose)) {

@@ -58,8 +58,9 @@ export const overloadedMain: Rule = {
     title: 'The home asks for more than its main devices are rated for',
     clauses: [recalled('IEC 60364-1', '311.1'), recalled('BS 7671', '536.4.202')],
     lesson:
-      'Main switch, meter, rcd and service fuse carry what all ways take together. Not everything runs at once, and the allowances say ' +
-      'how much of it may be left out; what remains must be within every one of them, or the one that nobody may open is the one that fails.',
+      'Main switch, meter, rcd and service fuse carry what all ways take together. Not everything runs at once, ' +
+      'and the allowances say how much of it may be left out; what remains must be within every one of them, or ' +
+      'the one that nobody may open is the one that fails.',
     remedy: 'Ask for a larger service and fit main devices for it, or take load off.',
   },
   *check(context) {
@@ -76,7 +77,8 @@ export const overloadedMain: Rule = {
     }
   },
   *lacks(context) {
-    for (const { device } of mainDevices(context).values()) if (device.rating === undefined) yield lackOfRating(context, device);
+    for (const { device } of mainDevices(context).values())
+      if (device.rating === undefined) yield lackOfRating(context, device);
   },
 };
 

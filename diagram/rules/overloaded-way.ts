@@ -24,8 +24,9 @@ export const overloadedWay: Rule = {
     title: 'A way is asked for more than its device is rated for',
     clauses: [recalled('IEC 60364-4-43', '433.1'), recalled('BS 7671', '433.1.1')],
     lesson:
-      'The loads of a way add up. When they ask for more than the breaker is rated for, it opens some minutes after everything ' +
-      'is on, again and again, until somebody fits a bigger one and the cable takes what the breaker no longer stops.',
+      'The loads of a way add up. When they ask for more than the breaker is rated for, it opens some minutes ' +
+      'after everything is on, again and again, until somebody fits a bigger one and the cable takes what the ' +
+      'breaker no longer stops.',
     remedy: 'Move loads to another way, or fit a larger device where the cable carries it.',
   },
   *check(context) {

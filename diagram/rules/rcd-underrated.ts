@@ -39,8 +39,9 @@ export const rcdUnderrated: Rule = {
     title: 'Nothing keeps the current of an rcd within its rating',
     clauses: [recalled('IEC 60364-5-53', '536.4.3.2'), recalled('BS 7671', '536.4.202')],
     lesson:
-      'An rcd opens on leakage, never on load. If more current can flow than it is rated for, before the fuse in front of it or the ' +
-      'breakers behind it open, its contacts overheat, and the day it should trip it is welded shut.',
+      'An rcd opens on leakage, never on load. If more current can flow than it is rated for, before the fuse in ' +
+      'front of it or the breakers behind it open, its contacts overheat, and the day it should trip it is ' +
+      'welded shut.',
     remedy: 'Fit an rcd rated at least as the device before it, or as the sum of the ways behind it.',
   },
   *check(context) {
@@ -61,7 +62,9 @@ export const rcdUnderrated: Rule = {
         heading: `${capital(say(context, rcd.id))} is rated below what may flow through it`,
         message:
           `${capital(say(context, rcd.id))} is rated ${amps(rcd.rating)}. ` +
-          (before.length > 0 ? `The device before it lets ${amps(least)} flow` : 'Nothing before it limits the current') +
+          (before.length > 0
+            ? `The device before it lets ${amps(least)} flow`
+            : 'Nothing before it limits the current') +
           `, and the ways behind it add up to ${amps(sum)}.`,
         parts: [rcd.id],
         remedies: next === undefined ? [] : [changePart(`Fit an rcd of ${next} A`, rcd, { rating: next })],
@@ -69,6 +72,7 @@ export const rcdUnderrated: Rule = {
     }
   },
   *lacks(context) {
-    for (const rcd of context.parts('rcd')) if (rcd.kind === 'rcd' && rcd.rating === undefined) yield lackOfRating(context, rcd);
+    for (const rcd of context.parts('rcd'))
+      if (rcd.kind === 'rcd' && rcd.rating === undefined) yield lackOfRating(context, rcd);
   },
 };

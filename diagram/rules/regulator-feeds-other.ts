@@ -15,11 +15,17 @@ function regulatorsOn(graph: Graph, edges: readonly number[]): string[] {
 
 /** Everything but fans taken from before the regulator: the wires that leave it towards them begin at its other terminal. */
 function before({ graph, document }: Context, id: string): Remedy[] {
-  const onward = document.wires.filter(({ from, to }) => [from, to].some(([part, mark]) => part === id && mark === '2'));
+  const onward = document.wires.filter(({ from, to }) =>
+    [from, to].some(([part, mark]) => part === id && mark === '2'),
+  );
   const ends = onward.map((wire) => ({ wire, far: wire.from[0] === id ? wire.to : wire.from }));
   const foreign = ends.filter(({ far }) => graph.parts.get(far[0])?.kind !== 'fan');
   // A joint behind the regulator may lead to fans as well: what it feeds is for a person to sort out.
-  if (foreign.length === 0 || foreign.some(({ far }) => !['lamp', 'socket', 'appliance'].includes(graph.parts.get(far[0])?.kind ?? ''))) return [];
+  if (
+    foreign.length === 0 ||
+    foreign.some(({ far }) => !['lamp', 'socket', 'appliance'].includes(graph.parts.get(far[0])?.kind ?? ''))
+  )
+    return [];
   const wires = foreign.map(({ wire, far }): Wire => ({ ...wire, from: [id, '1'], to: far }));
   return [{ label: 'Take it from before the regulator', patch: { set: { wires } } }];
 }
@@ -33,8 +39,9 @@ export const regulatorFeedsOther: Rule = {
     title: 'A fan regulator feeds something that is no fan',
     clauses: [COMMON_PRACTICE],
     lesson:
-      'A regulator chops or starves the voltage for a small motor and is built for one. Behind it an outlet may be asked for ten ' +
-      'times what it carries, and a motor or a driver on chopped voltage overheats: either burns.',
+      'A regulator chops or starves the voltage for a small motor and is built for one. Behind it an outlet may ' +
+      'be asked for ten times what it carries, and a motor or a driver on chopped voltage overheats: either ' +
+      'burns.',
     remedy: 'Take everything but the fan from before the regulator.',
   },
   *check(context) {

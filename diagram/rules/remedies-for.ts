@@ -15,7 +15,9 @@ const meets = (a: Finding, b: Finding): boolean =>
 function isSound(context: Context, before: readonly Finding[], finding: Finding, { patch }: Remedy): boolean {
   const after = runRules(buildContext(applyPatch(context.document, patch), context.practice), rules);
   const still = after.some((each) => meets(each, finding) && each.message === finding.message);
-  const less = after.filter(({ rule }) => rule === finding.rule).length < before.filter(({ rule }) => rule === finding.rule).length;
+  const less =
+    after.filter(({ rule }) => rule === finding.rule).length <
+    before.filter(({ rule }) => rule === finding.rule).length;
   return !still && less && after.every((each) => before.some((known) => meets(known, each)));
 }
 
@@ -29,7 +31,9 @@ export function remediesFor(doc: Installation, finding: Finding, practice: Pract
   if (!rule) return [];
   const violation = violationsOf(context, rule, rules).find((each) => {
     const { parts, wires, message } = toFinding(context, rule, each);
-    return message === finding.message && parts.join() === finding.parts.join() && wires.join() === finding.wires.join();
+    return (
+      message === finding.message && parts.join() === finding.parts.join() && wires.join() === finding.wires.join()
+    );
   });
   const proposed = violation?.remedies ?? [];
   if (proposed.length === 0) return [];

@@ -14,8 +14,9 @@ export const shortAutonomy: Rule = {
     title: 'The bank lasts less long than was asked for',
     clauses: [COMMON_PRACTICE],
     lesson:
-      'The Ah on the label are those of a new battery, warm, taken in twenty hours and to the last drop. Taken faster, half empty at most ' +
-      'and some years old, it gives perhaps a third of that; the hours are promised to people who will count them.',
+      'The Ah on the label are those of a new battery, warm, taken in twenty hours and to the last drop. Taken ' +
+      'faster, half empty at most and some years old, it gives perhaps a third of that; the hours are promised ' +
+      'to people who will count them.',
     remedy: 'Fit a larger bank with a charger for it, or leave something off in an outage.',
   },
   *check(context) {
@@ -33,6 +34,7 @@ export const shortAutonomy: Rule = {
     }
   },
   *lacks(context) {
-    for (const { inverter, bank } of backupsOf(context)) if (inverter.hoursWanted !== undefined && bank === null) yield* lackOfBattery(context, inverter);
+    for (const { inverter, bank } of backupsOf(context))
+      if (inverter.hoursWanted !== undefined && bank === null) yield* lackOfBattery(context, inverter);
   },
 };

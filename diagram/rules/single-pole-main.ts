@@ -13,7 +13,9 @@ import { capital, say } from './readings/words';
 function twoPoles({ graph, document, parts }: Context, main: Part): Remedy[] {
   if (main.kind !== 'isolator' && main.kind !== 'mcb') return [];
   const from = parts('meter')[0];
-  const leaving = from ? document.wires.filter((wire) => [wire.from, wire.to].some(([id, mark]) => id === from.id && mark === '3')) : [];
+  const leaving = from
+    ? document.wires.filter((wire) => [wire.from, wire.to].some(([id, mark]) => id === from.id && mark === '3'))
+    : [];
   if (polesOf(main) === 2 || leaving.length !== 1) return [];
   const [wire] = leaving as [Wire];
   const far = wire.from[0] === from!.id ? wire.to : wire.from;
@@ -22,7 +24,12 @@ function twoPoles({ graph, document, parts }: Context, main: Part): Remedy[] {
   const into: Wire = { ...wire, from: [from!.id, '3'], to: [main.id, '3'] };
   const onward: Wire = { ...wire, id, from: [main.id, '4'], to: far };
   const part = { ...main, poles: 2 } as PartOf<'isolator' | 'mcb'>;
-  return [{ label: 'Fit a two-pole switch and lead the neutral through it', patch: { set: { parts: [part], wires: [into, onward] } } }];
+  return [
+    {
+      label: 'Fit a two-pole switch and lead the neutral through it',
+      patch: { set: { parts: [part], wires: [into, onward] } },
+    },
+  ];
 }
 
 /** A main switch that leaves the neutral joined to the street. */
@@ -34,8 +41,9 @@ export const singlePoleMain: Rule = {
     title: 'The main switch leaves the neutral on',
     clauses: [seen('BS 7671', '462.1.201'), recalled('IEC 60364-4-46', '461.2, 462.2')],
     lesson:
-      'A neutral is harmless only as long as the street keeps it at earth. With a broken neutral outside, or line and neutral swapped ' +
-      'at the pole, a home whose main switch opens the line alone is live through its neutral while everybody thinks it is off.',
+      'A neutral is harmless only as long as the street keeps it at earth. With a broken neutral outside, or ' +
+      'line and neutral swapped at the pole, a home whose main switch opens the line alone is live through its ' +
+      'neutral while everybody thinks it is off.',
     remedy: 'Fit a two-pole main switch that opens line and neutral together.',
   },
   *check(context) {
@@ -43,10 +51,17 @@ export const singlePoleMain: Rule = {
     const all = commanders(context);
     const main = all.find(({ id }) => id === context.mainSwitch?.id) ?? all[0];
     if (!main) return;
-    const fed = figuresOf(context).drawn.filter(({ source, neutralEdges }) => source?.kind === 'mains' && neutralEdges.length > 0);
+    const fed = figuresOf(context).drawn.filter(
+      ({ source, neutralEdges }) => source?.kind === 'mains' && neutralEdges.length > 0,
+    );
     // A neutral that is led past an rcd of its line too is a crossed neutral, and said as such.
-    const crossed = (each: Drawn) => each.lineDevices.some((id) => isResidual(graph.parts.get(id)!) && !each.neutralDevices.includes(id) && id !== main.id);
-    const past = fed.filter((each) => !each.neutralDevices.includes(main.id) && (polesOf(main) === 1 || !crossed(each)));
+    const crossed = (each: Drawn) =>
+      each.lineDevices.some(
+        (id) => isResidual(graph.parts.get(id)!) && !each.neutralDevices.includes(id) && id !== main.id,
+      );
+    const past = fed.filter(
+      (each) => !each.neutralDevices.includes(main.id) && (polesOf(main) === 1 || !crossed(each)),
+    );
     if (fed.length === 0 || past.length === 0) return;
     yield {
       heading: `${capital(say(context, main.id))} leaves the neutral on`,

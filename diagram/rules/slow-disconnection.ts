@@ -1,40 +1,11 @@
 import { externalOhm, deviceOf } from '../circuit/way-faults';
-import type { WayFigures } from '../circuit/way-figures';
-import { exceeds, ohms, seconds } from './readings/amounts';
+import { ohms, seconds } from './readings/amounts';
 import { recalled, seen } from './clauses';
-import type { Context } from './context';
 import { figuresOf, onMains } from './readings/figures';
 import { lackOf, lackOfCables, lackOfRating, lackOfSupply } from './readings/lacking';
-import { rcboInPlace } from './readings/rcbo-remedy';
-import { changePart } from './readings/remedies';
-import type { Remedy, Rule } from './types';
+import { bySupply, remediesOf, slowWays, type SlowWay } from './readings/slow-ways';
+import type { Rule } from './types';
 import { capital, inOrder, say, sayParts } from './readings/words';
-
-type Slow = WayFigures & { fault: NonNullable<WayFigures['fault']> };
-
-/** Ways on mains whose fault to earth nothing clears in time. Where a device is not fully rated the question stays open. */
-function slowWays(context: Context): Slow[] {
-  return [...figuresOf(context).ways.values()].filter(
-    (way): way is Slow => way.fault !== null && !way.fault.holds && deviceOf(way.device) !== null,
-  );
-}
-
-/** The supply's own loop is too large already: one cause for all such ways. */
-const bySupply = ({ document }: Context, { fault }: Slow): boolean => {
-  const external = externalOhm(document.supply);
-  return fault.zsMax !== null && external !== undefined && exceeds(external, fault.zsMax);
-};
-
-/** A type that opens on less current, where the loop is small enough for it. */
-function quickerCurve({ device, fault }: Slow): Remedy[] {
-  if (device.kind !== 'mcb' && device.kind !== 'rcbo') return [];
-  const factor = { B: 1, C: 2, D: 4 } as const;
-  const slower = factor[device.curve ?? 'C'];
-  const fits = (['C', 'B'] as const).find((curve) => factor[curve] < slower && fault.zsMax !== null && fault.zs <= (fault.zsMax * slower) / factor[curve]);
-  return fits ? [changePart(`Fit type ${fits}`, device, { curve: fits })] : [];
-}
-
-const remediesOf = (context: Context, way: Slow): Remedy[] => [...quickerCurve(way), ...rcboInPlace(context, way.device.id)];
 
 /**
  * Zs at the far end against the limit of the device: only on mains. On battery an inverter drives no more than a few times
@@ -54,18 +25,25 @@ export const slowDisconnection: Rule = {
       seen('BS 7671', 'Table 41.1'),
     ],
     lesson:
-      'When a line touches a case, the earth core must carry enough current to open the breaker before a hand on the case comes to ' +
-      'harm. A long thin run, a large breaker or a poor earth outside make the current too small: the case stays live and the breaker holds.',
+      'When a line touches a case, the earth core must carry enough current to open the breaker before a hand on ' +
+      'the case comes to harm. A long thin run, a large breaker or a poor earth outside make the current too ' +
+      'small: the case stays live and the breaker holds.',
     remedy: 'Put the way behind an rcd, fit a device with a lower trip, or pull a thicker cable.',
   },
   *check(context) {
     const slow = slowWays(context);
     const { document, graph } = context;
-    const told = (way: Slow) => (way.fault.clearedS === null ? 'nothing opens' : `it takes ${seconds(way.fault.clearedS)}`);
+    const told = (way: SlowWay) =>
+      way.fault.clearedS === null ? 'nothing opens' : `it takes ${seconds(way.fault.clearedS)}`;
     const shared = slow.filter((way) => bySupply(context, way));
     if (shared.length > 0) {
-      const ids = inOrder(context, shared.map(({ device }) => device.id)).map(({ id }) => id);
-      const supply = [...graph.parts.values()].find(({ kind }) => kind === (document.supply.system === 'TT' ? 'electrode' : 'supply'));
+      const ids = inOrder(
+        context,
+        shared.map(({ device }) => device.id),
+      ).map(({ id }) => id);
+      const supply = [...graph.parts.values()].find(
+        ({ kind }) => kind === (document.supply.system === 'TT' ? 'electrode' : 'supply'),
+      );
       yield {
         heading: `${capital(sayParts(context, ids, 4))} cannot clear a fault to earth`,
         message:
@@ -97,14 +75,19 @@ export const slowDisconnection: Rule = {
     const onTheMains = drawn.filter(({ source }) => source?.kind === 'mains');
     if (externalOhm(supply) === undefined && onTheMains.length > 0) {
       if (supply.system !== 'TT') yield* lackOfSupply(context, 'the earth fault loop');
-      else for (const part of context.parts('supply').slice(0, 1)) yield { parts: [part.id], what: 'the resistance of the earth electrode' };
+      else
+        for (const part of context.parts('supply').slice(0, 1))
+          yield { parts: [part.id], what: 'the resistance of the earth electrode' };
     }
     const edges = new Set<number>();
     for (const each of onTheMains) {
       const path = earth.path(context.graph.node(each.part.id, each.isPoint ? 'E' : 'in.E'));
       for (const number of [...(path ? [...each.lineEdges, ...path] : [])]) edges.add(number);
     }
-    yield* lackOfCables(context, [...edges].sort((a, b) => a - b));
+    yield* lackOfCables(
+      context,
+      [...edges].sort((a, b) => a - b),
+    );
     for (const { device, fault, inA } of ways.values()) {
       if (fault === null || fault.holds) continue;
       if (inA === null) yield lackOfRating(context, device);

@@ -1,82 +1,40 @@
-import { LEAD_DROP_PERCENT } from '../calculations/battery-lead';
-import { dcStrings, fusesOn, type DcString } from '../circuit/dc-leads';
-import { capacityOf } from '../circuit/way-cables';
-import { ohmOf } from '../circuit/way-paths';
-import type { Cable, PartOf } from '../document/schema';
+import { LEADS_MM2, LEAD_DROP_PERCENT } from '../calculations/battery-lead';
+import { dcStrings } from '../circuit/dc-leads';
+import type { PartOf } from '../document/schema';
 import { amps, exceeds, mm2, percent } from './readings/amounts';
 import { COMMON_PRACTICE, recalled } from './clauses';
 import type { Context } from './context';
-import { backupsOf, figuresOf } from './readings/figures';
+import { dcLeads, leadIz, type DcLead } from './readings/dc-leads';
+import { backupsOf } from './readings/figures';
 import { lackOf, lackOfCables } from './readings/lacking';
 import { changeCables } from './readings/remedies';
 import type { Remedy, Rule } from './types';
 import { capital, say } from './readings/words';
 
-/** mm2 of battery leads on sale; common practice, no source */
-const LEADS_MM2 = [4, 6, 10, 16, 25, 35, 50, 70, 95];
-
-interface Lead {
-  cable: Cable;
-  wires: Set<string>;
-  /** A that flows in it at full output and cutoff */
-  currentA: number;
-  /** A, the fuse or breaker before it; null where none is rated */
-  fuseA: number | null;
-}
-
-/** A for ever; beyond the practice's table the value of its largest size stands, which is the safe reading. */
-function izOf(context: Context, cable: Cable): number | null {
-  const { practice } = figuresOf(context);
-  const sizes = [cable.csa, ...practice.csaMm2.filter((csa) => csa < cable.csa).reverse()];
-  for (const csa of sizes) {
-    const found = capacityOf(context.graph, practice, { ...cable, csa });
-    if (found) return found.izA;
-  }
-  return null;
-}
-
-/** The leads of an inverter; in what several strings share the whole current flows, in each string its part. */
-function leadsOf({ graph }: Context, strings: readonly DcString[], dcAmps: number): { leads: Lead[]; dropV: number } {
-  const leads = new Map<string, Lead>();
-  const share = (number: number) => strings.filter(({ edges }) => edges.includes(number)).length / strings.length;
-  let dropV = 0;
-  for (const { edges } of strings) {
-    const ratings = fusesOn(graph, edges).flatMap((device) => ('rating' in device && device.rating !== undefined ? [device.rating] : []));
-    let lost = 0;
-    for (const number of edges) {
-      const { wire } = graph.edges[number]!;
-      const cable = wire?.cable === undefined ? undefined : graph.cables.get(wire.cable);
-      if (!wire || !cable) continue;
-      const currentA = dcAmps * share(number);
-      lost += currentA * ohmOf(graph, number);
-      const lead = leads.get(cable.id) ?? { cable, wires: new Set(), currentA: 0, fuseA: null };
-      lead.wires.add(wire.id);
-      lead.currentA = Math.max(lead.currentA, currentA);
-      lead.fuseA = ratings.length > 0 ? Math.min(...ratings) : lead.fuseA;
-      leads.set(cable.id, lead);
-    }
-    dropV = Math.max(dropV, lost);
-  }
-  return { leads: [...leads.values()], dropV };
-}
-
 /** All thin leads in the least size with which the current, the fuse and the drop are met. */
-function thicker(context: Context, thin: readonly Lead[], dropPercent: number): Remedy[] {
+function thicker(context: Context, thin: readonly DcLead[], dropPercent: number): Remedy[] {
   const csa = LEADS_MM2.find((size) =>
     thin.every(({ cable, currentA, fuseA }) => {
-      const iz = izOf(context, { ...cable, csa: size });
+      const iz = leadIz(context, { ...cable, csa: size });
       const dropped = (dropPercent * cable.csa) / size;
       return size > cable.csa && iz !== null && iz >= Math.max(currentA, fuseA ?? 0) && dropped <= LEAD_DROP_PERCENT;
     }),
   );
-  return csa === undefined ? [] : [changeCables(`Fit leads of ${csa} mm2`, thin.map(({ cable }) => ({ ...cable, csa })))];
+  return csa === undefined
+    ? []
+    : [
+        changeCables(
+          `Fit leads of ${csa} mm2`,
+          thin.map(({ cable }) => ({ ...cable, csa })),
+        ),
+      ];
 }
 
 function judge(context: Context, inverter: PartOf<'inverter'>, dcAmps: number, bankVolts: number) {
-  const { leads, dropV } = leadsOf(context, dcStrings(context.graph, inverter).strings, dcAmps);
+  const { leads, dropV } = dcLeads(context, dcStrings(context.graph, inverter).strings, dcAmps);
   const dropPercent = (100 * dropV) / bankVolts;
   const hot = leads.filter(({ cable, currentA, fuseA }) => {
-    const iz = izOf(context, cable);
+    const iz = leadIz(context, cable);
     return iz !== null && exceeds(Math.max(currentA, fuseA ?? 0), iz);
   });
   return { leads, hot, dropPercent };
@@ -91,8 +49,9 @@ export const thinBatteryLead: Rule = {
     title: 'A battery lead is too thin',
     clauses: [recalled('IEC 60364-4-43', '433.1'), COMMON_PRACTICE],
     lesson:
-      'Behind a 12 V battery every hundred watts are nine amperes, and more as it empties. A lead sized by eye is warm on the first day ' +
-      'and soft on the hottest; and half a volt lost in it makes the inverter give up while the battery is half full.',
+      'Behind a 12 V battery every hundred watts are nine amperes, and more as it empties. A lead sized by eye ' +
+      'is warm on the first day and soft on the hottest; and half a volt lost in it makes the inverter give up ' +
+      'while the battery is half full.',
     remedy: 'Fit leads for the current at full output and cutoff, at least for the fuse, and short.',
   },
   *check(context) {
@@ -107,7 +66,7 @@ export const thinBatteryLead: Rule = {
         heading: `The leads of ${say(context, inverter.id)} are too thin`,
         message: worst
           ? `${capital(say(context, inverter.id))} draws ${amps(dcAmps)} at full output and cutoff${worst.fuseA !== null ? `, behind ${amps(worst.fuseA)}` : ''}; ` +
-            `${mm2(worst.cable.csa)} carries ${amps(izOf(context, worst.cable)!)} as it is laid.`
+            `${mm2(worst.cable.csa)} carries ${amps(leadIz(context, worst.cable)!)} as it is laid.`
           : `At ${amps(dcAmps)} the leads lose ${percent(dropPercent)} of the bank's volts; ${LEAD_DROP_PERCENT} % is the most.`,
         parts: [inverter.id],
         wires: thin.flatMap(({ wires }) => [...wires]),
@@ -120,7 +79,10 @@ export const thinBatteryLead: Rule = {
       if (inverter.va === undefined) yield lackOf(context, inverter, 'the VA');
       if (inverter.efficiency === undefined) yield lackOf(context, inverter, 'the efficiency');
       if (inverter.cutoff === undefined) yield lackOf(context, inverter, 'the cutoff voltage');
-      yield* lackOfCables(context, dcStrings(context.graph, inverter).strings.flatMap(({ edges }) => edges));
+      yield* lackOfCables(
+        context,
+        dcStrings(context.graph, inverter).strings.flatMap(({ edges }) => edges),
+      );
     }
   },
 };

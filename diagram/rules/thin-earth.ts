@@ -1,59 +1,16 @@
-import { adiabaticMm2, kFactor } from '../calculations/adiabatic';
 import type { Cable, Wire } from '../document/schema';
 import type { Practice } from '../practices/types';
 import { exceeds, mm2, sayCable } from './readings/amounts';
-import { recalled, seen } from './clauses';
+import { seen } from './clauses';
 import type { Context } from './context';
+import { earthNeeds, type EarthNeed } from './readings/earth-needs';
 import { figuresOf } from './readings/figures';
 import { changeCables } from './readings/remedies';
 import type { Remedy, Rule } from './types';
 import { capital, say, sayParts, sayWire } from './readings/words';
 
-/** What a fault asks of the earth core of one cable. */
-interface Need {
-  cable: Cable;
-  mm2: number;
-  /** id of the device of the way that asks for most */
-  device: string;
-  /** true where the table decides, for want of the fault's heat */
-  byTable: boolean;
-  wires: Set<string>;
-  points: Set<string>;
-}
-
-/** Table 54.2 of IEC 60364-5-54 (54.7 of BS 7671): by the line conductor, where the heat of the fault is not known. */
-export const tableMm2 = (lineMm2: number): number => (lineMm2 <= 16 ? lineMm2 : lineMm2 <= 35 ? 16 : lineMm2 / 2);
-
 /** Main bonding, mm2 copper: 10 on TN-C-S with a neutral up to 35 (BS 7671 Table 54.8, seen), else 6 at least (544.1.1, from memory). */
 const bondingMm2 = (system: string): number => (system === 'TN-C-S' ? 10 : 6);
-
-/** The need of every cable with an earth core on the way to something earthed: the most of all ways behind it. */
-function needs(context: Context): Need[] {
-  const { graph } = context;
-  const { ways, earth } = figuresOf(context);
-  const found = new Map<string, Need>();
-  // By the table only beside a line core: its size is what the table goes by.
-  const shared = new Set(context.document.wires.flatMap(({ role, cable }) => (cable !== undefined && role !== 'earth' ? [cable] : [])));
-  for (const { drawn, fault, device } of ways.values()) {
-    // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
-    if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;
-    for (const { part, isPoint } of drawn) {
-      for (const number of earth.path(graph.node(part.id, isPoint ? 'E' : 'in.E')) ?? []) {
-        const { wire } = graph.edges[number]!;
-        const cable = wire?.role === 'earth' && wire.cable !== undefined ? graph.cables.get(wire.cable) : undefined;
-        if (!wire || !cable || (!fault && !shared.has(cable.id))) continue;
-        const asked = fault ? adiabaticMm2(fault.energyA2s, kFactor(cable.material, cable.insulation, true)) : tableMm2(cable.csa);
-        const known = found.get(cable.id);
-        const need = known ?? { cable, mm2: 0, device: device.id, byTable: !fault, wires: new Set(), points: new Set() };
-        if (asked > need.mm2) Object.assign(need, { mm2: asked, device: device.id, byTable: !fault });
-        need.wires.add(wire.id);
-        need.points.add(part.id);
-        found.set(cable.id, need);
-      }
-    }
-  }
-  return [...found.values()];
-}
 
 const sizeOf = ({ csa, cpc }: Cable): number => cpc ?? csa;
 
@@ -97,19 +54,21 @@ export const thinEarth: Rule = {
     title: 'An earth core is too thin for its fault',
     clauses: [seen('IEC 60364-5-54', '543.1'), seen('BS 7671', 'Table 54.7, 544.1.1')],
     lesson:
-      'For the tenth of a second before the breaker opens, the whole fault current flows in the earth core. One that is too thin melts ' +
-      'first: the fault is gone, and so is the earth of everything behind it.',
+      'For the tenth of a second before the breaker opens, the whole fault current flows in the earth core. One ' +
+      'that is too thin melts first: the fault is gone, and so is the earth of everything behind it.',
     remedy: 'Pull a cable with a thicker earth core, or a separate earth of the size asked for.',
   },
   *check(context) {
     const { practice } = figuresOf(context);
-    const thin = new Map<string, Need[]>();
-    for (const need of needs(context))
+    const thin = new Map<string, EarthNeed[]>();
+    for (const need of earthNeeds(context))
       if (exceeds(need.mm2, sizeOf(need.cable))) thin.set(need.device, [...(thin.get(need.device) ?? []), need]);
     for (const [device, list] of thin) {
       const worst = list.reduce((a, b) => (sizeOf(b.cable) < sizeOf(a.cable) ? b : a));
       const points = list.flatMap((each) => [...each.points]);
-      const why = worst.byTable ? 'the line core beside it asks for it' : `a fault behind ${say(context, device)} heats it`;
+      const why = worst.byTable
+        ? 'the line core beside it asks for it'
+        : `a fault behind ${say(context, device)} heats it`;
       yield {
         heading: `The earth of ${sayParts(context, points, 3)} is too thin`,
         message:
@@ -117,7 +76,10 @@ export const thinEarth: Rule = {
           `${mm2(Math.ceil(worst.mm2 * 100) / 100)} is the least.`,
         parts: [device],
         wires: list.flatMap(({ wires }) => [...wires]),
-        remedies: thicker(practice, list.map(({ cable, mm2: need }) => ({ cable, need }))),
+        remedies: thicker(
+          practice,
+          list.map(({ cable, mm2: need }) => ({ cable, need })),
+        ),
       };
     }
     const least = bondingMm2(context.document.supply.system);

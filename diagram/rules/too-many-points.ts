@@ -34,8 +34,8 @@ export const tooManyPoints: Rule = {
     title: 'More hangs on a way than the practice allows',
     clauses: [seen('IS 732', 'sub-circuits: 10 points or 800 W; 2 power outlets or 3000 W')],
     lesson:
-      'A limit on the points of a way is a limit on what goes dark together and on what somebody may add later without asking. It is ' +
-      'cheaper to keep now than to divide the way afterwards.',
+      'A limit on the points of a way is a limit on what goes dark together and on what somebody may add later ' +
+      'without asking. It is cheaper to keep now than to divide the way afterwards.',
     remedy: 'Divide the way in two.',
   },
   *check(context) {

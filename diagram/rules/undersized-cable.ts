@@ -11,11 +11,19 @@ import { changeCables, changePart } from './readings/remedies';
 import type { Remedy, Rule } from './types';
 import { capital, say } from './readings/words';
 
-const isThin = ({ capacity, needA }: SectionCable): boolean => capacity !== null && needA !== null && exceeds(needA, capacity.izA);
+const isThin = ({ capacity, needA }: SectionCable): boolean =>
+  capacity !== null && needA !== null && exceeds(needA, capacity.izA);
 
-function remediesOf({ graph }: Context, practice: Practice, { device, inA, ibA }: WayFigures, thin: readonly SectionCable[]): Remedy[] {
+function remediesOf(
+  { graph }: Context,
+  practice: Practice,
+  { device, inA, ibA }: WayFigures,
+  thin: readonly SectionCable[],
+): Remedy[] {
   const thicker = thin.map(({ cable, needA }) => {
-    const csa = practice.csaMm2.find((size) => size > cable.csa && (capacityOf(graph, practice, { ...cable, csa: size })?.izA ?? 0) >= needA!);
+    const csa = practice.csaMm2.find(
+      (size) => size > cable.csa && (capacityOf(graph, practice, { ...cable, csa: size })?.izA ?? 0) >= needA!,
+    );
     const cpc = csa === undefined ? undefined : Math.max(practice.cpcMm2.value[csa] ?? csa, cable.cpc ?? 0);
     return csa === undefined ? null : { ...cable, csa, cpc };
   });
@@ -23,7 +31,9 @@ function remediesOf({ graph }: Context, practice: Practice, { device, inA, ibA }
   if (thicker.every((cable) => cable !== null))
     remedies.push(changeCables(`Pull ${[...new Set(thicker.map(({ csa }) => csa))].join(' and ')} mm2`, thicker));
   const least = Math.min(...thin.map(({ capacity }) => capacity!.izA));
-  const smaller = practice.breakerRatingsA.value.findLast((rating) => rating <= least && rating < inA! && rating >= (ibA ?? Infinity));
+  const smaller = practice.breakerRatingsA.value.findLast(
+    (rating) => rating <= least && rating < inA! && rating >= (ibA ?? Infinity),
+  );
   if (smaller !== undefined && (device.kind === 'mcb' || device.kind === 'rcbo'))
     remedies.push(changePart(`Fit a device of ${smaller} A`, device, { rating: smaller }));
   return remedies;
@@ -38,8 +48,9 @@ export const undersizedCable: Rule = {
     title: 'A cable is thinner than its device protects',
     clauses: [recalled('IEC 60364-4-43', '433.1'), recalled('IEC 60364-5-52', '523.1'), recalled('BS 7671', '433.1.1')],
     lesson:
-      'The breaker is there for the cable. If it lets more current flow than the cable can carry as it is laid, bunched or warm, ' +
-      'the insulation bakes for years behind the plaster, and the breaker never opens before it burns.',
+      'The breaker is there for the cable. If it lets more current flow than the cable can carry as it is laid, ' +
+      'bunched or warm, the insulation bakes for years behind the plaster, and the breaker never opens before it ' +
+      'burns.',
     remedy: 'Pull the next larger size, or fit a device that the cable can carry.',
   },
   *check(context) {
@@ -49,7 +60,8 @@ export const undersizedCable: Rule = {
       if (thin.length === 0) continue;
       const { device } = figures;
       const worst = thin.reduce((a, b) => (a.capacity!.izA <= b.capacity!.izA ? a : b));
-      const more = thin.length > 1 ? ` ${thin.length - 1} more of its runs ${thin.length > 2 ? 'are' : 'is'} too thin.` : '';
+      const more =
+        thin.length > 1 ? ` ${thin.length - 1} more of its runs ${thin.length > 2 ? 'are' : 'is'} too thin.` : '';
       yield {
         heading: `${capital(say(context, device.id))} does not protect its cable`,
         message:
@@ -66,7 +78,12 @@ export const undersizedCable: Rule = {
       if (inA === null && cables.length > 0) yield lackOfRating(context, device);
       yield* lackOfCables(context, section.edges);
       for (const { cable, capacity, wires } of cables)
-        if (capacity === null) yield { parts: [], wires, what: `a size and laying that the table of the practice holds for ${sayCable(cable)}` };
+        if (capacity === null)
+          yield {
+            parts: [],
+            wires,
+            what: `a size and laying that the table of the practice holds for ${sayCable(cable)}`,
+          };
     }
   },
 };

@@ -19,7 +19,10 @@ const BACKED = { fuseUpToA: 100, icnFromA: 6000, uptoA: 16000 };
 const isBacked = (before: readonly Part[], icn: number, currentA: number): boolean =>
   icn >= BACKED.icnFromA &&
   currentA <= BACKED.uptoA &&
-  before.some((part) => part.kind === 'fuse' && part.standard !== 'dc' && part.rating !== undefined && part.rating <= BACKED.fuseUpToA);
+  before.some(
+    (part) =>
+      part.kind === 'fuse' && part.standard !== 'dc' && part.rating !== undefined && part.rating <= BACKED.fuseUpToA,
+  );
 
 const isBreaker = (part: Part): part is Breaker => part.kind === 'mcb' || part.kind === 'rcbo';
 
@@ -36,7 +39,11 @@ function* breakers(context: Context): Iterable<{ device: Breaker; before: Part[]
     if (!isBreaker(device) || ohm === undefined) continue;
     const path = firstBehind(device.id)?.lineDevices ?? [];
     const before = path.slice(0, path.indexOf(device.id)).map((id) => graph.parts.get(id)!);
-    yield { device, before, currentA: prospectiveA({ voltage, loopOhm: external + 2 * ohm, factor: practice.cMax.value }) };
+    yield {
+      device,
+      before,
+      currentA: prospectiveA({ voltage, loopOhm: external + 2 * ohm, factor: practice.cMax.value }),
+    };
   }
 }
 
@@ -49,14 +56,16 @@ export const weakBreakingCapacity: Rule = {
     title: 'A breaker cannot break the current of a short circuit here',
     clauses: [recalled('IEC 60364-4-43', '434.5.1'), recalled('BS 7671', '434.5.1')],
     lesson:
-      'Close to a strong supply a short circuit draws thousands of amperes. A breaker made for less tries to open, the arc does not ' +
-      'go out, and the breaker itself bursts into the board.',
-    remedy: 'Fit breakers of a higher breaking capacity, or a fuse before them that limits the current and is listed for it.',
+      'Close to a strong supply a short circuit draws thousands of amperes. A breaker made for less tries to ' +
+      'open, the arc does not go out, and the breaker itself bursts into the board.',
+    remedy:
+      'Fit breakers of a higher breaking capacity, or a fuse before them that limits the current and is listed for it.',
   },
   *check(context) {
     const { practice } = figuresOf(context);
     const weak = [...breakers(context)].filter(
-      ({ device, before, currentA }) => device.icn !== undefined && exceeds(currentA, device.icn) && !isBacked(before, device.icn, currentA),
+      ({ device, before, currentA }) =>
+        device.icn !== undefined && exceeds(currentA, device.icn) && !isBacked(before, device.icn, currentA),
     );
     if (weak.length === 0) return;
     const ids = weak.map(({ device }) => device.id);
@@ -70,8 +79,13 @@ export const weakBreakingCapacity: Rule = {
         `A short circuit just behind ${ids.length === 1 ? 'it' : 'them'} may draw ${Math.round(most)} A; ${least} A is what can be broken. ` +
         'No fuse before limits it.',
       parts: ids,
-      conditions: context.evaluated.filter(({ condition }) => condition.base === 'mains').map(({ condition }) => condition.name),
-      remedies: icn === undefined ? [] : [{ label, patch: { set: { parts: weak.map(({ device }): Part => ({ ...device, icn })) } } }],
+      conditions: context.evaluated
+        .filter(({ condition }) => condition.base === 'mains')
+        .map(({ condition }) => condition.name),
+      remedies:
+        icn === undefined
+          ? []
+          : [{ label, patch: { set: { parts: weak.map(({ device }): Part => ({ ...device, icn })) } } }],
     };
   },
   *lacks(context) {

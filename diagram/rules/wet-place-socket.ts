@@ -26,15 +26,20 @@ export const wetPlaceSocket: Rule = {
     title: 'An outlet stands in a wet place',
     clauses: [recalled('IEC 60364-7-701', '701.512.3'), recalled('BS 7671', '701.512.3')],
     lesson:
-      'Wet skin lets ten times the current through, and a hair dryer falls into the bath with its lead. An rcd shortens the shock, it ' +
-      'does not prevent it: an outlet belongs out of reach of the water.',
+      'Wet skin lets ten times the current through, and a hair dryer falls into the bath with its lead. An rcd ' +
+      'shortens the shock, it does not prevent it: an outlet belongs out of reach of the water.',
     remedy: 'Place the outlet outside the zones, at the distance that the local code asks for, or fit a shaver outlet.',
   },
   *check(context) {
     const { sockets, wetSocketDistanceM } = practices[context.practice];
     const shavers = new Set(sockets.filter(({ shaver }) => shaver).map(({ id }) => id));
     for (const socket of context.parts('socket')) {
-      if (socket.kind !== 'socket' || socket.place === undefined || (socket.pattern !== undefined && shavers.has(socket.pattern))) continue;
+      if (
+        socket.kind !== 'socket' ||
+        socket.place === undefined ||
+        (socket.pattern !== undefined && shavers.has(socket.pattern))
+      )
+        continue;
       const place = context.graph.places.get(socket.place);
       if (place?.kind !== 'wet' && place?.zone === undefined) continue;
       const where = place.zone === undefined ? place.name : `zone ${place.zone} of ${place.name}`;

@@ -14,14 +14,17 @@ import { capital, say, sayParts } from './readings/words';
 function startGroups({ graph }: Context, drawn: readonly Drawn[]): Drawn[][] {
   const groups = new Map<string, Drawn[]>();
   for (const each of drawn) {
-    const last = each.lineEdges.map((number) => graph.edges[number]!.part).findLast((id) => id !== undefined && isControl(graph.parts.get(id)!));
+    const last = each.lineEdges
+      .map((number) => graph.edges[number]!.part)
+      .findLast((id) => id !== undefined && isControl(graph.parts.get(id)!));
     const key = last ?? each.part.id;
     groups.set(key, [...(groups.get(key) ?? []), each]);
   }
   return [...groups.values()];
 }
 
-const startOf = (group: readonly Drawn[]): number => group.reduce((sum, { startAmps, amps: running }) => sum + startAmps - running, 0);
+const startOf = (group: readonly Drawn[]): number =>
+  group.reduce((sum, { startAmps, amps: running }) => sum + startAmps - running, 0);
 
 const NEXT = { B: 'C', C: 'D', D: null } as const;
 
@@ -37,15 +40,21 @@ export const wrongCurve: Rule = {
     title: 'A start may open the breaker at once',
     clauses: [recalled('IEC 60898-1', 'Table 7'), recalled('IEC 60364-5-53', '533.2')],
     lesson:
-      'Motors and lamp drivers draw several times their current for a moment when they start. A breaker of type B takes that for a ' +
-      'short circuit, and the pump that runs well trips the way each morning.',
-    remedy: 'Fit a breaker of the next type, C or D, where the fault loop is low enough for it, or start the load on a way of its own.',
+      'Motors and lamp drivers draw several times their current for a moment when they start. A breaker of type ' +
+      'B takes that for a short circuit, and the pump that runs well trips the way each morning.',
+    remedy:
+      'Fit a breaker of the next type, C or D, where the fault loop is low enough for it, or start the load on a way of its own.',
   },
   *check(context) {
     const { ways } = figuresOf(context);
     for (const { device: id } of context.ways) {
       const { device, drawn } = ways.get(id)!;
-      if ((device.kind !== 'mcb' && device.kind !== 'rcbo') || device.rating === undefined || device.curve === undefined) continue;
+      if (
+        (device.kind !== 'mcb' && device.kind !== 'rcbo') ||
+        device.rating === undefined ||
+        device.curve === undefined
+      )
+        continue;
       const groups = startGroups(context, drawn);
       if (groups.length === 0) continue;
       const worst = groups.reduce((a, b) => (startOf(b) > startOf(a) ? b : a));
@@ -54,9 +63,16 @@ export const wrongCurve: Rule = {
       const holds = INSTANT[device.curve].holds * device.rating;
       if (startOf(worst) <= 0 || !exceeds(inrush, holds)) continue;
       const next = NEXT[device.curve];
-      const remedies: Remedy[] = next && INSTANT[next].holds * device.rating >= inrush ? [changePart(`Fit type ${next}`, device, { curve: next })] : [];
+      const remedies: Remedy[] =
+        next && INSTANT[next].holds * device.rating >= inrush
+          ? [changePart(`Fit type ${next}`, device, { curve: next })]
+          : [];
       yield {
-        heading: `${capital(say(context, id))} may open when ${sayParts(context, worst.map(({ part }) => part.id), 3)} starts`,
+        heading: `${capital(say(context, id))} may open when ${sayParts(
+          context,
+          worst.map(({ part }) => part.id),
+          3,
+        )} starts`,
         message:
           `The start takes ${amps(inrush)} with the rest of the way on; a type ${device.curve} of ${device.rating} A is sure to hold ` +
           `up to ${amps(holds)} for an instant.`,
@@ -68,7 +84,11 @@ export const wrongCurve: Rule = {
   },
   *lacks(context) {
     for (const { device, drawn } of figuresOf(context).ways.values())
-      if ((device.kind === 'mcb' || device.kind === 'rcbo') && device.curve === undefined && drawn.some(({ startAmps, amps: running }) => startAmps > running))
+      if (
+        (device.kind === 'mcb' || device.kind === 'rcbo') &&
+        device.curve === undefined &&
+        drawn.some(({ startAmps, amps: running }) => startAmps > running)
+      )
         yield lackOf(context, device, 'the type B, C or D');
   },
 };

@@ -12,7 +12,8 @@ export const ohms = (value: number): string => `${digits(value, value < 10 ? 2 :
 export const hours = (value: number): string => `${digits(value, 1)} h`;
 export const mm2 = (value: number): string => `${digits(value, 2)} mm2`;
 /** A time of a device: ms below a second. */
-export const seconds = (value: number): string => (value < 1 ? `${digits(value * 1000, 0)} ms` : `${digits(value, 1)} s`);
+export const seconds = (value: number): string =>
+  value < 1 ? `${digits(value * 1000, 0)} ms` : `${digits(value, 1)} s`;
 
 /** "k3 (1.5 mm2)", or "the 1.5 mm2 run" where it has no designation. */
 export const sayCable = ({ ref, csa }: Cable): string => (ref ? `${ref} (${mm2(csa)})` : `the ${mm2(csa)} run`);

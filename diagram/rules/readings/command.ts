@@ -16,5 +16,8 @@ export function sharedBy(context: Context, drawn: readonly Pick<Drawn, 'lineDevi
 
 /** Devices that make the whole home dead on mains, from the origin on. */
 export const commanders = once((context: Context): Part[] =>
-  sharedBy(context, figuresOf(context).drawn.filter(({ source }) => source?.kind === 'mains')),
+  sharedBy(
+    context,
+    figuresOf(context).drawn.filter(({ source }) => source?.kind === 'mains'),
+  ),
 );

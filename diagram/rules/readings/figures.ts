@@ -21,4 +21,6 @@ export const onMains = ({ evaluated }: Context): string[] =>
   evaluated.filter(({ condition }) => condition.base === 'mains').map(({ condition }) => condition.name);
 
 /** Each backup source in numbers, by designation. */
-export const backupsOf = once((context: Context) => workOutBackups(context.graph, context.evaluation, figuresOf(context).drawn));
+export const backupsOf = once((context: Context) =>
+  workOutBackups(context.graph, context.evaluation, figuresOf(context).drawn),
+);

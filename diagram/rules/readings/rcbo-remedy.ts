@@ -15,7 +15,9 @@ export function rcboInPlace({ graph, ways, practice }: Context, device: string):
   const way = ways.find((each) => each.device === device);
   if (mcb?.kind !== 'mcb' || (mcb.poles ?? 1) !== 1 || !way) return [];
   const atBar = (id: string) => graph.parts.get(id)?.kind === 'neutral-bar';
-  const leaving = way.wires.map((id) => graph.wires.get(id)!).filter(({ role, from, to }) => role === 'neutral' && atBar(from[0]) !== atBar(to[0]));
+  const leaving = way.wires
+    .map((id) => graph.wires.get(id)!)
+    .filter(({ role, from, to }) => role === 'neutral' && atBar(from[0]) !== atBar(to[0]));
   const id = `${device}.neutral`;
   if (leaving.length !== 1 || graph.wires.has(id)) return [];
   const [wire] = leaving as [Wire];
@@ -31,5 +33,10 @@ export function rcboInPlace({ graph, ways, practice }: Context, device: string):
   };
   const through: Wire = { ...wire, from: [device, '4'], to: far };
   const link: Wire = { id, from: bar, to: [device, '3'], role: 'neutral', ...(wire.colour && { colour: wire.colour }) };
-  return [{ label: `Fit an rcbo of ${SENSITIVITY_A * 1000} mA, the neutral through it`, patch: { set: { parts: [rcbo], wires: [through, link] } } }];
+  return [
+    {
+      label: `Fit an rcbo of ${SENSITIVITY_A * 1000} mA, the neutral through it`,
+      patch: { set: { parts: [rcbo], wires: [through, link] } },
+    },
+  ];
 }

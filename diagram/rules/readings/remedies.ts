@@ -10,4 +10,7 @@ export const changePart = <K extends Kind>(label: string, part: PartOf<K>, field
   patch: { set: { parts: [{ ...part, ...fields } as Part] } },
 });
 
-export const changeCables = (label: string, cables: readonly Cable[]): Remedy => ({ label, patch: { set: { cables: [...cables] } } });
+export const changeCables = (label: string, cables: readonly Cable[]): Remedy => ({
+  label,
+  patch: { set: { cables: [...cables] } },
+});

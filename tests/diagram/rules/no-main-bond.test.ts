@@ -11,7 +11,10 @@ testRule(noMainBond, {
     'a small home without any pipe': smallHome(),
     'a pipe on the earth bar': bonded(),
     'a second pipe through the first': bonded().part('bond', 'BG', 'hall', { to: 'gas' }).earth('BW:E', 'BG:E', 'kb'),
-    'a home without main earth is that rule: the pipe hangs on its bar': { drawing: bonded().cut('SUP:E', 'EB'), also: ['no-main-earth'] },
+    'a home without main earth is that rule: the pipe hangs on its bar': {
+      drawing: bonded().cut('SUP:E', 'EB'),
+      also: ['no-main-earth'],
+    },
   },
   invalid: {
     'a pipe joined to nothing': { drawing: pipe(), findings: [{ parts: ['BW'], severity: 'defect' }] },
@@ -20,8 +23,13 @@ testRule(noMainBond, {
       findings: [{ parts: ['BW'] }],
       also: ['line-role-mismatch', 'earth-neutral-joined'],
     },
-    'each pipe by itself': { drawing: pipe().part('bond', 'BG', 'hall', { to: 'gas' }), findings: [{ parts: ['BG'] }, { parts: ['BW'] }] },
+    'each pipe by itself': {
+      drawing: pipe().part('bond', 'BG', 'hall', { to: 'gas' }),
+      findings: [{ parts: ['BG'] }, { parts: ['BW'] }],
+    },
   },
 });
 
-testRemedies(noMainBond, { 'a bonding conductor': { drawing: pipe(), offers: ['Bond it to the earth bar with 10 mm2'] } });
+testRemedies(noMainBond, {
+  'a bonding conductor': { drawing: pipe(), offers: ['Bond it to the earth bar with 10 mm2'] },
+});

@@ -17,8 +17,12 @@ const series = (upper: number, lower: number) =>
 const rcds = (sensitivity: number, delay: 'none' | 'S') =>
   smallHome()
     .part('rcd', 'Q9', 'hall', { rating: 63, sensitivity, type: 'A', delay })
-    .cut('LB0', 'Q2:1').cut('NB0', 'Q2:3')
-    .line('LB0', 'Q9:1').neutral('NB0', 'Q9:3').line('Q9:2', 'Q2:1').neutral('Q9:4', 'Q2:3');
+    .cut('LB0', 'Q2:1')
+    .cut('NB0', 'Q2:3')
+    .line('LB0', 'Q9:1')
+    .neutral('NB0', 'Q9:3')
+    .line('Q9:2', 'Q2:1')
+    .neutral('Q9:4', 'Q2:3');
 
 testRule(noSelectivity, {
   valid: {
@@ -30,7 +34,10 @@ testRule(noSelectivity, {
   invalid: {
     '20 before 13 A': { drawing: series(20, 13), findings: [{ parts: ['Q8', 'Q11'], severity: 'advice' }] },
     '16 before 16 A': { drawing: series(16, 16), findings: [{ parts: ['Q8', 'Q11'] }] },
-    'two rcds of 30 mA without delay': { drawing: rcds(0.03, 'none'), findings: [{ parts: ['Q9', 'Q2'], message: /delay/ }] },
+    'two rcds of 30 mA without delay': {
+      drawing: rcds(0.03, 'none'),
+      findings: [{ parts: ['Q9', 'Q2'], message: /delay/ }],
+    },
     'an rcd of 300 mA without delay': { drawing: rcds(0.3, 'none'), findings: [{ parts: ['Q9', 'Q2'] }] },
     // three times 30 mA are 90 mA: BS 7671 536.4.1.4, from memory
     'type S but only 80 mA': { drawing: rcds(0.08, 'S'), findings: [{ parts: ['Q9', 'Q2'] }] },

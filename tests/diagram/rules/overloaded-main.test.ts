@@ -33,7 +33,11 @@ testRule(overloadedMain, {
       findings: [{ parts: ['Q1'], severity: 'defect', conditions: ['mains'], message: /35 A/ }],
     },
     'service fuse, meter, switch and rcd in series are one finding': {
-      drawing: two().set('F1', { rating: 32 }).set('P1', { rating: 32 }).set('Q1', { rating: 32 }).set('Q2', { rating: 32 }),
+      drawing: two()
+        .set('F1', { rating: 32 })
+        .set('P1', { rating: 32 })
+        .set('Q1', { rating: 32 })
+        .set('Q2', { rating: 32 }),
       findings: [{ parts: ['F1', 'P1', 'Q1', 'Q2'] }],
       also: [],
     },
@@ -43,7 +47,10 @@ testRule(overloadedMain, {
 
 testRemedies(overloadedMain, {
   'a larger main switch': { drawing: two().set('Q1', { rating: 32 }), offers: ['Fit one of 40 A'] },
-  'a larger rcd would still be below its fuse, so it is not offered': { drawing: two().set('Q2', { rating: 25 }), offers: [] },
+  'a larger rcd would still be below its fuse, so it is not offered': {
+    drawing: two().set('Q2', { rating: 25 }),
+    offers: [],
+  },
 });
 
 it('names what it waits for', () => {

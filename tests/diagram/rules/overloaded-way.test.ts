@@ -21,7 +21,10 @@ testRule(overloadedWay, {
       .part('plug', 'XP', 'study', { in: 'X5' }),
   },
   invalid: {
-    'one watt above 16 A': { drawing: heated(3681), findings: [{ parts: ['Q12'], severity: 'defect', conditions: ['mains'], message: /16 A/ }] },
+    'one watt above 16 A': {
+      drawing: heated(3681),
+      findings: [{ parts: ['Q12'], severity: 'defect', conditions: ['mains'], message: /16 A/ }],
+    },
     'the power factor counts: 3400 W at 0.9 are 16.4 A': {
       drawing: heated(3400).set('E5', { pf: 0.9 }),
       findings: [{ parts: ['Q12'], message: /16\.4 A/ }],
@@ -53,8 +56,7 @@ testRemedies(overloadedWay, {
 });
 
 it('names what it waits for', () => {
-  expect(lacksOf(overloadedWay, heated(1000).set('E5', { watts: undefined }).set('Q12', { rating: undefined }))).toEqual([
-    'the rated current of Q12',
-    'the watts of E5',
-  ]);
+  expect(
+    lacksOf(overloadedWay, heated(1000).set('E5', { watts: undefined }).set('Q12', { rating: undefined })),
+  ).toEqual(['the rated current of Q12', 'the watts of E5']);
 });

@@ -7,7 +7,8 @@ import { testRule } from '../rule-tester';
 /** Ways of these ratings behind an rcd, behind a fuse of 63 A. */
 const behind = (rating: number, ways: readonly number[]) =>
   ways.reduce<Home>(
-    (home, each, i) => home.way(`Q${11 + i}`, 'study', { rating: each }, { csa: 6 }).socket(`X${11 + i}`, `Q${11 + i}`, { rating: 6 }),
+    (home, each, i) =>
+      home.way(`Q${11 + i}`, 'study', { rating: each }, { csa: 6 }).socket(`X${11 + i}`, `Q${11 + i}`, { rating: 6 }),
     new Home({ rcd: { rating } }).place('study'),
   );
 
@@ -26,7 +27,9 @@ testRule(rcdUnderrated, {
   },
 });
 
-testRemedies(rcdUnderrated, { 'one that is large enough': { drawing: behind(40, [16, 16, 9]), offers: ['Fit an rcd of 50 A'] } });
+testRemedies(rcdUnderrated, {
+  'one that is large enough': { drawing: behind(40, [16, 16, 9]), offers: ['Fit an rcd of 50 A'] },
+});
 
 it('names what it waits for', () => {
   expect(lacksOf(rcdUnderrated, smallHome().set('Q2', { rating: undefined }))).toEqual(['the rated current of Q2']);

@@ -4,7 +4,8 @@ import { testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
 
 /** A one-pole main switch, the neutral straight to its bar. */
-const onePole = (home: Home) => home.set('Q1', { poles: 1 }).cut('P1:3', 'Q1:3').cut('Q1:4', 'NB0').neutral('P1:3', 'NB0');
+const onePole = (home: Home) =>
+  home.set('Q1', { poles: 1 }).cut('P1:3', 'Q1:3').cut('Q1:4', 'NB0').neutral('P1:3', 'NB0');
 
 testRule(singlePoleMain, {
   valid: {
@@ -12,7 +13,10 @@ testRule(singlePoleMain, {
     'a home without any main switch is that rule': smallHome().drop('Q1').line('P1:4', 'LB0').neutral('P1:3', 'NB0'),
   },
   invalid: {
-    'one pole': { drawing: onePole(smallHome()), findings: [{ parts: ['Q1'], severity: 'defect', conditions: ['mains'] }] },
+    'one pole': {
+      drawing: onePole(smallHome()),
+      findings: [{ parts: ['Q1'], severity: 'defect', conditions: ['mains'] }],
+    },
     'two poles with the neutral led past': {
       drawing: smallHome().cut('P1:3', 'Q1:3').cut('Q1:4', 'NB0').neutral('P1:3', 'NB0'),
       findings: [{ parts: ['Q1'], message: /passes Q1 by/ }],

@@ -32,6 +32,9 @@ testRule(thinBatteryLead, {
 });
 
 testRemedies(thinBatteryLead, {
-  'the size that carries current and fuse': { drawing: backupHome().cable('kd', 16, 0.3), offers: ['Fit leads of 25 mm2'] },
+  'the size that carries current and fuse': {
+    drawing: backupHome().cable('kd', 16, 0.3),
+    offers: ['Fit leads of 25 mm2'],
+  },
   'the size that loses little enough': { drawing: backupHome().cable('kd', 16, 0.8), offers: ['Fit leads of 25 mm2'] },
 });

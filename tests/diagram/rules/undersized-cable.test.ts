@@ -7,12 +7,19 @@ import { lacksOf, testRemedies } from '../remedy-tester';
 import { findingsOf, testRule } from '../rule-tester';
 
 /** An outlet behind a device of so many amperes and a run of this size and laying. */
-const run = (rating: number, csa: number, laying: Partial<Cable> = {}, options: ConstructorParameters<typeof Home>[0] = {}) =>
-  smallHome(options).way('Q12', 'study', { rating }).cable('k12', csa, 9, laying).socket('X5', 'Q12', { rating: 6 });
+const run = (
+  rating: number,
+  csa: number,
+  laying: Partial<Cable> = {},
+  options: ConstructorParameters<typeof Home>[0] = {},
+) => smallHome(options).way('Q12', 'study', { rating }).cable('k12', csa, 9, laying).socket('X5', 'Q12', { rating: 6 });
 
 /** Outlets on a ring of so thick a cable, with a spur to one more. */
 const ring = (csa: number, practice: 'GB' | 'IEC', spur = false) => {
-  const home = new Home({ practice }).place('study').part('mcb', 'Q12', 'hall', { poles: 1, rating: 32, curve: 'B', icn: 6000, label: 'Ring' }).line('LB', 'Q12:1');
+  const home = new Home({ practice })
+    .place('study')
+    .part('mcb', 'Q12', 'hall', { poles: 1, rating: 32, curve: 'B', icn: 6000, label: 'Ring' })
+    .line('LB', 'Q12:1');
   const ends = ['X1', 'X2', 'X3'];
   for (const id of [...ends, ...(spur ? ['X4'] : [])]) home.part('socket', id, 'study', { rating: 13, load: 300 });
   const link = (id: string, from: { L: string; N: string; E: string }, to: string) =>
@@ -50,7 +57,10 @@ testRule(undersizedCable, {
       drawing: run(13, 1.5, { method: 'B1', grouped: 3 }),
       findings: [{ parts: ['Q12'], message: /12\.3 A/ }],
     },
-    '20 A on 2.5 mm2 in 50 degC: 27 x 0.71 = 19.2 A': { drawing: run(20, 2.5, { ambient: 50 }), findings: [{ message: /19\.2 A/ }] },
+    '20 A on 2.5 mm2 in 50 degC: 27 x 0.71 = 19.2 A': {
+      drawing: run(20, 2.5, { ambient: 50 }),
+      findings: [{ message: /19\.2 A/ }],
+    },
     'two thin runs of one way are one finding': {
       drawing: run(20, 1.5).lamp('E7', 'S7', 'Q12'),
       findings: [{ parts: ['Q12'], message: /1 more/ }],
@@ -60,7 +70,10 @@ testRule(undersizedCable, {
       findings: [{ parts: ['F1'], message: /63 A/ }],
       also: ['slow-disconnection'],
     },
-    'the same ring where the practice has none: 32 A on 27 A': { drawing: ring(2.5, 'IEC'), findings: [{ parts: ['Q12'] }] },
+    'the same ring where the practice has none: 32 A on 27 A': {
+      drawing: ring(2.5, 'IEC'),
+      findings: [{ parts: ['Q12'] }],
+    },
     'a ring of 1.5 mm2 is too thin everywhere': { drawing: ring(1.5, 'GB'), findings: [{ parts: ['Q12'] }] },
     'a British ring that was opened is a radial way': {
       drawing: ring(2.5, 'GB').cut('X2:L', 'X3:L'),
@@ -81,7 +94,9 @@ testRemedies(undersizedCable, {
 });
 
 it('finds the planted 1.5 mm2 behind 20 A, and does not call the way overloaded', () => {
-  const read = readDocument(JSON.parse(readFileSync(new URL('../../fixtures/homes/undersized-cable.json', import.meta.url), 'utf8')));
+  const read = readDocument(
+    JSON.parse(readFileSync(new URL('../../fixtures/homes/undersized-cable.json', import.meta.url), 'utf8')),
+  );
   if (!read.ok) throw new Error('the fixture is no document');
   const findings = findingsOf(read.document).filter(({ severity }) => severity !== 'advice');
   expect(findings.map(({ rule, parts }) => [rule, ...parts])).toEqual([['undersized-cable', 'Q13']]);
@@ -89,5 +104,7 @@ it('finds the planted 1.5 mm2 behind 20 A, and does not call the way overloaded'
 
 it('names what it waits for', () => {
   expect(lacksOf(undersizedCable, run(32, 4).set('Q12', { rating: undefined }))).toEqual(['the rated current of Q12']);
-  expect(lacksOf(undersizedCable, run(32, 3))).toEqual(['a size and laying that the table of the practice holds for the 3 mm2 run']);
+  expect(lacksOf(undersizedCable, run(32, 3))).toEqual([
+    'a size and laying that the table of the practice holds for the 3 mm2 run',
+  ]);
 });

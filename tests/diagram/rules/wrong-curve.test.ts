@@ -21,7 +21,10 @@ testRule(wrongCurve, {
     'a breaker of unknown type is not judged': pump(12).set('Q12', { curve: undefined }),
   },
   invalid: {
-    'a hair above on B6': { drawing: pump(4.26), findings: [{ parts: ['Q12', 'E5'], severity: 'advice', conditions: ['mains'], message: /18 A/ }] },
+    'a hair above on B6': {
+      drawing: pump(4.26),
+      findings: [{ parts: ['Q12', 'E5'], severity: 'advice', conditions: ['mains'], message: /18 A/ }],
+    },
     'and on C6': { drawing: pump(7.5, 'C'), findings: [{ parts: ['Q12', 'E5'] }] },
     'lamp drivers that one switch starts together': {
       drawing: smallHome()

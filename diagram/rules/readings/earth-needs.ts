@@ -1,0 +1,58 @@
+import { adiabaticMm2, kFactor } from '../../calculations/adiabatic';
+import type { Cable } from '../../document/schema';
+import type { Context } from '../context';
+import { figuresOf } from './figures';
+
+/** What a fault asks of the earth core of one cable. */
+export interface EarthNeed {
+  cable: Cable;
+  mm2: number;
+  /** id of the device of the way that asks for most */
+  device: string;
+  /** true where the table decides, for want of the fault's heat */
+  byTable: boolean;
+  wires: Set<string>;
+  points: Set<string>;
+}
+
+/** Table 54.2 of IEC 60364-5-54 (54.7 of BS 7671): by the line conductor, where the heat of the fault is not known. */
+const tableMm2 = (lineMm2: number): number => (lineMm2 <= 16 ? lineMm2 : lineMm2 <= 35 ? 16 : lineMm2 / 2);
+
+/** The need of every cable with an earth core on the way to something earthed: the most of all ways behind it. */
+export function earthNeeds(context: Context): EarthNeed[] {
+  const { graph } = context;
+  const { ways, earth } = figuresOf(context);
+  const found = new Map<string, EarthNeed>();
+  // By the table only beside a line core: its size is what the table goes by.
+  const shared = new Set(
+    context.document.wires.flatMap(({ role, cable }) => (cable !== undefined && role !== 'earth' ? [cable] : [])),
+  );
+  for (const { drawn, fault, device } of ways.values()) {
+    // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
+    if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;
+    for (const { part, isPoint } of drawn) {
+      for (const number of earth.path(graph.node(part.id, isPoint ? 'E' : 'in.E')) ?? []) {
+        const { wire } = graph.edges[number]!;
+        const cable = wire?.role === 'earth' && wire.cable !== undefined ? graph.cables.get(wire.cable) : undefined;
+        if (!wire || !cable || (!fault && !shared.has(cable.id))) continue;
+        const asked = fault
+          ? adiabaticMm2(fault.energyA2s, kFactor(cable.material, cable.insulation, true))
+          : tableMm2(cable.csa);
+        const known = found.get(cable.id);
+        const need: EarthNeed = known ?? {
+          cable,
+          mm2: 0,
+          device: device.id,
+          byTable: !fault,
+          wires: new Set(),
+          points: new Set(),
+        };
+        if (asked > need.mm2) Object.assign(need, { mm2: asked, device: device.id, byTable: !fault });
+        need.wires.add(wire.id);
+        need.points.add(part.id);
+        found.set(cable.id, need);
+      }
+    }
+  }
+  return [...found.values()];
+}
