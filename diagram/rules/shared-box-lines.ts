@@ -2,6 +2,7 @@ import { polesOf } from '../document/kinds';
 import type { Part } from '../document/schema';
 import { recalled } from './clauses';
 import type { Context } from './context';
+import { once } from './readings/once';
 import { sayBoard, switchboards } from './readings/switchboards';
 import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
@@ -13,16 +14,34 @@ const isolates = (part: Part): boolean =>
   part.kind === 'rcbo' ||
   (part.kind === 'mcb' && polesOf(part) === 2);
 
-/** Devices before a way that isolate it, the main switch apart. */
-function isolatorsOf(context: Context, device: string): Set<string> {
-  const found = new Set<string>();
+/** By way, the devices before it that isolate it, the main switch apart. */
+const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
+  const found = new Map<string, Set<string>>();
   for (const { points } of context.evaluated)
-    for (const state of points.values())
-      if (state.overcurrent === device)
-        for (const id of state.lineDevices)
-          if (id !== context.mainSwitch?.id && isolates(context.graph.parts.get(id)!)) found.add(id);
+    for (const { overcurrent, lineDevices } of points.values()) {
+      if (overcurrent === null) continue;
+      const isolators = found.get(overcurrent) ?? new Set<string>();
+      for (const id of lineDevices)
+        if (id !== context.mainSwitch?.id && isolates(context.graph.parts.get(id)!)) isolators.add(id);
+      found.set(overcurrent, isolators);
+    }
   return found;
-}
+});
+
+/** By place and board, the ways whose line runs through it. */
+const waysByBoard = once((context: Context): Map<string, Set<string>> => {
+  const found = new Map<string, Set<string>>();
+  const devices = new Set(context.ways.map(({ device }) => device));
+  for (const { device, nodes } of context.sections) {
+    if (!devices.has(device.id)) continue;
+    for (const node of nodes) {
+      const { place, board } = context.graph.partOf[node]!;
+      const key = `${place ?? ''} ${board ?? ''}`;
+      found.set(key, (found.get(key) ?? new Set<string>()).add(device.id));
+    }
+  }
+  return found;
+});
 
 /** One switchboard with lines of two ways that nothing but the main switch isolates together. */
 export const sharedBoxLines: Rule = {
@@ -40,15 +59,11 @@ export const sharedBoxLines: Rule = {
     const devices = new Set(context.ways.map(({ device }) => device));
     for (const board of switchboards(context)) {
       if (board.parts.some(({ id }) => devices.has(id))) continue;
-      const here = new Set(board.parts.map(({ id }) => id));
-      const ways = context.ways.filter(({ device }) => {
-        const section = context.sections.find((each) => each.device.id === device)!;
-        return [...section.nodes].some((node) => here.has(context.graph.partOf[node]!.id));
-      });
+      const here = waysByBoard(context).get(`${board.place} ${board.board ?? ''}`) ?? new Set<string>();
+      const ways = here.size < 2 ? [] : context.ways.filter(({ device }) => here.has(device));
       if (ways.length < 2) continue;
-      const [first, ...rest] = ways.map(({ device }) => isolatorsOf(context, device));
-      const common = [...first!].some((id) => rest.every((others) => others.has(id)));
-      if (common) continue;
+      const [first, ...rest] = ways.map(({ device }) => isolatorsByWay(context).get(device) ?? new Set<string>());
+      if ([...first!].some((id) => rest.every((others) => others.has(id)))) continue;
       yield {
         heading: `${ways.length} ways in ${sayBoard(context, board)}`,
         message: `${capital(sayBoard(context, board))} holds lines of ${sayParts(
