@@ -192,10 +192,10 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
       tools={
         rights.edit && (
           <>
-            <Button className="min-h-11" onClick={undo}>
+            <Button className={`min-h-11 ${editing ? '' : 'max-sm:hidden'}`} onClick={undo}>
               Undo
             </Button>
-            <Button className="min-h-11" onClick={redo}>
+            <Button className="min-h-11 max-sm:hidden" onClick={redo}>
               Redo
             </Button>
             <Button

@@ -13,9 +13,15 @@ interface Row {
   cable: string;
 }
 
-const endName = (doc: Installation, [id, mark]: End): string => {
+const CORE: Partial<Record<Wire['role'], string>> = { neutral: 'N', earth: 'PE' };
+
+/** "S1.2"; a joint, which has no designation, by its conductor. */
+const endName = (doc: Installation, [id, mark]: End, role: Wire['role']): string => {
   const part = doc.parts.find((candidate) => candidate.id === id);
-  return part ? `${nameOf(doc, part)}.${mark}` : `${id}.${mark} is not drawn`;
+  if (!part) return `${id}.${mark} is not drawn`;
+  if (part.kind === 'joint') return `joint ${CORE[role] ?? 'L'}.${mark}`;
+  if (part.kind === 'line-bar' || part.kind === 'bond') return `${part.kind === 'bond' ? 'bond' : 'line bar'}.${mark}`;
+  return `${nameOf(doc, part)}.${mark}`;
 };
 
 function rowsOf(doc: Installation, place: string): Row[] {
@@ -29,8 +35,8 @@ function rowsOf(doc: Installation, place: string): Row[] {
       const csa = wire.cable ? cables.get(wire.cable)?.csa : undefined;
       return {
         wire,
-        from: endName(doc, own),
-        to: endName(doc, other),
+        from: endName(doc, own, wire.role),
+        to: endName(doc, other, wire.role),
         cable: [wire.colour, csa].filter(Boolean).join(' '),
       };
     })

@@ -36,6 +36,8 @@ const PAN_MOUSE = [1, 2];
 const MANY = ['Control', 'Meta', 'Shift'];
 const NO_ORIGIN = { hideAttribution: true };
 const LETTERS_FROM = 0.42;
+/** below it the body size of the lettering would be under 11 px */
+const READABLE = 0.9;
 const LARGE = 400;
 /** px on the screen within which a terminal is taken: half of 44 */
 const REACH = 22;
@@ -97,12 +99,16 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
   const all = useCallback(() => {
     const [w = 0, h = 0] = box.split(' ').map(Number);
     if (w === 0 || h === 0) return;
-    // The whole sheet, but never so small that its lettering cannot be read: then from the origin.
-    const zoom = Math.min(1.6, Math.max(0.55, Math.min((w - 16) / width, (h - 16) / height)));
-    const x = Math.max(8, (w - width * zoom) / 2);
+    // The whole sheet, but never so small that its lettering cannot be read: then the source and what lies about it.
+    const fit = Math.min((w - 16) / width, (h - 16) / height);
+    const zoom = Math.min(1.6, Math.max(READABLE, fit));
+    const source = scene.parts.find((part) => part.kind === 'supply');
+    const centre = px(source ? source.x + source.width / 2 : scene.width / 2) * zoom;
+    const spare = w - width * zoom;
+    const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
     const y = Math.max(8, (h - height * zoom) / 2);
     void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
-  }, [box, flow, width, height]);
+  }, [box, flow, width, height, scene]);
 
   const shown = useRef<string | null>(null);
   const page = `${scene.face} ${scene.place ?? ''}`;

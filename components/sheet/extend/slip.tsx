@@ -116,9 +116,7 @@ export function SlipPanel({ slip, name, onLeave }: SlipProps) {
   useEffect(() => field.current?.focus({ preventScroll: true }), [name]);
   useEffect(() => {
     document.getElementById(`${list}-${slip.index}`)?.scrollIntoView({ block: 'nearest' });
-  },
-    [list, slip.index],
-  );
+  }, [list, slip.index]);
 
   const leave = () => {
     slip.leave();

@@ -68,9 +68,9 @@ function useDangers(
     const look = async () => {
       const found = new Map<string, string>();
       for (const line of lines.slice(0, LOOKED_AT)) {
-        const answer = await examiner.current?.ask(applyPatch(doc, line.place(usual(line)).patch));
+        const answer = await examiner.current?.examine(applyPatch(doc, line.place(usual(line)).patch));
         if (!wanted) return;
-        const danger = answer && 'examination' in answer ? newDangers(now, answer.examination)[0] : undefined;
+        const danger = answer && 'value' in answer ? newDangers(now, answer.value)[0] : undefined;
         if (danger) found.set(line.id, danger.heading);
       }
       if (wanted) setDangers(found);

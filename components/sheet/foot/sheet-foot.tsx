@@ -47,10 +47,10 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
     <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
       <Strip scene={scene} notes={notes} />
       <div className="flex min-w-0 flex-1 flex-col justify-between gap-1">
-        <p className="truncate leading-[15px]" title={said}>
+        <p className={`leading-[15px] ${notice ? 'truncate' : 'line-clamp-2'}`} title={said}>
           {said}
         </p>
-        <p role="status" className="truncate text-small leading-[14px] text-grey" title={notice}>
+        <p role="status" className="truncate text-small leading-[14px] text-grey empty:hidden" title={notice}>
           {notice}
         </p>
         <div className="flex flex-wrap gap-x-3 text-small leading-[14px]">

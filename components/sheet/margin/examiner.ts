@@ -1,26 +1,42 @@
+import type { FaultWalk } from '@/diagram/circuit/fault-types';
 import type { Installation } from '@/diagram/document/schema';
 import type { Examination } from '@/diagram/rules/examination';
+import type { Finding, Remedy } from '@/diagram/rules/types';
 
-type Answer = { id: number; examination: Examination; ms: number } | { id: number; failure: string };
-export type Examined = { examination: Examination; ms: number } | { failure: string };
+/** What a finding in hand needs beyond its words. */
+export interface Proof {
+  /** edits that put it right, each of them tried */
+  remedies: Remedy[];
+  /** the fault that shows it; null where none does or none can be walked */
+  walk: FaultWalk | null;
+  /** the value without which the fault cannot be walked */
+  cannot: string | null;
+}
+
+export type Task =
+  | { kind: 'examine'; document: Installation }
+  | { kind: 'prove'; document: Installation; finding: Finding };
+
+type Answer = { id: number; value: Examination | Proof; ms: number } | { id: number; failure: string };
+export type Outcome<T> = { value: T; ms: number } | { failure: string };
 
 interface Question {
   id: number;
-  document: Installation;
-  resolve: (answer: Examined | null) => void;
+  task: Task;
+  resolve: (answer: Outcome<Examination | Proof> | null) => void;
 }
 
 /** The part of a worker that is used here; a test brings its own. */
 export interface ExamineWorker {
-  postMessage(message: unknown): void;
+  postMessage(message: { id: number; task: Task }): void;
   terminate(): void;
   onmessage: ((event: MessageEvent<Answer>) => void) | null;
   onerror: ((event: ErrorEvent) => void) | null;
 }
 
 /**
- * Examines documents in a worker, one at a time. Of those that wait only the newest is examined; an answer that is no longer
- * asked for is null.
+ * Asks a worker, one task at a time. Of those that wait only the newest is done; an answer that is no longer asked for is
+ * null.
  */
 export class Examiner {
   private worker: ExamineWorker | null = null;
@@ -30,45 +46,51 @@ export class Examiner {
 
   constructor(private readonly makeWorker: () => ExamineWorker) {}
 
-  ask(document: Installation): Promise<Examined | null> {
+  examine(document: Installation): Promise<Outcome<Examination> | null> {
+    return this.ask({ kind: 'examine', document }) as Promise<Outcome<Examination> | null>;
+  }
+
+  prove(document: Installation, finding: Finding): Promise<Outcome<Proof> | null> {
+    return this.ask({ kind: 'prove', document, finding }) as Promise<Outcome<Proof> | null>;
+  }
+
+  private ask(task: Task): Promise<Outcome<Examination | Proof> | null> {
     return new Promise((resolve) => {
       this.waiting?.resolve(null);
-      this.waiting = { id: this.next++, document, resolve };
+      this.waiting = { id: this.next++, task, resolve };
       this.start();
     });
   }
 
   private start(): void {
     if (this.running || !this.waiting) return;
-    this.running = this.waiting;
+    const asked = this.waiting;
+    this.running = asked;
     this.waiting = null;
-    this.ready().postMessage({ id: this.running.id, document: this.running.document });
+    this.ready().postMessage({ id: asked.id, task: asked.task });
   }
 
   private ready(): ExamineWorker {
     if (this.worker) return this.worker;
     const worker = this.makeWorker();
-    worker.onmessage = ({ data }) =>
-      this.answer(
-        data.id,
-        'failure' in data ? { failure: data.failure } : { examination: data.examination, ms: data.ms },
-      );
+    worker.onmessage = ({ data }) => this.answer(data);
     worker.onerror = (event) => {
       const asked = this.running;
       this.close();
-      if (asked) asked.resolve({ failure: event.message || 'The examination could not be loaded.' });
+      asked?.resolve({ failure: event.message || 'The examination could not be loaded.' });
       this.start();
     };
     this.worker = worker;
     return worker;
   }
 
-  private answer(id: number, answer: Examined): void {
+  private answer(answer: Answer): void {
     const asked = this.running;
-    if (asked?.id !== id) return;
+    if (asked?.id !== answer.id) return;
     this.running = null;
-    // A newer drawing waits: this answer is about one that is no longer on the sheet.
-    asked.resolve(this.waiting ? null : answer);
+    const outcome = 'failure' in answer ? { failure: answer.failure } : { value: answer.value, ms: answer.ms };
+    // A newer task waits: this answer is about a drawing that is no longer on the sheet.
+    asked.resolve(this.waiting ? null : outcome);
     this.start();
   }
 

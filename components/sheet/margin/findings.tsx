@@ -6,12 +6,19 @@ import { Button, buttonClass } from '@/components/ui/button';
 import { TextField } from '@/components/ui/field';
 import { Note } from '@/components/ui/note';
 import { Segmented } from '@/components/ui/segmented';
+import { withPlaces } from '@/diagram/commands/place-new';
+import type { Patch } from '@/diagram/document/patch';
 import type { Silence } from '@/diagram/document/schema';
 import type { Finding } from '@/diagram/rules/types';
 import type { Hands } from '../hands';
+import { useSheet } from '../use-drawing';
 import { useView, useViewStore, type Condition } from '../view';
 import type { ExaminationState } from './use-examination';
 import { keyOf, type MarkedNote } from './notes';
+import { ProofView } from './proof-view';
+import { useProof } from './use-proof';
+import type { Proof } from './examiner';
+import { applyPatch } from '@/diagram/document/patch';
 
 const CONDITIONS: readonly { value: Condition; label: string }[] = [
   { value: 'all', label: 'all' },
@@ -60,16 +67,22 @@ function SilenceForm({ finding, by, hands, onDone }: { finding: Finding; by: str
 interface FindingNoteProps {
   note: MarkedNote;
   inHand: boolean;
+  /** remedies and proof, of the note in hand */
+  proof: Proof | null;
   by: string;
   maySilence: boolean;
   hands: Hands;
   onTake(): void;
 }
 
-function FindingNote({ note, inHand, by, maySilence, hands, onTake }: FindingNoteProps) {
+function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake }: FindingNoteProps) {
   const { finding } = note;
   const box = useRef<HTMLDivElement>(null);
   const [silencing, setSilencing] = useState(false);
+  const [shown, setShown] = useState(false);
+  const preview = (patch: Patch | null) => {
+    hands.view.getState().set({ ghost: patch && applyPatch(hands.doc, patch) });
+  };
   useEffect(() => {
     if (inHand) box.current?.scrollIntoView({ block: 'nearest' });
   }, [inHand]);
@@ -88,8 +101,30 @@ function FindingNote({ note, inHand, by, maySilence, hands, onTake }: FindingNot
         ))}
         actions={
           <>
+            {hands.mayEdit &&
+              proof?.remedies.map((remedy) => (
+                <Button
+                  key={remedy.label}
+                  tone="red"
+                  onMouseEnter={() => preview(remedy.patch)}
+                  onMouseLeave={() => preview(null)}
+                  onFocus={() => preview(remedy.patch)}
+                  onBlur={() => preview(null)}
+                  onClick={() => {
+                    preview(null);
+                    hands.do({ label: remedy.label, patch: withPlaces(hands.doc, remedy.patch) });
+                  }}
+                >
+                  {remedy.label}
+                </Button>
+              ))}
+            {proof?.walk && (
+              <Button aria-expanded={shown} onClick={() => setShown(!shown)}>
+                Show me
+              </Button>
+            )}
             <Button onClick={onTake} aria-pressed={inHand}>
-              Show
+              Go there
             </Button>
             <Link href={`/rules/${finding.rule}`} className={buttonClass()}>
               Read the lesson
@@ -99,6 +134,8 @@ function FindingNote({ note, inHand, by, maySilence, hands, onTake }: FindingNot
         }
       >
         {finding.message}
+        {inHand && shown && proof?.walk && <ProofView walk={proof.walk} document={hands.doc} />}
+        {inHand && proof?.cannot && <span className="mt-1 block text-grey">The fault {proof.cannot}.</span>}
         {finding.clause && finding.clause.length > 0 && (
           <span className="mt-1 block text-small text-grey">leans on {finding.clause.join('; ')}</span>
         )}
@@ -128,6 +165,8 @@ export function Findings({ state, notes, hands, by, mayEdit, maySilenceDanger, o
   const severities = useView((current) => current.severities);
   const inHand = useView((current) => current.finding);
   const { examination, failure } = state;
+  const document = useSheet(hands.store, (current) => current.document);
+  const proof = useProof(document, notes.find((note) => note.key === inHand)?.finding ?? null);
   if (failure)
     return (
       <Note tone="finding" heading="The drawing could not be examined">
@@ -147,7 +186,7 @@ export function Findings({ state, notes, hands, by, mayEdit, maySilenceDanger, o
     <div className="flex flex-col gap-5" aria-busy={state.stale}>
       <div className="flex flex-col gap-2">
         <h2 className="text-head font-bold">
-          {words(open.length)} <span className="ml-2 font-normal text-grey">n next</span>
+          {words(open.length)} {notes.length > 0 && <span className="ml-2 font-normal text-grey">n next</span>}
         </h2>
         {backup && (
           <Segmented
@@ -184,6 +223,7 @@ export function Findings({ state, notes, hands, by, mayEdit, maySilenceDanger, o
           by={by}
           hands={hands}
           inHand={inHand === note.key}
+          proof={inHand === note.key ? proof : null}
           maySilence={mayEdit && (note.finding.severity !== 'danger' || maySilenceDanger)}
           onTake={() => onTake(note)}
         />

@@ -37,10 +37,10 @@ export function useExamination(document: Installation | null): ExaminationState 
   useEffect(() => {
     if (!document) return;
     let wanted = true;
-    void examiner.current?.ask(document).then((answer) => {
+    void examiner.current?.examine(document).then((answer) => {
       if (!wanted || !answer) return;
       if ('failure' in answer) setState((before) => ({ ...before, of: document, failure: answer.failure }));
-      else setState({ of: document, examination: answer.examination, failure: null, ms: answer.ms });
+      else setState({ of: document, examination: answer.value, failure: null, ms: answer.ms });
     });
     return () => {
       wanted = false;

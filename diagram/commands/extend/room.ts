@@ -132,7 +132,7 @@ export const onToNextRoom: Recipe = function* (at) {
         let source = intoBox(s, from, place, boardOf(s, place), size, run);
         for (let n = 0; n < Math.max(1, choice.lamps ?? Math.max(1, lamps)); n++)
           source = { ...source, line: switchedLamp(s, source, choice.watts ?? USUAL_WATTS.lamp).loop, run: undefined };
-        return s.command(`Loop on to ${theRoom(room)}`, source.line);
+        return s.command(`Loop on to the ${room.name.toLowerCase()}`, source.line);
       },
     } satisfies Suggestion;
   }

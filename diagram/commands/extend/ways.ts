@@ -176,7 +176,10 @@ function line(at: At, room: Room, kind: Kind, index: number, newBreaker: boolean
         from = [id, '2'];
       } else nameBreaker(s, room, kind);
       const next = fillRoom(s, room, kind, newBreaker ? from : s.tap(from), { ratingA, curve }, chosen);
-      return s.command(`Place ${newBreaker ? 'a way' : 'a cable'} to ${theRoom(room)}, ${kind.what}`, next);
+      return s.command(
+        `Place ${newBreaker ? 'a way' : 'a cable'} to the ${room.name.toLowerCase()}, ${kind.what}`,
+        next,
+      );
     },
   };
 }

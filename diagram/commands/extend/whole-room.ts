@@ -4,7 +4,7 @@ import { USUAL_WATTS, emptyRoom } from '../../survey/columns';
 import { draftPatch } from '../../survey/draft';
 import { nextOrder } from '../../survey/parse';
 import { withPlaces } from '../place-new';
-import { roomsOf, theRoom, type Room } from './rooms';
+import { roomsOf, type Room } from './rooms';
 import type { At, Choice, Count, Recipe } from './types';
 
 /** A room with all that it holds, drawn as the survey would draw it and written into the survey as well. */
@@ -79,7 +79,7 @@ export const wholeRooms: Recipe = function* (at) {
         const drawn = { ...applyPatch(alone, draftPatch(alone, at.hoursWanted)) };
         const survey = [...(at.doc.survey ?? []).filter((other) => other.id !== row.id), row];
         const patch = diff(at.doc, applyPatch({ ...drawn, survey }, {}));
-        return { label: `Draw ${theRoom(room)} whole`, patch: withPlaces(at.doc, patch), next: at.end };
+        return { label: `Draw the ${room.name.toLowerCase()} whole`, patch: withPlaces(at.doc, patch), next: at.end };
       },
     };
   }
