@@ -2,7 +2,7 @@ import type { Part, PartOf } from '../document/schema';
 import { amps, exceeds } from './readings/amounts';
 import { recalled } from './clauses';
 import type { Context } from './context';
-import { figuresOf, onMains } from './readings/figures';
+import { figuresOf, flowsIn } from './readings/figures';
 import { lackOfRating } from './readings/lacking';
 import { once } from './readings/once';
 import { changePart } from './readings/remedies';
@@ -71,7 +71,7 @@ export const overloadedMain: Rule = {
         heading: `${capital(sayParts(context, ids, 4))} ${be(ids.length)} asked for ${amps(demandA)}`,
         message: `After the allowances ${amps(demandA)} may flow at once; ${sayParts(context, ids)} ${be(ids.length)} rated from ${amps(least)}.`,
         parts: ids,
-        conditions: onMains(context),
+        conditions: flowsIn(context, ids),
         remedies: devices.length === 1 ? largerOf(context, devices[0]!, demandA) : [],
       };
     }

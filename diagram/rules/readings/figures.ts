@@ -16,6 +16,12 @@ export const fedIn = ({ evaluated }: Context, drawn: readonly Drawn[]): string[]
     .filter(({ points }) => drawn.some(({ part }) => points.get(part.id)?.fed))
     .map(({ condition }) => condition.name);
 
+/** Names of the conditions in which current flows through any of these devices. */
+export const flowsIn = ({ evaluated }: Context, devices: readonly string[]): string[] =>
+  evaluated
+    .filter(({ points }) => [...points.values()].some(({ lineDevices }) => lineDevices.some((id) => devices.includes(id))))
+    .map(({ condition }) => condition.name);
+
 /** Names of the conditions in which the supply is live. */
 export const onMains = ({ evaluated }: Context): string[] =>
   evaluated.filter(({ condition }) => condition.base === 'mains').map(({ condition }) => condition.name);

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { Home } from '@/diagram/document/home';
+import { backupHome, Home } from '@/diagram/document/home';
 import { overloadedMain } from '@/diagram/rules/overloaded-main';
 import { lacksOf, testRemedies } from '../remedy-tester';
 import { testRule } from '../rule-tester';
@@ -40,6 +40,11 @@ testRule(overloadedMain, {
         .set('Q2', { rating: 32 }),
       findings: [{ parts: ['F1', 'P1', 'Q1', 'Q2'] }],
       also: [],
+    },
+    'the breaker at the output of an inverter, on battery too': {
+      drawing: backupHome().set('X2', { load: 1300 }).set('G1', { va: 1500, surge: 3000 }).set('Q4', { rating: 5 }),
+      findings: [{ parts: ['Q4'], conditions: ['mains', 'outage', 'main-off'] }],
+      also: ['thin-battery-lead'],
     },
     'an rcd alone': { drawing: two().set('Q2', { rating: 25 }), findings: [{ parts: ['Q2'] }] },
   },
