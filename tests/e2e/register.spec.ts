@@ -29,14 +29,16 @@ test('a search that finds nothing says so and is cleared', async ({ page }) => {
 });
 
 test('a job is edited, archived and taken out again; its cells are safe in a spreadsheet', async ({ page }) => {
+  const place = `Sluice House ${Date.now().toString(36)}`;
+  const found = `/jobs?search=${encodeURIComponent(place)}`;
   await signInAs(page, 'electrician');
   await openPage(page, '/jobs/new');
   await page.getByLabel('Client', { exact: true }).fill('=HYPERLINK("http://elsewhere.example")');
-  await page.getByLabel('Place', { exact: true }).fill('Sluice House');
+  await page.getByLabel('Place', { exact: true }).fill(place);
   await page.getByRole('button', { name: 'Begin the job' }).click();
   await expect(page).toHaveURL(/\/survey$/);
 
-  await openPage(page, '/jobs?search=Sluice');
+  await openPage(page, found);
   const download = page.waitForEvent('download');
   await page.getByRole('button', { name: 'Register as CSV' }).click();
   const text = await readFile((await (await download).path())!, 'utf8');
@@ -48,16 +50,16 @@ test('a job is edited, archived and taken out again; its cells are safe in a spr
   await page.getByRole('button', { name: 'Save' }).click();
   await expect(page).toHaveURL(/\/jobs$/);
 
-  await openPage(page, '/jobs?search=Sluice');
+  await openPage(page, found);
   await page.locator('[data-job]').first().press('Enter');
   await page.getByRole('link', { name: 'Edit the job' }).click();
   await expect(page.getByLabel('Address')).toHaveValue('Sluice Lane');
   await page.getByRole('button', { name: 'Archive it' }).click();
   await page.getByRole('alertdialog').getByRole('button', { name: 'Archive it' }).click();
   await expect(page).toHaveURL(/\/jobs$/);
-  await openPage(page, '/jobs?search=Sluice');
-  await expect(page.getByText('Nothing has "Sluice".')).toBeVisible();
-  await openPage(page, '/jobs?search=Sluice&filter=archived');
+  await openPage(page, found);
+  await expect(page.getByText(`Nothing has "${place}".`)).toBeVisible();
+  await openPage(page, `${found}&filter=archived`);
   await page.locator('[data-job]').first().press('Enter');
   await page.getByRole('link', { name: 'Edit the job' }).click();
   await page.getByRole('button', { name: 'Take it out of the archive' }).click();
