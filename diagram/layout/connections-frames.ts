@@ -3,7 +3,7 @@ import { MODULE } from '../symbols/types';
 import type { PlacedCable } from './connections-ends';
 import type { Page } from './connections-page';
 import type { Body } from './ends';
-import { BODY } from './lettering';
+import { BODY, SMALL } from './lettering';
 import { m } from './overview-metrics';
 import type { SceneFrame } from './scene';
 
@@ -48,9 +48,9 @@ function braceTexts(lines: readonly string[], left: number, y: number, atFoot: b
   if (!atFoot)
     return [
       { text: first, x: left, y: y - 600 + (rest.length === 0 ? 400 : 0), size: BODY, bold: true },
-      ...rest.map((text, i) => ({ text, x: left, y: y - 180 + 350 * i, size: 200, tone: 'grey' as const })),
+      ...rest.map((text, i) => ({ text, x: left, y: y - 150 + 370 * i, size: SMALL, tone: 'grey' as const })),
     ];
   // under a narrow brace every word has a line of its own
   const words = rest.flatMap((text) => text.split(/ (?=to )| (?=from )/));
-  return [{ text: first, x: left, y: y + 450, size: BODY, bold: true }, ...words.map((text, i) => ({ text, x: left, y: y + 800 + 330 * i, size: 180, tone: 'grey' as const }))];
+  return [{ text: first, x: left, y: y + 450, size: BODY, bold: true }, ...words.map((text, i) => ({ text, x: left, y: y + 850 + 370 * i, size: SMALL, tone: 'grey' as const }))];
 }

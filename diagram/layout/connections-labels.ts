@@ -4,7 +4,7 @@ import type { Page } from './connections-page';
 import { isLongBar } from './connections-place';
 import type { Body } from './ends';
 import { Ground, blockTexts, placeLabel, type Anchor, type Label } from './labels';
-import { BODY, breakLines } from './lettering';
+import { BODY, SMALL, breakLines } from './lettering';
 import { printedRef } from './overview-labels';
 import { m } from './overview-metrics';
 import type { OverviewPlan } from './overview-plan';
@@ -22,8 +22,6 @@ export interface PageTexts {
 }
 
 const RING = 150;
-const NAME = 200;
-const MARK = 180;
 /** Ratings are broken to lines of this width. */
 const LINE = 2100;
 const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: Anchor['vertical']): Anchor => ({ x, y, horizontal, vertical });
@@ -82,13 +80,13 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
     for (const { core, x, y } of stubs) {
       const mark = core.core === 'E' ? 'PE' : core.core;
       const lines = [[{ text: mark, bold: true }], ...(core.home && !cable.atFoot ? [[{ text: core.core === 'L' || cable.outgoing ? core.home : `to ${core.home}`, tone: 'grey' as const }]] : [])];
-      keep(texts.wires, { owner: core.wire.id, size: NAME, lines, places: cable.atFoot ? [at(x + 130, y - 100, 'start', 'bottom'), at(x - 130, y - 100, 'end', 'bottom')] : [at(x + 160, y + 100, 'start', 'top'), at(x - 160, y + 100, 'end', 'top')], optional: cable.atFoot });
+      keep(texts.wires, { owner: core.wire.id, size: SMALL, lines, places: cable.atFoot ? [at(x + 130, y - 100, 'start', 'bottom'), at(x - 130, y - 100, 'end', 'bottom')] : [at(x + 160, y + 100, 'start', 'top'), at(x - 160, y + 100, 'end', 'top')], optional: cable.atFoot });
     }
   // marks of terminals: inside the boxes
   for (const part of page.parts)
     for (const t of bodies.get(part.id)!.terminals) {
       const wired = !isLongBar(part.kind) || page.inner.some((w) => isAt(w.from, part.id, t.mark) || isAt(w.to, part.id, t.mark)) || page.cables.some((c) => c.cores.some((core) => isAt(core.here, part.id, t.mark)));
-      if (wired) keep(texts.parts, { owner: part.id, size: MARK, lines: [[{ text: t.mark, tone: 'grey' }]], places: markPlaces(t), optional: true });
+      if (wired) keep(texts.parts, { owner: part.id, size: SMALL, lines: [[{ text: t.mark, tone: 'grey' }]], places: markPlaces(t), optional: true });
     }
   for (const { box } of inside) ground.add(box);
   for (const frame of frames) if (frame.kind === 'switchboard') nameBoard(ground, frame);

@@ -15,7 +15,7 @@ import { m } from './overview-metrics';
 import { planOverview } from './overview-plan';
 import { fillIn } from './positions';
 import { routeAll } from './route';
-import type { Obstacle, RouteEnd, RouteRequest } from './route-grid';
+import type { Obstacle, RouteEnd, RouteRequest, Soft } from './route-grid';
 import { findHops } from './route-marks';
 import type { Point, Scene, ScenePart, SceneRun } from './scene';
 import { byIdOf } from './scene-order';
@@ -128,10 +128,11 @@ function routeCores(page: Page, bodies: ReadonlyMap<string, Body>, cables: reado
     const stub = stubs.get(wire.id);
     const from = at(wire.from, stub)!;
     const to = at(wire.to, stub)!;
-    return { id: wire.id, strand: wire.id, family: wire.id, net: wire.id, from, to, backup: feeds.wires.get(wire.id) === 'backup' };
+    const late = [wire.from, wire.to].some(([id]) => parts.get(id)?.kind === 'spd');
+    return { id: wire.id, ...(late && { late }), strand: wire.id, family: wire.id, net: wire.id, from, to, backup: feeds.wires.get(wire.id) === 'backup' };
   });
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height, ...(isLongBar(parts.get(id)!.kind) && { crossable: true }) }));
-  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], [], { spread: true });
+  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], namesOfCores(cables), { spread: true });
   const paths = requests.map(({ id }) => ({ id, net: id, points: points.get(id)! }));
   return { points, hops: findHops(paths) };
 }
@@ -147,4 +148,9 @@ function edgesOfPage(requests: readonly RouteRequest[], cables: readonly PlacedC
     ...(head ? [{ id: 'head', x: left, y: head.y - m(20), width: right - left, height: m(20) - 1 }] : []),
     ...(foot ? [{ id: 'foot', x: left, y: foot.y + 1, width: right - left, height: m(20) }] : []),
   ];
+}
+
+/** Where the cores' names stand: runs turn below them where they can. */
+function namesOfCores(cables: readonly PlacedCable[]): Soft[] {
+  return cables.flatMap(({ cable, stubs, left, right }): Soft[] => (cable.atFoot ? [] : [{ x: left - m(4), y: stubs[0]!.y + 1, width: right - left + m(8), height: m(4), cost: 1.5 }]));
 }

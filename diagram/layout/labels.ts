@@ -1,4 +1,4 @@
-import { BODY, textDescent, textWidth } from './lettering';
+import { BODY, SMALL, textDescent, textWidth } from './lettering';
 import type { Box } from './route-grid';
 import type { Point, SceneText } from './scene';
 
@@ -145,8 +145,8 @@ export function placeLabel(ground: Ground, label: Label): Block | null {
   if (lines.length === 0) return null;
   const whole: Label = { ...label, lines };
   const tries: Label[] = [whole];
-  if (label.size > 180) tries.push({ ...whole, size: 180 });
-  if (lines.length > 1) tries.push({ ...whole, size: Math.min(label.size, 180), lines: [lines[0]!] });
+  if (label.size > SMALL) tries.push({ ...whole, size: SMALL });
+  if (lines.length > 1) tries.push({ ...whole, size: Math.min(label.size, SMALL), lines: [lines[0]!] });
   for (const candidate of label.places) {
     const block = blockAt(whole, candidate);
     if (ground.overlap(block) === 0) return take(ground, block);

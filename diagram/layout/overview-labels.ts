@@ -3,7 +3,7 @@ import type { Installation, Part } from '../document/schema';
 import { BAR_AXIS } from '../symbols/bar';
 import type { Body } from './ends';
 import type { Anchor, Label, Span } from './labels';
-import { BODY } from './lettering';
+import { BODY, SMALL } from './lettering';
 import type { OverviewPlan } from './overview-plan';
 import { ratingLines, supplyText } from './wording';
 
@@ -127,7 +127,7 @@ export function partLabel(doc: Installation, plan: OverviewPlan, part: Part, bod
         at(dot.x - far, dot.y + 60, 'end', 'top'),
         at(dot.x - far, dot.y - 60, 'end', 'bottom'),
         at(dot.x - far, dot.y + 350, 'end', 'middle'),
-      ], 180);
+      ], SMALL);
     }
     default: {
       // a device in line: its blade leans to one side, its words stand on the other

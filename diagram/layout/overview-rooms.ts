@@ -1,7 +1,7 @@
 import type { Kind, Part } from '../document/schema';
 import { symbolFor } from '../symbols';
 import { MODULE } from '../symbols/types';
-import { textWidth, BODY } from './lettering';
+import { BODY, SMALL, textWidth } from './lettering';
 import { ROOM, WAY_PITCH } from './overview-metrics';
 import { walk, type TreeNode } from './overview-tree';
 import { designation, ratingLines } from './wording';
@@ -94,7 +94,7 @@ function widen(column: Column, item: Item): void {
   // a lever leans to the right, over the designation of its switch
   const isSwitch = item.part.kind.startsWith('switch');
   column.left = Math.max(column.left, isSwitch ? 250 : item.axis, half);
-  column.right = Math.max(column.right, isSwitch ? Math.max(400, 200 + textWidth(designation(item.part), 180)) : symbol.width - item.axis, half);
+  column.right = Math.max(column.right, isSwitch ? Math.max(400, 45 + textWidth(designation(item.part), SMALL)) : symbol.width - item.axis, half);
   column.items.push(item);
 }
 

@@ -3,7 +3,7 @@ import type { OverviewGraph, OverviewRun } from './overview-graph';
 import { BAR } from './overview-metrics';
 import { leavesPlace } from './overview-routes';
 import type { Label } from './labels';
-import { BODY } from './lettering';
+import { BODY, SMALL } from './lettering';
 import type { Box } from './route-grid';
 import type { Feed, Point, SceneRing, SceneRun } from './scene';
 import { cableSize, lengthText } from './wording';
@@ -86,7 +86,7 @@ export function cableLabel(doc: Installation, graph: OverviewGraph, run: Overvie
   return {
     owner: run.id,
     // a loop from room to room is named in small, and only where there is room for it
-    size: loop && !upright ? 180 : BODY,
+    size: loop && !upright ? SMALL : BODY,
     ...(loop && { optional: true }),
     lines: upright ? [[{ text: size }], [{ text: length }]] : [[{ text: size }, { text: length }]],
     places: upright

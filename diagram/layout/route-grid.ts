@@ -35,6 +35,8 @@ export interface RouteRequest {
   net: string;
   from: RouteEnd;
   to: RouteEnd;
+  /** routed after the others: a side branch leaves the straight way to what matters more */
+  late?: boolean;
   /** fed by the backup: it keeps to ground of its own where there is a choice */
   backup?: boolean;
 }

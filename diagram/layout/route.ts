@@ -24,7 +24,7 @@ const isStraight = ({ from, to }: RouteRequest): boolean => from.x === to.x || f
 
 /** The order in which runs are routed: those that can be straight, then by length, then by id. */
 const inOrder = (a: RouteRequest, b: RouteRequest): number =>
-  Number(isStraight(b)) - Number(isStraight(a)) || SPAN(a) - SPAN(b) || byCode(a.id, b.id);
+  Number(a.late ?? false) - Number(b.late ?? false) || Number(isStraight(b)) - Number(isStraight(a)) || SPAN(a) - SPAN(b) || byCode(a.id, b.id);
 
 /** True where a run costs more than the shortest way with the fewest bends, which none can beat. */
 function couldBeBetter({ request: { from, to }, nodes, cost }: Routed): boolean {

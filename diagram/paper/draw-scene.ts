@@ -58,7 +58,7 @@ const text = (t: SceneText): TextMark => ({
 const circle = (at: Point, r: number): string => `M${at.x - r} ${at.y}A${r} ${r} 0 1 0 ${at.x + r} ${at.y}A${r} ${r} 0 1 0 ${at.x - r} ${at.y}Z`;
 const rect = (x: number, y: number, w: number, h: number): string => `M${x} ${y}H${x + w}V${y + h}H${x}Z`;
 
-function symbolMark(stroke: Stroke, ink: string): PathMark {
+export function strokeMark(stroke: Stroke, ink: string): PathMark {
   const fill = stroke.fill === 'ink' ? ink : stroke.fill === 'paper' ? light.paper : undefined;
   return {
     kind: 'path',
@@ -126,7 +126,7 @@ function symbolGroup(part: ScenePart): Group {
   const symbol = symbolById(part.symbol, part.width);
   const origin = turnedPoint(0, 0, symbol, part.turn);
   const ink = part.kind === 'neutral-bar' ? cores.light.BU! : part.kind === 'earth-bar' ? cores.light.GNYE! : light.ink;
-  return { x: part.x + origin.x, y: part.y + origin.y, scale: 1, ...(part.turn && { turn: part.turn }), marks: symbol.strokes.map((stroke) => symbolMark(stroke, ink)) };
+  return { x: part.x + origin.x, y: part.y + origin.y, scale: 1, ...(part.turn && { turn: part.turn }), marks: symbol.strokes.map((stroke) => strokeMark(stroke, ink)) };
 }
 
 /** Everything of a scene, in painting order. */

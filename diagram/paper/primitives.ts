@@ -42,6 +42,8 @@ export interface Group {
   /** what is seen of it, in its own unit */
   clip?: { x: number; y: number; width: number; height: number };
   marks: Mark[];
+  /** groups within, painted after the marks */
+  groups?: Group[];
 }
 
 /** A sheet of paper: its size in 1/100 mm and what stands on it, in painting order. */

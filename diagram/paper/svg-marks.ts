@@ -26,10 +26,14 @@ function svgMark(mark: Mark, scale: number): string {
   return `<text x="${num(mark.x)}" y="${num(mark.y)}" font-size="${num(fontSizeOf(mark))}"${mark.bold ? ' font-weight="700"' : ''} fill="${mark.colour}"${anchor}${spacing}${turn} xml:space="preserve">${escapeXml(mark.text)}</text>`;
 }
 
-/** A group as an svg element; `scale` is that of the groups round it. */
-export function svgGroup(group: Group, scale = 1, clipId?: string): string {
+/** A group as an svg element; `scale` is that of the groups round it. Clips are named by their place in the sheet. */
+export function svgGroup(group: Group, scale = 1, name = 'g'): string {
   const spin = group.turn ? ` rotate(${90 * group.turn})` : '';
   const grow = group.scale === 1 ? '' : ` scale(${num(group.scale)})`;
-  const clip = clipId ? ` clip-path="url(#${clipId})"` : '';
-  return `<g transform="translate(${num(group.x)} ${num(group.y)})${grow}${spin}"${clip}>${group.marks.map((mark) => svgMark(mark, group.scale * scale)).join('')}</g>`;
+  const inner = group.scale * scale;
+  const { clip } = group;
+  const id = `clip-${name}`;
+  const cut = clip ? `<clipPath id="${id}"><rect x="${num(clip.x)}" y="${num(clip.y)}" width="${num(clip.width)}" height="${num(clip.height)}"/></clipPath>` : '';
+  const content = group.marks.map((mark) => svgMark(mark, inner)).join('') + (group.groups ?? []).map((child, i) => svgGroup(child, inner, `${name}-${i}`)).join('');
+  return `<g transform="translate(${num(group.x)} ${num(group.y)})${grow}${spin}">${cut}${clip ? `<g clip-path="url(#${id})">${content}</g>` : content}</g>`;
 }

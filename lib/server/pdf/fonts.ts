@@ -1,0 +1,59 @@
+import { join } from 'node:path';
+
+/** The shipped lettering by script: a text is drawn in runs, each from the file that holds its signs. */
+
+const SCRIPTS = ['latin', 'latin-ext', 'greek', 'cyrillic', 'cyrillic-ext', 'vietnamese'] as const;
+type Script = (typeof SCRIPTS)[number];
+
+/** Ranges of the font's files, as its package states them; the first that holds a sign wins. */
+const RANGES: Record<Script, readonly (readonly [number, number])[]> = {
+  latin: [[0x20, 0xff], [0x131, 0x131], [0x152, 0x153], [0x2bb, 0x2bc], [0x2c6, 0x2c6], [0x2da, 0x2da], [0x2dc, 0x2dc], [0x2000, 0x206f], [0x20ac, 0x20ac], [0x2122, 0x2122], [0x2191, 0x2191], [0x2193, 0x2193], [0x2212, 0x2212], [0x2215, 0x2215]],
+  vietnamese: [[0x102, 0x103], [0x110, 0x111], [0x128, 0x129], [0x168, 0x169], [0x1a0, 0x1a1], [0x1af, 0x1b0], [0x1ea0, 0x1ef9], [0x20ab, 0x20ab]],
+  'latin-ext': [[0x100, 0x2ba], [0x2bd, 0x2c5], [0x2c7, 0x2cc], [0x2ce, 0x2d7], [0x2dd, 0x2ff], [0x1d00, 0x1dbf], [0x1e00, 0x1e9f], [0x1ef2, 0x1eff], [0x20a0, 0x20c0], [0x2113, 0x2113], [0x2c60, 0x2c7f], [0xa720, 0xa7ff]],
+  greek: [[0x370, 0x3ff]],
+  cyrillic: [[0x400, 0x45f], [0x490, 0x491], [0x4b0, 0x4b1], [0x2116, 0x2116]],
+  'cyrillic-ext': [[0x460, 0x52f], [0x1c80, 0x1c88], [0x20b4, 0x20b4], [0x2de0, 0x2dff], [0xa640, 0xa69f]],
+};
+const ORDER: readonly Script[] = ['latin', 'vietnamese', 'latin-ext', 'greek', 'cyrillic', 'cyrillic-ext'];
+
+/** Drawn for a sign that no file of the lettering holds. */
+const STAND_IN = '?';
+
+const scriptOf = (sign: string): Script | null => {
+  const code = sign.codePointAt(0)!;
+  return ORDER.find((script) => RANGES[script].some(([from, to]) => code >= from && code <= to)) ?? null;
+};
+
+export interface Run {
+  script: Script;
+  text: string;
+  /** signs before it */
+  offset: number;
+}
+
+/** A text in runs of one script; every sign is as wide as any other. */
+export function runsOf(text: string): Run[] {
+  const runs: Run[] = [];
+  [...text].forEach((sign, offset) => {
+    // the electrical sign for ohm is drawn as the Greek letter it looks like
+    const shown = sign === '\u2126' ? '\u03a9' : sign;
+    const script = scriptOf(shown);
+    const last = runs.at(-1);
+    if (last && last.script === (script ?? 'latin')) last.text += script ? shown : STAND_IN;
+    else runs.push({ script: script ?? 'latin', text: script ? shown : STAND_IN, offset });
+  });
+  return runs;
+}
+
+export const fontName = (script: Script, bold: boolean): string => `${script} ${bold ? 'bold' : 'regular'}`;
+
+const file = (script: Script, weight: 400 | 700): string =>
+  join(process.cwd(), 'node_modules/@fontsource/jetbrains-mono/files', `jetbrains-mono-${script}-${weight}-normal.woff`);
+
+/** Makes all files known to a PDF; only those that are used are carried in it. */
+export function registerFonts(pdf: { registerFont(name: string, src: string): unknown }): void {
+  for (const script of SCRIPTS) {
+    pdf.registerFont(fontName(script, false), file(script, 400));
+    pdf.registerFont(fontName(script, true), file(script, 700));
+  }
+}
