@@ -1,5 +1,6 @@
 import { polesOf } from '../document/kinds';
 import type { Part } from '../document/schema';
+import type { Way } from '../terminals/ways';
 import { recalled } from './clauses';
 import type { Context } from './context';
 import { once } from './readings/once';
@@ -28,20 +29,24 @@ const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
   return found;
 });
 
-/** By place and board, the ways whose line runs through it. */
-const waysByBoard = once((context: Context): Map<string, Set<string>> => {
+/** By part, the ways whose line runs over its terminals. */
+const waysByPart = once((context: Context): Map<string, Set<string>> => {
   const found = new Map<string, Set<string>>();
   const devices = new Set(context.ways.map(({ device }) => device));
   for (const { device, nodes } of context.sections) {
     if (!devices.has(device.id)) continue;
     for (const node of nodes) {
-      const { place, board } = context.graph.partOf[node]!;
-      const key = `${place ?? ''} ${board ?? ''}`;
-      found.set(key, (found.get(key) ?? new Set<string>()).add(device.id));
+      const { id } = context.graph.partOf[node]!;
+      found.set(id, (found.get(id) ?? new Set<string>()).add(device.id));
     }
   }
   return found;
 });
+
+function haveCommonIsolator(context: Context, ways: readonly Way[]): boolean {
+  const [first, ...rest] = ways.map(({ device }) => isolatorsByWay(context).get(device) ?? new Set<string>());
+  return [...first!].some((id) => rest.every((others) => others.has(id)));
+}
 
 /** One switchboard with lines of two ways that nothing but the main switch isolates together. */
 export const sharedBoxLines: Rule = {
@@ -59,11 +64,14 @@ export const sharedBoxLines: Rule = {
     const devices = new Set(context.ways.map(({ device }) => device));
     for (const board of switchboards(context)) {
       if (board.parts.some(({ id }) => devices.has(id))) continue;
-      const here = waysByBoard(context).get(`${board.place} ${board.board ?? ''}`) ?? new Set<string>();
-      const ways = here.size < 2 ? [] : context.ways.filter(({ device }) => here.has(device));
-      if (ways.length < 2) continue;
-      const [first, ...rest] = ways.map(({ device }) => isolatorsByWay(context).get(device) ?? new Set<string>());
-      if ([...first!].some((id) => rest.every((others) => others.has(id)))) continue;
+      const here = new Set(board.parts.flatMap(({ id }) => [...(waysByPart(context).get(id) ?? [])]));
+      if (here.size < 2) continue;
+      // Mains beside backup is the matter of the notice of two sources.
+      const ways = [false, true]
+        .map((backup) => context.ways.filter((way) => way.backup === backup && here.has(way.device)))
+        .filter((same) => same.length > 1 && !haveCommonIsolator(context, same))
+        .flat();
+      if (ways.length === 0) continue;
       yield {
         heading: `${ways.length} ways in ${sayBoard(context, board)}`,
         message: `${capital(sayBoard(context, board))} holds lines of ${sayParts(

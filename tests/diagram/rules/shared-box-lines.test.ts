@@ -1,4 +1,4 @@
-import { Home } from '@/diagram/document/home';
+import { backupHome, Home } from '@/diagram/document/home';
 import { sharedBoxLines } from '@/diagram/rules/shared-box-lines';
 import { testRule } from '../rule-tester';
 
@@ -14,6 +14,9 @@ testRule(sharedBoxLines, {
   valid: {
     'two ways behind one rcd': box(),
     'one way': new Home({ rcd: false }).place('study').way('Q11', 'study').lamp('E1', 'S1', 'Q11'),
+    'a mains and a backup way: the notice of two sources is for that': backupHome()
+      .way('Q12', 'bedroom')
+      .socket('X12', 'Q12'),
     'two ways in two rooms': new Home({ rcd: false })
       .place('study')
       .place('den')
