@@ -17,7 +17,7 @@ import { planWays } from './plan';
 import { isBackup, type WayPlan, type WaySupply } from './way-plan';
 import type { Wish } from './wish';
 import { DRAFT_AMBIENT, type HomeOptions } from './plan-home';
-import { openBox, openRow } from './room-taps';
+import { openBox, openRow, type Held } from './room-taps';
 import type { Sketch } from './sketch';
 
 /** Numbers for new things of a room that nothing drawn bears: `lamp3`, `outlet4`. */
@@ -76,13 +76,20 @@ function wishFrom(sketch: Sketch, room: SurveyRoom, drawn: Drawn, difference: Di
 }
 
 /** Hangs on ways that are drawn what they have room for. @returns what still needs a way of its own */
-function hangOn(sketch: Sketch, doc: Installation, ways: readonly Way[], wish: Wish, supply: WaySupply): Wish {
+function hangOn(
+  sketch: Sketch,
+  doc: Installation,
+  ways: readonly Way[],
+  wish: Wish,
+  supply: WaySupply,
+  held: Held,
+): Wish {
   const { room } = wish;
   const left = { ...wish };
   const side = (backup: boolean, lamps: number[], fans: number[]): boolean => {
     if (lamps.length + fans.length === 0) return true;
     const watts = lamps.length * room.lampWatts + fans.length * room.fanWatts;
-    const box = openBox(sketch, doc, ways, room, backup, { points: lamps.length + fans.length, watts }, supply);
+    const box = openBox(sketch, doc, ways, { room, backup, points: lamps.length + fans.length, watts }, supply, held);
     box?.fill({ room, lamps, fans, outlets: [] }, backup);
     return box !== undefined;
   };
@@ -219,7 +226,8 @@ export function extendHome(sketch: Sketch, doc: Installation, options: HomeOptio
   const ways = findWays(doc);
   const waySupply: WaySupply = { practice, voltage: supply.voltage, ambientC: DRAFT_AMBIENT };
   const wishes = changed.map(({ room, drawn, difference }) => wishFrom(sketch, room, drawn, difference));
-  const left = wishes.map((wish) => hangOn(sketch, doc, ways, wish, waySupply));
+  const held: Held = new Map();
+  const left = wishes.map((wish) => hangOn(sketch, doc, ways, wish, waySupply, held));
   const planned = planWays(left, waySupply, (way) => sketch.find(breakerId(way)) !== undefined);
   const kept = planned.filter(isBackup);
   const boards = roomBoards(sketch, roomsWithSwitches(planned));

@@ -1,6 +1,6 @@
 import type { Installation, Part, SurveyRoom } from '../../document/schema';
 import type { Way } from '../../terminals/ways';
-import { LENGTH, OUTLETS_PER_RADIAL, OUTLET_WATTS } from './assumptions';
+import { LENGTH, OUTLETS_PER_RADIAL, OUTLET_WATTS, POWER_FACTOR } from './assumptions';
 import { lightingLimit } from './plan-lamps';
 import { runOf, type WaySupply } from './way-plan';
 import { RoomBox, type Taps } from './room-box';
@@ -49,30 +49,68 @@ function lastSwitch(doc: Installation, ids: ReadonlySet<string>, room: string, s
     ?.id;
 }
 
+/** Points and watts on ways of lamps, by device; grows as more is hung on them. */
+export type Held = Map<string, { points: number; watts: number }>;
+
+function heldBy(doc: Installation, way: Way, held: Held): { points: number; watts: number } {
+  const known = held.get(way.device);
+  if (known) return known;
+  const ids = new Set(way.parts);
+  const points = doc.parts.filter((part) => ids.has(part.id)).filter(isLampOrFan);
+  return { points: points.length, watts: points.reduce((sum, { watts }) => sum + (watts ?? 0), 0) };
+}
+
+/** m, of all runs of a way from box to box, and on to a point in the farthest. */
+function lengthOf(sketch: Sketch, way: Way): number {
+  const joints = way.parts.filter((id) => sketch.find(id)?.kind === 'joint');
+  const runs = new Set(joints.map((id) => sketch.arrivingAt(id)?.cable).filter((cable) => cable !== undefined));
+  const metres = [...runs].reduce((sum, cable) => sum + (sketch.cableOf(cable)?.length ?? 0), 0);
+  return metres + LENGTH.boxToPoint + 2 * LENGTH.pointToPoint;
+}
+
+interface Addition {
+  room: SurveyRoom;
+  backup: boolean;
+  points: number;
+  watts: number;
+}
+
+/** True where a way of this size still serves its load, with the addition, as far as it goes. */
+function stillServes(sketch: Sketch, way: Way, size: RunSize, watts: number, supply: WaySupply): boolean {
+  const device = sketch.find(way.device);
+  if (device?.kind !== 'mcb' || device.rating === undefined) return false;
+  const needed = sizeRun({
+    ...supply,
+    ratingA: device.rating,
+    curve: device.curve ?? 'C',
+    amps: watts / (supply.voltage * POWER_FACTOR.lamp),
+    lengthM: lengthOf(sketch, way),
+    use: way.backup ? 'backup' : 'lighting',
+    leastMm2: size.csaMm2,
+  });
+  return needed?.csaMm2 === size.csaMm2;
+}
+
 /**
- * The box of a way of lamps that has room for `watts` more in this room, mains or backup.
+ * The box of a way of lamps that has room for an addition in its room, mains or backup; the addition is counted on the way.
  * @returns undefined where the room has none: the addition needs a way of its own
  */
 export function openBox(
   sketch: Sketch,
   doc: Installation,
   ways: readonly Way[],
-  room: SurveyRoom,
-  backup: boolean,
-  adds: { points: number; watts: number },
+  { room, backup, ...adds }: Addition,
   supply: WaySupply,
+  held: Held,
 ): RoomBox | undefined {
   for (const way of ways) {
     const device = sketch.find(way.device);
     if (way.backup !== backup || device?.kind !== 'mcb' || device.rating === undefined) continue;
-    const ids = new Set(way.parts);
-    const points = doc.parts.filter((part) => ids.has(part.id) && isLampOrFan(part)) as Extract<
-      Part,
-      { kind: 'lamp' | 'fan' }
-    >[];
+    const before = heldBy(doc, way, held);
+    const after = { points: before.points + adds.points, watts: before.watts + adds.watts };
     const limit = lightingLimit(supply, device.rating);
-    const watts = points.reduce((sum, part) => sum + (part.watts ?? 0), 0) + adds.watts;
-    if (points.length + adds.points > limit.points || watts > limit.watts) continue;
+    if (after.points > limit.points || after.watts > limit.watts) continue;
+    const ids = new Set(way.parts);
     const control = lastSwitch(doc, ids, room.id, sketch);
     const neutral = jointOf(doc, ids, room.id, 'neutral', sketch);
     const earth = jointOf(doc, ids, room.id, 'earth', sketch);
@@ -80,6 +118,8 @@ export function openBox(
     const size = run && sketch.sizeOf(run);
     const board = control && sketch.find(control)?.board;
     if (!control || !neutral || !earth || !size || !board) continue;
+    if (!stillServes(sketch, way, size, after.watts, supply)) continue;
+    held.set(way.device, after);
     return RoomBox.reopen(sketch, room, board, size, [control, '1'], { neutral, earth });
   }
   return undefined;

@@ -145,6 +145,10 @@ export class Sketch {
     return [...(this.conductors.get(`${part} ${mark}`) ?? [])];
   }
 
+  cableOf(id: string): Cable | undefined {
+    return this.cables.get(id);
+  }
+
   /** mm2 of a cable's cores; undefined for one that is not drawn. */
   sizeOf(cable: string): { csaMm2: number; cpcMm2: number; grouped: number } | undefined {
     const found = this.cables.get(cable);

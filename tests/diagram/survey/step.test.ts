@@ -185,6 +185,15 @@ describe('drafting what changed', () => {
     expect(draftPatch(next)).toEqual({});
   });
 
+  it('takes a new way where the old one would lose too much on so long a run', () => {
+    const rows = [room('Shed', { lamps: 1, lampWatts: 150, run: 180 })];
+    const doc = changeRow(draftDocument(rows, optionsOf('IEC', 'TN-S', 0)), 'shed', { lamps: 2 });
+    // 150 W over 180 m of 1.5 mm2 lose 2 x 180 x 12.1e-3 x 1.1965 x 0.72 = 3.8 V of 6.9; twice the load would lose 7.6.
+    const next = applyPatch(doc, draftPatch(doc));
+    expect(next.parts.some(({ id }) => id === 'shed.way-lamps2')).toBe(true);
+    expect(examine(next).findings.filter(({ rule }) => rule === 'high-drop')).toEqual([]);
+  });
+
   it('guards the feed of an inverter whose breaker the loop of the supply would not open', () => {
     // C and B of 40 A and more ask for 0.55 and 1.09 ohm or less (BS 7671 Table 41.3); the loop is 1.2 ohm before the run.
     const options = { ...optionsOf('IEC', 'TN-S', 0), supply: { ...optionsOf('IEC', 'TN-S').supply, ze: 1.2 } };
