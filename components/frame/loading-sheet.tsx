@@ -1,3 +1,5 @@
+'use client';
+
 import type { ReactNode } from 'react';
 import { WaitLine } from '@/components/ui/wait-line';
 import { Paper } from './paper';
@@ -10,7 +12,15 @@ export function LoadingSheet({ children }: { children: ReactNode }) {
       <Paper>
         <div className="flex-1" />
         <div className="min-h-[72px] border-t-[1.6px] border-ink px-4 py-2">
-          <WaitLine>{children}</WaitLine>
+          <WaitLine
+            retry={
+              <button type="button" className="cursor-pointer text-ink underline underline-offset-[3px]" onClick={() => window.location.reload()}>
+                Try again
+              </button>
+            }
+          >
+            {children}
+          </WaitLine>
         </div>
       </Paper>
     </div>

@@ -1,5 +1,5 @@
 import Link from 'next/link';
-import type { ComponentProps, ReactNode } from 'react';
+import type { ComponentProps } from 'react';
 
 type Tone = 'ink' | 'red' | 'blue';
 interface Look {
@@ -21,7 +21,7 @@ const filled: Record<Tone, string> = {
 };
 
 /** The classes of a button, for whatever element has to look like one. */
-export function buttonClass({ tone = 'ink', solid = false, size = 'normal' }: Look = {}): string {
+function buttonClass({ tone = 'ink', solid = false, size = 'normal' }: Look = {}): string {
   const box = size === 'large' ? 'min-h-12 px-6 text-[14px]' : 'min-h-6 px-2 text-body pointer-coarse:min-h-11 pointer-coarse:px-3';
   const face = solid ? `${filled[tone]} font-semibold` : `bg-paper ${outline[tone]}`;
   return `inline-flex items-center justify-center gap-2 border py-[3px] text-left no-underline ${box} ${face} cursor-pointer hover:underline hover:underline-offset-2 disabled:cursor-default disabled:border-dashed disabled:border-grey disabled:bg-paper disabled:text-grey disabled:no-underline`;
@@ -45,17 +45,5 @@ export function WordButton({ className = '', type = 'button', ...rest }: Compone
       className={`cursor-pointer text-left text-ink underline underline-offset-[3px] pointer-coarse:min-h-11 ${className}`}
       {...rest}
     />
-  );
-}
-
-/** An action that is refused stays in sight, dashed, with the reason beside it. */
-export function Refused({ children, reason }: { children: ReactNode; reason: string }) {
-  return (
-    <span className="flex flex-wrap items-center gap-2">
-      <span className="inline-flex min-h-6 items-center border border-dashed border-grey px-2 py-[3px] text-grey" aria-disabled="true">
-        {children}
-      </span>
-      <span className="text-grey">{reason}</span>
-    </span>
   );
 }
