@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { PatchSchema, type Patch } from '@/diagram/document/patch';
-import type { Installation } from '@/diagram/document/schema';
+import { IdSchema, type Installation } from '@/diagram/document/schema';
 
 /** Requests and answers of the drawing routes; the same schema serves the screen and the handler. */
 
@@ -76,7 +76,20 @@ export interface StaleAnswer {
   since: SavedChange[];
 }
 
-export const RevisionSchema = z.strictObject({ note: z.string().trim().min(1, 'say in a few words what this revision is').max(200) });
+/** Which sheet is to be printed. */
+export const SheetQuerySchema = z.object({
+  face: z.enum(['overview', 'connections', 'all']).default('overview'),
+  paper: z.enum(['A4', 'A3', 'A2', 'A1']).default('A3'),
+  /** id of a room: its page of the connections */
+  place: IdSchema.optional(),
+  /** one sheet of several, for formats that hold one page; from 1 */
+  sheet: z.coerce.number().int().min(1).max(500).default(1),
+});
+export type SheetQuery = z.infer<typeof SheetQuerySchema>;
+
+export const RevisionSchema = z.strictObject({
+  note: z.string().trim().min(1, 'say in a few words what this revision is').max(200),
+});
 
 export interface RevisionView {
   id: string;

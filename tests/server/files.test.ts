@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { GET as json } from '@/app/api/drawings/[drawingId]/json/route';
+import { GET as pdf } from '@/app/api/drawings/[drawingId]/pdf/route';
+import { GET as svg } from '@/app/api/drawings/[drawingId]/svg/route';
 import { POST as save } from '@/app/api/drawings/[drawingId]/changes/route';
 import { readDocument } from '@/diagram/document/schema';
 import { fileName } from '@/lib/server/drawings/file-answer';
@@ -11,6 +13,33 @@ async function studio(title: string) {
   const { drawingId } = await makeJob(person, { title });
   return { params: { drawingId }, browser: await signedIn(person) };
 }
+
+describe('a sheet on paper', () => {
+  it('is a PDF of the right size with title block, findings and the cautions, and only of a room that is there', async () => {
+    const { browser, params } = await studio('Heron Row 9');
+    await browser.post(save, params, change(0, place('p1', 'Study')));
+    for (const [paper, box] of Object.entries({ A4: [841.89, 595.28], A3: [1190.55, 841.89] })) {
+      const { status, headers, body } = await browser.ask(pdf, { params, path: `/?paper=${paper}&face=overview` });
+      expect([status, headers.get('content-type')]).toEqual([200, 'application/pdf']);
+      expect(body.slice(0, 5)).toBe('%PDF-');
+      const [, width, height] = /MediaBox \[0 0 ([\d.]+) ([\d.]+)\]/.exec(body)!;
+      expect([Number(width), Number(height)].map((n, i) => Math.abs(n - box[i]!) < 0.03)).toEqual([true, true]);
+    }
+    expect((await browser.ask(pdf, { params, path: '/?place=nowhere' })).status).toBe(404);
+    expect((await browser.ask(pdf, { params, path: '/?paper=B5' })).status).toBe(400);
+  });
+
+  it('is an SVG that carries its letters and shows every text as text', async () => {
+    const title = '</title><script>alert(1)</script><image href="https://elsewhere.example/x"/>';
+    const { browser, params } = await studio(title);
+    const { status, headers, body } = await browser.ask(svg, { params });
+    expect([status, headers.get('content-type')]).toEqual([200, 'image/svg+xml']);
+    expect(body).toMatch(/^<\?xml.*\n<svg [^>]*width="420mm" height="297mm"/);
+    // Asked in this way, a failure does not print the whole file.
+    for (const text of ['font/woff2;base64,', '&lt;script&gt;']) expect([text, body.includes(text)]).toEqual([text, true]);
+    expect(/<script|<foreignObject|<image| on\w+="|href="/i.exec(body)).toBeNull();
+  });
+});
 
 describe('the document as a file', () => {
   it('is the interchange file: what is read back is what was drawn', async () => {

@@ -29,23 +29,25 @@ describe('signing in', () => {
   it('writes a refusal down, without the password', async () => {
     const person = await makePerson();
     await attempt(emailOf(person), 'wrong but telling', newAddress());
-    const [entry] = await AuditEntry.findAll({ where: { teamId: person.teamId, action: 'account.refused' } });
-    expect(entry).toMatchObject({ personId: null, subjectId: person.id, detail: {} });
+    const find = () => AuditEntry.findOne({ where: { teamId: person.teamId, action: 'account.refused' } });
+    await expect.poll(find).not.toBeNull();
+    expect(await find()).toMatchObject({ personId: null, subjectId: person.id, detail: {} });
   });
 
-  it('gives unknown addresses the same answer in the same time', async () => {
-    const times = { known: [] as number[], unknown: [] as number[] };
+  it('gives unknown addresses the same answer for the same work', async () => {
+    const spent = { known: [] as number[], unknown: [] as number[] };
     for (let i = 0; i < 30; i++) {
       const email = { known: emailOf(await makePerson()), unknown: `nobody-${i}-${Date.now()}@example.org` };
       for (const kind of i % 2 ? (['known', 'unknown'] as const) : (['unknown', 'known'] as const)) {
-        const began = performance.now();
+        // Processor time, all threads: what else the machine does at the moment does not enter.
+        const before = process.cpuUsage();
         expect(await attempt(email[kind], 'not the password', newAddress())).toBeNull();
-        times[kind].push(performance.now() - began);
+        const { user, system } = process.cpuUsage(before);
+        spent[kind].push(user + system);
       }
     }
     const median = (list: number[]) => [...list].sort((a, b) => a - b)[Math.floor(list.length / 2)]!;
-    // Another's public test of this allows 20 %; the machine of the tests is shared, so it is allowed the whole of that.
-    const ratio = median(times.known) / median(times.unknown);
+    const ratio = median(spent.known) / median(spent.unknown);
     expect(ratio).toBeGreaterThan(0.8);
     expect(ratio).toBeLessThan(1.25);
   });

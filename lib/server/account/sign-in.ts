@@ -3,6 +3,7 @@ import { audit } from '@/lib/server/audit';
 import { isKnownBrowser, markBrowser } from '@/lib/server/account/known-browser';
 import { isPassword } from '@/lib/server/account/password';
 import { giveBack, takeTry } from '@/lib/server/account/sign-in-limit';
+import { describeFault, log } from '@/lib/server/log';
 import { LONGEST_H, type SessionToken } from '@/lib/server/session';
 import { AuthSession, Login, Person } from '@/models';
 
@@ -32,12 +33,19 @@ export async function signIn(typedEmail: string, password: string, address: stri
   const person = login && (await Person.findOne({ where: { teamId: login.teamId, id: login.personId } }));
   const right = await isPassword(login?.passwordHash, password.slice(0, 400));
   if (!login || !person?.active || !right) {
-    if (login) await audit({ teamId: login.teamId, personId: null }, 'account.refused', login.personId);
+    if (login) noteRefusal(login);
     return null;
   }
   await giveBack(attempt);
   await markBrowser(email);
   return { who: { teamId: login.teamId, personId: login.personId } };
+}
+
+/** Written beside the answer and not before it: how long it takes must not tell that the address is known. */
+function noteRefusal({ teamId, personId }: Login): void {
+  audit({ teamId, personId: null }, 'account.refused', personId).catch((error: unknown) =>
+    log('audit.failed', describeFault(error)),
+  );
 }
 
 /** The person whom single sign-on names, if an admin has invited that address. */

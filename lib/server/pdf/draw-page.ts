@@ -1,3 +1,4 @@
+import 'server-only';
 import type PDFDocument from 'pdfkit';
 import { fontSizeOf, letterSpacing, type Group, type Mark, type Page, type TextMark } from '@/diagram/paper/primitives';
 import { ADVANCE } from '@/diagram/layout/lettering';

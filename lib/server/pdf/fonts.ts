@@ -1,3 +1,4 @@
+import 'server-only';
 import { join } from 'node:path';
 
 /** The shipped lettering by script: a text is drawn in runs, each from the file that holds its signs. */
