@@ -21,7 +21,7 @@ const filled: Record<Tone, string> = {
 };
 
 /** The classes of a button, for whatever element has to look like one. */
-function buttonClass({ tone = 'ink', solid = false, size = 'normal' }: Look = {}): string {
+export function buttonClass({ tone = 'ink', solid = false, size = 'normal' }: Look = {}): string {
   const box = size === 'large' ? 'min-h-12 px-6 text-[14px]' : 'min-h-6 px-2 text-body pointer-coarse:min-h-11 pointer-coarse:px-3';
   const face = solid ? `${filled[tone]} font-semibold` : `bg-paper ${outline[tone]}`;
   return `inline-flex items-center justify-center gap-2 border py-[3px] text-left no-underline ${box} ${face} cursor-pointer hover:underline hover:underline-offset-2 disabled:cursor-default disabled:border-dashed disabled:border-grey disabled:bg-paper disabled:text-grey disabled:no-underline`;
