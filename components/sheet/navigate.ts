@@ -9,11 +9,13 @@ import { middle } from './canvas/pick';
 
 export type Direction = 'up' | 'down' | 'left' | 'right';
 
-/** Steps of a part from its source, over the terminals a source reaches. */
+/** Steps of a part from its source along the line; along whatever reaches it where no line does. */
 function depthOf(doc: Installation, walk: Walk, id: string): number {
   const part = doc.parts.find((candidate) => candidate.id === id);
   if (!part) return Infinity;
-  return Math.min(Infinity, ...marksOf(doc, part).map((mark) => walk.get(endKey([id, mark]))?.depth ?? Infinity));
+  const steps = marksOf(doc, part).flatMap((mark) => walk.get(endKey([id, mark])) ?? []);
+  const line = steps.filter((step) => step.conductor === 'L');
+  return Math.min(Infinity, ...(line.length > 0 ? line : steps).map((step) => step.depth));
 }
 
 const byX = (a: ScenePart, b: ScenePart): number => middle(a).x - middle(b).x || a.y - b.y;

@@ -12,7 +12,7 @@ import { isBar } from '../document/kinds';
 import { nameOf } from '../document/names';
 import { practices } from '../practices';
 import { USUAL_RUN } from '../survey/columns';
-import { TERMINAL_HOLDS, conductorAt, sameEnd, wiresAt } from './ends';
+import { TERMINAL_HOLDS, conductorAt, sameEnd, screwsOf, wiresAt } from './ends';
 import { ROLE_OF, endKey, walkFromSources, type Walk } from './walk';
 import type { Command, NewId, Refusal } from './types';
 
@@ -38,11 +38,15 @@ const between = (wire: Wire, places: (id: string) => string | undefined): string
 function cableBeside(doc: Installation, a: End, b: End, role: Role): string | undefined {
   const place = new Map(doc.parts.map((part) => [part.id, part.place]));
   const key = [place.get(a[0]) ?? '', place.get(b[0]) ?? ''].sort().join(' ');
-  const full = new Set(doc.wires.filter((wire) => wire.role === role).map((wire) => wire.cable));
+  const cores = new Map<string, number>();
+  for (const wire of doc.wires)
+    if (wire.cable && wire.role === role) cores.set(wire.cable, (cores.get(wire.cable) ?? 0) + 1);
+  // A pair of strappers lies in one cable; of every other role a cable has one core.
+  const most = role === 'strapper' ? 2 : 1;
   return doc.wires.find(
     (wire) =>
       wire.cable &&
-      !full.has(wire.cable) &&
+      (cores.get(wire.cable) ?? 0) < most &&
       between(wire, (id) => place.get(id)) === key &&
       [wire.from[0], wire.to[0]].some((id) => id === a[0] || id === b[0]),
   )?.cable;
@@ -105,7 +109,11 @@ export function joinTerminals(doc: Installation, a: End, b: End, newId: NewId): 
   )
     return { refused: `${named[0]} and ${named[1]} are joined already.` };
   const walk = walkFromSources(doc);
-  const depth = (end: End) => walk.get(endKey(end))?.depth ?? Infinity;
+  const depth = (end: End): number => {
+    const part = doc.parts.find((candidate) => candidate.id === end[0])!;
+    const marks = isBar(part.kind) ? screwsOf(doc, part.id).used : [end[1]];
+    return Math.min(Infinity, ...marks.map((mark) => walk.get(endKey([part.id, mark]))?.depth ?? Infinity));
+  };
   const [from, to] = depth(ends[1]) < depth(ends[0]) ? [ends[1], ends[0]] : [ends[0], ends[1]];
   const role = roleBetween(doc, walk, from, to);
   const places = [from, to].map(([id]) => doc.parts.find((part) => part.id === id)?.place);

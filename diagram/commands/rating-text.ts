@@ -67,7 +67,7 @@ const pieces = (text: string): string[] =>
     .replace(/bonds\s+on\s+battery/gi, 'bondsonbattery')
     .replace(/class\s+/gi, 'class')
     .replace(/pf\s+/gi, 'pf')
-    .split(/[\s,;]+/)
+    .split(/[\s;]+|,\s+/)
     .filter((piece) => piece !== '');
 
 function readPieces(part: Part, text: string): Reading<Fields> {
@@ -129,7 +129,7 @@ export const cableText = (cable: Cable): string => `${cable.cores ?? 3}×${cable
 export function readCable(cable: Cable, text: string): Reading<Cable> {
   const next: Fields = { ...cable };
   const joined = text.trim().replace(/(\d)\s+(mm2|mm²|m)(?=\s|$)/gi, '$1$2');
-  for (const piece of joined.split(/[\s,;]+/).filter((part) => part !== '')) {
+  for (const piece of joined.split(/[\s;]+|,\s+/).filter((part) => part !== '')) {
     const cores = new RegExp(`^(\\d+)[×x]${N}(?:mm2|mm²)?$`, 'i').exec(piece);
     const size = new RegExp(`^${N}(?:mm2|mm²)$`, 'i').exec(piece);
     const length = new RegExp(`^${N}m?$`, 'i').exec(piece);

@@ -1,0 +1,81 @@
+import { copyParts, pasteClip } from '@/diagram/commands/copy';
+import { deleteSelection } from '@/diagram/commands/delete-selection';
+import { editCable, editName, editRating } from '@/diagram/commands/edit-in-place';
+import { marksOf } from '@/diagram/commands/ends';
+import { suggest } from '@/diagram/commands/extend/catalogue';
+import { joinTerminals } from '@/diagram/commands/join-terminals';
+import { moveLoad, waysFor } from '@/diagram/commands/move-load';
+import { alignParts, moveParts } from '@/diagram/commands/move-parts';
+import { renumber } from '@/diagram/commands/renumber';
+import { isRefusal, type Command, type NewId, type Refusal } from '@/diagram/commands/types';
+import type { End, Installation } from '@/diagram/document/schema';
+
+/** A small generator of chance with a seed, so that a failure can be run again. */
+export function chance(seed: number): (below: number) => number {
+  let state = seed >>> 0;
+  return (below) => {
+    state = (Math.imul(state, 1664525) + 1013904223) >>> 0;
+    return Math.floor((state / 2 ** 32) * below);
+  };
+}
+
+const RATINGS = ['B16', 'C20 2P', '9 W', '40 A', '63 A 30 mA A', '2 kW', '12 V 150 Ah'];
+
+/** Some command that a person could give on this drawing; null where chance chose one that is refused. */
+export function randomCommand(doc: Installation, pick: (below: number) => number, newId: NewId): Command | null {
+  const of = <T>(list: readonly T[]): T | undefined => list[pick(list.length)];
+  const part = of(doc.parts);
+  const face = pick(2) === 0 ? 'overview' : 'connections';
+  if (!part) return null;
+  const end = (id: string): End | null => {
+    const owner = doc.parts.find((candidate) => candidate.id === id);
+    const mark = owner && of(marksOf(doc, owner));
+    return mark ? [id, mark] : null;
+  };
+  const outcome = ((): Command | Refusal | null => {
+    switch (pick(14)) {
+      case 0:
+      case 1:
+        return editRating(doc, part.id, of(RATINGS)!);
+      case 2:
+        return editName(doc, part.id, pick(2) === 0 ? 'ref' : 'label', `n${pick(100)}`);
+      case 3: {
+        const cable = of(doc.cables);
+        return cable ? editCable(doc, cable.id, `3x${of([1.5, 2.5, 4])} ${1 + pick(40)} m`) : null;
+      }
+      case 4:
+      case 5:
+        return moveParts(doc, face, [part.id], (pick(9) - 4) * 250, (pick(9) - 4) * 250);
+      case 6:
+        return alignParts(doc, face, [part.id, of(doc.parts)!.id], 'row');
+      case 7: {
+        const from = end(part.id);
+        const to = end(of(doc.parts)!.id);
+        return from && to ? joinTerminals(doc, from, to, newId) : null;
+      }
+      case 8:
+        return deleteSelection(doc, [part.id], []);
+      case 9: {
+        const wire = of(doc.wires);
+        return wire ? deleteSelection(doc, [], [wire.id]) : null;
+      }
+      case 10: {
+        const clip = copyParts(doc, [part.id, of(doc.parts)!.id]);
+        return clip && pasteClip(doc, clip, newId, 'Duplicate');
+      }
+      case 11: {
+        const from = end(part.id);
+        const line = from && of(suggest(doc, from, { newId }).all);
+        return line ? line.place({}) : null;
+      }
+      case 12: {
+        const load = of(doc.parts.filter((candidate) => candidate.kind === 'lamp' || candidate.kind === 'fan'));
+        const way = load && of(waysFor(doc, load.id));
+        return load && way ? moveLoad(doc, [load.id], way.device, newId) : null;
+      }
+      default:
+        return renumber(doc);
+    }
+  })();
+  return outcome && !isRefusal(outcome) ? outcome : null;
+}
