@@ -28,8 +28,6 @@ const DIAGRAM: Record<string, readonly string[]> = {
   // A draft is placed on the sheet as well.
   survey: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit', 'rules', 'layout'],
   paper: ['document', 'symbols', 'terminals', 'practices', 'layout'],
-  // Drawings that show a rule broken and kept.
-  lessons: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit', 'rules'],
   commands: [
     'document',
     'symbols',
