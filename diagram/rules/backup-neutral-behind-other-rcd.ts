@@ -17,14 +17,18 @@ export const backupNeutralBehindOtherRcd: Rule = {
     remedy: 'Move the neutral to the bar behind the rcd that its line passes.',
   },
   *check(context) {
-    for (const { points, wires, devices, foreign, conditions } of neutralFaultsOf(context, 'behind')) {
+    for (const { points, wires, devices, foreign, conditions, link } of neutralFaultsOf(context, 'behind')) {
       const names = sayParts(context, points);
       const rcds = sayParts(context, devices);
       yield {
-        heading: `The neutral of ${names} is not behind the rcd of its line`,
-        message: foreign
-          ? `On battery current of ${names} returns through ${rcds}, which its line does not pass. The rcd trips in normal use.`
-          : `${capital(rcds)} carries the line of ${names} but not the neutral. It trips in normal use.`,
+        heading: link
+          ? 'Neutrals of mains and backup are joined'
+          : `The neutral of ${names} is not behind the rcd of its line`,
+        message: link
+          ? `A wire joins the neutral of the backup side to that of the mains, round ${rcds}: part of the current goes astray, and ${rcds} trips in normal use.`
+          : foreign
+            ? `On battery current of ${names} returns through ${rcds}, which its line does not pass. The rcd trips in normal use.`
+            : `${capital(rcds)} carries the line of ${names} but not the neutral. It trips in normal use.`,
         parts: wires.length === 0 ? devices : points,
         wires,
         conditions,

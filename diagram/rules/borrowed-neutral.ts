@@ -18,16 +18,15 @@ export const borrowedNeutral: Rule = {
     remedy: 'Lead the neutral back with its own line, to the bar and the rcd of its own way.',
   },
   *check(context) {
-    for (const { points, wires, devices, conditions } of neutralFaultsOf(context, 'borrowed')) {
+    for (const { points, wires, devices, conditions, link } of neutralFaultsOf(context, 'borrowed')) {
       const names = sayParts(context, points);
       const ways = devices.filter((id) => isOvercurrent(context.graph.parts.get(id)!));
-      const isLink = points.every((id) => ['joint', 'neutral-bar'].includes(context.graph.parts.get(id)!.kind));
       const through = `${ways.length === devices.length ? 'the neutral of ' : ''}${sayParts(context, devices)}`;
       yield {
-        heading: isLink
+        heading: link
           ? 'Two neutrals are joined'
           : `${capital(names)} ${points.length === 1 ? 'borrows' : 'borrow'} a neutral`,
-        message: isLink
+        message: link
           ? `A wire joins the neutrals of ${sayParts(context, devices)}, so that each carries current of the other: opened at one, it is still live from the other.`
           : `${capital(names)} ${points.length === 1 ? 'gets its' : 'get their'} line from one way and ${points.length === 1 ? 'returns' : 'return'} through ${through}. With that way switched off its neutral still carries this current.`,
         parts: points,

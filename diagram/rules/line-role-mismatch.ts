@@ -26,6 +26,11 @@ function natureOf(context: Context, node: number): Nature | undefined {
   return natures.length === 1 ? natures[0]![0] : undefined;
 }
 
+function addWire({ graph }: Context, edge: number, into: Set<string>): void {
+  const { wire } = graph.edges[edge]!;
+  if (wire) into.add(wire.id);
+}
+
 function wiresAt({ graph }: Context, node: number): string[] {
   const ids: string[] = [];
   for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
@@ -49,6 +54,11 @@ function told(context: Context): { wires: Set<string>; parts: Set<string> } {
   for (const { points } of reversals(context)) for (const id of points) parts.add(id);
   for (const { on, nodes } of openRegions(context))
     if (on) for (const node of nodes) for (const id of wiresAt(context, node)) wires.add(id);
+  // Line that arrives at the neutral of a point which has no way back is told with the open neutral.
+  for (const { points } of context.evaluated)
+    for (const { part, fed, source, lineEnd, lineEdges } of points.values())
+      if (source && !fed && lineEnd === context.graph.node(part.id, 'N'))
+        for (const number of lineEdges) addWire(context, number, wires);
   return { wires, parts };
 }
 

@@ -1,6 +1,7 @@
 import { isLoad } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
 import { earthGaps, hasWire } from './readings/earth-gaps';
+import { openRegions } from './readings/open-regions';
 import type { Rule } from './types';
 import { be, capital, say, sayParts } from './readings/words';
 
@@ -28,11 +29,14 @@ export const missingEarth: Rule = {
         neutral:
           'The earth contact is joined to the neutral, not to earth: a break of that neutral makes the case live.',
       }[on];
+      const crossed = openRegions(context).flatMap((region) =>
+        region.swapped && region.points.some((id) => parts.includes(id)) ? region.wires : [],
+      );
       yield {
         heading: on === 'line' ? `The case of ${names} ${be(parts.length)} live` : `${capital(names)} ${verb} no earth`,
         message: `${capital(names)} ${verb} no way to the main earthing terminal. ${what}`,
         parts: [...parts, ...joints],
-        wires,
+        wires: [...wires, ...crossed],
       };
     }
   },

@@ -1,8 +1,10 @@
 import { isOvercurrent } from '../terminals/roles-of-parts';
 import { recalled, seen } from './clauses';
+import type { Context } from './context';
 import { lineLoops } from './readings/line-loops';
+import { openRegions } from './readings/open-regions';
 import type { Rule } from './types';
-import { capital, say, sayParts, sayWire } from './readings/words';
+import { be, capital, say, sayParts, sayWire } from './readings/words';
 
 /** One conductor joined to the lines of two overcurrent devices, or of mains and backup, at once. */
 export const mixedFeeds: Rule = {
@@ -27,34 +29,60 @@ export const mixedFeeds: Rule = {
         const device = graph.parts.get(each.part ?? '');
         return each.kind === 'bypass' || (device && isOvercurrent(device)) ? [device!.id] : [];
       });
-      const bothSources = loop.some((number) => graph.edges[number]!.kind === 'bypass');
+      const inverters = [
+        ...new Set(
+          loop.flatMap((number) => (graph.edges[number]!.kind === 'bypass' ? [graph.edges[number]!.part!] : [])),
+        ),
+      ];
       // A backup lead plugged into a mains outlet is the cause that backfeed and live-pins name already.
-      if (!wire && bothSources) continue;
-      if (devices.length === 0) continue;
+      if (devices.length === 0 || (!wire && inverters.length > 0)) continue;
       const nearest = [...new Set([devices[0]!, devices.at(-1)!])];
       const by = wire
         ? `The wire ${sayWire(context, wire.id)}`
         : `The lead plugged in at ${say(context, graph.partOf[b]!.id)}`;
       const when = switches.length > 0 ? ', in some positions of the two-way switches' : '';
+      const { heading, consequence } = tell(context, nearest, inverters);
+      const ends = [a, b].map((node) => graph.partOf[node]!.id).filter((id) => !part || id !== part);
       yield {
-        heading: bothSources
-          ? 'Mains and backup meet on one conductor'
-          : `${capital(sayParts(context, nearest))} ${nearest.length === 1 ? 'is bridged' : 'feed one conductor'}`,
+        heading,
         message:
-          (nearest.length === 1
+          nearest.length === 1
             ? `${by} leads round ${say(context, nearest[0]!)}${when}: switched off, it makes nothing dead, and it does not see the current.`
-            : `${by} joins what ${sayParts(context, nearest)} feed${when}. With either off, both stay live from the other.`) +
-          (bothSources ? ' In an outage the battery feeds back into the mains.' : ''),
-        parts: [
-          ...new Set([
-            ...nearest,
-            ...(part ? [part] : []),
-            ...[a, b].map((node) => graph.partOf[node]!.id).filter((id) => !part || id !== part),
-          ]),
-        ],
+            : `${by} joins what ${sayParts(context, nearest)} feed${when}. With either off, both stay live from the other.${consequence}`,
+        parts: [...new Set([...nearest, ...(part ? [part] : []), ...ends])],
         wires: wire ? [wire.id] : [],
-        conditions,
+        conditions: inverters.length > 1 ? context.evaluated.map(({ condition }) => condition.name) : conditions,
+      };
+    }
+    for (const { between, points, conditions } of openRegions(context)) {
+      if (!between) continue;
+      const who = sayParts(context, points);
+      yield {
+        heading: `${capital(who)} ${be(points.length)} between two lines`,
+        message: `${capital(who)} ${points.length === 1 ? 'hangs' : 'hang'} between the line of ${say(context, between[0]!)} and the line of ${say(context, between[1]!)}: nothing works, and with one of them off its conductor is live through the load.`,
+        parts: [...points, ...between],
+        ...(conditions && { conditions }),
       };
     }
   },
 };
+
+/** What meets, and what follows from it beyond that neither device makes it dead. */
+function tell(
+  context: Context,
+  nearest: readonly string[],
+  inverters: readonly string[],
+): { heading: string; consequence: string } {
+  if (inverters.length > 1)
+    return {
+      heading: `The outputs of ${sayParts(context, inverters)} meet`,
+      consequence: ' On battery two sources run against each other.',
+    };
+  if (inverters.length === 1)
+    return {
+      heading: 'Mains and backup meet on one conductor',
+      consequence: ' In an outage the battery feeds back into the mains.',
+    };
+  const names = capital(sayParts(context, nearest));
+  return { heading: nearest.length === 1 ? `${names} is bridged` : `${names} feed one conductor`, consequence: '' };
+}

@@ -17,8 +17,8 @@ export const openNeutral: Rule = {
     remedy: 'Join the neutral to the neutral bar of its own way.',
   },
   *check(context) {
-    for (const { side, points, gap, wires, conditions, on } of openRegions(context)) {
-      if (side !== 'N') continue;
+    for (const { side, points, gap, wires, conditions, on, swapped, between } of openRegions(context)) {
+      if (side !== 'N' || swapped || between) continue;
       const who = sayParts(context, points);
       const where = gap.length > 0 ? ` The way back ends at ${sayParts(context, gap)}.` : '';
       const violation: Violation = {

@@ -17,11 +17,11 @@ export const residualImbalance: Rule = {
     remedy: 'Take line and neutral of the load through the same rcd.',
   },
   *check(context) {
-    for (const { points, wires, devices, conditions } of neutralFaultsOf(context, 'imbalance')) {
+    for (const { points, wires, devices, conditions, link } of neutralFaultsOf(context, 'imbalance')) {
       const rcds = sayParts(context, devices);
       yield {
         heading: `${capital(rcds)} trips in normal use`,
-        message: `The line of ${sayParts(context, points)} passes ${rcds}, the neutral goes round it. As soon as current flows, ${rcds} sees it as a fault and trips.`,
+        message: `${link ? `A wire leads neutral round ${rcds}.` : `The line of ${sayParts(context, points)} passes ${rcds}, the neutral goes round it.`} As soon as current flows, ${rcds} sees it as a fault and trips.`,
         parts: wires.length === 0 ? devices : [...devices, ...points],
         wires,
         conditions,

@@ -1,8 +1,10 @@
+import { isBar } from '../../document/kinds';
 import type { Evaluated } from '../../circuit/evaluate';
 import { isResidual } from '../../terminals/roles-of-parts';
 import { pathTo, reaches } from '../../terminals/reach';
 import { spread } from '../../terminals/spread';
 import type { Context } from '../context';
+import { lineLoops } from './line-loops';
 import type { NeutralFault } from './neutral-faults';
 import { once } from './once';
 
@@ -58,20 +60,30 @@ function judge(context: Context, a: Side, b: Side): Pick<NeutralFault, 'kind' | 
   return { kind: 'borrowed', devices: [...a.ways, ...foreign].sort(), foreign: true };
 }
 
+const partsAt = ({ graph }: Context, edge: number): string[] =>
+  [graph.edges[edge]!.a, graph.edges[edge]!.b]
+    .map((node) => graph.partOf[node]!)
+    .filter(({ kind }) => !isBar(kind))
+    .map(({ id }) => id);
+
 /** Neutrals of two ways, or of two residual-current devices, joined by a second wire. */
 export const doubledNeutrals = once((context: Context): NeutralFault[] => {
   const { graph } = context;
   const found = new Map<string, NeutralFault>();
+  // A two-pole device or plug that joins the lines joins the neutrals with them: one cause, told by the lines.
+  const joined = new Set(lineLoops(context).flatMap(({ edge }) => partsAt(context, edge)));
   for (const evaluated of context.evaluated) {
     if (evaluated.condition.base !== 'mains') continue;
     for (const { edge } of evaluated.neutralLoops) {
       const { a, b, wire } = graph.edges[edge]!;
+      if (partsAt(context, edge).some((id) => joined.has(id))) continue;
       const [one, other] = [sideOf(context, evaluated, a), sideOf(context, evaluated, b)];
       if (!one || !other || !wire) continue;
       const verdict = judge(context, one, other);
       if (!verdict) continue;
       const fault = found.get(wire.id) ?? {
         ...verdict,
+        link: true,
         points: [graph.partOf[a]!.id, graph.partOf[b]!.id],
         wires: [wire.id],
         conditions: [],
@@ -80,5 +92,6 @@ export const doubledNeutrals = once((context: Context): NeutralFault[] => {
       found.set(wire.id, fault);
     }
   }
-  return [...found.values()];
+  const all = context.evaluated.map(({ condition }) => condition.name);
+  return [...found.values()].map((fault) => (fault.kind === 'behind' ? { ...fault, conditions: all } : fault));
 });

@@ -22,6 +22,8 @@ export interface NeutralFault {
   /** the neutral passes devices that the line does not (true), or misses one (false) */
   foreign: boolean;
   conditions: string[];
+  /** a wire that joins two neutrals; `points` are its ends */
+  link?: true;
 }
 
 /** Whether opening one device or plug takes a point's neutral away from its source. */

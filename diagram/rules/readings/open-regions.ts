@@ -1,4 +1,5 @@
-import { isPoint } from '../../terminals/roles-of-parts';
+import { pathTo, reaches } from '../../terminals/reach';
+import { isOvercurrent, isPoint } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
 import { deadRegions, type DeadRegion } from './dead-regions';
 import { earthGaps, hasWire } from './earth-gaps';
@@ -14,6 +15,10 @@ export interface OpenRegion extends DeadRegion {
   on?: 'earth' | 'line';
   /** id of the inverter whose points are dead on mains only */
   inverter?: string;
+  /** neutral and earth change places here: the missing earth says it */
+  swapped?: true;
+  /** the points hang between the lines of two devices: the mixed feed says it */
+  between?: string[];
 }
 
 const partsOf = (context: Context, on: 'line' | 'neutral') =>
@@ -69,6 +74,24 @@ function deadOnMains(context: Context): OpenRegion[] {
   });
 }
 
+/** The nearest overcurrent devices before the two ends of a point, where both are line from two of them. */
+function betweenLines(context: Context, id: string): string[] {
+  const { graph } = context;
+  for (const { stands, condition } of context.evaluated) {
+    for (const stand of stands) {
+      const devices = ['L', 'N'].flatMap((mark) => {
+        const node = graph.node(id, mark)!;
+        const source = condition.sources.findIndex((_, i) => reaches(stand.line[i]!, node));
+        if (source < 0) return [];
+        const path = pathTo(graph, stand.line[source]!, node).map((number) => graph.edges[number]!.part ?? '');
+        return path.findLast((part) => graph.parts.has(part) && isOvercurrent(graph.parts.get(part)!)) ?? [];
+      });
+      if (devices.length === 2 && devices[0] !== devices[1]) return devices;
+    }
+  }
+  return [];
+}
+
 /** Points with line but no neutral of any source. */
 function withoutNeutral(context: Context): OpenRegion[] {
   const all = potentials(context);
@@ -86,17 +109,24 @@ function withoutNeutral(context: Context): OpenRegion[] {
   }
   const byConditions = new Map<string, Map<string, number>>();
   for (const [id, { names, end }] of found) {
-    if (swapped.has(id) && all.earth[end] === 1) continue;
-    const key = names.join(' ');
+    const key = `${names.join(' ')}|${swapped.has(id) && all.earth[end] === 1 ? 'swapped' : ''}|${betweenLines(context, id).join(' ')}`;
     byConditions.set(key, (byConditions.get(key) ?? new Map<string, number>()).set(id, end));
   }
   return [...byConditions].flatMap(([key, ends]) => {
-    const conditions = key.split(' ');
+    const [names, swap, between] = key.split('|') as [string, string, string];
+    const conditions = names.split(' ');
     const { line, neutral, earth } = potentialsIn(context, conditions);
     return deadRegions(context, ends, (node) => line[node] === 1 || neutral[node] === 1).map((region): OpenRegion => {
       const end = ends.get(region.points[0]!)!;
       const on = earth[end] === 1 ? 'earth' : line[end] === 1 ? 'line' : undefined;
-      return { ...region, side: 'N', conditions, ...(on && { on }) };
+      return {
+        ...region,
+        side: 'N',
+        conditions,
+        ...(on && { on }),
+        ...(swap && { swapped: true }),
+        ...(between && { between: between.split(' ') }),
+      };
     });
   });
 }

@@ -24,19 +24,22 @@ function lastRight(context: Context, path: readonly number[], nature: Nature): s
   return last;
 }
 
-/** Points fed the wrong way round, together where one crossing turns several. */
+/** Points fed the wrong way round, together where one crossing turns several; a point stays where it was found first. */
 export const reversals = once((context: Context): Reversal[] => {
   const found = new Map<string, { points: Set<string>; wires: string[]; conditions: Set<string> }>();
+  const groupOf = new Map<string, string>();
   for (const { condition, points } of context.evaluated) {
     for (const state of points.values()) {
       if (!state.reversed) continue;
+      const id = state.part.id;
       const wires = [lastRight(context, state.lineEdges, 'L'), lastRight(context, state.neutralEdges, 'N')].filter(
-        (id) => id !== undefined,
+        (wire) => wire !== undefined,
       );
-      const key = wires.length === 2 ? wires.join(' ') : state.part.id;
+      const key = groupOf.get(id) ?? (wires.length === 2 ? wires.join(' ') : id);
       const entry = found.get(key) ?? { points: new Set(), wires, conditions: new Set() };
-      entry.points.add(state.part.id);
+      entry.points.add(id);
       entry.conditions.add(condition.name);
+      groupOf.set(id, key);
       found.set(key, entry);
     }
   }
