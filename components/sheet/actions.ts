@@ -1,5 +1,6 @@
 import type { KeyHelp } from '@/components/frame/types';
 import type { Hands } from './hands';
+import type { TidyWay } from './tidy/use-tidy';
 
 /** Everything that can be done on the sheet: by its key, and by its words in the command list. */
 export interface Action {
@@ -19,7 +20,7 @@ export interface ActionContext {
   otherFace: () => void;
   nextNote: (step: 1 | -1) => void;
   page: (step: 1 | -1) => void;
-  tidy: () => void;
+  tidy: (way?: TidyWay) => void;
 }
 
 const camera = ({ hands }: ActionContext) => hands.view.getState().camera;

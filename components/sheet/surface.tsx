@@ -206,7 +206,7 @@ export function SheetSurface(props: SurfaceProps) {
       )}
       {mode.kind === 'tidy' && (
         <Floating sheet={sheet} width={360}>
-          <TidyPanel mode={mode} hands={hands} onLeave={close} />
+          <TidyPanel mode={mode} hands={hands} tidy={context.tidy} onLeave={close} />
         </Floating>
       )}
     </div>

@@ -3,6 +3,7 @@ import { useStore } from 'zustand';
 import { createContext, useContext } from 'react';
 import type { End, Face, Installation } from '@/diagram/document/schema';
 import type { Point } from '@/diagram/layout/scene';
+import type { TidyWay } from './tidy/use-tidy';
 import type { Choice } from '@/diagram/commands/extend/types';
 
 /** What the hands are doing on the sheet. One thing at a time; Esc goes one step back. */
@@ -19,7 +20,7 @@ export type Mode =
   | { kind: 'find' }
   | { kind: 'commands' }
   | { kind: 'load'; loads: readonly string[] }
-  | { kind: 'tidy'; preview: Installation; moved: number }
+  | { kind: 'tidy'; way: TidyWay; preview: Installation; moved: number }
   | { kind: 'export' }
   | { kind: 'history' };
 

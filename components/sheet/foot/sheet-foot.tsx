@@ -1,5 +1,6 @@
 'use client';
 
+import { useMemo } from 'react';
 import { Button } from '@/components/ui/button';
 import type { Scene } from '@/diagram/layout/scene';
 import type { ActionContext } from '../actions';
@@ -16,8 +17,22 @@ interface FootProps {
   notes: readonly MarkedNote[];
 }
 
+/** Rooms grow where they stand, as nothing moves by itself; then they may come to lie over each other. */
+function roomsOverlap(scene: Scene): boolean {
+  const rooms = scene.frames.filter((frame) => frame.kind === 'room').sort((a, b) => a.x - b.x);
+  return rooms.some((room, i) => {
+    const next = rooms[i + 1];
+    return (
+      next !== undefined &&
+      room.x + room.width > next.x &&
+      room.y < next.y + next.height &&
+      next.y < room.y + room.height
+    );
+  });
+}
+
 /** What the hands may do next, in words: the foot's own line. */
-function hint(mode: Mode, held: string, mayEdit: boolean): string {
+function hint(mode: Mode, held: string, mayEdit: boolean, crowded: boolean): string {
   switch (mode.kind) {
     case 'extend':
       return 'Type to narrow, Enter to place. The ghost stands where the part would lie.';
@@ -28,6 +43,7 @@ function hint(mode: Mode, held: string, mayEdit: boolean): string {
     case 'tidy':
       return 'The dashed drawing is how it would stand.';
     default:
+      if (crowded && mayEdit && !held) return 'Rooms lie over each other: tidy makes room.';
       return held || (mayEdit ? 'Arrows or a click take a part in hand; e extends it.' : 'You may read this drawing.');
   }
 }
@@ -42,7 +58,8 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
   const mayEdit = useSheet(drawing.store, (state) => state.rights.edit) && editing;
   const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
   const { undo } = drawing.store.getState();
-  const said = hint(mode, handWords(document, selection), mayEdit);
+  const crowded = useMemo(() => roomsOverlap(scene), [scene]);
+  const said = hint(mode, handWords(document, selection), mayEdit, crowded);
   return (
     <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
       <Strip scene={scene} notes={notes} />
@@ -68,7 +85,7 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
           <FootWord onClick={() => view.getState().setMode({ kind: 'history' })}>history</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'commands' })}>commands</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'find' })}>find</FootWord>
-          {mayEdit && <FootWord onClick={context.tidy}>tidy</FootWord>}
+          {mayEdit && <FootWord onClick={() => context.tidy()}>tidy</FootWord>}
           <FootWord onClick={() => view.getState().setMode({ kind: 'export' })}>print</FootWord>
         </div>
       </div>
