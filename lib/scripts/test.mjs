@@ -61,6 +61,8 @@ const parts = {
   },
 };
 
+// Leaving in the middle takes along what is running.
+for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => process.exit(130));
 try {
   await installDependencies();
   await installPrograms();
