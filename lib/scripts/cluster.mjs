@@ -100,6 +100,12 @@ async function initialise(bin, folder, passwords, durable) {
 const LASTING = { fsync: 'on', synchronous_commit: 'on', full_page_writes: 'on' };
 const THROWAWAY = { fsync: 'off', synchronous_commit: 'off', full_page_writes: 'off' };
 
+/** Stops whatever cluster runs in the folder, whoever started it. */
+export async function stopCluster(folder) {
+  const bin = [...(await installed()).values()].at(-1);
+  if (bin) await as(bin, 'pg_ctl', ['-D', path.join(folder, 'data'), '-m', 'immediate', '-w', '-t', '20', 'stop']);
+}
+
 /** The address of a database in a cluster of ours, for one of its two roles. */
 export const clusterUrl = ({ port, passwords }, database, role = 'app') =>
   `postgres://${role === 'owner' ? OWNER : APP}:${passwords[role]}@127.0.0.1:${port}/${database}`;
