@@ -35,7 +35,10 @@ const numberOf = (part: Part, room: SurveyRoom, what: string): number | undefine
   return found && part.id.startsWith(`${roomKey(room)}.`) ? Number(found[1]) : undefined;
 };
 
-/** Lamps or fans that change sides: taken off their way, to be drawn anew as they are. Those drawn by hand stay. */
+/**
+ * Takes lamps or fans that change sides off their way, those with the highest numbers first; those drawn by hand stay.
+ * @returns their numbers, under which they are drawn again
+ */
 function moveSides(
   sketch: Sketch,
   room: SurveyRoom,
@@ -43,19 +46,19 @@ function moveSides(
   parts: readonly Part[],
   count: number,
 ): number[] {
-  const drafted = parts.filter((part) => numberOf(part, room, what) !== undefined).slice(0, count);
-  for (const part of drafted) detach(sketch, part.id);
-  return drafted.map((part) => numberOf(part, room, what)!);
+  const numbers = parts.map((part) => numberOf(part, room, what)).filter((n) => n !== undefined);
+  const moved = numbers.sort((a, b) => b - a).slice(0, count);
+  for (const n of moved) detach(sketch, `${roomKey(room)}.${what}${n}`);
+  return moved.sort((a, b) => a - b);
 }
 
 /** What of a room is still to be drawn; lamps and fans that change sides are taken off their ways for it. */
 function wishFrom(sketch: Sketch, room: SurveyRoom, drawn: Drawn, difference: Difference): Wish {
-  const onMains = <T extends Part>(all: readonly T[], kept: readonly T[]) =>
-    all.filter((part) => !kept.includes(part)).reverse();
+  const onMains = <T extends Part>(all: readonly T[], kept: readonly T[]) => all.filter((part) => !kept.includes(part));
   const lampsOut = moveSides(sketch, room, 'lamp', onMains(drawn.lamps, drawn.keptLamps), difference.lampsToBackup);
-  const lampsBack = moveSides(sketch, room, 'lamp', [...drawn.keptLamps].reverse(), difference.lampsToMains);
+  const lampsBack = moveSides(sketch, room, 'lamp', drawn.keptLamps, difference.lampsToMains);
   const fansOut = moveSides(sketch, room, 'fan', onMains(drawn.fans, drawn.keptFans), difference.fansToBackup);
-  const fansBack = moveSides(sketch, room, 'fan', [...drawn.keptFans].reverse(), difference.fansToMains);
+  const fansBack = moveSides(sketch, room, 'fan', drawn.keptFans, difference.fansToMains);
   const fresh = (what: string, count: number, taken: readonly number[] = []) =>
     freeNumbers(sketch, room, what, count + taken.length)
       .filter((n) => !taken.includes(n))

@@ -128,7 +128,7 @@ export class RoomBox {
     const id = `${key}.fan${number}`;
     const control = this.switchFor(`fan${number}`, room.fanWatts);
     const regulator = sketch.part({
-      id: `${id}.regulator`,
+      id: sketch.freeId(`${id}.regulator`),
       kind: 'regulator',
       place: room.id,
       board: this.board,
@@ -170,7 +170,7 @@ export class RoomBox {
   private switchFor(what: string, watts: number): string {
     const { sketch } = this;
     const id = sketch.part({
-      id: `${this.key}.${what}.switch`,
+      id: sketch.freeId(`${this.key}.${what}.switch`),
       kind: 'switch',
       place: this.room.id,
       board: this.board,

@@ -117,12 +117,9 @@ describe.each(PRACTICES)('a draft by the practice of %s', (practice) => {
         for (const part of doc.parts)
           if (part.kind !== 'switch' && part.kind !== 'regulator' && part.kind !== 'joint' && part.kind !== 'mcb')
             expect(kept.get(part.id)).toEqual(part);
-        expect(
-          serious(next).filter(
-            (finding) =>
-              !/^(backup-overload|overloaded-|charger-overload|thin-battery-lead|rcd-underrated)/.test(finding),
-          ),
-        ).toEqual([]);
+        // The service and the inverter that are drawn stay: a home that outgrows them is told so, and a person decides.
+        const outgrown = /^(backup-overload|overloaded-main|overloaded-way at inverter-feed)\b/;
+        expect(serious(next).filter((finding) => !outgrown.test(finding))).toEqual([]);
       }),
       { numRuns: RUNS },
     );

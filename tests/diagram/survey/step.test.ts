@@ -157,6 +157,26 @@ describe('drafting what changed', () => {
     expect(wordsOf(next).hall).toBe('in step');
   });
 
+  it('moves the first lamp of a row and leaves the row its switch', () => {
+    const doc = draftDocument(
+      [room('Hall', { lamps: 10, lampWatts: 4 }), room('Den', { keepOutletWatts: 20, order: 1 })],
+      optionsOf(),
+    );
+    const first = doc.parts.find(({ id }) => id === 'hall.lamp8.switch');
+    expect(first).toBeDefined();
+    const next = applyPatch(
+      changeRow(doc, 'hall', { keepLamps: 3 }),
+      draftPatch(changeRow(doc, 'hall', { keepLamps: 3 })),
+    );
+    expect(['hall.lamp8', 'hall.lamp9', 'hall.lamp10', 'hall.lamp7'].map((id) => feedOf(next, id))).toEqual([
+      'backup',
+      'backup',
+      'backup',
+      'mains',
+    ]);
+    expect(examine(next).findings.filter(({ severity }) => severity !== 'advice')).toEqual([]);
+  });
+
   it('moves a fan to the mains, and makes the breaker of an emptied way a spare', () => {
     const doc = draftDocument(
       [
