@@ -31,6 +31,12 @@ const HIGH = 300;
 /** 1/100 mm left free round the drawing, so that no stroke is cut */
 const EDGE = 150;
 
+/** A name cut to a width in ems: the font's advance is 0.6 em, and the end of a name matters least. */
+const fitted = (name: string, ems: number): string => {
+  const fits = Math.max(2, Math.floor(ems / 0.6));
+  return name.length <= fits ? name : `${name.slice(0, fits - 1)}.`;
+};
+
 interface SceneInSmallProps {
   scene: Scene;
   /** id of the place in hand: its room is thickened */
@@ -94,7 +100,7 @@ export function SceneInSmall({ scene, inHand, wrong, onPlace, from, className = 
               fontSize={size}
               className={`${bad ? 'fill-red' : 'fill-ink'} ${strong ? 'font-bold' : ''}`}
             >
-              {frame.texts[0]?.text}
+              {fitted(frame.texts[0]?.text ?? '', frame.width / size)}
             </text>
           </g>
         );

@@ -57,7 +57,7 @@ export function RegisterRow({ job, today, mine, inHand, unfolded, sheet, mayEdit
             {job.number}
           </button>
         </td>
-        <td role="cell" className={`${cell} ${strong} max-w-0 truncate max-[700px]:max-w-none max-[700px]:whitespace-normal`}>
+        <td role="cell" className={`${cell} ${strong} py-1`}>
           {job.title}, {job.client}
         </td>
         <td role="cell" className={`${cell} whitespace-nowrap max-[900px]:hidden`}>
@@ -71,7 +71,7 @@ export function RegisterRow({ job, today, mine, inHand, unfolded, sheet, mayEdit
         </td>
         <td
           role="cell"
-          className={`${cell} max-w-0 truncate max-[700px]:col-span-2 max-[700px]:max-w-none max-[700px]:whitespace-normal ${isDone(job) ? 'text-grey' : mine ? 'font-bold' : ''}`}
+          className={`${cell} py-1 max-[700px]:col-span-2 ${isDone(job) ? 'text-grey' : mine ? 'font-bold' : ''}`}
         >
           {mine && !isDone(job) && 'you: '}
           {job.waits || 'nothing'}

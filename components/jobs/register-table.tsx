@@ -25,11 +25,11 @@ interface Column {
 const columns: readonly Column[] = [
   { name: 'Number', sort: 'number', className: 'w-20' },
   { name: 'Place and client', sort: 'title', className: '' },
-  { name: 'Drawn, checked', className: 'w-36 max-[900px]:hidden' },
+  { name: 'Drawn, checked', className: 'w-32 max-[900px]:hidden' },
   { name: 'Rev', className: 'w-12 max-[900px]:hidden' },
-  { name: 'State', sort: 'state', className: 'w-32' },
+  { name: 'State', sort: 'state', className: 'w-[118px]' },
   { name: 'What waits', className: '' },
-  { name: 'Due', sort: 'due', className: 'w-32' },
+  { name: 'Due', sort: 'due', className: 'w-28' },
   { name: 'Findings', className: 'w-20 text-right' },
 ];
 

@@ -27,14 +27,14 @@ export const GROUPS: Record<GroupId, string> = {
 
 /** The columns that are typed, in the order of the Tab key. */
 export const TYPED: readonly TypedColumn[] = [
-  { id: 'name', name: 'Name', unit: '', group: 'room', width: 14, numeric: false, spoken: 'name' },
+  { id: 'name', name: 'Name', unit: '', group: 'room', width: 18, numeric: false, spoken: 'name' },
   { id: 'kind', name: 'Kind', unit: '', group: 'room', width: 11, numeric: false, spoken: 'kind' },
-  { id: 'run', name: 'Run', unit: 'm', group: 'room', width: 6, numeric: true, right: true, spoken: 'run from the board, metres' },
+  { id: 'run', name: 'Run', unit: 'm', group: 'room', width: 5, numeric: true, right: true, spoken: 'run from the board, metres' },
   { id: 'lamps', name: 'Lamps', unit: 'n × W', group: 'holds', width: 9, numeric: false, spoken: 'lamps, number and watts' },
   { id: 'fans', name: 'Fans', unit: 'n × W', group: 'holds', width: 9, numeric: false, spoken: 'fans, number and watts' },
-  { id: 'outlets', name: 'Outlets', unit: 'n', group: 'holds', width: 9, numeric: true, spoken: 'outlets' },
-  { id: 'heavy', name: 'Heavy', unit: 'what, W', group: 'holds', width: 14, numeric: false, spoken: 'heavy appliances, what and watts' },
-  { id: 'keepLamps', name: 'Lamps', unit: 'n', group: 'keeps', width: 8, numeric: true, spoken: 'lamps that stay on' },
+  { id: 'outlets', name: 'Outlets', unit: 'n', group: 'holds', width: 8, numeric: true, spoken: 'outlets' },
+  { id: 'heavy', name: 'Heavy', unit: 'what, W', group: 'holds', width: 15, numeric: false, spoken: 'heavy appliances, what and watts' },
+  { id: 'keepLamps', name: 'Lamps', unit: 'n', group: 'keeps', width: 7, numeric: true, spoken: 'lamps that stay on' },
   { id: 'keepFans', name: 'Fans', unit: 'n', group: 'keeps', width: 6, numeric: true, spoken: 'fans that stay on' },
   { id: 'keepOutletWatts', name: 'Outlet', unit: 'W', group: 'keeps', width: 8, numeric: true, spoken: 'watts at one outlet that stays on' },
   { id: 'hours', name: 'Hours', unit: 'wanted', group: 'keeps', width: 8, numeric: true, right: true, spoken: 'hours wanted' },
