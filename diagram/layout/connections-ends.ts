@@ -145,7 +145,7 @@ function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodie
     .sort((a, b) => Number(a) - Number(b))
     .forEach((mark, i) => terminals.push(i === 0 ? { mark, x: at.x, y: axis, side: 'left' } : { mark, x: at.x - MODULE + i * 3 * MODULE, y: axis, side: 'up' }));
   for (const mark of used) if (!terminals.some((t) => t.mark === mark)) terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
-  const right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 2 * MODULE;
+  const right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 3 * MODULE;
   let free = 1;
   while (terminals.some((t) => t.mark === String(free))) free++;
   terminals.push({ mark: String(free), x: right, y: axis, side: 'up' });

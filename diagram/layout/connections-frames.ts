@@ -3,7 +3,7 @@ import { MODULE } from '../symbols/types';
 import type { PlacedCable } from './connections-ends';
 import type { Page } from './connections-page';
 import type { Body } from './ends';
-import { BODY, SMALL } from './lettering';
+import { BODY, SMALL, breakLines } from './lettering';
 import { m } from './overview-metrics';
 import type { SceneFrame } from './scene';
 
@@ -38,19 +38,26 @@ export function connectionFrames(doc: Installation, page: Page, bodies: Readonly
       ...(page.place && { place: page.place }),
     });
   }
+  const feet = cables.filter(({ cable }) => cable.atFoot).map(({ left }) => left);
+  const room = (left: number): number => Math.min(m(24), ...feet.filter((other) => other > left).map((other) => other - left - 200));
   for (const { cable, left, right, y } of cables)
-    frames.push({ id: `brace:${cable.id}`, kind: 'brace', x: left, y: cable.atFoot ? y - MODULE : y, width: right - left, height: MODULE, texts: braceTexts(cable.lines, left, y, cable.atFoot) });
+    frames.push({ id: `brace:${cable.id}`, kind: 'brace', x: left, y: cable.atFoot ? y - MODULE : y, width: right - left, height: MODULE, texts: braceTexts(cable.lines, left, y, cable.atFoot ? room(left) : null) });
   return frames.sort((a, b) => byCode(a.id, b.id));
 }
 
-function braceTexts(lines: readonly string[], left: number, y: number, atFoot: boolean): SceneFrame['texts'] {
+/** Over the brace in lines; under a brace at the foot no wider than to the next one. */
+function braceTexts(lines: readonly string[], left: number, y: number, footWidth: number | null): SceneFrame['texts'] {
   const [first = '', ...rest] = lines;
-  if (!atFoot)
+  if (footWidth === null)
     return [
       { text: first, x: left, y: y - 600 + (rest.length === 0 ? 400 : 0), size: BODY, bold: true },
       ...rest.map((text, i) => ({ text, x: left, y: y - 150 + 370 * i, size: SMALL, tone: 'grey' as const })),
     ];
-  // under a narrow brace every word has a line of its own
-  const words = rest.flatMap((text) => text.split(/ (?=to )| (?=from )/));
-  return [{ text: first, x: left, y: y + 450, size: BODY, bold: true }, ...words.map((text, i) => ({ text, x: left, y: y + 850 + 370 * i, size: SMALL, tone: 'grey' as const }))];
+  const heads = breakLines(first, BODY, footWidth);
+  const words = rest.flatMap((text) => text.split(/ (?=to )| (?=from )/)).flatMap((text) => breakLines(text, SMALL, footWidth));
+  const below = y + 450 + 400 * (heads.length - 1);
+  return [
+    ...heads.map((text, i) => ({ text, x: left, y: y + 450 + 400 * i, size: BODY, bold: true })),
+    ...words.map((text, i) => ({ text, x: left, y: below + 400 + 370 * i, size: SMALL, tone: 'grey' as const })),
+  ];
 }

@@ -158,7 +158,11 @@ class PagePlanner {
     for (const part of this.page.parts) if (part.kind === 'earth-bar') this.put(part, right, row);
     row += m(6);
     const neutralRow = row;
-    const neutralRows = Math.max(1, ...[...neutralOf.values()].map((list) => list.length));
+    // a bar that serves ways of another group reaches over there: then each bar has a row of its own
+    const apart = this.servesOthers(groups, neutralOf);
+    const listed = [...neutralOf.values()];
+    const neutralRows = Math.max(1, apart ? listed.flat().length : Math.max(...listed.map((list) => list.length), 0));
+    const rowsBefore = (from: TreeNode): number => (apart ? [...neutralOf].slice(0, [...neutralOf.keys()].indexOf(from)).flatMap(([, list]) => list).length : 0);
     row += m(6) * neutralRows;
     const lineRow = row;
     const ways = lineRow + m(7);
@@ -167,7 +171,7 @@ class PagePlanner {
       const start = x;
       let cy = chainTop;
       for (const node of chains.get(from)!) cy = this.put(node.part, x, cy).bottom + m(4);
-      (neutralOf.get(from) ?? []).forEach((part, i) => this.put(part, start, neutralRow + m(6) * i));
+      (neutralOf.get(from) ?? []).forEach((part, i) => this.put(part, start, neutralRow + m(6) * (rowsBefore(from) + i)));
       if (this.here(from)) this.put(from.part, start, lineRow);
       let slot = start + m(4);
       for (const item of [...items].sort((a, b) => a.order - b.order)) {
@@ -198,6 +202,14 @@ class PagePlanner {
       found.set(from, own.filter((part) => ![...found.values()].flat().includes(part)));
     }
     return found;
+  }
+
+  /** True when a neutral bar has a core in the cable of another group's way. */
+  private servesOthers(groups: ReadonlyMap<TreeNode, readonly Hanging[]>, neutralOf: ReadonlyMap<TreeNode, readonly Part[]>): boolean {
+    const groupOf = new Map<string, TreeNode>();
+    for (const [from, items] of groups) for (const item of items) groupOf.set(item.head!.part.id, from);
+    for (const [from, bars] of neutralOf) for (const bar of bars) groupOf.set(bar.id, from);
+    return this.page.cables.some((cable) => new Set(cable.cores.flatMap((core) => groupOf.get(core.here[0]) ?? [])).size > 1);
   }
 
   /** Inverter, battery and the devices between: the inverter in the middle, what it feeds below, the battery at its right. */

@@ -132,7 +132,7 @@ function routeCores(page: Page, bodies: ReadonlyMap<string, Body>, cables: reado
     return { id: wire.id, ...(late && { late }), strand: wire.id, family: wire.id, net: wire.id, from, to, backup: feeds.wires.get(wire.id) === 'backup' };
   });
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height, ...(isLongBar(parts.get(id)!.kind) && { crossable: true }) }));
-  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], namesOfCores(cables), { spread: true });
+  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], namesOfCores(cables), { spread: true, pins: [...bodies.values()].flatMap((body) => body.terminals) });
   const paths = requests.map(({ id }) => ({ id, net: id, points: points.get(id)! }));
   return { points, hops: findHops(paths) };
 }

@@ -17,6 +17,8 @@ export interface Label {
   lines: readonly (readonly Span[])[];
   size: number;
   places: readonly Anchor[];
+  /** letters set apart, as in the names of rooms */
+  spaced?: boolean;
   /** left out where none of its places is free: it is written elsewhere too */
   optional?: boolean;
 }
@@ -36,7 +38,7 @@ const CELL = 2000;
 /** How far a label may stray when all its places are taken, in steps of a line. */
 const STRAYS = [1, 2, 3, 4, 6, 8] as const;
 
-const lineWidth = (spans: readonly Span[], size: number): number => textWidth(spans.map((span) => span.text).join(' '), size);
+const lineWidth = (spans: readonly Span[], size: number, spaced = false): number => textWidth(spans.map((span) => span.text).join(' '), size, spaced);
 
 export interface Block extends Box {
   label: Label;
@@ -45,7 +47,7 @@ export interface Block extends Box {
 
 /** The block of a label at a place. */
 export function blockAt(label: Label, at: Anchor): Block {
-  const width = Math.max(...label.lines.map((spans) => lineWidth(spans, label.size)));
+  const width = Math.max(...label.lines.map((spans) => lineWidth(spans, label.size, label.spaced)));
   const height = Math.round(label.size * (1 + LEADING * (label.lines.length - 1))) + textDescent(label.size);
   const x = at.horizontal === 'start' ? at.x : at.horizontal === 'end' ? at.x - width : Math.round(at.x - width / 2);
   const y = at.vertical === 'top' ? at.y : at.vertical === 'bottom' ? at.y - height : Math.round(at.y - height / 2);
@@ -116,14 +118,14 @@ const cellsOf = (x0: number, y0: number, x1: number, y1: number): [number, numbe
 export function blockTexts(block: Block): SceneText[] {
   const { label } = block;
   return label.lines.flatMap((spans, i) => {
-    const width = lineWidth(spans, label.size);
+    const width = lineWidth(spans, label.size, label.spaced);
     const free = block.width - width;
     let x = block.x + (block.horizontal === 'start' ? 0 : block.horizontal === 'end' ? free : Math.round(free / 2));
     const y = block.y + label.size + Math.round(label.size * LEADING * i);
     return spans.map((span): SceneText => {
       const at = x;
-      x += textWidth(`${span.text} `, label.size);
-      return { text: span.text, x: at, y, size: label.size, ...(span.bold && { bold: true }), ...(span.tone === 'grey' && { tone: 'grey' as const }) };
+      x += textWidth(`${span.text} `, label.size, label.spaced);
+      return { text: span.text, x: at, y, size: label.size, ...(span.bold && { bold: true }), ...(span.tone === 'grey' && { tone: 'grey' as const }), ...(label.spaced && { spaced: true }) };
     });
   });
 }
@@ -157,6 +159,15 @@ export function placeLabel(ground: Ground, label: Label): Block | null {
       const block = blockAt(variant, candidate);
       if (ground.overlap(block) === 0) return take(ground, block);
     }
+  return null;
+}
+
+/** Places the first of several forms of a label that finds room; the last one may stray. */
+export function placeOneOf(ground: Ground, labels: readonly Label[]): Block | null {
+  for (const [i, label] of labels.entries()) {
+    const block = placeLabel(ground, i < labels.length - 1 ? { ...label, optional: true } : label);
+    if (block) return block;
+  }
   return null;
 }
 

@@ -56,7 +56,7 @@ export const FOOT = {
   name: m(14),
   /** axis of the neutral bar of the backup */
   neutral: m(16),
-  height: m(18),
+  height: m(17),
 } as const;
 
 /** Least distance of neighbouring ways' axes, so that cable data fits between them. */

@@ -106,11 +106,11 @@ class Planner {
       const column = node.children.filter((child) => child.column);
       const subs = column.filter((child) => !feedsInverter(child) && child.part.kind !== 'spd');
       // a bar that reaches further left than the arrester lies below it
-      if (!isBar && leftmost < COLUMN && column.some((child) => child.part.kind === 'spd')) next = level + m(8);
+      if (!isBar && leftmost < COLUMN && column.some((child) => child.part.kind === 'spd')) next = level + m(10);
       for (const child of column) {
         const barEnd = isBar ? Math.max(axis, ...subs.map((sub) => groupX.get(sub) ?? axis)) : axis;
         if (feedsInverter(child)) this.feeders.push({ node: child, x: barEnd, y: level });
-        else if (child.part.kind === 'spd') this.hang(child, axis - m(10) - m(8) * spds++, level + MODULE, 0);
+        else if (child.part.kind === 'spd') this.hang(child, axis - m(10) - m(8) * spds++, level + (isBar ? m(2) : m(1)), 0);
       }
       for (const child of [...subs].reverse()) stack.push({ node: child, x: subs.length > 1 ? (groupX.get(child) ?? axis) : axis, y: next });
     }

@@ -2,6 +2,7 @@ import { byCode, type Installation, type Part } from '../document/schema';
 import { symbolFor } from '../symbols';
 import { traceFeeds, type Feeds } from '../terminals/feeds';
 import { placeEnds, type Ends } from './ends';
+import { nameFrame } from './frame-names';
 import { Ground, blockTexts, placeLabel, type Label } from './labels';
 import { actualLevels, bands, lanes, roomFrames } from './overview-frames';
 import { partLabel, takenBy } from './overview-labels';
@@ -54,7 +55,7 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
     ...[...lettered.texts.values()].flat().map((text) => ({ x: textBox(text).x + textBox(text).width, y: text.y })),
   ];
   const right = Math.max(m(60), ...reach.map(({ x }) => x)) + m(2);
-  const bottom = Math.max(levels.bottom, ...reach.map(({ y }) => y + m(2)));
+  const bottom = Math.max(levels.bottom, ...reach.map(({ y }) => y + m(1)));
   return {
     face: 'overview',
     width: right,
@@ -124,7 +125,6 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
   for (const frame of frames) {
     const { x, y, width: w, height: h } = frame;
     ground.addPath([{ x, y }, { x: x + w, y }, { x: x + w, y: y + h }, { x, y: y + h }, { x, y }], 20);
-    for (const text of frame.texts) ground.add(textBox(text));
   }
   const solid = new Ground();
   for (const body of bodies.values()) solid.add(body);
@@ -156,6 +156,7 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     named.add(run.cable!);
     labels.push(label);
   }
+  for (const frame of frames) nameFrame(ground, frame);
   // parts first: their words have fewer places than a cable's
   const ofParts = [...graph.parts.values()].flatMap((part) => partLabel(doc, plan, part, bodies.get(part.id)!) ?? []);
   const texts = new Map<string, SceneText[]>();

@@ -147,8 +147,9 @@ export interface Routes {
 /**
  * Routes all runs round all parts. Pure; the order of the arguments' lists does not matter.
  * @param options.spread keep a free line between runs where there is room
+ * @param options.pins terminals that nothing is wired to: no run passes over them
  */
-export function routeAll(requests: readonly RouteRequest[], obstacles: readonly Obstacle[], softs: readonly Soft[] = [], options: { spread?: boolean } = {}): Routes {
+export function routeAll(requests: readonly RouteRequest[], obstacles: readonly Obstacle[], softs: readonly Soft[] = [], options: { spread?: boolean; pins?: readonly Point[] } = {}): Routes {
   const sorted = [...requests].sort(inOrder);
   const result: Routes = { points: new Map(), forced: [] };
   const grid = buildGrid(obstacles, requests, softs);
@@ -163,7 +164,7 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
   }
   const all = sorted.map((request): Routed => ({ request, net: strands.get(request.strand)!, nodes: null, cost: Infinity }));
   if (grid) {
-    const router = new Router(grid, terminalNodes(grid, all, netOf), netOf, familyOf, options.spread ?? false);
+    const router = new Router(grid, terminalNodes(grid, all, netOf, options.pins ?? []), netOf, familyOf, options.spread ?? false);
     for (const routed of all) router.route(routed);
     for (let round = 0; round < ROUNDS; round++) {
       let changed = false;
@@ -188,13 +189,20 @@ function numbered(names: readonly string[]): Map<string, number> {
 }
 
 /** Terminals are corners from the start: no run of another net passes over one. A terminal of several nets belongs to none. */
-function terminalNodes(grid: Grid, all: readonly Routed[], netOf: readonly number[]): Map<number, number> {
+function terminalNodes(grid: Grid, all: readonly Routed[], netOf: readonly number[], pins: readonly Point[]): Map<number, number> {
   const nodes = new Map<number, number>();
+  for (const pin of pins) {
+    const node = nodeAt(grid, pin);
+    // a pin that no line of the grid meets is in nobody's way
+    if (grid.xs[node % grid.columns] === pin.x && grid.ys[Math.floor(node / grid.columns)] === pin.y) nodes.set(node, -1);
+  }
+  const wired = new Map<number, number>();
   for (const { request, net } of all)
     for (const end of [request.from, request.to]) {
       const node = nodeAt(grid, end);
-      const before = nodes.get(node);
-      nodes.set(node, before === undefined || before === net ? net : before > 0 && netOf[before] === netOf[net] ? before : -1);
+      const before = wired.get(node);
+      wired.set(node, before === undefined || before === net ? net : before > 0 && netOf[before] === netOf[net] ? before : -1);
     }
+  for (const [node, net] of wired) nodes.set(node, net);
   return nodes;
 }

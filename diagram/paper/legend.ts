@@ -8,7 +8,7 @@ import type { Group, Mark } from './primitives';
 
 /** What the symbols and lines of a sheet mean: only those that stand on it. */
 
-const CELL = { width: 5200, height: 720 } as const;
+const CELL = { width: 4650, height: 590 } as const;
 const SIZE = 180;
 /** Symbols are drawn at half their size here. */
 const SCALE = 0.5;
@@ -43,8 +43,9 @@ const LINES: Record<'mains' | 'backup' | 'N' | 'E' | 'hop' | 'ticks', Entry> = {
 /** Entries for a set of scenes: their symbols in the order of current, then the lines. */
 function entries(scenes: readonly Scene[]): Entry[] {
   const kinds = new Set<Kind>(scenes.flatMap((scene) => scene.parts.map((part) => part.kind)));
-  const symbols = legend(kinds).map((symbol): Entry => {
-    const scale = Math.min(SCALE, 620 / symbol.height, 950 / symbol.width);
+  // bars carry their name on the sheet
+  const symbols = legend(kinds).filter((symbol) => !symbol.id.endsWith('-bar')).map((symbol): Entry => {
+    const scale = Math.min(SCALE, 560 / symbol.height, 900 / symbol.width);
     return {
       name: symbol.name,
       draw: (x, y) => ({

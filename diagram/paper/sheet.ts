@@ -7,7 +7,7 @@ import { sceneGroups } from './draw-scene';
 import { borderMarks, frameOf, paperSize, type Area, type PaperSize } from './iso-sheet';
 import { legendMarks } from './legend';
 import type { Group, Mark, Page } from './primitives';
-import { crossingsAt, cuts } from './split';
+import { contentOf, crossingsAt, cuts } from './split';
 import { TITLE_HEIGHT, TITLE_WIDTH, clipped, titleBlockMarks, type SheetTitle } from './title-block';
 
 /** The paper sheets of a drawing: true ISO size, border, title block, legend, findings, check line, and the drawing itself. */
@@ -33,9 +33,9 @@ const SCALES = [
   { factor: 0.8, name: '1:1.25' },
 ] as const;
 /** Between the frame and the drawing. */
-const PAD = 300;
+const PAD = 200;
 /** The line above the title block: check line and findings. */
-const LINE = 800;
+const LINE = 700;
 
 interface Sheet {
   kind: string;
@@ -63,10 +63,11 @@ function scenesOf(doc: Installation, { face = 'overview', place }: SheetOptions)
 
 /** The sheets one drawing takes: whole where a named scale allows it, else cut. */
 function sheetsOf(kind: string, scene: Scene, area: Area): Sheet[] {
-  const fits = SCALES.find(({ factor }) => scene.width * factor <= area.width && scene.height * factor <= area.height);
+  const drawn = contentOf(scene);
+  const fits = SCALES.find(({ factor }) => drawn.width * factor <= area.width && drawn.height * factor <= area.height);
   const { factor, name } = fits ?? SCALES.at(-1)!;
-  const xs = cuts(scene, 'x', scene.width, area.width / factor);
-  const ys = cuts(scene, 'y', scene.height, area.height / factor);
+  const xs = cuts(scene, 'x', drawn.x, drawn.x + drawn.width, area.width / factor);
+  const ys = cuts(scene, 'y', drawn.y, drawn.y + drawn.height, area.height / factor);
   const columns = xs.length - 1;
   const rows = ys.length - 1;
   return Array.from({ length: rows * columns }, (_, i): Sheet => {

@@ -30,15 +30,27 @@ function spans(scene: Scene, axis: 'x' | 'y'): Span[] {
   return found;
 }
 
+/** What is drawn, with half a module round it: empty margins of a face take no paper. */
+export function contentOf(scene: Scene): Area {
+  const [xs, ys] = [spans(scene, 'x'), spans(scene, 'y')];
+  const lanes = scene.frames.filter((frame) => frame.kind === 'lane');
+  const bands = scene.bands.length > 0;
+  const left = bands ? 0 : Math.min(scene.width, ...xs.map((s) => s.from)) - MODULE;
+  const right = Math.max(0, ...xs.map((s) => s.to), ...lanes.map((f) => f.x + f.width)) + MODULE / 2;
+  const top = bands ? 0 : Math.min(scene.height, ...ys.map((s) => s.from)) - MODULE;
+  const bottom = Math.max(0, ...ys.map((s) => s.to), ...lanes.map((f) => f.y + f.height)) + MODULE / 2;
+  return { x: Math.max(0, left), y: Math.max(0, top), width: Math.max(MODULE, right - Math.max(0, left)), height: Math.max(MODULE, bottom - Math.max(0, top)) };
+}
+
 /**
- * Cuts a length into stretches no longer than `most`.
- * @returns edges from 0 to `length`
+ * Cuts the stretch from `start` to `end` into pieces no longer than `most`.
+ * @returns edges, with both ends
  */
-export function cuts(scene: Scene, axis: 'x' | 'y', length: number, most: number): number[] {
-  const edges = [0];
-  if (length <= most) return [0, length];
+export function cuts(scene: Scene, axis: 'x' | 'y', from: number, end: number, most: number): number[] {
+  const edges = [from];
+  if (end - from <= most) return [from, end];
   const all = spans(scene, axis);
-  while (length - edges.at(-1)! > most) {
+  while (end - edges.at(-1)! > most) {
     const start = edges.at(-1)!;
     let best = start + most;
     let least = Infinity;
@@ -52,7 +64,7 @@ export function cuts(scene: Scene, axis: 'x' | 'y', length: number, most: number
     }
     edges.push(best);
   }
-  return [...edges, length];
+  return [...edges, end];
 }
 
 /** Where the runs of a scene pass a cut, for the match marks. */

@@ -38,7 +38,7 @@ export const CAUTIONS =
   'Design aid, not a permission. Isolate every source, lock off, prove dead before work. Work on fixed wiring only by a licensed person under local code. Battery terminals are never dead. A backup source keeps circuits live after the main switch is off. Values are to be verified by test.';
 
 export const TITLE_WIDTH = 18000;
-export const TITLE_HEIGHT = 3900;
+export const TITLE_HEIGHT = 3800;
 const ROW = 900;
 const LABEL = 180;
 const VALUE = 250;
@@ -100,7 +100,7 @@ export function titleBlockMarks(doc: Installation, title: SheetTitle, place: She
     marks.push({ kind: 'path', d: `M${x} ${top + ROW}H${x + TITLE_WIDTH}`, stroke: light.ink, width: i === 0 ? 35 : 18 });
   });
   breakLines(CAUTIONS, LABEL, TITLE_WIDTH - 300).forEach((text, i) =>
-    marks.push({ kind: 'text', x: x + 150, y: y + 3 * ROW + 320 + 300 * i, text, size: LABEL, colour: light.ink }),
+    marks.push({ kind: 'text', x: x + 150, y: y + 3 * ROW + 310 + 295 * i, text, size: LABEL, colour: light.ink }),
   );
   return marks;
 }

@@ -3,7 +3,7 @@ import { box } from './strokes';
 
 export const appliance: SymbolFamily = {
   id: 'appliance',
-  name: 'heater, fixed appliance',
+  name: 'heater, appliance',
   standard: 'IEC 60617, heater (from memory)',
   kinds: ['appliance'],
   overview: {

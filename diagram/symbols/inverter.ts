@@ -4,7 +4,7 @@ import { box } from './strokes';
 /** Mains in at the left (overview) or above (connections), output at the right or below, the battery apart from both. */
 export const inverter: SymbolFamily = {
   id: 'inverter',
-  name: 'inverter, ac and dc converter',
+  name: 'inverter',
   standard: 'IEC 60617, converter, ac and dc (from memory)',
   kinds: ['inverter'],
   overview: {
@@ -14,7 +14,7 @@ export const inverter: SymbolFamily = {
       box(0, 0, 2000, 1500),
       { d: 'M0 1500L2000 0', weight: 'thin' },
       { d: 'M250 344H700M250 500H406M544 500H700' },
-      { d: 'M1188 1156C1265 900 1390 900 1469 1100S1673 1300 1750 1044' },
+      { d: 'M1188 1156C1265 900 1390 900 1469 1100C1548 1300 1673 1300 1750 1044' },
     ],
     terminals: {
       'in.L': { x: 0, y: 750, side: 'left' },
@@ -35,7 +35,7 @@ export const inverter: SymbolFamily = {
       box(1250, 1500, 2500, 2000),
       { d: 'M1250 3500L3750 1500', weight: 'thin' },
       { d: 'M1562 1906H2200M1562 2125H1781M1981 2125H2200' },
-      { d: 'M2700 3062C2800 2750 2950 2750 3050 3000S3300 3250 3400 2938' },
+      { d: 'M2700 3062C2800 2750 2950 2750 3050 3000C3150 3250 3300 3250 3400 2938' },
     ],
     terminals: {
       'in.L': { x: 1000, y: 500, side: 'up' },

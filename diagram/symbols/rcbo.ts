@@ -8,7 +8,7 @@ const pole = (x: number, y: number) => [...contact(x, y), cross(x, y), release(x
 /** Circuit-breaker and residual-current device in one. */
 export const rcbo: SymbolFamily = {
   id: 'rcbo',
-  name: 'circuit-breaker with residual current',
+  name: 'rcbo, both in one',
   standard: 'IEC 60617, residual current circuit-breaker with overcurrent release (from memory)',
   kinds: ['rcbo'],
   overview: {
