@@ -17,7 +17,7 @@ export interface PastedSurvey {
   errors: PasteError[];
 }
 
-export const MAX_ROOMS = 100;
+const MAX_ROOMS = 100;
 
 /** Names under which people head a column, without case, spaces and signs. */
 const HEADINGS: Record<Column, readonly string[]> = {
@@ -95,7 +95,7 @@ const guarded = (text: string): string => (/^'*[=+\-@]/.test(text) ? `'${text}` 
 const unguarded = (text: string): string => (/^'+[=+\-@]/.test(text) ? text.slice(1) : text);
 
 /** A readable id for a room: `front-room`, or `front-room-2` where that is taken. */
-export function roomId(name: string, taken: ReadonlySet<string>): string {
+function roomId(name: string, taken: ReadonlySet<string>): string {
   const slug =
     name
       .toLowerCase()

@@ -13,7 +13,7 @@ export interface Pair {
   neutral: End;
 }
 
-export interface OriginNeed {
+interface OriginNeed {
   /** A, of service fuse, meter, main switch and main rcd */
   ratingA: number;
   place: string;

@@ -39,7 +39,7 @@ export function roomsWithSwitches(ways: readonly WayPlan[]): SurveyRoom[] {
 }
 
 /** switchboards are X11 and on: X1 to X10 are left to bars */
-export const BOARDS_FROM = 11;
+const BOARDS_FROM = 11;
 
 /** Switchboards in which conductors of both sources lie, the boards of the house included, each with its warning. */
 export function drawNotices(sketch: Sketch, intake: string, boards: readonly string[], source: string): void {

@@ -4,7 +4,7 @@ import { label, runOf, type Segment, type WayPlan, type WaySupply } from './way-
 
 /** Ways of lamps and fans: within the practice's limits, two neighbouring rooms on one where they are small. */
 
-export interface Limit {
+interface Limit {
   points: number;
   watts: number;
 }

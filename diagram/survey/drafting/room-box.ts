@@ -12,10 +12,10 @@ export interface Taps {
   earth: End;
 }
 
-export const MOST_SWITCHES = 4;
+const MOST_SWITCHES = 4;
 
 /** Lamps by switch: each its own while there are few, else pairs and more in rows. */
-export function byRow(lamps: readonly number[], pairs: boolean): number[][] {
+function byRow(lamps: readonly number[], pairs: boolean): number[][] {
   const rows = Math.min(MOST_SWITCHES, pairs ? Math.ceil(lamps.length / 2) : lamps.length);
   return Array.from({ length: rows }, (_, row) =>
     lamps.slice(Math.floor((row * lamps.length) / rows), Math.floor(((row + 1) * lamps.length) / rows)),
