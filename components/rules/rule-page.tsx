@@ -1,7 +1,8 @@
 import Link from 'next/link';
-import type { ReactNode } from 'react';
+import type { ComponentProps, ReactNode } from 'react';
 import { Stamp } from '@/components/ui/stamp';
 import type { RuleMeta } from '@/diagram/rules/types';
+import { LessonSection } from './lesson-section';
 import { GROUPS, SEVERITY, clauseWords, practiceWords } from './words';
 
 const link = 'text-ink underline underline-offset-[3px]';
@@ -10,15 +11,22 @@ function Part({ title, children }: { title: string; children: ReactNode }) {
   return (
     <section className="border-t-2 border-ink pt-3">
       <h2 className="mb-1 text-head font-bold">{title}</h2>
-      <div className="text-[14px] leading-[22px]">{children}</div>
+      <div className="max-w-[760px] text-[14px] leading-[22px]">{children}</div>
     </section>
   );
 }
 
-/** A rule as a lesson: what happens and to whom, what to do, what it leans on. */
-export function RulePage({ meta, before, after }: { meta: RuleMeta; before?: RuleMeta; after?: RuleMeta }) {
+interface RulePageProps {
+  meta: RuleMeta;
+  lesson: ComponentProps<typeof LessonSection>;
+  before?: RuleMeta;
+  after?: RuleMeta;
+}
+
+/** A rule as a lesson: what happens and to whom, how it looks on the sheet, what to do, what it leans on. */
+export function RulePage({ meta, lesson, before, after }: RulePageProps) {
   return (
-    <article className="flex max-w-[760px] flex-col gap-6 px-4 pt-4 pb-6 lap:px-6">
+    <article className="flex max-w-[1120px] flex-col gap-6 px-4 pt-4 pb-6 lap:px-6">
       <header>
         <p className="text-grey">
           <Link href="/rules" className={link}>
@@ -34,6 +42,7 @@ export function RulePage({ meta, before, after }: { meta: RuleMeta; before?: Rul
         </p>
       </header>
       <Part title="What happens">{meta.lesson}</Part>
+      <LessonSection {...lesson} />
       <Part title="What to do">{meta.remedy}</Part>
       <Part title="Leans on">
         {meta.clauses.length === 0 ? (
@@ -49,7 +58,10 @@ export function RulePage({ meta, before, after }: { meta: RuleMeta; before?: Rul
           </ul>
         )}
       </Part>
-      <nav aria-label="Rules beside this one" className="flex flex-wrap justify-between gap-4 border-t border-rule pt-3">
+      <nav
+        aria-label="Rules beside this one"
+        className="flex flex-wrap justify-between gap-4 border-t border-rule pt-3"
+      >
         {before ? (
           <Link href={`/rules/${before.id}`} className={link}>
             ← {before.title}

@@ -15,7 +15,10 @@ export const drawing: Record<string, () => Lesson> = {
     difference: 'They are S1 and S2.',
   }),
   'unnamed-way': () => ({
-    ...onOverview(lampRoom().set('Q11', { label: undefined }), lampRoom().set('Q11', { label: 'Study lights' })),
+    ...onOverview(lampRoom().set('Q11', { label: undefined }), lampRoom().set('Q11', { label: 'Study lights' }), [
+      'Q11',
+      'E1',
+    ]),
     shows: 'Way 1 behind breaker Q11 feeds the study; it has no name.',
     difference: 'The way is named "Study lights", and the chart at the board says so.',
   }),
@@ -25,7 +28,7 @@ export const drawing: Record<string, () => Lesson> = {
     difference: 'The line core is brown.',
   }),
   'missing-data': () => ({
-    ...onOverview(lampRoom().set('Q11', { rating: undefined }), lampRoom()),
+    ...onOverview(lampRoom().set('Q11', { rating: undefined }), lampRoom(), ['Q11', 'E1']),
     shows: 'Breaker Q11 bears no rating.',
     difference: 'Q11 bears its rating, 6 A of type B.',
   }),

@@ -1,5 +1,5 @@
 import type { Home } from '../document/home';
-import { atBoard, inStudy, lampRoom, outletRoom, board } from './base';
+import { inStudy, lampRoom, outletRoom, board } from './base';
 import type { Lesson } from './types';
 
 const neutralThroughSwitch = (): Home =>
@@ -13,35 +13,42 @@ const neutralThroughSwitch = (): Home =>
 
 const fuseInNeutral = (): Home =>
   lampRoom()
-    .part('fuse', 'F5', 'hall', { rating: 10, standard: 'gG' })
-    .cut('NB', 'JN11')
-    .neutral('NB', 'F5:1')
-    .neutral('F5:2', 'JN11', 'k11');
+    .part('fuse', 'F5', 'study', { rating: 3, standard: 'gG' })
+    .cut('JN11', 'E1')
+    .neutral('JN11', 'F5:1')
+    .neutral('F5:2', 'E1:N', 'cE1');
 
 const stairs = (): Home => board().way('Q11', 'study').twoWay('E1', 'S1', 'S2', 'Q11');
 
-const threeOutlets = (): Home => outletRoom().socket('X2', 'Q11').socket('X3', 'Q11').cut('JL11', 'X2').cut('JL11', 'X3');
+const threeOutlets = (): Home =>
+  outletRoom().socket('X2', 'Q11').socket('X3', 'Q11').cut('JL11', 'X2').cut('JL11', 'X3');
 
 /** Polarity and continuity. */
 export const polarity: Record<string, () => Lesson> = {
   'switched-neutral': () => ({
     ...inStudy(neutralThroughSwitch(), lampRoom()),
     shows: 'Lamp E1 has its line straight from the joint; its neutral goes through switch S1.',
-    difference: 'S1 stands in the line, the neutral goes straight to E1: with the switch off nothing in the lamp is live.',
+    difference:
+      'S1 stands in the line, the neutral goes straight to E1: with the switch off nothing in the lamp is live.',
   }),
   'fused-neutral': () => ({
-    ...atBoard(fuseInNeutral(), lampRoom(), ['F5', 'Q11', 'LB', 'NB', 'EB']),
-    shows: 'At the board the neutral of the way behind breaker Q11 leaves the neutral bar through fuse F5.',
-    difference: 'The neutral goes straight from its bar. Only the breaker in the line can open the way.',
+    ...inStudy(fuseInNeutral(), lampRoom()),
+    shows: 'The neutral of lamp E1 goes through fuse F5.',
+    difference: 'The neutral goes straight to E1. What opens on too much current stands in the line, at the board.',
   }),
   'reversed-polarity': () => ({
     ...inStudy(outletRoom().move('X1:L', 'JL11', 'X1:N').move('X1:N', 'JN11', 'X1:L'), outletRoom()),
     shows: 'At outlet X1 the brown line core ends at N and the blue neutral core at L.',
-    difference: 'Line ends at L and neutral at N, so that the switch and fuse of whatever is plugged in stand in the line.',
+    difference:
+      'Line ends at L and neutral at N, so that the switch and fuse of whatever is plugged in stand in the line.',
   }),
   'switched-earth': () => ({
     ...inStudy(
-      outletRoom().part('switch', 'S9', 'study', { rating: 6 }).cut('JE11', 'X1').earth('JE11', 'S9:1').earth('S9:2', 'X1:E'),
+      outletRoom()
+        .part('switch', 'S9', 'study', { rating: 6 })
+        .cut('JE11', 'X1')
+        .earth('JE11', 'S9:1')
+        .earth('S9:2', 'X1:E'),
       outletRoom(),
     ),
     shows: 'The earth core of outlet X1 goes through switch S9.',
@@ -49,7 +56,8 @@ export const polarity: Record<string, () => Lesson> = {
   }),
   'missing-earth': () => ({
     ...inStudy(outletRoom().cut('JE11', 'X1'), outletRoom()),
-    shows: 'Outlet X1 has line and neutral; its earth contact is empty, and the earth core of the cable ends at the joint.',
+    shows:
+      'Outlet X1 has line and neutral; its earth contact is empty, and the earth core of the cable ends at the joint.',
     difference: 'The earth core goes on from the joint to X1.',
   }),
   'open-neutral': () => ({
@@ -86,7 +94,8 @@ export const polarity: Record<string, () => Lesson> = {
         .wire('strapper', 'S1:C', 'S2:1', 'cE1'),
       stairs(),
     ),
-    shows: 'Two-way switches S1 and S2 work lamp E1; the line ends at contact 1 of S1, and one of the two wires between them at its common C.',
+    shows:
+      'Two-way switches S1 and S2 work lamp E1; the line ends at contact 1 of S1, and one of the two wires between them at its common C.',
     difference: 'The line ends at C of S1, the lamp at C of S2, and the two wires between them join 1 to 1 and 2 to 2.',
   }),
   'line-role-mismatch': () => ({

@@ -1,15 +1,11 @@
 import { Home } from '../document/home';
-import { atBoard, backedUp, backedUpBesideRcd, board, lampRoom, onOverview, outletRoom } from './base';
+import { atBoard, backedUp, backedUpBesideRcd, board, lampRoom, lean, onOverview, outletRoom } from './base';
 import type { Lesson } from './types';
 
 const ON_TT = { supply: { system: 'TT', ra: 40 } } as const;
 
 const rodHome = (): Home =>
-  new Home({ ...ON_TT, rcd: false })
-    .drop('P1')
-    .drop('F9')
-    .line('F1:2', 'Q1:1')
-    .neutral('SUP:N', 'Q1:3')
+  lean(new Home({ ...ON_TT, rcd: false }))
     .drop('LB0')
     .drop('NB0')
     .line('Q0:2', 'LB')
@@ -60,8 +56,8 @@ export const shock: Record<string, () => Lesson> = {
     difference: 'The two bars are apart; they meet at the origin of the supply and nowhere in the home.',
   }),
   'no-rcd': () => ({
-    ...onOverview(board().way('Q11', 'study').socket('X1', 'Q11'), outletRoom()),
-    shows: 'Outlet X1 hangs on main switch Q1 and breaker Q11; there is no rcd.',
+    ...atBoard(board().way('Q11', 'study').socket('X1', 'Q11'), outletRoom()),
+    shows: 'Way 1, which feeds an outlet, hangs on main switch Q1 and breaker Q11; there is no rcd.',
     difference: 'Rcd Q2 of 30 mA stands before the bar.',
   }),
   'rcd-idle-on-backup': () => ({
@@ -70,17 +66,18 @@ export const shock: Record<string, () => Lesson> = {
     difference: 'Rcd Q5 stands behind the inverter, before the bar of the backed-up ways.',
   }),
   'no-earth-reference-on-backup': () => ({
-    ...onOverview(backedUp({ bond: false }), backedUp()),
-    shows: 'Inverter G1 feeds the bedroom; it has no bond, so that its neutral has no earth once main switch Q1 is off.',
+    ...onOverview(backedUp({ bond: false }), backedUp(), ['G1', 'G2', 'F2', 'Q3', 'Q4', 'Q5']),
+    shows:
+      'Inverter G1 feeds the bedroom; it has no bond, so that its neutral has no earth once main switch Q1 is off.',
     difference: 'G1 bonds its neutral to earth while it runs on its battery.',
   }),
   'slow-disconnection': () => ({
-    ...onOverview(farHeater(160), farHeater(20)),
+    ...onOverview(farHeater(160), farHeater(20), ['Q12', 'E5']),
     shows: 'A heater of 500 W hangs on breaker Q12, B16, at the end of 160 m of 2.5 mm2; there is no rcd.',
     difference: 'The run is 20 m: enough current flows in a fault to open Q12 at once.',
   }),
   'thin-earth': () => ({
-    ...onOverview(heaterWithEarth(1), heaterWithEarth(6)),
+    ...onOverview(heaterWithEarth(1), heaterWithEarth(6), ['Q12', 'E5']),
     shows: 'A heater hangs on breaker Q12, B32, by a cable of 6 mm2 whose earth core has 1 mm2.',
     difference: 'The earth core has 6 mm2, as the line.',
   }),
@@ -90,7 +87,7 @@ export const shock: Record<string, () => Lesson> = {
     difference: 'A bonding conductor of 10 mm2 joins the pipe to the earth bar.',
   }),
   'wet-place-socket': () => ({
-    ...onOverview(bath('bath'), bath('passage')),
+    ...onOverview(bath('bath'), bath('passage'), ['Q11', 'X1']),
     shows: 'Outlet X1 stands in zone 1 of a bath.',
     difference: 'It stands in the passage before the bath.',
   }),

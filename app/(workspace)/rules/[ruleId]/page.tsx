@@ -5,6 +5,7 @@ import { RulePage } from '@/components/rules/rule-page';
 import { RulesSheet } from '@/components/rules/rules-sheet';
 import { GROUPS, GROUP_ORDER } from '@/components/rules/words';
 import { rules } from '@/diagram/rules';
+import { lessonView } from '@/lib/server/lessons';
 import { requireActor } from '@/lib/server/session';
 import { today } from '../../today';
 
@@ -23,7 +24,8 @@ export default async function RuleDetailPage({ params }: { params: Params }) {
   const { ruleId } = await params;
   const at = metas.findIndex(({ id }) => id === ruleId);
   const meta = metas[at];
-  if (!meta) notFound();
+  const lesson = meta && lessonView(meta.id);
+  if (!lesson) notFound();
   return (
     <RulesSheet
       person={{ initials: actor.initials, roles: actor.roles }}
@@ -51,7 +53,7 @@ export default async function RuleDetailPage({ params }: { params: Params }) {
         </nav>
       }
     >
-      <RulePage meta={meta} before={metas[at - 1]} after={metas[at + 1]} />
+      <RulePage meta={meta} lesson={lesson} before={metas[at - 1]} after={metas[at + 1]} />
     </RulesSheet>
   );
 }
