@@ -13,10 +13,13 @@ import { throwawayCluster } from './throwaway.mjs';
 const port = Number(process.argv[2]);
 const address = `http://127.0.0.1:${port}`;
 const undo = [];
-const stop = async (status) => {
-  for (const step of undo.splice(0).reverse()) await step();
+let stopping;
+/** Once: a signal and the end of the app that it causes both lead here, and the database has to be waited for. */
+const stop = (status) => (stopping ??= takeDown(status));
+async function takeDown(status) {
+  for (const step of undo.reverse()) await step();
   process.exit(status);
-};
+}
 for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => void stop(0));
 try {
   await buildIfChanged('.next-test');

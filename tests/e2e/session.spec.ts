@@ -20,7 +20,11 @@ test('a copied cookie is dead after signing out, and the cookie cannot be read b
   await page.request.post('/api/auth/signout', { form: { csrfToken, json: 'true' }, headers: { origin: baseURL! } });
   expect((await thief.get('/api/jobs')).status()).toBe(401);
   expect(await (await thief.get('/api/auth/session')).json()).not.toHaveProperty('user.name');
-  expect((await thief.get('/jobs', { maxRedirects: 0 })).status()).toBe(307);
+  // The frame of the page may be on its way before the session is read: then the redirect stands in the body.
+  const shown = await thief.get('/jobs', { maxRedirects: 0 });
+  const text = await shown.text();
+  expect(shown.status() === 307 || text.includes('/signin')).toBe(true);
+  expect(text).not.toContain('Quarry Steps');
   await thief.dispose();
 });
 
