@@ -4,6 +4,7 @@ import type { Context } from './context';
 import { recalled, seen } from './clauses';
 import { lineLoops } from './readings/line-loops';
 import { once } from './readings/once';
+import { takeLead, takeOut } from './readings/rewire';
 import type { Rule } from './types';
 import { capital, say, sayParts } from './readings/words';
 
@@ -86,6 +87,12 @@ export const backfeed: Rule = {
         parts: [...new Set([inverter, ...plugs, ...sockets])],
         wires: plugs.length > 0 ? [] : wires,
         conditions,
+        remedies:
+          plugs.length > 0
+            ? plugs.flatMap((id) => takeLead(context, id))
+            : wires.length > 0
+              ? [takeOut('Take the joint out', wires)]
+              : [],
       };
     }
   },

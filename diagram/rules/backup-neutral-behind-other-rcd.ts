@@ -1,5 +1,6 @@
 import { recalled } from './clauses';
 import { neutralFaultsOf } from './readings/neutral-faults';
+import { neutralRemedies } from './readings/move-neutral';
 import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
 
@@ -17,7 +18,8 @@ export const backupNeutralBehindOtherRcd: Rule = {
     remedy: 'Move the neutral to the bar behind the rcd that its line passes.',
   },
   *check(context) {
-    for (const { points, wires, devices, foreign, conditions, link } of neutralFaultsOf(context, 'behind')) {
+    for (const fault of neutralFaultsOf(context, 'behind')) {
+      const { points, wires, devices, foreign, conditions, link } = fault;
       const names = sayParts(context, points);
       const rcds = sayParts(context, devices);
       yield {
@@ -32,6 +34,7 @@ export const backupNeutralBehindOtherRcd: Rule = {
         parts: wires.length === 0 ? devices : points,
         wires,
         conditions,
+        remedies: neutralRemedies(context, fault),
       };
     }
   },

@@ -1,5 +1,6 @@
 import { recalled, seen } from './clauses';
 import { neutralFaultsOf } from './readings/neutral-faults';
+import { neutralRemedies } from './readings/move-neutral';
 import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
 
@@ -18,7 +19,8 @@ export const backupNeutralLost: Rule = {
     remedy: "Lead the neutral of a backed-up load to the neutral bar of the inverter's own output.",
   },
   *check(context) {
-    for (const { points, wires, devices, conditions } of neutralFaultsOf(context, 'lost')) {
+    for (const fault of neutralFaultsOf(context, 'lost')) {
+      const { points, wires, devices, conditions } = fault;
       const names = sayParts(context, points);
       const one = points.length === 1;
       yield {
@@ -30,6 +32,7 @@ export const backupNeutralLost: Rule = {
         parts: points,
         wires,
         conditions,
+        remedies: neutralRemedies(context, fault),
       };
     }
   },

@@ -1,6 +1,7 @@
 import { isOvercurrent } from '../terminals/roles-of-parts';
 import { seen } from './clauses';
 import { neutralFaultsOf } from './readings/neutral-faults';
+import { neutralRemedies } from './readings/move-neutral';
 import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
 
@@ -18,7 +19,8 @@ export const borrowedNeutral: Rule = {
     remedy: 'Lead the neutral back with its own line, to the bar and the rcd of its own way.',
   },
   *check(context) {
-    for (const { points, wires, devices, conditions, link } of neutralFaultsOf(context, 'borrowed')) {
+    for (const fault of neutralFaultsOf(context, 'borrowed')) {
+      const { points, wires, devices, conditions, link } = fault;
       const names = sayParts(context, points);
       const ways = devices.filter((id) => isOvercurrent(context.graph.parts.get(id)!));
       const through = `${ways.length === devices.length ? 'the neutral of ' : ''}${sayParts(context, devices)}`;
@@ -32,6 +34,7 @@ export const borrowedNeutral: Rule = {
         parts: points,
         wires,
         conditions,
+        remedies: neutralRemedies(context, fault),
       };
     }
   },

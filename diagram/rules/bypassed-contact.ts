@@ -1,8 +1,9 @@
 import { COMMON_PRACTICE } from './clauses';
 import { bypassedContacts } from './readings/bypassed';
 import { neutralContacts } from './readings/neutral-contacts';
+import { takeOut } from './readings/rewire';
 import type { Rule } from './types';
-import { capital, say } from './readings/words';
+import { capital, say, sayWire } from './readings/words';
 
 /** A control switch both of whose terminals are joined elsewhere. */
 export const bypassedContact: Rule = {
@@ -26,6 +27,7 @@ export const bypassedContact: Rule = {
         message: `The two sides of ${say(context, part)} are joined past it: open or closed, what it should switch stays on.`,
         parts: [part],
         wires,
+        remedies: wires.map((id) => takeOut(`Take out the wire ${sayWire(context, id)}`, [id])),
       };
     }
   },

@@ -1,9 +1,34 @@
 import { isBar } from '../document/kinds';
 import { isControl, isPoint } from '../terminals/roles-of-parts';
-import type { Rule } from './types';
+import type { End, Part } from '../document/schema';
+import type { Context } from './context';
+import { newWireId, withEnd } from './readings/rewire';
+import type { Remedy, Rule } from './types';
 import { capital, say } from './readings/words';
 
 const MOST = 2;
+
+/** The wires in a joint behind the accessory, and one from there to the terminal. */
+function behindJoint(context: Context, part: Part, mark: string, wires: readonly string[]): Remedy[] {
+  const { graph } = context;
+  const id = `${part.id}.joint.${mark}`;
+  if (graph.parts.has(id)) return [];
+  const joint: Part = {
+    id,
+    kind: 'joint',
+    ...(part.place && { place: part.place }),
+    ...(part.board && { board: part.board }),
+  };
+  const all = wires.map((wire) => graph.wires.get(wire)!);
+  const moved = all.map((wire, i) => withEnd(wire, [part.id, mark], [id, String(i + 1)]));
+  const link = {
+    id: newWireId(context, id),
+    from: [id, String(wires.length + 1)] as End,
+    to: [part.id, mark] as End,
+    role: all[0]!.role,
+  };
+  return [{ label: 'Join them in a connector behind it', patch: { set: { parts: [joint], wires: [...moved, link] } } }];
+}
 
 /** More than two conductors at one terminal of an accessory. */
 export const crowdedTerminal: Rule = {
@@ -34,6 +59,7 @@ export const crowdedTerminal: Rule = {
         message: `${capital(name)} has ${wires.length} wires at terminal ${graph.markOf[node]}; it holds ${MOST} safely.`,
         parts: [part.id],
         wires,
+        remedies: behindJoint(context, part, graph.markOf[node]!, wires),
       };
     }
   },

@@ -1,4 +1,18 @@
-import type { Rule } from './types';
+import type { Context } from './context';
+import type { Remedy, Rule } from './types';
+
+/** Every part but the first with the next free number of the same letters. */
+function renumber({ document, graph }: Context, ref: string, ids: readonly string[]): Remedy[] {
+  const letters = ref.replace(/\d+$/, '');
+  const used = new Set(document.parts.map((part) => part.ref));
+  let next = 1;
+  const parts = ids.slice(1).map((id) => {
+    while (used.has(`${letters}${next}`)) next++;
+    used.add(`${letters}${next}`);
+    return { ...graph.parts.get(id)!, ref: `${letters}${next}` };
+  });
+  return [{ label: `Call the other ${parts.map((part) => part.ref).join(', ')}`, patch: { set: { parts } } }];
+}
 
 /** One designation on two parts. */
 export const duplicateRef: Rule = {
@@ -20,6 +34,7 @@ export const duplicateRef: Rule = {
         heading: `${ref} names ${ids.length} parts`,
         message: `${ids.length} parts carry the designation ${ref}. Charts, lists and findings cannot tell them apart.`,
         parts: ids,
+        remedies: renumber(context, ref, ids),
       };
     }
   },

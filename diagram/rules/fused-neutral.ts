@@ -1,5 +1,6 @@
 import { seen, recalled } from './clauses';
 import { neutralContacts } from './readings/neutral-contacts';
+import { bridge } from './readings/rewire';
 import type { Rule } from './types';
 import { capital, say, sayParts } from './readings/words';
 
@@ -28,6 +29,7 @@ export const fusedNeutral: Rule = {
         parts: [id],
         wires,
         conditions,
+        remedies: bridge(context, `Take ${say(context, id)} out of the neutral`, id, ['1', '2']),
       };
     }
   },

@@ -1,5 +1,6 @@
 import { natureOfRole, type Nature } from '../circuit/natures';
 import { isControl, isPoint } from '../terminals/roles-of-parts';
+import type { Role } from '../document/schema';
 import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
 import { crossings } from './readings/crossings';
@@ -12,6 +13,8 @@ import type { Rule } from './types';
 import { sayParts, sayWire } from './readings/words';
 
 const WORD: Record<Nature, string> = { L: 'line', N: 'neutral', E: 'earth', D: 'battery lead' };
+
+const ROLE: Record<Nature, Role> = { L: 'line', N: 'neutral', E: 'earth', D: 'dc+' };
 
 /** What a wire turns out to be; undefined where it is dead, or more than one thing as switches move. */
 function natureOf(context: Context, node: number): Nature | undefined {
@@ -103,6 +106,12 @@ export const lineRoleMismatch: Rule = {
           : `${wires.length} wires at ${sayParts(context, parts)} are drawn as ${WORD[drawn]}; as joined they are ${WORD[is]}.`,
         parts: [...parts],
         wires,
+        remedies: [
+          {
+            label: `Draw ${one ? 'it' : 'them'} as ${WORD[is]}`,
+            patch: { set: { wires: wires.map((id) => ({ ...graph.wires.get(id)!, role: ROLE[is] })) } },
+          },
+        ],
       };
     }
   },

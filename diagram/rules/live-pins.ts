@@ -1,6 +1,7 @@
 import type { PartOf } from '../document/schema';
 import { recalled, seen } from './clauses';
 import { livePins as readPins } from './readings/live-pins';
+import { takeLead } from './readings/rewire';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
 
@@ -28,6 +29,7 @@ export const livePins: Rule = {
           `${capital(name)} ${socket === undefined ? 'hangs' : 'can be pulled'} with pin ${pins.join(' and ')} at line voltage` +
           `${through ? ', through a load that returns by it' : ', from the side of its own lead'}.`,
         parts: [plug],
+        remedies: takeLead(context, plug),
         conditions,
       };
     }

@@ -1,5 +1,6 @@
 import { COMMON_PRACTICE } from './clauses';
 import type { End } from '../document/schema';
+import { takeOut } from './readings/rewire';
 import type { Rule } from './types';
 import { say } from './readings/words';
 
@@ -27,6 +28,7 @@ export const looseWire: Rule = {
         message: `A wire of role ${wire.role} names ${missing.map(where).join(' and ')}, which does not exist. It joins nothing.`,
         parts: [...new Set([wire.from, wire.to].filter(([part]) => graph.parts.has(part)).map(([part]) => part))],
         wires: [wire.id],
+        remedies: [takeOut('Take the wire away', [wire.id])],
       };
     }
   },

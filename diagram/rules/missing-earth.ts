@@ -2,6 +2,7 @@ import { isLoad } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
 import { earthGaps, hasWire } from './readings/earth-gaps';
 import { openRegions } from './readings/open-regions';
+import { earthRemedies } from './readings/lead-earth';
 import type { Rule } from './types';
 import { be, capital, say, sayParts } from './readings/words';
 
@@ -37,6 +38,7 @@ export const missingEarth: Rule = {
         message: `${capital(names)} ${verb} no way to the main earthing terminal. ${what}`,
         parts: [...parts, ...joints],
         wires: [...wires, ...crossed],
+        remedies: earthRemedies(context, { parts, joints, wires, on }),
       };
     }
   },

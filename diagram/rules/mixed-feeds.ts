@@ -3,6 +3,7 @@ import { recalled, seen } from './clauses';
 import type { Context } from './context';
 import { lineLoops } from './readings/line-loops';
 import { openRegions } from './readings/open-regions';
+import { takeOut } from './readings/rewire';
 import type { Rule } from './types';
 import { be, capital, say, sayParts, sayWire } from './readings/words';
 
@@ -51,6 +52,7 @@ export const mixedFeeds: Rule = {
             : `${by} joins what ${sayParts(context, nearest)} feed${when}. With either off, both stay live from the other.${consequence}`,
         parts: [...new Set([...nearest, ...(part ? [part] : []), ...ends])],
         wires: wire ? [wire.id] : [],
+        remedies: wire ? [takeOut('Take the link out', [wire.id])] : [],
         conditions: inverters.length > 1 ? context.evaluated.map(({ condition }) => condition.name) : conditions,
       };
     }

@@ -2,6 +2,7 @@ import type { PartOf } from '../document/schema';
 import { reach, reaches } from '../terminals/reach';
 import { seen, recalled } from './clauses';
 import { earthGaps } from './readings/earth-gaps';
+import { changePart } from './readings/remedies';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
 
@@ -57,6 +58,9 @@ export const noEarthReferenceOnBackup: Rule = {
         message: `The neutral of ${say(context, id)} is joined to earth nowhere.${because} A first fault to a case then trips nothing, neither rcd nor breaker.`,
         parts: [id],
         conditions,
+        remedies: [
+          changePart(`Bond ${say(context, id)} on battery`, graph.parts.get(id) as PartOf<'inverter'>, { bond: true }),
+        ],
       };
     }
   },

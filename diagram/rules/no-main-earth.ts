@@ -1,4 +1,5 @@
 import { recalled } from './clauses';
+import { joinTo } from './readings/rewire';
 import type { Rule } from './types';
 
 /** No earth bar, or one that reaches neither the supply's earth nor an electrode. */
@@ -28,6 +29,7 @@ export const noMainEarth: Rule = {
         (bar ? `${context.name(bar)} is not joined to ${electrodes}. ` : 'No earth bar is drawn. ') +
         'A fault to any case makes every earthed case in the home live, and no overcurrent device clears it.',
       parts: [...(bar ? [bar] : []), ...means].map(({ id }) => id),
+      remedies: bar && means[0] ? joinTo(context, 'earth', [means[0].id, 'E'], bar.id) : [],
     };
   },
 };

@@ -2,7 +2,9 @@ import { isResidual } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
 import type { Context } from './context';
 import { dutyOf, guardsOf, serves, DUTY_NAME, type Duty } from './readings/rcd-duty';
-import type { Lack, Rule, Severity } from './types';
+import { rcboInPlace } from './readings/rcbo-remedy';
+import { changePart } from './readings/remedies';
+import type { Lack, Remedy, Rule, Severity } from './types';
 import { capital, inOrder, sayParts } from './readings/words';
 
 interface Unguarded {
@@ -46,6 +48,22 @@ function unguarded(context: Context): Unguarded[] {
   return [...found.values()];
 }
 
+/** One way takes an rcbo; an rcd that is there and too coarse takes a finer one. */
+function guard(context: Context, ways: readonly string[], points: ReadonlySet<string>): Remedy[] {
+  const coarse = new Set(
+    context.evaluated.flatMap(({ points: states }) =>
+      [...points].flatMap((id) => guardsOf(context, states.get(id)!).map((device) => device.id)),
+    ),
+  );
+  const finer = [...coarse].flatMap((id) => {
+    const device = context.graph.parts.get(id)!;
+    return device.kind === 'rcd' && device.delay !== 'S'
+      ? [changePart(`Make ${context.name(id)} one of 30 mA`, device, { sensitivity: 0.03 })]
+      : [];
+  });
+  return [...finer, ...(ways.length === 1 ? rcboInPlace(context, ways[0]!) : [])];
+}
+
 const milliamps = (amps: number): string => `${Math.floor(amps * 1000 + 1e-6)} mA`;
 
 /** A socket, wet place, household lighting (GB) or any circuit on TT without an rcd before it. */
@@ -76,6 +94,7 @@ export const noRcd: Rule = {
         message: `${capital(DUTY_NAME[of])} must lie behind an rcd${limit}; on mains nothing of the kind lies before ${names}. A person who touches a fault is not saved.`,
         parts: [...devices, ...inOrder(context, points).map(({ id }) => id)],
         conditions: [...conditions],
+        remedies: guard(context, devices, points),
       };
     }
   },

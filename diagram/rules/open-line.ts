@@ -1,5 +1,6 @@
 import { recalled } from './clauses';
 import { openRegions } from './readings/open-regions';
+import { rejoin } from './readings/rejoin';
 import type { Rule } from './types';
 import { be, capital, say, sayParts } from './readings/words';
 
@@ -27,6 +28,7 @@ export const openLine: Rule = {
             message: `No condition and no position of the switches brings line to ${who}.${where}`,
             parts: [...gap, ...points],
             wires,
+            remedies: rejoin(context, 'line', { points, gap }),
           }
         : {
             heading: `${capital(who)} ${be(points.length)} dead on mains`,

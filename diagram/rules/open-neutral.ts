@@ -1,5 +1,6 @@
 import { recalled } from './clauses';
 import { openRegions } from './readings/open-regions';
+import { rejoin } from './readings/rejoin';
 import type { Rule, Violation } from './types';
 import { be, capital, sayParts } from './readings/words';
 
@@ -26,6 +27,7 @@ export const openNeutral: Rule = {
         message: `Line arrives at ${who}, but no neutral leads back to the source.${where} Beyond the break the neutral stands at line voltage.`,
         parts: [...gap, ...points],
         wires,
+        remedies: on ? [] : rejoin(context, 'neutral', { points, gap }),
         ...(conditions && { conditions }),
       };
       if (on === 'earth')

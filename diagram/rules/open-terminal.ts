@@ -5,7 +5,7 @@ import type { Context } from './context';
 import { hasWire } from './readings/earth-gaps';
 import { openRegions } from './readings/open-regions';
 import { potentials } from './readings/potentials';
-import type { Rule } from './types';
+import type { Remedy, Rule } from './types';
 import { capital, say } from './readings/words';
 
 /** Terminals without which a part does not work; sets of which one must be complete are given as alternatives. */
@@ -74,6 +74,15 @@ function isTold(context: Context, part: Part, missing: readonly string[]): boole
   });
 }
 
+/** A breaker with nothing behind it may be meant as spare. */
+function asSpare(context: Context, part: Part): Remedy[] {
+  if (part.kind !== 'mcb' && part.kind !== 'rcbo') return [];
+  const behind = ['2', '4'].map((mark) => context.graph.node(part.id, mark)).filter((node) => node !== undefined);
+  return behind.some((node) => hasWire(context, node))
+    ? []
+    : [{ label: 'Mark it as spare', patch: { set: { parts: [{ ...part, spare: true }] } } }];
+}
+
 /** A terminal that must be connected for the part to work, and is not. */
 export const openTerminal: Rule = {
   meta: {
@@ -108,6 +117,7 @@ export const openTerminal: Rule = {
         heading: `${capital(say(context, part.id))} is not wired whole`,
         message: `Terminal ${missing.join(' and ')} of ${say(context, part.id)} ${missing.length === 1 ? 'has' : 'have'} no wire: as drawn it cannot do its work.`,
         parts: [part.id],
+        remedies: asSpare(context, part),
       };
     }
   },

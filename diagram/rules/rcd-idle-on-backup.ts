@@ -1,5 +1,6 @@
 import { recalled } from './clauses';
 import { dutyOf, guardsOf, serves } from './readings/rcd-duty';
+import { rcboInPlace } from './readings/rcbo-remedy';
 import type { Rule } from './types';
 import { capital, inOrder, say, sayParts } from './readings/words';
 
@@ -43,6 +44,7 @@ export const rcdIdleOnBackup: Rule = {
           ...inOrder(context, points).map(({ id }) => id),
         ],
         conditions: [...conditions],
+        remedies: ways.size === 1 ? rcboInPlace(context, [...ways][0]!) : [],
       };
     }
   },

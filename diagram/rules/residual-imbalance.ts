@@ -1,5 +1,6 @@
 import { recalled } from './clauses';
 import { neutralFaultsOf } from './readings/neutral-faults';
+import { neutralRemedies } from './readings/move-neutral';
 import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
 
@@ -17,7 +18,8 @@ export const residualImbalance: Rule = {
     remedy: 'Take line and neutral of the load through the same rcd.',
   },
   *check(context) {
-    for (const { points, wires, devices, conditions, link } of neutralFaultsOf(context, 'imbalance')) {
+    for (const fault of neutralFaultsOf(context, 'imbalance')) {
+      const { points, wires, devices, conditions, link } = fault;
       const rcds = sayParts(context, devices);
       yield {
         heading: `${capital(rcds)} trips in normal use`,
@@ -25,6 +27,7 @@ export const residualImbalance: Rule = {
         parts: wires.length === 0 ? devices : [...devices, ...points],
         wires,
         conditions,
+        remedies: neutralRemedies(context, fault),
       };
     }
   },

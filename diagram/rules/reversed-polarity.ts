@@ -1,5 +1,6 @@
 import { recalled, seen } from './clauses';
 import { reversals } from './readings/reversals';
+import { turnOver } from './readings/turn-over';
 import type { Rule } from './types';
 import { be, capital, sayParts } from './readings/words';
 
@@ -17,7 +18,8 @@ export const reversedPolarity: Rule = {
     remedy: 'Change the two wires over where they cross, and prove polarity at every point behind.',
   },
   *check(context) {
-    for (const { points, wires, conditions } of reversals(context)) {
+    for (const reversal of reversals(context)) {
+      const { points, wires, conditions } = reversal;
       const names = sayParts(context, points);
       yield {
         heading: `${capital(names)} ${be(points.length)} the wrong way round`,
@@ -27,6 +29,7 @@ export const reversedPolarity: Rule = {
         parts: points,
         wires,
         conditions,
+        remedies: turnOver(context, reversal),
       };
     }
   },

@@ -1,10 +1,24 @@
 import { natureOfRole } from '../circuit/natures';
 import type { LinkKind } from '../terminals/links';
 import { recalled } from './clauses';
+import type { Context } from './context';
+import { bridge } from './readings/rewire';
 import type { Rule } from './types';
 import { say } from './readings/words';
 
 const OPENS: ReadonlySet<LinkKind | 'wire'> = new Set(['device', 'switch', 'select', 'changeover']);
+
+/** The marks of each pole that carries an earth wire at both sides. */
+function poles({ graph }: Context, id: string): [string, string][] {
+  return graph.contactsOf.get(id)!.flatMap((number): [string, string][] => {
+    const { a, b } = graph.edges[number]!;
+    const earthed = (node: number) =>
+      [...graph.wires.values()].some(
+        (wire) => wire.role === 'earth' && [wire.from, wire.to].some(([part, mark]) => graph.node(part, mark) === node),
+      );
+    return earthed(a) && earthed(b) ? [[graph.markOf[a]!, graph.markOf[b]!]] : [];
+  });
+}
 
 /** A contact or protective device in an earth path: wires of role earth at both sides of a pole, or earth that only it carries. */
 export const switchedEarth: Rule = {
@@ -46,6 +60,9 @@ export const switchedEarth: Rule = {
         message: `The earth runs through ${say(context, id)}. When it opens, everything behind it is without earth and nothing shows it.`,
         parts: [id],
         wires: [...wires],
+        remedies: poles(context, id).flatMap((sides) =>
+          bridge(context, `Take the earth past ${say(context, id)}`, id, sides),
+        ),
       };
     }
   },

@@ -1,5 +1,6 @@
 import { recalled, seen } from './clauses';
 import { neutralContacts } from './readings/neutral-contacts';
+import { throughTheLine } from './readings/through-the-line';
 import type { Rule } from './types';
 import { capital, inOrder, sayParts } from './readings/words';
 
@@ -30,6 +31,7 @@ export const switchedNeutral: Rule = {
         parts: switches.map(({ id }) => id),
         wires,
         conditions,
+        remedies: contacts.length === 1 && points.length === 1 ? throughTheLine(context, contacts[0]!, points[0]!) : [],
       };
     }
   },

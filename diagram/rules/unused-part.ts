@@ -24,6 +24,7 @@ export const unusedPart: Rule = {
         heading: `${capital(say(context, part.id))} is joined to nothing`,
         message: `No wire leads to ${say(context, part.id)}.`,
         parts: [part.id],
+        remedies: [{ label: 'Take it off the sheet', patch: { remove: { parts: [part.id] } } }],
       };
     }
   },

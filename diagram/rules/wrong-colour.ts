@@ -2,7 +2,8 @@ import type { Role, Wire } from '../document/schema';
 import { practices } from '../practices';
 import type { ColourScheme } from '../practices/types';
 import { seen } from './clauses';
-import type { Rule } from './types';
+import type { Context } from './context';
+import type { Remedy, Rule } from './types';
 import { sayWire } from './readings/words';
 
 const allows = (scheme: ColourScheme, role: Role, colour: string): boolean =>
@@ -16,6 +17,13 @@ const isEarthColour = (schemes: readonly ColourScheme[], colour: string): boolea
 function schemeOf(schemes: readonly ColourScheme[], wires: readonly (Wire & { colour: string })[]): ColourScheme {
   const fits = (scheme: ColourScheme) => wires.filter(({ role, colour }) => allows(scheme, role, colour)).length;
   return schemes.reduce((best, scheme) => (fits(scheme) > fits(best) ? scheme : best));
+}
+
+/** The core in the first colour of its role. */
+function recolour({ graph, document }: Context, id: string, scheme: ColourScheme): Remedy[] {
+  const wire = graph.wires.get(id) ?? document.wires.find((each) => each.id === id)!;
+  const [colour] = scheme.colours[wire.role].value;
+  return [{ label: `Take a core in ${colour}`, patch: { set: { wires: [{ ...wire, colour }] } } }];
 }
 
 /** A stated colour outside the practice's code; an earth colour on anything else is a danger. */
@@ -48,6 +56,7 @@ export const wrongColour: Rule = {
           : `The ${role} wire ${sayWire(context, id)} is ${colour}; in this practice (${scheme.name}) it is ${scheme.colours[role].value.join(' or ')}.`,
         parts: [...new Set([from[0], to[0]])].filter((part) => context.graph.parts.has(part)),
         wires: [id],
+        remedies: recolour(context, id, scheme),
       };
     }
   },
