@@ -5,8 +5,13 @@ import type { Lesson } from './types';
 /** What belongs to the source itself. */
 const SOURCE = ['G1', 'G2', 'F2', 'Q4', 'Q5'];
 
-const fridge = (watts: number, more: Parameters<typeof backedUp>[0] = {}, surge = 1): Home =>
-  backedUp(more).drop('X2').heater('E3', 'S3', 'Q21', { watts, surge, label: 'Fridge' });
+/** An appliance on the backup instead of the outlet. */
+const withAppliance = (home: Home, watts: number, surge = 1): Home =>
+  home.drop('X2').heater('E3', 'S3', 'Q21', { watts, surge });
+
+/** The next size of inverter, with the leads and the fuse that it needs. */
+const larger = (surge: number): Home =>
+  backedUp({ va: 1000, surge }).set('F2', { rating: 125 }).cable('kd', 50, 0.8).set('Q4', { rating: 10 });
 
 /** A lamp without metal on the backup, so that its output needs no rcd. */
 const lampOnBackup = (): Home =>
@@ -28,14 +33,15 @@ const flooded = (name: string, where: { sleeping?: boolean; ventilated: boolean 
 /** Backup. */
 export const backup: Record<string, () => Lesson> = {
   'backup-overload': () => ({
-    ...onOverview(fridge(900), fridge(300)),
-    shows: 'An appliance of 900 W hangs on inverter G1 of 700 VA, beside a lamp.',
-    difference: 'The appliance takes 300 W; lamp and appliance together are within 700 VA.',
+    ...onOverview(withAppliance(backedUp(), 900), withAppliance(larger(2000), 900), SOURCE),
+    shows:
+      'Inverter G1 of 700 VA, with its battery and its output. In an outage it feeds an appliance of 900 W and a lamp.',
+    difference: 'G1 is an inverter of 1000 VA, with a fuse of 125 A and leads for it.',
   }),
   'backup-surge': () => ({
-    ...onOverview(fridge(300, {}, 6), fridge(300, { va: 1000, surge: 2500 }, 6)),
+    ...onOverview(withAppliance(backedUp(), 300, 6), withAppliance(larger(2500), 300, 6), SOURCE),
     shows:
-      'A fridge of 300 W, which starts with six times as much, hangs on inverter G1 of 700 VA, 1400 VA for a start.',
+      'Inverter G1 of 700 VA, 1400 VA for a start. In an outage it feeds a fridge of 300 W, which starts with six times as much.',
     difference: 'G1 is an inverter of 1000 VA that gives 2500 VA for a start.',
   }),
   'short-autonomy': () => ({
