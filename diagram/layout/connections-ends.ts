@@ -8,7 +8,7 @@ import type { Body } from './ends';
 import { m } from './overview-metrics';
 import { CABLE_GAP, CORE_PITCH, wordsWidth } from './connections-cables';
 import type { Core, Page, PageCable } from './connections-page';
-import { FOOT, FOOT_CORE, TOP, isLongBar, sizeOf } from './connections-place';
+import { FOOT, FOOT_CORE, ON_BOARD, TOP, isLongBar, sizeOf } from './connections-place';
 import type { SceneTerminal } from './scene';
 
 /** Where cores end on a page: at terminals, and at the stubs of cables that come from or go to another place. */
@@ -113,6 +113,8 @@ function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodie
   const axis = at.y + BAR_AXIS;
   const wanted: { mark: string; x: number; side: Side }[] = [];
   const beyond: string[] = [];
+  const later: string[] = [];
+  const kinds = new Map(page.parts.map((other) => [other.id, other.kind]));
   const note = (mark: string, x: number | undefined, y: number) => {
     if (wanted.some((w) => w.mark === mark) || beyond.includes(mark)) return;
     if (x === undefined || x < at.x) beyond.push(mark);
@@ -125,7 +127,10 @@ function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodie
     ] as const) {
       if (own[0] !== part.id) continue;
       const t = bodies.get(far[0])?.terminals.find((terminal) => terminal.mark === far[1]);
-      note(own[1], t?.x, t?.y ?? 0);
+      // what stands on the board hangs straight from the bar; a load of the same place is led to its end
+      if (t && ON_BOARD.has(kinds.get(far[0])!)) note(own[1], t.x, t.y);
+      else if (t) later.push(own[1]);
+      else note(own[1], undefined, 0);
     }
   for (const cable of page.cables)
     for (const core of cable.cores) {
@@ -144,7 +149,7 @@ function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodie
   beyond
     .sort((a, b) => Number(a) - Number(b))
     .forEach((mark, i) => terminals.push(i === 0 ? { mark, x: at.x, y: axis, side: 'left' } : { mark, x: at.x - MODULE + i * 3 * MODULE, y: axis, side: 'up' }));
-  for (const mark of used) if (!terminals.some((t) => t.mark === mark)) terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
+  for (const mark of [...later.sort((a, b) => Number(a) - Number(b)), ...used]) if (!terminals.some((t) => t.mark === mark)) terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
   const right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 3 * MODULE;
   let free = 1;
   while (terminals.some((t) => t.mark === String(free))) free++;

@@ -38,6 +38,9 @@ export function usedMarks(doc: Installation): Map<string, string[]> {
   return new Map([...marks].map(([id, set]) => [id, [...set].sort((a, b) => Number(a) - Number(b))]));
 }
 
+/** Kinds that stand on a board, over or under its bars. */
+export const ON_BOARD: ReadonlySet<Kind> = new Set<Kind>(['supply', 'meter', 'isolator', 'mcb', 'rcd', 'rcbo', 'fuse', 'spd', 'changeover', 'inverter', 'electrode', 'bond']);
+
 export const isLongBar = (kind: Kind): boolean => isBar(kind) && kind !== 'joint';
 
 /** The size of a part on this face; a bar's length follows from its conductors and is given by the scene. */
@@ -178,15 +181,24 @@ class PagePlanner {
         const { right: end } = this.put(item.head!.part, slot, ways);
         slot = end + m(1) + FOOT_CORE + FOOT_GAP;
       }
-      x = Math.max(slot, start + m(16)) + m(6);
+      const longest = Math.max(0, ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => this.marks.get(part.id)?.length ?? 0));
+      const inRoom = Math.max(0, ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => this.ledAway(part)));
+      x = Math.max(slot + inRoom * m(3), start + m(16), start + m(8) + longest * m(3)) + m(10);
     }
+    const earths = Math.max(0, ...this.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => this.marks.get(part.id)?.length ?? 0));
+    x = Math.max(x, right + m(12) + earths * m(3));
     for (const part of this.page.parts) {
       if (part.kind !== 'electrode' && part.kind !== 'bond') continue;
       this.put(part, x, earthRow + m(8));
       x += m(9);
     }
     this.bottom += FOOT.brace + m(8);
-    this.x = x + m(4);
+    this.x = x + m(8) + m(3) * Math.max(0, ...this.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => this.ledAway(part)));
+  }
+
+  /** Cores of a bar that go to a load or joint of the same place: their terminals stand beyond those of the ways. */
+  private ledAway(bar: Part): number {
+    return this.page.inner.filter((wire) => [wire.from[0], wire.to[0]].includes(bar.id) && [wire.from[0], wire.to[0]].some((id) => id !== bar.id && !ON_BOARD.has(this.plan.graph.byId.get(id)!.kind))).length;
   }
 
   /** Neutral bars by the group whose device feeds them. */

@@ -93,7 +93,8 @@ class Planner {
       let axis = x;
       let next: number;
       if (isBar) {
-        level = y + m(1);
+        // a bar that reaches over the bars of neutral and earth lies below them
+        level = Math.max(y, leftmost < COLUMN ? this.sideBottom() : 0) + m(1);
         this.positions.set(node.part.id, { x: x - m(2), y: level - BAR_AXIS });
         next = level + m(2);
       } else {
@@ -117,24 +118,39 @@ class Planner {
     if (spds > 0) this.barLevel = Math.max(this.barLevel, ...[...this.positions].filter(([id]) => this.graph.byId.get(id)?.kind === 'spd').map(([, p]) => p.y + m(10)));
   }
 
+  private sideTop(): number {
+    const meter = [...this.positions].find(([id]) => this.graph.byId.get(id)?.kind === 'meter')?.[1];
+    return meter ? meter.y + m(6) : m(6);
+  }
+
+  /** Bars of neutral and earth that stand beside the column. */
+  private barsBeside(): Part[] {
+    const behindBackup = this.neutralsOfBackup();
+    const bars = [...this.graph.parts.values()].filter((part) => (part.kind === 'neutral-bar' || part.kind === 'earth-bar') && !behindBackup.has(part.id));
+    return bars.sort((a, b) => Number(a.kind === 'earth-bar') - Number(b.kind === 'earth-bar'));
+  }
+
+  private hangsFrom(bar: Part): Part[] {
+    return (this.graph.at.get(bar.id) ?? []).map((run) => this.graph.byId.get(otherEnd(run, bar.id)[0])!).filter((far) => far.kind === 'electrode' || far.kind === 'bond');
+  }
+
+  private sideBottom(): number {
+    return this.barsBeside().reduce((y, bar) => y + (this.hangsFrom(bar).length > 0 ? m(9) : m(5)), this.sideTop());
+  }
+
   /** Bars of neutral and earth beside the column; electrodes and bonds hang from the earth bar. */
   sideBars(): void {
-    const meter = [...this.positions].find(([id]) => this.graph.byId.get(id)?.kind === 'meter')?.[1];
-    let y = meter ? meter.y + m(6) : m(6);
+    let y = this.sideTop();
     const x = LEFT + m(13);
     const behindBackup = this.neutralsOfBackup();
-    const bars = [...this.graph.parts.values()].filter((part) => part.kind === 'neutral-bar' || part.kind === 'earth-bar');
-    bars.sort((a, b) => Number(a.kind === 'earth-bar') - Number(b.kind === 'earth-bar'));
+    const bars = this.barsBeside();
     for (const part of bars) {
-      if (behindBackup.has(part.id)) continue;
       this.positions.set(part.id, { x, y: y - BAR_AXIS });
-      const hanging = (this.graph.at.get(part.id) ?? [])
-        .map((run) => this.graph.byId.get(otherEnd(run, part.id)[0])!)
-        .filter((far) => (far.kind === 'electrode' || far.kind === 'bond') && !this.positions.has(far.id));
+      const hanging = this.hangsFrom(part).filter((far) => !this.positions.has(far.id));
       hanging.forEach((far, i) => this.positions.set(far.id, { x: x + m(4) * i, y: y + m(2) }));
       y += hanging.length > 0 ? m(9) : m(5);
     }
-    if (bars.length > behindBackup.size) this.barLevel = Math.max(this.barLevel, y - m(1));
+    if (bars.length > 0) this.barLevel = Math.max(this.barLevel, y - m(1));
     [...behindBackup].forEach((id, i) => this.backupBoard.add(id) && this.positions.set(id, { x: LEFT + m(2) + m(48) * i, y: 0 }));
   }
 
