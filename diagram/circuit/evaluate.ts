@@ -25,7 +25,7 @@ export interface PointState {
   part: Part;
   /** line at one end and the same source's neutral at the other */
   fed: boolean;
-  /** fed, but with line at N and neutral at L */
+  /** fed, but with line at N and neutral at L, in every position that feeds it */
   reversed: boolean;
   /** the source whose line reaches it */
   source: Source | null;
@@ -127,17 +127,18 @@ function pointState(graph: Graph, part: Part, condition: Condition, stands: read
     };
   };
   const usable = stands.filter((s) => !s.shorted);
+  let turned: PointState | undefined;
   let half: PointState | undefined;
   for (const s of usable) {
     for (let i = 0; i < condition.sources.length; i++) {
       const lineAtL = reaches(s.line[i]!, at.L);
       const lineAtN = reaches(s.line[i]!, at.N);
       if (lineAtL && reaches(s.neutral[i]!, at.N)) return build(s, i, false, true);
-      if (lineAtN && reaches(s.neutral[i]!, at.L)) return build(s, i, true, true);
+      if (lineAtN && reaches(s.neutral[i]!, at.L)) turned ??= build(s, i, true, true);
       if (lineAtL || lineAtN) half ??= build(s, i, !lineAtL, false);
     }
   }
-  return half ?? none;
+  return turned ?? half ?? none;
 }
 
 function standsOf(

@@ -1,9 +1,33 @@
 import { reach } from '../terminals/reach';
 import { isPoint } from '../terminals/roles-of-parts';
 import { recalled, seen } from './clauses';
+import type { Context } from './context';
+import { once } from './readings/once';
 import type { Rule } from './types';
 import { inOrder, say, sayParts } from './readings/words';
 import { listNames } from '../document/names';
+
+/** By backup source, the parts that it keeps live on `main-off`, and in which of those conditions. */
+export const liveOnMainOff = once((context: Context): Map<string, { live: Set<string>; conditions: string[] }> => {
+  const { graph } = context;
+  const found = new Map<string, { live: Set<string>; conditions: string[] }>();
+  for (const inverter of context.backups) {
+    const live = new Set<string>();
+    const conditions: string[] = [];
+    for (const { condition, whole } of context.evaluated) {
+      if (condition.base !== 'main-off') continue;
+      const source = condition.sources.find(({ part }) => part.id === inverter.id);
+      const line = source ? source.line : graph.node(inverter.id, 'out.L')!;
+      const walk = reach(graph, source ? [line] : condition.sources.map((each) => each.line), whole);
+      const reached = walk.order.map((node) => graph.partOf[node]!.id);
+      if (!reached.some((id) => id !== inverter.id && graph.parts.get(id)!.kind !== 'supply')) continue;
+      for (const id of reached) live.add(id);
+      conditions.push(condition.name);
+    }
+    found.set(inverter.id, { live, conditions });
+  }
+  return found;
+});
 
 /** What stays live when the main switch is off: the notice and the isolation order are written from it. */
 export const liveAfterMainOff: Rule = {
@@ -22,18 +46,7 @@ export const liveAfterMainOff: Rule = {
   *check(context) {
     const { graph, mainSwitch } = context;
     for (const inverter of context.backups) {
-      const live = new Set<string>();
-      const conditions: string[] = [];
-      for (const { condition, whole } of context.evaluated) {
-        if (condition.base !== 'main-off') continue;
-        const source = condition.sources.find(({ part }) => part.id === inverter.id);
-        const line = source ? source.line : graph.node(inverter.id, 'out.L')!;
-        const walk = reach(graph, source ? [line] : condition.sources.map((each) => each.line), whole);
-        const reached = walk.order.map((node) => graph.partOf[node]!.id);
-        if (!reached.some((id) => id !== inverter.id && graph.parts.get(id)!.kind !== 'supply')) continue;
-        for (const id of reached) live.add(id);
-        conditions.push(condition.name);
-      }
+      const { live, conditions } = liveOnMainOff(context).get(inverter.id)!;
       const ways = context.ways.filter(({ device }) => live.has(device) && device !== inverter.id);
       const points = [...live].filter((id) => isPoint(graph.parts.get(id)!));
       if (points.length === 0) continue;

@@ -1,6 +1,15 @@
 import { recalled } from './clauses';
 import { joinTo } from './readings/rewire';
+import { isPoint } from '../terminals/roles-of-parts';
+import type { Context } from './context';
 import type { Rule } from './types';
+import { capital, say } from './readings/words';
+
+/** True once something that uses energy is wired: before that a drawing has only begun. */
+function isBegun({ document, graph }: Context): boolean {
+  const wired = new Set([...graph.wires.values()].flatMap(({ from, to }) => [from[0], to[0]]));
+  return document.parts.some((part) => wired.has(part.id) && (isPoint(part) || part.kind === 'inverter'));
+}
 
 /** No earth bar, or one that reaches neither the supply's earth nor an electrode. */
 export const noMainEarth: Rule = {
@@ -17,8 +26,7 @@ export const noMainEarth: Rule = {
   },
   *check(context) {
     const { graph, earth, document } = context;
-    const used = document.parts.some(({ kind }) => ['socket', 'lamp', 'fan', 'appliance', 'inverter'].includes(kind));
-    if (!used || earth.earthed) return;
+    if (earth.earthed || !isBegun(context)) return;
     const tt = document.supply.system === 'TT';
     const bar = earth.mainBar === undefined ? undefined : graph.partOf[earth.mainBar]!;
     const means = document.parts.filter(({ kind }) => kind === (tt ? 'electrode' : 'supply'));
@@ -26,7 +34,7 @@ export const noMainEarth: Rule = {
     yield {
       heading: bar ? 'The earth bar has no earth' : 'There is no earth bar',
       message:
-        (bar ? `${context.name(bar)} is not joined to ${electrodes}. ` : 'No earth bar is drawn. ') +
+        (bar ? `${capital(say(context, bar.id))} is not joined to ${electrodes}. ` : 'No earth bar is drawn. ') +
         'A fault to any case makes every earthed case in the home live, and no overcurrent device clears it.',
       parts: [...(bar ? [bar] : []), ...means].map(({ id }) => id),
       remedies: bar && means[0] ? joinTo(context, 'earth', [means[0].id, 'E'], bar.id) : [],

@@ -49,10 +49,10 @@ export function violationsOf(context: Context, rule: Rule, all: readonly Rule[])
   return [...rule.check(context, all)];
 }
 
-/** Runs rules over a home. */
-export function runRules(context: Context, rules: readonly Rule[]): Finding[] {
+/** Runs rules over a home. @param all every rule of the catalogue, where only some of them are run */
+export function runRules(context: Context, rules: readonly Rule[], all: readonly Rule[] = rules): Finding[] {
   return rules
-    .flatMap((rule) => violationsOf(context, rule, rules).map((violation) => toFinding(context, rule, violation)))
+    .flatMap((rule) => violationsOf(context, rule, all).map((violation) => toFinding(context, rule, violation)))
     .map((finding) => silence(context, finding))
     .sort(compareFindings);
 }

@@ -30,7 +30,7 @@ const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
 });
 
 /** By part, the ways whose line runs over its terminals. */
-const waysByPart = once((context: Context): Map<string, Set<string>> => {
+export const waysByPart = once((context: Context): Map<string, Set<string>> => {
   const found = new Map<string, Set<string>>();
   const devices = new Set(context.ways.map(({ device }) => device));
   for (const { device, nodes } of context.sections) {

@@ -7,31 +7,28 @@ import { once } from './readings/once';
 import type { Rule } from './types';
 import { capital } from './readings/words';
 
+/** By part, the sources whose line is landed on it, in the order of its terminals. */
+export const feedsByPart = once(({ graph, feeds }: Context): Map<string, Feed[]> => {
+  const found = new Map<string, Feed[]>();
+  graph.partOf.forEach(({ id, kind }, node) => {
+    if (kind === 'neutral-bar' || kind === 'earth-bar' || natureOfNode(graph, node) === 'D') return;
+    for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
+      const { wire } = graph.edges[graph.around[k]!]!;
+      if (!wire || natureOfRole(wire.role) !== 'L') continue;
+      const feed = feeds.wires.get(wire.id)!;
+      if (feed !== 'none') found.set(id, [...(found.get(id) ?? []), feed]);
+    }
+  });
+  return found;
+});
+
 /** Parts of a switchboard that hold line of a source: the first of each is enough to show it. */
 function sourcesIn(context: Context, { parts }: Switchboard): Map<Feed, string> {
-  const { graph, feeds } = context;
   const found = new Map<Feed, string>();
-  for (const { id, kind } of parts) {
-    if (kind === 'neutral-bar' || kind === 'earth-bar') continue;
-    for (const node of nodesOf(context, id)) {
-      if (natureOfNode(graph, node) === 'D') continue;
-      for (let k = graph.start[node]!; k < graph.start[node + 1]!; k++) {
-        const { wire } = graph.edges[graph.around[k]!]!;
-        if (!wire || natureOfRole(wire.role) !== 'L') continue;
-        const feed = feeds.wires.get(wire.id)!;
-        if (feed !== 'none' && !found.has(feed)) found.set(feed, id);
-      }
-    }
-  }
+  for (const { id } of parts)
+    for (const feed of feedsByPart(context).get(id) ?? []) if (!found.has(feed)) found.set(feed, id);
   return found;
 }
-
-const nodesByPart = once(({ graph }: Context) => {
-  const nodes = new Map<string, number[]>();
-  graph.partOf.forEach(({ id }, node) => nodes.set(id, [...(nodes.get(id) ?? []), node]));
-  return nodes;
-});
-const nodesOf = (context: Context, id: string): readonly number[] => nodesByPart(context).get(id)!;
 
 /** An enclosure with conductors of two sources and no warning notice. */
 export const twoSourcesUnmarked: Rule = {

@@ -1,6 +1,8 @@
 import { polesOf } from '../../document/kinds';
 import type { Part } from '../../document/schema';
-import { pathTo, reach, reaches } from '../../terminals/reach';
+import type { Source } from '../../circuit/conditions';
+import type { Evaluated, Stand } from '../../circuit/evaluate';
+import { pathTo, reach, reaches, type Reach } from '../../terminals/reach';
 import { isPoint } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
 import { once } from './once';
@@ -24,19 +26,85 @@ const isSingle = (part: Part): boolean =>
 const isFuse = (part: Part): boolean =>
   (part.kind === 'fuse' && part.standard !== 'dc') || (part.kind === 'mcb' && polesOf(part) === 1);
 
-function collect(
-  into: Map<string, NeutralContact>,
-  contacts: string[],
-  point: string,
-  wires: string[],
+interface Return {
+  point: string;
+  /** edges of single-pole contacts on the way back, and of fuses */
+  control: number[];
+  fuses: number[];
+  path: number[];
+}
+
+/** The way back of a point in one stand, where it hangs on contacts: from the source to the end that is neutral. */
+function returnOf(context: Context, stand: Stand, neutral: Reach, part: Part, without: Reach): Return | undefined {
+  const { graph } = context;
+  const nodes = ['N', 'L'].map((mark) => graph.node(part.id, mark)!);
+  // In some positions of two-way switches line and neutral come to the other ends.
+  for (const [end, other] of [nodes, [...nodes].reverse()] as [number, number][]) {
+    if (!reaches(neutral, end) || reaches(without, end)) continue;
+    const line = stand.line.find((walk) => reaches(walk, other));
+    if (!line) continue;
+    const path = pathTo(graph, neutral, end);
+    const inLine = new Set(pathTo(graph, line, other).map((number) => graph.edges[number]!.part));
+    const at = (wanted: (device: Part) => boolean) =>
+      path.filter((number) => {
+        const device = graph.parts.get(graph.edges[number]!.part ?? '');
+        return device !== undefined && wanted(device);
+      });
+    return {
+      point: part.id,
+      control: at((device) => isSingle(device) || (device.kind === 'switch-2pole' && !inLine.has(device.id))),
+      fuses: at(isFuse),
+      path,
+    };
+  }
+  return undefined;
+}
+
+/** Points whose way back hangs on a single-pole contact or a fuse, in one stand. */
+function returnsIn(context: Context, { points }: Evaluated, stand: Stand, i: number, source: Source): Return[] {
+  const { graph } = context;
+  const neutral = stand.neutral[i]!;
+  const opened = stand.closed.slice();
+  let found = false;
+  graph.edges.forEach((edge, number) => {
+    const device = graph.parts.get(edge.part ?? '');
+    if (!device || !(isSingle(device) || isFuse(device) || device.kind === 'switch-2pole')) return;
+    opened[number] = 0;
+    found ||= reaches(neutral, edge.a) && reaches(neutral, edge.b);
+  });
+  if (!found) return [];
+  const without = reach(graph, [source.neutral], opened);
+  return [...graph.parts.values()].flatMap((part) => {
+    if (!isPoint(part) || points.get(part.id)!.reversed) return [];
+    return returnOf(context, stand, neutral, part, without) ?? [];
+  });
+}
+
+const add = (list: string[], ids: readonly string[]) => list.push(...ids.filter((id) => !list.includes(id)));
+
+/** Notes a way back under its contacts. Ways that meet in a contact are one entry, and where `joined`, all of one point. */
+function note(
+  { graph }: Context,
+  into: NeutralContact[],
+  way: Return,
+  edges: readonly number[],
   condition: string,
+  joined: boolean,
 ) {
-  const key = contacts.join(' ');
-  const entry = into.get(key) ?? { contacts, points: [], wires: [], conditions: [] };
-  if (!entry.points.includes(point)) entry.points.push(point);
-  for (const wire of wires) if (!entry.wires.includes(wire)) entry.wires.push(wire);
-  if (!entry.conditions.includes(condition)) entry.conditions.push(condition);
-  into.set(key, entry);
+  const { point, path } = way;
+  const contacts = [...new Set(edges.map((number) => graph.edges[number]!.part!))];
+  const meets = (each: NeutralContact) =>
+    (joined && each.points.includes(point)) || each.contacts.some((id) => contacts.includes(id));
+  let entry = into.find(meets);
+  if (!entry) into.push((entry = { contacts: [], points: [], wires: [], conditions: [] }));
+  add(entry.contacts, contacts);
+  add(entry.points, [point]);
+  add(entry.conditions, [condition]);
+  const beside = edges.flatMap((number) => [path[path.indexOf(number) - 1], path[path.indexOf(number) + 1]]);
+  add(
+    entry.wires,
+    beside.flatMap((number) => graph.edges[number ?? -1]?.wire?.id ?? []),
+  );
 }
 
 /**
@@ -44,51 +112,18 @@ function collect(
  * way round is left to the rule of polarity: there the neutral is what the drawing calls line.
  */
 export const neutralContacts = once((context: Context) => {
-  const { graph } = context;
-  const switched = new Map<string, NeutralContact>();
-  const fused = new Map<string, NeutralContact>();
-  const partAt = (edge: number) => graph.parts.get(graph.edges[edge]!.part ?? '');
-  for (const { condition, stands, points } of context.evaluated) {
+  const switched: NeutralContact[] = [];
+  const fused: NeutralContact[] = [];
+  for (const evaluated of context.evaluated) {
+    const { condition, stands } = evaluated;
     for (const stand of stands.filter(({ shorted }) => !shorted)) {
       condition.sources.forEach((source, i) => {
-        const neutral = stand.neutral[i]!;
-        const opened = stand.closed.slice();
-        let found = false;
-        graph.edges.forEach((edge, number) => {
-          const part = partAt(number);
-          if (edge.kind === 'wire' || !part || !(isSingle(part) || isFuse(part) || part.kind === 'switch-2pole'))
-            return;
-          opened[number] = 0;
-          found ||= reaches(neutral, edge.a) && reaches(neutral, edge.b);
-        });
-        if (!found) return;
-        const without = reach(graph, [source.neutral], opened);
-        for (const part of graph.parts.values()) {
-          if (!isPoint(part) || points.get(part.id)!.reversed) continue;
-          const n = graph.node(part.id, 'N')!;
-          const l = graph.node(part.id, 'L')!;
-          if (!reaches(neutral, n) || reaches(without, n) || !stand.line.some((walk) => reaches(walk, l))) continue;
-          const path = pathTo(graph, neutral, n);
-          const linePath = stand.line.flatMap((walk) => (reaches(walk, l) ? pathTo(graph, walk, l) : []));
-          const inLine = new Set(linePath.map((number) => graph.edges[number]!.part));
-          const at = (wanted: (p: Part) => boolean) => path.filter((number) => wanted(partAt(number) ?? part));
-          const both = (p: Part) => p.kind === 'switch-2pole' && !inLine.has(p.id);
-          const control = at((p) => isSingle(p) || both(p));
-          const fuses = at(isFuse);
-          const wiresBeside = (edges: number[]) =>
-            edges.flatMap((number) => {
-              const index = path.indexOf(number);
-              return [path[index - 1], path[index + 1]].flatMap((beside) => graph.edges[beside ?? -1]?.wire?.id ?? []);
-            });
-          const ids = (edges: number[]) => [...new Set(edges.map((number) => graph.edges[number]!.part!))].sort();
-          if (control.length > 0) collect(switched, ids(control), part.id, wiresBeside(control), condition.name);
-          for (const id of ids(fuses)) {
-            const own = fuses.filter((number) => graph.edges[number]!.part === id);
-            collect(fused, [id], part.id, wiresBeside(own), condition.name);
-          }
+        for (const way of returnsIn(context, evaluated, stand, i, source)) {
+          if (way.control.length > 0) note(context, switched, way, way.control, condition.name, true);
+          for (const fuse of way.fuses) note(context, fused, way, [fuse], condition.name, false);
         }
       });
     }
   }
-  return { switched: [...switched.values()], fused: [...fused.values()] };
+  return { switched, fused };
 });

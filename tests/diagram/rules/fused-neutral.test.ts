@@ -42,6 +42,14 @@ testRule(fusedNeutral, {
       drawing: inNeutral(smallHome(), 'mcb'),
       findings: [{ parts: ['F5'] }],
     },
+    'two fuses one after the other are two findings': {
+      drawing: inNeutral(smallHome(), 'fuse')
+        .part('fuse', 'F2', 'hall', { rating: 63, standard: 'gG' })
+        .cut('SUP:N', 'P1:2')
+        .neutral('SUP:N', 'F2:1')
+        .neutral('F2:2', 'P1:2'),
+      findings: [{ parts: ['F2'] }, { parts: ['F5'] }],
+    },
     'a fuse in the supply neutral': {
       drawing: smallHome()
         .part('fuse', 'F2', 'hall', { rating: 63, standard: 'gG' })

@@ -81,6 +81,19 @@ testRule(switchedNeutral, {
       findings: [{ parts: ['S3'] }],
       also: ['two-way-miswired', 'reversed-polarity', 'line-role-mismatch', 'short-circuit'],
     },
+    'line and neutral at both two-way switches, the lamp between their commons': {
+      drawing: smallHome()
+        .part('switch-2way', 'S3', 'study')
+        .part('switch-2way', 'S4', 'study')
+        .part('lamp', 'E9', 'study', { watts: 10, pf: 1, class: 2 })
+        .line('JL11', 'S3:1')
+        .neutral('JN11', 'S3:2')
+        .line('JL11', 'S4:1')
+        .neutral('JN11', 'S4:2')
+        .switched('S3:C', 'E9:L')
+        .switched('S4:C', 'E9:N'),
+      findings: [{ parts: ['S3', 'S4'] }],
+    },
     'two switches in series in one neutral are one finding': {
       drawing: swap(smallHome())
         .part('switch', 'S8', 'study')
