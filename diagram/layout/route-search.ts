@@ -17,6 +17,9 @@ export const COST = {
   close: 0.5,
 } as const;
 
+/** By how much the length still to go is overrated where runs keep apart. */
+const AHEAD = 1.3;
+
 /** What stands on the grid: 0 is free, else the number of a strand. */
 export interface Occupancy {
   /** the net and the family of each strand */
@@ -253,7 +256,8 @@ export class Search {
     const goalNodes = [...new Set([...goals.keys()].map((state) => state >> 2))];
     const goalXs = goalNodes.map((node) => grid.xs[node % grid.columns]!);
     const goalYs = goalNodes.map((node) => grid.ys[Math.floor(node / grid.columns)]!);
-    const rate = shares ? COST.shared : 1;
+    // where runs keep apart a way costs more than its length: looking ahead more boldly finds it sooner, and nearly as good
+    const rate = (shares ? COST.shared : 1) * (this.spread ? AHEAD : 1);
     // never more than what is left to go: the length, and a bend where the goal lies on neither line through the node
     const estimate = (node: number): number => {
       const column = node % grid.columns;
@@ -291,7 +295,7 @@ export class Search {
       if (this.closed[state] === this.run) continue;
       this.closed[state] = this.run;
       const cost = this.best[state]!;
-      if (cost >= foundCost) break;
+      if (found >= 0 && cost >= foundCost) break;
       const node = state >> 2;
       const heading = state & 3;
       const goal = goals.get(state);

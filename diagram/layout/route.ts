@@ -16,8 +16,8 @@ interface Routed {
   cost: number;
 }
 
-/** How often all runs may look for a better way. */
-const ROUNDS = 2;
+/** How often all runs may look for a better way: once only where they are many. */
+const roundsFor = (runs: number): number => (runs > 160 ? 1 : 2);
 
 const SPAN = (request: RouteRequest): number => Math.abs(request.from.x - request.to.x) + Math.abs(request.from.y - request.to.y);
 const isStraight = ({ from, to }: RouteRequest): boolean => from.x === to.x || from.y === to.y;
@@ -166,7 +166,7 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
   if (grid) {
     const router = new Router(grid, terminalNodes(grid, all, netOf, options.pins ?? []), netOf, familyOf, options.spread ?? false);
     for (const routed of all) router.route(routed);
-    for (let round = 0; round < ROUNDS; round++) {
+    for (let round = 0; round < roundsFor(all.length); round++) {
       let changed = false;
       for (const routed of all) if (couldBeBetter(routed)) changed = router.improve(routed) || changed;
       if (!changed) break;
