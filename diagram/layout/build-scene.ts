@@ -1,4 +1,4 @@
-import type { Face, Installation } from '../document/schema';
+import { canonical, type Face, type Installation } from '../document/schema';
 import { connectionsScene } from './connections-scene';
 import { overviewScene } from './overview-scene';
 import type { Scene } from './scene';
@@ -13,5 +13,6 @@ export interface SceneOptions {
  * position are drawn where the layout would place them. Same document, same scene, whatever the order of its lists.
  */
 export function buildScene(doc: Installation, face: Face, options: SceneOptions = {}): Scene {
-  return face === 'overview' ? overviewScene(doc) : connectionsScene(doc, options.place);
+  const sorted = canonical(doc);
+  return face === 'overview' ? overviewScene(sorted) : connectionsScene(sorted, options.place);
 }

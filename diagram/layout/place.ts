@@ -1,13 +1,14 @@
 import type { Patch } from '../document/patch';
-import { byCode, type Face, type Installation, type Position } from '../document/schema';
+import { byCode, canonical, type Face, type Installation, type Position } from '../document/schema';
 import { connectionPositions } from './connections-scene';
 import { planOverview } from './overview-plan';
 import { overviewPositions } from './overview-positions';
 
 /** Where every drawn part stands on a face: stored, or worked out. No routing is done for it. */
 export function positionsOn(doc: Installation, face: Face): Map<string, Position> {
-  if (face === 'connections') return connectionPositions(doc);
-  return overviewPositions(planOverview(doc), doc.sheet?.overview ?? {});
+  const sorted = canonical(doc);
+  if (face === 'connections') return connectionPositions(sorted);
+  return overviewPositions(planOverview(sorted), doc.sheet?.overview ?? {});
 }
 
 /** A change that gives every part a position on both faces; what has one keeps it. Empty where nothing is missing. */

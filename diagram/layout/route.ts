@@ -173,7 +173,9 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
     }
   }
   for (const { request, nodes } of all) {
-    if (nodes) result.points.set(request.id, toPoints(grid!, nodes));
+    const points = nodes ? toPoints(grid!, nodes) : [];
+    // a wire from a terminal to itself has no way to go: it stays a point
+    if (nodes) result.points.set(request.id, points.length > 1 ? points : [points[0]!, points[0]!]);
     else {
       result.points.set(request.id, elbow(request.from, request.to));
       result.forced.push(request.id);

@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { applyPatch } from '@/diagram/document/patch';
@@ -10,7 +11,9 @@ import { supplyOf } from '../survey/surveys';
 import { permuted } from './checks';
 import { draftedHomes, examples, toldHome } from './homes';
 
-const bytes = (doc: Installation): string =>
+/** A digest: two sheets of a hundred kilobytes say nothing side by side. */
+const bytes = (doc: Installation): string => createHash('sha256').update(whole(doc)).digest('hex');
+const whole = (doc: Installation): string =>
   JSON.stringify([buildScene(doc, 'overview'), ...connectionPages(doc).map(({ place }) => buildScene(doc, 'connections', { place }))]);
 
 const placed = (doc: Installation): Installation => applyPatch(doc, placeAll(doc));
@@ -57,7 +60,7 @@ describe('placing', () => {
   });
 
   it('moves no other part when one is added, taken away or wired', { timeout: 60_000 }, () => {
-    for (const doc of draftedHomes(6, 21).filter((home) => home.parts.length > 0).map(placed)) {
+    for (const doc of draftedHomes(6, 21).filter((home) => home.parts.some(({ kind }) => kind === 'mcb')).map(placed)) {
       const way = doc.parts.find(({ kind }) => kind === 'mcb')!;
       const place = doc.places.at(-1)!.id;
       const lamp: Part = { id: 'new-lamp', kind: 'lamp', place, watts: 9 };
