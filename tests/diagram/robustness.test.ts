@@ -199,7 +199,9 @@ describe('any right home', () => {
   it('with one more right way gains no finding anywhere else', () => {
     fc.assert(
       fc.property(homes, shape, fc.nat(1000), (plan, extra, pick) => {
-        const { home } = draw(plan);
+        const { home, points } = draw(plan);
+        // Without any point nothing is starved yet, and the same gap is told at its terminals.
+        fc.pre(points.length > 0);
         const document = home.document();
         const missing = document.wires[pick % document.wires.length]!.id;
         const cut = (doc: Installation) => ({ ...doc, wires: doc.wires.filter(({ id }) => id !== missing) });

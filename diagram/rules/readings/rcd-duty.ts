@@ -13,19 +13,29 @@ export interface Duty {
 
 /** The strictest duty of a point; undefined where the practice asks for no rcd before it. */
 export function dutyOf(context: Context, part: Part): Duty | undefined {
-  const { document, graph } = context;
-  const place = graph.places.get(part.place ?? '');
-  const applies: Record<Duty['of'], (uptoA?: number) => boolean> = {
-    sockets: (uptoA = Infinity) => part.kind === 'socket' && (part.rating ?? 0) <= uptoA,
-    wet: () => place?.kind === 'wet' || place?.zone !== undefined,
-    lighting: () => part.kind === 'lamp',
-    tt: () => document.supply.system === 'TT',
-  };
-  const duties = practices[context.practice].rcdDuties
-    .map(({ value }) => value)
-    .filter((duty) => applies[duty.of](duty.uptoA))
-    .map(({ of, sensitivityA }): Duty => ({ of, sensitivityA: of === 'tt' ? ttLimit(context) : sensitivityA }));
-  return duties.sort((a, b) => a.sensitivityA - b.sensitivityA)[0];
+  let strictest: Duty | undefined;
+  for (const { value } of practices[context.practice].rcdDuties) {
+    const { of, uptoA = Infinity } = value;
+    if (!applies(context, part, of, uptoA)) continue;
+    const sensitivityA = of === 'tt' ? ttLimit(context) : value.sensitivityA;
+    if (!strictest || sensitivityA < strictest.sensitivityA) strictest = { of, sensitivityA };
+  }
+  return strictest;
+}
+
+function applies({ document, graph }: Context, part: Part, of: Duty['of'], uptoA: number): boolean {
+  switch (of) {
+    case 'sockets':
+      return part.kind === 'socket' && (part.rating ?? 0) <= uptoA;
+    case 'lighting':
+      return part.kind === 'lamp';
+    case 'tt':
+      return document.supply.system === 'TT';
+    case 'wet': {
+      const place = graph.places.get(part.place ?? '');
+      return place?.kind === 'wet' || place?.zone !== undefined;
+    }
+  }
 }
 
 /** A, on TT the residual current at which the electrode stands at 50 V: RA x IdN <= 50 V (411.5.3). */
