@@ -30,14 +30,24 @@ const add = (list: readonly Drawn[], of: (each: Drawn) => number): number =>
 
 function byGroup(drawn: readonly Drawn[]): Map<DemandGroup, Drawn[]> {
   const groups = new Map<DemandGroup, Drawn[]>();
-  for (const each of drawn) groups.set(groupOf(each), [...(groups.get(groupOf(each)) ?? []), each]);
+  for (const each of drawn) {
+    const group = groupOf(each);
+    const same = groups.get(group);
+    if (same) same.push(each);
+    else groups.set(group, [each]);
+  }
   return groups;
 }
 
 /** The load of each way, by its device. */
 export function wayLoads(drawn: readonly Drawn[], practice: Practice): Map<string, WayLoad> {
   const members = new Map<string, Drawn[]>();
-  for (const each of drawn) if (each.way !== null) members.set(each.way, [...(members.get(each.way) ?? []), each]);
+  for (const each of drawn) {
+    if (each.way === null) continue;
+    const same = members.get(each.way);
+    if (same) same.push(each);
+    else members.set(each.way, [each]);
+  }
   const loads = new Map<string, WayLoad>();
   for (const [device, list] of members) {
     let demandA = 0;
@@ -67,8 +77,17 @@ export function wayLoads(drawn: readonly Drawn[], practice: Practice): Map<strin
   return loads;
 }
 
+/** Entries of each way on the demand sheet: the same way is asked for by every device before it. */
+const entries = new WeakMap<WayLoad, DemandItem[]>();
+
 /** Entries of the demand sheet: the outlets of a way are one, as the table counts standard circuits; all else stands alone. */
-function itemsOf({ drawn }: WayLoad): DemandItem[] {
+function itemsOf(load: WayLoad): DemandItem[] {
+  const known = entries.get(load) ?? workOutItems(load);
+  entries.set(load, known);
+  return known;
+}
+
+function workOutItems({ drawn }: WayLoad): DemandItem[] {
   const items: DemandItem[] = [];
   for (const [group, same] of byGroup(drawn)) {
     const one = (list: readonly Drawn[]) => ({

@@ -32,15 +32,8 @@ export interface WayFigures {
   faultAt: Drawn | null;
 }
 
-/** Everything the rules and the schedules read of a home in numbers; worked out once. */
-export interface Figures {
-  practice: Practice;
-  drawn: readonly Drawn[];
-  loads: ReadonlyMap<string, WayLoad>;
-  paths: Paths;
-  earth: EarthPaths;
-  /** by id of the device, for every section */
-  ways: ReadonlyMap<string, WayFigures>;
+/** What flows together through devices, from what draws behind each of them. */
+export interface Together {
   /** ids of the ways behind a device, itself among them when it is one */
   waysBehind(device: string): readonly string[];
   /** the first thing, by id, that draws through a device; undefined where nothing does */
@@ -49,6 +42,19 @@ export interface Figures {
   demandBehind(device: string): Demand;
   /** demand of the home on mains */
   demand: Demand;
+  /** all that passes an overcurrent device, A and W */
+  carriedBy(device: string): Pick<WayFigures, 'ibA' | 'demandWatts' | 'connectedWatts'>;
+}
+
+/** Everything the rules and the schedules read of a home in numbers; worked out once. */
+export interface Figures extends Together {
+  practice: Practice;
+  drawn: readonly Drawn[];
+  loads: ReadonlyMap<string, WayLoad>;
+  paths: Paths;
+  earth: EarthPaths;
+  /** by id of the device, for every section */
+  ways: ReadonlyMap<string, WayFigures>;
 }
 
 export interface FiguresInput {
@@ -78,6 +84,38 @@ function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, Behind> {
   return behind;
 }
 
+/** Adds up what draws behind each device. */
+export function addUp(drawn: readonly Drawn[], loads: ReadonlyMap<string, WayLoad>, practice: Practice): Together {
+  const behind = indexBehind(drawn);
+  const waysBehind = (device: string) => [...(behind.get(device)?.ways ?? [])].sort(byCode);
+  // Devices in series carry the same ways: their demand is worked out once.
+  const demands = new Map<string, Demand>();
+  const together = (ways: readonly string[]): Demand => {
+    const key = ways.join(' ');
+    const list = () => ways.map((id) => loads.get(id)!);
+    const demand = demands.get(key) ?? demandOf(list(), practice);
+    demands.set(key, demand);
+    return demand;
+  };
+  const onMains = new Set(drawn.flatMap(({ way, source }) => (way !== null && source?.kind === 'mains' ? [way] : [])));
+  return {
+    waysBehind,
+    firstBehind: (device) => behind.get(device)?.first,
+    demandBehind: (device) => together(waysBehind(device)),
+    demand: together([...onMains].sort(byCode)),
+    carriedBy(device) {
+      const ids = waysBehind(device);
+      const demand = ids.length === 1 && ids[0] === device ? loads.get(device)! : together(ids);
+      const known = ids.every((id) => loads.get(id)!.known);
+      return {
+        ibA: known ? demand.demandA : null,
+        demandWatts: known ? demand.demandWatts : null,
+        connectedWatts: ids.reduce((sum, id) => sum + loads.get(id)!.watts, 0),
+      };
+    },
+  };
+}
+
 /** Works out the figures of a home from what is known of its wiring. */
 export function workOutFigures({ graph, evaluation, sections, earth, practice }: FiguresInput): Figures {
   const { supply } = graph.document;
@@ -87,13 +125,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
   const apart = new Set(joints.map(({ edge }) => edge));
   const paths = workOutPaths({ graph, practice, drawn, loads, apart });
   const earthPaths = workOutEarthPaths(graph, earth);
-  const behind = indexBehind(drawn);
-  const waysBehind = (device: string) => [...(behind.get(device)?.ways ?? [])].sort(byCode);
-  const together = (ways: readonly string[]) =>
-    demandOf(
-      ways.map((id) => loads.get(id)!),
-      practice,
-    );
+  const together = addUp(drawn, loads, practice);
 
   const external = externalOhm(supply);
   const zsOf = (each: Drawn): number | null => {
@@ -106,12 +138,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
 
   function figuresOf(section: Section): WayFigures {
     const { device } = section;
-    const own = loads.get(device.id);
-    const members = own?.drawn ?? [];
-    const ids = waysBehind(device.id);
-    const one = ids.length === 1 && ids[0] === device.id ? own : undefined;
-    const known = ids.every((id) => loads.get(id)!.known);
-    const demand = one ?? together(ids);
+    const members = loads.get(device.id)?.drawn ?? [];
     let worstDrop: WayFigures['worstDrop'] = null;
     let farthest: { at: Drawn; zs: number } | null = null;
     for (const each of members) {
@@ -129,9 +156,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
       device,
       inA: 'rating' in device ? (device.rating ?? null) : null,
       drawn: members,
-      ibA: known ? demand.demandA : null,
-      demandWatts: known ? demand.demandWatts : null,
-      connectedWatts: ids.reduce((sum, id) => sum + loads.get(id)!.watts, 0),
+      ...together.carriedBy(device.id),
       cables: sectionCables(graph, practice, section, members),
       worstDrop,
       fault: farthest && earthFault(graph, practice, farthest.at, farthest.zs, withinS),
@@ -140,17 +165,5 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
   }
 
   const ways = new Map(sections.map((section) => [section.device.id, figuresOf(section)] as const));
-  const onMains = new Set(drawn.flatMap(({ way, source }) => (way !== null && source?.kind === 'mains' ? [way] : [])));
-  return {
-    practice,
-    drawn,
-    loads,
-    paths,
-    earth: earthPaths,
-    ways,
-    waysBehind,
-    firstBehind: (device) => behind.get(device)?.first,
-    demandBehind: (device) => together(waysBehind(device)),
-    demand: together([...onMains].sort(byCode)),
-  };
+  return { practice, drawn, loads, paths, earth: earthPaths, ways, ...together };
 }

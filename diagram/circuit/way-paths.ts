@@ -32,7 +32,7 @@ function lengthOf(graph: Graph, number: number): number {
 }
 
 /** Edges on the supplier's side of the meter: their resistance is within the external loops. */
-function supplySide(graph: Graph): ReadonlySet<number> {
+export function supplySide(graph: Graph): ReadonlySet<number> {
   const supplies = [...graph.parts.values()].filter(({ kind }) => kind === 'supply');
   const poles = supplies.flatMap(({ id }) => ['L', 'N'].map((mark) => graph.node(id, mark)!));
   const isMeter = (part: string | undefined) => part !== undefined && graph.parts.get(part)?.kind === 'meter';

@@ -1,5 +1,5 @@
 import type { Installation, PracticeId } from '../document/schema';
-import { buildContext } from './context';
+import { buildContext, type Context } from './context';
 import type { Examination } from './examination';
 import { rules } from './index';
 import { backupResults } from './results/backup-results';
@@ -13,10 +13,14 @@ import { runRules } from './run';
  * @param practice judged by this practice instead of the document's own
  */
 export function examine(doc: Installation, practice: PracticeId = doc.practice): Examination {
-  const context = buildContext(doc, practice);
+  return examineContext(buildContext(doc, practice));
+}
+
+/** Examines a home of which the context is worked out already. */
+export function examineContext(context: Context): Examination {
   return {
     schema: 1,
-    title: doc.title,
+    title: context.document.title,
     findings: runRules(context, rules),
     ways: wayResults(context),
     supply: supplyResult(context),

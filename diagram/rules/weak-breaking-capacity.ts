@@ -5,6 +5,7 @@ import { recalled } from './clauses';
 import type { Context } from './context';
 import { figuresOf } from './readings/figures';
 import { lackOf, lackOfSupply } from './readings/lacking';
+import { once } from './readings/once';
 import type { Rule } from './types';
 import { be, capital, sayParts } from './readings/words';
 
@@ -27,11 +28,12 @@ const isBacked = (before: readonly Part[], icn: number, currentA: number): boole
 const isBreaker = (part: Part): part is Breaker => part.kind === 'mcb' || part.kind === 'rcbo';
 
 /** Breakers on the mains with the devices before them and the greatest current that a fault just after them may reach, A. */
-function* breakers(context: Context): Iterable<{ device: Breaker; before: Part[]; currentA: number }> {
+export const breakers = once((context: Context): { device: Breaker; before: Part[]; currentA: number }[] => {
+  const found: { device: Breaker; before: Part[]; currentA: number }[] = [];
   const { graph, document, sections } = context;
   const { paths, practice, firstBehind } = figuresOf(context);
   const { voltage, zln, ze, system } = document.supply;
-  if (zln === undefined) return;
+  if (zln === undefined) return found;
   // The loop to earth is the smaller one on some supplies, and a breaker must break that current too.
   const external = system === 'TT' || ze === undefined || ze === 0 ? zln : Math.min(zln, ze);
   for (const { device, upstream } of sections) {
@@ -39,13 +41,14 @@ function* breakers(context: Context): Iterable<{ device: Breaker; before: Part[]
     if (!isBreaker(device) || ohm === undefined) continue;
     const path = firstBehind(device.id)?.lineDevices ?? [];
     const before = path.slice(0, path.indexOf(device.id)).map((id) => graph.parts.get(id)!);
-    yield {
+    found.push({
       device,
       before,
       currentA: prospectiveA({ voltage, loopOhm: external + 2 * ohm, factor: practice.cMax.value }),
-    };
+    });
   }
-}
+  return found;
+});
 
 /** The prospective current, cold and at the voltage factor Cmax, above what a breaker is made to break. */
 export const weakBreakingCapacity: Rule = {
@@ -63,7 +66,7 @@ export const weakBreakingCapacity: Rule = {
   },
   *check(context) {
     const { practice } = figuresOf(context);
-    const weak = [...breakers(context)].filter(
+    const weak = breakers(context).filter(
       ({ device, before, currentA }) =>
         device.icn !== undefined && exceeds(currentA, device.icn) && !isBacked(before, device.icn, currentA),
     );
