@@ -1,12 +1,14 @@
 import { walkFaults } from '@/diagram/circuit/fault-walk';
 import { FaultError } from '@/diagram/circuit/fault-types';
+import { applyPatch } from '@/diagram/document/patch';
 import type { Installation } from '@/diagram/document/schema';
+import type { Examination } from '@/diagram/rules/examination';
 import { buildContext } from '@/diagram/rules/context';
-import { examine } from '@/diagram/rules/examine';
+import { createExaminer } from '@/diagram/rules/incremental/examiner';
 import { remediesFor } from '@/diagram/rules/remedies-for';
 import { showFault } from '@/diagram/rules/show-fault';
 import type { Finding } from '@/diagram/rules/types';
-import type { Proof, Task } from './examiner';
+import type { Proof, Told } from './examiner';
 
 /** What puts a finding right, and the fault that shows it. */
 function prove(document: Installation, finding: Finding): Proof {
@@ -27,13 +29,24 @@ function prove(document: Installation, finding: Finding): Proof {
   }
 }
 
+/** A worker serves one drawing: it keeps the document, and of it what the next edit leaves as it was. */
+const examiner = createExaminer();
+let document: Installation | undefined;
+
+function answer(task: Told): Examination | Proof {
+  if (task.kind === 'prove') return prove(task.document, task.finding);
+  if (task.kind === 'examine') document = task.document;
+  else if (document) document = applyPatch(document, task.patch);
+  else throw new Error('A change came before the document it changes.');
+  return examiner.examine(document);
+}
+
 /** Examines beside the page, so that drawing never waits for it. */
-self.onmessage = ({ data }: MessageEvent<{ id: number; task: Task }>) => {
+self.onmessage = ({ data }: MessageEvent<{ id: number; task: Told }>) => {
   const { id, task } = data;
   const started = performance.now();
   try {
-    const value = task.kind === 'examine' ? examine(task.document) : prove(task.document, task.finding);
-    self.postMessage({ id, value, ms: performance.now() - started });
+    self.postMessage({ id, value: answer(task), ms: performance.now() - started });
   } catch (error) {
     self.postMessage({ id, failure: error instanceof Error ? error.message : String(error) });
   }

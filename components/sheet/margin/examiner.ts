@@ -1,5 +1,6 @@
 import type { FaultWalk } from '@/diagram/circuit/fault-types';
-import type { Installation } from '@/diagram/document/schema';
+import { diff, type Patch } from '@/diagram/document/patch';
+import { canonical, type Installation } from '@/diagram/document/schema';
 import type { Examination } from '@/diagram/rules/examination';
 import type { Finding, Remedy } from '@/diagram/rules/types';
 
@@ -17,6 +18,9 @@ export type Task =
   | { kind: 'examine'; document: Installation }
   | { kind: 'prove'; document: Installation; finding: Finding };
 
+/** What a worker is told: the document whole the first time, then what differs from the one it was told last. */
+export type Told = Task | { kind: 'examine-change'; patch: Patch };
+
 type Answer = { id: number; value: Examination | Proof; ms: number } | { id: number; failure: string };
 export type Outcome<T> = { value: T; ms: number } | { failure: string };
 
@@ -28,7 +32,7 @@ interface Question {
 
 /** The part of a worker that is used here; a test brings its own. */
 export interface ExamineWorker {
-  postMessage(message: { id: number; task: Task }): void;
+  postMessage(message: { id: number; task: Told }): void;
   terminate(): void;
   onmessage: ((event: MessageEvent<Answer>) => void) | null;
   onerror: ((event: ErrorEvent) => void) | null;
@@ -43,6 +47,8 @@ export class Examiner {
   private running: Question | null = null;
   private waiting: Question | null = null;
   private next = 1;
+  /** the document that the worker examined last: it keeps that and what it worked out of it */
+  private told: Installation | null = null;
 
   constructor(private readonly makeWorker: () => ExamineWorker) {}
 
@@ -67,7 +73,15 @@ export class Examiner {
     const asked = this.waiting;
     this.running = asked;
     this.waiting = null;
-    this.ready().postMessage({ id: asked.id, task: asked.task });
+    const worker = this.ready();
+    worker.postMessage({ id: asked.id, task: this.tell(asked.task) });
+  }
+
+  private tell(task: Task): Told {
+    if (task.kind !== 'examine') return task;
+    const before = this.told;
+    this.told = canonical(task.document);
+    return before ? { kind: 'examine-change', patch: diff(before, this.told) } : { ...task, document: this.told };
   }
 
   private ready(): ExamineWorker {
@@ -98,6 +112,7 @@ export class Examiner {
     this.worker?.terminate();
     this.worker = null;
     this.running = null;
+    this.told = null;
   }
 }
 

@@ -2,7 +2,7 @@ import { describe, expect, it, vi } from 'vitest';
 import { ACTIONS, actionFor, keyName } from '@/components/sheet/actions';
 import { importCommand } from '@/components/sheet/foot/import-file';
 import { pictureSize, sizeOfSvg } from '@/components/sheet/foot/picture';
-import { Examiner, type ExamineWorker, type Task } from '@/components/sheet/margin/examiner';
+import { Examiner, type ExamineWorker, type Told } from '@/components/sheet/margin/examiner';
 import { keyOf, letterOf, notesOf } from '@/components/sheet/margin/notes';
 import { nextPart, firstPart, handEnd } from '@/components/sheet/navigate';
 import { nodeOf } from '@/components/sheet/canvas/flow-items';
@@ -131,14 +131,14 @@ describe('findings as notes', () => {
 describe('examining beside the page', () => {
   class SlowWorker implements ExamineWorker {
     static made = 0;
-    asked: { id: number; task: Task }[] = [];
+    asked: { id: number; task: Told }[] = [];
     onmessage: ExamineWorker['onmessage'] = null;
     onerror: ExamineWorker['onerror'] = null;
     ended = false;
     constructor() {
       SlowWorker.made++;
     }
-    postMessage(message: { id: number; task: Task }) {
+    postMessage(message: { id: number; task: Told }) {
       this.asked.push(message);
     }
     terminate() {
@@ -160,7 +160,10 @@ describe('examining beside the page', () => {
     expect(await second).toBeNull();
     worker.answer('old');
     expect(await first).toBeNull();
-    expect(worker.asked.map(({ task }) => task.document.title)).toEqual(['Kiln Row 3', 'third']);
+    expect(worker.asked.map(({ task }) => task)).toEqual([
+      { kind: 'examine', document: home() },
+      { kind: 'examine-change', patch: { set: { title: 'third' } } },
+    ]);
     worker.answer('new');
     expect(await third).toEqual({ value: 'new', ms: 1 });
   });
@@ -178,6 +181,7 @@ describe('examining beside the page', () => {
     expect(workers[0]!.ended).toBe(true);
     const again = examiner.examine(home());
     workers[1]!.answer('fine');
+    expect(workers[1]!.asked).toEqual([expect.objectContaining({ task: { kind: 'examine', document: home() } })]);
     expect(await again).toEqual({ value: 'fine', ms: 1 });
   });
 });
