@@ -150,7 +150,8 @@ class Planner {
       hanging.forEach((far, i) => this.positions.set(far.id, { x: x + m(4) * i, y: y + m(2) }));
       y += hanging.length > 0 ? m(9) : m(5);
     }
-    if (bars.length > 0) this.barLevel = Math.max(this.barLevel, y - m(1));
+    // room for a neutral bar and an earth bar with its electrode is kept from the first, so that they find it later
+    this.barLevel = Math.max(this.barLevel, this.sideTop() + m(13), bars.length > 0 ? y - m(1) : 0);
     [...behindBackup].forEach((id, i) => this.backupBoard.add(id) && this.positions.set(id, { x: LEFT + m(2) + m(48) * i, y: 0 }));
   }
 

@@ -88,6 +88,10 @@ function markColumn(root: TreeNode, inRoom: (part: Part) => boolean): void {
     else if (DEVICES.has(kind)) {
       const forBars = node.children.some((child) => child.column && child.part.kind !== 'inverter' && !feedsInverter(child));
       node.column = forBars || (below && feedsInverter(node));
+      // what stands right behind the supply is the service fuse, whatever follows
+      if (node.parent?.part.kind === 'supply') node.column = true;
+      // and behind an inverter the first device stands beside it while nothing hangs from it yet
+      if (node.parent?.part.kind === 'inverter' && node.children.length === 0) node.column = true;
       // two overcurrent devices in series at the board: the first is in the column, the second heads the way
       if (isOvercurrent(kind) && atBoard)
         node.column ||= node.children.some((child) => isOvercurrent(child.part.kind) && !inRoom(child.part));
