@@ -13,7 +13,7 @@ export interface Source {
   neutral: number;
 }
 
-export type Base = 'mains' | 'outage' | 'main-off';
+type Base = 'mains' | 'outage' | 'main-off';
 
 /** One way in which the home can stand. All protective devices and plain switches are closed in it. */
 export interface Condition {

@@ -32,7 +32,7 @@ interface Crossed {
 }
 
 /** Neutral terminals before the home's first device or meter, where TN-C-S has its one joint of neutral and earth. */
-export function beforeOrigin(graph: Graph): (node: number) => boolean {
+function beforeOrigin(graph: Graph): (node: number) => boolean {
   const starts = [...graph.parts.values()]
     .filter(({ kind }) => kind === 'supply')
     .map(({ id }) => graph.node(id, 'N')!);

@@ -7,7 +7,7 @@ import { isPoint } from '../terminals/roles-of-parts';
 import { spread } from '../terminals/spread';
 
 /** Nodes at which the home's own wiring begins: the meter's outgoing line, else the supply's. */
-export function originLine(graph: Graph): number[] {
+function originLine(graph: Graph): number[] {
   const parts = [...graph.parts.values()];
   const meters = parts.filter((part) => part.kind === 'meter').map((part) => graph.node(part.id, '4')!);
   return meters.length > 0

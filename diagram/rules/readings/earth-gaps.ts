@@ -21,7 +21,7 @@ export interface EarthGap {
 }
 
 /** True for parts whose case or earth contact must reach the main earthing terminal. */
-export function needsEarth(context: Context, part: Part): boolean {
+function needsEarth(context: Context, part: Part): boolean {
   if (part.kind === 'inverter') return true;
   if (part.kind === 'socket') return part.class !== 2 && !isTwoPin(part.pattern);
   if (!isLoad(part)) return false;

@@ -8,8 +8,8 @@ import { potentials } from './potentials';
 import { sharedNeutrals } from './shared-neutrals';
 
 /** In order of which one wins where one cause could give several. */
-export const NEUTRAL_KINDS = ['lost', 'behind', 'borrowed', 'imbalance'] as const;
-export type NeutralKind = (typeof NEUTRAL_KINDS)[number];
+const NEUTRAL_KINDS = ['lost', 'behind', 'borrowed', 'imbalance'] as const;
+type NeutralKind = (typeof NEUTRAL_KINDS)[number];
 
 /** Points whose neutral is led wrongly by one cause. */
 export interface NeutralFault {

@@ -33,9 +33,9 @@ export function compareWays({ graph }: Context, state: PointState): WayBack {
 }
 
 /** Points that use each edge of the neutral in a condition. */
-export const neutralUsers = once(() => new Map<Evaluated, Map<number, Set<string>>>());
+const neutralUsers = once(() => new Map<Evaluated, Map<number, Set<string>>>());
 
-export function usersOf(context: Context, evaluated: Evaluated): Map<number, Set<string>> {
+function usersOf(context: Context, evaluated: Evaluated): Map<number, Set<string>> {
   const known = neutralUsers(context);
   let users = known.get(evaluated);
   if (users) return users;

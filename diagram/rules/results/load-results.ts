@@ -14,7 +14,7 @@ export function loadVolts({ graph }: Pick<Context, 'graph'>, evaluated: Evaluate
   for (const { standing, points } of standingsOf(graph, evaluated)) {
     const steady = solveStanding(graph, standing);
     for (const id of points) {
-      const { fed, source } = evaluated.points.get(id)!;
+      const { fed, source } = evaluated.asDrawn.get(id)!;
       const unknown = onMains && source?.kind === 'mains' && graph.document.supply.zln === undefined;
       volts.set(id, unknown ? null : fed ? Number(steady.loadVolts(id).toFixed(3)) : 0);
     }
@@ -36,8 +36,8 @@ export function rowsOf(
     .map((part) => ({
       part: part.id,
       conditions: Object.fromEntries(
-        evaluated.map(({ condition, points }) => {
-          const { fed, source, overcurrent, rcd } = points.get(part.id)!;
+        evaluated.map(({ condition, asDrawn }) => {
+          const { fed, source, overcurrent, rcd } = asDrawn.get(part.id)!;
           const at = volts.get(condition.name)!.get(part.id) ?? null;
           return [condition.name, { fed, from: source?.part.id ?? null, volts: at, overcurrent, rcd }];
         }),
