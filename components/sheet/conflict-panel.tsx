@@ -6,7 +6,7 @@ import { splitKey, valueAt } from '@/diagram/commands/merge';
 import { ratingText } from '@/diagram/commands/rating-text';
 import { KIND_NAME } from '@/diagram/document/kinds';
 import type { Installation, Part } from '@/diagram/document/schema';
-import { useSheet, type OpenDrawing } from './use-drawing';
+import { useSheet, type Me, type OpenDrawing } from './use-drawing';
 
 const FIELD_NAME: Record<string, string> = {
   title: 'Title',
@@ -53,11 +53,12 @@ function words(value: unknown, other: unknown): string {
 }
 
 /** Somebody and I changed the same: both side by side, decided place by place. Nothing is lost: what gives way is set aside. */
-export function ConflictPanel({ drawing }: { drawing: OpenDrawing }) {
+export function ConflictPanel({ drawing, me }: { drawing: OpenDrawing; me: Me }) {
   const conflict = useSheet(drawing.store, (state) => state.conflict);
   const [theirs, setTheirs] = useState<ReadonlySet<string>>(new Set());
   if (!conflict) return null;
-  const who = [...new Set(conflict.theirs.map((change) => change.person.initials))].join(', ');
+  const others = conflict.theirs.filter((change) => change.person.id !== me.id);
+  const who = [...new Set(others.map((change) => change.person.initials))].join(', ') || 'the other window';
   const docs = [conflict.myDocument, conflict.theirDocument];
   const choose = (key: string, their: boolean) => {
     const next = new Set(theirs);
@@ -67,7 +68,9 @@ export function ConflictPanel({ drawing }: { drawing: OpenDrawing }) {
   };
   return (
     <section aria-label="Changed by two" className="flex flex-col gap-3 border-l-4 border-blue pl-4">
-      <h2 className="text-head font-bold text-blue">{who} and you changed the same</h2>
+      <h2 className="text-head font-bold text-blue">
+        {others.length > 0 ? `${who} and you changed the same` : 'You changed the same in another window'}
+      </h2>
       <p>Choose place by place. What gives way is set aside under History, not lost.</p>
       <ul className="flex flex-col gap-3">
         {conflict.keys.map((key) => {

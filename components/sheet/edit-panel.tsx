@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useRef, useLayoutEffect, useState, type KeyboardEvent } from 'react';
 import { editCable, editName, editRating } from '@/diagram/commands/edit-in-place';
 import { cableText, ratingExample, ratingText } from '@/diagram/commands/rating-text';
 import { isRefusal, type Command, type Refusal } from '@/diagram/commands/types';
@@ -23,7 +23,7 @@ function EditField({ label, value, hint, first = false, commit, hands, onDone }:
   const [text, setText] = useState(value);
   const [error, setError] = useState('');
   const field = useRef<HTMLInputElement>(null);
-  useEffect(() => {
+  useLayoutEffect(() => {
     if (first) field.current?.select();
   }, [first]);
   /** @returns true when the field is as it should be */

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useId, useRef, useState, type KeyboardEvent, type ReactNode } from 'react';
+import { useEffect, useLayoutEffect, useId, useRef, useState, type KeyboardEvent, type ReactNode } from 'react';
 import { Key } from '@/components/ui/key';
 
 export interface ListItem {
@@ -28,7 +28,7 @@ export function ListPanel({ label, placeholder, items, onPick, onLeave, children
   const list = useId();
   const shown = items(typed);
   const chosen = Math.min(index, Math.max(0, shown.length - 1));
-  useEffect(() => field.current?.focus(), []);
+  useLayoutEffect(() => field.current?.focus(), []);
   useEffect(() => {
     document.getElementById(`${list}-${chosen}`)?.scrollIntoView({ block: 'nearest' });
   }, [list, chosen]);

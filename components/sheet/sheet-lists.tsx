@@ -71,7 +71,12 @@ export function FindList({
     <ListPanel
       label="Find"
       placeholder="A name, a number, a kind or a finding"
-      items={(typed) => [...findings, ...parts].filter((item) => fits(item.all, typed)).slice(0, 60)}
+      items={(typed) => {
+        const found = [...findings, ...parts].filter((item) => fits(item.all, typed));
+        // A designation that is typed whole is that part, whatever is said about it.
+        const exact = found.filter((item) => item.words.split(',')[0]?.toLowerCase() === typed.trim().toLowerCase());
+        return [...exact, ...found.filter((item) => !exact.includes(item))].slice(0, 60);
+      }}
       onLeave={onLeave}
       onPick={(id) => {
         hands.view.getState().setMode(REST);

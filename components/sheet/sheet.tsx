@@ -211,6 +211,9 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
       }
       foot={<SheetFoot drawing={drawing} context={context} scene={scene} notes={notes} />}
     >
+      <h1 className="sr-only">
+        {face === 'overview' ? 'Overview' : `Connections, ${page?.name ?? 'no place yet'}`}: {titleBlock.title}
+      </h1>
       <SheetSurface
         sheet={sheet}
         drawing={drawing}

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef, useState, type ReactNode, type RefObject } from 'react';
+import { useEffect, useLayoutEffect, useState, type ReactNode, type RefObject } from 'react';
 import type { End } from '@/diagram/document/schema';
 import { nameOf } from '@/diagram/document/names';
 import type { ConnectionPage } from '@/diagram/layout/connections-scene';
@@ -55,43 +55,40 @@ function beside(
   return { left, top: Math.max(12, Math.min(box.height - 320, at.y - 40)) };
 }
 
-function Floating({
-  sheet,
-  at,
-  width,
-  children,
-}: {
-  sheet: RefObject<HTMLDivElement | null>;
-  at?: Point;
+interface FloatingProps {
+  box: { width: number; height: number };
+  at?: Point | undefined;
   width: number;
   children: ReactNode;
-}) {
-  const [box, setBox] = useState({ width: 0, height: 0 });
-  useEffect(() => {
-    const element = sheet.current;
-    if (!element) return;
-    const look = () => setBox({ width: element.clientWidth, height: element.clientHeight });
-    look();
-    const observer = new ResizeObserver(look);
-    observer.observe(element);
-    return () => observer.disconnect();
-  }, [sheet]);
-  if (box.width === 0) return null;
-  const narrow = box.width < NARROW && width === SLIP;
-  if (narrow)
+}
+
+/** A panel that lies on the sheet, beside the point it speaks of; a wide one is the foot of a narrow screen. */
+function Floating({ box, at, width, children }: FloatingProps) {
+  if (box.width < NARROW && width === SLIP)
     return (
       <div className="absolute inset-x-0 bottom-0 z-10 max-h-[70%] overflow-y-auto border-t-2 border-ink bg-paper">
         {children}
       </div>
     );
+  const fits = Math.min(width, Math.max(200, box.width - 16));
   return (
-    <div
-      className="absolute z-10"
-      style={{ ...beside(at, box, Math.min(width, box.width - 16)), width: Math.min(width, box.width - 16) }}
-    >
+    <div className="absolute z-10" style={{ ...beside(at, box, fits), width: fits }}>
       {children}
     </div>
   );
+}
+
+/** The size of the sheet on the screen, in px. */
+function useBox(sheet: RefObject<HTMLDivElement | null>): { width: number; height: number } {
+  const [box, setBox] = useState({ width: 0, height: 0 });
+  useLayoutEffect(() => {
+    const element = sheet.current;
+    if (!element) return;
+    const observer = new ResizeObserver(() => setBox({ width: element.clientWidth, height: element.clientHeight }));
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [sheet]);
+  return box;
 }
 
 /** The sheet itself: the canvas, what lies open on it, and the keys. One tab stop. */
@@ -109,8 +106,14 @@ export function SheetSurface(props: SurfaceProps) {
   const candidates = mode.kind === 'wire' ? hands.candidates(mode.from) : NONE;
   const target = mode.kind === 'wire' ? (candidates[mode.index] ?? null) : null;
   const slipAt = slip ? endPoint(scene, slip.end) : null;
-  const held = useRef(false);
+  const [ready, setReady] = useState(false);
+  const box = useBox(sheet);
   const empty = document.parts.length === 0;
+
+  // The first paint comes from the server and hears no key yet; then what was left unsent on this device is found.
+  useEffect(() => {
+    void drawing.keeper.ready.then(() => setReady(true));
+  }, [drawing]);
 
   // Keys of the sheet act from anywhere but fields: the page opens with the focus nowhere.
   useSingleKeys({ '/': () => view.getState().setMode({ kind: 'find' }) });
@@ -126,6 +129,7 @@ export function SheetSurface(props: SurfaceProps) {
       role="application"
       aria-roledescription="drawing"
       aria-label={`${scene.face === 'overview' ? 'Overview' : 'Connections'} of ${document.title}. Arrows follow the conductors, question mark lists the keys.`}
+      aria-busy={!ready}
       tabIndex={0}
       className="absolute inset-0 outline-offset-[-2px]"
       onKeyDown={onKeyDown}
@@ -135,7 +139,6 @@ export function SheetSurface(props: SurfaceProps) {
         void hands.paste(event.clipboardData.getData('text/plain'));
       }}
       onPointerDown={() => {
-        held.current = true;
         focusSheet();
       }}
     >
@@ -145,7 +148,9 @@ export function SheetSurface(props: SurfaceProps) {
       {empty && scene.face === 'overview' ? (
         <StartPanel jobId={drawing.store.getState().jobId} hands={hands} mayEdit={mayEdit} />
       ) : (
-        <Canvas scene={scene} ghost={ghost} notes={notes} hands={hands} candidates={candidates} target={target} />
+        <div aria-hidden="true" className="absolute inset-0">
+          <Canvas scene={scene} ghost={ghost} notes={notes} hands={hands} candidates={candidates} target={target} />
+        </div>
       )}
       {empty && scene.face === 'connections' && (
         <p className="absolute top-4 left-4">Nothing is drawn yet. The overview is where a drawing begins.</p>
@@ -170,42 +175,42 @@ export function SheetSurface(props: SurfaceProps) {
       )}
       <Leader box={sheet} scene={scene} notes={notes} />
       {slip && part && (
-        <Floating sheet={sheet} at={slipAt && camera ? camera.onScreen(slipAt) : undefined} width={SLIP}>
+        <Floating box={box} at={slipAt && camera ? camera.onScreen(slipAt) : undefined} width={SLIP}>
           <SlipPanel slip={slip} name={`${nameOf(document, part)}:${slip.end[1]}`} onLeave={focusSheet} />
         </Floating>
       )}
       {mode.kind === 'edit' && (
-        <Floating sheet={sheet} at={camera?.onScreen(mode.at)} width={224}>
+        <Floating box={box} at={camera?.onScreen(mode.at)} width={224}>
           <EditPanel key={mode.part ?? mode.cable} mode={mode} hands={hands} onDone={focusSheet} />
         </Floating>
       )}
       {mode.kind === 'commands' && (
-        <Floating sheet={sheet} width={520}>
+        <Floating box={box} width={520}>
           <CommandList context={context} onLeave={close} />
         </Floating>
       )}
       {mode.kind === 'find' && (
-        <Floating sheet={sheet} width={480}>
+        <Floating box={box} width={480}>
           <FindList context={context} notes={notes} onLeave={close} onNote={onNote} />
         </Floating>
       )}
       {mode.kind === 'load' && (
-        <Floating sheet={sheet} width={480}>
+        <Floating box={box} width={480}>
           <WayList context={context} mode={mode} onLeave={close} />
         </Floating>
       )}
       {mode.kind === 'history' && (
-        <Floating sheet={sheet} width={480}>
+        <Floating box={box} width={480}>
           <HistoryPanel drawing={drawing} onLeave={close} />
         </Floating>
       )}
       {mode.kind === 'export' && (
-        <Floating sheet={sheet} width={520}>
+        <Floating box={box} width={520}>
           <ExportPanel drawing={drawing} hands={hands} scene={scene} onLeave={close} />
         </Floating>
       )}
       {mode.kind === 'tidy' && (
-        <Floating sheet={sheet} width={360}>
+        <Floating box={box} width={360}>
           <TidyPanel mode={mode} hands={hands} tidy={context.tidy} onLeave={close} />
         </Floating>
       )}

@@ -34,7 +34,14 @@ export function valueIn(patch: Patch, key: string): unknown {
   return (side as readonly Item[] | undefined)?.find((item) => item.id === id);
 }
 
-const equal = (a: unknown, b: unknown): boolean => a === b || JSON.stringify(a) === JSON.stringify(b);
+/** The same value, whatever the order of its fields: a document that was read again has them in another order. */
+function equal(a: unknown, b: unknown): boolean {
+  if (a === b) return true;
+  if (typeof a !== 'object' || typeof b !== 'object' || a === null || b === null) return false;
+  const [left, right] = [a as Record<string, unknown>, b as Record<string, unknown>];
+  const keys = Object.keys(left);
+  return keys.length === Object.keys(right).length && keys.every((key) => key in right && equal(left[key], right[key]));
+}
 
 /** The change without what it does at the given keys. */
 export function without(patch: Patch, keys: ReadonlySet<string>): Patch {

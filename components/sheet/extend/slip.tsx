@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useId, useRef, type KeyboardEvent } from 'react';
+import { useEffect, useLayoutEffect, useId, useRef, type KeyboardEvent } from 'react';
 import { Button } from '@/components/ui/button';
 import type { SlipLine, Slip } from './use-slip';
 
@@ -113,7 +113,7 @@ export function SlipPanel({ slip, name, onLeave }: SlipProps) {
   const field = useRef<HTMLInputElement>(null);
   const list = useId();
   const line = slip.lines[slip.index];
-  useEffect(() => field.current?.focus({ preventScroll: true }), [name]);
+  useLayoutEffect(() => field.current?.focus({ preventScroll: true }), [name]);
   useEffect(() => {
     document.getElementById(`${list}-${slip.index}`)?.scrollIntoView({ block: 'nearest' });
   }, [list, slip.index]);

@@ -88,7 +88,7 @@ export function useSlip(hands: Hands, hoursWanted: number, now: Examination | nu
   const mode = useView((state) => state.mode);
   const doc = useSheet(hands.store, (state) => state.document);
   const extend = mode.kind === 'extend' ? mode : null;
-  const typed = useDeferredValue(extend?.typed ?? '');
+  const typed = extend?.typed ?? '';
   const end = extend?.end ?? null;
   const key = end?.join(' ') ?? '';
   const found = useMemo(
@@ -112,17 +112,18 @@ export function useSlip(hands: Hands, hoursWanted: number, now: Examination | nu
     [line, choice],
   );
 
+  // The ghost may come a moment later than the typing; what is placed is always the line that is shown.
+  const shown = useDeferredValue(command);
+  const extending = extend !== null;
   useEffect(() => {
-    if (!extend) return;
-    hands.view.getState().set({ ghost: command ? applyPatch(doc, command.patch) : null });
-  }, [command, doc, extend, hands]);
+    if (extending) hands.view.getState().set({ ghost: shown ? applyPatch(doc, shown.patch) : null });
+  }, [shown, doc, extending, hands]);
 
   if (!extend || !end) return null;
   const { setMode } = hands.view.getState();
-  const change = (part: Partial<typeof extend>) => {
-    setMode({ ...extend, ...part });
-    if (command) hands.view.getState().set({ ghost: applyPatch(doc, command.patch) });
-  };
+  const { set } = hands.view.getState();
+  // The ghost stays until the next one is drawn: it does not flicker while somebody types.
+  const change = (part: Partial<typeof extend>) => set({ mode: { ...extend, ...part } });
   return {
     end,
     typed: extend.typed,

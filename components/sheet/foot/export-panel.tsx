@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef, useState, type FormEvent } from 'react';
+import { useRef, useLayoutEffect, useState, type FormEvent } from 'react';
 import { Button, buttonClass } from '@/components/ui/button';
 import { TextField } from '@/components/ui/field';
 import { saveFile } from '@/components/ui/save-file';
@@ -46,7 +46,7 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
   const [errors, setErrors] = useState<readonly DocumentError[]>([]);
   const [note, setNote] = useState('');
   const first = useRef<HTMLAnchorElement>(null);
-  useEffect(() => first.current?.focus(), []);
+  useLayoutEffect(() => first.current?.focus(), []);
 
   const { drawingId } = drawing.store.getState();
   const query = `face=${scene.face}${scene.place !== undefined ? `&place=${encodeURIComponent(scene.place)}` : ''}`;

@@ -46,7 +46,7 @@ export function SheetMargin({
     return <IfPlaced before={examined.examination} after={ghostExamined} />;
   return (
     <div className="flex flex-col gap-6">
-      <ConflictPanel drawing={drawing} />
+      <ConflictPanel drawing={drawing} me={me} />
       {news && (
         <p className="border-l-2 border-blue pl-3 text-blue">
           {news.person.initials} a moment ago: {news.label}{' '}

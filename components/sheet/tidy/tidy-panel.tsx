@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef } from 'react';
+import { useRef, useLayoutEffect } from 'react';
 import { Button } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/segmented';
 import { diff } from '@/diagram/document/patch';
@@ -24,7 +24,7 @@ interface TidyPanelProps {
 export function TidyPanel({ mode, hands, tidy, onLeave }: TidyPanelProps) {
   const face = useView((state) => state.face);
   const first = useRef<HTMLButtonElement>(null);
-  useEffect(() => first.current?.focus(), []);
+  useLayoutEffect(() => first.current?.focus(), []);
   return (
     <div
       role="dialog"

@@ -85,6 +85,13 @@ describe('taking back only my own', () => {
     ]);
   });
 
+  it('knows a value again whatever the order of its fields', () => {
+    const step: Patch = set({ id: 'E3', kind: 'lamp', watts: 9, class: 1 });
+    const back = invert(home, step);
+    const read = applyPatch(home, set({ class: 1, watts: 9, kind: 'lamp', id: 'E3' }));
+    expect(applyPatch(read, ownOnly(read, back, step))).toEqual(home);
+  });
+
   it('leaves a part of mine that somebody has wired since', () => {
     const step: Patch = { set: { parts: [lamp('E3')], overview: { E3: { x: 1, y: 1 } } } };
     const back = invert(home, step);
