@@ -1,4 +1,3 @@
-import { isBar } from '../document/kinds';
 import type { End, Part, Position } from '../document/schema';
 import { symbolFor, terminalAt } from '../symbols';
 import { BAR_AXIS, BAR_HEIGHT, barTerminal, type BarKind } from '../symbols/bar';
