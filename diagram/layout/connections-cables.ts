@@ -6,4 +6,5 @@ import { m } from './overview-metrics';
 export const CORE_PITCH = m(6);
 export const CABLE_GAP = m(6);
 /** Width of what is written over a cable's brace. */
-export const wordsWidth = (cable: PageCable): number => Math.max(0, ...cable.lines.map((line, i) => textWidth(line, i === 0 ? BODY : SMALL)));
+export const wordsWidth = (cable: PageCable): number =>
+  Math.max(0, ...cable.lines.map((line, i) => textWidth(line, i === 0 ? BODY : SMALL)));

@@ -12,7 +12,6 @@ import type { SceneTerminal } from './scene';
 
 /** Where cores end on a page: at terminals, and at the stubs of cables that come from or go to another place. */
 
-
 export interface Stub {
   core: Core;
   x: number;
@@ -32,14 +31,24 @@ export interface PlacedCable {
 export const endName = (end: End): string => `${end[0]} ${end[1]}`;
 
 /** Bodies and terminals of everything but long bars. */
-export function fixedBodies(page: Page, positions: ReadonlyMap<string, Position>, marks: ReadonlyMap<string, readonly string[]>): Map<string, Body> {
+export function fixedBodies(
+  page: Page,
+  positions: ReadonlyMap<string, Position>,
+  marks: ReadonlyMap<string, readonly string[]>,
+): Map<string, Body> {
   const bodies = new Map<string, Body>();
   for (const part of page.parts) {
     if (isLongBar(part.kind)) continue;
     const at = positions.get(part.id)!;
     const turn = part.kind === 'joint' ? 0 : (at.turn ?? 0);
     const size = part.kind === 'joint' ? sizeOf(part, marks) : turnedSize(sizeOf(part, marks), turn);
-    bodies.set(part.id, { x: at.x, y: at.y, ...size, turn, terminals: terminalsOn(part, at, marks.get(part.id) ?? []) });
+    bodies.set(part.id, {
+      x: at.x,
+      y: at.y,
+      ...size,
+      turn,
+      terminals: terminalsOn(part, at, marks.get(part.id) ?? []),
+    });
   }
   return bodies;
 }
@@ -59,10 +68,17 @@ function terminalsOn(part: Part, at: Position, used: readonly string[]): SceneTe
 }
 
 /** Lines up the cores of cables over (or under) the terminals they go to, in the order L, N, PE, and keeps cables apart. */
-export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>, positions: ReadonlyMap<string, Position>): PlacedCable[] {
-  const bars = new Map(page.parts.filter((part) => part.kind === 'line-bar').map((part) => [part.id, positions.get(part.id)!.x - m(3)]));
+export function placeCables(
+  page: Page,
+  bodies: ReadonlyMap<string, Body>,
+  positions: ReadonlyMap<string, Position>,
+): PlacedCable[] {
+  const bars = new Map(
+    page.parts.filter((part) => part.kind === 'line-bar').map((part) => [part.id, positions.get(part.id)!.x - m(3)]),
+  );
   // over the terminal itself, or just left of the line bar it feeds
-  const wish = (core: Core): number | undefined => bodies.get(core.here[0])?.terminals.find((t) => t.mark === core.here[1])?.x ?? bars.get(core.here[0]);
+  const wish = (core: Core): number | undefined =>
+    bodies.get(core.here[0])?.terminals.find((t) => t.mark === core.here[1])?.x ?? bars.get(core.here[0]);
   const lowest = Math.max(TOP.first, ...[...bodies.values()].map((body) => body.y + body.height));
   const rowOf = (atFoot: boolean): PlacedCable[] => {
     const list = page.cables.filter((cable) => cable.atFoot === atFoot);
@@ -72,7 +88,12 @@ export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>, posit
     // what leaves a room leaves right of the cable that feeds it there
     const rank = (cable: PageCable): number =>
       cable.outgoing && !atFoot
-        ? Math.max(first(cable), ...coming.filter((other) => first(other) <= first(cable) && Math.max(...wishes(other)) >= first(cable)).map((other) => Math.max(...wishes(other)) + 1))
+        ? Math.max(
+            first(cable),
+            ...coming
+              .filter((other) => first(other) <= first(cable) && Math.max(...wishes(other)) >= first(cable))
+              .map((other) => Math.max(...wishes(other)) + 1),
+          )
         : first(cable);
     list.sort((a, b) => rank(a) - rank(b) || Number(a.outgoing) - Number(b.outgoing) || (a.id < b.id ? -1 : 1));
     let free = m(8);
@@ -101,14 +122,39 @@ export function placeCables(page: Page, bodies: ReadonlyMap<string, Body>, posit
 }
 
 /** Bars lie under their conductors: each terminal stands where its core comes down, the others beyond the ends. */
-export function barBodies(page: Page, positions: ReadonlyMap<string, Position>, bodies: ReadonlyMap<string, Body>, cables: readonly PlacedCable[], marks: ReadonlyMap<string, readonly string[]>): Map<string, Body> {
+export function barBodies(
+  page: Page,
+  positions: ReadonlyMap<string, Position>,
+  bodies: ReadonlyMap<string, Body>,
+  cables: readonly PlacedCable[],
+  marks: ReadonlyMap<string, readonly string[]>,
+): Map<string, Body> {
   const stubAt = new Map(cables.flatMap(({ stubs }) => stubs.map((stub) => [stub.core.wire.id, stub] as const)));
   const all = new Map(bodies);
-  for (const part of page.parts) if (isLongBar(part.kind)) all.set(part.id, barBody(part as Part & { kind: BarKind }, page, positions.get(part.id)!, bodies, stubAt, marks.get(part.id) ?? []));
+  for (const part of page.parts)
+    if (isLongBar(part.kind))
+      all.set(
+        part.id,
+        barBody(
+          part as Part & { kind: BarKind },
+          page,
+          positions.get(part.id)!,
+          bodies,
+          stubAt,
+          marks.get(part.id) ?? [],
+        ),
+      );
   return all;
 }
 
-function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodies: ReadonlyMap<string, Body>, stubAt: ReadonlyMap<string, Stub>, used: readonly string[]): Body {
+function barBody(
+  part: Part & { kind: BarKind },
+  page: Page,
+  at: Position,
+  bodies: ReadonlyMap<string, Body>,
+  stubAt: ReadonlyMap<string, Stub>,
+  used: readonly string[],
+): Body {
   const axis = at.y + BAR_AXIS;
   const wanted: { mark: string; x: number; side: Side }[] = [];
   const beyond: string[] = [];
@@ -147,8 +193,16 @@ function barBody(part: Part & { kind: BarKind }, page: Page, at: Position, bodie
   // what feeds the bar comes to its left end, the rest beside it
   beyond
     .sort((a, b) => Number(a) - Number(b))
-    .forEach((mark, i) => terminals.push(i === 0 ? { mark, x: at.x, y: axis, side: 'left' } : { mark, x: at.x - MODULE + i * 3 * MODULE, y: axis, side: 'up' }));
-  for (const mark of [...later.sort((a, b) => Number(a) - Number(b)), ...used]) if (!terminals.some((t) => t.mark === mark)) terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
+    .forEach((mark, i) =>
+      terminals.push(
+        i === 0
+          ? { mark, x: at.x, y: axis, side: 'left' }
+          : { mark, x: at.x - MODULE + i * 3 * MODULE, y: axis, side: 'up' },
+      ),
+    );
+  for (const mark of [...later.sort((a, b) => Number(a) - Number(b)), ...used])
+    if (!terminals.some((t) => t.mark === mark))
+      terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
   const right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 3 * MODULE;
   let free = 1;
   while (terminals.some((t) => t.mark === String(free))) free++;

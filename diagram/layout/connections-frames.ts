@@ -9,12 +9,34 @@ import type { SceneFrame } from './scene';
 
 /** Switchboards as dashed boxes round what stands in them, and a brace over the cores of each cable. */
 
-const IN_BOARD: ReadonlySet<string> = new Set(['joint', 'switch', 'switch-2way', 'switch-cross', 'switch-2pole', 'regulator', 'mcb', 'rcbo', 'rcd', 'isolator', 'line-bar', 'neutral-bar', 'earth-bar', 'spd', 'changeover']);
+const IN_BOARD: ReadonlySet<string> = new Set([
+  'joint',
+  'switch',
+  'switch-2way',
+  'switch-cross',
+  'switch-2pole',
+  'regulator',
+  'mcb',
+  'rcbo',
+  'rcd',
+  'isolator',
+  'line-bar',
+  'neutral-bar',
+  'earth-bar',
+  'spd',
+  'changeover',
+]);
 const PAD = m(3) + MODULE / 2;
 
-export function connectionFrames(doc: Installation, page: Page, bodies: ReadonlyMap<string, Body>, cables: readonly PlacedCable[]): SceneFrame[] {
+export function connectionFrames(
+  doc: Installation,
+  page: Page,
+  bodies: ReadonlyMap<string, Body>,
+  cables: readonly PlacedCable[],
+): SceneFrame[] {
   const boards = new Map<string, Part[]>();
-  for (const part of page.parts) if (IN_BOARD.has(part.kind)) boards.set(part.board ?? '', [...(boards.get(part.board ?? '') ?? []), part]);
+  for (const part of page.parts)
+    if (IN_BOARD.has(part.kind)) boards.set(part.board ?? '', [...(boards.get(part.board ?? '') ?? []), part]);
   const named = [...boards.keys()].filter(Boolean);
   const place = doc.places.find((p) => p.id === page.place);
   const frames: SceneFrame[] = [];
@@ -39,9 +61,18 @@ export function connectionFrames(doc: Installation, page: Page, bodies: Readonly
     });
   }
   const feet = cables.filter(({ cable }) => cable.atFoot).map(({ left }) => left);
-  const room = (left: number): number => Math.min(m(24), ...feet.filter((other) => other > left).map((other) => other - left - 200));
+  const room = (left: number): number =>
+    Math.min(m(24), ...feet.filter((other) => other > left).map((other) => other - left - 200));
   for (const { cable, left, right, y } of cables)
-    frames.push({ id: `brace:${cable.id}`, kind: 'brace', x: left, y: cable.atFoot ? y - MODULE : y, width: right - left, height: MODULE, texts: braceTexts(cable.lines, left, y, cable.atFoot ? room(left) : null) });
+    frames.push({
+      id: `brace:${cable.id}`,
+      kind: 'brace',
+      x: left,
+      y: cable.atFoot ? y - MODULE : y,
+      width: right - left,
+      height: MODULE,
+      texts: braceTexts(cable.lines, left, y, cable.atFoot ? room(left) : null),
+    });
   return frames.sort((a, b) => byCode(a.id, b.id));
 }
 
@@ -54,7 +85,9 @@ function braceTexts(lines: readonly string[], left: number, y: number, footWidth
       ...rest.map((text, i) => ({ text, x: left, y: y - 150 + 370 * i, size: SMALL, tone: 'grey' as const })),
     ];
   const heads = breakLines(first, BODY, footWidth);
-  const words = rest.flatMap((text) => text.split(/ (?=to )| (?=from )/)).flatMap((text) => breakLines(text, SMALL, footWidth));
+  const words = rest
+    .flatMap((text) => text.split(/ (?=to )| (?=from )/))
+    .flatMap((text) => breakLines(text, SMALL, footWidth));
   const below = y + 450 + 400 * (heads.length - 1);
   return [
     ...heads.map((text, i) => ({ text, x: left, y: y + 450 + 400 * i, size: BODY, bold: true })),

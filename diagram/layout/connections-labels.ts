@@ -24,7 +24,12 @@ export interface PageTexts {
 const RING = 150;
 /** Ratings are broken to lines of this width. */
 const LINE = 2100;
-const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: Anchor['vertical']): Anchor => ({ x, y, horizontal, vertical });
+const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: Anchor['vertical']): Anchor => ({
+  x,
+  y,
+  horizontal,
+  vertical,
+});
 
 function markPlaces(t: { x: number; y: number }): Anchor[] {
   const far = RING + 90;
@@ -44,13 +49,25 @@ function namePlaces(body: Body, round: boolean): Anchor[] {
   const right = body.x + body.width + 150;
   const left = body.x - 150;
   const middle = body.x + body.width / 2;
-  const beside = [at(right, body.y + 100, 'start', 'top'), at(left, body.y + 100, 'end', 'top'), at(right, body.y + body.height - 100, 'start', 'bottom'), at(left, body.y + body.height - 100, 'end', 'bottom')];
+  const beside = [
+    at(right, body.y + 100, 'start', 'top'),
+    at(left, body.y + 100, 'end', 'top'),
+    at(right, body.y + body.height - 100, 'start', 'bottom'),
+    at(left, body.y + body.height - 100, 'end', 'bottom'),
+  ];
   const over = [at(body.x, body.y - 120, 'start', 'bottom'), at(middle, body.y + body.height + 150, 'middle', 'top')];
   return round ? [at(left, body.y + body.height / 2, 'end', 'middle'), ...beside, ...over] : [...beside, ...over];
 }
 
 /** Places all lettering of a page. */
-export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<string, Body>, cables: readonly PlacedCable[], frames: readonly SceneFrame[], routes: ReadonlyMap<string, Point[]>): PageTexts {
+export function letterPage(
+  page: Page,
+  plan: OverviewPlan,
+  bodies: ReadonlyMap<string, Body>,
+  cables: readonly PlacedCable[],
+  frames: readonly SceneFrame[],
+  routes: ReadonlyMap<string, Point[]>,
+): PageTexts {
   const ground = new Ground();
   // nothing is written outside the page
   ground.add({ x: -m(200), y: -m(10), width: m(200) + 300, height: m(2000) });
@@ -58,13 +75,24 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
   for (const [id, body] of bodies) {
     const part = plan.graph.byId.get(id)!;
     // marks are written inside a device's box beside its terminals, so only its glyph is taken ground there
-    if (isLongBar(part.kind)) ground.add({ x: body.x, y: body.y + body.height / 2 - 72, width: body.width, height: 144 });
+    if (isLongBar(part.kind))
+      ground.add({ x: body.x, y: body.y + body.height / 2 - 72, width: body.width, height: 144 });
     else inside.push({ box: body, id });
     for (const t of body.terminals) ground.add({ x: t.x - RING, y: t.y - RING, width: 2 * RING, height: 2 * RING });
   }
   for (const points of routes.values()) ground.addPath(points, 100);
   for (const { x, y, width: w, height: h, kind, texts } of frames) {
-    if (kind === 'switchboard') ground.addPath([{ x, y }, { x: x + w, y }, { x: x + w, y: y + h }, { x, y: y + h }, { x, y }], 20);
+    if (kind === 'switchboard')
+      ground.addPath(
+        [
+          { x, y },
+          { x: x + w, y },
+          { x: x + w, y: y + h },
+          { x, y: y + h },
+          { x, y },
+        ],
+        20,
+      );
     else ground.add({ x, y, width: w, height: h });
     if (kind === 'brace') for (const text of texts) ground.add(textBox(text));
   }
@@ -79,14 +107,37 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
   for (const { stubs, cable } of cables)
     for (const { core, x, y } of stubs) {
       const mark = core.core === 'E' ? 'PE' : core.core;
-      const lines = [[{ text: mark, bold: true }], ...(core.home && !cable.atFoot ? [[{ text: core.core === 'L' || cable.outgoing ? core.home : `to ${core.home}`, tone: 'grey' as const }]] : [])];
-      keep(texts.wires, { owner: core.wire.id, size: SMALL, lines, places: cable.atFoot ? [at(x + 130, y - 100, 'start', 'bottom'), at(x - 130, y - 100, 'end', 'bottom')] : [at(x + 160, y + 100, 'start', 'top'), at(x - 160, y + 100, 'end', 'top')], optional: cable.atFoot });
+      const lines = [
+        [{ text: mark, bold: true }],
+        ...(core.home && !cable.atFoot
+          ? [[{ text: core.core === 'L' || cable.outgoing ? core.home : `to ${core.home}`, tone: 'grey' as const }]]
+          : []),
+      ];
+      keep(texts.wires, {
+        owner: core.wire.id,
+        size: SMALL,
+        lines,
+        places: cable.atFoot
+          ? [at(x + 130, y - 100, 'start', 'bottom'), at(x - 130, y - 100, 'end', 'bottom')]
+          : [at(x + 160, y + 100, 'start', 'top'), at(x - 160, y + 100, 'end', 'top')],
+        optional: cable.atFoot,
+      });
     }
   // marks of terminals: inside the boxes
   for (const part of page.parts)
     for (const t of bodies.get(part.id)!.terminals) {
-      const wired = !isLongBar(part.kind) || page.inner.some((w) => isAt(w.from, part.id, t.mark) || isAt(w.to, part.id, t.mark)) || page.cables.some((c) => c.cores.some((core) => isAt(core.here, part.id, t.mark)));
-      if (wired) keep(texts.parts, { owner: part.id, size: SMALL, lines: [[{ text: t.mark, tone: 'grey' }]], places: markPlaces(t), optional: true });
+      const wired =
+        !isLongBar(part.kind) ||
+        page.inner.some((w) => isAt(w.from, part.id, t.mark) || isAt(w.to, part.id, t.mark)) ||
+        page.cables.some((c) => c.cores.some((core) => isAt(core.here, part.id, t.mark)));
+      if (wired)
+        keep(texts.parts, {
+          owner: part.id,
+          size: SMALL,
+          lines: [[{ text: t.mark, tone: 'grey' }]],
+          places: markPlaces(t),
+          optional: true,
+        });
     }
   for (const { box } of inside) ground.add(box);
   for (const frame of frames) if (frame.kind === 'switchboard') nameBoard(ground, frame);
@@ -94,14 +145,35 @@ export function letterPage(page: Page, plan: OverviewPlan, bodies: ReadonlyMap<s
   for (const part of [...page.parts].sort((a, b) => byCode(a.id, b.id))) {
     const body = bodies.get(part.id)!;
     const ref = printedRef(part);
-    const lines = [...(ref && part.kind !== 'joint' ? [[{ text: ref, bold: true }]] : []), ...ratingLines(part).slice(0, 2).flatMap((text) => breakLines(text, BODY, LINE)).map((text) => [{ text, tone: 'grey' as const }])];
+    const lines = [
+      ...(ref && part.kind !== 'joint' ? [[{ text: ref, bold: true }]] : []),
+      ...ratingLines(part)
+        .slice(0, 2)
+        .flatMap((text) => breakLines(text, BODY, LINE))
+        .map((text) => [{ text, tone: 'grey' as const }]),
+    ];
     if (part.kind === 'joint' || lines.length === 0) continue;
     const round = part.kind === 'lamp' || part.kind === 'fan' || part.kind === 'appliance';
     const bar = isLongBar(part.kind);
     const kind = part.kind === 'neutral-bar' ? 'N' : part.kind === 'earth-bar' ? 'PE' : 'L';
-    const barLine = [[...(part.ref ? [{ text: part.ref, bold: true }] : []), { text: kind, bold: true }, ...ratingLines(part).map((text) => ({ text, tone: 'grey' as const }))]];
-    const barPlaces = [at(body.x - 120, body.y + body.height / 2, 'end', 'middle'), at(body.x, body.y + body.height / 2 - 250, 'start', 'bottom'), at(body.x + body.width + 120, body.y + body.height / 2, 'start', 'middle')];
-    keep(texts.parts, { owner: part.id, size: BODY, lines: bar ? barLine : lines, places: bar ? barPlaces : namePlaces(body, round) });
+    const barLine = [
+      [
+        ...(part.ref ? [{ text: part.ref, bold: true }] : []),
+        { text: kind, bold: true },
+        ...ratingLines(part).map((text) => ({ text, tone: 'grey' as const })),
+      ],
+    ];
+    const barPlaces = [
+      at(body.x - 120, body.y + body.height / 2, 'end', 'middle'),
+      at(body.x, body.y + body.height / 2 - 250, 'start', 'bottom'),
+      at(body.x + body.width + 120, body.y + body.height / 2, 'start', 'middle'),
+    ];
+    keep(texts.parts, {
+      owner: part.id,
+      size: BODY,
+      lines: bar ? barLine : lines,
+      places: bar ? barPlaces : namePlaces(body, round),
+    });
   }
   return texts;
 }
@@ -123,4 +195,5 @@ function nameBoard(ground: Ground, frame: SceneFrame): void {
   frame.texts = block ? blockTexts(block) : [];
 }
 
-const isAt = (end: readonly [string, string], part: string, mark: string): boolean => end[0] === part && end[1] === mark;
+const isAt = (end: readonly [string, string], part: string, mark: string): boolean =>
+  end[0] === part && end[1] === mark;

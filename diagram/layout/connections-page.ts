@@ -52,7 +52,9 @@ const placeIds = (doc: Installation): Set<string> => new Set(doc.places.map((pla
 export function connectionPages(doc: Installation): ConnectionPage[] {
   const ids = placeIds(doc);
   const held = new Set(doc.parts.map((part) => placeOf(ids, part)));
-  const places = [...doc.places].sort((a, b) => Number(b.kind === 'intake') - Number(a.kind === 'intake') || byCode(a.id, b.id));
+  const places = [...doc.places].sort(
+    (a, b) => Number(b.kind === 'intake') - Number(a.kind === 'intake') || byCode(a.id, b.id),
+  );
   const pages = places.filter((place) => held.has(place.id)).map((place) => ({ place: place.id, name: place.name }));
   return held.has('') ? [...pages, { place: '', name: 'No place yet' }] : pages;
 }
@@ -62,8 +64,14 @@ const CORE_ORDER = { L: 0, N: 1, E: 2 };
 /** Wires of the line tree, and whether the source lies at their far end as seen from a part. */
 function feedingWires(plan: OverviewPlan): Map<string, string> {
   const child = new Map<string, string>();
-  const roots = [...(plan.tree.mains ? [plan.tree.mains] : []), ...plan.tree.backups, ...plan.tree.batteries, ...plan.tree.loose];
-  for (const root of roots) for (const node of walk(root)) for (const wire of node.via?.wires ?? []) child.set(wire, node.part.id);
+  const roots = [
+    ...(plan.tree.mains ? [plan.tree.mains] : []),
+    ...plan.tree.backups,
+    ...plan.tree.batteries,
+    ...plan.tree.loose,
+  ];
+  for (const root of roots)
+    for (const node of walk(root)) for (const wire of node.via?.wires ?? []) child.set(wire, node.part.id);
   return child;
 }
 
@@ -118,16 +126,24 @@ export function readPage(doc: Installation, plan: OverviewPlan, place: string): 
     cores.sort((a, b) => CORE_ORDER[a.core] - CORE_ORDER[b.core] || byCode(a.wire.id, b.wire.id));
     const live = cores.find(({ core }) => core === 'L');
     // with the source at the far end it comes in
-    const outgoing = live !== undefined && feeds.get(live.wire.id) !== undefined && feeds.get(live.wire.id) !== live.here[0];
+    const outgoing =
+      live !== undefined && feeds.get(live.wire.id) !== undefined && feeds.get(live.wire.id) !== live.here[0];
     const head = live && plan.content.hanging.find((item) => item.head?.part.id === live.here[0]);
-    return { id, cores, outgoing, atFoot: outgoing && (head !== undefined || isBoardPart(byId.get(live.here[0]))), lines: cableLines(doc, plan, cores, outgoing) };
+    return {
+      id,
+      cores,
+      outgoing,
+      atFoot: outgoing && (head !== undefined || isBoardPart(byId.get(live.here[0]))),
+      lines: cableLines(doc, plan, cores, outgoing),
+    };
   });
   cables.sort((a, b) => byCode(a.id, b.id));
   return { place, parts: parts.sort(byDesignation), inner, cables };
 }
 
 const isBoardPart = (part: Part | undefined): boolean =>
-  part !== undefined && ['mcb', 'rcbo', 'rcd', 'isolator', 'fuse', 'inverter', 'line-bar', 'changeover'].includes(part.kind);
+  part !== undefined &&
+  ['mcb', 'rcbo', 'rcd', 'isolator', 'fuse', 'inverter', 'line-bar', 'changeover'].includes(part.kind);
 
 function cableLines(doc: Installation, plan: OverviewPlan, cores: readonly Core[], outgoing: boolean): string[] {
   const first = cores[0]!;

@@ -39,14 +39,29 @@ export function usedMarks(doc: Installation): Map<string, string[]> {
 }
 
 /** Kinds that stand on a board, over or under its bars. */
-export const ON_BOARD: ReadonlySet<Kind> = new Set<Kind>(['supply', 'meter', 'isolator', 'mcb', 'rcd', 'rcbo', 'fuse', 'spd', 'changeover', 'inverter', 'electrode', 'bond']);
+export const ON_BOARD: ReadonlySet<Kind> = new Set<Kind>([
+  'supply',
+  'meter',
+  'isolator',
+  'mcb',
+  'rcd',
+  'rcbo',
+  'fuse',
+  'spd',
+  'changeover',
+  'inverter',
+  'electrode',
+  'bond',
+]);
 
 export const isLongBar = (kind: Kind): boolean => isBar(kind) && kind !== 'joint';
 
 /** The size of a part on this face; a bar's length follows from its conductors and is given by the scene. */
 export function sizeOf(part: Part, marks: ReadonlyMap<string, readonly string[]>): { width: number; height: number } {
   const symbol = symbolFor(part, 'connections', marks.get(part.id)?.length);
-  return isBar(part.kind) ? { width: barLength(part.kind as BarKind, Math.max(2, marks.get(part.id)?.length ?? 2)), height: symbol.height } : { width: symbol.width, height: symbol.height };
+  return isBar(part.kind)
+    ? { width: barLength(part.kind as BarKind, Math.max(2, marks.get(part.id)?.length ?? 2)), height: symbol.height }
+    : { width: symbol.width, height: symbol.height };
 }
 
 /** One way's part of a room, before it has a place. */
@@ -106,7 +121,8 @@ class PagePlanner {
   private board(): void {
     const roots = [...(this.plan.tree.mains ? [this.plan.tree.mains] : []), ...this.plan.tree.backups];
     const groups = new Map<TreeNode, Hanging[]>();
-    for (const item of this.plan.content.hanging) if (item.head && this.own.has(item.head.part.id)) groups.set(item.from, [...(groups.get(item.from) ?? []), item]);
+    for (const item of this.plan.content.hanging)
+      if (item.head && this.own.has(item.head.part.id)) groups.set(item.from, [...(groups.get(item.from) ?? []), item]);
     const hasSide = this.page.parts.some((part) => part.kind === 'neutral-bar' || part.kind === 'earth-bar');
     if (groups.size === 0 && !hasSide) return;
     // devices that stand before one bar only belong over it
@@ -114,8 +130,11 @@ class PagePlanner {
     for (const from of groups.keys()) {
       const chain: TreeNode[] = [];
       for (let at = from.parent; at && at.parent && this.own.has(at.part.id); at = at.parent) {
-        const branches = at.parent.children.filter((child) => child.column && !feedsInverter(child) && child.part.kind !== 'spd').length;
-        if (branches < 2 && chain.length === 0 && at.parent.part.kind !== 'inverter' && this.own.has(at.parent.part.id)) break;
+        const branches = at.parent.children.filter(
+          (child) => child.column && !feedsInverter(child) && child.part.kind !== 'spd',
+        ).length;
+        if (branches < 2 && chain.length === 0 && at.parent.part.kind !== 'inverter' && this.own.has(at.parent.part.id))
+          break;
         if (isLongBar(at.part.kind)) break;
         chain.unshift(at);
         if (branches >= 2) break;
@@ -133,14 +152,17 @@ class PagePlanner {
         else trunk.push(node);
       }
     let y: number = TOP.first - m(8);
-    for (const node of trunk.filter((n) => !isLongBar(n.part.kind))) y = this.put(node.part, LEFT, y).bottom + (node.part.kind === 'supply' ? m(3) : m(4));
+    for (const node of trunk.filter((n) => !isLongBar(n.part.kind)))
+      y = this.put(node.part, LEFT, y).bottom + (node.part.kind === 'supply' ? m(3) : m(4));
     const trunkBottom = y;
     const right = trunk.length > 0 ? LEFT + m(22) : LEFT;
     // rows, from above: bars of the column, devices over the bars, earth, neutral, line, ways
     const trunkBars = trunk.filter((n) => isLongBar(n.part.kind));
     const chainRows = Math.max(0, ...[...chains.values()].map((chain) => chain.length));
     const neutralOf = this.neutralBars(groups, chains);
-    const above = [...this.page.parts].filter((part) => part.kind === 'neutral-bar' && ![...neutralOf.values()].flat().includes(part));
+    const above = [...this.page.parts].filter(
+      (part) => part.kind === 'neutral-bar' && ![...neutralOf.values()].flat().includes(part),
+    );
     const sideRow = side.length > 0 ? m(16) : 0;
     let row = Math.max(TOP.first, trunkBottom - m(6) - (above.length + trunkBars.length) * m(6) - sideRow);
     for (const part of above) {
@@ -165,7 +187,8 @@ class PagePlanner {
     const apart = this.servesOthers(groups, neutralOf);
     const listed = [...neutralOf.values()];
     const neutralRows = Math.max(1, apart ? listed.flat().length : Math.max(...listed.map((list) => list.length), 0));
-    const rowsBefore = (from: TreeNode): number => (apart ? [...neutralOf].slice(0, [...neutralOf.keys()].indexOf(from)).flatMap(([, list]) => list).length : 0);
+    const rowsBefore = (from: TreeNode): number =>
+      apart ? [...neutralOf].slice(0, [...neutralOf.keys()].indexOf(from)).flatMap(([, list]) => list).length : 0;
     row += m(6) * neutralRows;
     const lineRow = row;
     const ways = lineRow + m(7);
@@ -174,18 +197,28 @@ class PagePlanner {
       const start = x;
       let cy = chainTop;
       for (const node of chains.get(from)!) cy = this.put(node.part, x, cy).bottom + m(4);
-      (neutralOf.get(from) ?? []).forEach((part, i) => this.put(part, start, neutralRow + m(6) * (rowsBefore(from) + i)));
+      (neutralOf.get(from) ?? []).forEach((part, i) =>
+        this.put(part, start, neutralRow + m(6) * (rowsBefore(from) + i)),
+      );
       if (this.here(from)) this.put(from.part, start, lineRow);
       let slot = start + m(4);
       for (const item of [...items].sort((a, b) => a.order - b.order)) {
         const { right: end } = this.put(item.head!.part, slot, ways);
         slot = end + m(1) + FOOT_CORE + FOOT_GAP;
       }
-      const longest = Math.max(0, ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => this.marks.get(part.id)?.length ?? 0));
+      const longest = Math.max(
+        0,
+        ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => this.marks.get(part.id)?.length ?? 0),
+      );
       const inRoom = Math.max(0, ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => this.ledAway(part)));
       x = Math.max(slot + inRoom * m(3), start + m(16), start + m(8) + longest * m(3)) + m(10);
     }
-    const earths = Math.max(0, ...this.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => this.marks.get(part.id)?.length ?? 0));
+    const earths = Math.max(
+      0,
+      ...this.page.parts
+        .filter((part) => part.kind === 'earth-bar')
+        .map((part) => this.marks.get(part.id)?.length ?? 0),
+    );
     x = Math.max(x, right + m(12) + earths * m(3));
     for (const part of this.page.parts) {
       if (part.kind !== 'electrode' && part.kind !== 'bond') continue;
@@ -193,35 +226,57 @@ class PagePlanner {
       x += m(9);
     }
     this.bottom += FOOT.brace + m(8);
-    this.x = x + m(8) + m(3) * Math.max(0, ...this.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => this.ledAway(part)));
+    this.x =
+      x +
+      m(8) +
+      m(3) *
+        Math.max(0, ...this.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => this.ledAway(part)));
   }
 
   /** Cores of a bar that go to a load or joint of the same place: their terminals stand beyond those of the ways. */
   private ledAway(bar: Part): number {
-    return this.page.inner.filter((wire) => [wire.from[0], wire.to[0]].includes(bar.id) && [wire.from[0], wire.to[0]].some((id) => id !== bar.id && !ON_BOARD.has(this.plan.graph.byId.get(id)!.kind))).length;
+    return this.page.inner.filter(
+      (wire) =>
+        [wire.from[0], wire.to[0]].includes(bar.id) &&
+        [wire.from[0], wire.to[0]].some((id) => id !== bar.id && !ON_BOARD.has(this.plan.graph.byId.get(id)!.kind)),
+    ).length;
   }
 
   /** Neutral bars by the group whose device feeds them. */
-  private neutralBars(groups: ReadonlyMap<TreeNode, unknown>, chains: ReadonlyMap<TreeNode, readonly TreeNode[]>): Map<TreeNode, Part[]> {
+  private neutralBars(
+    groups: ReadonlyMap<TreeNode, unknown>,
+    chains: ReadonlyMap<TreeNode, readonly TreeNode[]>,
+  ): Map<TreeNode, Part[]> {
     const found = new Map<TreeNode, Part[]>();
     for (const from of groups.keys()) {
       const devices = new Set<string>();
       for (let at: TreeNode | null = from; at; at = at.parent) {
         devices.add(at.part.id);
-        if (at !== from && (chains.get(from)!.length === 0 || at === chains.get(from)![0]) && !isLongBar(at.part.kind)) break;
+        if (at !== from && (chains.get(from)!.length === 0 || at === chains.get(from)![0]) && !isLongBar(at.part.kind))
+          break;
       }
-      const own = this.page.parts.filter((part) => part.kind === 'neutral-bar' && devices.has(this.plan.graph.neutralFrom.get(part.id) ?? ''));
-      found.set(from, own.filter((part) => ![...found.values()].flat().includes(part)));
+      const own = this.page.parts.filter(
+        (part) => part.kind === 'neutral-bar' && devices.has(this.plan.graph.neutralFrom.get(part.id) ?? ''),
+      );
+      found.set(
+        from,
+        own.filter((part) => ![...found.values()].flat().includes(part)),
+      );
     }
     return found;
   }
 
   /** True when a neutral bar has a core in the cable of another group's way. */
-  private servesOthers(groups: ReadonlyMap<TreeNode, readonly Hanging[]>, neutralOf: ReadonlyMap<TreeNode, readonly Part[]>): boolean {
+  private servesOthers(
+    groups: ReadonlyMap<TreeNode, readonly Hanging[]>,
+    neutralOf: ReadonlyMap<TreeNode, readonly Part[]>,
+  ): boolean {
     const groupOf = new Map<string, TreeNode>();
     for (const [from, items] of groups) for (const item of items) groupOf.set(item.head!.part.id, from);
     for (const [from, bars] of neutralOf) for (const bar of bars) groupOf.set(bar.id, from);
-    return this.page.cables.some((cable) => new Set(cable.cores.flatMap((core) => groupOf.get(core.here[0]) ?? [])).size > 1);
+    return this.page.cables.some(
+      (cable) => new Set(cable.cores.flatMap((core) => groupOf.get(core.here[0]) ?? [])).size > 1,
+    );
   }
 
   /** Inverter, battery and the devices between: the inverter in the middle, what it feeds below, the battery at its right. */
@@ -229,7 +284,11 @@ class PagePlanner {
     this.plan.tree.backups.forEach((root, i) => {
       const out = [...walk(root)].filter((node) => node.column && this.here(node));
       const battery = [...walk(this.plan.tree.batteries[i]!)].slice(1).filter((node) => this.here(node));
-      const before = this.plan.tree.mains ? [...walk(this.plan.tree.mains)].filter((node) => node.column && this.here(node) && feedsInverter(node) && node.part.id !== root.part.id) : [];
+      const before = this.plan.tree.mains
+        ? [...walk(this.plan.tree.mains)].filter(
+            (node) => node.column && this.here(node) && feedsInverter(node) && node.part.id !== root.part.id,
+          )
+        : [];
       if (out.length + battery.length + before.length === 0) return;
       let y: number = TOP.first;
       let right = this.x;
@@ -251,7 +310,10 @@ class PagePlanner {
   private rooms(): void {
     const entries = this.plan.content.rooms
       .flatMap((room) => room.entries)
-      .map((entry) => ({ entry, nodes: [...walk(entry.node)].filter((node) => this.here(node) && this.plan.content.entryOf.get(node) === entry) }))
+      .map((entry) => ({
+        entry,
+        nodes: [...walk(entry.node)].filter((node) => this.here(node) && this.plan.content.entryOf.get(node) === entry),
+      }))
       .filter(({ nodes }) => nodes.length > 0);
     const joints = this.jointsByEntry(entries.map(({ nodes }) => nodes));
     const blocks = entries.map(({ entry, nodes }, i) => this.block(entry, nodes, joints[i]!));
@@ -281,9 +343,12 @@ class PagePlanner {
     const control = [...rows.values()].filter((row) => row < LOADS);
     const hasRail = joints.length > 0 || control.includes(0);
     const most = Math.max(0, ...control);
-    const top = (row: number): number => TOP.first + (row > 0 && hasRail ? m(8) : 0) + Math.max(0, row - 1) * (m(10) + ROW_GAP);
+    const top = (row: number): number =>
+      TOP.first + (row > 0 && hasRail ? m(8) : 0) + Math.max(0, row - 1) * (m(10) + ROW_GAP);
     const controls = control.length > 0 || joints.length > 0;
-    const loadsTop = controls ? top(Math.max(1, most + 1)) + m(4) + Math.min(12, joints.length * 2 + nodes.length) * MODULE : 0;
+    const loadsTop = controls
+      ? top(Math.max(1, most + 1)) + m(4) + Math.min(12, joints.length * 2 + nodes.length) * MODULE
+      : 0;
     return { columns, rows, joints, top, controls, loadsTop, way: entry.way !== undefined };
   }
 
@@ -303,7 +368,9 @@ class PagePlanner {
     // the cables that go on to other rooms leave here
     const own = new Set([...columns.flat().map((node) => node.part.id), ...joints.map((part) => part.id)]);
     for (const cable of this.page.cables)
-      if (cable.outgoing && !cable.atFoot && cable.cores.some((core) => own.has(core.here[0]))) x += Math.max(CORE_PITCH * cable.cores.length + m(2), Math.ceil(wordsWidth(cable) / MODULE) * MODULE) + CABLE_GAP;
+      if (cable.outgoing && !cable.atFoot && cable.cores.some((core) => own.has(core.here[0])))
+        x +=
+          Math.max(CORE_PITCH * cable.cores.length + m(2), Math.ceil(wordsWidth(cable) / MODULE) * MODULE) + CABLE_GAP;
     this.x = x + m(8);
   }
 
@@ -315,8 +382,14 @@ class PagePlanner {
   private jointsByEntry(entries: readonly (readonly TreeNode[])[]): Part[][] {
     const taken = new Set<string>();
     const found = entries.map((): Part[] => []);
-    const cablesOf = (id: string): string[] => this.page.cables.filter((cable) => cable.cores.some((core) => core.here[0] === id)).map((cable) => cable.id);
-    const joints = this.page.parts.filter((part) => part.kind === 'joint' && !this.positions.has(part.id) && !entries.some((nodes) => nodes.some((node) => node.part.id === part.id)));
+    const cablesOf = (id: string): string[] =>
+      this.page.cables.filter((cable) => cable.cores.some((core) => core.here[0] === id)).map((cable) => cable.id);
+    const joints = this.page.parts.filter(
+      (part) =>
+        part.kind === 'joint' &&
+        !this.positions.has(part.id) &&
+        !entries.some((nodes) => nodes.some((node) => node.part.id === part.id)),
+    );
     entries.forEach((nodes, i) => {
       const own = new Set(nodes.flatMap((node) => cablesOf(node.part.id)));
       for (const joint of joints)
@@ -327,10 +400,18 @@ class PagePlanner {
     });
     entries.forEach((nodes, i) => {
       const reached = new Set([...nodes.map((node) => node.part.id), ...found[i]!.map((part) => part.id)]);
-      for (let grew = true; grew; ) {
+      for (let grew = true; grew;) {
         grew = false;
         for (const joint of joints) {
-          if (taken.has(joint.id) || !this.page.inner.some((wire) => (wire.from[0] === joint.id && reached.has(wire.to[0])) || (wire.to[0] === joint.id && reached.has(wire.from[0])))) continue;
+          if (
+            taken.has(joint.id) ||
+            !this.page.inner.some(
+              (wire) =>
+                (wire.from[0] === joint.id && reached.has(wire.to[0])) ||
+                (wire.to[0] === joint.id && reached.has(wire.from[0])),
+            )
+          )
+            continue;
           taken.add(joint.id);
           reached.add(joint.id);
           found[i]!.push(joint);
@@ -338,7 +419,12 @@ class PagePlanner {
         }
       }
     });
-    const isEarth = (part: Part): number => Number([...this.page.inner, ...this.page.cables.flatMap((c) => c.cores.map((core) => core.wire))].some((wire) => (wire.from[0] === part.id || wire.to[0] === part.id) && coreOf(wire.role) === 'E'));
+    const isEarth = (part: Part): number =>
+      Number(
+        [...this.page.inner, ...this.page.cables.flatMap((c) => c.cores.map((core) => core.wire))].some(
+          (wire) => (wire.from[0] === part.id || wire.to[0] === part.id) && coreOf(wire.role) === 'E',
+        ),
+      );
     return found.map((list) => list.sort((a, b) => isEarth(a) - isEarth(b)));
   }
 
@@ -377,4 +463,5 @@ function leavesWhereFed(parent: TreeNode, child: TreeNode): boolean {
 }
 
 /** Positions of all parts of a page that the layout would choose. */
-export const planPage = (doc: Installation, plan: OverviewPlan, page: Page): Map<string, Position> => new PagePlanner(doc, plan, page).run();
+export const planPage = (doc: Installation, plan: OverviewPlan, page: Page): Map<string, Position> =>
+  new PagePlanner(doc, plan, page).run();

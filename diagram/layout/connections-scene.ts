@@ -27,13 +27,24 @@ export { connectionPages, type ConnectionPage } from './connections-page';
 export function connectionPositions(doc: Installation): Map<string, Position> {
   const plan = planOverview(doc);
   const all = new Map<string, Position>();
-  for (const { place } of connectionPages(doc)) for (const [id, at] of positionsOf(doc, readPage(doc, plan, place), planPage(doc, plan, readPage(doc, plan, place)))) all.set(id, at);
+  for (const { place } of connectionPages(doc))
+    for (const [id, at] of positionsOf(
+      doc,
+      readPage(doc, plan, place),
+      planPage(doc, plan, readPage(doc, plan, place)),
+    ))
+      all.set(id, at);
   return all;
 }
 
 function positionsOf(doc: Installation, page: Page, planned: ReadonlyMap<string, Position>): Map<string, Position> {
-  const near = (id: string): string[] => page.inner.flatMap((wire) => (wire.from[0] === id ? [wire.to[0]] : wire.to[0] === id ? [wire.from[0]] : []));
-  const size = (id: string) => symbolFor(page.parts.find((part) => part.id === id)!, 'connections');
+  const near = (id: string): string[] =>
+    page.inner.flatMap((wire) => (wire.from[0] === id ? [wire.to[0]] : wire.to[0] === id ? [wire.from[0]] : []));
+  const size = (id: string) =>
+    symbolFor(
+      page.parts.find((part) => part.id === id)!,
+      'connections',
+    );
   return fillIn(planned, doc.sheet?.connections ?? {}, near, size);
 }
 
@@ -64,8 +75,22 @@ export function connectionsScene(doc: Installation, place?: string): Scene {
   const parts = page.parts.map((part): ScenePart => {
     const body = bodies.get(part.id)!;
     const feed = feeds.parts.get(part.id) ?? 'none';
-    const symbol = isBar(part.kind) ? barSymbol(part.kind as BarKind, 'connections', body.width, feed === 'backup' && part.kind === 'line-bar').id : symbolFor(part, 'connections').id;
-    return { id: part.id, kind: part.kind, symbol, turn: body.turn, x: body.x, y: body.y, width: body.width, height: body.height, feed, terminals: body.terminals, texts: texts.parts.get(part.id) ?? [] };
+    const symbol = isBar(part.kind)
+      ? barSymbol(part.kind as BarKind, 'connections', body.width, feed === 'backup' && part.kind === 'line-bar').id
+      : symbolFor(part, 'connections').id;
+    return {
+      id: part.id,
+      kind: part.kind,
+      symbol,
+      turn: body.turn,
+      x: body.x,
+      y: body.y,
+      width: body.width,
+      height: body.height,
+      feed,
+      terminals: body.terminals,
+      texts: texts.parts.get(part.id) ?? [],
+    };
   });
   const run = (wire: Wire): SceneRun => ({
     id: `wire:${wire.id}`,
@@ -111,7 +136,12 @@ interface CoreRoutes {
 }
 
 /** Every core for itself: cores meet at terminals and nowhere else. */
-function routeCores(page: Page, bodies: ReadonlyMap<string, Body>, cables: readonly PlacedCable[], feeds: Feeds): CoreRoutes {
+function routeCores(
+  page: Page,
+  bodies: ReadonlyMap<string, Body>,
+  cables: readonly PlacedCable[],
+  feeds: Feeds,
+): CoreRoutes {
   const parts = new Map(page.parts.map((part) => [part.id, part]));
   const stubs = new Map(cables.flatMap((cable) => cable.stubs.map((stub) => [stub.core.wire.id, stub] as const)));
   const at = (end: readonly [string, string], stub?: Stub): RouteEnd | null => {
@@ -124,19 +154,39 @@ function routeCores(page: Page, bodies: ReadonlyMap<string, Body>, cables: reado
     }
     return stub ? { part: `stub ${stub.core.wire.id}`, x: stub.x, y: stub.y, sides: [stub.side] } : null;
   };
-  const requests = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map((wire): RouteRequest => {
-    const stub = stubs.get(wire.id);
-    const from = at(wire.from, stub)!;
-    const to = at(wire.to, stub)!;
-    const late = [wire.from, wire.to].some(([id]) => parts.get(id)?.kind === 'spd');
-    return { id: wire.id, ...(late && { late }), strand: wire.id, family: wire.id, net: wire.id, from, to, backup: feeds.wires.get(wire.id) === 'backup' };
+  const requests = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map(
+    (wire): RouteRequest => {
+      const stub = stubs.get(wire.id);
+      const from = at(wire.from, stub)!;
+      const to = at(wire.to, stub)!;
+      const late = [wire.from, wire.to].some(([id]) => parts.get(id)?.kind === 'spd');
+      return {
+        id: wire.id,
+        ...(late && { late }),
+        strand: wire.id,
+        family: wire.id,
+        net: wire.id,
+        from,
+        to,
+        backup: feeds.wires.get(wire.id) === 'backup',
+      };
+    },
+  );
+  const obstacles = [...bodies].map(([id, body]): Obstacle => ({
+    id,
+    x: body.x,
+    y: body.y,
+    width: body.width,
+    height: body.height,
+    ...(isLongBar(parts.get(id)!.kind) && { crossable: true }),
+  }));
+  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], namesOfCores(cables), {
+    spread: true,
+    pins: [...bodies.values()].flatMap((body) => body.terminals),
   });
-  const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height, ...(isLongBar(parts.get(id)!.kind) && { crossable: true }) }));
-  const { points } = routeAll(requests, [...obstacles, ...edgesOfPage(requests, cables)], namesOfCores(cables), { spread: true, pins: [...bodies.values()].flatMap((body) => body.terminals) });
   const paths = requests.map(({ id }) => ({ id, net: id, points: points.get(id)! }));
   return { points, hops: findHops(paths) };
 }
-
 
 /** Nothing is led through the names of the cables: above the cores at the head, below those at the foot. */
 function edgesOfPage(requests: readonly RouteRequest[], cables: readonly PlacedCable[]): Obstacle[] {
@@ -152,5 +202,7 @@ function edgesOfPage(requests: readonly RouteRequest[], cables: readonly PlacedC
 
 /** Where the cores' names stand: runs turn below them where they can. */
 function namesOfCores(cables: readonly PlacedCable[]): Soft[] {
-  return cables.flatMap(({ cable, stubs, left, right }): Soft[] => (cable.atFoot ? [] : [{ x: left - m(4), y: stubs[0]!.y + 1, width: right - left + m(8), height: m(4), cost: 1.5 }]));
+  return cables.flatMap(({ cable, stubs, left, right }): Soft[] =>
+    cable.atFoot ? [] : [{ x: left - m(4), y: stubs[0]!.y + 1, width: right - left + m(8), height: m(4), cost: 1.5 }],
+  );
 }

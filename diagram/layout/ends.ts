@@ -26,7 +26,8 @@ export interface Body {
   terminals: SceneTerminal[];
 }
 
-const isBar = (part: Part): part is Part & { kind: BarKind } => part.kind === 'line-bar' || part.kind === 'neutral-bar' || part.kind === 'earth-bar';
+const isBar = (part: Part): part is Part & { kind: BarKind } =>
+  part.kind === 'line-bar' || part.kind === 'neutral-bar' || part.kind === 'earth-bar';
 const markAt = (run: OverviewRun, part: string): string => (run.from[0] === part ? run.from[1] : run.to[1]);
 export const endKey = (run: OverviewRun, part: string): string => `${run.id} ${part}`;
 
@@ -53,7 +54,10 @@ function fixedEnd(part: Part, body: Body, mark: string, towards: number): RunEnd
     return { part: part.id, x: body.x + MODULE, y, side: part.kind === 'plug' ? 'up' : 'down', any: false };
   }
   const terminal = body.terminals.find((t) => t.mark === mark) ?? body.terminals[0];
-  const middle = { x: body.x + Math.round(body.width / 2 / MODULE) * MODULE, y: body.y + Math.round(body.height / 2 / MODULE) * MODULE };
+  const middle = {
+    x: body.x + Math.round(body.width / 2 / MODULE) * MODULE,
+    y: body.y + Math.round(body.height / 2 / MODULE) * MODULE,
+  };
   if (part.kind === 'joint' || !terminal) return { part: part.id, ...middle, side: 'up', any: part.kind === 'joint' };
   // strappers leave the dot on the side where the other switch is
   const side = part.kind === 'switch-2way' && mark !== 'C' ? (towards < terminal.x ? 'left' : 'right') : terminal.side;
@@ -77,11 +81,18 @@ export function placeEnds(graph: OverviewGraph, positions: ReadonlyMap<string, P
       const body = bodies.get(id);
       if (body) ends.set(endKey(run, id), fixedEnd(part, body, markAt(run, id), middleOf(otherEnd(run, id)[0]).x));
     }
-  for (const [id, part] of graph.parts) if (isBar(part)) bodies.set(id, barBody(part, positions.get(id)!, graph, ends, middleOf));
+  for (const [id, part] of graph.parts)
+    if (isBar(part)) bodies.set(id, barBody(part, positions.get(id)!, graph, ends, middleOf));
   return { bodies, ends };
 }
 
-function barBody(part: Part, at: Position, graph: OverviewGraph, ends: Map<string, RunEnd>, middleOf: (id: string) => { x: number; y: number }): Body {
+function barBody(
+  part: Part,
+  at: Position,
+  graph: OverviewGraph,
+  ends: Map<string, RunEnd>,
+  middleOf: (id: string) => { x: number; y: number },
+): Body {
   const axis = at.y + BAR_AXIS;
   const runs = graph.at.get(part.id) ?? [];
   const hanging: { run: OverviewRun; x: number; side: Side }[] = [];
@@ -96,7 +107,10 @@ function barBody(part: Part, at: Position, graph: OverviewGraph, ends: Map<strin
   }
   const xs = hanging.map(({ x }) => x);
   const left = Math.min(at.x, ...xs.map((x) => x - 2 * MODULE));
-  const right = Math.max(at.x + (runs.length > 0 && part.kind === 'line-bar' ? 4 * MODULE : SHORT_BAR), ...xs.map((x) => x + 2 * MODULE));
+  const right = Math.max(
+    at.x + (runs.length > 0 && part.kind === 'line-bar' ? 4 * MODULE : SHORT_BAR),
+    ...xs.map((x) => x + 2 * MODULE),
+  );
   const terminals: SceneTerminal[] = [];
   const note = (run: OverviewRun, x: number, side: Side) => {
     ends.set(endKey(run, part.id), { part: part.id, x, y: axis, side, any: false });
@@ -104,7 +118,8 @@ function barBody(part: Part, at: Position, graph: OverviewGraph, ends: Map<strin
     if (!terminals.some((t) => t.mark === mark)) terminals.push({ mark, x, y: axis, side });
   };
   for (const { run, x, side } of hanging) note(run, x, side);
-  for (const { run, x } of beside) note(run, x > (left + right) / 2 ? right : left, x > (left + right) / 2 ? 'right' : 'left');
+  for (const { run, x } of beside)
+    note(run, x > (left + right) / 2 ? right : left, x > (left + right) / 2 ? 'right' : 'left');
   let free = 1;
   while (terminals.some((t) => t.mark === String(free))) free++;
   terminals.push({ mark: String(free), x: right - MODULE, y: axis, side: 'down' });

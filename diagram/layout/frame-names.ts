@@ -14,7 +14,12 @@ export function nameFrame(ground: Ground, frame: SceneFrame): void {
   frame.texts = block ? blockTexts(block) : [];
 }
 
-const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: Anchor['vertical']): Anchor => ({ x, y, horizontal, vertical });
+const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: Anchor['vertical']): Anchor => ({
+  x,
+  y,
+  horizontal,
+  vertical,
+});
 
 /** At the foot: in one line, set wide or close, else in two. */
 function roomForms(frame: SceneFrame, name: string): Label[] {
@@ -28,7 +33,13 @@ function roomForms(frame: SceneFrame, name: string): Label[] {
     places,
     ...(spaced && { spaced }),
   });
-  return [form([name], BODY, true), form([name], BODY), form(halves(name), BODY), form(halves(name), SMALL), form([name], BODY)];
+  return [
+    form([name], BODY, true),
+    form([name], BODY),
+    form(halves(name), BODY),
+    form(halves(name), SMALL),
+    form([name], BODY),
+  ];
 }
 
 /** Over the box at the right, else at another corner. */

@@ -38,7 +38,8 @@ const CELL = 2000;
 /** How far a label may stray when all its places are taken, in steps of a line. */
 const STRAYS = [1, 2, 3, 4, 6, 8] as const;
 
-const lineWidth = (spans: readonly Span[], size: number, spaced = false): number => textWidth(spans.map((span) => span.text).join(' '), size, spaced);
+const lineWidth = (spans: readonly Span[], size: number, spaced = false): number =>
+  textWidth(spans.map((span) => span.text).join(' '), size, spaced);
 
 export interface Block extends Box {
   label: Label;
@@ -82,7 +83,15 @@ export class Ground {
   addPath(points: readonly Point[], half = 30, owner?: string): void {
     for (let i = 0; i + 1 < points.length; i++) {
       const [a, b] = [points[i]!, points[i + 1]!];
-      this.add({ x: Math.min(a.x, b.x) - half, y: Math.min(a.y, b.y) - half, width: Math.abs(a.x - b.x) + 2 * half, height: Math.abs(a.y - b.y) + 2 * half }, owner);
+      this.add(
+        {
+          x: Math.min(a.x, b.x) - half,
+          y: Math.min(a.y, b.y) - half,
+          width: Math.abs(a.x - b.x) + 2 * half,
+          height: Math.abs(a.y - b.y) + 2 * half,
+        },
+        owner,
+      );
     }
   }
 
@@ -125,7 +134,15 @@ export function blockTexts(block: Block): SceneText[] {
     return spans.map((span): SceneText => {
       const at = x;
       x += textWidth(`${span.text} `, label.size, label.spaced);
-      return { text: span.text, x: at, y, size: label.size, ...(span.bold && { bold: true }), ...(span.tone === 'grey' && { tone: 'grey' as const }), ...(label.spaced && { spaced: true }) };
+      return {
+        text: span.text,
+        x: at,
+        y,
+        size: label.size,
+        ...(span.bold && { bold: true }),
+        ...(span.tone === 'grey' && { tone: 'grey' as const }),
+        ...(label.spaced && { spaced: true }),
+      };
     });
   });
 }
@@ -134,7 +151,16 @@ export function blockTexts(block: Block): SceneText[] {
 function* strays(places: readonly Anchor[], step: number): Generator<Anchor> {
   for (const far of STRAYS)
     for (const place of places)
-      for (const [dx, dy] of [[0, -1], [0, 1], [1, 0], [-1, 0], [1, -1], [1, 1], [-1, -1], [-1, 1]] as const)
+      for (const [dx, dy] of [
+        [0, -1],
+        [0, 1],
+        [1, 0],
+        [-1, 0],
+        [1, -1],
+        [1, 1],
+        [-1, -1],
+        [-1, 1],
+      ] as const)
         yield { ...place, x: place.x + dx * far * step, y: place.y + dy * far * step };
 }
 

@@ -13,7 +13,11 @@ import type { Scene, SceneFrame } from './scene';
 const OFF = MODULE / 2;
 
 /** How far the parts of a zone stand from where the plan would put them: the commonest shift. */
-function shiftOf(plan: OverviewPlan, positions: ReadonlyMap<string, Position>, ids: Iterable<string>): { x: number; y: number; whole: boolean } {
+function shiftOf(
+  plan: OverviewPlan,
+  positions: ReadonlyMap<string, Position>,
+  ids: Iterable<string>,
+): { x: number; y: number; whole: boolean } {
   const tally = new Map<string, { x: number; y: number; count: number }>();
   let all = 0;
   for (const id of [...ids].sort()) {
@@ -39,9 +43,27 @@ function bounds(boxes: readonly Box[]): { left: number; right: number; top: numb
 }
 
 /** Kinds that stand in a switchboard's box. */
-const BOARDED = new Set(['joint', 'switch', 'switch-2way', 'switch-cross', 'switch-2pole', 'mcb', 'rcbo', 'rcd', 'fuse', 'isolator']);
+const BOARDED = new Set([
+  'joint',
+  'switch',
+  'switch-2way',
+  'switch-cross',
+  'switch-2pole',
+  'mcb',
+  'rcbo',
+  'rcd',
+  'fuse',
+  'isolator',
+]);
 
-function roomFrame(plan: OverviewPlan, positions: ReadonlyMap<string, Position>, bodies: ReadonlyMap<string, Body>, place: Place, ids: readonly string[], roomsY: number): SceneFrame[] {
+function roomFrame(
+  plan: OverviewPlan,
+  positions: ReadonlyMap<string, Position>,
+  bodies: ReadonlyMap<string, Body>,
+  place: Place,
+  ids: readonly string[],
+  roomsY: number,
+): SceneFrame[] {
   const shift = shiftOf(plan, positions, ids);
   const span = plan.rooms.get(place.id);
   const own = bounds(ids.map((id) => bodies.get(id)!));
@@ -50,7 +72,9 @@ function roomFrame(plan: OverviewPlan, positions: ReadonlyMap<string, Position>,
   const bottom = Math.max(plan.levels.rooms + roomsY + ROOM.height, own.bottom + m(7));
   const name = place.name.toUpperCase();
   const left = planned?.left ?? Math.floor((own.left - ROOM.side) / MODULE) * MODULE;
-  const right = planned?.right ?? Math.max(Math.ceil((own.right + ROOM.side) / MODULE) * MODULE, left + textWidth(name, BODY, true) + m(2));
+  const right =
+    planned?.right ??
+    Math.max(Math.ceil((own.right + ROOM.side) / MODULE) * MODULE, left + textWidth(name, BODY, true) + m(2));
   const frame: SceneFrame = {
     id: `room:${place.id}`,
     kind: 'room',
@@ -65,8 +89,13 @@ function roomFrame(plan: OverviewPlan, positions: ReadonlyMap<string, Position>,
   if (boarded.length === 0) return [frame];
   const held = bounds(boarded.map((id) => bodies.get(id)!));
   const boxTop = Math.min(plan.levels.rooms + roomsY + ROOM.box + OFF, held.top - OFF);
-  const boxBottom = Math.max(plan.levels.rooms + roomsY + ROOM.boxBottom + OFF, held.bottom > plan.levels.rooms + roomsY + ROOM.joints ? 0 : held.bottom + OFF);
-  const boards = [...new Set(boarded.map((id) => plan.graph.byId.get(id)!.board).filter((board) => board !== undefined))].sort();
+  const boxBottom = Math.max(
+    plan.levels.rooms + roomsY + ROOM.boxBottom + OFF,
+    held.bottom > plan.levels.rooms + roomsY + ROOM.joints ? 0 : held.bottom + OFF,
+  );
+  const boards = [
+    ...new Set(boarded.map((id) => plan.graph.byId.get(id)!.board).filter((board) => board !== undefined)),
+  ].sort();
   const board: SceneFrame = {
     id: `board:${place.id}`,
     kind: 'switchboard',
@@ -75,13 +104,30 @@ function roomFrame(plan: OverviewPlan, positions: ReadonlyMap<string, Position>,
     y: boxTop,
     width: frame.width - 2 * MODULE,
     height: boxBottom - boxTop,
-    texts: boards.length === 0 ? [] : [{ text: boards.join(', '), x: frame.x + frame.width - MODULE, y: boxTop - 120, size: BODY, tone: 'grey', anchor: 'end' }],
+    texts:
+      boards.length === 0
+        ? []
+        : [
+            {
+              text: boards.join(', '),
+              x: frame.x + frame.width - MODULE,
+              y: boxTop - 120,
+              size: BODY,
+              tone: 'grey',
+              anchor: 'end',
+            },
+          ],
   };
   return [frame, board];
 }
 
 /** Rooms with their switchboards, in the order of the document's places. */
-export function roomFrames(doc: Installation, plan: OverviewPlan, positions: ReadonlyMap<string, Position>, bodies: ReadonlyMap<string, Body>): SceneFrame[] {
+export function roomFrames(
+  doc: Installation,
+  plan: OverviewPlan,
+  positions: ReadonlyMap<string, Position>,
+  bodies: ReadonlyMap<string, Body>,
+): SceneFrame[] {
   const inRoom = new Map<string, string[]>();
   for (const [id, place] of plan.roomOf) inRoom.set(place, [...(inRoom.get(place) ?? []), id]);
   const { y } = shiftOf(plan, positions, plan.roomOf.keys());
@@ -100,7 +146,9 @@ export interface Levels {
 
 /** The plan's levels, moved with the parts that stand on them. */
 export function actualLevels(plan: OverviewPlan, positions: ReadonlyMap<string, Position>): Levels {
-  const bars = [...plan.graph.parts.values()].filter((part) => part.kind === 'line-bar' && !plan.backupBoard.has(part.id) && !plan.lane.has(part.id)).map((part) => part.id);
+  const bars = [...plan.graph.parts.values()]
+    .filter((part) => part.kind === 'line-bar' && !plan.backupBoard.has(part.id) && !plan.lane.has(part.id))
+    .map((part) => part.id);
   const rooms = shiftOf(plan, positions, plan.roomOf.keys()).y;
   const foot = plan.backupBoard.size > 0 ? shiftOf(plan, positions, plan.backupBoard).y : rooms;
   return {
@@ -112,23 +160,43 @@ export function actualLevels(plan: OverviewPlan, positions: ReadonlyMap<string, 
 }
 
 /** Names of the bands and their upper edges, in the order of current. */
-export function bands(plan: OverviewPlan, bodies: ReadonlyMap<string, Body>, levels: Levels, bottom: number): Scene['bands'] {
+export function bands(
+  plan: OverviewPlan,
+  bodies: ReadonlyMap<string, Body>,
+  levels: Levels,
+  bottom: number,
+): Scene['bands'] {
   const meter = [...plan.graph.parts.values()].find((part) => part.kind === 'meter');
   const at = meter && bodies.get(meter.id);
   const edges: [name: string, y: number][] = [
     ['SUPPLY', 0],
-    ...(at ? ([['METER', at.y - MODULE - OFF], ['MAIN PROTECTION', at.y + at.height + MODULE + OFF]] as [string, number][]) : []),
+    ...(at
+      ? ([
+          ['METER', at.y - MODULE - OFF],
+          ['MAIN PROTECTION', at.y + at.height + MODULE + OFF],
+        ] as [string, number][])
+      : []),
     ['BOARD', levels.bar - m(3) - OFF],
     ['ROOMS', levels.rooms - MODULE - OFF],
     ...(plan.backupBoard.size > 0 ? ([['BACKUP BOARD', levels.foot + MODULE + OFF]] as [string, number][]) : []),
-    ...(plan.tray.length > 0 ? ([['NOT PLACED', (plan.backupBoard.size > 0 ? levels.foot + FOOT.height : levels.foot + m(2)) + OFF]] as [string, number][]) : []),
+    ...(plan.tray.length > 0
+      ? ([['NOT PLACED', (plan.backupBoard.size > 0 ? levels.foot + FOOT.height : levels.foot + m(2)) + OFF]] as [
+          string,
+          number,
+        ][])
+      : []),
   ];
   const sorted = edges.filter(([, y], i) => i === 0 || y > edges[i - 1]![1]);
   return sorted.map(([name, y], i) => ({ name, y, height: (sorted[i + 1]?.[1] ?? bottom) - y }));
 }
 
 /** The ground of the backup: its source at the right, its feed down the right edge, its board along the foot. */
-export function lanes(plan: OverviewPlan, bodies: ReadonlyMap<string, Body>, levels: Levels, right: number): SceneFrame[] {
+export function lanes(
+  plan: OverviewPlan,
+  bodies: ReadonlyMap<string, Body>,
+  levels: Levels,
+  right: number,
+): SceneFrame[] {
   const source = [...plan.lane].flatMap((id) => bodies.get(id) ?? []);
   const frames: SceneFrame[] = [];
   const lane = (id: string, box: Box, texts: SceneFrame['texts'] = []): void => {
@@ -145,6 +213,11 @@ export function lanes(plan: OverviewPlan, bodies: ReadonlyMap<string, Body>, lev
   const footTop = levels.foot + MODULE + OFF;
   const edge = right - m(4);
   lane('feed', { x: edge, y: low, width: right - edge, height: Math.max(0, footTop - low) });
-  lane('board', { x: LEFT - m(1), y: footTop, width: right - LEFT + m(1), height: levels.foot + FOOT.height - OFF - footTop });
+  lane('board', {
+    x: LEFT - m(1),
+    y: footTop,
+    width: right - LEFT + m(1),
+    height: levels.foot + FOOT.height - OFF - footTop,
+  });
   return frames;
 }

@@ -31,7 +31,17 @@ const LIVE: ReadonlySet<Role> = new Set<Role>(['line', 'switched', 'strapper', '
 const EARTH_ENDS: ReadonlySet<Kind> = new Set<Kind>(['electrode', 'bond']);
 /** Kinds that belong in a line: where one has only neutral or earth wires, that is what must be seen. */
 const IN_LINE: ReadonlySet<Kind> = new Set<Kind>([
-  'fuse', 'isolator', 'mcb', 'rcd', 'rcbo', 'changeover', 'switch', 'switch-2way', 'switch-cross', 'switch-2pole', 'regulator',
+  'fuse',
+  'isolator',
+  'mcb',
+  'rcd',
+  'rcbo',
+  'changeover',
+  'switch',
+  'switch-2way',
+  'switch-cross',
+  'switch-2pole',
+  'regulator',
 ]);
 
 export const coreOf = (role: Role): 'L' | 'N' | 'E' => (role === 'neutral' ? 'N' : role === 'earth' ? 'E' : 'L');
@@ -62,7 +72,9 @@ function drawnWires(doc: Installation, byId: ReadonlyMap<string, Part>): Wire[] 
 function coresOf(run: OverviewRun, cable: readonly Wire[], alone: boolean): ('L' | 'N' | 'E')[] {
   const ends = new Set([run.from[0], run.to[0]]);
   const shown = cable.filter(
-    (wire) => run.wires.includes(wire.id) || (coreOf(wire.role) !== 'L' && (alone || ends.has(wire.from[0]) || ends.has(wire.to[0]))),
+    (wire) =>
+      run.wires.includes(wire.id) ||
+      (coreOf(wire.role) !== 'L' && (alone || ends.has(wire.from[0]) || ends.has(wire.to[0]))),
   );
   const order = { L: 0, N: 1, E: 2 };
   return shown.map((wire) => coreOf(wire.role)).sort((a, b) => order[a] - order[b]);
@@ -108,7 +120,15 @@ export function overviewGraph(doc: Installation): OverviewGraph {
   return { byId, parts, runs, at, neutralFrom: neutralSources(doc, byId) };
 }
 
-const NEUTRAL_SOURCES: ReadonlySet<Kind> = new Set<Kind>(['rcd', 'rcbo', 'isolator', 'mcb', 'meter', 'changeover', 'inverter']);
+const NEUTRAL_SOURCES: ReadonlySet<Kind> = new Set<Kind>([
+  'rcd',
+  'rcbo',
+  'isolator',
+  'mcb',
+  'meter',
+  'changeover',
+  'inverter',
+]);
 
 /** The device before each neutral bar: one whose outgoing neutral terminal is wired to it. */
 function neutralSources(doc: Installation, byId: ReadonlyMap<string, Part>): Map<string, string> {
@@ -120,7 +140,14 @@ function neutralSources(doc: Installation, byId: ReadonlyMap<string, Part>): Map
     ] as const) {
       const kind = byId.get(source[0])?.kind;
       const outgoing = source[1] === '4' || source[1] === 'out.N' || (kind === 'meter' && source[1] === '3');
-      if (byId.get(bar[0])?.kind === 'neutral-bar' && kind && NEUTRAL_SOURCES.has(kind) && outgoing && !found.has(bar[0])) found.set(bar[0], source[0]);
+      if (
+        byId.get(bar[0])?.kind === 'neutral-bar' &&
+        kind &&
+        NEUTRAL_SOURCES.has(kind) &&
+        outgoing &&
+        !found.has(bar[0])
+      )
+        found.set(bar[0], source[0]);
     }
   return found;
 }

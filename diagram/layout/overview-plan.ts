@@ -37,7 +37,8 @@ export interface OverviewPlan {
 const LOWER = new Set(['2', '4']);
 const nearMark = (node: TreeNode): string => (node.via!.to[0] === node.part.id ? node.via!.to[1] : node.via!.from[1]);
 /** A device fed at its lower terminal stands on its head. */
-const fedFromBelow = (node: TreeNode): boolean => node.via !== null && node.part.kind !== 'meter' && node.part.kind !== 'changeover' && LOWER.has(nearMark(node));
+const fedFromBelow = (node: TreeNode): boolean =>
+  node.via !== null && node.part.kind !== 'meter' && node.part.kind !== 'changeover' && LOWER.has(nearMark(node));
 
 class Planner {
   readonly positions = new Map<string, Position>();
@@ -86,7 +87,8 @@ class Planner {
       if (isBar && this.hangs.has(node)) {
         this.finals.push({ node, x, y });
         // bars fed from this one lie below it
-        for (const child of node.children.filter((c) => c.column)) stack.push({ node: child, x: groupX.get(child) ?? x, y: y + m(4) });
+        for (const child of node.children.filter((c) => c.column))
+          stack.push({ node: child, x: groupX.get(child) ?? x, y: y + m(4) });
         continue;
       }
       let level: number;
@@ -102,7 +104,9 @@ class Planner {
         axis = hung.axis;
         level = hung.bottom + MODULE;
         const subs = node.children.filter((c) => c.column);
-        next = hung.bottom + (subs.length > 1 ? m(2) : kind === 'supply' ? MODULE : kind === 'fuse' || kind === 'meter' ? m(2) : MODULE);
+        next =
+          hung.bottom +
+          (subs.length > 1 ? m(2) : kind === 'supply' ? MODULE : kind === 'fuse' || kind === 'meter' ? m(2) : MODULE);
       }
       const column = node.children.filter((child) => child.column);
       const subs = column.filter((child) => !feedsInverter(child) && child.part.kind !== 'spd');
@@ -111,11 +115,17 @@ class Planner {
       for (const child of column) {
         const barEnd = isBar ? Math.max(axis, ...subs.map((sub) => groupX.get(sub) ?? axis)) : axis;
         if (feedsInverter(child)) this.feeders.push({ node: child, x: barEnd, y: level });
-        else if (child.part.kind === 'spd') this.hang(child, axis - m(10) - m(8) * spds++, level + (isBar ? m(2) : m(1)), 0);
+        else if (child.part.kind === 'spd')
+          this.hang(child, axis - m(10) - m(8) * spds++, level + (isBar ? m(2) : m(1)), 0);
       }
-      for (const child of [...subs].reverse()) stack.push({ node: child, x: subs.length > 1 ? (groupX.get(child) ?? axis) : axis, y: next });
+      for (const child of [...subs].reverse())
+        stack.push({ node: child, x: subs.length > 1 ? (groupX.get(child) ?? axis) : axis, y: next });
     }
-    if (spds > 0) this.barLevel = Math.max(this.barLevel, ...[...this.positions].filter(([id]) => this.graph.byId.get(id)?.kind === 'spd').map(([, p]) => p.y + m(10)));
+    if (spds > 0)
+      this.barLevel = Math.max(
+        this.barLevel,
+        ...[...this.positions].filter(([id]) => this.graph.byId.get(id)?.kind === 'spd').map(([, p]) => p.y + m(10)),
+      );
   }
 
   private sideTop(): number {
@@ -126,12 +136,16 @@ class Planner {
   /** Bars of neutral and earth that stand beside the column. */
   private barsBeside(): Part[] {
     const behindBackup = this.neutralsOfBackup();
-    const bars = [...this.graph.parts.values()].filter((part) => (part.kind === 'neutral-bar' || part.kind === 'earth-bar') && !behindBackup.has(part.id));
+    const bars = [...this.graph.parts.values()].filter(
+      (part) => (part.kind === 'neutral-bar' || part.kind === 'earth-bar') && !behindBackup.has(part.id),
+    );
     return bars.sort((a, b) => Number(a.kind === 'earth-bar') - Number(b.kind === 'earth-bar'));
   }
 
   private hangsFrom(bar: Part): Part[] {
-    return (this.graph.at.get(bar.id) ?? []).map((run) => this.graph.byId.get(otherEnd(run, bar.id)[0])!).filter((far) => far.kind === 'electrode' || far.kind === 'bond');
+    return (this.graph.at.get(bar.id) ?? [])
+      .map((run) => this.graph.byId.get(otherEnd(run, bar.id)[0])!)
+      .filter((far) => far.kind === 'electrode' || far.kind === 'bond');
   }
 
   private sideBottom(): number {
@@ -152,7 +166,9 @@ class Planner {
     }
     // room for a neutral bar and an earth bar with its electrode is kept from the first, so that they find it later
     this.barLevel = Math.max(this.barLevel, this.sideTop() + m(13), bars.length > 0 ? y - m(1) : 0);
-    [...behindBackup].forEach((id, i) => this.backupBoard.add(id) && this.positions.set(id, { x: LEFT + m(2) + m(48) * i, y: 0 }));
+    [...behindBackup].forEach(
+      (id, i) => this.backupBoard.add(id) && this.positions.set(id, { x: LEFT + m(2) + m(48) * i, y: 0 }),
+    );
   }
 
   /** Neutral bars that stand behind a device of an inverter's output. */
@@ -171,7 +187,8 @@ class Planner {
       const name = names.get(place) ?? '';
       const least = Math.ceil((textWidth(name.toUpperCase(), BODY, true) + m(2)) / MODULE) * MODULE;
       const room = placeRoom(entries, (node) => own.has(this.content.entryOf.get(node)!), Math.max(m(10), least));
-      for (const [id, at] of room.positions) this.positions.set(id, { x: x + at.x, y: at.y, ...(at.turn && { turn: at.turn }) });
+      for (const [id, at] of room.positions)
+        this.positions.set(id, { x: x + at.x, y: at.y, ...(at.turn && { turn: at.turn }) });
       for (const [way, axis] of room.ways) axes.set(way, x + axis);
       this.roomSpans.set(place, { x, width: room.width });
       x += room.width + ROOM.gap;
@@ -180,7 +197,9 @@ class Planner {
     // ways that feed nothing yet stand at the end of the board
     for (const item of this.content.hanging) {
       if (axes.has(item.id)) continue;
-      const used = [...axes].filter(([id]) => this.content.hanging.some((h) => h.id === id && h.backup === item.backup)).map(([, at]) => at);
+      const used = [...axes]
+        .filter(([id]) => this.content.hanging.some((h) => h.id === id && h.backup === item.backup))
+        .map(([, at]) => at);
       axes.set(item.id, Math.max(LEFT + m(3), ...used.map((at) => at + WAY_PITCH)));
     }
     return axes;
@@ -198,7 +217,9 @@ class Planner {
     for (const { node } of this.finals) {
       let rise = 0;
       for (const other of this.finals) if (other.node !== node && isAbove(node, other.node)) rise += m(3);
-      const own = this.content.hanging.filter((item) => item.from === node).map((item) => headX.get(item.id) ?? axes.get(item.id)!);
+      const own = this.content.hanging
+        .filter((item) => item.from === node)
+        .map((item) => headX.get(item.id) ?? axes.get(item.id)!);
       this.positions.set(node.part.id, { x: Math.min(...own) - m(2), y: this.barLevel - rise - BAR_AXIS });
     }
     this.roomsTop = this.barLevel + BAR.rooms + channel.mains;
@@ -221,7 +242,9 @@ class Planner {
   private hangUp(node: TreeNode, x: number, y: number): void {
     const symbol = symbolFor(node.part, 'overview');
     const turn: Turn = fedFromBelow(node) ? 0 : 2;
-    const below = Object.values(symbol.terminals).map((place) => turnedTerminal(place, symbol, turn)).find((place) => place.side === 'down');
+    const below = Object.values(symbol.terminals)
+      .map((place) => turnedTerminal(place, symbol, turn))
+      .find((place) => place.side === 'down');
     this.positions.set(node.part.id, { x: x - (below?.x ?? m(2)), y, ...(turn && { turn }) });
   }
 
@@ -274,7 +297,9 @@ class Planner {
       return;
     }
     const turn: Turn = fedFromBelow(node) ? 1 : 3;
-    const left = Object.values(symbol.terminals).map((place) => turnedTerminal(place, symbol, turn)).find((place) => place.side === 'left');
+    const left = Object.values(symbol.terminals)
+      .map((place) => turnedTerminal(place, symbol, turn))
+      .find((place) => place.side === 'left');
     this.positions.set(node.part.id, { x, y: level - (left?.y ?? m(2)), turn });
   }
 
@@ -311,13 +336,17 @@ class Planner {
   footRow(axes: Map<string, number>): void {
     this.footBars.forEach((node, i) => {
       const own = this.content.hanging.filter((item) => item.from === node).map((item) => axes.get(item.id)!);
-      this.positions.set(node.part.id, { x: Math.min(LEFT + m(2), ...own), y: this.foot + FOOT.bar + m(3) * i - BAR_AXIS });
+      this.positions.set(node.part.id, {
+        x: Math.min(LEFT + m(2), ...own),
+        y: this.foot + FOOT.bar + m(3) * i - BAR_AXIS,
+      });
     });
     const below = this.foot + (this.footBars.length > 1 ? m(3) * (this.footBars.length - 1) : 0);
     for (const id of this.backupBoard) {
       const kind = this.graph.byId.get(id)?.kind;
       const at = this.positions.get(id);
-      if ((kind === 'neutral-bar' || kind === 'earth-bar') && at) this.positions.set(id, { ...at, y: below + FOOT.neutral - BAR_AXIS });
+      if ((kind === 'neutral-bar' || kind === 'earth-bar') && at)
+        this.positions.set(id, { ...at, y: below + FOOT.neutral - BAR_AXIS });
     }
   }
 
@@ -328,7 +357,8 @@ class Planner {
     let row = 0;
     for (const part of parts) {
       const symbol = symbolFor(part, 'overview');
-      const width = part.kind === 'line-bar' || part.kind === 'neutral-bar' || part.kind === 'earth-bar' ? SHORT_BAR : symbol.width;
+      const width =
+        part.kind === 'line-bar' || part.kind === 'neutral-bar' || part.kind === 'earth-bar' ? SHORT_BAR : symbol.width;
       const words = [designation(part), ...ratingLines(part)];
       const step = Math.ceil((Math.max(width, ...words.map((word) => textWidth(word, BODY))) + m(3)) / MODULE) * MODULE;
       if (x > LEFT && x + step > Math.max(this.right, m(100))) {
@@ -351,16 +381,27 @@ function isAbove(above: TreeNode, below: TreeNode): boolean {
 }
 
 const stackHeight = (nodes: readonly TreeNode[]): number =>
-  nodes.filter((node) => !node.parent || node.parent.children[0] === node).reduce((sum, node) => sum + symbolFor(node.part, 'overview').height + MODULE, 0);
+  nodes
+    .filter((node) => !node.parent || node.parent.children[0] === node)
+    .reduce((sum, node) => sum + symbolFor(node.part, 'overview').height + MODULE, 0);
 
 /** What a device takes in a horizontal line: its symbol or its words, whichever is longer. */
 function laneStep(part: Part): number {
   const words = [designation(part), ...ratingLines(part)];
-  return Math.ceil((Math.max(symbolFor(part, 'overview').height + m(2), ...words.map((word) => textWidth(word, BODY) + m(2))) / MODULE)) * MODULE;
+  return (
+    Math.ceil(
+      Math.max(symbolFor(part, 'overview').height + m(2), ...words.map((word) => textWidth(word, BODY) + m(2))) /
+        MODULE,
+    ) * MODULE
+  );
 }
 
 /** Devices of several bars stand in groups over the rooms, one after the other; of one bar, each over its own column. */
-function groupHeads(hanging: readonly Hanging[], axes: Map<string, number>, right: number): { headX: Map<string, number>; groupX: Map<TreeNode, number>; channel: number } {
+function groupHeads(
+  hanging: readonly Hanging[],
+  axes: Map<string, number>,
+  right: number,
+): { headX: Map<string, number>; groupX: Map<TreeNode, number>; channel: number } {
   const groups = new Map<TreeNode, Hanging[]>();
   for (const item of hanging) groups.set(item.from, [...(groups.get(item.from) ?? []), item]);
   const headX = new Map<string, number>();
@@ -373,7 +414,8 @@ function groupHeads(hanging: readonly Hanging[], axes: Map<string, number>, righ
   spans.sort((a, b) => a.left - b.left);
   if (spans.every((span, i) => i === 0 || span.left - spans[i - 1]!.right >= m(5))) {
     // each bar over its own rooms: every device stands straight above what it feeds
-    for (const { from, left, right: end } of spans) groupX.set(from, Math.floor((left + end) / 2 / MODULE) * MODULE);
+    // and its own device on the column's axis where that passes over it, else over its nearest way
+    for (const { from, left, right: end } of spans) groupX.set(from, Math.min(Math.max(COLUMN, left), end));
     return { headX, groupX, channel: 0 };
   }
   const total = hanging.length * WAY_PITCH + (groups.size - 1) * WAY_PITCH;
@@ -395,7 +437,8 @@ function groupHeads(hanging: readonly Hanging[], axes: Map<string, number>, righ
 /** The x of every column node that leads to a group, so that its chain stands over its bar. */
 function spreadGroupX(groupX: Map<TreeNode, number>): Map<TreeNode, number> {
   const all = new Map<TreeNode, number>();
-  for (const [node, x] of groupX) for (let at: TreeNode | null = node; at; at = at.parent) if (!all.has(at)) all.set(at, x);
+  for (const [node, x] of groupX)
+    for (let at: TreeNode | null = node; at; at = at.parent) if (!all.has(at)) all.set(at, x);
   return all;
 }
 
@@ -404,14 +447,26 @@ export function planOverview(doc: Installation): OverviewPlan {
   const graph = overviewGraph(doc);
   const places = new Map(doc.places.map((place) => [place.id, place]));
   const board = [...graph.parts.values()].find((part) => part.kind === 'supply' || part.kind === 'line-bar')?.place;
-  const inRoom = (part: Part): boolean => part.place !== undefined && part.place !== board && places.has(part.place) && places.get(part.place)!.kind !== 'intake';
+  const inRoom = (part: Part): boolean =>
+    part.place !== undefined &&
+    part.place !== board &&
+    places.has(part.place) &&
+    places.get(part.place)!.kind !== 'intake';
   const tree = overviewTree(graph, inRoom);
   const ways = findWays(doc);
   const content = waysAndRooms(doc, tree, ways);
   const planner = new Planner(graph, tree, content);
   const axes = planner.rooms(new Map(doc.places.map((place) => [place.id, place.name])));
-  const mains = groupHeads(content.hanging.filter((item) => !item.backup), axes, planner.right);
-  const backup = groupHeads(content.hanging.filter((item) => item.backup), axes, planner.right);
+  const mains = groupHeads(
+    content.hanging.filter((item) => !item.backup),
+    axes,
+    planner.right,
+  );
+  const backup = groupHeads(
+    content.hanging.filter((item) => item.backup),
+    axes,
+    planner.right,
+  );
   planner.column(spreadGroupX(mains.groupX));
   planner.sideBars();
   planner.lanes();
@@ -422,7 +477,12 @@ export function planOverview(doc: Installation): OverviewPlan {
   // what no tree and no room took
   const left = [...graph.parts.values()].filter((part) => !planner.positions.has(part.id));
   const end = planner.tray(left, bottom + m(3));
-  const roomOf = new Map([...content.entryOf].map(([node, entry]) => [node.part.id, content.rooms.find((room) => room.entries.includes(entry))!.place]));
+  const roomOf = new Map(
+    [...content.entryOf].map(([node, entry]) => [
+      node.part.id,
+      content.rooms.find((room) => room.entries.includes(entry))!.place,
+    ]),
+  );
   return {
     positions: planner.positions,
     graph,
@@ -434,6 +494,11 @@ export function planOverview(doc: Installation): OverviewPlan {
     lane: planner.lane,
     backupBoard: planner.backupBoard,
     tray: left,
-    levels: { bar: planner.barLevel, rooms: planner.roomsTop, foot: planner.foot, bottom: left.length > 0 ? end : bottom },
+    levels: {
+      bar: planner.barLevel,
+      rooms: planner.roomsTop,
+      foot: planner.foot,
+      bottom: left.length > 0 ? end : bottom,
+    },
   };
 }

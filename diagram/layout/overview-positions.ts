@@ -14,7 +14,10 @@ import type { Box } from './route-grid';
  * a device under the one that feeds it, a way beside the last one of its bar, a load at the end of its room, a new room
  * right of the others.
  */
-export function overviewPositions(plan: OverviewPlan, stored: Readonly<Record<string, Position>>): Map<string, Position> {
+export function overviewPositions(
+  plan: OverviewPlan,
+  stored: Readonly<Record<string, Position>>,
+): Map<string, Position> {
   const kept = [...plan.positions.keys()].filter((id) => stored[id]);
   if (kept.length === 0) return plan.positions;
   if (kept.length === plan.positions.size) return new Map(kept.map((id) => [id, stored[id]!]));
@@ -68,7 +71,10 @@ class Filler {
     const room = this.plan.roomOf.get(id);
     if (room === undefined) return;
     const span = this.rooms.get(room);
-    this.rooms.set(room, { left: Math.min(span?.left ?? Infinity, box.x), right: Math.max(span?.right ?? -Infinity, box.x + box.width) });
+    this.rooms.set(room, {
+      left: Math.min(span?.left ?? Infinity, box.x),
+      right: Math.max(span?.right ?? -Infinity, box.x + box.width),
+    });
   }
 
   private isFree(id: string, at: Position): boolean {
@@ -98,13 +104,20 @@ class Filler {
   private wish(id: string): Position {
     const zone = this.zone(id);
     const near = this.neighbour(id);
-    if (near !== null && (this.zone(near) === zone || (zone === 'room' && this.heads.has(near)))) return this.seenFrom(id, near);
+    if (near !== null && (this.zone(near) === zone || (zone === 'room' && this.heads.has(near))))
+      return this.seenFrom(id, near);
     const planned = this.plan.positions.get(id)!;
-    const distance = (other: string): number => Math.abs(this.plan.positions.get(other)!.x - planned.x) + Math.abs(this.plan.positions.get(other)!.y - planned.y);
-    const mates = [...this.positions.keys()].filter((other) => this.zone(other) === zone).sort((a, b) => distance(a) - distance(b) || byCode(a, b));
+    const distance = (other: string): number =>
+      Math.abs(this.plan.positions.get(other)!.x - planned.x) + Math.abs(this.plan.positions.get(other)!.y - planned.y);
+    const mates = [...this.positions.keys()]
+      .filter((other) => this.zone(other) === zone)
+      .sort((a, b) => distance(a) - distance(b) || byCode(a, b));
     if (mates[0] !== undefined) return this.seenFrom(id, mates[0]);
     const above = zone === 'foot' ? 'room' : 'column';
-    return { ...planned, y: planned.y + (this.shiftY([...this.positions.keys()].filter((other) => this.zone(other) === above)) ?? 0) };
+    return {
+      ...planned,
+      y: planned.y + (this.shiftY([...this.positions.keys()].filter((other) => this.zone(other) === above)) ?? 0),
+    };
   }
 
   private find(id: string): Position {
@@ -112,11 +125,13 @@ class Filler {
     const wanted = this.wish(id);
     const wish = { ...wanted, x: Math.max(LEFT, wanted.x), y: Math.max(0, wanted.y) };
     if (room !== undefined) return this.inRoom(id, room, wish) ?? this.anywhere(id, wish);
-    if (this.heads.has(id)) for (let i = 0; i < STEPS; i++) for (const side of [1, -1]) {
-      const at = { ...wish, x: wish.x + side * i * WAY_PITCH };
-      // a way needs the room of its cable data beside it, not only of its symbol
-      if (this.ground.overlap({ ...this.box(id, at), x: at.x - m(1), width: WAY_PITCH - m(2) }, 0) === 0) return at;
-    }
+    if (this.heads.has(id))
+      for (let i = 0; i < STEPS; i++)
+        for (const side of [1, -1]) {
+          const at = { ...wish, x: wish.x + side * i * WAY_PITCH };
+          // a way needs the room of its cable data beside it, not only of its symbol
+          if (this.ground.overlap({ ...this.box(id, at), x: at.x - m(1), width: WAY_PITCH - m(2) }, 0) === 0) return at;
+        }
     return this.anywhere(id, wish);
   }
 
@@ -138,16 +153,25 @@ class Filler {
 
   private inRoom(id: string, room: string, wish: Position): Position | null {
     const planned = this.plan.positions.get(id)!;
-    const mates = [...this.plan.roomOf].filter(([other, place]) => place === room && this.positions.has(other)).map(([other]) => other);
+    const mates = [...this.plan.roomOf]
+      .filter(([other, place]) => place === room && this.positions.has(other))
+      .map(([other]) => other);
     const y = planned.y + (this.shiftY(mates) ?? this.shiftY(this.plan.roomOf.keys()) ?? wish.y - planned.y);
     if (mates.length === 0) return this.newRoom(id, room, { ...wish, y });
     const own = this.rooms.get(room)!;
     const others = [...this.rooms].filter(([place]) => place !== room).map(([, span]) => span);
     const gap = 2 * ROOM.side + ROOM.gap;
     const most = Math.min(...others.filter((span) => span.left >= own.right).map((span) => span.left - gap), Infinity);
-    const least = Math.max(...others.filter((span) => span.right <= own.left).map((span) => span.right + gap), -Infinity);
+    const least = Math.max(
+      ...others.filter((span) => span.right <= own.left).map((span) => span.right + gap),
+      -Infinity,
+    );
     const width = this.box(id, planned).width;
-    const nearest = mates.sort((a, b) => Math.abs(this.plan.positions.get(a)!.x - planned.x) - Math.abs(this.plan.positions.get(b)!.x - planned.x) || byCode(a, b))[0]!;
+    const nearest = mates.sort(
+      (a, b) =>
+        Math.abs(this.plan.positions.get(a)!.x - planned.x) - Math.abs(this.plan.positions.get(b)!.x - planned.x) ||
+        byCode(a, b),
+    )[0]!;
     const x = this.seenFrom(id, nearest).x;
     // in its own row, then in a second and third row below
     for (const drop of [0, m(8), m(16)])
@@ -157,7 +181,13 @@ class Filler {
           if (at.x < least || at.x + width > most) continue;
           // loads carry their words below them: room is kept for those as well
           const box = this.box(id, at);
-          if (this.ground.overlap({ ...box, x: box.x - MODULE / 2, width: box.width + MODULE, height: box.height + (drop > 0 ? m(4) : 0) }, MODULE - 1) === 0) return at;
+          if (
+            this.ground.overlap(
+              { ...box, x: box.x - MODULE / 2, width: box.width + MODULE, height: box.height + (drop > 0 ? m(4) : 0) },
+              MODULE - 1,
+            ) === 0
+          )
+            return at;
         }
     return null;
   }
@@ -168,8 +198,13 @@ class Filler {
     if (!span) return null;
     const offset = this.plan.positions.get(id)!.x - span.x;
     const left = wish.x - offset;
-    const clash = [...this.rooms.values()].some((other) => other.left - ROOM.side - ROOM.gap < left + span.width && left < other.right + ROOM.side + ROOM.gap);
-    const start = clash ? Math.ceil((Math.max(...[...this.rooms.values()].map((other) => other.right)) + ROOM.side + ROOM.gap) / MODULE) * MODULE : left;
+    const clash = [...this.rooms.values()].some(
+      (other) => other.left - ROOM.side - ROOM.gap < left + span.width && left < other.right + ROOM.side + ROOM.gap,
+    );
+    const start = clash
+      ? Math.ceil((Math.max(...[...this.rooms.values()].map((other) => other.right)) + ROOM.side + ROOM.gap) / MODULE) *
+        MODULE
+      : left;
     const at = { ...wish, x: start + offset };
     return this.isFree(id, at) ? at : null;
   }

@@ -79,8 +79,16 @@ function itemOf(node: TreeNode, row: Row, backup: boolean): Item {
   const { part } = node;
   const symbol = symbolFor(part, 'overview');
   // the far switch of a two-way pair hangs the other way up: strappers come from its left, the lamp's wire leaves below
-  const turn = part.kind === 'switch-2way' && node.via?.role === 'strapper' ? 2 : part.kind === 'plug' && node.via?.wires.length ? 2 : 0;
-  const middle = part.kind.startsWith('switch') && part.kind !== 'switch-cross' ? 250 : Math.round(symbol.width / 2 / MODULE) * MODULE;
+  const turn =
+    part.kind === 'switch-2way' && node.via?.role === 'strapper'
+      ? 2
+      : part.kind === 'plug' && node.via?.wires.length
+        ? 2
+        : 0;
+  const middle =
+    part.kind.startsWith('switch') && part.kind !== 'switch-cross'
+      ? 250
+      : Math.round(symbol.width / 2 / MODULE) * MODULE;
   const axis = turn === 2 ? symbol.width - middle : middle;
   let y = row === 'rail' ? (backup ? ROOM.backupRail : ROOM.mainsRail) - MODULE : TOP[row];
   if (row === 'switches' && DEVICE_ROW.has(part.kind)) y = ROOM.boxBottom - symbol.height;
@@ -94,7 +102,11 @@ function widen(column: Column, item: Item): void {
   // a lever leans to the right, over the designation of its switch
   const isSwitch = item.part.kind.startsWith('switch');
   column.left = Math.max(column.left, isSwitch ? 250 : item.axis, half);
-  column.right = Math.max(column.right, isSwitch ? Math.max(400, 45 + textWidth(designation(item.part), SMALL)) : symbol.width - item.axis, half);
+  column.right = Math.max(
+    column.right,
+    isSwitch ? Math.max(400, 45 + textWidth(designation(item.part), SMALL)) : symbol.width - item.axis,
+    half,
+  );
   column.items.push(item);
 }
 
@@ -147,7 +159,8 @@ export function placeRoom(entries: readonly Entry[], inside: (node: TreeNode) =>
       lastWay[side] = axis;
       room.ways.set(column.way, axis);
     }
-    for (const item of column.items) room.positions.set(item.part.id, { x: axis - item.axis, y: item.y, turn: item.turn });
+    for (const item of column.items)
+      room.positions.set(item.part.id, { x: axis - item.axis, y: item.y, turn: item.turn });
     before = column;
   }
   room.width = Math.max(least, up(axis + Math.max(ROOM.side, (before?.right ?? 0) + 250)));

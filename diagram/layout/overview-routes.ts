@@ -16,7 +16,7 @@ function grouped(runs: readonly OverviewRun[], keysOf: (run: OverviewRun) => rea
   const find = (key: string): string => {
     let root = key;
     for (let up = parent.get(root); up !== undefined && up !== root; up = parent.get(root)) root = up;
-    for (let at = key; at !== root; ) {
+    for (let at = key; at !== root;) {
       const next = parent.get(at)!;
       parent.set(at, root);
       at = next;
@@ -63,21 +63,50 @@ export function leavesPlace(graph: OverviewGraph, run: OverviewRun): boolean {
   return run.cable !== undefined && graph.byId.get(run.from[0])?.place !== graph.byId.get(run.to[0])?.place;
 }
 
-export function overviewRoutes(graph: OverviewGraph, bodies: ReadonlyMap<string, Body>, ends: ReadonlyMap<string, RunEnd>, softs: readonly Soft[], backup: (run: OverviewRun) => boolean): OverviewRoutes {
+export function overviewRoutes(
+  graph: OverviewGraph,
+  bodies: ReadonlyMap<string, Body>,
+  ends: ReadonlyMap<string, RunEnd>,
+  softs: readonly Soft[],
+  backup: (run: OverviewRun) => boolean,
+): OverviewRoutes {
   const nets = netsOf(graph);
   const strandOf = (run: OverviewRun): string => (leavesPlace(graph, run) ? `cable ${run.id}` : nets.get(run.id)!);
   // cables that end at one terminal of a device run on as one line there; at a joint each comes for itself
-  const families = grouped(graph.runs, (run) => [`strand ${strandOf(run)}`, ...[run.from, run.to].filter(([part]) => !isBar(graph.byId.get(part)!.kind)).map((e) => e.join(' '))]);
+  const families = grouped(graph.runs, (run) => [
+    `strand ${strandOf(run)}`,
+    ...[run.from, run.to].filter(([part]) => !isBar(graph.byId.get(part)!.kind)).map((e) => e.join(' ')),
+  ]);
   const end = (key: string): RouteEnd => {
     const at = ends.get(key)!;
-    return { part: at.part, x: at.x, y: at.y, ...(at.any ? { sides: ANY, even: true } : { sides: [at.side], reach: SHARED_REACH }) };
+    return {
+      part: at.part,
+      x: at.x,
+      y: at.y,
+      ...(at.any ? { sides: ANY, even: true } : { sides: [at.side], reach: SHARED_REACH }),
+    };
   };
-  const requests = graph.runs.map((run): RouteRequest => ({ id: run.id, net: nets.get(run.id)!, strand: strandOf(run), family: families.get(run.id)!, from: end(endKey(run, run.from[0])), to: end(endKey(run, run.to[0])), backup: backup(run) }));
-  const obstacles = [...bodies].map(([id, body]): Obstacle => ({ id, x: body.x, y: body.y, width: body.width, height: body.height }));
+  const requests = graph.runs.map((run): RouteRequest => ({
+    id: run.id,
+    net: nets.get(run.id)!,
+    strand: strandOf(run),
+    family: families.get(run.id)!,
+    from: end(endKey(run, run.from[0])),
+    to: end(endKey(run, run.to[0])),
+    backup: backup(run),
+  }));
+  const obstacles = [...bodies].map(([id, body]): Obstacle => ({
+    id,
+    x: body.x,
+    y: body.y,
+    width: body.width,
+    height: body.height,
+  }));
   const { points, forced } = routeAll(requests, obstacles, softs);
   const paths = graph.runs.map((run): NetPath => ({ id: run.id, net: nets.get(run.id)!, points: points.get(run.id)! }));
   const inside = [...bodies].filter(([id]) => isBar(graph.byId.get(id)!.kind)).map(([, body]) => body);
-  const onBar = ({ x, y }: Point) => inside.some((b) => x >= b.x && x <= b.x + b.width && y >= b.y && y <= b.y + b.height);
+  const onBar = ({ x, y }: Point) =>
+    inside.some((b) => x >= b.x && x <= b.x + b.width && y >= b.y && y <= b.y + b.height);
   const wireOf = new Map(graph.runs.map((run) => [run.id, run.wires[0] ?? '']));
   return {
     points,

@@ -26,11 +26,19 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
   const places = placeEnds(graph, positions);
   const feeds = traceFeeds(doc);
   const frames = roomFrames(doc, plan, positions, places.bodies);
-  const routes = overviewRoutes(graph, places.bodies, places.ends, spokenFor(plan, places, frames), (run) => feeds.wires.get(run.wires[0] ?? '') === 'backup');
+  const routes = overviewRoutes(
+    graph,
+    places.bodies,
+    places.ends,
+    spokenFor(plan, places, frames),
+    (run) => feeds.wires.get(run.wires[0] ?? '') === 'backup',
+  );
   const levels = actualLevels(plan, positions);
   const lettered = letter(doc, plan, places, routes, frames, feeds);
 
-  const parts = [...graph.parts.values()].map((part) => scenePart(plan, places, feeds, part, lettered.texts.get(part.id) ?? []));
+  const parts = [...graph.parts.values()].map((part) =>
+    scenePart(plan, places, feeds, part, lettered.texts.get(part.id) ?? []),
+  );
   const runs = graph.runs.map((run): SceneRun => {
     const ticks = lettered.ticks.get(run.id);
     return {
@@ -82,7 +90,8 @@ function spokenFor(plan: OverviewPlan, { bodies }: Ends, frames: readonly SceneF
       );
   for (const [id, body] of bodies) {
     const { kind } = plan.graph.byId.get(id)!;
-    if (kind === 'lamp' || kind === 'fan' || kind === 'socket' || kind === 'appliance') softs.push({ x: body.x - 250, y: body.y + body.height, width: body.width + 500, height: m(4), cost: 2 });
+    if (kind === 'lamp' || kind === 'fan' || kind === 'socket' || kind === 'appliance')
+      softs.push({ x: body.x - 250, y: body.y + body.height, width: body.width + 500, height: m(4), cost: 2 });
   }
   return softs;
 }
@@ -115,16 +124,38 @@ interface Lettered {
 }
 
 /** Places rings, ticks and all lettering, each clear of what stands there before. */
-function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes: OverviewRoutes, frames: readonly SceneFrame[], feeds: Feeds): Lettered {
+function letter(
+  doc: Installation,
+  plan: OverviewPlan,
+  { bodies }: Ends,
+  routes: OverviewRoutes,
+  frames: readonly SceneFrame[],
+  feeds: Feeds,
+): Lettered {
   const { graph } = plan;
   const ground = new Ground();
   // the names of the bands stand here
-  ground.add({ x: -m(20), y: 0, width: m(20) + BAND_NAMES, height: Math.max(...[...bodies.values()].map((body) => body.y + body.height), 0) + m(20) });
+  ground.add({
+    x: -m(20),
+    y: 0,
+    width: m(20) + BAND_NAMES,
+    height: Math.max(...[...bodies.values()].map((body) => body.y + body.height), 0) + m(20),
+  });
   for (const [id, body] of bodies) ground.add(takenBy(graph.byId.get(id)!, body));
-  for (const run of graph.runs) ground.addPath(routes.points.get(run.id)!, feeds.wires.get(run.wires[0] ?? '') === 'backup' ? 90 : 40);
+  for (const run of graph.runs)
+    ground.addPath(routes.points.get(run.id)!, feeds.wires.get(run.wires[0] ?? '') === 'backup' ? 90 : 40);
   for (const frame of frames) {
     const { x, y, width: w, height: h } = frame;
-    ground.addPath([{ x, y }, { x: x + w, y }, { x: x + w, y: y + h }, { x, y: y + h }, { x, y }], 20);
+    ground.addPath(
+      [
+        { x, y },
+        { x: x + w, y },
+        { x: x + w, y: y + h },
+        { x, y: y + h },
+        { x, y },
+      ],
+      20,
+    );
   }
   const solid = new Ground();
   for (const body of bodies.values()) solid.add(body);
@@ -134,7 +165,11 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     const run = graph.at.get(way.device)?.find((r) => leavesDevice(r, way.device));
     if (!run || !bodies.has(way.device)) continue;
     const points = routes.points.get(run.id)!;
-    const ring = ringOf(way, run.from[0] === way.device ? points : [...points].reverse(), feeds.parts.get(way.device) ?? 'none');
+    const ring = ringOf(
+      way,
+      run.from[0] === way.device ? points : [...points].reverse(),
+      feeds.parts.get(way.device) ?? 'none',
+    );
     if (!ring) continue;
     ringed.set(run.id, ring);
     ground.add({ x: ring.x - ring.radius, y: ring.y - ring.radius, width: 2 * ring.radius, height: 2 * ring.radius });
@@ -151,7 +186,9 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
     ticks.set(run.id, found);
     ground.add(found.box);
     // a cable drawn as several runs is named once
-    const label = named.has(run.cable!) ? null : cableLabel(doc, graph, run, found, ringed.has(run.id) || !plan.roomOf.has(run.from[0]));
+    const label = named.has(run.cable!)
+      ? null
+      : cableLabel(doc, graph, run, found, ringed.has(run.id) || !plan.roomOf.has(run.from[0]));
     if (!label) continue;
     named.add(run.cable!);
     labels.push(label);
@@ -160,7 +197,10 @@ function letter(doc: Installation, plan: OverviewPlan, { bodies }: Ends, routes:
   // parts first: their words have fewer places than a cable's
   const ofParts = [...graph.parts.values()].flatMap((part) => partLabel(doc, plan, part, bodies.get(part.id)!) ?? []);
   const texts = new Map<string, SceneText[]>();
-  for (const label of [...ofParts.sort((a, b) => rank(b) - rank(a) || byCode(a.owner, b.owner)), ...labels.sort((a, b) => byCode(a.owner, b.owner))]) {
+  for (const label of [
+    ...ofParts.sort((a, b) => rank(b) - rank(a) || byCode(a.owner, b.owner)),
+    ...labels.sort((a, b) => byCode(a.owner, b.owner)),
+  ]) {
     const block = placeLabel(ground, label);
     if (block) texts.set(label.owner, blockTexts(block));
   }
@@ -173,5 +213,7 @@ const grown = (box: Box): Box => ({ x: box.x - 1, y: box.y - 1, width: box.width
 const rank = (label: Label): number => label.size;
 
 /** The device's outgoing run: the one at its lower terminal, or its only cable. */
-const leavesDevice = (run: { from: readonly [string, string]; to: readonly [string, string] }, device: string): boolean =>
-  (run.from[0] === device && run.from[1] === '2') || (run.to[0] === device && run.to[1] === '2');
+const leavesDevice = (
+  run: { from: readonly [string, string]; to: readonly [string, string] },
+  device: string,
+): boolean => (run.from[0] === device && run.from[1] === '2') || (run.to[0] === device && run.to[1] === '2');

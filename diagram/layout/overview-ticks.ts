@@ -51,7 +51,12 @@ export interface Ticks {
 }
 
 /** Tick marks on the first stretch that is long enough, beginning at the source; null where none is. */
-export function ticksOf(run: OverviewRun, points: readonly Point[], ringed: boolean, taken: (box: Box) => boolean): Ticks | null {
+export function ticksOf(
+  run: OverviewRun,
+  points: readonly Point[],
+  ringed: boolean,
+  taken: (box: Box) => boolean,
+): Ticks | null {
   if (run.cores.length === 0) return null;
   const span = TICK_PITCH * (run.cores.length - 1);
   for (const [i, stretch] of stretches(points).entries()) {
@@ -75,7 +80,13 @@ export function ticksOf(run: OverviewRun, points: readonly Point[], ringed: bool
 }
 
 /** Size and length of a run's cable, beside its ticks. */
-export function cableLabel(doc: Installation, graph: OverviewGraph, run: OverviewRun, { ticks, box }: Ticks, ringed: boolean): Label | null {
+export function cableLabel(
+  doc: Installation,
+  graph: OverviewGraph,
+  run: OverviewRun,
+  { ticks, box }: Ticks,
+  ringed: boolean,
+): Label | null {
   const cable = doc.cables.find((c) => c.id === run.cable);
   if (!cable || !leavesPlace(graph, run)) return null;
   const size = cableSize(cable, run.cores.length);

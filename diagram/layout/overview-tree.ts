@@ -29,10 +29,42 @@ export interface OverviewTree {
 }
 
 const OVERCURRENT: ReadonlySet<Kind> = new Set<Kind>(['fuse', 'mcb', 'rcbo']);
-const DEVICES: ReadonlySet<Kind> = new Set<Kind>(['fuse', 'mcb', 'rcbo', 'rcd', 'isolator', 'changeover', 'joint', 'switch-2pole']);
-const ALWAYS_COLUMN: ReadonlySet<Kind> = new Set<Kind>(['supply', 'meter', 'line-bar', 'spd', 'inverter', 'changeover']);
+const DEVICES: ReadonlySet<Kind> = new Set<Kind>([
+  'fuse',
+  'mcb',
+  'rcbo',
+  'rcd',
+  'isolator',
+  'changeover',
+  'joint',
+  'switch-2pole',
+]);
+const ALWAYS_COLUMN: ReadonlySet<Kind> = new Set<Kind>([
+  'supply',
+  'meter',
+  'line-bar',
+  'spd',
+  'inverter',
+  'changeover',
+]);
 /** Parts from which a drawing without a supply is read, most upstream first. */
-const UPSTREAM: readonly Kind[] = ['meter', 'isolator', 'rcd', 'line-bar', 'changeover', 'mcb', 'rcbo', 'fuse', 'joint', 'switch', 'switch-2pole', 'switch-2way', 'regulator', 'socket', 'plug'];
+const UPSTREAM: readonly Kind[] = [
+  'meter',
+  'isolator',
+  'rcd',
+  'line-bar',
+  'changeover',
+  'mcb',
+  'rcbo',
+  'fuse',
+  'joint',
+  'switch',
+  'switch-2pole',
+  'switch-2way',
+  'regulator',
+  'socket',
+  'plug',
+];
 
 export const isOvercurrent = (kind: Kind): boolean => OVERCURRENT.has(kind);
 
@@ -86,7 +118,9 @@ function markColumn(root: TreeNode, inRoom: (part: Part) => boolean): void {
     else if (ALWAYS_COLUMN.has(kind)) node.column = true;
     else if ((kind === 'isolator' || kind === 'rcd') && atBoard) node.column = true;
     else if (DEVICES.has(kind)) {
-      const forBars = node.children.some((child) => child.column && child.part.kind !== 'inverter' && !feedsInverter(child));
+      const forBars = node.children.some(
+        (child) => child.column && child.part.kind !== 'inverter' && !feedsInverter(child),
+      );
       node.column = forBars || (below && feedsInverter(node));
       // what stands right behind the supply is the service fuse, whatever follows
       if (node.parent?.part.kind === 'supply') node.column = true;
@@ -115,7 +149,14 @@ export function overviewTree(graph: OverviewGraph, inRoom: (part: Part) => boole
   const backups = inverters.map((part) => grow(growth, part, (mark) => mark.startsWith('out')));
   const batteries = inverters.map((part) => grow(growth, part, (mark) => mark.startsWith('bat')));
   const rest = all
-    .filter((part) => !growth.taken.has(part.id) && part.kind !== 'neutral-bar' && part.kind !== 'earth-bar' && part.kind !== 'electrode' && part.kind !== 'bond')
+    .filter(
+      (part) =>
+        !growth.taken.has(part.id) &&
+        part.kind !== 'neutral-bar' &&
+        part.kind !== 'earth-bar' &&
+        part.kind !== 'electrode' &&
+        part.kind !== 'bond',
+    )
     .sort((a, b) => {
       const [x, y] = [upstream(a), upstream(b)].map((n) => (n < 0 ? UPSTREAM.length : n)) as [number, number];
       return x - y || byDesignation(a, b);

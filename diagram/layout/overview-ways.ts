@@ -38,7 +38,13 @@ const hangingOf = (root: TreeNode, backup: boolean, numbers: Map<string, number>
     for (const child of node.children) {
       if (child.column) continue;
       const head = isOvercurrent(child.part.kind) ? child : null;
-      found.push({ id: child.part.id, from: node, head, backup, order: numbers.get(child.part.id) ?? Number.MAX_SAFE_INTEGER });
+      found.push({
+        id: child.part.id,
+        from: node,
+        head,
+        backup,
+        order: numbers.get(child.part.id) ?? Number.MAX_SAFE_INTEGER,
+      });
     }
   }
   return found.sort((a, b) => a.order - b.order);
@@ -57,7 +63,13 @@ export function waysAndRooms(doc: Installation, tree: OverviewTree, ways: readon
   const placeOf = new Map<TreeNode, string>();
   const tray: Part[] = [];
 
-  const sort = (root: TreeNode, backup: boolean, way: string | undefined, skip: TreeNode | null, keepUnplaced: boolean) => {
+  const sort = (
+    root: TreeNode,
+    backup: boolean,
+    way: string | undefined,
+    skip: TreeNode | null,
+    keepUnplaced: boolean,
+  ) => {
     let free = way;
     for (const node of walk(root)) {
       if (node === skip) continue;
@@ -93,23 +105,36 @@ export function waysAndRooms(doc: Installation, tree: OverviewTree, ways: readon
   order(hanging.filter((item) => item.backup));
   const intake = new Set(doc.places.filter((place) => place.kind === 'intake').map((place) => place.id));
   for (const root of tree.loose) {
-    if (root.part.place !== undefined && places.has(root.part.place) && !intake.has(root.part.place)) sort(root, false, undefined, null, true);
+    if (root.part.place !== undefined && places.has(root.part.place) && !intake.has(root.part.place))
+      sort(root, false, undefined, null, true);
     else for (const node of walk(root)) tray.push(node.part);
   }
   // mains first, then backup; what comes from a room further left stands first, the rest in the order of the ways
   const roomOrder = new Map([...rooms.keys()].map((place, i) => [place, i]));
   const fromLeft = (entry: Entry, place: string): boolean => {
     const above = entry.node.parent && placeOf.get(entry.node.parent);
-    return above !== undefined && above !== null && roomOrder.get(above)! < roomOrder.get(place)! && !(entry.backup && entry.node.part.kind === 'joint');
+    return (
+      above !== undefined &&
+      above !== null &&
+      roomOrder.get(above)! < roomOrder.get(place)! &&
+      !(entry.backup && entry.node.part.kind === 'joint')
+    );
   };
   const rank = (entry: Entry, place: string): number => (entry.backup ? 2 : 0) + (fromLeft(entry, place) ? 0 : 1);
-  const sorted = [...rooms].map(([place, entries]) => ({ place, entries: [...entries].sort((a, b) => rank(a, place) - rank(b, place)) }));
+  const sorted = [...rooms].map(([place, entries]) => ({
+    place,
+    entries: [...entries].sort((a, b) => rank(a, place) - rank(b, place)),
+  }));
   sortChildren(hanging, placeOf, roomOrder);
   return { hanging, rooms: sorted, entryOf, tray };
 }
 
 /** What leads into a room further left stands first in its own room, what leads further right last. */
-function sortChildren(hanging: readonly Hanging[], placeOf: ReadonlyMap<TreeNode, string>, roomOrder: ReadonlyMap<string, number>): void {
+function sortChildren(
+  hanging: readonly Hanging[],
+  placeOf: ReadonlyMap<TreeNode, string>,
+  roomOrder: ReadonlyMap<string, number>,
+): void {
   for (const item of hanging) {
     const root = item.head ?? item.from.children.find((child) => child.part.id === item.id)!;
     const leads = new Map<TreeNode, number>();
@@ -118,10 +143,15 @@ function sortChildren(hanging: readonly Hanging[], placeOf: ReadonlyMap<TreeNode
       let lead = 0;
       for (const child of node.children) {
         const place = placeOf.get(child);
-        lead = place === own ? lead || leads.get(child)! : lead || Math.sign((roomOrder.get(place ?? '') ?? 0) - (roomOrder.get(own ?? '') ?? 0));
+        lead =
+          place === own
+            ? lead || leads.get(child)!
+            : lead || Math.sign((roomOrder.get(place ?? '') ?? 0) - (roomOrder.get(own ?? '') ?? 0));
       }
       leads.set(node, lead);
-      node.children.sort((a, b) => (placeOf.get(a) === own ? leads.get(a)! : 0) - (placeOf.get(b) === own ? leads.get(b)! : 0));
+      node.children.sort(
+        (a, b) => (placeOf.get(a) === own ? leads.get(a)! : 0) - (placeOf.get(b) === own ? leads.get(b)! : 0),
+      );
     }
   }
 }

@@ -7,7 +7,16 @@ import { Ground } from './labels';
 export function* around(wish: Position): Generator<Position> {
   yield wish;
   for (let ring = 1; ring <= 60; ring++)
-    for (const [dx, dy] of [[1, 0], [-1, 0], [0, 1], [0, -1], [1, 1], [-1, 1], [1, -1], [-1, -1]] as const)
+    for (const [dx, dy] of [
+      [1, 0],
+      [-1, 0],
+      [0, 1],
+      [0, -1],
+      [1, 1],
+      [-1, 1],
+      [1, -1],
+      [-1, -1],
+    ] as const)
       yield { ...wish, x: wish.x + dx * ring * 2 * MODULE, y: wish.y + dy * ring * 2 * MODULE };
 }
 
@@ -30,7 +39,8 @@ export function fillIn(
   const ground = new Ground();
   for (const [id, at] of positions) ground.add(box(id, at));
   let waiting = [...planned.keys()].filter((id) => !positions.has(id)).sort(byCode);
-  const placed = (id: string): string | undefined => [...near(id)].filter((other) => other !== id && positions.has(other)).sort(byCode)[0];
+  const placed = (id: string): string | undefined =>
+    [...near(id)].filter((other) => other !== id && positions.has(other)).sort(byCode)[0];
   // in rounds: first what hangs on a placed part, then what hangs on that
   while (waiting.length > 0) {
     const anchored = waiting.filter((id) => placed(id) !== undefined);

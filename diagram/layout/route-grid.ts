@@ -73,7 +73,8 @@ export interface Grid {
 function lines(spans: readonly (readonly [number, number])[], extra: readonly number[]): Int32Array {
   const found = new Set<number>(extra);
   for (const [from, to] of spans)
-    for (let at = Math.ceil(from / MODULE) * MODULE - REACH * MODULE; at <= to + REACH * MODULE; at += MODULE) found.add(at);
+    for (let at = Math.ceil(from / MODULE) * MODULE - REACH * MODULE; at <= to + REACH * MODULE; at += MODULE)
+      found.add(at);
   return Int32Array.from(found).sort();
 }
 
@@ -102,10 +103,26 @@ function merged(spans: [number, number][]): [number, number][] {
 }
 
 /** The grid for these parts and runs, or null where it would be too large to search. */
-export function buildGrid(obstacles: readonly Obstacle[], requests: readonly RouteRequest[], softs: readonly Soft[]): Grid | null {
+export function buildGrid(
+  obstacles: readonly Obstacle[],
+  requests: readonly RouteRequest[],
+  softs: readonly Soft[],
+): Grid | null {
   const ends = requests.flatMap((request) => [request.from, request.to]);
-  const xs = lines(merged([...obstacles.map((o): [number, number] => [o.x, o.x + o.width]), ...ends.map((e): [number, number] => [e.x, e.x])]), ends.map((e) => e.x));
-  const ys = lines(merged([...obstacles.map((o): [number, number] => [o.y, o.y + o.height]), ...ends.map((e): [number, number] => [e.y, e.y])]), ends.map((e) => e.y));
+  const xs = lines(
+    merged([
+      ...obstacles.map((o): [number, number] => [o.x, o.x + o.width]),
+      ...ends.map((e): [number, number] => [e.x, e.x]),
+    ]),
+    ends.map((e) => e.x),
+  );
+  const ys = lines(
+    merged([
+      ...obstacles.map((o): [number, number] => [o.y, o.y + o.height]),
+      ...ends.map((e): [number, number] => [e.y, e.y]),
+    ]),
+    ends.map((e) => e.y),
+  );
   const columns = xs.length;
   const rows = ys.length;
   if (columns * rows > MOST_NODES) return null;
@@ -121,7 +138,8 @@ export function buildGrid(obstacles: readonly Obstacle[], requests: readonly Rou
   const within = (box: Box, tell: (node: number) => void) => {
     const [left, right] = [lineAt(xs, box.x), lineAt(xs, box.x + box.width + 1) - 1];
     const [top, bottom] = [lineAt(ys, box.y), lineAt(ys, box.y + box.height + 1) - 1];
-    for (let row = top; row <= bottom; row++) for (let column = left; column <= right; column++) tell(row * columns + column);
+    for (let row = top; row <= bottom; row++)
+      for (let column = left; column <= right; column++) tell(row * columns + column);
   };
   obstacles.forEach((box, i) =>
     within(box, (node) => {

@@ -80,7 +80,8 @@ export function findDots(paths: readonly NetPath[], skip: (point: Point) => bool
     // crossings of one net with itself join as well
     for (const l of group.level)
       for (const u of group.upright)
-        if (l.a.x <= u.a.x && u.a.x <= l.b.x && u.a.y <= l.a.y && l.a.y <= u.b.y) group.points.set(key(u.a.x, l.a.y), { x: u.a.x, y: l.a.y });
+        if (l.a.x <= u.a.x && u.a.x <= l.b.x && u.a.y <= l.a.y && l.a.y <= u.b.y)
+          group.points.set(key(u.a.x, l.a.y), { x: u.a.x, y: l.a.y });
     for (const point of group.points.values()) {
       if (skip(point)) continue;
       const arms =

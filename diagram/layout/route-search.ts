@@ -18,7 +18,7 @@ export const COST = {
 } as const;
 
 /** By how much the length still to go is overrated where runs keep apart. */
-const AHEAD = 1.3;
+const AHEAD = 1.15;
 
 /** What stands on the grid: 0 is free, else the number of a strand. */
 export interface Occupancy {
@@ -37,7 +37,15 @@ export interface Occupancy {
 
 export const emptyOccupancy = (grid: Grid, netOf: readonly number[], familyOf: readonly number[]): Occupancy => {
   const size = grid.columns * grid.rows;
-  return { netOf, familyOf, right: new Int32Array(size), down: new Int32Array(size), level: new Int32Array(size), upright: new Int32Array(size), corner: new Int32Array(size) };
+  return {
+    netOf,
+    familyOf,
+    right: new Int32Array(size),
+    down: new Int32Array(size),
+    level: new Int32Array(size),
+    upright: new Int32Array(size),
+    corner: new Int32Array(size),
+  };
 };
 
 const DIRECTIONS: readonly Side[] = ['up', 'right', 'down', 'left'];
@@ -50,7 +58,8 @@ export interface Stub {
   penalty: number;
 }
 
-export const nodeAt = (grid: Grid, point: Point): number => lineAt(grid.ys, point.y) * grid.columns + lineAt(grid.xs, point.x);
+export const nodeAt = (grid: Grid, point: Point): number =>
+  lineAt(grid.ys, point.y) * grid.columns + lineAt(grid.xs, point.x);
 
 /** Edge of a node in a direction: the array it is kept in and its index; -1 outside the grid. */
 export function edgeFrom(grid: Grid, node: number, direction: number): number {
@@ -79,11 +88,14 @@ const free = (occupancy: Occupancy, edge: number, level: boolean, net: number): 
   return same(occupancy, on, net);
 };
 /** True when a place is free for a strand or taken by one of its family. */
-const same = (occupancy: Occupancy, on: number, net: number): boolean => on === 0 || on === net || (on > 0 && occupancy.familyOf[on] === occupancy.familyOf[net]);
+const same = (occupancy: Occupancy, on: number, net: number): boolean =>
+  on === 0 || on === net || (on > 0 && occupancy.familyOf[on] === occupancy.familyOf[net]);
 /** True when two strands are of one net, or one of them is none. */
-const joined = (occupancy: Occupancy, on: number, net: number): boolean => on === 0 || on === net || (on > 0 && occupancy.netOf[on] === occupancy.netOf[net]);
+const joined = (occupancy: Occupancy, on: number, net: number): boolean =>
+  on === 0 || on === net || (on > 0 && occupancy.netOf[on] === occupancy.netOf[net]);
 /** The way out of a terminal may be shared by all that ends there. */
-const freeStub = (occupancy: Occupancy, edge: number, level: boolean, net: number): boolean => joined(occupancy, level ? occupancy.right[edge]! : occupancy.down[edge]!, net);
+const freeStub = (occupancy: Occupancy, edge: number, level: boolean, net: number): boolean =>
+  joined(occupancy, level ? occupancy.right[edge]! : occupancy.down[edge]!, net);
 
 /** The ways out of a terminal that nothing else has taken: straight through its own part to the first free node. */
 export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: number): Stub[] {
@@ -98,7 +110,12 @@ export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: numb
       if (edge < 0 || !freeStub(occupancy, edge, isLevel(direction), net)) return;
       const next = nextNode(grid, node, direction);
       if (!joined(occupancy, occupancy.corner[next]!, net)) return;
-      if (grid.covered[next] !== 0 && grid.covered[next] !== own && !(grid.covered[next] === CROSSABLE && !isLevel(direction))) return;
+      if (
+        grid.covered[next] !== 0 &&
+        grid.covered[next] !== own &&
+        !(grid.covered[next] === CROSSABLE && !isLevel(direction))
+      )
+        return;
       nodes.push(next);
     } while (grid.covered[nodes.at(-1)!] !== 0);
     const penalty = end.even ? 0 : place * COST.side;
@@ -124,7 +141,9 @@ export function straight(grid: Grid, occupancy: Occupancy, from: RouteEnd, to: R
   for (const side of from.sides) {
     const direction = DIRECTIONS.indexOf(side);
     if (!to.sides.includes(DIRECTIONS[(direction + 2) % 4]!)) continue;
-    const aligned = isLevel(direction) ? from.y === to.y && to.x > from.x === (direction === 1) : from.x === to.x && to.y > from.y === (direction === 2);
+    const aligned = isLevel(direction)
+      ? from.y === to.y && to.x > from.x === (direction === 1)
+      : from.x === to.x && to.y > from.y === (direction === 2);
     if (!aligned) continue;
     const nodes = [nodeAt(grid, from)];
     while (nodes.at(-1) !== goal) {
@@ -132,7 +151,11 @@ export function straight(grid: Grid, occupancy: Occupancy, from: RouteEnd, to: R
       const edge = edgeFrom(grid, node, direction);
       if (edge < 0 || !free(occupancy, edge, isLevel(direction), net)) break;
       const next = nextNode(grid, node, direction);
-      if (next !== goal && (!joined(occupancy, occupancy.corner[next]!, net) || crosses(occupancy, next, isLevel(direction), net))) break;
+      if (
+        next !== goal &&
+        (!joined(occupancy, occupancy.corner[next]!, net) || crosses(occupancy, next, isLevel(direction), net))
+      )
+        break;
       // two boxes may touch: a node that both cover lies between the terminals
       const bar = grid.covered[next] === CROSSABLE && !isLevel(direction);
       if (!allowed.has(grid.covered[next]!) && !bar && !(grid.covered[next] === -1 && next === goal)) break;
@@ -246,7 +269,13 @@ export class Search {
    * @param backup which ground it keeps to
    * @param shares whether others of the net are drawn, whose stretches may be used
    */
-  find(from: RouteEnd, to: RouteEnd, net: number, shares: boolean, backup = false): { nodes: number[]; cost: number } | null {
+  find(
+    from: RouteEnd,
+    to: RouteEnd,
+    net: number,
+    shares: boolean,
+    backup = false,
+  ): { nodes: number[]; cost: number } | null {
     const { grid } = this;
     const direct = straight(grid, this.occupancy, from, to, net);
     if (direct) return { nodes: direct, cost: Math.abs(from.x - to.x) + Math.abs(from.y - to.y) };
@@ -320,7 +349,9 @@ export class Search {
     for (const stub of ends) {
       const node = stub.nodes.at(-1)!;
       const into = (stub.direction + 2) % 4;
-      const bendable = joined(this.occupancy, this.occupancy.upright[node]!, net) && joined(this.occupancy, this.occupancy.level[node]!, net);
+      const bendable =
+        joined(this.occupancy, this.occupancy.upright[node]!, net) &&
+        joined(this.occupancy, this.occupancy.level[node]!, net);
       for (let heading = 0; heading < 4; heading++) {
         if (heading === stub.direction || (heading !== into && !bendable)) continue;
         const penalty = stub.penalty + (heading === into ? 0 : COST.bend);
@@ -335,15 +366,27 @@ export class Search {
   private beside(edge: number, level: boolean, net: number): number {
     const { right, down } = this.occupancy;
     const [list, step] = level ? [right, this.grid.columns] : [down, 1];
-    return Number(!same(this.occupancy, list[edge - step] ?? 0, net)) + Number(!same(this.occupancy, list[edge + step] ?? 0, net));
+    return (
+      Number(!same(this.occupancy, list[edge - step] ?? 0, net)) +
+      Number(!same(this.occupancy, list[edge + step] ?? 0, net))
+    );
   }
 
-  private expand(node: number, heading: number, cost: number, net: number, soft: Float32Array, reach: (state: number, cost: number, previous: number) => void, state: number): void {
+  private expand(
+    node: number,
+    heading: number,
+    cost: number,
+    net: number,
+    soft: Float32Array,
+    reach: (state: number, cost: number, previous: number) => void,
+    state: number,
+  ): void {
     const { grid, occupancy } = this;
     const here = isLevel(heading) ? occupancy.upright[node]! : occupancy.level[node]!;
     const along = isLevel(heading) ? occupancy.level[node]! : occupancy.upright[node]!;
     // where a run leaves its terminal's way out, what shares that way is no hindrance
-    const clear = (on: number): boolean => (this.from[state] === -1 ? joined(occupancy, on, net) : same(occupancy, on, net));
+    const clear = (on: number): boolean =>
+      this.from[state] === -1 ? joined(occupancy, on, net) : same(occupancy, on, net);
     const onOther = !clear(here) || !clear(along);
     for (let direction = 0; direction < 4; direction++) {
       if ((direction + 2) % 4 === heading) continue;
@@ -359,11 +402,17 @@ export class Search {
       if (over !== 0 && !(over === CROSSABLE && !level)) continue;
       if (bends && grid.covered[node] === CROSSABLE) continue;
       if (!joined(occupancy, occupancy.corner[next]!, net)) continue;
-      const length = level ? Math.abs(grid.xs[next % grid.columns]! - grid.xs[node % grid.columns]!) : Math.abs(grid.ys[Math.floor(next / grid.columns)]! - grid.ys[Math.floor(node / grid.columns)]!);
+      const length = level
+        ? Math.abs(grid.xs[next % grid.columns]! - grid.xs[node % grid.columns]!)
+        : Math.abs(grid.ys[Math.floor(next / grid.columns)]! - grid.ys[Math.floor(node / grid.columns)]!);
       const onOwn = (level ? occupancy.right[edge] : occupancy.down[edge]) === net;
       reach(
         next * 4 + direction,
-        cost + length * (onOwn ? COST.shared : 1 + soft[next]!) + (bends ? COST.bend : 0) + (crosses(occupancy, next, level, net) ? COST.crossing : 0) + (this.spread ? length * COST.close * this.beside(edge, level, net) : 0),
+        cost +
+          length * (onOwn ? COST.shared : 1 + soft[next]!) +
+          (bends ? COST.bend : 0) +
+          (crosses(occupancy, next, level, net) ? COST.crossing : 0) +
+          (this.spread ? length * COST.close * this.beside(edge, level, net) : 0),
         state,
       );
     }
@@ -377,9 +426,9 @@ export function toPoints(grid: Grid, nodes: readonly number[]): Point[] {
     const point = { x: grid.xs[node % grid.columns]!, y: grid.ys[Math.floor(node / grid.columns)]! };
     const [before, last] = [points.at(-2), points.at(-1)];
     if (last && last.x === point.x && last.y === point.y) continue;
-    if (before && last && ((before.x === last.x && last.x === point.x) || (before.y === last.y && last.y === point.y))) points.pop();
+    if (before && last && ((before.x === last.x && last.x === point.x) || (before.y === last.y && last.y === point.y)))
+      points.pop();
     points.push(point);
   }
   return points;
 }
-

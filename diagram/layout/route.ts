@@ -19,12 +19,20 @@ interface Routed {
 /** How often all runs may look for a better way: once only where they are many. */
 const roundsFor = (runs: number): number => (runs > 160 ? 1 : 2);
 
-const SPAN = (request: RouteRequest): number => Math.abs(request.from.x - request.to.x) + Math.abs(request.from.y - request.to.y);
-const isStraight = ({ from, to }: RouteRequest): boolean => from.x === to.x || from.y === to.y;
+const SPAN = (request: RouteRequest): number =>
+  Math.abs(request.from.x - request.to.x) + Math.abs(request.from.y - request.to.y);
+/** True for ends on one line that look along it. */
+const isStraight = ({ from, to }: RouteRequest): boolean => {
+  const upright = from.sides[0] === 'up' || from.sides[0] === 'down';
+  return upright ? from.x === to.x : from.y === to.y;
+};
 
 /** The order in which runs are routed: those that can be straight, then by length, then by id. */
 const inOrder = (a: RouteRequest, b: RouteRequest): number =>
-  Number(a.late ?? false) - Number(b.late ?? false) || Number(isStraight(b)) - Number(isStraight(a)) || SPAN(a) - SPAN(b) || byCode(a.id, b.id);
+  Number(a.late ?? false) - Number(b.late ?? false) ||
+  Number(isStraight(b)) - Number(isStraight(a)) ||
+  SPAN(a) - SPAN(b) ||
+  byCode(a.id, b.id);
 
 /** True where a run costs more than the shortest way with the fewest bends, which none can beat. */
 function couldBeBetter({ request: { from, to }, nodes, cost }: Routed): boolean {
@@ -120,7 +128,12 @@ class Router {
   }
 }
 
-const STEP: Record<Side, Point> = { up: { x: 0, y: -1 }, down: { x: 0, y: 1 }, left: { x: -1, y: 0 }, right: { x: 1, y: 0 } };
+const STEP: Record<Side, Point> = {
+  up: { x: 0, y: -1 },
+  down: { x: 0, y: 1 },
+  left: { x: -1, y: 0 },
+  right: { x: 1, y: 0 },
+};
 
 /** The plain way, taken only where no free one exists: out of both terminals and square across. */
 export function elbow(from: RouteEnd, to: RouteEnd): Point[] {
@@ -132,10 +145,16 @@ export function elbow(from: RouteEnd, to: RouteEnd): Point[] {
   for (const { x, y } of [from, p, corner, q, to]) {
     const [before, last] = [points.at(-2), points.at(-1)];
     if (last && last.x === x && last.y === y) continue;
-    if (before && last && ((before.x === last.x && last.x === x) || (before.y === last.y && last.y === y))) points.pop();
+    if (before && last && ((before.x === last.x && last.x === x) || (before.y === last.y && last.y === y)))
+      points.pop();
     points.push({ x, y });
   }
-  return points.length > 1 ? points : [{ x: from.x, y: from.y }, { x: to.x, y: to.y }];
+  return points.length > 1
+    ? points
+    : [
+        { x: from.x, y: from.y },
+        { x: to.x, y: to.y },
+      ];
 }
 
 export interface Routes {
@@ -149,7 +168,12 @@ export interface Routes {
  * @param options.spread keep a free line between runs where there is room
  * @param options.pins terminals that nothing is wired to: no run passes over them
  */
-export function routeAll(requests: readonly RouteRequest[], obstacles: readonly Obstacle[], softs: readonly Soft[] = [], options: { spread?: boolean; pins?: readonly Point[] } = {}): Routes {
+export function routeAll(
+  requests: readonly RouteRequest[],
+  obstacles: readonly Obstacle[],
+  softs: readonly Soft[] = [],
+  options: { spread?: boolean; pins?: readonly Point[] } = {},
+): Routes {
   const sorted = [...requests].sort(inOrder);
   const result: Routes = { points: new Map(), forced: [] };
   const grid = buildGrid(obstacles, requests, softs);
@@ -162,9 +186,20 @@ export function routeAll(requests: readonly RouteRequest[], obstacles: readonly 
     netOf[strands.get(strand)!] = nets.get(net)!;
     familyOf[strands.get(strand)!] = families.get(family)!;
   }
-  const all = sorted.map((request): Routed => ({ request, net: strands.get(request.strand)!, nodes: null, cost: Infinity }));
+  const all = sorted.map((request): Routed => ({
+    request,
+    net: strands.get(request.strand)!,
+    nodes: null,
+    cost: Infinity,
+  }));
   if (grid) {
-    const router = new Router(grid, terminalNodes(grid, all, netOf, options.pins ?? []), netOf, familyOf, options.spread ?? false);
+    const router = new Router(
+      grid,
+      terminalNodes(grid, all, netOf, options.pins ?? []),
+      netOf,
+      familyOf,
+      options.spread ?? false,
+    );
     for (const routed of all) router.route(routed);
     for (let round = 0; round < roundsFor(all.length); round++) {
       let changed = false;
@@ -191,19 +226,28 @@ function numbered(names: readonly string[]): Map<string, number> {
 }
 
 /** Terminals are corners from the start: no run of another net passes over one. A terminal of several nets belongs to none. */
-function terminalNodes(grid: Grid, all: readonly Routed[], netOf: readonly number[], pins: readonly Point[]): Map<number, number> {
+function terminalNodes(
+  grid: Grid,
+  all: readonly Routed[],
+  netOf: readonly number[],
+  pins: readonly Point[],
+): Map<number, number> {
   const nodes = new Map<number, number>();
   for (const pin of pins) {
     const node = nodeAt(grid, pin);
     // a pin that no line of the grid meets is in nobody's way
-    if (grid.xs[node % grid.columns] === pin.x && grid.ys[Math.floor(node / grid.columns)] === pin.y) nodes.set(node, -1);
+    if (grid.xs[node % grid.columns] === pin.x && grid.ys[Math.floor(node / grid.columns)] === pin.y)
+      nodes.set(node, -1);
   }
   const wired = new Map<number, number>();
   for (const { request, net } of all)
     for (const end of [request.from, request.to]) {
       const node = nodeAt(grid, end);
       const before = wired.get(node);
-      wired.set(node, before === undefined || before === net ? net : before > 0 && netOf[before] === netOf[net] ? before : -1);
+      wired.set(
+        node,
+        before === undefined || before === net ? net : before > 0 && netOf[before] === netOf[net] ? before : -1,
+      );
     }
   for (const [node, net] of wired) nodes.set(node, net);
   return nodes;

@@ -34,7 +34,10 @@ export function ratingLines(part: Part): string[] {
       case 'rcd':
         return [join(amps(part.rating), residual(part))];
       case 'rcbo':
-        return [join(`${part.curve ?? ''}${part.rating ?? ''}`, polesOf(part) === 2 && part.poles === 2 && '2P'), residual(part)];
+        return [
+          join(`${part.curve ?? ''}${part.rating ?? ''}`, polesOf(part) === 2 && part.poles === 2 && '2P'),
+          residual(part),
+        ];
       case 'spd':
         return [part.class ? `class ${part.class}` : ''];
       case 'line-bar':
@@ -42,7 +45,11 @@ export function ratingLines(part: Part): string[] {
       case 'changeover':
         return [join(amps(part.rating), polesOf(part) === 2 && '2P')];
       case 'inverter':
-        return [part.va ? `${part.va} VA` : '', part.neutral ? `N ${part.neutral}` : '', part.bond ? 'bonds on battery' : ''];
+        return [
+          part.va ? `${part.va} VA` : '',
+          part.neutral ? `N ${part.neutral}` : '',
+          part.bond ? 'bonds on battery' : '',
+        ];
       case 'battery':
         return [
           join(
@@ -75,4 +82,5 @@ export function cableSize(cable: Cable, drawnCores: number): string {
 export const lengthText = (metres: number): string => `${Number(metres.toFixed(1))} m`;
 
 /** "230 V 50 Hz, TT". */
-export const supplyText = (doc: Installation): string => `${doc.supply.voltage} V ${doc.supply.frequency} Hz, ${doc.supply.system}`;
+export const supplyText = (doc: Installation): string =>
+  `${doc.supply.voltage} V ${doc.supply.frequency} Hz, ${doc.supply.system}`;

@@ -33,8 +33,11 @@ export function runPath(run: SceneRun, radius = HOP_RADIUS): string {
   for (const point of rest) {
     if (point.y === at.y) {
       const right = point.x > at.x;
-      const hops = run.hops.filter((hop) => hop.y === at.y && (hop.x - at.x) * (hop.x - point.x) < 0).sort((a, b) => (right ? a.x - b.x : b.x - a.x));
-      for (const hop of hops) d += `H${hop.x - (right ? radius : -radius)}A${radius} ${radius} 0 0 ${right ? 1 : 0} ${hop.x + (right ? radius : -radius)} ${hop.y}`;
+      const hops = run.hops
+        .filter((hop) => hop.y === at.y && (hop.x - at.x) * (hop.x - point.x) < 0)
+        .sort((a, b) => (right ? a.x - b.x : b.x - a.x));
+      for (const hop of hops)
+        d += `H${hop.x - (right ? radius : -radius)}A${radius} ${radius} 0 0 ${right ? 1 : 0} ${hop.x + (right ? radius : -radius)} ${hop.y}`;
     }
     d += `L${point.x} ${point.y}`;
     at = point;
@@ -55,7 +58,8 @@ const text = (t: SceneText): TextMark => ({
   ...(t.spaced && { spaced: true }),
 });
 
-const circle = (at: Point, r: number): string => `M${at.x - r} ${at.y}A${r} ${r} 0 1 0 ${at.x + r} ${at.y}A${r} ${r} 0 1 0 ${at.x - r} ${at.y}Z`;
+const circle = (at: Point, r: number): string =>
+  `M${at.x - r} ${at.y}A${r} ${r} 0 1 0 ${at.x + r} ${at.y}A${r} ${r} 0 1 0 ${at.x - r} ${at.y}Z`;
 const rect = (x: number, y: number, w: number, h: number): string => `M${x} ${y}H${x + w}V${y + h}H${x}Z`;
 
 export function strokeMark(stroke: Stroke, ink: string): PathMark {
@@ -88,8 +92,10 @@ function runMarks(scene: Scene): Mark[] {
   };
   const marks: Mark[] = [];
   for (const run of plain) marks.push(core(run));
-  for (const run of cased) marks.push({ kind: 'path', d: runPath(run), stroke: light.ink, width: widths.outer, cap: 'butt' });
-  for (const run of cased) marks.push({ kind: 'path', d: runPath(run), stroke: light.paper, width: widths.inner, cap: 'butt' });
+  for (const run of cased)
+    marks.push({ kind: 'path', d: runPath(run), stroke: light.ink, width: widths.outer, cap: 'butt' });
+  for (const run of cased)
+    marks.push({ kind: 'path', d: runPath(run), stroke: light.paper, width: widths.inner, cap: 'butt' });
   if (onCores) for (const run of cased) marks.push(core(run));
   for (const run of cased)
     for (const hop of run.hops) {
@@ -114,7 +120,12 @@ function tickMarks(run: SceneRun): Mark[] {
       return { x: at.x + p.x, y: at.y + p.y };
     };
     const along = 200 * i;
-    const line = (a: Point, b: Point): PathMark => ({ kind: 'path', d: `M${a.x} ${a.y}L${b.x} ${b.y}`, stroke: light.ink, width: STROKE.normal });
+    const line = (a: Point, b: Point): PathMark => ({
+      kind: 'path',
+      d: `M${a.x} ${a.y}L${b.x} ${b.y}`,
+      stroke: light.ink,
+      width: STROKE.normal,
+    });
     const marks: Mark[] = [line(spin(-half, along + 120), spin(half, along - 120))];
     if (core === 'N') marks.push({ kind: 'path', d: circle(spin(half, along - 120), 62), fill: light.ink });
     if (core === 'E') marks.push(line(spin(half - 65, along - 205), spin(half + 65, along - 35)));
@@ -126,27 +137,58 @@ function symbolGroup(part: ScenePart): Group {
   const symbol = symbolById(part.symbol, part.width);
   const origin = turnedPoint(0, 0, symbol, part.turn);
   const ink = part.kind === 'neutral-bar' ? cores.light.BU! : part.kind === 'earth-bar' ? cores.light.GNYE! : light.ink;
-  return { x: part.x + origin.x, y: part.y + origin.y, scale: 1, ...(part.turn && { turn: part.turn }), marks: symbol.strokes.map((stroke) => strokeMark(stroke, ink)) };
+  return {
+    x: part.x + origin.x,
+    y: part.y + origin.y,
+    scale: 1,
+    ...(part.turn && { turn: part.turn }),
+    marks: symbol.strokes.map((stroke) => strokeMark(stroke, ink)),
+  };
 }
 
 /** Everything of a scene, in painting order. */
 export function sceneGroups(scene: Scene): Group[] {
   const ground: Mark[] = [];
-  for (const frame of scene.frames) if (frame.kind === 'lane') ground.push({ kind: 'path', d: rect(frame.x, frame.y, frame.width, frame.height), fill: light.lane });
+  for (const frame of scene.frames)
+    if (frame.kind === 'lane')
+      ground.push({ kind: 'path', d: rect(frame.x, frame.y, frame.width, frame.height), fill: light.lane });
   scene.bands.forEach((band, i) => {
-    if (i > 0) ground.push({ kind: 'path', d: `M250 ${band.y}H${scene.width - 250}`, stroke: light.hair, width: STROKE.thin });
+    if (i > 0)
+      ground.push({ kind: 'path', d: `M250 ${band.y}H${scene.width - 250}`, stroke: light.hair, width: STROKE.thin });
     const spaced = textWidth(band.name, BODY, true) + 300 <= band.height;
     const size = spaced || textWidth(band.name, BODY) + 200 <= band.height ? BODY : 180;
     if (textWidth(band.name, size, spaced) <= band.height)
-      ground.push({ kind: 'text', x: 900, y: band.y + band.height / 2, text: band.name, size, colour: light.grey, anchor: 'middle', turn: 3, ...(spaced && { spaced }) });
+      ground.push({
+        kind: 'text',
+        x: 900,
+        y: band.y + band.height / 2,
+        text: band.name,
+        size,
+        colour: light.grey,
+        anchor: 'middle',
+        turn: 3,
+        ...(spaced && { spaced }),
+      });
   });
   for (const frame of scene.frames) {
     const box = rect(frame.x, frame.y, frame.width, frame.height);
-    if (frame.kind === 'room') ground.push({ kind: 'path', d: box, stroke: light.rule, width: STROKE.normal, dash: [190, 125] });
+    if (frame.kind === 'room')
+      ground.push({ kind: 'path', d: box, stroke: light.rule, width: STROKE.normal, dash: [190, 125] });
     if (frame.kind === 'switchboard')
-      ground.push({ kind: 'path', d: box, stroke: scene.face === 'overview' ? light.ink : light.rule, width: STROKE.normal, ...(scene.face === 'connections' && { dash: [220, 150] as const }) });
+      ground.push({
+        kind: 'path',
+        d: box,
+        stroke: scene.face === 'overview' ? light.ink : light.rule,
+        width: STROKE.normal,
+        ...(scene.face === 'connections' && { dash: [220, 150] as const }),
+      });
     if (frame.kind === 'brace')
-      ground.push({ kind: 'path', d: `M${frame.x} ${frame.y + frame.height}V${frame.y}H${frame.x + frame.width}V${frame.y + frame.height}`, stroke: light.ink, width: STROKE.normal });
+      ground.push({
+        kind: 'path',
+        d: `M${frame.x} ${frame.y + frame.height}V${frame.y}H${frame.x + frame.width}V${frame.y + frame.height}`,
+        stroke: light.ink,
+        width: STROKE.normal,
+      });
   }
   const wires = runMarks(scene);
   const symbols = scene.parts.map((part) => ({ part, group: symbolGroup(part) }));
@@ -162,16 +204,41 @@ export function sceneGroups(scene: Scene): Group[] {
   for (const run of scene.runs) over.push(...tickMarks(run));
   for (const dot of scene.dots) over.push({ kind: 'path', d: circle(dot, 95), fill: light.ink });
   if (scene.face === 'connections')
-    for (const part of scene.parts) for (const t of part.terminals) over.push({ kind: 'path', d: circle(t, 150), stroke: light.ink, width: STROKE.normal, fill: light.paper });
+    for (const part of scene.parts)
+      for (const t of part.terminals)
+        over.push({ kind: 'path', d: circle(t, 150), stroke: light.ink, width: STROKE.normal, fill: light.paper });
   for (const ring of scene.rings) {
-    over.push({ kind: 'path', d: circle(ring, ring.radius), stroke: light.ink, width: STROKE.normal, fill: light.paper });
-    over.push({ kind: 'text', x: ring.x, y: ring.y + 125, text: ring.text, size: 250, bold: true, colour: light.ink, anchor: 'middle' });
+    over.push({
+      kind: 'path',
+      d: circle(ring, ring.radius),
+      stroke: light.ink,
+      width: STROKE.normal,
+      fill: light.paper,
+    });
+    over.push({
+      kind: 'text',
+      x: ring.x,
+      y: ring.y + 125,
+      text: ring.text,
+      size: 250,
+      bold: true,
+      colour: light.ink,
+      anchor: 'middle',
+    });
   }
   for (const part of scene.parts) {
     const symbol = symbolById(part.symbol, part.width);
     for (const t of symbol.texts ?? []) {
       const at = turnedPoint(t.x, t.y, symbol, part.turn);
-      over.push({ kind: 'text', x: part.x + at.x, y: part.y + at.y, text: t.text, size: t.size, colour: light.ink, anchor: t.anchor ?? 'start' });
+      over.push({
+        kind: 'text',
+        x: part.x + at.x,
+        y: part.y + at.y,
+        text: t.text,
+        size: t.size,
+        colour: light.ink,
+        anchor: t.anchor ?? 'start',
+      });
     }
     over.push(...part.texts.map(text));
   }

@@ -29,7 +29,10 @@ export interface Area {
   height: number;
 }
 
-export const paperSize = (paper: PaperSize): { width: number; height: number } => ({ width: SIZES[paper].width, height: SIZES[paper].height });
+export const paperSize = (paper: PaperSize): { width: number; height: number } => ({
+  width: SIZES[paper].width,
+  height: SIZES[paper].height,
+});
 
 /** Inside the frame. */
 export function frameOf(paper: PaperSize): Area {
@@ -43,12 +46,18 @@ const rect = ({ x, y, width, height }: Area): string => `M${x} ${y}H${x + width}
 export function borderMarks(paper: PaperSize): Mark[] {
   const { width, height, columns, rows } = SIZES[paper];
   const frame = frameOf(paper);
-  const outer = { x: frame.x - GRID, y: frame.y - GRID, width: frame.width + 2 * GRID, height: frame.height + 2 * GRID };
+  const outer = {
+    x: frame.x - GRID,
+    y: frame.y - GRID,
+    width: frame.width + 2 * GRID,
+    height: frame.height + 2 * GRID,
+  };
   const marks: Mark[] = [
     { kind: 'path', d: rect(outer), stroke: light.rule, width: 18 },
     { kind: 'path', d: rect(frame), stroke: light.ink, width: 70 },
   ];
-  const label = (x: number, y: number, text: string) => marks.push({ kind: 'text', x, y: y + 125, text, size: 250, colour: light.grey, anchor: 'middle' });
+  const label = (x: number, y: number, text: string) =>
+    marks.push({ kind: 'text', x, y: y + 125, text, size: 250, colour: light.grey, anchor: 'middle' });
   const line = (d: string) => marks.push({ kind: 'path', d, stroke: light.rule, width: 18 });
   for (let i = 0; i < columns; i++) {
     const x = frame.x + (frame.width * (i + 0.5)) / columns;

@@ -18,14 +18,24 @@ function spans(scene: Scene, axis: 'x' | 'y'): Span[] {
   const box = (b: Area, cost: number) => found.push({ from: b[axis], to: b[axis] + b[size], cost });
   for (const part of scene.parts) box(part, part.kind.endsWith('-bar') ? 1 : 100);
   for (const frame of scene.frames) if (frame.kind !== 'lane') box(frame, frame.kind === 'brace' ? 40 : 12);
-  const texts = [...scene.texts, ...scene.parts.flatMap((p) => p.texts), ...scene.runs.flatMap((r) => r.texts), ...scene.frames.flatMap((f) => f.texts)];
+  const texts = [
+    ...scene.texts,
+    ...scene.parts.flatMap((p) => p.texts),
+    ...scene.runs.flatMap((r) => r.texts),
+    ...scene.frames.flatMap((f) => f.texts),
+  ];
   for (const text of texts) box(textBox(text), 60);
-  for (const ring of scene.rings) box({ x: ring.x - ring.radius, y: ring.y - ring.radius, width: 2 * ring.radius, height: 2 * ring.radius }, 100);
+  for (const ring of scene.rings)
+    box({ x: ring.x - ring.radius, y: ring.y - ring.radius, width: 2 * ring.radius, height: 2 * ring.radius }, 100);
   for (const run of scene.runs)
     for (let i = 0; i + 1 < run.points.length; i++) {
       const [a, b] = [run.points[i]!, run.points[i + 1]!];
       // a run that is cut lengthwise would vanish on both sheets
-      found.push(a[axis] === b[axis] ? { from: a[axis] - 60, to: a[axis] + 60, cost: 200 } : { from: Math.min(a[axis], b[axis]), to: Math.max(a[axis], b[axis]), cost: 1 });
+      found.push(
+        a[axis] === b[axis]
+          ? { from: a[axis] - 60, to: a[axis] + 60, cost: 200 }
+          : { from: Math.min(a[axis], b[axis]), to: Math.max(a[axis], b[axis]), cost: 1 },
+      );
     }
   return found;
 }
@@ -39,7 +49,12 @@ export function contentOf(scene: Scene): Area {
   const right = Math.max(0, ...xs.map((s) => s.to), ...lanes.map((f) => f.x + f.width)) + MODULE / 2;
   const top = bands ? 0 : Math.min(scene.height, ...ys.map((s) => s.from)) - MODULE;
   const bottom = Math.max(0, ...ys.map((s) => s.to), ...lanes.map((f) => f.y + f.height)) + MODULE / 2;
-  return { x: Math.max(0, left), y: Math.max(0, top), width: Math.max(MODULE, right - Math.max(0, left)), height: Math.max(MODULE, bottom - Math.max(0, top)) };
+  return {
+    x: Math.max(0, left),
+    y: Math.max(0, top),
+    width: Math.max(MODULE, right - Math.max(0, left)),
+    height: Math.max(MODULE, bottom - Math.max(0, top)),
+  };
 }
 
 /**
@@ -56,7 +71,9 @@ export function cuts(scene: Scene, axis: 'x' | 'y', from: number, end: number, m
     let least = Infinity;
     // from the far end back over two fifths of the sheet: the fuller sheet wins where the cost is the same
     for (let at = Math.floor((start + most) / MODULE) * MODULE - MODULE / 2; at > start + most * 0.6; at -= MODULE) {
-      const cost = all.reduce((sum, span) => (span.from < at && at < span.to ? sum + span.cost : sum), 0) + (start + most - at) / 4000;
+      const cost =
+        all.reduce((sum, span) => (span.from < at && at < span.to ? sum + span.cost : sum), 0) +
+        (start + most - at) / 4000;
       if (cost < least) {
         least = cost;
         best = at;

@@ -33,7 +33,11 @@ export function svgGroup(group: Group, scale = 1, name = 'g'): string {
   const inner = group.scale * scale;
   const { clip } = group;
   const id = `clip-${name}`;
-  const cut = clip ? `<clipPath id="${id}"><rect x="${num(clip.x)}" y="${num(clip.y)}" width="${num(clip.width)}" height="${num(clip.height)}"/></clipPath>` : '';
-  const content = group.marks.map((mark) => svgMark(mark, inner)).join('') + (group.groups ?? []).map((child, i) => svgGroup(child, inner, `${name}-${i}`)).join('');
+  const cut = clip
+    ? `<clipPath id="${id}"><rect x="${num(clip.x)}" y="${num(clip.y)}" width="${num(clip.width)}" height="${num(clip.height)}"/></clipPath>`
+    : '';
+  const content =
+    group.marks.map((mark) => svgMark(mark, inner)).join('') +
+    (group.groups ?? []).map((child, i) => svgGroup(child, inner, `${name}-${i}`)).join('');
   return `<g transform="translate(${num(group.x)} ${num(group.y)})${grow}${spin}">${cut}${clip ? `<g clip-path="url(#${id})">${content}</g>` : content}</g>`;
 }

@@ -12,7 +12,8 @@ export interface SvgOptions extends SheetOptions {
   fonts?: { regular: string; bold: string };
 }
 
-const fontFace = (weight: number, data: string): string => `@font-face{font-family:"JetBrains Mono";font-weight:${weight};src:url(data:font/woff2;base64,${data}) format("woff2")}`;
+const fontFace = (weight: number, data: string): string =>
+  `@font-face{font-family:"JetBrains Mono";font-weight:${weight};src:url(data:font/woff2;base64,${data}) format("woff2")}`;
 
 /** One page as an SVG document. The user unit is 1/100 mm; width and height are stated in mm. */
 export function pageSvg(page: Page, title: string, fonts?: SvgOptions['fonts']): string {
@@ -31,5 +32,9 @@ export function paperSvg(doc: Installation, options: SvgOptions): string {
   const pages = sheetPages(doc, options);
   const number = Math.min(Math.max(1, options.sheet ?? 1), pages.length);
   const { title } = options;
-  return pageSvg(pages[number - 1]!, `${title.number} ${title.title}, revision ${title.revision}, ${title.drawnBy}, ${title.drawnOn}`, options.fonts);
+  return pageSvg(
+    pages[number - 1]!,
+    `${title.number} ${title.title}, revision ${title.revision}, ${title.drawnBy}, ${title.drawnOn}`,
+    options.fonts,
+  );
 }

@@ -86,18 +86,45 @@ export function titleBlockMarks(doc: Installation, title: SheetTitle, place: She
     ],
   ];
   const marks: Mark[] = [
-    { kind: 'path', d: `M${x} ${y}H${x + TITLE_WIDTH}V${y + TITLE_HEIGHT}H${x}Z`, stroke: light.ink, width: 50, fill: light.paper },
+    {
+      kind: 'path',
+      d: `M${x} ${y}H${x + TITLE_WIDTH}V${y + TITLE_HEIGHT}H${x}Z`,
+      stroke: light.ink,
+      width: 50,
+      fill: light.paper,
+    },
   ];
   rows.forEach((cells, i) => {
     const top = y + ROW * i;
     let left = x;
     cells.forEach((cell, n) => {
-      marks.push({ kind: 'text', x: left + 150, y: top + 300, text: clipped(cell.label, LABEL, cell.width - 250), size: LABEL, colour: light.grey });
-      marks.push({ kind: 'text', x: left + 150, y: top + 720, text: clipped(cell.value, VALUE, cell.width - 250), size: VALUE, colour: light.ink, ...(cell.bold && { bold: true }) });
+      marks.push({
+        kind: 'text',
+        x: left + 150,
+        y: top + 300,
+        text: clipped(cell.label, LABEL, cell.width - 250),
+        size: LABEL,
+        colour: light.grey,
+      });
+      marks.push({
+        kind: 'text',
+        x: left + 150,
+        y: top + 720,
+        text: clipped(cell.value, VALUE, cell.width - 250),
+        size: VALUE,
+        colour: light.ink,
+        ...(cell.bold && { bold: true }),
+      });
       left += cell.width;
-      if (n < cells.length - 1) marks.push({ kind: 'path', d: `M${left} ${top}V${top + ROW}`, stroke: light.ink, width: 18 });
+      if (n < cells.length - 1)
+        marks.push({ kind: 'path', d: `M${left} ${top}V${top + ROW}`, stroke: light.ink, width: 18 });
     });
-    marks.push({ kind: 'path', d: `M${x} ${top + ROW}H${x + TITLE_WIDTH}`, stroke: light.ink, width: i === 0 ? 35 : 18 });
+    marks.push({
+      kind: 'path',
+      d: `M${x} ${top + ROW}H${x + TITLE_WIDTH}`,
+      stroke: light.ink,
+      width: i === 0 ? 35 : 18,
+    });
   });
   breakLines(CAUTIONS, LABEL, TITLE_WIDTH - 300).forEach((text, i) =>
     marks.push({ kind: 'text', x: x + 150, y: y + 3 * ROW + 310 + 295 * i, text, size: LABEL, colour: light.ink }),

@@ -16,6 +16,10 @@ export const appliance: SymbolFamily = {
     width: 1500,
     height: 1500,
     strokes: [box(0, 0, 1500, 1500), { d: 'M375 0V1500M750 0V1500M1125 0V1500' }],
-    terminals: { L: { x: 750, y: 0, side: 'up' }, N: { x: 1500, y: 750, side: 'right' }, E: { x: 750, y: 1500, side: 'down' } },
+    terminals: {
+      L: { x: 750, y: 0, side: 'up' },
+      N: { x: 1500, y: 750, side: 'right' },
+      E: { x: 750, y: 1500, side: 'down' },
+    },
   },
 };

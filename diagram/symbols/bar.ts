@@ -33,7 +33,12 @@ export function barTerminal(kind: BarKind, n: number): TerminalPlace {
 /** Half the thickness of a bar. */
 const HALF = 72;
 /** Pieces of a bar, so that it is told apart without colour: line whole, neutral in long pieces, earth in short ones. */
-const PIECES: Record<BarKind, [piece: number, gap: number] | null> = { 'line-bar': null, 'neutral-bar': [750, 125], 'earth-bar': [375, 125], joint: null };
+const PIECES: Record<BarKind, [piece: number, gap: number] | null> = {
+  'line-bar': null,
+  'neutral-bar': [750, 125],
+  'earth-bar': [375, 125],
+  joint: null,
+};
 
 function barPath(kind: BarKind, from: number, to: number): string {
   const piece = PIECES[kind];
@@ -46,7 +51,9 @@ function barPath(kind: BarKind, from: number, to: number): string {
 
 function strokesOf(kind: BarKind, face: Face, length: number, cased: boolean): Stroke[] {
   if (kind === 'joint')
-    return face === 'overview' ? [circle(END / 2, END / 2, 110, 'ink')] : [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE)];
+    return face === 'overview'
+      ? [circle(END / 2, END / 2, 110, 'ink')]
+      : [box(0, MODULE, length, BAR_HEIGHT - 2 * MODULE)];
   return [{ d: barPath(kind, 0, length), fill: cased ? 'paper' : 'ink' }];
 }
 

@@ -5,7 +5,9 @@ import type { Stroke, TerminalPlace } from './types';
 
 /** Two fixed contacts and the blade between them, drawn at rest on neither. */
 const pole = (a: number, b: number, out: number, y: number): Stroke[] => [
-  { d: `M${a} ${y}V${y + 375}M${b} ${y}V${y + 375}M${out} ${y + 875}V${y + 1250}M${out} ${y + 875}L${a + 60} ${y + 400}` },
+  {
+    d: `M${a} ${y}V${y + 375}M${b} ${y}V${y + 375}M${out} ${y + 875}V${y + 1250}M${out} ${y + 875}L${a + 60} ${y + 400}`,
+  },
   circle(a, y + 375, 62, 'paper'),
   circle(b, y + 375, 62, 'paper'),
 ];
@@ -15,7 +17,10 @@ function boxed(marks: readonly (readonly [string, string, string])[]): Shape {
   const strokes: Stroke[] = [box(0, 0, 3000 * marks.length, 2500)];
   marks.forEach(([a, b, out], n) => {
     const x = 3000 * n;
-    strokes.push({ d: `M${x + 750} 500V625M${x + 2250} 500V625M${x + 1500} 1875V2000` }, ...pole(x + 750, x + 2250, x + 1500, 625));
+    strokes.push(
+      { d: `M${x + 750} 500V625M${x + 2250} 500V625M${x + 1500} 1875V2000` },
+      ...pole(x + 750, x + 2250, x + 1500, 625),
+    );
     terminals[a] = { x: x + 750, y: 500, side: 'up' };
     terminals[b] = { x: x + 2250, y: 500, side: 'up' };
     terminals[out] = { x: x + 1500, y: 2000, side: 'down' };

@@ -29,6 +29,10 @@ export const fan: SymbolFamily = {
     width: 1500,
     height: 1500,
     strokes: blades(750, 750, 750),
-    terminals: { L: { x: 750, y: 0, side: 'up' }, N: { x: 1500, y: 750, side: 'right' }, E: { x: 750, y: 1500, side: 'down' } },
+    terminals: {
+      L: { x: 750, y: 0, side: 'up' },
+      N: { x: 1500, y: 750, side: 'right' },
+      E: { x: 750, y: 1500, side: 'down' },
+    },
   },
 };

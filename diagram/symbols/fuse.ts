@@ -10,6 +10,11 @@ export const fuse: SymbolFamily = {
   name: 'fuse',
   standard: 'IEC 60617, fuse, general symbol (from memory)',
   kinds: ['fuse'],
-  overview: { width: 1000, height: 1250, strokes: element(500, 0), terminals: columnTerminals(500, 1250, ['1'], ['2']) },
+  overview: {
+    width: 1000,
+    height: 1250,
+    strokes: element(500, 0),
+    terminals: columnTerminals(500, 1250, ['1'], ['2']),
+  },
   connections: boxedDevice(ONE_POLE, element),
 };

@@ -31,9 +31,29 @@ import { unknownSymbol } from './unknown';
 
 /** The registry of symbols, in the order of the legend. */
 const FAMILIES: readonly SymbolFamily[] = [
-  supplyArrow, fuse, meter, switchDisconnector, circuitBreaker, residualCurrentDevice, rcbo, surgeArrester, changeover,
-  inverter, battery, earthElectrode, bond, oneWaySwitch, twoWaySwitch, crossSwitch, twoPoleSwitch, regulator,
-  outlet, plug, lamp, fan, appliance,
+  supplyArrow,
+  fuse,
+  meter,
+  switchDisconnector,
+  circuitBreaker,
+  residualCurrentDevice,
+  rcbo,
+  surgeArrester,
+  changeover,
+  inverter,
+  battery,
+  earthElectrode,
+  bond,
+  oneWaySwitch,
+  twoWaySwitch,
+  crossSwitch,
+  twoPoleSwitch,
+  regulator,
+  outlet,
+  plug,
+  lamp,
+  fan,
+  appliance,
 ];
 const BARS: readonly BarKind[] = ['line-bar', 'neutral-bar', 'earth-bar', 'joint'];
 
@@ -73,7 +93,11 @@ export const SHORT_BAR = 4000;
  */
 export function symbolFor(part: Pick<Part, 'kind'> & Partial<Part>, face: Face, count = DEFAULT_COUNT): SymbolData {
   if (isBarKind(part.kind))
-    return barSymbol(part.kind, face, face === 'overview' ? SHORT_BAR : barLength(part.kind, Math.max(count, DEFAULT_COUNT)));
+    return barSymbol(
+      part.kind,
+      face,
+      face === 'overview' ? SHORT_BAR : barLength(part.kind, Math.max(count, DEFAULT_COUNT)),
+    );
   const family = familyOf.get(part.kind);
   if (!family) return unknownSymbol;
   if (face === 'overview') return byName.get(family.id)!;
@@ -84,7 +108,8 @@ export function symbolFor(part: Pick<Part, 'kind'> & Partial<Part>, face: Face, 
 /** A symbol by the id a scene names; a bar is drawn as long as the scene part is wide. Never fails: the crossed box stands in. */
 export function symbolById(id: string, width = 0): SymbolData {
   const [kind = '', ...variants] = id.split('.');
-  if (isBarKind(kind)) return barSymbol(kind, variants.includes('box') ? 'connections' : 'overview', width, variants.includes('cased'));
+  if (isBarKind(kind))
+    return barSymbol(kind, variants.includes('box') ? 'connections' : 'overview', width, variants.includes('cased'));
   return byName.get(id) ?? unknownSymbol;
 }
 
@@ -105,6 +130,9 @@ export function terminalAt(part: Part, mark: string, position: Position, face: F
 
 /** Every symbol of the overview once, in the order of the legend; only those of `kinds` where given. */
 export function legend(kinds?: ReadonlySet<Kind>): SymbolData[] {
-  const symbols = [...FAMILIES.map((family) => byName.get(family.id)!), ...BARS.map((kind) => barSymbol(kind, 'overview', 1500))];
+  const symbols = [
+    ...FAMILIES.map((family) => byName.get(family.id)!),
+    ...BARS.map((kind) => barSymbol(kind, 'overview', 1500)),
+  ];
   return kinds ? symbols.filter((symbol) => symbol.kinds.some((kind) => kinds.has(kind))) : symbols;
 }

@@ -16,6 +16,10 @@ export const lamp: SymbolFamily = {
     width: 1500,
     height: 1500,
     strokes: [circle(750, 750, 750, 'paper'), { d: 'M220 220L1280 1280M1280 220L220 1280' }],
-    terminals: { L: { x: 750, y: 0, side: 'up' }, N: { x: 1500, y: 750, side: 'right' }, E: { x: 750, y: 1500, side: 'down' } },
+    terminals: {
+      L: { x: 750, y: 0, side: 'up' },
+      N: { x: 1500, y: 750, side: 'right' },
+      E: { x: 750, y: 1500, side: 'down' },
+    },
   },
 };

@@ -52,6 +52,32 @@ export const dark: Palette = {
 
 /** Core colours by IEC 60757 code, for each ground. Meaning never rests on them: dash and label tell the cores apart. */
 export const cores: Record<'light' | 'dark', Record<string, string>> = {
-  light: { BN: '#7a4a24', BU: '#1f66b8', BK: '#17242b', GY: '#6b767b', RD: '#b3261e', YE: '#8a6d00', GNYE: '#2f7a24', GN: '#2f7a24', OG: '#a8560a', VT: '#6a3fa0', PK: '#a8477a', WH: '#7d888c' },
-  dark: { BN: '#e0a37a', BU: '#7fb2ea', BK: '#c3ced2', GY: '#9fb0b8', RD: '#ff8a7a', YE: '#e0c25a', GNYE: '#8fcf7a', GN: '#8fcf7a', OG: '#f0a860', VT: '#c0a3f0', PK: '#f0a0c8', WH: '#e8eef0' },
+  light: {
+    BN: '#7a4a24',
+    BU: '#1f66b8',
+    BK: '#17242b',
+    GY: '#6b767b',
+    RD: '#b3261e',
+    YE: '#8a6d00',
+    GNYE: '#2f7a24',
+    GN: '#2f7a24',
+    OG: '#a8560a',
+    VT: '#6a3fa0',
+    PK: '#a8477a',
+    WH: '#7d888c',
+  },
+  dark: {
+    BN: '#e0a37a',
+    BU: '#7fb2ea',
+    BK: '#c3ced2',
+    GY: '#9fb0b8',
+    RD: '#ff8a7a',
+    YE: '#e0c25a',
+    GNYE: '#8fcf7a',
+    GN: '#8fcf7a',
+    OG: '#f0a860',
+    VT: '#c0a3f0',
+    PK: '#f0a0c8',
+    WH: '#e8eef0',
+  },
 };

@@ -9,7 +9,11 @@ export const plug: SymbolFamily = {
   overview: {
     width: 500,
     height: 750,
-    strokes: [{ d: 'M188 0H312V250H188Z', fill: 'ink' }, { d: 'M62 250H438V438L312 563H188L62 438Z', fill: 'paper' }, { d: 'M250 563V750' }],
+    strokes: [
+      { d: 'M188 0H312V250H188Z', fill: 'ink' },
+      { d: 'M62 250H438V438L312 563H188L62 438Z', fill: 'paper' },
+      { d: 'M250 563V750' },
+    ],
     terminals: {
       L: { x: 250, y: 750, side: 'down' },
       N: { x: 250, y: 750, side: 'down' },

@@ -5,9 +5,14 @@ import type { Stroke } from './types';
 
 const variable = (x: number, y: number): Stroke[] => [
   box(x - 250, y + 125, 500, 500),
-  { d: `M${x} ${y}V${y + 125}M${x} ${y + 625}V${y + 750}M${x - 312} ${y + 688}L${x + 312} ${y + 62}M${x + 140} ${y + 62}H${x + 312}V${y + 234}` },
+  {
+    d: `M${x} ${y}V${y + 125}M${x} ${y + 625}V${y + 750}M${x - 312} ${y + 688}L${x + 312} ${y + 62}M${x + 140} ${y + 62}H${x + 312}V${y + 234}`,
+  },
 ];
-const boxed = boxedDevice(ONE_POLE, (x, y) => [{ d: `M${x} ${y}V${y + 250}M${x} ${y + 1000}V${y + 1250}` }, ...variable(x, y + 250)]);
+const boxed = boxedDevice(ONE_POLE, (x, y) => [
+  { d: `M${x} ${y}V${y + 250}M${x} ${y + 1000}V${y + 1250}` },
+  ...variable(x, y + 250),
+]);
 
 /** Fan speed. */
 export const regulator: SymbolFamily = {

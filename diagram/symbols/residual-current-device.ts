@@ -9,7 +9,9 @@ const pole = (x: number, y: number): Stroke[] => [...contact(x, y), cross(x, y)]
 export function bothThroughRing(x: number, y: number): Stroke[] {
   const left = x - POLE_PITCH;
   return [
-    { d: `M${left - 130} ${y + 952}H${x + 130}A110 110 0 0 1 ${x + 130} ${y + 1172}H${left - 130}A110 110 0 0 1 ${left - 130} ${y + 952}Z` },
+    {
+      d: `M${left - 130} ${y + 952}H${x + 130}A110 110 0 0 1 ${x + 130} ${y + 1172}H${left - 130}A110 110 0 0 1 ${left - 130} ${y + 952}Z`,
+    },
     { d: `M${left - 240} ${y + 1062}H${left - 440}V${y + 610}H${left - 160}`, weight: 'thin', dash: 'short' },
   ];
 }

@@ -31,11 +31,19 @@ export const disconnector = (x: number, y: number): Stroke[] => [
 
 /** The summation ring round the conductor, and the dashed link by which it opens the contact. */
 export const summationRing = (x: number, y: number, width = 240): Stroke[] => [
-  { d: `M${x - width} ${y + 1062}A${width} 110 0 1 0 ${x + width} ${y + 1062}A${width} 110 0 1 0 ${x - width} ${y + 1062}` },
+  {
+    d: `M${x - width} ${y + 1062}A${width} 110 0 1 0 ${x + width} ${y + 1062}A${width} 110 0 1 0 ${x - width} ${y + 1062}`,
+  },
   { d: `M${x - width} ${y + 1062}H${x - 440}V${y + 610}H${x - 160}`, weight: 'thin', dash: 'short' },
 ];
 
-export function circle(x: number, y: number, r: number, fill: Stroke['fill'] = 'none', weight?: Stroke['weight']): Stroke {
+export function circle(
+  x: number,
+  y: number,
+  r: number,
+  fill: Stroke['fill'] = 'none',
+  weight?: Stroke['weight'],
+): Stroke {
   const d = `M${x - r} ${y}A${r} ${r} 0 1 0 ${x + r} ${y}A${r} ${r} 0 1 0 ${x - r} ${y}Z`;
   return weight ? { d, fill, weight } : { d, fill };
 }

@@ -5,7 +5,10 @@ import type { Stroke } from './types';
 const gap = (x: number, y: number): Stroke[] => [
   box(x - 156, y + 250, 312, 750),
   { d: `M${x} ${y}V${y + 500}M${x} ${y + 1250}V${y + 750}` },
-  { d: `M${x - 78} ${y + 406}H${x + 78}L${x} ${y + 562}ZM${x - 78} ${y + 844}H${x + 78}L${x} ${y + 688}Z`, fill: 'ink' },
+  {
+    d: `M${x - 78} ${y + 406}H${x + 78}L${x} ${y + 562}ZM${x - 78} ${y + 844}H${x + 78}L${x} ${y + 688}Z`,
+    fill: 'ink',
+  },
 ];
 
 export const surgeArrester: SymbolFamily = {
@@ -32,6 +35,10 @@ export const surgeArrester: SymbolFamily = {
       ...gap(750, 500),
       ...gap(2250, 500),
     ],
-    terminals: { L: { x: 750, y: 500, side: 'up' }, N: { x: 2250, y: 500, side: 'up' }, E: { x: 1500, y: 2250, side: 'down' } },
+    terminals: {
+      L: { x: 750, y: 500, side: 'up' },
+      N: { x: 2250, y: 500, side: 'up' },
+      E: { x: 1500, y: 2250, side: 'down' },
+    },
   },
 };

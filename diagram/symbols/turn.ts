@@ -12,7 +12,12 @@ export const turnedSize = (size: { width: number; height: number }, turn: Turn):
   turn % 2 === 0 ? { width: size.width, height: size.height } : { width: size.height, height: size.width };
 
 /** A point of a symbol after turning, measured from the upper left corner of the turned box. */
-export function turnedPoint(x: number, y: number, size: { width: number; height: number }, turn: Turn): { x: number; y: number } {
+export function turnedPoint(
+  x: number,
+  y: number,
+  size: { width: number; height: number },
+  turn: Turn,
+): { x: number; y: number } {
   switch (turn) {
     case 0:
       return { x, y };
@@ -25,7 +30,11 @@ export function turnedPoint(x: number, y: number, size: { width: number; height:
   }
 }
 
-export function turnedTerminal(place: TerminalPlace, size: { width: number; height: number }, turn: Turn): TerminalPlace {
+export function turnedTerminal(
+  place: TerminalPlace,
+  size: { width: number; height: number },
+  turn: Turn,
+): TerminalPlace {
   return { ...turnedPoint(place.x, place.y, size, turn), side: turnedSide(place.side, turn) };
 }
 

@@ -10,11 +10,7 @@ export const twoPoleSwitch: SymbolFamily = {
   overview: {
     width: 750,
     height: 750,
-    strokes: [
-      { d: 'M250 0V750' },
-      circle(250, 500, 94, 'ink'),
-      { d: 'M250 500L469 125L594 200M406 233L531 308' },
-    ],
+    strokes: [{ d: 'M250 0V750' }, circle(250, 500, 94, 'ink'), { d: 'M250 500L469 125L594 200M406 233L531 308' }],
     terminals: columnTerminals(250, 750, ['1', '3'], ['2', '4']),
   },
   connections: boxedDevice(TWO_POLES, contact),

@@ -24,11 +24,7 @@ export const twoWaySwitch: SymbolFamily = {
   connections: {
     width: 2500,
     height: 2500,
-    strokes: [
-      box(0, 0, 2500, 2500),
-      { d: 'M1250 500V812M500 2000V1750M2000 2000V1750' },
-      { d: 'M1250 812L560 1690' },
-    ],
+    strokes: [box(0, 0, 2500, 2500), { d: 'M1250 500V812M500 2000V1750M2000 2000V1750' }, { d: 'M1250 812L560 1690' }],
     terminals: {
       C: { x: 1250, y: 500, side: 'up' },
       '1': { x: 500, y: 2000, side: 'down' },

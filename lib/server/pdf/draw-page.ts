@@ -27,7 +27,11 @@ function drawMark(pdf: Pdf, mark: Mark, scale: number): void {
   if (mark.kind === 'text') return drawText(pdf, mark);
   pdf.path(mark.d);
   if (mark.stroke) {
-    pdf.lineWidth((mark.width ?? 25) / scale).lineCap(mark.cap ?? 'round').lineJoin('round').strokeColor(mark.stroke);
+    pdf
+      .lineWidth((mark.width ?? 25) / scale)
+      .lineCap(mark.cap ?? 'round')
+      .lineJoin('round')
+      .strokeColor(mark.stroke);
     if (mark.dash) pdf.dash(mark.dash[0] / scale, { space: mark.dash[1] / scale });
     else pdf.undash();
   }

@@ -18,8 +18,10 @@ interface Segment {
   b: Point;
 }
 
-const overlap = (p: Box, q: Box): boolean => p.x < q.x + q.width && q.x < p.x + p.width && p.y < q.y + q.height && q.y < p.y + p.height;
-const isLongBar = (part: ScenePart): boolean => part.kind === 'line-bar' || part.kind === 'neutral-bar' || part.kind === 'earth-bar';
+const overlap = (p: Box, q: Box): boolean =>
+  p.x < q.x + q.width && q.x < p.x + p.width && p.y < q.y + q.height && q.y < p.y + p.height;
+const isLongBar = (part: ScenePart): boolean =>
+  part.kind === 'line-bar' || part.kind === 'neutral-bar' || part.kind === 'earth-bar';
 
 function segments(doc: Installation, scene: Scene): Segment[] {
   const nets = scene.face === 'overview' ? netsOf(overviewGraph(doc)) : new Map<string, string>();
@@ -33,7 +35,9 @@ function segments(doc: Installation, scene: Scene): Segment[] {
 }
 
 export function slanted(scene: Scene): string[] {
-  return scene.runs.filter((run) => run.points.slice(1).some((q, i) => q.x !== run.points[i]!.x && q.y !== run.points[i]!.y)).map((run) => run.id);
+  return scene.runs
+    .filter((run) => run.points.slice(1).some((q, i) => q.x !== run.points[i]!.x && q.y !== run.points[i]!.y))
+    .map((run) => run.id);
 }
 
 /** Runs that pass over a part that is not theirs. Cores may cross a bar squarely, between its terminals. */
@@ -45,7 +49,11 @@ export function throughParts(doc: Installation, scene: Scene): string[] {
       if (ends.get(run)!.has(part.id)) continue;
       const inside = a.x < part.x + part.width && b.x > part.x && a.y < part.y + part.height && b.y > part.y;
       if (!inside) continue;
-      const squarely = scene.face === 'connections' && isLongBar(part) && a.x === b.x && part.terminals.every((t) => t.x !== a.x || Math.min(a.y, b.y) > t.y || Math.max(a.y, b.y) < t.y);
+      const squarely =
+        scene.face === 'connections' &&
+        isLongBar(part) &&
+        a.x === b.x &&
+        part.terminals.every((t) => t.x !== a.x || Math.min(a.y, b.y) > t.y || Math.max(a.y, b.y) < t.y);
       if (!squarely) found.push(`${run} over ${part.id}`);
     }
   return found;
@@ -85,7 +93,8 @@ interface Owned {
 }
 
 function texts(scene: Scene): Owned[] {
-  const own = (list: readonly SceneText[], part?: string): Owned[] => list.map((text) => ({ text, box: textBox(text), ...(part && { part }) }));
+  const own = (list: readonly SceneText[], part?: string): Owned[] =>
+    list.map((text) => ({ text, box: textBox(text), ...(part && { part }) }));
   return [
     ...scene.parts.flatMap((part) => own(part.texts, part.id)),
     ...scene.runs.flatMap((run) => own(run.texts)),
@@ -109,7 +118,16 @@ export function textsOnParts(doc: Installation, scene: Scene): string[] {
   return texts(scene).flatMap((owned) =>
     scene.parts
       .filter((part) => !(scene.face === 'connections' && owned.part === part.id))
-      .filter((part) => overlap(owned.box, scene.face === 'overview' ? takenBy(parts.get(part.id)!, part) : isLongBar(part) ? { x: part.x, y: part.y + part.height / 2 - 70, width: part.width, height: 140 } : part))
+      .filter((part) =>
+        overlap(
+          owned.box,
+          scene.face === 'overview'
+            ? takenBy(parts.get(part.id)!, part)
+            : isLongBar(part)
+              ? { x: part.x, y: part.y + part.height / 2 - 70, width: part.width, height: 140 }
+              : part,
+        ),
+      )
       .map((part) => `"${owned.text.text}" on ${part.id}`),
   );
 }
@@ -117,7 +135,17 @@ export function textsOnParts(doc: Installation, scene: Scene): string[] {
 export function textsOnRuns(doc: Installation, scene: Scene): string[] {
   const all = segments(doc, scene);
   return texts(scene).flatMap(({ text, box }) =>
-    all.filter(({ a, b }) => a.x < box.x + box.width && b.x > box.x - 1 && a.y < box.y + box.height && b.y > box.y - 1 && a.x <= box.x + box.width && b.x >= box.x).map(({ run }) => `"${text.text}" on ${run}`),
+    all
+      .filter(
+        ({ a, b }) =>
+          a.x < box.x + box.width &&
+          b.x > box.x - 1 &&
+          a.y < box.y + box.height &&
+          b.y > box.y - 1 &&
+          a.x <= box.x + box.width &&
+          b.x >= box.x,
+      )
+      .map(({ run }) => `"${text.text}" on ${run}`),
   );
 }
 
@@ -131,7 +159,8 @@ export function fractions(scene: Scene): string[] {
     whole(part.id, part.x, part.y, part.width, part.height);
     for (const t of part.terminals) whole(`${part.id}.${t.mark}`, t.x, t.y);
   }
-  for (const run of scene.runs) for (const p of [...run.points, ...run.hops, ...(run.ticks ? [run.ticks.at] : [])]) whole(run.id, p.x, p.y);
+  for (const run of scene.runs)
+    for (const p of [...run.points, ...run.hops, ...(run.ticks ? [run.ticks.at] : [])]) whole(run.id, p.x, p.y);
   for (const { text } of texts(scene)) whole(text.text, text.x, text.y);
   for (const frame of scene.frames) whole(frame.id, frame.x, frame.y, frame.width, frame.height);
   return found;
@@ -144,15 +173,32 @@ export function unmarkedCrossings(doc: Installation, scene: Scene): string[] {
   const level = all.filter(({ a, b }) => a.y === b.y);
   const upright = all.filter(({ a, b }) => a.x === b.x);
   return level.flatMap((h) =>
-    upright.filter((v) => v.net !== h.net && h.a.x < v.a.x && v.a.x < h.b.x && v.a.y < h.a.y && h.a.y < v.b.y && !hops.has(`${v.a.x} ${h.a.y}`)).map((v) => `${h.run} over ${v.run}`),
+    upright
+      .filter(
+        (v) =>
+          v.net !== h.net &&
+          h.a.x < v.a.x &&
+          v.a.x < h.b.x &&
+          v.a.y < h.a.y &&
+          h.a.y < v.b.y &&
+          !hops.has(`${v.a.x} ${h.a.y}`),
+      )
+      .map((v) => `${h.run} over ${v.run}`),
   );
 }
 
 /** The same document with every list in another order: reversed, or by a fixed shuffle. */
 export function permuted(doc: Installation, seed: number): Installation {
   const shuffle = <T extends { id: string }>(list: readonly T[]): T[] => {
-    const key = (id: string): string => [...`${seed}${id}`].reduce((h, c) => (Math.imul(h, 31) + c.charCodeAt(0)) | 0, 7).toString(36);
+    const key = (id: string): string =>
+      [...`${seed}${id}`].reduce((h, c) => (Math.imul(h, 31) + c.charCodeAt(0)) | 0, 7).toString(36);
     return [...list].sort((a, b) => byCode(key(a.id), key(b.id)) || byCode(b.id, a.id));
   };
-  return { ...doc, places: shuffle(doc.places), parts: shuffle(doc.parts), wires: shuffle(doc.wires), cables: shuffle(doc.cables) };
+  return {
+    ...doc,
+    places: shuffle(doc.places),
+    parts: shuffle(doc.parts),
+    wires: shuffle(doc.wires),
+    cables: shuffle(doc.cables),
+  };
 }

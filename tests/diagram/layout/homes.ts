@@ -31,7 +31,11 @@ export const toldHome = (): Installation => unplaced(draftDocument(sixRooms(), o
 /** Drafted homes by seed, with and without backup, in each practice. */
 export function draftedHomes(count: number, seed: number): Installation[] {
   const arbitrary = fc
-    .tuple(fc.boolean().chain((backup) => anySurvey(backup)), fc.constantFrom('IEC', 'IN', 'GB'), fc.constantFrom('TT', 'TN-S', 'TN-C-S'))
+    .tuple(
+      fc.boolean().chain((backup) => anySurvey(backup)),
+      fc.constantFrom('IEC', 'IN', 'GB'),
+      fc.constantFrom('TT', 'TN-S', 'TN-C-S'),
+    )
     .map(([rooms, practice, system]) => unplaced(draftDocument(rooms, optionsOf(practice as 'IEC', system as 'TT'))));
   return fc.sample(arbitrary, { numRuns: count, seed });
 }

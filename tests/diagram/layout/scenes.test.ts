@@ -26,13 +26,15 @@ function broken(docs: readonly [string, Installation][], scenes: (doc: Installat
     for (const scene of scenes(doc))
       for (const [what, run] of CHECKS) {
         const where = run(doc, scene);
-        if (where.length > 0) found.push(`${name} ${scene.place ?? ''}: ${what}: ${where.slice(0, 3).join('; ')} (${where.length})`);
+        if (where.length > 0)
+          found.push(`${name} ${scene.place ?? ''}: ${what}: ${where.slice(0, 3).join('; ')} (${where.length})`);
       }
   return found.slice(0, 20);
 }
 
 const overview = (doc: Installation): Scene[] => [buildScene(doc, 'overview')];
-const connections = (doc: Installation): Scene[] => connectionPages(doc).map(({ place }) => buildScene(doc, 'connections', { place }));
+const connections = (doc: Installation): Scene[] =>
+  connectionPages(doc).map(({ place }) => buildScene(doc, 'connections', { place }));
 
 describe('scenes', () => {
   it('draws the overview of every example without a fault', () => {

@@ -14,7 +14,10 @@ import { draftedHomes, examples, toldHome } from './homes';
 /** A digest: two sheets of a hundred kilobytes say nothing side by side. */
 const bytes = (doc: Installation): string => createHash('sha256').update(whole(doc)).digest('hex');
 const whole = (doc: Installation): string =>
-  JSON.stringify([buildScene(doc, 'overview'), ...connectionPages(doc).map(({ place }) => buildScene(doc, 'connections', { place }))]);
+  JSON.stringify([
+    buildScene(doc, 'overview'),
+    ...connectionPages(doc).map(({ place }) => buildScene(doc, 'connections', { place })),
+  ]);
 
 const placed = (doc: Installation): Installation => applyPatch(doc, placeAll(doc));
 
@@ -60,7 +63,9 @@ describe('placing', () => {
   });
 
   it('moves no other part when one is added, taken away or wired', { timeout: 60_000 }, () => {
-    for (const doc of draftedHomes(6, 21).filter((home) => home.parts.some(({ kind }) => kind === 'mcb')).map(placed)) {
+    for (const doc of draftedHomes(6, 21)
+      .filter((home) => home.parts.some(({ kind }) => kind === 'mcb'))
+      .map(placed)) {
       const way = doc.parts.find(({ kind }) => kind === 'mcb')!;
       const place = doc.places.at(-1)!.id;
       const lamp: Part = { id: 'new-lamp', kind: 'lamp', place, watts: 9 };
@@ -71,9 +76,18 @@ describe('placing', () => {
         expect(more.sheet![face]!['new-lamp']).toBeDefined();
       }
       const box = buildScene(more, 'overview').parts.find(({ id }) => id === 'new-lamp')!;
-      const hits = buildScene(more, 'overview').parts.filter((p) => p.id !== box.id && p.x < box.x + box.width && box.x < p.x + p.width && p.y < box.y + box.height && box.y < p.y + p.height);
+      const hits = buildScene(more, 'overview').parts.filter(
+        (p) =>
+          p.id !== box.id &&
+          p.x < box.x + box.width &&
+          box.x < p.x + p.width &&
+          p.y < box.y + box.height &&
+          box.y < p.y + p.height,
+      );
       expect(hits.map(({ id }) => id)).toEqual([]);
-      const fewer = applyPatch(more, { remove: { parts: ['new-lamp'], wires: ['new-wire'], overview: ['new-lamp'], connections: ['new-lamp'] } });
+      const fewer = applyPatch(more, {
+        remove: { parts: ['new-lamp'], wires: ['new-wire'], overview: ['new-lamp'], connections: ['new-lamp'] },
+      });
       expect(fewer).toEqual(canonical(doc));
     }
   });
@@ -92,10 +106,15 @@ describe('any document', () => {
   it('never fails, and shows every part, whatever is joined to what', { timeout: 120_000 }, () => {
     fc.assert(
       fc.property(randomDocument(), (doc) => {
-        const shown = new Set(connectionPages(doc).flatMap(({ place }) => buildScene(doc, 'connections', { place }).parts.map(({ id }) => id)));
+        const shown = new Set(
+          connectionPages(doc).flatMap(({ place }) =>
+            buildScene(doc, 'connections', { place }).parts.map(({ id }) => id),
+          ),
+        );
         expect(shown.size).toBe(doc.parts.length);
         const overview = buildScene(doc, 'overview');
-        for (const part of doc.parts) if (part.kind !== 'joint') expect(overview.parts.some(({ id }) => id === part.id)).toBe(true);
+        for (const part of doc.parts)
+          if (part.kind !== 'joint') expect(overview.parts.some(({ id }) => id === part.id)).toBe(true);
         for (const run of overview.runs) expect(run.points.length).toBeGreaterThanOrEqual(2);
       }),
       { numRuns: 60, seed: 5 },
@@ -113,7 +132,14 @@ describe('any document', () => {
 
   it('draws positions at the far ends of what a document may hold', () => {
     const doc = placed(toldHome());
-    const far = applyPatch(doc, { set: { overview: { [doc.parts[0]!.id]: { x: 1_000_000, y: 1_000_000 }, [doc.parts[1]!.id]: { x: -1_000_000, y: -1_000_000 } } } });
+    const far = applyPatch(doc, {
+      set: {
+        overview: {
+          [doc.parts[0]!.id]: { x: 1_000_000, y: 1_000_000 },
+          [doc.parts[1]!.id]: { x: -1_000_000, y: -1_000_000 },
+        },
+      },
+    });
     expect(buildScene(far, 'overview').runs).toHaveLength(buildScene(doc, 'overview').runs.length);
   });
 });

@@ -36,12 +36,18 @@ interface Placed {
 function marks(page: Page): Placed[] {
   const of = (group: Group, outer: number): Placed[] => {
     const scale = outer * group.scale;
-    return [...group.marks.map((mark) => ({ mark, scale })), ...(group.groups ?? []).flatMap((child) => of(child, scale))];
+    return [
+      ...group.marks.map((mark) => ({ mark, scale })),
+      ...(group.groups ?? []).flatMap((child) => of(child, scale)),
+    ];
   };
   return page.groups.flatMap((group) => of(group, 1));
 }
 
-const words = (page: Page): string => marks(page).flatMap(({ mark }) => (mark.kind === 'text' ? [mark.text] : [])).join('\n');
+const words = (page: Page): string =>
+  marks(page)
+    .flatMap(({ mark }) => (mark.kind === 'text' ? [mark.text] : []))
+    .join('\n');
 
 describe('sheets of paper', () => {
   it.each([
@@ -60,7 +66,16 @@ describe('sheets of paper', () => {
   it('says who, what, which revision and the cautions on every sheet', () => {
     for (const page of sheetPages(toldHome(), options({ face: 'all' }))) {
       const text = words(page);
-      for (const value of ['OH-214', 'Saltmarsh Row 3', 'M. Arroyo & <daughter>', 'Tillmere Electrics', 'R. A. 2026-11-30', 'T. B.', 'for review', '230 V 50 Hz, TT'])
+      for (const value of [
+        'OH-214',
+        'Saltmarsh Row 3',
+        'M. Arroyo & <daughter>',
+        'Tillmere Electrics',
+        'R. A. 2026-11-30',
+        'T. B.',
+        'for review',
+        '230 V 50 Hz, TT',
+      ])
         expect(text).toContain(value);
       expect(text.replaceAll('\n', ' ')).toContain(CAUTIONS.slice(0, 60));
     }
@@ -70,7 +85,8 @@ describe('sheets of paper', () => {
     const doc = toldHome();
     const pages = sheetPages(doc, options({ face: 'all', paper: 'A1' }));
     pages.forEach((page, i) => expect(words(page)).toContain(`${i + 1} / ${pages.length}`));
-    for (const { name } of connectionPages(doc)) expect(pages.some((page) => words(page).includes(`Connections, ${name}`))).toBe(true);
+    for (const { name } of connectionPages(doc))
+      expect(pages.some((page) => words(page).includes(`Connections, ${name}`))).toBe(true);
     const one = sheetPages(doc, options({ face: 'connections', place: 'kitchen', paper: 'A1' }));
     expect(one.filter((page) => words(page).includes('Connections, Kitchen'))).toHaveLength(1);
   });
@@ -78,7 +94,9 @@ describe('sheets of paper', () => {
   it('draws a check line of exactly 100 mm on every sheet', () => {
     expect(CHECK_LINE).toBe(10_000);
     for (const page of sheetPages(toldHome(), options({ face: 'all' }))) {
-      const lines = marks(page).flatMap(({ mark, scale }) => (mark.kind === 'path' && scale === 1 ? [/^M(\d+) (\d+)H(\d+)M/.exec(mark.d)] : []));
+      const lines = marks(page).flatMap(({ mark, scale }) =>
+        mark.kind === 'path' && scale === 1 ? [/^M(\d+) (\d+)H(\d+)M/.exec(mark.d)] : [],
+      );
       expect(lines.some((found) => found && Number(found[3]) - Number(found[1]) === CHECK_LINE)).toBe(true);
     }
   });
@@ -87,7 +105,10 @@ describe('sheets of paper', () => {
     for (const paper of PAPER_SIZES)
       for (const [, doc] of [...examples().slice(0, 2), ['told', toldHome()] as const])
         for (const page of sheetPages(doc, options({ paper, face: 'all' })))
-          for (const { mark, scale } of marks(page).filter(({ scale: s, mark: m }) => m.kind === 'text' && s !== 0.5 && m.text !== 'kWh')) if (mark.kind === 'text' && scale >= 0.8) expect(mark.size * scale).toBeGreaterThanOrEqual(180);
+          for (const { mark, scale } of marks(page).filter(
+            ({ scale: s, mark: m }) => m.kind === 'text' && s !== 0.5 && m.text !== 'kWh',
+          ))
+            if (mark.kind === 'text' && scale >= 0.8) expect(mark.size * scale).toBeGreaterThanOrEqual(180);
     const cut = sheetPages(toldHome(), options());
     expect(cut.length).toBeGreaterThan(1);
     expect(words(cut[0]!)).toContain('match line, goes on at sheet 2');
@@ -98,10 +119,14 @@ describe('sheets of paper', () => {
   it('shows the whole drawing once over the sheets it is cut to', () => {
     const doc = toldHome();
     const scene = buildScene(doc, 'overview');
-    const windows = sheetPages(doc, options()).flatMap((page) => page.groups.flatMap((group) => (group.clip ? [group.clip] : [])));
+    const windows = sheetPages(doc, options()).flatMap((page) =>
+      page.groups.flatMap((group) => (group.clip ? [group.clip] : [])),
+    );
     for (const part of scene.parts) {
       const middle = { x: part.x + Math.min(part.width, 500) / 2, y: part.y + part.height / 2 };
-      const seen = windows.filter((w) => w.x <= middle.x && middle.x < w.x + w.width && w.y <= middle.y && middle.y < w.y + w.height);
+      const seen = windows.filter(
+        (w) => w.x <= middle.x && middle.x < w.x + w.width && w.y <= middle.y && middle.y < w.y + w.height,
+      );
       expect(seen).toHaveLength(1);
     }
   });
@@ -118,14 +143,25 @@ describe('sheets of paper', () => {
   it('sums the findings up, the gravest first', () => {
     expect(findingsText(undefined)).toBe('not examined');
     expect(findingsText([])).toBe('no finding');
-    expect(findingsText([{ severity: 'advice', heading: 'a' }, { severity: 'danger', heading: 'b' }])).toBe('2 findings: 1 danger, 1 advice');
-    const findings = [{ severity: 'advice', heading: 'Mind the step' }, { severity: 'danger', heading: 'E7 comes home the wrong way' }] as const;
+    expect(
+      findingsText([
+        { severity: 'advice', heading: 'a' },
+        { severity: 'danger', heading: 'b' },
+      ]),
+    ).toBe('2 findings: 1 danger, 1 advice');
+    const findings = [
+      { severity: 'advice', heading: 'Mind the step' },
+      { severity: 'danger', heading: 'E7 comes home the wrong way' },
+    ] as const;
     const text = words(sheetPages(toldHome(), options({ findings }))[0]!);
     expect(text).toContain('2 findings: 1 danger, 1 advice. E7 comes home the wrong way');
   });
 
   it('keeps the rest of a long legend or list of findings for a last sheet', () => {
-    const findings = Array.from({ length: 9 }, (_, i) => ({ severity: 'defect' as const, heading: `Finding number ${i + 1}` }));
+    const findings = Array.from({ length: 9 }, (_, i) => ({
+      severity: 'defect' as const,
+      heading: `Finding number ${i + 1}`,
+    }));
     const last = words(sheetPages(toldHome(), options({ findings })).at(-1)!);
     expect(last).toContain('Legend and findings');
     expect(last).toContain('Finding number 9');
@@ -151,7 +187,15 @@ describe('svg', () => {
     expect(svg).toMatch(/width="420mm" height="297mm" viewBox="0 0 42000 29700"/);
     expect(svg).not.toMatch(/<script|foreignObject|<image|href=/);
     expect(svg).toContain('M. Arroyo &amp; &lt;daughter&gt;');
-    expect([...new Set(svg.match(/<([a-zA-Z]+)/g))].sort()).toEqual(['<clipPath', '<g', '<path', '<rect', '<svg', '<text', '<title']);
+    expect([...new Set(svg.match(/<([a-zA-Z]+)/g))].sort()).toEqual([
+      '<clipPath',
+      '<g',
+      '<path',
+      '<rect',
+      '<svg',
+      '<text',
+      '<title',
+    ]);
     expect(svg).not.toMatch(/NaN|undefined|Infinity/);
   });
 
@@ -162,9 +206,13 @@ describe('svg', () => {
 
   it('carries the font where it is given, and gives any sheet by its number', () => {
     const doc = toldHome();
-    expect(paperSvg(doc, { ...options(), fonts: { regular: 'AAAA', bold: 'BBBB' } })).toContain('src:url(data:font/woff2;base64,BBBB)');
+    expect(paperSvg(doc, { ...options(), fonts: { regular: 'AAAA', bold: 'BBBB' } })).toContain(
+      'src:url(data:font/woff2;base64,BBBB)',
+    );
     expect(paperSvg(doc, { ...options(), sheet: 2 })).toContain('>2 / ');
-    expect(paperSvg(doc, { ...options(), sheet: 99 })).toBe(paperSvg(doc, { ...options(), sheet: sheetPages(doc, options()).length }));
+    expect(paperSvg(doc, { ...options(), sheet: 99 })).toBe(
+      paperSvg(doc, { ...options(), sheet: sheetPages(doc, options()).length }),
+    );
   });
 
   it('is the same for the same drawing, placed or not', () => {

@@ -42,16 +42,19 @@ describe('symbols', () => {
     expect(numbers(symbol).filter((n) => !Number.isInteger(n))).toEqual([]);
   });
 
-  it.each(pictures)('$name keeps its terminals inside its box, and shows each apart on the connections face', ({ face, symbol }) => {
-    const places = Object.values(symbol.terminals);
-    for (const { x, y } of places) {
-      expect(x).toBeGreaterThanOrEqual(0);
-      expect(x).toBeLessThanOrEqual(symbol.width);
-      expect(y).toBeGreaterThanOrEqual(0);
-      expect(y).toBeLessThanOrEqual(symbol.height);
-    }
-    if (face === 'connections') expect(new Set(places.map(({ x, y }) => `${x} ${y}`)).size).toBe(places.length);
-  });
+  it.each(pictures)(
+    '$name keeps its terminals inside its box, and shows each apart on the connections face',
+    ({ face, symbol }) => {
+      const places = Object.values(symbol.terminals);
+      for (const { x, y } of places) {
+        expect(x).toBeGreaterThanOrEqual(0);
+        expect(x).toBeLessThanOrEqual(symbol.width);
+        expect(y).toBeGreaterThanOrEqual(0);
+        expect(y).toBeLessThanOrEqual(symbol.height);
+      }
+      if (face === 'connections') expect(new Set(places.map(({ x, y }) => `${x} ${y}`)).size).toBe(places.length);
+    },
+  );
 
   it.each(pictures)('$name is drawn with move, line, arc and curve commands, absolute', ({ symbol }) => {
     for (const { d } of symbol.strokes) expect(d).toMatch(/^M[MLHVCAZ0-9 .-]*$/);
@@ -109,7 +112,11 @@ describe('turning', () => {
 
   it('puts the upper terminal of a device laid on its side at the left', () => {
     const part: Part = { id: 'Q1', kind: 'mcb' };
-    expect(terminalAt(part, '1', { x: 10_000, y: 5000, turn: 3 }, 'overview')).toEqual({ x: 10_000, y: 5500, side: 'left' });
+    expect(terminalAt(part, '1', { x: 10_000, y: 5000, turn: 3 }, 'overview')).toEqual({
+      x: 10_000,
+      y: 5500,
+      side: 'left',
+    });
     expect(terminalAt(part, '9', { x: 0, y: 0 }, 'overview')).toBeNull();
   });
 });

@@ -32,12 +32,22 @@ beforeAll(async () => {
   folder = await mkdtemp(path.join(tmpdir(), 'sheet-pdf-'));
   for (const paper of ['A4', 'A3'] as const) {
     files[paper] = path.join(folder, `${paper}.pdf`);
-    await writeFile(files[paper], await sheetPdf({ document: doc, paper, title, face: 'all', findings: [{ severity: 'advice', heading: 'Mind the step' }] }));
+    await writeFile(
+      files[paper],
+      await sheetPdf({
+        document: doc,
+        paper,
+        title,
+        face: 'all',
+        findings: [{ severity: 'advice', heading: 'Mind the step' }],
+      }),
+    );
   }
 }, 60_000);
 afterAll(() => rm(folder, { recursive: true, force: true }));
 
-const text = async (file: string): Promise<string> => (await run('pdftotext', ['-layout', file, '-'], { maxBuffer: 1 << 26 })).stdout;
+const text = async (file: string): Promise<string> =>
+  (await run('pdftotext', ['-layout', file, '-'], { maxBuffer: 1 << 26 })).stdout;
 
 describe('the sheet as PDF', () => {
   it.each([
@@ -45,13 +55,15 @@ describe('the sheet as PDF', () => {
     ['A3', 420, 297],
   ] as const)('has every MediaBox of %s right to 0.01 mm', async (paper, width, height) => {
     const { stdout } = await run('pdfinfo', ['-box', '-f', '1', '-l', '999', files[paper]]);
-    const boxes = [...stdout.matchAll(/MediaBox:\s+([\d.]+)\s+([\d.]+)\s+([\d.]+)\s+([\d.]+)/g)].map((m) => m.slice(1).map(Number));
+    const boxes = [...stdout.matchAll(/MediaBox:\s+([\d.]+)\s+([\d.]+)\s+([\d.]+)\s+([\d.]+)/g)].map((m) =>
+      m.slice(1).map(Number),
+    );
     const pages = Number(/Pages:\s+(\d+)/.exec(stdout)![1]);
     expect(boxes).toHaveLength(pages);
     for (const [x, y, right, top] of boxes) {
       expect([x, y]).toEqual([0, 0]);
-      expect(Math.abs(right! / 72 * 25.4 - width)).toBeLessThan(0.01);
-      expect(Math.abs(top! / 72 * 25.4 - height)).toBeLessThan(0.01);
+      expect(Math.abs((right! / 72) * 25.4 - width)).toBeLessThan(0.01);
+      expect(Math.abs((top! / 72) * 25.4 - height)).toBeLessThan(0.01);
     }
   });
 
@@ -63,7 +75,18 @@ describe('the sheet as PDF', () => {
 
   it('carries title block, cautions and designations as text, with ligatures off', async () => {
     const [first] = (await text(files.A3)).split('\f');
-    for (const words of ['OH-214', 'Saltmarsh Row 3', 'Tillmere Electrics', 'R. A. 2026-11-30', 'Design aid, not a permission', 'prove dead', 'Battery terminals are never dead', 'Mind the step', 'Q0', 'G1'])
+    for (const words of [
+      'OH-214',
+      'Saltmarsh Row 3',
+      'Tillmere Electrics',
+      'R. A. 2026-11-30',
+      'Design aid, not a permission',
+      'prove dead',
+      'Battery terminals are never dead',
+      'Mind the step',
+      'Q0',
+      'G1',
+    ])
       expect(first).toContain(words);
     expect(first).toContain('a != b -> c');
     expect(first).toContain('Łąkowa 3, Θήβα');
@@ -77,7 +100,13 @@ describe('the sheet as PDF', () => {
   });
 
   it('is the same file each time', async () => {
-    const again = await sheetPdf({ document: doc, paper: 'A3', title, face: 'all', findings: [{ severity: 'advice', heading: 'Mind the step' }] });
+    const again = await sheetPdf({
+      document: doc,
+      paper: 'A3',
+      title,
+      face: 'all',
+      findings: [{ severity: 'advice', heading: 'Mind the step' }],
+    });
     expect(again.equals(await readFile(files.A3))).toBe(true);
   }, 30_000);
 
@@ -96,7 +125,7 @@ describe('the sheet as PDF', () => {
         while (x < width && pixels[(y0 + dy) * width + x]! < 160) x++;
         return x - x0;
       });
-      expect(Math.abs(Math.max(...lengths) / 100 * 25.4 - 100)).toBeLessThan(0.4);
+      expect(Math.abs((Math.max(...lengths) / 100) * 25.4 - 100)).toBeLessThan(0.4);
     }
   }, 60_000);
 
@@ -129,12 +158,19 @@ interface Grey {
 /** Reads the PGM pictures that pdftoppm wrote, in order. */
 async function pagesOf(dir: string): Promise<Grey[]> {
   const { stdout } = await run('ls', [dir]);
-  const names = stdout.split('\n').filter((name) => name.endsWith('.pgm')).sort();
+  const names = stdout
+    .split('\n')
+    .filter((name) => name.endsWith('.pgm'))
+    .sort();
   return Promise.all(
     names.map(async (name) => {
       const bytes = await readFile(path.join(dir, name));
       const head = /^P5\s+(\d+)\s+(\d+)\s+255\s/.exec(bytes.subarray(0, 40).toString('latin1'))!;
-      return { width: Number(head[1]), height: Number(head[2]), pixels: new Uint8Array(bytes.subarray(head[0].length)) };
+      return {
+        width: Number(head[1]),
+        height: Number(head[2]),
+        pixels: new Uint8Array(bytes.subarray(head[0].length)),
+      };
     }),
   );
 }
