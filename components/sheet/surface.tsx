@@ -158,14 +158,14 @@ export function SheetSurface(props: SurfaceProps) {
       {pages.length > 1 && (
         <nav
           aria-label="Pages by place"
-          className="absolute top-2 left-2 z-[6] flex max-w-[calc(100%-16px)] flex-wrap gap-x-1 gap-y-1 bg-paper"
+          className="absolute top-2 left-2 z-[6] flex max-w-[calc(100%-16px)] gap-1 overflow-x-auto bg-paper lap:flex-wrap"
         >
           {pages.map((candidate) => (
             <button
               key={candidate.place}
               type="button"
               aria-current={candidate.place === place ? 'page' : undefined}
-              className="cursor-pointer border border-rule px-2 py-[2px] text-small aria-[current]:border-ink aria-[current]:font-bold pointer-coarse:min-h-11"
+              className="shrink-0 cursor-pointer border border-rule px-2 py-[2px] text-small aria-[current]:border-ink aria-[current]:font-bold pointer-coarse:min-h-11"
               onClick={() => view.getState().set({ place: candidate.place })}
             >
               {candidate.name}

@@ -102,11 +102,13 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
     // The whole sheet, but never so small that its lettering cannot be read: then the source and what lies about it.
     const fit = Math.min((w - 16) / width, (h - 16) / height);
     const zoom = Math.min(1.6, Math.max(READABLE, fit));
-    const source = scene.parts.find((part) => part.kind === 'supply');
-    const centre = px(source ? source.x + source.width / 2 : scene.width / 2) * zoom;
+    const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
+    const centre = source ? px(source.x + source.width / 2) * zoom : 0;
     const spare = w - width * zoom;
     const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
-    const y = Math.max(8, (h - height * zoom) / 2);
+    // The names of the pages stand along the upper edge of the connections face.
+    const top = scene.face === 'connections' ? 40 : 8;
+    const y = Math.max(top, (h - height * zoom) / 2);
     void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
   }, [box, flow, width, height, scene]);
 

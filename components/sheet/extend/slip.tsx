@@ -171,7 +171,12 @@ export function SlipPanel({ slip, name, onLeave }: SlipProps) {
           {slip.typed ? `${slip.lines.length} of ${slip.all} fit` : `${slip.all} fit`}
         </span>
       </div>
-      <ul id={list} role="listbox" aria-label="What comes next" className="max-h-[min(46dvh,420px)] overflow-y-auto">
+      <ul
+        id={list}
+        role="listbox"
+        aria-label="What comes next"
+        className="max-h-[min(46dvh,420px)] overflow-y-auto max-sm:max-h-[26dvh]"
+      >
         {slip.lines.map((each, i) => (
           <Line
             key={each.id}

@@ -8,6 +8,7 @@ import { handWords } from '../hand-words';
 import type { MarkedNote } from '../margin/notes';
 import { useSheet, type OpenDrawing } from '../use-drawing';
 import { useView, useViewStore, type Mode } from '../view';
+import { CoreLegend } from './core-legend';
 import { Strip } from './strip';
 
 interface FootProps {
@@ -32,7 +33,7 @@ function roomsOverlap(scene: Scene): boolean {
 }
 
 /** What the hands may do next, in words: the foot's own line. */
-function hint(mode: Mode, held: string, mayEdit: boolean, crowded: boolean): string {
+function hint(mode: Mode, held: string, mayEdit: boolean, mayDraw: boolean, crowded: boolean): string {
   switch (mode.kind) {
     case 'extend':
       return 'Type to narrow, Enter to place. The ghost stands where the part would lie.';
@@ -44,7 +45,9 @@ function hint(mode: Mode, held: string, mayEdit: boolean, crowded: boolean): str
       return 'The dashed drawing is how it would stand.';
     default:
       if (crowded && mayEdit && !held) return 'Rooms lie over each other: tidy makes room.';
-      return held || (mayEdit ? 'Arrows or a click take a part in hand; e extends it.' : 'You may read this drawing.');
+      if (held) return held;
+      if (mayEdit) return 'Arrows or a click take a part in hand; e extends it.';
+      return mayDraw ? 'Reading: Edit lets you draw.' : 'You may read this drawing.';
   }
 }
 
@@ -55,14 +58,15 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
   const document = useSheet(drawing.store, (state) => state.document);
   const selection = useSheet(drawing.store, (state) => state.selection);
   const notice = useSheet(drawing.store, (state) => state.notice);
-  const mayEdit = useSheet(drawing.store, (state) => state.rights.edit) && editing;
+  const mayDraw = useSheet(drawing.store, (state) => state.rights.edit);
+  const mayEdit = mayDraw && editing;
   const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
   const { undo } = drawing.store.getState();
   const crowded = useMemo(() => roomsOverlap(scene), [scene]);
-  const said = hint(mode, handWords(document, selection), mayEdit, crowded);
+  const said = hint(mode, handWords(document, selection), mayEdit, mayDraw, crowded);
   return (
     <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
-      <Strip scene={scene} notes={notes} />
+      {scene.face === 'overview' ? <Strip scene={scene} notes={notes} /> : <CoreLegend practice={document.practice} />}
       <div className="flex min-w-0 flex-1 flex-col justify-between gap-1">
         <p className={`leading-[15px] ${notice ? 'truncate' : 'line-clamp-2'}`} title={said}>
           {said}

@@ -6,7 +6,11 @@ import type { Installation } from '@/diagram/document/schema';
 
 /** 0.018 as "18 ms", 2.4 as "2.4 s". */
 const timeText = (seconds: number): string =>
-  seconds < 1 ? `${Number((seconds * 1000).toPrecision(2))} ms` : `${Number(seconds.toPrecision(2))} s`;
+  seconds === 0
+    ? '0'
+    : seconds < 1
+      ? `${Number((seconds * 1000).toPrecision(2))} ms`
+      : `${Number(seconds.toPrecision(2))} s`;
 
 /** The fault walk that shows a danger, step by step. */
 export function ProofView({ walk, document }: { walk: FaultWalk; document: Installation }) {
