@@ -9,7 +9,8 @@ export default defineConfig({
   outputDir: '../../test-results/browser',
   fullyParallel: false,
   workers: 1,
-  timeout: 60_000,
+  // One test looks at a dozen screens with axe: on a busy machine that takes a minute.
+  timeout: 180_000,
   reporter: [['list'], ['json', { outputFile: process.env.E2E_REPORT ?? '../../test-results/browser.json' }]],
   use: {
     baseURL: url,
