@@ -7,7 +7,7 @@ import type { Body } from './ends';
 import { m } from './overview-metrics';
 import { CABLE_GAP, CORE_PITCH, wordsWidth } from './connections-cables';
 import type { Core, Page, PageCable } from './connections-page';
-import { FOOT, FOOT_CORE, ON_BOARD, TOP, isLongBar, sizeOf } from './connections-place';
+import { FOOT, FOOT_CORE, ON_BOARD, TOP, isLongBar, sizeOf } from './connections-page-state';
 import type { SceneTerminal } from './scene';
 
 /** Where cores end on a page: at terminals, and at the stubs of cables that come from or go to another place. */

@@ -1,7 +1,7 @@
 import { byCode } from '../document/schema';
 import type { PlacedCable } from './connections-ends';
 import type { Page } from './connections-page';
-import { isLongBar } from './connections-place';
+import { isLongBar } from './connections-page-state';
 import type { Body } from './ends';
 import { Ground, blockTexts, placeLabel, type Anchor, type Label } from './labels';
 import { BODY, SMALL, breakLines } from './lettering';

@@ -9,7 +9,8 @@ import { barBodies, fixedBodies, placeCables, type PlacedCable, type Stub } from
 import { connectionFrames } from './connections-frames';
 import { letterPage } from './connections-labels';
 import { connectionPages, readPage, type Page } from './connections-page';
-import { isLongBar, planPage, usedMarks } from './connections-place';
+import { isLongBar, usedMarks } from './connections-page-state';
+import { planPage } from './connections-place';
 import type { Body } from './ends';
 import { m } from './overview-metrics';
 import { planOverview } from './overview-plan';

@@ -1,7 +1,8 @@
 import { byCode } from '../document/schema';
 import { MODULE, type Side } from '../symbols/types';
 import { buildGrid, type Grid, type Obstacle, type RouteEnd, type RouteRequest, type Soft } from './route-grid';
-import { COST, Search, edgeFrom, emptyOccupancy, nodeAt, toPoints, type Occupancy } from './route-search';
+import { COST, edgeFrom, emptyOccupancy, nodeAt, type Occupancy } from './route-occupancy';
+import { Search, toPoints } from './route-search';
 import type { Point } from './scene';
 
 /**
