@@ -78,7 +78,9 @@ function combinations(changeovers: readonly Part[]): Map<string, 'A' | '0' | 'B'
 
 /** Lists the conditions of a home: `outage` and `main-off` only with a backup source, each once for every changeover position. */
 export function listConditions(graph: Graph): Conditions {
-  const parts = [...graph.parts.values()].sort(byDesignation);
+  // Only the few that are wanted are sorted: to compare designations is dear.
+  const wanted = new Set<Part['kind']>(['supply', 'changeover', 'inverter']);
+  const parts = [...graph.parts.values()].filter(({ kind }) => wanted.has(kind)).sort(byDesignation);
   const supplies = parts.filter((part) => part.kind === 'supply');
   const changeovers = parts.filter((part) => part.kind === 'changeover');
   const backups = parts.filter(

@@ -6,7 +6,8 @@ import { listConditions, type Condition, type Conditions, type Source } from './
 import { findCrossedJoints, type CrossedJoint } from './crossed-joints';
 import { earthAnchors } from './earth';
 import type { Nature } from './natures';
-import { findParallelJoints, meetsDevice, type ParallelJoint } from './parallel-joints';
+import { findDoubledNeutrals, findMeetings } from './odd-one-out';
+import type { ParallelJoint } from './parallel-joints';
 import { switchPositions, type Positions } from './positions';
 
 /** The home in one condition with its two-way and cross switches in one position. */
@@ -51,7 +52,7 @@ export interface Evaluated {
   crossed: CrossedJoint[];
   /**
    * wires that close loops: lines of two devices joined, neutrals joined twice. They, and on battery those of `mains`, are
-   * taken out of `stands` and `points`, so that each point is read as it was meant; `whole` and `asDrawn` have them
+   * taken out of `stands` and `points`, so that each point is read as it was meant; `whole`, `drawn` and `asDrawn` have them
    */
   lineLoops: ParallelJoint[];
   neutralLoops: ParallelJoint[];
@@ -60,6 +61,7 @@ export interface Evaluated {
   /** at least one; only the first without two-way and cross switches */
   stands: Stand[];
   points: ReadonlyMap<string, PointState>;
+  drawn: Stand[];
   asDrawn: ReadonlyMap<string, PointState>;
 }
 
@@ -141,25 +143,15 @@ function pointState(graph: Graph, part: Part, condition: Condition, stands: read
   return turned ?? half ?? none;
 }
 
-function standsOf(
-  graph: Graph,
-  condition: Condition,
-  positions: Positions,
-  closed: Uint8Array,
-  apart: (node: number) => boolean,
-): Stand[] {
-  const stands: Stand[] = [];
-  for (let position = 0; position < positions.count; position++) {
-    let here = closed;
-    if (positions.sets.length > 0) {
-      here = closed.slice();
-      graph.edges.forEach((edge, number) => {
-        if (edge.kind === 'select' && positions.isClosed(edge, position)) here[number] = 1;
-      });
-    }
-    stands.push(stand(graph, condition, here, position, apart));
-  }
-  return stands;
+/** What is closed in each position of the two-way and cross switches. */
+function positionsOf(graph: Graph, positions: Positions, closed: Uint8Array): Uint8Array[] {
+  if (positions.sets.length === 0) return [closed];
+  const selects = graph.edges.flatMap((edge, number) => (edge.kind === 'select' ? [number] : []));
+  return Array.from({ length: positions.count }, (_, position) => {
+    const here = closed.slice();
+    for (const number of selects) if (positions.isClosed(graph.edges[number]!, position)) here[number] = 1;
+    return here;
+  });
 }
 
 /** @param onMains edges that close a loop on mains in the same positions of the changeovers */
@@ -185,22 +177,28 @@ function evaluateCondition(
     for (const { edge } of crossed) closed[edge] = 0;
   }
   const whole = closed;
-  const lineLoops = findParallelJoints(graph, whole, lineStarts).filter((joint) => meetsDevice(graph, joint));
-  const neutralLoops = findParallelJoints(graph, whole, neutralStarts);
+  const starts = { line: lineStarts, neutral: neutralStarts };
+  // Lines of two ways may meet in one position of two-way switches only: each is looked at.
+  const lineLoops = findMeetings(graph, positionsOf(graph, positions, whole), starts);
+  const single = whole.slice();
+  for (const { edge } of lineLoops) single[edge] = 0;
+  const neutralLoops = findDoubledNeutrals(graph, single, starts);
   const loops = [...[...lineLoops, ...neutralLoops].map(({ edge }) => edge), ...onMains];
   const states = (from: Uint8Array) => {
-    const stands = standsOf(graph, condition, positions, from, notLine);
+    const stands = positionsOf(graph, positions, from).map((here, position) =>
+      stand(graph, condition, here, position, notLine),
+    );
     const points = new Map<string, PointState>();
     for (const part of graph.parts.values())
       if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
     return { stands, points };
   };
-  const asDrawn = states(whole);
-  if (loops.length === 0)
-    return { condition, crossed, lineLoops, neutralLoops, whole, ...asDrawn, asDrawn: asDrawn.points };
+  const drawn = states(whole);
+  const common = { condition, crossed, lineLoops, neutralLoops, whole, drawn: drawn.stands, asDrawn: drawn.points };
+  if (loops.length === 0) return { ...common, stands: drawn.stands, points: drawn.points };
   const apart = whole.slice();
   for (const edge of loops) apart[edge] = 0;
-  return { condition, crossed, lineLoops, neutralLoops, whole, ...states(apart), asDrawn: asDrawn.points };
+  return { ...common, ...states(apart) };
 }
 
 /** Nodes that are line, neutral or earth by what they are: the poles of the supply and of inverters on battery, and the earth. */

@@ -1,21 +1,30 @@
 import { KIND_NAME } from './kinds';
 import { byCode, type Installation, type Part } from './schema';
 
-/** Splits "Q12" into letters and numbers, so that Q2 stands before Q11. */
-const pieces = (text: string): string[] => text.match(/\d+|\D+/g) ?? [];
+const isDigit = (code: number): boolean => code >= 48 && code <= 57;
 
-/** Order of designations as a person reads them: letters by code, numbers by value. */
+/** End of the run of digits, or of anything else, that begins at `at`. */
+function endOfRun(text: string, at: number): number {
+  const digits = isDigit(text.charCodeAt(at));
+  let end = at + 1;
+  while (end < text.length && isDigit(text.charCodeAt(end)) === digits) end++;
+  return end;
+}
+
+/** Order of designations as a person reads them: letters by code, numbers by value, so that Q2 stands before Q11. */
 export function compareDesignations(a: string, b: string): number {
-  const left = pieces(a);
-  const right = pieces(b);
-  for (let i = 0; i < Math.min(left.length, right.length); i++) {
-    const x = left[i]!;
-    const y = right[i]!;
-    const both = /^\d/.test(x) && /^\d/.test(y);
+  let i = 0;
+  let j = 0;
+  while (i < a.length && j < b.length) {
+    const [endA, endB] = [endOfRun(a, i), endOfRun(b, j)];
+    const [x, y] = [a.slice(i, endA), b.slice(j, endB)];
+    const both = isDigit(a.charCodeAt(i)) && isDigit(b.charCodeAt(j));
     const order = both ? Number(x) - Number(y) || x.length - y.length : byCode(x, y);
     if (order !== 0) return order;
+    i = endA;
+    j = endB;
   }
-  return left.length - right.length;
+  return Number(i < a.length) - Number(j < b.length);
 }
 
 /** Parts with a designation first, in its order; then by id. */

@@ -45,11 +45,11 @@ export const backfeed: Rule = {
     const { graph } = context;
     const upstream = upstreamLine(context);
     const found = new Map<string, { conditions: string[]; path: number[] }>();
-    for (const { condition, whole, stands } of context.evaluated) {
+    for (const { condition, drawn } of context.evaluated) {
       if (condition.base === 'mains') continue;
       for (const source of condition.sources) {
         if (source.kind !== 'backup') continue;
-        const hit = [whole, ...stands.map(({ closed }) => closed)].flatMap((closed) => {
+        const hit = drawn.flatMap(({ closed }) => {
           const walk = reach(graph, [source.line], closed);
           const node = walk.order.find((each) => upstream.has(each));
           return node === undefined || !reaches(walk, node) ? [] : [pathTo(graph, walk, node)];

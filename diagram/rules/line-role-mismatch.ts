@@ -49,7 +49,10 @@ function told(context: Context): { wires: Set<string>; parts: Set<string> } {
   const parts = new Set<string>();
   for (const each of [...reversals(context), ...neutralContacts(context).switched, ...neutralContacts(context).fused])
     for (const id of each.wires) wires.add(id);
-  for (const { wire } of crossings(context)) wires.add(wire);
+  for (const { wire, switches } of crossings(context)) {
+    wires.add(wire);
+    for (const id of switches) parts.add(id);
+  }
   for (const { wires: ids, on, parts: at } of earthGaps(context)) {
     for (const id of ids) wires.add(id);
     if (on !== 'nothing') for (const id of at) parts.add(id);

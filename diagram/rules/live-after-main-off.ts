@@ -14,12 +14,14 @@ export const liveOnMainOff = once((context: Context): Map<string, { live: Set<st
   for (const inverter of context.backups) {
     const live = new Set<string>();
     const conditions: string[] = [];
-    for (const { condition, whole } of context.evaluated) {
+    for (const { condition, drawn } of context.evaluated) {
       if (condition.base !== 'main-off') continue;
       const source = condition.sources.find(({ part }) => part.id === inverter.id);
       const line = source ? source.line : graph.node(inverter.id, 'out.L')!;
-      const walk = reach(graph, source ? [line] : condition.sources.map((each) => each.line), whole);
-      const reached = walk.order.map((node) => graph.partOf[node]!.id);
+      const starts = source ? [line] : condition.sources.map((each) => each.line);
+      const reached = drawn
+        .flatMap(({ closed }) => reach(graph, starts, closed).order)
+        .map((node) => graph.partOf[node]!.id);
       if (!reached.some((id) => id !== inverter.id && graph.parts.get(id)!.kind !== 'supply')) continue;
       for (const id of reached) live.add(id);
       conditions.push(condition.name);

@@ -24,11 +24,11 @@ const bareLines = once((context: Context): Bare[] => {
   // Where line and neutral change places the fuses stand in the neutral; the crossing is the finding.
   const turned = reversedPoints(context);
   const crossed = reversedNodes(context);
-  for (const { condition, whole, stands } of context.evaluated) {
+  for (const { condition, drawn } of context.evaluated) {
     for (const source of condition.sources) {
       const entry = found.get(source.part.id) ?? { source, points: new Set(), wires: new Set(), conditions: new Set() };
-      for (const from of [whole, ...stands.map(({ closed }) => closed)]) {
-        const closed = from.slice();
+      for (const from of drawn) {
+        const closed = from.closed.slice();
         graph.edges.forEach((edge, number) => {
           if (edge.kind === 'device' && isOvercurrent(graph.parts.get(edge.part!)!)) closed[number] = 0;
         });

@@ -18,15 +18,15 @@ export const openLine: Rule = {
     remedy: 'Lead the line to it, from its way through its switch.',
   },
   *check(context) {
-    for (const { side, points, gap, wires, conditions, inverter } of openRegions(context)) {
+    for (const { side, points, gap, wires, conditions, inverter, onMains } of openRegions(context)) {
       if (side !== 'L') continue;
       const who = sayParts(context, points);
       const where = gap.length > 0 ? ` The line ends at ${sayParts(context, gap)}.` : '';
       yield inverter === undefined
         ? {
             heading: `${capital(who)} ${be(points.length)} never fed`,
-            message: `No condition and no position of the switches brings line to ${who}.${where}`,
-            parts: [...gap, ...points],
+            message: `No condition and no position of the switches brings line to ${who}.${where}${onMains ? ` On mains ${sayParts(context, onMains)} ${be(onMains.length)} dead with ${points.length === 1 ? 'it' : 'them'}.` : ''}`,
+            parts: [...gap, ...points, ...(onMains ?? [])],
             wires,
             remedies: rejoin(context, 'line', { points, gap }),
           }

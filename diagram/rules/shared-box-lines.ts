@@ -61,14 +61,15 @@ export const sharedBoxLines: Rule = {
     remedy: 'Give both ways one rcd or isolator, or keep them in separate boxes.',
   },
   *check(context) {
-    const devices = new Set(context.ways.map(({ device }) => device));
+    const byDevice = new Map(context.ways.map((way) => [way.device, way]));
     for (const board of switchboards(context)) {
-      if (board.parts.some(({ id }) => devices.has(id))) continue;
+      if (board.parts.some(({ id }) => byDevice.has(id))) continue;
       const here = new Set(board.parts.flatMap(({ id }) => [...(waysByPart(context).get(id) ?? [])]));
       if (here.size < 2) continue;
+      const held = [...here].flatMap((id) => byDevice.get(id) ?? []).sort((a, b) => a.number - b.number);
       // Mains beside backup is the matter of the notice of two sources.
       const ways = [false, true]
-        .map((backup) => context.ways.filter((way) => way.backup === backup && here.has(way.device)))
+        .map((backup) => held.filter((way) => way.backup === backup))
         .filter((same) => same.length > 1 && !haveCommonIsolator(context, same))
         .flat();
       if (ways.length === 0) continue;

@@ -1,5 +1,6 @@
 import { COMMON_PRACTICE } from './clauses';
 import { bypassedContacts } from './readings/bypassed';
+import { crossings } from './readings/crossings';
 import { truthTables } from './readings/switch-sets';
 import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
@@ -19,10 +20,14 @@ export const twoWayMiswired: Rule = {
       'Line to the common of the first, strappers from 1 to 1 and 2 to 2, the lamp to the common of the last; cross switches between.',
   },
   *check(context) {
-    const bypassed = new Set(bypassedContacts(context).map(({ part }) => part));
+    // What bypasses a switch, or shorts in one of its positions, is the cause and says so.
+    const told = new Set([
+      ...bypassedContacts(context).map(({ part }) => part),
+      ...crossings(context).flatMap(({ switches }) => switches),
+    ]);
     const bySet = new Map<string, { switches: string[]; points: string[]; idle: Set<string>; condition: string }>();
     for (const { point, switches, idle, condition } of truthTables(context)) {
-      if (idle.length === 0 || switches.some((id) => bypassed.has(id))) continue;
+      if (idle.length === 0 || switches.some((id) => told.has(id))) continue;
       const key = switches.join(' ');
       const entry = bySet.get(key) ?? { switches, points: [], idle: new Set(), condition };
       entry.points.push(point);

@@ -50,7 +50,7 @@ export function deadRegions(
       if (part.kind === 'plug' && part.in === undefined) hanging = true;
       if (isEarth(node)) continue;
       if (stops(node)) {
-        if (!isPoint(part)) open.add(part.id);
+        if (!isPoint(part) && part.kind !== 'inverter') open.add(part.id);
       } else if (isBar(part.kind)) (part.kind === 'joint' ? joints : bars).add(part.id);
       else if (!isPoint(part) && part.kind !== 'spd' && part.kind !== 'plug' && !hasWire(context, node))
         open.add(part.id);

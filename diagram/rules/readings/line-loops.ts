@@ -1,4 +1,3 @@
-import { findParallelJoints, meetsDevice } from '../../circuit/parallel-joints';
 import type { Context } from '../context';
 import { once } from './once';
 
@@ -15,23 +14,13 @@ export interface LineLoop {
 export const lineLoops = once((context: Context): LineLoop[] => {
   const { graph } = context;
   const found = new Map<number, LineLoop>();
-  const add = (edge: number, loop: number[], condition: string, switches: string[]) => {
-    const entry = found.get(edge) ?? { edge, loop, conditions: [], switches };
-    if (!entry.conditions.includes(condition)) entry.conditions.push(condition);
-    found.set(edge, entry);
-  };
-  for (const { condition, lineLoops: always, stands } of context.evaluated) {
-    for (const { edge, loop } of always) add(edge, loop, condition.name, []);
-    const starts = condition.sources.map(({ line }) => line);
-    for (const stand of stands) {
-      if (stand.shorted) continue;
-      for (const joint of findParallelJoints(graph, stand.closed, starts)) {
-        if (!meetsDevice(graph, joint)) continue;
-        const switches = joint.loop.flatMap((number) =>
-          graph.edges[number]!.kind === 'select' ? [graph.edges[number]!.part!] : [],
-        );
-        add(joint.edge, joint.loop, condition.name, [...new Set(switches)].sort());
-      }
+  for (const { condition, lineLoops: loops } of context.evaluated) {
+    for (const { edge, loop } of loops) {
+      const through = [edge, ...loop].map((number) => graph.edges[number]!).filter(({ kind }) => kind === 'select');
+      const switches = [...new Set(through.map(({ part }) => part!))].sort();
+      const entry = found.get(edge) ?? { edge, loop, conditions: [], switches };
+      if (!entry.conditions.includes(condition.name)) entry.conditions.push(condition.name);
+      found.set(edge, entry);
     }
   }
   return [...found.values()];

@@ -15,6 +15,8 @@ export interface OpenRegion extends DeadRegion {
   on?: 'earth' | 'line';
   /** id of the inverter whose points are dead on mains only */
   inverter?: string;
+  /** backed-up points that the same gap makes dead on mains */
+  onMains?: string[];
   /** neutral and earth change places here: the missing earth says it */
   swapped?: true;
   /** the points hang between the lines of two devices: the mixed feed says it */
@@ -131,7 +133,18 @@ function withoutNeutral(context: Context): OpenRegion[] {
   });
 }
 
+/** Gaps in the line: where one starves mains and the input of an inverter alike it is one gap. */
+function withoutLine(context: Context): OpenRegion[] {
+  const never = neverFed(context);
+  const apart = deadOnMains(context).filter((dead) => {
+    const same = never.find(({ nodes }) => [...dead.nodes].some((node) => nodes.has(node)));
+    if (same) same.onMains = [...(same.onMains ?? []), ...dead.points];
+    return same === undefined;
+  });
+  return [...never, ...apart];
+}
+
 /** All gaps in line and neutral that starve a point; stretches that end in a hanging plug are only not plugged in. */
 export const openRegions = once((context: Context): OpenRegion[] =>
-  [...neverFed(context), ...deadOnMains(context), ...withoutNeutral(context)].filter(({ hanging }) => !hanging),
+  [...withoutLine(context), ...withoutNeutral(context)].filter(({ hanging }) => !hanging),
 );

@@ -51,12 +51,16 @@ testRule(openLine, {
     'a whole cable to a room missing': {
       drawing: smallHome().cut('Q11', 'JL11').cut('NB', 'JN11').cut('EB', 'JE11'),
       findings: [{ parts: ['JL11', 'E1', 'X1'] }],
-      also: ['missing-earth', 'open-terminal'],
+      also: ['missing-earth'],
     },
     'backed up, and dead on mains': {
       drawing: backupHome().cut('Q3:2', 'G1:in.L'),
       findings: [{ parts: ['G1', 'E2', 'X2'], conditions: ['mains'] }],
       also: ['open-terminal'],
+    },
+    'mains and the input of the inverter starved by one gap': {
+      drawing: backupHome().cut('Q1:2', 'LB0'),
+      findings: [{ parts: ['LB', 'LB0', 'E1', 'X1', 'E2', 'X2'], message: /On mains E2 and X2/ }],
     },
     'a supply that is not joined to the meter': {
       drawing: smallHome().cut('SUP:L', 'F1:1'),

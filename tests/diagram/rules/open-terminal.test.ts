@@ -42,7 +42,7 @@ testRule(openTerminal, {
     },
     'a battery without its minus': {
       drawing: backupHome().cut('G2:-', 'G1:bat.-'),
-      findings: [{ parts: ['G1'] }, { parts: ['G2'] }],
+      findings: [{ parts: ['G1', 'G2'] }],
     },
     'a surge arrester without earth': {
       drawing: smallHome().cut('F9:E', 'EB'),
