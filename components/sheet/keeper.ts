@@ -1,10 +1,11 @@
-import { applyPatch, isEmptyPatch, touched, type Patch } from '@/diagram/document/patch';
+import { applyPatch, type Patch } from '@/diagram/document/patch';
 import type { Installation } from '@/diagram/document/schema';
-import { conflicts, settle, without } from '@/diagram/commands/merge';
 import type { DrawingView, SavedChange } from '@/lib/shared/drawings';
 import type { DrawingApi } from './drawing-api';
+import { HistoryKeeper } from './history-keeper';
 import { newUuid } from './identity';
-import type { HistoryStep, Outbox, QueuedChange } from './outbox';
+import type { Outbox, QueuedChange } from './outbox';
+import { settleAll, takeIn } from './rebase';
 import type { SaveState } from './save-state';
 import { stillThere, type DrawingStore } from './store';
 
@@ -26,7 +27,6 @@ export interface KeeperTools {
 }
 
 const LONGEST_WAIT = 30_000;
-const HISTORY_DELAY = 300;
 
 /**
  * Keeps the changes of one drawing: outbox first, then the network, one after the other and each against the revision it
@@ -45,7 +45,7 @@ export class Keeper {
   private refusal = '';
   private attempt = 0;
   private timer: ReturnType<typeof setTimeout> | undefined;
-  private historyTimer: ReturnType<typeof setTimeout> | undefined;
+  private readonly history: HistoryKeeper;
   private busy = false;
   private stopped = false;
   private savedAt: number | null = null;
@@ -59,6 +59,7 @@ export class Keeper {
   ) {
     this.base = view.document;
     this.rev = view.rev;
+    this.history = new HistoryKeeper(store, (error) => this.storageFailed(error));
     this.ready = this.open();
   }
 
@@ -75,15 +76,7 @@ export class Keeper {
       const adopted = left.map((change) => ({ ...change, windowId }));
       if (adopted.length > 0) await this.outbox.replace(adopted);
       this.pending = [...adopted, ...this.pending];
-      const history = await this.outbox.readHistory(this.view.id, personId, windowId);
-      if (history) {
-        const { undoSteps, redoSteps } = this.store().getState();
-        this.store().setState({
-          undoSteps: [...history.undo, ...undoSteps],
-          redoSteps: undoSteps.length > 0 ? redoSteps : history.redo,
-          aside: history.aside,
-        });
-      }
+      await this.history.restore(this.outbox, this.place);
       if (adopted.length > 0) {
         this.rebuild();
         this.store().setState({ notice: `Found on this device: ${adopted.length} unsent, being saved now.` });
@@ -231,30 +224,21 @@ export class Keeper {
 
   /** Takes in the changes of others, and finds which of mine are already among them. */
   private async absorb(since: readonly SavedChange[]): Promise<void> {
-    const mine = new Set(this.pending.map((change) => change.saveId));
-    const done: string[] = [];
-    const theirs: SavedChange[] = [];
     const before = this.rev;
-    for (const change of [...since].sort((a, b) => a.rev - b.rev)) {
-      if (mine.has(change.saveId)) done.push(change.saveId);
-      else theirs.push(change);
-      if (change.rev <= this.rev) continue;
-      this.base = applyPatch(this.base, change.patch);
-      this.rev = change.rev;
-    }
-    this.pending = this.pending.filter((change) => !done.includes(change.saveId));
-    const keys = new Set(
-      this.pending.flatMap((mineChange) => theirs.flatMap((their) => conflicts(mineChange.patch, their.patch))),
+    const { base, rev, pending, done, theirs, keys } = takeIn(
+      { base: this.base, rev: this.rev, pending: this.pending },
+      since,
     );
-    // While somebody has to choose, the changes keep the revision they were drawn on: a reload then asks again.
-    if (keys.size === 0) for (const change of this.pending) change.base = this.rev;
     const myDocument = this.store().getState().document;
+    this.base = base;
+    this.rev = rev;
+    this.pending = pending;
     this.rebuild();
     if (done.length > 0) this.savedAt = Date.now();
     const newest = theirs.findLast((change) => change.rev > before && change.person.id !== this.drawer.personId);
     this.store().setState({
       ...(newest && { news: newest }),
-      ...(keys.size > 0 && { conflict: { keys: [...keys].sort(), theirs, myDocument, theirDocument: this.base } }),
+      ...(keys.length > 0 && { conflict: { keys, theirs, myDocument, theirDocument: base } }),
     });
     await this.rewrite(done);
     this.report();
@@ -276,16 +260,7 @@ export class Keeper {
   async decide(theirs: ReadonlySet<string>): Promise<void> {
     const { conflict, aside } = this.store().getState();
     if (!conflict) return;
-    const gone: string[] = [];
-    const kept: QueuedChange[] = [];
-    const put: HistoryStep[] = [];
-    for (const change of this.pending) {
-      const patch = settle(change.patch, conflict.myDocument, conflict.keys, theirs);
-      const lost = without(change.patch, touched(patch));
-      if (!isEmptyPatch(lost)) put.push({ label: change.label, step: lost, back: {}, at: Date.now() });
-      if (isEmptyPatch(patch)) gone.push(change.saveId);
-      else kept.push({ ...change, patch, base: this.rev });
-    }
+    const { kept, gone, aside: put } = settleAll(this.pending, conflict, theirs, this.rev);
     this.pending = kept;
     this.store().setState({ conflict: null, aside: [...aside, ...put] });
     this.rebuild();
@@ -315,23 +290,16 @@ export class Keeper {
   }
 
   private keepHistory(): void {
-    clearTimeout(this.historyTimer);
-    this.historyTimer = setTimeout(() => void this.writeHistory(), HISTORY_DELAY);
+    this.history.later(() => this.writeHistory());
   }
 
   /** Writes the history now; undo then survives a reload. */
-  async writeHistory(): Promise<void> {
-    const { undoSteps, redoSteps, aside } = this.store().getState();
-    const { personId, windowId } = this.drawer;
-    try {
-      await this.outbox?.writeHistory(this.view.id, personId, windowId, {
-        undo: [...undoSteps],
-        redo: [...redoSteps],
-        aside: [...aside],
-      });
-    } catch (error) {
-      this.storageFailed(error);
-    }
+  writeHistory(): Promise<void> {
+    return this.history.write(this.outbox, this.place);
+  }
+
+  private get place() {
+    return { drawingId: this.view.id, ...this.drawer };
   }
 
   /** True while closing the window would lose a change. */
@@ -355,6 +323,6 @@ export class Keeper {
   stop(): void {
     this.stopped = true;
     clearTimeout(this.timer);
-    clearTimeout(this.historyTimer);
+    this.history.stop();
   }
 }

@@ -8,7 +8,6 @@ import type { At, Recipe } from './types';
 
 /** What is hung behind a control switch: the load that it works. */
 
-const CONTROLS: ReadonlySet<Kind> = new Set(['switch', 'switch-2way', 'switch-cross', 'regulator', 'switch-2pole']);
 const LOADS: ReadonlySet<Kind> = new Set(['lamp', 'fan']);
 
 const isSwitchedEnd = (at: At): boolean => {
@@ -144,5 +143,3 @@ export const otherTwoWay: Recipe = function* (at) {
     },
   };
 };
-
-export const isControl = (kind: Kind): boolean => CONTROLS.has(kind);
