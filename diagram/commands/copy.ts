@@ -123,6 +123,7 @@ export function pasteClip(
     wires: [...doc.wires, ...fresh.wires],
     cables: [...doc.cables, ...fresh.cables],
     sheet: {
+      ...doc.sheet,
       overview: shifted(clip.overview, doc.sheet?.overview),
       connections: shifted(clip.connections, doc.sheet?.connections),
     },

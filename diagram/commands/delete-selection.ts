@@ -16,7 +16,7 @@ export function withoutItems(doc: Installation, parts: ReadonlySet<string>, wire
     const { in: _socket, ...hanging } = part;
     return hanging;
   };
-  const keep = (positions: NonNullable<Installation['sheet']>['overview']) =>
+  const keep = <P>(positions: Record<string, P> | undefined) =>
     positions && Object.fromEntries(Object.entries(positions).filter(([id]) => !parts.has(id)));
   return canonical({
     ...doc,
@@ -24,7 +24,12 @@ export function withoutItems(doc: Installation, parts: ReadonlySet<string>, wire
     wires: rest,
     cables: doc.cables.filter((cable) => used.has(cable.id) || !before.has(cable.id)),
     ...(doc.silenced && { silenced: doc.silenced.filter(({ at }) => !goes(at)) }),
-    sheet: { overview: keep(doc.sheet?.overview), connections: keep(doc.sheet?.connections) },
+    sheet: {
+      ...doc.sheet,
+      overview: keep(doc.sheet?.overview),
+      connections: keep(doc.sheet?.connections),
+      plan: keep(doc.sheet?.plan),
+    },
   });
 }
 

@@ -1,4 +1,4 @@
-import type { Face, Installation, Position } from '../document/schema';
+import { ARRANGEMENTS, type Arrangement, type Installation, type Position } from '../document/schema';
 import { touched, type Patch } from '../document/patch';
 
 /**
@@ -8,8 +8,8 @@ import { touched, type Patch } from '../document/patch';
 
 type Side = Record<string, unknown>;
 type Item = { id: string };
-const LISTS: ReadonlySet<string> = new Set(['places', 'parts', 'wires', 'cables', 'survey']);
-const isFace = (name: string): name is Face => name === 'overview' || name === 'connections';
+const LISTS: ReadonlySet<string> = new Set(['places', 'parts', 'wires', 'cables', 'survey', 'plans']);
+const isFace = (name: string): name is Arrangement => (ARRANGEMENTS as readonly string[]).includes(name);
 
 /** `parts:Q1` as its two halves; a field of the document has no second one. */
 export function splitKey(key: string): { name: string; id: string | null } {
@@ -131,6 +131,6 @@ export function ownOnly(doc: Installation, back: Patch, step: Patch): Patch {
   }
   const kept = new Set<string>();
   for (const id of mine.remove?.parts ?? [])
-    if (held.has(id)) for (const name of ['parts', 'overview', 'connections']) kept.add(`${name}:${id}`);
+    if (held.has(id)) for (const name of ['parts', ...ARRANGEMENTS]) kept.add(`${name}:${id}`);
   return kept.size === 0 ? mine : without(mine, kept);
 }

@@ -21,7 +21,7 @@ function lasting(doc: Installation): Installation {
     );
   return canonical({
     ...doc,
-    sheet: { overview: kept(doc.sheet?.overview), connections: kept(doc.sheet?.connections) },
+    sheet: { ...doc.sheet, overview: kept(doc.sheet?.overview), connections: kept(doc.sheet?.connections) },
   });
 }
 

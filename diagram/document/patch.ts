@@ -1,10 +1,13 @@
 import { z } from 'zod';
 import {
+  ARRANGEMENTS,
   CableSchema,
+  FloorPlanSchema,
   IdSchema,
   NoticeSchema,
   PartSchema,
   PlaceSchema,
+  PlanPositionSchema,
   PositionSchema,
   PracticeIdSchema,
   SilenceSchema,
@@ -12,7 +15,7 @@ import {
   SurveyRoomSchema,
   WireSchema,
   canonical,
-  type Face,
+  type Arrangement,
   type Installation,
   type Position,
 } from './schema';
@@ -22,9 +25,8 @@ import {
  * the outbox keeps, the server stores and the other window applies. Its inverse is computed, not written by hand.
  */
 
-const LISTS = ['places', 'parts', 'wires', 'cables', 'survey'] as const;
+const LISTS = ['places', 'parts', 'wires', 'cables', 'survey', 'plans'] as const;
 type List = (typeof LISTS)[number];
-const FACES = ['overview', 'connections'] as const satisfies readonly Face[];
 const FIELDS = ['title', 'practice', 'supply', 'ambient', 'notices', 'silenced'] as const;
 
 const listOf = <T extends z.ZodType>(item: T) => z.array(item).min(1).optional();
@@ -38,8 +40,10 @@ export const PatchSchema = z.strictObject({
       wires: listOf(WireSchema),
       cables: listOf(CableSchema),
       survey: listOf(SurveyRoomSchema),
+      plans: listOf(FloorPlanSchema),
       overview: z.record(IdSchema, PositionSchema).optional(),
       connections: z.record(IdSchema, PositionSchema).optional(),
+      plan: z.record(IdSchema, PlanPositionSchema).optional(),
       title: z.string().max(120).optional(),
       practice: PracticeIdSchema.optional(),
       supply: SupplySchema.optional(),
@@ -55,8 +59,10 @@ export const PatchSchema = z.strictObject({
       wires: ids,
       cables: ids,
       survey: ids,
+      plans: ids,
       overview: ids,
       connections: ids,
+      plan: ids,
       notices: z.literal(true).optional(),
       silenced: z.literal(true).optional(),
     })
@@ -66,7 +72,7 @@ export type Patch = z.infer<typeof PatchSchema>;
 
 type Item = { id: string };
 const listIn = (doc: Installation, list: List): readonly Item[] => (doc[list] as readonly Item[] | undefined) ?? [];
-const placedIn = (doc: Installation, face: Face): Record<string, Position> => doc.sheet?.[face] ?? {};
+const placedIn = (doc: Installation, face: Arrangement): Record<string, Position> => doc.sheet?.[face] ?? {};
 
 function mergeList(items: readonly Item[], set: readonly Item[] = [], remove: readonly string[] = []): Item[] {
   const merged = new Map(items.map((item) => [item.id, item]));
@@ -87,10 +93,11 @@ export function applyPatch(doc: Installation, patch: Patch): Installation {
   if (remove.silenced) delete next.silenced;
   for (const list of LISTS)
     if (set[list] || remove[list]) Object.assign(next, { [list]: mergeList(listIn(doc, list), set[list], remove[list]) });
-  for (const face of FACES) {
+  for (const face of ARRANGEMENTS) {
+    if (!set[face] && !remove[face]) continue;
     const places = { ...placedIn(doc, face) };
     for (const id of remove[face] ?? []) delete places[id];
-    next.sheet![face] = { ...places, ...set[face] };
+    Object.assign(next.sheet!, { [face]: { ...places, ...set[face] } });
   }
   return canonical(next);
 }
@@ -114,12 +121,12 @@ export function diff(from: Installation, to: Installation): Patch {
     if (changed.length > 0) Object.assign(set, { [list]: changed });
     if (gone.length > 0) remove[list] = gone;
   }
-  for (const face of FACES) {
+  for (const face of ARRANGEMENTS) {
     const before = placedIn(from, face);
     const after = placedIn(to, face);
     const changed = Object.keys(after).filter((id) => !same(before[id], after[id]));
     const gone = Object.keys(before).filter((id) => !after[id]);
-    if (changed.length > 0) set[face] = Object.fromEntries(changed.map((id) => [id, after[id]!]));
+    if (changed.length > 0) Object.assign(set, { [face]: Object.fromEntries(changed.map((id) => [id, after[id]!])) });
     if (gone.length > 0) remove[face] = gone;
   }
   return {

@@ -230,9 +230,36 @@ export const PositionSchema = z.strictObject({
 });
 const positions = z.record(IdSchema, PositionSchema);
 
+const onPlan = z.int().min(-1_000_000).max(1_000_000);
+/**
+ * The plan of a storey: a picture of the job, behind a second arrangement of the same parts. Presentation only; it reaches
+ * no result.
+ */
+export const FloorPlanSchema = z.strictObject({
+  id: IdSchema,
+  /** "Ground floor" */
+  name: z.string().trim().min(1).max(60),
+  /** id of the picture among those of the job */
+  picture: IdSchema,
+  /** 1/100 mm, the size at which the picture lies on the paper; its upper left corner is the origin of positions */
+  width: z.int().min(1000).max(200_000),
+  height: z.int().min(1000).max(200_000),
+  /** a line on the picture whose length somebody measured in the home: it gives the plan its scale */
+  measured: z
+    .strictObject({ x1: onPlan, y1: onPlan, x2: onPlan, y2: onPlan, metres: positive.max(1000) })
+    .optional(),
+});
+
+/** Where a part stands on the plan of a storey; the other faces keep their own positions. */
+export const PlanPositionSchema = PositionSchema.extend({
+  /** id of the floor plan */
+  on: IdSchema,
+});
+
 export const SheetSchema = z.strictObject({
   overview: positions.optional(),
   connections: positions.optional(),
+  plan: z.record(IdSchema, PlanPositionSchema).optional(),
 });
 
 const uniqueIds = (list: readonly { id: string }[], path: string, ctx: z.RefinementCtx) => {
@@ -244,6 +271,7 @@ const uniqueIds = (list: readonly { id: string }[], path: string, ctx: z.Refinem
 };
 
 export const MAX_PARTS = 20_000;
+export const MAX_PLANS = 12;
 
 export const DocumentSchema = z
   .strictObject({
@@ -261,6 +289,8 @@ export const DocumentSchema = z
     silenced: z.array(SilenceSchema).max(500).optional(),
     /** what each room is to hold: the draft is made from it and the sheet is compared with it */
     survey: z.array(SurveyRoomSchema).max(100).optional(),
+    /** the plans of the storeys */
+    plans: z.array(FloorPlanSchema).max(MAX_PLANS).optional(),
     sheet: SheetSchema.optional(),
   })
   .superRefine((doc, ctx) => {
@@ -269,6 +299,7 @@ export const DocumentSchema = z
     uniqueIds(doc.wires, 'wires', ctx);
     uniqueIds(doc.cables, 'cables', ctx);
     if (doc.survey) uniqueIds(doc.survey, 'survey', ctx);
+    if (doc.plans) uniqueIds(doc.plans, 'plans', ctx);
   });
 
 export type PracticeId = z.infer<typeof PracticeIdSchema>;
@@ -285,7 +316,12 @@ export type Notice = z.infer<typeof NoticeSchema>;
 export type Silence = z.infer<typeof SilenceSchema>;
 export type SurveyRoom = z.infer<typeof SurveyRoomSchema>;
 export type Position = z.infer<typeof PositionSchema>;
+export type FloorPlan = z.infer<typeof FloorPlanSchema>;
+export type PlanPosition = z.infer<typeof PlanPositionSchema>;
 export type Face = 'overview' | 'connections';
+/** Whatever keeps positions of its own for the same parts: the two faces, and the floor plan. */
+export const ARRANGEMENTS = ['overview', 'connections', 'plan'] as const satisfies readonly (Face | 'plan')[];
+export type Arrangement = (typeof ARRANGEMENTS)[number];
 export type Installation = z.infer<typeof DocumentSchema>;
 
 /** A problem of a file: where it is and what is wrong with it, in words for the person who wrote it. */
@@ -313,7 +349,7 @@ export const byId = (a: { id: string }, b: { id: string }): number => byCode(a.i
 
 const byOrder = (a: SurveyRoom, b: SurveyRoom): number => a.order - b.order || byId(a, b);
 
-const sortedPositions = (places: Record<string, Position>): Record<string, Position> =>
+const sortedPositions = <P extends Position>(places: Record<string, P>): Record<string, P> =>
   Object.fromEntries(
     Object.keys(places)
       .sort(byCode)
@@ -325,10 +361,11 @@ const sortedPositions = (places: Record<string, Position>): Record<string, Posit
  * left out. The same home is the same bytes whatever the order of drawing.
  */
 export function canonical(doc: Installation): Installation {
-  const { overview, connections } = doc.sheet ?? {};
+  const { overview, connections, plan } = doc.sheet ?? {};
   const sheet = {
     ...(overview && Object.keys(overview).length > 0 && { overview: sortedPositions(overview) }),
     ...(connections && Object.keys(connections).length > 0 && { connections: sortedPositions(connections) }),
+    ...(plan && Object.keys(plan).length > 0 && { plan: sortedPositions(plan) }),
   };
   return {
     schema: 1,
@@ -343,6 +380,7 @@ export function canonical(doc: Installation): Installation {
     ...(doc.notices?.length && { notices: doc.notices }),
     ...(doc.silenced?.length && { silenced: doc.silenced }),
     ...(doc.survey?.length && { survey: [...doc.survey].sort(byOrder) }),
+    ...(doc.plans?.length && { plans: [...doc.plans].sort(byId) }),
     ...(Object.keys(sheet).length > 0 && { sheet }),
   };
 }

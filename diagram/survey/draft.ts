@@ -37,9 +37,10 @@ function untouched(doc: Installation): (room: SurveyRoom) => Wish {
 /** Positions of parts that are gone from the drawing are dropped. */
 function withoutStrays(doc: Installation): Installation {
   const ids = new Set(doc.parts.map(({ id }) => id));
-  const kept = (positions: Record<string, Position> = {}) =>
+  const kept = <P extends Position>(positions: Record<string, P> = {}) =>
     Object.fromEntries(Object.entries(positions).filter(([id]) => ids.has(id)));
-  return { ...doc, sheet: { overview: kept(doc.sheet?.overview), connections: kept(doc.sheet?.connections) } };
+  const { overview, connections, plan } = doc.sheet ?? {};
+  return { ...doc, sheet: { ...doc.sheet, overview: kept(overview), connections: kept(connections), plan: kept(plan) } };
 }
 
 /** The document with what its survey asks for drawn: a whole home where it has no supply, else what is missing. */

@@ -1,5 +1,5 @@
 import 'server-only';
-import { MAX_PARTS, type Installation } from '@/diagram/document/schema';
+import { MAX_PARTS, MAX_PLANS, type Installation } from '@/diagram/document/schema';
 import { AppError } from '@/lib/server/errors';
 
 /** How many of each a document may hold: the bounds of its schema, counted without parsing the whole home again. */
@@ -10,7 +10,9 @@ const MOST: Record<string, [(doc: Installation) => number, number]> = {
   cables: [(doc) => doc.cables.length, MAX_PARTS],
   survey: [(doc) => doc.survey?.length ?? 0, 100],
   'sheet.overview': [(doc) => Object.keys(doc.sheet?.overview ?? {}).length, MAX_PARTS],
+  plans: [(doc) => doc.plans?.length ?? 0, MAX_PLANS],
   'sheet.connections': [(doc) => Object.keys(doc.sheet?.connections ?? {}).length, MAX_PARTS],
+  'sheet.plan': [(doc) => Object.keys(doc.sheet?.plan ?? {}).length, MAX_PARTS],
 };
 
 /**
