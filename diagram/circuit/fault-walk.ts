@@ -2,6 +2,7 @@ import { byDesignation, nameOf } from '../document/names';
 import type { Graph } from '../terminals/graph';
 import { reach, reaches } from '../terminals/reach';
 import type { Standing } from './assemble';
+import type { Condition } from './conditions';
 import type { Evaluated, Evaluation } from './evaluate';
 import { caseVoltsOf, darkLoads, liveParts, loadVoltsOf, wireAmpsOf } from './fault-reading';
 import { insertFault, type Inserted } from './fault-insert';
@@ -30,9 +31,9 @@ function conditionNamed(evaluation: Evaluation, name: string | undefined): Evalu
 }
 
 /** What the supply's data must give for a fault of this kind to be walked on mains. */
-function requireSupply(graph: Graph, evaluated: Evaluated, faults: readonly Fault[]): void {
+function requireSupply(graph: Graph, condition: Condition, faults: readonly Fault[]): void {
   const { supply } = graph.document;
-  if (evaluated.condition.base === 'outage') return;
+  if (condition.base === 'outage') return;
   const earth = faults.some(({ kind }) => kind === 'line-to-case' || kind === 'neutral-to-earth');
   if (earth && supply.system === 'TT' && supply.ra === undefined)
     throw new FaultError('cannot be walked without the resistance of the earth electrode (supply.ra)');
@@ -76,10 +77,25 @@ export function walkFaults(
 ): FaultWalk {
   if (faults.length === 0) throw new FaultError('there is no fault to walk');
   const evaluated = conditionNamed(evaluation, condition);
+  return walkFrom(graph, startingStand(graph, evaluated, faults), faults);
+}
+
+/** What a walk shows as it goes: the home solved before the first fault, and after each step. */
+export interface WalkWatch {
+  before?(steady: Steady): void;
+  step?(step: FaultStep, steady: Steady): void;
+}
+
+/**
+ * Walks faults from a home that stands in any way: its switches and devices where somebody has put them.
+ * @throws FaultError as {@link walkFaults}
+ */
+export function walkFrom(graph: Graph, start: Standing, faults: readonly Fault[], watch: WalkWatch = {}): FaultWalk {
   for (const { at } of faults) if (!graph.parts.has(at)) throw new FaultError(`there is no part "${at}"`);
-  requireSupply(graph, evaluated, faults);
-  let standing = startingStand(graph, evaluated, faults);
+  requireSupply(graph, start.condition, faults);
+  let standing = start;
   const before = solveStanding(graph, standing);
+  watch.before?.(before);
   const watchesOvercurrent = before.assembly.inverters.every(({ mostA }) => mostA !== null);
   const opened = new Set<string>();
   const steps: FaultStep[] = [];
@@ -87,23 +103,27 @@ export function walkFaults(
   let t = 0;
   let earliest = 0;
   let inserted!: Inserted;
-  let start = 0;
+  let began = 0;
   let touchVolts = 0;
   let faultAmps = 0;
   let by: string | null = null;
   let clearedAt: number | null = null;
 
   const reading = (steady: Steady) => readingAt(graph, inserted, before, steady);
+  const add = (step: FaultStep) => {
+    steps.push(step);
+    watch.step?.(step, now);
+  };
   for (const fault of faults) {
     inserted = insertFault(graph, fault, standing, now);
     standing = inserted.standing;
     now = solveStanding(graph, standing);
-    start = t;
+    began = t;
     by = null;
     clearedAt = null;
     const name = nameOf(graph.document, graph.parts.get(fault.at)!);
     const first = reading(now);
-    steps.push({ t, earliest, event: WORDS[fault.kind](name, fault.wire), part: fault.at, orElse: [], ...first });
+    add({ t, earliest, event: WORDS[fault.kind](name, fault.wire), part: fault.at, orElse: [], ...first });
     touchVolts = first.touchVolts;
     faultAmps = first.faultAmps;
     const endured = new Map<string, { early: number; late: number }>();
@@ -124,7 +144,7 @@ export function walkFaults(
       opened.add(part.id);
       standing = withOpened(graph, standing, part.id);
       now = solveStanding(graph, standing);
-      steps.push({
+      add({
         t,
         earliest,
         event: `${nameOf(graph.document, part)} opens`,
@@ -141,16 +161,16 @@ export function walkFaults(
         by = part.id;
       }
     }
-    if (opened.size === openedBefore) steps.push({ ...steps[steps.length - 1]!, event: 'no device opens' });
+    if (opened.size === openedBefore) add({ ...steps[steps.length - 1]!, event: 'no device opens' });
   }
   const last = steps[steps.length - 1]!;
   return {
-    condition: evaluated.condition.name,
+    condition: start.condition.name,
     steps,
     touchVolts,
     faultAmps,
     cleared: clearedAt !== null,
-    clearedAfter: clearedAt === null ? null : clearedAt - start,
+    clearedAfter: clearedAt === null ? null : clearedAt - began,
     by,
     live: last.live,
     dark: last.dark,
