@@ -40,6 +40,8 @@ const DIAGRAM: Record<string, readonly string[]> = {
     'layout',
     'paper',
   ],
+  // What a terminal carries and where a wire may end is said as the commands know it.
+  outline: ['document', 'terminals', 'rules', 'layout', 'commands'],
 };
 const PACKAGES: Record<string, RegExp> = {
   diagram: /^zod$/,
