@@ -11,6 +11,7 @@ import { JobPerson } from './job-person';
 import { Login } from './login';
 import { Membership } from './membership';
 import { Person } from './person';
+import { Presence } from './presence';
 import { Revision } from './revision';
 import { sequelize } from './sequelize';
 import { Team } from './team';
@@ -41,6 +42,7 @@ export {
   Login,
   Membership,
   Person,
+  Presence,
   Revision,
   Team,
   sequelize,

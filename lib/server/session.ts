@@ -28,8 +28,11 @@ interface Row {
   stale: boolean;
 }
 
-/** The person behind a session that is neither ended nor out of time, with the roles held now. */
-export async function actorOf({ tid, sid, sub }: SessionToken): Promise<Actor | null> {
+/**
+ * The person behind a session that is neither ended nor out of time, with the roles held now.
+ * @param touch false where nobody did anything: such a look must not keep an idle session alive
+ */
+export async function actorOf({ tid, sid, sub }: SessionToken, { touch = true } = {}): Promise<Actor | null> {
   const [row] = await sequelize.query<Row>(
     `select p.id as "personId", p.name, t.name as team, s.seen_at < now() - interval '1 minute' as stale,
             array(select m.role from memberships m where m.team_id = p.team_id and m.person_id = p.id order by 1) as roles
@@ -41,7 +44,7 @@ export async function actorOf({ tid, sid, sub }: SessionToken): Promise<Actor | 
     { bind: [tid, sid, sub, IDLE_H], type: QueryTypes.SELECT },
   );
   if (!row) return null;
-  if (row.stale)
+  if (touch && row.stale)
     await sequelize.query('update auth_sessions set seen_at = now() where team_id = $1 and id = $2', {
       bind: [tid, sid],
     });

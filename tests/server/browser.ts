@@ -29,10 +29,23 @@ export interface Answer {
 export class Browser {
   constructor(readonly jar = new Jar()) {}
 
-  async ask(
+  async ask(handler: unknown, asked: Asked = {}): Promise<Answer> {
+    const response = await this.open(handler, asked);
+    if (response.headers.get('content-type')?.startsWith('text/event-stream')) {
+      // A stream has no end to wait for: that it began is the answer.
+      await response.body?.cancel();
+      return { status: response.status, body: '', headers: response.headers };
+    }
+    const text = await response.text();
+    const isJson = response.headers.get('content-type')?.includes('json') ?? false;
+    return { status: response.status, body: isJson && text ? JSON.parse(text) : text, headers: response.headers };
+  }
+
+  /** The answer as it comes, for bodies that are read piece by piece or as bytes. */
+  async open(
     handler: unknown,
     { method = 'GET', path = '/', params = {}, body, raw, headers = {} }: Asked = {},
-  ): Promise<Answer> {
+  ): Promise<Response> {
     const sends = method !== 'GET' && method !== 'HEAD';
     const given = {
       ...(sends && { origin: ORIGIN, 'sec-fetch-site': 'same-origin', 'content-type': 'application/json' }),
@@ -45,10 +58,7 @@ export class Browser {
       body: raw ?? (sends && body !== undefined ? JSON.stringify(body) : undefined),
     });
     const context = { params: Promise.resolve(params) } as { params: Promise<never> };
-    const response = await withJar(this.jar, () => (handler as Handler)(request, context));
-    const text = await response.text();
-    const isJson = response.headers.get('content-type')?.includes('json') ?? false;
-    return { status: response.status, body: isJson && text ? JSON.parse(text) : text, headers: response.headers };
+    return withJar(this.jar, () => (handler as Handler)(request, context));
   }
 
   post(handler: unknown, params: Record<string, string>, body?: unknown): Promise<Answer> {

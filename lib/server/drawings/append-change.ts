@@ -1,6 +1,7 @@
 import 'server-only';
 import { QueryTypes, type Transaction } from 'sequelize';
 import { applyPatch } from '@/diagram/document/patch';
+import { sendNote } from '@/lib/server/live/notes';
 import { checkLimits } from '@/lib/server/drawings/check-limits';
 import { changeHash } from '@/lib/server/drawings/hash';
 import type { DrawingState } from '@/lib/server/drawings/state-cache';
@@ -43,5 +44,6 @@ export async function appendChange(
     { teamId: who.teamId, ...change, prevHash: state.hash, hash },
     { transaction, returning: false },
   );
+  await sendNote({ team: who.teamId, drawing: drawingId, rev }, transaction);
   return { rev, hash, document };
 }
