@@ -99,6 +99,12 @@ function renamed(doc: Installation, clip: Clip, newId: NewId) {
   return { ids, parts: clip.parts.map(part), wires, cables };
 }
 
+/** Parts and the wires among them once more, with new ids and designations, where they are. */
+export const cloneParts = (doc: Installation, ids: readonly string[], newId: NewId) => {
+  const clip = copyParts(doc, ids);
+  return clip ? renamed(doc, clip, newId) : { ids: new Map<string, string>(), parts: [], wires: [], cables: [] };
+};
+
 /** Puts a clip on the sheet, beside where it was. */
 export function pasteClip(
   doc: Installation,

@@ -1,7 +1,7 @@
 import { diff } from '../document/patch';
 import { PartSchema, canonical, type Cable, type Installation, type Part } from '../document/schema';
-import { nameOf } from '../document/names';
-import { readCable, readRating } from './rating-text';
+import { listNames, nameOf } from '../document/names';
+import { ratingText, readCable, readRating } from './rating-text';
 import type { Command, Refusal } from './types';
 
 const setPart = (doc: Installation, part: Part) =>
@@ -20,6 +20,31 @@ export function editRating(doc: Installation, partId: string, text: string): Com
     patch: setPart(doc, reading.value),
     parts: [partId],
   };
+}
+
+/** Changes the rating of several parts at once, in one step; refused whole where one of them has no such rating. */
+export function editRatings(doc: Installation, ids: readonly string[], text: string): Command | Refusal {
+  if (ids.length === 1) return editRating(doc, ids[0]!, text);
+  const chosen = doc.parts.filter((part) => ids.includes(part.id));
+  if (chosen.length === 0) return { refused: 'Those parts are no longer drawn.' };
+  const changed = new Map<string, Part>();
+  for (const part of chosen) {
+    const reading = readRating(part, text);
+    if (!reading.ok) return { refused: `${nameOf(doc, part)}: ${reading.message}` };
+    changed.set(part.id, reading.value);
+  }
+  const names = listNames(chosen.map((part) => nameOf(doc, part)), 4);
+  return {
+    label: `${names}: ${text.trim() || 'no rating'}`,
+    patch: diff(doc, canonical({ ...doc, parts: doc.parts.map((part) => changed.get(part.id) ?? part) })),
+    parts: chosen.map((part) => part.id),
+  };
+}
+
+/** The rating that several parts share as it is written; empty where they differ. */
+export function sharedRating(doc: Installation, ids: readonly string[]): string {
+  const texts = new Set(doc.parts.filter((part) => ids.includes(part.id)).map(ratingText));
+  return texts.size === 1 ? [...texts][0]! : '';
 }
 
 /** Changes a designation or a label. An empty one is taken away. */

@@ -8,9 +8,9 @@ import { USUAL_RUN } from '../survey/columns';
 import { sizeRun } from '../survey/drafting/size-run';
 import { cableOf } from '../survey/drafting/room-box';
 import { Sketch } from '../survey/drafting/sketch';
-import { isBar } from '../document/kinds';
 import { companionsOf, type Feed } from './companions';
 import { withPlaces } from './place-new';
+import { tapAt } from './tap';
 import type { Command, NewId, Refusal } from './types';
 import { endKey, walkFromSources, type Walk } from './walk';
 
@@ -96,25 +96,6 @@ function dropIdleJoints(sketch: Sketch): void {
   }
 }
 
-function tap(sketch: Sketch, end: End, newId: NewId): End {
-  const part = sketch.find(end[0]);
-  if (part && isBar(part.kind)) return sketch.nextOn(part.id);
-  if (sketch.wiresAt(end).length < 2) return end;
-  const joint = sketch.part(
-    {
-      id: newId(),
-      kind: 'joint',
-      ...(part?.place && { place: part.place }),
-      ...(part?.board && { board: part.board }),
-    },
-    null,
-  );
-  const role = (sketch.leaving(end)[0] ?? sketch.arriving(end))!.role;
-  for (const wire of sketch.leaving(end)) sketch.moveStart(wire.id, sketch.nextOn(joint));
-  sketch.wire(end, sketch.nextOn(joint), role);
-  return sketch.nextOn(joint);
-}
-
 /** Where the other way can be tapped in the room; null where it does not reach it yet. */
 function tapIn(
   doc: Installation,
@@ -170,8 +151,8 @@ function bring(
   const run = cableOf(sketch, newId(), size, metres, { fromBoard: true });
   const joint = () => sketch.part({ id: newId(), kind: 'joint', ...(place && { place }) }, null);
   const [n, e] = [joint(), joint()];
-  sketch.wire(tap(sketch, out.N, newId), sketch.nextOn(n), 'neutral', run);
-  sketch.wire(tap(sketch, out.E, newId), sketch.nextOn(e), 'earth', run);
+  sketch.wire(tapAt(sketch, out.N, newId), sketch.nextOn(n), 'neutral', run);
+  sketch.wire(tapAt(sketch, out.E, newId), sketch.nextOn(e), 'earth', run);
   return { feed: { L: [device.id, '2'], N: [n, '1'], E: [e, '1'] }, run };
 }
 
@@ -203,12 +184,12 @@ export function moveLoad(
     const brought = near ? null : bring(sketch, doc, walk, target, group.place, newId);
     const feed = near ?? brought?.feed;
     if (!feed?.N || !feed.E) return { refused: `${nameOf(doc, target)} has no neutral or earth to give.` };
-    const line = tap(sketch, feed.L, newId);
+    const line = tapAt(sketch, feed.L, newId);
     bypass(sketch, group.line);
     sketch.wire(line, group.line, 'line', brought?.run);
-    for (const neutral of group.neutrals) refeed(sketch, neutral, tap(sketch, feed.N, newId), 'neutral');
+    for (const neutral of group.neutrals) refeed(sketch, neutral, tapAt(sketch, feed.N, newId), 'neutral');
     for (const earth of group.earths)
-      if (sketch.arriving(earth)) refeed(sketch, earth, tap(sketch, feed.E, newId), 'earth');
+      if (sketch.arriving(earth)) refeed(sketch, earth, tapAt(sketch, feed.E, newId), 'earth');
   }
   dropIdleJoints(sketch);
   const names = loads.map((load) => load.label ?? nameOf(doc, load));

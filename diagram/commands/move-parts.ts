@@ -2,9 +2,9 @@ import { MODULE } from '../symbols/types';
 import { diff } from '../document/patch';
 import { applyPatch } from '../document/patch';
 import { placeAll, positionsOn } from '../layout/place';
-import { canonical, type Face, type Installation, type Position } from '../document/schema';
+import { byCode, canonical, type Face, type Installation, type Position } from '../document/schema';
 import { nameOf } from '../document/names';
-import type { Command } from './types';
+import type { Command, Refusal } from './types';
 
 const snap = (value: number): number => Math.round(value / MODULE) * MODULE;
 
@@ -50,6 +50,40 @@ export function alignParts(doc: Installation, face: Face, ids: readonly string[]
     pinned: true,
   });
   return moved(doc, face, place, ids, `Align ${named(doc, ids)} in a ${along}`);
+}
+
+/** Stands the parts between the outermost two at equal distances, to the module; the outermost stay. */
+export function distributeParts(doc: Installation, face: Face, ids: readonly string[], along: 'row' | 'column'): Command {
+  const at = positionsOn(applyPatch(doc, placeAll(doc)), face);
+  const axis = along === 'row' ? 'x' : 'y';
+  const placed = ids.filter((id) => at.has(id)).sort((a, b) => at.get(a)![axis] - at.get(b)![axis] || byCode(a, b));
+  const first = at.get(placed[0] ?? '')?.[axis] ?? 0;
+  const last = at.get(placed.at(-1) ?? '')?.[axis] ?? 0;
+  const step = (last - first) / Math.max(1, placed.length - 1);
+  const order = new Map(placed.map((id, i) => [id, i]));
+  const place = (id: string, old: Position): Position => {
+    const index = order.get(id)!;
+    const inner = index > 0 && index < placed.length - 1;
+    return { ...old, ...(inner && { [axis]: snap(first + index * step) }), pinned: true };
+  };
+  return moved(doc, face, place, ids, `Space ${named(doc, ids)} evenly in a ${along}`);
+}
+
+const MM = 100;
+
+/** Where a part stands on a face, as it is written: "125, 62.5", in mm from the sheet's upper left; empty where it is not on it. */
+export function placeText(doc: Installation, face: Face, id: string): string {
+  const at = positionsOn(applyPatch(doc, placeAll(doc)), face).get(id);
+  return at ? `${at.x / MM}, ${at.y / MM}` : '';
+}
+
+/** Puts a part exactly where it is written, to the module of 2.5 mm, and pins it there. */
+export function placeExactly(doc: Installation, face: Face, id: string, text: string): Command | Refusal {
+  const found = /^\s*(-?\d+(?:[.,]\d+)?)\s*(?:mm)?\s*[;, ]\s*(-?\d+(?:[.,]\d+)?)\s*(?:mm)?\s*$/.exec(text);
+  if (!found) return { refused: 'Two numbers in mm, across and down. For instance 125, 62.5.' };
+  const [x, y] = [found[1]!, found[2]!].map((number) => snap(MM * Number(number.replace(',', '.'))));
+  if (Math.abs(x!) > 1e6 || Math.abs(y!) > 1e6) return { refused: 'That lies off every sheet: at most 10 m.' };
+  return moved(doc, face, (_, at) => ({ ...at, x: x!, y: y!, pinned: true }), [id], `Move ${named(doc, [id])}`);
 }
 
 /** Lets the layout place parts again: what a person pinned is let go. */

@@ -87,6 +87,17 @@ export const devicesAtBar: Recipe = function* (at) {
 /** What a first backup source is sized for where no survey says what stays on. */
 const SMALL = { ...emptyRoom('small', 0), lamps: 4, keepLamps: 4, fans: 2, keepFans: 2, keepOutletWatts: 100 };
 
+/** What a backup source consists of: where any of it stands already, the rest is drawn piece by piece. */
+const BACKUP_PARTS = [
+  HOUSE.inverter,
+  HOUSE.battery,
+  HOUSE.batteryFuse,
+  HOUSE.feed,
+  HOUSE.feedRcd,
+  HOUSE.output,
+  ...Object.values(groupIds('backup', 1)),
+] as const;
+
 export const backupSource: Recipe = function* (at) {
   const atBoard = at.part.kind === 'line-bar' || at.part.kind === 'rcd' || at.part.kind === 'isolator';
   if (!atBoard || at.conductor !== 'L' || at.doc.parts.some((part) => part.kind === 'inverter')) return;
@@ -97,7 +108,7 @@ export const backupSource: Recipe = function* (at) {
     );
     const kept = (at.doc.survey ?? []).filter((row) => row.keepLamps + row.keepFans + row.keepOutletWatts > 0);
     const size = sizeBackup(kept.length > 0 ? kept : [SMALL], at.hoursWanted || 3, at.practice, DRAFT_AMBIENT);
-    if (!group || !size || !s.sketch.find(HOUSE.earthBar)) return null;
+    if (!group || !size || BACKUP_PARTS.some((id) => s.sketch.find(id))) return null;
     const from = tapBeside(s.sketch, group)!;
     const intake = group.bars.place;
     drawBackupSource(s.sketch, {
@@ -107,6 +118,7 @@ export const backupSource: Recipe = function* (at) {
       hours: at.hoursWanted || 3,
       groups: 1,
       icn: breakingCapacity(at.doc.supply, at.practice),
+      earthBar: group.bars.earthBar,
     });
     drawNotices(s.sketch, intake, [BOARD, BACKUP_BOARD], s.sketch.find(HOUSE.inverter)!.ref!);
     return s;

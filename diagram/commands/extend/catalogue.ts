@@ -5,6 +5,7 @@ import { traceFeeds } from '../../terminals/feeds';
 import { companionsOf } from '../companions';
 import type { NewId } from '../types';
 import { conductorOfMark, endKey, walkFromSources, type Walk } from '../walk';
+import { backedUpWay } from './backed-up';
 import { atEarthBar, backupSource, devicesAtBar, land } from './board';
 import { origin } from './origin';
 import { onToNextRoom, pointsInRoom } from './room';
@@ -22,6 +23,7 @@ const RECIPES: readonly Recipe[] = [
   wholeRooms,
   pointsInRoom,
   onToNextRoom,
+  backedUpWay,
   loadsOfSwitch,
   otherTwoWay,
   devicesAtBar,

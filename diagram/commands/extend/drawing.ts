@@ -4,8 +4,8 @@ import { POWER_FACTOR } from '../../survey/drafting/assumptions';
 import { cableOf } from '../../survey/drafting/room-box';
 import { sizeRun, type RunSize } from '../../survey/drafting/size-run';
 import { Sketch } from '../../survey/drafting/sketch';
-import { isBar } from '../../document/kinds';
 import { withPlaces } from '../place-new';
+import { tapAt } from '../tap';
 import { diff } from '../../document/patch';
 import type { Command } from '../types';
 import type { At } from './types';
@@ -32,20 +32,7 @@ export class Strokes {
 
   /** Where one more wire may end: a free screw, the terminal while it has room for two, else a joint that takes over. */
   tap(end: End): End {
-    const { sketch } = this;
-    const part = sketch.find(end[0]);
-    if (part && isBar(part.kind)) return sketch.nextOn(part.id);
-    if (sketch.wiresAt(end).length < 2) return end;
-    const { place, board } = part ?? this.at.part;
-    const joint = sketch.part(
-      { id: this.at.newId(), kind: 'joint', ...(place && { place }), ...(board && { board }) },
-      null,
-    );
-    const leaving = sketch.leaving(end);
-    const role = (leaving[0] ?? sketch.arriving(end))!.role;
-    for (const wire of leaving) sketch.moveStart(wire.id, sketch.nextOn(joint));
-    sketch.wire(end, sketch.nextOn(joint), role);
-    return sketch.nextOn(joint);
+    return tapAt(this.sketch, end, this.at.newId);
   }
 
   /** The earth to use: of the way, else a new earth bar beside the part in hand. */

@@ -67,6 +67,8 @@ interface Need {
   /** how many rcds the backed-up ways need */
   groups: number;
   icn: number;
+  /** the main earth bar, where that is not the draft's own */
+  earthBar?: string;
 }
 
 /**
@@ -74,12 +76,12 @@ interface Need {
  * two-pole breaker and the rcds of the backed-up ways, so that the runs to the backup board are behind them; the bars there.
  */
 export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
-  const { size, intake, icn } = need;
+  const { size, intake, icn, earthBar = HOUSE.earthBar } = need;
   const { practice, supply } = sketch;
   const { draft } = practice;
   const place = sketch.place({ id: HOUSE.backupPlace, name: 'Backup source', kind: 'passage', ventilated: true });
   drawInverter(sketch, size, need.hours, place);
-  drawFeed(sketch, size, need.from, intake, icn);
+  drawFeed(sketch, { size, from: need.from, intake, icn, earthBar });
   drawBattery(sketch, size, place);
   const outputA = ratingFor(size.va / supply.voltage, practice.breakerRatingsA.value);
   sketch.part({
@@ -121,7 +123,7 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
   const outputSize = outputRun(sketch, size, outputA);
   return Array.from({ length: need.groups }, (_, i) => {
     const cable = run(`${groupIds('backup', i + 1).rcd}.run`, outputSize);
-    if (i === 0) sketch.wire([HOUSE.inverter, 'out.E'], sketch.nextOn(HOUSE.earthBar), 'earth', cable);
+    if (i === 0) sketch.wire([HOUSE.inverter, 'out.E'], sketch.nextOn(earthBar), 'earth', cable);
     return drawGroup(sketch, taps(), {
       side: 'backup',
       n: i + 1,
@@ -132,6 +134,7 @@ export function drawBackupSource(sketch: Sketch, need: Need): WayBars[] {
       rcdBoard: 'Inverter',
       place: intake,
       board: BACKUP_BOARD,
+      earthBar,
       cable,
     });
   });

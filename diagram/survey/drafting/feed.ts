@@ -72,8 +72,18 @@ function drawFeedRcd(sketch: Sketch, from: Pair, here: { place: string; board: s
   return { line: [id, '2'], neutral: [id, '4'] };
 }
 
-/** Draws the feed of the inverter from the board: breaker and run. @param icn A, breaking capacity that the board asks for */
-export function drawFeed(sketch: Sketch, size: BackupSize, from: Pair, intake: string, icn: number): void {
+interface FeedNeed {
+  size: BackupSize;
+  from: Pair;
+  /** where the board stands */
+  intake: string;
+  /** A, breaking capacity that the board asks for */
+  icn: number;
+  earthBar: string;
+}
+
+/** Draws the feed of the inverter from the board: breaker and run. */
+export function drawFeed(sketch: Sketch, { size, from, intake, icn, earthBar }: FeedNeed): void {
   const plan = planFeed(sketch, size);
   const { draft } = sketch.practice;
   const here = { place: intake, board: BOARD };
@@ -103,5 +113,5 @@ export function drawFeed(sketch: Sketch, size: BackupSize, from: Pair, intake: s
   sketch.wire(start.neutral, [HOUSE.feed, '3'], 'neutral');
   sketch.wire([HOUSE.feed, '2'], [HOUSE.inverter, 'in.L'], 'line', run);
   sketch.wire([HOUSE.feed, '4'], [HOUSE.inverter, 'in.N'], 'neutral', run);
-  sketch.wire(sketch.nextOn(HOUSE.earthBar), [HOUSE.inverter, 'in.E'], 'earth', run);
+  sketch.wire(sketch.nextOn(earthBar), [HOUSE.inverter, 'in.E'], 'earth', run);
 }

@@ -133,6 +133,8 @@ export interface GroupNeed {
   board: string;
   /** the run between rcd and bars, where they stand apart */
   cable?: string;
+  /** the bar at which the earths of its ways meet, where that is not the draft's own */
+  earthBar?: string;
 }
 
 /** A 30 mA rcd with the line bar and the neutral bar of its ways. */
@@ -167,7 +169,7 @@ export function drawGroup(sketch: Sketch, from: Pair, need: GroupNeed): WayBars 
   return {
     lineBar: ids.lineBar,
     neutralBar: ids.neutralBar,
-    earthBar: HOUSE.earthBar,
+    earthBar: need.earthBar ?? HOUSE.earthBar,
     place: need.place,
     board: need.board,
     icn: need.icn,
