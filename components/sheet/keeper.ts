@@ -50,6 +50,8 @@ export class Keeper {
   private stopped = false;
   private savedAt: number | null = null;
   private order = 0;
+  /** the newest revision that somebody spoke of */
+  private heard = 0;
   readonly ready: Promise<void>;
 
   constructor(
@@ -140,6 +142,7 @@ export class Keeper {
   async pump(): Promise<void> {
     await this.ready;
     const change = this.pending[0];
+    if (!change && this.heard > this.rev) return this.poll();
     if (!change || this.busy || this.stopped || this.store().getState().conflict || this.trouble === 'refused') return;
     this.busy = true;
     clearTimeout(this.timer);
@@ -216,10 +219,19 @@ export class Keeper {
     await this.ready;
     if (this.busy || this.stopped || this.store().getState().conflict) return;
     this.busy = true;
+    const heard = this.heard;
     const since = await this.tools.api.since(this.view.id, this.rev);
     this.busy = false;
+    // What was heard of is answered; only what is heard of meanwhile has to be asked for again.
+    if (this.heard === heard) this.heard = 0;
     if (since && since.length > 0) await this.absorb(since);
     void this.pump();
+  }
+
+  /** A revision is there that may be newer than ours: asked for at once, or as soon as the save under way is answered. */
+  hear(rev: number): void {
+    this.heard = Math.max(this.heard, rev);
+    if (this.heard > this.rev) void this.poll();
   }
 
   /** Takes in the changes of others, and finds which of mine are already among them. */

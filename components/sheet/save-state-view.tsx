@@ -2,6 +2,7 @@
 
 import { saveFile } from '@/components/ui/save-file';
 import { WordButton } from '@/components/ui/button';
+import { PresenceView } from './presence-view';
 import { saveWords } from './save-state';
 import { useSheet, type OpenDrawing } from './use-drawing';
 
@@ -16,7 +17,8 @@ export function SaveStateView({ drawing }: { drawing: OpenDrawing }) {
   const state = useSheet(drawing.store, (current) => current.saveState);
   const calm = state.kind === 'saved' || state.kind === 'saving';
   return (
-    <span className="flex items-baseline gap-3">
+    <span className="flex flex-wrap items-baseline justify-end gap-x-3">
+      <PresenceView drawing={drawing} />
       <span role="status" className={calm ? '' : 'font-bold text-red'}>
         {saveWords(state)}
       </span>

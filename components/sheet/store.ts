@@ -3,6 +3,7 @@ import { applyPatch, diff, isEmptyPatch, type Patch } from '@/diagram/document/p
 import type { End, Installation } from '@/diagram/document/schema';
 import { ownOnly } from '@/diagram/commands/merge';
 import type { DrawingRights, DrawingView, SavedChange, TitleBlock } from '@/lib/shared/drawings';
+import type { Peer } from '@/lib/shared/live';
 import type { HistoryStep } from './outbox';
 import type { SaveState } from './save-state';
 
@@ -44,6 +45,8 @@ export interface DrawingState {
   storageFailure: string | null;
   /** the newest change of somebody else that arrived while this sheet was open */
   news: SavedChange | null;
+  /** who else has this drawing open now */
+  peers: readonly Peer[];
   /** one line about what just happened, for the foot of the sheet and for screen readers */
   notice: string;
 
@@ -112,6 +115,7 @@ export function createDrawingStore(view: DrawingView, keep: Keep): DrawingStore 
       conflict: null,
       storageFailure: null,
       news: null,
+      peers: [],
       notice: '',
 
       run(label, patch) {

@@ -6,6 +6,7 @@ import type { DrawingView } from '@/lib/shared/drawings';
 import { drawingApi } from './drawing-api';
 import { claimWindow, openWindows } from './identity';
 import { Keeper } from './keeper';
+import { followDrawing, type Live } from './live';
 import { openOutbox } from './outbox';
 import { createDrawingStore, type DrawingState, type DrawingStore } from './store';
 
@@ -18,9 +19,13 @@ export interface Me {
 export interface OpenDrawing {
   store: DrawingStore;
   keeper: Keeper;
+  /** absent on the server */
+  live?: Live;
 }
 
+/** ms between two questions for changes of others while the event stream does not stand, and while it does */
 const POLL_EVERY = 8000;
+const POLL_RARELY = 60_000;
 const CHANNEL = 'ohmstead-saved';
 
 /** One window works on one drawing at a time; the three sheets of its job share it. */
@@ -48,18 +53,38 @@ function open(view: DrawingView, me: Me): OpenDrawing & { close: () => void } {
   const beforeUnload = (event: BeforeUnloadEvent) => {
     if (keeper.wouldLose) event.preventDefault();
   };
-  const timer = setInterval(() => document.visibilityState === 'visible' && void keeper.poll(), POLL_EVERY);
+  let stands = false;
+  let asked = Date.now();
+  const live = followDrawing(view.id, {
+    rev: (rev) => keeper.hear(rev),
+    people: (people) => {
+      const peers = people.filter(({ id }) => id !== me.id);
+      if (peers.length > 0 || store.getState().peers.length > 0) store.setState({ peers });
+    },
+    standing(now) {
+      const { saveState } = store.getState();
+      // The network is back with the stream: what waits for a later try is sent at once.
+      if (now && !stands && saveState.kind === 'kept' && saveState.why === 'offline') keeper.retry();
+      stands = now;
+    },
+  });
+  const timer = setInterval(() => {
+    if (document.visibilityState !== 'visible' || (stands && Date.now() - asked < POLL_RARELY)) return;
+    asked = Date.now();
+    void keeper.poll();
+  }, POLL_EVERY);
   if (channel)
-    channel.onmessage = (event) =>
-      event.data?.drawingId === view.id && event.data.rev > store.getState().rev && void keeper.poll();
+    channel.onmessage = (event) => event.data?.drawingId === view.id && keeper.hear(Number(event.data.rev) || 0);
   document.addEventListener('visibilitychange', look);
   window.addEventListener('online', online);
   window.addEventListener('beforeunload', beforeUnload);
   return {
     store,
     keeper,
+    live,
     close() {
       keeper.stop();
+      live.close();
       clearInterval(timer);
       channel?.close();
       document.removeEventListener('visibilitychange', look);
@@ -91,6 +116,7 @@ export function useDrawing(view: DrawingView, me: Me): OpenDrawing {
     drawing.store.setState({ rights: view.rights, titleBlock: view.titleBlock });
     if (view.rev > drawing.store.getState().rev) void drawing.keeper.poll();
   }, [drawing, view]);
+  useEffect(() => drawing.live?.attend(), [drawing]);
   return drawing;
 }
 

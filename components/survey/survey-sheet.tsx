@@ -5,8 +5,8 @@ import { useEffect, useMemo, useState, type KeyboardEvent } from 'react';
 import { SheetFrame } from '@/components/frame/sheet-frame';
 import { jobTabs } from '@/components/frame/tabs';
 import type { KeyHelp } from '@/components/frame/types';
-import { saveWords } from '@/components/sheet/save-state';
-import { useSheet, type Me } from '@/components/sheet/use-drawing';
+import { SaveStateView } from '@/components/sheet/save-state-view';
+import type { Me } from '@/components/sheet/use-drawing';
 import { isEmptyPatch } from '@/diagram/document/patch';
 import { draftPatch } from '@/diagram/survey/draft';
 import type { DrawingView } from '@/lib/shared/drawings';
@@ -43,7 +43,6 @@ export function SurveySheet({ view, me, hoursWanted }: SurveySheetProps) {
   const opened = useSurveyDocument(view, me);
   const { document, rights, titleBlock, drawing } = opened;
   const survey = useSurvey(opened, hoursWanted);
-  const saved = useSheet(drawing.store, (state) => saveWords(state.saveState));
   const [pasting, setPasting] = useState(false);
   const boards = useMemo(() => new Map(document.parts.flatMap((part) => (part.place && part.board ? [[part.place, part.board]] : []))), [document.parts]);
 
@@ -91,7 +90,7 @@ export function SurveySheet({ view, me, hoursWanted }: SurveySheetProps) {
         current="survey"
         who={me.initials}
         kind="Survey"
-        saveState={<span role="status">{saved}</span>}
+        saveState={<SaveStateView drawing={drawing} />}
         titleBlock={titleBlock}
         practice={{ id: document.practice, supply: document.supply }}
         keys={keys}
