@@ -1,6 +1,6 @@
 import { seen, recalled } from './clauses';
 import { neutralContacts } from './readings/neutral-contacts';
-import { bridge } from './readings/rewire';
+import { bridge, turnMarks } from './readings/rewire';
 import type { Rule } from './types';
 import { capital, say, sayParts } from './readings/words';
 
@@ -21,15 +21,19 @@ export const fusedNeutral: Rule = {
   *check(context) {
     for (const { contacts, points, wires, conditions } of neutralContacts(context).fused) {
       const id = contacts[0]!;
+      const rcbo = context.graph.parts.get(id)!.kind === 'rcbo';
       yield {
         heading: `${capital(say(context, id))} stands in the neutral`,
-        message:
-          `The neutral of ${sayParts(context, points)} returns through ${say(context, id)}. When it opens, ` +
-          `nothing works and everything behind it still stands at line voltage.`,
+        message: rcbo
+          ? `The neutral of ${sayParts(context, points)} returns through the pole of ${say(context, id)} that watches the current, their line through the other: a fault from line to earth is no overcurrent to it.`
+          : `The neutral of ${sayParts(context, points)} returns through ${say(context, id)}. When it opens, ` +
+            `nothing works and everything behind it still stands at line voltage.`,
         parts: [id],
         wires,
         conditions,
-        remedies: bridge(context, `Take ${say(context, id)} out of the neutral`, id, ['1', '2']),
+        remedies: rcbo
+          ? turnMarks(context, `Change line and neutral over at ${say(context, id)}`, id, { 1: '3', 3: '1', 2: '4', 4: '2' })
+          : bridge(context, `Take ${say(context, id)} out of the neutral`, id, ['1', '2']),
       };
     }
   },

@@ -5,6 +5,7 @@ import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
 import { crossings } from './readings/crossings';
 import { earthGaps } from './readings/earth-gaps';
+import { misledStretches } from './readings/misled';
 import { neutralContacts } from './readings/neutral-contacts';
 import { openRegions } from './readings/open-regions';
 import { potentials } from './readings/potentials';
@@ -58,6 +59,7 @@ function told(context: Context): { wires: Set<string>; parts: Set<string> } {
     if (on !== 'nothing') for (const id of at) parts.add(id);
   }
   for (const { points } of reversals(context)) for (const id of points) parts.add(id);
+  for (const stretch of misledStretches(context)) for (const id of stretch.wires) wires.add(id);
   for (const { on, nodes } of openRegions(context))
     if (on) for (const node of nodes) for (const id of wiresAt(context, node)) wires.add(id);
   // Line that arrives at the neutral of a point which has no way back is told with the open neutral.

@@ -1,5 +1,7 @@
 import { recalled } from './clauses';
+import { crossings } from './readings/crossings';
 import { joinTo } from './readings/rewire';
+import { reaches } from '../terminals/reach';
 import { isPoint } from '../terminals/roles-of-parts';
 import type { Context } from './context';
 import type { Rule } from './types';
@@ -9,6 +11,17 @@ import { capital, say } from './readings/words';
 function isBegun({ document, graph }: Context): boolean {
   const wired = new Set([...graph.wires.values()].flatMap(({ from, to }) => [from[0], to[0]]));
   return document.parts.some((part) => wired.has(part.id) && (isPoint(part) || part.kind === 'inverter'));
+}
+
+/** True when the main earth core itself is landed on line or neutral: the joint that it makes there says so. */
+function isLedAstray(context: Context): boolean {
+  const { graph, earth } = context;
+  return crossings(context).some(({ edge, between }) => {
+    const { a, b, wire } = graph.edges[edge]!;
+    const ofSupply = [a, b].some((node) => graph.partOf[node]!.kind === 'supply');
+    const ofBar = [a, b].some((node) => reaches(earth.reached, node));
+    return wire!.role === 'earth' && between.includes('E') && ofSupply && ofBar;
+  });
 }
 
 /** No earth bar, or one that reaches neither the supply's earth nor an electrode. */
@@ -26,7 +39,7 @@ export const noMainEarth: Rule = {
   },
   *check(context) {
     const { graph, earth, document } = context;
-    if (earth.earthed || !isBegun(context)) return;
+    if (earth.earthed || !isBegun(context) || isLedAstray(context)) return;
     const tt = document.supply.system === 'TT';
     const bar = earth.mainBar === undefined ? undefined : graph.partOf[earth.mainBar]!;
     const means = document.parts.filter(({ kind }) => kind === (tt ? 'electrode' : 'supply'));

@@ -5,6 +5,7 @@ import { reach } from '../terminals/reach';
 import { recalled } from './clauses';
 import type { Context } from './context';
 import { hasWire } from './readings/earth-gaps';
+import { misledStretches } from './readings/misled';
 import { once } from './readings/once';
 import { reversedNodes, reversedPoints } from './readings/reversals';
 import type { Rule } from './types';
@@ -24,6 +25,7 @@ const bareLines = once((context: Context): Bare[] => {
   // Where line and neutral change places the fuses stand in the neutral; the crossing is the finding.
   const turned = reversedPoints(context);
   const crossed = reversedNodes(context);
+  const misled = misledStretches(context);
   for (const { condition, drawn } of context.evaluated) {
     for (const source of condition.sources) {
       const entry = found.get(source.part.id) ?? { source, points: new Set(), wires: new Set(), conditions: new Set() };
@@ -35,6 +37,7 @@ const bareLines = once((context: Context): Bare[] => {
         const bare = reach(graph, [source.line], closed);
         const fused = source.kind === 'mains' && bare.order.some((node) => graph.partOf[node]!.kind === 'fuse');
         for (const node of bare.order) {
+          if (misled.some(({ nodes }) => nodes.has(node))) continue;
           const part = graph.partOf[node]!;
           if (isPoint(part) && !turned.has(part.id)) entry.points.add(part.id);
           const { wire, a, b } = graph.edges[bare.via[node]!] ?? {};

@@ -1,8 +1,33 @@
+import { natureOfRole } from '../circuit/natures';
+import { isBar } from '../document/kinds';
 import { recalled } from './clauses';
+import type { Context } from './context';
+import { crossings } from './readings/crossings';
+import { misledRemedies } from './readings/misled';
+import { once } from './readings/once';
 import { openRegions } from './readings/open-regions';
+import { potentials } from './readings/potentials';
 import { rejoin } from './readings/rejoin';
 import type { Rule } from './types';
-import { be, capital, say, sayParts } from './readings/words';
+import { be, capital, say, sayParts, sayWire } from './readings/words';
+
+/** Line wires that should have led on and are landed on neutral or earth instead: the short circuit tells what is dead behind. */
+const shortedLines = once((context: Context): number => {
+  const { graph } = context;
+  const { line } = potentials(context);
+  return crossings(context).filter(({ edge, between, switches }) => {
+    const { a, b, wire } = graph.edges[edge]!;
+    const live = [a, b].find((node) => line[node] === 1);
+    if (live === undefined || !between.includes('L') || switches.length > 0) return false;
+    return natureOfRole(wire!.role) === 'L' && wiresAt(graph, live) === 1 && !isBar(graph.partOf[live]!.kind);
+  }).length;
+});
+
+function wiresAt({ start, around, edges }: Context['graph'], node: number): number {
+  let count = 0;
+  for (let k = start[node]!; k < start[node + 1]!; k++) if (edges[around[k]!]!.kind === 'wire') count++;
+  return count;
+}
 
 /** A load that nothing feeds, or that is backed up and dead on mains; one finding for each gap. */
 export const openLine: Rule = {
@@ -18,9 +43,25 @@ export const openLine: Rule = {
     remedy: 'Lead the line to it, from its way through its switch.',
   },
   *check(context) {
-    for (const { side, points, gap, wires, conditions, inverter, onMains } of openRegions(context)) {
+    let told = shortedLines(context);
+    for (const { side, points, gap, wires, conditions, inverter, onMains, misled } of openRegions(context)) {
       if (side !== 'L') continue;
+      if (!misled && told-- > 0) continue;
       const who = sayParts(context, points);
+      if (misled) {
+        const other = misled.is === 'E' ? 'earth' : 'neutral';
+        yield {
+          severity: 'danger',
+          heading: `The line of ${who} begins at ${other}`,
+          message:
+            `The wire ${sayWire(context, misled.wire)} leads line from ${other} at ${say(context, misled.at)}: ${who} ${be(points.length)} dead, ` +
+            `and every breaker and switch before ${points.length === 1 ? 'it' : 'them'} opens ${other}.`,
+          parts: [misled.at, ...points, ...(onMains ?? [])],
+          wires: [misled.wire],
+          remedies: misledRemedies(context, misled),
+        };
+        continue;
+      }
       const where = gap.length > 0 ? ` The line ends at ${sayParts(context, gap)}.` : '';
       yield inverter === undefined
         ? {

@@ -1,8 +1,9 @@
 import { recalled } from './clauses';
+import { misledRemedies } from './readings/misled';
 import { openRegions } from './readings/open-regions';
 import { rejoin } from './readings/rejoin';
 import type { Rule, Violation } from './types';
-import { be, capital, sayParts } from './readings/words';
+import { be, capital, say, sayParts, sayWire } from './readings/words';
 
 /** A load with line but no way back; one finding for each gap. */
 export const openNeutral: Rule = {
@@ -18,9 +19,23 @@ export const openNeutral: Rule = {
     remedy: 'Join the neutral to the neutral bar of its own way.',
   },
   *check(context) {
-    for (const { side, points, gap, wires, conditions, on, swapped, between } of openRegions(context)) {
+    for (const { side, points, gap, wires, conditions, on, swapped, between, misled } of openRegions(context)) {
       if (side !== 'N' || swapped || between) continue;
       const who = sayParts(context, points);
+      if (misled) {
+        yield {
+          severity: 'danger',
+          heading: `The neutral of ${who} begins at line`,
+          message:
+            `The wire ${sayWire(context, misled.wire)} leads neutral from line at ${say(context, misled.at)}: nothing works, and every neutral ` +
+            'terminal behind it, which everybody takes for harmless, is live with no fuse before it.',
+          parts: [misled.at, ...points],
+          wires: [misled.wire],
+          remedies: misledRemedies(context, misled),
+          ...(conditions && { conditions }),
+        };
+        continue;
+      }
       const where = gap.length > 0 ? ` The way back ends at ${sayParts(context, gap)}.` : '';
       const violation: Violation = {
         heading: `${capital(who)} ${be(points.length)} without neutral`,

@@ -2,7 +2,8 @@ import { recalled } from './clauses';
 import { neutralFaultsOf } from './readings/neutral-faults';
 import { neutralRemedies } from './readings/move-neutral';
 import type { Rule } from './types';
-import { capital, sayParts } from './readings/words';
+import { turnMarks } from './readings/rewire';
+import { capital, say, sayParts } from './readings/words';
 
 /** An rcd whose two poles do not carry the same current in normal use. */
 export const residualImbalance: Rule = {
@@ -19,15 +20,20 @@ export const residualImbalance: Rule = {
   },
   *check(context) {
     for (const fault of neutralFaultsOf(context, 'imbalance')) {
-      const { points, wires, devices, conditions, link } = fault;
+      const { points, wires, devices, conditions, link, turned } = fault;
       const rcds = sayParts(context, devices);
+      const cause = turned
+        ? `Line enters ${rcds} at one end and neutral at the other, so that the two currents add up instead of cancelling.`
+        : link ? `A wire leads neutral round ${rcds}.` : `The line of ${sayParts(context, points)} passes ${rcds}, the neutral goes round it.`;
       yield {
         heading: `${capital(rcds)} trips in normal use`,
-        message: `${link ? `A wire leads neutral round ${rcds}.` : `The line of ${sayParts(context, points)} passes ${rcds}, the neutral goes round it.`} As soon as current flows, ${rcds} sees it as a fault and trips.`,
+        message: `${cause} As soon as current flows, ${rcds} sees it as a fault and trips.`,
         parts: wires.length === 0 ? devices : [...devices, ...points],
         wires,
         conditions,
-        remedies: neutralRemedies(context, fault),
+        remedies: turned
+          ? devices.flatMap((id) => turnMarks(context, `Turn the neutral of ${say(context, id)} round`, id, { 3: '4', 4: '3' }))
+          : neutralRemedies(context, fault),
       };
     }
   },

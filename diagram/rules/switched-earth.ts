@@ -4,7 +4,8 @@ import { recalled } from './clauses';
 import type { Context } from './context';
 import { bridge } from './readings/rewire';
 import type { Rule } from './types';
-import { say } from './readings/words';
+import { earthsByPlug } from './readings/earths-by-plug';
+import { be, capital, say, sayParts } from './readings/words';
 
 const OPENS: ReadonlySet<LinkKind | 'wire'> = new Set(['device', 'switch', 'select', 'changeover']);
 
@@ -54,6 +55,16 @@ export const switchedEarth: Rule = {
       for (const id of [...a, ...b]) wires.add(id);
       found.set(edge.part!, wires);
     });
+    for (const { plug, points, wires } of earthsByPlug(context)) {
+      yield {
+        heading: `The earth of ${sayParts(context, points)} hangs on ${say(context, plug)}`,
+        message:
+          `${capital(sayParts(context, points))} ${be(points.length)} fed past ${say(context, plug)} and earthed only through its pin. ` +
+          'Pulled, it takes the earth away and leaves the line.',
+        parts: [plug, ...points],
+        wires,
+      };
+    }
     for (const [id, wires] of found) {
       yield {
         heading: `${say(context, id)} opens the earth`,

@@ -7,18 +7,43 @@ import { recalled } from './clauses';
 import type { Context } from './context';
 import { figuresOf } from './readings/figures';
 import { lackOfCables, lackOfRating } from './readings/lacking';
+import { lineLoops } from './readings/line-loops';
 import { changeCables, changePart } from './readings/remedies';
 import type { Remedy, Rule } from './types';
 import { capital, say } from './readings/words';
 
-const isThin = ({ capacity, needA }: SectionCable): boolean =>
-  capacity !== null && needA !== null && exceeds(needA, capacity.izA);
+/**
+ * A, what a cable carries at most: where the table begins above its size, what the table's first size carries, which is more than
+ * it can.
+ */
+function mostA({ graph }: Context, practice: Practice, { cable, capacity }: SectionCable): number | null {
+  if (capacity) return capacity.izA;
+  for (const csa of practice.csaMm2.filter((size) => size > cable.csa)) {
+    const found = capacityOf(graph, practice, { ...cable, csa });
+    if (found) return found.izA;
+  }
+  return null;
+}
+
+interface Thin extends SectionCable {
+  izA: number;
+}
+
+/** True for what could be a leg of a ring: where it closes over another way the joint is the finding, the leg is right without it. */
+function isLegAstray(
+  { ring }: Practice,
+  { cable, needA, capacity }: SectionCable,
+): boolean {
+  if (!ring) return false;
+  const { deviceA, legCsaMm2, legIzAtLeastA } = ring.value;
+  return cable.csa >= legCsaMm2 && needA! <= deviceA && capacity !== null && !exceeds(legIzAtLeastA, capacity.izA);
+}
 
 function remediesOf(
   { graph }: Context,
   practice: Practice,
   { device, inA, ibA }: WayFigures,
-  thin: readonly SectionCable[],
+  thin: readonly Thin[],
 ): Remedy[] {
   const thicker = thin.map(({ cable, needA }) => {
     const csa = practice.csaMm2.find(
@@ -30,7 +55,7 @@ function remediesOf(
   const remedies: Remedy[] = [];
   if (thicker.every((cable) => cable !== null))
     remedies.push(changeCables(`Pull ${[...new Set(thicker.map(({ csa }) => csa))].join(' and ')} mm2`, thicker));
-  const least = Math.min(...thin.map(({ capacity }) => capacity!.izA));
+  const least = Math.min(...thin.map(({ izA }) => izA));
   const smaller = practice.breakerRatingsA.value.findLast(
     (rating) => rating <= least && rating < inA! && rating >= (ibA ?? Infinity),
   );
@@ -55,17 +80,23 @@ export const undersizedCable: Rule = {
   },
   *check(context) {
     const { ways, practice } = figuresOf(context);
+    const loops = lineLoops(context).flatMap(({ edge, loop }) => [edge, ...loop]);
     for (const figures of ways.values()) {
-      const thin = figures.cables.filter(isThin);
+      const isOpened = loops.some((number) => figures.section.edges.has(number));
+      const thin = figures.cables.flatMap((each): Thin[] => {
+        const izA = mostA(context, practice, each);
+        const isThin = izA !== null && each.needA !== null && exceeds(each.needA, izA);
+        return isThin && !(isOpened && isLegAstray(practice, each)) ? [{ ...each, izA }] : [];
+      });
       if (thin.length === 0) continue;
       const { device } = figures;
-      const worst = thin.reduce((a, b) => (a.capacity!.izA <= b.capacity!.izA ? a : b));
+      const worst = thin.reduce((a, b) => (a.izA <= b.izA ? a : b));
       const more =
         thin.length > 1 ? ` ${thin.length - 1} more of its runs ${thin.length > 2 ? 'are' : 'is'} too thin.` : '';
       yield {
         heading: `${capital(say(context, device.id))} does not protect its cable`,
         message:
-          `${capital(sayCable(worst.cable))} of ${say(context, device.id)} carries ${amps(worst.capacity!.izA)} as it is laid; it must carry ` +
+          `${capital(sayCable(worst.cable))} of ${say(context, device.id)} carries ${worst.capacity ? '' : 'less than '}${amps(worst.izA)} as it is laid; it must carry ` +
           `${amps(worst.needA!)} before the device opens.${more}`,
         parts: [device.id],
         wires: thin.flatMap(({ wires }) => wires),
@@ -74,16 +105,20 @@ export const undersizedCable: Rule = {
     }
   },
   *lacks(context) {
-    for (const { device, inA, cables, section } of figuresOf(context).ways.values()) {
+    const { ways, practice } = figuresOf(context);
+    for (const { device, inA, cables, section } of ways.values()) {
       if (inA === null && cables.length > 0) yield lackOfRating(context, device);
       yield* lackOfCables(context, section.edges);
-      for (const { cable, capacity, wires } of cables)
-        if (capacity === null)
+      for (const each of cables) {
+        const { cable, capacity, wires, needA } = each;
+        const most = mostA(context, practice, each);
+        if (capacity === null && (most === null || needA === null || !exceeds(needA, most)))
           yield {
             parts: [],
             wires,
             what: `a size and laying that the table of the practice holds for ${sayCable(cable)}`,
           };
+      }
     }
   },
 };

@@ -7,6 +7,7 @@ import type { Context } from '../context';
 import { lineLoops } from './line-loops';
 import type { NeutralFault } from './neutral-faults';
 import { once } from './once';
+import { forebears } from './shared-neutrals';
 
 interface Side {
   /** devices from the source to here, and whether an inverter is among them */
@@ -55,7 +56,10 @@ function judge(context: Context, a: Side, b: Side): Pick<NeutralFault, 'kind' | 
     return both ? { kind: 'borrowed', devices, foreign: true } : { kind: 'imbalance', devices, foreign: false };
   }
   if (a.bar || b.bar || a.backup !== b.backup) return undefined;
-  const foreign = [...b.ways].filter((way) => !a.ways.has(way));
+  // A device behind another one shares its neutral rightly: a spur from a ring by a fuse of its own.
+  const before = forebears(context);
+  const related = (way: string, other: string) => before.get(way)?.has(other) || before.get(other)?.has(way);
+  const foreign = [...b.ways].filter((way) => !a.ways.has(way) && ![...a.ways].some((other) => related(way, other)));
   if (foreign.length === 0 || a.ways.size === 0) return undefined;
   return { kind: 'borrowed', devices: [...a.ways, ...foreign].sort(), foreign: true };
 }

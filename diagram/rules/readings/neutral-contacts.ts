@@ -26,6 +26,10 @@ const isSingle = (part: Part): boolean =>
 const isFuse = (part: Part): boolean =>
   (part.kind === 'fuse' && part.standard !== 'dc') || (part.kind === 'mcb' && polesOf(part) === 1);
 
+/** The pole of an rcbo that alone watches the current, where one does: it belongs into the line. */
+const isWatched = ({ contactsOf }: Context['graph'], part: Part, edge: number): boolean =>
+  part.kind === 'rcbo' && (part.poles ?? 1) === 1 && contactsOf.get(part.id)![0] === edge;
+
 interface Return {
   point: string;
   /** edges of single-pole contacts on the way back, and of fuses */
@@ -45,15 +49,15 @@ function returnOf(context: Context, stand: Stand, neutral: Reach, part: Part, wi
     if (!line) continue;
     const path = pathTo(graph, neutral, end);
     const inLine = new Set(pathTo(graph, line, other).map((number) => graph.edges[number]!.part));
-    const at = (wanted: (device: Part) => boolean) =>
+    const at = (wanted: (device: Part, edge: number) => boolean) =>
       path.filter((number) => {
         const device = graph.parts.get(graph.edges[number]!.part ?? '');
-        return device !== undefined && wanted(device);
+        return device !== undefined && wanted(device, number);
       });
     return {
       point: part.id,
       control: at((device) => isSingle(device) || (device.kind === 'switch-2pole' && !inLine.has(device.id))),
-      fuses: at(isFuse),
+      fuses: at((device, edge) => isFuse(device) || isWatched(graph, device, edge)),
       path,
     };
   }
@@ -68,7 +72,10 @@ function returnsIn(context: Context, { points }: Evaluated, stand: Stand, i: num
   let found = false;
   graph.edges.forEach((edge, number) => {
     const device = graph.parts.get(edge.part ?? '');
-    if (!device || !(isSingle(device) || isFuse(device) || device.kind === 'switch-2pole')) return;
+    if (!device) return;
+    const counts =
+      isSingle(device) || isFuse(device) || device.kind === 'switch-2pole' || isWatched(graph, device, number);
+    if (!counts) return;
     opened[number] = 0;
     found ||= reaches(neutral, edge.a) && reaches(neutral, edge.b);
   });

@@ -24,6 +24,8 @@ export interface NeutralFault {
   conditions: string[];
   /** a wire that joins two neutrals; `points` are its ends */
   link?: true;
+  /** a device whose neutral pole is wired from the wrong end */
+  turned?: true;
 }
 
 /** Whether opening one device or plug takes a point's neutral away from its source. */
@@ -40,6 +42,7 @@ interface Verdict {
   kind: NeutralKind;
   devices: string[];
   foreign: boolean;
+  turned?: true;
 }
 
 function judge(context: Context, evaluated: Evaluated, state: PointState): Verdict | undefined {
@@ -48,19 +51,19 @@ function judge(context: Context, evaluated: Evaluated, state: PointState): Verdi
     const stray = backup && potentials(context).neutral[state.neutralEnd] === 1;
     return stray ? { kind: 'lost', devices: [], foreign: true } : undefined;
   }
-  const { foreign, missed } = compareWays(context, state);
+  const { foreign, missed, turned } = compareWays(context, state);
   if (backup) {
     const losing = foreign.filter((id) => isLostWithout(context, evaluated, state, id));
     if (losing.length > 0) return { kind: 'lost', devices: losing, foreign: true };
     const residual = foreign.filter((id) => ['rcd', 'rcbo'].includes(context.graph.parts.get(id)!.kind));
     if (residual.length + missed.length > 0)
       return { kind: 'behind', devices: [...residual, ...missed], foreign: residual.length > 0 };
-    return undefined;
+    return turned.length > 0 ? { kind: 'imbalance', devices: turned, foreign: false, turned: true } : undefined;
   }
   const devices = foreign.filter((id) => context.graph.parts.get(id)!.kind !== 'plug');
   if (devices.length > 0) return { kind: 'borrowed', devices, foreign: true };
   if (missed.length > 0) return { kind: 'imbalance', devices: missed, foreign: false };
-  return undefined;
+  return turned.length > 0 ? { kind: 'imbalance', devices: turned, foreign: false, turned: true } : undefined;
 }
 
 const rank = (kind: NeutralKind): number => NEUTRAL_KINDS.indexOf(kind);
@@ -87,7 +90,7 @@ function worst(context: Context): Map<string, Verdict & { first: Evaluated; cond
 export const neutralFaults = once((context: Context): NeutralFault[] => {
   const groups = new Map<string, { points: string[]; verdict: Verdict & { first: Evaluated; conditions: string[] } }>();
   for (const [id, verdict] of worst(context)) {
-    const key = [verdict.kind, verdict.foreign, ...verdict.devices, '|', ...verdict.conditions].join(' ');
+    const key = [verdict.kind, verdict.foreign, verdict.turned, ...verdict.devices, '|', ...verdict.conditions].join(' ');
     const entry = groups.get(key) ?? { points: [], verdict };
     entry.points.push(id);
     groups.set(key, entry);
@@ -104,7 +107,7 @@ export const neutralFaults = once((context: Context): NeutralFault[] => {
       [...first.points.values()].filter((state) => state.lineDevices.includes(device)).map(({ part }) => part.id),
     );
     // A device that every neutral misses is itself wired wrong: one cause, not one at each point.
-    const device = !rest.foreign && behindDevice.every((id) => points.includes(id));
+    const device = rest.turned || (!rest.foreign && behindDevice.every((id) => points.includes(id)));
     faults.push({ ...rest, points, wires: device ? [] : wires, conditions });
   }
   const doubled = doubledNeutrals(context);

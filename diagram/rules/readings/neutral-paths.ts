@@ -17,10 +17,28 @@ export interface WayBack {
   foreign: string[];
   /** residual-current devices that its line passes and its neutral does not */
   missed: string[];
+  /** residual-current devices whose two poles are passed from opposite ends: there the two currents add up */
+  turned: string[];
+}
+
+/** By device, whether a path from the source enters its pole at the end with the lower mark. */
+function entries({ graph }: Context, from: number, edges: readonly number[]): Map<string, boolean> {
+  const found = new Map<string, boolean>();
+  let at = from;
+  for (const number of edges) {
+    const { a, b, part, kind } = graph.edges[number]!;
+    if (kind === 'device') found.set(part!, at === a);
+    at = at === a ? b : a;
+  }
+  return found;
 }
 
 /** Compares the two ways of a point that is fed. */
-export function compareWays({ graph }: Context, state: PointState): WayBack {
+export function compareWays(context: Context, state: PointState): WayBack {
+  const { graph } = context;
+  const { source } = state;
+  const out = source ? entries(context, source.line, state.lineEdges) : new Map<string, boolean>();
+  const back = source ? entries(context, source.neutral, state.neutralEdges) : new Map<string, boolean>();
   const part = (id: string) => graph.parts.get(id)!;
   const plugs = (edges: readonly number[]) =>
     edges.flatMap((number) => (graph.edges[number]!.kind === 'plug' ? [graph.edges[number]!.part!] : []));
@@ -29,6 +47,9 @@ export function compareWays({ graph }: Context, state: PointState): WayBack {
   return {
     foreign: [...neutral].filter((id) => !line.has(id) && (part(id).kind === 'plug' || opensBoth(part(id)))),
     missed: [...line].filter((id) => !neutral.has(id) && isResidual(part(id))),
+    turned: [...out].flatMap(([id, entered]) =>
+      back.has(id) && back.get(id) !== entered && isResidual(part(id)) ? [id] : [],
+    ),
   };
 }
 

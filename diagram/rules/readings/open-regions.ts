@@ -1,8 +1,10 @@
+import { byDesignation } from '../../document/names';
 import { pathTo, reaches } from '../../terminals/reach';
 import { isOvercurrent, isPoint } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
 import { deadRegions, type DeadRegion } from './dead-regions';
 import { earthGaps, hasWire } from './earth-gaps';
+import { misledStretches, type Misled } from './misled';
 import { once } from './once';
 import { potentials, potentialsIn } from './potentials';
 
@@ -21,6 +23,8 @@ export interface OpenRegion extends DeadRegion {
   swapped?: true;
   /** the points hang between the lines of two devices: the mixed feed says it */
   between?: string[];
+  /** the conductor is landed on another one at its head */
+  misled?: Misled;
 }
 
 const partsOf = (context: Context, on: 'line' | 'neutral') =>
@@ -29,6 +33,27 @@ const partsOf = (context: Context, on: 'line' | 'neutral') =>
       .filter((gap) => gap.on === on)
       .flatMap(({ parts }) => parts),
   );
+
+/** The points behind one conductor that is landed on the wrong terminal, as one gap. */
+function ofMisled({ graph }: Context, misled: Misled, ends: ReadonlyMap<string, number>): OpenRegion[] {
+  const points = [...ends.keys()]
+    .filter((id) => misled.nodes.has(ends.get(id)!))
+    .map((id) => graph.parts.get(id)!)
+    .sort(byDesignation)
+    .map(({ id }) => id);
+  if (points.length === 0) return [];
+  const { drawn, at, wire, nodes } = misled;
+  return [{ side: drawn, misled, points, gap: [at], wires: [wire], hanging: false, nodes }];
+}
+
+/** Takes the ends that lie behind a misled conductor of one side out of `ends`, as gaps of their own. */
+function takeMisled(context: Context, side: 'L' | 'N', ends: Map<string, number>): OpenRegion[] {
+  const found = misledStretches(context)
+    .filter(({ drawn }) => drawn === side)
+    .flatMap((misled) => ofMisled(context, misled, ends));
+  for (const { points } of found) for (const id of points) ends.delete(id);
+  return found;
+}
 
 /** Points that no condition brings line to, by their line end; parts joined to nothing are another rule's. */
 function neverFed(context: Context): OpenRegion[] {
@@ -46,7 +71,9 @@ function neverFed(context: Context): OpenRegion[] {
     // With line and neutral changed over as well, the open end is the other one.
     ends.set(part.id, neutral[l] === 1 && neutral[n] !== 1 ? n : l);
   }
-  return deadRegions(context, ends, (node) => line[node] === 1).map((region) => ({ ...region, side: 'L' }));
+  const misled = takeMisled(context, 'L', ends);
+  const dead = deadRegions(context, ends, (node) => line[node] === 1);
+  return [...misled, ...dead.map((region): OpenRegion => ({ ...region, side: 'L' }))];
 }
 
 /** Inverters whose backed-up points are dead on mains. */
@@ -109,12 +136,18 @@ function withoutNeutral(context: Context): OpenRegion[] {
       found.set(state.part.id, entry);
     }
   }
+  const ends = new Map([...found].map(([id, { end }]) => [id, end]));
+  const misled = takeMisled(context, 'N', ends).map((region) => ({
+    ...region,
+    conditions: [...new Set(region.points.flatMap((id) => found.get(id)!.names))],
+  }));
   const byConditions = new Map<string, Map<string, number>>();
   for (const [id, { names, end }] of found) {
+    if (!ends.has(id)) continue;
     const key = `${names.join(' ')}|${swapped.has(id) && all.earth[end] === 1 ? 'swapped' : ''}|${betweenLines(context, id).join(' ')}`;
     byConditions.set(key, (byConditions.get(key) ?? new Map<string, number>()).set(id, end));
   }
-  return [...byConditions].flatMap(([key, ends]) => {
+  const others = [...byConditions].flatMap(([key, ends]) => {
     const [names, swap, between] = key.split('|') as [string, string, string];
     const conditions = names.split(' ');
     const { line, neutral, earth } = potentialsIn(context, conditions);
@@ -131,6 +164,7 @@ function withoutNeutral(context: Context): OpenRegion[] {
       };
     });
   });
+  return [...misled, ...others];
 }
 
 /** Gaps in the line: where one starves mains and the input of an inverter alike it is one gap. */

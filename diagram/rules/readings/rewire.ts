@@ -85,6 +85,20 @@ export function bridge(context: Context, label: string, part: string, sides: rea
   return [{ label, patch }];
 }
 
+/** The wires at some terminals of a part led to others of it: "Change line and neutral over at Q14". */
+export function turnMarks(
+  { document }: Context,
+  label: string,
+  part: string,
+  marks: Readonly<Record<string, string>>,
+): Remedy[] {
+  const turn = ([id, mark]: End): End => (id === part ? [id, marks[mark] ?? mark] : [id, mark]);
+  const wires = document.wires
+    .filter(({ from, to }) => [from, to].some(([id, mark]) => id === part && marks[mark] !== undefined))
+    .map((wire) => ({ ...wire, from: turn(wire.from), to: turn(wire.to) }));
+  return wires.length === 0 ? [] : [{ label, patch: { set: { wires } } }];
+}
+
 /** The cable in which a point's line comes from a place: a core added beside it runs in the same cable. */
 export function cableFrom(
   { graph }: Context,

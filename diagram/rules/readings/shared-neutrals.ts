@@ -6,7 +6,7 @@ import type { NeutralFault } from './neutral-faults';
 import { once } from './once';
 
 /** Overcurrent devices before each overcurrent device. */
-const forebears = once(({ sections }: Context): Map<string, Set<string>> => {
+export const forebears = once(({ sections }: Context): Map<string, Set<string>> => {
   const parents = new Map<string, string[]>();
   for (const { device, next } of sections)
     for (const id of next) parents.set(id, [...(parents.get(id) ?? []), device.id]);

@@ -42,13 +42,17 @@ testRule(undersizedCable, {
     '10 A on 1.5 mm2 bunched with two more circuits': run(10, 1.5, { method: 'B1', grouped: 3 }),
     // Table B.52.14, PVC at 45 degC: 0.79; 27 A x 0.79 = 21.3 A
     '20 A on 2.5 mm2 clipped, in a loft of 45 degC': run(20, 2.5, { ambient: 45 }),
-    'a size that the table does not print is not judged': run(100, 3),
+    'a size that the table does not print, where the next larger one would do': run(32, 3),
     'a device without rating is not judged': run(32, 1.5).set('Q12', { rating: undefined }),
     // BS 7671 433.1.204: 32 A on a ring whose legs carry 20 A
     'a British ring of 2.5 mm2 on 32 A': ring(2.5, 'GB'),
     'and a spur of it to one outlet': ring(2.5, 'GB', true),
   },
   invalid: {
+    'a size below the table, behind a device that its first size could not carry either': {
+      drawing: run(20, 1),
+      findings: [{ parts: ['Q12'], message: /carries less than 19\.5 A/ }],
+    },
     'a step above: 40 A on 4 mm2 by method B1': {
       drawing: run(40, 4, { method: 'B1' }),
       findings: [{ parts: ['Q12'], severity: 'danger', conditions: ['mains'], message: /32 A.*40 A/ }],
