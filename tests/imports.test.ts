@@ -40,6 +40,8 @@ const DIAGRAM: Record<string, readonly string[]> = {
     'layout',
     'paper',
   ],
+  // A schedule reads the home as the rules work it out, and what is typed into it is a command.
+  schedules: ['document', 'practices', 'calculations', 'circuit', 'terminals', 'rules', 'layout', 'commands'],
   // What a terminal carries and where a wire may end is said as the commands know it.
   outline: ['document', 'terminals', 'rules', 'layout', 'commands'],
 };
