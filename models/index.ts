@@ -1,3 +1,4 @@
+import type { Model, ModelStatic } from 'sequelize';
 import { AuditEntry } from './audit-entry';
 import { AuthSession } from './auth-session';
 import { Client } from './client';
@@ -20,13 +21,24 @@ import { Team } from './team';
  * All associations. A key of two columns is more than an association can say: it joins by the id alone (a random uuid),
  * and each query names the team besides. The database holds the foreign keys.
  */
-const none = { constraints: false } as const;
-Person.hasOne(Login, { as: 'login', foreignKey: 'personId', sourceKey: 'id', ...none });
-Person.hasMany(Membership, { as: 'memberships', foreignKey: 'personId', sourceKey: 'id', ...none });
-Job.belongsTo(Client, { as: 'client', foreignKey: 'clientId', targetKey: 'id', ...none });
-Job.hasOne(Drawing, { as: 'drawing', foreignKey: 'jobId', sourceKey: 'id', ...none });
-DrawingChange.belongsTo(Person, { as: 'person', foreignKey: 'personId', targetKey: 'id', ...none });
-Revision.belongsTo(Person, { as: 'person', foreignKey: 'personId', targetKey: 'id', ...none });
+function join(
+  from: ModelStatic<Model>,
+  how: 'hasOne' | 'hasMany' | 'belongsTo',
+  to: ModelStatic<Model>,
+  as: string,
+  foreignKey: string,
+): void {
+  // A development reload runs this file again over models that are joined already.
+  if (from.associations[as]) return;
+  const key = how === 'belongsTo' ? { targetKey: 'id' } : { sourceKey: 'id' };
+  from[how](to, { as, foreignKey, ...key, constraints: false });
+}
+join(Person, 'hasOne', Login, 'login', 'personId');
+join(Person, 'hasMany', Membership, 'memberships', 'personId');
+join(Job, 'belongsTo', Client, 'client', 'clientId');
+join(Job, 'hasOne', Drawing, 'drawing', 'jobId');
+join(DrawingChange, 'belongsTo', Person, 'person', 'personId');
+join(Revision, 'belongsTo', Person, 'person', 'personId');
 
 export {
   AuditEntry,
