@@ -4,7 +4,7 @@ import { useMemo } from 'react';
 import { SceneInSmall } from '@/components/frame/scene-in-small';
 import type { Installation } from '@/diagram/document/schema';
 import { buildScene } from '@/diagram/layout/build-scene';
-import { focusCell } from './focus';
+import { focusCell } from '@/components/grid/focus';
 import type { Survey } from './use-survey';
 
 /** Sheet 2 in small: the row in hand and its room light together; a room that is chosen puts its row in hand. */

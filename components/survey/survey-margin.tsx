@@ -3,7 +3,7 @@
 import type { ReactNode } from 'react';
 import { Button } from '@/components/ui/button';
 import { Note } from '@/components/ui/note';
-import { focusCell } from './focus';
+import { focusCell } from '@/components/grid/focus';
 import { columnOf } from './columns';
 import type { Problem } from './problems';
 import type { Survey } from './use-survey';

@@ -9,7 +9,7 @@ import { stepsToDraw, surveySteps, takeIntoSurvey } from '@/diagram/survey/step'
 import { surveyTotals } from '@/diagram/survey/totals';
 import { columnOf } from './columns';
 import { copyCell, editCell, orderAfter, removeRoom, setRooms } from './edits';
-import { focusCell } from './focus';
+import { focusCell } from '@/components/grid/focus';
 import { allProblems, refusedKey, type Problem, type Refused } from './problems';
 import { useBlankRow } from './use-blank-row';
 import type { SurveyDocument } from './use-survey-document';
