@@ -23,6 +23,7 @@ const DIAGRAM: Record<string, readonly string[]> = {
   calculations: ['document', 'symbols', 'terminals', 'practices'],
   circuit: ['document', 'symbols', 'terminals', 'practices', 'calculations'],
   rules: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit'],
+  rehearsal: ['document', 'symbols', 'terminals', 'practices', 'calculations', 'circuit'],
   // Colours of cores and what outlets are called stand in the practices, which are data.
   layout: ['document', 'symbols', 'terminals', 'practices'],
   // A draft is placed on the sheet as well.

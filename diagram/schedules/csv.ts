@@ -1,6 +1,6 @@
 import type { Installation } from '../document/schema';
-import { fieldText } from './edit';
-import { isTyped, type Cell, type Table } from './types';
+import { readerOf } from './edit';
+import { isTyped, type Cell, type FieldRef, type Table } from './types';
 
 /** What a file says of itself above its rows. */
 export interface FileHead {
@@ -17,10 +17,10 @@ export interface FileHead {
 type Value = string | number | null;
 
 /** Numbers as numbers, to four places; words as words; what is missing is an empty cell. */
-function valueOf(doc: Installation, cell: Cell | undefined): Value {
+function valueOf(read: (ref: FieldRef) => string, cell: Cell | undefined): Value {
   if (!cell) return null;
   if (isTyped(cell)) {
-    const text = fieldText(doc, cell.field);
+    const text = read(cell.field);
     return /^-?\d+(\.\d+)?$/.test(text) ? Number(text) : text;
   }
   if (cell.value === undefined) return cell.text === '-' ? '' : cell.text;
@@ -40,7 +40,8 @@ const CAUTIONS = [
  * headings with their units, and the rows. Every record has the same number of fields, as RFC 4180 asks.
  */
 export function csvRows(doc: Installation, table: Table, head: FileHead): Value[][] {
-  const columns = table.columns;
+  const { columns } = table;
+  const read = readerOf(doc);
   const width = Math.max(columns.length + 1, 2);
   const full = (values: readonly Value[]): Value[] => [...values, ...Array<Value>(width - values.length).fill('')];
   const heads = columns.map(({ name, unit, spoken }) => capital(spoken ?? [name, unit].filter(Boolean).join(', ')));
@@ -58,7 +59,7 @@ export function csvRows(doc: Installation, table: Table, head: FileHead): Value[
     [group ? 'Number, fed by' : 'Row', ...heads],
     ...table.rows.map((row) => [
       group ? `${row.number} ${row.group}` : row.name,
-      ...columns.map(({ id }) => valueOf(doc, row.cells[id])),
+      ...columns.map(({ id }) => valueOf(read, row.cells[id])),
     ]),
   ].map(full);
 }

@@ -15,11 +15,19 @@ function ownersOf(doc: Installation, ref: FieldRef): (Part | Cable)[] {
   return ref.of === 'part' ? doc.parts.filter(({ id }) => ids.has(id)) : doc.cables.filter(({ id }) => ids.has(id));
 }
 
-/** The text of a cell as the drawing has it now; empty where the thing is no longer drawn. */
-export function fieldText(doc: Installation, ref: FieldRef): string {
-  const [first] = ownersOf(doc, ref);
-  return first ? fieldById(ref.field).read(first) : '';
+/** Reads the cells of a drawing: their text as it is now, and empty where the thing is no longer drawn. */
+export function readerOf(doc: Installation): (ref: FieldRef) => string {
+  const parts = new Map(doc.parts.map((part) => [part.id, part]));
+  const cables = new Map(doc.cables.map((cable) => [cable.id, cable]));
+  return ({ of, ids, field }) => {
+    const [first] = ids;
+    const owner = first === undefined ? undefined : of === 'part' ? parts.get(first) : cables.get(first);
+    return owner ? fieldById(field).read(owner) : '';
+  };
 }
+
+/** The text of one cell. */
+export const fieldText = (doc: Installation, ref: FieldRef): string => readerOf(doc)(ref);
 
 const cut = (text: string): string => (text.length > 40 ? `${text.slice(0, 37)}...` : text);
 

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { PatchSchema, type Patch } from '@/diagram/document/patch';
 import { IdSchema, type Installation } from '@/diagram/document/schema';
+import { TABLE_IDS } from '@/diagram/schedules/types';
 
 /** Requests and answers of the drawing routes; the same schema serves the screen and the handler. */
 
@@ -86,6 +87,9 @@ export const SheetQuerySchema = z.object({
   sheet: z.coerce.number().int().min(1).max(500).default(1),
 });
 export type SheetQuery = z.infer<typeof SheetQuerySchema>;
+
+/** Which table of the schedules is asked for as a file. */
+export const TableQuerySchema = z.object({ table: z.enum(TABLE_IDS).default('ways') });
 
 export const RevisionSchema = z.strictObject({
   note: z.string().trim().min(1, 'say in a few words what this revision is').max(200),

@@ -70,6 +70,7 @@ export const ACCESS: Record<string, Row> = {
     gets: [201, 201, 404, 403, 403, 404, 401],
   },
   'GET /api/drawings/[drawingId]/events': { params: ofDrawing, gets: READ_DRAWING },
+  'GET /api/drawings/[drawingId]/csv': { params: ofDrawing, gets: READ_DRAWING },
   'GET /api/drawings/[drawingId]/json': { params: ofDrawing, gets: READ_DRAWING },
   'GET /api/drawings/[drawingId]/pdf': { params: ofDrawing, gets: READ_DRAWING },
   'GET /api/drawings/[drawingId]/svg': { params: ofDrawing, gets: READ_DRAWING },

@@ -1,8 +1,13 @@
 import 'server-only';
 
 /** "OH-207 Heron Row 9, B": number, title and revision, without the signs that file systems and headers refuse. */
-export const fileName = (titleBlock: { number: string; title: string; revision: string }, ending: string): string =>
-  `${titleBlock.number} ${titleBlock.title}${titleBlock.revision === '-' ? '' : `, ${titleBlock.revision}`}`
+export const fileName = (
+  titleBlock: { number: string; title: string; revision: string },
+  ending: string,
+  /** what of the drawing it is: "ways" */
+  piece = '',
+): string =>
+  `${titleBlock.number} ${titleBlock.title}${titleBlock.revision === '-' ? '' : `, ${titleBlock.revision}`} ${piece}`
     .replace(/[\p{Cc}"\\/:*?<>|]+/gu, ' ')
     .replace(/\s+/g, ' ')
     .trim()
