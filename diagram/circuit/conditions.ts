@@ -40,10 +40,14 @@ export interface Conditions {
 /** Beyond this many changeovers not every combination of their positions is looked at. */
 const MOST_COMBINED = 3;
 
-/** True when a battery stands between the inverter's two dc terminals. */
-export function hasBattery(graph: Graph, inverter: Part): boolean {
+/**
+ * True when a battery stands between the inverter's two dc terminals.
+ * @param closed by edge, which dc contacts are closed; all where not given
+ */
+export function hasBattery(graph: Graph, inverter: Part, closed?: Uint8Array): boolean {
   const minus = graph.node(inverter.id, 'bat.-')!;
-  const dc = (edge: Edge) => edge.kind === 'wire' || edge.kind === 'device';
+  const dc = (edge: Edge, number: number) =>
+    (edge.kind === 'wire' || edge.kind === 'device') && closed?.[number] !== 0;
   const nodes = new Set([graph.node(inverter.id, 'bat.+')!]);
   let batteries = 0;
   // Batteries in series are crossed one after the other; in parallel each is met at once.

@@ -1,0 +1,186 @@
+import { hasBattery } from '../circuit/conditions';
+import { polesOf } from '../document/kinds';
+import { byDesignation, compareDesignations } from '../document/names';
+import type { Kind, Part } from '../document/schema';
+import type { Graph } from '../terminals/graph';
+import { closedEdges, pathTo, reach, reaches } from '../terminals/reach';
+import { isPoint } from '../terminals/roles-of-parts';
+import type { Setting } from './settings';
+import { openSetting } from './still-live';
+
+/** What must be opened so that no line of any source reaches a part. */
+export interface Isolation {
+  part: string;
+  /** the least set of devices, by designation; null where nothing in this home makes the part dead */
+  open: { part: string; setting: Setting }[] | null;
+  /** sources that it would be fed from, which the set parts it from */
+  sources: string[];
+  /** the neutral of some source stays joined to it: a device of the set has one pole, or stands in the line alone */
+  neutralJoined: boolean;
+  /** points elsewhere that go dark as well */
+  alsoDark: string[];
+  /** its terminals are a battery's, or hang on one with nothing between */
+  never: boolean;
+}
+
+/** What is fit to isolate with: a control switch is not, nor an inverter switched off. */
+const ISOLATES: ReadonlySet<Kind> = new Set(['isolator', 'mcb', 'rcbo', 'rcd', 'fuse', 'plug', 'changeover']);
+/** Sets larger than this are not looked for: three sources at one place would be a find. */
+const MOST = 4;
+/** sets of one size that are compared */
+const COMPARED = 24;
+
+/** How a node may be fed: from where, and over which contacts. */
+interface Feeding {
+  source: string;
+  starts: number[];
+  closed: Uint8Array;
+}
+
+/** Combinations of the changeovers: in each position one side only is joined. */
+function sides(changeovers: readonly Part[]): Map<string, 'A' | 'B'>[] {
+  return changeovers
+    .slice(0, 3)
+    .reduce<Map<string, 'A' | 'B'>[]>(
+      (all, { id }) => all.flatMap((before) => (['A', 'B'] as const).map((side) => new Map(before).set(id, side))),
+      [new Map()],
+    );
+}
+
+/** Every way in which a line may reach anything, with some devices open, whatever else somebody does. */
+function feedings(graph: Graph, opened: ReadonlySet<string>): Feeding[] {
+  const parts = [...graph.parts.values()];
+  const changeovers = parts.filter(({ kind }) => kind === 'changeover');
+  const found: Feeding[] = [];
+  for (const side of sides(changeovers)) {
+    const open = (edge: Graph['edges'][number]) =>
+      edge.kind === 'bond' ||
+      (edge.part !== undefined && opened.has(edge.part) && edge.kind !== 'bypass' && edge.kind !== 'through') ||
+      (edge.kind === 'changeover' && (side.get(edge.part!) ?? edge.position) !== edge.position);
+    const closed = closedEdges(graph, open);
+    for (const part of parts) {
+      if (part.kind === 'supply') found.push({ source: part.id, starts: [graph.node(part.id, 'L')!], closed });
+      if (part.kind !== 'inverter' || !hasBattery(graph, part, closed)) continue;
+      // On battery the inverter parts its own input.
+      const own = closed.slice();
+      for (const number of graph.contactsOf.get(part.id)!) if (graph.edges[number]!.kind === 'bypass') own[number] = 0;
+      found.push({ source: part.id, starts: [graph.node(part.id, 'out.L')!], closed: own });
+    }
+    const dc = closed.slice();
+    graph.edges.forEach(({ kind }, number) => {
+      if (kind !== 'wire' && kind !== 'device') dc[number] = 0;
+    });
+    for (const part of parts)
+      if (part.kind === 'battery')
+        found.push({ source: part.id, starts: ['+', '-'].map((mark) => graph.node(part.id, mark)!), closed: dc });
+  }
+  return found;
+}
+
+/** Nodes of a part that must be dead; its earth need not be. */
+function targetsOf(graph: Graph, part: Part): number[] {
+  const nodes: number[] = [];
+  graph.partOf.forEach((other, node) => {
+    const mark = graph.markOf[node]!;
+    if (other === part && mark !== 'E' && !mark.endsWith('.E')) nodes.push(node);
+  });
+  return nodes;
+}
+
+/** The first path by which one of the nodes is fed: its source and its devices; null when all are dead. */
+function feedOf(graph: Graph, targets: readonly number[], opened: ReadonlySet<string>) {
+  for (const { source, starts, closed } of feedings(graph, opened)) {
+    const walk = reach(graph, starts, closed);
+    const node = targets.find((each) => reaches(walk, each));
+    if (node === undefined) continue;
+    const devices = pathTo(graph, walk, node).flatMap((number) => {
+      const { kind, part } = graph.edges[number]!;
+      const fit = kind === 'device' || kind === 'changeover' || kind === 'plug';
+      return fit && ISOLATES.has(graph.parts.get(part!)!.kind) ? [part!] : [];
+    });
+    return { source, devices: [...new Set(devices)] };
+  }
+  return null;
+}
+
+/** All least sets of devices whose opening leaves the nodes dead, up to a number of them; empty where there is none. */
+function leastSets(graph: Graph, targets: readonly number[]): string[][] {
+  const tried = new Set<string>();
+  for (let most = 0; most <= MOST; most++) {
+    const found: string[][] = [];
+    const search = (opened: string[]): void => {
+      const key = [...opened].sort().join(' ');
+      if (tried.has(`${most} ${key}`) || found.length >= COMPARED) return;
+      tried.add(`${most} ${key}`);
+      const feed = feedOf(graph, targets, new Set(opened));
+      if (!feed) found.push(opened);
+      else if (opened.length < most) for (const device of feed.devices) search([...opened, device]);
+    };
+    search([]);
+    if (found.length > 0) return found;
+  }
+  return [];
+}
+
+/** Points that some devices open leave without any line. */
+function deadPoints(graph: Graph, opened: ReadonlySet<string>): Set<string> {
+  const walks = feedings(graph, opened).map(({ starts, closed }) => reach(graph, starts, closed));
+  const points = [...graph.parts.values()].filter(isPoint);
+  const dead = points.filter(({ id }) =>
+    ['L', 'N'].every((mark) => !walks.some((walk) => reaches(walk, graph.node(id, mark)))),
+  );
+  return new Set(dead.map(({ id }) => id));
+}
+
+/**
+ * The least set of devices to open, lock off and prove dead before somebody works at a part: it holds whatever the
+ * switches, the changeovers and the supply do meanwhile. Of several sets as small, the one that leaves most of the home
+ * its supply, then the one that parts more neutrals.
+ */
+export function isolationOf(graph: Graph, part: Part): Isolation {
+  const targets = targetsOf(graph, part);
+  const sources = new Set<string>();
+  for (const { source, starts, closed } of feedings(graph, new Set())) {
+    const walk = reach(graph, starts, closed);
+    if (targets.some((node) => reaches(walk, node))) sources.add(source);
+  }
+  const fedFrom = [...sources].sort(compareDesignations);
+  const sets = leastSets(graph, targets);
+  const never = part.kind === 'battery';
+  if (sets.length === 0)
+    return { part: part.id, open: null, sources: fedFrom, neutralJoined: false, alsoDark: [], never };
+
+  const before = deadPoints(graph, new Set());
+  const ranked = sets
+    .map((ids) => {
+      const devices = ids.map((id) => graph.parts.get(id)!).sort(byDesignation);
+      const dead = deadPoints(graph, new Set(ids));
+      const alsoDark = [...dead].filter((id) => !before.has(id) && id !== part.id).sort(compareDesignations);
+      const poles = devices.reduce((sum, device) => sum + polesOf(device), 0);
+      return { devices, alsoDark, poles };
+    })
+    .sort(
+      (a, b) =>
+        a.alsoDark.length - b.alsoDark.length ||
+        b.poles - a.poles ||
+        compareDesignations(a.devices.map(({ id }) => id).join(' '), b.devices.map(({ id }) => id).join(' ')),
+    );
+  const best = ranked[0]!;
+  const opened = new Set(best.devices.map(({ id }) => id));
+  const neutrals = [...graph.parts.values()].flatMap(({ kind, id }) =>
+    kind === 'supply' ? [graph.node(id, 'N')!] : kind === 'inverter' ? [graph.node(id, 'out.N')!] : [],
+  );
+  const joined = reach(
+    graph,
+    neutrals.filter((node) => !targets.includes(node)),
+    closedEdges(graph, ({ kind, part: id }) => kind === 'bond' || (id !== undefined && opened.has(id))),
+  );
+  return {
+    part: part.id,
+    open: best.devices.map((device) => ({ part: device.id, setting: openSetting(device)! })),
+    sources: fedFrom,
+    neutralJoined: best.devices.length > 0 && targets.some((node) => reaches(joined, node)),
+    alsoDark: best.alsoDark,
+    never,
+  };
+}
