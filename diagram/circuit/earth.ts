@@ -24,6 +24,8 @@ export interface Earth {
   mainBar: number | undefined;
   /** the main bar is joined to the supply's earth (TN) or an electrode (TT) */
   earthed: boolean;
+  /** on TN, what hangs on electrodes apart from the main earth: an outbuilding with its own rod is TT by itself */
+  islands: Reach;
 }
 
 interface Crossed {
@@ -84,5 +86,9 @@ export function workOutEarth(
     earthedBar ??
     bars.map((node) => ({ node, size: weight(node) })).sort((a, b) => b.size - a.size || a.node - b.node)[0]?.node;
   const starts = mainBar === undefined || earthedBar !== undefined ? means : [mainBar];
-  return { closed, reached: reach(graph, starts, closed), mainBar, earthed: earthedBar !== undefined };
+  const reached = reach(graph, starts, closed);
+  const rods = earthAnchors(graph).filter(
+    (node) => graph.partOf[node]!.kind === 'electrode' && earthedBar !== undefined && !reaches(reached, node),
+  );
+  return { closed, reached, mainBar, earthed: earthedBar !== undefined, islands: reach(graph, rods, closed) };
 }

@@ -61,6 +61,8 @@ export interface Evaluated {
   /** at least one; only the first without two-way and cross switches */
   stands: Stand[];
   points: ReadonlyMap<string, PointState>;
+  /** by point, how it is fed in other positions of two-way and cross switches, where that is through other devices */
+  otherwise: ReadonlyMap<string, readonly PointState[]>;
   drawn: Stand[];
   asDrawn: ReadonlyMap<string, PointState>;
 }
@@ -88,6 +90,25 @@ function stand(
   const line = condition.sources.map((source) => reach(graph, [source.line], closed));
   const neutral = condition.sources.map((source) => reach(graph, [source.neutral], closed));
   return { position, closed, line, neutral, shorted: line.some((walk) => walk.order.some(apart)) };
+}
+
+/** How a point is fed in one position after the other; line at the right end first where both ends have it. */
+function feedsOf(graph: Graph, part: Part, condition: Condition, stands: readonly Stand[]): PointState[] {
+  return stands.flatMap((stand) => {
+    const state = pointState(graph, part, condition, [stand]);
+    return state.fed ? [state] : [];
+  });
+}
+
+/** Feeds of a point through other devices than those of its first one. */
+function otherFeeds(graph: Graph, condition: Condition, stands: readonly Stand[], first: PointState): PointState[] {
+  const selects = (edges: readonly number[]) => edges.some((number) => graph.edges[number]!.kind === 'select');
+  if (!first.fed || !(selects(first.lineEdges) || selects(first.neutralEdges))) return [];
+  const key = ({ lineDevices, neutralDevices }: PointState) => `${lineDevices.join(' ')}|${neutralDevices.join(' ')}`;
+  const found = new Map<string, PointState>([[key(first), first]]);
+  for (const state of feedsOf(graph, first.part, condition, stands))
+    if (!found.has(key(state))) found.set(key(state), state);
+  return [...found.values()].slice(1);
 }
 
 function pointState(graph: Graph, part: Part, condition: Condition, stands: readonly Stand[]): PointState {
@@ -191,11 +212,17 @@ function evaluateCondition(
     const points = new Map<string, PointState>();
     for (const part of graph.parts.values())
       if (isPoint(part)) points.set(part.id, pointState(graph, part, condition, stands));
-    return { stands, points };
+    const otherwise = new Map<string, PointState[]>();
+    if (stands.length > 1)
+      for (const [id, first] of points) {
+        const others = otherFeeds(graph, condition, stands, first);
+        if (others.length > 0) otherwise.set(id, others);
+      }
+    return { stands, points, otherwise };
   };
   const drawn = states(whole);
   const common = { condition, crossed, lineLoops, neutralLoops, whole, drawn: drawn.stands, asDrawn: drawn.points };
-  if (loops.length === 0) return { ...common, stands: drawn.stands, points: drawn.points };
+  if (loops.length === 0) return { ...common, ...drawn };
   const apart = whole.slice();
   for (const edge of loops) apart[edge] = 0;
   return { ...common, ...states(apart) };

@@ -10,6 +10,7 @@ import type { Evaluation } from './evaluate';
 import { sectionCables, type SectionCable } from './way-cables';
 import { demandOf, wayLoads, type WayLoad } from './way-demand';
 import { earthFault, externalOhm, timeLimit, type EarthFault } from './way-faults';
+import { feederFault, type FeederFault } from './feeder-faults';
 import { workOutPaths, type Fed, type Paths } from './way-paths';
 
 /** What one overcurrent device and the cables behind it come to. */
@@ -30,6 +31,8 @@ export interface WayFigures {
   /** the largest loop of a fault to earth on mains; null where nothing earthed is fed, or a value is missing */
   fault: EarthFault | null;
   faultAt: Drawn | null;
+  /** the same for a section that feeds other devices only; null where something is used in it */
+  feeder: FeederFault | null;
 }
 
 /** What flows together through devices, from what draws behind each of them. */
@@ -127,6 +130,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
   const earthPaths = workOutEarthPaths(graph, earth);
   const together = addUp(drawn, loads, practice);
 
+  const feeders = { graph, evaluation, earth, earthPaths, practice };
   const external = externalOhm(supply);
   const zsOf = (each: Drawn): number | null => {
     const r1 = paths.fed.get(each.part.id)?.r1;
@@ -161,6 +165,7 @@ export function workOutFigures({ graph, evaluation, sections, earth, practice }:
       worstDrop,
       fault: farthest && earthFault(graph, practice, farthest.at, farthest.zs, withinS),
       faultAt: farthest?.at ?? null,
+      feeder: members.length === 0 ? feederFault(feeders, section) : null,
     };
   }
 

@@ -27,7 +27,7 @@ export const backupNeutralLost: Rule = {
         heading: `${capital(names)} ${one ? 'loses its' : 'lose their'} neutral on battery`,
         message:
           devices.length > 0
-            ? `On battery the neutral of ${names} returns through ${sayParts(context, devices)}, which ${one ? 'its' : 'their'} line does not pass. With ${sayParts(context, devices)} open, ${one ? 'it has' : 'they have'} no way back and the neutral stands at line voltage.`
+            ? `On battery the neutral of ${names} returns through ${sayParts(context, devices)}, which ${one ? 'its' : 'their'} line does not pass. With ${devices.length === 1 ? sayParts(context, devices) : 'any of them'} open, ${one ? 'it has' : 'they have'} no way back and the neutral stands at line voltage.`
             : `On battery the neutral of ${names} no longer reaches the neutral of the inverter. ${one ? 'It stops' : 'They stop'}, and the mains neutral stands at line voltage.`,
         parts: points,
         wires,

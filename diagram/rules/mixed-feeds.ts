@@ -42,6 +42,10 @@ export const mixedFeeds: Rule = {
         ? `The wire ${sayWire(context, wire.id)}`
         : `The lead plugged in at ${say(context, graph.partOf[b]!.id)}`;
       const when = switches.length > 0 ? ', in some positions of the two-way switches' : '';
+      // A changeover in the loop joins both sources itself where it is wired the wrong way round.
+      const changeovers = [edge, ...loop].flatMap((number) =>
+        graph.edges[number]!.kind === 'changeover' ? [graph.edges[number]!.part!] : [],
+      );
       const { heading, consequence } = tell(context, nearest, inverters);
       const ends = [a, b].map((node) => graph.partOf[node]!.id).filter((id) => !part || id !== part);
       yield {
@@ -50,7 +54,7 @@ export const mixedFeeds: Rule = {
           nearest.length === 1
             ? `${by} leads round ${say(context, nearest[0]!)}${when}: switched off, it makes nothing dead, and it does not see the current.`
             : `${by} joins what ${sayParts(context, nearest)} feed${when}. With either off, both stay live from the other.${consequence}`,
-        parts: [...new Set([...nearest, ...(part ? [part] : []), ...ends])],
+        parts: [...new Set([...changeovers, ...nearest, ...(part ? [part] : []), ...ends])],
         wires: wire ? [wire.id] : [],
         remedies: wire ? [takeOut('Take the link out', [wire.id])] : [],
         conditions: inverters.length > 1 ? context.evaluated.map(({ condition }) => condition.name) : conditions,

@@ -1,11 +1,12 @@
 import type { Source } from '../circuit/conditions';
 import { byDesignation } from '../document/names';
 import { isOvercurrent, isPoint } from '../terminals/roles-of-parts';
-import { reach } from '../terminals/reach';
+import { reach, type Reach } from '../terminals/reach';
 import { recalled } from './clauses';
 import type { Context } from './context';
 import { hasWire } from './readings/earth-gaps';
 import { misledStretches } from './readings/misled';
+import { neutralContacts } from './readings/neutral-contacts';
 import { once } from './readings/once';
 import { reversedNodes, reversedPoints } from './readings/reversals';
 import type { Rule } from './types';
@@ -16,6 +17,18 @@ interface Bare {
   points: Set<string>;
   wires: Set<string>;
   conditions: Set<string>;
+}
+
+/** True when the fuse is there, in the neutral: that is the finding. */
+const isFusedWrong = (context: Context): boolean =>
+  neutralContacts(context).fused.some(({ contacts }) =>
+    contacts.some((id) => context.graph.parts.get(id)!.kind === 'fuse'),
+  );
+
+/** Line bars that hang on the service before any device: what feeds several ways has nothing that protects it. */
+function bareBars({ graph }: Context, bare: Reach): string[] {
+  const bars = bare.order.flatMap((node) => (graph.partOf[node]!.kind === 'line-bar' ? [graph.partOf[node]!.id] : []));
+  return bars.slice(0, 1);
 }
 
 /** What a source's line reaches before any overcurrent device, where that is used or leaves the source's own place. */
@@ -45,6 +58,7 @@ const bareLines = once((context: Context): Bare[] => {
           const places = [graph.partOf[a!]!.place, graph.partOf[b!]!.place];
           if (places.some((place) => place !== source.part.place)) entry.wires.add(wire.id);
         }
+        if (source.kind === 'mains' && !fused && !isFusedWrong(context)) for (const bar of bareBars(context, bare)) entry.points.add(bar);
       }
       if (entry.points.size === 0 && entry.wires.size === 0) continue;
       entry.conditions.add(condition.name);

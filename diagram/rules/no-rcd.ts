@@ -1,7 +1,8 @@
 import { isResidual } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
 import type { Context } from './context';
-import { dutyOf, guardsOf, serves, DUTY_NAME, type Duty } from './readings/rcd-duty';
+import { dutyOf, guardsOf, onOwnRod, serves, DUTY_NAME, type Duty } from './readings/rcd-duty';
+import { feedsIn } from './readings/shared-neutrals';
 import { rcboInPlace } from './readings/rcbo-remedy';
 import { changePart } from './readings/remedies';
 import type { Lack, Remedy, Rule, Severity } from './types';
@@ -20,10 +21,11 @@ interface Unguarded {
 function unguarded(context: Context): Unguarded[] {
   const found = new Map<string, Unguarded>();
   const told = (duty: Duty): Severity =>
-    duty.of === 'wet' || context.document.supply.system === 'TT' ? 'danger' : 'defect';
-  for (const { condition, points } of context.evaluated) {
+    duty.of === 'wet' || duty.of === 'tt' || context.document.supply.system === 'TT' ? 'danger' : 'defect';
+  for (const evaluated of context.evaluated) {
+    const { condition } = evaluated;
     if (condition.base !== 'mains') continue;
-    for (const state of points.values()) {
+    for (const state of feedsIn(evaluated)) {
       if (!state.fed || state.source?.kind !== 'mains') continue;
       const duty = dutyOf(context, state.part);
       if (!duty || guardsOf(context, state).some((device) => serves(device, duty))) continue;
@@ -98,12 +100,14 @@ export const noRcd: Rule = {
       };
     }
   },
-  *lacks({ parts, document, name }: Context): Iterable<Lack> {
+  *lacks(context: Context): Iterable<Lack> {
+    const { parts, document, name } = context;
     for (const device of [...parts('rcd'), ...parts('rcbo')])
       if (isResidual(device) && device.sensitivity === undefined)
         yield { parts: [device.id], what: `the sensitivity of ${name(device)}` };
     const supply = parts('supply')[0];
-    if (document.supply.system === 'TT' && document.supply.ra === undefined)
+    const byRod = document.supply.system === 'TT' || onOwnRod(context).size > 0;
+    if (byRod && document.supply.ra === undefined)
       yield { parts: supply ? [supply.id] : [], what: 'the resistance of the earth electrode' };
   },
 };

@@ -55,14 +55,14 @@ export const slowDisconnection: Rule = {
       };
     }
     for (const way of slow.filter((each) => !shared.includes(each))) {
-      const { device, fault, faultAt } = way;
+      const { device, fault, at } = way;
       const limit = fault.zsMax === null ? '' : `; ${ohms(fault.zsMax)} is the most for ${seconds(fault.withinS)}`;
       yield {
         heading: `${capital(say(context, device.id))} clears a fault too slowly`,
         message:
-          `A fault to earth at ${sayParts(context, [faultAt!.part.id])} meets ${ohms(fault.zs)}${limit}. At ${Math.round(fault.faultA)} A ` +
+          `A fault to earth at ${sayParts(context, [at.id])} meets ${ohms(fault.zs)}${limit}. At ${Math.round(fault.faultA)} A ` +
           `${told(way)}, and the case stays live.`,
-        parts: [device.id, faultAt!.part.id],
+        parts: [device.id, at.id],
         conditions: onMains(context),
         remedies: remediesOf(context, way),
       };

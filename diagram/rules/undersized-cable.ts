@@ -9,6 +9,7 @@ import { figuresOf } from './readings/figures';
 import { lackOfCables, lackOfRating } from './readings/lacking';
 import { lineLoops } from './readings/line-loops';
 import { changeCables, changePart } from './readings/remedies';
+import { reversedNodes } from './readings/reversals';
 import type { Remedy, Rule } from './types';
 import { capital, say } from './readings/words';
 
@@ -23,6 +24,14 @@ function mostA({ graph }: Context, practice: Practice, { cable, capacity }: Sect
     if (found) return found.izA;
   }
   return null;
+}
+
+/** True for a neutral that is line because line and neutral change places before it: the crossing is the finding. */
+function isTurned(context: Context, id: string): boolean {
+  const { edges, edgeOfWire } = context.graph;
+  const { a, b, wire } = edges[edgeOfWire.get(id)!]!;
+  const reversed = reversedNodes(context);
+  return wire!.role === 'neutral' && (reversed.has(a) || reversed.has(b));
 }
 
 interface Thin extends SectionCable {
@@ -86,6 +95,7 @@ export const undersizedCable: Rule = {
       const thin = figures.cables.flatMap((each): Thin[] => {
         const izA = mostA(context, practice, each);
         const isThin = izA !== null && each.needA !== null && exceeds(each.needA, izA);
+        if (isThin && each.wires.every((id) => isTurned(context, id))) return [];
         return isThin && !(isOpened && isLegAstray(practice, each)) ? [{ ...each, izA }] : [];
       });
       if (thin.length === 0) continue;

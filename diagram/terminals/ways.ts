@@ -73,13 +73,17 @@ export function findSections(graph: Graph, apart: ReadonlySet<number> = new Set(
   );
   const isDevice = (edge: Edge) => edge.kind === 'device' && isOvercurrent(graph.parts.get(edge.part!)!);
 
-  const sections: Section[] = [];
+  const ends = new Map<string, readonly [upstream: number, downstream: number]>();
   for (const device of graph.parts.values()) {
     if (!isOvercurrent(device)) continue;
     const pole = graph.contactsOf.get(device.id)![0]!;
     const { a, b } = graph.edges[pole]!;
     if (!reaches(walk, a) || !reaches(walk, b)) continue;
-    const [upstream, downstream] = walk.via[b] === pole ? [a, b] : walk.via[a] === pole ? [b, a] : [a, b];
+    ends.set(device.id, walk.via[b] === pole ? [a, b] : walk.via[a] === pole ? [b, a] : [a, b]);
+  }
+  const sections: Section[] = [];
+  for (const [id, [upstream, downstream]] of ends) {
+    const device = graph.parts.get(id)!;
     const region = spread(graph, [downstream], (edge, number) => closed[number] !== 0 && !isDevice(edge));
     const points = new Map<string, Part>();
     const inverters = new Map<string, Part>();
@@ -90,7 +94,8 @@ export function findSections(graph: Graph, apart: ReadonlySet<number> = new Set(
       const mark = graph.markOf[node]!;
       if (isPoint(part) && mark !== 'E') points.set(part.id, part);
       else if (part.kind === 'inverter' && mark === 'in.L') inverters.set(part.id, part);
-      else if (isOvercurrent(part)) next.add(part.id);
+      // One that is met from behind, over a two-way switch between two ways, does not follow.
+      else if (isOvercurrent(part) && (ends.get(part.id)?.[0] ?? node) === node) next.add(part.id);
     }
     const sorted = <T>(map: Map<string, T>) => [...map.keys()].sort().map((id) => map.get(id)!);
     sections.push({

@@ -12,6 +12,7 @@ import type { Context } from '../context';
 import { liveOnMainOff } from '../live-after-main-off';
 import { backupsOf, figuresOf } from '../readings/figures';
 import { neutralFaults } from '../readings/neutral-faults';
+import { onOwnRod } from '../readings/rcd-duty';
 import { waysByPart } from '../shared-box-lines';
 import { feedsByPart } from '../two-sources-unmarked';
 import { breakers } from '../weak-breaking-capacity';
@@ -46,8 +47,14 @@ function mergedBy<T>(
 
 function mergeEvaluated(known: Evaluated, now: Evaluated, parts: readonly Part[], { after }: Touched): Evaluated {
   const points = new Map<string, PointState>();
-  for (const part of parts)
-    if (isPoint(part)) points.set(part.id, (after.has(part.id) ? now : known).points.get(part.id)!);
+  const otherwise = new Map<string, readonly PointState[]>();
+  for (const part of parts) {
+    if (!isPoint(part)) continue;
+    const from = after.has(part.id) ? now : known;
+    points.set(part.id, from.points.get(part.id)!);
+    const others = from.otherwise.get(part.id);
+    if (others) otherwise.set(part.id, others);
+  }
   const { name, base, positions, onBattery, sources } = now.condition;
   const condition = onlyKnown<Condition>('the condition', {
     name,
@@ -62,6 +69,7 @@ function mergeEvaluated(known: Evaluated, now: Evaluated, parts: readonly Part[]
     lineLoops: [],
     neutralLoops: [],
     points,
+    otherwise,
     asDrawn: points,
   });
 }
@@ -130,6 +138,13 @@ function mergeFigures(known: Figures, now: Figures, touched: Touched, trunk: Rea
 /** Puts down the readings that go by the id of a part. */
 function giveReadings(context: Context, known: Context, now: Context, touched: Touched, trunk: ReadonlySet<string>): void {
   neutralFaults.give(context, []);
+  onOwnRod.give(
+    context,
+    new Set([
+      ...[...onOwnRod(known)].filter((id) => !touched.before.has(id)),
+      ...[...onOwnRod(now)].filter((id) => touched.after.has(id)),
+    ]),
+  );
   waysByPart.give(context, mergedBy(waysByPart(known), waysByPart(now), touched));
   breakers.give(context, [
     ...mergedBy(

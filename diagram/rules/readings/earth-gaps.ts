@@ -30,6 +30,9 @@ function needsEarth(context: Context, part: Part): boolean {
   return part.class === 1;
 }
 
+const isEarthed = ({ reached, islands }: Context['earth'], node: number): boolean =>
+  reaches(reached, node) || reaches(islands, node);
+
 const isTwoPin = (pattern: string | undefined): boolean =>
   pattern !== undefined && /two-pin|2-pin|IS1293-2\.5|shaver/i.test(pattern);
 
@@ -45,7 +48,7 @@ export const earthGaps = once((context: Context): EarthGap[] => {
   if (earth.mainBar === undefined && earth.reached.order.every((node) => !hasWire(context, node))) return [];
   const earthNode = (part: Part) => graph.node(part.id, part.kind === 'inverter' ? 'in.E' : 'E')!;
   const missing = [...graph.parts.values()]
-    .filter((part) => needsEarth(context, part) && !reaches(earth.reached, earthNode(part)))
+    .filter((part) => needsEarth(context, part) && !isEarthed(earth, earthNode(part)))
     .sort(byDesignation);
   // A joint is what most of its wires are drawn as.
   const isEarthJoint = (node: number) => {

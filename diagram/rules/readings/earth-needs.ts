@@ -27,11 +27,14 @@ export function earthNeeds(context: Context): EarthNeed[] {
   const shared = new Set(
     context.document.wires.flatMap(({ role, cable }) => (cable !== undefined && role !== 'earth' ? [cable] : [])),
   );
-  for (const { drawn, fault, device } of ways.values()) {
+  for (const { drawn, fault: own, feeder, device } of ways.values()) {
+    const fault = own ?? feeder?.fault;
+    const ends = drawn.map(({ part, isPoint }) => ({ part, node: graph.node(part.id, isPoint ? 'E' : 'in.E') }));
+    if (feeder) ends.push({ part: feeder.at, node: feeder.earth });
     // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
     if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;
-    for (const { part, isPoint } of drawn) {
-      for (const number of earth.path(graph.node(part.id, isPoint ? 'E' : 'in.E')) ?? []) {
+    for (const { part, node } of ends) {
+      for (const number of earth.path(node) ?? []) {
         const { wire } = graph.edges[number]!;
         const cable = wire?.role === 'earth' && wire.cable !== undefined ? graph.cables.get(wire.cable) : undefined;
         if (!wire || !cable || (!fault && !shared.has(cable.id))) continue;

@@ -5,7 +5,7 @@ import { doubledNeutrals } from './doubled-neutrals';
 import { compareWays, strayWires } from './neutral-paths';
 import { once } from './once';
 import { potentials } from './potentials';
-import { sharedNeutrals } from './shared-neutrals';
+import { feedsIn, sharedNeutrals } from './shared-neutrals';
 
 /** In order of which one wins where one cause could give several. */
 const NEUTRAL_KINDS = ['lost', 'behind', 'borrowed', 'imbalance'] as const;
@@ -72,7 +72,7 @@ const rank = (kind: NeutralKind): number => NEUTRAL_KINDS.indexOf(kind);
 function worst(context: Context): Map<string, Verdict & { first: Evaluated; conditions: string[] }> {
   const found = new Map<string, Verdict & { first: Evaluated; conditions: string[] }>();
   for (const evaluated of context.evaluated) {
-    for (const state of evaluated.points.values()) {
+    for (const state of feedsIn(evaluated)) {
       const verdict = judge(context, evaluated, state);
       if (!verdict) continue;
       const id = state.part.id;
@@ -80,7 +80,7 @@ function worst(context: Context): Map<string, Verdict & { first: Evaluated; cond
       const name = evaluated.condition.name;
       if (!before || rank(verdict.kind) < rank(before.kind))
         found.set(id, { ...verdict, first: evaluated, conditions: [name] });
-      else if (verdict.kind === before.kind) before.conditions.push(name);
+      else if (verdict.kind === before.kind && !before.conditions.includes(name)) before.conditions.push(name);
     }
   }
   return found;

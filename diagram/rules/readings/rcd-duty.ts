@@ -1,8 +1,10 @@
 import type { Part } from '../../document/schema';
 import { practices } from '../../practices';
 import type { PointState } from '../../circuit/evaluate';
-import { isResidual } from '../../terminals/roles-of-parts';
+import { reaches } from '../../terminals/reach';
+import { isPoint, isResidual } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
+import { once } from './once';
 
 /** Why a point must lie behind an rcd, and how sensitive. */
 export interface Duty {
@@ -23,14 +25,21 @@ export function dutyOf(context: Context, part: Part): Duty | undefined {
   return strictest;
 }
 
-function applies({ document, graph }: Context, part: Part, of: Duty['of'], uptoA: number): boolean {
+/** Ids of points that are earthed by an electrode apart from the main earth: what holds on TT holds for them. */
+export const onOwnRod = once(({ graph, earth }: Context): ReadonlySet<string> => {
+  const nodes = earth.islands.order.length === 0 ? [] : [...graph.parts.values()].filter(isPoint);
+  return new Set(nodes.flatMap(({ id }) => (reaches(earth.islands, graph.node(id, 'E')) ? [id] : [])));
+});
+
+function applies(context: Context, part: Part, of: Duty['of'], uptoA: number): boolean {
+  const { document, graph } = context;
   switch (of) {
     case 'sockets':
       return part.kind === 'socket' && (part.rating ?? 0) <= uptoA;
     case 'lighting':
       return part.kind === 'lamp';
     case 'tt':
-      return document.supply.system === 'TT';
+      return document.supply.system === 'TT' || onOwnRod(context).has(part.id);
     case 'wet': {
       const place = graph.places.get(part.place ?? '');
       return place?.kind === 'wet' || place?.zone !== undefined;

@@ -101,10 +101,16 @@ export function ownEdges(context: Context, state: PointState): number[] {
   return edges;
 }
 
+/** How every point is fed, in each position of its switches that brings it through other devices. */
+export const feedsIn = ({ points, otherwise }: Evaluated): PointState[] => [
+  ...points.values(),
+  ...[...otherwise.values()].flat(),
+];
+
 /** Ways that use each own edge, the owner of its cable among them; a way before another stands for both. */
-function waysOfEdges(context: Context, { points }: Evaluated): Map<number, Map<string, string[]>> {
+function waysOfEdges(context: Context, evaluated: Evaluated): Map<number, Map<string, string[]>> {
   const users = new Map<number, Map<string, string[]>>();
-  for (const state of points.values()) {
+  for (const state of feedsIn(evaluated)) {
     if (!state.fed || !state.overcurrent) continue;
     for (const number of ownEdges(context, state)) {
       const ways = users.get(number) ?? new Map<string, string[]>();
@@ -143,7 +149,7 @@ export const sharedNeutrals = once((context: Context): NeutralFault[] => {
     const users = waysOfEdges(context, evaluated);
     const shared = new Set([...users].filter(([, ways]) => ways.size > 1).map(([number]) => number));
     if (shared.size === 0) continue;
-    for (const state of evaluated.points.values()) {
+    for (const state of feedsIn(evaluated)) {
       if (!state.fed || !state.overcurrent) continue;
       const own = ownEdges(context, state);
       const trunk = own.filter((number) => shared.has(number));

@@ -1,5 +1,6 @@
 import { externalOhm, deviceOf } from '../../circuit/way-faults';
 import type { WayFigures } from '../../circuit/way-figures';
+import type { Part } from '../../document/schema';
 import type { Context } from '../context';
 import type { Remedy } from '../types';
 import { exceeds } from './amounts';
@@ -7,14 +8,19 @@ import { figuresOf } from './figures';
 import { rcboInPlace } from './rcbo-remedy';
 import { changePart } from './remedies';
 
-/** A way with a fault to earth that nothing clears in time. */
-export type SlowWay = WayFigures & { fault: NonNullable<WayFigures['fault']> };
+/** A way or feeder with a fault to earth that nothing clears in time, and where. */
+export type SlowWay = WayFigures & { fault: NonNullable<WayFigures['fault']>; at: Part };
 
-/** Ways on mains whose fault to earth nothing clears in time. Where a device is not fully rated the question stays open. */
+/**
+ * Ways on mains, and feeders of other boards, whose fault to earth nothing clears in time. Where a device is not fully rated
+ * the question stays open.
+ */
 export function slowWays(context: Context): SlowWay[] {
-  return [...figuresOf(context).ways.values()].filter(
-    (way): way is SlowWay => way.fault !== null && !way.fault.holds && deviceOf(way.device) !== null,
-  );
+  return [...figuresOf(context).ways.values()].flatMap((way): SlowWay[] => {
+    const fault = way.fault ?? way.feeder?.fault;
+    const at = way.faultAt?.part ?? way.feeder?.at;
+    return fault && at && !fault.holds && deviceOf(way.device) !== null ? [{ ...way, fault, at }] : [];
+  });
 }
 
 /** The supply's own loop is too large already: one cause for all such ways. */

@@ -30,6 +30,7 @@ export function wayResults(context: Context): WayResult[] {
   return context.ways.map(({ device, label }) => {
     const figures = ways.get(device)!;
     const cable = deciding(figures.cables);
+    const fault = figures.fault ?? figures.feeder?.fault;
     return {
       part: device,
       label,
@@ -38,9 +39,9 @@ export function wayResults(context: Context): WayResult[] {
       iz: roundOrNull(cable?.capacity?.izA ?? null),
       capacity: cable?.capacity?.tableA ?? null,
       dropPercent: roundOrNull(figures.worstDrop?.percent ?? null),
-      zs: roundOrNull(figures.fault?.zs ?? null),
-      zsMax: roundOrNull(figures.fault?.zsMax ?? null),
-      disconnects: roundOrNull(figures.fault?.clearedS ?? null),
+      zs: roundOrNull(fault?.zs ?? null),
+      zsMax: roundOrNull(fault?.zsMax ?? null),
+      disconnects: roundOrNull(fault?.clearedS ?? null),
       rcd: rcdOf(context, figures),
       connectedWatts: round(figures.connectedWatts),
       demandWatts: round(figures.demandWatts ?? figures.connectedWatts),

@@ -17,13 +17,12 @@ testRule(noOvercurrent, {
         'weak-breaking-capacity',
       ],
     },
-    'no service fuse, all short in one place up to the breakers': smallHome()
-      .cut('SUP:L', 'F1')
-      .cut('F1', 'P1')
-      .drop('F1')
-      .line('SUP:L', 'P1:1'),
   },
   invalid: {
+    'no service fuse: the bar of the ways hangs on the service': {
+      drawing: smallHome().cut('SUP:L', 'F1').cut('F1', 'P1').drop('F1').line('SUP:L', 'P1:1'),
+      findings: [{ parts: ['SUP', 'LB0'], wires: [] }],
+    },
     'a backup output straight on its bars and points': {
       drawing: backupHome()
         .drop('Q4')
