@@ -16,6 +16,7 @@ import { Presence } from './presence';
 import { Revision } from './revision';
 import { sequelize } from './sequelize';
 import { Team } from './team';
+import { Upload } from './upload';
 
 /**
  * All associations. A key of two columns is more than an association can say: it joins by the id alone (a random uuid),
@@ -39,6 +40,7 @@ join(Job, 'belongsTo', Client, 'client', 'clientId');
 join(Job, 'hasOne', Drawing, 'drawing', 'jobId');
 join(DrawingChange, 'belongsTo', Person, 'person', 'personId');
 join(Revision, 'belongsTo', Person, 'person', 'personId');
+join(Upload, 'belongsTo', Person, 'person', 'personId');
 
 export {
   AuditEntry,
@@ -57,5 +59,6 @@ export {
   Presence,
   Revision,
   Team,
+  Upload,
   sequelize,
 };

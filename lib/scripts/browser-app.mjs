@@ -1,4 +1,7 @@
 import { randomBytes } from 'node:crypto';
+import { mkdtemp, rm } from 'node:fs/promises';
+import os from 'node:os';
+import path from 'node:path';
 import { buildIfChanged } from './build.mjs';
 import { explain } from './explain.mjs';
 import { migrate } from './migrate.mjs';
@@ -27,11 +30,14 @@ try {
   undo.push(cluster.stop);
   await cluster.createDatabase('ohmstead');
   await migrate(cluster.url('ohmstead', 'owner'));
+  const uploads = await mkdtemp(path.join(os.tmpdir(), 'ohmstead-uploads-'));
+  undo.push(() => rm(uploads, { recursive: true, force: true }));
   const env = {
     DATABASE_URL: cluster.url('ohmstead'),
     NEXTAUTH_SECRET: randomBytes(32).toString('base64url'),
     NEXTAUTH_URL: address,
     OHMSTEAD_BUILD_DIR: '.next-test',
+    UPLOADS_FOLDER: uploads,
   };
   await seedDemo({ env, wanted: true });
   const app = serve({ host: '127.0.0.1', port, env });

@@ -10,6 +10,14 @@ const EnvSchema = z
     NEXTAUTH_SECRET: z.string().min(32, 'is at least 32 random characters'),
     /** where people open the app: links and the check of a request's origin lean on it, never on the Host header */
     NEXTAUTH_URL: z.url('is an address like https://drawings.example.org'),
+    /** where pictures lie when no bucket is named */
+    UPLOADS_FOLDER: z.string().min(1).default('.data/uploads'),
+    /** a bucket for pictures instead; without an endpoint it is one of AWS */
+    S3_BUCKET: z.string().min(3).optional(),
+    S3_REGION: z.string().min(1).default('us-east-1'),
+    S3_ENDPOINT: z.url().optional(),
+    S3_ACCESS_KEY_ID: z.string().min(1).optional(),
+    S3_SECRET_ACCESS_KEY: z.string().min(1).optional(),
     OIDC_ISSUER: z.url().optional(),
     OIDC_CLIENT_ID: z.string().min(1).optional(),
     OIDC_CLIENT_SECRET: z.string().min(1).optional(),

@@ -31,6 +31,8 @@ const MATRIX = {
   'drawing.read': { apprentice: given, electrician: true, trainer: taught, admin: true },
   'drawing.edit': { apprentice: given, electrician: true },
   'drawing.record': { apprentice: given, electrician: true },
+  'picture.read': { apprentice: given, electrician: true, trainer: taught, admin: true },
+  'picture.edit': { apprentice: given, electrician: true },
   'people.read': { electrician: true, trainer: true, admin: true },
   'people.manage': { admin: true },
 } as const satisfies Record<string, Partial<Record<PersonRole, Rule>>>;
@@ -40,6 +42,7 @@ export const ACTIONS = Object.keys(MATRIX) as Action[];
 
 /** State × action: what a job or drawing refuses whoever asks, and why. */
 function closedBecause(action: Action, job: JobFacts): string | null {
+  if (action === 'picture.edit' && job.archived) return 'This job is archived. Take it out of the archive to add to it.';
   const changes = action === 'drawing.edit' || action === 'drawing.record';
   if (!changes) return null;
   if (job.archived) return 'This job is archived. Take it out of the archive to draw in it.';

@@ -14,10 +14,10 @@ function refuseReserved(this: unknown, key: string, value: unknown): unknown {
 }
 
 /**
- * The JSON body of a request, refused before more than `maxBytes` of it are kept.
- * @throws AppError too-large or invalid
+ * The body of a request, refused before more than `maxBytes` of it are kept.
+ * @throws AppError too-large
  */
-export async function readJson(request: Request, maxBytes: number): Promise<unknown> {
+export async function readBytes(request: Request, maxBytes: number): Promise<Buffer> {
   if (Number(request.headers.get('content-length') ?? 0) > maxBytes) throw tooLarge(maxBytes);
   const chunks: Uint8Array[] = [];
   let bytes = 0;
@@ -26,7 +26,15 @@ export async function readJson(request: Request, maxBytes: number): Promise<unkn
     if (bytes > maxBytes) throw tooLarge(maxBytes);
     chunks.push(chunk);
   }
-  const text = Buffer.concat(chunks).toString('utf8');
+  return Buffer.concat(chunks);
+}
+
+/**
+ * The JSON body of a request.
+ * @throws AppError too-large or invalid
+ */
+export async function readJson(request: Request, maxBytes: number): Promise<unknown> {
+  const text = (await readBytes(request, maxBytes)).toString('utf8');
   try {
     return JSON.parse(text, text.includes('__proto__') ? refuseReserved : undefined) as unknown;
   } catch (error) {

@@ -3,7 +3,7 @@ import type { z } from 'zod';
 import type { Actor } from '@/lib/server/actor';
 import { AppError, STATUS, missing } from '@/lib/server/errors';
 import { describeFault, log } from '@/lib/server/log';
-import { readJson } from '@/lib/server/read-body';
+import { readBytes, readJson } from '@/lib/server/read-body';
 import { checkJsonType, checkSameOrigin } from '@/lib/server/same-origin';
 import { currentActor } from '@/lib/server/session';
 import { throttle } from '@/lib/server/throttle';
@@ -15,6 +15,8 @@ interface Spec<P, Q, B> {
   params?: z.ZodType<P>;
   query?: z.ZodType<Q>;
   body?: z.ZodType<B>;
+  /** the body is a file as it is; a form of another site cannot send its type */
+  file?: boolean;
   /** of the body; 64 kB where not given */
   maxBytes?: number;
   /** of a good answer; 200 where not given */
@@ -26,6 +28,8 @@ interface Input<P, Q, B> {
   params: P;
   query: Q;
   body: B;
+  /** present where the spec asks for one */
+  file: { bytes: Buffer; type: string };
 }
 type Context = { params: Promise<unknown> };
 
@@ -54,6 +58,15 @@ function parseQuery(url: string): Record<string, string> {
   return query;
 }
 
+/** Types that a form of another site can send without asking. */
+const FORM_TYPES = new Set(['', 'text/plain', 'application/x-www-form-urlencoded', 'multipart/form-data']);
+
+async function readFile(request: Request, maxBytes: number): Promise<{ bytes: Buffer; type: string }> {
+  const type = (request.headers.get('content-type') ?? '').split(';')[0]!.trim().toLowerCase();
+  if (FORM_TYPES.has(type)) throw new AppError('invalid', 'The file has to be sent as it is, with its own type.');
+  return { bytes: await readBytes(request, maxBytes), type };
+}
+
 function answerFault(error: unknown, request: Request): Response {
   const known = error instanceof AppError;
   if (!known)
@@ -70,7 +83,7 @@ function answerFault(error: unknown, request: Request): Response {
 }
 
 function build<P, Q, B>(
-  { params, query, body, maxBytes = MAX_BYTES, status = 200 }: Spec<P, Q, B>,
+  { params, query, body, file, maxBytes = MAX_BYTES, status = 200 }: Spec<P, Q, B>,
   admit: () => Promise<(input: Input<P, Q, B>) => Promise<unknown>>,
 ) {
   return async (request: Request, context: Context): Promise<Response> => {
@@ -84,6 +97,7 @@ function build<P, Q, B>(
         params: where?.data as P,
         query: parse(query, query && parseQuery(request.url)),
         body: parse(body, body && (await readJson(request, maxBytes))),
+        file: file ? await readFile(request, maxBytes) : { bytes: Buffer.alloc(0), type: '' },
       });
       return result instanceof Response ? result : Response.json(result, { status, headers: HEADERS });
     } catch (error) {

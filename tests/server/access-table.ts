@@ -1,4 +1,5 @@
 import { randomUUID } from 'node:crypto';
+import { PICTURE } from './a-picture';
 import { jobInput, place } from './factories';
 import type { World } from './world';
 
@@ -10,6 +11,8 @@ export interface Row {
   params?: (world: World) => Record<string, string>;
   body?: (world: World) => unknown;
   path?: string;
+  /** sent as it is, instead of a body, with its type */
+  file?: { bytes: Buffer<ArrayBuffer>; type: string };
   /** the status that each of them gets, in the order of `ASKING` */
   gets: readonly [number, number, number, number, number, number, number];
   /** needs no sign-in: why */
@@ -18,6 +21,7 @@ export interface Row {
 
 const ofJob = ({ jobId }: World) => ({ jobId });
 const ofDrawing = ({ drawingId }: World) => ({ drawingId });
+const ofUpload = ({ uploadId }: World) => ({ uploadId });
 const ofPerson = ({ people }: World) => ({ personId: people.target.id });
 const READ_DRAWING = [200, 200, 404, 200, 200, 404, 401] as const;
 
@@ -33,6 +37,19 @@ export const ACCESS: Record<string, Row> = {
     params: ofJob,
     body: () => ({ version: 0, title: 'Heron Row 11' }),
     gets: [200, 403, 404, 403, 403, 404, 401],
+  },
+  'GET /api/jobs/[jobId]/uploads': { params: ofJob, gets: READ_DRAWING },
+  'POST /api/jobs/[jobId]/uploads': {
+    params: ofJob,
+    path: `/?id=${randomUUID()}&subject=board`,
+    file: { bytes: PICTURE, type: 'image/png' },
+    gets: [201, 201, 404, 403, 403, 404, 401],
+  },
+  'GET /api/uploads/[uploadId]': { params: ofUpload, gets: READ_DRAWING },
+  'PATCH /api/uploads/[uploadId]': {
+    params: ofUpload,
+    body: () => ({ caption: 'The board, open' }),
+    gets: [200, 200, 404, 403, 403, 404, 401],
   },
   'GET /api/clients': { gets: [200, 403, 403, 403, 200, 200, 401] },
   'GET /api/people': { gets: [200, 403, 403, 200, 200, 200, 401] },

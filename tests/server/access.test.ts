@@ -36,6 +36,11 @@ const asked = (world: World, method: string, row: Row): Asked => ({
   path: row.path ?? '/',
   params: row.params?.(world) ?? {},
   body: row.body?.(world),
+  ...(row.file && { raw: row.file.bytes, headers: { 'content-type': row.file.type } }),
+});
+const withHeaders = (request: Asked, headers: Record<string, string | null>): Asked => ({
+  ...request,
+  headers: { ...request.headers, ...headers },
 });
 const browserOf = (world: World, who: (typeof ASKING)[number]) =>
   who === 'anonymous' ? new Browser() : world.browsers[who];
@@ -78,22 +83,22 @@ describe.each(routes)('$name', ({ name, method, handler }) => {
     const world = await makeWorld();
     const before = await fingerprint(world.team.id);
     for (const who of ASKING) {
-      const answer = await browserOf(world, who).ask(handler, { ...asked(world, method, row), headers });
+      const answer = await browserOf(world, who).ask(handler, withHeaders(asked(world, method, row), headers));
       expect([who, answer.status]).toEqual([who, 403]);
     }
     expect(await fingerprint(world.team.id)).toBe(before);
   });
 
-  if (!row.body) return;
+  if (!row.body && !row.file) return;
 
-  it('refuses JSON sent as a form would send it', async () => {
+  it('refuses a body sent as a form would send it', async () => {
     const world = await makeWorld();
     const before = await fingerprint(world.team.id);
     for (const type of ['text/plain', 'application/x-www-form-urlencoded', 'multipart/form-data', null]) {
-      const answer = await world.browsers.electrician.ask(handler, {
-        ...asked(world, method, row),
-        headers: { 'content-type': type },
-      });
+      const answer = await world.browsers.electrician.ask(
+        handler,
+        withHeaders(asked(world, method, row), { 'content-type': type }),
+      );
       expect([type, answer.status]).toEqual([type, 400]);
     }
     expect(await fingerprint(world.team.id)).toBe(before);
@@ -105,16 +110,16 @@ describe.each(routes.filter(({ name }) => ACCESS[name]!.params))('$name', ({ nam
 
   it('answers the id of another team, an unknown one and what is no id alike', async () => {
     const world = await makeWorld();
-    const body = row.body?.(world);
     const [field] = Object.keys(row.params!(world));
     const foreign = {
       jobId: world.foreign.jobId,
       drawingId: world.foreign.drawingId,
       personId: world.foreign.personId,
+      uploadId: world.foreign.uploadId,
     }[field!]!;
     for (const who of ASKING.filter((_, i) => row.gets[i]! < 300))
       for (const id of [foreign, '00000000-0000-4000-8000-000000000000', `${foreign}'--`, '1', '../..']) {
-        const { status } = await browserOf(world, who).ask(handler, { method, params: { [field!]: id }, body });
+        const { status } = await browserOf(world, who).ask(handler, { ...asked(world, method, row), params: { [field!]: id } });
         expect([who, id, status]).toEqual([who, id, 404]);
       }
   });

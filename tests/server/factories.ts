@@ -5,7 +5,10 @@ import { initialsOf, type Actor } from '@/lib/server/actor';
 import { createJob } from '@/lib/server/jobs/create-job';
 import type { JobInput, JobView } from '@/lib/shared/jobs';
 import type { PersonRole } from '@/lib/shared/people';
-import { Login, Membership, Person, Team } from '@/models';
+import { storage } from '@/lib/server/storage/driver';
+import { keyOf } from '@/lib/server/uploads/keys';
+import { Login, Membership, Person, Team, Upload } from '@/models';
+import { PICTURE } from './a-picture';
 
 export const PASSWORD = 'the kettle is on the left';
 let hashed: Promise<string> | undefined;
@@ -59,6 +62,18 @@ export const jobInput = (over: Partial<JobInput> = {}): JobInput => ({
 /** A job of an electrician's team, with its empty drawing. */
 export const makeJob = async (electrician: Person, over: Partial<JobInput> = {}): Promise<JobView> =>
   createJob(await actorFor(electrician), jobInput(over));
+
+/** A picture that was stored, without the work of reading one. */
+export async function makeUpload({ teamId, id: personId }: Person, jobId: string): Promise<Upload> {
+  const id = randomUUID();
+  for (const size of ['large', 'small'] as const)
+    await storage().put(keyOf({ teamId, jobId, id }, size), PICTURE, 'image/webp');
+  const shown = { subject: 'board' as const, place: null, caption: 'The board', width: 2, height: 2 };
+  return Upload.create({
+    ...shown,
+    ...{ teamId, id, jobId, personId, bytes: PICTURE.length, sha256: '0'.repeat(64), storedAt: new Date() },
+  });
+}
 
 /** A place, as the smallest change that a drawing can take. */
 export const place = (id: string, name = id) => ({ set: { places: [{ id, name, kind: 'room' as const }] } });

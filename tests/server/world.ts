@@ -1,7 +1,7 @@
 import { QueryTypes } from 'sequelize';
 import { sequelize, type Person, type Team } from '@/models';
 import { signedIn, type Browser } from './browser';
-import { makeJob, makePerson, makeTeam } from './factories';
+import { makeJob, makePerson, makeTeam, makeUpload } from './factories';
 
 /** Two teams: everybody of the first, and somebody of the second who holds every role there. */
 export interface World {
@@ -11,8 +11,9 @@ export interface World {
   /** given to `apprentice`, and so seen by the trainer; `idle` is an apprentice without a job */
   jobId: string;
   drawingId: string;
+  uploadId: string;
   /** of the other team */
-  foreign: { jobId: string; drawingId: string; personId: string };
+  foreign: { jobId: string; drawingId: string; personId: string; uploadId: string };
 }
 
 export async function makeWorld(): Promise<World> {
@@ -41,13 +42,19 @@ export async function makeWorld(): Promise<World> {
     },
     jobId: job.id,
     drawingId: job.drawingId,
-    foreign: { jobId: other.id, drawingId: other.drawingId, personId: stranger.id },
+    uploadId: (await makeUpload(people.electrician, job.id)).id,
+    foreign: {
+      jobId: other.id,
+      drawingId: other.drawingId,
+      personId: stranger.id,
+      uploadId: (await makeUpload(stranger, other.id)).id,
+    },
   };
 }
 
 const TABLES = [
   ...['teams', 'people', 'logins', 'memberships', 'invitations', 'clients', 'jobs', 'job_people'],
-  ...['drawings', 'drawing_changes', 'drawing_snapshots', 'revisions', 'auth_sessions'],
+  ...['drawings', 'drawing_changes', 'drawing_snapshots', 'revisions', 'auth_sessions', 'uploads'],
 ];
 
 /** A fingerprint of everything that a team has; reading leaves it as it is, and so does every refusal. */

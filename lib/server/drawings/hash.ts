@@ -1,7 +1,7 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 
-export const sha256 = (text: string): string => createHash('sha256').update(text, 'utf8').digest('hex');
+export const sha256 = (data: string | Buffer): string => createHash('sha256').update(data).digest('hex');
 
 export interface ChangeFacts {
   drawingId: string;

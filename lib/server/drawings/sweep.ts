@@ -2,6 +2,7 @@ import 'server-only';
 import { QueryTypes } from 'sequelize';
 import { snapshotIfDue } from '@/lib/server/drawings/background';
 import { describeFault, log } from '@/lib/server/log';
+import { sweepUploads } from '@/lib/server/uploads/sweep-uploads';
 import { sequelize } from '@/models';
 
 const EVERY_MS = 5 * 60_000;
@@ -23,6 +24,9 @@ export async function sweepIdleDrawings(): Promise<number> {
 
 /** Sweeps from time to time for as long as the process runs. */
 export function startSweeping(): void {
-  const sweep = () => void sweepIdleDrawings().catch((error) => log('sweep.failed', describeFault(error)));
-  setInterval(sweep, EVERY_MS).unref();
+  const sweep = async () => {
+    for (const work of [sweepIdleDrawings, sweepUploads])
+      await work().catch((error) => log('sweep.failed', describeFault(error)));
+  };
+  setInterval(() => void sweep(), EVERY_MS).unref();
 }
