@@ -17,6 +17,8 @@ export interface Inserted {
   conductor: number | undefined;
   /** index of its branch among the extras; -1 for a neutral that opens */
   extra: number;
+  /** edge of the drawing that is the fault itself, where it was not put in */
+  edge?: number;
 }
 
 function terminal(graph: Graph, fault: Fault, marks: readonly string[]): number | undefined {

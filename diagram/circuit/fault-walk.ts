@@ -1,4 +1,4 @@
-import { byDesignation, nameOf } from '../document/names';
+import { nameOf } from '../document/names';
 import type { Graph } from '../terminals/graph';
 import { reach, reaches } from '../terminals/reach';
 import type { Standing } from './assemble';
@@ -6,7 +6,9 @@ import type { Condition } from './conditions';
 import type { Evaluated, Evaluation } from './evaluate';
 import { caseVoltsOf, darkLoads, liveParts, loadVoltsOf, wireAmpsOf } from './fault-reading';
 import { insertFault, type Inserted } from './fault-insert';
-import { deviceLacks, urges, type Urge } from './fault-trips';
+import { withJoints, type DrawnJoint } from './fault-drawn';
+import { endure, firstOf, remaining, type Endured } from './fault-endurance';
+import { deviceLacks, urges } from './fault-trips';
 import { FaultError, type Fault, type FaultStep, type FaultWalk } from './fault-types';
 import { size, solveStanding, standingsOf, type Steady } from './steady';
 
@@ -77,7 +79,8 @@ export function walkFaults(
 ): FaultWalk {
   if (faults.length === 0) throw new FaultError('there is no fault to walk');
   const evaluated = conditionNamed(evaluation, condition);
-  return walkFrom(graph, startingStand(graph, evaluated, faults), faults);
+  const { standing, joints } = withJoints(graph, evaluated, startingStand(graph, evaluated, faults));
+  return walkFrom(graph, standing, faults, {}, joints);
 }
 
 /** What a walk shows as it goes: the home solved before the first fault, and after each step. */
@@ -88,52 +91,41 @@ export interface WalkWatch {
 
 /**
  * Walks faults from a home that stands in any way: its switches and devices where somebody has put them.
+ * @param joints short circuits and joints to earth that are in the drawing: they come before the first fault, as steps of their own
  * @throws FaultError as {@link walkFaults}
  */
-export function walkFrom(graph: Graph, start: Standing, faults: readonly Fault[], watch: WalkWatch = {}): FaultWalk {
+export function walkFrom(
+  graph: Graph,
+  start: Standing,
+  faults: readonly Fault[],
+  watch: WalkWatch = {},
+  joints: readonly DrawnJoint[] = [],
+): FaultWalk {
   for (const { at } of faults) if (!graph.parts.has(at)) throw new FaultError(`there is no part "${at}"`);
   requireSupply(graph, start.condition, faults);
-  let standing = start;
-  const before = solveStanding(graph, standing);
-  watch.before?.(before);
-  const watchesOvercurrent = before.assembly.inverters.every(({ mostA }) => mostA !== null);
+  const sound = solveStanding(graph, withoutJoints(start, joints));
+  watch.before?.(sound);
+  const watchesOvercurrent = sound.assembly.inverters.every(({ mostA }) => mostA !== null);
   const opened = new Set<string>();
   const steps: FaultStep[] = [];
-  let now = before;
+  let standing = start;
+  let now = joints.length > 0 ? solveStanding(graph, start) : sound;
   let t = 0;
   let earliest = 0;
-  let inserted!: Inserted;
-  let began = 0;
-  let touchVolts = 0;
-  let faultAmps = 0;
-  let by: string | null = null;
-  let clearedAt: number | null = null;
 
-  const reading = (steady: Steady) => readingAt(graph, inserted, before, steady);
-  const add = (step: FaultStep) => {
+  const add = (event: Pick<FaultStep, 'event'> & Partial<FaultStep>, inserted: Inserted) => {
+    const step: FaultStep = { t, earliest, orElse: [], ...event, ...readingAt(graph, inserted, sound, now) };
     steps.push(step);
     watch.step?.(step, now);
   };
-  for (const fault of faults) {
-    inserted = insertFault(graph, fault, standing, now);
-    standing = inserted.standing;
-    now = solveStanding(graph, standing);
-    began = t;
-    by = null;
-    clearedAt = null;
-    const name = nameOf(graph.document, graph.parts.get(fault.at)!);
-    const first = reading(now);
-    add({ t, earliest, event: WORDS[fault.kind](name, fault.wire), part: fault.at, orElse: [], ...first });
-    touchVolts = first.touchVolts;
-    faultAmps = first.faultAmps;
-    const endured = new Map<string, { early: number; late: number }>();
-    const openedBefore = opened.size;
+  /** Lets devices open until the home is still; says which made the fault dead, and when. */
+  const settle = (inserted: Inserted): { by: string; at: number } | null => {
+    const endured: Endured = new Map();
+    let cleared: { by: string; at: number } | null = null;
     for (;;) {
       const pending = urges(graph, now, opened, watchesOvercurrent).map((urge) => remaining(urge, endured));
-      const next = pending
-        .filter(({ lateS }) => Number.isFinite(lateS))
-        .sort((a, b) => a.lateS - b.lateS || rank(a.urge) - rank(b.urge) || byDesignation(a.urge.part, b.urge.part))[0];
-      if (!next) break;
+      const next = firstOf(pending);
+      if (!next) return cleared;
       for (const { urge } of pending) endure(urge, next.lateS, endured);
       const { part, amps, astrayAmps } = next.urge;
       const orElse = pending
@@ -144,38 +136,76 @@ export function walkFrom(graph: Graph, start: Standing, faults: readonly Fault[]
       opened.add(part.id);
       standing = withOpened(graph, standing, part.id);
       now = solveStanding(graph, standing);
-      add({
-        t,
-        earliest,
-        event: `${nameOf(graph.document, part)} opens`,
-        part: part.id,
-        amps,
-        astrayAmps,
-        orElse,
-        ...reading(now),
-      });
-      const still = inserted.conductor !== undefined && isDead(graph, standing, inserted.conductor);
-      const quiet = steps[steps.length - 1]!.faultAmps < NOTHING_A;
-      if (clearedAt === null && inserted.extra >= 0 && quiet && (still || fault.kind === 'neutral-to-earth')) {
-        clearedAt = t;
-        by = part.id;
-      }
+      add({ event: `${nameOf(graph.document, part)} opens`, part: part.id, amps, astrayAmps, orElse }, inserted);
+      if (!cleared && inserted.extra >= 0 && isOver(graph, inserted, standing, steps[steps.length - 1]!))
+        cleared = { by: part.id, at: t };
     }
-    if (opened.size === openedBefore) add({ ...steps[steps.length - 1]!, event: 'no device opens' });
+  };
+
+  let last: string | null = null;
+  let touchVolts = 0;
+  for (const joint of joints) {
+    const inserted = asInserted(joint, standing);
+    const before = opened.size;
+    add({ event: joint.event, part: joint.part }, inserted);
+    touchVolts = Math.max(touchVolts, steps[steps.length - 1]!.touchVolts);
+    settle(inserted);
+    if (opened.size === before) add({ event: 'no device opens', part: joint.part }, inserted);
+    last = [...opened].at(-1) ?? null;
   }
-  const last = steps[steps.length - 1]!;
+  let first: FaultStep | undefined;
+  let cleared: { by: string; at: number } | null = null;
+  let began = 0;
+  for (const fault of faults) {
+    const inserted = insertFault(graph, fault, standing, now);
+    standing = inserted.standing;
+    now = solveStanding(graph, standing);
+    began = t;
+    const name = nameOf(graph.document, graph.parts.get(fault.at)!);
+    add({ event: WORDS[fault.kind](name, fault.wire), part: fault.at }, inserted);
+    first = steps[steps.length - 1]!;
+    const before = opened.size;
+    cleared = settle(inserted);
+    // What a drawn short circuit has made dead already needs nothing more to open.
+    if (!cleared && last !== null && inserted.extra >= 0 && isOver(graph, inserted, standing, first))
+      cleared = { by: last, at: t };
+    if (opened.size === before) add({ event: 'no device opens', part: fault.at }, inserted);
+  }
+  const end = steps[steps.length - 1]!;
   return {
     condition: start.condition.name,
     steps,
-    touchVolts,
-    faultAmps,
-    cleared: clearedAt !== null,
-    clearedAfter: clearedAt === null ? null : clearedAt - began,
-    by,
-    live: last.live,
-    dark: last.dark,
+    touchVolts: Math.max(touchVolts, first?.touchVolts ?? 0),
+    faultAmps: first?.faultAmps ?? 0,
+    cleared: cleared !== null,
+    clearedAfter: cleared === null ? null : cleared.at - began,
+    by: cleared?.by ?? null,
+    live: end.live,
+    dark: end.dark,
     lacks: deviceLacks(graph),
   };
+}
+
+/** A drawn joint as if it had been put in: read at its part, no branch of its own. */
+const asInserted = ({ part, edge }: DrawnJoint, standing: Standing): Inserted => ({
+  fault: { kind: 'neutral-to-earth', at: part },
+  standing,
+  conductor: undefined,
+  extra: -1,
+  edge,
+});
+
+const withoutJoints = (start: Standing, joints: readonly DrawnJoint[]): Standing => {
+  if (joints.length === 0) return start;
+  const closed = start.closed.slice();
+  for (const { edge } of joints) closed[edge] = 0;
+  return { ...start, closed };
+};
+
+/** No current in the fault any more, and no line at it; a neutral on earth is over as soon as nothing flows. */
+function isOver(graph: Graph, { conductor, fault }: Inserted, standing: Standing, step: FaultStep): boolean {
+  const still = conductor !== undefined && isDead(graph, standing, conductor);
+  return step.faultAmps < NOTHING_A && (still || fault.kind === 'neutral-to-earth');
 }
 
 type Reading = Pick<
@@ -183,7 +213,7 @@ type Reading = Pick<
   'neutralVolts' | 'touchVolts' | 'faultAmps' | 'caseVolts' | 'loadVolts' | 'wireAmps' | 'live' | 'dark'
 >;
 
-function readingAt(graph: Graph, { fault, extra }: Inserted, before: Steady, steady: Steady): Reading {
+function readingAt(graph: Graph, { fault, extra, edge }: Inserted, before: Steady, steady: Steady): Reading {
   const caseVolts = caseVoltsOf(graph, steady);
   const branch = steady.assembly.firstExtra + extra;
   const { currentRe, currentIm } = steady.solution;
@@ -192,7 +222,7 @@ function readingAt(graph: Graph, { fault, extra }: Inserted, before: Steady, ste
   return {
     // A neutral that opens has no case of its own: the worst of the home's tells.
     touchVolts: fault.kind === 'neutral-open' || own === undefined ? worst : size(steady.volts(own)),
-    faultAmps: extra < 0 ? 0 : Math.hypot(currentRe[branch]!, currentIm[branch]!),
+    faultAmps: extra < 0 ? (edge === undefined ? 0 : size(steady.current(edge))) : Math.hypot(currentRe[branch]!, currentIm[branch]!),
     caseVolts,
     neutralVolts: steady.standing.condition.sources.reduce(
       (most, { neutral }) => Math.max(most, size(steady.volts(neutral))),
@@ -204,31 +234,3 @@ function readingAt(graph: Graph, { fault, extra }: Inserted, before: Steady, ste
     dark: darkLoads(graph, before, steady),
   };
 }
-
-interface Pending {
-  urge: Urge;
-  earlyS: number;
-  lateS: number;
-}
-
-type Endured = Map<string, { early: number; late: number }>;
-
-/** What is left of a device's times, when it has endured shares of them already. */
-function remaining(urge: Urge, endured: Endured): Pending {
-  const { early = 0, late = 0 } = endured.get(urge.part.id) ?? {};
-  return { urge, earlyS: urge.earliestS * Math.max(0, 1 - early), lateS: urge.latestS * Math.max(0, 1 - late) };
-}
-
-function endure(urge: Urge, seconds: number, endured: Endured): void {
-  const { early = 0, late = 0 } = endured.get(urge.part.id) ?? {};
-  endured.set(urge.part.id, {
-    early: Math.min(1, early + seconds / urge.earliestS),
-    late: Math.min(1, late + (Number.isFinite(urge.latestS) ? seconds / urge.latestS : 0)),
-  });
-}
-
-/** Of two devices that must open at the same time the smaller goes first; a residual one before an overcurrent one. */
-const rank = ({ part, astrayAmps }: Urge): number => {
-  if (part.kind === 'rcd' || (part.kind === 'rcbo' && astrayAmps > 0)) return 0;
-  return 'rating' in part && part.rating !== undefined ? part.rating : Infinity;
-};
