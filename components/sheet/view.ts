@@ -16,8 +16,13 @@ export type Mode =
   /** the parts in hand follow the arrows, in modules */
   | { kind: 'move'; dx: number; dy: number }
   /** a rating, designation or cable is written where it stands */
-  | { kind: 'edit'; part?: string; cable?: string; at: Point }
+  | { kind: 'edit'; part?: string; parts?: readonly string[]; cable?: string; at: Point }
+  /** a room is to be copied whole */
+  | { kind: 'room'; place: string }
+  /** a finger met two terminals: which one is meant; then what was under way goes on */
+  | { kind: 'choose'; ends: readonly End[]; at: Point; back: Mode }
   | { kind: 'find' }
+  | { kind: 'legend' }
   | { kind: 'commands' }
   | { kind: 'load'; loads: readonly string[] }
   | { kind: 'tidy'; way: TidyWay; preview: Installation; moved: number }
@@ -35,6 +40,17 @@ export interface Camera {
   onScreen(point: Point): Point;
 }
 
+/** The outline beside the canvas: kept while it is closed, so that it opens where it was left. */
+export interface OutlineState {
+  shown: boolean;
+  /** keys of the items that are unfolded */
+  open: ReadonlySet<string>;
+  /** key of the item in hand */
+  at: string;
+  /** the outline had the hands last: what is opened from it gives the focus back to it */
+  hand: boolean;
+}
+
 export interface ViewState {
   face: Face;
   /** the page of the connections face; null: the first */
@@ -49,6 +65,7 @@ export interface ViewState {
   camera: Camera | null;
   /** phones open for reading */
   editing: boolean;
+  outline: OutlineState;
   setMode: (mode: Mode) => void;
   set: (state: Partial<Omit<ViewState, 'setMode' | 'set'>>) => void;
 }
@@ -68,6 +85,7 @@ export const createView = (face: Face, place: string | null): View =>
     finding: null,
     camera: null,
     editing: true,
+    outline: { shown: false, open: new Set(['sheet']), at: 'sheet', hand: false },
     setMode: (mode) => set({ mode, ghost: null }),
     set,
   }));

@@ -1,6 +1,6 @@
 'use client';
 
-import { useCallback, useEffect, useMemo, useRef, useState, type MouseEvent as ReactMouseEvent } from 'react';
+import { useCallback, useMemo, useRef, type MouseEvent as ReactMouseEvent } from 'react';
 import {
   ConnectionMode,
   ReactFlow,
@@ -13,11 +13,11 @@ import {
 import 'reactflow/dist/style.css';
 import type { End } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
+import type { Hands } from '../hands';
 import type { MarkedNote } from '../margin/notes';
 import { useSheet } from '../use-drawing';
 import { useView, useViewStore } from '../view';
-import type { Hands } from '../hands';
-import { useDrag, endDrag } from './drag';
+import { endDrag, useDrag } from './drag';
 import { edgeOf, nodeOf, type PartNode, type RunEdge } from './flow-items';
 import { GhostLayer } from './ghost-layer';
 import { GroundLayer } from './ground-layer';
@@ -25,22 +25,29 @@ import { HandLayer, HeldLayer } from './hand-layer';
 import { MarksLayer } from './marks-layer';
 import { NotesLayer } from './notes-layer';
 import { PartNodeView } from './part-node';
-import { nearestEnd } from './pick';
+import { endsNear, meant, REACH, type Near } from './pick';
 import { RunEdgeView } from './run-edge';
 import { RunsLayer } from './runs-layer';
 import { PX, px } from './units';
+import { useCamera } from './use-camera';
+import { useCoarse } from './use-coarse';
+import { useHold } from './use-hold';
+import { useSight } from './use-sight';
 
 const nodeTypes = { part: PartNodeView };
 const edgeTypes = { run: RunEdgeView };
 const PAN_MOUSE = [1, 2];
 const MANY = ['Control', 'Meta', 'Shift'];
-const NO_ORIGIN = { hideAttribution: true };
+/** The authors' name stands in the legend and in the README, where it can be read. */
+const ORIGIN = { hideAttribution: true };
+/** zoom below which lettering and ticks would be a blur */
 const LETTERS_FROM = 0.42;
-/** below it the body size of the lettering would be under 11 px */
-const READABLE = 0.9;
-const LARGE = 400;
-/** px on the screen within which a terminal is taken: half of 44 */
-const REACH = 22;
+/** zoom below which no pointer hits a single run */
+const RUNS_FROM = 0.25;
+/** parts above which those out of sight are left undrawn */
+const LARGE = 300;
+const NO_PARTS: ReadonlySet<string> = new Set();
+const NO_EDGES: RunEdge[] = [];
 
 interface CanvasProps {
   scene: Scene;
@@ -51,102 +58,39 @@ interface CanvasProps {
   target: End | null;
 }
 
-/** True where the pointer is a finger: then one finger pans, and parts are moved by their own command. */
-function useCoarse(): boolean {
-  const [coarse, setCoarse] = useState(false);
-  useEffect(() => {
-    const query = matchMedia('(pointer: coarse)');
-    const look = () => setCoarse(query.matches);
-    look();
-    query.addEventListener('change', look);
-    return () => query.removeEventListener('change', look);
-  }, []);
-  return coarse;
-}
-
 /** The drawing as a canvas: a thin skin over a scene. It draws what it is given and says what was touched. */
 export function Canvas({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
   const { store } = hands;
   const view = useViewStore();
   const flow = useReactFlow<PartNode, RunEdge>();
+  const box = useRef<HTMLDivElement>(null);
   const selection = useSheet(store, (state) => state.selection);
   const rights = useSheet(store, (state) => state.rights);
   const editing = useView((state) => state.editing);
   const mayEdit = rights.edit && editing;
   const finding = useView((state) => state.finding);
-  const dragIds = useDrag((drag) => drag.ids);
-  const [moved, setMoved] = useState<ReadonlyMap<string, { x: number; y: number }>>(new Map());
+  const drag = useDrag();
   const coarse = useCoarse();
   const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
-  const box = useFlowStore((state) => `${state.width} ${state.height}`);
+  const runs = useFlowStore((state) => state.transform[2] >= RUNS_FROM);
   const held = useMemo(() => new Set(selection.parts), [selection.parts]);
   const wires = useMemo(() => new Set(selection.wires), [selection.wires]);
+  const sight = useSight();
+  useCamera(scene);
+  useHold(box, hands);
 
   const nodes = useMemo(
     () =>
       scene.parts.map((part) => {
         const node = nodeOf(part);
-        const position = moved.get(part.id);
         const selected = held.has(part.id);
-        return position || selected ? { ...node, ...(position && { position }), selected } : node;
+        if (drag.ids.has(part.id))
+          return { ...node, position: { x: px(part.x + drag.dx), y: px(part.y + drag.dy) }, selected };
+        return selected ? { ...node, selected } : node;
       }),
-    [scene.parts, moved, held],
+    [scene.parts, drag, held],
   );
-  const edges = useMemo(() => scene.runs.map(edgeOf), [scene.runs]);
-
-  const width = px(scene.width);
-  const height = px(scene.height);
-  const all = useCallback(() => {
-    const [w = 0, h = 0] = box.split(' ').map(Number);
-    if (w === 0 || h === 0) return;
-    // The whole sheet, but never so small that its lettering cannot be read: then the source and what lies about it.
-    const fit = Math.min((w - 16) / width, (h - 16) / height);
-    const zoom = Math.min(1.6, Math.max(READABLE, fit));
-    const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
-    const centre = source ? px(source.x + source.width / 2) * zoom : 0;
-    const spare = w - width * zoom;
-    const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
-    // The names of the pages stand along the upper edge of the connections face.
-    const top = scene.face === 'connections' ? 40 : 8;
-    const y = Math.max(top, (h - height * zoom) / 2);
-    void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
-  }, [box, flow, width, height, scene]);
-
-  const shown = useRef<string | null>(null);
-  const page = `${scene.face} ${scene.place ?? ''}`;
-  useEffect(() => {
-    if (shown.current === page || box.startsWith('0 ')) return;
-    shown.current = page;
-    all();
-  }, [page, box, all]);
-
-  useEffect(() => {
-    view.getState().set({
-      camera: {
-        all,
-        zoom: (by) => void flow.zoomTo(flow.getZoom() * by),
-        show(point, always = false) {
-          const { x, y, zoom } = flow.getViewport();
-          const [w = 0, h = 0] = box.split(' ').map(Number);
-          const at = { x: px(point.x) * zoom + x, y: px(point.y) * zoom + y };
-          if (!always && at.x > 60 && at.y > 60 && at.x < w - 60 && at.y < h - 60) return;
-          void flow.setCenter(px(point.x), px(point.y), { zoom: Math.max(zoom, 0.8) });
-        },
-        onScreen(point) {
-          const { x, y, zoom } = flow.getViewport();
-          return { x: px(point.x) * zoom + x, y: px(point.y) * zoom + y };
-        },
-      },
-    });
-  }, [view, flow, all, box]);
-
-  const sceneAt = useCallback(
-    (event: { clientX: number; clientY: number }) => {
-      const at = flow.screenToFlowPosition({ x: event.clientX, y: event.clientY });
-      return { x: at.x / PX, y: at.y / PX };
-    },
-    [flow],
-  );
+  const edges = useMemo(() => (runs ? scene.runs.map(edgeOf) : NO_EDGES), [scene.runs, runs]);
 
   const onNodesChange = useCallback(
     (changes: NodeChange<PartNode>[]) => {
@@ -154,20 +98,14 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
       const parts = new Set(now.parts);
       let selected = false;
       for (const change of changes) {
-        if (change.type === 'select') {
-          selected = true;
-          if (change.selected) parts.add(change.id);
-          else parts.delete(change.id);
-        } else if (change.type === 'position' && change.position && change.dragging) {
-          const { id, position } = change;
-          setMoved((before) => new Map(before).set(id, position));
-        }
+        if (change.type !== 'select') continue;
+        selected = true;
+        if (change.selected) parts.add(change.id);
+        else parts.delete(change.id);
       }
-      if (selected) {
-        const ids = [...parts];
-        const terminal = now.terminal && parts.has(now.terminal[0]) ? now.terminal : null;
-        store.getState().select({ parts: ids, terminal });
-      }
+      if (!selected) return;
+      const terminal = now.terminal && parts.has(now.terminal[0]) ? now.terminal : null;
+      store.getState().select({ parts: [...parts], terminal });
     },
     [store],
   );
@@ -207,30 +145,52 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
         node.position.x / PX - start.x,
         node.position.y / PX - start.y,
       );
-      setMoved(new Map());
       endDrag();
     },
     [hands],
   );
 
+  /** What lies under a pointer: two terminals where a finger cannot tell them apart. */
+  const near = useCallback(
+    (event: ReactMouseEvent, under?: string): Near[] => {
+      const spot = flow.screenToFlowPosition({ x: event.clientX, y: event.clientY });
+      const at = { x: spot.x / PX, y: spot.y / PX };
+      const scale = flow.getZoom() * PX;
+      if (coarse) return meant(scene, at, scale, under);
+      return endsNear(scene, at, under === undefined ? REACH / scale : Infinity, under).slice(0, 1);
+    },
+    [flow, scene, coarse],
+  );
+
+  const tap = useCallback(
+    ([first, second]: Near[], id: string) => {
+      const { mode, setMode } = view.getState();
+      if (first && second) {
+        const ends = [first, second].flatMap((each) => hands.oneOf(each.ends) ?? []);
+        setMode({ kind: 'choose', ends, at: first.at, back: mode.kind === 'choose' ? mode.back : mode });
+      } else {
+        const end = first ? hands.oneOf(first.ends) : null;
+        hands.tap(end, end?.[0] ?? id, coarse);
+      }
+    },
+    [hands, view, coarse],
+  );
+
   const onNodeClick = useCallback(
     (event: ReactMouseEvent, node: PartNode) => {
       if (event.ctrlKey || event.metaKey || event.shiftKey) return;
-      const at = sceneAt(event);
-      const end = nearestEnd(scene, at, Infinity, node.id);
-      hands.tap(end ?? null, node.id, coarse);
+      tap(near(event, node.id), node.id);
     },
-    [hands, scene, sceneAt, coarse],
+    [near, tap],
   );
 
   const onPaneClick = useCallback(
     (event: ReactMouseEvent) => {
-      const zoom = flow.getZoom();
-      const end = nearestEnd(scene, sceneAt(event), REACH / PX / zoom);
-      if (end) hands.tap(end, end[0], coarse);
+      const found = near(event);
+      if (found[0]) tap(found, found[0].ends[0]![0]);
       else hands.letGo();
     },
-    [flow, hands, scene, sceneAt, coarse],
+    [hands, near, tap],
   );
 
   const onNodeDoubleClick = useCallback((_: unknown, node: PartNode) => hands.editPart(node.id), [hands]);
@@ -244,52 +204,57 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
   }, [flow]);
 
   return (
-    <ReactFlow<PartNode, RunEdge>
-      nodes={nodes}
-      edges={edges}
-      nodeTypes={nodeTypes}
-      edgeTypes={edgeTypes}
-      onNodesChange={onNodesChange}
-      onEdgesChange={onEdgesChange}
-      onNodeDrag={onNodeDrag}
-      onNodeDragStop={onNodeDragStop}
-      onNodeClick={onNodeClick}
-      onNodeDoubleClick={onNodeDoubleClick}
-      onEdgeDoubleClick={onEdgeDoubleClick}
-      onPaneClick={onPaneClick}
-      onMoveEnd={onMoveEnd}
-      connectionMode={ConnectionMode.Loose}
-      nodesConnectable={false}
-      nodesDraggable={mayEdit && !coarse}
-      nodesFocusable={false}
-      edgesFocusable={false}
-      disableKeyboardA11y
-      deleteKeyCode={null}
-      selectionKeyCode={null}
-      multiSelectionKeyCode={MANY}
-      selectionOnDrag={!coarse}
-      selectionMode={SelectionMode.Partial}
-      panOnDrag={coarse ? true : PAN_MOUSE}
-      zoomOnDoubleClick={false}
-      nodeDragThreshold={coarse ? 10 : 4}
-      elevateNodesOnSelect={false}
-      elevateEdgesOnSelect={false}
-      zIndexMode="manual"
-      onlyRenderVisibleElements={scene.parts.length > LARGE && letters}
-      minZoom={0.12}
-      maxZoom={4}
-      proOptions={NO_ORIGIN}
-      className="sheet-flow"
-    >
-      <GroundLayer scene={scene} names={letters} />
-      <HeldLayer scene={scene} parts={dragIds.size > 0 ? EMPTY : held} />
-      <RunsLayer scene={scene} hand={wires} />
-      <MarksLayer scene={scene} letters={letters && dragIds.size === 0} />
-      <NotesLayer scene={scene} notes={notes} inHand={finding} />
-      {ghost && <GhostLayer scene={scene} ghost={ghost} />}
-      <HandLayer scene={scene} terminal={selection.terminal} candidates={candidates} target={target} />
-    </ReactFlow>
+    <div ref={box} className="h-full w-full">
+      <ReactFlow<PartNode, RunEdge>
+        nodes={nodes}
+        edges={edges}
+        nodeTypes={nodeTypes}
+        edgeTypes={edgeTypes}
+        onNodesChange={onNodesChange}
+        onEdgesChange={onEdgesChange}
+        onNodeDrag={onNodeDrag}
+        onNodeDragStop={onNodeDragStop}
+        onNodeClick={onNodeClick}
+        onNodeDoubleClick={onNodeDoubleClick}
+        onEdgeDoubleClick={onEdgeDoubleClick}
+        onPaneClick={onPaneClick}
+        onMoveEnd={onMoveEnd}
+        connectionMode={ConnectionMode.Loose}
+        nodesConnectable={false}
+        nodesDraggable={mayEdit && !coarse}
+        nodesFocusable={false}
+        edgesFocusable={false}
+        disableKeyboardA11y
+        deleteKeyCode={null}
+        selectionKeyCode={null}
+        multiSelectionKeyCode={MANY}
+        selectionOnDrag={!coarse}
+        selectionMode={SelectionMode.Partial}
+        panOnDrag={coarse ? true : PAN_MOUSE}
+        zoomOnDoubleClick={false}
+        nodeDragThreshold={4}
+        elevateNodesOnSelect={false}
+        elevateEdgesOnSelect={false}
+        zIndexMode="manual"
+        onlyRenderVisibleElements={scene.parts.length > LARGE && letters}
+        minZoom={0.12}
+        maxZoom={4}
+        proOptions={ORIGIN}
+        className="sheet-flow"
+      >
+        <GroundLayer scene={scene} names={letters} />
+        <HeldLayer scene={scene} parts={drag.ids.size > 0 ? NO_PARTS : held} />
+        <RunsLayer scene={scene} hand={wires} />
+        <MarksLayer scene={scene} letters={letters} sight={sight} />
+        <NotesLayer scene={scene} notes={notes} inHand={finding} />
+        {ghost && <GhostLayer scene={scene} ghost={ghost} />}
+        <HandLayer
+          scene={scene}
+          terminal={drag.ids.size > 0 ? null : selection.terminal}
+          candidates={candidates}
+          target={target}
+        />
+      </ReactFlow>
+    </div>
   );
 }
-
-const EMPTY: ReadonlySet<string> = new Set();

@@ -10,3 +10,7 @@ interface Drag {
 export const useDrag = create<Drag>(() => ({ ids: new Set(), dx: 0, dy: 0 }));
 
 export const endDrag = (): void => useDrag.setState({ ids: new Set(), dx: 0, dy: 0 });
+
+/** How far a part is dragged now, as a transform; undefined while it is not. One subscription a part. */
+export const useShift = (id: string): string | undefined =>
+  useDrag(({ ids, dx, dy }) => (ids.has(id) ? `translate(${dx} ${dy})` : undefined));

@@ -5,6 +5,9 @@ import { px } from './units';
 export type PartNode = Node<{ part: ScenePart }, 'part'>;
 export type RunEdge = Edge<{ run: SceneRun }, 'run'>;
 
+/** A pointer takes a part a little outside its strokes as well. */
+const REACH = 'before:absolute before:-inset-[5px]';
+
 /** Made once per object of the scene: what did not change is the same node again. */
 const nodes = new WeakMap<ScenePart, PartNode>();
 const edges = new WeakMap<SceneRun, RunEdge>();
@@ -23,6 +26,7 @@ export function nodeOf(part: ScenePart): PartNode {
     position: { x: px(part.x), y: px(part.y) },
     ...size,
     measured: size,
+    className: REACH,
     handles: [{ type: 'source', position: Position.Top, x: 0, y: 0, width: 1, height: 1 }],
     data: { part },
   };

@@ -1,11 +1,13 @@
 import { memo } from 'react';
-import type { Scene, SceneRing, SceneRun } from '@/diagram/layout/scene';
+import type { Scene, ScenePart, SceneRing, SceneRun } from '@/diagram/layout/scene';
 import { symbolById } from '@/diagram/symbols';
 import { turnedPoint } from '@/diagram/symbols/turn';
 import { STROKE } from '@/diagram/symbols/types';
+import { useShift } from './drag';
 import { Layer } from './layer';
 import { Lettering, Letterings } from './lettering';
 import { INK } from './units';
+import { inSight, type Sight } from './use-sight';
 
 const ink = { stroke: 'var(--ink)', strokeWidth: STROKE.normal * INK, strokeLinecap: 'round' } as const;
 
@@ -27,53 +29,67 @@ const Ticks = memo(function Ticks({ run }: { run: SceneRun }) {
   );
 });
 
-const Ring = memo(function Ring({ ring }: { ring: SceneRing }) {
+const Ring = memo(function Ring({ ring, letters }: { ring: SceneRing; letters: boolean }) {
   return (
     <g>
       <circle cx={ring.x} cy={ring.y} r={ring.radius} fill="var(--paper)" {...ink} />
-      <Lettering text={{ x: ring.x, y: ring.y + 125, text: ring.text, size: 250, bold: true, anchor: 'middle' }} />
+      {letters && (
+        <Lettering text={{ x: ring.x, y: ring.y + 125, text: ring.text, size: 250, bold: true, anchor: 'middle' }} />
+      )}
     </g>
   );
 });
 
-/** Ticks, joints, way numbers, terminals of the connections face, and all lettering. */
-export const MarksLayer = memo(function MarksLayer({ scene, letters }: { scene: Scene; letters: boolean }) {
+/** Lettering and terminals of one part; they go along while it is dragged. */
+const PartMarks = memo(function PartMarks({ part, terminals, letters }: { part: ScenePart; terminals: boolean; letters: boolean }) {
+  const shift = useShift(part.id);
+  const symbol = symbolById(part.symbol, part.width);
+  return (
+    <g transform={shift}>
+      {terminals &&
+        part.terminals.map(({ mark, x, y }) => (
+          <circle key={mark} cx={x} cy={y} r={150} fill="var(--paper)" {...ink} />
+        ))}
+      {letters &&
+        symbol.texts?.map((text) => {
+          const at = turnedPoint(text.x, text.y, symbol, part.turn);
+          return <Lettering key={text.text} text={{ ...text, x: part.x + at.x, y: part.y + at.y }} />;
+        })}
+      {letters && <Letterings texts={part.texts} />}
+    </g>
+  );
+});
+
+interface MarksProps {
+  scene: Scene;
+  /** lettering is large enough to be read */
+  letters: boolean;
+  sight: Sight;
+}
+
+/** Ticks, joints, way numbers, terminals of the connections face, and all lettering that can be read. */
+export const MarksLayer = memo(function MarksLayer({ scene, letters, sight }: MarksProps) {
+  const terminals = scene.face === 'connections';
   return (
     <Layer scene={scene} level={2} name="marks">
-      {scene.runs.map((run) => (
-        <Ticks key={run.id} run={run} />
-      ))}
       {scene.dots.map((dot) => (
         <circle key={`${dot.x} ${dot.y}`} cx={dot.x} cy={dot.y} r={100} fill="var(--ink)" />
       ))}
-      {scene.face === 'connections' &&
-        scene.parts.map((part) => (
-          <g key={part.id}>
-            {part.terminals.map((terminal) => (
-              <circle key={terminal.mark} cx={terminal.x} cy={terminal.y} r={150} fill="var(--paper)" {...ink} />
-            ))}
-          </g>
-        ))}
+      {(terminals || letters) &&
+        scene.parts
+          .filter((part) => inSight(sight, part.x, part.width))
+          .map((part) => <PartMarks key={part.id} part={part} terminals={terminals} letters={letters} />)}
       {scene.rings.map((ring) => (
-        <Ring key={ring.part} ring={ring} />
+        <Ring key={ring.part} ring={ring} letters={letters} />
       ))}
       {letters && (
         <>
-          {scene.parts.map((part) => {
-            const symbol = symbolById(part.symbol, part.width);
-            return (symbol.texts ?? []).map((text) => {
-              const at = turnedPoint(text.x, text.y, symbol, part.turn);
-              return (
-                <Lettering key={`${part.id} ${text.text}`} text={{ ...text, x: part.x + at.x, y: part.y + at.y }} />
-              );
-            });
-          })}
-          {scene.parts.map((part) => (
-            <Letterings key={part.id} texts={part.texts} />
-          ))}
-          {scene.runs.map((run) => (
-            <Letterings key={run.id} texts={run.texts} />
-          ))}
+          {scene.runs.map(
+            (run) => run.ticks && inSight(sight, run.ticks.at.x) && <Ticks key={run.id} run={run} />,
+          )}
+          {scene.runs.map(
+            (run) => run.texts[0] && inSight(sight, run.texts[0].x) && <Letterings key={run.id} texts={run.texts} />,
+          )}
           <Letterings texts={scene.texts} />
         </>
       )}

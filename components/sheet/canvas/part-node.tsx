@@ -1,10 +1,11 @@
 import { memo } from 'react';
-import { Handle, Position, type NodeProps } from 'reactflow';
+import type { NodeProps } from 'reactflow';
 import type { ScenePart } from '@/diagram/layout/scene';
 import { symbolById } from '@/diagram/symbols';
 import { turnTransform } from '@/diagram/symbols/turn';
 import { STROKE, type Stroke } from '@/diagram/symbols/types';
 import type { PartNode } from './flow-items';
+import { joinedStrokes } from './symbol-strokes';
 import { INK } from './units';
 
 const FILL = { ink: 'currentColor', paper: 'var(--paper)', none: 'none' } as const;
@@ -18,11 +19,8 @@ function Line({ stroke }: { stroke: Stroke }) {
     <path
       d={stroke.d}
       fill={FILL[stroke.fill ?? 'none']}
-      stroke="currentColor"
       strokeWidth={STROKE[stroke.weight ?? 'normal'] * INK}
       strokeDasharray={stroke.dash && DASH[stroke.dash]}
-      strokeLinecap="round"
-      strokeLinejoin="round"
     />
   );
 }
@@ -31,8 +29,14 @@ function Line({ stroke }: { stroke: Stroke }) {
 export function PartPicture({ part, ink = inkOf(part) }: { part: ScenePart; ink?: string }) {
   const symbol = symbolById(part.symbol, part.turn % 2 === 1 ? part.height : part.width);
   return (
-    <g transform={turnTransform(0, 0, symbol, part.turn)} style={{ color: ink }}>
-      {symbol.strokes.map((stroke, i) => (
+    <g
+      transform={turnTransform(0, 0, symbol, part.turn) || undefined}
+      color={ink}
+      stroke="currentColor"
+      strokeLinecap="round"
+      strokeLinejoin="round"
+    >
+      {joinedStrokes(symbol).map((stroke, i) => (
         <Line key={i} stroke={stroke} />
       ))}
     </g>
@@ -42,17 +46,13 @@ export function PartPicture({ part, ink = inkOf(part) }: { part: ScenePart; ink?
 /** One part on the canvas. Selection, terminals and lettering are layers of their own. */
 export const PartNodeView = memo(function PartNodeView({ data: { part } }: NodeProps<PartNode>) {
   return (
-    <>
-      <svg
-        data-part={part.id}
-        viewBox={`0 0 ${part.width} ${part.height}`}
-        className="block h-full w-full overflow-visible"
-        aria-hidden="true"
-      >
-        <rect x={-125} y={-125} width={part.width + 250} height={part.height + 250} fill="transparent" />
-        <PartPicture part={part} />
-      </svg>
-      <Handle type="source" position={Position.Top} isConnectable={false} className="invisible" />
-    </>
+    <svg
+      data-part={part.id}
+      viewBox={`0 0 ${part.width} ${part.height}`}
+      className="block h-full w-full overflow-visible"
+      aria-hidden="true"
+    >
+      <PartPicture part={part} />
+    </svg>
   );
 });

@@ -15,6 +15,8 @@ interface FootProps {
   drawing: OpenDrawing;
   context: ActionContext;
   scene: Scene;
+  /** the scene is worked out */
+  drawn: boolean;
   notes: readonly MarkedNote[];
 }
 
@@ -51,7 +53,7 @@ function hint(mode: Mode, held: string, mayEdit: boolean, mayDraw: boolean, crow
   }
 }
 
-export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
+export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) {
   const view = useViewStore();
   const mode = useView((state) => state.mode);
   const editing = useView((state) => state.editing);
@@ -63,7 +65,10 @@ export function SheetFoot({ drawing, context, scene, notes }: FootProps) {
   const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
   const { undo } = drawing.store.getState();
   const crowded = useMemo(() => roomsOverlap(scene), [scene]);
-  const said = hint(mode, handWords(document, selection), mayEdit, mayDraw, crowded);
+  const said =
+    drawn || document.parts.length === 0
+      ? hint(mode, handWords(document, selection), mayEdit, mayDraw, crowded)
+      : `Drawing ${document.parts.length} parts`;
   return (
     <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
       {scene.face === 'overview' ? <Strip scene={scene} notes={notes} /> : <CoreLegend practice={document.practice} />}

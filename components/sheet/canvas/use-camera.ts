@@ -1,0 +1,70 @@
+'use client';
+
+import { useCallback, useEffect, useRef } from 'react';
+import { useReactFlow, useStore } from 'reactflow';
+import type { Scene } from '@/diagram/layout/scene';
+import { useViewStore } from '../view';
+import { px } from './units';
+
+/** below it the body size of the lettering would be under 11 px */
+const READABLE = 0.9;
+/** the largest that a small drawing is shown */
+const LARGEST = 1.6;
+/** px kept free at the edges of the canvas */
+const EDGE = 8;
+/** px: the names of the pages stand along the upper edge of the connections face */
+const PAGES = 40;
+
+/**
+ * Where the canvas looks, and the camera by which the rest of the sheet moves it. A sheet opens whole; one that would then
+ * be too small to read opens at the size at which it can be read, on the source and what lies about it.
+ */
+export function useCamera(scene: Scene): void {
+  const view = useViewStore();
+  const flow = useReactFlow();
+  const box = useStore((state) => `${state.width} ${state.height}`);
+  const width = px(scene.width);
+  const height = px(scene.height);
+
+  const all = useCallback(() => {
+    const [w = 0, h = 0] = box.split(' ').map(Number);
+    if (w === 0 || h === 0) return;
+    const top = scene.face === 'connections' ? PAGES : EDGE;
+    const fit = Math.min((w - 2 * EDGE) / width, (h - top - EDGE) / height);
+    const zoom = Math.min(LARGEST, Math.max(READABLE, fit));
+    const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
+    const centre = source ? px(source.x + source.width / 2) * zoom : 0;
+    const spare = w - width * zoom;
+    const x = spare >= 0 ? spare / 2 : Math.min(EDGE, Math.max(spare - EDGE, w / 2 - centre));
+    const y = Math.max(top, (h - height * zoom) / 2);
+    void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
+  }, [box, flow, width, height, scene.face, scene.parts]);
+
+  const shown = useRef<string | null>(null);
+  const page = `${scene.face} ${scene.place ?? ''}`;
+  useEffect(() => {
+    if (shown.current === page || box.startsWith('0 ') || scene.parts.length === 0) return;
+    shown.current = page;
+    all();
+  }, [page, box, all, scene.parts.length]);
+
+  useEffect(() => {
+    view.getState().set({
+      camera: {
+        all,
+        zoom: (by) => void flow.zoomTo(flow.getZoom() * by),
+        show(point, always = false) {
+          const { x, y, zoom } = flow.getViewport();
+          const [w = 0, h = 0] = box.split(' ').map(Number);
+          const at = { x: px(point.x) * zoom + x, y: px(point.y) * zoom + y };
+          if (!always && at.x > 60 && at.y > 60 && at.x < w - 60 && at.y < h - 60) return;
+          void flow.setCenter(px(point.x), px(point.y), { zoom: Math.max(zoom, 0.8) });
+        },
+        onScreen(point) {
+          const { x, y, zoom } = flow.getViewport();
+          return { x: px(point.x) * zoom + x, y: px(point.y) * zoom + y };
+        },
+      },
+    });
+  }, [view, flow, all, box]);
+}
