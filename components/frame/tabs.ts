@@ -9,6 +9,7 @@ export const jobTabs = (jobId: string): Tab[] => [
   { id: 'survey', number: 1, label: 'Survey', href: `/jobs/${jobId}/survey` },
   { id: 'overview', number: 2, label: 'Overview', href: `/jobs/${jobId}/overview` },
   { id: 'connections', number: 3, label: 'Connections', href: `/jobs/${jobId}/connections` },
+  { id: 'schedules', number: 4, label: 'Schedules', href: `/jobs/${jobId}/schedules` },
 ];
 
 /** The team's own sheets, shown when no job is open: only those that this person may turn to. */

@@ -32,6 +32,15 @@ const pictures: Record<string, ReactNode> = {
       <path d="M14 50H96" strokeDasharray="5 2" />
     </g>
   ),
+  schedules: (
+    <g className="stroke-ink" strokeWidth="1">
+      <path d="M14 10V40" strokeWidth="2" />
+      {[14, 21, 28, 35].map((y) => (
+        <path key={y} d={`M14 ${y}H26M32 ${y}H100`} />
+      ))}
+      <path d="M16 46V62H52M20 50C24 58 34 60 50 61" />
+    </g>
+  ),
 };
 
 function stateOf(job: JobRow, sheet: string): { words: string; red: boolean } {

@@ -1,0 +1,8 @@
+import { HEIGHT } from './look';
+
+/** While the drawing of pictures is fetched: the room it will take, and words where that lasts. */
+export const PlotWaits = () => (
+  <p className="flex items-end text-grey" style={{ height: HEIGHT + 30 }}>
+    Drawing the curve
+  </p>
+);

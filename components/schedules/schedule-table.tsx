@@ -1,0 +1,114 @@
+'use client';
+
+import { Fragment, useCallback, useMemo, useState } from 'react';
+import type { Installation } from '@/diagram/document/schema';
+import type { Finding } from '@/diagram/rules/types';
+import { readerOf } from '@/diagram/schedules/edit';
+import type { Column, Table } from '@/diagram/schedules/types';
+import type { Desk } from './desk';
+import { ColumnPages } from './column-pages';
+import { ScheduleRow } from './schedule-row';
+import { EDGE_WIDTH } from './way-edge';
+
+interface ScheduleTableProps {
+  desk: Desk;
+  table: Table;
+  document: Installation;
+  findings: readonly Finding[];
+  mayEdit: boolean;
+  /** the table has a heading of its own above it */
+  titled?: boolean;
+}
+
+const head = 'border-b-2 border-ink px-1 pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
+
+/** A schedule as one table, typed where it is underlined; on a narrow sheet its columns are turned to page by page. */
+export function ScheduleTable({ desk, table, document, findings, mayEdit, titled }: ScheduleTableProps) {
+  const columns = useMemo(() => table.columns.filter(({ fileOnly }) => !fileOnly), [table.columns]);
+  const pages = useMemo(() => [...new Set(columns.map(({ page }) => page))].filter((page) => page !== 'stays'), [columns]);
+  const [wanted, setPage] = useState(pages[0] ?? '');
+  const page = pages.includes(wanted) ? wanted : (pages[0] ?? '');
+  const shownOn = useCallback(
+    (column: Column) => (column.page === 'stays' || column.page === page ? '' : 'max-lap:hidden'),
+    [page],
+  );
+  const read = useMemo(() => readerOf(document), [document]);
+  const parts = useMemo(() => new Map(document.parts.map((part) => [part.id, part])), [document]);
+  const isWays = table.id === 'ways';
+  if (table.rows.length === 0) return <p className="px-2 py-3 text-grey">{table.empty}</p>;
+  return (
+    <>
+      <ColumnPages pages={pages} page={page} onTurn={setPage} of={table.title} />
+      <table aria-label={table.title} className="w-full border-collapse max-lap:table-fixed">
+        <colgroup>
+          <col style={{ width: isWays ? EDGE_WIDTH : 36 }} className={isWays ? 'max-sm:w-9!' : ''} />
+          {columns.map((column) => (
+            <col key={column.id} className={shownOn(column)} style={{ width: `calc(${column.width}ch + 8px)` }} />
+          ))}
+          <col style={{ width: '9ch' }} />
+        </colgroup>
+        <thead>
+          <tr>
+            <th scope="col" className={`pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey ${isWays ? '' : 'border-b-2 border-ink'}`}>
+              {isWays ? (
+                <>
+                  LINE
+                  <br />
+                  BAR
+                </>
+              ) : (
+                <span className="sr-only">Row</span>
+              )}
+            </th>
+            {columns.map((column) => (
+              <th key={column.id} scope="col" className={`${head} ${column.right ? 'text-right' : ''} ${shownOn(column)}`}>
+                {column.name || <span className="sr-only">{column.spoken}</span>}
+                {column.unit && (
+                  <>
+                    <br />
+                    {column.unit}
+                  </>
+                )}
+              </th>
+            ))}
+            <th scope="col" className={head}>
+              Finding
+            </th>
+          </tr>
+        </thead>
+        <tbody>
+          {table.rows.map((row, i) => {
+            const first = table.rows[i - 1]?.group !== row.group;
+            const last = table.rows[i + 1]?.group !== row.group;
+            return (
+              <Fragment key={row.id}>
+                {isWays && first && i > 0 && (
+                  <tr aria-hidden="true">
+                    <td className="h-5 p-0" />
+                    <td colSpan={columns.length + 1} className="h-5 border-b-2 border-ink p-0" />
+                  </tr>
+                )}
+                <ScheduleRow
+                  desk={desk}
+                  table={table}
+                  row={row}
+                  index={i}
+                  columns={columns}
+                  shownOn={shownOn}
+                  part={row.part === null ? undefined : parts.get(row.part)}
+                  first={first}
+                  last={last}
+                  document={document}
+                  read={read}
+                  findings={findings}
+                  mayEdit={mayEdit}
+                />
+              </Fragment>
+            );
+          })}
+        </tbody>
+      </table>
+      {titled && <div className="h-6" />}
+    </>
+  );
+}

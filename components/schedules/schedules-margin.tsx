@@ -1,0 +1,136 @@
+'use client';
+
+import { useStore } from 'zustand';
+import { ConflictPanel } from '@/components/sheet/conflict-panel';
+import { keyOf } from '@/components/sheet/margin/notes';
+import { keepAsFile } from '@/components/sheet/save-state-view';
+import { useSheet, type Me, type OpenDrawing } from '@/components/sheet/use-drawing';
+import { Button, WordButton } from '@/components/ui/button';
+import { Note } from '@/components/ui/note';
+import { focusCell } from '@/components/grid/focus';
+import type { Installation } from '@/diagram/document/schema';
+import { findingsOf } from '@/diagram/schedules/row-findings';
+import { TABLES_OF } from '@/diagram/schedules/types';
+import type { Worked } from '@/diagram/schedules/work-out';
+import { HEAD, rowKey, type Desk } from './desk';
+import { RowNotes } from './row-notes';
+import type { WorkedState } from './use-worked';
+
+interface SchedulesMarginProps {
+  desk: Desk;
+  drawing: OpenDrawing;
+  state: WorkedState;
+  document: Installation;
+  me: Me;
+  jobId: string;
+  mayEdit: boolean;
+}
+
+const count = (n: number, one: string): string => `${n} ${one}${n === 1 ? '' : 's'}`;
+
+/** What the last change did to the findings: how many are new, how many are gone. */
+function SinceChange({ desk, worked }: { desk: Desk; worked: Worked }) {
+  const since = useStore(desk, (state) => state.since);
+  if (!since) return null;
+  const now = new Set(worked.findings.map(keyOf));
+  const fresh = [...now].filter((key) => !since.before.has(key)).length;
+  const gone = [...since.before].filter((key) => !now.has(key)).length;
+  const words = [fresh > 0 && `${count(fresh, 'new finding')}`, gone > 0 && `${count(gone, 'finding')} gone`].filter(Boolean).join(', ');
+  return (
+    <p role="status">
+      <b>{words || 'No finding came or went'}</b> <span className="text-grey">since {since.label}</span>
+    </p>
+  );
+}
+
+/** Texts that could not be read, each with its cell. */
+function RefusedNotes({ desk }: { desk: Desk }) {
+  const refused = useStore(desk, (state) => state.refused);
+  return [...refused.values()].map((entry) => {
+    const { table, row, column, text, message } = entry;
+    const name = rowKey(table, row);
+    return (
+      <div key={`${name}:${column}`} id={`refused-${name}-${column}`.replace(/[^\w-]/g, '-')}>
+        <Note
+          tone="finding"
+          heading={message}
+          actions={
+            <>
+              <Button onClick={() => desk.getState().takeBack(entry)}>Take it back</Button>
+              <Button onClick={() => focusCell(name, column)}>Go to the cell</Button>
+            </>
+          }
+        >
+          &ldquo;{text}&rdquo; stays in its cell, the drawing keeps the value before.
+        </Note>
+      </div>
+    );
+  });
+}
+
+/** The other rows of this schedule with something grave, to walk to. */
+function OtherRows({ desk, worked }: { desk: Desk; worked: Worked }) {
+  const schedule = useStore(desk, (state) => state.schedule);
+  const hand = useStore(desk, (state) => state.hand);
+  const rows = TABLES_OF[schedule].flatMap((id) =>
+    worked.tables[id].rows.flatMap((row) => {
+      const grave = findingsOf(row, worked.findings).filter(({ severity }) => severity !== 'advice');
+      return grave.length > 0 && !(hand?.table === id && hand.row === row.id) ? [{ id, row, grave }] : [];
+    }),
+  );
+  if (rows.length === 0) return null;
+  return (
+    <section className="border-t border-rule pt-4">
+      <h2 className="text-head font-bold">Other rows not in order</h2>
+      <ul className="mt-1 flex flex-col gap-1">
+        {rows.slice(0, 12).map(({ id, row, grave }) => (
+          <li key={`${id} ${row.id}`}>
+            <WordButton onClick={() => focusCell(rowKey(id, row.id), HEAD)}>{row.name}</WordButton>{' '}
+            <span className="text-red">{grave[0]!.heading}</span>
+          </li>
+        ))}
+      </ul>
+      {rows.length > 12 && <p className="text-grey">{rows.length - 12} more; n goes through them</p>}
+    </section>
+  );
+}
+
+/** What is to be answered on the schedules: what could not be read, the row in hand, the other rows. */
+export function SchedulesMargin({ desk, drawing, state, document, me, jobId, mayEdit }: SchedulesMarginProps) {
+  const news = useSheet(drawing.store, (current) => current.news);
+  const { worked, failure, again } = state;
+  if (failure)
+    return (
+      <Note
+        tone="finding"
+        heading="This sheet could not be read. Nothing is lost."
+        actions={
+          <>
+            <Button onClick={again}>Try again</Button>
+            <Button onClick={() => keepAsFile(drawing)}>Get the file</Button>
+          </>
+        }
+      >
+        {failure}
+      </Note>
+    );
+  if (!worked) return <p className="text-grey">Being worked out.</p>;
+  return (
+    <div className="flex flex-col gap-5" aria-busy={state.stale}>
+      <ConflictPanel drawing={drawing} me={me} />
+      {news && (
+        <p className="border-l-2 border-blue pl-3 text-blue">
+          {news.person.initials} a moment ago: {news.label}{' '}
+          <WordButton onClick={() => drawing.store.setState({ news: null })}>Seen</WordButton>
+        </p>
+      )}
+      <h2 className="text-head font-bold">
+        {worked.findings.length === 0 ? 'No finding' : count(worked.findings.length, 'finding')}
+      </h2>
+      <SinceChange desk={desk} worked={worked} />
+      <RefusedNotes desk={desk} />
+      <RowNotes desk={desk} worked={worked} document={document} jobId={jobId} mayEdit={mayEdit} />
+      <OtherRows desk={desk} worked={worked} />
+    </div>
+  );
+}
