@@ -39,6 +39,8 @@ export interface SheetFrameProps {
   /** a strip over the whole width below the head: offline, reading only */
   strip?: ReactNode;
   keys?: readonly KeyHelp[];
+  /** the first stop of the keyboard: a shorter way into the sheet */
+  skip?: { label: string; go(): void };
   /** the sheet has a field marked `data-find`, which `/` goes to */
   find?: boolean;
   /** screen: the sheet never grows beyond the window, as a canvas wants it; page: it may, on a narrow screen */
@@ -46,7 +48,7 @@ export interface SheetFrameProps {
   children: ReactNode;
 }
 
-const JOB_SHEET = /^\/jobs\/([^/]+)\/(?:survey|overview|connections)$/;
+const JOB_SHEET = /^\/jobs\/([^/]+)\/(?:survey|overview|connections|schedules)$/;
 
 const find = () => document.querySelector<HTMLElement>('[data-find]')?.focus();
 
@@ -80,6 +82,15 @@ export function SheetFrame(props: SheetFrameProps) {
   const height = fit === 'screen' ? 'h-dvh' : 'min-h-dvh lap:h-dvh';
   return (
     <div className={`flex flex-col p-1 sm:px-2 sm:pb-2 ${height}`}>
+      {props.skip && (
+        <button
+          type="button"
+          className="sr-only z-40 border-2 border-ink bg-paper px-3 py-2 focus:not-sr-only focus:absolute focus:top-1 focus:left-1"
+          onClick={props.skip.go}
+        >
+          {props.skip.label}
+        </button>
+      )}
       <header className="flex min-h-12 items-center gap-2 max-lap:pr-1 lap:h-8 lap:min-h-0 lap:items-end lap:px-4">
         <SheetPicker tabs={tabs} current={current} sheet={sheet} />
         <SheetTabs tabs={tabs} current={current} />

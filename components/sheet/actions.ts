@@ -1,5 +1,7 @@
 import type { KeyHelp } from '@/components/frame/types';
 import type { Hands } from './hands';
+import { align, distribute, unpin } from './placing';
+import { takeAll, takeKind, takeRoom } from './taking';
 import type { TidyWay } from './tidy/use-tidy';
 
 /** Everything that can be done on the sheet: by its key, and by its words in the command list. */
@@ -21,6 +23,10 @@ export interface ActionContext {
   nextNote: (step: 1 | -1) => void;
   page: (step: 1 | -1) => void;
   tidy: (way?: TidyWay) => void;
+  /** opens the outline, or goes to it */
+  outline: () => void;
+  /** gives the canvas the hands */
+  toSheet: () => void;
 }
 
 const camera = ({ hands }: ActionContext) => hands.view.getState().camera;
@@ -84,19 +90,29 @@ export const ACTIONS: readonly Action[] = [
     edits: true,
     does: ({ hands }) => hands.store.getState().redo(),
   },
-  { id: 'copy', words: 'Copy what is in hand', keys: 'Ctrl C', does: ({ hands }) => void hands.copy() },
-  { id: 'cut', words: 'Cut what is in hand', keys: 'Ctrl X', edits: true, does: ({ hands }) => void hands.copy(true) },
-  { id: 'paste', words: 'Paste', keys: 'Ctrl V', edits: true, does: ({ hands }) => void hands.paste() },
+  { id: 'copy', words: 'Copy what is in hand', keys: 'Ctrl C', does: ({ hands }) => void hands.clipboard.copy() },
+  { id: 'cut', words: 'Cut what is in hand', keys: 'Ctrl X', edits: true, does: ({ hands }) => void hands.clipboard.copy(true) },
+  { id: 'paste', words: 'Paste', keys: 'Ctrl V', edits: true, does: ({ hands }) => void hands.clipboard.paste() },
   {
     id: 'duplicate',
     words: 'Duplicate what is in hand',
     keys: 'Ctrl D',
     edits: true,
-    does: ({ hands }) => hands.duplicate(),
+    does: ({ hands }) => hands.clipboard.duplicate(),
   },
-  { id: 'all', words: 'Take everything in hand', keys: 'Ctrl A', does: ({ hands }) => hands.selectAll() },
+  { id: 'all', words: 'Take everything in hand', keys: 'Ctrl A', does: ({ hands }) => takeAll(hands) },
+  { id: 'take-room', words: 'Take the whole room in hand', keys: 'Shift R', does: ({ hands }) => takeRoom(hands) },
+  { id: 'take-kind', words: 'Take every part of this kind in hand', keys: 'Shift K', does: ({ hands }) => takeKind(hands) },
+  {
+    id: 'copy-room',
+    words: 'Copy the room in hand whole to a new room, wired to the same or new ways',
+    keys: 'Shift D',
+    edits: true,
+    does: ({ hands }) => hands.askForCopy(),
+  },
   { id: 'next-note', words: 'Next finding', keys: 'n', does: ({ nextNote }) => nextNote(1) },
   { id: 'last-note', words: 'Finding before', keys: 'Shift N', does: ({ nextNote }) => nextNote(-1) },
+  { id: 'outline', words: 'Outline: the drawing as a tree to walk and edit', keys: 'o', does: ({ outline }) => outline() },
   { id: 'face', words: 'Other face at the same place', keys: 'g', does: ({ otherFace }) => otherFace() },
   {
     id: 'find',
@@ -127,13 +143,31 @@ export const ACTIONS: readonly Action[] = [
     edits: true,
     does: ({ hands }) => hands.placeSupply(true),
   },
-  { id: 'row', words: 'Align what is in hand in a row', edits: true, does: ({ hands }) => hands.align('row') },
-  { id: 'column', words: 'Align what is in hand in a column', edits: true, does: ({ hands }) => hands.align('column') },
+  { id: 'row', words: 'Align what is in hand in a row', edits: true, does: ({ hands }) => align(hands, 'row') },
+  { id: 'column', words: 'Align what is in hand in a column', edits: true, does: ({ hands }) => align(hands, 'column') },
+  {
+    id: 'space-row',
+    words: 'Space what is in hand evenly in a row: distribute across',
+    edits: true,
+    does: ({ hands }) => distribute(hands, 'row'),
+  },
+  {
+    id: 'space-column',
+    words: 'Space what is in hand evenly in a column: distribute down',
+    edits: true,
+    does: ({ hands }) => distribute(hands, 'column'),
+  },
+  {
+    id: 'place',
+    words: 'Place exactly: write the position in mm',
+    edits: true,
+    does: ({ hands }) => hands.edit(),
+  },
   {
     id: 'unpin',
     words: 'Let what is in hand be placed by the sheet again',
     edits: true,
-    does: ({ hands }) => hands.unpin(),
+    does: ({ hands }) => unpin(hands),
   },
   {
     id: 'tidy',
@@ -161,6 +195,7 @@ export const ACTIONS: readonly Action[] = [
 /** Keys of the sheet, for the list behind `?`. */
 export const KEYS_HELP: readonly KeyHelp[] = [
   { keys: ['↑', '↓', '←', '→'], does: 'follow the conductor: up is towards the source' },
+  { keys: ['Shift', '↑', '↓', '←', '→'], does: 'take the next part in hand as well' },
   { keys: ['Tab'], does: 'next terminal of the part in hand' },
   ...ACTIONS.filter((action) => action.keys).map((action) => ({ keys: [action.keys!], does: action.words })),
 ];

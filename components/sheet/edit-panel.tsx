@@ -1,9 +1,11 @@
 'use client';
 
 import { useRef, useLayoutEffect, useState, type KeyboardEvent } from 'react';
-import { editCable, editName, editRating } from '@/diagram/commands/edit-in-place';
-import { cableText, ratingExample, ratingText } from '@/diagram/commands/rating-text';
+import { editCable, editName, editRatings, sharedRating } from '@/diagram/commands/edit-in-place';
+import { placeExactly, placeText } from '@/diagram/commands/move-parts';
+import { cableText, ratingExample } from '@/diagram/commands/rating-text';
 import { isRefusal, type Command, type Refusal } from '@/diagram/commands/types';
+import { listNames, nameOf } from '@/diagram/document/names';
 import { KIND_NAME } from '@/diagram/document/kinds';
 import type { Hands } from './hands';
 import { REST, type Mode } from './view';
@@ -80,13 +82,18 @@ export function EditPanel({
   onDone(): void;
 }) {
   const part = hands.doc.parts.find((candidate) => candidate.id === mode.part);
+  const ids = mode.parts ?? (part ? [part.id] : []);
+  const many = ids.length > 1;
+  const { face } = hands.view.getState();
   const cable = hands.doc.cables.find((candidate) => candidate.id === mode.cable);
   const leave = () => {
     hands.view.getState().setMode(REST);
     onDone();
   };
   if (!part && !cable) return null;
-  const name = part ? (part.ref ?? KIND_NAME[part.kind]) : 'the cable';
+  const chosen = hands.doc.parts.filter((candidate) => ids.includes(candidate.id));
+  const one = part ? (part.ref ?? KIND_NAME[part.kind]) : 'the cable';
+  const name = many ? listNames(chosen.map((candidate) => nameOf(hands.doc, candidate)), 4) : one;
   return (
     <div
       role="dialog"
@@ -99,12 +106,16 @@ export function EditPanel({
           <EditField
             first
             label={`Rating of ${name}`}
-            value={ratingText(part)}
+            value={sharedRating(hands.doc, ids)}
             hint={ratingExample(part)}
-            commit={(text) => editRating(hands.doc, part.id, text)}
+            commit={(text) => editRatings(hands.doc, ids, text)}
             hands={hands}
             onDone={leave}
           />
+        </>
+      )}
+      {part && !many && (
+        <>
           <EditField
             label="Designation"
             value={part.ref ?? ''}
@@ -119,6 +130,16 @@ export function EditPanel({
             hands={hands}
             onDone={leave}
           />
+          {placeText(hands.doc, face, part.id) !== '' && (
+            <EditField
+              label="Place, mm across and down"
+              value={placeText(hands.doc, face, part.id)}
+              hint="125, 62.5"
+              commit={(text) => placeExactly(hands.doc, face, part.id, text)}
+              hands={hands}
+              onDone={leave}
+            />
+          )}
         </>
       )}
       {cable && (

@@ -1,9 +1,9 @@
 import { allowedFrom, joinTerminals } from '@/diagram/commands/join-terminals';
-import { copyParts, pasteClip, readClip, type Clip } from '@/diagram/commands/copy';
+import { copyRoom, type RoomCopy } from '@/diagram/commands/copy-room';
 import { deleteSelection } from '@/diagram/commands/delete-selection';
-import { marksOf, sameEnd } from '@/diagram/commands/ends';
+import { marksOf, sameEnd, wiresAt } from '@/diagram/commands/ends';
 import { moveLoad } from '@/diagram/commands/move-load';
-import { alignParts, moveParts, unpinParts } from '@/diagram/commands/move-parts';
+import { moveParts } from '@/diagram/commands/move-parts';
 import { placeSupply, placeSupplyAlone } from '@/diagram/commands/place-supply';
 import { renumber } from '@/diagram/commands/renumber';
 import { isRefusal, type Command, type NewId, type Refusal } from '@/diagram/commands/types';
@@ -13,6 +13,7 @@ import { MODULE } from '@/diagram/symbols/types';
 import type { End, Installation } from '@/diagram/document/schema';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
+import { Clipboard } from './clipboard';
 import { firstPart, handEnd, nextPart, type Direction } from './navigate';
 import type { DrawingStore } from './store';
 import { NOTHING } from './store';
@@ -34,7 +35,7 @@ export class Hands {
   readonly newId: NewId;
   private shown: Scene | null = null;
   private walked: { doc: Installation; walk: Walk } | null = null;
-  private clip: Clip | null = null;
+  readonly clipboard = new Clipboard(this);
 
   constructor(tools: HandsTools) {
     this.store = tools.store;
@@ -60,7 +61,7 @@ export class Hands {
     return this.state.document;
   }
 
-  private get walk(): Walk {
+  get walk(): Walk {
     if (this.walked?.doc !== this.doc) this.walked = { doc: this.doc, walk: walkFromSources(this.doc) };
     return this.walked.walk;
   }
@@ -93,10 +94,27 @@ export class Hands {
     this.state.select({ parts: [id], wires: [], terminal: end });
   }
 
+  /** Takes a part in hand and brings it into sight, on the page where it is drawn. */
+  goTo(id: string): void {
+    const { face, set } = this.view.getState();
+    const place = this.doc.parts.find((part) => part.id === id)?.place;
+    if (face === 'connections' && place !== undefined) set({ place });
+    this.take(id);
+  }
+
   letGo(): void {
     const { mode, setMode } = this.view.getState();
     if (mode.kind !== 'rest') setMode(REST);
     else this.state.select(NOTHING);
+  }
+
+  /** Of terminals that are drawn at one point, the one that is meant: where the wire in hand may go, else where drawing goes on. */
+  oneOf(ends: readonly End[]): End | null {
+    const { mode } = this.view.getState();
+    const from = mode.kind === 'wire' ? mode.from : mode.kind === 'extend' ? mode.end : null;
+    const allowed = from ? allowedFrom(this.doc, from, [...ends])[0] : undefined;
+    const own = ends[0] && handEnd(this.doc, this.walk, ends[0][0]);
+    return allowed ?? ends.find((end) => own && sameEnd(end, own)) ?? ends[0] ?? null;
   }
 
   /** A pointer on a part: takes it in hand, or ends the wire that hangs there. */
@@ -197,50 +215,10 @@ export class Hands {
       this.state.select({ terminal });
   }
 
-  align(along: 'row' | 'column'): void {
-    if (this.state.selection.parts.length < 2) this.state.say('Take at least two parts in hand.');
-    else this.do(alignParts(this.doc, this.view.getState().face, this.state.selection.parts, along));
-  }
-
-  unpin(): void {
-    this.do(unpinParts(this.doc, this.view.getState().face, this.state.selection.parts));
-  }
-
   remove(): void {
     const { parts, wires } = this.state.selection;
     if (parts.length === 0 && wires.length === 0) this.state.say('Nothing is in hand.');
     else this.do(deleteSelection(this.doc, parts, wires));
-  }
-
-  async copy(cut = false): Promise<void> {
-    const clip = copyParts(this.doc, this.state.selection.parts);
-    if (!clip) return this.state.say('Take parts in hand to copy them.');
-    this.clip = clip;
-    this.state.say(`Copied ${clip.parts.length} ${clip.parts.length === 1 ? 'part' : 'parts'}.`);
-    try {
-      await navigator.clipboard.writeText(JSON.stringify(clip));
-    } catch {
-      // The browser keeps its clipboard to itself: the copy can still be pasted in this window.
-      this.state.say(`Copied ${clip.parts.length} for this window only: the browser does not share its clipboard.`);
-    }
-    if (cut) this.remove();
-  }
-
-  async paste(text?: string): Promise<void> {
-    const given = text ?? (await navigator.clipboard.readText().catch(() => ''));
-    const clip = readClip(given) ?? this.clip;
-    if (clip) this.do(pasteClip(this.doc, clip, this.newId));
-    else this.state.say('The clipboard holds no piece of a drawing.');
-  }
-
-  duplicate(): void {
-    const clip = copyParts(this.doc, this.state.selection.parts);
-    if (clip) this.do(pasteClip(this.doc, clip, this.newId, 'Duplicate'));
-    else this.state.say('Take parts in hand to duplicate them.');
-  }
-
-  selectAll(): void {
-    this.state.select({ parts: this.scene().parts.map((part) => part.id), wires: [], terminal: null });
   }
 
   renumber(): void {
@@ -265,11 +243,30 @@ export class Hands {
     this.do(moveLoad(this.doc, loads, device, this.newId));
   }
 
-  editPart(id: string): void {
-    const part = this.scene().parts.find((candidate) => candidate.id === id);
-    if (!part || !this.mayEdit) return;
-    this.state.select({ parts: [id], wires: [] });
-    this.view.getState().setMode({ kind: 'edit', part: id, at: { x: part.x + part.width + 200, y: part.y } });
+  /** Asks how the room in hand is to be copied. */
+  askForCopy(): void {
+    const room = this.doc.parts.find((part) => part.id === this.state.selection.parts[0])?.place;
+    if (!this.mayEdit) this.state.say('You may read this drawing.');
+    else if (room === undefined) this.state.say('Take a part of the room in hand first.');
+    else this.view.getState().setMode({ kind: 'room', place: room });
+  }
+
+  /** @returns why it cannot be, else null */
+  copyRoom(copy: RoomCopy): string | null {
+    const outcome = copyRoom(this.doc, copy, this.newId);
+    if (isRefusal(outcome)) return outcome.refused;
+    this.view.getState().setMode(REST);
+    this.do(outcome);
+    return null;
+  }
+
+  /** Opens what is written at a part, or the rating that several share. A part that this face does not draw is edited at the sheet's corner. */
+  editPart(id: string, parts: readonly string[] = [id]): void {
+    if (!this.mayEdit) return this.state.say('You may read this drawing.');
+    const drawn = this.scene().parts.find((candidate) => candidate.id === id);
+    if (parts.length === 1) this.state.select({ parts: [id], wires: [] });
+    const at = drawn ? { x: drawn.x + drawn.width + 200, y: drawn.y } : { x: 0, y: 0 };
+    this.view.getState().setMode({ kind: 'edit', part: id, parts, at });
   }
 
   editRun(run: SceneRun): void {
@@ -281,19 +278,25 @@ export class Hands {
   /** Enter: writes where the thing in hand is written. */
   edit(): void {
     const { parts, wires } = this.state.selection;
-    if (parts[0]) return this.editPart(parts[0]);
+    if (parts[0]) return this.editPart(parts[0], parts);
     const run = this.scene().runs.find((candidate) => candidate.wires.some((wire) => wires.includes(wire)));
+    const cable = this.doc.wires.find((wire) => wires.includes(wire.id))?.cable;
     if (run) this.editRun(run);
+    else if (cable) this.view.getState().setMode({ kind: 'edit', cable, at: { x: 0, y: 0 } });
+    else this.state.say('Nothing that is written is in hand.');
   }
 
   /** The cable at the terminal in hand, to edit it by key. */
   editCable(): void {
-    const { terminal } = this.state.selection;
+    const { terminal, wires } = this.state.selection;
+    if (!terminal && wires.length > 0) return this.edit();
     const run = this.scene().runs.find(
       (candidate) =>
         candidate.cable && terminal && (sameEnd(candidate.from, terminal) || sameEnd(candidate.to, terminal)),
     );
+    const cable = terminal && wiresAt(this.doc, terminal).find((wire) => wire.cable)?.cable;
     if (run) this.editRun(run);
+    else if (cable && this.mayEdit) this.view.getState().setMode({ kind: 'edit', cable, at: { x: 0, y: 0 } });
     else this.state.say('No cable ends at the terminal in hand.');
   }
 }

@@ -7,13 +7,16 @@ import { SheetFrame } from '@/components/frame/sheet-frame';
 import { jobTabs } from '@/components/frame/tabs';
 import { Button } from '@/components/ui/button';
 import type { Face, Installation } from '@/diagram/document/schema';
-import { buildScene } from '@/diagram/layout/build-scene';
 import { connectionPages } from '@/diagram/layout/connections-scene';
 import type { Scene } from '@/diagram/layout/scene';
+import type { Finding } from '@/diagram/rules/types';
 import type { DrawingView } from '@/lib/shared/drawings';
+import { FindingsVoice } from '@/components/outline/findings-voice';
+import { OutlinePane } from '@/components/outline/outline-pane';
+import { useTwoHands } from '@/components/outline/use-two-hands';
 import { KEYS_HELP, type ActionContext } from './actions';
 import { middle } from './canvas/pick';
-import { stableScene } from './canvas/stable-scene';
+import { useBrowser, useScene } from './use-scene';
 import { useSlip } from './extend/use-slip';
 import { SheetFoot } from './foot/sheet-foot';
 import { notesOf, type MarkedNote } from './margin/notes';
@@ -37,6 +40,8 @@ interface SheetProps {
   hoursWanted: number;
 }
 
+const NO_FINDINGS: readonly Finding[] = [];
+
 const EMPTY_SCENE = {
   face: 'overview',
   width: 1,
@@ -49,21 +54,6 @@ const EMPTY_SCENE = {
   dots: [],
   texts: [],
 } satisfies Scene;
-
-/** A face as a scene; what did not change keeps its identity. */
-function useScene(document: Installation | null, face: Face, place: string | null): Scene | null {
-  const before = useRef<Scene | null>(null);
-  const scene = useMemo(
-    () => (document ? buildScene(document, face, place === null ? {} : { place }) : null),
-    [document, face, place],
-  );
-  // eslint-disable-next-line react-hooks/refs -- the scene before is a cache: reading it late costs drawing time, never correctness
-  const stable = useMemo(() => scene && stableScene(before.current, scene), [scene]);
-  useEffect(() => {
-    before.current = stable;
-  }, [stable]);
-  return stable;
-}
 
 const stillLive = (document: Installation): string | undefined => {
   const inverter = document.parts.find((part) => part.kind === 'inverter');
@@ -87,11 +77,15 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
   const wantedPlace = useView((state) => state.place);
   const editing = useView((state) => state.editing);
   const sheet = useRef<HTMLDivElement>(null);
+  const browser = useBrowser();
+  const twoHands = useTwoHands(viewStore, sheet);
+  const { back: focusSheet, toSheet, openOutline } = twoHands;
 
   const pages = useMemo(() => (face === 'connections' ? connectionPages(document) : []), [document, face]);
   const page = pages.find((candidate) => candidate.place === wantedPlace) ?? pages[0] ?? null;
   const place = face === 'connections' ? (page?.place ?? null) : null;
-  const scene = useScene(document, face, place) ?? EMPTY_SCENE;
+  const drawn = useScene(browser ? document : null, face, place);
+  const scene = drawn ?? EMPTY_SCENE;
   const ghost = useScene(ghostDocument, face, place);
   const hands = useHands(store, viewStore, scene);
   const examined = useExamination(document);
@@ -102,7 +96,6 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
     [examined.examination, document, scene, condition, severities],
   );
 
-  const focusSheet = useCallback(() => sheet.current?.focus({ preventScroll: true }), []);
   const takeNote = useCallback(
     (note: MarkedNote) => {
       viewStore.getState().set({ finding: note.key });
@@ -117,6 +110,8 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
     () => ({
       hands,
       tidy,
+      toSheet,
+      outline: openOutline,
       otherFace() {
         const id = store.getState().selection.parts[0];
         const at = hands.doc.parts.find((part) => part.id === id)?.place;
@@ -144,7 +139,7 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
         }
       },
     }),
-    [hands, tidy, store, face, router, view.jobId, notes, viewStore, takeNote, scene, pages, place],
+    [hands, tidy, toSheet, openOutline, store, face, router, view.jobId, notes, viewStore, takeNote, scene, pages, place],
   );
 
   const held = useSheet(store, (state) => (state.selection.parts.length === 1 ? state.selection.parts[0] : undefined));
@@ -174,6 +169,7 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
       stillLive={stillLive(document)}
       fit="screen"
       keys={KEYS_HELP}
+      skip={{ label: 'To the outline: the drawing as a tree', go: openOutline }}
       strip={<TroubleStrip drawing={drawing} />}
       marginLabel={open === 1 ? '1 finding' : `${open} findings`}
       margin={
@@ -209,24 +205,38 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
           </>
         )
       }
-      foot={<SheetFoot drawing={drawing} context={context} scene={scene} notes={notes} />}
+      foot={<SheetFoot drawing={drawing} context={context} scene={scene} drawn={drawn !== null} notes={notes} />}
     >
       <h1 className="sr-only">
         {face === 'overview' ? 'Overview' : `Connections, ${page?.name ?? 'no place yet'}`}: {titleBlock.title}
       </h1>
-      <SheetSurface
-        sheet={sheet}
-        drawing={drawing}
-        context={context}
-        scene={scene}
-        ghost={ghost}
-        notes={notes}
-        slip={slip}
-        pages={pages}
-        place={place}
-        onNote={takeNote}
-        focusSheet={focusSheet}
-      />
+      <FindingsVoice examination={examined.examination} />
+      <div className="absolute inset-0 flex">
+        {twoHands.shown && (
+          <OutlinePane
+            context={context}
+            findings={examined.examination?.findings ?? NO_FINDINGS}
+            onReady={twoHands.ready}
+            onClose={twoHands.closeOutline}
+          />
+        )}
+        <div className="relative min-w-0 flex-1">
+          <SheetSurface
+            sheet={sheet}
+            drawing={drawing}
+            context={context}
+            scene={scene}
+            drawn={drawn !== null}
+            ghost={ghost}
+            notes={notes}
+            slip={slip}
+            pages={pages}
+            place={place}
+            onNote={takeNote}
+            focusSheet={focusSheet}
+          />
+        </div>
+      </div>
     </SheetFrame>
   );
 }

@@ -18,6 +18,7 @@ import { HistoryPanel } from './history-panel';
 import { Leader } from './margin/leader';
 import type { MarkedNote } from './margin/notes';
 import { CommandList, FindList, WayList } from './sheet-lists';
+import { RoomPanel } from './room-panel';
 import { StartPanel } from './start-panel';
 import { TidyPanel } from './tidy/tidy-panel';
 import { useSheet, type OpenDrawing } from './use-drawing';
@@ -29,6 +30,8 @@ interface SurfaceProps {
   drawing: OpenDrawing;
   context: ActionContext;
   scene: Scene;
+  /** the scene is worked out: in the browser, a moment after the paper */
+  drawn: boolean;
   ghost: Scene | null;
   notes: readonly MarkedNote[];
   slip: Slip | null;
@@ -51,7 +54,7 @@ function beside(
 ): { left: number; top: number } {
   if (!at) return { left: Math.max(8, box.width - width - 12), top: 12 };
   const right = at.x + 48 + width <= box.width;
-  const left = right ? at.x + 48 : Math.max(8, at.x - 48 - width);
+  const left = right ? Math.max(8, at.x + 48) : Math.max(8, at.x - 48 - width);
   return { left, top: Math.max(12, Math.min(box.height - 320, at.y - 40)) };
 }
 
@@ -93,7 +96,7 @@ function useBox(sheet: RefObject<HTMLDivElement | null>): { width: number; heigh
 
 /** The sheet itself: the canvas, what lies open on it, and the keys. One tab stop. */
 export function SheetSurface(props: SurfaceProps) {
-  const { sheet, drawing, context, scene, ghost, notes, slip, pages, place, onNote, focusSheet } = props;
+  const { sheet, drawing, context, scene, drawn, ghost, notes, slip, pages, place, onNote, focusSheet } = props;
   const { hands } = context;
   const view = useViewStore();
   const mode = useView((state) => state.mode);
@@ -133,13 +136,15 @@ export function SheetSurface(props: SurfaceProps) {
       tabIndex={0}
       className="absolute inset-0 outline-offset-[-2px]"
       onKeyDown={onKeyDown}
+      onFocus={(event) => event.target === sheet.current && context.toSheet()}
       onPaste={(event) => {
         if (event.target !== sheet.current) return;
         event.preventDefault();
-        void hands.paste(event.clipboardData.getData('text/plain'));
+        void hands.clipboard.paste(event.clipboardData.getData('text/plain'));
       }}
-      onPointerDown={() => {
-        focusSheet();
+      onPointerDown={(event) => {
+        // A panel that was opened from the outline gives the hands back to it; the canvas itself takes them over.
+        if (!(event.target as Element).closest('[role=dialog]')) context.toSheet();
       }}
     >
       <p className="sr-only" aria-live="polite">
@@ -148,9 +153,11 @@ export function SheetSurface(props: SurfaceProps) {
       {empty && scene.face === 'overview' ? (
         <StartPanel jobId={drawing.store.getState().jobId} hands={hands} mayEdit={mayEdit} />
       ) : (
-        <div aria-hidden="true" className="absolute inset-0">
-          <Canvas scene={scene} ghost={ghost} notes={notes} hands={hands} candidates={candidates} target={target} />
-        </div>
+        drawn && (
+          <div aria-hidden="true" className="absolute inset-0">
+            <Canvas scene={scene} ghost={ghost} notes={notes} hands={hands} candidates={candidates} target={target} />
+          </div>
+        )
       )}
       {empty && scene.face === 'connections' && (
         <p className="absolute top-4 left-4">Nothing is drawn yet. The overview is where a drawing begins.</p>
@@ -182,6 +189,11 @@ export function SheetSurface(props: SurfaceProps) {
       {mode.kind === 'edit' && (
         <Floating box={box} at={camera?.onScreen(mode.at)} width={224}>
           <EditPanel key={mode.part ?? mode.cable} mode={mode} hands={hands} onDone={focusSheet} />
+        </Floating>
+      )}
+      {mode.kind === 'room' && (
+        <Floating box={box} width={360}>
+          <RoomPanel mode={mode} hands={hands} onLeave={close} />
         </Floating>
       )}
       {mode.kind === 'commands' && (

@@ -4,6 +4,7 @@ import { useCallback, type KeyboardEvent } from 'react';
 import { isTyping, useSingleKeysOn } from '@/components/frame/single-keys';
 import { actionFor, keyName, type ActionContext } from './actions';
 import type { Direction } from './navigate';
+import { takeAlso } from './taking';
 
 const ARROWS: Record<string, Direction> = { ArrowUp: 'up', ArrowDown: 'down', ArrowLeft: 'left', ArrowRight: 'right' };
 
@@ -34,6 +35,7 @@ export function useKeyboard(context: ActionContext): (event: KeyboardEvent) => v
           const step = direction === 'down' || direction === 'right' ? 1 : -1;
           hands.view.getState().setMode({ ...mode, index: (mode.index + step + count) % count });
         } else if (mode.kind === 'move') hands.nudge(direction);
+        else if (event.shiftKey) takeAlso(hands, direction);
         else hands.arrow(direction);
         return;
       }

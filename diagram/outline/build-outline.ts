@@ -13,6 +13,9 @@ import { contentWords, counted, endWords, partWords, spokenRating, wireWords } f
 const CARRIES: Record<Conductor, string> = { L: 'lines', N: 'neutrals', E: 'earths', '+': 'battery plus', '-': 'battery minus' };
 const AT: Record<Conductor, string> = { L: 'line', N: 'neutral', E: 'earth', '+': 'battery plus', '-': 'battery minus' };
 
+/** beyond every number of steps */
+const FAR = 1e6;
+
 /** One build: the document by id, and what is asked of it at every part. */
 class Builder {
   private readonly parts: Map<string, Part>;
@@ -47,11 +50,12 @@ class Builder {
     return this.parts.get(id)!;
   }
 
-  /** Steps from its source along the line; along whatever reaches it where no line does. */
+  /** Steps from the supply along the line; along whatever reaches it where no line does, behind all that a line reaches. */
   depth(part: Part): number {
     const steps = marksOf(this.doc, part).flatMap((mark) => this.walk.get(endKey([part.id, mark])) ?? []);
     const line = steps.filter((step) => step.conductor === 'L');
-    return Math.min(1e6, ...(line.length > 0 ? line : steps).map((step) => step.depth));
+    const least = (list: typeof steps) => Math.min(FAR, ...list.map((step) => step.depth));
+    return line.length > 0 ? least(line) : FAR + least(steps);
   }
 
   /** From the source outwards, then by designation; joints, which nobody works, at the end. */
@@ -69,20 +73,23 @@ class Builder {
     key: string,
     kind: OutlineKind,
     words: string,
-    more: Partial<Omit<OutlineItem, 'key' | 'kind' | 'words' | 'below'>>,
+    more: Partial<Omit<OutlineItem, 'key' | 'kind' | 'words' | 'keys' | 'findings'>>,
+    at: readonly Finding[] = [],
   ): OutlineItem {
     const children = more.children ?? [];
+    const keys = new Set([...at.map(findingKey), ...children.flatMap((child) => child.keys)]);
+    if (more.finding !== undefined) keys.add(more.finding);
     return {
       key,
       kind,
       words,
-      findings: [],
+      findings: at.map((finding) => finding.heading),
+      keys: [...keys],
       parts: [],
       wires: [],
       terminal: null,
       ...more,
       children,
-      below: children.reduce((sum, child) => sum + child.below + child.findings.length, 0),
     };
   }
 
@@ -100,11 +107,14 @@ class Builder {
     const [id, mark] = endKey(wire.from) === here ? wire.to : wire.from;
     const cable = wire.cable === undefined ? undefined : this.cables.get(wire.cable);
     const to = endWords(this.doc, this.parts.get(id), id, mark);
-    return this.item(`wire ${wire.id} at ${here}`, 'wire', `Wire to ${to}: ${wireWords(wire, cable)}`, {
-      findings: this.at.ofWire(wire.id).map((finding) => finding.heading),
-      wires: [wire.id],
-      children: this.at.shownAtWire(wire.id, here === endKey(wire.to)).map((finding) => this.finding(finding)),
-    });
+    const shown = this.at.shownAtWire(wire.id, here === endKey(wire.to)).map((finding) => this.finding(finding));
+    return this.item(
+      `wire ${wire.id} at ${here}`,
+      'wire',
+      `Wire to ${to}: ${wireWords(wire, cable)}`,
+      { wires: [wire.id], children: shown },
+      this.at.ofWire(wire.id),
+    );
   }
 
   terminal(part: Part, mark: string): OutlineItem {
@@ -137,12 +147,13 @@ class Builder {
 
   partItem(part: Part): OutlineItem {
     const carried = part.kind === 'joint' ? conductorAt(this.doc, this.walk, part, '1') : null;
-    return this.item(`part ${part.id}`, 'part', partWords(this.doc, part, carried ? CARRIES[carried] : undefined), {
-      findings: this.at.ofPart(part.id).map((finding) => finding.heading),
-      parts: [part.id],
-      ...(part.place !== undefined && { place: part.place }),
-      children: this.inside(part),
-    });
+    return this.item(
+      `part ${part.id}`,
+      'part',
+      partWords(part, carried ? CARRIES[carried] : undefined),
+      { parts: [part.id], ...(part.place !== undefined && { place: part.place }), children: this.inside(part) },
+      this.at.ofPart(part.id),
+    );
   }
 
   room(place: string | undefined, parts: readonly Part[], prefix: string): OutlineItem {
@@ -175,11 +186,11 @@ class Builder {
       'way',
       `Way ${way.number}, ${rated}${way.label && `, ${way.label}`}: ${goesTo || 'nothing yet'}`,
       {
-        findings: this.at.ofPart(way.device).map((finding) => finding.heading),
         parts: [way.device],
         ...(device.place !== undefined && { place: device.place }),
         children: [...this.inside(device), ...rooms],
       },
+      this.at.ofPart(way.device),
     );
   }
 
@@ -240,7 +251,6 @@ export function buildOutline(doc: Installation, findings: readonly Finding[] = [
   const rooms = doc.places.filter((place) => place.kind !== 'intake').length;
   const all = [counted(doc.parts.length, 'part'), counted(ways.length, 'way'), counted(rooms, 'place')].join(', ');
   return builder.item('sheet', 'sheet', `${doc.title || 'Untitled sheet'}: ${doc.parts.length === 0 ? 'nothing drawn yet' : all}`, {
-    findings: loose.map((item) => item.words),
     children: [...loose, ...children],
   });
 }

@@ -82,12 +82,20 @@ export function treeMove(rows: readonly OutlineRow[], at: string, key: TreeKey):
   }
 }
 
-/** The next item in sight that begins as typed; a single letter pressed again goes on to the one after. */
+/**
+ * The next item in sight that begins as typed, else the next with a word that does: "3" finds way 3. A single letter
+ * pressed again goes on to the one after.
+ */
 export function typeAhead(rows: readonly OutlineRow[], at: string, typed: string): string | null {
   const index = Math.max(0, rows.findIndex((row) => row.item.key === at));
   const wanted = /^(.)\1*$/.test(typed) ? typed.charAt(0) : typed;
   // While a word grows the item in hand may still be meant; a single letter asks for another one.
   const from = wanted.length === 1 ? index + 1 : index;
   const around = [...rows.slice(from), ...rows.slice(0, from)];
-  return around.find((row) => row.item.words.toLowerCase().startsWith(wanted.toLowerCase()))?.item.key ?? null;
+  const piece = wanted.trim().toLowerCase();
+  const words = ({ item }: OutlineRow) => item.words.toLowerCase();
+  const begins = /^\d+$/.test(piece) ? `way ${piece},` : piece;
+  const found =
+    around.find((row) => words(row).startsWith(begins)) ?? around.find((row) => ` ${words(row)}`.includes(` ${piece}`));
+  return found?.item.key ?? null;
 }

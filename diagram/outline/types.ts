@@ -13,8 +13,8 @@ export interface OutlineItem {
   words: string;
   /** headings of the findings at this very thing */
   findings: readonly string[];
-  /** how many findings lie below it, its own not counted */
-  below: number;
+  /** keys of the findings at it and below it, each once */
+  keys: readonly string[];
   /** ids on the sheet; a board and a room stand for their parts */
   parts: readonly string[];
   wires: readonly string[];

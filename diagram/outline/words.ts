@@ -64,7 +64,7 @@ export function spokenRating(part: Part): string {
 }
 
 /** "S1, switch, 10 A"; a part without a designation by its kind. */
-export function partWords(doc: Installation, part: Part, carries?: string): string {
+export function partWords(part: Part, carries?: string): string {
   const kind = carries ? `${KIND_NAME[part.kind]} of ${carries}` : KIND_NAME[part.kind];
   return said(part.ref, part.ref && part.label === undefined ? kind : said(part.label, kind), spokenRating(part));
 }

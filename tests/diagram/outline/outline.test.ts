@@ -77,7 +77,9 @@ describe('what is said', () => {
     expect(lamp.findings).toEqual(['The lamp in Lantern room has no earth']);
     expect(lamp.children[0]!.words).toMatch(/^danger: The lamp in Lantern room has no earth\. /);
     const above = pathTo(root, 'part E1')!.map((key) => byKey(root, key));
-    for (const item of above) expect(item.below).toBeGreaterThan(0);
+    const { finding } = lamp.children[0]!;
+    for (const item of above) expect(item.keys.filter((key) => key === finding)).toHaveLength(1);
+    expect([...root.keys].sort()).toEqual(full.map((item) => item.finding).sort());
   });
 
   it('leaves out what somebody answers for', () => {
@@ -147,6 +149,8 @@ describe('walking', () => {
     expect(words(typeAhead(rows, first, 'w'))).toMatch(/^Way 2/);
     expect(words(typeAhead(rows, first, 'ww'))).toMatch(/^Way 2/);
     expect(words(typeAhead(rows, first, 'way 4'))).toMatch(/^Way 4/);
+    expect(words(typeAhead(rows, 'sheet', '3'))).toMatch(/^Way 3/);
+    expect(words(typeAhead(rows, 'sheet', 'q13'))).toMatch(/^Way 2, Q13/);
     expect(typeAhead(rows, 'sheet', 'zz')).toBeNull();
   });
 

@@ -1,0 +1,183 @@
+'use client';
+
+import { useCallback, useEffect, useRef, useState, type KeyboardEvent, type MouseEvent } from 'react';
+import { actionFor, keyName, type ActionContext } from '@/components/sheet/actions';
+import { ListPanel } from '@/components/sheet/lists';
+import { useProof } from '@/components/sheet/margin/use-proof';
+import { useSheet } from '@/components/sheet/use-drawing';
+import { useViewStore } from '@/components/sheet/view';
+import { Button } from '@/components/ui/button';
+import { fitsWords } from '@/diagram/commands/extend/catalogue';
+import { findingKey } from '@/diagram/outline/findings-at';
+import { treeMove, typeAhead, type TreeKey } from '@/diagram/outline/rows';
+import type { Finding } from '@/diagram/rules/types';
+import { commandsFor } from './item-commands';
+import { TreeRow } from './tree-row';
+import { useOutline } from './use-outline';
+
+interface OutlinePaneProps {
+  context: ActionContext;
+  findings: readonly Finding[];
+  /** is given a function that puts the focus on the line in hand; null when the outline closes */
+  onReady(focus: (() => void) | null): void;
+  onClose(): void;
+}
+
+const TREE_KEYS: ReadonlySet<string> = new Set(['ArrowUp', 'ArrowDown', 'ArrowLeft', 'ArrowRight', 'Home', 'End', '*']);
+/** ms within which letters belong to one word */
+const ONE_WORD = 900;
+
+/** The drawing as a tree that is walked and edited by keys alone, beside the canvas, with the same things in hand. */
+export function OutlinePane({ context, findings, onReady, onClose }: OutlinePaneProps) {
+  const { hands } = context;
+  const view = useViewStore();
+  const outline = useOutline(hands, findings);
+  const { rows, at, selection } = outline;
+  const [listing, setListing] = useState(false);
+  const tree = useRef<HTMLUListElement>(null);
+  const typed = useRef({ text: '', at: 0 });
+  const mayEdit = useSheet(hands.store, (state) => state.rights.edit);
+  const document = useSheet(hands.store, (state) => state.document);
+  const finding = findings.find((candidate) => findingKey(candidate) === at.item.finding) ?? null;
+  const proof = useProof(document, finding);
+
+  const focus = useCallback(() => tree.current?.querySelector<HTMLElement>('[tabindex="0"]')?.focus(), []);
+  useEffect(() => {
+    onReady(focus);
+    focus();
+    return () => onReady(null);
+  }, [onReady, focus]);
+  useEffect(() => {
+    const row = tree.current?.querySelector<HTMLElement>('[tabindex="0"]');
+    if (tree.current?.contains(window.document.activeElement)) row?.focus();
+    else row?.scrollIntoView({ block: 'nearest' });
+  }, [at.item.key]);
+
+  const commands = listing
+    ? commandsFor(at.item, context, {
+        takeAll: () => hands.store.getState().select({ parts: at.item.parts, wires: at.item.wires, terminal: null }),
+        show: () => {
+          if (at.item.parts[0]) hands.goTo(at.item.parts[0]);
+          context.toSheet();
+        },
+        remedies: proof?.remedies ?? [],
+      })
+    : [];
+
+  const byKey = (key: string) => rows.find((row) => row.item.key === key);
+  const rowUnder = (event: MouseEvent) =>
+    byKey((event.target as Element).closest<HTMLElement>('[data-key]')?.dataset.key ?? '');
+  const onClick = (event: MouseEvent) => {
+    const row = rowUnder(event);
+    if (!row) return;
+    const { key } = row.item;
+    if (row.expanded !== null && (event.target as Element).closest('[data-fold]'))
+      outline.move(row.expanded ? { to: key, fold: key } : { to: key, unfold: [key] });
+    else if (event.ctrlKey || event.metaKey) outline.toggle(row.item);
+    else outline.move({ to: key });
+    requestAnimationFrame(focus);
+  };
+
+  /** @returns true where the key was the outline's */
+  const act = (event: KeyboardEvent): boolean => {
+    const ctrl = event.ctrlKey || event.metaKey;
+    const { key } = event;
+    if (TREE_KEYS.has(key) && !ctrl) {
+      const move = treeMove(rows, at.item.key, key as TreeKey);
+      if (move && event.shiftKey && (key === 'ArrowUp' || key === 'ArrowDown')) {
+        const held = hands.store.getState().selection;
+        outline.move(move);
+        hands.store.getState().select(held);
+        const item = byKey(move.to)?.item;
+        if (item) outline.toggle(item);
+      } else if (move) outline.move(move);
+      return true;
+    }
+    if (key === 'Enter' || key === 'ContextMenu' || (key === 'F10' && event.shiftKey)) setListing(true);
+    else if (key === 'Escape') onClose();
+    else if (key === 'F2') actionFor('Enter')?.does(context);
+    else if (key === ' ' && typed.current.text === '') outline.toggle(at.item);
+    else if (ctrl || key === 'Delete' || key === 'Backspace') {
+      const action = actionFor(keyName(event.nativeEvent));
+      if (!action) return false;
+      action.does(context);
+    } else if (key.length === 1 && !event.altKey && (/[\p{L}\p{N}]/u.test(key) || typed.current.text !== '')) {
+      const grown = event.timeStamp - typed.current.at < ONE_WORD ? typed.current.text + key : key;
+      typed.current = { text: grown, at: event.timeStamp };
+      const to = typeAhead(rows, at.item.key, grown);
+      if (to) outline.move({ to });
+    } else return false;
+    return true;
+  };
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (event.nativeEvent.isComposing || !tree.current?.contains(event.target as Node)) return;
+    if (event.timeStamp - typed.current.at >= ONE_WORD) typed.current = { text: '', at: 0 };
+    if (!act(event)) return;
+    event.preventDefault();
+    event.stopPropagation();
+  };
+
+  const held = new Set([...selection.parts.map((id) => `part ${id}`), ...selection.wires.map((id) => `wire ${id}`)]);
+  const isHeld = (row: (typeof rows)[number]): boolean => {
+    const { item } = row;
+    if (item.kind === 'wire') return held.has(`wire ${item.wires[0]}`);
+    if (item.terminal) return selection.terminal?.join(' ') === item.terminal.join(' ');
+    return (item.kind === 'part' || item.kind === 'way') && held.has(item.key);
+  };
+  return (
+    <section
+      aria-label="Outline"
+      className="absolute inset-0 z-[8] flex flex-col border-rule bg-paper md:static md:w-[320px] md:shrink-0 md:border-r lap:w-[380px]"
+      onFocus={() => {
+        const { outline: now } = view.getState();
+        if (!now.hand) view.getState().set({ outline: { ...now, hand: true } });
+      }}
+      onKeyDown={onKeyDown}
+    >
+      <div className="flex items-center gap-2 border-b border-ink px-3 py-1">
+        <h2 className="flex-1 text-head font-bold">Outline</h2>
+        <Button aria-haspopup="dialog" onClick={() => setListing(true)}>
+          Commands
+        </Button>
+        <Button onClick={onClose}>Close</Button>
+      </div>
+      {listing && (
+        <ListPanel
+          label={`What can be done: ${at.item.words}`}
+          placeholder={mayEdit ? 'What do you want to do with it?' : 'Look at it'}
+          items={(text) => commands.filter((command) => text.trim() === '' || fitsWords(command.words, text.trim()))}
+          onLeave={() => {
+            setListing(false);
+            requestAnimationFrame(focus);
+          }}
+          onPick={(id) => {
+            setListing(false);
+            focus();
+            commands.find((command) => command.id === id)?.does();
+          }}
+        />
+      )}
+      <ul
+        ref={tree}
+        role="tree"
+        aria-label={`Outline of ${document.title}`}
+        aria-multiselectable="true"
+        className="min-h-0 flex-1 overflow-y-auto"
+        onClick={onClick}
+        onDoubleClick={(event) => rowUnder(event) && setListing(true)}
+      >
+        {rows.map((row) => (
+          <TreeRow
+            key={row.item.key}
+            row={row}
+            inHand={row === at}
+            selected={isHeld(row)}
+          />
+        ))}
+      </ul>
+      <p className="border-t border-rule px-3 py-1 text-small text-grey max-lap:hidden">
+        Enter: what can be done. Letters go to a line. Space takes several in hand. Esc: the sheet.
+      </p>
+    </section>
+  );
+}
