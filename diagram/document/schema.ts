@@ -230,7 +230,6 @@ export const PositionSchema = z.strictObject({
 });
 const positions = z.record(IdSchema, PositionSchema);
 
-const onPlan = z.int().min(-1_000_000).max(1_000_000);
 /**
  * The plan of a storey: a picture of the job, behind a second arrangement of the same parts. Presentation only; it reaches
  * no result.
@@ -244,10 +243,6 @@ export const FloorPlanSchema = z.strictObject({
   /** 1/100 mm, the size at which the picture lies on the paper; its upper left corner is the origin of positions */
   width: z.int().min(1000).max(200_000),
   height: z.int().min(1000).max(200_000),
-  /** a line on the picture whose length somebody measured in the home: it gives the plan its scale */
-  measured: z
-    .strictObject({ x1: onPlan, y1: onPlan, x2: onPlan, y2: onPlan, metres: positive.max(1000) })
-    .optional(),
 });
 
 /** Where a part stands on the plan of a storey; the other faces keep their own positions. */
