@@ -10,6 +10,8 @@ export const jobTabs = (jobId: string): Tab[] => [
   { id: 'overview', number: 2, label: 'Overview', href: `/jobs/${jobId}/overview` },
   { id: 'connections', number: 3, label: 'Connections', href: `/jobs/${jobId}/connections` },
   { id: 'schedules', number: 4, label: 'Schedules', href: `/jobs/${jobId}/schedules` },
+  { id: 'plan', label: 'Plan', href: `/jobs/${jobId}/plan` },
+  { id: 'photographs', label: 'Photographs', href: `/jobs/${jobId}/photographs` },
 ];
 
 /** The team's own sheets, shown when no job is open: only those that this person may turn to. */

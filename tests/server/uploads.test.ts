@@ -4,7 +4,7 @@ import { createRequire } from 'node:module';
 import os from 'node:os';
 import path from 'node:path';
 import { deflateSync } from 'node:zlib';
-import sharp from 'sharp';
+import sharp, { type Sharp } from 'sharp';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { GET as list, POST as add } from '@/app/api/jobs/[jobId]/uploads/route';
 import { GET as read, PATCH as edit } from '@/app/api/uploads/[uploadId]/route';
@@ -21,7 +21,7 @@ import { makeJob, makePerson } from './factories';
 type Bytes = Buffer<ArrayBuffer>;
 const picture = (width: number, height: number) =>
   sharp({ create: { width, height, channels: 3, background: '#2a4fb0' } });
-const toBytes = async (made: sharp.Sharp) => Buffer.from(await made.toBuffer());
+const toBytes = async (made: Sharp) => Buffer.from(await made.toBuffer());
 
 async function studio() {
   const person = await makePerson();
