@@ -29,7 +29,7 @@ export function ContactSheet({ uploads, places, today, plans, onOpen }: ContactS
               className="flex aspect-[4/3] w-full cursor-pointer items-center justify-center border border-rule bg-desk p-2 hover:border-ink"
               onClick={() => onOpen(upload.id)}
             >
-              <Picture upload={upload} size="small" alt="" className="max-h-full w-auto max-w-full object-contain" />
+              <Picture upload={upload} size="small" alt="" className="size-full object-contain" />
             </button>
             <figcaption className="mt-2">
               <span className="block break-words">{upload.caption || showsWords(upload, places)}</span>

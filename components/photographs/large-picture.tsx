@@ -55,8 +55,11 @@ export function LargePicture({ upload, pictures, places, count, isPlan, onPlan, 
         <Button onClick={() => onStep(1)}>Next</Button>
         <Button onClick={() => dialog.current?.close()}>Close</Button>
       </div>
-      <div className="flex justify-center border border-rule bg-desk">
-        <Picture upload={upload} size="large" alt={altOf(upload, places)} className="max-h-[70dvh] w-auto max-w-full object-contain" />
+      <div
+        className="max-h-[70dvh] w-full border border-rule bg-desk"
+        style={{ aspectRatio: `${upload.width} / ${upload.height}` }}
+      >
+        <Picture upload={upload} size="large" alt={altOf(upload, places)} className="size-full object-contain" />
       </div>
       {pictures.mayEdit && (
         <div className="mt-3 flex flex-wrap items-end gap-x-6 gap-y-3">

@@ -9,7 +9,7 @@ import { newUuid } from '@/components/sheet/identity';
 import { SaveStateView } from '@/components/sheet/save-state-view';
 import { TroubleStrip } from '@/components/sheet/trouble-strip';
 import { useDrawing, useSheet, type Me } from '@/components/sheet/use-drawing';
-import { addPlan, planSize } from '@/diagram/commands/floor-plan';
+import { addPlan, freeStorey, planSize } from '@/diagram/commands/floor-plan';
 import type { DrawingView } from '@/lib/shared/drawings';
 import type { UploadList, UploadView } from '@/lib/shared/uploads';
 import { AddPictures } from './add-pictures';
@@ -29,7 +29,6 @@ const KEYS: readonly KeyHelp[] = [
   { keys: ['←', '→'], does: 'the one before, the next' },
   { keys: ['Esc'], does: 'back to the sheet' },
 ];
-const STOREYS = ['Ground floor', 'First floor', 'Second floor', 'Third floor'];
 
 /** The photographs of a job: board, meter, rooms, and the pictures that serve as floor plans. */
 export function PhotographsSheet({ view, me, list, today }: PhotographsSheetProps) {
@@ -49,9 +48,7 @@ export function PhotographsSheet({ view, me, list, today }: PhotographsSheetProp
 
   const makePlan = ({ id, width, height }: UploadView) => {
     const doc = store.getState().document;
-    const taken = new Set((doc.plans ?? []).map(({ name }) => name));
-    const name = STOREYS.find((storey) => !taken.has(storey)) ?? `Storey ${taken.size + 1}`;
-    const plan = { id: newUuid(), name, picture: id, ...planSize(width, height) };
+    const plan = { id: newUuid(), name: freeStorey(doc), picture: id, ...planSize(width, height) };
     const { label, patch } = addPlan(doc, plan);
     if (store.getState().run(label, patch)) router.push(`/jobs/${view.jobId}/plan?storey=${plan.id}`);
   };

@@ -25,6 +25,14 @@ export function planSize(widthPx: number, heightPx: number): { width: number; he
   return { width: Math.max(1000, Math.round(widthPx * scale)), height: Math.max(1000, Math.round(heightPx * scale)) };
 }
 
+const STOREYS = ['Ground floor', 'First floor', 'Second floor', 'Third floor', 'Cellar', 'Attic'];
+
+/** What the next storey is called until somebody names it otherwise. */
+export function freeStorey(doc: Installation): string {
+  const taken = new Set((doc.plans ?? []).map(({ name }) => name));
+  return STOREYS.find((storey) => !taken.has(storey)) ?? `Storey ${taken.size + 1}`;
+}
+
 /** Where the parts stand on one plan; what is gone from the drawing is left out. */
 export function placedOn(doc: Installation, planId: string): Map<string, PlanPosition> {
   const ids = new Set(doc.parts.map((part) => part.id));

@@ -1,0 +1,184 @@
+'use client';
+
+import { useEffect, useRef, useState, type CSSProperties, type KeyboardEvent, type PointerEvent, type RefObject } from 'react';
+import { symbolFor } from '@/diagram/symbols';
+import { light } from '@/diagram/symbols/palette';
+import { pictureHref } from '@/lib/shared/uploads';
+import { PlanPart } from './plan-part';
+import type { Plan, Point } from './use-plan';
+
+/** 1/100 mm of paper round the picture */
+const EDGE = 400;
+const STEP = 250;
+const FAR = 1000;
+const ZOOM = 1.4;
+const MOST_ZOOM = 8;
+/** px that a hand moves before it drags */
+const THRESHOLD = { mouse: 4, pen: 6, touch: 10 } as const;
+
+/** The picture is paper whatever the screen's colours are, so what lies on it is drawn in ink. */
+const PAPER = Object.fromEntries(Object.entries(light).map(([name, value]) => [`--${name}`, value])) as CSSProperties;
+const ARROWS: Record<string, Point> = {
+  ArrowLeft: { x: -1, y: 0 },
+  ArrowRight: { x: 1, y: 0 },
+  ArrowUp: { x: 0, y: -1 },
+  ArrowDown: { x: 0, y: 1 },
+};
+
+interface PlanCanvasProps {
+  state: Plan;
+  box: RefObject<HTMLDivElement | null>;
+  onKey(event: KeyboardEvent): void;
+}
+
+/** The plan of a storey with the parts that stand on it: one stop for Tab, worked by keys, mouse and finger. */
+export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
+  const svg = useRef<SVGSVGElement>(null);
+  const [zoom, setZoom] = useState(1);
+  const drag = useRef<{ from: Point; at: Point; moved: boolean; threshold: number } | null>(null);
+  const { plan, placed, placing, ghost, carried, inHand, rights } = state;
+  const held = inHand[0];
+
+  useEffect(() => {
+    box.current?.querySelector('[data-held]')?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+  }, [box, held]);
+
+  if (!plan) return null;
+  const carriedPart = state.document.parts.find(({ id }) => id === placing);
+
+  /** A place on the screen as a place on the plan. */
+  const onPlan = (event: { clientX: number; clientY: number }): Point => {
+    const matrix = svg.current!.getScreenCTM()!.inverse();
+    const { x, y } = new DOMPoint(event.clientX, event.clientY).matrixTransform(matrix);
+    return { x: Math.round(x), y: Math.round(y) };
+  };
+
+  const begin = (event: PointerEvent, id: string) => {
+    if (placing || event.button !== 0) return;
+    event.stopPropagation();
+    const add = event.shiftKey || event.ctrlKey || event.metaKey;
+    if (!inHand.includes(id)) state.take(add ? [...inHand, id] : [id]);
+    box.current?.focus({ preventScroll: true });
+    if (!rights.edit) return;
+    svg.current!.setPointerCapture(event.pointerId);
+    const threshold = THRESHOLD[event.pointerType as keyof typeof THRESHOLD] ?? THRESHOLD.mouse;
+    drag.current = { from: onPlan(event), at: { x: event.clientX, y: event.clientY }, moved: false, threshold };
+  };
+  const move = (event: PointerEvent) => {
+    if (placing) return state.setGhost(onPlan(event));
+    const now = drag.current;
+    if (!now) return;
+    if (!now.moved && Math.hypot(event.clientX - now.at.x, event.clientY - now.at.y) < now.threshold) return;
+    now.moved = true;
+    const { x, y } = onPlan(event);
+    state.drag({ x: x - now.from.x, y: y - now.from.y });
+  };
+  const end = (event: PointerEvent) => {
+    const now = drag.current;
+    drag.current = null;
+    if (now?.moved) {
+      const { x, y } = onPlan(event);
+      state.release({ x: x - now.from.x, y: y - now.from.y });
+    }
+  };
+  const cancel = () => {
+    drag.current = null;
+    state.drag(null);
+  };
+
+  const onKeyDown = (event: KeyboardEvent) => {
+    const way = ARROWS[event.key];
+    if (way) {
+      const by = event.shiftKey ? STEP : placing ? FAR : STEP;
+      if (placing)
+        state.setGhost({
+          x: Math.min(plan.width, Math.max(0, ghost.x + way.x * by)),
+          y: Math.min(plan.height, Math.max(0, ghost.y + way.y * by)),
+        });
+      else state.nudgeBy(way.x * (event.shiftKey ? FAR : STEP), way.y * (event.shiftKey ? FAR : STEP));
+      return event.preventDefault();
+    }
+    if (placing && event.key === 'Enter') state.put(ghost);
+    else if (event.key === '+' || event.key === '=') setZoom(Math.min(MOST_ZOOM, zoom * ZOOM));
+    else if (event.key === '-') setZoom(Math.max(1, zoom / ZOOM));
+    else return onKey(event);
+    event.preventDefault();
+  };
+
+  const viewBox = `${-EDGE} ${-EDGE} ${plan.width + 2 * EDGE} ${plan.height + 2 * EDGE}`;
+  return (
+    <div className="relative h-full min-h-[50dvh]">
+      <div
+        ref={box}
+        role="application"
+        aria-label={`Plan of the ${plan.name}`}
+        tabIndex={0}
+        className="h-full overflow-auto bg-behind focus-visible:-outline-offset-2"
+        onKeyDown={onKeyDown}
+        onBlur={state.endNudge}
+      >
+        <svg
+          ref={svg}
+          viewBox={viewBox}
+          preserveAspectRatio="xMidYMid meet"
+          style={{ ...PAPER, width: `${zoom * 100}%`, height: `${zoom * 100}%` }}
+          className={`block ${placing ? 'cursor-crosshair touch-none' : ''}`}
+          onPointerMove={move}
+          onPointerUp={end}
+          onPointerCancel={cancel}
+          onClick={(event) => placing && state.put(onPlan(event))}
+          onPointerDown={(event) => {
+            if (!placing && event.target === event.currentTarget) state.take([]);
+          }}
+        >
+          <rect x={-EDGE} y={-EDGE} width={plan.width + 2 * EDGE} height={plan.height + 2 * EDGE} className="fill-paper" pointerEvents="none" />
+          <image href={pictureHref(plan.picture)} width={plan.width} height={plan.height} pointerEvents="none" />
+          {placed.map(({ part, at }) => {
+            const off = carried && inHand.includes(part.id) ? carried : null;
+            return (
+              <PlanPart
+                key={part.id}
+                part={part}
+                at={off ? { ...at, x: at.x + off.x, y: at.y + off.y } : at}
+                held={inHand.includes(part.id)}
+                label={state.describe(part)}
+                onPointerDown={(event) => begin(event, part.id)}
+              />
+            );
+          })}
+          {carriedPart && (
+            <g pointerEvents="none">
+              <PlanPart
+                part={carriedPart}
+                ghost
+                held
+                at={{
+                  x: ghost.x - symbolFor(carriedPart, 'overview').width / 2,
+                  y: ghost.y - symbolFor(carriedPart, 'overview').height / 2,
+                }}
+              />
+            </g>
+          )}
+        </svg>
+      </div>
+      <div className="absolute right-3 bottom-3 flex border border-ink bg-paper">
+        {(
+          [
+            ['−', 'Smaller', () => setZoom(Math.max(1, zoom / ZOOM))],
+            ['+', 'Larger', () => setZoom(Math.min(MOST_ZOOM, zoom * ZOOM))],
+          ] as const
+        ).map(([sign, name, does]) => (
+          <button
+            key={name}
+            type="button"
+            aria-label={name}
+            className="min-h-8 min-w-8 cursor-pointer border-l border-ink text-head first:border-l-0 pointer-coarse:min-h-11 pointer-coarse:min-w-11"
+            onClick={does}
+          >
+            {sign}
+          </button>
+        ))}
+      </div>
+    </div>
+  );
+}

@@ -1,0 +1,74 @@
+'use client';
+
+import { useState } from 'react';
+import { Button, WordButton } from '@/components/ui/button';
+import { Segmented } from '@/components/ui/segmented';
+import { useSheet, type OpenDrawing } from '@/components/sheet/use-drawing';
+import { changePlan, removePlan } from '@/diagram/commands/floor-plan';
+import type { Plan } from './use-plan';
+
+interface PlanFootProps {
+  drawing: OpenDrawing;
+  state: Plan;
+  onAnother(): void;
+}
+
+/** The foot of the plan: which storey, its name, and one line about what just happened. */
+export function PlanFoot({ drawing, state, onAnother }: PlanFootProps) {
+  const notice = useSheet(drawing.store, (current) => current.notice);
+  const [name, setName] = useState<string | null>(null);
+  const { plans, plan, rights, document } = state;
+  const { undo, redo } = drawing.store.getState();
+  if (!plan) return null;
+  const rename = () => {
+    const typed = name?.trim();
+    setName(null);
+    if (typed && typed !== plan.name) state.run(changePlan(document, plan.id, { name: typed.slice(0, 60) }));
+  };
+  return (
+    <div className="flex flex-col gap-1">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-1">
+        {plans.length > 1 && (
+          <Segmented
+            label="Storey"
+            segments={plans.map(({ id, name: called }) => ({ value: id, label: called }))}
+            value={plan.id}
+            onChange={state.choose}
+          />
+        )}
+        {name === null ? (
+          plans.length === 1 && <b>{plan.name}</b>
+        ) : (
+          <span className="flex gap-2">
+            <input
+              autoFocus
+              aria-label="Name of the storey"
+              value={name}
+              maxLength={60}
+              className="w-40 border-b border-ink bg-transparent px-1"
+              onChange={(event) => setName(event.target.value)}
+              onBlur={rename}
+              onKeyDown={(event) => {
+                if (event.key === 'Enter') rename();
+                if (event.key === 'Escape') setName(null);
+              }}
+            />
+            <Button onClick={rename}>Keep</Button>
+          </span>
+        )}
+        {rights.edit && name === null && (
+          <>
+            <WordButton onClick={() => setName(plan.name)}>rename</WordButton>
+            <WordButton onClick={onAnother}>another storey</WordButton>
+            <WordButton onClick={() => state.run(removePlan(document, plan.id))}>take away</WordButton>
+            <WordButton onClick={undo}>undo</WordButton>
+            <WordButton onClick={redo}>redo</WordButton>
+          </>
+        )}
+      </div>
+      <p role="status" className="min-h-4 truncate text-grey">
+        {notice}
+      </p>
+    </div>
+  );
+}
