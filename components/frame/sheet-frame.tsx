@@ -48,7 +48,7 @@ export interface SheetFrameProps {
   children: ReactNode;
 }
 
-const JOB_SHEET = /^\/jobs\/([^/]+)\/(?:survey|overview|connections|schedules)$/;
+const JOB_SHEET = /^\/jobs\/([^/]+)\/(?:survey|overview|connections|schedules|rehearsal)$/;
 
 const find = () => document.querySelector<HTMLElement>('[data-find]')?.focus();
 

@@ -10,6 +10,7 @@ export const jobTabs = (jobId: string): Tab[] => [
   { id: 'overview', number: 2, label: 'Overview', href: `/jobs/${jobId}/overview` },
   { id: 'connections', number: 3, label: 'Connections', href: `/jobs/${jobId}/connections` },
   { id: 'schedules', number: 4, label: 'Schedules', href: `/jobs/${jobId}/schedules` },
+  { id: 'rehearsal', number: 5, label: 'Rehearsal', href: `/jobs/${jobId}/rehearsal` },
   { id: 'plan', label: 'Plan', href: `/jobs/${jobId}/plan` },
   { id: 'photographs', label: 'Photographs', href: `/jobs/${jobId}/photographs` },
 ];

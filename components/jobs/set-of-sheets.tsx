@@ -41,6 +41,17 @@ const pictures: Record<string, ReactNode> = {
       <path d="M16 46V62H52M20 50C24 58 34 60 50 61" />
     </g>
   ),
+  rehearsal: (
+    <g className="stroke-ink" strokeWidth="1">
+      <path d="M20 10V20M20 20H58" strokeDasharray="1 2" />
+      <path d="M28 20V40M46 20V40" strokeDasharray="1 2" />
+      <path d="M60 46V28H96V46M63 46V31H93V46" />
+      <circle cx="28" cy="44" r="4" strokeDasharray="1 2" />
+      <circle cx="61.5" cy="51" r="4" />
+      <circle cx="94.5" cy="51" r="4" />
+      <path d="M12 61H56M20 59V63M34 59V63M48 59V63" />
+    </g>
+  ),
 };
 
 function stateOf(job: JobRow, sheet: string): { words: string; red: boolean } {

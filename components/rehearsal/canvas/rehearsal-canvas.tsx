@@ -1,0 +1,174 @@
+'use client';
+
+import { memo, useCallback, useEffect, useMemo, useRef, type MouseEvent as ReactMouseEvent } from 'react';
+import { ReactFlow, useReactFlow, useStore as useFlowStore } from 'reactflow';
+import 'reactflow/dist/style.css';
+import { GroundLayer } from '@/components/sheet/canvas/ground-layer';
+import { HeldLayer } from '@/components/sheet/canvas/hand-layer';
+import { middle } from '@/components/sheet/canvas/pick';
+import { px } from '@/components/sheet/canvas/units';
+import type { Part } from '@/diagram/document/schema';
+import type { Scene } from '@/diagram/layout/scene';
+import type { Rehearsed } from '@/diagram/rehearsal/rehearse';
+import { settingsOf } from '@/diagram/rehearsal/settings';
+import type { Station } from '@/diagram/rehearsal/walk';
+import { partLook, runLook, type PartLook, type RunLook } from '../looks';
+import { ConductorsLayer } from './conductors-layer';
+import { RehearsalMarks } from './marks';
+import { lookNode, LookNodeView, type LookNode } from './part-view';
+import { PencilLayer } from './pencil-layer';
+
+const nodeTypes = { look: LookNodeView };
+const NO_ORIGIN = { hideAttribution: true };
+const NO_EDGES: never[] = [];
+const LETTERS_FROM = 0.42;
+/** below it the body size of the lettering would be under 11 px */
+const READABLE = 0.9;
+const LARGE = 400;
+const NOTHING: Rehearsed['figures'] = { wires: {}, parts: {}, sources: {} };
+const NONE: readonly string[] = [];
+
+interface CanvasProps {
+  scene: Scene;
+  parts: ReadonlyMap<string, Part>;
+  answer: Rehearsed | null;
+  station: Station | null;
+  /** id of the part at which the fault in hand is */
+  faultAt: string | null;
+  faultName: string;
+  hand: string | null;
+  /** id of the part that must be in sight */
+  show: string | null;
+  onPart(id: string): void;
+  onGround(): void;
+}
+
+const same = (a: PartLook, b: PartLook): boolean =>
+  a.state === b.state &&
+  a.cased === b.cased &&
+  a.works === b.works &&
+  a.setting === b.setting &&
+  a.tripped === b.tripped;
+
+/** Nodes by part and look: what did not change is the same node again, and is not drawn again. */
+const known = new WeakMap<Scene['parts'][number], LookNode>();
+function nodeFor(part: Scene['parts'][number], look: PartLook, operable: boolean): LookNode {
+  const before = known.get(part);
+  if (before && before.data.operable === operable && same(before.data.look, look)) return before;
+  const node = lookNode(part, look, operable);
+  known.set(part, node);
+  return node;
+}
+
+/** The face as it stands in the rehearsal: a skin over a scene, which says what was touched. */
+export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps) {
+  const { scene, parts, answer, station, faultAt, faultName, hand, show, onPart, onGround } = props;
+  const flow = useReactFlow();
+  const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
+  const box = useFlowStore((state) => `${state.width} ${state.height}`);
+  const figures = station?.figures ?? answer?.figures ?? NOTHING;
+  const opened = station?.opened ?? NONE;
+  const inverters = useMemo(
+    () => new Set([...parts.values()].filter(({ kind }) => kind === 'inverter').map(({ id }) => id)),
+    [parts],
+  );
+  const runLooks = useMemo(
+    () => new Map<string, RunLook>(scene.runs.map((run) => [run.id, runLook(run, figures, inverters)])),
+    [scene, figures, inverters],
+  );
+  const partLooks = useMemo(
+    () =>
+      new Map<string, PartLook>(
+        scene.parts.flatMap((drawn) => {
+          const part = parts.get(drawn.id);
+          if (!part) return [];
+          return [[drawn.id, partLook(part, figures, answer?.settings ?? {}, answer?.rest ?? {}, opened, inverters)]];
+        }),
+      ),
+    [scene, parts, figures, answer, opened, inverters],
+  );
+  const nodes = useMemo(
+    () =>
+      scene.parts.flatMap((drawn) => {
+        const look = partLooks.get(drawn.id);
+        const part = parts.get(drawn.id);
+        return look && part ? [nodeFor(drawn, look, settingsOf(part).length > 0)] : [];
+      }),
+    [scene, parts, partLooks],
+  );
+  const held = useMemo(() => new Set(hand === null ? [] : [hand]), [hand]);
+
+  const all = useCallback(() => {
+    const [w = 0, h = 0] = box.split(' ').map(Number);
+    if (w === 0 || h === 0) return;
+    const [width, height] = [px(scene.width), px(scene.height)];
+    const fit = Math.min((w - 16) / width, (h - 16) / height);
+    const zoom = Math.min(1.6, Math.max(w < 700 ? READABLE : 0.7, fit));
+    const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
+    const centre = source ? px(source.x + source.width / 2) * zoom : 0;
+    const spare = w - width * zoom;
+    const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
+    const y = Math.max(8, (h - height * zoom) / 2);
+    void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
+  }, [box, flow, scene]);
+
+  const shown = useRef<string | null>(null);
+  const page = `${scene.face} ${scene.place ?? ''}`;
+  useEffect(() => {
+    if (shown.current === page || box.startsWith('0 ')) return;
+    shown.current = page;
+    all();
+  }, [page, box, all]);
+
+  const target = scene.parts.find(({ id }) => id === show);
+  useEffect(() => {
+    if (!target) return;
+    const { x, y, zoom } = flow.getViewport();
+    const [w = 0, h = 0] = box.split(' ').map(Number);
+    const at = middle(target);
+    const seen = { x: px(at.x) * zoom + x, y: px(at.y) * zoom + y };
+    if (seen.x > 60 && seen.y > 60 && seen.x < w - 60 && seen.y < h - 60) return;
+    void flow.setCenter(px(at.x), px(at.y), { zoom: Math.max(zoom, 0.8) });
+  }, [flow, target, box]);
+
+  const onNodeClick = useCallback((_: ReactMouseEvent, node: LookNode) => onPart(node.id), [onPart]);
+  return (
+    <ReactFlow<LookNode>
+      nodes={nodes}
+      edges={NO_EDGES}
+      nodeTypes={nodeTypes}
+      onNodeClick={onNodeClick}
+      onPaneClick={onGround}
+      nodesConnectable={false}
+      nodesDraggable={false}
+      nodesFocusable={false}
+      edgesFocusable={false}
+      elementsSelectable={false}
+      disableKeyboardA11y
+      deleteKeyCode={null}
+      selectionKeyCode={null}
+      multiSelectionKeyCode={null}
+      panOnDrag
+      zoomOnDoubleClick={false}
+      zIndexMode="manual"
+      onlyRenderVisibleElements={scene.parts.length > LARGE && letters}
+      minZoom={0.12}
+      maxZoom={4}
+      proOptions={NO_ORIGIN}
+      className="sheet-flow"
+    >
+      <GroundLayer scene={scene} names={letters} />
+      <HeldLayer scene={scene} parts={held} />
+      <ConductorsLayer scene={scene} looks={runLooks} />
+      <RehearsalMarks
+        scene={scene}
+        letters={letters}
+        figures={figures}
+        parts={parts}
+        partLooks={partLooks}
+        runLooks={runLooks}
+      />
+      {station && faultAt && <PencilLayer scene={scene} station={station} at={faultAt} name={faultName} />}
+    </ReactFlow>
+  );
+});

@@ -1,0 +1,24 @@
+'use client';
+
+import { Segmented } from '@/components/ui/segmented';
+import { CONDITION_WORDS } from '@/diagram/rehearsal/say-change';
+import type { ConditionName } from '@/diagram/rehearsal/stance';
+import { useRehearsal, useRehearsalStore } from './state';
+
+const ONLY_MAINS: readonly ConditionName[] = ['mains'];
+
+/** The conditions as a row of switches; those that this home has not are absent, not grey. */
+export function ConditionsRow() {
+  const store = useRehearsalStore();
+  const conditions = useRehearsal((state) => state.answer?.conditions ?? ONLY_MAINS);
+  const condition = useRehearsal((state) => state.condition ?? state.answer?.condition ?? 'mains');
+  return (
+    <Segmented
+      label="Condition"
+      showLabel
+      segments={conditions.map((value) => ({ value, label: CONDITION_WORDS[value] }))}
+      value={condition}
+      onChange={(name) => store.getState().setCondition(name)}
+    />
+  );
+}
