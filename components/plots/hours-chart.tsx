@@ -13,7 +13,7 @@ import {
 import { autonomyCurve } from '@/diagram/calculations/autonomy';
 import { hoursWithout, type BackupPlot } from '@/diagram/schedules/backup-plot';
 import { hoursText } from '@/diagram/schedules/figure';
-import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, PAPER, fifths, roundUp } from './look';
+import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, PAPER, axis, axisUnit } from './look';
 
 interface HoursChartProps {
   plot: BackupPlot;
@@ -25,10 +25,11 @@ interface HoursChartProps {
 export default function HoursChart({ plot, off }: HoursChartProps) {
   const all = hoursWithout(plot, new Set());
   const now = hoursWithout(plot, off);
-  const mostW = roundUp(Math.max(100, all.watts * 1.6));
+  const along = axis(Math.max(100, all.watts * 1.5));
+  const mostW = along.domain[1];
   const shown = [all.hours, now.hours].filter(Number.isFinite);
-  const mostH = roundUp(Math.max(plot.hoursWanted ?? 0, ...shown, 2) * 1.3);
-  const data = autonomyCurve({ bank: plot.bank, efficiency: plot.efficiency }, mostW / 100, mostW, 100).filter(({ hours }) => hours <= mostH);
+  const up = axis(Math.max(plot.hoursWanted ?? 0, ...shown, 2) * 1.3);
+  const data = autonomyCurve({ bank: plot.bank, efficiency: plot.efficiency }, mostW / 100, mostW, 100).filter(({ hours }) => hours <= up.domain[1]);
   const dot = (load: typeof all, hollow: boolean) =>
     Number.isFinite(load.hours) && (
       <ReferenceDot
@@ -49,14 +50,13 @@ export default function HoursChart({ plot, off }: HoursChartProps) {
       />
     );
   return (
-    <ResponsiveContainer width="100%" height={HEIGHT + 30} initialDimension={{ width: 520, height: HEIGHT + 30 }}>
+    <ResponsiveContainer width="100%" height={HEIGHT} initialDimension={{ width: 520, height: HEIGHT }}>
       <ComposedChart data={data} margin={MARGIN} accessibilityLayer={false}>
         <CartesianGrid stroke={HAIR} vertical={false} />
         <XAxis
           dataKey="watts"
           type="number"
-          domain={[0, mostW]}
-          ticks={fifths(mostW)}
+          {...along}
           tick={LETTERING}
           stroke={INK}
           height={36}
@@ -64,13 +64,12 @@ export default function HoursChart({ plot, off }: HoursChartProps) {
         />
         <YAxis
           type="number"
-          domain={[0, mostH]}
-          ticks={fifths(mostH)}
+          {...up}
           tick={LETTERING}
           stroke={INK}
           tickLine={false}
           width={36}
-          label={{ value: 'h', position: 'insideTopLeft', dy: -16, ...GREY_LETTERING }}
+          label={axisUnit('h')}
         />
         {plot.hoursWanted !== null && plot.hoursWanted > 0 && (
           <ReferenceLine

@@ -12,8 +12,8 @@ export const GREY_LETTERING = { fontSize: 11, fill: GREY } as const;
 /** Lines tell themselves apart by dash first. */
 export const DASH = { wish: '6 4', limit: '6 4', fault: '2 3', other: '1.5 3', beyond: '4 3' } as const;
 
-export const HEIGHT = 250;
-export const MARGIN = { top: 18, right: 16, bottom: 8, left: 4 } as const;
+export const HEIGHT = 280;
+export const MARGIN = { top: 28, right: 16, bottom: 8, left: 4 } as const;
 
 const STEPS = [1, 3] as const;
 
@@ -31,10 +31,14 @@ export function logRange(least: number, most: number): [number, number] {
   return [marks.findLast((mark) => mark <= least) ?? least, marks.find((mark) => mark >= most) ?? most];
 }
 
-/** A round number at or above a value, so that an axis has five even steps. */
-export function roundUp(value: number): number {
-  const power = 10 ** Math.floor(Math.log10(Math.max(value, 1e-9)));
-  return [1, 2, 2.5, 5, 10].map((step) => step * power).find((step) => step >= value * 0.9999)!;
+/** An axis from 0 in even steps of 1, 2 or 5 times a power of ten, four to seven marks. */
+export function axis(most: number): { domain: [number, number]; ticks: number[] } {
+  const power = 10 ** Math.floor(Math.log10(Math.max(most, 1e-9)) - 1);
+  const step = [1, 2, 5, 10, 20, 50].map((each) => each * power).find((each) => most / each <= 6)!;
+  const count = Math.ceil(most / step - 1e-9);
+  const ticks = Array.from({ length: count + 1 }, (_, i) => Number((i * step).toPrecision(10)));
+  return { domain: [0, ticks.at(-1)!], ticks };
 }
 
-export const fifths = (most: number): number[] => [0, 1, 2, 3, 4, 5].map((step) => Number(((most * step) / 5).toFixed(6)));
+/** The unit at the upper end of an upright axis, clear of its topmost mark. */
+export const axisUnit = (value: string) => ({ value, position: 'insideTopLeft' as const, dy: -24, ...GREY_LETTERING });

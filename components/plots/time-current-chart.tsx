@@ -1,10 +1,11 @@
 'use client';
 
-import { Area, ComposedChart, Line, ReferenceLine, ResponsiveContainer, XAxis, YAxis, CartesianGrid } from 'recharts';
+import { Area, ComposedChart, Line, ReferenceDot, ReferenceLine, ResponsiveContainer, XAxis, YAxis, CartesianGrid } from 'recharts';
+import { INSTANT, type OvercurrentDevice } from '@/diagram/calculations/trip-curve';
 import { amps } from '@/diagram/schedules/figure';
 import { ADIABATIC_UP_TO_S, FASTEST_S, SLOWEST_S, bandFor, withstandLine } from '@/diagram/schedules/trip-points';
 import type { FaultMark, WayPlot } from '@/diagram/schedules/way-plot';
-import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, RED, ROW, logRange, logTicks } from './look';
+import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, RED, ROW, axisUnit, logRange, logTicks } from './look';
 
 const SECONDS = [0.01, 0.1, 1, 10, 100, 1000, 10_000];
 const TOLD: Record<FaultMark['id'], string> = {
@@ -30,15 +31,18 @@ function range(plot: WayPlot): [number, number] {
   return logRange(Math.min(...values, 10) * 0.8, Math.max(...values, 100) * 1.1);
 }
 
-/** Label of an upright line, at a height of its own so that neighbours do not collide. */
-const upright = (value: string, level: number, ink: string) => ({
+/** Label of an upright line, at a height of its own so that neighbours do not collide, and on the side where there is room. */
+const upright = (value: string, level: number, toTheLeft: boolean) => ({
   value,
-  position: 'insideTopLeft' as const,
+  position: toTheLeft ? ('insideTopRight' as const) : ('insideTopLeft' as const),
   offset: 4,
-  dy: level * 13,
-  fontSize: 11,
-  fill: ink,
+  dy: level * 14,
+  ...LETTERING,
 });
+
+/** Where the band is wide enough for its name: beyond the surely instantaneous trip, below 0.1 s. */
+const nameAt = (device: OvercurrentDevice): number =>
+  device.ratingA * (device.kind === 'gG' ? 8 : INSTANT[device.curve ?? 'C'].trips) * 1.1;
 
 /** Device band, what the copper stands, and the currents of faults, on two logarithmic axes. */
 export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
@@ -53,9 +57,8 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
   }));
   const thin = plot.needA !== null && plot.izA !== null && plot.needA > plot.izA;
   const uprights = [...plot.faults].sort((a, b) => a.amps - b.amps);
-  const bandAt = band.find(({ band: at }) => at && at[1] <= 1) ?? band[Math.floor(band.length / 2)];
   return (
-    <ResponsiveContainer width="100%" height={HEIGHT + 30} initialDimension={{ width: 520, height: HEIGHT + 30 }}>
+    <ResponsiveContainer width="100%" height={HEIGHT} initialDimension={{ width: 520, height: HEIGHT }}>
       <ComposedChart data={band} margin={MARGIN} accessibilityLayer={false}>
         <CartesianGrid stroke={HAIR} />
         <XAxis
@@ -81,7 +84,7 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
           stroke={INK}
           tickLine={false}
           width={48}
-          label={{ value: 's', position: 'insideTopLeft', dy: -16, ...GREY_LETTERING }}
+          label={axisUnit('s')}
         />
         <Area dataKey="band" type="linear" stroke={INK} strokeWidth={1.4} fill={ROW} fillOpacity={1} isAnimationActive={false} activeDot={false} />
         {stands.flatMap(({ name, short, long }, i) => [
@@ -132,7 +135,7 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
             stroke={INK}
             strokeWidth={1.4}
             strokeDasharray={DASH.fault}
-            label={upright(`${TOLD[id]} ${amps(current)}`, i % 3, INK)}
+            label={upright(`${TOLD[id]} ${amps(current)}`, i % 3, current > from * (to / from) ** 0.72)}
           />
         ))}
         <ReferenceLine
@@ -141,14 +144,12 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
           strokeDasharray={DASH.limit}
           label={{ value: `${plot.withinS} s allowed`, position: 'insideBottomRight', ...LETTERING }}
         />
-        {bandAt && (
-          <ReferenceLine
-            segment={[
-              { x: bandAt.currentA, y: 0.02 },
-              { x: bandAt.currentA, y: 0.02 },
-            ]}
-            stroke="none"
-            label={{ value: plot.deviceName, position: 'insideTopLeft', offset: 6, fontWeight: 700, ...LETTERING }}
+        {plot.device && (
+          <ReferenceDot
+            x={nameAt(plot.device)}
+            y={0.03}
+            r={0}
+            label={{ value: plot.deviceName, position: 'right', fontWeight: 700, ...LETTERING }}
           />
         )}
       </ComposedChart>

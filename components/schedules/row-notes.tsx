@@ -9,6 +9,7 @@ import { keyOf } from '@/components/sheet/margin/notes';
 import { withPlaces } from '@/diagram/commands/place-new';
 import type { Installation } from '@/diagram/document/schema';
 import type { Finding } from '@/diagram/rules/types';
+import { fieldText } from '@/diagram/schedules/edit';
 import { amps } from '@/diagram/schedules/figure';
 import type { Outcome } from '@/diagram/schedules/outcomes';
 import { findingsOf } from '@/diagram/schedules/row-findings';
@@ -93,8 +94,14 @@ export function RowNotes({ desk, worked, document, jobId, mayEdit }: RowNotesPro
   if (!row) return null;
   const lacks = lacksOf(row);
   const given = remedies?.filter(({ gives }) => gives !== null) ?? [];
+  const named = row.cells.label && isTyped(row.cells.label) ? fieldText(document, row.cells.label.field) : '';
   return (
     <div className="flex flex-col gap-5">
+      <h2 className="text-head font-bold">
+        {row.name}
+        {named && `: ${named}`}
+        {findings.length === 0 && <span className="block font-normal text-grey">Nothing is found here.</span>}
+      </h2>
       {findings.map((finding) => {
         const key = keyOf(finding);
         const held = finding === inHand;

@@ -24,7 +24,7 @@ interface ScheduleCellProps {
 function Figure({ cell, right }: { cell: Exclude<Cell, { field: FieldRef }>; right?: boolean }) {
   const look = cell.beyond ? 'font-bold text-red' : cell.text === '-' ? 'text-grey' : '';
   return (
-    <span className={`block truncate px-1 ${right ? 'text-right tabular-nums' : ''} ${look}`} title={cell.lacks ?? cell.text}>
+    <span className={`block truncate px-[3px] ${right ? 'text-right tabular-nums' : ''} ${look}`} title={cell.lacks ?? cell.text}>
       {cell.text}
       {cell.lacks && <span className="sr-only">{cell.lacks}</span>}
     </span>
@@ -63,7 +63,7 @@ export function ScheduleCell({ desk, table, row, column, cell, document, read, m
   const usual = field.usual?.(document) ?? '-';
   if (!mayEdit)
     return (
-      <span className={`block truncate px-1 ${column.right ? 'text-right tabular-nums' : ''} ${text === '' ? 'text-grey' : ''}`} title={text}>
+      <span className={`block truncate px-[3px] ${column.right ? 'text-right tabular-nums' : ''} ${text === '' ? 'text-grey' : ''}`} title={text}>
         {text || usual}
         {cell.more && <span className="ml-1 text-small text-grey">{cell.more}</span>}
       </span>
@@ -82,7 +82,7 @@ export function ScheduleCell({ desk, table, row, column, cell, document, read, m
         title={refused?.message ?? (text.length > column.width ? text : undefined)}
         placeholder={usual}
         numeric={field.numeric}
-        className={`truncate px-1 underline decoration-rule decoration-dotted underline-offset-4 placeholder:underline placeholder:decoration-dotted ${column.right ? 'text-right tabular-nums' : ''}`}
+        className={`mx-[3px] h-5! truncate border-b border-dotted border-rule focus:bg-paper focus:outline-offset-3! ${column.right ? 'text-right tabular-nums' : ''}`}
         onTake={() => take(table, row.id, column.id)}
         onType={(typed) => type(table, row.id, column.id, typed)}
         onKey={onKey}

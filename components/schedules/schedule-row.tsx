@@ -33,9 +33,9 @@ const GRAVE = { danger: 0, defect: 1, advice: 2 } as const;
 function FindingMark({ findings }: { findings: readonly Finding[] }) {
   const open = findings.filter(({ severity }) => severity !== 'advice');
   const worst = [...open].sort((a, b) => GRAVE[a.severity] - GRAVE[b.severity])[0];
-  if (!worst) return <span className="block px-1 text-grey">-</span>;
+  if (!worst) return <span className="block px-[3px] text-grey">-</span>;
   return (
-    <span className="block truncate px-1 font-bold text-red" title={open.map(({ heading }) => heading).join('\n')}>
+    <span className="block truncate px-[3px] font-bold text-red" title={open.map(({ heading }) => heading).join('\n')}>
       {worst.severity}
       {open.length > 1 && ` +${open.length - 1}`}
     </span>
@@ -98,7 +98,7 @@ export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
         );
         const look = `border-b border-hair p-0 align-middle ${shownOn(column)}`;
         return i === 0 ? (
-          <th key={column.id} scope="row" className={`${look} text-left font-[inherit]`} style={{ height: ROW_HEIGHT }}>
+          <th key={column.id} scope="row" className={`${look} text-left ${inHand ? 'font-semibold' : 'font-normal'}`} style={{ height: ROW_HEIGHT }}>
             {content}
           </th>
         ) : (

@@ -20,7 +20,10 @@ interface ScheduleTableProps {
   titled?: boolean;
 }
 
-const head = 'border-b-2 border-ink px-1 pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
+/** px of a column for so many letters: the lettering advances 7.2 px at 12 px. */
+const pixels = (letters: number): number => Math.round(letters * 7.2) + 6;
+
+const head = 'border-b-2 border-ink px-[3px] pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
 
 /** A schedule as one table, typed where it is underlined; on a narrow sheet its columns are turned to page by page. */
 export function ScheduleTable({ desk, table, document, findings, mayEdit, titled }: ScheduleTableProps) {
@@ -35,17 +38,23 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit, titled
   const read = useMemo(() => readerOf(document), [document]);
   const parts = useMemo(() => new Map(document.parts.map((part) => [part.id, part])), [document]);
   const isWays = table.id === 'ways';
+  const wide = columns.reduce((a, b) => (b.width > a.width ? b : a)).id;
   if (table.rows.length === 0) return <p className="px-2 py-3 text-grey">{table.empty}</p>;
   return (
     <>
       <ColumnPages pages={pages} page={page} onTurn={setPage} of={table.title} />
-      <table aria-label={table.title} className="w-full border-collapse max-lap:table-fixed">
+      <table aria-label={table.title} className="w-full table-fixed border-collapse">
         <colgroup>
           <col style={{ width: isWays ? EDGE_WIDTH : 36 }} className={isWays ? 'max-sm:w-9!' : ''} />
           {columns.map((column) => (
-            <col key={column.id} className={shownOn(column)} style={{ width: `calc(${column.width}ch + 8px)` }} />
+            // One column takes what is left over: names are as long as they are.
+            <col
+              key={column.id}
+              className={shownOn(column)}
+              style={column.id === wide ? undefined : { width: pixels(column.width) }}
+            />
           ))}
-          <col style={{ width: '9ch' }} />
+          <col style={{ width: pixels(8) }} />
         </colgroup>
         <thead>
           <tr>

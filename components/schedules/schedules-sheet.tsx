@@ -1,7 +1,7 @@
 'use client';
 
 import { useRouter } from 'next/navigation';
-import { useCallback, useEffect, useState, type KeyboardEvent } from 'react';
+import { useCallback, useEffect, useState } from 'react';
 import { useStore } from 'zustand';
 import { SheetFrame } from '@/components/frame/sheet-frame';
 import { useSingleKeys } from '@/components/frame/single-keys';
@@ -89,72 +89,68 @@ export function SchedulesSheet({ view, me, schedule, way }: SchedulesSheetProps)
   }, [desk, store]);
   useSingleKeys({ g: () => router.push(`/jobs/${view.jobId}/overview`), n: nextWrong });
 
-  const onKeyDown = (event: KeyboardEvent) => {
-    const typing = (event.target as HTMLElement).dataset.typing !== undefined;
-    const ctrl = event.ctrlKey || event.metaKey;
-    const { undo, redo } = store.getState();
-    const action =
-      event.key === 'F8'
-        ? nextWrong
-        : ctrl && event.key.toLowerCase() === 'z' && !typing && rights.edit
-          ? event.shiftKey
-            ? redo
-            : undo
-          : undefined;
-    if (!action) return;
-    event.preventDefault();
-    desk.setState({ since: null });
-    action();
-  };
+  useEffect(() => {
+    // On the window, as a remedy that has done its work takes the focus with it.
+    const onKey = (event: KeyboardEvent) => {
+      const typing = event.target instanceof HTMLElement && event.target.dataset.typing !== undefined;
+      const undoes = (event.ctrlKey || event.metaKey) && event.key.toLowerCase() === 'z' && !typing;
+      if (event.defaultPrevented || (event.key !== 'F8' && !undoes)) return;
+      event.preventDefault();
+      if (event.key === 'F8') return nextWrong();
+      desk.setState({ since: null });
+      const { undo, redo } = store.getState();
+      (event.shiftKey ? redo : undo)();
+    };
+    window.addEventListener('keydown', onKey);
+    return () => window.removeEventListener('keydown', onKey);
+  }, [desk, store, nextWrong]);
 
   const findings = worked?.findings.length ?? 0;
   return (
-    <div onKeyDown={onKeyDown}>
-      <SheetFrame
-        tabs={jobTabs(view.jobId)}
-        current="schedules"
-        who={me.initials}
-        kind={`Schedules, ${open}`}
-        saveState={<SaveStateView drawing={drawing} />}
-        strip={<TroubleStrip drawing={drawing} />}
-        titleBlock={titleBlock}
-        practice={{ id: document.practice, supply: document.supply }}
-        keys={keys}
-        marginLabel={findings === 1 ? '1 finding' : `${findings} findings`}
-        margin={
-          <SchedulesMargin
-            desk={desk}
-            drawing={drawing}
-            state={state}
-            document={document}
-            me={me}
-            jobId={view.jobId}
-            mayEdit={rights.edit}
-          />
-        }
-        tools={
-          rights.edit && (
-            <Button className="min-h-11" onClick={() => store.getState().undo()}>
-              Undo
-            </Button>
-          )
-        }
-        foot={<SchedulesFoot desk={desk} drawing={drawing} state={state} mayEdit={rights.edit} />}
-      >
-        {state.failure ? (
-          <h1 className="p-4 text-title font-bold">{SCHEDULE_NAMES[open]}</h1>
-        ) : (
-          <SchedulesBody
-            desk={desk}
-            worked={worked}
-            drawing={store}
-            document={document}
-            jobId={view.jobId}
-            mayEdit={rights.edit}
-            onTurn={turn}
-          />
-        )}
-      </SheetFrame>
-    </div>
+    <SheetFrame
+      tabs={jobTabs(view.jobId)}
+      current="schedules"
+      who={me.initials}
+      kind={`Schedules, ${open}`}
+      saveState={<SaveStateView drawing={drawing} />}
+      strip={<TroubleStrip drawing={drawing} />}
+      titleBlock={titleBlock}
+      practice={{ id: document.practice, supply: document.supply }}
+      keys={keys}
+      marginLabel={findings === 1 ? '1 finding' : `${findings} findings`}
+      margin={
+        <SchedulesMargin
+          desk={desk}
+          drawing={drawing}
+          state={state}
+          document={document}
+          me={me}
+          jobId={view.jobId}
+          mayEdit={rights.edit}
+        />
+      }
+      tools={
+        rights.edit && (
+          <Button className="min-h-11" onClick={() => store.getState().undo()}>
+            Undo
+          </Button>
+        )
+      }
+      foot={<SchedulesFoot desk={desk} drawing={drawing} state={state} mayEdit={rights.edit} />}
+    >
+      {state.failure ? (
+        <h1 className="p-4 text-title font-bold">{SCHEDULE_NAMES[open]}</h1>
+      ) : (
+        <SchedulesBody
+          desk={desk}
+          worked={worked}
+          drawing={store}
+          document={document}
+          jobId={view.jobId}
+          mayEdit={rights.edit}
+          onTurn={turn}
+        />
+      )}
+    </SheetFrame>
   );
 }

@@ -2,9 +2,9 @@ import { SymbolGlyph } from '@/components/frame/symbol-glyph';
 import type { Part } from '@/diagram/document/schema';
 import { symbolById } from '@/diagram/symbols';
 
-export const EDGE_WIDTH = 118;
-const BAR = 14;
-const RING = { x: 84, r: 10 };
+export const EDGE_WIDTH = 98;
+const BAR = 8;
+const RING = { x: 70, r: 10 };
 /** 1/100 mm to px: the breaker stands as large as on the overview */
 const SCALE = 0.028;
 
@@ -33,7 +33,7 @@ export function WayEdge({ part, number, backup, first, last, height }: WayEdgePr
   const middle = height / 2;
   const symbol = part && symbolById(part.kind);
   const half = symbol ? (symbol.height * SCALE) / 2 : 0;
-  const centre = 44;
+  const centre = 34;
   return (
     <svg
       width={EDGE_WIDTH}

@@ -62,7 +62,7 @@ export function hoursAt({ bank, inverter }: BackupFigures, watts: number): numbe
 
 const limited = (value: number, limit: number | undefined): Cell =>
   limit !== undefined && exceeds(value, limit)
-    ? { text: `${Math.round(value)} > ${limit}`, value, beyond: true }
+    ? figure(value, 0, { beyond: true })
     : figure(value, 0);
 
 function sourceRow(backup: BackupFigures): Row {

@@ -14,14 +14,14 @@ import { decidingCable, runsOf } from './way-runs';
 const COLUMNS: readonly Column[] = [
   { id: 'label', name: 'Way', width: 23, page: 'stays', spoken: 'name' },
   { id: 'ref', name: 'Device', width: 4, page: 'cable', spoken: 'designation of the device' },
-  { id: 'rating', name: '', width: 5, page: 'stays', spoken: 'rating of the device' },
+  { id: 'rating', name: '', width: 6, page: 'stays', spoken: 'rating of the device' },
   { id: 'csa', name: 'Cable', unit: 'mm²', width: 5, right: true, page: 'cable', spoken: 'cable, mm²' },
   { id: 'length', name: 'Run', unit: 'm', width: 5, right: true, page: 'cable', spoken: 'run, metres' },
   {
     id: 'laying',
     name: 'How,',
     unit: 'together',
-    width: 8,
+    width: 7,
     page: 'cable',
     spoken: 'how it is laid, how many circuits together',
   },
@@ -29,13 +29,13 @@ const COLUMNS: readonly Column[] = [
   { id: 'in', name: 'In', unit: 'A', width: 4, right: true, page: 'current', spoken: 'rating In, A' },
   { id: 'iz', name: 'Iz', unit: 'A', width: 9, right: true, page: 'stays', spoken: 'capacity Iz, A' },
   { id: 'capacity', name: 'Table', unit: 'A', width: 5, right: true, page: 'current', fileOnly: true },
-  { id: 'drop', name: 'Drop', unit: '%', width: 6, right: true, page: 'current', spoken: 'volt drop, %' },
-  { id: 'zs', name: 'Zs', unit: 'ohm', width: 6, right: true, page: 'fault', spoken: 'earth fault loop Zs, ohm' },
+  { id: 'drop', name: 'Drop', unit: '%', width: 5, right: true, page: 'current', spoken: 'volt drop, %' },
+  { id: 'zs', name: 'Zs', unit: 'ohm', width: 5, right: true, page: 'fault', spoken: 'earth fault loop Zs, ohm' },
   { id: 'zsMax', name: 'Zs max', unit: 'ohm', width: 6, right: true, page: 'fault', fileOnly: true },
-  { id: 'opens', name: 'Opens', unit: 'in', width: 7, right: true, page: 'fault', spoken: 'a fault to earth is cleared in' },
+  { id: 'opens', name: 'Opens', unit: 'in', width: 6, right: true, page: 'fault', spoken: 'a fault to earth is cleared in' },
   { id: 'fault', name: 'L-N at', unit: 'end, A', width: 6, right: true, page: 'fault', spoken: 'least short circuit, A' },
   { id: 'rcd', name: 'Rcd', width: 4, page: 'fault', spoken: 'residual-current device' },
-  { id: 'points', name: 'Points', width: 3, right: true, page: 'load' },
+  { id: 'points', name: 'Points', width: 5, right: true, page: 'load' },
   { id: 'watts', name: 'Load', unit: 'W', width: 5, right: true, page: 'load', spoken: 'load, W' },
   { id: 'demand', name: 'Demand', unit: 'W', width: 6, right: true, page: 'load', fileOnly: true },
 ];
@@ -60,7 +60,7 @@ function dropCell(context: Context, way: WayFigures): Cell {
   const base = worstDrop.at.part.kind === 'lamp' ? voltDrop.lighting.value : voltDrop.other.value;
   const limit = dropLimitPercent(base, worstDrop.fed.lengthM, voltDrop.longRun.value);
   if (!exceeds(worstDrop.percent, limit)) return figure(worstDrop.percent, 2);
-  return { text: `${worstDrop.percent.toFixed(2)} > ${limit}`, value: worstDrop.percent, beyond: true };
+  return figure(worstDrop.percent, 2, { beyond: true });
 }
 
 function faultCells(context: Context, way: WayFigures): Record<'zs' | 'opens', Cell> {
@@ -134,7 +134,7 @@ function rowOf(context: Context, { device, number, backup, parts, wires }: Way, 
         result.ib === null
           ? missing('Ib needs the watts of every load')
           : over
-            ? { text: `${amps(result.ib)} > In`, value: result.ib, beyond: true }
+            ? ampsFigure(result.ib, { beyond: true })
             : ampsFigure(result.ib),
       in: result.in === null ? missing('In needs the rating of the device') : text(String(result.in)),
       iz: izCell(way, result),
