@@ -20,6 +20,8 @@ export interface Action {
 export interface ActionContext {
   hands: Hands;
   otherFace: () => void;
+  /** turns to the schedules, at the way in hand */
+  schedule: () => void;
   nextNote: (step: 1 | -1) => void;
   page: (step: 1 | -1) => void;
   tidy: (way?: TidyWay) => void;
@@ -114,6 +116,7 @@ export const ACTIONS: readonly Action[] = [
   { id: 'last-note', words: 'Finding before', keys: 'Shift N', does: ({ nextNote }) => nextNote(-1) },
   { id: 'outline', words: 'Outline: the drawing as a tree to walk and edit', keys: 'o', does: ({ outline }) => outline() },
   { id: 'face', words: 'Other face at the same place', keys: 'g', does: ({ otherFace }) => otherFace() },
+  { id: 'schedule', words: 'Schedules and curves of the way in hand', keys: 's', does: ({ schedule }) => schedule() },
   {
     id: 'find',
     words: 'Find by name, number, kind or finding',

@@ -10,6 +10,7 @@ import type { Face, Installation } from '@/diagram/document/schema';
 import { connectionPages } from '@/diagram/layout/connections-scene';
 import type { Scene } from '@/diagram/layout/scene';
 import type { Finding } from '@/diagram/rules/types';
+import { findWays } from '@/diagram/terminals/ways';
 import type { DrawingView } from '@/lib/shared/drawings';
 import { FindingsVoice } from '@/components/outline/findings-voice';
 import { OutlinePane } from '@/components/outline/outline-pane';
@@ -79,6 +80,7 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
   const sheet = useRef<HTMLDivElement>(null);
   const browser = useBrowser();
   const twoHands = useTwoHands(viewStore, sheet);
+  const [help, setHelp] = useState(false);
   const { back: focusSheet, toSheet, openOutline } = twoHands;
 
   const pages = useMemo(() => (face === 'connections' ? connectionPages(document) : []), [document, face]);
@@ -112,11 +114,17 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
       tidy,
       toSheet,
       outline: openOutline,
+      keys: () => setHelp(true),
       otherFace() {
         const id = store.getState().selection.parts[0];
         const at = hands.doc.parts.find((part) => part.id === id)?.place;
         const other = face === 'overview' ? `connections${at ? `?place=${encodeURIComponent(at)}` : ''}` : 'overview';
         router.push(`/jobs/${view.jobId}/${other}`);
+      },
+      schedule() {
+        const id = store.getState().selection.parts[0];
+        const way = id === undefined ? undefined : findWays(hands.doc).find(({ parts }) => parts.includes(id));
+        router.push(`/jobs/${view.jobId}/schedules${way ? `?way=${encodeURIComponent(way.device)}` : ''}`);
       },
       nextNote(step) {
         if (notes.length === 0) return store.getState().say('No finding.');
@@ -169,6 +177,7 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
       stillLive={stillLive(document)}
       fit="screen"
       keys={KEYS_HELP}
+      help={{ open: help, set: setHelp }}
       skip={{ label: 'To the outline: the drawing as a tree', go: openOutline }}
       strip={<TroubleStrip drawing={drawing} />}
       marginLabel={open === 1 ? '1 finding' : `${open} findings`}
