@@ -6,6 +6,7 @@ import { SheetFrame } from '@/components/frame/sheet-frame';
 import { jobTabs } from '@/components/frame/tabs';
 import type { KeyHelp } from '@/components/frame/types';
 import { SaveStateView } from '@/components/sheet/save-state-view';
+import { TroubleStrip } from '@/components/sheet/trouble-strip';
 import type { Me } from '@/components/sheet/use-drawing';
 import { isEmptyPatch } from '@/diagram/document/patch';
 import { draftPatch } from '@/diagram/survey/draft';
@@ -94,6 +95,7 @@ export function SurveySheet({ view, me, hoursWanted }: SurveySheetProps) {
         titleBlock={titleBlock}
         practice={{ id: document.practice, supply: document.supply }}
         keys={keys}
+        strip={<TroubleStrip drawing={drawing} />}
         marginLabel={problems.length > 0 ? `${problems.length} to put right` : 'Totals and draft'}
         margin={<SurveyMargin survey={survey} draft={<DraftNote survey={survey} document={document} hoursWanted={hoursWanted} onDraft={draft} />} />}
         foot={<SurveyFoot survey={survey} title={titleBlock.number} mayEdit={rights.edit} pasting={pasting} onPasting={setPasting} />}

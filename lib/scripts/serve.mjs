@@ -36,6 +36,7 @@ export function serve({ dev = false, host, port, env, show = true }) {
     }),
   );
   return {
+    pid: child.pid,
     ended,
     async stop() {
       if (status !== null) return;
