@@ -5,9 +5,10 @@ import { cellName, focusCell } from '@/components/grid/focus';
 import type { Part } from '@/diagram/document/schema';
 import { isTyped, type Row, type Table } from '@/diagram/schedules/types';
 import { HEAD, rowKey, type Desk } from './desk';
-import { EDGE_WIDTH, WayEdge } from './way-edge';
+import { WayEdge } from './way-edge';
 
-export const ROW_HEIGHT = 32;
+/** A row is as high as a mouse needs, or a finger. */
+export const ROW_HEIGHT = 'h-7 pointer-coarse:h-11';
 
 interface RowHeadProps {
   desk: Desk;
@@ -46,23 +47,15 @@ export function RowHead({ desk, table, row, index, part, first, last, inHand, la
       data-cell={cellName(rowKey(table.id, row.id), HEAD)}
       aria-label={label}
       aria-pressed={inHand}
-      className={`flex w-full cursor-pointer items-center justify-end focus-visible:-outline-offset-2 ${isWay ? '' : 'px-1 text-small text-grey'} ${inHand ? 'font-bold text-ink' : ''}`}
-      style={{ height: ROW_HEIGHT }}
+      className={`flex w-full cursor-pointer items-center justify-end focus-visible:-outline-offset-2 ${ROW_HEIGHT} ${isWay ? '' : 'px-1 text-small text-grey'} ${inHand ? 'font-bold text-ink' : ''}`}
       onFocus={() => desk.getState().take(table.id, row.id, HEAD)}
       // Safari gives a button that is pressed no focus.
       onClick={(event) => event.currentTarget.focus()}
       onKeyDown={onKeyDown}
     >
       {isWay ? (
-        <span className="block max-sm:hidden" style={{ width: EDGE_WIDTH }}>
-          <WayEdge
-            part={part}
-            number={row.number!}
-            backup={row.group === 'backup'}
-            first={first}
-            last={last}
-            height={ROW_HEIGHT}
-          />
+        <span className="block h-full max-sm:hidden">
+          <WayEdge part={part} number={row.number!} backup={row.group === 'backup'} first={first} last={last} />
         </span>
       ) : null}
       <span className={isWay ? 'font-bold sm:hidden' : ''}>{row.number ?? index + 1}</span>

@@ -96,13 +96,13 @@ export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
             mayEdit={mayEdit}
           />
         );
-        const look = `border-b border-hair p-0 align-middle ${shownOn(column)}`;
+        const look = `border-b border-hair p-0 align-middle ${ROW_HEIGHT} ${shownOn(column)}`;
         return i === 0 ? (
-          <th key={column.id} scope="row" className={`${look} text-left ${inHand ? 'font-semibold' : 'font-normal'}`} style={{ height: ROW_HEIGHT }}>
+          <th key={column.id} scope="row" className={`${look} text-left ${inHand ? 'font-semibold' : 'font-normal'}`}>
             {content}
           </th>
         ) : (
-          <td key={column.id} className={look} style={{ height: ROW_HEIGHT }}>
+          <td key={column.id} className={look}>
             {content}
           </td>
         );

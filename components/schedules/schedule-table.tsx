@@ -16,17 +16,15 @@ interface ScheduleTableProps {
   document: Installation;
   findings: readonly Finding[];
   mayEdit: boolean;
-  /** the table has a heading of its own above it */
-  titled?: boolean;
 }
 
 /** px of a column for so many letters: the lettering advances 7.2 px at 12 px. */
 const pixels = (letters: number): number => Math.round(letters * 7.2) + 6;
 
-const head = 'border-b-2 border-ink px-[3px] pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
+const head = 'sticky top-0 z-10 bg-paper border-b-2 border-ink px-[3px] pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
 
 /** A schedule as one table, typed where it is underlined; on a narrow sheet its columns are turned to page by page. */
-export function ScheduleTable({ desk, table, document, findings, mayEdit, titled }: ScheduleTableProps) {
+export function ScheduleTable({ desk, table, document, findings, mayEdit }: ScheduleTableProps) {
   const columns = useMemo(() => table.columns.filter(({ fileOnly }) => !fileOnly), [table.columns]);
   const pages = useMemo(() => [...new Set(columns.map(({ page }) => page))].filter((page) => page !== 'stays'), [columns]);
   const [wanted, setPage] = useState(pages[0] ?? '');
@@ -43,7 +41,7 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit, titled
   return (
     <>
       <ColumnPages pages={pages} page={page} onTurn={setPage} of={table.title} />
-      <table aria-label={table.title} className="w-full table-fixed border-collapse">
+      <table aria-label={table.title} className="w-full table-fixed border-separate border-spacing-0">
         <colgroup>
           <col style={{ width: isWays ? EDGE_WIDTH : 36 }} className={isWays ? 'max-sm:w-9!' : ''} />
           {columns.map((column) => (
@@ -58,7 +56,7 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit, titled
         </colgroup>
         <thead>
           <tr>
-            <th scope="col" className={`pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey ${isWays ? '' : 'border-b-2 border-ink'}`}>
+            <th scope="col" className={`sticky top-0 z-10 bg-paper pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey ${isWays ? '' : 'border-b-2 border-ink'}`}>
               {isWays ? (
                 <>
                   LINE
@@ -117,7 +115,6 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit, titled
           })}
         </tbody>
       </table>
-      {titled && <div className="h-6" />}
     </>
   );
 }
