@@ -37,8 +37,11 @@ export interface Conditions {
   list: Condition[];
 }
 
-/** Beyond this many changeovers not every combination of their positions is looked at. */
-const MOST_COMBINED = 3;
+/**
+ * Beyond this many changeovers not every combination of their positions is looked at: then every two of them are seen in every
+ * pair of A and B, the others all at A or all at B.
+ */
+export const MOST_COMBINED = 3;
 
 /**
  * True when a battery stands between the inverter's two dc terminals.
@@ -76,6 +79,7 @@ function combinations(changeovers: readonly Part[]): Map<string, 'A' | '0' | 'B'
     all('A').set(id, 'B'),
     all('A').set(id, '0'),
     all('B').set(id, 'A'),
+    all('B').set(id, '0'),
   ]);
   return [all('A'), all('B'), ...oneApart];
 }

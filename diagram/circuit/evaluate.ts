@@ -7,7 +7,7 @@ import { findCrossedJoints, type CrossedJoint } from './crossed-joints';
 import { earthAnchors } from './earth';
 import type { Nature } from './natures';
 import { findDoubledNeutrals, findMeetings } from './odd-one-out';
-import type { ParallelJoint } from './parallel-joints';
+import { joinsFeeds, type ParallelJoint } from './parallel-joints';
 import { switchPositions, type Positions } from './positions';
 
 /** The home in one condition with its two-way and cross switches in one position. */
@@ -246,6 +246,7 @@ export function evaluate(graph: Graph): Evaluation {
   const conditions = listConditions(graph);
   const positions = switchPositions(graph);
   const evaluated: Evaluated[] = [];
+  const onMains: number[][] = [];
   for (const condition of conditions.list) {
     const places = JSON.stringify([...condition.positions]);
     const mains = evaluated.find(
@@ -253,6 +254,18 @@ export function evaluate(graph: Graph): Evaluation {
     );
     const loops = mains ? [...mains.lineLoops, ...mains.neutralLoops].map(({ edge }) => edge) : [];
     evaluated.push(evaluateCondition(graph, condition, positions, loops));
+    onMains.push(loops);
   }
-  return { ...conditions, positions, evaluated };
+  const common = { ...conditions, positions };
+  if (conditions.changeovers.length === 0) return { ...common, evaluated };
+  // A wire that joins two feeds while the changeovers stand one way is no feed while they stand another.
+  const meeting = evaluated.flatMap(({ lineLoops }) => lineLoops.filter((joint) => joinsFeeds(graph, joint)));
+  if (meeting.length === 0) return { ...common, evaluated };
+  const joints = [...new Set(meeting.map(({ edge }) => edge))];
+  return {
+    ...common,
+    evaluated: evaluated.map(({ condition }, i) =>
+      evaluateCondition(graph, condition, positions, [...joints, ...onMains[i]!]),
+    ),
+  };
 }

@@ -114,3 +114,8 @@ export const meetsDevice = (graph: Graph, { loop }: ParallelJoint): boolean =>
     const { kind } = graph.edges[number]!;
     return kind === 'device' || kind === 'bypass' || kind === 'changeover';
   });
+
+/** True when a wire closes a loop that passes a protective device or an inverter, not changeovers alone. */
+export const joinsFeeds = (graph: Graph, { edge, loop }: ParallelJoint): boolean =>
+  graph.edges[edge]!.wire !== undefined &&
+  loop.some((number) => graph.edges[number]!.kind === 'device' || graph.edges[number]!.kind === 'bypass');

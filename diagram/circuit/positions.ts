@@ -15,14 +15,41 @@ export interface Positions {
   count: number;
   /** true when the contact is closed in this position */
   isClosed(edge: Edge, position: number): boolean;
+  /** pairs of positions in which one switch of a set stands both ways while its fellows stay */
+  flips(set: SwitchSet, at: number): [number, number][];
   /** by node, what is joined with all two-way and cross contacts open */
   group: Int32Array;
   /** true for line, neutral and earth before any of these switches: sets do not meet through them */
   isRail(node: number): boolean;
 }
 
-/** More switches in one set than this share bits: 2^6 positions is the most that is looked at. */
-const MOST_BITS = 6;
+/**
+ * The most switches of one set that are looked at in all combinations, 2^6. Of a larger set each switch is turned by itself,
+ * once with all others one way and once with all the other way.
+ */
+export const MOST_COMBINED_SWITCHES = 6;
+
+const combines = ({ switches }: SwitchSet): boolean => switches.length <= MOST_COMBINED_SWITCHES;
+const positionsOf = (set: SwitchSet): number =>
+  combines(set) ? 2 ** set.switches.length : 2 * (set.switches.length + 1);
+
+/** True when a switch of a set stands the second way in a position: a bit of its number, or the one turned by itself. */
+function isTurned(set: SwitchSet, at: number, position: number): boolean {
+  const here = position % positionsOf(set);
+  if (combines(set)) return ((here >> at) & 1) === 1;
+  const half = set.switches.length + 1;
+  return here >= half !== (here % half === at + 1);
+}
+
+function flips(set: SwitchSet, at: number): [number, number][] {
+  const half = set.switches.length + 1;
+  if (!combines(set))
+    return [
+      [0, at + 1],
+      [half, half + at + 1],
+    ];
+  return Array.from({ length: positionsOf(set) }, (_, position): [number, number] => [position, position ^ (1 << at)]);
+}
 
 const FIRST = new Set(['1', 'straight']);
 
@@ -33,7 +60,7 @@ const FIRST = new Set(['1', 'straight']);
 export function switchPositions(graph: Graph): Positions {
   const selects = [...graph.parts.values()].filter(({ kind }) => kind === 'switch-2way' || kind === 'switch-cross');
   if (selects.length === 0)
-    return { sets: [], count: 1, isClosed: () => true, group: new Int32Array(), isRail: () => true };
+    return { sets: [], count: 1, isClosed: () => true, flips, group: new Int32Array(), isRail: () => true };
   const closed = closedEdges(graph, (edge) => edge.kind === 'select' || edge.kind === 'bond');
   const rails: number[] = [];
   graph.partOf.forEach((part, node) => {
@@ -71,12 +98,15 @@ export function switchPositions(graph: Graph): Positions {
   const members = new Map<string, string[]>();
   for (const { id } of selects.sort(byDesignation)) members.set(find(id), [...(members.get(find(id)) ?? []), id]);
   const sets = [...members.values()].map((switches) => ({ switches }));
-  const bitOf = new Map(sets.flatMap(({ switches }) => switches.map((id, i) => [id, i % MOST_BITS] as const)));
-  const bits = Math.min(MOST_BITS, Math.max(...sets.map(({ switches }) => switches.length)));
+  const placeOf = new Map(sets.flatMap((set) => set.switches.map((id, at) => [id, { set, at }] as const)));
   return {
     sets,
-    count: 2 ** bits,
-    isClosed: (edge, position) => FIRST.has(edge.position!) === (((position >> bitOf.get(edge.part!)!) & 1) === 0),
+    count: Math.max(...sets.map(positionsOf)),
+    isClosed(edge, position) {
+      const { set, at } = placeOf.get(edge.part!)!;
+      return FIRST.has(edge.position!) !== isTurned(set, at, position);
+    },
+    flips,
     group,
     isRail: (node) => reaches(fixed, node),
   };

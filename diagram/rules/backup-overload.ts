@@ -1,5 +1,6 @@
 import { exceeds, voltAmps, watts } from './readings/amounts';
 import { COMMON_PRACTICE, recalled } from './clauses';
+import { largerInverter, waysToMains } from './readings/backup-remedies';
 import { backupsOf } from './readings/figures';
 import { lackOf, lackOfWatts } from './readings/lacking';
 import type { Rule } from './types';
@@ -20,7 +21,8 @@ export const backupOverload: Rule = {
     remedy: 'Move loads back to the mains, or fit a larger inverter with its fuse and leads.',
   },
   *check(context) {
-    for (const { inverter, load, drawn, known, conditions } of backupsOf(context)) {
+    for (const figures of backupsOf(context)) {
+      const { inverter, load, drawn, known, conditions } = figures;
       if (inverter.va === undefined || !known || !exceeds(load.va, inverter.va)) continue;
       const largest = [...drawn].sort((a, b) => b.amps - a.amps)[0]!;
       yield {
@@ -30,6 +32,7 @@ export const backupOverload: Rule = {
           `The most of it is ${sayParts(context, [largest.part.id])}.`,
         parts: [inverter.id],
         conditions,
+        remedies: [...largerInverter(context, figures, load), ...waysToMains(context, figures)],
       };
     }
   },

@@ -1,5 +1,6 @@
 import { exceeds, voltAmps } from './readings/amounts';
 import { COMMON_PRACTICE } from './clauses';
+import { largerInverter, wayToMains } from './readings/backup-remedies';
 import { backupsOf } from './readings/figures';
 import { lackOf } from './readings/lacking';
 import type { Rule } from './types';
@@ -20,7 +21,8 @@ export const backupSurge: Rule = {
     remedy: 'Keep motors with hard starts on the mains, or fit an inverter with a larger surge.',
   },
   *check(context) {
-    for (const { inverter, load, known, conditions } of backupsOf(context)) {
+    for (const figures of backupsOf(context)) {
+      const { inverter, load, known, conditions, drawn } = figures;
       const overloaded = inverter.va !== undefined && exceeds(load.va, inverter.va);
       // What is too much already while it runs is the finding of `backup-overload`.
       if (
@@ -36,6 +38,10 @@ export const backupSurge: Rule = {
         message: `With the rest running, that start takes ${voltAmps(load.surgeVa)}; ${say(context, inverter.id)} gives ${voltAmps(inverter.surge)} for a moment.`,
         parts: [inverter.id, load.starts],
         conditions,
+        remedies: [
+          ...largerInverter(context, figures, load),
+          ...drawn.flatMap(({ part, way }) => (part.id === load.starts && way !== null ? wayToMains(context, way) : [])),
+        ],
       };
     }
   },

@@ -1,7 +1,16 @@
+import type { PartOf } from '../document/schema';
 import { COMMON_PRACTICE, recalled } from './clauses';
+import type { Context } from './context';
 import { lackOf } from './readings/lacking';
-import type { Rule } from './types';
+import { changePart } from './readings/remedies';
 import { capital, say } from './readings/words';
+import type { Remedy, Rule } from './types';
+
+/** "Stand it in Loft": places with air where nobody sleeps. */
+const elsewhere = (context: Context, battery: PartOf<'battery'>): Remedy[] =>
+  context.document.places
+    .filter(({ kind, sleeping, ventilated }) => kind !== 'wet' && !sleeping && (kind === 'outdoor' || ventilated === true))
+    .map(({ id, name }) => changePart(`Stand it in ${name}`, battery, { place: id }));
 
 /** A flooded battery where its gas, or its acid, meets people. Outdoors there is air enough. */
 export const batteryPlace: Rule = {
@@ -27,6 +36,7 @@ export const batteryPlace: Rule = {
         heading: `${capital(say(context, battery.id))} stands in ${place.name}`,
         message: `A flooded battery gives off hydrogen and a mist of acid while it charges; ${say(context, battery.id)} stands in ${place.name}, ${why}.`,
         parts: [battery.id],
+        remedies: [changePart('Fit a sealed battery', battery, { chemistry: 'vrla' }), ...elsewhere(context, battery)],
       };
     }
   },

@@ -1,11 +1,12 @@
+import { MOST_COMBINED } from '../circuit/conditions';
 import { isOvercurrent } from '../terminals/roles-of-parts';
 import { recalled, seen } from './clauses';
 import type { Context } from './context';
 import { lineLoops } from './readings/line-loops';
 import { openRegions } from './readings/open-regions';
 import { takeOut } from './readings/rewire';
-import type { Rule } from './types';
 import { be, capital, say, sayParts, sayWire } from './readings/words';
+import type { Rule } from './types';
 
 /** One conductor joined to the lines of two overcurrent devices, or of mains and backup, at once. */
 export const mixedFeeds: Rule = {
@@ -70,6 +71,14 @@ export const mixedFeeds: Rule = {
         ...(conditions && { conditions }),
       };
     }
+  },
+  *lacks(context) {
+    const { changeovers } = context.evaluation;
+    if (changeovers.length <= MOST_COMBINED) return;
+    yield {
+      parts: changeovers.map(({ id }) => id),
+      what: `all combinations of ${changeovers.length} changeovers: every two were looked at, the others all at A or all at B`,
+    };
   },
 };
 

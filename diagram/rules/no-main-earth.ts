@@ -1,11 +1,11 @@
-import { recalled } from './clauses';
-import { crossings } from './readings/crossings';
-import { joinTo } from './readings/rewire';
 import { reaches } from '../terminals/reach';
 import { isPoint } from '../terminals/roles-of-parts';
+import { recalled } from './clauses';
 import type { Context } from './context';
-import type { Rule } from './types';
+import { crossings } from './readings/crossings';
+import { joinTo } from './readings/rewire';
 import { capital, say } from './readings/words';
+import type { Rule } from './types';
 
 /** True once something that uses energy is wired: before that a drawing has only begun. */
 function isBegun({ document, graph }: Context): boolean {

@@ -8,8 +8,8 @@ import { once } from './readings/once';
 import { openRegions } from './readings/open-regions';
 import { potentials } from './readings/potentials';
 import { rejoin } from './readings/rejoin';
-import type { Rule } from './types';
 import { be, capital, say, sayParts, sayWire } from './readings/words';
+import type { Rule } from './types';
 
 /** Line wires that should have led on and are landed on neutral or earth instead: the short circuit tells what is dead behind. */
 const shortedLines = once((context: Context): number => {

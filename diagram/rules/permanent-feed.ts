@@ -1,13 +1,16 @@
+import type { Part, Wire } from '../document/schema';
 import type { Edge } from '../terminals/graph';
 import { closedEdges, groups, reach, reaches } from '../terminals/reach';
 import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
 import { bypassedContacts } from './readings/bypassed';
 import { neutralContacts } from './readings/neutral-contacts';
+import { freeRef, newPartId } from './readings/put-in';
 import { reversedPoints } from './readings/reversals';
+import { newWireId } from './readings/rewire';
 import { truthTables } from './readings/switch-sets';
-import type { Rule } from './types';
 import { capital, say } from './readings/words';
+import type { Remedy, Rule } from './types';
 
 /** A regulator turns down to off and a plug is pulled: both leave a person a way to have it dark. */
 const commands = (edge: Edge): boolean => edge.kind === 'switch' || edge.kind === 'select' || edge.kind === 'plug';
@@ -33,6 +36,27 @@ function told(context: Context): Set<string> {
   for (const { points: states } of context.evaluated)
     for (const { part, lineEnd } of states.values()) if (bypassed.has(stretch[lineEnd]!)) points.add(part.id);
   return points;
+}
+
+/** A switch where the line of the point begins, in its own place: the core that is there becomes the switched one. */
+function switchBefore(context: Context, id: string): Remedy[] {
+  const { graph, document } = context;
+  const part = graph.parts.get(id)!;
+  const wires = document.wires.filter(({ from, to }) => [from, to].some(([at, mark]) => at === id && mark === 'L'));
+  const [wire] = wires;
+  if (!wire || wires.length > 1) return [];
+  const [near, far] = wire.from[0] === id ? [wire.from, wire.to] : [wire.to, wire.from];
+  const place = graph.parts.get(far[0])!.place;
+  if (place !== part.place) return [];
+  const control: Part = {
+    id: newPartId(context, `${id}.switch`),
+    kind: 'switch',
+    ref: freeRef(context, 'S'),
+    ...(place !== undefined && { place }),
+  };
+  const switched: Wire = { ...wire, from: [control.id, '2'], to: near, role: 'switched' };
+  const line: Wire = { id: newWireId(context, control.id), from: far, to: [control.id, '1'], role: 'line' };
+  return [{ label: 'Put a switch into its line', patch: { set: { parts: [control], wires: [switched, line] } } }];
 }
 
 /** A lamp or fan with no control switch in its line. */
@@ -68,6 +92,7 @@ export const permanentFeed: Rule = {
         heading: `Nothing switches ${say(context, id)}`,
         message: `${capital(say(context, id))} is joined to its way with no switch in the line: it is always on.`,
         parts: [id],
+        remedies: switchBefore(context, id),
       };
   },
 };

@@ -1,5 +1,6 @@
 import { exceeds, hours, watts } from './readings/amounts';
 import { COMMON_PRACTICE } from './clauses';
+import { largerBank, waysToMains } from './readings/backup-remedies';
 import { backupsOf } from './readings/figures';
 import { lackOfBattery } from './readings/lacking';
 import type { Rule } from './types';
@@ -20,7 +21,8 @@ export const shortAutonomy: Rule = {
     remedy: 'Fit a larger bank with a charger for it, or leave something off in an outage.',
   },
   *check(context) {
-    for (const { inverter, hours: lasts, load, known, assumed, conditions } of backupsOf(context)) {
+    for (const figures of backupsOf(context)) {
+      const { inverter, hours: lasts, load, known, assumed, conditions } = figures;
       const wanted = inverter.hoursWanted;
       if (wanted === undefined || lasts === null || !known || !exceeds(wanted, lasts)) continue;
       yield {
@@ -30,6 +32,7 @@ export const shortAutonomy: Rule = {
           `${Math.round(100 * assumed.ageing)} % left with age and a Peukert exponent of ${assumed.peukert}.`,
         parts: [inverter.id],
         conditions,
+        remedies: [...largerBank(context, figures, wanted), ...waysToMains(context, figures)],
       };
     }
   },

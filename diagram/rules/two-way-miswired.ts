@@ -1,9 +1,11 @@
+import { MOST_COMBINED_SWITCHES } from '../circuit/positions';
 import { COMMON_PRACTICE } from './clauses';
 import { bypassedContacts } from './readings/bypassed';
 import { crossings } from './readings/crossings';
+import { usualTwoWay } from './readings/rewire-two-way';
 import { truthTables } from './readings/switch-sets';
-import type { Rule } from './types';
 import { capital, sayParts } from './readings/words';
+import type { Rule } from './types';
 
 /** A set of two-way switches of which one cannot change the lamp in some position of the others. */
 export const twoWayMiswired: Rule = {
@@ -41,9 +43,20 @@ export const twoWayMiswired: Rule = {
       );
       yield {
         heading: `${capital(sayParts(context, points))} cannot be changed from everywhere`,
-        message: `In some position of the others, ${sayParts(context, idle)} does not change ${sayParts(context, points)}.`,
+        message: `In some position of the others, ${sayParts(context, idle)} ${idle.size === 1 ? 'does' : 'do'} not change ${sayParts(context, points)}.`,
         parts: [...switches],
         wires: wires.map(({ id }) => id),
+        remedies: usualTwoWay(context, switches),
+      };
+    }
+  },
+  *lacks(context) {
+    for (const { switches } of context.evaluation.positions.sets) {
+      if (switches.length <= MOST_COMBINED_SWITCHES) continue;
+      const names = sayParts(context, switches);
+      yield {
+        parts: switches,
+        what: `all combinations of ${switches.length} switches: ${names} were each turned from two positions of the others`,
       };
     }
   },

@@ -1,13 +1,13 @@
 import { describe, expect, it } from 'vitest';
 import type { Drawing } from '@/diagram/document/builder';
-import { backupHome, Home, smallHome } from '@/diagram/document/home';
+import { backupHome, Home, smallHome, type HomeOptions } from '@/diagram/document/home';
 import { applyPatch } from '@/diagram/document/patch';
 import { readDocument } from '@/diagram/document/schema';
 import { remediesFor } from '@/diagram/rules/remedies-for';
 import { findingsOf } from './rule-tester';
 
-const twoWays = () =>
-  new Home()
+const twoWays = (options: HomeOptions = {}) =>
+  new Home(options)
     .place('study', 'room', { name: 'Study' })
     .place('den', 'room', { name: 'Den' })
     .way('Q11', 'study')
@@ -149,6 +149,91 @@ const CASES: Record<string, [rule: string, drawing: Drawing, offers: string[]]> 
       .line('X1:L', 'X2:L')
       .line('X1:L', 'X3:L'),
     ['Join them in a connector behind it'],
+  ],
+  'an inverter too small for what runs': [
+    'backup-overload',
+    backupHome({ va: 100, surge: 200 }).set('X2', { load: 200 }),
+    ['Fit an inverter of 400 VA', 'Move Q21 to the mains'],
+  ],
+  'a start beyond the inverter': [
+    'backup-surge',
+    backupHome({ va: 400, surge: 450 }).fan('M2', 'S3', 'R3', 'Q21', { watts: 90, surge: 4 }),
+    ['Fit an inverter of 600 VA', 'Move Q21 to the mains'],
+  ],
+  'a bank that lasts too short': [
+    'short-autonomy',
+    backupHome({ hoursWanted: 12 }).set('X2', { load: 60 }),
+    ['Fit a battery of 220 Ah', 'Fit 2 such batteries in parallel', 'Move Q21 to the mains'],
+  ],
+  'a flooded battery in a bedroom': [
+    'battery-place',
+    backupHome()
+      .place('alcove', 'room', { name: 'Alcove', sleeping: true })
+      .place('porch', 'outdoor', { name: 'Porch' })
+      .set('G2', { chemistry: 'flooded', place: 'alcove' }),
+    ['Fit a sealed battery', 'Stand it in Porch'],
+  ],
+  'two rcds in series without delay': [
+    'no-selectivity',
+    smallHome()
+      .part('rcd', 'Q6', 'hall', { rating: 63, sensitivity: 0.03, type: 'A', delay: 'none' })
+      .cut('LB0', 'Q2')
+      .cut('NB0', 'Q2')
+      .line('LB0', 'Q6:1')
+      .neutral('NB0', 'Q6:3')
+      .line('Q6:2', 'Q2:1')
+      .neutral('Q6:4', 'Q2:3'),
+    ['Make Q6 one of type S, 100 mA'],
+  ],
+  'no main switch': [
+    'no-main-switch',
+    twoWays({ rcd: false })
+      .cut('P1', 'Q1')
+      .cut('Q1', 'LB0')
+      .cut('Q1', 'NB0')
+      .drop('Q1')
+      .line('P1:4', 'LB0')
+      .neutral('P1:3', 'NB0'),
+    ['Put a two-pole main switch behind the meter'],
+  ],
+  'no service fuse': [
+    'no-overcurrent',
+    smallHome().cut('SUP:L', 'F1').cut('F1', 'P1').drop('F1').line('SUP:L', 'P1:1'),
+    ['Put a service fuse of 63 A before the meter'],
+  ],
+  'a lamp that nothing switches': [
+    'permanent-feed',
+    smallHome().cut('JL11', 'S1').cut('S1', 'E1').drop('S1').line('JL11', 'E1:L', 'cE1'),
+    ['Put a switch into its line'],
+  ],
+  'common and strapper changed over': [
+    'two-way-miswired',
+    smallHome()
+      .twoWay('E3', 'S31', 'S32', 'Q11')
+      .move('S32:C', 'E3:L', 'S32:9')
+      .move('S32:1', 'S31:1', 'S32:C')
+      .move('S32:9', 'E3:L', 'S32:1'),
+    ['Wire them the usual way'],
+  ],
+  'an rcd with its neutral fed from the wrong end': [
+    'residual-imbalance',
+    smallHome().move('Q2:3', 'NB0', 'Q2:4').move('Q2:4', 'NB', 'Q2:3'),
+    ['Turn the neutral of Q2 round'],
+  ],
+  "the service's line core on the neutral": [
+    'open-line',
+    smallHome().move('SUP:L', 'F1:1', 'SUP:N'),
+    ['Move the line from N to L of the supply in Hall'],
+  ],
+  "the service's neutral core on the line": [
+    'open-neutral',
+    smallHome().move('SUP:N', 'P1:2', 'SUP:L'),
+    ['Move the neutral from L to N of the supply in Hall'],
+  ],
+  'a way whose line begins on the neutral bar': [
+    'open-line',
+    smallHome().move('LB', 'Q11:1', 'NB'),
+    ['Move the line to the line bar in Hall'],
   ],
 };
 

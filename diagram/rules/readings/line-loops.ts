@@ -16,6 +16,8 @@ export const lineLoops = once((context: Context): LineLoop[] => {
   const found = new Map<number, LineLoop>();
   for (const { condition, lineLoops: loops } of context.evaluated) {
     for (const { edge, loop } of loops) {
+      // Changeovers that stand side by side on one way close a loop as well, of that way alone.
+      if (!loop.some((number) => graph.edges[number]!.kind === 'device' || graph.edges[number]!.kind === 'bypass')) continue;
       const through = [edge, ...loop].map((number) => graph.edges[number]!).filter(({ kind }) => kind === 'select');
       const switches = [...new Set(through.map(({ part }) => part!))].sort();
       const entry = found.get(edge) ?? { edge, loop, conditions: [], switches };

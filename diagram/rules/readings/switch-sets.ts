@@ -50,7 +50,8 @@ export const truthTables = once((context: Context): TruthTable[] => {
           ),
       );
       if (!fed.includes(true)) continue;
-      const idle = set.switches.filter((_, bit) => fed.some((now, position) => now === fed[position ^ (1 << bit)]));
+      const { flips } = evaluation.positions;
+      const idle = set.switches.filter((_, at) => flips(set, at).some(([one, other]) => fed[one] === fed[other]));
       tables.push({ point: part.id, switches: set.switches, fed, idle, condition: condition.name });
       break;
     }
