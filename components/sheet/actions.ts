@@ -29,6 +29,8 @@ export interface ActionContext {
   outline: () => void;
   /** gives the canvas the hands */
   toSheet: () => void;
+  /** shows the list of the keys */
+  keys: () => void;
 }
 
 const camera = ({ hands }: ActionContext) => hands.view.getState().camera;
@@ -129,6 +131,12 @@ export const ACTIONS: readonly Action[] = [
     keys: 'Ctrl K',
     does: (context) => mode(context).setMode({ kind: 'commands' }),
   },
+  {
+    id: 'legend',
+    words: 'Legend: what the symbols and lines are called',
+    keys: 'k',
+    does: (context) => mode(context).setMode({ kind: 'legend' }),
+  },
   { id: 'larger', words: 'Larger', keys: '+', does: (context) => camera(context)?.zoom(1.25) },
   { id: 'smaller', words: 'Smaller', keys: '-', does: (context) => camera(context)?.zoom(0.8) },
   { id: 'whole', words: 'Whole sheet', keys: 'Home', does: (context) => camera(context)?.all() },
@@ -192,6 +200,7 @@ export const ACTIONS: readonly Action[] = [
     keys: 'x',
     does: (context) => mode(context).setMode({ kind: 'export' }),
   },
+  { id: 'keys', words: 'Keys of this sheet, with the switch for single letters', keys: '?', does: ({ keys }) => keys() },
   { id: 'rest', words: 'One step back', keys: 'Esc', does: ({ hands }) => hands.letGo() },
 ];
 
@@ -205,12 +214,9 @@ export const KEYS_HELP: readonly KeyHelp[] = [
 
 /** The key of an event as it is printed: "Ctrl Shift Z", "Shift N", "e". Letters by what is typed, by place where it is not Latin. */
 export function keyName(event: Pick<KeyboardEvent, 'key' | 'code' | 'ctrlKey' | 'metaKey' | 'shiftKey'>): string {
-  const latin =
-    event.key.length !== 1 || event.key <= '~'
-      ? event.key
-      : event.code.startsWith('Key')
-        ? event.code.slice(3).toLowerCase()
-        : event.key;
+  // One key of an Arabic keyboard writes two letters at once: length tells nothing.
+  const foreign = /[^ -~]/.test(event.key) && event.code.startsWith('Key');
+  const latin = foreign ? event.code.slice(3).toLowerCase() : event.key;
   const ctrl = event.ctrlKey || event.metaKey;
   const letter = /^[a-z]$/i.test(latin);
   if (ctrl) return `Ctrl ${event.shiftKey && letter ? 'Shift ' : ''}${letter ? latin.toUpperCase() : latin}`;

@@ -1,26 +1,19 @@
 'use client';
 
-import { useEffect, useLayoutEffect, useState, type ReactNode, type RefObject } from 'react';
+import { useEffect, useState, type RefObject } from 'react';
 import type { End } from '@/diagram/document/schema';
-import { nameOf } from '@/diagram/document/names';
 import type { ConnectionPage } from '@/diagram/layout/connections-scene';
-import type { Point, Scene } from '@/diagram/layout/scene';
+import type { Scene } from '@/diagram/layout/scene';
 import { useSingleKeys } from '@/components/frame/single-keys';
 import type { ActionContext } from './actions';
 import { Canvas } from './canvas/canvas';
-import { endPoint } from './canvas/pick';
-import { EditPanel } from './edit-panel';
-import { SlipPanel } from './extend/slip';
+import { useBox } from './floating';
 import type { Slip } from './extend/use-slip';
-import { ExportPanel } from './foot/export-panel';
 import { handWords } from './hand-words';
-import { HistoryPanel } from './history-panel';
 import { Leader } from './margin/leader';
 import type { MarkedNote } from './margin/notes';
-import { CommandList, FindList, WayList } from './sheet-lists';
-import { RoomPanel } from './room-panel';
+import { Panels } from './panels';
 import { StartPanel } from './start-panel';
-import { TidyPanel } from './tidy/tidy-panel';
 import { useSheet, type OpenDrawing } from './use-drawing';
 import { useKeyboard } from './use-keyboard';
 import { REST, useView, useViewStore } from './view';
@@ -42,57 +35,6 @@ interface SurfaceProps {
 }
 
 const NONE: readonly End[] = [];
-/** px: below this the slip is the foot of the screen */
-const NARROW = 760;
-const SLIP = 440;
-
-/** Where a panel of this width stands so that the point it speaks of stays in sight. */
-function beside(
-  at: Point | undefined,
-  box: { width: number; height: number },
-  width: number,
-): { left: number; top: number } {
-  if (!at) return { left: Math.max(8, box.width - width - 12), top: 12 };
-  const right = at.x + 48 + width <= box.width;
-  const left = right ? Math.max(8, at.x + 48) : Math.max(8, at.x - 48 - width);
-  return { left, top: Math.max(12, Math.min(box.height - 320, at.y - 40)) };
-}
-
-interface FloatingProps {
-  box: { width: number; height: number };
-  at?: Point | undefined;
-  width: number;
-  children: ReactNode;
-}
-
-/** A panel that lies on the sheet, beside the point it speaks of; a wide one is the foot of a narrow screen. */
-function Floating({ box, at, width, children }: FloatingProps) {
-  if (box.width < NARROW && width === SLIP)
-    return (
-      <div className="absolute inset-x-0 bottom-0 z-10 max-h-[70%] overflow-y-auto border-t-2 border-ink bg-paper">
-        {children}
-      </div>
-    );
-  const fits = Math.min(width, Math.max(200, box.width - 16));
-  return (
-    <div className="absolute z-10" style={{ ...beside(at, box, fits), width: fits }}>
-      {children}
-    </div>
-  );
-}
-
-/** The size of the sheet on the screen, in px. */
-function useBox(sheet: RefObject<HTMLDivElement | null>): { width: number; height: number } {
-  const [box, setBox] = useState({ width: 0, height: 0 });
-  useLayoutEffect(() => {
-    const element = sheet.current;
-    if (!element) return;
-    const observer = new ResizeObserver(() => setBox({ width: element.clientWidth, height: element.clientHeight }));
-    observer.observe(element);
-    return () => observer.disconnect();
-  }, [sheet]);
-  return box;
-}
 
 /** The sheet itself: the canvas, what lies open on it, and the keys. One tab stop. */
 export function SheetSurface(props: SurfaceProps) {
@@ -100,7 +42,6 @@ export function SheetSurface(props: SurfaceProps) {
   const { hands } = context;
   const view = useViewStore();
   const mode = useView((state) => state.mode);
-  const camera = useView((state) => state.camera);
   const editing = useView((state) => state.editing);
   const document = useSheet(drawing.store, (state) => state.document);
   const selection = useSheet(drawing.store, (state) => state.selection);
@@ -108,7 +49,6 @@ export function SheetSurface(props: SurfaceProps) {
   const onKeyDown = useKeyboard(context);
   const candidates = mode.kind === 'wire' ? hands.candidates(mode.from) : NONE;
   const target = mode.kind === 'wire' ? (candidates[mode.index] ?? null) : null;
-  const slipAt = slip ? endPoint(scene, slip.end) : null;
   const [ready, setReady] = useState(false);
   const box = useBox(sheet);
   const empty = document.parts.length === 0;
@@ -125,7 +65,6 @@ export function SheetSurface(props: SurfaceProps) {
     view.getState().setMode(REST);
     focusSheet();
   };
-  const part = slip && document.parts.find((candidate) => candidate.id === slip.end[0]);
   return (
     <div
       ref={sheet}
@@ -181,51 +120,17 @@ export function SheetSurface(props: SurfaceProps) {
         </nav>
       )}
       <Leader box={sheet} scene={scene} notes={notes} />
-      {slip && part && (
-        <Floating box={box} at={slipAt && camera ? camera.onScreen(slipAt) : undefined} width={SLIP}>
-          <SlipPanel slip={slip} name={`${nameOf(document, part)}:${slip.end[1]}`} onLeave={focusSheet} />
-        </Floating>
-      )}
-      {mode.kind === 'edit' && (
-        <Floating box={box} at={camera?.onScreen(mode.at)} width={224}>
-          <EditPanel key={mode.part ?? mode.cable} mode={mode} hands={hands} onDone={focusSheet} />
-        </Floating>
-      )}
-      {mode.kind === 'room' && (
-        <Floating box={box} width={360}>
-          <RoomPanel mode={mode} hands={hands} onLeave={close} />
-        </Floating>
-      )}
-      {mode.kind === 'commands' && (
-        <Floating box={box} width={520}>
-          <CommandList context={context} onLeave={close} />
-        </Floating>
-      )}
-      {mode.kind === 'find' && (
-        <Floating box={box} width={480}>
-          <FindList context={context} notes={notes} onLeave={close} onNote={onNote} />
-        </Floating>
-      )}
-      {mode.kind === 'load' && (
-        <Floating box={box} width={480}>
-          <WayList context={context} mode={mode} onLeave={close} />
-        </Floating>
-      )}
-      {mode.kind === 'history' && (
-        <Floating box={box} width={480}>
-          <HistoryPanel drawing={drawing} onLeave={close} />
-        </Floating>
-      )}
-      {mode.kind === 'export' && (
-        <Floating box={box} width={520}>
-          <ExportPanel drawing={drawing} hands={hands} scene={scene} onLeave={close} />
-        </Floating>
-      )}
-      {mode.kind === 'tidy' && (
-        <Floating box={box} width={360}>
-          <TidyPanel mode={mode} hands={hands} tidy={context.tidy} onLeave={close} />
-        </Floating>
-      )}
+      <Panels
+        box={box}
+        drawing={drawing}
+        context={context}
+        scene={scene}
+        notes={notes}
+        slip={slip}
+        onNote={onNote}
+        close={close}
+        focusSheet={focusSheet}
+      />
     </div>
   );
 }

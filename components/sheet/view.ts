@@ -36,6 +36,8 @@ export interface Camera {
   zoom(by: number): void;
   /** brings a point of the drawing, in 1/100 mm, to the middle unless it is in sight already */
   show(point: Point, always?: boolean): void;
+  /** moves the drawing up where so many px at the foot of the canvas hide a point of it */
+  clear(point: Point, foot: number): void;
   /** where a point of the drawing stands, in px of the canvas box */
   onScreen(point: Point): Point;
 }

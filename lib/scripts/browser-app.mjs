@@ -14,6 +14,7 @@ import { throwawayCluster } from './throwaway.mjs';
  * it is told to stop: node lib/scripts/browser-app.mjs PORT
  */
 const port = Number(process.argv[2]);
+const folder = process.env.OHMSTEAD_BUILD_DIR ?? '.next-test';
 const address = `http://127.0.0.1:${port}`;
 const undo = [];
 let stopping;
@@ -25,7 +26,7 @@ async function takeDown(status) {
 }
 for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => void stop(0));
 try {
-  await buildIfChanged('.next-test');
+  await buildIfChanged(folder);
   const cluster = await throwawayCluster();
   undo.push(cluster.stop);
   await cluster.createDatabase('ohmstead');
@@ -36,7 +37,7 @@ try {
     DATABASE_URL: cluster.url('ohmstead'),
     NEXTAUTH_SECRET: randomBytes(32).toString('base64url'),
     NEXTAUTH_URL: address,
-    OHMSTEAD_BUILD_DIR: '.next-test',
+    OHMSTEAD_BUILD_DIR: folder,
     UPLOADS_FOLDER: uploads,
   };
   await seedDemo({ env, wanted: true });

@@ -166,7 +166,7 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
     ([first, second]: Near[], id: string) => {
       const { mode, setMode } = view.getState();
       if (first && second) {
-        const ends = [first, second].flatMap((each) => hands.oneOf(each.ends) ?? []);
+        const ends = [first, second].flatMap((each): End[] => hands.oneOf(each.ends) ? [hands.oneOf(each.ends)!] : []);
         setMode({ kind: 'choose', ends, at: first.at, back: mode.kind === 'choose' ? mode.back : mode });
       } else {
         const end = first ? hands.oneOf(first.ends) : null;

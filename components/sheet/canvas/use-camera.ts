@@ -60,6 +60,12 @@ export function useCamera(scene: Scene): void {
           if (!always && at.x > 60 && at.y > 60 && at.x < w - 60 && at.y < h - 60) return;
           void flow.setCenter(px(point.x), px(point.y), { zoom: Math.max(zoom, 0.8) });
         },
+        clear(point, foot) {
+          const { x, y, zoom } = flow.getViewport();
+          const [, h = 0] = box.split(' ').map(Number);
+          const hidden = px(point.y) * zoom + y - (h - foot - 80);
+          if (hidden > 0) void flow.setViewport({ x, y: Math.round(y - hidden), zoom });
+        },
         onScreen(point) {
           const { x, y, zoom } = flow.getViewport();
           return { x: px(point.x) * zoom + x, y: px(point.y) * zoom + y };

@@ -91,10 +91,12 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
               undo
             </button>
           )}
+          <FootWord onClick={() => context.outline()}>outline</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'history' })}>history</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'commands' })}>commands</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'find' })}>find</FootWord>
           {mayEdit && <FootWord onClick={() => context.tidy()}>tidy</FootWord>}
+          <FootWord onClick={() => view.getState().setMode({ kind: 'legend' })}>legend</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'export' })}>print</FootWord>
         </div>
       </div>

@@ -37,13 +37,17 @@ export function useExamination(document: Installation | null): ExaminationState 
   useEffect(() => {
     if (!document) return;
     let wanted = true;
-    void examiner.current?.examine(document).then((answer) => {
+    const examine = async () => {
+      const answer = await examiner.current?.examine(document);
       if (!wanted || !answer) return;
       if ('failure' in answer) setState((before) => ({ ...before, of: document, failure: answer.failure }));
       else setState({ of: document, examination: answer.value, failure: null, ms: answer.ms });
-    });
+    };
+    // The edit is painted before the worker is told what it changed.
+    const timer = setTimeout(() => void examine());
     return () => {
       wanted = false;
+      clearTimeout(timer);
     };
   }, [document]);
   return { examination: state.examination, stale: state.of !== document, failure: state.failure, ms: state.ms };

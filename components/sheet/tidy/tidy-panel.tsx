@@ -29,6 +29,7 @@ export function TidyPanel({ mode, hands, tidy, onLeave }: TidyPanelProps) {
     <div
       role="dialog"
       aria-label="Tidy"
+      data-way={mode.way}
       className="flex flex-col gap-2 border-y-2 border-ink bg-paper p-3"
       onKeyDown={(event) => {
         event.stopPropagation();
