@@ -39,6 +39,8 @@ export interface SheetFrameProps {
   /** a strip over the whole width below the head: offline, reading only */
   strip?: ReactNode;
   keys?: readonly KeyHelp[];
+  /** the list behind `?`, where the sheet opens it by a command as well; else the frame keeps it */
+  help?: { open: boolean; set(open: boolean): void };
   /** the first stop of the keyboard: a shorter way into the sheet */
   skip?: { label: string; go(): void };
   /** the sheet has a field marked `data-find`, which `/` goes to */
@@ -56,7 +58,8 @@ const find = () => document.querySelector<HTMLElement>('[data-find]')?.focus();
 export function SheetFrame(props: SheetFrameProps) {
   const { tabs, current, who, margin, marginLabel = 'In the margin', narrowMargin = 'drawer', fit = 'page' } = props;
   const [marginOpen, setMarginOpen] = useState(false);
-  const [helpOpen, setHelpOpen] = useState(false);
+  const [ownHelp, setOwnHelp] = useState(false);
+  const { open: helpOpen, set: setHelpOpen } = props.help ?? { open: ownHelp, set: setOwnHelp };
   const router = useRouter();
   const numbered = tabs.filter((tab) => tab.number !== undefined);
   const here = tabs.find((tab) => tab.id === current);

@@ -25,7 +25,7 @@ export const isTyping = (target: EventTarget | null): boolean => target instance
 
 /** The letter printed on the key; on keyboards without Latin letters, the one at its place. */
 const letterOf = (event: KeyboardEvent): string =>
-  event.key.length === 1 && event.key > '~' && event.code.startsWith('Key') ? event.code.slice(3).toLowerCase() : event.key;
+  /[^ -~]/.test(event.key) && event.code.startsWith('Key') ? event.code.slice(3).toLowerCase() : event.key;
 
 /**
  * Single-key shortcuts of the sheet: keys as printed ("n", "/", "1"). They act only while no field has the focus and

@@ -14,7 +14,7 @@ export interface ItemCommand {
   does(): void;
 }
 
-const WITH_PART = ['extend', 'edit', 'edit-cable', 'wire'] as const;
+const WITH_PART = ['extend', 'edit', 'edit-cable'] as const;
 const WITH_LOAD = ['load'] as const;
 const WITH_ANY = ['copy', 'cut', 'duplicate', 'delete'] as const;
 const WITH_SHEET = ['supply', 'find', 'tidy', 'renumber', 'history', 'export', 'undo', 'redo'] as const;
@@ -36,6 +36,8 @@ export interface OutlineHand {
   takeAll(): void;
   /** brings the item into sight and gives the sheet the hands */
   show(): void;
+  /** asks to which terminal a wire is to go */
+  askWire(): void;
   /** edits that put the finding right, each tried; empty while they are being worked out */
   remedies: readonly Remedy[];
 }
@@ -46,6 +48,12 @@ export function commandsFor(item: OutlineItem, context: ActionContext, hand: Out
   const action = fromSheet(context);
   const actions = (ids: readonly string[]) => ids.map(action);
   const show: ItemCommand = { id: 'show', words: 'Show it on the sheet', does: hand.show };
+  const wire: ItemCommand = {
+    id: 'wire',
+    words: 'Draw a wire from its terminal to another',
+    edits: true,
+    does: hand.askWire,
+  };
   const take = (words: string): ItemCommand => ({ id: 'take', words, does: hand.takeAll });
   const loads = hands.doc.parts.some((part) => item.parts.includes(part.id) && isPoint(part));
   const commands = ((): ItemCommand[] => {
@@ -63,10 +71,10 @@ export function commandsFor(item: OutlineItem, context: ActionContext, hand: Out
       case 'wire':
         return [...actions(['edit-cable', 'delete']), show];
       case 'terminal':
-        return [...actions(['extend', 'wire', 'edit-cable']), show];
+        return [action('extend'), wire, action('edit-cable'), show];
       case 'part':
       case 'way':
-        return [...actions([...WITH_PART, ...(loads ? WITH_LOAD : []), ...WITH_ANY]), show];
+        return [...actions(WITH_PART), wire, ...actions([...(loads ? WITH_LOAD : []), ...WITH_ANY]), show];
       case 'room':
         return [
           ...actions(['copy-room']),

@@ -2,16 +2,14 @@
 
 import { useCallback, useEffect, useRef, useState, type KeyboardEvent, type MouseEvent } from 'react';
 import { actionFor, keyName, type ActionContext } from '@/components/sheet/actions';
-import { ListPanel } from '@/components/sheet/lists';
 import { useProof } from '@/components/sheet/margin/use-proof';
 import { useSheet } from '@/components/sheet/use-drawing';
 import { useViewStore } from '@/components/sheet/view';
 import { Button } from '@/components/ui/button';
-import { fitsWords } from '@/diagram/commands/extend/catalogue';
 import { findingKey } from '@/diagram/outline/findings-at';
 import { treeMove, typeAhead, type TreeKey } from '@/diagram/outline/rows';
 import type { Finding } from '@/diagram/rules/types';
-import { commandsFor } from './item-commands';
+import { ItemCommands, WireList } from './item-lists';
 import { TreeRow } from './tree-row';
 import { useOutline } from './use-outline';
 
@@ -33,10 +31,9 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
   const view = useViewStore();
   const outline = useOutline(hands, findings);
   const { rows, at, selection } = outline;
-  const [listing, setListing] = useState(false);
+  const [listing, setListing] = useState<'commands' | 'wire' | null>(null);
   const tree = useRef<HTMLUListElement>(null);
   const typed = useRef({ text: '', at: 0 });
-  const mayEdit = useSheet(hands.store, (state) => state.rights.edit);
   const document = useSheet(hands.store, (state) => state.document);
   const finding = findings.find((candidate) => findingKey(candidate) === at.item.finding) ?? null;
   const proof = useProof(document, finding);
@@ -53,16 +50,10 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
     else row?.scrollIntoView({ block: 'nearest' });
   }, [at.item.key]);
 
-  const commands = listing
-    ? commandsFor(at.item, context, {
-        takeAll: () => hands.store.getState().select({ parts: at.item.parts, wires: at.item.wires, terminal: null }),
-        show: () => {
-          if (at.item.parts[0]) hands.goTo(at.item.parts[0]);
-          context.toSheet();
-        },
-        remedies: proof?.remedies ?? [],
-      })
-    : [];
+  const leaveList = () => {
+    setListing(null);
+    requestAnimationFrame(focus);
+  };
 
   const byKey = (key: string) => rows.find((row) => row.item.key === key);
   const rowUnder = (event: MouseEvent) =>
@@ -93,7 +84,7 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
       } else if (move) outline.move(move);
       return true;
     }
-    if (key === 'Enter' || key === 'ContextMenu' || (key === 'F10' && event.shiftKey)) setListing(true);
+    if (key === 'Enter' || key === 'ContextMenu' || (key === 'F10' && event.shiftKey)) setListing('commands');
     else if (key === 'Escape') onClose();
     else if (key === 'F2') actionFor('Enter')?.does(context);
     else if (key === ' ' && typed.current.text === '') outline.toggle(at.item);
@@ -136,26 +127,22 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
     >
       <div className="flex items-center gap-2 border-b border-ink px-3 py-1">
         <h2 className="flex-1 text-head font-bold">Outline</h2>
-        <Button aria-haspopup="dialog" onClick={() => setListing(true)}>
+        <Button aria-haspopup="dialog" onClick={() => setListing('commands')}>
           Commands
         </Button>
         <Button onClick={onClose}>Close</Button>
       </div>
-      {listing && (
-        <ListPanel
-          label={`What can be done: ${at.item.words}`}
-          placeholder={mayEdit ? 'What do you want to do with it?' : 'Look at it'}
-          items={(text) => commands.filter((command) => text.trim() === '' || fitsWords(command.words, text.trim()))}
-          onLeave={() => {
-            setListing(false);
-            requestAnimationFrame(focus);
-          }}
-          onPick={(id) => {
-            setListing(false);
-            focus();
-            commands.find((command) => command.id === id)?.does();
-          }}
+      {listing === 'commands' && (
+        <ItemCommands
+          item={at.item}
+          context={context}
+          remedies={proof?.remedies ?? []}
+          onWire={() => setListing('wire')}
+          onLeave={leaveList}
         />
+      )}
+      {listing === 'wire' && selection.terminal && (
+        <WireList hands={hands} from={selection.terminal} onLeave={leaveList} />
       )}
       <ul
         ref={tree}
@@ -164,7 +151,7 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
         aria-multiselectable="true"
         className="min-h-0 flex-1 overflow-y-auto"
         onClick={onClick}
-        onDoubleClick={(event) => rowUnder(event) && setListing(true)}
+        onDoubleClick={(event) => rowUnder(event) && setListing('commands')}
       >
         {rows.map((row) => (
           <TreeRow

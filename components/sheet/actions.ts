@@ -209,7 +209,8 @@ export const KEYS_HELP: readonly KeyHelp[] = [
   { keys: ['↑', '↓', '←', '→'], does: 'follow the conductor: up is towards the source' },
   { keys: ['Shift', '↑', '↓', '←', '→'], does: 'take the next part in hand as well' },
   { keys: ['Tab'], does: 'next terminal of the part in hand' },
-  ...ACTIONS.filter((action) => action.keys).map((action) => ({ keys: [action.keys!], does: action.words })),
+  // The frame tells of `?` itself.
+  ...ACTIONS.filter((action) => action.keys && action.id !== 'keys').map((action) => ({ keys: [action.keys!], does: action.words })),
 ];
 
 /** The key of an event as it is printed: "Ctrl Shift Z", "Shift N", "e". Letters by what is typed, by place where it is not Latin. */

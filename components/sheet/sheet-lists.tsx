@@ -1,5 +1,7 @@
 'use client';
 
+import { useRouter } from 'next/navigation';
+import { jobTabs } from '@/components/frame/tabs';
 import { KIND_NAME } from '@/diagram/document/kinds';
 import { compareDesignations } from '@/diagram/document/names';
 import { fitsWords } from '@/diagram/commands/extend/catalogue';
@@ -19,14 +21,23 @@ interface ListProps {
 /** Every action by its words, with its key. */
 export function CommandList({ context, onLeave }: ListProps) {
   const { hands } = context;
-  const items = (typed: string): ListItem[] =>
-    ACTIONS.filter(
+  const router = useRouter();
+  const sheets = jobTabs(hands.store.getState().jobId);
+  const turns = sheets.map(({ id, number, label }): ListItem => ({
+    id: `turn ${id}`,
+    words: number === undefined ? 'Turn to the list of jobs' : `Turn to sheet ${number}, ${label}`,
+    ...(number !== undefined && { keys: String(number) }),
+  }));
+  const items = (typed: string): ListItem[] => [
+    ...ACTIONS.filter(
       (action) =>
         action.id !== 'commands' &&
         action.id !== 'rest' &&
         (hands.mayEdit || !action.edits) &&
         fits(action.words, typed),
-    );
+    ),
+    ...turns.filter((turn) => fits(turn.words, typed)),
+  ];
   return (
     <ListPanel
       label="All commands"
@@ -36,7 +47,9 @@ export function CommandList({ context, onLeave }: ListProps) {
       onPick={(id) => {
         hands.view.getState().setMode(REST);
         onLeave();
-        ACTIONS.find((action) => action.id === id)?.does(context);
+        const sheet = sheets.find((tab) => id === `turn ${tab.id}`);
+        if (sheet) router.push(sheet.href);
+        else ACTIONS.find((action) => action.id === id)?.does(context);
       }}
     />
   );
