@@ -44,7 +44,9 @@ function SlipOnSheet({ box, drawing, scene, slip, focusSheet }: PanelsProps & { 
   const document = useSheet(drawing.store, (state) => state.document);
   const foot = useRef<HTMLDivElement>(null);
   const coarse = useCoarse();
-  const low = coarse || box.width < NARROW;
+  // Opened from the outline it is typed into, whatever room the outline leaves to the canvas.
+  const typed = useView((state) => state.outline.hand);
+  const low = !typed && (coarse || box.width < NARROW);
   const at = endPoint(scene, slip.end);
   const place = `${at?.x} ${at?.y}`;
   useEffect(() => {
