@@ -4,6 +4,7 @@ import { reach, reaches } from '../terminals/reach';
 import type { Standing } from './assemble';
 import type { Condition } from './conditions';
 import type { Evaluated, Evaluation } from './evaluate';
+import { assumptions } from './fault-assumes';
 import { caseVoltsOf, darkLoads, liveParts, loadVoltsOf, wireAmpsOf } from './fault-reading';
 import { insertFault, type Inserted } from './fault-insert';
 import { withJoints, type DrawnJoint } from './fault-drawn';
@@ -107,6 +108,7 @@ export function walkFrom(
   watch.before?.(sound);
   const watchesOvercurrent = sound.assembly.inverters.every(({ mostA }) => mostA !== null);
   const opened = new Set<string>();
+  const moved = new Set<string>();
   const steps: FaultStep[] = [];
   let standing = start;
   let now = joints.length > 0 ? solveStanding(graph, start) : sound;
@@ -124,6 +126,7 @@ export function walkFrom(
     let cleared: { by: string; at: number } | null = null;
     for (;;) {
       const pending = urges(graph, now, opened, watchesOvercurrent).map((urge) => remaining(urge, endured));
+      for (const { urge } of pending) if (urge.astrayAmps > 0) moved.add(urge.part.id);
       const next = firstOf(pending);
       if (!next) return cleared;
       for (const { urge } of pending) endure(urge, next.lateS, endured);
@@ -183,6 +186,7 @@ export function walkFrom(
     live: end.live,
     dark: end.dark,
     lacks: deviceLacks(graph),
+    assumes: assumptions(graph, start.condition, moved),
   };
 }
 

@@ -268,3 +268,21 @@ describe('the course of a walk', () => {
     expect(() => walk(blind, { kind: 'line-to-case', at: 'E5' })).toThrow(/external earth fault loop impedance/);
   });
 });
+
+describe('the type of a residual-current device', () => {
+  const toCase: Fault = { kind: 'line-to-case', at: 'M1' };
+  const typed = (type: 'AC' | 'A' | 'F' | 'B' | undefined) =>
+    walk(withPart(fixture('clean-backup-home'), 'Q5', { type }), toCase, 'outage').assumes;
+  test('a sine is taken, and what the type would not see is said', () => {
+    expect(typed('AC')[0]).toMatch(/^a sinusoidal residual current at Q5 of type AC: a fault behind a rectifier/);
+    expect(typed('A')[0]).toMatch(/Q5 of type A: smooth direct current/);
+    expect(typed('F')[0]).toMatch(/10 mA/);
+    expect(typed(undefined)[0]).toMatch(/whose type AC, A, F or B is not given$/);
+  });
+  test('on battery the output of the inverter is taken as a sine, whatever the type', () => {
+    expect(typed('B')).toEqual(['the output of G1 as a sine without a direct part']);
+  });
+  test('nothing is assumed where no residual current flows', () => {
+    expect(walk(fixture('clean-flat'), { kind: 'line-to-neutral', at: 'E5' }).assumes).toEqual([]);
+  });
+});
