@@ -115,6 +115,21 @@ describe('any document', () => {
       { numRuns: 100 },
     );
   });
+
+  it('gives the same bytes wherever its parts stand on the sheet', () => {
+    const place = fc.record({ x: fc.integer({ min: -9000, max: 9000 }), y: fc.integer({ min: -9000, max: 9000 }) });
+    fc.assert(
+      fc.property(randomDocument(), fc.infiniteStream(place), fc.boolean(), (document, places, pinned) => {
+        const spread = () =>
+          Object.fromEntries(
+            document.parts.map(({ id }) => [id, { ...places.next().value, turn: 1 as const, ...(pinned && { pinned }) }]),
+          );
+        const placed = { ...document, sheet: { overview: spread(), connections: spread() } };
+        expect(JSON.stringify(examine(placed))).toBe(JSON.stringify(examine(document)));
+      }),
+      { numRuns: 40 },
+    );
+  });
 });
 
 /** The document with every id of a part, wire and cable written anew; the order of ids turns round. */

@@ -16,7 +16,7 @@ export interface EarthNeed {
 }
 
 /** Table 54.2 of IEC 60364-5-54 (54.7 of BS 7671): by the line conductor, where the heat of the fault is not known. */
-const tableMm2 = (lineMm2: number): number => (lineMm2 <= 16 ? lineMm2 : lineMm2 <= 35 ? 16 : lineMm2 / 2);
+export const tableMm2 = (lineMm2: number): number => (lineMm2 <= 16 ? lineMm2 : lineMm2 <= 35 ? 16 : lineMm2 / 2);
 
 /** The need of every cable with an earth core on the way to something earthed: the most of all ways behind it. */
 export function earthNeeds(context: Context): EarthNeed[] {
