@@ -66,12 +66,12 @@ export function PlanSheet({ view, me, list, storey }: PlanSheetProps) {
   };
 
   const onKey = (event: KeyboardEvent) => {
+    if (event.key === 'Shift' || event.key === 'Control' || event.key === 'Tab') return;
+    state.endNudge();
     const ctrl = event.ctrlKey || event.metaKey;
     const key = event.key.length === 1 && event.key > '~' ? event.code.slice(3).toLowerCase() : event.key.toLowerCase();
-    if (ctrl && key === 'z') {
-      state.endNudge();
-      store.getState()[event.shiftKey ? 'redo' : 'undo']();
-    } else if (ctrl || event.altKey) return;
+    if (ctrl && key === 'z') store.getState()[event.shiftKey ? 'redo' : 'undo']();
+    else if (ctrl || event.altKey) return;
     else if (key === 'pagedown') state.step(1);
     else if (key === 'pageup') state.step(-1);
     else if (letters && key === 'r') state.turn();

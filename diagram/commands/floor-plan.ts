@@ -1,6 +1,6 @@
 import { diff } from '../document/patch';
 import { canonical, type FloorPlan, type Installation, type Kind, type Part, type PlanPosition } from '../document/schema';
-import { listNames, nameOf } from '../document/names';
+import { byDesignation, listNames, nameOf } from '../document/names';
 import { symbolFor } from '../symbols';
 import { MODULE } from '../symbols/types';
 import type { Command } from './types';
@@ -42,7 +42,9 @@ export function placedOn(doc: Installation, planId: string): Map<string, PlanPos
 /** Parts that stand on no plan yet, by room in the order of the drawing's places; those of no room come last. */
 export function notPlaced(doc: Installation): { place: string | null; name: string; parts: Part[] }[] {
   const plans = new Set((doc.plans ?? []).map((plan) => plan.id));
-  const loose = doc.parts.filter((part) => standsOnPlans(part) && !plans.has(doc.sheet?.plan?.[part.id]?.on ?? ''));
+  const loose = doc.parts
+    .filter((part) => standsOnPlans(part) && !plans.has(doc.sheet?.plan?.[part.id]?.on ?? ''))
+    .sort(byDesignation);
   const groups = [...doc.places.map(({ id, name }) => ({ place: id as string | null, name })), { place: null, name: 'No room' }];
   const known = new Set(doc.places.map(({ id }) => id));
   return groups
