@@ -2,7 +2,7 @@
 
 import { Bar, BarChart, CartesianGrid, LabelList, ResponsiveContainer, XAxis, YAxis } from 'recharts';
 import type { ConditionLoad } from '@/diagram/schedules/condition-loads';
-import { GREY_LETTERING, HAIR, INK, LETTERING, MARGIN, RED } from './look';
+import { GREY_LETTERING, HAIR, INK, LABEL, LETTERING, MARGIN, RED } from './look';
 
 const BAR = 26;
 
@@ -36,7 +36,7 @@ function LoadBar({ x = 0, y = 0, width = 0, height = 0, payload }: Shape) {
 export default function ConditionChart({ loads }: { loads: readonly ConditionLoad[] }) {
   const data = loads.map((load) => ({
     load,
-    name: `${load.condition}, ${load.source}`,
+    name: load.source === 'mains' ? load.condition : `${load.condition}, ${load.source}`,
     share: load.limitVa === null ? 0 : (100 * load.va) / load.limitVa,
     told:
       load.limitVa === null
@@ -58,9 +58,9 @@ export default function ConditionChart({ loads }: { loads: readonly ConditionLoa
           height={36}
           label={{ value: '% of its rating', position: 'insideBottomRight', ...GREY_LETTERING }}
         />
-        <YAxis type="category" dataKey="name" width={132} tick={LETTERING} stroke={INK} tickLine={false} />
+        <YAxis type="category" dataKey="name" width={120} tick={LETTERING} stroke={INK} tickLine={false} />
         <Bar dataKey="share" barSize={BAR} shape={LoadBar} isAnimationActive={false} background={{ fill: 'transparent', stroke: HAIR }}>
-          <LabelList dataKey="told" position="right" {...LETTERING} />
+          <LabelList dataKey="told" position="right" {...LABEL} />
         </Bar>
       </BarChart>
     </ResponsiveContainer>

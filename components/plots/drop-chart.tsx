@@ -3,7 +3,7 @@
 import { CartesianGrid, ComposedChart, LabelList, Line, ReferenceLine, ResponsiveContainer, XAxis, YAxis } from 'recharts';
 import type { Station } from '@/diagram/schedules/drop-stations';
 import type { WayPlot } from '@/diagram/schedules/way-plot';
-import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, PAPER, RED, axis, axisUnit } from './look';
+import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LABEL, LETTERING, MARGIN, PAPER, RED, axis, axisUnit } from './look';
 
 /** px a letter, and px of the picture at its least */
 const LETTER = 6.6;
@@ -58,7 +58,7 @@ export default function DropChart({ drop }: { drop: NonNullable<WayPlot['drop']>
           stroke={INK}
           strokeWidth={1.4}
           strokeDasharray={DASH.limit}
-          label={{ value: `${limitPercent} % limit, ${limitOf}`, position: 'insideBottomRight', dy: -16, ...LETTERING }}
+          label={{ value: `${limitPercent} % limit, ${limitOf}`, position: 'insideBottomRight', dy: -16, ...LABEL }}
         />
         <Line
           dataKey="percent"
@@ -69,7 +69,7 @@ export default function DropChart({ drop }: { drop: NonNullable<WayPlot['drop']>
           activeDot={false}
           isAnimationActive={false}
         >
-          <LabelList dataKey="told" position="top" offset={8} textAnchor="end" {...LETTERING} />
+          <LabelList dataKey="told" position="top" offset={8} textAnchor="end" {...LABEL} />
         </Line>
       </ComposedChart>
     </ResponsiveContainer>

@@ -13,7 +13,7 @@ import {
 import { autonomyCurve } from '@/diagram/calculations/autonomy';
 import { hoursWithout, type BackupPlot } from '@/diagram/schedules/backup-plot';
 import { hoursText } from '@/diagram/schedules/figure';
-import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, PAPER, axis, axisUnit } from './look';
+import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LABEL, LETTERING, MARGIN, PAPER, axis, axisUnit } from './look';
 
 interface HoursChartProps {
   plot: BackupPlot;
@@ -45,7 +45,7 @@ export default function HoursChart({ plot, off }: HoursChartProps) {
           offset: 8,
           dy: -10,
           fontWeight: 700,
-          ...LETTERING,
+          ...LABEL,
         }}
       />
     );
@@ -77,7 +77,7 @@ export default function HoursChart({ plot, off }: HoursChartProps) {
             stroke={INK}
             strokeWidth={1.4}
             strokeDasharray={DASH.wish}
-            label={{ value: `${plot.hoursWanted} h wanted`, position: 'insideBottomRight', dy: -16, ...LETTERING }}
+            label={{ value: `${plot.hoursWanted} h wanted`, position: 'insideBottomRight', dy: -16, ...LABEL }}
           />
         )}
         <Line

@@ -7,6 +7,8 @@ export const ROW = 'var(--row)';
 export const PAPER = 'var(--paper)';
 
 export const LETTERING = { fontSize: 11, fill: INK } as const;
+/** Words among lines stand on a margin of paper. */
+export const LABEL = { ...LETTERING, stroke: PAPER, strokeWidth: 3, paintOrder: 'stroke' } as const;
 export const GREY_LETTERING = { fontSize: 11, fill: GREY } as const;
 
 /** Lines tell themselves apart by dash first. */

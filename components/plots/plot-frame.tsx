@@ -34,12 +34,12 @@ export function PlotFrame({ title, aside, words, figures, children, controls, le
       <div aria-hidden="true" className="mt-1">
         {children}
       </div>
-      {controls}
       {words.map((sentence) => (
         <p key={sentence} className="mt-1">
           {sentence}
         </p>
       ))}
+      {controls}
       <details className="mt-1 print:hidden">
         <summary className="cursor-pointer text-small text-grey pointer-coarse:min-h-11">The same as figures</summary>
         <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={`${title}: figures`}>

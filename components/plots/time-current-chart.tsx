@@ -5,7 +5,7 @@ import { INSTANT, type OvercurrentDevice } from '@/diagram/calculations/trip-cur
 import { amps } from '@/diagram/schedules/figure';
 import { ADIABATIC_UP_TO_S, FASTEST_S, SLOWEST_S, bandFor, withstandLine } from '@/diagram/schedules/trip-points';
 import type { FaultMark, WayPlot } from '@/diagram/schedules/way-plot';
-import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LETTERING, MARGIN, RED, ROW, axisUnit, logRange, logTicks } from './look';
+import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LABEL, LETTERING, MARGIN, RED, ROW, axisUnit, logRange, logTicks } from './look';
 
 const SECONDS = [0.01, 0.1, 1, 10, 100, 1000, 10_000];
 const TOLD: Record<FaultMark['id'], string> = {
@@ -37,7 +37,7 @@ const upright = (value: string, level: number, toTheLeft: boolean) => ({
   position: toTheLeft ? ('insideTopRight' as const) : ('insideTopLeft' as const),
   offset: 4,
   dy: level * 14,
-  ...LETTERING,
+  ...LABEL,
 });
 
 /** Where the band is wide enough for its name: beyond the surely instantaneous trip, below 0.1 s. */
@@ -122,7 +122,7 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
             label={{
               value: `Iz ${amps(plot.izA)}`,
               position: 'insideBottomRight',
-              fontSize: 11,
+              ...LABEL,
               fill: thin ? RED : INK,
               fontWeight: thin ? 700 : 400,
             }}
@@ -142,14 +142,14 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
           y={plot.withinS}
           stroke={INK}
           strokeDasharray={DASH.limit}
-          label={{ value: `${plot.withinS} s allowed`, position: 'insideBottomRight', ...LETTERING }}
+          label={{ value: `${plot.withinS} s allowed`, position: 'insideBottomLeft', ...LABEL }}
         />
         {plot.device && (
           <ReferenceDot
             x={nameAt(plot.device)}
             y={0.03}
             r={0}
-            label={{ value: plot.deviceName, position: 'right', fontWeight: 700, ...LETTERING }}
+            label={{ value: plot.deviceName, position: 'right', fontWeight: 700, ...LABEL }}
           />
         )}
       </ComposedChart>

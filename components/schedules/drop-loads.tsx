@@ -54,7 +54,7 @@ export function DropLoads({ plot, off, onOff, desk, drawing, document, mayEdit }
   return (
     <fieldset className="mt-3 print:hidden">
       <legend className="font-semibold">What if it were off?</legend>
-      <ul className="mt-1 grid gap-x-6 sm:grid-cols-2">
+      <ul className="mt-1 grid gap-x-10 sm:grid-cols-2 lap:grid-cols-1">
         {plot.loads.map((load) => {
           const without = hoursWithout(plot, new Set([...off, load.id]));
           return (

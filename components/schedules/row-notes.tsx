@@ -34,7 +34,7 @@ function Outcomes({ now, remedies }: { now: Outcome; remedies: readonly { label:
   return (
     <section className="border-t border-rule pt-4">
       <h3 className="text-head font-bold">What each remedy gives</h3>
-      <table className="mt-1 w-full border-collapse leading-6">
+      <table className="mt-1 w-full border-collapse [&_td]:py-1 [&_th]:py-1">
         <thead>
           <tr className="text-small text-grey">
             <th className="text-left font-normal">

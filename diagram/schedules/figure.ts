@@ -25,10 +25,11 @@ export const text = (words: string): FigureCell => ({ text: words });
 /** A time of a device: "40 ms", "3.2 s". */
 export const seconds = (value: number): string => (value < 1 ? `${Math.round(value * 1000)} ms` : `${value.toFixed(1)} s`);
 
-/** "3 h 24", "45 min" */
+/** "3 h 24", "4 h", "45 min" */
 export function hoursText(hours: number): string {
   if (!Number.isFinite(hours)) return 'no end';
   const minutes = Math.round(hours * 60);
   if (minutes < 60) return `${minutes} min`;
-  return `${Math.floor(minutes / 60)} h ${String(minutes % 60).padStart(2, '0')}`;
+  const rest = minutes % 60;
+  return `${Math.floor(minutes / 60)} h${rest === 0 ? '' : ` ${String(rest).padStart(2, '0')}`}`;
 }

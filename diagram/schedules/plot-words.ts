@@ -82,5 +82,5 @@ export function hoursWords(plot: BackupPlot, off: ReadonlySet<string>): string[]
 export const conditionWords = (loads: readonly ConditionLoad[]): string[] =>
   loads.map(({ condition, source, va, limitVa, limitBy }) => {
     const limit = limitVa === null ? 'no limit is given' : `${Math.round((100 * va) / limitVa)} % of ${Math.round(limitVa)} VA (${limitBy})`;
-    return `${condition}: ${source} carries ${Math.round(va)} VA, ${limit}.`;
+    return `${condition}: ${source === 'mains' ? '' : `${source} carries `}${Math.round(va)} VA, ${limit}.`;
   });

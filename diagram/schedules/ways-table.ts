@@ -13,8 +13,8 @@ import { decidingCable, runsOf } from './way-runs';
 
 const COLUMNS: readonly Column[] = [
   { id: 'label', name: 'Way', width: 23, page: 'stays', spoken: 'name' },
-  { id: 'ref', name: 'Device', width: 4, page: 'cable', spoken: 'designation of the device' },
-  { id: 'rating', name: '', width: 6, page: 'stays', spoken: 'rating of the device' },
+  { id: 'ref', name: 'Device', width: 5, page: 'cable', spoken: 'designation of the device' },
+  { id: 'rating', name: '', width: 7, page: 'stays', spoken: 'rating of the device' },
   { id: 'csa', name: 'Cable', unit: 'mm²', width: 5, right: true, page: 'cable', spoken: 'cable, mm²' },
   { id: 'length', name: 'Run', unit: 'm', width: 5, right: true, page: 'cable', spoken: 'run, metres' },
   {
@@ -32,7 +32,7 @@ const COLUMNS: readonly Column[] = [
   { id: 'drop', name: 'Drop', unit: '%', width: 5, right: true, page: 'current', spoken: 'volt drop, %' },
   { id: 'zs', name: 'Zs', unit: 'ohm', width: 5, right: true, page: 'fault', spoken: 'earth fault loop Zs, ohm' },
   { id: 'zsMax', name: 'Zs max', unit: 'ohm', width: 6, right: true, page: 'fault', fileOnly: true },
-  { id: 'opens', name: 'Opens', unit: 'in', width: 6, right: true, page: 'fault', spoken: 'a fault to earth is cleared in' },
+  { id: 'opens', name: 'Opens', unit: 'in', width: 7, right: true, page: 'fault', spoken: 'a fault to earth is cleared in' },
   { id: 'fault', name: 'L-N at', unit: 'end, A', width: 6, right: true, page: 'fault', spoken: 'least short circuit, A' },
   { id: 'rcd', name: 'Rcd', width: 4, page: 'fault', spoken: 'residual-current device' },
   { id: 'points', name: 'Points', width: 5, right: true, page: 'load' },

@@ -216,7 +216,7 @@ describe('the other schedules', () => {
   it('ask what it is worth to leave a load off, and take it off the backup with its neutral', async () => {
     const user = userEvent.setup();
     open({ schedule: 'backup' });
-    expect(screen.getByText('All that stays on, 344 W, lasts 4 h 24; 4 h 00 wanted.')).toBeInTheDocument();
+    expect(screen.getByText('All that stays on, 344 W, lasts 4 h 24; 4 h wanted.')).toBeInTheDocument();
     await user.click(load('M1')!);
     expect(screen.getByText('Without M1: 289 W, 5 h 20.')).toBeInTheDocument();
     expect(store.getState().undoSteps).toEqual([]);
