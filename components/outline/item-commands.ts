@@ -77,7 +77,7 @@ export function commandsFor(item: OutlineItem, context: ActionContext, hand: Out
         return [...actions(WITH_PART), wire, ...actions([...(loads ? WITH_LOAD : []), ...WITH_ANY]), show];
       case 'room':
         return [
-          ...actions(['copy-room']),
+          { ...action('copy-room'), does: () => hands.askForCopy(item.place) },
           take('Take all of it in hand: to copy, move or delete it'),
           show,
         ];

@@ -46,13 +46,20 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
   }, [onReady, focus]);
   useEffect(() => {
     const row = tree.current?.querySelector<HTMLElement>('[tabindex="0"]');
-    if (tree.current?.contains(window.document.activeElement)) row?.focus();
+    const { activeElement, body } = window.document;
+    // A line that goes with what it stood for takes the focus with it: the line that stands in for it has it then.
+    const lost = activeElement === body && view.getState().outline.hand;
+    if (lost || tree.current?.contains(activeElement)) row?.focus();
     else row?.scrollIntoView({ block: 'nearest' });
-  }, [at.item.key]);
+  }, [at.item.key, view]);
 
   const leaveList = () => {
     setListing(null);
-    requestAnimationFrame(focus);
+    // What the list has opened keeps the focus; where it opened nothing, the line in hand takes it back.
+    requestAnimationFrame(() => {
+      const { activeElement, body } = window.document;
+      if (!activeElement || activeElement === body) focus();
+    });
   };
 
   const byKey = (key: string) => rows.find((row) => row.item.key === key);

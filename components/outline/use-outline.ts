@@ -60,18 +60,6 @@ export function useOutline(hands: Hands, findings: readonly Finding[]): Outline 
     path.current = [...(pathTo(root, at.item.key) ?? []), at.item.key];
   }, [root, at]);
 
-  useEffect(() => {
-    const { outline } = view.getState();
-    const here = rows.find((row) => row.item.key === outline.at);
-    if (here && isInHand(here.item, selection)) return;
-    const key = keyInHand(selection, root);
-    const above = key === null ? null : pathTo(root, key);
-    if (key === null || !above) return;
-    view.getState().set({ outline: { ...outline, at: key, open: new Set([...outline.open, ...above]) } });
-    // Only what is taken in hand leads the outline there: folding a line over it does not.
-    // eslint-disable-next-line react-hooks/exhaustive-deps -- see above
-  }, [selection, view]);
-
   const take = (item: OutlineItem) => {
     const { select } = hands.store.getState();
     if (item.terminal) select({ parts: [item.terminal[0]], wires: [], terminal: item.terminal });
@@ -83,6 +71,26 @@ export function useOutline(hands: Hands, findings: readonly Finding[]): Outline 
       else if (item.wires[0]) select({ parts: [], wires: item.wires, terminal: null });
     } else select(NOTHING);
   };
+
+  useEffect(() => {
+    if (at.item.key === wanted) return;
+    set({ at: at.item.key });
+    const { parts, wires } = hands.store.getState().selection;
+    if (parts.length + wires.length === 0) take(at.item);
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- only when the item in hand has gone
+  }, [at, wanted]);
+
+  useEffect(() => {
+    const { outline } = view.getState();
+    const here = rows.find((row) => row.item.key === outline.at);
+    if (here && isInHand(here.item, selection)) return;
+    const key = keyInHand(selection, root);
+    const above = key === null ? null : pathTo(root, key);
+    if (key === null || !above) return;
+    view.getState().set({ outline: { ...outline, at: key, open: new Set([...outline.open, ...above]) } });
+    // Only what is taken in hand leads the outline there: folding a line over it does not.
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- see above
+  }, [selection, view]);
 
   return {
     rows,

@@ -243,9 +243,9 @@ export class Hands {
     this.do(moveLoad(this.doc, loads, device, this.newId));
   }
 
-  /** Asks how the room in hand is to be copied. */
-  askForCopy(): void {
-    const room = this.doc.parts.find((part) => part.id === this.state.selection.parts[0])?.place;
+  /** Asks how a room is to be copied: the one named, else that of the part in hand. */
+  askForCopy(place?: string): void {
+    const room = place ?? this.doc.parts.find((part) => part.id === this.state.selection.parts[0])?.place;
     if (!this.mayEdit) this.state.say('You may read this drawing.');
     else if (room === undefined) this.state.say('Take a part of the room in hand first.');
     else this.view.getState().setMode({ kind: 'room', place: room });
