@@ -13,8 +13,9 @@ export default {
   content: ['./app/**/*.{ts,tsx}', './components/**/*.{ts,tsx}'],
   theme: {
     extend: {
-      // from here on the margin stands beside the sheet
-      screens: { lap: '68.75rem' },
+      // lap: from here on the margin stands beside the sheet
+      // wide: from here on foot and title block stand beside each other
+      screens: { wide: '56.25rem', lap: '68.75rem' },
       colors: Object.fromEntries(Object.keys(light).map((name) => [name, `var(--${name})`])),
       fontFamily: { mono: ['"JetBrains Mono"', 'ui-monospace', 'monospace'], sans: ['"JetBrains Mono"', 'ui-monospace', 'monospace'] },
       fontSize: { small: ['11px', '16px'], body: ['12px', '16px'], head: ['13px', '16px'], title: ['20px', '24px'] },

@@ -128,8 +128,8 @@ export function SheetFrame(props: SheetFrameProps) {
             </Margin>
           )}
         </div>
-        <footer className="flex flex-col border-t-[1.6px] border-ink lap:min-h-[72px] lap:flex-row">
-          <div className="min-w-0 flex-1 px-4 py-2 max-lap:border-b max-lap:border-ink max-lap:empty:hidden">{props.foot}</div>
+        <footer className="flex flex-col border-t-[1.6px] border-ink wide:min-h-[72px] wide:flex-row">
+          <div className="min-w-0 flex-1 px-4 py-2 max-wide:border-b max-wide:border-ink max-wide:empty:hidden">{props.foot}</div>
           <TitleBlockPanel kind={props.kind} block={props.titleBlock} sheet={sheet} practice={props.practice} stillLive={props.stillLive} />
         </footer>
       </Paper>

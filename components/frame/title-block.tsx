@@ -28,18 +28,18 @@ function Cell({ name, children, strong, className = '' }: { name: string; childr
 export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: TitleBlockPanelProps) {
   const drawn = [block.drawnBy, block.drawnOn.slice(0, 10)].filter(Boolean).join(' ');
   return (
-    <section aria-label="Title block" className="flex flex-col border-ink lap:w-[784px] lap:shrink-0 lap:border-l-[1.6px]">
-      <dl className="grid flex-1 grid-cols-[minmax(0,1fr)_96px_96px] sm:grid-cols-[minmax(0,1fr)_80px_144px_72px_72px_64px_88px] lap:grid-cols-[minmax(0,1fr)_72px_144px_72px_72px_60px_140px]">
+    <section aria-label="Title block" className="flex flex-col border-ink wide:w-[540px] wide:shrink-0 wide:border-l-[1.6px] lap:w-[784px]">
+      <dl className="grid flex-1 grid-cols-[minmax(0,1fr)_96px_96px] sm:grid-cols-[minmax(0,1fr)_80px_144px_72px_72px_64px_88px] wide:grid-cols-[minmax(0,1fr)_72px_72px_60px_104px] lap:grid-cols-[minmax(0,1fr)_72px_144px_72px_72px_60px_140px]">
         <Cell name={kind} strong>
           {block.title}
         </Cell>
         <Cell name="Number" strong>
           {block.number}
         </Cell>
-        <Cell name="Drawn" className="max-sm:hidden">
+        <Cell name="Drawn" className="max-sm:hidden wide:max-lap:hidden">
           {drawn || '-'}
         </Cell>
-        <Cell name="Checked" className="max-sm:hidden">
+        <Cell name="Checked" className="max-sm:hidden wide:max-lap:hidden">
           {block.checkedBy ?? '-'}
         </Cell>
         <Cell name="Revision" strong className="max-sm:hidden">
@@ -58,7 +58,7 @@ export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: Tit
           {stillLive ?? 'Backup stays live with main switch off.'} Battery terminals are never dead.
         </p>
         {practice && (
-          <p className="hidden w-[136px] shrink-0 border-l border-ink px-2 py-[3px] sm:block">
+          <p className="hidden w-[136px] shrink-0 border-l border-ink px-2 py-[3px] sm:block wide:max-lap:hidden">
             Practice {practice.id}
             <br />
             <span className="whitespace-nowrap">
@@ -66,7 +66,7 @@ export function TitleBlockPanel({ kind, block, sheet, practice, stillLive }: Tit
             </span>
           </p>
         )}
-        <p className="hidden w-[140px] shrink-0 truncate border-l border-ink px-2 py-[3px] sm:block">
+        <p className="hidden w-[140px] shrink-0 truncate border-l border-ink px-2 py-[3px] sm:block wide:max-lap:w-[104px]">
           {block.team}
           <br />
           <b>Ohmstead</b>

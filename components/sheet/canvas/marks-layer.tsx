@@ -48,7 +48,7 @@ const PartMarks = memo(function PartMarks({ part, terminals, letters }: { part: 
     <g transform={shift}>
       {terminals &&
         part.terminals.map(({ mark, x, y }) => (
-          <circle key={mark} cx={x} cy={y} r={150} fill="var(--paper)" {...ink} />
+          <circle key={mark} data-end={`${part.id} ${mark}`} cx={x} cy={y} r={150} fill="var(--paper)" {...ink} />
         ))}
       {letters &&
         symbol.texts?.map((text) => {

@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import type { Slip, SlipLine } from './use-slip';
 
@@ -55,6 +55,10 @@ interface SlipFootProps {
 /** The slip as the foot of the screen, for fingers: what comes next as tall buttons, its figures with steps beside them. */
 export function SlipFoot({ slip, name, onLeave }: SlipFootProps) {
   const [all, setAll] = useState(false);
+  const field = useRef<HTMLInputElement>(null);
+  useEffect(() => {
+    if (all) field.current?.focus({ preventScroll: true });
+  }, [all]);
   const line = slip.lines[slip.index];
   const shown = all ? slip.lines : slip.lines.slice(0, FIRST);
   const rest = slip.lines.length - shown.length;
@@ -77,8 +81,9 @@ export function SlipFoot({ slip, name, onLeave }: SlipFootProps) {
       </h2>
       {all && (
         <input
+          ref={field}
           aria-label={`What comes next after ${name}: type to narrow`}
-          placeholder="Type to narrow"
+          placeholder="A room, or what it is to have"
           value={slip.typed}
           onChange={(event) => slip.type(event.target.value)}
           className="min-h-11 border-b border-ink bg-transparent px-1 text-head"
@@ -102,9 +107,9 @@ export function SlipFoot({ slip, name, onLeave }: SlipFootProps) {
             {each.danger && <span className="text-small">would bring a danger: {each.danger}</span>}
           </Button>
         ))}
-        {rest > 0 && (
+        {!all && (
           <Button className={TALL} onClick={() => setAll(true)}>
-            {rest} more
+            {rest > 0 ? `${rest} more` : 'Type a room'}
           </Button>
         )}
       </div>

@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import type { Scene } from '@/diagram/layout/scene';
 import type { ActionContext } from '../actions';
 import { handWords } from '../hand-words';
+import { useCoarse } from '../canvas/use-coarse';
 import type { MarkedNote } from '../margin/notes';
 import { useSheet, type OpenDrawing } from '../use-drawing';
 import { useView, useViewStore, type Mode } from '../view';
@@ -34,10 +35,19 @@ function roomsOverlap(scene: Scene): boolean {
   });
 }
 
+interface Standing {
+  mayEdit: boolean;
+  /** the person may, though the sheet may be open for reading now */
+  mayDraw: boolean;
+  crowded: boolean;
+  coarse: boolean;
+}
+
 /** What the hands may do next, in words: the foot's own line. */
-function hint(mode: Mode, held: string, mayEdit: boolean, mayDraw: boolean, crowded: boolean): string {
+function hint(mode: Mode, held: string, { mayEdit, mayDraw, crowded, coarse }: Standing): string {
   switch (mode.kind) {
     case 'extend':
+      if (coarse) return 'Tap another terminal to join it, or place what comes next.';
       return 'Type to narrow, Enter to place. The ghost stands where the part would lie.';
     case 'wire':
       return 'Arrows choose where the wire ends, Enter draws it, Esc leaves.';
@@ -48,6 +58,7 @@ function hint(mode: Mode, held: string, mayEdit: boolean, mayDraw: boolean, crow
     default:
       if (crowded && mayEdit && !held) return 'Rooms lie over each other: tidy makes room.';
       if (held) return held;
+      if (mayEdit && coarse) return 'Tap a terminal to take it; hold a part to move it; fingers pan.';
       if (mayEdit) return 'Arrows or a click take a part in hand; e extends it.';
       return mayDraw ? 'Reading: Edit lets you draw.' : 'You may read this drawing.';
   }
@@ -64,13 +75,14 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
   const mayEdit = mayDraw && editing;
   const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
   const { undo } = drawing.store.getState();
+  const coarse = useCoarse();
   const crowded = useMemo(() => roomsOverlap(scene), [scene]);
   const said =
     drawn || document.parts.length === 0
-      ? hint(mode, handWords(document, selection), mayEdit, mayDraw, crowded)
+      ? hint(mode, handWords(document, selection), { mayEdit, mayDraw, crowded, coarse })
       : `Drawing ${document.parts.length} parts`;
   return (
-    <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
+    <div className="flex h-full flex-col gap-x-4 gap-y-1 sm:flex-row">
       {scene.face === 'overview' ? <Strip scene={scene} notes={notes} /> : <CoreLegend practice={document.practice} />}
       <div className="flex min-w-0 flex-1 flex-col justify-between gap-1">
         <p className={`leading-[15px] ${notice ? 'truncate' : 'line-clamp-2'}`} title={said}>
@@ -79,7 +91,7 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
         <p role="status" className="truncate text-small leading-[14px] text-grey empty:hidden" title={notice}>
           {notice}
         </p>
-        <div className="flex flex-wrap gap-x-3 text-small leading-[14px]">
+        <div className="flex flex-wrap gap-x-3 text-small leading-[14px] pointer-coarse:flex-nowrap pointer-coarse:gap-x-4 pointer-coarse:overflow-x-auto">
           {mayEdit && (
             <button
               type="button"
@@ -101,7 +113,7 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
         </div>
       </div>
       {mayEdit && selection.terminal && mode.kind === 'rest' && (
-        <Button className="self-start lap:hidden" solid onClick={() => context.hands.extend()}>
+        <Button className="min-h-11 self-start lap:hidden" solid onClick={() => context.hands.extend()}>
           What comes next
         </Button>
       )}
