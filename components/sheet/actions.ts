@@ -1,5 +1,6 @@
 import type { KeyHelp } from '@/components/frame/types';
 import type { Hands } from './hands';
+import { routeInHandAgain } from './leading';
 import { align, distribute, unpin } from './placing';
 import { takeAll, takeKind, takeRoom } from './taking';
 import type { TidyWay } from './tidy/use-tidy';
@@ -173,6 +174,12 @@ export const ACTIONS: readonly Action[] = [
     words: 'Place exactly: write the position in mm',
     edits: true,
     does: ({ hands }) => hands.edit(),
+  },
+  {
+    id: 'route-again',
+    words: 'Route again: take back the stretches led by hand, of what is in hand or of all',
+    edits: true,
+    does: ({ hands }) => routeInHandAgain(hands),
   },
   {
     id: 'unpin',

@@ -14,6 +14,7 @@ import type { End, Installation } from '@/diagram/document/schema';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
 import { Clipboard } from './clipboard';
+import { leadBy, runInHand } from './leading';
 import { firstPart, handEnd, nextPart, type Direction } from './navigate';
 import type { DrawingStore } from './store';
 import { NOTHING } from './store';
@@ -187,7 +188,8 @@ export class Hands {
   /** Begins to move what is in hand, in modules. */
   startMove(): void {
     if (!this.mayEdit) this.state.say('You may read this drawing.');
-    else if (this.state.selection.parts.length === 0) this.state.say('Take a part in hand first.');
+    else if (this.state.selection.parts.length === 0 && !runInHand(this.scene(), this.state.selection))
+      this.state.say('Take a part or a run in hand first.');
     else this.view.getState().setMode({ kind: 'move', dx: 0, dy: 0 });
   }
 
@@ -197,6 +199,7 @@ export class Hands {
     const dx = mode.dx + (direction === 'left' ? -1 : direction === 'right' ? 1 : 0);
     const dy = mode.dy + (direction === 'up' ? -1 : direction === 'down' ? 1 : 0);
     setMode({ kind: 'move', dx, dy });
+    if (this.state.selection.parts.length === 0) return;
     const moved = moveParts(this.doc, this.view.getState().face, this.state.selection.parts, dx * MODULE, dy * MODULE);
     set({ ghost: applyPatch(this.doc, moved.patch) });
   }
@@ -205,7 +208,9 @@ export class Hands {
     const { mode, setMode } = this.view.getState();
     if (mode.kind !== 'move') return;
     setMode(REST);
-    if (mode.dx !== 0 || mode.dy !== 0) this.moveBy(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
+    if (mode.dx === 0 && mode.dy === 0) return;
+    if (this.state.selection.parts.length === 0) leadBy(this, mode.dx, mode.dy);
+    else this.moveBy(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
   }
 
   /** Lengths in 1/100 mm. */

@@ -23,7 +23,8 @@ export const useBrowser = (): boolean =>
 export function useScene(document: Installation | null, face: Face, place: string | null): Scene | null {
   const before = useRef<Scene | null>(null);
   const scene = useMemo(
-    () => (document ? buildScene(document, face, place === null ? {} : { place }) : null),
+    // eslint-disable-next-line react-hooks/refs -- what a change does not touch keeps its way; a late scene costs time alone
+    () => (document ? buildScene(document, face, { before: before.current, ...(place !== null && { place }) }) : null),
     [document, face, place],
   );
   // eslint-disable-next-line react-hooks/refs -- the scene before is a cache: reading it late costs drawing time, never correctness

@@ -29,9 +29,15 @@ export function withoutItems(doc: Installation, parts: ReadonlySet<string>, wire
       overview: keep(doc.sheet?.overview),
       connections: keep(doc.sheet?.connections),
       plan: keep(doc.sheet?.plan),
+      bends: bendsOf(doc, wireIds),
     },
   });
 }
+
+/** Bends of the runs that stay. */
+const bendsOf = (doc: Installation, wires: ReadonlySet<string>) =>
+  doc.sheet?.bends &&
+  Object.fromEntries(Object.entries(doc.sheet.bends).filter(([key]) => wires.has(key.slice(key.indexOf(':') + 1))));
 
 /** Takes parts and wires off the drawing: a part's wires go with it, and a cable with its last wire. */
 export function deleteSelection(doc: Installation, parts: readonly string[], wires: readonly string[]): Command {

@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import {
   ARRANGEMENTS,
+  BendKeySchema,
+  BendsSchema,
   CableSchema,
   FloorPlanSchema,
   IdSchema,
@@ -17,7 +19,6 @@ import {
   canonical,
   type Arrangement,
   type Installation,
-  type Position,
 } from './schema';
 
 /**
@@ -44,6 +45,7 @@ export const PatchSchema = z.strictObject({
       overview: z.record(IdSchema, PositionSchema).optional(),
       connections: z.record(IdSchema, PositionSchema).optional(),
       plan: z.record(IdSchema, PlanPositionSchema).optional(),
+      bends: z.record(BendKeySchema, BendsSchema).optional(),
       title: z.string().max(120).optional(),
       practice: PracticeIdSchema.optional(),
       supply: SupplySchema.optional(),
@@ -63,6 +65,7 @@ export const PatchSchema = z.strictObject({
       overview: ids,
       connections: ids,
       plan: ids,
+      bends: z.array(BendKeySchema).min(1).optional(),
       notices: z.literal(true).optional(),
       silenced: z.literal(true).optional(),
     })
@@ -72,7 +75,10 @@ export type Patch = z.infer<typeof PatchSchema>;
 
 type Item = { id: string };
 const listIn = (doc: Installation, list: List): readonly Item[] => (doc[list] as readonly Item[] | undefined) ?? [];
-const placedIn = (doc: Installation, face: Arrangement): Record<string, Position> => doc.sheet?.[face] ?? {};
+/** What the sheet keeps by id: positions on each face, and the bends set by hand. */
+const KEPT = [...ARRANGEMENTS, 'bends'] as const;
+type Kept = Arrangement | 'bends';
+const keptIn = (doc: Installation, kept: Kept): Record<string, unknown> => doc.sheet?.[kept] ?? {};
 
 function mergeList(items: readonly Item[], set: readonly Item[] = [], remove: readonly string[] = []): Item[] {
   const merged = new Map(items.map((item) => [item.id, item]));
@@ -93,11 +99,11 @@ export function applyPatch(doc: Installation, patch: Patch): Installation {
   if (remove.silenced) delete next.silenced;
   for (const list of LISTS)
     if (set[list] || remove[list]) Object.assign(next, { [list]: mergeList(listIn(doc, list), set[list], remove[list]) });
-  for (const face of ARRANGEMENTS) {
-    if (!set[face] && !remove[face]) continue;
-    const places = { ...placedIn(doc, face) };
-    for (const id of remove[face] ?? []) delete places[id];
-    Object.assign(next.sheet!, { [face]: { ...places, ...set[face] } });
+  for (const kept of KEPT) {
+    if (!set[kept] && !remove[kept]) continue;
+    const items = { ...keptIn(doc, kept) };
+    for (const id of remove[kept] ?? []) delete items[id];
+    Object.assign(next.sheet!, { [kept]: { ...items, ...set[kept] } });
   }
   return canonical(next);
 }
@@ -121,13 +127,13 @@ export function diff(from: Installation, to: Installation): Patch {
     if (changed.length > 0) Object.assign(set, { [list]: changed });
     if (gone.length > 0) remove[list] = gone;
   }
-  for (const face of ARRANGEMENTS) {
-    const before = placedIn(from, face);
-    const after = placedIn(to, face);
+  for (const kept of KEPT) {
+    const before = keptIn(from, kept);
+    const after = keptIn(to, kept);
     const changed = Object.keys(after).filter((id) => !same(before[id], after[id]));
     const gone = Object.keys(before).filter((id) => !after[id]);
-    if (changed.length > 0) Object.assign(set, { [face]: Object.fromEntries(changed.map((id) => [id, after[id]!])) });
-    if (gone.length > 0) remove[face] = gone;
+    if (changed.length > 0) Object.assign(set, { [kept]: Object.fromEntries(changed.map((id) => [id, after[id]!])) });
+    if (gone.length > 0) remove[kept] = gone;
   }
   return {
     ...(Object.keys(set).length > 0 && { set }),

@@ -251,10 +251,23 @@ export const PlanPositionSchema = PositionSchema.extend({
   on: IdSchema,
 });
 
+const coordinate = z.int().min(-1_000_000).max(1_000_000);
+
+/** A line, 1/100 mm, along which a run goes a stretch because somebody led it there: upright at `x` or level at `y`. */
+export const BendSchema = z.union([z.strictObject({ x: coordinate }), z.strictObject({ y: coordinate })]);
+/** The face, and the first wire of the run. */
+export const BendKeySchema = z
+  .string()
+  .max(80)
+  .regex(/^(overview|connections):[A-Za-z0-9_.:-]+$/, 'bends are kept by face and wire, as overview:w1');
+/** Lines of one run, in order from its first end; all else of its way is worked out. */
+export const BendsSchema = z.array(BendSchema).min(1).max(24);
+
 export const SheetSchema = z.strictObject({
   overview: positions.optional(),
   connections: positions.optional(),
   plan: z.record(IdSchema, PlanPositionSchema).optional(),
+  bends: z.record(BendKeySchema, BendsSchema).optional(),
 });
 
 const uniqueIds = (list: readonly { id: string }[], path: string, ctx: z.RefinementCtx) => {
@@ -313,6 +326,7 @@ export type SurveyRoom = z.infer<typeof SurveyRoomSchema>;
 export type Position = z.infer<typeof PositionSchema>;
 export type FloorPlan = z.infer<typeof FloorPlanSchema>;
 export type PlanPosition = z.infer<typeof PlanPositionSchema>;
+export type Bend = z.infer<typeof BendSchema>;
 export type Face = 'overview' | 'connections';
 /** Whatever keeps positions of its own for the same parts: the two faces, and the floor plan. */
 export const ARRANGEMENTS = ['overview', 'connections', 'plan'] as const satisfies readonly (Face | 'plan')[];
@@ -344,7 +358,7 @@ export const byId = (a: { id: string }, b: { id: string }): number => byCode(a.i
 
 const byOrder = (a: SurveyRoom, b: SurveyRoom): number => a.order - b.order || byId(a, b);
 
-const sortedPositions = <P extends Position>(places: Record<string, P>): Record<string, P> =>
+const sortedByKey = <P>(places: Record<string, P>): Record<string, P> =>
   Object.fromEntries(
     Object.keys(places)
       .sort(byCode)
@@ -356,11 +370,12 @@ const sortedPositions = <P extends Position>(places: Record<string, P>): Record<
  * left out. The same home is the same bytes whatever the order of drawing.
  */
 export function canonical(doc: Installation): Installation {
-  const { overview, connections, plan } = doc.sheet ?? {};
+  const { overview, connections, plan, bends } = doc.sheet ?? {};
   const sheet = {
-    ...(overview && Object.keys(overview).length > 0 && { overview: sortedPositions(overview) }),
-    ...(connections && Object.keys(connections).length > 0 && { connections: sortedPositions(connections) }),
-    ...(plan && Object.keys(plan).length > 0 && { plan: sortedPositions(plan) }),
+    ...(overview && Object.keys(overview).length > 0 && { overview: sortedByKey(overview) }),
+    ...(connections && Object.keys(connections).length > 0 && { connections: sortedByKey(connections) }),
+    ...(plan && Object.keys(plan).length > 0 && { plan: sortedByKey(plan) }),
+    ...(bends && Object.keys(bends).length > 0 && { bends: sortedByKey(bends) }),
   };
   return {
     schema: 1,

@@ -15,6 +15,9 @@ import {
 import { feedsInverter, walk, type TreeNode } from './overview-tree';
 import type { Hanging } from './overview-ways';
 
+/** Between the devices of the column: what leaves them for the bars and the arrester turns here. */
+const TRUNK_GAP = m(6);
+
 /** The board: the column at the left, each bar over its ways, neutral and earth bars above the line bar. */
 export function placeBoard(s: PageState): void {
   const roots = [...(s.plan.tree.mains ? [s.plan.tree.mains] : []), ...s.plan.tree.backups];
@@ -51,7 +54,7 @@ export function placeBoard(s: PageState): void {
     }
   let y: number = TOP.first - m(8);
   for (const node of trunk.filter((n) => !isLongBar(n.part.kind)))
-    y = putPart(s, node.part, LEFT, y).bottom + (node.part.kind === 'supply' ? m(3) : m(4));
+    y = putPart(s, node.part, LEFT, y).bottom + (node.part.kind === 'supply' ? m(3) : TRUNK_GAP);
   const trunkBottom = y;
   const right = trunk.length > 0 ? LEFT + m(22) : LEFT;
   // rows, from above: bars of the column, devices over the bars, earth, neutral, line, ways

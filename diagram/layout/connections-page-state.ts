@@ -6,6 +6,7 @@ import type { Page } from './connections-page';
 import { m } from './overview-metrics';
 import type { OverviewPlan } from './overview-plan';
 import type { TreeNode } from './overview-tree';
+import { perDocument } from './per-document';
 
 /** What the steps of placing a page of the connections face share: its measures, and what stands already. */
 
@@ -22,7 +23,7 @@ export const ROW_GAP = m(6);
 export const COLUMN_GAP = m(8);
 
 /** Used marks of each bar and joint of a document, in number order: it is drawn with these and one free. */
-export function usedMarks(doc: Installation): Map<string, string[]> {
+export const usedMarks = perDocument((doc: Installation): ReadonlyMap<string, readonly string[]> => {
   const marks = new Map<string, Set<string>>();
   for (const wire of doc.wires)
     for (const [id, mark] of [wire.from, wire.to]) {
@@ -31,7 +32,7 @@ export function usedMarks(doc: Installation): Map<string, string[]> {
       marks.set(id, set);
     }
   return new Map([...marks].map(([id, set]) => [id, [...set].sort((a, b) => Number(a) - Number(b))]));
-}
+});
 
 /** Kinds that stand on a board, over or under its bars. */
 export const ON_BOARD: ReadonlySet<Kind> = new Set<Kind>([

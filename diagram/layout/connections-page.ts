@@ -1,8 +1,9 @@
 import { byDesignation } from '../document/names';
 import { byCode, type Cable, type End, type Installation, type Part, type Wire } from '../document/schema';
 import { coreOf } from './overview-graph';
-import type { OverviewPlan } from './overview-plan';
+import { planOverview, type OverviewPlan } from './overview-plan';
 import { walk } from './overview-tree';
+import { perDocument } from './per-document';
 import { lengthText, cableSize } from './wording';
 import { printedRef } from './overview-labels';
 
@@ -78,7 +79,12 @@ function feedingWires(plan: OverviewPlan): Map<string, string> {
 /** The bar or device a core comes from: straight on through joints of its own kind. */
 function homes(doc: Installation, byId: ReadonlyMap<string, Part>): (wire: Wire, from: End) => string {
   const at = new Map<string, Wire[]>();
-  for (const wire of doc.wires) for (const [id] of [wire.from, wire.to]) at.set(id, [...(at.get(id) ?? []), wire]);
+  for (const wire of doc.wires)
+    for (const [id] of [wire.from, wire.to]) {
+      const list = at.get(id);
+      if (list) list.push(wire);
+      else at.set(id, [wire]);
+    }
   return (wire, from) => {
     const seen = new Set<string>();
     let queue = [from[0]];
@@ -100,21 +106,38 @@ function homes(doc: Installation, byId: ReadonlyMap<string, Part>): (wire: Wire,
   };
 }
 
+/** What all pages of a document are read from. */
+const book = perDocument((doc) => {
+  const plan = planOverview(doc);
+  const ids = placeIds(doc);
+  const { byId } = plan.graph;
+  const pageOf = new Map([...byId].map(([id, part]) => [id, placeOf(ids, part)]));
+  const wires = new Map<string, Wire[]>();
+  for (const wire of [...doc.wires].sort((a, b) => byCode(a.id, b.id)))
+    for (const place of new Set([pageOf.get(wire.from[0]), pageOf.get(wire.to[0])])) {
+      if (place === undefined) continue;
+      const list = wires.get(place);
+      if (list) list.push(wire);
+      else wires.set(place, [wire]);
+    }
+  return {
+    pageOf,
+    wires,
+    feeds: feedingWires(plan),
+    homeOf: homes(doc, byId),
+    cables: new Map(doc.cables.map((cable) => [cable.id, cable])),
+  };
+});
+
 /** Reads one page of a document. */
 export function readPage(doc: Installation, plan: OverviewPlan, place: string): Page {
-  const ids = placeIds(doc);
-  const byId = plan.graph.byId;
-  const onPage = (id: string): boolean => {
-    const part = byId.get(id);
-    return part !== undefined && placeOf(ids, part) === place;
-  };
-  const parts = [...byId.values()].filter((part) => placeOf(ids, part) === place);
+  const { byId } = plan.graph;
+  const { pageOf, wires, feeds, homeOf, cables: cablesById } = book(doc);
+  const parts = [...byId.values()].filter((part) => pageOf.get(part.id) === place);
   const inner: Wire[] = [];
   const groups = new Map<string, Core[]>();
-  const feeds = feedingWires(plan);
-  const homeOf = homes(doc, byId);
-  for (const wire of [...doc.wires].sort((a, b) => byCode(a.id, b.id))) {
-    const [from, to] = [onPage(wire.from[0]), onPage(wire.to[0])];
+  for (const wire of wires.get(place) ?? []) {
+    const [from, to] = [pageOf.get(wire.from[0]) === place, pageOf.get(wire.to[0]) === place];
     if (from && to) inner.push(wire);
     if (from === to) continue;
     const [here, far] = from ? [wire.from, wire.to] : [wire.to, wire.from];
@@ -134,7 +157,7 @@ export function readPage(doc: Installation, plan: OverviewPlan, place: string): 
       cores,
       outgoing,
       atFoot: outgoing && (head !== undefined || isBoardPart(byId.get(live.here[0]))),
-      lines: cableLines(doc, plan, cores, outgoing),
+      lines: cableLines(doc, plan, cores, outgoing, cablesById),
     };
   });
   cables.sort((a, b) => byCode(a.id, b.id));
@@ -145,9 +168,12 @@ const isBoardPart = (part: Part | undefined): boolean =>
   part !== undefined &&
   ['mcb', 'rcbo', 'rcd', 'isolator', 'fuse', 'inverter', 'line-bar', 'changeover'].includes(part.kind);
 
-function cableLines(doc: Installation, plan: OverviewPlan, cores: readonly Core[], outgoing: boolean): string[] {
+function cableLines(doc: Installation, plan: OverviewPlan, cores: readonly Core[],
+  outgoing: boolean,
+  cables: ReadonlyMap<string, Cable>,
+): string[] {
   const first = cores[0]!;
-  const cable: Cable | undefined = doc.cables.find((c) => c.id === first.wire.cable);
+  const cable: Cable | undefined = cables.get(first.wire.cable ?? '');
   const way = plan.ways.find((w) => cores.some((core) => w.wires.includes(core.wire.id)));
   const far = plan.graph.byId.get(first.far[0]);
   const room = doc.places.find((place) => place.id === far?.place)?.name;

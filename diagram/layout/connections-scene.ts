@@ -4,7 +4,8 @@ import { practices } from '../practices';
 import { symbolFor } from '../symbols';
 import { barSymbol, type BarKind } from '../symbols/bar';
 import type { Side } from '../symbols/types';
-import { traceFeeds, type Feeds } from '../terminals/feeds';
+import type { Feeds } from '../terminals/feeds';
+import { WaysBefore, linesOf } from './bends';
 import { barBodies, fixedBodies, placeCables, type PlacedCable, type Stub } from './connections-ends';
 import { connectionFrames } from './connections-frames';
 import { letterPage } from './connections-labels';
@@ -14,9 +15,10 @@ import { planPage } from './connections-place';
 import type { Body } from './ends';
 import { m } from './overview-metrics';
 import { planOverview } from './overview-plan';
+import { feedsOf } from './feeds-of';
 import { fillIn } from './positions';
 import { routeAll } from './route';
-import type { Obstacle, RouteEnd, RouteRequest, Soft } from './route-grid';
+import type { Line, Obstacle, RouteEnd, RouteRequest, Soft } from './route-grid';
 import { findHops } from './route-marks';
 import type { Point, Scene, ScenePart, SceneRun } from './scene';
 import { byIdOf } from './scene-order';
@@ -59,7 +61,7 @@ function sidesOf(part: Part, side: Side): Pick<RouteEnd, 'sides' | 'even'> {
 }
 
 /** One place with each core to each terminal; the first page where no place is named. */
-export function connectionsScene(doc: Installation, place?: string): Scene {
+export function connectionsScene(doc: Installation, place?: string, before?: Scene): Scene {
   const plan = planOverview(doc);
   const page = readPage(doc, plan, place ?? connectionPages(doc)[0]?.place ?? '');
   const marks = usedMarks(doc);
@@ -67,9 +69,15 @@ export function connectionsScene(doc: Installation, place?: string): Scene {
   const fixed = fixedBodies(page, positions, marks);
   const cables = placeCables(page, fixed, positions);
   const bodies = barBodies(page, positions, fixed, cables, marks);
-  const feeds = traceFeeds(doc);
+  const feeds = feedsOf(doc);
   const frames = connectionFrames(doc, page, bodies, cables);
-  const routes = routeCores(page, bodies, cables, feeds);
+  const lines = new Map(
+    [...page.inner, ...page.cables.flatMap(({ cores }) => cores.map(({ wire }) => wire))].map(({ id }) => [
+      id,
+      linesOf(doc, 'connections', [id]),
+    ]),
+  );
+  const routes = routeCores(page, bodies, cables, feeds, lines, new WaysBefore(before, 'connections', page.place));
   const texts = letterPage(page, plan, bodies, cables, frames, routes.points);
   const { colours } = practices[doc.practice].colourSchemes[0];
 
@@ -105,6 +113,7 @@ export function connectionsScene(doc: Installation, place?: string): Scene {
     colour: wire.colour ?? colours[wire.role].value[0],
     weight: 'normal',
     texts: texts.wires.get(wire.id) ?? [],
+    ...(lines.get(wire.id) && { lines: lines.get(wire.id) }),
     hops: routes.hops.get(wire.id) ?? [],
   });
   const runs = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map(run);
@@ -142,6 +151,8 @@ function routeCores(
   bodies: ReadonlyMap<string, Body>,
   cables: readonly PlacedCable[],
   feeds: Feeds,
+  linesFor: ReadonlyMap<string, Line[] | undefined>,
+  before: WaysBefore,
 ): CoreRoutes {
   const parts = new Map(page.parts.map((part) => [part.id, part]));
   const stubs = new Map(cables.flatMap((cable) => cable.stubs.map((stub) => [stub.core.wire.id, stub] as const)));
@@ -160,6 +171,8 @@ function routeCores(
       const stub = stubs.get(wire.id);
       const from = at(wire.from, stub)!;
       const to = at(wire.to, stub)!;
+      const lines = linesFor.get(wire.id);
+      const given = before.of(`wire:${wire.id}`, lines);
       const late = [wire.from, wire.to].some(([id]) => parts.get(id)?.kind === 'spd');
       return {
         id: wire.id,
@@ -170,6 +183,8 @@ function routeCores(
         from,
         to,
         backup: feeds.wires.get(wire.id) === 'backup',
+        ...(lines && { lines }),
+        ...(given && { given }),
       };
     },
   );

@@ -8,6 +8,7 @@ import { FOOT, m } from './overview-metrics';
 import { startPlan } from './overview-plan-state';
 import { placeFoot, placeRooms, placeTray, settleLevels } from './overview-rows';
 import { overviewTree, type OverviewTree } from './overview-tree';
+import { perDocument } from './per-document';
 import { waysAndRooms, type WaysAndRooms } from './overview-ways';
 
 /** Places of the whole overview in the order of current, and what the scene needs to know about it. */
@@ -32,7 +33,7 @@ export interface OverviewPlan {
 }
 
 /** Plans the overview of any document. Pure; same document, same plan. */
-export function planOverview(doc: Installation): OverviewPlan {
+export const planOverview = perDocument((doc: Installation): OverviewPlan => {
   const graph = overviewGraph(doc);
   const places = new Map(doc.places.map((place) => [place.id, place]));
   const board = [...graph.parts.values()].find((part) => part.kind === 'supply' || part.kind === 'line-bar')?.place;
@@ -95,4 +96,4 @@ export function planOverview(doc: Installation): OverviewPlan {
       bottom: left.length > 0 ? end : bottom,
     },
   };
-}
+});

@@ -1,10 +1,11 @@
 import { isBar } from '../document/kinds';
 import { byCode, type End } from '../document/schema';
 import type { Side } from '../symbols/types';
+import type { WaysBefore } from './bends';
 import { endKey, type Body, type RunEnd } from './ends';
 import type { OverviewGraph, OverviewRun } from './overview-graph';
 import { routeAll } from './route';
-import type { Obstacle, RouteEnd, RouteRequest, Soft } from './route-grid';
+import type { Line, Obstacle, RouteEnd, RouteRequest, Soft } from './route-grid';
 import { findDots, findHops, type NetPath } from './route-marks';
 import type { Point } from './scene';
 
@@ -69,6 +70,8 @@ export function overviewRoutes(
   ends: ReadonlyMap<string, RunEnd>,
   softs: readonly Soft[],
   backup: (run: OverviewRun) => boolean,
+  linesFor: (run: OverviewRun) => Line[] | undefined,
+  before: WaysBefore,
 ): OverviewRoutes {
   const nets = netsOf(graph);
   const strandOf = (run: OverviewRun): string => (leavesPlace(graph, run) ? `cable ${run.id}` : nets.get(run.id)!);
@@ -86,7 +89,10 @@ export function overviewRoutes(
       ...(at.any ? { sides: ANY, even: true } : { sides: [at.side], reach: SHARED_REACH }),
     };
   };
-  const requests = graph.runs.map((run): RouteRequest => ({
+  const requests = graph.runs.map((run): RouteRequest => {
+    const lines = linesFor(run);
+    const given = before.of(run.id, lines);
+    return {
     id: run.id,
     net: nets.get(run.id)!,
     strand: strandOf(run),
@@ -94,7 +100,10 @@ export function overviewRoutes(
     from: end(endKey(run, run.from[0])),
     to: end(endKey(run, run.to[0])),
     backup: backup(run),
-  }));
+    ...(lines && { lines }),
+    ...(given && { given }),
+    };
+  });
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({
     id,
     x: body.x,

@@ -1,7 +1,9 @@
 import { byCode, type Installation, type Part } from '../document/schema';
 import { symbolFor } from '../symbols';
-import { traceFeeds, type Feeds } from '../terminals/feeds';
+import type { Feeds } from '../terminals/feeds';
+import { WaysBefore, linesOf } from './bends';
 import { placeEnds, type Ends } from './ends';
+import { feedsOf } from './feeds-of';
 import { nameFrame } from './frame-names';
 import { Ground, blockTexts, placeLabel, type Label } from './labels';
 import { actualLevels, bands, lanes, roomFrames } from './overview-frames';
@@ -20,11 +22,12 @@ import { textBox } from './text-box';
 const BAND_NAMES = 1150;
 
 /** The overview of any document. */
-export function overviewScene(doc: Installation, plan: OverviewPlan = planOverview(doc)): Scene {
+export function overviewScene(doc: Installation, before?: Scene): Scene {
+  const plan = planOverview(doc);
   const positions = overviewPositions(plan, doc.sheet?.overview ?? {});
   const { graph } = plan;
   const places = placeEnds(graph, positions);
-  const feeds = traceFeeds(doc);
+  const feeds = feedsOf(doc);
   const frames = roomFrames(doc, plan, positions, places.bodies);
   const routes = overviewRoutes(
     graph,
@@ -32,6 +35,8 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
     places.ends,
     spokenFor(plan, places, frames),
     (run) => feeds.wires.get(run.wires[0] ?? '') === 'backup',
+    (run) => linesOf(doc, 'overview', run.wires),
+    new WaysBefore(before, 'overview'),
   );
   const levels = actualLevels(plan, positions);
   const lettered = letter(doc, plan, places, routes, frames, feeds);
@@ -41,6 +46,7 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
   );
   const runs = graph.runs.map((run): SceneRun => {
     const ticks = lettered.ticks.get(run.id);
+    const lines = linesOf(doc, 'overview', run.wires);
     return {
       id: run.id,
       wires: run.wires,
@@ -53,6 +59,7 @@ export function overviewScene(doc: Installation, plan: OverviewPlan = planOvervi
       weight: leavesPlace(graph, run) || !plan.roomOf.has(run.from[0]) ? 'heavy' : 'normal',
       ...(ticks && { ticks: ticks.ticks }),
       texts: lettered.texts.get(run.id) ?? [],
+      ...(lines && { lines }),
       hops: routes.hops.get(run.id) ?? [],
     };
   });

@@ -1,8 +1,9 @@
 import type { Patch } from '../document/patch';
-import { byCode, canonical, type Face, type Installation, type Position } from '../document/schema';
+import { byCode, type Face, type Installation, type Position } from '../document/schema';
 import { symbolFor } from '../symbols';
 import { turnedSize } from '../symbols/turn';
 import { MODULE } from '../symbols/types';
+import { canonicalOf } from './build-scene';
 import { connectionPositions } from './connections-scene';
 import { Ground } from './labels';
 import { planOverview } from './overview-plan';
@@ -11,9 +12,9 @@ import { around } from './positions';
 
 /** Where every drawn part stands on a face: stored, or worked out. No routing is done for it. */
 export function positionsOn(doc: Installation, face: Face): Map<string, Position> {
-  const sorted = canonical(doc);
+  const sorted = canonicalOf(doc);
   if (face === 'connections') return connectionPositions(sorted);
-  return overviewPositions(planOverview(sorted), doc.sheet?.overview ?? {});
+  return new Map(overviewPositions(planOverview(sorted), doc.sheet?.overview ?? {}));
 }
 
 /** A change that gives every part a position on both faces; what has one keeps it. Empty where nothing is missing. */

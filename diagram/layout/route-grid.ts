@@ -25,6 +25,9 @@ export interface RouteEnd extends Point {
   reach?: number;
 }
 
+/** A line that a run goes along for a stretch: upright at x or level at y. */
+export type Line = { x: number; y?: undefined } | { y: number; x?: undefined };
+
 export interface RouteRequest {
   id: string;
   /** runs of one strand may share a stretch, and it is cheap to do so */
@@ -39,6 +42,10 @@ export interface RouteRequest {
   late?: boolean;
   /** fed by the backup: it keeps to ground of its own where there is a choice */
   backup?: boolean;
+  /** lines on which the run goes a stretch, as a person set them, in order from its first end */
+  lines?: readonly Line[];
+  /** the way it had before: it keeps it where that is still free */
+  given?: readonly Point[];
 }
 
 /** Ground that costs extra to walk on: where lettering is to stand. */
@@ -73,8 +80,7 @@ export interface Grid {
 function lines(spans: readonly (readonly [number, number])[], extra: readonly number[]): Int32Array {
   const found = new Set<number>(extra);
   for (const [from, to] of spans)
-    for (let at = Math.ceil(from / MODULE) * MODULE - REACH * MODULE; at <= to + REACH * MODULE; at += MODULE)
-      found.add(at);
+    for (let at = Math.ceil(from / MODULE) * MODULE - REACH * MODULE; at <= to + REACH * MODULE; at += MODULE) found.add(at);
   return Int32Array.from(found).sort();
 }
 
@@ -109,19 +115,20 @@ export function buildGrid(
   softs: readonly Soft[],
 ): Grid | null {
   const ends = requests.flatMap((request) => [request.from, request.to]);
+  const wanted = requests.flatMap(({ lines = [], given = [] }) => [...lines, ...given]);
   const xs = lines(
     merged([
       ...obstacles.map((o): [number, number] => [o.x, o.x + o.width]),
       ...ends.map((e): [number, number] => [e.x, e.x]),
     ]),
-    ends.map((e) => e.x),
+    [...ends.map((e) => e.x), ...wanted.flatMap(({ x }) => x ?? [])],
   );
   const ys = lines(
     merged([
       ...obstacles.map((o): [number, number] => [o.y, o.y + o.height]),
       ...ends.map((e): [number, number] => [e.y, e.y]),
     ]),
-    ends.map((e) => e.y),
+    [...ends.map((e) => e.y), ...wanted.flatMap(({ y }) => y ?? [])],
   );
   const columns = xs.length;
   const rows = ys.length;

@@ -15,13 +15,19 @@ export const COST = {
   shared: 0.35,
   /** share of its length that a stretch beside another run costs more */
   close: 0.5,
+  /** share of its length that a stretch on a line chosen by hand costs */
+  onLine: 0.9,
+  /** that walking over another run is worth, where there is no free way: that run is then moved away */
+  pushing: 12_000,
 } as const;
 
 /** What stands on the grid: 0 is free, else the number of a strand. */
 export interface Occupancy {
-  /** the net and the family of each strand */
-  netOf: readonly number[];
-  familyOf: readonly number[];
+  /** the net and the family of each strand, at the strand's number plus one; -1 belongs to none */
+  nets: Int32Array;
+  families: Int32Array;
+  /** how often a strand was moved away for others, at the same place: pushing it again costs more */
+  pushed: Int32Array;
   /** per node, the edge to the right and the edge down */
   right: Int32Array;
   down: Int32Array;
@@ -35,8 +41,9 @@ export interface Occupancy {
 export const emptyOccupancy = (grid: Grid, netOf: readonly number[], familyOf: readonly number[]): Occupancy => {
   const size = grid.columns * grid.rows;
   return {
-    netOf,
-    familyOf,
+    nets: Int32Array.from([-1, ...netOf]),
+    families: Int32Array.from([-1, ...familyOf]),
+    pushed: new Int32Array(netOf.length + 1),
     right: new Int32Array(size),
     down: new Int32Array(size),
     level: new Int32Array(size),
@@ -53,6 +60,8 @@ export interface Stub {
   /** 0 up, 1 right, 2 down, 3 left */
   direction: number;
   penalty: number;
+  /** the first of them, within the part */
+  inside: number[];
 }
 
 export const nodeAt = (grid: Grid, point: Point): number =>
@@ -86,27 +95,40 @@ export const free = (occupancy: Occupancy, edge: number, level: boolean, net: nu
 };
 /** True when a place is free for a strand or taken by one of its family. */
 export const same = (occupancy: Occupancy, on: number, net: number): boolean =>
-  on === 0 || on === net || (on > 0 && occupancy.familyOf[on] === occupancy.familyOf[net]);
+  on === 0 || occupancy.families[on + 1] === occupancy.families[net + 1];
 /** True when two strands are of one net, or one of them is none. */
 export const joined = (occupancy: Occupancy, on: number, net: number): boolean =>
-  on === 0 || on === net || (on > 0 && occupancy.netOf[on] === occupancy.netOf[net]);
+  on === 0 || occupancy.nets[on + 1] === occupancy.nets[net + 1];
 /** The way out of a terminal may be shared by all that ends there. */
 const freeStub = (occupancy: Occupancy, edge: number, level: boolean, net: number): boolean =>
   joined(occupancy, level ? occupancy.right[edge]! : occupancy.down[edge]!, net);
 
-/** The ways out of a terminal that nothing else has taken: straight through its own part to the first free node. */
-export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: number): Stub[] {
+/**
+ * The ways out of a terminal that nothing else has taken: straight through its own part to the first free node.
+ * @param fixed nodes of terminals; where given, only those are in the way: runs are moved away afterwards
+ */
+export function stubs(
+  grid: Grid,
+  occupancy: Occupancy,
+  end: RouteEnd,
+  net: number,
+  fixed?: ReadonlyMap<number, number>,
+): Stub[] {
   const own = grid.parts.get(end.part) ?? 0;
   const found: Stub[] = [];
+  const barred = (edge: number, direction: number, next: number): boolean =>
+    fixed
+      ? fixed.has(next) && !joined(occupancy, fixed.get(next)!, net)
+      : !freeStub(occupancy, edge, isLevel(direction), net) || !joined(occupancy, occupancy.corner[next]!, net);
   end.sides.forEach((side, place) => {
     const direction = DIRECTIONS.indexOf(side);
     const nodes = [nodeAt(grid, end)];
     do {
       const node = nodes.at(-1)!;
       const edge = edgeFrom(grid, node, direction);
-      if (edge < 0 || !freeStub(occupancy, edge, isLevel(direction), net)) return;
+      if (edge < 0) return;
       const next = nextNode(grid, node, direction);
-      if (!joined(occupancy, occupancy.corner[next]!, net)) return;
+      if (barred(edge, direction, next)) return;
       if (
         grid.covered[next] !== 0 &&
         grid.covered[next] !== own &&
@@ -116,16 +138,17 @@ export function stubs(grid: Grid, occupancy: Occupancy, end: RouteEnd, net: numb
       nodes.push(next);
     } while (grid.covered[nodes.at(-1)!] !== 0);
     const penalty = end.even ? 0 : place * COST.side;
-    found.push({ nodes: [...nodes], direction, penalty });
+    const inside = nodes.slice(0, -1);
+    found.push({ nodes: [...nodes], direction, penalty, inside });
     for (let more = 1; more < (end.reach ?? 1); more++) {
       const node = nodes.at(-1)!;
       const edge = edgeFrom(grid, node, direction);
-      if (edge < 0 || !freeStub(occupancy, edge, isLevel(direction), net)) return;
+      if (edge < 0) return;
       const next = nextNode(grid, node, direction);
-      if (grid.covered[next] !== 0 || !joined(occupancy, occupancy.corner[next]!, net)) return;
+      if (grid.covered[next] !== 0 || barred(edge, direction, next)) return;
       if (crosses(occupancy, next, isLevel(direction), net)) return;
       nodes.push(next);
-      found.push({ nodes: [...nodes], direction, penalty: penalty + more * MODULE * COST.shared });
+      found.push({ nodes: [...nodes], direction, penalty: penalty + more * MODULE * COST.shared, inside });
     }
   });
   return found;

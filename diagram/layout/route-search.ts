@@ -1,201 +1,111 @@
-import { CROSSABLE, type Grid, type RouteEnd } from './route-grid';
-import { Heap } from './route-heap';
-import {
-  COST,
-  crosses,
-  edgeFrom,
-  free,
-  isLevel,
-  joined,
-  nextNode,
-  same,
-  straight,
-  stubs,
-  type Occupancy,
-  type Stub,
-} from './route-occupancy';
+import { lineAt, type Grid, type Line, type RouteEnd } from './route-grid';
+import { COST, joined, straight, stubs, type Occupancy, type Stub } from './route-occupancy';
+import { Ground, type Window } from './route-ground';
+import { Relaxer, type Goal, type Start } from './route-relax';
 import type { Point } from './scene';
+import { MODULE } from '../symbols/types';
 
-/** Shortest way between two terminals over the grid, by A*: length, bends, crossings, ground that is spoken for. */
+/** The best way between two terminals over the grid: length, bends, crossings, ground that is spoken for. */
 
-/** By how much the length still to go is overrated where runs keep apart. */
-const AHEAD = 1.15;
+/** What is asked of a search, besides its ends. */
+export interface Question {
+  /** number of the run's strand, not 0 */
+  net: number;
+  /** which ground it keeps to */
+  backup: boolean;
+  /** lines on which the run goes a stretch, in order from its first end */
+  lines: readonly Line[];
+  /** goes over other runs where it must: they are moved away afterwards. Never over a part or a terminal. */
+  insists: boolean;
+}
 
-/** Reusable memory of the search; a stamp tells old entries from new ones. */
+export interface Way {
+  nodes: number[];
+  cost: number;
+}
+
+/** How far beyond the ends of a run a way is looked for first, 1/100 mm. */
+const BEYOND = 16 * MODULE;
+
 export class Search {
-  private readonly best: Float64Array;
-  private readonly from: Int32Array;
-  private readonly stamp: Int32Array;
-  private readonly closed: Int32Array;
-  private readonly heap = new Heap();
-  private run = 0;
+  private readonly ground: Ground;
+  private readonly relaxer = new Relaxer();
+  private readonly all: Window;
 
   constructor(
     private readonly grid: Grid,
     private readonly occupancy: Occupancy,
+    /** nodes of terminals, which nobody's insisting moves */
+    private readonly terminals: ReadonlyMap<number, number>,
     /** keep a free line between runs where there is room */
-    private readonly spread: boolean,
+    spread: boolean,
   ) {
-    const size = grid.columns * grid.rows * 4;
-    this.best = new Float64Array(size);
-    this.from = new Int32Array(size);
-    this.stamp = new Int32Array(size);
-    this.closed = new Int32Array(size);
+    this.ground = new Ground(grid, occupancy, terminals, spread);
+    this.all = { left: 0, right: grid.columns - 1, top: 0, bottom: grid.rows - 1 };
   }
 
-  /**
-   * Nodes from one terminal to the other, or null where there is no way.
-   * @param net number of the run's net, not 0
-   * @param backup which ground it keeps to
-   * @param shares whether others of the net are drawn, whose stretches may be used
-   */
-  find(
-    from: RouteEnd,
-    to: RouteEnd,
-    net: number,
-    shares: boolean,
-    backup = false,
-  ): { nodes: number[]; cost: number } | null {
-    const { grid } = this;
-    const direct = straight(grid, this.occupancy, from, to, net);
-    if (direct) return { nodes: direct, cost: Math.abs(from.x - to.x) + Math.abs(from.y - to.y) };
-    const starts = stubs(grid, this.occupancy, from, net);
-    const goals = this.goals(stubs(grid, this.occupancy, to, net), net);
-    if (starts.length === 0 || goals.size === 0) return null;
-    const goalNodes = [...new Set([...goals.keys()].map((state) => state >> 2))];
-    const goalXs = goalNodes.map((node) => grid.xs[node % grid.columns]!);
-    const goalYs = goalNodes.map((node) => grid.ys[Math.floor(node / grid.columns)]!);
-    // where runs keep apart a way costs more than its length: looking ahead more boldly finds it sooner, and nearly as good
-    const rate = (shares ? COST.shared : 1) * (this.spread ? AHEAD : 1);
-    // never more than what is left to go: the length, and a bend where the goal lies on neither line through the node
-    const estimate = (node: number): number => {
-      const column = node % grid.columns;
-      const x = grid.xs[column]!;
-      const y = grid.ys[(node - column) / grid.columns]!;
-      let least = Infinity;
-      for (let i = 0; i < goalXs.length; i++) {
-        const dx = Math.abs(goalXs[i]! - x);
-        const dy = Math.abs(goalYs[i]! - y);
-        const cost = (dx + dy) * rate + (dx > 0 && dy > 0 ? COST.bend : 0);
-        if (cost < least) least = cost;
-      }
-      return least;
-    };
-    this.run++;
-    const { heap } = this;
-    heap.clear();
-    const reach = (state: number, cost: number, previous: number) => {
-      if (this.stamp[state] === this.run && this.best[state]! <= cost) return;
-      this.stamp[state] = this.run;
-      this.best[state] = cost;
-      this.from[state] = previous;
-      heap.push(state, cost + estimate(state >> 2));
-    };
-    const startOf = new Map<number, Stub>();
-    for (const stub of starts) {
-      const state = stub.nodes.at(-1)! * 4 + stub.direction;
-      startOf.set(state, stub);
-      reach(state, stub.penalty, -1);
-    }
-    let found = -1;
-    let foundCost = Infinity;
-    while (heap.size > 0) {
-      const state = heap.pop();
-      if (this.closed[state] === this.run) continue;
-      this.closed[state] = this.run;
-      const cost = this.best[state]!;
-      if (found >= 0 && cost >= foundCost) break;
-      const node = state >> 2;
-      const heading = state & 3;
-      const goal = goals.get(state);
-      if (goal && cost + goal.penalty < foundCost) {
-        found = state;
-        foundCost = cost + goal.penalty;
-      }
-      this.expand(node, heading, cost, net, backup ? grid.soft.backup : grid.soft.mains, reach, state);
-    }
-    if (found < 0) return null;
-    const middle: number[] = [];
-    let state = found;
-    for (; this.from[state]! >= 0; state = this.from[state]!) middle.push(state >> 2);
-    const start = startOf.get(state)!;
-    const nodes = [...start.nodes, ...middle.reverse(), ...[...goals.get(found)!.stub.nodes].reverse().slice(1)];
-    return { nodes, cost: foundCost };
-  }
-
-  /** States in which a search may end: at the outer node of a stub, heading into it or, where nothing crosses, bending into it. */
-  private goals(ends: readonly Stub[], net: number): Map<number, { stub: Stub; penalty: number }> {
-    const goals = new Map<number, { stub: Stub; penalty: number }>();
-    for (const stub of ends) {
-      const node = stub.nodes.at(-1)!;
-      const into = (stub.direction + 2) % 4;
-      const bendable =
-        joined(this.occupancy, this.occupancy.upright[node]!, net) &&
-        joined(this.occupancy, this.occupancy.level[node]!, net);
-      for (let heading = 0; heading < 4; heading++) {
-        if (heading === stub.direction || (heading !== into && !bendable)) continue;
-        const penalty = stub.penalty + (heading === into ? 0 : COST.bend);
-        const before = goals.get(node * 4 + heading);
-        if (!before || penalty < before.penalty) goals.set(node * 4 + heading, { stub, penalty });
-      }
-    }
-    return goals;
-  }
-
-  /** How many of the two neighbouring lines are taken by others along an edge. */
-  private beside(edge: number, level: boolean, net: number): number {
-    const { right, down } = this.occupancy;
-    const [list, step] = level ? [right, this.grid.columns] : [down, 1];
-    return (
-      Number(!same(this.occupancy, list[edge - step] ?? 0, net)) +
-      Number(!same(this.occupancy, list[edge + step] ?? 0, net))
-    );
-  }
-
-  private expand(
-    node: number,
-    heading: number,
-    cost: number,
-    net: number,
-    soft: Float32Array,
-    reach: (state: number, cost: number, previous: number) => void,
-    state: number,
-  ): void {
+  /** Nodes from one terminal to the other, or null where there is no way. */
+  find(from: RouteEnd, to: RouteEnd, ask: Question): Way | null {
     const { grid, occupancy } = this;
-    const here = isLevel(heading) ? occupancy.upright[node]! : occupancy.level[node]!;
-    const along = isLevel(heading) ? occupancy.level[node]! : occupancy.upright[node]!;
-    // where a run leaves its terminal's way out, what shares that way is no hindrance
-    const clear = (on: number): boolean =>
-      this.from[state] === -1 ? joined(occupancy, on, net) : same(occupancy, on, net);
-    const onOther = !clear(here) || !clear(along);
-    for (let direction = 0; direction < 4; direction++) {
-      if ((direction + 2) % 4 === heading) continue;
-      const bends = direction !== heading;
-      // a bend on another conductor would look like a joint
-      if (bends && onOther) continue;
-      const edge = edgeFrom(grid, node, direction);
-      if (edge < 0) continue;
-      const level = isLevel(direction);
-      if (!free(occupancy, edge, level, net)) continue;
-      const next = nextNode(grid, node, direction);
-      const over = grid.covered[next]!;
-      if (over !== 0 && !(over === CROSSABLE && !level)) continue;
-      if (bends && grid.covered[node] === CROSSABLE) continue;
-      if (!joined(occupancy, occupancy.corner[next]!, net)) continue;
-      const length = level
-        ? Math.abs(grid.xs[next % grid.columns]! - grid.xs[node % grid.columns]!)
-        : Math.abs(grid.ys[Math.floor(next / grid.columns)]! - grid.ys[Math.floor(node / grid.columns)]!);
-      const onOwn = (level ? occupancy.right[edge] : occupancy.down[edge]) === net;
-      reach(
-        next * 4 + direction,
-        cost +
-          length * (onOwn ? COST.shared : 1 + soft[next]!) +
-          (bends ? COST.bend : 0) +
-          (crosses(occupancy, next, level, net) ? COST.crossing : 0) +
-          (this.spread ? length * COST.close * this.beside(edge, level, net) : 0),
-        state,
-      );
-    }
+    const direct = ask.lines.length === 0 && straight(grid, occupancy, from, to, ask.net);
+    if (direct) return { nodes: direct, cost: Math.abs(from.x - to.x) + Math.abs(from.y - to.y) };
+    const fixed = ask.insists ? this.terminals : undefined;
+    const starts = stubs(grid, occupancy, from, ask.net, fixed);
+    const goals = stubs(grid, occupancy, to, ask.net, fixed);
+    if (starts.length === 0 || goals.length === 0) return null;
+    // near the straight way first: a long way round reads worse than a crossing, and is slow to look for
+    return this.within(this.around(from, to, ask.lines), starts, goals, ask) ?? this.within(this.all, starts, goals, ask);
+  }
+
+  private around(from: RouteEnd, to: RouteEnd, lines: readonly Line[]): Window {
+    const xs = [from.x, to.x, ...lines.flatMap(({ x }) => x ?? [])];
+    const ys = [from.y, to.y, ...lines.flatMap(({ y }) => y ?? [])];
+    const { grid, all } = this;
+    return {
+      left: lineAt(grid.xs, Math.min(...xs) - BEYOND),
+      right: Math.min(all.right, lineAt(grid.xs, Math.max(...xs) + BEYOND)),
+      top: lineAt(grid.ys, Math.min(...ys) - BEYOND),
+      bottom: Math.min(all.bottom, lineAt(grid.ys, Math.max(...ys) + BEYOND)),
+    };
+  }
+
+  private within(window: Window, starts: readonly Stub[], goals: readonly Stub[], ask: Question): Way | null {
+    const { ground } = this;
+    ground.survey(window, ask);
+    const outer = ({ nodes }: Stub): number => nodes.at(-1)!;
+    const inside = [starts, goals].map((list) => list.filter((stub) => ground.local(outer(stub)) >= 0));
+    const [mine, theirs] = inside as [Stub[], Stub[]];
+    // a way does not come back through its own terminals
+    for (const stub of [...mine, ...theirs]) for (const node of stub.inside) ground.bar(node);
+    const begin = mine.map((stub): Start => {
+      ground.allowBend(outer(stub), this.mayBend(stub, ask));
+      return { at: ground.local(outer(stub)), heading: stub.direction, cost: stub.penalty };
+    });
+    const end = theirs.map(
+      (stub): Goal => ({
+        at: ground.local(outer(stub)),
+        into: (stub.direction + 2) % 4,
+        cost: stub.penalty,
+        bend: this.mayBend(stub, ask) ? COST.bend : Infinity,
+      }),
+    );
+    const found = this.relaxer.relax(ground, begin, end, ask.lines);
+    if (!found) return null;
+    return {
+      nodes: [
+        ...mine[found.start]!.nodes.slice(0, -1),
+        ...found.corners.flatMap((corner, i) => ground.stretch(found.corners[i - 1] ?? corner, corner)),
+        ...[...theirs[found.goal]!.nodes].reverse().slice(1),
+      ],
+      cost: found.cost,
+    };
+  }
+
+  /** True where a bend at the outer node of a terminal's way out lies on no other conductor. */
+  private mayBend(stub: Stub, { net, insists }: Question): boolean {
+    const node = stub.nodes.at(-1)!;
+    const { level, upright } = this.occupancy;
+    return insists || (joined(this.occupancy, level[node]!, net) && joined(this.occupancy, upright[node]!, net));
   }
 }
 

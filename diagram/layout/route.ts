@@ -1,8 +1,9 @@
 import { byCode } from '../document/schema';
 import { MODULE, type Side } from '../symbols/types';
-import { buildGrid, type Grid, type Obstacle, type RouteEnd, type RouteRequest, type Soft } from './route-grid';
-import { COST, edgeFrom, emptyOccupancy, nodeAt, type Occupancy } from './route-occupancy';
-import { Search, toPoints } from './route-search';
+import { buildGrid, type Grid, type Line, type Obstacle, type RouteEnd, type RouteRequest, type Soft } from './route-grid';
+import { COST, edgeFrom, emptyOccupancy, nodeAt, same, type Occupancy } from './route-occupancy';
+import { Search, toPoints, type Way } from './route-search';
+import { traceWay } from './route-trace';
 import type { Point } from './scene';
 
 /**
@@ -15,10 +16,9 @@ interface Routed {
   net: number;
   nodes: number[] | null;
   cost: number;
+  /** how often it was moved away for another */
+  moved: number;
 }
-
-/** How often all runs may look for a better way: once only where they are many. */
-const roundsFor = (runs: number): number => (runs > 160 ? 1 : 2);
 
 const SPAN = (request: RouteRequest): number =>
   Math.abs(request.from.x - request.to.x) + Math.abs(request.from.y - request.to.y);
@@ -35,11 +35,16 @@ const inOrder = (a: RouteRequest, b: RouteRequest): number =>
   SPAN(a) - SPAN(b) ||
   byCode(a.id, b.id);
 
-/** True where a run costs more than the shortest way with the fewest bends, which none can beat. */
-function couldBeBetter({ request: { from, to }, nodes, cost }: Routed): boolean {
+/** No way between two ends costs less. */
+const leastCost = ({ from, to }: RouteRequest): number => {
   const [dx, dy] = [Math.abs(from.x - to.x), Math.abs(from.y - to.y)];
-  return nodes !== null && cost > dx + dy + (dx > 0 && dy > 0 ? COST.bend : 0);
-}
+  return dx + dy + (dx > 0 && dy > 0 ? COST.bend : 0);
+};
+
+/** A run that costs so much more than the shortest way may look again. */
+const WORTH = COST.crossing + COST.bend;
+/** How often one run may be moved away for others. */
+const MOVES = 12;
 
 /** A terminal's own sides first, then the others. */
 const anySide = (end: RouteEnd): Side[] => [...new Set<Side>([...end.sides, 'right', 'left', 'down', 'up'])];
@@ -57,63 +62,126 @@ class Router {
     spread: boolean,
   ) {
     this.occupancy = emptyOccupancy(grid, netOf, familyOf);
-    this.search = new Search(grid, this.occupancy, spread);
+    this.search = new Search(grid, this.occupancy, terminals, spread);
     for (const [node, net] of terminals) this.occupancy.corner[node] = net;
   }
 
+  /** Lays a run on the way it had before; false where that is not free. */
+  keep(routed: Routed): boolean {
+    const { request, net } = routed;
+    const nodes =
+      request.given && traceWay(this.grid, this.occupancy, [request.from, request.to], request.given, net);
+    if (!nodes) return false;
+    this.lay(routed, { nodes, cost: 0 });
+    return true;
+  }
+
   route(routed: Routed): void {
-    const others = this.byNet.get(routed.net) ?? [];
-    const found = this.look(routed, others.length > 0);
-    routed.nodes = found?.nodes ?? null;
-    routed.cost = found?.cost ?? Infinity;
-    others.push(routed);
-    this.byNet.set(routed.net, others);
-    this.mark(routed);
+    const found = this.look(routed);
+    if (found) this.lay(routed, found);
+  }
+
+  /** Lays a run over others where it has no free way, and leads those round it. */
+  insist(routed: Routed): void {
+    const waiting = [routed];
+    while (waiting.length > 0) {
+      const next = waiting.shift()!;
+      const free = this.look(next);
+      if (free) {
+        this.lay(next, free);
+        continue;
+      }
+      const found = next.moved < MOVES ? this.look(next, true) : null;
+      next.moved++;
+      if (!found) continue;
+      for (const other of this.under(found.nodes, next.net)) {
+        this.lift(other);
+        this.occupancy.pushed[other.net + 1]!++;
+        waiting.push(other);
+      }
+      this.lay(next, found);
+    }
   }
 
   /** The best way by the terminals' own sides; where those are taken, by any side. */
-  private look({ request, net }: Routed, shares: boolean): { nodes: number[]; cost: number } | null {
-    const { from, to } = request;
-    return (
-      this.search.find(from, to, net, shares, request.backup) ??
-      this.search.find({ ...from, sides: anySide(from) }, { ...to, sides: anySide(to) }, net, shares, request.backup)
-    );
+  private look({ request, net }: Routed, insists = false): Way | null {
+    const { from, to, backup = false, lines = [] } = request;
+    const ask = { net, backup, insists };
+    const by = (wanted: readonly Line[]): Way | null =>
+      this.search.find(from, to, { ...ask, lines: wanted }) ??
+      this.search.find({ ...from, sides: anySide(from) }, { ...to, sides: anySide(to) }, { ...ask, lines: wanted });
+    if (lines.length === 0) return by([]);
+    const whole = by(lines);
+    if (whole) return whole;
+    // every line that is still possible is kept
+    let kept: { lines: Line[]; way: Way | null } = { lines: [], way: by([]) };
+    for (const line of lines) {
+      const way = by([...kept.lines, line]);
+      if (way) kept = { lines: [...kept.lines, line], way };
+    }
+    return kept.way;
   }
 
   /** Takes a run off the grid, looks again, and keeps the better of the two ways. */
   improve(routed: Routed): boolean {
-    const { nodes } = routed;
+    const { nodes, cost } = routed;
     if (!nodes) return false;
     this.lift(routed);
-    const found = this.look(routed, this.byNet.get(routed.net)!.length > 1);
+    const found = this.look(routed);
     const better = found !== null && found.nodes.join() !== nodes.join();
-    if (better) Object.assign(routed, found);
-    this.mark(routed);
+    this.lay(routed, better ? found : { nodes, cost });
     return better;
   }
 
+  private lay(routed: Routed, way: Way): void {
+    Object.assign(routed, way);
+    this.byNet.set(routed.net, [...(this.byNet.get(routed.net) ?? []), routed]);
+    this.mark(routed);
+  }
+
   private mark(routed: Routed): void {
-    this.eachStep(routed, (node, edge, level, bend) => {
+    this.eachStep(routed.nodes ?? [], (node, edge, level, bend) => {
       if (edge >= 0) (level ? this.occupancy.right : this.occupancy.down)[edge] = routed.net;
       if (bend) this.occupancy.corner[node] = routed.net;
       else (level ? this.occupancy.level : this.occupancy.upright)[node] = routed.net;
     });
   }
 
-  /** Clears what a run alone stood on; what others of its net share is set again. */
+  /** Clears what a run alone stood on; what others of its family share is set again. */
   private lift(routed: Routed): void {
-    this.eachStep(routed, (node, edge, level) => {
-      if (edge >= 0) (level ? this.occupancy.right : this.occupancy.down)[edge] = 0;
-      if (this.occupancy.corner[node] === routed.net) this.occupancy.corner[node] = this.terminals.get(node) ?? 0;
-      if (this.occupancy.level[node] === routed.net) this.occupancy.level[node] = 0;
-      if (this.occupancy.upright[node] === routed.net) this.occupancy.upright[node] = 0;
+    const { occupancy } = this;
+    this.eachStep(routed.nodes ?? [], (node, edge, level) => {
+      if (edge >= 0) (level ? occupancy.right : occupancy.down)[edge] = 0;
+      if (occupancy.corner[node] === routed.net) occupancy.corner[node] = this.terminals.get(node) ?? 0;
+      if (occupancy.level[node] === routed.net) occupancy.level[node] = 0;
+      if (occupancy.upright[node] === routed.net) occupancy.upright[node] = 0;
     });
-    for (const other of this.byNet.get(routed.net)!) if (other !== routed) this.mark(other);
+    const rest = this.byNet.get(routed.net)!.filter((other) => other !== routed);
+    this.byNet.set(routed.net, rest);
+    for (const other of rest) this.mark(other);
+    Object.assign(routed, { nodes: null, cost: Infinity });
+  }
+
+  /** Runs that a way goes over: along them, or through or with a bend of the one or the other. */
+  private under(nodes: readonly number[], net: number): Routed[] {
+    const { occupancy } = this;
+    const met = new Set<number>();
+    const note = (on: number) => {
+      if (!same(occupancy, on, net)) met.add(on);
+    };
+    this.eachStep(nodes, (node, edge, level, bend) => {
+      if (edge >= 0) note((level ? occupancy.right : occupancy.down)[edge]!);
+      if (!this.terminals.has(node)) note(occupancy.corner[node]!);
+      if (bend) for (const list of [occupancy.level, occupancy.upright]) note(list[node]!);
+    });
+    return [...met].sort((a, b) => a - b).flatMap((other) => this.byNet.get(other) ?? []);
   }
 
   /** Each node of a way with the edge that leaves it; ends and corners are told as bends. */
-  private eachStep(routed: Routed, tell: (node: number, edge: number, level: boolean, bend: boolean) => void): void {
-    const nodes = routed.nodes ?? [];
+  private eachStep(
+    nodes: readonly number[],
+    tell: (node: number, edge: number, level: boolean, bend: boolean) => void,
+  ): void {
     let before = -1;
     for (let i = 0; i < nodes.length; i++) {
       const node = nodes[i]!;
@@ -192,6 +260,7 @@ export function routeAll(
     net: strands.get(request.strand)!,
     nodes: null,
     cost: Infinity,
+    moved: 0,
   }));
   if (grid) {
     const router = new Router(
@@ -201,12 +270,12 @@ export function routeAll(
       familyOf,
       options.spread ?? false,
     );
-    for (const routed of all) router.route(routed);
-    for (let round = 0; round < roundsFor(all.length); round++) {
-      let changed = false;
-      for (const routed of all) if (couldBeBetter(routed)) changed = router.improve(routed) || changed;
-      if (!changed) break;
-    }
+    const pinned = all.filter(({ request }) => request.lines?.length && !request.given);
+    for (const routed of pinned) router.route(routed);
+    for (const routed of all) if (!routed.nodes) router.keep(routed);
+    for (const routed of all) if (!routed.nodes) router.route(routed);
+    for (const routed of all) if (!routed.nodes) router.insist(routed);
+    for (const routed of all) if (routed.nodes && routed.cost - leastCost(routed.request) > WORTH) router.improve(routed);
   }
   for (const { request, nodes } of all) {
     const points = nodes ? toPoints(grid!, nodes) : [];

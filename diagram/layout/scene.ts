@@ -1,6 +1,7 @@
 import type { End, Face, Kind, Role } from '../document/schema';
 import type { Side } from '../symbols/types';
 import type { Feed } from '../terminals/feeds';
+import type { Line } from './route-grid';
 
 /**
  * A face of the document as things to draw: the one source of screen, SVG, PNG and PDF. Lengths are 1/100 mm, integers,
@@ -65,6 +66,8 @@ export interface SceneRun {
   /** marks across the run, one a core: plain L, dotted N, barred PE */
   ticks?: { at: Point; vertical: boolean; cores: ('L' | 'N' | 'E')[] };
   texts: SceneText[];
+  /** lines along which somebody led it by hand, in order from its first end */
+  lines?: readonly Line[];
   /** places where this run hops over another that it does not join, in order along it */
   hops: Point[];
 }

@@ -27,6 +27,7 @@ import { NotesLayer } from './notes-layer';
 import { PartNodeView } from './part-node';
 import { endsNear, meant, REACH, type Near } from './pick';
 import { RunEdgeView } from './run-edge';
+import { RunGrips } from './run-grips';
 import { RunsLayer } from './runs-layer';
 import { PX, px } from './units';
 import { useCamera } from './use-camera';
@@ -247,6 +248,7 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
         <RunsLayer scene={scene} hand={wires} />
         <MarksLayer scene={scene} letters={letters} sight={sight} />
         <NotesLayer scene={scene} notes={notes} inHand={finding} />
+        {mayEdit && <RunGrips scene={scene} hands={hands} />}
         {ghost && <GhostLayer scene={scene} ghost={ghost} />}
         <HandLayer
           scene={scene}

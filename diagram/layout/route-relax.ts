@@ -1,0 +1,258 @@
+import type { Line } from './route-grid';
+import type { Ground } from './route-ground';
+
+/**
+ * Least-cost ways over a piece of the grid, by sweeping: along rows, then along columns, each line that has become
+ * cheaper somewhere, until none is left. As many sweeps as the way has bends, whatever it has to cross.
+ */
+
+export interface Start {
+  at: number;
+  /** 0 up, 1 right, 2 down, 3 left */
+  heading: number;
+  cost: number;
+}
+
+export interface Goal {
+  at: number;
+  /** heading in which it is entered */
+  into: number;
+  cost: number;
+  /** of bending into it at its node */
+  bend: number;
+}
+
+export interface Found {
+  cost: number;
+  /** numbers of the start and the goal that were taken */
+  start: number;
+  goal: number;
+  /** nodes at which it bends, with both ends */
+  corners: number[];
+}
+
+/** Costs of coming to each node along one axis, and the node where that stretch began: -1 - n for start n, or a node before. */
+interface Axis {
+  cost: Float64Array;
+  from: Int32Array;
+}
+
+interface Layer {
+  level: Axis;
+  upright: Axis;
+}
+
+const axis = (): Axis => ({ cost: new Float64Array(0), from: new Int32Array(0) });
+function clear(list: Axis, size: number): void {
+  if (list.cost.length < size) {
+    list.cost = new Float64Array(size);
+    list.from = new Int32Array(size);
+  }
+  list.cost.fill(Infinity, 0, size);
+  list.from.fill(0, 0, size);
+}
+
+/** Reads and clears the marks of a line: how many lines there are, how long, and the steps between them and along them. */
+interface Sweep {
+  into: Axis;
+  /** the other axis, from which one bends */
+  source: Axis;
+  edge: Float64Array;
+  enter: Float64Array;
+  lines: number;
+  length: number;
+  /** from one line to the next, and from one node of a line to the next */
+  across: number;
+  along: number;
+  dirty: Uint8Array;
+  /** lines of the other axis that became cheaper */
+  told: Uint8Array;
+}
+
+export class Relaxer {
+  /** kept from one search to the next: nothing in them outlives one */
+  private readonly layers: Layer[] = [];
+  private limit = Infinity;
+
+  /** The cheapest way from any start to any goal that goes a stretch along each of the lines in turn, or null. */
+  relax(ground: Ground, starts: readonly Start[], goals: readonly Goal[], lines: readonly Line[]): Found | null {
+    const size = ground.width * ground.height;
+    while (this.layers.length <= lines.length) this.layers.push({ level: axis(), upright: axis() });
+    const layers = this.layers.slice(0, lines.length + 1);
+    for (const { level, upright } of layers) for (const list of [level, upright]) clear(list, size);
+    this.limit = Infinity;
+    let best: Found | null = null;
+    const rows = new Uint8Array(ground.height);
+    const columns = new Uint8Array(ground.width);
+    const mark = (at: number) => {
+      columns[at % ground.width] = 1;
+      rows[Math.floor(at / ground.width)] = 1;
+    };
+    starts.forEach(({ at, heading, cost }, i) => {
+      const { cost: costs, from } = heading % 2 === 1 ? this.layers[0]!.level : this.layers[0]!.upright;
+      if (costs[at]! <= cost) return;
+      costs[at] = cost;
+      from[at] = -1 - i;
+      mark(at);
+    });
+    layers.forEach((layer, k) => {
+      if (k > 0) this.along(ground, lines[k - 1]!, this.layers[k - 1]!, layer, mark);
+      const last = k === lines.length;
+      const level: Sweep = {
+        into: layer.level,
+        source: layer.upright,
+        edge: ground.right,
+        enter: ground.level,
+        lines: ground.height,
+        length: ground.width,
+        across: ground.width,
+        along: 1,
+        dirty: rows,
+        told: columns,
+      };
+      const upright: Sweep = {
+        into: layer.upright,
+        source: layer.level,
+        edge: ground.down,
+        enter: ground.upright,
+        lines: ground.width,
+        length: ground.height,
+        across: 1,
+        along: ground.width,
+        dirty: columns,
+        told: rows,
+      };
+      while (rows.includes(1) || columns.includes(1)) {
+        this.sweep(level, ground.bend, k === 0);
+        this.sweep(upright, ground.bend, k === 0);
+        if (last) best = this.reached(ground, starts, goals, layer, lines) ?? best;
+      }
+    });
+    return best;
+  }
+
+  /** Sweeps every line that is marked, there and back. */
+  private sweep(s: Sweep, bend: Float64Array, begins: boolean): void {
+    const { cost, from } = s.into;
+    const turned = s.source.cost;
+    const { edge, enter, length, along, told } = s;
+    const { limit } = this;
+    for (let line = 0; line < s.lines; line++) {
+      if (s.dirty[line] === 0) continue;
+      s.dirty[line] = 0;
+      for (let back = 0; back < 2; back++) {
+        let at = line * s.across + (back ? (length - 1) * along : 0);
+        const step = back ? -along : along;
+        // the edge to the next node is kept at the one before it, to the last at itself
+        const lag = back ? 0 : -along;
+        let running = Infinity;
+        let began = -1;
+        for (let i = 0; i < length; i++, at += step) {
+          if (running !== Infinity) running += edge[at + lag]! + enter[at]!;
+          const known = cost[at]!;
+          const bent = turned[at]! + bend[at]!;
+          if (bent < running) {
+            running = bent;
+            began = at;
+          }
+          if (begins && known < running && from[at]! < 0) {
+            running = known;
+            began = at;
+          } else if (running >= limit) running = Infinity;
+          else if (running < known && began !== at) {
+            cost[at] = running;
+            from[at] = began;
+            told[back ? length - 1 - i : i] = 1;
+          }
+        }
+      }
+    }
+  }
+
+  /** From one layer to the next: at least one step along a line, from wherever the layer before comes to it. */
+  private along(ground: Ground, line: Line, before: Layer, after: Layer, mark: (at: number) => void): void {
+    const index = ground.lineIn(line);
+    if (index < 0) return;
+    const upright = line.x !== undefined;
+    const [own, other] = upright ? [before.upright, before.level] : [before.level, before.upright];
+    const { cost, from } = upright ? after.upright : after.level;
+    const edge = upright ? ground.down : ground.right;
+    const enter = upright ? ground.upright : ground.level;
+    const [length, step, first] = upright
+      ? [ground.height, ground.width, index]
+      : [ground.width, 1, index * ground.width];
+    for (const back of [false, true]) {
+      let running = Infinity;
+      let began = -1;
+      for (let i = 0; i < length; i++) {
+        const at = first + (back ? length - 1 - i : i) * step;
+        running += edge[back ? at : at - step]! + enter[at]!;
+        if (running < cost[at]!) {
+          cost[at] = running;
+          from[at] = -1 - began;
+          mark(at);
+        }
+        const here = Math.min(own.cost[at]!, other.cost[at]! + ground.bend[at]!);
+        if (i === 0 || !(running <= here)) {
+          running = here;
+          began = at;
+        }
+      }
+    }
+  }
+
+  /** The best goal that the last layer comes to, if it is better than any before. */
+  private reached(
+    ground: Ground,
+    starts: readonly Start[],
+    goals: readonly Goal[],
+    { level, upright }: Layer,
+    lines: readonly Line[],
+  ): Found | null {
+    let best: Found | null = null;
+    goals.forEach((goal, n) => {
+      const [ahead, aside] = goal.into % 2 === 1 ? [level, upright] : [upright, level];
+      for (const [list, cost] of [
+        [ahead, ahead.cost[goal.at]! + goal.cost],
+        [aside, aside.cost[goal.at]! + goal.cost + goal.bend],
+      ] as const) {
+        if (!(cost < this.limit)) continue;
+        // a start that is the goal itself is no way back into it
+        const begun = list.from[goal.at]!;
+        if (lines.length === 0 && begun < 0 && list === ahead && starts[-1 - begun]!.heading !== goal.into) continue;
+        this.limit = cost;
+        best = { cost, goal: n, ...this.trace(ground, goal.at, list === level, lines.length) };
+      }
+    });
+    return best;
+  }
+
+  /** Back along the stretches, from a node that was come to on one axis. */
+  private trace(ground: Ground, goal: number, onLevel: boolean, last: number): { corners: number[]; start: number } {
+    const corners = [goal];
+    let at = goal;
+    let isLevel = onLevel;
+    let k = last;
+    for (;;) {
+      const layer = this.layers[k]!;
+      const from = (isLevel ? layer.level : layer.upright).from[at]!;
+      if (from < 0 && k === 0) return { corners: corners.reverse(), start: -1 - from };
+      const next = from < 0 ? -1 - from : from;
+      if (next !== at) corners.push(next);
+      if (from < 0) {
+        k--;
+        const { level, upright } = this.layers[k]!;
+        const [own, other] = isLevel ? [level, upright] : [upright, level];
+        if (other.cost[next]! + ground.bend[next]! < own.cost[next]!) isLevel = !isLevel;
+      } else {
+        const [own, other] = isLevel ? [layer.level, layer.upright] : [layer.upright, layer.level];
+        // a stretch begins at a start, or at a bend
+        const begun = own.from[next]!;
+        if (k === 0 && begun < 0 && own.cost[next]! < other.cost[next]! + ground.bend[next]!)
+          return { corners: corners.reverse(), start: -1 - begun };
+        isLevel = !isLevel;
+      }
+      at = next;
+    }
+  }
+}
