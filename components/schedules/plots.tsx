@@ -37,7 +37,7 @@ function Hours({ plot, ...rest }: Omit<PlotsProps, 'worked'> & { plot: BackupPlo
   return <HoursPlot plot={plot} off={standing} controls={<DropLoads plot={plot} off={standing} onOff={setOff} {...rest} />} />;
 }
 
-const pair = 'grid gap-x-10 gap-y-8 lap:grid-cols-2';
+const pair = 'grid gap-x-10 gap-y-8 min-[800px]:grid-cols-2';
 
 /** The pictures that belong to the schedule lying open, fed by the row in hand. */
 export function Plots({ worked, ...rest }: PlotsProps) {

@@ -20,12 +20,14 @@ interface RowHeadProps {
   first: boolean;
   last: boolean;
   inHand: boolean;
+  /** not in order: marked here where there is no room for the column that says so */
+  grave: boolean;
   /** a row in words, for whoever cannot see it */
   label: string;
 }
 
 /** The head of a row: takes it in hand without opening a field, so that arrows walk the rows and letters act. */
-export function RowHead({ desk, table, row, index, part, first, last, inHand, label }: RowHeadProps) {
+export function RowHead({ desk, table, row, index, part, first, last, inHand, grave, label }: RowHeadProps) {
   const onKeyDown = (event: KeyboardEvent) => {
     const { step, extend } = desk.getState();
     const by = event.key === 'ArrowDown' ? 1 : event.key === 'ArrowUp' ? -1 : 0;
@@ -58,7 +60,10 @@ export function RowHead({ desk, table, row, index, part, first, last, inHand, la
           <WayEdge part={part} number={row.number!} backup={row.group === 'backup'} first={first} last={last} />
         </span>
       ) : null}
-      <span className={isWay ? 'font-bold sm:hidden' : ''}>{row.number ?? index + 1}</span>
+      <span className={`${isWay ? 'font-bold sm:hidden' : ''} ${grave ? 'max-[600px]:font-bold max-[600px]:text-red' : ''}`}>
+        {grave && <span className="min-[601px]:hidden">! </span>}
+        {row.number ?? index + 1}
+      </span>
     </button>
   );
 }

@@ -21,6 +21,8 @@ interface ScheduleRowProps {
   part: Part | undefined;
   first: boolean;
   last: boolean;
+  /** the first of a group that stands apart from the one before */
+  apart: boolean;
   document: Installation;
   read: (ref: FieldRef) => string;
   findings: readonly Finding[];
@@ -80,6 +82,7 @@ export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
           first={props.first}
           last={props.last}
           inHand={inHand}
+          grave={findings.some(({ severity }) => severity !== 'advice')}
           label={spoken(row, columns, read, findings.length)}
         />
       </td>
@@ -96,7 +99,7 @@ export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
             mayEdit={mayEdit}
           />
         );
-        const look = `border-b border-hair p-0 align-middle ${ROW_HEIGHT} ${shownOn(column)}`;
+        const look = `border-b border-hair p-0 align-middle ${ROW_HEIGHT} ${props.apart ? 'border-t-2 border-t-ink' : ''} ${shownOn(column)}`;
         return i === 0 ? (
           <th key={column.id} scope="row" className={`${look} text-left ${inHand ? 'font-semibold' : 'font-normal'}`}>
             {content}
@@ -107,7 +110,7 @@ export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
           </td>
         );
       })}
-      <td className="border-b border-hair p-0 align-middle">
+      <td className={`border-b border-hair p-0 align-middle max-[600px]:hidden ${props.apart ? 'border-t-2 border-t-ink' : ''}`}>
         <FindingMark findings={findings} />
       </td>
     </tr>

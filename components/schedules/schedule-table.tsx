@@ -1,6 +1,6 @@
 'use client';
 
-import { Fragment, useCallback, useMemo, useState } from 'react';
+import { Fragment, useCallback, useMemo, useRef, useState } from 'react';
 import type { Installation } from '@/diagram/document/schema';
 import type { Finding } from '@/diagram/rules/types';
 import { readerOf } from '@/diagram/schedules/edit';
@@ -9,6 +9,9 @@ import type { Desk } from './desk';
 import { ColumnPages } from './column-pages';
 import { ScheduleRow } from './schedule-row';
 import { EDGE_WIDTH } from './way-edge';
+
+/** px a finger goes sideways to turn the columns */
+const SWIPE = 60;
 
 interface ScheduleTableProps {
   desk: Desk;
@@ -26,13 +29,23 @@ const head = 'sticky top-0 z-10 bg-paper border-b-2 border-ink px-[3px] pb-1 tex
 /** A schedule as one table, typed where it is underlined; on a narrow sheet its columns are turned to page by page. */
 export function ScheduleTable({ desk, table, document, findings, mayEdit }: ScheduleTableProps) {
   const columns = useMemo(() => table.columns.filter(({ fileOnly }) => !fileOnly), [table.columns]);
-  const pages = useMemo(() => [...new Set(columns.map(({ page }) => page))].filter((page) => page !== 'stays'), [columns]);
+  const pages = useMemo(
+    () => [...new Set(columns.map(({ page }) => page))].filter((page) => page !== 'stays'),
+    [columns],
+  );
   const [wanted, setPage] = useState(pages[0] ?? '');
   const page = pages.includes(wanted) ? wanted : (pages[0] ?? '');
   const shownOn = useCallback(
-    (column: Column) => (column.page === 'stays' || column.page === page ? '' : 'max-lap:hidden'),
+    ({ page: own, phone, roomy }: Column) => {
+      if (roomy && own === page) return 'min-[901px]:max-lap:hidden';
+      if (roomy) return 'max-lap:hidden';
+      if (own === 'stays') return phone === undefined || phone === page ? '' : 'max-[600px]:hidden';
+      return own === page ? '' : 'max-[900px]:hidden';
+    },
     [page],
   );
+  const touch = useRef<{ clientX: number; clientY: number } | null>(null);
+  const turn = (by: 1 | -1) => setPage(pages[Math.min(pages.length - 1, Math.max(0, pages.indexOf(page) + by))] ?? '');
   const read = useMemo(() => readerOf(document), [document]);
   const parts = useMemo(() => new Map(document.parts.map((part) => [part.id, part])), [document]);
   const isWays = table.id === 'ways';
@@ -41,7 +54,17 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
   return (
     <>
       <ColumnPages pages={pages} page={page} onTurn={setPage} of={table.title} />
-      <table aria-label={table.title} className="w-full table-fixed border-separate border-spacing-0">
+      <table
+        aria-label={table.title}
+        className="w-full table-fixed border-separate border-spacing-0"
+        onTouchStart={(event) => (touch.current = event.touches.length === 1 ? event.touches[0]! : null)}
+        onTouchEnd={(event) => {
+          const from = touch.current;
+          const to = event.changedTouches[0];
+          if (!from || !to || Math.abs(to.clientX - from.clientX) < SWIPE || Math.abs(to.clientY - from.clientY) > SWIPE / 2) return;
+          turn(to.clientX < from.clientX ? 1 : -1);
+        }}
+      >
         <colgroup>
           <col style={{ width: isWays ? EDGE_WIDTH : 36 }} className={isWays ? 'max-sm:w-9!' : ''} />
           {columns.map((column) => (
@@ -52,7 +75,7 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
               style={column.id === wide ? undefined : { width: pixels(column.width) }}
             />
           ))}
-          <col style={{ width: pixels(8) }} />
+          <col className="max-[600px]:hidden" style={{ width: pixels(8) }} />
         </colgroup>
         <thead>
           <tr>
@@ -78,7 +101,7 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
                 )}
               </th>
             ))}
-            <th scope="col" className={head}>
+            <th scope="col" className={`${head} max-[600px]:hidden`}>
               Finding
             </th>
           </tr>
@@ -92,7 +115,6 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
                 {isWays && first && i > 0 && (
                   <tr aria-hidden="true">
                     <td className="h-5 p-0" />
-                    <td colSpan={columns.length + 1} className="h-5 border-b-2 border-ink p-0" />
                   </tr>
                 )}
                 <ScheduleRow
@@ -104,6 +126,7 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
                   shownOn={shownOn}
                   part={row.part === null ? undefined : parts.get(row.part)}
                   first={first}
+                  apart={isWays && first && i > 0}
                   last={last}
                   document={document}
                   read={read}

@@ -24,7 +24,7 @@ const SOURCES: readonly Column[] = [
   { id: 'start', name: 'Starts', unit: 'VA', width: 10, right: true, page: 'carries', spoken: 'largest start, VA' },
   { id: 'dc', name: 'Battery', unit: 'A', width: 7, right: true, page: 'carries', spoken: 'battery current, A' },
   { id: 'wanted', name: 'Wanted', unit: 'h', width: 6, right: true, page: 'hours', spoken: 'hours wanted' },
-  { id: 'hours', name: 'Lasts', width: 9, right: true, page: 'stays', spoken: 'lasts' },
+  { id: 'hours', name: 'Lasts', width: 9, right: true, page: 'stays', phone: 'hours', spoken: 'lasts' },
 ];
 
 const BATTERIES: readonly Column[] = [
@@ -48,8 +48,8 @@ const LOADS: readonly Column[] = [
   { id: 'watts', name: 'Takes', unit: 'W', width: 6, right: true, page: 'power', spoken: 'watts' },
   { id: 'pf', name: 'Power', unit: 'factor', width: 6, right: true, page: 'power', spoken: 'power factor' },
   { id: 'start', name: 'Start', unit: '×', width: 5, right: true, page: 'power', spoken: 'start, times running' },
-  { id: 'share', name: 'Share', unit: '%', width: 5, right: true, page: 'power', spoken: 'share of the load, %' },
-  { id: 'without', name: 'Without it', unit: 'lasts', width: 10, right: true, page: 'stays', spoken: 'without it the backup lasts' },
+  { id: 'share', name: 'Share', unit: '%', width: 5, right: true, page: 'hours', spoken: 'share of the load, %' },
+  { id: 'without', name: 'Without it', unit: 'lasts', width: 10, right: true, page: 'stays', phone: 'hours', spoken: 'without it the backup lasts' },
 ];
 
 const typed = (id: string, field: FieldId): Cell => ({ field: { of: 'part', ids: [id], field } });

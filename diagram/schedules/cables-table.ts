@@ -10,7 +10,7 @@ import type { Cell, Column, Row, Table } from './types';
 
 const COLUMNS: readonly Column[] = [
   { id: 'name', name: 'From, to', width: 34, page: 'stays' },
-  { id: 'ref', name: 'Cable', width: 6, page: 'stays', spoken: 'designation' },
+  { id: 'ref', name: 'Cable', width: 6, page: 'stays', phone: 'laid', spoken: 'designation' },
   { id: 'way', name: 'Way', width: 4, right: true, page: 'size' },
   { id: 'cores', name: 'Cores', width: 5, right: true, page: 'size' },
   { id: 'csa', name: 'Live', unit: 'mm²', width: 5, right: true, page: 'size', spoken: 'live cores, mm²' },

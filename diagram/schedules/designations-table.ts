@@ -8,7 +8,7 @@ import type { Cell, Column, Row, Table } from './types';
 
 const COLUMNS: readonly Column[] = [
   { id: 'ref', name: 'Designation', width: 9, page: 'stays' },
-  { id: 'kind', name: 'What it is', width: 20, page: 'stays' },
+  { id: 'kind', name: 'What it is', width: 20, page: 'stays', phone: 'rating' },
   { id: 'label', name: 'Name', width: 28, page: 'name' },
   { id: 'rating', name: 'Rating', width: 16, page: 'rating' },
   { id: 'room', name: 'Room', width: 18, page: 'place' },

@@ -57,6 +57,10 @@ export interface Column {
   right?: boolean;
   /** on a narrow sheet: `stays` is always there, the others are turned to page by page */
   page: 'stays' | string;
+  /** on a phone, the page of a column that stays on a wider sheet */
+  phone?: string;
+  /** left out on a sheet that is just too narrow for all columns: another column tells the same, or it can wait */
+  roomy?: boolean;
   /** only in files: the screen says it elsewhere */
   fileOnly?: boolean;
 }
