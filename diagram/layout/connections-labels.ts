@@ -1,4 +1,7 @@
-import { byCode } from '../document/schema';
+import { byCode, type Part } from '../document/schema';
+import { symbolFor } from '../symbols';
+import { boxesAlong, stretchesOfPath } from '../symbols/flatten';
+import { turnedPoint } from '../symbols/turn';
 import type { PlacedCable } from './connections-ends';
 import type { Page } from './connections-page';
 import { isLongBar } from './connections-page-state';
@@ -8,6 +11,7 @@ import { BODY, SMALL, breakLines } from './lettering';
 import { printedRef } from './overview-labels';
 import { m } from './overview-metrics';
 import type { OverviewPlan } from './overview-plan';
+import type { Box } from './route-grid';
 import type { Point, SceneFrame, SceneText } from './scene';
 import { textBox } from './text-box';
 import { ratingLines } from './wording';
@@ -59,6 +63,24 @@ function namePlaces(body: Body, round: boolean): Anchor[] {
   return round ? [at(left, body.y + body.height / 2, 'end', 'middle'), ...beside, ...over] : [...beside, ...over];
 }
 
+/** What a symbol's strokes and its own lettering cover, where it stands. */
+function strokesOf(part: Part, body: Body): Box[] {
+  const symbol = symbolFor(part, 'connections', body.terminals.length);
+  const place = (x: number, y: number): Point => {
+    const at = turnedPoint(x, y, symbol, body.turn);
+    return { x: body.x + at.x, y: body.y + at.y };
+  };
+  return [
+    ...symbol.strokes
+      .flatMap(({ d }) => stretchesOfPath(d))
+      .flatMap(({ x1, y1, x2, y2 }) => {
+        const [a, b] = [place(x1, y1), place(x2, y2)];
+        return boxesAlong({ x1: a.x, y1: a.y, x2: b.x, y2: b.y }, 90, 12);
+      }),
+    ...(symbol.texts ?? []).map((text) => textBox({ ...text, ...place(text.x, text.y) })),
+  ];
+}
+
 /** Places all lettering of a page. */
 export function letterPage(
   page: Page,
@@ -77,7 +99,10 @@ export function letterPage(
     // marks are written inside a device's box beside its terminals, so only its glyph is taken ground there
     if (isLongBar(part.kind))
       ground.add({ x: body.x, y: body.y + body.height / 2 - 72, width: body.width, height: 144 });
-    else inside.push({ box: body, id });
+    else {
+      inside.push({ box: body, id });
+      for (const box of strokesOf(part, body)) ground.add(box);
+    }
     for (const t of body.terminals) ground.add({ x: t.x - RING, y: t.y - RING, width: 2 * RING, height: 2 * RING });
   }
   for (const points of routes.values()) ground.addPath(points, 100);
@@ -119,7 +144,7 @@ export function letterPage(
         lines,
         places: cable.atFoot
           ? [at(x + 130, y - 100, 'start', 'bottom'), at(x - 130, y - 100, 'end', 'bottom')]
-          : [at(x + 160, y + 100, 'start', 'top'), at(x - 160, y + 100, 'end', 'top')],
+          : [at(x + 200, y + 100, 'start', 'top'), at(x - 200, y + 100, 'end', 'top')],
         optional: cable.atFoot,
       });
     }
