@@ -246,6 +246,7 @@ export class Keeper {
     this.rev = rev;
     this.pending = pending;
     this.rebuild();
+    for (const change of theirs) if (change.rev > before) this.store().getState().disown(change.patch);
     if (done.length > 0) this.savedAt = Date.now();
     const newest = theirs.findLast((change) => change.rev > before && change.person.id !== this.drawer.personId);
     this.store().setState({

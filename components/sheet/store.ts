@@ -1,7 +1,7 @@
 import { createStore, type StoreApi } from 'zustand/vanilla';
 import { applyPatch, diff, isEmptyPatch, type Patch } from '@/diagram/document/patch';
 import type { End, Installation } from '@/diagram/document/schema';
-import { ownOnly } from '@/diagram/commands/merge';
+import { disown, ownOnly } from '@/diagram/commands/merge';
 import type { DrawingRights, DrawingView, SavedChange, TitleBlock } from '@/lib/shared/drawings';
 import type { Peer } from '@/lib/shared/live';
 import type { HistoryStep } from './outbox';
@@ -57,6 +57,8 @@ export interface DrawingState {
   run: (label: string, patch: Patch) => boolean;
   undo: () => void;
   redo: () => void;
+  /** Somebody else has made a change: no undo of mine touches what it left. */
+  disown: (theirs: Patch) => void;
   /** Brings back work of one's own that gave way to somebody else's. */
   bringBack: (step: HistoryStep) => void;
   select: (selection: Partial<Selection>) => void;
@@ -148,6 +150,11 @@ export function createDrawingStore(view: DrawingView, keep: Keep): DrawingStore 
           return;
         }
         set({ redoSteps: left, notice: 'Nothing was taken back.' });
+      },
+
+      disown(theirs) {
+        const { undoSteps, redoSteps } = get();
+        set({ undoSteps: disown(undoSteps, theirs), redoSteps: disown(redoSteps, theirs) });
       },
 
       bringBack(step) {

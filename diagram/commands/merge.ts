@@ -112,25 +112,54 @@ export function settle(
   return { ...rest, set: { ...rest.set, parts: [...(rest.set?.parts ?? []), ...parts] } };
 }
 
+/** Ids that what stays in the document points at: parts by wires and plugs, cables by wires, places by parts. */
+function pointedAt(doc: Installation, patch: Patch): { parts: Set<string>; cables: Set<string>; places: Set<string> } {
+  const after = <T extends Item>(list: readonly T[], set: readonly T[] = [], remove: readonly string[] = []): T[] => {
+    const going = new Set([...remove, ...set.map((item) => item.id)]);
+    return [...list.filter((item) => !going.has(item.id)), ...set];
+  };
+  const found = { parts: new Set<string>(), cables: new Set<string>(), places: new Set<string>() };
+  for (const { from, to, cable } of after(doc.wires, patch.set?.wires, patch.remove?.wires)) {
+    found.parts.add(from[0]).add(to[0]);
+    if (cable !== undefined) found.cables.add(cable);
+  }
+  for (const part of after(doc.parts, patch.set?.parts, patch.remove?.parts)) {
+    if (part.place !== undefined) found.places.add(part.place);
+    if (part.kind === 'plug' && part.in !== undefined) found.parts.add(part.in);
+  }
+  return found;
+}
+
 /**
  * The part of an undoing change that takes back only one's own step: keys that somebody has changed since the step stay as
- * they are now, and a part that somebody has wired since stays.
+ * they are now, and what somebody has wired or placed since stays with what that hangs from.
  * @param back what would undo the step
  * @param step what the step itself left
  */
 export function ownOnly(doc: Installation, back: Patch, step: Patch): Patch {
   const foreign = new Set([...touched(back)].filter((key) => !equal(valueAt(doc, key), valueIn(step, key))));
   const mine = without(back, foreign);
-  const going = new Set(mine.remove?.wires ?? []);
-  const moved = new Map((mine.set?.wires ?? []).map((wire) => [wire.id, wire]));
-  const held = new Set<string>();
-  for (const wire of doc.wires) {
-    if (going.has(wire.id)) continue;
-    const { from, to } = moved.get(wire.id) ?? wire;
-    held.add(from[0]).add(to[0]);
-  }
+  const held = pointedAt(doc, mine);
   const kept = new Set<string>();
-  for (const id of mine.remove?.parts ?? [])
-    if (held.has(id)) for (const name of ['parts', ...ARRANGEMENTS]) kept.add(`${name}:${id}`);
+  for (const list of ['parts', 'cables', 'places'] as const)
+    for (const id of mine.remove?.[list] ?? [])
+      if (held[list].has(id))
+        for (const name of list === 'parts' ? ['parts', ...ARRANGEMENTS] : [list]) kept.add(`${name}:${id}`);
   return kept.size === 0 ? mine : without(mine, kept);
+}
+
+/**
+ * Steps of a history after a change of somebody else: what they left at a key is theirs for good, and no wire of a step
+ * comes back to a part or into a cable that they have removed.
+ */
+export function disown<T extends { step: Patch; back: Patch }>(steps: readonly T[], theirs: Patch): readonly T[] {
+  const written = touched(theirs);
+  const parts = new Set(theirs.remove?.parts);
+  const cables = new Set(theirs.remove?.cables);
+  return steps.map((each) => {
+    const keys = new Set([...touched(each.back)].filter((key) => written.has(key)));
+    for (const { id, from, to, cable } of each.back.set?.wires ?? [])
+      if (parts.has(from[0]) || parts.has(to[0]) || (cable !== undefined && cables.has(cable))) keys.add(`wires:${id}`);
+    return keys.size === 0 ? each : { ...each, step: without(each.step, keys), back: without(each.back, keys) };
+  });
 }

@@ -1,7 +1,8 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { createDrawingStore, type DrawingStore } from '@/components/sheet/store';
-import { applyPatch } from '@/diagram/document/patch';
+import { valueAt } from '@/diagram/commands/merge';
+import { applyPatch, diff, touched } from '@/diagram/document/patch';
 import { readDocument, type Installation } from '@/diagram/document/schema';
 import { counter } from '../../diagram/commands/counter';
 import { chance, randomCommand } from '../../diagram/commands/random-commands';
@@ -36,6 +37,45 @@ describe('undo without limit', () => {
     expect(store.getState().undoSteps).toEqual([]);
     for (let n = 0; n < 500; n++) store.getState().redo();
     expect(bytes(store)).toBe(end);
+  }, 240_000);
+
+  it.each([
+    [2, 500],
+    [3, 150],
+  ])('leaves what a second writer drew between my commands, all of them real ones: seed %i, %i of mine', (seed, count) => {
+    const start = flat();
+    const store = storeOf(start);
+    const pick = chance(seed);
+    const newId = counter('m');
+    const theirId = counter('t');
+    /** what they left at each key that nobody has touched since */
+    const theirs = new Map<string, unknown>();
+    let mine = 0;
+    for (let n = 0; mine < count && n < 10 * count; n++) {
+      const { document, run } = store.getState();
+      const foreign = pick(4) === 0;
+      const command = randomCommand(document, pick, foreign ? theirId : newId);
+      if (!command) continue;
+      if (foreign) {
+        // As a change of somebody else arrives: into the document, not into the history.
+        const next = applyPatch(document, command.patch);
+        const change = diff(document, next);
+        for (const key of touched(change)) theirs.set(key, valueAt(next, key));
+        store.setState({ document: next });
+        store.getState().disown(change);
+      } else if (run(command.label, command.patch)) {
+        mine++;
+        for (const key of touched(diff(document, store.getState().document))) theirs.delete(key);
+      }
+    }
+    expect(mine).toBe(count);
+    expect(theirs.size).toBeGreaterThan(20);
+    while (store.getState().undoSteps.length > 0) store.getState().undo();
+    const left = store.getState().document;
+    for (const [key, value] of theirs) expect([key, valueAt(left, key)]).toEqual([key, value]);
+    const parts = new Set(left.parts.map((part) => part.id));
+    for (const wire of left.wires) expect([wire.from[0], wire.to[0]].filter((id) => !parts.has(id))).toEqual([]);
+    expect(readDocument(JSON.parse(JSON.stringify(left))).ok).toBe(true);
   }, 240_000);
 
   it('leaves what a second writer did between my steps', () => {

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { conflicts, ownOnly, settle, valueAt, valueIn, without } from '@/diagram/commands/merge';
+import { conflicts, disown, ownOnly, settle, valueAt, valueIn, without } from '@/diagram/commands/merge';
 import { applyPatch, invert, type Patch } from '@/diagram/document/patch';
 import { emptyDocument, type Installation, type Part, type Wire } from '@/diagram/document/schema';
 
@@ -99,5 +99,33 @@ describe('taking back only my own', () => {
     expect(ownOnly(since, back, step)).toEqual({});
     const untouched = applyPatch(home, step);
     expect(applyPatch(untouched, ownOnly(untouched, back, step))).toEqual(home);
+  });
+
+  it('leaves a place of mine in which somebody has put a part since, and a cable into which they have laid a core', () => {
+    const cable = { id: 'c9', csa: 1.5, material: 'Cu', insulation: 'PVC', method: 'B1', length: 4 } as const;
+    const step: Patch = { set: { places: [{ id: 'loft', name: 'Loft', kind: 'room' }], cables: [cable] } };
+    const back = invert(home, step);
+    const since = applyPatch(applyPatch(home, step), {
+      set: { parts: [{ ...lamp('E9'), place: 'loft' }], wires: [{ ...wire('w9', 'S1', 'E1'), cable: 'c9' }] },
+    });
+    expect(ownOnly(since, back, step)).toEqual({});
+  });
+
+  it('takes what somebody else wrote for theirs, though it is what I had left', () => {
+    const step = set(lamp('E1', 5), lamp('E2', 5));
+    const history = [{ label: 'mine', step, back: invert(home, step) }];
+    const [mine] = disown(history, set(lamp('E1', 5)));
+    expect(mine).toEqual({ label: 'mine', step: set(lamp('E2', 5)), back: set(lamp('E2')) });
+    expect(disown(history, set(lamp('E9')))[0]).toBe(history[0]);
+  });
+
+  it('brings no wire back to what somebody has removed', () => {
+    const back: Patch = { set: { wires: [wire('w1', 'S1', 'E1'), wire('w2', 'S1', 'E2')] } };
+    const step: Patch = { remove: { wires: ['w1', 'w2'] } };
+    const [mine] = disown([{ step, back }], { remove: { parts: ['E1'] } });
+    expect(mine).toEqual({
+      step: { remove: { wires: ['w2'] } },
+      back: { set: { wires: [wire('w2', 'S1', 'E2')] } },
+    });
   });
 });
