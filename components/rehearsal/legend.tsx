@@ -33,7 +33,7 @@ const items = [
 
 export function RehearsalLegend() {
   return (
-    <ul aria-label="Legend" className="grid grid-cols-2 content-start gap-x-4 gap-y-1 lap:w-[300px]">
+    <ul aria-label="Legend" className="grid grid-cols-2 content-start gap-x-4 gap-y-1 max-lap:hidden">
       {items.map(({ words, picture }) => (
         <li key={words} className="flex items-center gap-2 text-small leading-[14px] whitespace-nowrap">
           <svg width={WIDTH} height={14} stroke="var(--ink)" aria-hidden="true" className="shrink-0">

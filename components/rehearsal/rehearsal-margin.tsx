@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useState, type ReactNode } from 'react';
 import { Button, WordButton } from '@/components/ui/button';
 import { ErrorLine } from '@/components/ui/error-line';
 import { keepAsFile } from '@/components/sheet/save-state-view';
@@ -17,8 +17,15 @@ import { TouchPlot } from './touch-plot';
 
 const NONE: readonly string[] = [];
 
+interface MarginProps {
+  drawing: OpenDrawing;
+  /** which face is rehearsed */
+  faces: ReactNode;
+  onAgain(): void;
+}
+
 /** What the rehearsal shows, in words: the condition, the walk with its steps and plot, what is in hand, how the home stands. */
-export function RehearsalMargin({ drawing, onAgain }: { drawing: OpenDrawing; onAgain: () => void }) {
+export function RehearsalMargin({ drawing, faces, onAgain }: MarginProps) {
   const store = useRehearsalStore();
   const document = useSheet(drawing.store, (state) => state.document);
   const answer = useRehearsal((state) => state.answer);
@@ -60,8 +67,9 @@ export function RehearsalMargin({ drawing, onAgain }: { drawing: OpenDrawing; on
   };
   return (
     <div className="flex flex-col gap-5">
-      <div className="max-lap:hidden">
+      <div className="flex flex-col gap-2 max-lap:hidden">
         <ConditionsRow />
+        {faces}
       </div>
       {cannot && (
         <section aria-label="Fault walk" className="flex flex-col gap-2">

@@ -5,6 +5,7 @@ import { useCallback, useMemo, useRef, useState } from 'react';
 import { ReactFlowProvider } from 'reactflow';
 import { SheetFrame } from '@/components/frame/sheet-frame';
 import { jobTabs } from '@/components/frame/tabs';
+import { Strip } from '@/components/sheet/foot/strip';
 import { SaveStateView } from '@/components/sheet/save-state-view';
 import { TroubleStrip } from '@/components/sheet/trouble-strip';
 import { useDrawing, useSheet, type Me } from '@/components/sheet/use-drawing';
@@ -12,7 +13,7 @@ import { buttonClass } from '@/components/ui/button';
 import { WaitLine } from '@/components/ui/wait-line';
 import { walkFromSources } from '@/diagram/commands/walk';
 import { buildScene } from '@/diagram/layout/build-scene';
-import { connectionPages } from '@/diagram/layout/connections-scene';
+import { connectionPages, type ConnectionPage } from '@/diagram/layout/connections-scene';
 import { nextSetting, settingsOf } from '@/diagram/rehearsal/settings';
 import { partName, timeText, voltText } from '@/diagram/rehearsal/words';
 import { CONDITION_WORDS } from '@/diagram/rehearsal/say-change';
@@ -36,6 +37,8 @@ import { TimeLine } from './time-line';
 import { useAnswers } from './use-answers';
 import { REHEARSAL_KEYS, useRehearsalKeys } from './use-keys';
 import { usePlay } from './use-play';
+
+const NO_NOTES: readonly never[] = [];
 
 interface RehearsalProps {
   view: DrawingView;
@@ -72,6 +75,10 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
     [document, place],
   );
   const parts = useMemo(() => new Map(document.parts.map((part) => [part.id, part])), [document]);
+  const cableOf = useMemo(
+    () => new Map(document.wires.flatMap(({ id, cable }) => (cable === undefined ? [] : [[id, cable] as const]))),
+    [document],
+  );
   const conductors = useMemo(() => walkFromSources(document), [document]);
   const play = usePlay(store);
 
@@ -109,6 +116,10 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
     : '';
   const empty = document.parts.length === 0;
   const inHand = parts.get(hand ?? '');
+  const hint = mayEdit
+    ? 'Switches turn by click, tap or Enter. Nothing is saved.'
+    : 'You may rehearse this drawing. Nothing is saved.';
+  const faces = pages.length > 0 && <FaceChoice pages={pages} place={place} />;
   return (
     <SheetFrame
       tabs={jobTabs(view.jobId)}
@@ -127,7 +138,7 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
       keys={REHEARSAL_KEYS}
       strip={<TroubleStrip drawing={drawing} />}
       marginLabel={walk ? 'The steps' : inHand ? `${partName(document, inHand)} in hand` : 'In words'}
-      margin={<RehearsalMargin drawing={drawing} onAgain={askAgain} />}
+      margin={<RehearsalMargin drawing={drawing} faces={faces} onAgain={askAgain} />}
       foot={
         <div className="flex h-full flex-col gap-x-4 gap-y-1 lap:flex-row">
           {!answer && !failure && !empty ? (
@@ -137,13 +148,11 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
           ) : (
             !empty && (
               <>
-                <RehearsalLegend />
-                <div className="min-w-0 flex-1 max-lap:hidden">
-                  <p className="line-clamp-2">
-                    {said ||
-                      (mayEdit
-                        ? 'Switches turn by a click, tap or Enter; the drawing stays as it is.'
-                        : 'You may rehearse this drawing; it stays as it is.')}
+                {place === null && <Strip scene={scene} notes={NO_NOTES} />}
+                <div className="flex min-w-0 flex-1 flex-col justify-between gap-1">
+                  <RehearsalLegend />
+                  <p className="truncate" title={said}>
+                    {said || hint}
                   </p>
                 </div>
               </>
@@ -181,6 +190,7 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
             <RehearsalCanvas
               scene={scene}
               parts={parts}
+              cableOf={cableOf}
               answer={answer}
               station={station}
               faultAt={fault?.at ?? null}
@@ -195,27 +205,33 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
             <div className="bg-paper lap:hidden">
               <ConditionsRow />
             </div>
-            {pages.length > 0 && (
-              <label className="flex items-center gap-2 bg-paper text-small">
-                <span className="text-grey max-sm:sr-only">face</span>
-                <select
-                  className="border border-rule bg-paper px-1 py-[2px] text-ink pointer-coarse:min-h-11"
-                  value={place ?? ''}
-                  onChange={(event) => store.getState().set({ place: event.target.value || null })}
-                >
-                  <option value="">overview</option>
-                  {pages.map((each) => (
-                    <option key={each.place} value={each.place}>
-                      connections, {each.name}
-                    </option>
-                  ))}
-                </select>
-              </label>
-            )}
+            <div className="lap:hidden">{faces}</div>
           </div>
         </div>
       )}
     </SheetFrame>
+  );
+}
+
+/** Which face is rehearsed: the overview, or the connections of one place. */
+function FaceChoice({ pages, place }: { pages: readonly ConnectionPage[]; place: string | null }) {
+  const store = useRehearsalStore();
+  return (
+    <label className="flex items-center gap-3 bg-paper">
+      <span className="text-grey max-sm:sr-only">Face</span>
+      <select
+        className="min-h-6 max-w-full border border-rule bg-paper px-1 py-[2px] text-ink pointer-coarse:min-h-11"
+        value={place ?? ''}
+        onChange={(event) => store.getState().set({ place: event.target.value || null })}
+      >
+        <option value="">overview</option>
+        {pages.map((each) => (
+          <option key={each.place} value={each.place}>
+            connections, {each.name}
+          </option>
+        ))}
+      </select>
+    </label>
   );
 }
 

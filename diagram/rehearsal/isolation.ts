@@ -122,14 +122,18 @@ function leastSets(graph: Graph, targets: readonly number[]): string[][] {
   return [];
 }
 
-/** Points that some devices open leave without any line. */
-function deadPoints(graph: Graph, opened: ReadonlySet<string>): Set<string> {
-  const walks = feedings(graph, opened).map(({ starts, closed }) => reach(graph, starts, closed));
-  const points = [...graph.parts.values()].filter(isPoint);
-  const dead = points.filter(({ id }) =>
-    ['L', 'N'].every((mark) => !walks.some((walk) => reaches(walk, graph.node(id, mark)))),
+/** What some devices open leave without any line: points, by id, and how many terminals in all. */
+function deadBehind(graph: Graph, opened: ReadonlySet<string>): { points: Set<string>; terminals: number } {
+  const live = new Uint8Array(graph.size);
+  for (const { starts, closed } of feedings(graph, opened))
+    for (const node of reach(graph, starts, closed).order) live[node] = 1;
+  const points = [...graph.parts.values()].filter(
+    (part) => isPoint(part) && ['L', 'N'].every((mark) => live[graph.node(part.id, mark)!] === 0),
   );
-  return new Set(dead.map(({ id }) => id));
+  return {
+    points: new Set(points.map(({ id }) => id)),
+    terminals: live.reduce((dead, each) => dead + (each === 0 ? 1 : 0), 0),
+  };
 }
 
 /**
@@ -150,18 +154,18 @@ export function isolationOf(graph: Graph, part: Part): Isolation {
   if (sets.length === 0)
     return { part: part.id, open: null, sources: fedFrom, neutralJoined: false, alsoDark: [], never };
 
-  const before = deadPoints(graph, new Set());
+  const before = deadBehind(graph, new Set()).points;
   const ranked = sets
     .map((ids) => {
       const devices = ids.map((id) => graph.parts.get(id)!).sort(byDesignation);
-      const dead = deadPoints(graph, new Set(ids));
-      const alsoDark = [...dead].filter((id) => !before.has(id) && id !== part.id).sort(compareDesignations);
+      const dead = deadBehind(graph, new Set(ids));
+      const alsoDark = [...dead.points].filter((id) => !before.has(id) && id !== part.id).sort(compareDesignations);
       const poles = devices.reduce((sum, device) => sum + polesOf(device), 0);
-      return { devices, alsoDark, poles };
+      return { devices, alsoDark, dead: dead.terminals, poles };
     })
     .sort(
       (a, b) =>
-        a.alsoDark.length - b.alsoDark.length ||
+        a.dead - b.dead ||
         b.poles - a.poles ||
         compareDesignations(a.devices.map(({ id }) => id).join(' '), b.devices.map(({ id }) => id).join(' ')),
     );

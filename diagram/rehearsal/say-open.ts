@@ -1,7 +1,7 @@
 import type { Installation, Part } from '../document/schema';
 import type { Isolation } from './isolation';
 import { settingVerb } from './settings';
-import type { LiveTerminal, StillLive } from './still-live';
+import type { LiveBeside, LiveTerminal, StillLive } from './still-live';
 import { capital, count, partName, partNames, voltText } from './words';
 
 /** What is told about opening a part and about making it dead, in sentences. */
@@ -39,6 +39,27 @@ function terminalText(home: Home, terminal: LiveTerminal, own: Part): Said {
   return plain(`${mark} stays live: ${volts} from ${from}${through}.`);
 }
 
+/** Beyond so many places each is named with its ways alone. */
+const IN_FULL = 3;
+
+/** What lives on in the places that have parts gone dark: there somebody would put a hand. */
+function besideSaid(home: Home, beside: readonly LiveBeside[]): Said[] {
+  const names = namesIn(home);
+  if (beside.length > IN_FULL) {
+    const places = beside.map(({ place, ways }) =>
+      ways.length > 0 ? `${names.place(place)} (${names.all(ways)})` : names.place(place),
+    );
+    return [grave(`In ${beside.length} places something stays live: ${places.join('; ')}.`)];
+  }
+  return beside.map(({ place, parts, from, ways }) => {
+    const through = ways.length > 0 ? ` through ${names.all(ways)}` : '';
+    const source = from.length > 0 ? ` from ${names.all(from)}${through}` : ' through a load';
+    return grave(
+      `In ${names.place(place)} ${names.all(parts)} ${parts.length === 1 ? 'stays' : 'stay'} live${source}.`,
+    );
+  });
+}
+
 /** What stays live and what goes dark when a part is opened. */
 export function sayStillLive(home: Home, still: StillLive): Said[] {
   const names = namesIn(home);
@@ -51,13 +72,7 @@ export function sayStillLive(home: Home, still: StillLive): Said[] {
   if (still.own.length === 0)
     said.push(plain(still.setting === null ? 'Nothing in it is live now.' : 'None of its terminals is live then.'));
   if (still.takesOver.length > 0) said.push(grave(`${names.all(still.takesOver)} takes over from the battery.`));
-  for (const { place, parts, from, ways } of still.beside) {
-    const through = ways.length > 0 ? ` through ${names.all(ways)}` : '';
-    const source = from.length > 0 ? ` from ${names.all(from)}${through}` : ' through a load';
-    said.push(
-      grave(`In ${names.place(place)} ${names.all(parts)} ${parts.length === 1 ? 'stays' : 'stay'} live${source}.`),
-    );
-  }
+  said.push(...besideSaid(home, still.beside));
   if (still.liveNeutrals.length > 0)
     said.push(
       grave(

@@ -20,7 +20,7 @@ export function ampText(amps: number): string {
 /** A duration as one says it: "18 ms", "0.4 s", "12 s", "25 min", "2 h". */
 export function timeText(seconds: number): string {
   if (seconds === 0) return '0';
-  if (seconds < 0.9995) return `${Number((seconds * 1000).toPrecision(2))} ms`;
+  if (seconds < 0.0995) return `${Number((seconds * 1000).toPrecision(2))} ms`;
   if (seconds < 99.5) return `${Number(seconds.toPrecision(2))} s`;
   if (seconds < 5400) return `${Math.round(seconds / 60)} min`;
   return `${Number((seconds / 3600).toPrecision(2))} h`;

@@ -39,7 +39,7 @@ export const ConductorsLayer = memo(function ConductorsLayer({ scene, looks }: C
   };
   const casing = (run: SceneRun, inside: boolean, d = pathOf(run)) => (
     <path
-      key={`${run.id} ${d.length}`}
+      key={`${run.id} ${inside}`}
       d={d}
       fill="none"
       stroke={inside ? 'var(--paper)' : 'var(--ink)'}

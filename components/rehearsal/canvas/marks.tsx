@@ -1,15 +1,17 @@
-import { memo } from 'react';
+import { memo, useMemo } from 'react';
 import { Layer } from '@/components/sheet/canvas/layer';
 import { Lettering, Letterings } from '@/components/sheet/canvas/lettering';
 import { INK } from '@/components/sheet/canvas/units';
 import type { Point, Scene, ScenePart, SceneRun, SceneText } from '@/diagram/layout/scene';
-import type { Figures } from '@/diagram/rehearsal/figures';
+import type { Figures, PartFigures } from '@/diagram/rehearsal/figures';
 import { settingWord } from '@/diagram/rehearsal/settings';
 import { ampText, voltText } from '@/diagram/rehearsal/words';
 import { symbolById } from '@/diagram/symbols';
 import { turnedPoint } from '@/diagram/symbols/turn';
 import { STROKE } from '@/diagram/symbols/types';
 import type { Part } from '@/diagram/document/schema';
+import { FIGURE_SIZE, figurePlaces, LINE_PITCH, type FigurePlace } from './figure-places';
+import { longest } from './pencil-lines';
 import { tightAmps, type PartLook, type RunLook } from '../looks';
 
 const SMALL = 220;
@@ -44,8 +46,7 @@ const liesOn = ({ x, y }: Point, { points }: SceneRun): boolean =>
   });
 
 /** The texts of a part as they read now: beneath a load its amperes, or 0 V, stand in the place of its rating. */
-function textsOf(part: ScenePart, look: PartLook, figures: Figures): SceneText[] {
-  const load = figures.parts[part.id]?.load;
+function textsOf(part: ScenePart, look: PartLook, load: PartFigures['load']): SceneText[] {
   const dead = look.state === 'dead';
   let written = false;
   return part.texts.map((text) => {
@@ -57,49 +58,56 @@ function textsOf(part: ScenePart, look: PartLook, figures: Figures): SceneText[]
   });
 }
 
-/** Volts and amperes of a way, beside its number. */
-function WayFigures({ x, y, look }: { x: number; y: number; look: RunLook }) {
-  if (look.state === 'dead') return <Lettering text={{ x, y: y + 80, text: '0 V', size: SMALL, tone: 'grey' }} />;
+/** Volts and amperes beside what they are of. */
+function FigurePair({ place, volts, amps, dead }: { place: FigurePlace; volts: number; amps: number; dead: boolean }) {
+  const { x, y, anchor, lines } = place;
+  const first = y + FIGURE_SIZE;
+  const common = { x, anchor, size: FIGURE_SIZE };
+  if (dead)
+    return <Lettering text={{ ...common, y: first + (lines === 2 ? LINE_PITCH / 2 : 0), text: '0 V', tone: 'grey' }} />;
+  const [u, i] = [voltText(volts), amps < 0.0005 ? '0 A' : lines === 2 ? tightAmps(amps) : ampText(amps)];
+  if (lines === 1) return <Lettering text={{ ...common, y: first, text: `${u} ${i}`, bold: true }} />;
   return (
     <>
-      <Lettering text={{ x, y: y - 60, text: voltText(look.volts), size: SMALL, bold: true }} />
-      <Lettering
-        text={{ x, y: y + 260, text: look.amps < 0.0005 ? '0 A' : tightAmps(look.amps), size: SMALL, bold: true }}
-      />
+      <Lettering text={{ ...common, y: first, text: u, bold: true }} />
+      <Lettering text={{ ...common, y: first + LINE_PITCH, text: i, bold: true }} />
     </>
   );
 }
 
-/** Volts and amperes of a core on its longest stretch, where that is long enough. */
+/** 1/100 mm: on a shorter stretch of a core no figure stands */
+const BEARS_FIGURE = 1900;
+
+/** Volts and amperes beside the longest stretch of a core, where that is long enough. */
 function CoreFigures({ run, look }: { run: SceneRun; look: RunLook }) {
-  const stretches = run.points.slice(1).map((b, i) => ({ a: run.points[i]!, b }));
-  const length = ({ a, b }: { a: Point; b: Point }) => Math.abs(a.x - b.x) + Math.abs(a.y - b.y);
-  const longest = stretches.sort((p, q) => length(q) - length(p))[0];
-  if (!longest || length(longest) < 1900 || look.state === 'plain') return null;
-  const x = (longest.a.x + longest.b.x) / 2;
-  const y = (longest.a.y + longest.b.y) / 2;
-  const upright = longest.a.x === longest.b.x;
+  const stretch = longest(run.points);
+  if (!stretch || look.state === 'plain') return null;
+  const { a, b } = stretch;
+  if (Math.abs(a.x - b.x) + Math.abs(a.y - b.y) < BEARS_FIGURE) return null;
+  const upright = a.x === b.x;
   const text =
     look.state === 'dead'
       ? '0 V'
       : look.state === 'return'
         ? ampText(look.amps)
         : `${voltText(look.volts)} ${ampText(look.amps)}`;
+  const [x, y] = [(a.x + b.x) / 2, (a.y + b.y) / 2];
+  // Beside the core, on the side that a reader meets first: left of what runs up, above what runs across.
+  const at = upright ? { x: x - 170, y, turn: 3 as const } : { x, y: y - 170 };
   return (
     <g style={{ paintOrder: 'stroke' }} stroke="var(--paper)" strokeWidth={110} strokeLinejoin="round">
-      <Lettering
-        text={{
-          x,
-          y: y + 80,
-          text,
-          size: 200,
-          anchor: 'middle',
-          tone: look.state === 'dead' ? 'grey' : 'ink',
-          ...(upright && { turn: 3 as const, x: x + 70, y }),
-        }}
-      />
+      <Lettering text={{ ...at, text, size: 225, anchor: 'middle', tone: look.state === 'dead' ? 'grey' : 'ink' }} />
     </g>
   );
+}
+
+/** V of what leaves a source: of the wires at it that it feeds. */
+function sourceVolts(id: string, figures: Figures, scene: Scene): number {
+  const wires = scene.runs.filter(({ from, to }) => from[0] === id || to[0] === id).flatMap((run) => run.wires);
+  return wires.reduce((most, wire) => {
+    const now = figures.wires[wire];
+    return now && now.from[0] === id ? Math.max(most, now.volts) : most;
+  }, 0);
 }
 
 interface MarksProps {
@@ -116,6 +124,7 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
   const { scene, letters, figures, parts, partLooks, runLooks } = props;
   const isDead = (run: SceneRun) => runLooks.get(run.id)?.state === 'dead';
   const cores = scene.face === 'connections';
+  const places = useMemo(() => figurePlaces(scene), [scene]);
   const ofWay = (device: string) =>
     scene.runs.filter(({ from, to }) => from[0] === device || to[0] === device).map(({ id }) => runLooks.get(id)!);
   return (
@@ -167,7 +176,6 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
                 tone: dead ? 'grey' : 'ink',
               }}
             />
-            {letters && !cores && look && <WayFigures x={ring.x + ring.radius + 90} y={ring.y} look={look} />}
           </g>
         );
       })}
@@ -184,7 +192,12 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
           })}
           {scene.parts.map((part) => {
             const look = partLooks.get(part.id);
-            return <Letterings key={part.id} texts={look ? textsOf(part, look, figures) : part.texts} />;
+            return (
+              <Letterings
+                key={part.id}
+                texts={look ? textsOf(part, look, cores ? undefined : figures.parts[part.id]?.load) : part.texts}
+              />
+            );
           })}
           {scene.runs.map((run) => (
             <Letterings
@@ -193,6 +206,24 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
             />
           ))}
           <Letterings texts={scene.texts} />
+          {!cores &&
+            [...places].map(([id, place]) => {
+              const source = parts.get(id)?.kind === 'supply' || parts.get(id)?.kind === 'inverter';
+              const amps = figures.sources[id];
+              if (source && amps === undefined) return null;
+              const beyond = ofWay(id);
+              const look = source ? undefined : (beyond.find(({ state }) => state === 'dead') ?? beyond[0]);
+              if (!source && !look) return null;
+              return (
+                <FigurePair
+                  key={id}
+                  place={place}
+                  volts={look?.volts ?? sourceVolts(id, figures, scene)}
+                  amps={look?.amps ?? amps ?? 0}
+                  dead={look?.state === 'dead'}
+                />
+              );
+            })}
           {cores && scene.runs.map((run) => <CoreFigures key={run.id} run={run} look={runLooks.get(run.id)!} />)}
           {scene.parts.map((drawn) => (
             <StateWord key={drawn.id} drawn={drawn} part={parts.get(drawn.id)} look={partLooks.get(drawn.id)} />

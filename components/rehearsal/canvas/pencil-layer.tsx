@@ -4,7 +4,8 @@ import { fontSize } from '@/diagram/layout/lettering';
 import type { Scene } from '@/diagram/layout/scene';
 import { ampText, voltText } from '@/diagram/rehearsal/words';
 import type { Station } from '@/diagram/rehearsal/walk';
-import { arrowOf, calloutPlace, pencilStrokes, type PencilStroke } from './pencil';
+import { calloutPlace } from './callout-place';
+import { arrowOf, pencilStrokes, type PencilStroke } from './pencil';
 
 const HEAD = 'M-160 -110L0 0L-160 110';
 
@@ -60,11 +61,13 @@ interface PencilProps {
   /** id of the faulted part, and what its case is called */
   at: string;
   name: string;
+  /** id of each wire's cable */
+  cableOf: ReadonlyMap<string, string>;
 }
 
 /** The fault in red pencil: its path beside the wires it takes, the ring at its place, what stands at the case. */
-export const PencilLayer = memo(function PencilLayer({ scene, station, at, name }: PencilProps) {
-  const strokes = useMemo(() => pencilStrokes(scene, station.path), [scene, station.path]);
+export const PencilLayer = memo(function PencilLayer({ scene, station, at, name, cableOf }: PencilProps) {
+  const strokes = useMemo(() => pencilStrokes(scene, station.path, cableOf), [scene, station.path, cableOf]);
   const part = scene.parts.find(({ id }) => id === at);
   const words = `${name} case to earth`;
   const width = Math.max(2600, words.length * 218 + 500);

@@ -1,5 +1,6 @@
 import type { Point, Scene, ScenePart, SceneRun } from '@/diagram/layout/scene';
 import type { PathStep } from '@/diagram/rehearsal/fault-path';
+import { aside, elbow, longest, merged } from './pencil-lines';
 
 /** A stroke of the pencil: the way of the fault's current beside what carries it. Lengths are 1/100 mm. */
 export interface PencilStroke {
@@ -11,187 +12,212 @@ export interface PencilStroke {
 
 /** 1/100 mm beside the wire */
 const BESIDE = 230;
+/** 1/100 mm beside a bar, where the pencil goes up or down to it */
+const CHANNEL = 450;
 
-const sign = (value: number) => Math.sign(value);
+const BARS: ReadonlySet<string> = new Set(['neutral-bar', 'earth-bar']);
+const BOARD: ReadonlySet<string> = new Set([
+  'mcb',
+  'rcbo',
+  'fuse',
+  'rcd',
+  'isolator',
+  'line-bar',
+  'inverter',
+  'meter',
+  'supply',
+]);
 
-/** A polyline of right angles, moved aside: to the right of its direction for a positive distance. */
-export function aside(points: readonly Point[], distance: number): Point[] {
-  const clean = points.filter((p, i) => i === 0 || p.x !== points[i - 1]!.x || p.y !== points[i - 1]!.y);
-  const normal = (i: number): Point => {
-    const a = clean[i]!;
-    const b = clean[i + 1]!;
-    return { x: -sign(b.y - a.y) * distance, y: sign(b.x - a.x) * distance };
-  };
-  if (clean.length < 2) return [...clean];
-  return clean.map((p, i) => {
-    const before = i > 0 ? normal(i - 1) : normal(i);
-    const after = i < clean.length - 1 ? normal(i) : before;
-    // At a right angle the two normals are across each other: their sum is the corner. Straight on, one is enough.
-    const straight = before.x === after.x && before.y === after.y;
-    return straight
-      ? { x: p.x + before.x, y: p.y + before.y }
-      : { x: p.x + before.x + after.x, y: p.y + before.y + after.y };
-  });
-}
-
-const isBar = (kind: string): boolean => kind === 'neutral-bar' || kind === 'earth-bar';
-
-interface Ends {
+/** A run that carries the fault, in the direction of its current. */
+interface Leg {
   run: SceneRun;
-  /** points in the direction of the current */
-  points: Point[];
-  /** parts at which the run begins and ends, in that direction */
+  points: readonly Point[];
   first: string;
   last: string;
-  out: boolean;
+  steps: PathStep[];
 }
 
-/** A run in the direction of the current that a step says; of a cable's other cores by where their line runs. */
-function ends(run: SceneRun, steps: readonly PathStep[], parts: ReadonlyMap<string, ScenePart>, out: boolean): Ends {
-  const step = steps[0]!;
-  const [from, to] = [step.from[0], step.to[0]];
-  const forward = (): boolean => {
-    if (run.from[0] === from || run.to[0] === to) return true;
-    if (run.from[0] === to || run.to[0] === from) return false;
-    // The core ends at a bar that the run does not show: that end is where the run meets the board.
-    const board = ['mcb', 'rcbo', 'fuse', 'rcd', 'isolator', 'line-bar', 'inverter'];
-    const beginsAtBoard = board.includes(parts.get(run.from[0])?.kind ?? '');
-    const toBar = isBar(parts.get(to)?.kind ?? '');
-    return toBar ? !beginsAtBoard : beginsAtBoard;
-  };
-  const ahead = forward();
-  return {
-    run,
-    points: ahead ? run.points : [...run.points].reverse(),
-    first: ahead ? run.from[0] : run.to[0],
-    last: ahead ? run.to[0] : run.from[0],
-    out,
-  };
-}
+const distance = (a: Point, b: Point): number => Math.abs(a.x - b.x) + Math.abs(a.y - b.y);
+const middleOf = (part: ScenePart): Point => ({ x: part.x + part.width / 2, y: part.y + part.height / 2 });
 
-/** Right-angled way between two points: straight, or with one bend. */
-const elbow = (a: Point, b: Point): Point[] => (a.x === b.x || a.y === b.y ? [a, b] : [a, { x: a.x, y: b.y }, b]);
+class Pencil {
+  private readonly parts: ReadonlyMap<string, ScenePart>;
+  readonly strokes: PencilStroke[] = [];
 
-/** The way to a bar that stands apart: aside at this level, up or down beside the bar, to its end. */
-function toBar(from: Point, bar: ScenePart): Point[] {
-  const y = bar.y + bar.height / 2;
-  const channel = from.x > bar.x + bar.width ? bar.x + bar.width + 400 : bar.x - 400;
-  return [from, { x: channel, y: from.y }, { x: channel, y }, { x: channel < bar.x ? bar.x : bar.x + bar.width, y }];
-}
+  constructor(
+    private readonly scene: Scene,
+    private readonly path: readonly PathStep[],
+    private readonly cableOf: ReadonlyMap<string, string>,
+  ) {
+    this.parts = new Map(scene.parts.map((part) => [part.id, part]));
+  }
 
-/**
- * The pencil strokes of a fault's path on a face: beside each run that carries it, through the parts between, and along
- * to the bars and electrodes that stand apart.
- */
-export function pencilStrokes(scene: Scene, path: readonly PathStep[]): PencilStroke[] {
-  const parts = new Map(scene.parts.map((part) => [part.id, part]));
-  const byWire = new Map(path.flatMap((step) => (step.wire === undefined ? [] : [[step.wire, step] as const])));
-  const strokes: PencilStroke[] = [];
-  const drawn: (Ends & { line: Point[] })[] = [];
-  const joined = new Set<string>();
-  for (const run of scene.runs) {
-    for (const out of [true, false]) {
-      const steps = run.wires.flatMap((id) => byWire.get(id) ?? []).filter((step) => step.out === out);
-      if (steps.length === 0) continue;
-      const each = ends(run, steps, parts, out);
-      // Out on the right, home on the right of its own direction: in one cable the two lie on either side.
-      const line = aside(each.points, BESIDE);
-      strokes.push({ key: `${run.id} ${out}`, points: line, out });
-      drawn.push({ ...each, line });
-      for (const step of steps) {
-        for (const [end, atEnd] of [
-          [step.from[0], false],
-          [step.to[0], true],
+  draw(): PencilStroke[] {
+    const wires = this.path.filter((step) => step.wire !== undefined);
+    const outward = this.legs(wires.filter(({ out }) => out));
+    const homeward = this.legs(wires.filter(({ out }) => !out));
+    const chains = this.chains(outward);
+    for (const chain of chains) this.along(chain, true);
+    const ridden = this.home(chains, homeward);
+    for (const chain of this.chains(homeward.filter((leg) => !ridden.has(leg)))) this.along(chain, false);
+    for (const step of wires) if (!step.out && !this.runOf(step)) this.across(step);
+    return this.strokes;
+  }
+
+  /**
+   * The run on which a wire lies: its own; on the overview, where a run stands for a whole cable, that of its cable; else
+   * the one between the same two parts.
+   */
+  private runOf({ wire, from, to }: PathStep): SceneRun | undefined {
+    const { runs, face } = this.scene;
+    const own = runs.find(({ wires }) => wires.includes(wire!));
+    if (own || face === 'connections') return own;
+    const cable = this.cableOf.get(wire!);
+    const pair = (run: SceneRun) =>
+      (run.from[0] === from[0] && run.to[0] === to[0]) || (run.from[0] === to[0] && run.to[0] === from[0]);
+    return (cable === undefined ? undefined : runs.find((run) => run.cable === cable)) ?? runs.find(pair);
+  }
+
+  private legs(steps: readonly PathStep[]): Leg[] {
+    const legs = new Map<string, Leg>();
+    for (const step of steps) {
+      const run = this.runOf(step);
+      if (!run) continue;
+      const known = legs.get(run.id);
+      if (known) {
+        known.steps.push(step);
+        continue;
+      }
+      const ahead = this.isForward(run, step);
+      const points = ahead ? run.points : [...run.points].reverse();
+      const [first, last] = ahead ? [run.from[0], run.to[0]] : [run.to[0], run.from[0]];
+      legs.set(run.id, { run, points, first, last, steps: [step] });
+    }
+    return [...legs.values()];
+  }
+
+  /** Whether a step's current runs along a run from its first point to its last. */
+  private isForward(run: SceneRun, { from, to }: PathStep): boolean {
+    if (run.from[0] === from[0] || run.to[0] === to[0]) return true;
+    if (run.from[0] === to[0] || run.to[0] === from[0]) return false;
+    const kind = (id: string) => this.parts.get(id)?.kind ?? '';
+    const [starts, finishes] = [BOARD.has(kind(run.from[0])), BOARD.has(kind(run.to[0]))];
+    // A core that ends at a bar meets the board at that end of the run, though the run ends at a device.
+    if (BARS.has(kind(to[0])) && starts !== finishes) return finishes;
+    if (BARS.has(kind(from[0])) && starts !== finishes) return starts;
+    const [a, b] = [run.points[0]!, run.points.at(-1)!];
+    const near = this.parts.get(to[0]);
+    if (near && !BARS.has(near.kind)) return distance(b, middleOf(near)) <= distance(a, middleOf(near));
+    const far = this.parts.get(from[0]);
+    return !far || BARS.has(far.kind) || distance(a, middleOf(far)) <= distance(b, middleOf(far));
+  }
+
+  /** Legs one after the other, as the current takes them. */
+  private chains(legs: readonly Leg[]): Leg[][] {
+    const left = new Set(legs);
+    const chains: Leg[][] = [];
+    const begins = legs.filter(({ first }) => !legs.some((other) => other.last === first));
+    for (const start of [...begins, ...legs]) {
+      if (!left.has(start)) continue;
+      const chain: Leg[] = [];
+      for (let leg: Leg | undefined = start; leg;) {
+        left.delete(leg);
+        chain.push(leg);
+        const { last }: Leg = leg;
+        leg = [...left].find(({ first }) => first === last);
+      }
+      chains.push(chain);
+    }
+    return chains;
+  }
+
+  private along(chain: readonly Leg[], out: boolean): void {
+    const line = aside(merged(chain.map(({ points }) => points)), BESIDE);
+    if (line.length > 1) this.strokes.push({ key: `${chain[0]!.run.id} ${out}`, points: line, out });
+    if (!out) this.toBars(chain, line);
+  }
+
+  /**
+   * The way home beside the way out: from the faulted part back along the same cables to the board, though the overview draws
+   * their line alone. @returns the legs that it covers
+   */
+  private home(chains: readonly Leg[][], homeward: readonly Leg[]): Set<Leg> {
+    const ridden = new Set<Leg>();
+    if (this.scene.face === 'connections') return ridden;
+    const carries = (leg: Leg) => homeward.find(({ run }) => run === leg.run);
+    for (const chain of chains) {
+      const way = chain.findLastIndex(
+        (leg) => BOARD.has(this.parts.get(leg.first)?.kind ?? '') && !BOARD.has(this.parts.get(leg.last)?.kind ?? ''),
+      );
+      if (way < 0 || !carries(chain[way]!)) continue;
+      const tail = chain.slice(way);
+      const back = tail.map(({ points }) => [...points].reverse()).reverse();
+      const line = aside(merged(back), BESIDE);
+      this.strokes.push({ key: `${chain[way]!.run.id} home`, points: line, out: false });
+      const covered = tail.flatMap((leg) => carries(leg) ?? []);
+      for (const leg of covered) ridden.add(leg);
+      this.toBars(covered, line);
+    }
+    return ridden;
+  }
+
+  /** From the end of a stroke to the bars at which its cores end. */
+  private toBars(legs: readonly Leg[], line: readonly Point[]): void {
+    const done = new Set<string>();
+    for (const { steps, first, last } of legs) {
+      for (const { from, to } of steps) {
+        for (const [id, ends] of [
+          [from[0], false],
+          [to[0], true],
         ] as const) {
-          const bar = parts.get(end);
-          if (!bar || !isBar(bar.kind) || each.first === end || each.last === end) continue;
-          const tip = atEnd ? line.at(-1)! : line[0]!;
-          const way = toBar(tip, bar);
-          strokes.push({ key: `${run.id} ${step.wire} bar`, points: atEnd ? way : [...way].reverse(), out });
-          joined.add(end);
+          const bar = this.parts.get(id);
+          if (!bar || !BARS.has(bar.kind) || id === first || id === last || done.has(id)) continue;
+          done.add(id);
+          const way = wayToBar(ends ? line.at(-1)! : line[0]!, bar);
+          this.strokes.push({ key: `${line[0]!.x} ${id}`, points: ends ? way : [...way].reverse(), out: false });
         }
       }
     }
   }
-  // Through the parts: from where a run brings the current to where the next takes it on.
-  for (const part of scene.parts) {
-    for (const out of [true, false]) {
-      const inward = drawn.filter((each) => each.out === out && each.last === part.id).map(({ line }) => line.at(-1)!);
-      const onward = drawn.filter((each) => each.out === out && each.first === part.id).map(({ line }) => line[0]!);
-      inward.slice(0, 1).forEach((a) => {
-        onward.forEach((b, i) => strokes.push({ key: `${part.id} ${out} ${i}`, points: elbow(a, b), out }));
-      });
-    }
+
+  /** A core that no run shows: straight across, between the two parts at which it ends. */
+  private across({ wire, from, to }: PathStep): void {
+    const [a, b] = [this.parts.get(from[0]), this.parts.get(to[0])];
+    if (!a || !b) return;
+    const bar = BARS.has(b.kind) ? b : BARS.has(a.kind) ? a : undefined;
+    const other = bar === b ? a : b;
+    const tip = { x: other.x, y: middleOf(other).y };
+    const way = bar ? wayToBar(tip, bar) : elbow(middleOf(a), middleOf(b));
+    this.strokes.push({ key: `across ${wire}`, points: bar === a ? [...way].reverse() : way, out: false });
   }
-  return strokes;
 }
+
+/** The way to a bar that stands apart: aside at this level, up or down beside the bar, to its nearer end. */
+function wayToBar(from: Point, bar: ScenePart): Point[] {
+  const y = bar.y + bar.height / 2;
+  const right = from.x > bar.x + bar.width;
+  const x = right ? bar.x + bar.width + CHANNEL : bar.x - CHANNEL;
+  return [from, { x, y: from.y }, { x, y }, { x: right ? bar.x + bar.width : bar.x, y }];
+}
+
+/**
+ * The pencil strokes of a fault's path on a face: beside each run that carries it, and along to the bars that stand apart.
+ * @param cableOf id of each wire's cable, of those that have one
+ */
+export const pencilStrokes = (
+  scene: Scene,
+  path: readonly PathStep[],
+  cableOf: ReadonlyMap<string, string>,
+): PencilStroke[] => new Pencil(scene, path, cableOf).draw();
+
+/** 1/100 mm: a shorter stretch bears no arrow */
+const BEARS_ARROW = 1400;
 
 /** The head of an arrow in the middle of the longest stretch of a stroke, in its direction; null on a short one. */
 export function arrowOf({ points }: PencilStroke): { at: Point; turn: number } | null {
-  let best: { at: Point; turn: number } | null = null;
-  let least = 1400;
-  points.slice(1).forEach((b, i) => {
-    const a = points[i]!;
-    const length = Math.abs(a.x - b.x) + Math.abs(a.y - b.y);
-    if (length <= least) return;
-    least = length;
-    const turn = b.x > a.x ? 0 : b.y > a.y ? 90 : b.x < a.x ? 180 : 270;
-    best = { at: { x: (a.x + b.x) / 2, y: (a.y + b.y) / 2 }, turn };
-  });
-  return best;
-}
-
-interface Box {
-  x: number;
-  y: number;
-  width: number;
-  height: number;
-}
-const overlap = (a: Box, b: Box): number =>
-  Math.max(0, Math.min(a.x + a.width, b.x + b.width) - Math.max(a.x, b.x)) *
-  Math.max(0, Math.min(a.y + a.height, b.y + b.height) - Math.max(a.y, b.y));
-
-/** Where a callout of this size covers least, near a part; the nearer the better. */
-export function calloutPlace(scene: Scene, part: ScenePart, width: number, height: number): Box {
-  const texts = [...scene.parts.flatMap(({ texts: own }) => own), ...scene.runs.flatMap(({ texts: own }) => own)].map(
-    ({ x, y, text, size }) => ({ x, y: y - size, width: text.length * size * 0.86, height: size }),
-  );
-  const runs = scene.runs.flatMap(({ points }) =>
-    points.slice(1).map((b, i) => {
-      const a = points[i]!;
-      return {
-        x: Math.min(a.x, b.x) - 60,
-        y: Math.min(a.y, b.y) - 60,
-        width: Math.abs(a.x - b.x) + 120,
-        height: Math.abs(a.y - b.y) + 120,
-      };
-    }),
-  );
-  const middle = { x: part.x + part.width / 2, y: part.y + part.height / 2 };
-  let best: Box | null = null;
-  let least = Infinity;
-  for (let dy = -4500; dy <= 5500; dy += 500) {
-    for (let dx = -6000; dx <= 6000; dx += 500) {
-      const box = { x: middle.x + dx - width / 2, y: middle.y + dy - height / 2, width, height };
-      if (box.x < 1300 || box.y < 300 || box.x + width > scene.width - 200 || box.y + height > scene.height - 100)
-        continue;
-      const near = overlap(box, {
-        x: part.x - 400,
-        y: part.y - 400,
-        width: part.width + 800,
-        height: part.height + 1600,
-      });
-      const covered = [...scene.parts, ...texts].reduce((sum, each) => sum + overlap(box, each), 0);
-      const cost =
-        40 * near +
-        12 * covered +
-        3 * runs.reduce((sum, each) => sum + overlap(box, each), 0) +
-        260 * Math.hypot(dx, dy);
-      if (cost < least) {
-        least = cost;
-        best = box;
-      }
-    }
-  }
-  return best ?? { x: middle.x + 600, y: middle.y + 1500, width, height };
+  const stretch = longest(points);
+  if (!stretch || distance(stretch.a, stretch.b) < BEARS_ARROW) return null;
+  const { a, b } = stretch;
+  const turn = b.x > a.x ? 0 : b.y > a.y ? 90 : b.x < a.x ? 180 : 270;
+  return { at: { x: (a.x + b.x) / 2, y: (a.y + b.y) / 2 }, turn };
 }

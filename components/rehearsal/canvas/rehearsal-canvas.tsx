@@ -25,12 +25,16 @@ const LETTERS_FROM = 0.42;
 /** below it the body size of the lettering would be under 11 px */
 const READABLE = 0.9;
 const LARGE = 400;
+/** px: below this the conditions lie on the sheet */
+const NARROW = 760;
 const NOTHING: Rehearsed['figures'] = { wires: {}, parts: {}, sources: {} };
 const NONE: readonly string[] = [];
 
 interface CanvasProps {
   scene: Scene;
   parts: ReadonlyMap<string, Part>;
+  /** id of each wire's cable, of those that have one */
+  cableOf: ReadonlyMap<string, string>;
   answer: Rehearsed | null;
   station: Station | null;
   /** id of the part at which the fault in hand is */
@@ -62,7 +66,7 @@ function nodeFor(part: Scene['parts'][number], look: PartLook, operable: boolean
 
 /** The face as it stands in the rehearsal: a skin over a scene, which says what was touched. */
 export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps) {
-  const { scene, parts, answer, station, faultAt, faultName, hand, show, onPart, onGround } = props;
+  const { scene, parts, cableOf, answer, station, faultAt, faultName, hand, show, onPart, onGround } = props;
   const flow = useReactFlow();
   const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
   const box = useFlowStore((state) => `${state.width} ${state.height}`);
@@ -103,12 +107,13 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
     if (w === 0 || h === 0) return;
     const [width, height] = [px(scene.width), px(scene.height)];
     const fit = Math.min((w - 16) / width, (h - 16) / height);
-    const zoom = Math.min(1.6, Math.max(w < 700 ? READABLE : 0.7, fit));
+    const zoom = Math.min(1.6, Math.max(READABLE, fit));
     const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
     const centre = source ? px(source.x + source.width / 2) * zoom : 0;
     const spare = w - width * zoom;
     const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
-    const y = Math.max(8, (h - height * zoom) / 2);
+    // On a narrow screen the conditions stand along the upper edge.
+    const y = Math.max(w < NARROW ? 100 : 8, (h - height * zoom) / 2);
     void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
   }, [box, flow, scene]);
 
@@ -168,7 +173,9 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
         partLooks={partLooks}
         runLooks={runLooks}
       />
-      {station && faultAt && <PencilLayer scene={scene} station={station} at={faultAt} name={faultName} />}
+      {station && faultAt && (
+        <PencilLayer scene={scene} station={station} at={faultAt} name={faultName} cableOf={cableOf} />
+      )}
     </ReactFlow>
   );
 });
