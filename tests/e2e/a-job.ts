@@ -41,12 +41,12 @@ export async function savedChanges(page: Page, job: string): Promise<{ rev: numb
 
 export const sheet = (page: Page) => page.getByRole('application');
 export const saved = (page: Page) =>
-  expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 30_000 });
+  expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 60_000 });
 
 /** Opens a face of the drawing and waits until it hears keys. */
 export async function openFace(page: Page, job: string, face = 'overview'): Promise<void> {
   await page.goto(`/jobs/${job}/${face}`);
-  await expect(page.locator('[role=application][aria-busy=false]')).toBeVisible({ timeout: 30_000 });
+  await expect(page.locator('[role=application][aria-busy=false]')).toBeVisible({ timeout: 60_000 });
   await sheet(page).focus();
 }
 
@@ -81,7 +81,7 @@ export async function rate(page: Page, name: string, text: string): Promise<void
 /** Opens the survey and waits until its blank row takes a name. */
 export async function openSurvey(page: Page, job: string): Promise<void> {
   await page.goto(`/jobs/${job}/survey`);
-  await expect(blankRow(page)).toBeVisible({ timeout: 30_000 });
+  await expect(blankRow(page)).toBeVisible({ timeout: 60_000 });
   await page.waitForLoadState('load');
 }
 const blankRow = (page: Page) => page.getByRole('textbox', { name: 'New room, name' });
@@ -92,6 +92,6 @@ export async function addRoom(page: Page, name: string): Promise<void> {
     await blankRow(page).fill(name);
     await blankRow(page).press('Enter');
     await expect(page.getByRole('textbox', { name: `${name}, name`, exact: true })).toBeVisible({ timeout: 2000 });
-  }).toPass({ timeout: 20_000 });
+  }).toPass({ timeout: 60_000 });
 }
 export const rooms = (home: Home): string[] => (home.survey ?? []).map(({ name }) => name).sort();

@@ -114,8 +114,9 @@ test('a finger moves a part only when it was held; else it pans, and two fingers
   // at once: the drawing pans, the part stays
   let view = await looksAt(page);
   let [x, y] = await middleOf(node);
-  await touch(finger, 'touchStart', [x, y]);
-  for (let i = 1; i <= 6; i++) await touch(finger, 'touchMove', [x, y - 15 * i]);
+  const swipe = [touch(finger, 'touchStart', [x, y])];
+  for (let i = 1; i <= 6; i++) swipe.push(touch(finger, 'touchMove', [x, y - 15 * i]));
+  await Promise.all(swipe);
   await touch(finger, 'touchEnd');
   await expect.poll(() => looksAt(page)).not.toBe(view);
   expect((await savedHome(page, job)).sheet!.overview![id]).toEqual(before);

@@ -1,11 +1,16 @@
 import 'server-only';
 import { QueryTypes } from 'sequelize';
 import { snapshotIfDue } from '@/lib/server/drawings/background';
+import { checkHashes } from '@/lib/server/drawings/check-hashes';
+import { thinChanges } from '@/lib/server/drawings/thin-changes';
 import { describeFault, log } from '@/lib/server/log';
 import { sweepUploads } from '@/lib/server/uploads/sweep-uploads';
 import { sequelize } from '@/models';
 
 const EVERY_MS = 5 * 60_000;
+const NIGHTLY_MS = 24 * 3_600_000;
+/** any number that nothing else locks by */
+const NIGHT_LOCK = 713_001;
 const IDLE_MINUTES = 15;
 /** Fewer changes than this are read as fast as a snapshot. */
 const WORTH = 20;
@@ -22,6 +27,20 @@ export async function sweepIdleDrawings(): Promise<number> {
   return idle.length;
 }
 
+/** What one process of all does once a day: thins the log and reads every drawing against its sums. */
+export async function doNightWork(): Promise<void> {
+  await sequelize.transaction(async (transaction) => {
+    const [lock] = await sequelize.query<{ got: boolean }>('select pg_try_advisory_xact_lock($1) as got', {
+      bind: [NIGHT_LOCK],
+      type: QueryTypes.SELECT,
+      transaction,
+    });
+    if (!lock!.got) return;
+    await thinChanges();
+    await checkHashes();
+  });
+}
+
 /** Sweeps from time to time for as long as the process runs. */
 export function startSweeping(): void {
   const sweep = async () => {
@@ -29,4 +48,6 @@ export function startSweeping(): void {
       await work().catch((error) => log('sweep.failed', describeFault(error)));
   };
   setInterval(() => void sweep(), EVERY_MS).unref();
+  const night = () => void doNightWork().catch((error) => log('sweep.failed', describeFault(error)));
+  setInterval(night, NIGHTLY_MS).unref();
 }
