@@ -66,11 +66,12 @@ export function regulatedFan(s: Strokes, from: Source, watts: number): { loop: E
   return { loop: [control, '1'], fan: load(s, from, [regulator, '2'], { kind: 'fan', watts }) };
 }
 
-/** A lamp worked from two places: one two-way switch here, one beside the lamp's other door. */
+/** A lamp worked from two places: one two-way switch here, one in a box of its own beside the lamp's other door. */
 export function twoWayLamp(s: Strokes, from: Source, watts: number): { loop: End; lamp: string } {
   const rating = s.at.practice.draft.switchA;
   const near = s.part({ kind: 'switch-2way', ...where(from), rating, state: '1' });
-  const far = s.part({ kind: 'switch-2way', place: from.place, board: undefined, rating, state: '1' });
+  const box = s.sketch.nextRef('X', 11);
+  const far = s.part({ kind: 'switch-2way', place: from.place, board: box, rating, state: '1' });
   s.sketch.wire(s.tap(from.line), [near, 'C'], 'line', from.run);
   const strappers = s.cable(from.size, LENGTH.roomToRoom);
   s.sketch.wire([near, '1'], [far, '1'], 'strapper', strappers);

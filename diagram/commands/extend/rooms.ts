@@ -22,7 +22,7 @@ export interface Room {
 const WORDS = new Set(
   [
     ...Object.values(KIND_NAME),
-    'a an the to of new room whole way cable run lamps outlets fans heater appliance and with two-way pair board spare light lights socket sockets backup source its own ways breaker alone closed off for one rcd bars more other bond pipe loop wire',
+    'a an the to of new room whole way cable run lamps outlets fans heater appliance and with two-way pair board spare light lights landing socket sockets backup backed-up this source its own ways breaker alone closed off for one rcd bars more other bond pipe loop wire',
   ]
     .flatMap((text) => text.split(' '))
     .map((word) => word.toLowerCase()),

@@ -124,7 +124,8 @@ export const otherTwoWay: Recipe = function* (at) {
     counts: [],
     place(choice) {
       const s = new Strokes(at);
-      const far = s.part({ kind: 'switch-2way', board: undefined, rating: at.practice.draft.switchA, state: '1' });
+      const box = s.sketch.nextRef('X', 11);
+      const far = s.part({ kind: 'switch-2way', board: box, rating: at.practice.draft.switchA, state: '1' });
       const straps = s.cable(size, choice.metres ?? LENGTH.roomToRoom);
       for (const mark of ['1', '2']) s.sketch.wire([at.part.id, mark], [far, mark], 'strapper', straps);
       const cable = s.cable(size, LENGTH.boxToPoint);
