@@ -8,14 +8,14 @@ import { useRehearsal, useRehearsalStore } from './state';
 const ONLY_MAINS: readonly ConditionName[] = ['mains'];
 
 /** The conditions as a row of switches; those that this home has not are absent, not grey. */
-export function ConditionsRow() {
+export function ConditionsRow({ named = true }: { named?: boolean }) {
   const store = useRehearsalStore();
   const conditions = useRehearsal((state) => state.answer?.conditions ?? ONLY_MAINS);
   const condition = useRehearsal((state) => state.condition ?? state.answer?.condition ?? 'mains');
   return (
     <Segmented
       label="Condition"
-      showLabel
+      showLabel={named}
       segments={conditions.map((value) => ({ value, label: CONDITION_WORDS[value] }))}
       value={condition}
       onChange={(name) => store.getState().setCondition(name)}

@@ -66,9 +66,11 @@ export function RehearsalMargin({ drawing, faces, onAgain }: MarginProps) {
     );
   };
   return (
-    <div className="flex flex-col gap-5">
-      <div className="flex flex-col gap-2 max-lap:hidden">
-        <ConditionsRow />
+    <div className="flex flex-col gap-5 max-lap:clear-both">
+      <div className="flex flex-col gap-2">
+        <div className="max-lap:hidden">
+          <ConditionsRow />
+        </div>
         {faces}
       </div>
       {cannot && (

@@ -37,6 +37,7 @@ import { TimeLine } from './time-line';
 import { useAnswers } from './use-answers';
 import { REHEARSAL_KEYS, useRehearsalKeys } from './use-keys';
 import { usePlay } from './use-play';
+import { Zoom } from './zoom';
 
 const NO_NOTES: readonly never[] = [];
 
@@ -201,11 +202,9 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
               onGround={onGround}
             />
           </div>
-          <div className="absolute top-2 left-2 z-[6] flex max-w-[calc(100%-16px)] flex-wrap items-center gap-2">
-            <div className="bg-paper lap:hidden">
-              <ConditionsRow />
-            </div>
-            <div className="lap:hidden">{faces}</div>
+          <Zoom />
+          <div className="absolute top-2 left-2 z-[6] bg-paper lap:hidden">
+            <ConditionsRow named={false} />
           </div>
         </div>
       )}

@@ -8,7 +8,7 @@ const REACH = 6000;
 
 /** Where a callout of this size covers least, near a part; the nearer the better. */
 export function calloutPlace(scene: Scene, part: ScenePart, width: number, height: number): Box {
-  const texts = [...scene.parts, ...scene.runs].flatMap((each) => each.texts.map(textBox));
+  const texts = [...scene.parts, ...scene.runs, ...scene.frames].flatMap((each) => each.texts.map(textBox));
   const runs = scene.runs.flatMap(({ points }) =>
     points.slice(1).map((b, i) => {
       const a = points[i]!;

@@ -92,7 +92,7 @@ export const PencilLayer = memo(function PencilLayer({ scene, station, at, name,
         <Stroke key={stroke.key} stroke={stroke} />
       ))}
       {bars.map((bar) => (
-        <Red key={bar.id} x={bar.x + bar.width + 150} y={bar.y + bar.height / 2 + 120}>
+        <Red key={bar.id} x={bar.x + bar.width + 620} y={bar.y + bar.height / 2 + 120}>
           {voltText(station.figures.parts[bar.id]!.caseVolts!)}
         </Red>
       ))}

@@ -113,7 +113,7 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
     const spare = w - width * zoom;
     const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
     // On a narrow screen the conditions stand along the upper edge.
-    const y = Math.max(w < NARROW ? 100 : 8, (h - height * zoom) / 2);
+    const y = Math.max(w < NARROW ? 60 : 8, (h - height * zoom) / 2);
     void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
   }, [box, flow, scene]);
 
