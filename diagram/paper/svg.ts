@@ -1,4 +1,5 @@
 import type { Installation } from '../document/schema';
+import { outlinedPage, type Glyphs } from './outlines';
 import { sheetPages, type SheetOptions } from './sheet';
 import type { Page } from './primitives';
 import { escapeXml, svgGroup } from './svg-marks';
@@ -10,6 +11,8 @@ export interface SvgOptions extends SheetOptions {
   sheet?: number;
   /** woff2 files as base64, to be carried in the file: plain text stays text, with the shipped lettering anywhere */
   fonts?: { regular: string; bold: string };
+  /** where given, letters are drawn as shapes and no font is needed */
+  glyphs?: Glyphs;
 }
 
 const fontFace = (weight: number, data: string): string =>
@@ -31,10 +34,11 @@ ${groups}
 export function paperSvg(doc: Installation, options: SvgOptions): string {
   const pages = sheetPages(doc, options);
   const number = Math.min(Math.max(1, options.sheet ?? 1), pages.length);
-  const { title } = options;
+  const { title, glyphs } = options;
+  const page = pages[number - 1]!;
   return pageSvg(
-    pages[number - 1]!,
+    glyphs ? outlinedPage(page, glyphs) : page,
     `${title.number} ${title.title}, revision ${title.revision}, ${title.drawnBy}, ${title.drawnOn}`,
-    options.fonts,
+    glyphs ? undefined : options.fonts,
   );
 }

@@ -85,6 +85,8 @@ export const SheetQuerySchema = z.object({
   place: IdSchema.optional(),
   /** one sheet of several, for formats that hold one page; from 1 */
   sheet: z.coerce.number().int().min(1).max(500).default(1),
+  /** letters as text in the shipped font, or as shapes that look the same in any program */
+  lettering: z.enum(['text', 'outlines']).default('text'),
 });
 export type SheetQuery = z.infer<typeof SheetQuerySchema>;
 

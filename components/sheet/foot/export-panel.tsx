@@ -6,6 +6,7 @@ import { TextField } from '@/components/ui/field';
 import { saveFile } from '@/components/ui/save-file';
 import type { DocumentError } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
+import { PAPER_SIZES } from '@/diagram/paper/iso-sheet';
 import type { ErrorAnswer } from '@/lib/shared/errors';
 import type { RevisionView } from '@/lib/shared/drawings';
 import type { Hands } from '../hands';
@@ -42,6 +43,7 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
   const rights = useSheet(drawing.store, (state) => state.rights);
   const number = useSheet(drawing.store, (state) => state.titleBlock.number);
   const [dpi, setDpi] = useState<number>(300);
+  const [shapes, setShapes] = useState(false);
   const [said, setSaid] = useState('');
   const [errors, setErrors] = useState<readonly DocumentError[]>([]);
   const [note, setNote] = useState('');
@@ -51,10 +53,11 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
   const { drawingId } = drawing.store.getState();
   const query = `face=${scene.face}${scene.place !== undefined ? `&place=${encodeURIComponent(scene.place)}` : ''}`;
   const name = `${number || 'drawing'}-${scene.face}`;
+  const lettering = shapes ? '&lettering=outlines' : '';
   const url = (kind: 'pdf' | 'svg', more = '') => `/api/drawings/${drawingId}/${kind}?${query}${more}`;
 
-  const svg = async (): Promise<string | null> => {
-    const response = await fetch(url('svg')).catch(() => null);
+  const svg = async (more = ''): Promise<string | null> => {
+    const response = await fetch(url('svg', more)).catch(() => null);
     if (response?.ok) return response.text();
     setSaid('The sheet could not be fetched. Try again when the network is back.');
     return null;
@@ -108,12 +111,12 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
         <h2 className="text-head font-bold">On paper</h2>
         {!saved && <p className="text-red">What is not saved yet is not in these files.</p>}
         <div className="mt-2 flex flex-wrap gap-2">
-          {(['A4', 'A3'] as const).map((paper, i) => (
+          {PAPER_SIZES.map((paper, i) => (
             <a
               key={paper}
               ref={i === 0 ? first : undefined}
               className={buttonClass({ solid: i === 1 })}
-              href={url('pdf', `&paper=${paper}`)}
+              href={url('pdf', `&paper=${paper}${lettering}`)}
               target="_blank"
               rel="noreferrer"
             >
@@ -122,12 +125,16 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
           ))}
           <Button
             onClick={async () => {
-              const text = await svg();
+              const text = await svg(lettering);
               if (text) saveFile(`${name}.svg`, text, 'image/svg+xml');
             }}
           >
             SVG
           </Button>
+          <label className="flex min-h-11 items-center gap-2">
+            <input type="checkbox" checked={shapes} onChange={(event) => setShapes(event.target.checked)} />
+            text as outlines
+          </label>
           <Button onClick={() => void png()}>PNG</Button>
           <label className="flex items-center gap-2">
             <span className="text-grey">dots per inch</span>

@@ -96,7 +96,8 @@ export function runsOf(text: string): Run[] {
 
 export const fontName = (script: Script, bold: boolean): string => `${script} ${bold ? 'bold' : 'regular'}`;
 
-const file = (script: Script, weight: 400 | 700): string =>
+/** Where a file of the lettering lies. */
+export const fontFile = (script: Script, weight: 400 | 700): string =>
   join(
     process.cwd(),
     'node_modules/@fontsource/jetbrains-mono/files',
@@ -106,7 +107,7 @@ const file = (script: Script, weight: 400 | 700): string =>
 /** Makes all files known to a PDF; only those that are used are carried in it. */
 export function registerFonts(pdf: { registerFont(name: string, src: string): unknown }): void {
   for (const script of SCRIPTS) {
-    pdf.registerFont(fontName(script, false), file(script, 400));
-    pdf.registerFont(fontName(script, true), file(script, 700));
+    pdf.registerFont(fontName(script, false), fontFile(script, 400));
+    pdf.registerFont(fontName(script, true), fontFile(script, 700));
   }
 }

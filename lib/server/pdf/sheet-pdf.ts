@@ -1,14 +1,18 @@
 import 'server-only';
 import PDFDocument from 'pdfkit';
 import type { Installation } from '@/diagram/document/schema';
+import { outlinedPage } from '@/diagram/paper/outlines';
 import { sheetPages, type SheetOptions } from '@/diagram/paper/sheet';
 import { drawPage } from './draw-page';
 import { registerFonts } from './fonts';
+import { glyphs } from './glyphs';
 
 /** The drawing as PDF at true ISO size: vector strokes and text in the shipped lettering, the same bytes for the same drawing. */
 
 export interface SheetPdfInput extends SheetOptions {
   document: Installation;
+  /** letters as shapes instead of text */
+  outlines?: boolean;
 }
 
 /** Points to 1/100 mm. */
@@ -21,7 +25,7 @@ function dated(drawnOn: string): Date {
 }
 
 /** All sheets of a drawing as one PDF. */
-export async function sheetPdf({ document, ...options }: SheetPdfInput): Promise<Buffer> {
+export async function sheetPdf({ document, outlines = false, ...options }: SheetPdfInput): Promise<Buffer> {
   const pages = sheetPages(document, options);
   const { title } = options;
   const pdf = new PDFDocument({
@@ -47,7 +51,7 @@ export async function sheetPdf({ document, ...options }: SheetPdfInput): Promise
   for (const page of pages) {
     pdf.addPage({ size: [page.width * POINTS, page.height * POINTS], margin: 0 });
     pdf.save().scale(POINTS);
-    drawPage(pdf, page);
+    drawPage(pdf, outlines ? outlinedPage(page, glyphs) : page);
     pdf.restore();
   }
   pdf.end();
