@@ -64,9 +64,7 @@ export function FindList({
 }: ListProps & { notes: readonly MarkedNote[]; onNote(note: MarkedNote): void }) {
   const { hands } = context;
   const places = new Map(hands.doc.places.map((place) => [place.id, place.name]));
-  const parts = hands
-    .scene()
-    .parts.flatMap((drawn) => hands.doc.parts.find((part) => part.id === drawn.id) ?? [])
+  const parts = hands.doc.parts
     .map((part): ListItem & { all: string } => {
       const place = part.place ? (places.get(part.place) ?? '') : '';
       const words = [part.ref, part.label, KIND_NAME[part.kind]].filter(Boolean).join(', ');
@@ -96,7 +94,7 @@ export function FindList({
         onLeave();
         const note = notes.find((candidate) => `note ${candidate.key}` === id);
         if (note) onNote(note);
-        else hands.take(id.slice('part '.length));
+        else hands.goTo(id.slice('part '.length));
       }}
     />
   );

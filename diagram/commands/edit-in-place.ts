@@ -1,6 +1,6 @@
 import { diff } from '../document/patch';
 import { PartSchema, canonical, type Cable, type Installation, type Part } from '../document/schema';
-import { listNames, nameOf } from '../document/names';
+import { compareDesignations, listNames, nameOf } from '../document/names';
 import { ratingText, readCable, readRating } from './rating-text';
 import type { Command, Refusal } from './types';
 
@@ -33,7 +33,7 @@ export function editRatings(doc: Installation, ids: readonly string[], text: str
     if (!reading.ok) return { refused: `${nameOf(doc, part)}: ${reading.message}` };
     changed.set(part.id, reading.value);
   }
-  const names = listNames(chosen.map((part) => nameOf(doc, part)), 4);
+  const names = listNames(chosen.map((part) => nameOf(doc, part)).sort(compareDesignations), 4);
   return {
     label: `${names}: ${text.trim() || 'no rating'}`,
     patch: diff(doc, canonical({ ...doc, parts: doc.parts.map((part) => changed.get(part.id) ?? part) })),
