@@ -30,6 +30,7 @@ export function usePictures(jobId: string, { uploads: first, mayEdit }: UploadLi
   const [trouble, setTrouble] = useState('');
   const files = useRef(new Map<string, Waiting>());
   const chain = useRef<Promise<void>>(Promise.resolve());
+  const changes = useRef<Promise<unknown>>(Promise.resolve());
 
   const mark = useCallback(
     (id: string, change: Partial<Sending> | null) =>
@@ -81,7 +82,7 @@ export function usePictures(jobId: string, { uploads: first, mayEdit }: UploadLi
     mark(id, null);
   };
 
-  const change = async (id: string, patch: UploadPatch): Promise<boolean> => {
+  const write = async (id: string, patch: UploadPatch): Promise<boolean> => {
     const answer = await callApi<UploadView>('PATCH', `/api/uploads/${id}`, patch);
     if (!answer.ok) {
       setTrouble(answer.refusal.message);
@@ -95,6 +96,13 @@ export function usePictures(jobId: string, { uploads: first, mayEdit }: UploadLi
     });
     if (patch.removed !== undefined) setRemoved(patch.removed ? data : null);
     return true;
+  };
+
+  /** One after the other: an answer that overtook another would show what has been changed since. */
+  const change = (id: string, patch: UploadPatch): Promise<boolean> => {
+    const written = changes.current.then(() => write(id, patch));
+    changes.current = written;
+    return written;
   };
 
   return { uploads, sending, removed, trouble, mayEdit, add, retry: queue, forget, change };
