@@ -1,14 +1,14 @@
 import { capacity, type Capacity } from '../calculations/capacity';
-import { byCode, type Cable, type Part } from '../document/schema';
+import { byCode, type Cable, type Part, type Wire } from '../document/schema';
 import type { Practice } from '../practices/types';
 import type { Graph } from '../terminals/graph';
 import type { Section } from '../terminals/ways';
 import type { Drawn } from './drawn';
 
-/** A cable that line conductors of a section run in. */
+/** A cable that line conductors of a section run in, or a neutral of its own. */
 export interface SectionCable {
   cable: Cable;
-  /** ids of the section's line wires in it */
+  /** ids of the section's line wires in it, of a neutral by itself the neutral ones */
   wires: string[];
   /** null where the practice has no table for its laying or its size */
   capacity: Capacity | null;
@@ -52,6 +52,37 @@ export function ringEdges(graph: Graph, section: Section): Set<number> {
 
 const ratingOf = (device: Part): number | undefined => ('rating' in device ? device.rating : undefined);
 
+/** Neutral wires in cables of their own on the way back of what is drawn, up to the first bar or device. */
+function ownNeutrals(graph: Graph, drawn: readonly Drawn[]): { cable: Cable; wire: Wire }[] {
+  const found = new Map<string, { cable: Cable; wire: Wire }>();
+  for (const { neutralEdges, neutralEnd } of drawn) {
+    let at = neutralEnd;
+    for (const number of [...neutralEdges].reverse()) {
+      const { a, b, wire, kind } = graph.edges[number]!;
+      if (kind === 'device' || kind === 'through') break;
+      const cable = wire?.cable === undefined ? undefined : graph.cables.get(wire.cable);
+      if (cable && wire) found.set(wire.id, { cable, wire });
+      at = a === at ? b : a;
+      if (graph.partOf[at]!.kind === 'neutral-bar') break;
+    }
+  }
+  const line = withLine(graph);
+  return [...found.values()].filter(({ cable }) => !line.has(cable.id));
+}
+
+const lineCables = new WeakMap<Graph, ReadonlySet<string>>();
+
+/** Cables that hold a line core, worked out once a home. */
+function withLine(graph: Graph): ReadonlySet<string> {
+  let known = lineCables.get(graph);
+  if (!known) {
+    const isLine = ({ role }: Wire) => role !== 'neutral' && role !== 'earth';
+    known = new Set([...graph.wires.values()].flatMap((wire) => (isLine(wire) && wire.cable ? [wire.cable] : [])));
+    lineCables.set(graph, known);
+  }
+  return known;
+}
+
 /**
  * The cables of a section with what each must carry. Where the practice has ring final circuits, a leg of one, and a spur
  * of it to a single point, may be rated below the device.
@@ -84,5 +115,14 @@ export function sectionCables(
       if (needA !== null) entry.needA = Math.max(entry.needA ?? 0, needA);
     }
   }
+  // A neutral that runs by itself carries what the line carries. In a ring it comes home both ways.
+  if (onRing.size === 0)
+    for (const { cable, wire } of ownNeutrals(graph, drawn)) {
+      const entry = cables.get(cable.id);
+      if (entry?.wires.includes(wire.id)) continue;
+      if (entry) entry.wires.push(wire.id);
+      else
+        cables.set(cable.id, { cable, wires: [wire.id], capacity: capacityOf(graph, practice, cable), needA: rating ?? null });
+    }
   return [...cables.keys()].sort(byCode).map((id) => cables.get(id)!);
 }

@@ -45,7 +45,12 @@ function wiresAt({ graph }: Context, node: number): string[] {
 }
 
 /** Wires and parts that a rule of polarity speaks of already. */
-function told(context: Context): { wires: Set<string>; parts: Set<string> } {
+function told(context: Context): {
+  wires: Set<string>;
+  parts: Set<string>;
+  /** places where line and earth change places: live cases say it */
+  liveCases: Set<string | undefined>;
+} {
   const wires = new Set<string>();
   const parts = new Set<string>();
   for (const each of [...reversals(context), ...neutralContacts(context).switched, ...neutralContacts(context).fused])
@@ -67,7 +72,8 @@ function told(context: Context): { wires: Set<string>; parts: Set<string> } {
     for (const { part, fed, source, lineEnd, lineEdges } of points.values())
       if (source && !fed && lineEnd === context.graph.node(part.id, 'N'))
         for (const number of lineEdges) addWire(context, number, wires);
-  return { wires, parts };
+  const cases = earthGaps(context).flatMap((gap) => (gap.on === 'line' ? gap.parts : []));
+  return { wires, parts, liveCases: new Set(cases.map((id) => context.graph.parts.get(id)!.place)) };
 }
 
 /** A wire drawn as one conductor that the graph shows is another. */
@@ -94,6 +100,7 @@ export const lineRoleMismatch: Rule = {
       if (is === undefined || is === drawn || drawn === 'D') return;
       if ([a, b].some((node) => known.parts.has(graph.partOf[node]!.id))) return;
       const ends = [a, b].map((node) => graph.partOf[node]!);
+      if (drawn !== 'N' && is !== 'N' && ends.some(({ place }) => known.liveCases.has(place))) return;
       // Wires one after the other that are drawn wrong the same way are one mistake of the pen.
       const place = ends.find((part) => !isPoint(part) && !isControl(part)) ?? ends[0]!;
       const key = `${drawn} ${is} ${place.id}`;

@@ -1,3 +1,4 @@
+import type { Part } from '../document/schema';
 import { MOST_COMBINED } from '../circuit/conditions';
 import { isOvercurrent } from '../terminals/roles-of-parts';
 import { recalled, seen } from './clauses';
@@ -26,11 +27,9 @@ export const mixedFeeds: Rule = {
     const { graph } = context;
     for (const { edge, loop, conditions, switches } of lineLoops(context)) {
       const { wire, part, a, b } = graph.edges[edge]!;
-      const devices = loop.flatMap((number) => {
-        const each = graph.edges[number]!;
-        const device = graph.parts.get(each.part ?? '');
-        return each.kind === 'bypass' || (device && isOvercurrent(device)) ? [device!.id] : [];
-      });
+      const limiting = devicesOf(context, loop, isOvercurrent);
+      // Round an rcd or an isolator alone: what it opens stays live, and it does not see the current.
+      const devices = limiting.length > 0 ? limiting : devicesOf(context, loop, ({ kind }) => BRIDGED.has(kind));
       const inverters = [
         ...new Set(
           loop.flatMap((number) => (graph.edges[number]!.kind === 'bypass' ? [graph.edges[number]!.part!] : [])),
@@ -81,6 +80,16 @@ export const mixedFeeds: Rule = {
     };
   },
 };
+
+const BRIDGED: ReadonlySet<Part['kind']> = new Set(['rcd', 'isolator']);
+
+/** Devices of a sort in a loop, and inverters that it passes through. */
+const devicesOf = ({ graph }: Context, loop: readonly number[], wanted: (part: Part) => boolean): string[] =>
+  loop.flatMap((number) => {
+    const { kind, part } = graph.edges[number]!;
+    const device = graph.parts.get(part ?? '');
+    return device && (kind === 'bypass' || (kind === 'device' && wanted(device))) ? [device.id] : [];
+  });
 
 /** What meets, and what follows from it beyond that neither device makes it dead. */
 function tell(

@@ -106,6 +106,10 @@ function deviceBehind(context: Context, { part, kind }: Source): Remedy[] {
   ]);
 }
 
+/** True where the service itself has no fuse: what lies behind it unprotected is no mistake of its own. */
+export const isServiceBare = (context: Context): boolean =>
+  bareLines(context).some(({ source, points }) => source.kind === 'mains' && points.size > 0);
+
 /** A line conductor with no overcurrent device on its source side. */
 export const noOvercurrent: Rule = {
   meta: {

@@ -7,6 +7,7 @@ import { isOvercurrent } from '../terminals/roles-of-parts';
 import { lackOfRating } from './readings/lacking';
 import { changePart } from './readings/remedies';
 import { overloadedMains } from './overloaded-main';
+import { isServiceBare } from './no-overcurrent';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
 
@@ -57,6 +58,7 @@ export const rcdUnderrated: Rule = {
       const least = Math.min(...before.map(({ rating }) => rating!));
       const sum = after.reduce((total, { rating }) => total + rating!, 0);
       if (!exceeds(Math.min(least, sum), rcd.rating)) continue;
+      if (before.length === 0 && isServiceBare(context)) continue;
       const next = practice.breakerRatingsA.value.find((rating) => rating >= Math.min(least, sum));
       yield {
         heading: `${capital(say(context, rcd.id))} is rated below what may flow through it`,

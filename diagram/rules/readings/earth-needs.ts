@@ -2,6 +2,7 @@ import { adiabaticMm2, kFactor } from '../../calculations/adiabatic';
 import type { Cable } from '../../document/schema';
 import type { Context } from '../context';
 import { figuresOf } from './figures';
+import { openRegions } from './open-regions';
 
 /** What a fault asks of the earth core of one cable. */
 export interface EarthNeed {
@@ -18,6 +19,9 @@ export interface EarthNeed {
 /** Table 54.2 of IEC 60364-5-54 (54.7 of BS 7671): by the line conductor, where the heat of the fault is not known. */
 export const tableMm2 = (lineMm2: number): number => (lineMm2 <= 16 ? lineMm2 : lineMm2 <= 35 ? 16 : lineMm2 / 2);
 
+const isCutOff = (context: Context, ids: readonly string[]): boolean =>
+  openRegions(context).some(({ points, onMains = [] }) => [...points, ...onMains].some((id) => ids.includes(id)));
+
 /** The need of every cable with an earth core on the way to something earthed: the most of all ways behind it. */
 export function earthNeeds(context: Context): EarthNeed[] {
   const { graph } = context;
@@ -31,6 +35,8 @@ export function earthNeeds(context: Context): EarthNeed[] {
     const fault = own ?? feeder?.fault;
     const ends = drawn.map(({ part, isPoint }) => ({ part, node: graph.node(part.id, isPoint ? 'E' : 'in.E') }));
     if (feeder) ends.push({ part: feeder.at, node: feeder.earth });
+    // A way that the mains do not reach for a gap in the line is judged once it is closed, by its fault and not by the table.
+    if (!fault && isCutOff(context, ends.map(({ part }) => part.id))) continue;
     // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
     if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;
     for (const { part, node } of ends) {

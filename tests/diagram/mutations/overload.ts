@@ -18,6 +18,20 @@ export const OVERLOAD: readonly Mutation[] = [
     also: ['no-backup-isolation'],
   },
   {
+    rule: 'no-overcurrent',
+    mistake: 'no service fuse',
+    make: (home) => home.parts('fuse').flatMap((fuse) => (fuse.standard === 'dc' ? [] : [home.takeOut(fuse.id, ['1', '2'])])),
+  },
+  {
+    rule: 'mixed-feeds',
+    mistake: 'a line led round an rcd',
+    make: (home) =>
+      home.parts('rcd').flatMap(({ id }) => {
+        const [into, out] = [home.only(id, '1'), home.only(id, '2')];
+        return into && out ? [home.join('line', home.beside(home.far(into, id)), home.beside(home.far(out, id)))] : [];
+      }),
+  },
+  {
     rule: 'overloaded-way',
     mistake: 'more load than the way was made for',
     make: (home) =>

@@ -1,4 +1,4 @@
-import type { Part } from '@/diagram/document/schema';
+import type { End, Part } from '@/diagram/document/schema';
 import type { Home, Mutation } from './edit';
 
 const control = (place: string | undefined): Part => ({
@@ -19,6 +19,17 @@ const switched = (home: Home) =>
     const control = end && home.part(end[0]);
     return line && control?.kind === 'switch' ? [{ lamp, line, control }] : [];
   });
+
+/** The wires at one terminal of the supply on another of it; where the supply has none such, nothing. */
+const moveAtSupply = (home: Home, from: string, to: string): Home[] =>
+  home
+    .parts('supply')
+    .filter(() => home.doc.supply.system !== 'TT' || (from !== 'E' && to !== 'E'))
+    .flatMap(({ id }) => {
+      const wire = home.only(id, from);
+      const end: End = [id, to];
+      return wire ? [home.setWire(wire, wire.from[0] === id ? { from: end } : { to: end })] : [];
+    });
 
 export const POLARITY: readonly Mutation[] = [
   {
@@ -130,8 +141,37 @@ export const POLARITY: readonly Mutation[] = [
           .filter(({ to }) => to[0] === load.id)
           .map((wire) => home.cut(wire)),
       ),
-    // said of a two-way switch that stands in another room than its lamp
-    also: ['open-terminal'],
+  },
+  {
+    rule: 'open-line',
+    mistake: "the service's line core on the neutral of the supply",
+    make: (home) => moveAtSupply(home, 'L', 'N'),
+  },
+  {
+    rule: 'open-line',
+    mistake: "the service's line core on the earth of the supply",
+    make: (home) => moveAtSupply(home, 'L', 'E'),
+  },
+  {
+    rule: 'open-neutral',
+    mistake: "the service's neutral core on the line of the supply",
+    make: (home) => moveAtSupply(home, 'N', 'L'),
+  },
+  {
+    rule: 'open-line',
+    mistake: 'the line of a way begun on a neutral bar',
+    make: (home) =>
+      home.waysWith('lamp').flatMap(({ device }) =>
+        home.wiresAt(device.id, '1').map((wire) => {
+          const end: End = home.freeOn(home.parts('neutral-bar')[0]!.id);
+          return home.setWire(wire, wire.to[0] === device.id ? { from: end } : { to: end });
+        }),
+      ),
+  },
+  {
+    rule: 'short-circuit',
+    mistake: 'the main earth core on the line of the supply',
+    make: (home) => moveAtSupply(home, 'E', 'L'),
   },
   {
     rule: 'short-circuit',

@@ -81,6 +81,19 @@ export const SEPARATION: readonly Mutation[] = [
   },
   {
     rule: 'residual-imbalance',
+    mistake: 'the neutral of an rcd wired from the wrong end',
+    make: (home) =>
+      home.parts('rcd').flatMap(({ id }) => {
+        const [into, out] = [home.only(id, '3'), home.only(id, '4')];
+        if (!into || !out) return [];
+        const turn = (wire: Wire, mark: string): Partial<Wire> =>
+          wire.from[0] === id ? { from: [id, mark] } : { to: [id, mark] };
+        return [home.setWire(into, turn(into, '4')).setWire(out, turn(out, '3'))];
+      }),
+    also: ['backup-neutral-behind-other-rcd'],
+  },
+  {
+    rule: 'residual-imbalance',
     mistake: 'the neutral of a way landed before the rcd that its line passes',
     make: (home) =>
       runs(home, false).flatMap(({ run, bar }) => {
