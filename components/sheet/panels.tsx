@@ -7,6 +7,7 @@ import type { ActionContext } from './actions';
 import { endPoint } from './canvas/pick';
 import { useCoarse } from './canvas/use-coarse';
 import { ChoosePanel } from './choose-panel';
+import { DraftPanel } from './draft-panel';
 import { EditPanel } from './edit-panel';
 import { SlipPanel } from './extend/slip';
 import { SlipFoot } from './extend/slip-foot';
@@ -134,6 +135,12 @@ export function Panels(props: PanelsProps) {
       return (
         <Floating box={box} width={680}>
           <LegendPanel scene={scene} practice={practice} onLeave={close} />
+        </Floating>
+      );
+    case 'draft':
+      return (
+        <Floating box={box} width={360}>
+          <DraftPanel mode={mode} hands={hands} onLeave={close} />
         </Floating>
       );
     case 'tidy':

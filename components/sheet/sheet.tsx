@@ -26,6 +26,7 @@ import { useExamination } from './margin/use-examination';
 import { SaveStateView } from './save-state-view';
 import { SheetSurface } from './surface';
 import { useTidy } from './tidy/use-tidy';
+import { useDraftPreview } from './use-draft-preview';
 import { TroubleStrip } from './trouble-strip';
 import { useDrawing, useSheet, type Me } from './use-drawing';
 import { useHands } from './use-hands';
@@ -39,6 +40,8 @@ interface SheetProps {
   place?: string | null;
   /** h on battery that the job asks for */
   hoursWanted: number;
+  /** the survey asks to see its draft on the sheet before it is drawn */
+  preview?: boolean;
 }
 
 const NO_FINDINGS: readonly Finding[] = [];
@@ -64,7 +67,7 @@ const stillLive = (document: Installation): string | undefined => {
     : undefined;
 };
 
-function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
+function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProps) {
   const router = useRouter();
   const drawing = useDrawing(view, me);
   const { store } = drawing;
@@ -75,6 +78,7 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
   const ghostDocument = useView((state) => state.ghost);
   const condition = useView((state) => state.condition);
   const severities = useView((state) => state.severities);
+  const room = useView((state) => state.room);
   const wantedPlace = useView((state) => state.place);
   const editing = useView((state) => state.editing);
   const sheet = useRef<HTMLDivElement>(null);
@@ -88,14 +92,14 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
   const place = face === 'connections' ? (page?.place ?? null) : null;
   const drawn = useScene(browser ? document : null, face, place);
   const scene = drawn ?? EMPTY_SCENE;
-  const ghost = useScene(ghostDocument, face, place);
+  const ghost = useScene(ghostDocument, face, place, drawn);
   const hands = useHands(store, viewStore, scene);
   const examined = useExamination(document);
   const ghostExamined = useExamination(ghostDocument);
   const slip = useSlip(hands, hoursWanted, examined.examination);
   const notes = useMemo(
-    () => notesOf(examined.examination?.findings ?? [], document, scene, { condition, severities }),
-    [examined.examination, document, scene, condition, severities],
+    () => notesOf(examined.examination?.findings ?? [], document, scene, { condition, severities, room }),
+    [examined.examination, document, scene, condition, severities, room],
   );
 
   const takeNote = useCallback(
@@ -108,6 +112,7 @@ function SheetOnView({ view, me, face, hoursWanted }: SheetProps) {
   );
 
   const tidy = useTidy(hands, face);
+  useDraftPreview(drawing, hands, preview, hoursWanted);
   const context = useMemo<ActionContext>(
     () => ({
       hands,

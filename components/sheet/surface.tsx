@@ -89,7 +89,7 @@ export function SheetSurface(props: SurfaceProps) {
       <p className="sr-only" aria-live="polite">
         {handWords(document, selection)}
       </p>
-      {empty && scene.face === 'overview' ? (
+      {empty && !ghost && scene.face === 'overview' ? (
         <StartPanel jobId={drawing.store.getState().jobId} hands={hands} mayEdit={mayEdit} />
       ) : (
         drawn && (

@@ -19,13 +19,21 @@ export const useBrowser = (): boolean =>
     () => false,
   );
 
-/** A face as a scene; what did not change keeps its identity. */
-export function useScene(document: Installation | null, face: Face, place: string | null): Scene | null {
+/**
+ * A face as a scene; what did not change keeps its identity, and its way.
+ * @param base what a ghost is drawn over: it differs from that and not from the ghost before
+ */
+export function useScene(
+  document: Installation | null,
+  face: Face,
+  place: string | null,
+  base: Scene | null = null,
+): Scene | null {
   const before = useRef<Scene | null>(null);
   const scene = useMemo(
     // eslint-disable-next-line react-hooks/refs -- what a change does not touch keeps its way; a late scene costs time alone
-    () => (document ? buildScene(document, face, { before: before.current, ...(place !== null && { place }) }) : null),
-    [document, face, place],
+    () => (document ? buildScene(document, face, { before: base ?? before.current, ...(place !== null && { place }) }) : null),
+    [document, face, place, base],
   );
   // eslint-disable-next-line react-hooks/refs -- the scene before is a cache: reading it late costs drawing time, never correctness
   const stable = useMemo(() => scene && stableScene(before.current, scene), [scene]);

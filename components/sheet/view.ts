@@ -25,6 +25,8 @@ export type Mode =
   | { kind: 'legend' }
   | { kind: 'commands' }
   | { kind: 'load'; loads: readonly string[] }
+  /** the survey's draft lies over the sheet, dashed */
+  | { kind: 'draft'; preview: Installation }
   | { kind: 'tidy'; way: TidyWay; preview: Installation; moved: number }
   | { kind: 'export' }
   | { kind: 'history' };
@@ -62,6 +64,8 @@ export interface ViewState {
   ghost: Installation | null;
   condition: Condition;
   severities: ReadonlySet<'danger' | 'defect' | 'advice'>;
+  /** place whose findings stand in the margin; null: all */
+  room: string | null;
   /** key of the finding in hand */
   finding: string | null;
   camera: Camera | null;
@@ -84,6 +88,7 @@ export const createView = (face: Face, place: string | null): View =>
     ghost: null,
     condition: 'all',
     severities: new Set(['danger', 'defect', 'advice']),
+    room: null,
     finding: null,
     camera: null,
     editing: true,

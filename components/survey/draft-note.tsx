@@ -1,7 +1,7 @@
 'use client';
 
-import { useState } from 'react';
-import { Button } from '@/components/ui/button';
+import { useDeferredValue, useMemo } from 'react';
+import { Button, ButtonLink } from '@/components/ui/button';
 import { Key } from '@/components/ui/key';
 import { Note } from '@/components/ui/note';
 import type { Installation } from '@/diagram/document/schema';
@@ -11,6 +11,7 @@ import type { Survey } from './use-survey';
 import { roomsWords } from './words';
 
 interface DraftNoteProps {
+  jobId: string;
   survey: Survey;
   document: Installation;
   hoursWanted: number;
@@ -20,10 +21,15 @@ interface DraftNoteProps {
 const MOVED = 'What you moved by hand stays where it is; one undo takes it back.';
 
 /** The draft: first the whole sheet, then only what changed. */
-export function DraftNote({ survey, document, hoursWanted, onDraft }: DraftNoteProps) {
-  const [previewed, setPreviewed] = useState<Installation | null>(null);
+export function DraftNote({ jobId, survey, document, hoursWanted, onDraft }: DraftNoteProps) {
   const { toDraw, steps } = survey;
   const isFirst = document.parts.length === 0;
+  // What it would draw may be said a moment after the cell is typed.
+  const drawn = useDeferredValue(document);
+  const words = useMemo(
+    () => (toDraw.length > 0 ? draftWords(drawn, draftPatch(drawn, hoursWanted)) : ''),
+    [drawn, toDraw.length, hoursWanted],
+  );
   const waiting = steps.filter((step) => step.state === 'waits');
   const others = steps.filter((step) => step.state === 'not-in-survey' || step.state === 'differs');
 
@@ -62,9 +68,7 @@ export function DraftNote({ survey, document, hoursWanted, onDraft }: DraftNoteP
               <Button solid onClick={onDraft}>
                 Draft {roomsWords(toDraw.length)}
               </Button>
-              <Button aria-expanded={previewed === document} onClick={() => setPreviewed(previewed === document ? null : document)}>
-                Preview
-              </Button>
+              <ButtonLink href={`/jobs/${jobId}/overview?preview=draft`}>Preview</ButtonLink>
             </>
           )
         }
@@ -96,11 +100,7 @@ export function DraftNote({ survey, document, hoursWanted, onDraft }: DraftNoteP
             {waiting.map((step) => step.name || 'a room without a name').join(', ')} {isFirst ? 'is left out until its cell is right.' : 'stays as drawn.'}
           </p>
         )}
-        {previewed === document && (
-          <p role="status" className="mt-2 bg-row px-2 py-1">
-            {draftWords(document, draftPatch(document, hoursWanted)) || 'Nothing would change.'}
-          </p>
-        )}
+        <p className="mt-1 text-grey">{words}</p>
       </Note>
       {notDrawn}
     </div>

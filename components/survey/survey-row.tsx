@@ -48,21 +48,21 @@ export function SurveyRow({ survey, room, above, below, totals, step, problems, 
             {content}
           </th>
         ) : (
-          <td key={column.id} className={`${cell} ${ground}`}>
+          <td key={column.id} data-group={column.group} className={`${cell} ${ground}`}>
             {content}
           </td>
         );
       })}
-      <td className={`${figures} border-l-2 border-l-ink`}>{totals && !isBlank && `${Math.round(totals.watts)}  ${totals.amps.toFixed(1)}`}</td>
-      <td className={figures}>
+      <td data-group="comes" className={`${figures} border-l-2 border-l-ink`}>{totals && !isBlank && `${Math.round(totals.watts)}  ${totals.amps.toFixed(1)}`}</td>
+      <td data-group="comes" className={figures}>
         {!totals || isBlank ? null : waits ? (
           <span className="font-normal text-grey">waits</span>
         ) : (
           totals.backupWatts > 0 && `${Math.round(totals.backupWatts)}  ${Math.round(totals.backupVa)}`
         )}
       </td>
-      <td className={`${cell} px-2 max-lap:px-1`}>{totals?.ways.join(' ')}</td>
-      <td className={`${cell} px-2 max-lap:px-1 ${waits ? 'text-red' : ''}`}>
+      <td data-group="comes" className={`${cell} px-2 max-lap:px-1`}>{totals?.ways.join(' ')}</td>
+      <td data-group="comes" className={`${cell} px-2 max-lap:px-1 ${waits ? 'text-red' : ''}`}>
         {isBlank ? <span className="text-grey">new room</span> : [board, waits ? 'waits' : step?.words].filter(Boolean).join(' ')}
       </td>
     </tr>

@@ -97,7 +97,7 @@ export function SurveySheet({ view, me, hoursWanted }: SurveySheetProps) {
         keys={keys}
         strip={<TroubleStrip drawing={drawing} />}
         marginLabel={problems.length > 0 ? `${problems.length} to put right` : 'Totals and draft'}
-        margin={<SurveyMargin survey={survey} draft={<DraftNote survey={survey} document={document} hoursWanted={hoursWanted} onDraft={draft} />} />}
+        margin={<SurveyMargin survey={survey} draft={<DraftNote jobId={view.jobId} survey={survey} document={document} hoursWanted={hoursWanted} onDraft={draft} />} />}
         foot={<SurveyFoot survey={survey} title={titleBlock.number} mayEdit={rights.edit} pasting={pasting} onPasting={setPasting} />}
       >
         <SurveyBody survey={survey} document={document} boards={boards} totals={totals} pasting={pasting} onPasting={setPasting} />

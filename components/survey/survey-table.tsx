@@ -1,7 +1,8 @@
 'use client';
 
+import { useState, type FocusEvent } from 'react';
 import type { SurveyRoom } from '@/diagram/document/schema';
-import { GROUPS, TYPED } from './columns';
+import { GROUPS, TYPED, type GroupId } from './columns';
 import { SurveyRow } from './survey-row';
 import type { Survey } from './use-survey';
 import { roomsWords } from './words';
@@ -14,34 +15,77 @@ const sum = 'h-10 border-y-2 border-r border-y-ink border-r-hair px-2 font-bold 
 export const rowsOf = (survey: Survey): SurveyRoom[] =>
   survey.mayEdit ? [...survey.rooms, survey.blank].sort((a, b) => a.order - b.order) : [...survey.rooms];
 
+/** On a narrow screen the name stays and one group stands beside it. The others are out of sight, yet a key still reaches them. */
+const PAGE: Record<GroupId, string> = {
+  room: 'max-lap:[&_[data-group]:not([data-group=room])]:sr-only max-lap:[&_col[data-group]:not([data-group=room])]:hidden',
+  holds: 'max-lap:[&_[data-group]:not([data-group=holds])]:sr-only max-lap:[&_col[data-group]:not([data-group=holds])]:hidden',
+  keeps: 'max-lap:[&_[data-group]:not([data-group=keeps])]:sr-only max-lap:[&_col[data-group]:not([data-group=keeps])]:hidden',
+  comes: 'max-lap:[&_[data-group]:not([data-group=comes])]:sr-only max-lap:[&_col[data-group]:not([data-group=comes])]:hidden',
+};
+const PAGES = Object.keys(PAGE) as GroupId[];
+
+const groupOf = (id: string, group: GroupId): GroupId | undefined => (id === 'name' ? undefined : group);
+
+/** Which group stands beside the names, as dots with their words. */
+function Pager({ page, onPage }: { page: GroupId; onPage(page: GroupId): void }) {
+  return (
+    <nav aria-label="Groups of columns" className="mb-2 flex flex-wrap gap-2 lap:hidden">
+      {PAGES.map((each) => (
+        <button
+          key={each}
+          type="button"
+          aria-current={each === page ? 'page' : undefined}
+          className="flex min-h-11 cursor-pointer items-center gap-2 border border-rule px-3 aria-[current]:border-ink aria-[current]:font-bold"
+          onClick={() => onPage(each)}
+        >
+          <span aria-hidden="true" className={`size-2 rounded-full border border-ink ${each === page ? 'bg-ink' : ''}`} />
+          {GROUPS[each]}
+        </button>
+      ))}
+    </nav>
+  );
+}
+
 /** The survey as one table: a row a room, typed by keyboard alone. */
 export function SurveyTable({ survey, boards }: { survey: Survey; boards: ReadonlyMap<string, string> }) {
   const rows = rowsOf(survey);
   const { totals } = survey;
   const count = (n: number) => (n === 0 ? '-' : String(n));
+  const [page, setPage] = useState<GroupId>('holds');
+  const follow = (event: FocusEvent) => {
+    const group = event.target.closest<HTMLElement>('[data-group]')?.dataset.group;
+    if (group) setPage(group as GroupId);
+  };
   return (
-    <table aria-label="Survey, room by room" className="w-full min-w-[936px] table-fixed border-collapse">
+    <>
+    <Pager page={page} onPage={setPage} />
+    <table
+      aria-label="Survey, room by room"
+      className={`relative w-full table-fixed border-collapse lap:min-w-[936px] ${PAGE[page]}`}
+      onFocus={follow}
+    >
       <colgroup>
         {TYPED.map((column) => (
-          <col key={column.id} style={{ width: `${column.width}ch` }} />
+          <col key={column.id} data-group={groupOf(column.id, column.group)} style={{ width: `${column.width}ch` }} />
         ))}
-        <col style={{ width: '12ch' }} />
-        <col style={{ width: '10ch' }} />
-        <col style={{ width: '12ch' }} />
-        <col style={{ width: '16ch' }} />
+        <col data-group="comes" style={{ width: '12ch' }} />
+        <col data-group="comes" style={{ width: '10ch' }} />
+        <col data-group="comes" style={{ width: '12ch' }} />
+        <col data-group="comes" style={{ width: '16ch' }} />
       </colgroup>
       <thead>
         <tr>
-          <th colSpan={3} scope="colgroup" className={`${group} border-r border-r-ink`}>
+          <th scope="col" className={group}>
             {GROUPS.room}
           </th>
-          <th colSpan={4} scope="colgroup" className={group}>
+          <td data-group="room" colSpan={2} className={`${group} border-r border-r-ink`} />
+          <th data-group="holds" colSpan={4} scope="colgroup" className={group}>
             {GROUPS.holds}
           </th>
-          <th colSpan={4} scope="colgroup" className={`${group} border-l-2 border-l-ink bg-row`}>
+          <th data-group="keeps" colSpan={4} scope="colgroup" className={`${group} border-l-2 border-l-ink bg-row`}>
             {GROUPS.keeps}
           </th>
-          <th colSpan={4} scope="colgroup" className={`${group} border-l-2 border-l-ink`}>
+          <th data-group="comes" colSpan={4} scope="colgroup" className={`${group} border-l-2 border-l-ink`}>
             {GROUPS.comes}
           </th>
         </tr>
@@ -50,6 +94,7 @@ export function SurveyTable({ survey, boards }: { survey: Survey; boards: Readon
             <th
               key={column.id}
               scope="col"
+              data-group={groupOf(column.id, column.group)}
               className={`${head} ${column.group === 'keeps' ? 'bg-row' : ''} ${column.id === 'keepLamps' ? 'border-l-2 border-l-ink' : ''} ${column.right ? 'text-right' : ''}`}
             >
               {column.name}
@@ -57,20 +102,20 @@ export function SurveyTable({ survey, boards }: { survey: Survey; boards: Readon
               {column.unit}
             </th>
           ))}
-          <th scope="col" className={`${head} border-l-2 border-l-ink text-right`}>
+          <th data-group="comes" scope="col" className={`${head} border-l-2 border-l-ink text-right`}>
             Connected
             <br />
             W, A
           </th>
-          <th scope="col" className={`${head} text-right`}>
+          <th data-group="comes" scope="col" className={`${head} text-right`}>
             Backup
             <br />
             W, VA
           </th>
-          <th scope="col" className={head}>
+          <th data-group="comes" scope="col" className={head}>
             Ways
           </th>
-          <th scope="col" className={head}>
+          <th data-group="comes" scope="col" className={head}>
             On sheet 2
           </th>
         </tr>
@@ -92,25 +137,27 @@ export function SurveyTable({ survey, boards }: { survey: Survey; boards: Readon
       </tbody>
       <tfoot>
         <tr>
-          <th scope="row" colSpan={3} className={`${sum} text-left`}>
+          <th scope="row" className={`${sum} text-left`}>
             {roomsWords(survey.rooms.length)}
           </th>
-          <td className={sum}>{count(totals.lamps)}</td>
-          <td className={sum}>{count(totals.fans)}</td>
-          <td className={sum}>{count(totals.outlets)}</td>
-          <td className={sum}>{count(totals.heavy)}</td>
-          <td className={`${sum} border-l-2 border-l-ink bg-row`}>{count(totals.keepLamps)}</td>
-          <td className={`${sum} bg-row`}>{count(totals.keepFans)}</td>
-          <td className={`${sum} bg-row`}>{count(totals.keepOutletWatts)}</td>
-          <td className={`${sum} bg-row text-right`}>{totals.backup ? totals.backup.hoursWanted : '-'}</td>
-          <td className={`${sum} border-l-2 border-l-ink text-right`}>
+          <td data-group="room" colSpan={2} className={sum} />
+          <td data-group="holds" className={sum}>{count(totals.lamps)}</td>
+          <td data-group="holds" className={sum}>{count(totals.fans)}</td>
+          <td data-group="holds" className={sum}>{count(totals.outlets)}</td>
+          <td data-group="holds" className={sum}>{count(totals.heavy)}</td>
+          <td data-group="keeps" className={`${sum} border-l-2 border-l-ink bg-row`}>{count(totals.keepLamps)}</td>
+          <td data-group="keeps" className={`${sum} bg-row`}>{count(totals.keepFans)}</td>
+          <td data-group="keeps" className={`${sum} bg-row`}>{count(totals.keepOutletWatts)}</td>
+          <td data-group="keeps" className={`${sum} bg-row text-right`}>{totals.backup ? totals.backup.hoursWanted : '-'}</td>
+          <td data-group="comes" className={`${sum} border-l-2 border-l-ink text-right`}>
             {totals.watts > 0 ? `${Math.round(totals.watts)}  ${totals.amps.toFixed(1)}` : '-'}
           </td>
-          <td className={`${sum} text-right`}>{totals.backup ? `${Math.round(totals.backup.watts)}  ${Math.round(totals.backup.va)}` : '-'}</td>
-          <td className={sum}>{count(totals.ways)}</td>
-          <td className={sum}>{survey.toDraw.length > 0 ? `${survey.toDraw.length} to draw` : ''}</td>
+          <td data-group="comes" className={`${sum} text-right`}>{totals.backup ? `${Math.round(totals.backup.watts)}  ${Math.round(totals.backup.va)}` : '-'}</td>
+          <td data-group="comes" className={sum}>{count(totals.ways)}</td>
+          <td data-group="comes" className={sum}>{survey.toDraw.length > 0 ? `${survey.toDraw.length} to draw` : ''}</td>
         </tr>
       </tfoot>
     </table>
+    </>
   );
 }

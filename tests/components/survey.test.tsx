@@ -188,10 +188,9 @@ describe('drafting from the survey', () => {
     expect(push).toHaveBeenCalledWith('/jobs/job/overview');
   });
 
-  it('says in words what the draft would draw before it does', async () => {
-    const user = userEvent.setup();
+  it('says in words what the draft would draw, and shows it on sheet 2 before it does', () => {
     open([room('Hall', 0, { lamps: 1 })]);
-    await user.click(screen.getByRole('button', { name: 'Preview' }));
+    expect(screen.getByRole('link', { name: 'Preview' })).toHaveAttribute('href', '/jobs/job/overview?preview=draft');
     expect(screen.getByText(/\d+ new parts, \d+ new wires/)).toBeInTheDocument();
     expect(store.getState().document.parts).toHaveLength(0);
   });

@@ -77,7 +77,8 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
   const held = useMemo(() => new Set(selection.parts), [selection.parts]);
   const wires = useMemo(() => new Set(selection.wires), [selection.wires]);
   const sight = useSight();
-  useCamera(scene);
+  // On an empty sheet the ghost of a whole draft is what there is to look at.
+  useCamera(scene.parts.length > 0 || !ghost ? scene : ghost);
   useHold(box, hands);
 
   const nodes = useMemo(

@@ -16,6 +16,8 @@ interface Held {
   ids: readonly string[];
   x: number;
   y: number;
+  /** ms, when the finger came down */
+  since: number;
 }
 
 /**
@@ -59,13 +61,15 @@ export function useHold(box: RefObject<HTMLDivElement | null>, hands: Hands): vo
       if (fingers.size > 1) return putBack();
       const id = (event.target as Element).closest<HTMLElement>('.react-flow__node')?.dataset.id;
       if (!id || !hands.mayEdit) return;
-      waiting = { pointer: event.pointerId, ids: [id], x: event.clientX, y: event.clientY };
+      waiting = { pointer: event.pointerId, ids: [id], x: event.clientX, y: event.clientY, since: event.timeStamp };
       timer = setTimeout(takeUp, HOLD);
     };
     const move = (event: PointerEvent) => {
       if (waiting?.pointer === event.pointerId && Math.hypot(event.clientX - waiting.x, event.clientY - waiting.y) > STILL)
         forget();
       if (carried?.pointer !== event.pointerId) return;
+      // A busy page may hear of the move only after the timer: it goes by when the finger moved.
+      if (event.timeStamp - carried.since < HOLD) return putBack();
       const scale = flow.getZoom() * PX;
       const { x, y } = carried;
       useDrag.setState({ dx: (event.clientX - x) / scale, dy: (event.clientY - y) / scale });

@@ -15,16 +15,17 @@ function prove(document: Installation, finding: Finding): Proof {
   const context = buildContext(document);
   const shown = showFault(context, finding);
   const remedies = remediesFor(document, finding);
-  if (!shown) return { remedies, walk: null, cannot: null };
+  if (!shown) return { remedies, shown, walk: null, cannot: null };
   try {
     return {
       remedies,
+      shown,
       walk: walkFaults(context.graph, context.evaluation, shown.faults, shown.condition),
       cannot: null,
     };
   } catch (error) {
     // A value that is missing is the person's to give; anything else is ours.
-    if (error instanceof FaultError) return { remedies, walk: null, cannot: error.message };
+    if (error instanceof FaultError) return { remedies, shown, walk: null, cannot: error.message };
     throw error;
   }
 }

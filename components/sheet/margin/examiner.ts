@@ -2,6 +2,7 @@ import type { FaultWalk } from '@/diagram/circuit/fault-types';
 import { diff, type Patch } from '@/diagram/document/patch';
 import { canonical, type Installation } from '@/diagram/document/schema';
 import type { Examination } from '@/diagram/rules/examination';
+import type { Shown } from '@/diagram/rules/show-fault';
 import type { Finding, Remedy } from '@/diagram/rules/types';
 
 /** What a finding in hand needs beyond its words. */
@@ -10,6 +11,8 @@ export interface Proof {
   remedies: Remedy[];
   /** the fault that shows it; null where none does or none can be walked */
   walk: FaultWalk | null;
+  /** the fault and the condition in which to look, for the rehearsal sheet; null where no fault shows it */
+  shown: Shown | null;
   /** the value without which the fault cannot be walked */
   cannot: string | null;
 }

@@ -1,149 +1,15 @@
 'use client';
 
-import Link from 'next/link';
-import { useEffect, useRef, useState } from 'react';
-import { Button, buttonClass } from '@/components/ui/button';
-import { TextField } from '@/components/ui/field';
+import { Button } from '@/components/ui/button';
 import { Note } from '@/components/ui/note';
-import { Segmented } from '@/components/ui/segmented';
-import { withPlaces } from '@/diagram/commands/place-new';
-import type { Patch } from '@/diagram/document/patch';
-import type { Silence } from '@/diagram/document/schema';
-import type { Finding } from '@/diagram/rules/types';
 import type { Hands } from '../hands';
 import { useSheet } from '../use-drawing';
-import { useView, useViewStore, type Condition } from '../view';
-import type { ExaminationState } from './use-examination';
+import { useView } from '../view';
+import { Filter } from './filter';
+import { FindingNote } from './finding-note';
 import { keyOf, type MarkedNote } from './notes';
-import { ProofView } from './proof-view';
+import type { ExaminationState } from './use-examination';
 import { useProof } from './use-proof';
-import type { Proof } from './examiner';
-import { applyPatch } from '@/diagram/document/patch';
-
-const CONDITIONS: readonly { value: Condition; label: string }[] = [
-  { value: 'all', label: 'all' },
-  { value: 'mains', label: 'mains' },
-  { value: 'outage', label: 'outage' },
-  { value: 'main-off', label: 'off' },
-];
-const SEVERITIES = ['danger', 'defect', 'advice'] as const;
-
-/** Rules whose finding may be silenced by everybody who draws; a danger needs an electrician or trainer. */
-function SilenceForm({ finding, by, hands, onDone }: { finding: Finding; by: string; hands: Hands; onDone(): void }) {
-  const [reason, setReason] = useState('');
-  const silence = () => {
-    const at = finding.parts[0] ?? finding.wires[0];
-    if (!at || reason.trim() === '') return;
-    const silenced: Silence[] = [...(hands.doc.silenced ?? []), { rule: finding.rule, at, reason: reason.trim(), by }];
-    hands.do({ label: `Answer for: ${finding.heading}`, patch: { set: { silenced } } });
-    onDone();
-  };
-  return (
-    <form
-      className="mt-2 flex flex-col gap-2"
-      onSubmit={(event) => {
-        event.preventDefault();
-        silence();
-      }}
-    >
-      <TextField
-        label="Why it may stand"
-        hint={`Printed with the name ${by}.`}
-        value={reason}
-        maxLength={500}
-        autoFocus
-        onChange={(event) => setReason(event.target.value)}
-      />
-      <div className="flex gap-2">
-        <Button type="submit" disabled={reason.trim() === ''}>
-          Let it stand
-        </Button>
-        <Button onClick={onDone}>Leave</Button>
-      </div>
-    </form>
-  );
-}
-
-interface FindingNoteProps {
-  note: MarkedNote;
-  inHand: boolean;
-  /** remedies and proof, of the note in hand */
-  proof: Proof | null;
-  by: string;
-  maySilence: boolean;
-  hands: Hands;
-  onTake(): void;
-}
-
-function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake }: FindingNoteProps) {
-  const { finding } = note;
-  const box = useRef<HTMLDivElement>(null);
-  const [silencing, setSilencing] = useState(false);
-  const [shown, setShown] = useState(false);
-  const preview = (patch: Patch | null) => {
-    hands.view.getState().set({ ghost: patch && applyPatch(hands.doc, patch) });
-  };
-  useEffect(() => {
-    if (inHand) box.current?.scrollIntoView({ block: 'nearest' });
-  }, [inHand]);
-  const meta = [finding.severity, finding.conditions.join(', '), note.grid ?? 'not on this face'].filter(Boolean);
-  return (
-    <div ref={box} data-note={note.key} data-in-hand={inHand || undefined}>
-      <Note
-        tone="finding"
-        letter={note.letter}
-        inHand={inHand}
-        heading={finding.heading}
-        meta={meta.map((word, i) => (
-          <span key={i} className="mr-4">
-            {word}
-          </span>
-        ))}
-        actions={
-          <>
-            {hands.mayEdit &&
-              proof?.remedies.map((remedy) => (
-                <Button
-                  key={remedy.label}
-                  tone="red"
-                  onMouseEnter={() => preview(remedy.patch)}
-                  onMouseLeave={() => preview(null)}
-                  onFocus={() => preview(remedy.patch)}
-                  onBlur={() => preview(null)}
-                  onClick={() => {
-                    preview(null);
-                    hands.do({ label: remedy.label, patch: withPlaces(hands.doc, remedy.patch) });
-                  }}
-                >
-                  {remedy.label}
-                </Button>
-              ))}
-            {proof?.walk && (
-              <Button aria-expanded={shown} onClick={() => setShown(!shown)}>
-                Show me
-              </Button>
-            )}
-            <Button onClick={onTake} aria-pressed={inHand}>
-              Go there
-            </Button>
-            <Link href={`/rules/${finding.rule}`} className={buttonClass()}>
-              Read the lesson
-            </Link>
-            {maySilence && !silencing && <Button onClick={() => setSilencing(true)}>Let it stand</Button>}
-          </>
-        }
-      >
-        {finding.message}
-        {inHand && shown && proof?.walk && <ProofView walk={proof.walk} document={hands.doc} />}
-        {inHand && proof?.cannot && <span className="mt-1 block text-grey">The fault {proof.cannot}.</span>}
-        {finding.clause && finding.clause.length > 0 && (
-          <span className="mt-1 block text-small text-grey">leans on {finding.clause.join('; ')}</span>
-        )}
-      </Note>
-      {silencing && <SilenceForm finding={finding} by={by} hands={hands} onDone={() => setSilencing(false)} />}
-    </div>
-  );
-}
 
 const words = (count: number): string => (count === 0 ? 'No finding' : count === 1 ? '1 finding' : `${count} findings`);
 
@@ -160,9 +26,6 @@ interface FindingsProps {
 
 /** The findings of the drawing, in red pencil, each tied to its place. */
 export function Findings({ state, notes, hands, by, mayEdit, maySilenceDanger, onTake }: FindingsProps) {
-  const view = useViewStore();
-  const condition = useView((current) => current.condition);
-  const severities = useView((current) => current.severities);
   const inHand = useView((current) => current.finding);
   const { examination, failure } = state;
   const document = useSheet(hands.store, (current) => current.document);
@@ -176,11 +39,6 @@ export function Findings({ state, notes, hands, by, mayEdit, maySilenceDanger, o
   if (!examination) return <p className="text-grey">Being examined.</p>;
   const open = examination.findings.filter((finding) => !finding.silenced);
   const silenced = examination.findings.filter((finding) => finding.silenced);
-  const toggle = (severity: Finding['severity']) => {
-    const next = new Set(severities);
-    if (!next.delete(severity)) next.add(severity);
-    view.getState().set({ severities: next });
-  };
   const backup = examination.backup.length > 0;
   return (
     <div className="flex flex-col gap-5" aria-busy={state.stale}>
@@ -188,33 +46,7 @@ export function Findings({ state, notes, hands, by, mayEdit, maySilenceDanger, o
         <h2 className="text-head font-bold">
           {words(open.length)} {notes.length > 0 && <span className="ml-2 font-normal text-grey">n next</span>}
         </h2>
-        {backup && (
-          <Segmented
-            label="True in"
-            showLabel
-            segments={CONDITIONS}
-            value={condition}
-            onChange={(value) => view.getState().set({ condition: value })}
-          />
-        )}
-        {open.length > 0 && (
-          <div className="flex flex-wrap gap-x-4" role="group" aria-label="Severities shown">
-            {SEVERITIES.map((severity) => {
-              const count = open.filter((finding) => finding.severity === severity).length;
-              return (
-                <label key={severity} className="flex items-center gap-2 pointer-coarse:min-h-11">
-                  <input
-                    type="checkbox"
-                    className="accent-ink"
-                    checked={severities.has(severity)}
-                    onChange={() => toggle(severity)}
-                  />
-                  {severity} {count}
-                </label>
-              );
-            })}
-          </div>
-        )}
+        <Filter open={open} document={document} backup={backup} />
       </div>
       {notes.map((note) => (
         <FindingNote

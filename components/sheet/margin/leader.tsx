@@ -1,12 +1,35 @@
 'use client';
 
-import { useEffect, useState, type RefObject } from 'react';
+import { useEffect, useMemo, useState, type RefObject } from 'react';
 import { useStore } from 'reactflow';
-import type { Scene } from '@/diagram/layout/scene';
-import { middle } from '../canvas/pick';
+import { textWidth } from '@/diagram/layout/lettering';
+import type { Scene, ScenePart } from '@/diagram/layout/scene';
 import { px } from '../canvas/units';
 import { useView } from '../view';
+import { leaderPath, type Rect } from './leader-path';
 import type { MarkedNote } from './notes';
+
+/** The pencil circle about a part, 1/100 mm. */
+const circleOf = (part: ScenePart): Rect => ({
+  x: part.x - 330,
+  y: part.y - 280,
+  width: part.width + 660,
+  height: part.height + 560,
+});
+
+/** Parts and lettering that a leader should not run through; not the part it leads to. */
+function takenBy(scene: Scene, own: ScenePart | undefined): Rect[] {
+  const parts = scene.parts.filter((part) => part !== own);
+  const texts = [...parts.flatMap((part) => part.texts), ...scene.runs.flatMap((run) => run.texts)];
+  return [
+    ...parts,
+    ...texts.map(({ x, y, text, size, bold, anchor }) => {
+      const width = textWidth(text, size, bold);
+      const left = anchor === 'end' ? x - width : anchor === 'middle' ? x - width / 2 : x;
+      return { x: left, y: y - size, width, height: size };
+    }),
+  ];
+}
 
 interface LeaderProps {
   box: RefObject<HTMLDivElement | null>;
@@ -37,15 +60,22 @@ export function Leader({ box, scene, notes }: LeaderProps) {
       window.removeEventListener('resize', look);
     };
   }, [box, inHand, notes]);
+  const taken = useMemo(() => takenBy(scene, part), [scene, part]);
   if (!from || !part) return null;
   const [x = 0, y = 0, zoom = 1] = view.split(' ').map(Number);
-  const at = middle(part);
-  const end = { x: px(at.x + part.width / 2 + 330) * zoom + x, y: px(at.y) * zoom + y };
-  if (end.x > from.x || end.x < 0 || end.y < 0 || end.y > (box.current?.clientHeight ?? 0)) return null;
+  const onScreen = (rect: Rect): Rect => ({
+    x: px(rect.x) * zoom + x,
+    y: px(rect.y) * zoom + y,
+    width: px(rect.width) * zoom,
+    height: px(rect.height) * zoom,
+  });
+  const circle = onScreen(circleOf(part));
+  if (circle.x + circle.width > from.x || circle.x < 0 || circle.y < 0 || circle.y > (box.current?.clientHeight ?? 0)) return null;
+  const points = leaderPath(from, circle, taken.map(onScreen));
   return (
     <svg className="pointer-events-none absolute inset-0 h-full w-full" aria-hidden="true" style={{ zIndex: 5 }}>
       <path
-        d={`M${from.x} ${from.y}L${from.x - 18} ${from.y}L${Math.max(end.x + 12, from.x - 40)} ${end.y}L${end.x} ${end.y}`}
+        d={`M${points.map((point) => `${point.x} ${point.y}`).join('L')}`}
         fill="none"
         stroke="var(--red)"
         strokeWidth={1.2}

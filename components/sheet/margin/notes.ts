@@ -59,6 +59,16 @@ const ORDER = { danger: 0, defect: 1, advice: 2 } as const;
 export interface NoteFilter {
   condition: Condition;
   severities: ReadonlySet<Finding['severity']>;
+  /** id of a place; null: all of them */
+  room: string | null;
+}
+
+/** Places that a finding speaks of: those of its parts and of what its wires end at. */
+export function placesOf(doc: Installation, finding: Pick<Finding, 'parts' | 'wires'>): Set<string> {
+  const wires = new Set(finding.wires);
+  const ids = new Set(finding.parts);
+  for (const { id, from, to } of doc.wires) if (wires.has(id)) ids.add(from[0]).add(to[0]);
+  return new Set(doc.parts.flatMap((part) => (ids.has(part.id) && part.place ? [part.place] : [])));
 }
 
 /** Findings as notes, the gravest first; those that somebody answers for come last and bear no letter on the sheet. */
@@ -66,13 +76,14 @@ export function notesOf(
   findings: readonly Finding[],
   doc: Installation,
   scene: Scene,
-  { condition, severities }: NoteFilter,
+  { condition, severities, room }: NoteFilter,
 ): MarkedNote[] {
   const drawn = new Set(scene.parts.map((part) => part.id));
   const open = findings.filter((finding) => !finding.silenced);
   const sorted = [...open].sort((a, b) => ORDER[a.severity] - ORDER[b.severity]);
   return sorted
     .filter((finding) => severities.has(finding.severity) && holdsIn(finding, condition))
+    .filter((finding) => room === null || placesOf(doc, finding).has(room))
     .map((finding, i) => {
       const parts = anchors(doc, drawn, finding);
       return { key: keyOf(finding), letter: letterOf(i), finding, parts, grid: gridOf(scene, parts[0]) };

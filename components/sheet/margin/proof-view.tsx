@@ -1,5 +1,8 @@
 'use client';
 
+import Link from 'next/link';
+import { useParams } from 'next/navigation';
+import { rehearsalHref } from '@/components/rehearsal/address';
 import type { FaultWalk } from '@/diagram/circuit/fault-types';
 import { nameOf } from '@/diagram/document/names';
 import type { Installation } from '@/diagram/document/schema';
@@ -17,6 +20,7 @@ export function ProofView({ walk, document }: { walk: FaultWalk; document: Insta
   const names = (ids: readonly string[]) =>
     ids.flatMap((id) => document.parts.find((part) => part.id === id) ?? []).map((part) => nameOf(document, part));
   const live = names(walk.live);
+  const jobId = useParams<{ jobId?: string }>()?.jobId;
   return (
     <div className="mt-2 border-t border-hair pt-2">
       <p className="text-small text-grey">Fault walk, {walk.condition}</p>
@@ -40,6 +44,14 @@ export function ProofView({ walk, document }: { walk: FaultWalk; document: Insta
           Stays live: {live.slice(0, 8).join(', ')}
           {live.length > 8 ? ` and ${live.length - 8} more` : ''}.
         </p>
+      )}
+      {jobId && (
+        <Link
+          href={rehearsalHref(jobId, walk.faults, walk.condition)}
+          className="mt-1 inline-block text-ink underline underline-offset-[3px]"
+        >
+          Rehearse it
+        </Link>
       )}
     </div>
   );

@@ -109,7 +109,7 @@ describe('findings as notes', () => {
     });
     const scene = buildScene(broken, 'overview');
     const { findings } = examine(broken);
-    const all = { condition: 'all', severities: new Set(['danger', 'defect', 'advice'] as const) } as const;
+    const all = { room: null, condition: 'all', severities: new Set(['danger', 'defect', 'advice'] as const) } as const;
     const notes = notesOf(findings, broken, scene, all);
     const earth = notes.find((note) => note.finding.rule === 'missing-earth')!;
     expect(notes[0]!.letter).toBe('a');

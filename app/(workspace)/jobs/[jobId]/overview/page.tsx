@@ -7,7 +7,12 @@ import { found, jobIdIn } from '../../../found';
 
 export const metadata: Metadata = { title: 'Overview' };
 
-export default async function OverviewPage({ params }: { params: Promise<{ jobId: string }> }) {
+interface Props {
+  params: Promise<{ jobId: string }>;
+  searchParams: Promise<{ preview?: string }>;
+}
+
+export default async function OverviewPage({ params, searchParams }: Props) {
   const actor = await requireActor();
   const jobId = await jobIdIn(params);
   const [view, job] = await found(Promise.all([openDrawing(actor, { jobId }), readJob(actor, jobId)]));
@@ -17,6 +22,7 @@ export default async function OverviewPage({ params }: { params: Promise<{ jobId
       view={view}
       me={{ id: actor.personId, initials: actor.initials }}
       hoursWanted={job.hoursWanted}
+      preview={(await searchParams).preview === 'draft'}
     />
   );
 }
