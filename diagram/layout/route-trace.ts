@@ -35,8 +35,10 @@ export function traceWay(
       if (edge < 0 || !free(occupancy, edge, isLevel(direction), net)) return null;
       const next = nextNode(grid, node, direction);
       const over = grid.covered[next]!;
-      const mayCover = allowed.has(over) || (over === CROSSABLE && !isLevel(direction)) || i === points.length - 1;
-      if (!mayCover || !joined(occupancy, occupancy.corner[next]!, net)) return null;
+      // several nets may end at one terminal, and two boxes may touch there
+      const arrives = next === goal && i === points.length - 1;
+      const mayCover = allowed.has(over) || (over === CROSSABLE && !isLevel(direction));
+      if (!arrives && !(mayCover && joined(occupancy, occupancy.corner[next]!, net))) return null;
       nodes.push(next);
     }
     // a bend on another conductor would look like a joint
