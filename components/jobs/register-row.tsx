@@ -94,6 +94,15 @@ export function RegisterRow({ job, today, mine, inHand, unfolded, sheet, mayEdit
               <b>Set of sheets{job.revision === '-' ? '' : `, revision ${job.revision}`}</b>
               <span className="text-grey max-[900px]:hidden">Enter opens the sheet in hand; 1 to 3 opens that sheet; arrows choose; Esc folds</span>
               <span className="ml-auto flex gap-4">
+                {(['plan', 'photographs'] as const).map((sheet) => (
+                  <Link
+                    key={sheet}
+                    href={`/jobs/${job.id}/${sheet}`}
+                    className="text-ink underline underline-offset-[3px] pointer-coarse:min-h-11"
+                  >
+                    {sheet === 'plan' ? 'Plan' : 'Photographs'}
+                  </Link>
+                ))}
                 {mayEdit && (
                   <Link href={`/jobs/${job.id}`} className="text-ink underline underline-offset-[3px] pointer-coarse:min-h-11">
                     Edit the job

@@ -5,7 +5,7 @@ import { Button } from '@/components/ui/button';
 import { splitKey, valueAt } from '@/diagram/commands/merge';
 import { ratingText } from '@/diagram/commands/rating-text';
 import { KIND_NAME } from '@/diagram/document/kinds';
-import type { Installation, Part } from '@/diagram/document/schema';
+import { ARRANGEMENTS, type Installation, type Part } from '@/diagram/document/schema';
 import { useSheet, type Me, type OpenDrawing } from './use-drawing';
 
 const FIELD_NAME: Record<string, string> = {
@@ -25,7 +25,9 @@ function nameOfKey(docs: readonly Installation[], key: string): string {
     .map((doc) => doc.parts.find((candidate) => candidate.id === id))
     .find((found) => found !== undefined);
   const called = part ? `${part.ref ?? part.label ?? KIND_NAME[part.kind]}` : id;
-  if (name === 'overview' || name === 'connections') return `Place of ${called} on the ${name}`;
+  if ((ARRANGEMENTS as readonly string[]).includes(name)) return `Place of ${called} on the ${name}`;
+  if (name === 'plans')
+    return `Plan: ${docs.map((doc) => doc.plans?.find((plan) => plan.id === id)?.name).find(Boolean) ?? id}`;
   if (name === 'parts') return `${called}${part?.ref ? `, ${KIND_NAME[part.kind]}` : ''}`;
   if (name === 'survey')
     return `Survey: ${docs.map((doc) => doc.survey?.find((row) => row.id === id)?.name).find(Boolean) ?? id}`;
