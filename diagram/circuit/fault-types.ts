@@ -54,6 +54,8 @@ export interface FaultStep {
  */
 export interface FaultWalk {
   condition: string;
+  /** in the order in which they were put in */
+  faults: readonly Fault[];
   steps: FaultStep[];
   /** V, the greatest that stands at the faulted part's case before anything opens */
   touchVolts: number;

@@ -49,7 +49,7 @@ function requireSupply(graph: Graph, condition: Condition, faults: readonly Faul
 /** The home with all its loads on, two-way switches so that the faulted point is fed. */
 function startingStand(graph: Graph, evaluated: Evaluated, faults: readonly Fault[]): Standing {
   const rounds = standingsOf(graph, evaluated);
-  return (rounds.find(({ points }) => points.includes(faults[0]!.at)) ?? rounds[0]!).standing;
+  return (rounds.find(({ points }) => faults.length > 0 && points.includes(faults[0]!.at)) ?? rounds[0]!).standing;
 }
 
 function withOpened(graph: Graph, standing: Standing, device: string): Standing {
@@ -69,6 +69,7 @@ function isDead(graph: Graph, standing: Standing, node: number): boolean {
  * watch
  * their currents; the one that must open first opens, as late as its curve allows, and the home is solved again, until
  * nothing more must open. What a device has endured already counts towards its time.
+ * @param faults may be none where the drawing itself holds a short circuit: then that is walked
  * @param condition name of the condition; the first where not given
  * @throws FaultError where the fault, the condition or the supply's data do not allow it
  */
@@ -78,9 +79,9 @@ export function walkFaults(
   faults: readonly Fault[],
   condition?: string,
 ): FaultWalk {
-  if (faults.length === 0) throw new FaultError('there is no fault to walk');
   const evaluated = conditionNamed(evaluation, condition);
   const { standing, joints } = withJoints(graph, evaluated, startingStand(graph, evaluated, faults));
+  if (faults.length + joints.length === 0) throw new FaultError('there is no fault to walk');
   return walkFrom(graph, standing, faults, {}, joints);
 }
 
@@ -140,24 +141,26 @@ export function walkFrom(
       standing = withOpened(graph, standing, part.id);
       now = solveStanding(graph, standing);
       add({ event: `${nameOf(graph.document, part)} opens`, part: part.id, amps, astrayAmps, orElse }, inserted);
-      if (!cleared && inserted.extra >= 0 && isOver(graph, inserted, standing, steps[steps.length - 1]!))
+      const flows = inserted.extra >= 0 || inserted.edge !== undefined;
+      if (!cleared && flows && isOver(graph, inserted, standing, steps[steps.length - 1]!))
         cleared = { by: part.id, at: t };
     }
   };
 
   let last: string | null = null;
   let touchVolts = 0;
+  let first: FaultStep | undefined;
+  let cleared: { by: string; at: number } | null = null;
   for (const joint of joints) {
     const inserted = asInserted(joint, standing);
     const before = opened.size;
     add({ event: joint.event, part: joint.part }, inserted);
+    first ??= steps[steps.length - 1]!;
     touchVolts = Math.max(touchVolts, steps[steps.length - 1]!.touchVolts);
-    settle(inserted);
+    cleared = settle(inserted);
     if (opened.size === before) add({ event: 'no device opens', part: joint.part }, inserted);
     last = [...opened].at(-1) ?? null;
   }
-  let first: FaultStep | undefined;
-  let cleared: { by: string; at: number } | null = null;
   let began = 0;
   for (const fault of faults) {
     const inserted = insertFault(graph, fault, standing, now);
@@ -177,6 +180,7 @@ export function walkFrom(
   const end = steps[steps.length - 1]!;
   return {
     condition: start.condition.name,
+    faults,
     steps,
     touchVolts: Math.max(touchVolts, first?.touchVolts ?? 0),
     faultAmps: first?.faultAmps ?? 0,

@@ -4,14 +4,15 @@ import { isPoint } from '../terminals/roles-of-parts';
 import type { Context } from './context';
 import type { Finding } from './types';
 
-/** The fault walk that proves a finding: what to put in, and in which condition to look. */
+/** The fault walk that proves a finding: what to put in, and in which condition to look; nothing where the drawing is the fault. */
 export interface Shown {
   faults: Fault[];
   condition: string;
 }
 
 /** Which fault shows what a rule warns of; rules that no fault shows are left out. */
-const SHOWS: Readonly<Record<string, FaultKind | 'supply-neutral'>> = {
+const SHOWS: Readonly<Record<string, FaultKind | 'supply-neutral' | 'as-drawn'>> = {
+  'short-circuit': 'as-drawn',
   'missing-earth': 'line-to-case',
   'no-main-earth': 'line-to-case',
   'switched-earth': 'line-to-case',
@@ -46,6 +47,8 @@ function pointsOf({ graph, sections }: Context, finding: Finding): Part[] {
   return [...named, ...wired, ...behind].filter(isPoint);
 }
 
+const edgeWire = ({ graph }: Context, edge: number): string => graph.edges[edge]!.wire?.id ?? '';
+
 /** Fed in that condition: a fault at a dead point shows nothing. */
 function isFed({ evaluated }: Context, condition: string, part: Part): boolean {
   return evaluated.find((each) => each.condition.name === condition)?.points.get(part.id)?.source != null;
@@ -61,6 +64,13 @@ export function showFault(context: Context, finding: Finding): Shown | null {
   if (kind === undefined) return null;
   const conditions =
     finding.conditions.length > 0 ? finding.conditions : context.evaluated.map(({ condition }) => condition.name);
+  // The drawing holds the fault itself: nothing is put in. In one position of two-way switches only, no standing has it.
+  if (kind === 'as-drawn') {
+    const isHere = ({ condition, crossed }: Context['evaluated'][number]) =>
+      conditions.includes(condition.name) && crossed.some(({ edge }) => finding.wires.includes(edgeWire(context, edge)));
+    const here = context.evaluated.find(isHere);
+    return here ? { faults: [], condition: here.condition.name } : null;
+  }
   if (kind === 'supply-neutral') {
     const supply = context.parts('supply')[0];
     return supply ? { faults: [{ kind: 'neutral-open', at: supply.id }], condition: conditions[0]! } : null;

@@ -56,6 +56,15 @@ describe('a danger is shown by the fault that proves it', () => {
       .document();
     expect(shown(doc, 'earth-neutral-joined').touchVolts).toBeGreaterThan(200);
   });
+  test('short-circuit: what is drawn is walked, with nothing put in', () => {
+    const walk = shown(smallHome().line('JL11', 'JN11').document(), 'short-circuit');
+    expect(walk.steps.map(({ event }) => event)).toEqual([
+      'as drawn, line and neutral are joined at joint in Study',
+      'Q11 opens',
+    ]);
+    expect(walk).toMatchObject({ cleared: true, by: 'Q11', clearedAfter: 0.1, dark: ['E1', 'X1'] });
+    expect(walk.faultAmps).toBeGreaterThan(300);
+  });
   test('every finding of severity danger in the drawings at hand has its walk, or no fault could show it', () => {
     const notByFault = new Set([
       'mixed-feeds',
