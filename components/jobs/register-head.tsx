@@ -61,7 +61,7 @@ export function RegisterHead(props: RegisterHeadProps) {
         value={filter}
         segments={[
           { value: 'all', label: 'All' },
-          { value: 'mine', label: `Mine ${counts.mine}` },
+          { value: 'mine', label: `Waits for me ${counts.mine}` },
           { value: 'due', label: `Due this week ${counts.due}` },
           { value: 'archived', label: 'Archived' },
         ]}

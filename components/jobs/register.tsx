@@ -128,7 +128,7 @@ function NoJob({ mayCreate }: { mayCreate: boolean }) {
 
 const nothingIn: Record<JobQuery['filter'], string> = {
   all: 'Nothing here.',
-  mine: 'No job is yours.',
+  mine: 'Nothing waits for you.',
   due: 'Nothing is due within a week.',
   archived: 'The archive is empty.',
 };

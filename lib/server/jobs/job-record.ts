@@ -66,6 +66,9 @@ function waitsFor(record: JobRecord): string {
   return record.letter === null ? 'a first revision' : 'nothing';
 }
 
+/** The same as a condition of a query over `JOB_FROM`: a job of which it is false has "nothing" in that column. */
+export const SOMETHING_WAITS = `(d.rev = 0 or r.letter is null or coalesce(e.danger + e.defect, 0) > 0)`;
+
 export const presentRow = (record: JobRecord): JobRow => ({
   id: record.id,
   number: record.number,

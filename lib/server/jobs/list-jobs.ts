@@ -3,7 +3,7 @@ import { QueryTypes } from 'sequelize';
 import type { Actor } from '@/lib/server/actor';
 import { likeText } from '@/lib/server/clients/list-clients';
 import { examineSoon } from '@/lib/server/drawings/background';
-import { JOB_FROM, JOB_SELECT, presentRow, visibleTo, type JobRecord } from '@/lib/server/jobs/job-record';
+import { JOB_FROM, JOB_SELECT, SOMETHING_WAITS, presentRow, visibleTo, type JobRecord } from '@/lib/server/jobs/job-record';
 import { authorize } from '@/lib/server/policies';
 import type { JobPage, JobQuery } from '@/lib/shared/jobs';
 import { sequelize } from '@/models';
@@ -22,7 +22,7 @@ const ORDER: Record<JobQuery['sort'], string> = {
 
 const FILTER: Record<JobQuery['filter'], string> = {
   all: 'j.archived_at is null',
-  mine: `j.archived_at is null and (j.created_by = $2 or last.person_id = $2 or exists (
+  mine: `j.archived_at is null and ${SOMETHING_WAITS} and (j.created_by = $2 or last.person_id = $2 or exists (
            select from job_people g where g.team_id = j.team_id and g.job_id = j.id and g.person_id = $2))`,
   due: `j.archived_at is null and j.due < current_date + 7`,
   archived: 'j.archived_at is not null',
