@@ -27,6 +27,8 @@ export default {
         ':root': variables(light, 'light'),
         ':root.dark': variables(dark, 'dark'),
         '@media (prefers-color-scheme: dark)': { ':root:not(.light)': variables(dark, 'dark') },
+        // Print is always the light palette, whatever the screen.
+        '@media print': { ':root:root': variables(light, 'light') },
       }),
     ),
   ],

@@ -107,50 +107,53 @@ export function SchedulesSheet({ view, me, schedule, way }: SchedulesSheetProps)
 
   const findings = worked?.findings.length ?? 0;
   return (
-    <SheetFrame
-      tabs={jobTabs(view.jobId)}
-      current="schedules"
-      who={me.initials}
-      kind={`Schedules, ${open}`}
-      saveState={<SaveStateView drawing={drawing} />}
-      strip={<TroubleStrip drawing={drawing} />}
-      titleBlock={titleBlock}
-      practice={{ id: document.practice, supply: document.supply }}
-      keys={keys}
-      marginLabel={findings === 1 ? '1 finding' : `${findings} findings`}
-      margin={
-        <SchedulesMargin
-          desk={desk}
-          drawing={drawing}
-          state={state}
-          document={document}
-          me={me}
-          jobId={view.jobId}
-          mayEdit={rights.edit}
-        />
-      }
-      tools={
-        rights.edit && (
-          <Button className="min-h-11" onClick={() => store.getState().undo()}>
-            Undo
-          </Button>
-        )
-      }
-      foot={<SchedulesFoot desk={desk} drawing={drawing} state={state} mayEdit={rights.edit} />}
-    >
-      {state.failure ? (
-        <h1 className="p-4 text-title font-bold">{SCHEDULE_NAMES[open]}</h1>
-      ) : (
-        <SchedulesBody
-          desk={desk}
-          worked={worked}
-          drawing={store}
-          document={document}
-          jobId={view.jobId}
-          mayEdit={rights.edit}
-          onTurn={turn}
-        />
-      )}
-    </SheetFrame>
+    <>
+      <style>{'@page { size: A4 landscape; margin: 8mm; }'}</style>
+      <SheetFrame
+        tabs={jobTabs(view.jobId)}
+        current="schedules"
+        who={me.initials}
+        kind={`Schedules, ${open}`}
+        saveState={<SaveStateView drawing={drawing} />}
+        strip={<TroubleStrip drawing={drawing} />}
+        titleBlock={titleBlock}
+        practice={{ id: document.practice, supply: document.supply }}
+        keys={keys}
+        marginLabel={findings === 1 ? '1 finding' : `${findings} findings`}
+        margin={
+          <SchedulesMargin
+            desk={desk}
+            drawing={drawing}
+            state={state}
+            document={document}
+            me={me}
+            jobId={view.jobId}
+            mayEdit={rights.edit}
+          />
+        }
+        tools={
+          rights.edit && (
+            <Button className="min-h-11" onClick={() => store.getState().undo()}>
+              Undo
+            </Button>
+          )
+        }
+        foot={<SchedulesFoot desk={desk} drawing={drawing} state={state} mayEdit={rights.edit} />}
+      >
+        {state.failure ? (
+          <h1 className="p-4 text-title font-bold">{SCHEDULE_NAMES[open]}</h1>
+        ) : (
+          <SchedulesBody
+            desk={desk}
+            worked={worked}
+            drawing={store}
+            document={document}
+            jobId={view.jobId}
+            mayEdit={rights.edit}
+            onTurn={turn}
+          />
+        )}
+      </SheetFrame>
+    </>
   );
 }

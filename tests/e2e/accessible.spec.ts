@@ -46,6 +46,12 @@ for (const scheme of ['light', 'dark'] as const) {
       const survey = await page.getByRole('link', { name: /1 Survey/ }).getAttribute('href');
       await openPage(page, survey!);
       faults.push(...(await faultsOf(page, 'survey')));
+      await page.goto(survey!.replace(/survey$/, 'schedules'));
+      await expect(page.getByRole('table', { name: 'Schedule of ways' })).toBeVisible();
+      faults.push(...(await faultsOf(page, 'schedules')));
+      await openPage(page, survey!.replace(/survey$/, 'rehearsal'));
+      await page.locator('[role=application][aria-busy=false]').waitFor();
+      faults.push(...(await faultsOf(page, 'rehearsal')));
       for (const each of contexts.values()) await each.context().close();
       expect(faults).toEqual([]);
     });
