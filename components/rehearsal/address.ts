@@ -1,6 +1,6 @@
 import type { Fault } from '@/diagram/circuit/fault-types';
 import { faultOf, faultText } from '@/diagram/rehearsal/fault-places';
-import type { ConditionName, Stance } from '@/diagram/rehearsal/stance';
+import type { Stance } from '@/diagram/rehearsal/stance';
 
 /**
  * A rehearsal as the address writes it, so that it survives a reload and can be shown to others. Nothing of it is stored
@@ -10,7 +10,7 @@ export interface Address {
   /** null: as it stands before anybody has touched it */
   stance: Stance | null;
   /** laid over the stance once the home is known: what a link from a finding asks for */
-  condition: ConditionName | null;
+  condition: string | null;
   faults: readonly Fault[];
   /** index of the station shown; null: where a walk begins */
   station: number | null;
@@ -19,7 +19,7 @@ export interface Address {
   place: string | null;
 }
 
-const CONDITIONS: readonly string[] = ['mains', 'outage', 'main-off', 'isolated'];
+const CONDITION = /^(mains|outage|main-off|isolated)(\/[A0B]{1,20})?$/;
 const ID = /^[A-Za-z0-9_.:-]{1,64}$/;
 const idIn = (text: string | null): string | null => (text !== null && ID.test(text) ? text : null);
 const listIn = (text: string | null): string[] => (text ?? '').split(',').filter(Boolean);
@@ -30,13 +30,12 @@ export function readAddress(query: URLSearchParams): Address {
     const [id, setting] = text.split('~');
     return id && setting && ID.test(id) ? [[id, setting]] : [];
   });
-  // A changeover's position in a condition's name ("outage/B") is that of the drawing's own changeovers: set by hand here.
-  const wanted = query.get('condition')?.split('/')[0] ?? '';
+  const wanted = query.get('condition') ?? '';
   const station = Number(query.get('step') ?? NaN);
   const supply = query.get('supply') === 'dead' ? 'dead' : 'live';
   return {
     stance: moved.length > 0 || supply === 'dead' ? { supply, moved: Object.fromEntries(moved) } : null,
-    condition: CONDITIONS.includes(wanted) ? (wanted as ConditionName) : null,
+    condition: CONDITION.test(wanted) ? wanted : null,
     faults: listIn(query.get('fault')).flatMap((text) => faultOf(text) ?? []),
     station: Number.isInteger(station) && station > 0 ? station - 1 : null,
     hand: idIn(query.get('hand')),

@@ -3,7 +3,7 @@
 import { Segmented } from '@/components/ui/segmented';
 import { CONDITION_WORDS } from '@/diagram/rehearsal/say-change';
 import type { ConditionName } from '@/diagram/rehearsal/stance';
-import { useRehearsal, useRehearsalStore } from './state';
+import { conditionShown, useRehearsal, useRehearsalStore } from './state';
 
 const ONLY_MAINS: readonly ConditionName[] = ['mains'];
 
@@ -11,7 +11,7 @@ const ONLY_MAINS: readonly ConditionName[] = ['mains'];
 export function ConditionsRow({ named = true }: { named?: boolean }) {
   const store = useRehearsalStore();
   const conditions = useRehearsal((state) => state.answer?.conditions ?? ONLY_MAINS);
-  const condition = useRehearsal((state) => state.condition ?? state.answer?.condition ?? 'mains');
+  const condition = useRehearsal((state) => conditionShown(state));
   return (
     <Segmented
       label="Condition"

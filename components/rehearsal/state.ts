@@ -53,6 +53,10 @@ export function stationIndex(state: Pick<RehearsalState, 'answer' | 'faults' | '
 export const stationIn = (state: Pick<RehearsalState, 'answer' | 'faults' | 'station'>): Station | null =>
   walkIn(state)?.stations[stationIndex(state)] ?? null;
 
+/** The condition that is asked for, else the one that is answered. */
+export const conditionShown = ({ condition, answer }: Pick<RehearsalState, 'condition' | 'answer'>): ConditionName =>
+  (condition?.split('/')[0] as ConditionName | undefined) ?? answer?.condition ?? 'mains';
+
 export const createRehearsalStore = (address: Address): RehearsalStore =>
   createStore<RehearsalState>((set, get) => {
     const stanceNow = (): Stance => get().stance ?? get().answer?.stance ?? { supply: 'live', moved: {} };

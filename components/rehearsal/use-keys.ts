@@ -9,7 +9,7 @@ import type { Installation } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
 import { faultsAt } from '@/diagram/rehearsal/fault-places';
 import { nextSetting, settingsOf } from '@/diagram/rehearsal/settings';
-import { stationIndex, walkIn, type RehearsalStore } from './state';
+import { conditionShown, stationIndex, walkIn, type RehearsalStore } from './state';
 
 export const REHEARSAL_KEYS: readonly KeyHelp[] = [
   { keys: ['↑', '↓', '←', '→'], does: 'follow the conductor; in a walk left and right step' },
@@ -50,9 +50,9 @@ export function useRehearsalKeys({ store, document, conductors, scene, play, oth
   const letters = useSingleKeysOn();
   useSingleKeys({
     c() {
-      const { answer, condition, setCondition } = store.getState();
+      const { answer, setCondition } = store.getState();
       if (!answer) return;
-      const now = answer.conditions.indexOf(condition ?? answer.condition);
+      const now = answer.conditions.indexOf(conditionShown(store.getState()));
       setCondition(answer.conditions[(now + 1) % answer.conditions.length]!);
     },
     f() {

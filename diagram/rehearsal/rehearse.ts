@@ -6,7 +6,7 @@ import { readFigures, type Figures } from './figures';
 import { isolationOf, type Isolation } from './isolation';
 import { restOf } from './rest';
 import { isOpenSetting, type Settings } from './settings';
-import { conditionOf, handlesOf, inCondition, type ConditionName, type Stance } from './stance';
+import { conditionOf, handlesOf, inCondition, withSettings, type ConditionName, type Stance } from './stance';
 import { standingIn } from './standing';
 import { openSetting, stillLive, type StillLive } from './still-live';
 import { unheldIn, walkOf, type Unheld, type WalkOutcome } from './walk';
@@ -15,8 +15,8 @@ import { unheldIn, walkOf, type Unheld, type WalkOutcome } from './walk';
 export interface Question {
   /** null: as it stands before anybody has touched it */
   stance: Stance | null;
-  /** the condition that the address asks for; laid over the stance */
-  condition?: ConditionName;
+  /** a condition to be laid over the stance; with a changeover its positions may follow, as the engine names them: `outage/B` */
+  condition?: string;
   faults: readonly Fault[];
   hand: string | null;
 }
@@ -50,7 +50,10 @@ export function createRehearsal(document: Installation): (question: Question) =>
     let stance: Stance = asked ?? { supply: 'live', moved: {} };
     // An address may name what is no longer drawn.
     stance = { ...stance, moved: Object.fromEntries(Object.entries(stance.moved).filter(([id]) => id in rest)) };
-    if (wanted && handles.conditions.includes(wanted)) stance = inCondition(handles, rest, stance, wanted);
+    const [base, sides = ''] = (wanted ?? '').split('/') as [ConditionName, string?];
+    if (handles.conditions.includes(base)) stance = inCondition(handles, rest, stance, base);
+    const turned = handles.changeovers.flatMap(({ id }, i) => (sides[i] ? [[id, sides[i]] as const] : []));
+    if (turned.length > 0) stance = withSettings(stance, rest, Object.fromEntries(turned));
     const settings = { ...rest, ...stance.moved };
     const condition = conditionOf(handles, rest, stance);
     const standing = standingIn(graph, settings, stance.supply, condition);

@@ -20,8 +20,8 @@ export type ConditionName = 'mains' | 'outage' | 'main-off' | 'isolated';
 /** The handles by which the conditions are made. */
 export interface Handles {
   mainSwitch: Part | undefined;
-  /** inverters with a battery, whether on or off, by designation */
-  backups: Part[];
+  /** by designation, as the names of conditions have their positions */
+  changeovers: Part[];
   /** devices between an inverter and its batteries */
   batteryDevices: Part[];
   /** the conditions of this home, in the order in which one goes through them */
@@ -56,7 +56,8 @@ export function handlesOf(graph: Graph): Handles {
   // Every battery must have a handle of its own before one may say that it is isolated.
   const each = backups.every((part) => devicesToBattery(graph, part).length > 0);
   if (backups.length > 0 && mainSwitch && each) conditions.push('isolated');
-  return { mainSwitch, backups, batteryDevices, conditions };
+  const changeovers = [...graph.parts.values()].filter(({ kind }) => kind === 'changeover').sort(byDesignation);
+  return { mainSwitch, changeovers, batteryDevices, conditions };
 }
 
 const isOpen = ({ moved }: Stance, rest: Settings, part: Part): boolean => (moved[part.id] ?? rest[part.id]) === 'open';

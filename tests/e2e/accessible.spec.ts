@@ -49,7 +49,7 @@ for (const scheme of ['light', 'dark'] as const) {
       await page.goto(survey!.replace(/survey$/, 'schedules'));
       await expect(page.getByRole('table', { name: 'Schedule of ways' })).toBeVisible();
       faults.push(...(await faultsOf(page, 'schedules')));
-      await openPage(page, survey!.replace(/survey$/, 'rehearsal'));
+      await page.goto(survey!.replace(/survey$/, 'rehearsal'));
       await page.locator('[role=application][aria-busy=false]').waitFor();
       faults.push(...(await faultsOf(page, 'rehearsal')));
       for (const each of contexts.values()) await each.context().close();

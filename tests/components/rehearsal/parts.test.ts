@@ -51,7 +51,7 @@ describe('the address of a rehearsal', () => {
   it('of a finding names its condition and its faults', () => {
     const href = rehearsalHref('j1', [{ kind: 'line-to-case', at: 'E1' }], 'outage/B');
     expect(href).toBe('/jobs/j1/rehearsal?condition=outage%2FB&fault=line-to-case~E1');
-    expect(readAddress(new URLSearchParams(href.split('?')[1])).condition).toBe('outage');
+    expect(readAddress(new URLSearchParams(href.split('?')[1])).condition).toBe('outage/B');
   });
 });
 

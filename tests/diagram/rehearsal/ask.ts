@@ -1,11 +1,10 @@
 import type { Fault } from '@/diagram/circuit/fault-types';
 import type { Installation } from '@/diagram/document/schema';
 import { createRehearsal, type Rehearsed } from '@/diagram/rehearsal/rehearse';
-import type { ConditionName } from '@/diagram/rehearsal/stance';
 import type { Walk } from '@/diagram/rehearsal/walk';
 
 interface Put {
-  condition?: ConditionName;
+  condition?: string;
   supply?: 'live' | 'dead';
   moved?: Record<string, string>;
   faults?: Fault[];

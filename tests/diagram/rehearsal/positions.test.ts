@@ -138,6 +138,8 @@ describe('every switch works what it works', () => {
     const outage = (state: string) => fedIn(ask(doc, { supply: 'dead', moved: { Q9: state } }));
     expect([outage('A'), outage('0'), outage('B')]).toEqual([[], [], ['E1']]);
     expect(fedIn(ask(doc))).toEqual(['E1']);
+    // As the engine names the condition of a finding.
+    expect(ask(doc, { condition: 'outage/B' }).stance).toEqual({ supply: 'dead', moved: { Q9: 'B' } });
   });
 
   test('what is no longer drawn is let go', () => {
