@@ -4,7 +4,7 @@ import type { Graph } from '../terminals/graph';
 import { pathTo, reaches } from '../terminals/reach';
 import { isOvercurrent, isPoint, isResidual } from '../terminals/roles-of-parts';
 import type { Source } from './conditions';
-import type { Evaluated, Evaluation } from './evaluate';
+import { devicesOn, type Evaluated, type Evaluation } from './evaluate';
 import { chargeWatts, takenBy } from './loads';
 
 /** What draws current: a lamp, fan, appliance or socket, or an inverter's input with its charger. */
@@ -49,15 +49,6 @@ function load(part: Part, voltage: number, taken: Set<string>): Pick<Drawn, 'wat
   const amps = apparentCurrentA({ va: wants.watts / wants.pf, voltage });
   return { watts: wants.watts, amps, startAmps: amps * wants.surge, known: true };
 }
-
-const devicesOn = (graph: Graph, edges: readonly number[]): string[] => [
-  ...new Set(
-    edges.flatMap((number) => {
-      const { kind, part } = graph.edges[number]!;
-      return kind === 'device' || kind === 'changeover' || kind === 'bypass' || kind === 'through' ? [part!] : [];
-    }),
-  ),
-];
 
 /** The input of an inverter in a condition on mains; null where no mains line reaches it. */
 function inputOf(graph: Graph, inverter: Part, { condition, stands }: Evaluated, voltage: number): Drawn | null {

@@ -1,6 +1,6 @@
 import { Buckets } from './buckets';
 import { NONE, buildMesh, twice, type Mesh } from './mesh';
-import { FloatingNode, type Network } from './network';
+import { FloatingNode, REFERENCE, type Branches, type Network } from './network';
 
 /**
  * Complex nodal analysis of a network at one frequency. Homes are nearly trees, so that eliminating the node with the
@@ -28,10 +28,43 @@ export interface Factors {
 
 /** Eliminates all nodes but the held ones, the least busy first. @throws FloatingNode */
 export function eliminate(network: Network): Factors {
-  const { size } = network;
-  const mesh = buildMesh(network);
-  const held = new Uint8Array(size);
+  const held = new Uint8Array(network.size);
   network.held?.forEach((_, node) => (held[node] = 1));
+  return eliminateMesh(buildMesh(network), held);
+}
+
+/** Eliminates the nodes before `first`, and says what branches join the others then. @throws FloatingNode */
+export function eliminateTo(network: Network, first: number): { factors: Factors; left: Branches } {
+  const mesh = buildMesh(network);
+  const factors = eliminateMesh(mesh, new Uint8Array(network.size).fill(1, first));
+  const from: number[] = [];
+  const to: number[] = [];
+  const re: number[] = [];
+  const im: number[] = [];
+  const put = (a: number, b: number, yRe: number, yIm: number) => {
+    from.push(a);
+    to.push(b);
+    re.push(yRe);
+    im.push(yIm);
+  };
+  for (let a = first; a < network.size; a++) {
+    for (let h = mesh.head[a]!; h !== NONE; h = mesh.next[h]!)
+      if (mesh.to[h]! > a) put(a, mesh.to[h]!, mesh.re[h >> 1]!, mesh.im[h >> 1]!);
+    if (mesh.groundRe[a] !== 0 || mesh.groundIm[a] !== 0) put(a, REFERENCE, mesh.groundRe[a]!, mesh.groundIm[a]!);
+  }
+  return {
+    factors,
+    left: {
+      from: Int32Array.from(from),
+      to: Int32Array.from(to),
+      re: Float64Array.from(re),
+      im: Float64Array.from(im),
+    },
+  };
+}
+
+function eliminateMesh(mesh: Mesh, held: Uint8Array): Factors {
+  const size = held.length;
   const buckets = new Buckets(size);
   for (let n = 0; n < size; n++) if (!held[n]) buckets.put(n, mesh.degree[n]!);
 
@@ -133,6 +166,22 @@ export function substitute(
     }
     re[k] = vRe;
     im[k] = vIm;
+  }
+}
+
+/** Voltages between those of the held nodes, where no current is pushed in. */
+export function follow(factors: Factors, re: Float64Array, im: Float64Array): void {
+  const { order, count, rowStart, rowTo, rowRe, rowIm } = factors;
+  for (let i = count - 1; i >= 0; i--) {
+    let vRe = 0;
+    let vIm = 0;
+    for (let p = rowStart[i]!; p < rowStart[i + 1]!; p++) {
+      const j = rowTo[p]!;
+      vRe += rowRe[p]! * re[j]! - rowIm[p]! * im[j]!;
+      vIm += rowRe[p]! * im[j]! + rowIm[p]! * re[j]!;
+    }
+    re[order[i]!] = vRe;
+    im[order[i]!] = vIm;
   }
 }
 

@@ -35,8 +35,8 @@ export interface PointState {
   /** edges from the source's neutral to the point; empty without a way back */
   neutralEdges: number[];
   /** ids of the devices, from the source on, that its line and its neutral pass */
-  lineDevices: string[];
-  neutralDevices: string[];
+  lineDevices: readonly string[];
+  neutralDevices: readonly string[];
   /** id of the nearest overcurrent device in its line */
   overcurrent: string | null;
   /** id of the nearest residual-current device in its line */
@@ -72,13 +72,22 @@ export interface Evaluation extends Conditions {
   evaluated: Evaluated[];
 }
 
-const devicesOn = (graph: Graph, edges: readonly number[]): string[] => {
-  const ids = edges.flatMap((number) => {
+const known = new WeakMap<Graph, Map<string, readonly string[]>>();
+
+/** Ids of the devices that a path passes; one list for all paths through the same, so that readers look at each once. */
+export function devicesOn(graph: Graph, edges: readonly number[]): readonly string[] {
+  const ids = new Set<string>();
+  for (const number of edges) {
     const { kind, part } = graph.edges[number]!;
-    return kind === 'device' || kind === 'changeover' || kind === 'bypass' || kind === 'through' ? [part!] : [];
-  });
-  return [...new Set(ids)];
-};
+    if (kind === 'device' || kind === 'changeover' || kind === 'bypass' || kind === 'through') ids.add(part!);
+  }
+  const lists = known.get(graph) ?? new Map<string, readonly string[]>();
+  known.set(graph, lists);
+  const key = [...ids].join(' ');
+  const list = lists.get(key) ?? [...ids];
+  lists.set(key, list);
+  return list;
+}
 
 function stand(
   graph: Graph,

@@ -16,6 +16,9 @@ export interface Network {
   held?: ReadonlyMap<number, { re: number; im: number }>;
 }
 
+/** The branches of a network alone. */
+export type Branches = Pick<Network, 'from' | 'to' | 're' | 'im'>;
+
 export interface Solution {
   /** V rms of each node against the reference */
   re: Float64Array;

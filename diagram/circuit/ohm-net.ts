@@ -16,9 +16,10 @@ interface Step {
 
 /**
  * Conductors seen from one root: the resistance to every node with all paths together, and the volts lost on the way to
- * every node when currents are drawn. Rings are reckoned as rings. Nodes are taken out one by one, those with the fewest
- * neighbours first, each replaced by branches among its neighbours (star-mesh); of the inverse only the entries that
- * belong to a branch are worked out on the way back. A home is nearly a tree, so that time grows with its size alone.
+ * every node when currents are drawn. Rings are reckoned as rings. Nodes are taken out one by one, those farthest from the
+ * root first, each replaced by branches among its neighbours (star-mesh); of the inverse only the entries that belong to a
+ * branch are worked out on the way back. A home is nearly a tree, so that time grows with its size alone. What hangs on a
+ * node by itself comes to the same, to the last digit, whatever else there is.
  */
 export class OhmNet {
   private readonly leader = new Map<number, number>();
@@ -69,7 +70,6 @@ export class OhmNet {
       neighbours.forEach((neighbour, i) => add(neighbour, shares[i]! * (amps.get(node) ?? 0)));
     const volts = new Map<number, number>([[this.root, 0]]);
     for (const { node, sum, neighbours, shares } of [...this.steps].reverse()) {
-      if (!this.inverse.has(node)) continue;
       const above = neighbours.reduce((total, neighbour, i) => total + shares[i]! * (volts.get(neighbour) ?? 0), 0);
       volts.set(node, above + (amps.get(node) ?? 0) / sum);
     }
@@ -84,22 +84,19 @@ export class OhmNet {
     return at;
   }
 
+  /** Nodes that the root reaches, the farthest first: what hangs on a node is gone before it, whatever else there is. */
+  private order(net: ReadonlyMap<number, ReadonlyMap<number, number>>): number[] {
+    const reached = new Set([this.root]);
+    for (const node of reached) for (const neighbour of net.get(node)!.keys()) reached.add(neighbour);
+    reached.delete(this.root);
+    return [...reached].reverse();
+  }
+
   private eliminate(
     net: Map<number, Map<number, number>>,
     join: (a: number, b: number, siemens: number) => void,
   ): void {
-    const small: number[] = [];
-    const isSmall = (node: number) => node !== this.root && net.get(node)!.size <= 2;
-    for (const node of net.keys()) if (isSmall(node)) small.push(node);
-    const fewest = () => {
-      let best: number | undefined;
-      for (const [node, around] of net)
-        if (node !== this.root && (best === undefined || around.size < net.get(best)!.size)) best = node;
-      return best;
-    };
-    while (net.size > 1) {
-      const node = small.pop() ?? fewest()!;
-      if (!net.has(node)) continue;
+    for (const node of this.order(net)) {
       const around = [...net.get(node)!];
       const sum = around.reduce((total, [, siemens]) => total + siemens, 0);
       net.delete(node);
@@ -113,7 +110,6 @@ export class OhmNet {
         neighbours: around.map(([neighbour]) => neighbour),
         shares: around.map(([, siemens]) => siemens / sum),
       });
-      for (const [neighbour] of around) if (isSmall(neighbour)) small.push(neighbour);
     }
   }
 
@@ -123,9 +119,7 @@ export class OhmNet {
       if (x === this.root || y === this.root) return 0;
       return this.inverse.get(x)?.get(y) ?? this.inverse.get(y)?.get(x) ?? 0;
     };
-    const joined = (node: number) => node === this.root || this.inverse.has(node);
     for (const { node, sum, neighbours, shares } of [...this.steps].reverse()) {
-      if (neighbours.length === 0 || !joined(neighbours[0]!)) continue;
       const row = new Map<number, number>();
       for (const i of neighbours)
         row.set(

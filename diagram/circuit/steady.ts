@@ -37,7 +37,7 @@ export interface Steady {
  * A source held to its greatest current: the inner resistance that makes it so is found in few rounds, as the network
  * is linear.
  */
-const ROUNDS = 12;
+export const ROUNDS = 12;
 
 /**
  * Solves one standing. An inverter keeps its voltage up to the current it can drive, then lets the voltage fall; one
@@ -49,15 +49,19 @@ export function solveStanding(graph: Graph, standing: Standing): Steady {
   for (let round = 0; ; round++) {
     const assembly = assemble(graph, { ...standing, ...(inside && { inside }) });
     const solution = solveNetwork(assembly.network);
-    const over = round < ROUNDS ? overdriven(graph, assembly, solution) : new Map<string, number>();
+    const { voltage } = graph.document.supply;
+    const over = round < ROUNDS ? overdriven(voltage, assembly.inverters, solution) : new Map<string, number>();
     if (over.size === 0) return read(graph, standing, assembly, solution);
     inside = new Map([...(inside ?? []), ...over]);
   }
 }
 
 /** Inverters beyond their greatest current, with the inner resistance that would hold them to it. */
-function overdriven(graph: Graph, { inverters }: Assembly, { re, im }: Solution): Map<string, number> {
-  const { voltage } = graph.document.supply;
+export function overdriven(
+  voltage: number,
+  inverters: Assembly['inverters'],
+  { re, im }: Pick<Solution, 're' | 'im'>,
+): Map<string, number> {
   const found = new Map<string, number>();
   for (const { part, line, neutral, insideOhm, mostA } of inverters) {
     if (mostA === null) continue;

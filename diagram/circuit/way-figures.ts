@@ -76,12 +76,15 @@ interface Behind {
 /** What draws through each device, by its id. */
 function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, Behind> {
   const behind = new Map<string, Behind>();
+  const seen = new Set<readonly string[]>();
   for (const each of drawn) {
-    if (each.way === null) continue;
+    // All that draws through the same devices is of one way: the first of it tells.
+    if (each.way === null || seen.has(each.lineDevices)) continue;
+    seen.add(each.lineDevices);
     for (const device of each.lineDevices) {
-      const entry = behind.get(device) ?? { first: each, ways: new Set<string>() };
-      entry.ways.add(each.way);
-      behind.set(device, entry);
+      const entry = behind.get(device);
+      if (entry) entry.ways.add(each.way);
+      else behind.set(device, { first: each, ways: new Set([each.way]) });
     }
   }
   return behind;

@@ -356,14 +356,31 @@ export function readDocument(data: unknown): { ok: true; document: Installation 
 export const byCode = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
 export const byId = (a: { id: string }, b: { id: string }): number => byCode(a.id, b.id);
 
+/** An item of a list in order of id. */
+export function findById<T extends { id: string }>(list: readonly T[], id: string): T | undefined {
+  let low = 0;
+  let high = list.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (list[middle]!.id < id) low = middle + 1;
+    else high = middle;
+  }
+  return list[low]?.id === id ? list[low] : undefined;
+}
+
 const byOrder = (a: SurveyRoom, b: SurveyRoom): number => a.order - b.order || byId(a, b);
 
-const sortedByKey = <P>(places: Record<string, P>): Record<string, P> =>
-  Object.fromEntries(
-    Object.keys(places)
-      .sort(byCode)
-      .map((id) => [id, places[id]!]),
-  );
+/** The list itself where it is in order, as it mostly is. */
+function inOrder<T>(list: T[], compare: (a: T, b: T) => number): T[] {
+  for (let i = 1; i < list.length; i++) if (compare(list[i - 1]!, list[i]!) > 0) return [...list].sort(compare);
+  return list;
+}
+
+function sortedByKey<P>(places: Record<string, P>): Record<string, P> {
+  const ids = Object.keys(places);
+  const sorted = inOrder(ids, byCode);
+  return sorted === ids ? places : Object.fromEntries(sorted.map((id) => [id, places[id]!]));
+}
 
 /**
  * The document in its one order: fields as declared, lists by id, survey rows by their place in the table, empty options
@@ -383,14 +400,14 @@ export function canonical(doc: Installation): Installation {
     practice: doc.practice,
     supply: doc.supply,
     ambient: doc.ambient,
-    places: [...doc.places].sort(byId),
-    parts: [...doc.parts].sort(byId),
-    wires: [...doc.wires].sort(byId),
-    cables: [...doc.cables].sort(byId),
+    places: inOrder(doc.places, byId),
+    parts: inOrder(doc.parts, byId),
+    wires: inOrder(doc.wires, byId),
+    cables: inOrder(doc.cables, byId),
     ...(doc.notices?.length && { notices: doc.notices }),
     ...(doc.silenced?.length && { silenced: doc.silenced }),
-    ...(doc.survey?.length && { survey: [...doc.survey].sort(byOrder) }),
-    ...(doc.plans?.length && { plans: [...doc.plans].sort(byId) }),
+    ...(doc.survey?.length && { survey: inOrder(doc.survey, byOrder) }),
+    ...(doc.plans?.length && { plans: inOrder(doc.plans, byId) }),
     ...(Object.keys(sheet).length > 0 && { sheet }),
   };
 }

@@ -27,7 +27,12 @@ export const duplicateRef: Rule = {
   },
   *check(context) {
     const byRef = new Map<string, string[]>();
-    for (const { id, ref } of context.document.parts) if (ref) byRef.set(ref, [...(byRef.get(ref) ?? []), id]);
+    for (const { id, ref } of context.document.parts) {
+      if (!ref) continue;
+      const same = byRef.get(ref);
+      if (same) same.push(id);
+      else byRef.set(ref, [id]);
+    }
     for (const [ref, ids] of byRef) {
       if (ids.length < 2) continue;
       yield {

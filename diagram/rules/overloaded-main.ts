@@ -2,7 +2,7 @@ import type { Part, PartOf } from '../document/schema';
 import { amps, exceeds } from './readings/amounts';
 import { recalled } from './clauses';
 import type { Context } from './context';
-import { figuresOf, flowsIn } from './readings/figures';
+import { chainsOf, figuresOf, flowsIn } from './readings/figures';
 import { lackOfRating } from './readings/lacking';
 import { once } from './readings/once';
 import { changePart } from './readings/remedies';
@@ -13,22 +13,24 @@ import { be, capital, sayParts } from './readings/words';
 type Main = PartOf<'fuse' | 'meter' | 'isolator' | 'mcb' | 'rcd' | 'rcbo' | 'changeover'>;
 const MAINS: ReadonlySet<Part['kind']> = new Set(['fuse', 'meter', 'isolator', 'mcb', 'rcd', 'rcbo', 'changeover']);
 
-/** Every device that lies before a way, by id, with the chain it belongs to: devices in one line path are one chain. */
+/** Every device that lies before a way, by id, with its place in the chain: how many lie before it at most. */
 const mainDevices = once((context: Context): Map<string, { device: Main; order: number }> => {
   const { graph, ways } = context;
   const own = new Set(ways.map(({ device }) => device));
   const found = new Map<string, { device: Main; order: number }>();
-  for (const { lineDevices } of figuresOf(context).drawn)
-    lineDevices.forEach((id, order) => {
-      const device = graph.parts.get(id)!;
-      if (MAINS.has(device.kind) && !own.has(id)) found.set(id, { device: device as Main, order });
+  for (const chain of chainsOf(context))
+    chain.forEach((id, order) => {
+      const known = found.get(id);
+      if (known) known.order = Math.max(known.order, order);
+      else if (!own.has(id) && MAINS.has(graph.parts.get(id)!.kind))
+        found.set(id, { device: graph.parts.get(id) as Main, order });
     });
   return found;
 });
 
 /** Overloaded devices in series together, the one nearest the source first: they carry the same excess. */
 export const overloadedMains = once((context: Context): { devices: Main[]; demandA: number }[] => {
-  const { demandBehind, drawn, waysBehind, loads } = figuresOf(context);
+  const { demandBehind, waysBehind, loads } = figuresOf(context);
   const over = new Map<string, { device: Main; order: number; demandA: number }>();
   for (const [id, { device, order }] of mainDevices(context)) {
     if (device.rating === undefined || waysBehind(id).some((way) => !loads.get(way)!.known)) continue;
@@ -36,8 +38,9 @@ export const overloadedMains = once((context: Context): { devices: Main[]; deman
     if (exceeds(demandA, device.rating)) over.set(id, { device, order, demandA });
   }
   const groups: Set<string>[] = [];
-  for (const { lineDevices } of drawn) {
-    const here = lineDevices.filter((id) => over.has(id));
+  if (over.size === 0) return [];
+  for (const chain of chainsOf(context)) {
+    const here = chain.filter((id) => over.has(id));
     if (here.length === 0) continue;
     const met = groups.filter((group) => here.some((id) => group.has(id)));
     for (const group of met) groups.splice(groups.indexOf(group), 1);

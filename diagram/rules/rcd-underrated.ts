@@ -2,12 +2,12 @@ import { amps, exceeds } from './readings/amounts';
 import type { PartOf } from '../document/schema';
 import { recalled } from './clauses';
 import type { Context } from './context';
-import { figuresOf } from './readings/figures';
+import { chainsOf, figuresOf } from './readings/figures';
 import { isOvercurrent } from '../terminals/roles-of-parts';
 import { lackOfRating } from './readings/lacking';
 import { changePart } from './readings/remedies';
 import { overloadedMains } from './overloaded-main';
-import { isServiceBare } from './no-overcurrent';
+import { isServiceBare } from './readings/bare-lines';
 import type { Rule } from './types';
 import { capital, say } from './readings/words';
 
@@ -17,7 +17,7 @@ type Rcd = PartOf<'rcd'>;
 /** Overcurrent devices before each rcd on any path, and the first one after it on each. */
 function around(context: Context): Map<Rcd, { before: Set<Overcurrent>; after: Set<Overcurrent> }> {
   const found = new Map<Rcd, { before: Set<Overcurrent>; after: Set<Overcurrent> }>();
-  for (const { lineDevices } of figuresOf(context).drawn) {
+  for (const lineDevices of chainsOf(context)) {
     const parts = lineDevices.map((id) => context.graph.parts.get(id)!);
     parts.forEach((rcd, at) => {
       if (rcd.kind !== 'rcd') return;

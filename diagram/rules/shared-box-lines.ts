@@ -18,9 +18,11 @@ const isolates = (part: Part): boolean =>
 /** By way, the devices before it that isolate it, the main switch apart. */
 const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
   const found = new Map<string, Set<string>>();
+  const seen = new Set<readonly string[]>();
   for (const { points } of context.evaluated)
     for (const { overcurrent, lineDevices } of points.values()) {
-      if (overcurrent === null) continue;
+      if (overcurrent === null || seen.has(lineDevices)) continue;
+      seen.add(lineDevices);
       const isolators = found.get(overcurrent) ?? new Set<string>();
       for (const id of lineDevices)
         if (id !== context.mainSwitch?.id && isolates(context.graph.parts.get(id)!)) isolators.add(id);
@@ -37,7 +39,9 @@ export const waysByPart = once((context: Context): Map<string, Set<string>> => {
     if (!devices.has(device.id)) continue;
     for (const node of nodes) {
       const { id } = context.graph.partOf[node]!;
-      found.set(id, (found.get(id) ?? new Set<string>()).add(device.id));
+      const ways = found.get(id);
+      if (ways) ways.add(device.id);
+      else found.set(id, new Set([device.id]));
     }
   }
   return found;
@@ -62,9 +66,11 @@ export const sharedBoxLines: Rule = {
   },
   *check(context) {
     const byDevice = new Map(context.ways.map((way) => [way.device, way]));
-    for (const board of switchboards(context)) {
+    const byPart = waysByPart(context);
+    for (const board of switchboards(context).values()) {
       if (board.parts.some(({ id }) => byDevice.has(id))) continue;
-      const here = new Set(board.parts.flatMap(({ id }) => [...(waysByPart(context).get(id) ?? [])]));
+      const here = new Set<string>();
+      for (const { id } of board.parts) for (const way of byPart.get(id) ?? []) here.add(way);
       if (here.size < 2) continue;
       const held = [...here].flatMap((id) => byDevice.get(id) ?? []).sort((a, b) => a.number - b.number);
       // Mains beside backup is the matter of the notice of two sources.

@@ -23,10 +23,10 @@ export const feedsByPart = once(({ graph, feeds }: Context): Map<string, Feed[]>
 });
 
 /** Parts of a switchboard that hold line of a source: the first of each is enough to show it. */
-function sourcesIn(context: Context, { parts }: Switchboard): Map<Feed, string> {
+function sourcesIn(feeds: ReadonlyMap<string, readonly Feed[]>, { parts }: Switchboard): Map<Feed, string> {
   const found = new Map<Feed, string>();
   for (const { id } of parts)
-    for (const feed of feedsByPart(context).get(id) ?? []) if (!found.has(feed)) found.set(feed, id);
+    for (const feed of feeds.get(id) ?? []) if (!found.has(feed)) found.set(feed, id);
   return found;
 }
 
@@ -44,8 +44,9 @@ export const twoSourcesUnmarked: Rule = {
   },
   *check(context) {
     if (context.parts('inverter').length === 0) return;
-    for (const board of switchboards(context)) {
-      const sources = sourcesIn(context, board);
+    const feeds = feedsByPart(context);
+    for (const board of switchboards(context).values()) {
+      const sources = sourcesIn(feeds, board);
       if (!sources.has('mains') || !sources.has('backup')) continue;
       const noticed = context.document.notices?.some(
         (notice) =>

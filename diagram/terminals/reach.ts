@@ -75,5 +75,7 @@ export function groups(graph: Graph, closed: Uint8Array): Int32Array {
 
 /** All edges closed but those that `isOpen` names. */
 export function closedEdges(graph: Graph, isOpen: (edge: Graph['edges'][number]) => boolean): Uint8Array {
-  return Uint8Array.from(graph.edges, (edge) => (isOpen(edge) ? 0 : 1));
+  const closed = new Uint8Array(graph.edges.length).fill(1);
+  graph.edges.forEach((edge, number) => isOpen(edge) && (closed[number] = 0));
+  return closed;
 }

@@ -4,11 +4,12 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { complex, lusolve, matrix, sparse, type Complex, type Matrix } from 'mathjs';
 import { REFERENCE, type Network } from '@/diagram/circuit/network';
+import { timeEdits } from './bench-edits';
+import { homeOf } from './bench-home';
 import { AMPS, homeNetwork, toNetwork } from './bench-network';
+import { median, milliseconds } from './bench-time';
 import { solveNetwork } from '@/diagram/circuit/solve';
 import { examine } from '@/diagram/rules/examine';
-import { draftDocument } from '@/diagram/survey/draft';
-import type { Installation, SurveyRoom } from '@/diagram/document/schema';
 
 /**
  * npm run bench [-- --json]
@@ -24,19 +25,13 @@ interface Measure {
   /** the ratio must be at least the bar, or at most */
   want: 'at least' | 'at most';
   unit: string;
+  /** the same for each kind of a set of which `ratio` is the median */
+  kinds?: Record<string, number>;
 }
 
-const median = (values: number[]): number => [...values].sort((a, b) => a - b)[Math.floor(values.length / 2)]!;
-
-function milliseconds(run: () => unknown, times: number): number {
-  const taken: number[] = [];
-  for (let i = 0; i < times; i++) {
-    const start = performance.now();
-    run();
-    taken.push(performance.now() - start);
-  }
-  return median(taken);
-}
+const short = (ratio: number): number => Number(ratio.toPrecision(4));
+const shorten = (kinds: Record<string, number>) =>
+  Object.fromEntries(Object.entries(kinds).map(([kind, ratio]) => [kind, short(ratio)]));
 
 /** The nodal matrix of the same network, as mathjs holds it. */
 function nodalMatrix({ size, from, to, re, im }: Network): { admittance: Matrix; current: Matrix } {
@@ -128,43 +123,6 @@ function againstNgspice(): Measure {
   };
 }
 
-/** A drafted home of about so many parts: as many rooms as it takes. */
-function homeOf(parts: number): Installation {
-  const room = (i: number): SurveyRoom => ({
-    id: `r${String(i).padStart(4, '0')}`,
-    order: i,
-    name: `Room ${i}`,
-    kind: 'room',
-    lamps: 4,
-    lampWatts: 9,
-    fans: 1,
-    fanWatts: 60,
-    outlets: 4,
-    heavy: i % 5 === 0 ? [{ what: 'Water heater', watts: 2000 }] : [],
-    keepLamps: i < 20 ? 2 : 0,
-    keepFans: 0,
-    keepOutletWatts: 0,
-    hours: i < 20 ? 2 : 0,
-  });
-  const draft = (rooms: number) =>
-    draftDocument(
-      Array.from({ length: rooms }, (_, i) => room(i)),
-      {
-        title: `${parts} parts`,
-        practice: 'IEC',
-        supply: { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.3, zln: 0.3 },
-        hoursWanted: 2,
-      },
-    );
-  let rooms = Math.max(1, Math.round(parts / 24));
-  let doc = draft(rooms);
-  for (let i = 0; i < 4 && Math.abs(doc.parts.length - parts) > 0.03 * parts; i++) {
-    rooms = Math.max(1, Math.round((rooms * parts) / doc.parts.length));
-    doc = draft(rooms);
-  }
-  return doc;
-}
-
 function growth(): Measure {
   const sizes = [100, 1000, 5000].map(homeOf).map((doc) => ({ doc, parts: doc.parts.length }));
   for (const { doc } of sizes.slice(0, 2)) for (let i = 0; i < 5; i++) examine(doc);
@@ -184,6 +142,21 @@ function growth(): Measure {
     bar: 1.2,
     want: 'at most',
     unit: 'exponent',
+  };
+}
+
+/** Examining a home after one edit, against from scratch: each kind of edit, and the median of the kinds. */
+function incremental(): Measure {
+  const home = homeOf(1000);
+  for (let i = 0; i < 10; i++) examine(home);
+  const kinds = timeEdits(home);
+  return {
+    name: 'examination after one edit, against from scratch at 1,000 parts',
+    ratio: median(Object.values(kinds)),
+    bar: 10,
+    want: 'at least',
+    unit: 'times',
+    kinds,
   };
 }
 
@@ -214,14 +187,16 @@ function measureMemory(): void {
 function main(): void {
   const json = process.argv.includes('--json');
   let failed = false;
-  for (const measure of [againstMathjs, againstNgspice, growth, memory]) {
-    const { name, ratio, bar, want, unit } = measure();
+  for (const measure of [againstMathjs, againstNgspice, growth, incremental, memory]) {
+    const { name, ratio, bar, want, unit, kinds } = measure();
     const holds = want === 'at least' ? ratio >= bar : ratio <= bar;
     failed ||= !holds;
     const line = json
-      ? JSON.stringify({ name, ratio: Number(ratio.toPrecision(4)), bar, holds })
+      ? JSON.stringify({ name, ratio: short(ratio), bar, holds, ...(kinds && { kinds: shorten(kinds) }) })
       : `${holds ? 'holds' : 'MISSES'}  ${ratio.toPrecision(3)} ${unit}, ${want} ${bar}: ${name}`;
     process.stdout.write(`${line}\n`);
+    if (kinds && !json)
+      for (const [kind, each] of Object.entries(kinds)) process.stdout.write(`         ${each.toPrecision(3)} ${unit}: ${kind}\n`);
   }
   process.exitCode = failed ? 1 : 0;
 }

@@ -16,12 +16,13 @@ const same = (a: unknown, b: unknown): boolean => a === b || JSON.stringify(a) =
 /** Ids that differ between two lists in order of id. Items that did not change are the same objects, so that this is cheap. */
 function differing(before: readonly { id: string }[], after: readonly { id: string }[]): string[] {
   const ids: string[] = [];
+  if (before === after) return ids;
   let i = 0;
   let j = 0;
   while (i < before.length || j < after.length) {
     const a = before[i];
     const b = after[j];
-    const order = a && b ? byCode(a.id, b.id) : a ? -1 : 1;
+    const order = a && b ? (a === b ? 0 : byCode(a.id, b.id)) : a ? -1 : 1;
     if (order !== 0 || !same(a, b)) ids.push((order <= 0 ? a : b)!.id);
     if (order <= 0) i++;
     if (order >= 0) j++;
@@ -38,3 +39,10 @@ export function differenceOf(before: Installation, after: Installation): Differe
     common: COMMON.some((field) => !same(before[field], after[field])),
   };
 }
+
+export const isNone = ({ parts, wires, cables, common }: Difference): boolean =>
+  !common && parts.length + wires.length + cables.length === 0;
+
+/** The same without some of the parts. */
+export const without = (difference: Difference, parts: ReadonlyMap<string, unknown>): Difference =>
+  parts.size === 0 ? difference : { ...difference, parts: difference.parts.filter((id) => !parts.has(id)) };

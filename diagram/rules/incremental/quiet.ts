@@ -1,4 +1,4 @@
-import type { Cable, Installation, Part, Wire } from '../../document/schema';
+import { findById, type Cable, type Installation, type Part, type Wire } from '../../document/schema';
 import type { Difference } from './difference';
 
 /** Fields that move no current: what a thing is called, where it stands, and what a device is rated for. */
@@ -15,7 +15,7 @@ const loud = (item: Part | Wire | Cable, quiet: ReadonlySet<string>): string =>
 export function isQuiet(before: Installation, after: Installation, difference: Difference): boolean {
   return (['parts', 'wires', 'cables'] as const).every((list) =>
     difference[list].every((id) => {
-      const [a, b] = [before, after].map((doc) => doc[list].find((item) => item.id === id));
+      const [a, b] = [before, after].map((doc) => findById<Part | Wire | Cable>(doc[list], id));
       return a !== undefined && b !== undefined && loud(a, QUIET[list]) === loud(b, QUIET[list]);
     }),
   );

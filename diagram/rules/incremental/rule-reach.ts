@@ -51,14 +51,3 @@ export const OF_A_BRANCH: ReadonlySet<string> = new Set([
   'wrong-colour',
   'wrong-curve',
 ]);
-
-/**
- * Rules that find something when and only when one branch by itself shows it, but then gather it from all of them: while
- * they are silent they are asked of the branch that changed, and once one speaks the home is examined from scratch.
- */
-export const GATHERING: ReadonlySet<string> = new Set([
-  'backup-neutral-behind-other-rcd',
-  'backup-neutral-lost',
-  'borrowed-neutral',
-  'residual-imbalance',
-]);

@@ -1,16 +1,19 @@
+import { isOfTrunk } from '../../circuit/branches';
 import type { Installation, Wire } from '../../document/schema';
 import { Beyond } from './beyond';
-import { isOfTrunk, type Branches } from './branches';
 import type { Difference } from './difference';
+import type { Shape } from './shape';
 
-/** The parts of the branches that an edit touches, before it and after it. */
+/** The branches that an edit touches, by their keys before it, and their parts before and after it. */
 export interface Touched {
+  keys: ReadonlySet<string>;
   before: ReadonlySet<string>;
   after: ReadonlySet<string>;
 }
 
 /** Every wire, of before and after, that an edit changed or that lies in a cable it changed. */
 function wiresOf(before: Installation, after: Installation, { wires, cables }: Difference): Wire[] {
+  if (wires.length + cables.length === 0) return [];
   const changed = new Set(wires);
   const lists = [before.wires, after.wires];
   const inCables = new Set(cables);
@@ -24,20 +27,26 @@ function wiresOf(before: Installation, after: Installation, { wires, cables }: D
   return found;
 }
 
+/** Adds the branches that draw over the same cables of the trunk: what one takes is felt by all of them. */
+function addLeaning(keys: Set<string>, { leaning }: Shape): void {
+  const over = new Set<string>();
+  for (const key of keys) {
+    for (const wire of leaning.get(key) ?? []) over.add(wire);
+    for (const [other, wires] of leaning) if (!keys.has(other) && [...wires].some((wire) => over.has(wire))) keys.add(other);
+  }
+}
+
 /** Finds the branches that an edit touches. @throws Beyond where it touches the trunk, or what is no branch */
-export function touchedBy(
-  before: Installation,
-  after: Installation,
-  difference: Difference,
-  { trunk, branchOf }: Branches,
-): Touched {
+export function touchedBy(before: Installation, after: Installation, difference: Difference, shape: Shape): Touched {
   if (difference.common) throw new Beyond('what hangs on the data of the home');
-  const now = new Map(after.parts.map((part) => [part.id, part]));
+  const { trunk, branchOf } = shape;
+  const changed = new Set(difference.parts);
+  const anew = new Map(after.parts.filter(({ id }) => changed.has(id)).map((part) => [part.id, part]));
   const keys = new Set<string>();
   const fresh = new Set<string>();
   const touch = (id: string) => {
     const key = branchOf.get(id);
-    const part = now.get(id);
+    const part = anew.get(id);
     if (part && isOfTrunk(part) && !trunk.has(id)) throw new Beyond(`what hangs on ${id}`);
     if (key !== undefined) keys.add(key);
     else if (part && !trunk.has(id)) fresh.add(id);
@@ -49,21 +58,8 @@ export function touchedBy(
     if (outside.length === 0) throw new Beyond(`what hangs on the wire ${id}`);
     for (const [part] of outside) touch(part);
   }
+  addLeaning(keys, shape);
   const own = new Set<string>();
   for (const [id, key] of branchOf) if (keys.has(key)) own.add(id);
-  return { before: own, after: new Set([...[...own].filter((id) => now.has(id)), ...fresh]) };
-}
-
-/** The home with its trunk and some branches alone. */
-export function excerptOf(doc: Installation, trunk: ReadonlySet<string>, parts: ReadonlySet<string>): Installation {
-  const has = (id: string) => trunk.has(id) || parts.has(id);
-  const wires = doc.wires.filter(({ from, to }) => has(from[0]) && has(to[0]));
-  const cables = new Set(wires.map(({ cable }) => cable));
-  const { sheet: _sheet, survey: _survey, ...rest } = doc;
-  return {
-    ...rest,
-    parts: doc.parts.filter(({ id }) => has(id)),
-    wires,
-    cables: doc.cables.filter(({ id }) => cables.has(id)),
-  };
+  return { keys, before: own, after: new Set([...[...own].filter((id) => !changed.has(id) || anew.has(id)), ...fresh]) };
 }

@@ -10,6 +10,13 @@ export const figuresOf = once(({ graph, evaluation, sections, earth, practice })
   workOutFigures({ graph, evaluation, sections, earth, practice: practices[practice] }),
 );
 
+/** The chains of devices, from the source on, that anything draws through: each once. */
+export const chainsOf = once(
+  (context: Context): readonly (readonly string[])[] => [
+    ...new Set(figuresOf(context).drawn.map(({ lineDevices }) => lineDevices)),
+  ],
+);
+
 /** Names of the conditions in which any of these is fed, in their order. */
 export const fedIn = ({ evaluated }: Context, drawn: readonly Drawn[]): string[] =>
   evaluated

@@ -2,7 +2,7 @@ import { isBar, polesOf } from '../../document/kinds';
 import type { Part } from '../../document/schema';
 import { isControl, isOvercurrent } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
-import { branchesOf, isOfTrunk } from '../incremental/branches';
+import { branchesOf, isOfTrunk } from '../../circuit/branches';
 import { hasWire } from './earth-gaps';
 import { once } from './once';
 import { openRegions, type OpenRegion } from './open-regions';

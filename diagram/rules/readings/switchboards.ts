@@ -18,17 +18,22 @@ const isEnclosed = (part: Part): boolean =>
   isBar(part.kind) ||
   ['socket', 'mcb', 'rcd', 'rcbo', 'fuse', 'isolator', 'changeover'].includes(part.kind);
 
-/** Switchboards by place and board. */
-export const switchboards = once((context: Context): Switchboard[] => {
+/** What names the switchboard of a part; undefined for parts that sit in none. */
+export const boardOf = (part: Part): string | undefined =>
+  part.place === undefined || !isEnclosed(part) ? undefined : `${part.place} ${part.board ?? ''}`;
+
+/** Switchboards by place and board, the parts of each in order of designation. */
+export const switchboards = once(({ document }: Context): ReadonlyMap<string, Switchboard> => {
   const found = new Map<string, Switchboard>();
-  for (const part of context.document.parts) {
-    if (part.place === undefined || !isEnclosed(part)) continue;
-    const key = `${part.place} ${part.board ?? ''}`;
-    const entry = found.get(key) ?? { place: part.place, board: part.board, parts: [] };
-    entry.parts.push(part);
-    found.set(key, entry);
+  for (const part of document.parts) {
+    const key = boardOf(part);
+    if (key === undefined) continue;
+    const board = found.get(key) ?? { place: part.place!, board: part.board, parts: [] };
+    board.parts.push(part);
+    found.set(key, board);
   }
-  return [...found.values()].map((each) => ({ ...each, parts: each.parts.sort(byDesignation) }));
+  for (const { parts } of found.values()) parts.sort(byDesignation);
+  return found;
 });
 
 /** "the switchboard in Study", "board A in Study" */

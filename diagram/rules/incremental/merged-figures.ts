@@ -1,0 +1,40 @@
+import type { Drawn } from '../../circuit/drawn';
+import { addUp, type Figures, type WayFigures } from '../../circuit/way-figures';
+import { mustBe, onlyKnown } from './beyond';
+import { mergedList, mergedMap } from './merging';
+import type { Touched } from './touched';
+
+/** Devices of the trunk that some current passes. */
+function passed(drawn: readonly Drawn[], trunk: ReadonlySet<string>): string {
+  const found = new Set<string>();
+  const seen = new Set<readonly string[]>();
+  for (const { lineDevices, neutralDevices } of drawn)
+    for (const ids of [lineDevices, neutralDevices]) {
+      if (seen.has(ids)) continue;
+      seen.add(ids);
+      for (const id of ids) if (trunk.has(id)) found.add(id);
+    }
+  return [...found].sort().join(' ');
+}
+
+/** A home in numbers after an edit. @param spine what of the trunk `now` has  @throws Beyond */
+export function mergeFigures(known: Figures, now: Figures, touched: Touched, spine: ReadonlySet<string>): Figures {
+  const { practice } = known;
+  const points = ({ drawn }: Figures) => drawn.filter(({ isPoint }) => isPoint);
+  const drawn = [
+    ...mergedList(points(known), points(now), touched, ({ part }) => part.id),
+    ...now.drawn.filter(({ isPoint }) => !isPoint),
+  ];
+  mustBe(passed(known.drawn, spine) === passed(drawn, spine), 'what the trunk feeds');
+  const loads = mergedMap(known.loads, now.loads, touched);
+  const together = addUp(drawn, loads, practice);
+  const ways = mergedMap(known.ways, now.ways, touched);
+  for (const id of spine) {
+    const figures = ways.get(id);
+    const ends = [[figures, touched.before], [now.ways.get(id), touched.after]] as const;
+    // A feeder is judged by its worst end: where that is no touched one, before and after, it stands.
+    mustBe(!ends.some(([each, parts]) => each?.feeder && parts.has(each.feeder.at.id)), 'where a feeder ends');
+    if (figures) ways.set(id, { ...figures, ...together.carriedBy(id) } satisfies WayFigures);
+  }
+  return onlyKnown<Figures>('the figures', { practice, drawn, loads, ways, ...together });
+}

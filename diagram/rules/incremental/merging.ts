@@ -1,0 +1,55 @@
+import { byCode } from '../../document/schema';
+import type { Touched } from './touched';
+
+/** What is known of all but the touched parts, and what is new of those, in lists and tables by id. */
+
+type Parts = Pick<Touched, 'before' | 'after'>;
+
+/** In order of id. */
+export function mergedMap<T>(known: ReadonlyMap<string, T>, now: ReadonlyMap<string, T>, { before, after }: Parts): Map<string, T> {
+  const merged = new Map(known);
+  for (const id of before) if (!after.has(id) || !now.has(id)) merged.delete(id);
+  const size = merged.size;
+  for (const id of after) if (now.has(id)) merged.set(id, now.get(id)!);
+  return merged.size === size ? merged : new Map([...merged].sort(([a], [b]) => byCode(a, b)));
+}
+
+export function mergedSet(known: ReadonlySet<string>, now: ReadonlySet<string>, { before, after }: Parts): Set<string> {
+  const merged = new Set(known);
+  for (const id of before) merged.delete(id);
+  for (const id of now) if (after.has(id)) merged.add(id);
+  return merged;
+}
+
+/** In order of id, both lists and the result. */
+export function mergedList<T>(
+  known: readonly T[],
+  now: readonly T[],
+  { before, after }: Parts,
+  idOf: (item: T) => string,
+): T[] {
+  const anew = now.filter((item) => after.has(idOf(item)));
+  const merged: T[] = [];
+  let next = 0;
+  for (const item of known) {
+    const id = idOf(item);
+    if (before.has(id)) continue;
+    while (next < anew.length && idOf(anew[next]!) < id) merged.push(anew[next++]!);
+    merged.push(item);
+  }
+  return [...merged, ...anew.slice(next)];
+}
+
+/** Puts items into a list at their places. @param list in order already */
+export function insertInOrder<T>(list: T[], items: Iterable<T>, compare: (a: T, b: T) => number): void {
+  for (const item of items) {
+    let low = 0;
+    let high = list.length;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if (compare(list[middle]!, item) < 0) low = middle + 1;
+      else high = middle;
+    }
+    list.splice(low, 0, item);
+  }
+}
