@@ -4,7 +4,9 @@ export const cellName = (row: string, column: string): string => `${row}:${colum
 const isShown = (cell: HTMLElement): boolean => cell.checkVisibility?.() ?? true;
 
 const find = (name: string): HTMLElement | undefined =>
-  [...document.querySelectorAll<HTMLElement>('[data-cell]')].find((cell) => cell.dataset.cell === name && isShown(cell));
+  [...document.querySelectorAll<HTMLElement>('[data-cell]')].find(
+    (cell) => cell.dataset.cell === name && isShown(cell),
+  );
 
 /** Puts the caret into a cell, at once or when it has been drawn. */
 export function focusCell(row: string, column: string): void {

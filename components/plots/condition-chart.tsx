@@ -59,7 +59,13 @@ export default function ConditionChart({ loads }: { loads: readonly ConditionLoa
           label={{ value: '% of its rating', position: 'insideBottomRight', ...GREY_LETTERING }}
         />
         <YAxis type="category" dataKey="name" width={120} tick={LETTERING} stroke={INK} tickLine={false} />
-        <Bar dataKey="share" barSize={BAR} shape={LoadBar} isAnimationActive={false} background={{ fill: 'transparent', stroke: HAIR }}>
+        <Bar
+          dataKey="share"
+          barSize={BAR}
+          shape={LoadBar}
+          isAnimationActive={false}
+          background={{ fill: 'transparent', stroke: HAIR }}
+        >
           <LabelList dataKey="told" position="right" {...LABEL} />
         </Bar>
       </BarChart>

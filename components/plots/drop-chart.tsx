@@ -1,6 +1,15 @@
 'use client';
 
-import { CartesianGrid, ComposedChart, LabelList, Line, ReferenceLine, ResponsiveContainer, XAxis, YAxis } from 'recharts';
+import {
+  CartesianGrid,
+  ComposedChart,
+  LabelList,
+  Line,
+  ReferenceLine,
+  ResponsiveContainer,
+  XAxis,
+  YAxis,
+} from 'recharts';
 import type { Station } from '@/diagram/schedules/drop-stations';
 import type { WayPlot } from '@/diagram/schedules/way-plot';
 import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LABEL, LETTERING, MARGIN, PAPER, RED, axis, axisUnit } from './look';
@@ -44,15 +53,7 @@ export default function DropChart({ drop }: { drop: NonNullable<WayPlot['drop']>
           height={36}
           label={{ value: 'm from the meter', position: 'insideBottomRight', ...GREY_LETTERING }}
         />
-        <YAxis
-          type="number"
-          {...up}
-          tick={LETTERING}
-          stroke={INK}
-          tickLine={false}
-          width={36}
-          label={axisUnit('%')}
-        />
+        <YAxis type="number" {...up} tick={LETTERING} stroke={INK} tickLine={false} width={36} label={axisUnit('%')} />
         <ReferenceLine
           y={limitPercent}
           stroke={INK}

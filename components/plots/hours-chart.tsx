@@ -29,7 +29,9 @@ export default function HoursChart({ plot, off }: HoursChartProps) {
   const mostW = along.domain[1];
   const shown = [all.hours, now.hours].filter(Number.isFinite);
   const up = axis(Math.max(plot.hoursWanted ?? 0, ...shown, 2) * 1.3);
-  const data = autonomyCurve({ bank: plot.bank, efficiency: plot.efficiency }, mostW / 100, mostW, 100).filter(({ hours }) => hours <= up.domain[1]);
+  const data = autonomyCurve({ bank: plot.bank, efficiency: plot.efficiency }, mostW / 100, mostW, 100).filter(
+    ({ hours }) => hours <= up.domain[1],
+  );
   const dot = (load: typeof all, hollow: boolean) =>
     Number.isFinite(load.hours) && (
       <ReferenceDot
@@ -62,15 +64,7 @@ export default function HoursChart({ plot, off }: HoursChartProps) {
           height={36}
           label={{ value: 'W at once', position: 'insideBottomRight', ...GREY_LETTERING }}
         />
-        <YAxis
-          type="number"
-          {...up}
-          tick={LETTERING}
-          stroke={INK}
-          tickLine={false}
-          width={36}
-          label={axisUnit('h')}
-        />
+        <YAxis type="number" {...up} tick={LETTERING} stroke={INK} tickLine={false} width={36} label={axisUnit('h')} />
         {plot.hoursWanted !== null && plot.hoursWanted > 0 && (
           <ReferenceLine
             y={plot.hoursWanted}

@@ -1,11 +1,35 @@
 'use client';
 
-import { Area, ComposedChart, Line, ReferenceDot, ReferenceLine, ResponsiveContainer, XAxis, YAxis, CartesianGrid } from 'recharts';
+import {
+  Area,
+  ComposedChart,
+  Line,
+  ReferenceDot,
+  ReferenceLine,
+  ResponsiveContainer,
+  XAxis,
+  YAxis,
+  CartesianGrid,
+} from 'recharts';
 import { INSTANT, type OvercurrentDevice } from '@/diagram/calculations/trip-curve';
 import { amps } from '@/diagram/schedules/figure';
 import { ADIABATIC_UP_TO_S, FASTEST_S, SLOWEST_S, bandFor, withstandLine } from '@/diagram/schedules/trip-points';
 import type { FaultMark, WayPlot } from '@/diagram/schedules/way-plot';
-import { DASH, GREY_LETTERING, HAIR, HEIGHT, INK, LABEL, LETTERING, MARGIN, RED, ROW, axisUnit, logRange, logTicks } from './look';
+import {
+  DASH,
+  GREY_LETTERING,
+  HAIR,
+  HEIGHT,
+  INK,
+  LABEL,
+  LETTERING,
+  MARGIN,
+  RED,
+  ROW,
+  axisUnit,
+  logRange,
+  logTicks,
+} from './look';
 
 const SECONDS = [0.01, 0.1, 1, 10, 100, 1000, 10_000];
 const TOLD: Record<FaultMark['id'], string> = {
@@ -48,7 +72,10 @@ const nameAt = (device: OvercurrentDevice): number =>
 export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
   const [from, to] = range(plot);
   const band: Point[] = plot.device
-    ? bandFor(plot.device, from, to).map(({ currentA, earliestS, latestS }) => ({ currentA, band: [earliestS, latestS] }))
+    ? bandFor(plot.device, from, to).map(({ currentA, earliestS, latestS }) => ({
+        currentA,
+        band: [earliestS, latestS],
+      }))
     : [];
   const stands = plot.conductors.map((conductor) => ({
     ...conductor,
@@ -86,7 +113,16 @@ export default function TimeCurrentChart({ plot }: { plot: WayPlot }) {
           width={48}
           label={axisUnit('s')}
         />
-        <Area dataKey="band" type="linear" stroke={INK} strokeWidth={1.4} fill={ROW} fillOpacity={1} isAnimationActive={false} activeDot={false} />
+        <Area
+          dataKey="band"
+          type="linear"
+          stroke={INK}
+          strokeWidth={1.4}
+          fill={ROW}
+          fillOpacity={1}
+          isAnimationActive={false}
+          activeDot={false}
+        />
         {stands.flatMap(({ name, short, long }, i) => [
           <Line
             key={`${name} short`}

@@ -13,7 +13,11 @@ export function ColumnPages({ pages, page, onTurn, of }: ColumnPagesProps) {
   if (pages.length < 2) return null;
   const at = pages.indexOf(page);
   return (
-    <div role="group" aria-label={`Columns of the ${of.toLowerCase()}`} className="mb-2 flex flex-wrap items-center gap-1 min-[901px]:hidden">
+    <div
+      role="group"
+      aria-label={`Columns of the ${of.toLowerCase()}`}
+      className="mb-2 flex flex-wrap items-center gap-1 min-[901px]:hidden"
+    >
       <button
         type="button"
         aria-label="Columns before"

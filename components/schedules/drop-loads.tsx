@@ -27,7 +27,11 @@ function mainsWays(document: Installation, ids: readonly string[]) {
   const [first] = ids;
   if (first === undefined) return [];
   const place = document.parts.find(({ id }) => id === first)?.place;
-  const near = new Set(findWays(document).filter(({ places }) => place && places.includes(place)).map(({ device }) => device));
+  const near = new Set(
+    findWays(document)
+      .filter(({ places }) => place && places.includes(place))
+      .map(({ device }) => device),
+  );
   const light = (words: string) => (/lamp|light/i.test(words) ? 0 : 1);
   return waysFor(document, first)
     .filter(({ backup }) => !backup)
@@ -60,12 +64,19 @@ export function DropLoads({ plot, off, onOff, desk, drawing, document, mayEdit }
           return (
             <li key={load.id}>
               <label className="flex items-center gap-2 pointer-coarse:min-h-11">
-                <input type="checkbox" className="accent-ink" checked={off.has(load.id)} onChange={() => toggle(load.id)} />
+                <input
+                  type="checkbox"
+                  className="accent-ink"
+                  checked={off.has(load.id)}
+                  onChange={() => toggle(load.id)}
+                />
                 <span className="min-w-0 flex-1 truncate" title={`${load.name}, ${load.room}`}>
                   {load.name} <span className="text-grey">{load.room}</span>
                 </span>
                 <span className="tabular-nums">{Math.round(load.watts)} W</span>
-                <span className="w-18 text-right text-grey tabular-nums">{off.has(load.id) ? 'off' : hoursText(without.hours)}</span>
+                <span className="w-18 text-right text-grey tabular-nums">
+                  {off.has(load.id) ? 'off' : hoursText(without.hours)}
+                </span>
               </label>
             </li>
           );

@@ -34,7 +34,13 @@ function Hours({ plot, ...rest }: Omit<PlotsProps, 'worked'> & { plot: BackupPlo
   const [off, setOff] = useState<ReadonlySet<string>>(new Set());
   // What is no longer backed up cannot be switched off for the question.
   const standing = useMemo(() => new Set(plot.loads.map(({ id }) => id).filter((id) => off.has(id))), [plot, off]);
-  return <HoursPlot plot={plot} off={standing} controls={<DropLoads plot={plot} off={standing} onOff={setOff} {...rest} />} />;
+  return (
+    <HoursPlot
+      plot={plot}
+      off={standing}
+      controls={<DropLoads plot={plot} off={standing} onOff={setOff} {...rest} />}
+    />
+  );
 }
 
 const pair = 'grid gap-x-10 gap-y-8 min-[800px]:grid-cols-2';

@@ -60,7 +60,9 @@ export function RowHead({ desk, table, row, index, part, first, last, inHand, gr
           <WayEdge part={part} number={row.number!} backup={row.group === 'backup'} first={first} last={last} />
         </span>
       ) : null}
-      <span className={`${isWay ? 'font-bold sm:hidden' : ''} ${grave ? 'max-[600px]:font-bold max-[600px]:text-red' : ''}`}>
+      <span
+        className={`${isWay ? 'font-bold sm:hidden' : ''} ${grave ? 'max-[600px]:font-bold max-[600px]:text-red' : ''}`}
+      >
         {grave && <span className="min-[601px]:hidden">! </span>}
         {row.number ?? index + 1}
       </span>

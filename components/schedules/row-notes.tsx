@@ -26,7 +26,8 @@ interface RowNotesProps {
   mayEdit: boolean;
 }
 
-const or = (value: number | null | undefined, digits: number): string => (value === null || value === undefined ? '-' : value.toFixed(digits));
+const or = (value: number | null | undefined, digits: number): string =>
+  value === null || value === undefined ? '-' : value.toFixed(digits);
 
 /** What the way comes to as it is drawn and with each remedy: the figures that decide between them. */
 function Outcomes({ now, remedies }: { now: Outcome; remedies: readonly { label: string; gives: Outcome | null }[] }) {
@@ -54,7 +55,9 @@ function Outcomes({ now, remedies }: { now: Outcome; remedies: readonly { label:
                 {label}
               </th>
               <td className="pl-2 text-right align-top">{or(gives?.in, 0)}</td>
-              <td className={`pl-2 text-right align-top ${gives?.iz && gives.in && gives.iz < gives.in ? 'font-bold text-red' : ''}`}>
+              <td
+                className={`pl-2 text-right align-top ${gives?.iz && gives.in && gives.iz < gives.in ? 'font-bold text-red' : ''}`}
+              >
                 {gives?.iz ? amps(gives.iz) : '-'}
               </td>
               <td className="pl-2 text-right align-top">{or(gives?.dropPercent, 2)}</td>

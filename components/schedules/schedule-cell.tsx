@@ -24,7 +24,10 @@ interface ScheduleCellProps {
 function Figure({ cell, right }: { cell: Exclude<Cell, { field: FieldRef }>; right?: boolean }) {
   const look = cell.beyond ? 'font-bold text-red' : cell.text === '-' ? 'text-grey' : '';
   return (
-    <span className={`block truncate px-[3px] ${right ? 'text-right tabular-nums' : ''} ${look}`} title={cell.lacks ?? cell.text}>
+    <span
+      className={`block truncate px-[3px] ${right ? 'text-right tabular-nums' : ''} ${look}`}
+      title={cell.lacks ?? cell.text}
+    >
       {cell.text}
       {cell.lacks && <span className="sr-only">{cell.lacks}</span>}
     </span>
@@ -63,7 +66,10 @@ export function ScheduleCell({ desk, table, row, column, cell, document, read, m
   const usual = field.usual?.(document) ?? '-';
   if (!mayEdit)
     return (
-      <span className={`block truncate px-[3px] ${column.right ? 'text-right tabular-nums' : ''} ${text === '' ? 'text-grey' : ''}`} title={text}>
+      <span
+        className={`block truncate px-[3px] ${column.right ? 'text-right tabular-nums' : ''} ${text === '' ? 'text-grey' : ''}`}
+        title={text}
+      >
         {text || usual}
         {cell.more && <span className="ml-1 text-small text-grey">{cell.more}</span>}
       </span>

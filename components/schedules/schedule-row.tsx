@@ -52,7 +52,9 @@ function spoken(row: Row, columns: readonly Column[], read: (ref: FieldRef) => s
     const text = isTyped(cell) ? read(cell.field) : (cell.lacks ?? cell.text);
     return text === '' || text === '-' ? [] : [`${column.spoken ?? column.name} ${text}`];
   });
-  return [row.name, ...facts, marks > 0 && `${marks} ${marks === 1 ? 'finding' : 'findings'}`].filter(Boolean).join(', ');
+  return [row.name, ...facts, marks > 0 && `${marks} ${marks === 1 ? 'finding' : 'findings'}`]
+    .filter(Boolean)
+    .join(', ');
 }
 
 export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
@@ -110,7 +112,9 @@ export const ScheduleRow = memo(function ScheduleRow(props: ScheduleRowProps) {
           </td>
         );
       })}
-      <td className={`border-b border-hair p-0 align-middle max-[600px]:hidden ${props.apart ? 'border-t-2 border-t-ink' : ''}`}>
+      <td
+        className={`border-b border-hair p-0 align-middle max-[600px]:hidden ${props.apart ? 'border-t-2 border-t-ink' : ''}`}
+      >
         <FindingMark findings={findings} />
       </td>
     </tr>

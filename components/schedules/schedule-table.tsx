@@ -24,7 +24,8 @@ interface ScheduleTableProps {
 /** px of a column for so many letters: the lettering advances 7.2 px at 12 px. */
 const pixels = (letters: number): number => Math.round(letters * 7.2) + 6;
 
-const head = 'sticky top-0 z-10 bg-paper border-b-2 border-ink px-[3px] pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
+const head =
+  'sticky top-0 z-10 bg-paper border-b-2 border-ink px-[3px] pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey';
 
 /** A schedule as one table, typed where it is underlined; on a narrow sheet its columns are turned to page by page. */
 export function ScheduleTable({ desk, table, document, findings, mayEdit }: ScheduleTableProps) {
@@ -61,7 +62,13 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
         onTouchEnd={(event) => {
           const from = touch.current;
           const to = event.changedTouches[0];
-          if (!from || !to || Math.abs(to.clientX - from.clientX) < SWIPE || Math.abs(to.clientY - from.clientY) > SWIPE / 2) return;
+          if (
+            !from ||
+            !to ||
+            Math.abs(to.clientX - from.clientX) < SWIPE ||
+            Math.abs(to.clientY - from.clientY) > SWIPE / 2
+          )
+            return;
           turn(to.clientX < from.clientX ? 1 : -1);
         }}
       >
@@ -79,7 +86,10 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
         </colgroup>
         <thead>
           <tr>
-            <th scope="col" className={`sticky top-0 z-10 bg-paper pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey ${isWays ? '' : 'border-b-2 border-ink'}`}>
+            <th
+              scope="col"
+              className={`sticky top-0 z-10 bg-paper pb-1 text-left align-bottom text-small leading-[14px] font-normal text-grey ${isWays ? '' : 'border-b-2 border-ink'}`}
+            >
               {isWays ? (
                 <>
                   LINE
@@ -91,7 +101,11 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
               )}
             </th>
             {columns.map((column) => (
-              <th key={column.id} scope="col" className={`${head} ${column.right ? 'text-right' : ''} ${shownOn(column)}`}>
+              <th
+                key={column.id}
+                scope="col"
+                className={`${head} ${column.right ? 'text-right' : ''} ${shownOn(column)}`}
+              >
                 {column.name || <span className="sr-only">{column.spoken}</span>}
                 {column.unit && (
                   <>

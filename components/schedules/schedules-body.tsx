@@ -47,8 +47,8 @@ export function SchedulesBody({ desk, worked, drawing, document, jobId, mayEdit,
         />
         {mayEdit && !empty && (
           <p className="text-grey max-lap:hidden">
-            <span className="underline decoration-dotted underline-offset-4">underlined</span>: type to change the drawing{' '}
-            <Key>Enter</Key> next <Key>Ctrl D</Key> same as above
+            <span className="underline decoration-dotted underline-offset-4">underlined</span>: type to change the
+            drawing <Key>Enter</Key> next <Key>Ctrl D</Key> same as above
           </p>
         )}
       </header>

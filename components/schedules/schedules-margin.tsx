@@ -35,7 +35,9 @@ function SinceChange({ desk, worked }: { desk: Desk; worked: Worked }) {
   const now = new Set(worked.findings.map(keyOf));
   const fresh = [...now].filter((key) => !since.before.has(key)).length;
   const gone = [...since.before].filter((key) => !now.has(key)).length;
-  const words = [fresh > 0 && `${count(fresh, 'new finding')}`, gone > 0 && `${count(gone, 'finding')} gone`].filter(Boolean).join(', ');
+  const words = [fresh > 0 && `${count(fresh, 'new finding')}`, gone > 0 && `${count(gone, 'finding')} gone`]
+    .filter(Boolean)
+    .join(', ');
   return (
     <p role="status">
       <b>{words || 'No finding came or went'}</b> <span className="text-grey">since {since.label}</span>

@@ -38,8 +38,17 @@ export function WayEdge({ part, number, backup, first, last }: WayEdgeProps) {
   const ends = `${first ? 'top-[3px]' : 'top-0'} ${last ? 'bottom-[3px]' : 'bottom-0'}`;
   return (
     <span className="relative flex h-full items-center" style={{ width: EDGE_WIDTH }} aria-hidden="true">
-      <span className={`absolute ${bar} ${ends} ${backup && first ? 'border-t-[1.4px]' : ''} ${backup && last ? 'border-b-[1.4px]' : ''}`} style={{ left: BAR - 3 }} />
-      <svg width={EDGE_WIDTH} height={HEIGHT} viewBox={`0 0 ${EDGE_WIDTH} ${HEIGHT}`} className="relative block" fill="none">
+      <span
+        className={`absolute ${bar} ${ends} ${backup && first ? 'border-t-[1.4px]' : ''} ${backup && last ? 'border-b-[1.4px]' : ''}`}
+        style={{ left: BAR - 3 }}
+      />
+      <svg
+        width={EDGE_WIDTH}
+        height={HEIGHT}
+        viewBox={`0 0 ${EDGE_WIDTH} ${HEIGHT}`}
+        className="relative block"
+        fill="none"
+      >
         <Conductor d={`M${BAR + 2} ${middle}H${CENTRE - half}`} cased={backup} />
         <Conductor d={`M${CENTRE + half} ${middle}H${RING.x - RING.r}`} cased={backup} />
         <Conductor d={`M${RING.x + RING.r} ${middle}H${EDGE_WIDTH}`} cased={backup} />

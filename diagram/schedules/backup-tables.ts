@@ -49,7 +49,16 @@ const LOADS: readonly Column[] = [
   { id: 'pf', name: 'Power', unit: 'factor', width: 6, right: true, page: 'power', spoken: 'power factor' },
   { id: 'start', name: 'Start', unit: '×', width: 5, right: true, page: 'power', spoken: 'start, times running' },
   { id: 'share', name: 'Share', unit: '%', width: 5, right: true, page: 'hours', spoken: 'share of the load, %' },
-  { id: 'without', name: 'Without it', unit: 'lasts', width: 10, right: true, page: 'stays', phone: 'hours', spoken: 'without it the backup lasts' },
+  {
+    id: 'without',
+    name: 'Without it',
+    unit: 'lasts',
+    width: 10,
+    right: true,
+    page: 'stays',
+    phone: 'hours',
+    spoken: 'without it the backup lasts',
+  },
 ];
 
 const typed = (id: string, field: FieldId): Cell => ({ field: { of: 'part', ids: [id], field } });
@@ -61,9 +70,7 @@ export function hoursAt({ bank, inverter }: BackupFigures, watts: number): numbe
 }
 
 const limited = (value: number, limit: number | undefined): Cell =>
-  limit !== undefined && exceeds(value, limit)
-    ? figure(value, 0, { beyond: true })
-    : figure(value, 0);
+  limit !== undefined && exceeds(value, limit) ? figure(value, 0, { beyond: true }) : figure(value, 0);
 
 function sourceRow(backup: BackupFigures): Row {
   const { inverter, load, hours, dcAmps } = backup;

@@ -72,7 +72,9 @@ export function cablesTable(context: Context): Table {
     );
     const way = wayOf.get(cable.id);
     const dc = wires.some(({ role }) => role === 'dc+' || role === 'dc-');
-    const typed = (field: 'ref' | 'csa' | 'cpc' | 'length' | 'lead' | 'laying' | 'material' | 'insulation' | 'ambient'): Cell => ({
+    const typed = (
+      field: 'ref' | 'csa' | 'cpc' | 'length' | 'lead' | 'laying' | 'material' | 'insulation' | 'ambient',
+    ): Cell => ({
       field: { of: 'cable', ids: [cable.id], field },
     });
     const need = needs.get(cable.id);

@@ -23,7 +23,8 @@ export const none: FigureCell = { text: '-', value: null };
 export const text = (words: string): FigureCell => ({ text: words });
 
 /** A time of a device: "40 ms", "3.2 s". */
-export const seconds = (value: number): string => (value < 1 ? `${Math.round(value * 1000)} ms` : `${value.toFixed(1)} s`);
+export const seconds = (value: number): string =>
+  value < 1 ? `${Math.round(value * 1000)} ms` : `${value.toFixed(1)} s`;
 
 /** "3 h 24", "4 h", "45 min" */
 export function hoursText(hours: number): string {

@@ -12,7 +12,10 @@ export function readLaying(cable: Cable, text: string): Reading<Cable> {
     ok: false,
     message: `How it is laid: ${METHODS.join(', ')}, then 1 to 40 circuits together, for instance B1, 3`,
   } as const;
-  const pieces = text.toUpperCase().split(/[\s,;]+/).filter((piece) => piece !== '');
+  const pieces = text
+    .toUpperCase()
+    .split(/[\s,;]+/)
+    .filter((piece) => piece !== '');
   if (pieces.length === 0 || pieces.length > 2) return refusal;
   let { method, grouped } = cable;
   for (const piece of pieces) {

@@ -47,9 +47,7 @@ export function loadsTable(context: Context, loads: readonly LoadResult[]): Tabl
   const drawn = new Map(figuresOf(context).drawn.map((each) => [each.part.id, each]));
   const results = new Map(loads.map((load) => [load.part, load]));
   const ways = new Map(context.ways.map((way) => [way.device, way.number]));
-  const placeOrder = new Map(
-    (document.survey ?? []).map((room, i) => [room.id, i] as const),
-  );
+  const placeOrder = new Map((document.survey ?? []).map((room, i) => [room.id, i] as const));
   const placeName = new Map(document.places.map((place) => [place.id, place.name]));
   const rank = (part: Part) => placeOrder.get(part.place ?? '') ?? 1e6;
   const points = document.parts

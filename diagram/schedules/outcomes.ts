@@ -21,7 +21,9 @@ export interface TriedRemedy extends Remedy {
 
 function outcomeOf(doc: Installation, way: string): Outcome | null {
   const result = wayResults(buildContext(doc)).find(({ part }) => part === way);
-  return result ? { ib: result.ib, in: result.in, iz: result.iz, dropPercent: result.dropPercent, zs: result.zs } : null;
+  return result
+    ? { ib: result.ib, in: result.in, iz: result.iz, dropPercent: result.dropPercent, zs: result.zs }
+    : null;
 }
 
 /** The edits that put a finding right, each with what the way would come to. Every one of them was tried. */

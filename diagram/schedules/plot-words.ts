@@ -11,7 +11,9 @@ import type { WayPlot } from './way-plot';
 /** "opens Q8 C16 within 100 ms" */
 function opening(plot: WayPlot, currentA: number): string {
   const latest = plot.device ? tripBand(plot.device, currentA).latestS : Infinity;
-  return Number.isFinite(latest) ? `opens ${plot.deviceName} within ${seconds(latest)}` : `does not open ${plot.deviceName} for sure`;
+  return Number.isFinite(latest)
+    ? `opens ${plot.deviceName} within ${seconds(latest)}`
+    : `does not open ${plot.deviceName} for sure`;
 }
 
 /** The time-current picture of a way. */
@@ -39,7 +41,8 @@ export function timeCurrentWords(plot: WayPlot): string[] {
     );
   }
   const battery = fault('battery');
-  if (battery && plot.device) said.push(`On battery there is no more than ${amps(battery.amps)} A: it ${opening(plot, battery.amps)}.`);
+  if (battery && plot.device)
+    said.push(`On battery there is no more than ${amps(battery.amps)} A: it ${opening(plot, battery.amps)}.`);
   if (plot.izA !== null && plot.inA !== null && plot.needA !== null && plot.needA > plot.izA)
     said.push(
       `The trouble is overload: from ${amps(plot.izA)} A to ${amps(1.45 * plot.inA)} A the device may let it pass for an hour.`,
@@ -81,6 +84,9 @@ export function hoursWords(plot: BackupPlot, off: ReadonlySet<string>): string[]
 
 export const conditionWords = (loads: readonly ConditionLoad[]): string[] =>
   loads.map(({ condition, source, va, limitVa, limitBy }) => {
-    const limit = limitVa === null ? 'no limit is given' : `${Math.round((100 * va) / limitVa)} % of ${Math.round(limitVa)} VA (${limitBy})`;
+    const limit =
+      limitVa === null
+        ? 'no limit is given'
+        : `${Math.round((100 * va) / limitVa)} % of ${Math.round(limitVa)} VA (${limitBy})`;
     return `${condition}: ${source === 'mains' ? '' : `${source} carries `}${Math.round(va)} VA, ${limit}.`;
   });

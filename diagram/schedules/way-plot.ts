@@ -69,7 +69,11 @@ function conductorsOf(way: WayFigures): Conductor[] {
       const key = `${kind} ${k}`;
       const before = found.get(key);
       if (!before || csaMm2 < before.csaMm2)
-        found.set(key, { name: `${csaMm2} mm² ${METAL[cable.material]}${kind === 'earth' ? ', earth core' : ''}`, csaMm2, k });
+        found.set(key, {
+          name: `${csaMm2} mm² ${METAL[cable.material]}${kind === 'earth' ? ', earth core' : ''}`,
+          csaMm2,
+          k,
+        });
     };
     add('live', cable.csa);
     if (cable.cpc !== undefined && cable.cpc < cable.csa) add('earth', cable.cpc);

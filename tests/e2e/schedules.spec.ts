@@ -20,7 +20,9 @@ Study;room;2x9;1x55;2;;1;1;3`;
 async function draftedJob(page: Page, place: string): Promise<string> {
   const job = await beginJob(page, place);
   const drawing = await drawingOf(page, job);
-  const { document } = (await (await page.request.get(`/api/drawings/${drawing}`)).json()) as { document: Installation };
+  const { document } = (await (await page.request.get(`/api/drawings/${drawing}`)).json()) as {
+    document: Installation;
+  };
   const surveyed = applyPatch(document, { set: { survey: parseSurvey(ROOMS).rooms } });
   const patch = diff(document, applyPatch(surveyed, draftPatch(surveyed, 3)));
   const origin = new URL((await page.request.get('/signin')).url()).origin;
@@ -39,7 +41,10 @@ async function openSchedules(page: Page, job: string, query = '') {
 }
 
 const ways = (page: Page) => page.getByRole('table', { name: 'Schedule of ways' });
-const rowOf = (page: Page, name: string) => ways(page).getByRole('row').filter({ has: page.locator(`input[value="${name}"]`) });
+const rowOf = (page: Page, name: string) =>
+  ways(page)
+    .getByRole('row')
+    .filter({ has: page.locator(`input[value="${name}"]`) });
 
 test('a size typed into the schedule is drawn, found, put right and taken back', async ({ page }) => {
   await signInAs(page, 'electrician');
@@ -120,7 +125,15 @@ test('each table is a file with its head, and its figures are those on the sheet
   const file = await download;
   expect(file.suggestedFilename()).toMatch(/^OH-\d+ Sluice End 6 ways\.csv$/);
   const records = readCsv(await readFile(await file.path(), 'utf8'));
-  expect(records.slice(0, 7).map(([name]) => name)).toEqual(['Schedule', 'Drawing', 'Revision', 'Date', 'Drawn by', 'State', 'Practice']);
+  expect(records.slice(0, 7).map(([name]) => name)).toEqual([
+    'Schedule',
+    'Drawing',
+    'Revision',
+    'Date',
+    'Drawn by',
+    'State',
+    'Practice',
+  ]);
   expect(records.filter(([name]) => name === 'Caution')).toHaveLength(2);
   const heads = records.find(([first]) => first === 'Number, fed by')!;
   const oven = records.find((record) => record[1] === 'Kitchen oven')!;
@@ -155,16 +168,35 @@ test('axe finds nothing on any schedule, light and dark, wide and narrow', async
     ['light', 390],
     ['dark', 390],
   ] as const) {
-    const context = await browser.newContext({ baseURL, colorScheme, viewport: { width, height: 844 }, reducedMotion: 'reduce' });
+    const context = await browser.newContext({
+      baseURL,
+      colorScheme,
+      viewport: { width, height: 844 },
+      reducedMotion: 'reduce',
+    });
     const page = await context.newPage();
     await signInAs(page, 'electrician');
     // The apprentice's house, with six mistakes in it: there is the most to find fault with.
-    const { rows } = (await (await page.request.get('/api/jobs?search=for review')).json()) as { rows: { id: string }[] };
+    const { rows } = (await (await page.request.get('/api/jobs?search=for review')).json()) as {
+      rows: { id: string }[];
+    };
     for (const table of ['ways', 'cables', 'loads', 'backup', 'designations']) {
       await openSchedules(page, rows[0]!.id, `?table=${table}`);
-      await page.getByText('The same as figures').first().click({ timeout: 2_000 }).catch(() => undefined);
+      await page
+        .getByText('The same as figures')
+        .first()
+        .click({ timeout: 2_000 })
+        .catch(() => undefined);
       const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-      faults.push(...violations.map(({ id, nodes }) => `${colorScheme} ${width} ${table}: ${id} at ${nodes.map(({ target }) => target.join(' ')).slice(0, 4).join('; ')}`));
+      faults.push(
+        ...violations.map(
+          ({ id, nodes }) =>
+            `${colorScheme} ${width} ${table}: ${id} at ${nodes
+              .map(({ target }) => target.join(' '))
+              .slice(0, 4)
+              .join('; ')}`,
+        ),
+      );
     }
     await context.close();
   }

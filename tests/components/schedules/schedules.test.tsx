@@ -72,7 +72,9 @@ const head = (row: string, table?: string): HTMLElement => cell(row, '#', table)
 const margin = () => within(document.querySelector('aside')!);
 /** The box that asks what it would be worth to leave a load off. */
 const load = (ref: string) =>
-  [...document.querySelectorAll<HTMLElement>('fieldset label')].find((label) => label.textContent?.startsWith(`${ref} `))?.querySelector('input') ?? null;
+  [...document.querySelectorAll<HTMLElement>('fieldset label')]
+    .find((label) => label.textContent?.startsWith(`${ref} `))
+    ?.querySelector('input') ?? null;
 const OVEN = 'kitchen.way-heavy1';
 const cable = (id: string) => store.getState().document.cables.find((each) => each.id === id)!;
 
@@ -154,7 +156,11 @@ describe('the schedule of ways', () => {
       const { method, grouped } = cable(id);
       return [method, grouped];
     });
-    expect(laid).toEqual([['C', 4], ['C', 4], ['C', 4]]);
+    expect(laid).toEqual([
+      ['C', 4],
+      ['C', 4],
+      ['C', 4],
+    ]);
     expect(store.getState().undoSteps.map(({ label }) => label)).toEqual(['3 ways: how it is laid C, 4']);
     act(() => store.getState().undo());
     expect(JSON.stringify(store.getState().document)).toBe(JSON.stringify(house));
@@ -168,7 +174,9 @@ describe('the schedule of ways', () => {
     expect(cable('bath.lamps1.run').length).toBe(15);
     await user.click(cell('veranda.way-lamps1', 'rating'));
     await user.keyboard('{Shift>}{ArrowDown}{ArrowDown}{/Shift}{Control>}d{/Control}');
-    expect([cell('living-room.way-lamps1', 'rating'), cell('living-room.way-outlets1', 'rating')].map(({ value }) => value)).toEqual(['B10', 'B10']);
+    expect(
+      [cell('living-room.way-lamps1', 'rating'), cell('living-room.way-outlets1', 'rating')].map(({ value }) => value),
+    ).toEqual(['B10', 'B10']);
     expect(store.getState().undoSteps.map(({ label }) => label)).toEqual(['Way 6: 14 to 15 m', '2 ways: rating B10']);
   });
 
@@ -232,7 +240,9 @@ describe('the other schedules', () => {
     open({ schedule: 'backup' });
     const links = screen.getAllByRole('link', { name: /as CSV$/ }).map((link) => link.getAttribute('href'));
     expect(links).toEqual(
-      ['sources', 'batteries', 'backup'].map((id) => `/api/drawings/00000000-0000-4000-8000-000000000000/csv?table=${id}`),
+      ['sources', 'batteries', 'backup'].map(
+        (id) => `/api/drawings/00000000-0000-4000-8000-000000000000/csv?table=${id}`,
+      ),
     );
   });
 });

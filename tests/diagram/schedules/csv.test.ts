@@ -5,7 +5,15 @@ import { csvRows } from '@/diagram/schedules/csv';
 import { house, rowIn, tableIn, typed } from './home';
 import { readCsv } from './read-csv';
 
-const head = { number: 'OH-207', title: 'Quarry Steps', revision: 'B', drawnOn: '2026-11-30', drawnBy: 'T. B.', state: 'issued', practice: 'IEC' };
+const head = {
+  number: 'OH-207',
+  title: 'Quarry Steps',
+  revision: 'B',
+  drawnOn: '2026-11-30',
+  drawnBy: 'T. B.',
+  state: 'issued',
+  practice: 'IEC',
+};
 
 describe('a table as a file', () => {
   it.each(TABLE_IDS)('%s: every record has as many fields as the next, and every row is there', (id) => {
@@ -42,6 +50,11 @@ describe('a table as a file', () => {
     const row = records.find(([first]) => first === '5 mains')!;
     const at = (name: string) => row[heads.indexOf(name)];
     expect(at('Name')).toBe(`'${evil}`);
-    expect([at('Cable, mm²'), at('Run, metres'), at('Capacity Iz, A'), at('Rating In, A')]).toEqual(['2.5', '15', '16.8', '16']);
+    expect([at('Cable, mm²'), at('Run, metres'), at('Capacity Iz, A'), at('Rating In, A')]).toEqual([
+      '2.5',
+      '15',
+      '16.8',
+      '16',
+    ]);
   });
 });

@@ -30,7 +30,12 @@ describe('typing into a cell', () => {
   ])('%s takes %s', (column, text, label) => {
     const after = typed(house, tables.ways, oven, column, text);
     expect(after.label).toBe(label);
-    expect(shown(after.document, oven, column)).toBe(label.split(' to ').at(-1)!.replace(/ (mm2|m)$/, ''));
+    expect(shown(after.document, oven, column)).toBe(
+      label
+        .split(' to ')
+        .at(-1)!
+        .replace(/ (mm2|m)$/, ''),
+    );
     expect(DocumentSchema.safeParse(after.document).success).toBe(true);
   });
 
@@ -45,7 +50,10 @@ describe('typing into a cell', () => {
   it('changes every run of the way that was as thick, and the protective core with it', () => {
     const { document } = typed(house, tables.ways, oven, 'csa', '4');
     const changed = document.cables.filter(({ id }) => id.startsWith('kitchen.heavy1'));
-    expect(changed.map(({ csa, cpc }) => [csa, cpc])).toEqual([[4, 4], [4, 4]]);
+    expect(changed.map(({ csa, cpc }) => [csa, cpc])).toEqual([
+      [4, 4],
+      [4, 4],
+    ]);
     expect(document.cables.filter(({ id }) => !id.startsWith('kitchen.heavy1'))).toEqual(
       house.cables.filter(({ id }) => !id.startsWith('kitchen.heavy1')),
     );
@@ -85,7 +93,13 @@ describe('a text that cannot be read', () => {
     ['ways', 'kitchen.way-heavy1', 'length', 'far', 'Metres, 1 to 500'],
     ['ways', 'kitchen.way-heavy1', 'length', '', 'Metres, 1 to 500'],
     ['ways', 'kitchen.way-heavy1', 'csa', '3', 'Cable, mm²: one of 1.5, 2.5, 4, 6, 10, 16, 25, 35'],
-    ['ways', 'kitchen.way-heavy1', 'laying', 'under the floor', 'How it is laid: A1, A2, B1, B2, C, D1, then 1 to 40 circuits together, for instance B1, 3'],
+    [
+      'ways',
+      'kitchen.way-heavy1',
+      'laying',
+      'under the floor',
+      'How it is laid: A1, A2, B1, B2, C, D1, then 1 to 40 circuits together, for instance B1, 3',
+    ],
     ['ways', 'kitchen.way-heavy1', 'label', 'x'.repeat(81), 'Name, 80 letters at most'],
     ['ways', 'kitchen.way-heavy1', 'rating', '', 'Rating: for instance B16'],
     ['loads', 'hall.lamp2', 'pf', '1.2', 'Power factor, 0.05 to 1'],

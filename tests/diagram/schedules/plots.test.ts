@@ -84,7 +84,11 @@ describe('the picture of a way', () => {
       const { stations } = plot.drop!;
       expect(stations[0]).toMatchObject({ metres: 0, percent: 0 });
       expect(stations.at(-1)!.percent).toBeCloseTo(dropPercent, 5);
-      expect(stations.every((each, i) => i === 0 || (each.metres > stations[i - 1]!.metres && each.percent >= stations[i - 1]!.percent))).toBe(true);
+      expect(
+        stations.every(
+          (each, i) => i === 0 || (each.metres > stations[i - 1]!.metres && each.percent >= stations[i - 1]!.percent),
+        ),
+      ).toBe(true);
     }
   });
 
@@ -105,7 +109,9 @@ describe('the picture of a way', () => {
     expect(timeCurrentWords(plot)[1]).toBe(
       'A fault to earth, 7.72 A, does not open Q8 C16 for sure; it is cleared in 40 ms, with Q2, 200 ms are allowed.',
     );
-    expect(dropWords(plot)[0]).toBe('1.71 % is lost up to E7, 17 m from the meter; 5 % is allowed for outlets, fans and heat.');
+    expect(dropWords(plot)[0]).toBe(
+      '1.71 % is lost up to E7, 17 m from the meter; 5 % is allowed for outlets, fans and heat.',
+    );
     const { document } = typed(house, table, rowIn(table, 'kitchen.way-heavy1'), 'csa', '1.5');
     expect(timeCurrentWords(wayPlot(buildContext(document), 'kitchen.way-heavy1')!).at(-1)).toBe(
       'The trouble is overload: from 12.3 A to 23.2 A the device may let it pass for an hour.',
@@ -155,7 +161,11 @@ describe('the load by condition', () => {
   it('is the demand on mains and all at once on battery, each against its rating', () => {
     const [result] = examination.backup;
     const loads = conditionLoads(context);
-    expect(loads.map(({ condition, source }) => `${condition} ${source}`)).toEqual(['mains mains', 'outage G1', 'main-off G1']);
+    expect(loads.map(({ condition, source }) => `${condition} ${source}`)).toEqual([
+      'mains mains',
+      'outage G1',
+      'main-off G1',
+    ]);
     expect(loads[0]).toMatchObject({ limitVa: 63 * 230, watts: expect.closeTo(examination.supply.demandWatts, 5) });
     expect(loads[1]).toMatchObject({ limitVa: 600, va: expect.closeTo(result!.va, 5) });
   });

@@ -19,7 +19,8 @@ export function readCsv(text: string): string[][] {
       field = '';
       records.push([]);
       i++;
-    } else if (sign === '"' || sign === '\n' || sign === '\r') throw new Error(`A ${JSON.stringify(sign)} stands loose at ${i}.`);
+    } else if (sign === '"' || sign === '\n' || sign === '\r')
+      throw new Error(`A ${JSON.stringify(sign)} stands loose at ${i}.`);
     else field += sign;
   }
   if (quoted || field !== '' || records.at(-1)!.length > 0) throw new Error('The file ends in the middle of a record.');

@@ -27,7 +27,12 @@ describe('the schedule of ways', () => {
         result.capacity,
         result.demandWatts,
       ]);
-      for (const [column, figure] of [['drop', result.dropPercent], ['zs', result.zs], ['zsMax', result.zsMax], ['opens', result.disconnects]] as const)
+      for (const [column, figure] of [
+        ['drop', result.dropPercent],
+        ['zs', result.zs],
+        ['zsMax', result.zsMax],
+        ['opens', result.disconnects],
+      ] as const)
         if (figure === null) expect([result.part, column, value(row, column)]).toEqual([result.part, column, null]);
         else expect(value(row, column)).toBeCloseTo(figure, 5);
     }
@@ -36,7 +41,9 @@ describe('the schedule of ways', () => {
   it('numbers the ways as the drawing does, mains first, each group by itself', () => {
     expect(ways.rows.map(({ name }) => name)).toEqual(ways.rows.map((_, i) => `Way ${i + 1}`));
     const groups = ways.rows.map(({ group }) => group);
-    expect(groups.slice(0, 12).every((group) => group === 'mains') && groups.slice(12).every((group) => group === 'backup')).toBe(true);
+    expect(
+      groups.slice(0, 12).every((group) => group === 'mains') && groups.slice(12).every((group) => group === 'backup'),
+    ).toBe(true);
   });
 
   it('names as its cable the run that leaves the board, not those in the room', () => {
@@ -46,7 +53,8 @@ describe('the schedule of ways', () => {
 
   it('gives behind the inverter no more short circuit than the inverter can drive', () => {
     // The demonstration's inverter states 1200 VA at a start: 1200 / 230 = 5.2 A, by hand.
-    for (const row of ways.rows.filter(({ group }) => group === 'backup')) expect(value(row, 'fault')).toBeCloseTo(1200 / 230, 6);
+    for (const row of ways.rows.filter(({ group }) => group === 'backup'))
+      expect(value(row, 'fault')).toBeCloseTo(1200 / 230, 6);
   });
 
   it('says by hand what a short circuit at the end of the oven comes to', () => {
@@ -74,7 +82,11 @@ describe('the schedule of ways', () => {
       const { cable, ...rest } = wire;
       return cable?.startsWith('kitchen.heavy1') ? rest : wire;
     });
-    const document = { ...applyPatch(house, { set: { parts: [bare] } }), wires, supply: { ...house.supply, ra: undefined } };
+    const document = {
+      ...applyPatch(house, { set: { parts: [bare] } }),
+      wires,
+      supply: { ...house.supply, ra: undefined },
+    };
     const row = rowIn(tableIn(document, 'ways'), 'kitchen.way-heavy1');
     const lacks = (column: string) => (row.cells[column] as FigureCell).lacks;
     expect([lacks('iz'), lacks('zs'), lacks('in'), lacks('csa')]).toEqual([
@@ -88,10 +100,23 @@ describe('the schedule of ways', () => {
 
 describe('the other schedules', () => {
   it('have every cable, every load and every named part once', () => {
-    const ids = (id: 'cables' | 'loads' | 'designations') => tableIn(house, id).rows.map((row) => row.id).sort();
+    const ids = (id: 'cables' | 'loads' | 'designations') =>
+      tableIn(house, id)
+        .rows.map((row) => row.id)
+        .sort();
     expect(ids('cables')).toEqual(house.cables.map(({ id }) => id).sort());
-    expect(ids('loads')).toEqual(house.parts.filter(isPoint).map(({ id }) => id).sort());
-    expect(ids('designations')).toEqual(house.parts.filter(({ kind }) => kind !== 'joint').map(({ id }) => id).sort());
+    expect(ids('loads')).toEqual(
+      house.parts
+        .filter(isPoint)
+        .map(({ id }) => id)
+        .sort(),
+    );
+    expect(ids('designations')).toEqual(
+      house.parts
+        .filter(({ kind }) => kind !== 'joint')
+        .map(({ id }) => id)
+        .sort(),
+    );
   });
 
   it('say of each load what it gets in each condition, as the examination does', () => {
@@ -117,7 +142,8 @@ describe('the other schedules', () => {
     for (const id of TABLE_IDS) {
       const table = tableIn(house, id);
       for (const row of table.rows)
-        for (const { id: column } of table.columns) expect([id, row.id, column, row.cells[column] !== undefined]).toEqual([id, row.id, column, true]);
+        for (const { id: column } of table.columns)
+          expect([id, row.id, column, row.cells[column] !== undefined]).toEqual([id, row.id, column, true]);
     }
   });
 
@@ -131,6 +157,7 @@ describe('the other schedules', () => {
     const drawn = new Set([...house.parts, ...house.cables].map(({ id }) => id));
     for (const id of TABLE_IDS)
       for (const row of tableIn(house, id).rows)
-        for (const cell of Object.values(row.cells)) if (isTyped(cell)) expect(cell.field.ids.every((each) => drawn.has(each))).toBe(true);
+        for (const cell of Object.values(row.cells))
+          if (isTyped(cell)) expect(cell.field.ids.every((each) => drawn.has(each))).toBe(true);
   });
 });
