@@ -30,7 +30,8 @@ export interface SheetFrameProps {
   practice?: { id: PracticeId; supply: Supply };
   stillLive?: string;
   foot?: ReactNode;
-  margin?: ReactNode;
+  /** what it holds; a function is given what shuts it where it is a drawer */
+  margin?: ReactNode | ((shut: () => void) => ReactNode);
   /** what the margin holds, in words: "3 findings, 1 remark"; on a narrow screen it is the button that opens it */
   marginLabel?: string;
   narrowMargin?: 'above' | 'drawer';
@@ -41,8 +42,8 @@ export interface SheetFrameProps {
   keys?: readonly KeyHelp[];
   /** the list behind `?`, where the sheet opens it by a command as well; else the frame keeps it */
   help?: { open: boolean; set(open: boolean): void };
-  /** the first stop of the keyboard: a shorter way into the sheet */
-  skip?: { label: string; go(): void };
+  /** the first stop of the keyboard: a shorter way into the sheet; `word` names it in the head, with its key */
+  skip?: { label: string; word: string; go(): void };
   /** the sheet has a field marked `data-find`, which `/` goes to */
   find?: boolean;
   /** screen: the sheet never grows beyond the window, as a canvas wants it; page: it may, on a narrow screen */
@@ -82,7 +83,7 @@ export function SheetFrame(props: SheetFrameProps) {
     { keys: ['?'], does: 'this list' },
   ];
 
-  const height = fit === 'screen' ? 'h-dvh' : 'min-h-dvh lap:h-dvh';
+  const height = fit === 'screen' ? 'h-dvh' : 'min-h-dvh lap:h-dvh print:h-auto';
   return (
     <div className={`flex flex-col p-1 sm:px-2 sm:pb-2 ${height}`}>
       {props.skip && (
@@ -94,7 +95,7 @@ export function SheetFrame(props: SheetFrameProps) {
           {props.skip.label}
         </button>
       )}
-      <header className="flex min-h-12 items-center gap-2 max-lap:pr-1 lap:h-8 lap:min-h-0 lap:items-end lap:px-4">
+      <header className="flex min-h-12 print:hidden items-center gap-2 max-lap:pr-1 lap:h-8 lap:min-h-0 lap:items-end lap:px-4">
         <SheetPicker tabs={tabs} current={current} sheet={sheet} />
         <SheetTabs tabs={tabs} current={current} />
         {props.tools && <div className="flex gap-2 lap:hidden">{props.tools}</div>}
@@ -113,6 +114,11 @@ export function SheetFrame(props: SheetFrameProps) {
               find /
             </button>
           )}
+          {props.skip && (
+            <button type="button" className="cursor-pointer hover:underline max-lap:hidden" onClick={props.skip.go}>
+              {props.skip.word}
+            </button>
+          )}
           <button type="button" className="cursor-pointer hover:underline max-sm:hidden" onClick={() => setHelpOpen(true)}>
             keys ?
           </button>
@@ -121,10 +127,10 @@ export function SheetFrame(props: SheetFrameProps) {
       <Paper>
         {props.strip}
         <div className="flex min-h-0 flex-1 flex-col lap:flex-row">
-          <main className={`relative min-h-0 min-w-0 flex-1 ${fit === 'screen' ? 'overflow-hidden' : 'lap:overflow-auto'}`}>{props.children}</main>
+          <main className={`relative min-h-0 min-w-0 flex-1 ${fit === 'screen' ? 'overflow-hidden' : 'lap:overflow-auto print:overflow-visible'}`}>{props.children}</main>
           {margin && (
             <Margin label={marginLabel} narrow={narrowMargin} open={marginOpen} onClose={() => setMarginOpen(false)}>
-              {margin}
+              {typeof margin === 'function' ? margin(() => setMarginOpen(false)) : margin}
             </Margin>
           )}
         </div>

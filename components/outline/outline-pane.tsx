@@ -135,7 +135,7 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
       <div className="flex items-center gap-2 border-b border-ink px-3 py-1">
         <h2 className="flex-1 text-head font-bold">Outline</h2>
         <Button aria-haspopup="dialog" onClick={() => setListing('commands')}>
-          Commands
+          What can be done
         </Button>
         <Button onClick={onClose}>Close</Button>
       </div>

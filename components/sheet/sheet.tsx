@@ -183,7 +183,7 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
       fit="screen"
       keys={KEYS_HELP}
       help={{ open: help, set: setHelp }}
-      skip={{ label: 'To the outline: the drawing as a tree', go: openOutline }}
+      skip={{ label: 'To the outline: the drawing as a tree', word: 'outline o', go: openOutline }}
       strip={<TroubleStrip drawing={drawing} />}
       marginLabel={open === 1 ? '1 finding' : `${open} findings`}
       margin={

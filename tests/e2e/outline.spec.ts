@@ -23,7 +23,7 @@ async function beginJob(page: Page, title: string): Promise<string> {
 
 const tree = (page: Page) => page.getByRole('tree', { name: /^Outline of/ });
 const inHand = (page: Page) => page.locator('[role=treeitem][tabindex="0"]');
-const saved = (page: Page) => expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 20_000 });
+const saved = (page: Page) => expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 40_000 });
 
 async function savedHome(page: Page, job: string): Promise<Home> {
   const { drawingId } = (await (await page.request.get(`/api/jobs/${job}`)).json()) as { drawingId: string };
@@ -226,13 +226,18 @@ for (const scheme of ['light', 'dark'] as const)
       await page.getByRole('button', { name: 'Place the supply' }).click();
       await saved(page);
       // by finger or mouse: the foot's own word opens it, a tap takes a line, the button says what can be done
-      await page.getByRole('button', { name: 'outline', exact: true }).click();
+      await page.getByRole('button', { name: width < 1100 ? 'outline' : 'outline o', exact: true }).click();
+      // What is in hand on the sheet is in sight in the outline: its board is unfolded.
+      const board = page.getByRole('treeitem', { name: /^Board/ });
+      await expect(board).toHaveAttribute('aria-expanded', 'true');
+      await board.locator('[data-fold]').click();
+      await expect(board).toHaveAttribute('aria-expanded', 'false');
       const faults = await look('folded');
-      await page.getByRole('treeitem', { name: /^Board/ }).locator('[data-fold]').click();
+      await board.locator('[data-fold]').click();
       await page.getByRole('treeitem', { name: /^Q0/ }).click();
       await expect(page.getByRole('treeitem', { name: /^Q0/ })).toHaveAttribute('aria-selected', 'true');
       faults.push(...(await look('unfolded')));
-      await page.getByRole('button', { name: 'Commands' }).click();
+      await page.getByRole('button', { name: 'What can be done' }).click();
       faults.push(...(await look('commands of a line')));
       await page.getByRole('option', { name: /^Edit the rating/ }).click();
       await expect(page.getByRole('dialog', { name: 'Edit Q0' })).toBeVisible();

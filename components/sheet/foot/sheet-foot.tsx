@@ -103,7 +103,9 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
               undo
             </button>
           )}
-          <FootWord onClick={() => context.outline()}>outline</FootWord>
+          <FootWord className="lap:hidden" onClick={() => context.outline()}>
+            outline
+          </FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'history' })}>history</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'commands' })}>commands</FootWord>
           <FootWord onClick={() => view.getState().setMode({ kind: 'find' })}>find</FootWord>
@@ -121,11 +123,11 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
   );
 }
 
-function FootWord({ onClick, children }: { onClick(): void; children: string }) {
+function FootWord({ onClick, className = '', children }: { onClick(): void; className?: string; children: string }) {
   return (
     <button
       type="button"
-      className="cursor-pointer underline underline-offset-2 pointer-coarse:min-h-11"
+      className={`cursor-pointer underline underline-offset-2 pointer-coarse:min-h-11 ${className}`}
       onClick={onClick}
     >
       {children}
