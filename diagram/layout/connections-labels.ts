@@ -35,17 +35,24 @@ const at = (x: number, y: number, horizontal: Anchor['horizontal'], vertical: An
   vertical,
 });
 
+/** Beside a terminal, at its corners first, then a little further off: symbols and loops leave different ground free. */
 function markPlaces(t: { x: number; y: number }): Anchor[] {
-  const far = RING + 90;
+  const near = RING + 90;
+  const corners = [60, 130, 200, 280].flatMap((dy) =>
+    [near, near + 100].flatMap((far) => [
+      at(t.x + far, t.y - dy, 'start', 'bottom'),
+      at(t.x - far, t.y - dy, 'end', 'bottom'),
+      at(t.x + far, t.y + dy, 'start', 'top'),
+      at(t.x - far, t.y + dy, 'end', 'top'),
+    ]),
+  );
   return [
-    at(t.x + far, t.y - 60, 'start', 'bottom'),
-    at(t.x - far, t.y - 60, 'end', 'bottom'),
-    at(t.x + far, t.y + 60, 'start', 'top'),
-    at(t.x - far, t.y + 60, 'end', 'top'),
-    at(t.x + far, t.y, 'start', 'middle'),
-    at(t.x - far, t.y, 'end', 'middle'),
-    at(t.x, t.y - far, 'middle', 'bottom'),
-    at(t.x, t.y + far, 'middle', 'top'),
+    ...corners.slice(0, 4),
+    at(t.x + near, t.y, 'start', 'middle'),
+    at(t.x - near, t.y, 'end', 'middle'),
+    at(t.x, t.y - near, 'middle', 'bottom'),
+    at(t.x, t.y + near, 'middle', 'top'),
+    ...corners.slice(4),
   ];
 }
 
@@ -162,6 +169,7 @@ export function letterPage(
           lines: [[{ text: t.mark, tone: 'grey' }]],
           places: markPlaces(t),
           optional: true,
+          clear: 30,
         });
     }
   for (const { box } of inside) ground.add(box);

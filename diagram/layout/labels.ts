@@ -21,6 +21,8 @@ export interface Label {
   spaced?: boolean;
   /** left out where none of its places is free: it is written elsewhere too */
   optional?: boolean;
+  /** 1/100 mm kept free round it; a single sign needs less than a line of words */
+  clear?: number;
 }
 
 /** A place: a point of the block's edge, and which point of the block stands there. */
@@ -177,13 +179,13 @@ export function placeLabel(ground: Ground, label: Label): Block | null {
   if (lines.length > 1) tries.push({ ...whole, size: Math.min(label.size, SMALL), lines: [lines[0]!] });
   for (const candidate of label.places) {
     const block = blockAt(whole, candidate);
-    if (ground.overlap(block) === 0) return take(ground, block);
+    if (ground.overlap(block, label.clear) === 0) return take(ground, block);
   }
   if (label.optional) return null;
   for (const variant of tries)
     for (const candidate of strays(label.places, Math.round(BODY * 0.8))) {
       const block = blockAt(variant, candidate);
-      if (ground.overlap(block) === 0) return take(ground, block);
+      if (ground.overlap(block, label.clear) === 0) return take(ground, block);
     }
   return null;
 }

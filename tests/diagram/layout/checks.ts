@@ -4,6 +4,9 @@ import { overviewGraph } from '@/diagram/layout/overview-graph';
 import { netsOf } from '@/diagram/layout/overview-routes';
 import type { Point, Scene, ScenePart, SceneText } from '@/diagram/layout/scene';
 import { textBox } from '@/diagram/layout/text-box';
+import { symbolById } from '@/diagram/symbols';
+import { boxesAlong, stretchesOfPath } from '@/diagram/symbols/flatten';
+import { turnedPoint } from '@/diagram/symbols/turn';
 
 /** What must hold of every scene; each check lists what breaks it, so that a failure names the place. */
 
@@ -130,6 +133,66 @@ export function textsOnParts(doc: Installation, scene: Scene): string[] {
       )
       .map((part) => `"${owned.text.text}" on ${part.id}`),
   );
+}
+
+/** Texts that meet a stroke of a symbol, or its own lettering, on the connections face: also inside their own device's box. */
+export function textsOnStrokes(doc: Installation, scene: Scene): string[] {
+  if (scene.face !== 'connections') return [];
+  const boxes = scene.parts.flatMap((part) => {
+    if (isLongBar(part)) return [];
+    const symbol = symbolById(part.symbol, part.width);
+    return symbol.strokes
+      .flatMap(({ d }) => stretchesOfPath(d))
+      .flatMap((stretch) => boxesAlong(stretch, 60, 9))
+      .map((box) => {
+        const [p, q] = [
+          turnedPoint(box.x, box.y, symbol, part.turn),
+          turnedPoint(box.x + box.width, box.y + box.height, symbol, part.turn),
+        ];
+        return {
+          id: part.id,
+          x: part.x + Math.min(p.x, q.x),
+          y: part.y + Math.min(p.y, q.y),
+          width: Math.abs(p.x - q.x),
+          height: Math.abs(p.y - q.y),
+        };
+      });
+  });
+  return texts(scene).flatMap(({ text, box }) =>
+    boxes.filter((stroke) => overlap(box, stroke)).map(({ id }) => `"${text.text}" on a stroke of ${id}`),
+  );
+}
+
+/** Terminals of devices that a wire ends at and whose mark is written nowhere beside them. */
+export function unmarkedTerminals(doc: Installation, scene: Scene): string[] {
+  if (scene.face !== 'connections') return [];
+  const wired = new Set(scene.runs.flatMap((run) => [run.from.join(' '), run.to.join(' ')]));
+  return scene.parts
+    .filter((part) => part.kind !== 'joint')
+    .flatMap((part) =>
+      part.terminals
+        .filter(({ mark }) => wired.has(`${part.id} ${mark}`) && !part.texts.some(({ text }) => text === mark))
+        .map(({ mark }) => `${part.id} ${mark}`),
+    );
+}
+
+/** Bands follow each other without a gap, and what stands in a room stands in the band of rooms. */
+export function brokenBands(_: Installation, scene: Scene): string[] {
+  const gaps = scene.bands
+    .slice(1)
+    .filter((band, i) => band.y !== scene.bands[i]!.y + scene.bands[i]!.height || band.height <= 0)
+    .map(({ name }) => `gap before ${name}`);
+  const rooms = scene.bands.find(({ name }) => name === 'ROOMS');
+  const out = scene.parts
+    .filter((part) => part.frame?.startsWith('room:') && rooms)
+    .filter((part) => part.y < rooms!.y || part.y + part.height > rooms!.y + rooms!.height)
+    .map(({ id }) => `${id} outside the rooms`);
+  const lanes = scene.frames.filter(({ kind }) => kind === 'lane');
+  const inLane = scene.parts
+    .filter((part) => part.frame?.startsWith('room:'))
+    .filter((part) => lanes.some((lane) => overlap(lane, part)))
+    .map(({ id }) => `${id} in a lane`);
+  return [...gaps, ...out, ...inLane];
 }
 
 export function textsOnRuns(doc: Installation, scene: Scene): string[] {

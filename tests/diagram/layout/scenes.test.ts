@@ -15,6 +15,8 @@ const CHECKS: [name: string, check: (doc: Installation, scene: Scene) => string[
   ['no text lies on another', (_, scene) => check.overlaidTexts(scene)],
   ['no text lies on a part', check.textsOnParts],
   ['no text lies on a run', check.textsOnRuns],
+  ['no text lies on a stroke of a symbol', check.textsOnStrokes],
+  ['bands and lanes hold', check.brokenBands],
   ['every number is whole', (_, scene) => check.fractions(scene)],
   ['every crossing is marked', check.unmarkedCrossings],
 ];
@@ -49,13 +51,30 @@ describe('scenes', () => {
     expect(broken([['six rooms', toldHome()]], (doc) => [...overview(doc), ...connections(doc)])).toEqual([]);
   });
 
+  it('writes beside every wired terminal what it is', () => {
+    const homes: [string, Installation][] = [...examples(), ['six rooms', toldHome()]];
+    for (const [name, doc] of homes)
+      expect([name, ...connections(doc).flatMap((scene) => check.unmarkedTerminals(doc, scene))]).toEqual([name]);
+  });
+
   it('draws the overview of 200 drafted homes without a fault', { timeout: 240_000 }, () => {
     const homes = draftedHomes(200, 7).map((doc, i): [string, Installation] => [`home ${i}`, doc]);
     expect(broken(homes, overview)).toEqual([]);
   });
 
-  it('draws the connections of 24 drafted homes without a fault', { timeout: 240_000 }, () => {
-    const homes = draftedHomes(24, 11).map((doc, i): [string, Installation] => [`home ${i}`, doc]);
+  it('draws the connections of 200 drafted homes without a fault: the board and two rooms of each', { timeout: 240_000 }, () => {
+    const homes = draftedHomes(200, 7).map((doc, i): [string, Installation] => [`home ${i}`, doc]);
+    let turn = 0;
+    const some = (doc: Installation): Scene[] => {
+      const [board, ...rooms] = connectionPages(doc);
+      const chosen = rooms.length > 2 ? [rooms[turn++ % rooms.length]!, rooms[turn++ % rooms.length]!] : rooms;
+      return [...(board ? [board] : []), ...chosen].map(({ place }) => buildScene(doc, 'connections', { place }));
+    };
+    expect(broken(homes, some)).toEqual([]);
+  });
+
+  it('draws every page of the connections of 12 drafted homes without a fault', { timeout: 240_000 }, () => {
+    const homes = draftedHomes(12, 11).map((doc, i): [string, Installation] => [`home ${i}`, doc]);
     expect(broken(homes, connections)).toEqual([]);
   });
 });
