@@ -4,7 +4,7 @@ import { useEffect, useRef, useState, type CSSProperties, type KeyboardEvent, ty
 import { symbolFor } from '@/diagram/symbols';
 import { light } from '@/diagram/symbols/palette';
 import { pictureHref } from '@/lib/shared/uploads';
-import { PlanPart } from './plan-part';
+import { LETTERS, PlanPart } from './plan-part';
 import type { Plan, Point } from './use-plan';
 
 /** 1/100 mm of paper round the picture */
@@ -13,6 +13,8 @@ const STEP = 250;
 const FAR = 1000;
 const ZOOM = 1.4;
 const MOST_ZOOM = 8;
+/** px, of designations, when the plan opens */
+const LEAST_PX = 11;
 /** px that a hand moves before it drags */
 const THRESHOLD = { mouse: 4, pen: 6, touch: 10 } as const;
 
@@ -38,6 +40,15 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
   const drag = useRef<{ from: Point; at: Point; moved: boolean; threshold: number } | null>(null);
   const { plan, placed, placing, ghost, carried, inHand, rights } = state;
   const held = inHand[0];
+
+  useEffect(() => {
+    // On a small screen the whole plan would be too small to read: it opens larger, and is scrolled.
+    const frame = requestAnimationFrame(() => {
+      const scale = svg.current?.getScreenCTM()?.a ?? 0;
+      if (scale > 0) setZoom((now) => (now === 1 ? Math.min(3, Math.max(1, LEAST_PX / (LETTERS * scale))) : now));
+    });
+    return () => cancelAnimationFrame(frame);
+  }, []);
 
   useEffect(() => {
     box.current?.querySelector('[data-held]')?.scrollIntoView({ block: 'nearest', inline: 'nearest' });

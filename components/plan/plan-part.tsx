@@ -4,8 +4,8 @@ import type { Part, PlanPosition } from '@/diagram/document/schema';
 import { symbolFor } from '@/diagram/symbols';
 import { turnedSize } from '@/diagram/symbols/turn';
 
-/** 1/100 mm */
-const LETTERS = 380;
+/** 1/100 mm, height of a designation */
+export const LETTERS = 380;
 const ROOM = 150;
 
 interface PlanPartProps {

@@ -100,7 +100,15 @@ export function PlanSheet({ view, me, list, storey }: PlanSheetProps) {
       keys={KEYS}
       strip={<TroubleStrip drawing={drawing} />}
       marginLabel={waits === 0 ? 'All placed' : `${waits} to place`}
-      margin={<Tray state={state} onCarry={carry} />}
+      margin={(shut) => (
+        <Tray
+          state={state}
+          onCarry={(id) => {
+            shut();
+            carry(id);
+          }}
+        />
+      )}
       tools={
         rights.edit &&
         showsPlan && (
