@@ -24,8 +24,6 @@ const PARTS = 500;
 const ZOOM = 0.9;
 const FRAMES = 100;
 const ROUNDS = 5;
-/** turns of the wheel after which the whole home is in sight */
-const WHOLE = 7;
 const LONG_TASK = 50;
 
 const median = (values: readonly number[]): number => quantile(values, 0.5);
@@ -185,8 +183,8 @@ async function measureCanvas(report: (measure: CanvasMeasure) => void): Promise<
     });
     for (const measure of await frames(sheet, bare, 'at reading size')) report(measure);
     report(await examining(sheet));
-    await zoomOut(sheet, WHOLE);
-    await zoomOut(bare, WHOLE);
+    await zoomOut(sheet, 'key');
+    await zoomOut(bare, 'wheel');
     for (const measure of await frames(sheet, bare, 'the whole home in sight')) report(measure);
     await sheet.goto(`${app.address}${job}/connections?place=${encodeURIComponent(place)}`);
     await settled(sheet);

@@ -233,6 +233,8 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
         selectionOnDrag={!coarse}
         selectionMode={SelectionMode.Partial}
         panOnDrag={coarse ? true : PAN_MOUSE}
+        // A wheel moves the drawing, as it does in every window that is taller than its frame; with Ctrl, or a pinch, it zooms.
+        panOnScroll
         zoomOnDoubleClick={false}
         nodeDragThreshold={4}
         elevateNodesOnSelect={false}

@@ -2,6 +2,7 @@
 
 import { Note } from '@/components/ui/note';
 import type { Examination, WayResult } from '@/diagram/rules/examination';
+import type { Finding } from '@/diagram/rules/types';
 import { keyOf } from '../margin/notes';
 
 const amps = (value: number | null): string => (value === null ? '-' : `${Number(value.toFixed(2))} A`);
@@ -15,7 +16,9 @@ function wayOf(before: Examination | null, after: Examination): WayResult | unde
   );
 }
 
-function Figures({ way }: { way: WayResult }) {
+function Figures({ way, findings }: { way: WayResult; findings: readonly Finding[] }) {
+  // Without a value that the drawing lacks, nobody can say; where it can be said, it is a danger.
+  const judged = findings.some((finding) => finding.severity === 'danger' && finding.parts.includes(way.part));
   const rows: [string, string][] = [
     ['way', way.label || 'without a name'],
     [
@@ -27,7 +30,9 @@ function Figures({ way }: { way: WayResult }) {
     [
       'fault',
       way.disconnects === null
-        ? 'nothing clears it'
+        ? judged
+          ? 'nothing clears it'
+          : 'not known'
         : `cleared in ${Number(way.disconnects.toPrecision(2))} s${way.rcd ? ', rcd' : ''}`,
     ],
   ];
@@ -43,20 +48,23 @@ function Figures({ way }: { way: WayResult }) {
   );
 }
 
+/** The same finding, though it may speak of one part more or less than before. */
+const isSame = (a: Finding, b: Finding): boolean =>
+  a.rule === b.rule && [...a.parts, ...a.wires].some((id) => b.parts.includes(id) || b.wires.includes(id));
+
 /** What the ghost would change: the way's figures, and findings that come or go. */
 export function IfPlaced({ before, after }: { before: Examination | null; after: Examination | null }) {
   if (!after) return <p className="text-grey">Being examined.</p>;
-  const old = new Set((before?.findings ?? []).map(keyOf));
-  const next = new Set(after.findings.map(keyOf));
-  const comes = after.findings.filter((finding) => !old.has(keyOf(finding)));
-  const goes = (before?.findings ?? []).filter((finding) => !next.has(keyOf(finding)));
+  const old = before?.findings ?? [];
+  const comes = after.findings.filter((finding) => !old.some((other) => isSame(finding, other)));
+  const goes = old.filter((finding) => !after.findings.some((other) => isSame(finding, other)));
   const way = wayOf(before, after);
   return (
     <div className="flex flex-col gap-4">
       <h2 className="text-head font-bold">
         If placed <span className="font-normal text-grey">before you press Enter</span>
       </h2>
-      {way && <Figures way={way} />}
+      {way && <Figures way={way} findings={after.findings} />}
       {comes.length === 0 && (
         <Note heading="No new finding">{goes.length > 0 ? undefined : 'As the drawing stands.'}</Note>
       )}

@@ -67,7 +67,8 @@ export function Strip({ scene, notes }: { scene: Scene; notes: readonly MarkedNo
     <div className="min-w-0 sm:w-[208px] sm:shrink-0">
       {rooms.length > 0 && (
         <p className="text-small leading-[14px] text-grey">
-          {visible === rooms.length ? `${rooms.length} rooms in sight` : `${visible} of ${rooms.length} rooms in sight`}
+          {visible < rooms.length && `${visible} of `}
+          {rooms.length === 1 ? '1 room' : `${rooms.length} rooms`} in sight
         </p>
       )}
       <svg

@@ -15,17 +15,16 @@ function prove(document: Installation, finding: Finding): Proof {
   const context = buildContext(document);
   const shown = showFault(context, finding);
   const remedies = remediesFor(document, finding);
-  if (!shown) return { remedies, shown, walk: null, cannot: null };
+  if (!shown) return { remedies, walk: null, cannot: null };
   try {
     return {
       remedies,
-      shown,
       walk: walkFaults(context.graph, context.evaluation, shown.faults, shown.condition),
       cannot: null,
     };
   } catch (error) {
     // A value that is missing is the person's to give; anything else is ours.
-    if (error instanceof FaultError) return { remedies, shown, walk: null, cannot: error.message };
+    if (error instanceof FaultError) return { remedies, walk: null, cannot: error.message };
     throw error;
   }
 }
@@ -35,11 +34,10 @@ const examiner = createExaminer();
 let document: Installation | undefined;
 
 function answer(task: Told): Examination | Proof {
-  if (task.kind === 'prove') return prove(task.document, task.finding);
-  if (task.kind === 'examine') document = task.document;
+  if ('document' in task) document = task.document;
   else if (document) document = applyPatch(document, task.patch);
   else throw new Error('A change came before the document it changes.');
-  return examiner.examine(document);
+  return 'finding' in task ? prove(document, task.finding) : examiner.examine(document);
 }
 
 /** Examines beside the page, so that drawing never waits for it. */

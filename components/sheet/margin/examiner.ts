@@ -2,7 +2,6 @@ import type { FaultWalk } from '@/diagram/circuit/fault-types';
 import { diff, type Patch } from '@/diagram/document/patch';
 import { canonical, type Installation } from '@/diagram/document/schema';
 import type { Examination } from '@/diagram/rules/examination';
-import type { Shown } from '@/diagram/rules/show-fault';
 import type { Finding, Remedy } from '@/diagram/rules/types';
 
 /** What a finding in hand needs beyond its words. */
@@ -11,8 +10,6 @@ export interface Proof {
   remedies: Remedy[];
   /** the fault that shows it; null where none does or none can be walked */
   walk: FaultWalk | null;
-  /** the fault and the condition in which to look, for the rehearsal sheet; null where no fault shows it */
-  shown: Shown | null;
   /** the value without which the fault cannot be walked */
   cannot: string | null;
 }
@@ -22,7 +19,10 @@ export type Task =
   | { kind: 'prove'; document: Installation; finding: Finding };
 
 /** What a worker is told: the document whole the first time, then what differs from the one it was told last. */
-export type Told = Task | { kind: 'examine-change'; patch: Patch };
+export type Told =
+  | Task
+  | { kind: 'examine-change'; patch: Patch }
+  | { kind: 'prove-change'; patch: Patch; finding: Finding };
 
 type Answer = { id: number; value: Examination | Proof; ms: number } | { id: number; failure: string };
 export type Outcome<T> = { value: T; ms: number } | { failure: string };
@@ -50,7 +50,7 @@ export class Examiner {
   private running: Question | null = null;
   private waiting: Question | null = null;
   private next = 1;
-  /** the document that the worker examined last: it keeps that and what it worked out of it */
+  /** the document that the worker was told last: it keeps that and what it worked out of it */
   private told: Installation | null = null;
 
   constructor(private readonly makeWorker: () => ExamineWorker) {}
@@ -81,10 +81,13 @@ export class Examiner {
   }
 
   private tell(task: Task): Told {
-    if (task.kind !== 'examine') return task;
     const before = this.told;
     this.told = canonical(task.document);
-    return before ? { kind: 'examine-change', patch: diff(before, this.told) } : { ...task, document: this.told };
+    if (!before) return { ...task, document: this.told };
+    const patch = diff(before, this.told);
+    return task.kind === 'examine'
+      ? { kind: 'examine-change', patch }
+      : { kind: 'prove-change', patch, finding: task.finding };
   }
 
   private ready(): ExamineWorker {

@@ -2,8 +2,7 @@
 
 import Link from 'next/link';
 import { useEffect, useRef, useState } from 'react';
-import { rehearsalHref } from '@/components/rehearsal/address';
-import { Button, ButtonLink, buttonClass } from '@/components/ui/button';
+import { Button, buttonClass } from '@/components/ui/button';
 import { Note } from '@/components/ui/note';
 import { withPlaces } from '@/diagram/commands/place-new';
 import { applyPatch, type Patch } from '@/diagram/document/patch';
@@ -28,7 +27,6 @@ interface FindingNoteProps {
 export function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake }: FindingNoteProps) {
   const { finding } = note;
   const box = useRef<HTMLDivElement>(null);
-  const { jobId } = hands.store.getState();
   const [silencing, setSilencing] = useState(false);
   const [shown, setShown] = useState(false);
   const preview = (patch: Patch | null) => {
@@ -78,9 +76,6 @@ export function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake
               <Button aria-expanded={shown} onClick={() => setShown(!shown)}>
                 Show me
               </Button>
-            )}
-            {proof?.walk && proof.shown && (
-              <ButtonLink href={rehearsalHref(jobId, proof.shown.faults, proof.shown.condition)}>Rehearse it</ButtonLink>
             )}
             <Button onClick={onTake} aria-pressed={inHand}>
               Go there

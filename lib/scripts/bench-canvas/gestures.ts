@@ -72,11 +72,15 @@ export const nodeInSight = (page: Page): Promise<string> =>
     throw new Error('no node stands in the middle of the canvas');
   });
 
-/** Turns the wheel until the whole drawing is in sight. */
-export async function zoomOut(page: Page, steps: number): Promise<void> {
-  for (let i = 0; i < steps; i++) {
-    await page.mouse.move(500, 400);
-    await page.mouse.wheel(0, 240);
+/** Steps back until the whole drawing is in sight: the sheet by its key, the bare page by the wheel. */
+export async function zoomOut(page: Page, by: 'key' | 'wheel'): Promise<void> {
+  if (by === 'key') await page.getByRole('application').focus();
+  for (let i = 0; i < 9; i++) {
+    if (by === 'key') await page.keyboard.press('-');
+    else {
+      await page.mouse.move(500, 400);
+      await page.mouse.wheel(0, 160);
+    }
     await page.waitForTimeout(60);
   }
   await page.waitForTimeout(600);

@@ -51,18 +51,20 @@ export async function serveApp(): Promise<Served> {
     stdio: ['ignore', 'ignore', 'inherit'],
   });
   const ended = new Promise<void>((resolve) => child.on('close', () => resolve()));
-  const until = Date.now() + 300_000;
+  const stop = async () => {
+    child.kill('SIGTERM');
+    await ended;
+  };
+  // It may have to be built first.
+  const until = Date.now() + 900_000;
   while (!(await fetch(`${address}/api/health`).catch(() => null))?.ok) {
-    if (child.exitCode !== null || Date.now() > until) throw new Error('The app did not start; what it said stands above.');
+    if (child.exitCode !== null || Date.now() > until) {
+      await stop();
+      throw new Error('The app did not start; what it said stands above.');
+    }
     await new Promise((resolve) => setTimeout(resolve, 250));
   }
-  return {
-    address,
-    async stop() {
-      child.kill('SIGTERM');
-      await ended;
-    },
-  };
+  return { address, stop };
 }
 
 /** Signs an electrician of the demo in and lays a drawing before them. @returns the path of its job, and the context */
