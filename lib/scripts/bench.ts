@@ -12,7 +12,7 @@ import { solveNetwork } from '@/diagram/circuit/solve';
 import { examine } from '@/diagram/rules/examine';
 
 /**
- * npm run bench [-- --json]
+ * npm run bench [-- engine|canvas] [-- --json]
  * Each measure is a ratio of two times taken side by side in this run, medians of many, or a figure against its bar.
  * With
  * --json one object a line: { name, ratio, bar, holds }. Exits 1 when one does not hold.
@@ -201,5 +201,14 @@ function main(): void {
   process.exitCode = failed ? 1 : 0;
 }
 
+async function canvas(): Promise<void> {
+  // Loaded only when it is asked for: it brings a browser and a builder with it.
+  const { benchCanvas } = await import('./bench-canvas');
+  if (!(await benchCanvas(process.argv.includes('--json')))) process.exitCode = 1;
+}
+
 if (process.argv.includes('--memory')) measureMemory();
-else main();
+else {
+  if (!process.argv.includes('canvas')) main();
+  if (!process.argv.includes('engine')) await canvas();
+}
