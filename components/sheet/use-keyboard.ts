@@ -50,6 +50,8 @@ export function useKeyboard(context: ActionContext): (event: KeyboardEvent) => v
         return;
       }
       if (!singleKeys && !isPlain(key)) return;
+      // The browser's own paste event brings what lies on the clipboard without asking for leave to read it.
+      if (key === 'Ctrl V') return;
       const action = actionFor(key);
       if (!action) return;
       done();

@@ -1,3 +1,4 @@
+import { KIND_NAME } from '../document/kinds';
 import { nameOf } from '../document/names';
 import { diff } from '../document/patch';
 import type { End, Installation, Part, Wire } from '../document/schema';
@@ -156,6 +157,14 @@ function bring(
   return { feed: { L: [device.id, '2'], N: [n, '1'], E: [e, '1'] }, run };
 }
 
+/** "Study fan"; with its designation where the room has more of its kind. */
+function calledAt(doc: Installation, load: Part): string {
+  const place = doc.places.find((candidate) => candidate.id === load.place)?.name;
+  if (load.label !== undefined || place === undefined) return load.label ?? nameOf(doc, load);
+  const alike = doc.parts.filter((part) => part.kind === load.kind && part.place === load.place);
+  return [place, KIND_NAME[load.kind], alike.length > 1 && load.ref].filter(Boolean).join(' ');
+}
+
 /**
  * Moves loads, with the switches that work them, to another way: line, neutral and earth together, so that no neutral comes
  * home by the way it has left.
@@ -192,7 +201,7 @@ export function moveLoad(
       if (sketch.arriving(earth)) refeed(sketch, earth, tapAt(sketch, feed.E, newId), 'earth');
   }
   dropIdleJoints(sketch);
-  const names = loads.map((load) => load.label ?? nameOf(doc, load));
+  const names = loads.map((load) => calledAt(doc, load));
   const where = to?.backup ? 'backup' : nameOf(doc, target);
   return {
     label: `Move ${names.slice(0, 3).join(', ')}${names.length > 3 ? ` and ${names.length - 3} more` : ''} to ${where}`,

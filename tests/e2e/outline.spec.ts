@@ -181,7 +181,7 @@ test('from the outline a rating is written, a load moved, a room copied; one thi
   await expect(page.getByRole('combobox', { name: /which way/ })).toBeFocused();
   await page.keyboard.type('way 1');
   await page.keyboard.press('Enter');
-  await expect(page.getByRole('status').filter({ hasText: /^Move E\d+ to Q\d+$/ })).toBeVisible();
+  await expect(page.getByRole('status').filter({ hasText: /^Move Kitchen lamp to Q\d+$/ })).toBeVisible();
   await expect(inHand(page)).toBeFocused();
 
   // copied, and taken back as one step
@@ -245,3 +245,36 @@ for (const scheme of ['light', 'dark'] as const)
       await context.close();
       expect(faults).toEqual([]);
     });
+
+test('a piece is copied in one window and pasted in another, through the clipboard of the system', async ({ context, page }) => {
+  test.setTimeout(180_000);
+  await context.grantPermissions(['clipboard-read', 'clipboard-write']);
+  await signInAs(page, 'electrician');
+  const [one, two] = [await beginJob(page, 'Weir Mill 6'), await beginJob(page, 'Weir Mill 7')];
+  await open(page, one);
+  await page.getByRole('application').focus();
+  await page.keyboard.press('o');
+  await command(page, 'place the supply');
+  await extend(page, 'study lamps');
+  await saved(page);
+  await page.keyboard.press('Escape');
+  await expect(page.getByRole('application')).toBeFocused();
+  await page.keyboard.press('Control+a');
+  await page.keyboard.press('Control+c');
+  await expect(page.getByRole('status').filter({ hasText: /^Copied \d+ parts\.$/ })).toBeVisible();
+  expect(await page.evaluate(async () => (await navigator.clipboard.read())[0]!.types)).toContain('image/svg+xml');
+
+  const other = await context.newPage();
+  await open(other, two);
+  await other.getByRole('application').focus();
+  await other.keyboard.press('Control+v');
+  await expect(other.getByRole('status').filter({ hasText: /^Paste .* more$/ })).toBeVisible({ timeout: 20_000 });
+  await saved(other);
+  const [from, to] = [await savedHome(page, one), await savedHome(other, two)];
+  const lamps = (home: Home) => home.parts.filter((part) => part.kind === 'lamp').length;
+  expect(lamps(to)).toBe(lamps(from));
+  const ids = new Set(to.parts.map((part) => part.id));
+  expect(to.wires.length).toBeGreaterThan(5);
+  for (const wire of to.wires) expect(ids.has(wire.from[0]) && ids.has(wire.to[0])).toBe(true);
+  expect(to.parts.filter((part) => from.parts.some((old) => old.id === part.id))).toEqual([]);
+});

@@ -229,6 +229,8 @@ describe('moving loads between ways', () => {
     const fan = hand.find('fan').id;
     const feeds = (doc: Installation) => examine(doc).loads.find((load) => load.part === fan)!.conditions;
     expect(feeds(hand.doc).outage!.fed).toBe(false);
+    const moved = moveLoad(hand.doc, [fan], backupOf(hand, fan), counter('w'));
+    expect(moved).toMatchObject({ label: 'Move Study fan to backup' });
     hand.move([fan], backupOf(hand, fan));
     expect(bad(hand.doc)).toEqual([]);
     expect(feeds(hand.doc).outage!.fed).toBe(true);

@@ -1,11 +1,12 @@
 import { copyParts, pasteClip } from '@/diagram/commands/copy';
 import { deleteSelection } from '@/diagram/commands/delete-selection';
-import { editCable, editName, editRating } from '@/diagram/commands/edit-in-place';
+import { copyRoom } from '@/diagram/commands/copy-room';
+import { editCable, editName, editRating, editRatings } from '@/diagram/commands/edit-in-place';
 import { marksOf } from '@/diagram/commands/ends';
 import { suggest } from '@/diagram/commands/extend/catalogue';
 import { joinTerminals } from '@/diagram/commands/join-terminals';
 import { moveLoad, waysFor } from '@/diagram/commands/move-load';
-import { alignParts, moveParts } from '@/diagram/commands/move-parts';
+import { alignParts, distributeParts, moveParts, placeExactly } from '@/diagram/commands/move-parts';
 import { renumber } from '@/diagram/commands/renumber';
 import { isRefusal, type Command, type NewId, type Refusal } from '@/diagram/commands/types';
 import type { End, Installation } from '@/diagram/document/schema';
@@ -33,7 +34,7 @@ export function randomCommand(doc: Installation, pick: (below: number) => number
     return mark ? [id, mark] : null;
   };
   const outcome = ((): Command | Refusal | null => {
-    switch (pick(14)) {
+    switch (pick(18)) {
       case 0:
       case 1:
         return editRating(doc, part.id, of(RATINGS)!);
@@ -72,6 +73,17 @@ export function randomCommand(doc: Installation, pick: (below: number) => number
         const load = of(doc.parts.filter((candidate) => candidate.kind === 'lamp' || candidate.kind === 'fan'));
         const way = load && of(waysFor(doc, load.id));
         return load && way ? moveLoad(doc, [load.id], way.device, newId) : null;
+      }
+      case 13:
+        return editRatings(doc, doc.parts.filter((each) => each.kind === part.kind).map((each) => each.id), of(RATINGS)!);
+      case 14:
+        return distributeParts(doc, face, [part.id, of(doc.parts)!.id, of(doc.parts)!.id], pick(2) === 0 ? 'row' : 'column');
+      case 15:
+        return placeExactly(doc, face, part.id, `${pick(400)}, ${pick(300)}`);
+      case 16: {
+        // Rooms are few and large: a home that doubled at each turn would be no home for long.
+        const place = doc.places.length < 12 ? of(doc.places) : undefined;
+        return place ? copyRoom(doc, { place: place.id, name: newId(), feed: pick(2) === 0 ? 'same' : 'new' }, newId) : null;
       }
       default:
         return renumber(doc);
