@@ -38,7 +38,8 @@ export interface Conditions {
 }
 
 /**
- * Beyond this many changeovers not every combination of their positions is looked at: then every two of them are seen in every
+ * Beyond this many changeovers not every combination of their positions is looked at: then every two of them are seen
+ * in every
  * pair of A and B, the others all at A or all at B.
  */
 export const MOST_COMBINED = 3;
@@ -84,7 +85,10 @@ function combinations(changeovers: readonly Part[]): Map<string, 'A' | '0' | 'B'
   return [all('A'), all('B'), ...oneApart];
 }
 
-/** Lists the conditions of a home: `outage` and `main-off` only with a backup source, each once for every changeover position. */
+/**
+ * Lists the conditions of a home: `outage` and `main-off` only with a backup source, each once for every changeover
+ * position.
+ */
 export function listConditions(graph: Graph): Conditions {
   // Only the few that are wanted are sorted: to compare designations is dear.
   const wanted = new Set<Part['kind']>(['supply', 'changeover', 'inverter']);

@@ -4,7 +4,8 @@ import { isResidual } from '../terminals/roles-of-parts';
 import type { Condition } from './conditions';
 
 /**
- * What each type need not see, in words: AC is tested with sinusoidal residual current alone, A and F with pulsating too, with
+ * What each type need not see, in words: AC is tested with sinusoidal residual current alone, A and F with pulsating
+ * too, with
  * 6 mA and 10 mA of smooth direct current upon it; B with smooth direct current itself.
  * @source IEC 61008-1, IEC 62423, from memory
  */
@@ -16,7 +17,8 @@ const BLIND = {
 } as const;
 
 /**
- * The wave of the residual current is no fact of a drawing: a sine is taken, which every type sees. Said for each device that the
+ * The wave of the residual current is no fact of a drawing: a sine is taken, which every type sees. Said for each
+ * device that the
  * walk moves, and for the inverter that feeds it.
  * @param moved ids of residual-current devices that saw current astray
  */

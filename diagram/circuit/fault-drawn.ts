@@ -16,7 +16,8 @@ export interface DrawnJoint {
 const WORD: Record<Nature, string> = { L: 'line', N: 'neutral', E: 'earth', D: 'a battery lead' };
 
 /**
- * Puts back what was taken out of a standing because it joins line, neutral and earth: a home that is drawn so is walked so.
+ * Puts back what was taken out of a standing because it joins line, neutral and earth: a home that is drawn so is
+ * walked so.
  * @returns the standing with them, and each with its words; the short circuits first
  */
 export function withJoints(

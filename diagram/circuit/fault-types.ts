@@ -70,7 +70,10 @@ export interface FaultWalk {
   dark: string[];
   /** values without which a device was left out of it: "the sensitivity of Q2" */
   lacks: string[];
-  /** what the drawing does not tell and the walk takes for granted: the wave of a residual current, by the type of each rcd that it moves */
+  /**
+   * what the drawing does not tell and the walk takes for granted: the wave of a residual current, by the type of each
+   * rcd that it moves
+   */
   assumes: string[];
 }
 

@@ -93,7 +93,8 @@ export interface WalkWatch {
 
 /**
  * Walks faults from a home that stands in any way: its switches and devices where somebody has put them.
- * @param joints short circuits and joints to earth that are in the drawing: they come before the first fault, as steps of their own
+ * @param joints short circuits and joints to earth that are in the drawing: they come before the first fault, as steps
+ * of their own
  * @throws FaultError as {@link walkFaults}
  */
 export function walkFrom(
@@ -225,12 +226,13 @@ function readingAt(graph: Graph, { fault, extra, edge }: Inserted, before: Stead
   const caseVolts = caseVoltsOf(graph, steady);
   const branch = steady.assembly.firstExtra + extra;
   const { currentRe, currentIm } = steady.solution;
+  const drawnAmps = edge === undefined ? 0 : size(steady.current(edge));
   const own = graph.node(fault.at, 'E') ?? graph.node(fault.at, 'out.E');
   const worst = Object.values(caseVolts).reduce((most, volts) => Math.max(most, volts), 0);
   return {
     // A neutral that opens has no case of its own: the worst of the home's tells.
     touchVolts: fault.kind === 'neutral-open' || own === undefined ? worst : size(steady.volts(own)),
-    faultAmps: extra < 0 ? (edge === undefined ? 0 : size(steady.current(edge))) : Math.hypot(currentRe[branch]!, currentIm[branch]!),
+    faultAmps: extra < 0 ? drawnAmps : Math.hypot(currentRe[branch]!, currentIm[branch]!),
     caseVolts,
     neutralVolts: steady.standing.condition.sources.reduce(
       (most, { neutral }) => Math.max(most, size(steady.volts(neutral))),

@@ -9,7 +9,10 @@ import type { Evaluation } from './evaluate';
 import { earthFault, externalOhm, timeLimit, type EarthFault } from './way-faults';
 import { lacksCable, ohmOf, supplySide } from './way-paths';
 
-/** A fault to earth at the far end of a feeder: where nothing is used before the next devices, at the board that it feeds. */
+/**
+ * A fault to earth at the far end of a feeder: where nothing is used before the next devices, at the board that it
+ * feeds.
+ */
 export interface FeederFault {
   /** the part at which the feeder arrives */
   at: Part;
@@ -34,12 +37,15 @@ function earthBeside({ graph, earth }: FeederInput, cable: string, place: string
     const here = ends.find((node) => graph.partOf[node]!.place === place && reaches(earth.reached, node));
     if (here !== undefined) return here;
   }
-  const bar = graph.partOf.findIndex((part, node) => part.kind === 'earth-bar' && part.place === place && reaches(earth.reached, node));
+  const bar = graph.partOf.findIndex(
+    (part, node) => part.kind === 'earth-bar' && part.place === place && reaches(earth.reached, node),
+  );
   return bar < 0 ? undefined : bar;
 }
 
 /**
- * Judges a section that feeds other devices only, by its worst end on mains; null where it leaves no place, lies before the
+ * Judges a section that feeds other devices only, by its worst end on mains; null where it leaves no place, lies
+ * before the
  * origin, or a value is missing.
  */
 export function feederFault(input: FeederInput, section: Section): FeederFault | null {
@@ -65,7 +71,10 @@ export function feederFault(input: FeederInput, section: Section): FeederFault |
     const r2 = earthPaths.r2(earth);
     if (earth === undefined || r2 === null || path.some((edge) => lacksCable(graph, edge))) continue;
     const r1 = path.reduce((sum, edge) => sum + ohmOf(graph, edge), 0);
-    const lineDevices = path.flatMap((edge) => (graph.edges[edge]!.kind === 'device' ? [graph.edges[edge]!.part!] : []));
+    const lineDevices = path.flatMap((edge) => {
+      const { kind, part } = graph.edges[edge]!;
+      return kind === 'device' ? [part!] : [];
+    });
     const withinS = timeLimit(practice, supply, section.device, []);
     const fault = earthFault(graph, practice, { way: section.device.id, lineDevices }, external + r1 + r2, withinS);
     if (!worst || fault.zs > worst.fault.zs) worst = { at, earth, fault };

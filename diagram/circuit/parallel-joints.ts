@@ -27,7 +27,10 @@ function isAlone(graph: Graph, { a, b }: Edge): boolean {
   return true;
 }
 
-/** How far an edge looks like an afterthought: fitting wires at devices first, loose links between joints last, plugs after all. */
+/**
+ * How far an edge looks like an afterthought: fitting wires at devices first, loose links between joints last, plugs
+ * after all.
+ */
 function oddness(graph: Graph, edge: Edge): number {
   const { a, b, wire, kind } = edge;
   if (kind === 'plug') return 1000;
@@ -108,7 +111,9 @@ export function findParallelJoints(graph: Graph, closed: Uint8Array, starts: rea
   }));
 }
 
-/** True when a loop of line conductors passes a device or a source: it is no ring of one way, but two feeds that meet. */
+/**
+ * True when a loop of line conductors passes a device or a source: it is no ring of one way, but two feeds that meet.
+ */
 export const meetsDevice = (graph: Graph, { loop }: ParallelJoint): boolean =>
   loop.some((number) => {
     const { kind } = graph.edges[number]!;

@@ -24,7 +24,8 @@ export interface Positions {
 }
 
 /**
- * The most switches of one set that are looked at in all combinations, 2^6. Of a larger set each switch is turned by itself,
+ * The most switches of one set that are looked at in all combinations, 2^6. Of a larger set each switch is turned by
+ * itself,
  * once with all others one way and once with all the other way.
  */
 export const MOST_COMBINED_SWITCHES = 6;
@@ -33,7 +34,9 @@ const combines = ({ switches }: SwitchSet): boolean => switches.length <= MOST_C
 const positionsOf = (set: SwitchSet): number =>
   combines(set) ? 2 ** set.switches.length : 2 * (set.switches.length + 1);
 
-/** True when a switch of a set stands the second way in a position: a bit of its number, or the one turned by itself. */
+/**
+ * True when a switch of a set stands the second way in a position: a bit of its number, or the one turned by itself.
+ */
 function isTurned(set: SwitchSet, at: number, position: number): boolean {
   const here = position % positionsOf(set);
   if (combines(set)) return ((here >> at) & 1) === 1;

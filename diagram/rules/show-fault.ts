@@ -4,7 +4,10 @@ import { isPoint } from '../terminals/roles-of-parts';
 import type { Context } from './context';
 import type { Finding } from './types';
 
-/** The fault walk that proves a finding: what to put in, and in which condition to look; nothing where the drawing is the fault. */
+/**
+ * The fault walk that proves a finding: what to put in, and in which condition to look; nothing where the drawing is
+ * the fault.
+ */
 export interface Shown {
   faults: Fault[];
   condition: string;
@@ -55,7 +58,8 @@ function isFed({ evaluated }: Context, condition: string, part: Part): boolean {
 }
 
 /**
- * The fault that shows what a finding warns of, at a place that the finding names, in the first condition in which it holds
+ * The fault that shows what a finding warns of, at a place that the finding names, in the first condition in which it
+ * holds
  * and the place is fed.
  * @returns null where no fault shows it
  */
@@ -64,10 +68,12 @@ export function showFault(context: Context, finding: Finding): Shown | null {
   if (kind === undefined) return null;
   const conditions =
     finding.conditions.length > 0 ? finding.conditions : context.evaluated.map(({ condition }) => condition.name);
-  // The drawing holds the fault itself: nothing is put in. In one position of two-way switches only, no standing has it.
+  // The drawing holds the fault itself: nothing is put in. In one position of two-way switches only, no standing has
+  // it.
   if (kind === 'as-drawn') {
     const isHere = ({ condition, crossed }: Context['evaluated'][number]) =>
-      conditions.includes(condition.name) && crossed.some(({ edge }) => finding.wires.includes(edgeWire(context, edge)));
+      conditions.includes(condition.name) &&
+      crossed.some(({ edge }) => finding.wires.includes(edgeWire(context, edge)));
     const here = context.evaluated.find(isHere);
     return here ? { faults: [], condition: here.condition.name } : null;
   }

@@ -1,4 +1,3 @@
-import type { SectionCable } from '../circuit/way-cables';
 import type { WayFigures } from '../circuit/way-figures';
 import { capacityOf } from '../circuit/way-cables';
 import type { Practice } from '../practices/types';
@@ -7,46 +6,10 @@ import { recalled } from './clauses';
 import type { Context } from './context';
 import { figuresOf } from './readings/figures';
 import { lackOfCables, lackOfRating } from './readings/lacking';
-import { lineLoops } from './readings/line-loops';
 import { changeCables, changePart } from './readings/remedies';
-import { reversedNodes } from './readings/reversals';
 import type { Remedy, Rule } from './types';
+import { mostA, thinCables, type Thin } from './readings/thin-cables';
 import { capital, say } from './readings/words';
-
-/**
- * A, what a cable carries at most: where the table begins above its size, what the table's first size carries, which is more than
- * it can.
- */
-function mostA({ graph }: Context, practice: Practice, { cable, capacity }: SectionCable): number | null {
-  if (capacity) return capacity.izA;
-  for (const csa of practice.csaMm2.filter((size) => size > cable.csa)) {
-    const found = capacityOf(graph, practice, { ...cable, csa });
-    if (found) return found.izA;
-  }
-  return null;
-}
-
-/** True for a neutral that is line because line and neutral change places before it: the crossing is the finding. */
-function isTurned(context: Context, id: string): boolean {
-  const { edges, edgeOfWire } = context.graph;
-  const { a, b, wire } = edges[edgeOfWire.get(id)!]!;
-  const reversed = reversedNodes(context);
-  return wire!.role === 'neutral' && (reversed.has(a) || reversed.has(b));
-}
-
-interface Thin extends SectionCable {
-  izA: number;
-}
-
-/** True for what could be a leg of a ring: where it closes over another way the joint is the finding, the leg is right without it. */
-function isLegAstray(
-  { ring }: Practice,
-  { cable, needA, capacity }: SectionCable,
-): boolean {
-  if (!ring) return false;
-  const { deviceA, legCsaMm2, legIzAtLeastA } = ring.value;
-  return cable.csa >= legCsaMm2 && needA! <= deviceA && capacity !== null && !exceeds(legIzAtLeastA, capacity.izA);
-}
 
 function remediesOf(
   { graph }: Context,
@@ -73,7 +36,9 @@ function remediesOf(
   return remedies;
 }
 
-/** In above Iz: IEC 60364-4-43 433.1, second half. A cable that leans on the service fuse alone is judged by that fuse. */
+/**
+ * In above Iz: IEC 60364-4-43 433.1, second half. A cable that leans on the service fuse alone is judged by that fuse.
+ */
 export const undersizedCable: Rule = {
   meta: {
     id: 'undersized-cable',
@@ -89,15 +54,8 @@ export const undersizedCable: Rule = {
   },
   *check(context) {
     const { ways, practice } = figuresOf(context);
-    const loops = lineLoops(context).flatMap(({ edge, loop }) => [edge, ...loop]);
     for (const figures of ways.values()) {
-      const isOpened = loops.some((number) => figures.section.edges.has(number));
-      const thin = figures.cables.flatMap((each): Thin[] => {
-        const izA = mostA(context, practice, each);
-        const isThin = izA !== null && each.needA !== null && exceeds(each.needA, izA);
-        if (isThin && each.wires.every((id) => isTurned(context, id))) return [];
-        return isThin && !(isOpened && isLegAstray(practice, each)) ? [{ ...each, izA }] : [];
-      });
+      const thin = thinCables(context, practice, figures);
       if (thin.length === 0) continue;
       const { device } = figures;
       const worst = thin.reduce((a, b) => (a.izA <= b.izA ? a : b));

@@ -14,7 +14,9 @@ import { freeOn, withEnd } from './rewire';
 import { say } from './words';
 
 /** VA that inverters for homes are sold in; common practice, no source */
-const INVERTERS_VA = [400, 600, 700, 850, 1000, 1100, 1400, 1500, 2000, 2500, 3000, 3500, 4000, 5000, 6000, 8000, 10000];
+const INVERTERS_VA = [
+  400, 600, 700, 850, 1000, 1100, 1400, 1500, 2000, 2500, 3000, 3500, 4000, 5000, 6000, 8000, 10000,
+];
 /** A that dc fuses are sold in; common practice, no source */
 const DC_FUSES_A = [30, 50, 63, 80, 100, 125, 150, 175, 200, 250, 300, 350, 400, 500];
 /** Ah of one battery that shops sell; common practice, no source */
@@ -51,7 +53,11 @@ function dcSide(context: Context, inverter: PartOf<'inverter'>): { parts: Part[]
 }
 
 /** "Fit an inverter of 1100 VA", with fuse and leads for it. @param need VA running, and VA for a moment */
-export function largerInverter(context: Context, { inverter }: BackupFigures, need: { va: number; surgeVa: number }): Remedy[] {
+export function largerInverter(
+  context: Context,
+  { inverter }: BackupFigures,
+  need: { va: number; surgeVa: number },
+): Remedy[] {
   const ratio = inverter.va !== undefined && inverter.surge !== undefined ? inverter.surge / inverter.va : 2;
   const va = INVERTERS_VA.find((size) => size >= need.va && size > (inverter.va ?? 0) && size * ratio >= need.surgeVa);
   if (va === undefined) return [];
@@ -67,7 +73,10 @@ export function largerInverter(context: Context, { inverter }: BackupFigures, ne
   ];
 }
 
-/** A larger battery, and several of the same: the least that last long enough, with the charger set for them where it is too weak. */
+/**
+ * A larger battery, and several of the same: the least that last long enough, with the charger set for them where it is
+ * too weak.
+ */
 export function largerBank(context: Context, figures: BackupFigures, wantedHours: number): Remedy[] {
   const { inverter, bank, load } = figures;
   const batteries = dcStrings(context.graph, inverter).strings.flatMap((string) => string.batteries);
@@ -91,7 +100,8 @@ export function largerBank(context: Context, figures: BackupFigures, wantedHours
   for (let more = count + 1; single && more <= MOST_PARALLEL; more++) {
     const ah = battery.ah * more;
     if (!lasts(ah)) continue;
-    remedies.push(fitted(`Fit ${more} such batteries in parallel`, { ...battery, count: more, arrangement: 'parallel' }, ah));
+    const several = { ...battery, count: more, arrangement: 'parallel' } as const;
+    remedies.push(fitted(`Fit ${more} such batteries in parallel`, several, ah));
     break;
   }
   return remedies;
@@ -126,7 +136,7 @@ export function wayToMains(context: Context, device: string): Remedy[] {
   const way = context.ways.find((each) => each.device === device && each.backup);
   if (!way) return [];
   const kind = (id: string) => graph.parts.get(id)?.kind;
-  const lands = (wire: Wire, bar: Part['kind']): End | undefined => [wire.from, wire.to].find(([id]) => kind(id) === bar);
+  const lands = ({ from, to }: Wire, bar: Part['kind']): End | undefined => [from, to].find(([id]) => kind(id) === bar);
   const lines = document.wires.flatMap((wire) => {
     const at = lands(wire, 'line-bar');
     return at && [wire.from[0], wire.to[0]].includes(device) ? [{ wire, at }] : [];

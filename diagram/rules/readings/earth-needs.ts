@@ -35,7 +35,8 @@ export function earthNeeds(context: Context): EarthNeed[] {
     const fault = own ?? feeder?.fault;
     const ends = drawn.map(({ part, isPoint }) => ({ part, node: graph.node(part.id, isPoint ? 'E' : 'in.E') }));
     if (feeder) ends.push({ part: feeder.at, node: feeder.earth });
-    // A way that the mains do not reach for a gap in the line is judged once it is closed, by its fault and not by the table.
+    // A way that the mains do not reach for a gap in the line is judged once it is closed, by its fault and not by the
+    // table.
     if (!fault && isCutOff(context, ends.map(({ part }) => part.id))) continue;
     // A fault that nothing clears in time is the finding of `slow-disconnection`; its heat has no end.
     if (fault && !(fault.holds && Number.isFinite(fault.energyA2s))) continue;

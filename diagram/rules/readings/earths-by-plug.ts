@@ -13,7 +13,8 @@ export interface EarthByPlug {
 }
 
 /**
- * Plugs whose earth pin is the only earth of a point that gets its line past them: on mains from elsewhere, or, of a fixed
+ * Plugs whose earth pin is the only earth of a point that gets its line past them: on mains from elsewhere, or, of a
+ * fixed
  * point, from a backup source that the plug does not carry.
  */
 export const earthsByPlug = once((context: Context): EarthByPlug[] => {

@@ -66,7 +66,10 @@ export const misledStretches = once((context: Context): Misled[] => {
   return stretches;
 });
 
-/** "Move the line to SUP": the wrong end led to where such a conductor begins, at the same part or on a live bar beside it. */
+/**
+ * "Move the line to SUP": the wrong end led to where such a conductor begins, at the same part or on a live bar beside
+ * it.
+ */
 export function misledRemedies(context: Context, { wire: id, at, drawn, is }: Misled): Remedy[] {
   const { graph, document } = context;
   const wire = graph.wires.get(id)!;

@@ -89,7 +89,9 @@ function returnsIn(context: Context, { points }: Evaluated, stand: Stand, i: num
 
 const add = (list: string[], ids: readonly string[]) => list.push(...ids.filter((id) => !list.includes(id)));
 
-/** Notes a way back under its contacts. Ways that meet in a contact are one entry, and where `joined`, all of one point. */
+/**
+ * Notes a way back under its contacts. Ways that meet in a contact are one entry, and where `joined`, all of one point.
+ */
 function note(
   { graph }: Context,
   into: NeutralContact[],
@@ -115,7 +117,8 @@ function note(
 }
 
 /**
- * Single-pole contacts and fuses in the neutral of points that are fed the right way round. A point that is fed the wrong
+ * Single-pole contacts and fuses in the neutral of points that are fed the right way round. A point that is fed the
+ * wrong
  * way round is left to the rule of polarity: there the neutral is what the drawing calls line.
  */
 export const neutralContacts = once((context: Context) => {

@@ -58,13 +58,17 @@ function needed(part: Part): readonly (readonly string[])[] {
   }
 }
 
-/** Parts by what they are joined with outside the board: a lost wire leaves both its ends in one branch, over neutral and cable. */
+/**
+ * Parts by what they are joined with outside the board: a lost wire leaves both its ends in one branch, over neutral
+ * and cable.
+ */
 const branches = once(({ graph }: Context) =>
   branchesOf(graph, new Set([...graph.parts.values()].filter(isOfTrunk).map(({ id }) => id))),
 );
 
 /**
- * True when an open line or open neutral is told already at this terminal: it lies in the dead stretch, or at the end of the
+ * True when an open line or open neutral is told already at this terminal: it lies in the dead stretch, or at the end
+ * of the
  * live one beside it, in the place of a part that the finding names.
  */
 function isTold(context: Context, part: Part, missing: readonly string[], taken: Set<OpenRegion>): boolean {
@@ -74,7 +78,8 @@ function isTold(context: Context, part: Part, missing: readonly string[], taken:
   const beside = openRegions(context).some((region) => {
     const near = [...region.gap, ...region.points].some((id) => graph.parts.get(id)!.place === part.place);
     // A stretch that begins at a joint has lost its wire from some device: the one whose live end hangs in the air.
-    const headless = region.gap.every((id) => isBar(graph.parts.get(id)!.kind)) && (isOvercurrent(part) || part.kind === 'rcd' || part.kind === 'isolator');
+    const isDevice = isOvercurrent(part) || part.kind === 'rcd' || part.kind === 'isolator';
+    const headless = isDevice && region.gap.every((id) => isBar(graph.parts.get(id)!.kind));
     return missing.every((mark) => {
       const node = at(mark);
       const ends = (region.side === 'L' ? line : neutral)[node] === 1 || part.kind === 'supply';
@@ -102,11 +107,14 @@ function missingAt(context: Context, part: Part, every = false): string[] {
   const wired = (mark: string) => hasWire(context, context.graph.node(part.id, mark)!);
   const sets = needed(part);
   if (!sets.flat().some(wired)) return [];
-  if (part.kind !== 'switch-2way' || every) return sets.flatMap((set) => (set.some(wired) ? set.filter((mark) => !wired(mark)) : []));
+  if (part.kind !== 'switch-2way' || every)
+    return sets.flatMap((set) => (set.some(wired) ? set.filter((mark) => !wired(mark)) : []));
   return sets.some((set) => set.every(wired)) ? [] : sets[0]!.filter((mark) => !wired(mark));
 }
 
-/** True at either end of a strapper that is lost between two switches of a set: that they do not work together is told. */
+/**
+ * True at either end of a strapper that is lost between two switches of a set: that they do not work together is told.
+ */
 const isLostStrapper = (context: Context, { id, kind }: Part): boolean =>
   (kind === 'switch-cross' || kind === 'switch-2way') &&
   truthTables(context).some(

@@ -5,8 +5,10 @@ import { newWireId } from './rewire';
 import { potentials } from './potentials';
 
 /**
- * "Wire them the usual way": two two-way switches with the line on the common of the first, the lamp on the common of the last
- * and strappers from 1 to 1 and 2 to 2, with the wires that are there. Offered where one wire brings the line, one leads to the lamp
+ * "Wire them the usual way": two two-way switches with the line on the common of the first, the lamp on the common of
+ * the last
+ * and strappers from 1 to 1 and 2 to 2, with the wires that are there. Offered where one wire brings the line, one
+ * leads to the lamp
  * and the others run between the two.
  */
 export function usualTwoWay(context: Context, switches: readonly string[]): Remedy[] {
@@ -25,7 +27,12 @@ export function usualTwoWay(context: Context, switches: readonly string[]): Reme
   if (isLine === undefined || potentials(context).line[isLine] !== 1) return [];
   const first = at(line)[0] === a ? a! : b!;
   const last = first === a ? b! : a!;
-  const between = (wire: Wire, mark: string): Wire => ({ ...wire, from: [first, mark], to: [last, mark], role: 'strapper' });
+  const between = (wire: Wire, mark: string): Wire => ({
+    ...wire,
+    from: [first, mark],
+    to: [last, mark],
+    role: 'strapper',
+  });
   const [one, two] = strappers;
   const second: Wire = two ?? { ...one!, id: newWireId(context, one!.id) };
   const wires = [

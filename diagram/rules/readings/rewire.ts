@@ -113,7 +113,9 @@ export function cableFrom(
   return undefined;
 }
 
-/** Joints and bars of a place, or everywhere, that some node test allows; by designation of their place in the document. */
+/**
+ * Joints and bars of a place, or everywhere, that some node test allows; by designation of their place in the document.
+ */
 export const barsWhere = ({ graph }: Context, wanted: (part: Part, node: number) => boolean): Part[] => {
   const found: Part[] = [];
   graph.partOf.forEach((part, node) => {

@@ -12,7 +12,8 @@ import { changePart } from './remedies';
 export type SlowWay = WayFigures & { fault: NonNullable<WayFigures['fault']>; at: Part };
 
 /**
- * Ways on mains, and feeders of other boards, whose fault to earth nothing clears in time. Where a device is not fully rated
+ * Ways on mains, and feeders of other boards, whose fault to earth nothing clears in time. Where a device is not fully
+ * rated
  * the question stays open.
  */
 export function slowWays(context: Context): SlowWay[] {

@@ -30,7 +30,10 @@ function setAt(context: Context): (node: number) => SwitchSet | undefined {
   return (node) => (isRail(node) ? undefined : atGroup.get(group[node]!));
 }
 
-/** Truth tables of all points that two-way and cross switches of more than one place work; in the first condition in which they work. */
+/**
+ * Truth tables of all points that two-way and cross switches of more than one place work; in the first condition in
+ * which they work.
+ */
 export const truthTables = once((context: Context): TruthTable[] => {
   const { graph, evaluation } = context;
   if (evaluation.positions.sets.length === 0) return [];

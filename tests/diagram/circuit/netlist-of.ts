@@ -98,7 +98,8 @@ export function networkOf(doc: Installation, name: string, { condition, opened, 
         join(node(part.id, 'E'), REFERENCE, supply.ra!);
         break;
       case 'supply': {
-        // Settled points of the model: half of Ze in the protective conductor, the rest in the line; zln less that in the neutral.
+        // Settled points of the model: half of Ze in the protective conductor, the rest in the line; zln less that in
+        // the neutral.
         const tt = supply.system === 'TT';
         const line = tt ? supply.zln! / 2 : supply.ze! / 2;
         if (condition !== 'outage') {

@@ -12,7 +12,8 @@ import { SHOCK } from './shock';
 
 /**
  * npx tsx --conditions=react-server tests/diagram/mutations/rates.ts [PLACES]
- * How often each rule finds a single mistake planted in a home that is right, and how often anything else is said that the mistake
+ * How often each rule finds a single mistake planted in a home that is right, and how often anything else is said that
+ * the mistake
  * is not: at so many places of each home, evenly spread, or at all of them where no number is given.
  */
 const MUTATIONS: readonly Mutation[] = [...POLARITY, ...SEPARATION, ...SHOCK, ...OVERLOAD, ...BACKUP, ...DRAWING];
