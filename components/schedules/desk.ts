@@ -4,7 +4,7 @@ import { keyOf } from '@/components/sheet/margin/notes';
 import type { DrawingStore } from '@/components/sheet/store';
 import { isRefusal } from '@/diagram/commands/types';
 import type { Patch } from '@/diagram/document/patch';
-import { editCells, fieldText } from '@/diagram/schedules/edit';
+import { editBlock, editCells, fieldText, readerOf, type Typed } from '@/diagram/schedules/edit';
 import {
   TABLES_OF,
   isTyped,
@@ -58,6 +58,10 @@ export interface DeskState {
   /** Types a text into the cell in hand, and into the same column of every row in hand. */
   type(table: TableId, row: string, column: string, text: string): void;
   sameAsAbove(): void;
+  /** Takes over a block from a spreadsheet, from the cell in hand down and to the right. @returns false for a text of one cell */
+  paste(text: string): boolean;
+  /** The cells in hand as a column of text; null where only one is. */
+  copied(): string | null;
   /** The next row up or down in which the column can be typed. */
   step(by: 1 | -1): void;
   takeBack(entry: Refused): void;
@@ -171,6 +175,41 @@ export function createDesk(drawing: DrawingStore, schedule: ScheduleId, way: str
         const message = edit(table, to, hand.column, fieldText(drawing.getState().document, ref));
         if (message) drawing.getState().say(message);
         else forget(to.map(({ id }) => cellKey(hand.table, id, hand.column)));
+      },
+
+      paste(text) {
+        const lines = text.replace(/[\r\n]+$/, '').split(/\r?\n/);
+        const { hand } = get();
+        const table = hand ? tableIn(get(), hand.table) : undefined;
+        if (!hand || !table || (lines.length === 1 && !text.includes('\t'))) return false;
+        const top = table.rows.findIndex(({ id }) => id === hand.row);
+        const block = lines.flatMap((line, i): Typed[] => {
+          const row = table.rows[top + i];
+          const typedColumns = table.columns.filter(({ id }) => refIn(row, id));
+          const left = typedColumns.findIndex(({ id }) => id === hand.column);
+          return line.split('\t').flatMap((piece, j) => {
+            const column = left < 0 ? undefined : typedColumns[left + j];
+            const ref = column && refIn(row, column.id);
+            return row && ref ? [{ name: row.name, ref, text: piece }] : [];
+          });
+        });
+        const outcome = editBlock(drawing.getState().document, block);
+        if (isRefusal(outcome)) drawing.getState().say(`Nothing was pasted. ${outcome.refused}`);
+        else if (block.length > 0) get().run(outcome.label, outcome.patch);
+        return true;
+      },
+
+      copied() {
+        const held = rowsInHand(get());
+        const column = get().hand?.column;
+        if (held.length < 2 || !column || column === HEAD) return null;
+        const read = readerOf(drawing.getState().document);
+        return held
+          .map(({ cells }) => {
+            const cell = cells[column];
+            return !cell ? '' : isTyped(cell) ? read(cell.field) : cell.text;
+          })
+          .join('\n');
       },
 
       step(by) {

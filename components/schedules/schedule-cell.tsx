@@ -92,6 +92,7 @@ export function ScheduleCell({ desk, table, row, column, cell, document, read, m
         onTake={() => take(table, row.id, column.id)}
         onType={(typed) => type(table, row.id, column.id, typed)}
         onKey={onKey}
+        onPaste={(pasted) => desk.getState().paste(pasted)}
         onEscape={() => {
           if (refused) takeBack(refused);
           else focusCell(name, HEAD);

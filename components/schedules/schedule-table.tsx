@@ -58,6 +58,12 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
       <table
         aria-label={table.title}
         className="w-full table-fixed border-separate border-spacing-0"
+        onCopy={(event) => {
+          const text = desk.getState().copied();
+          if (text === null) return;
+          event.preventDefault();
+          event.clipboardData.setData('text/plain', text);
+        }}
         onTouchStart={(event) => (touch.current = event.touches.length === 1 ? event.touches[0]! : null)}
         onTouchEnd={(event) => {
           const from = touch.current;

@@ -1,5 +1,5 @@
-import type { Command, Refusal } from '../commands/types';
-import { diff } from '../document/patch';
+import { isRefusal, type Command, type Refusal } from '../commands/types';
+import { applyPatch, diff } from '../document/patch';
 import { CableSchema, PartSchema, canonical, type Cable, type Installation, type Part } from '../document/schema';
 import { fieldById } from './fields';
 import type { FieldRef } from './types';
@@ -74,4 +74,23 @@ export function editCells(
   if (!first) return { refused: 'No row is in hand.' };
   const next = canonical({ ...doc, parts: [...parts.values()], cables: [...cables.values()] });
   return { label: labelOf(doc, targets, noun, fieldText(doc, first.ref), after), patch: diff(doc, next) };
+}
+
+/** A cell and the text that goes into it. */
+export interface Typed extends Target {
+  text: string;
+}
+
+/**
+ * Types a block of texts, as it comes from a spreadsheet: one named command, one undo. The first cell that does not take its
+ * text refuses all, by name.
+ */
+export function editBlock(doc: Installation, block: readonly Typed[]): Command | Refusal {
+  let next = doc;
+  for (const { text, ...target } of block) {
+    const outcome = editCells(next, [target], text, '');
+    if (isRefusal(outcome)) return { refused: `${target.name}, "${cut(text)}". ${outcome.refused}` };
+    next = applyPatch(next, outcome.patch);
+  }
+  return { label: `Paste ${block.length} ${block.length === 1 ? 'cell' : 'cells'}`, patch: diff(doc, next) };
 }

@@ -1,4 +1,4 @@
-import { act, render, screen, waitFor, within } from '@testing-library/react';
+import { act, fireEvent, render, screen, waitFor, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it, vi } from 'vitest';
 import { SchedulesSheet } from '@/components/schedules/schedules-sheet';
@@ -178,6 +178,26 @@ describe('the schedule of ways', () => {
       [cell('living-room.way-lamps1', 'rating'), cell('living-room.way-outlets1', 'rating')].map(({ value }) => value),
     ).toEqual(['B10', 'B10']);
     expect(store.getState().undoSteps.map(({ label }) => label)).toEqual(['Way 6: 14 to 15 m', '2 ways: rating B10']);
+  });
+
+  it('takes a block from a spreadsheet as one change, or none of it, and gives a column back', async () => {
+    const user = userEvent.setup();
+    open();
+    await user.click(cell('living-room.way-outlets1', 'csa'));
+    await user.paste('4\t11\n6\t13\n');
+    const runs = ['living-room.outlet1.cable', 'kitchen.outlet1.cable'].map((id) => [cable(id).csa, cable(id).length]);
+    expect(runs).toEqual([
+      [4, 11],
+      [6, 13],
+    ]);
+    expect(store.getState().undoSteps.map(({ label }) => label)).toEqual(['Paste 4 cells']);
+    await user.paste('4\t11\n4\tfar\n');
+    expect(cable('kitchen.outlet1.cable').csa).toBe(6);
+    expect(screen.getByText('Nothing was pasted. Way 4, "far". Metres, 1 to 500')).toBeInTheDocument();
+    await user.keyboard('{Shift>}{ArrowDown}{/Shift}');
+    const setData = vi.fn();
+    fireEvent.copy(cell('living-room.way-outlets1', 'csa'), { clipboardData: { setData } });
+    expect(setData).toHaveBeenCalledWith('text/plain', '4\n6');
   });
 
   it('says the whole row at its head, and what a missing figure waits for in the margin', async () => {
