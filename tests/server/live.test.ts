@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import pg from 'pg';
 import { afterAll, afterEach, describe, expect, inject, it, vi } from 'vitest';
 import { POST as save } from '@/app/api/drawings/[drawingId]/changes/route';
@@ -5,6 +6,7 @@ import { GET as events } from '@/app/api/drawings/[drawingId]/events/route';
 import { endSessions } from '@/lib/server/account/end-sessions';
 import { hub } from '@/lib/server/live/hub';
 import { CHECK_MS } from '@/lib/server/live/open-stream';
+import { sweepPresences } from '@/lib/server/live/presence';
 import { JobPerson, Presence } from '@/models';
 import { signedIn, type Browser } from './browser';
 import { change, makeJob, makePerson, makeTeam, place } from './factories';
@@ -179,6 +181,29 @@ describe('the right to listen', () => {
     await listen(browsers.kofi, drawingId);
     await open[0]!.close();
     await listen(browsers.anna, drawingId);
+  });
+});
+
+describe('a window that is gone', () => {
+  it('before its answer began holds nothing for longer than one look', async () => {
+    const { browsers, params, drawingId } = await studio();
+    vi.useFakeTimers({ toFake: ['setInterval', 'clearInterval'] });
+    for (let n = 0; n < 12; n++) await browsers.anna.open(events, { params });
+    const reading = await listen(browsers.kofi, drawingId);
+    expect((await browsers.anna.open(events, { params })).status).toBe(429);
+    vi.advanceTimersByTime(CHECK_MS);
+    await vi.waitFor(async () => expect(await Presence.count({ where: { drawingId } })).toBe(1));
+    expect(reading.ended).toBe(false);
+    await listen(browsers.anna, drawingId);
+  });
+
+  it('is swept with the process that was killed', async () => {
+    const { drawingId, team, anna } = await studio();
+    const row = { teamId: team.id, drawingId, personId: anna.id };
+    await Presence.create({ ...row, streamId: randomUUID(), seenAt: new Date(Date.now() - 60_000) });
+    await Presence.create({ ...row, streamId: randomUUID() });
+    await sweepPresences();
+    expect(await Presence.count({ where: { drawingId } })).toBe(1);
   });
 });
 

@@ -4,6 +4,7 @@ import { snapshotIfDue } from '@/lib/server/drawings/background';
 import { checkHashes } from '@/lib/server/drawings/check-hashes';
 import { thinChanges } from '@/lib/server/drawings/thin-changes';
 import { describeFault, log } from '@/lib/server/log';
+import { sweepPresences } from '@/lib/server/live/presence';
 import { sweepUploads } from '@/lib/server/uploads/sweep-uploads';
 import { sequelize } from '@/models';
 
@@ -44,7 +45,7 @@ export async function doNightWork(): Promise<void> {
 /** Sweeps from time to time for as long as the process runs. */
 export function startSweeping(): void {
   const sweep = async () => {
-    for (const work of [sweepIdleDrawings, sweepUploads])
+    for (const work of [sweepIdleDrawings, sweepUploads, sweepPresences])
       await work().catch((error) => log('sweep.failed', describeFault(error)));
   };
   setInterval(() => void sweep(), EVERY_MS).unref();

@@ -119,6 +119,9 @@ class Stream implements Subscriber {
 
   /** The heartbeat: a comment for the proxies in between, and the end where the right to read has gone. */
   private async check(): Promise<void> {
+    // What was said ten seconds ago and more has been taken by nobody: the window went away before its answer began, and
+    // nothing else would ever say so.
+    if ((this.controller.desiredSize ?? 0) < MOST_BEHIND) return this.close();
     this.write(': here\n\n');
     try {
       if (await stillMay(this.actor, this.drawingId)) await stay(this);

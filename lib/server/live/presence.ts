@@ -36,6 +36,11 @@ export async function stay({ teamId, drawingId, streamId }: Stream): Promise<voi
   if (gone.length > 0) await sendNote({ team: teamId, drawing: drawingId });
 }
 
+/** Takes out what killed processes left behind in drawings that nobody has opened since. */
+export async function sweepPresences(): Promise<void> {
+  await sequelize.query('delete from presences where seen_at < now() - make_interval(secs => $1)', { bind: [STALE_S] });
+}
+
 /** Everybody who has the drawing open, each once, by name. */
 export async function whoIsHere(teamId: string, drawingId: string): Promise<Peer[]> {
   const rows = await sequelize.query<{ id: string; name: string }>(
