@@ -117,9 +117,7 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
     : '';
   const empty = document.parts.length === 0;
   const inHand = parts.get(hand ?? '');
-  const hint = mayEdit
-    ? 'Switches turn by click, tap or Enter. Nothing is saved.'
-    : 'You may rehearse this drawing. Nothing is saved.';
+  const hint = mayEdit ? 'Click, tap or Enter turns a switch.' : 'You may rehearse; nothing is changed.';
   const faces = pages.length > 0 && <FaceChoice pages={pages} place={place} />;
   return (
     <SheetFrame

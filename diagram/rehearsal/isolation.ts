@@ -6,6 +6,7 @@ import type { Graph } from '../terminals/graph';
 import { closedEdges, pathTo, reach, reaches } from '../terminals/reach';
 import { isPoint } from '../terminals/roles-of-parts';
 import type { Setting } from './settings';
+import { devicesToBattery } from './stance';
 import { openSetting } from './still-live';
 
 /** What must be opened so that no line of any source reaches a part. */
@@ -77,12 +78,15 @@ function feedings(graph: Graph, opened: ReadonlySet<string>): Feeding[] {
   return found;
 }
 
-/** Nodes of a part that must be dead; its earth need not be. */
+/**
+ * Nodes of a part that must be dead: not its earth; of an inverter not the battery's leads, of which one pole parted is
+ * enough, and which `feedings` looks at.
+ */
 function targetsOf(graph: Graph, part: Part): number[] {
   const nodes: number[] = [];
   graph.partOf.forEach((other, node) => {
     const mark = graph.markOf[node]!;
-    if (other === part && mark !== 'E' && !mark.endsWith('.E')) nodes.push(node);
+    if (other === part && mark !== 'E' && !mark.endsWith('.E') && !mark.startsWith('bat.')) nodes.push(node);
   });
   return nodes;
 }
@@ -98,7 +102,10 @@ function feedOf(graph: Graph, targets: readonly number[], opened: ReadonlySet<st
       const fit = kind === 'device' || kind === 'changeover' || kind === 'plug';
       return fit && ISOLATES.has(graph.parts.get(part!)!.kind) ? [part!] : [];
     });
-    return { source, devices: [...new Set(devices)] };
+    // A battery's source is parted at the battery as well as along its line.
+    const part = graph.parts.get(source)!;
+    const leads = part.kind === 'inverter' ? devicesToBattery(graph, part).map(({ id }) => id) : [];
+    return { source, devices: [...new Set([...devices, ...leads])] };
   }
   return null;
 }

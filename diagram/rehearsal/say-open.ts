@@ -71,6 +71,8 @@ export function sayStillLive(home: Home, still: StillLive): Said[] {
   for (const terminal of still.own) said.push(terminalText(home, terminal, part));
   if (still.own.length === 0)
     said.push(plain(still.setting === null ? 'Nothing in it is live now.' : 'None of its terminals is live then.'));
+  if (part.kind === 'inverter')
+    said.push(grave('The leads to its battery stay live up to the device that parts them.'));
   if (still.takesOver.length > 0) said.push(grave(`${names.all(still.takesOver)} takes over from the battery.`));
   said.push(...besideSaid(home, still.beside));
   if (still.liveNeutrals.length > 0)
@@ -112,7 +114,11 @@ export function sayIsolation(home: Home, isolation: Isolation): IsolationTold {
       steps: [],
       cautions: [
         grave(`Nothing in this home makes ${own} dead: ${names.all(isolation.sources)} reaches it past every device.`),
-        plain('Only the supplier can part it from the network.'),
+        plain(
+          isolation.sources.some((id) => names.part(id)?.kind === 'supply')
+            ? 'Only the supplier can part it from the network.'
+            : 'Cover its live side; take off rings and chains; use insulated tools.',
+        ),
       ],
     };
   if (isolation.open.length === 0)

@@ -108,6 +108,8 @@ const unchanged = 'Nothing shows: no current changes, no device sees it.';
 export const say = {
   before(scene: Scene, steady: Steady, fault: Fault): Told {
     const { graph } = scene;
+    if (graph.parts.get(fault.at)!.kind === 'supply')
+      return { heading: 'before', text: 'The neutral of the supply is whole.' };
     const nodes = ['L', 'out.L', 'in.L'].flatMap((mark) => graph.node(fault.at, mark) ?? []);
     const fed = [...fedBy(graph, steady.standing.condition, steady.standing.closed, nodes).values()][0];
     const figures = scene.read(steady);
@@ -122,7 +124,7 @@ export const say = {
 
   fault(scene: Scene, { step, steady, before }: Moment, fault: Fault): Told {
     const figures = scene.read(steady);
-    const heading = step.event;
+    const heading = scene.graph.parts.get(fault.at)!.kind === 'supply' ? 'the neutral of the supply opens' : step.event;
     const path = faultPath(scene.graph, before, steady, step.faultAmps);
     const own = figures.parts[fault.at]?.caseVolts;
     if (fault.kind === 'neutral-open') {

@@ -29,7 +29,7 @@ export interface Handles {
 }
 
 /** Devices in the dc leads of an inverter, found by walking from its dc terminals. */
-function devicesToBattery(graph: Graph, inverter: Part): Part[] {
+export function devicesToBattery(graph: Graph, inverter: Part): Part[] {
   const starts = ['bat.+', 'bat.-'].map((mark) => graph.node(inverter.id, mark)!);
   const { edges } = spread(graph, starts, ({ kind }) => kind === 'wire' || kind === 'device');
   const found = new Map<string, Part>();

@@ -25,6 +25,8 @@ const LETTERS_FROM = 0.42;
 /** below it the body size of the lettering would be under 11 px */
 const READABLE = 0.9;
 const LARGE = 400;
+/** px from the edge: nearer to it a part counts as out of sight */
+const IN_SIGHT = 20;
 /** px: below this the conditions lie on the sheet */
 const NARROW = 760;
 const NOTHING: Rehearsed['figures'] = { wires: {}, parts: {}, sources: {} };
@@ -132,7 +134,7 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
     const [w = 0, h = 0] = box.split(' ').map(Number);
     const at = middle(target);
     const seen = { x: px(at.x) * zoom + x, y: px(at.y) * zoom + y };
-    if (seen.x > 60 && seen.y > 60 && seen.x < w - 60 && seen.y < h - 60) return;
+    if (seen.x > IN_SIGHT && seen.y > IN_SIGHT && seen.x < w - IN_SIGHT && seen.y < h - IN_SIGHT) return;
     void flow.setCenter(px(at.x), px(at.y), { zoom: Math.max(zoom, 0.8) });
   }, [flow, target, box]);
 

@@ -134,8 +134,10 @@ describe('what must be opened to make this dead', () => {
 
   test('the inverter: its input and its battery', () => {
     const doc = twoSources().document();
-    expect(open(doc, 'G1')).toEqual(null);
-    expect(hand(doc, 'G1').isolation.sources).toEqual(expect.arrayContaining(['G1', 'G2', 'SUP']));
+    expect(open(doc, 'G1')).toEqual(['F2', 'Q3']);
+    expect(hand(doc, 'G1').isolation.sources).toEqual(['G1', 'SUP']);
+    // The fuse itself hangs on the battery.
+    expect(open(doc, 'F2')).toBeNull();
   });
 
   test('a plug is pulled and kept in sight, a fuse is kept in the pocket', () => {
