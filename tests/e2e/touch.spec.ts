@@ -33,7 +33,7 @@ async function open(page: Page, job: string, path = 'overview') {
 }
 
 async function savedHome(page: Page, job: string): Promise<Home> {
-  await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 20_000 });
+  await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 60_000 });
   const { drawingId } = (await (await page.request.get(`/api/jobs/${job}`)).json()) as { drawingId: string };
   return (await page.request.get(`/api/drawings/${drawingId}/json`)).json() as Promise<Home>;
 }

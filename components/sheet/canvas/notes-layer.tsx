@@ -26,7 +26,8 @@ export const NotesLayer = memo(function NotesLayer({
         const nth = perPart.get(part.id) ?? 0;
         perPart.set(part.id, nth + 1);
         const x = part.x - SIDE - 120 + nth * (SIDE + 60);
-        const y = part.y - SIDE - 60;
+        // At the upper edge of the sheet the letter stands beside its part, not above it.
+        const y = Math.max(60, part.y - SIDE - 60);
         return (
           <g key={note.key}>
             <rect x={x} y={y} width={SIDE} height={SIDE} fill="var(--red)" />

@@ -59,7 +59,7 @@ function hint(mode: Mode, held: string, { mayEdit, mayDraw, crowded, coarse }: S
       if (crowded && mayEdit && !held) return 'Rooms lie over each other: tidy makes room.';
       if (held) return held;
       if (mayEdit && coarse) return 'Tap a terminal to take it; hold a part to move it; fingers pan.';
-      if (mayEdit) return 'Arrows or a click take a part in hand; e extends it.';
+      if (mayEdit) return 'Arrows or a click take a part; e extends it.';
       return mayDraw ? 'Reading: Edit lets you draw.' : 'You may read this drawing.';
   }
 }
