@@ -15,8 +15,12 @@ import {
 import { feedsInverter, walk, type TreeNode } from './overview-tree';
 import type { Hanging } from './overview-ways';
 
-/** Between the devices of the column: what leaves them for the bars and the arrester turns here. */
-const TRUNK_GAP = m(6);
+/** Below a device of the column: more where what leaves it for the bars and the arrester turns. */
+const gapBelow = (part: Part): number => (part.kind === 'isolator' || part.kind === 'mcb' ? m(6) : m(3));
+/** The distributor's own, over the board. */
+const SERVICE: ReadonlySet<string> = new Set(['supply', 'fuse', 'meter']);
+/** From one bar to the next below it. */
+const BAR_PITCH = m(5);
 
 /** The board: the column at the left, each bar over its ways, neutral and earth bars above the line bar. */
 export function placeBoard(s: PageState): void {
@@ -53,9 +57,12 @@ export function placeBoard(s: PageState): void {
       else trunk.push(node);
     }
   let y: number = TOP.first - m(8);
-  for (const node of trunk.filter((n) => !isLongBar(n.part.kind)))
-    y = putPart(s, node.part, LEFT, y).bottom + (node.part.kind === 'supply' ? m(3) : TRUNK_GAP);
-  const trunkBottom = y;
+  // the bars begin beside the first device that stands in the board: service fuse and meter stay over it
+  let boardTop: number = TOP.first;
+  for (const node of trunk.filter((n) => !isLongBar(n.part.kind))) {
+    y = putPart(s, node.part, LEFT, y).bottom + gapBelow(node.part);
+    if (SERVICE.has(node.part.kind)) boardTop = y;
+  }
   const right = trunk.length > 0 ? LEFT + m(22) : LEFT;
   // rows, from above: bars of the column, devices over the bars, earth, neutral, line, ways
   const trunkBars = trunk.filter((n) => isLongBar(n.part.kind));
@@ -64,25 +71,24 @@ export function placeBoard(s: PageState): void {
   const above = [...s.page.parts].filter(
     (part) => part.kind === 'neutral-bar' && ![...neutralOf.values()].flat().includes(part),
   );
-  const sideRow = side.length > 0 ? m(16) : 0;
-  let row = Math.max(TOP.first, trunkBottom - m(6) - (above.length + trunkBars.length) * m(6) - sideRow);
+  let row = Math.max(TOP.first, boardTop);
   for (const part of above) {
     putPart(s, part, right, row);
-    row += m(6);
+    row += BAR_PITCH;
   }
   for (const node of trunkBars) {
     putPart(s, node.part, right, row);
-    row += m(6);
+    row += BAR_PITCH;
   }
   // feeders and arresters hang from the bars of the column at their left end
   let sideX = right + m(2);
   const chainTop = row + m(1);
   for (const node of side) sideX = putPart(s, node.part, sideX, chainTop).right + m(7);
   let x = side.length > 0 && chainRows === 0 ? right : side.length > 0 ? sideX : right;
-  row = chainTop + (chainRows > 0 || side.length > 0 ? Math.max(1, chainRows) * m(14) : 0);
+  row = chainTop + (chainRows > 0 || side.length > 0 ? Math.max(1, chainRows) * m(13) : 0);
   const earthRow = row;
   for (const part of s.page.parts) if (part.kind === 'earth-bar') putPart(s, part, right, row);
-  row += m(6);
+  row += BAR_PITCH;
   const neutralRow = row;
   // a bar that serves ways of another group reaches over there: then each bar has a row of its own
   const apart = servesOthers(s, groups, neutralOf);
@@ -90,16 +96,16 @@ export function placeBoard(s: PageState): void {
   const neutralRows = Math.max(1, apart ? listed.flat().length : Math.max(...listed.map((list) => list.length), 0));
   const rowsBefore = (from: TreeNode): number =>
     apart ? [...neutralOf].slice(0, [...neutralOf.keys()].indexOf(from)).flatMap(([, list]) => list).length : 0;
-  row += m(6) * neutralRows;
+  row += BAR_PITCH * neutralRows;
   const lineRow = row;
-  const ways = lineRow + m(7);
+  const ways = lineRow + m(6);
   if (side.length > 0 && chainRows === 0) x = right;
   for (const [from, items] of groups) {
     const start = x;
     let cy = chainTop;
     for (const node of chains.get(from)!) cy = putPart(s, node.part, x, cy).bottom + m(4);
     (neutralOf.get(from) ?? []).forEach((part, i) =>
-      putPart(s, part, start, neutralRow + m(6) * (rowsBefore(from) + i)),
+      putPart(s, part, start, neutralRow + BAR_PITCH * (rowsBefore(from) + i)),
     );
     if (isOpen(s, from)) putPart(s, from.part, start, lineRow);
     let slot = start + m(4);

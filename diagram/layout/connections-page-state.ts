@@ -17,7 +17,7 @@ export const FOOT_CORE = m(2);
 /** From one way's earth core to the next way's device: its designation stands there. */
 export const FOOT_GAP = m(4);
 /** From a device's lower edge to where its way's cable leaves, and the brace below. */
-export const FOOT = { cores: m(10), brace: m(12) } as const;
+export const FOOT = { cores: m(7), brace: m(9) } as const;
 export const LEFT = m(11);
 export const ROW_GAP = m(6);
 export const COLUMN_GAP = m(8);

@@ -16,7 +16,13 @@ function spans(scene: Scene, axis: 'x' | 'y'): Span[] {
   const size = axis === 'x' ? 'width' : 'height';
   const found: Span[] = [];
   const box = (b: Area, cost: number) => found.push({ from: b[axis], to: b[axis] + b[size], cost });
-  for (const part of scene.parts) box(part, part.kind.endsWith('-bar') ? 1 : 100);
+  for (const part of scene.parts) {
+    box(part, part.kind.endsWith('-bar') ? 1 : 100);
+    // what is written beside a part is read with it
+    const all = [part, ...part.texts.map(textBox)];
+    const from = Math.min(...all.map((b) => b[axis]));
+    found.push({ from, to: Math.max(...all.map((b) => b[axis] + b[size])), cost: 8 });
+  }
   for (const frame of scene.frames) if (frame.kind !== 'lane') box(frame, frame.kind === 'brace' ? 40 : 12);
   const texts = [
     ...scene.texts,
@@ -57,31 +63,77 @@ export function contentOf(scene: Scene): Area {
   };
 }
 
+/** How much costlier a cut may be than the best one for the sake of pages that are evenly full: a twelfth of a run a module. */
+const UNEVEN = 1 / 12;
+
 /**
- * Cuts the stretch from `start` to `end` into pieces no longer than `most`.
+ * Cuts the stretch from `start` to `end` into as few pieces no longer than `most` as can be, where it costs least in all.
  * @returns edges, with both ends
  */
 export function cuts(scene: Scene, axis: 'x' | 'y', from: number, end: number, most: number): number[] {
-  const edges = [from];
-  if (end - from <= most) return [from, end];
-  const all = spans(scene, axis);
-  while (end - edges.at(-1)! > most) {
-    const start = edges.at(-1)!;
-    let best = start + most;
-    let least = Infinity;
-    // from the far end back over two fifths of the sheet: the fuller sheet wins where the cost is the same
-    for (let at = Math.floor((start + most) / MODULE) * MODULE - MODULE / 2; at > start + most * 0.6; at -= MODULE) {
-      const cost =
-        all.reduce((sum, span) => (span.from < at && at < span.to ? sum + span.cost : sum), 0) +
-        (start + most - at) / 4000;
-      if (cost < least) {
-        least = cost;
-        best = at;
-      }
-    }
-    edges.push(best);
+  const pieces = Math.ceil((end - from) / most);
+  if (pieces <= 1) return [from, end];
+  const places: number[] = [];
+  for (let at = Math.floor(from / MODULE) * MODULE + MODULE / 2; at < end; at += MODULE) if (at > from) places.push(at);
+  const cost = costsAt(spans(scene, axis), places);
+  const even = (end - from) / pieces;
+  // cheapest way to have made n cuts, the last of them at each place
+  let least = places.map((at, i) => (at - from <= most ? cost[i]! : Infinity));
+  const came: number[][] = [];
+  for (let n = 2; n < pieces; n++) {
+    const back: number[] = [];
+    least = places.map((at, i) => {
+      let best = Infinity;
+      back[i] = -1;
+      for (let k = i - 1; k >= 0 && at - places[k]! <= most; k--)
+        if (least[k]! < best) {
+          best = least[k]!;
+          back[i] = k;
+        }
+      return best + cost[i]! + (Math.abs(at - from - n * even) / MODULE) * UNEVEN;
+    });
+    came.push(back);
   }
-  return [...edges, end];
+  let last = -1;
+  let best = Infinity;
+  places.forEach((at, i) => {
+    const sum = least[i]! + (Math.abs(end - at - even) / MODULE) * UNEVEN;
+    if (end - at > most || sum >= best) return;
+    best = sum;
+    last = i;
+  });
+  // no grid place lets so few pieces do: the pieces are full and the cuts fall where they fall
+  if (last < 0) return Array.from({ length: pieces + 1 }, (_, i) => Math.min(end, from + i * most));
+  const edges = [end];
+  for (let n = came.length; ; n--) {
+    edges.push(places[last]!);
+    if (n === 0) break;
+    last = came[n - 1]![last]!;
+  }
+  return [...edges, from].reverse();
+}
+
+/** What a cut costs at each of some places, in order: all spans that it goes through. */
+function costsAt(all: readonly Span[], places: readonly number[]): number[] {
+  const step = new Float64Array(places.length + 1);
+  const first = (value: number): number => {
+    let low = 0;
+    let high = places.length;
+    while (low < high) {
+      const middle = (low + high) >> 1;
+      if (places[middle]! <= value) low = middle + 1;
+      else high = middle;
+    }
+    return low;
+  };
+  for (const span of all) {
+    const [open, shut] = [first(span.from), first(span.to - 1e-6)];
+    if (open >= shut) continue;
+    step[open]! += span.cost;
+    step[shut]! -= span.cost;
+  }
+  let sum = 0;
+  return places.map((_, i) => (sum += step[i]!));
 }
 
 /** Where the runs of a scene pass a cut, for the match marks. */
