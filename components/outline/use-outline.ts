@@ -56,9 +56,6 @@ export function useOutline(hands: Hands, findings: readonly Finding[]): Outline 
   const shown = new Map(rows.map((row) => [row.item.key, row]));
   // eslint-disable-next-line react-hooks/refs -- the way to the item before is a fallback, read only when that item is gone
   const at = shown.get(wanted) ?? [...path.current].reverse().flatMap((key) => shown.get(key) ?? [])[0] ?? rows[0]!;
-  useEffect(() => {
-    path.current = [...(pathTo(root, at.item.key) ?? []), at.item.key];
-  }, [root, at]);
 
   const take = (item: OutlineItem) => {
     const { select } = hands.store.getState();
@@ -74,11 +71,18 @@ export function useOutline(hands: Hands, findings: readonly Finding[]): Outline 
 
   useEffect(() => {
     if (at.item.key === wanted) return;
-    set({ at: at.item.key });
+    // What lost its feed stands elsewhere in the outline now: the line in hand goes there with it.
+    const key = [...path.current].reverse().find((candidate) => pathTo(root, candidate)) ?? at.item.key;
+    const item = [...everyItem(root)].find((candidate) => candidate.key === key)!;
+    set({ at: key, open: new Set([...view.getState().outline.open, ...(pathTo(root, key) ?? [])]) });
     const { parts, wires } = hands.store.getState().selection;
-    if (parts.length + wires.length === 0) take(at.item);
+    if (parts.length + wires.length === 0) take(item);
     // eslint-disable-next-line react-hooks/exhaustive-deps -- only when the item in hand has gone
   }, [at, wanted]);
+
+  useEffect(() => {
+    if (at.item.key === wanted) path.current = [...(pathTo(root, at.item.key) ?? []), at.item.key];
+  }, [root, at, wanted]);
 
   useEffect(() => {
     const { outline } = view.getState();
