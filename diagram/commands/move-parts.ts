@@ -1,6 +1,7 @@
 import { MODULE } from '../symbols/types';
 import { diff } from '../document/patch';
 import { applyPatch } from '../document/patch';
+import { bendsMoved } from '../layout/bends';
 import { placeAll, positionsOn } from '../layout/place';
 import { byCode, canonical, type Face, type Installation, type Position } from '../document/schema';
 import { nameOf } from '../document/names';
@@ -32,14 +33,19 @@ const named = (doc: Installation, ids: readonly string[]): string => {
 };
 
 /** Moves parts on one face by whole modules; what was moved by hand is pinned. Lengths in 1/100 mm. */
-export const moveParts = (doc: Installation, face: Face, ids: readonly string[], dx: number, dy: number): Command =>
-  moved(
+export function moveParts(doc: Installation, face: Face, ids: readonly string[], dx: number, dy: number): Command {
+  const command = moved(
     doc,
     face,
     (_, at) => ({ ...at, x: snap(at.x + dx), y: snap(at.y + dy), pinned: true }),
     ids,
     `Move ${named(doc, ids)}`,
   );
+  // runs that were led by hand between parts that move together move with them
+  const bends = bendsMoved(doc, face, new Set(ids), snap(dx), snap(dy));
+  if (Object.keys(bends).length === 0) return command;
+  return { ...command, patch: { ...command.patch, set: { ...command.patch.set, bends } } };
+}
 
 /** Lines parts up with the first of them, in a row or in a column. */
 export function alignParts(doc: Installation, face: Face, ids: readonly string[], along: 'row' | 'column'): Command {

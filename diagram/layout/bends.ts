@@ -44,3 +44,22 @@ export function stretchesOf(points: readonly Point[], bends: readonly Bend[]): M
   }
   return led;
 }
+
+/** The bends of runs that move with both their ends, shifted along with them. Lengths in 1/100 mm. */
+export function bendsMoved(
+  doc: Installation,
+  face: Face,
+  ids: ReadonlySet<string>,
+  dx: number,
+  dy: number,
+): Record<string, Bend[]> {
+  const bends = doc.sheet?.bends;
+  if (!bends) return {};
+  const within = doc.wires.filter(({ id, from, to }) => bends[bendKey(face, [id])] && ids.has(from[0]) && ids.has(to[0]));
+  return Object.fromEntries(
+    within.map(({ id }) => {
+      const key = bendKey(face, [id]);
+      return [key, bends[key]!.map((bend): Bend => ('x' in bend ? { x: bend.x + dx } : { y: bend.y + dy }))];
+    }),
+  );
+}

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { bendRun, routeAgain, stretchAcross } from '@/diagram/commands/bend-run';
+import { moveParts } from '@/diagram/commands/move-parts';
 import { isRefusal, type Command, type Refusal } from '@/diagram/commands/types';
 import { PatchSchema, applyPatch, diff, invert, touched } from '@/diagram/document/patch';
 import { readDocument, type Installation } from '@/diagram/document/schema';
@@ -138,6 +139,13 @@ describe('leading a run on the sheet', () => {
     expect([...touched(command.patch)]).toEqual([`bends:connections:${run.wires[0]}`]);
     expect(applyPatch(applyPatch(doc, theirs), command.patch)).toEqual(applyPatch(led, theirs));
     expect(diff(doc, led)).toEqual(command.patch);
+  });
+
+  it('moves with its run when both ends move', () => {
+    const together = applyPatch(led, moveParts(led, face, [run.from[0], run.to[0]], 1000, 500).patch);
+    expect(together.sheet!.bends).toEqual({ [`connections:${run.wires[0]}`]: [{ x: to + 1000 }] });
+    const alone = applyPatch(led, moveParts(led, face, [run.to[0]], 1000, 500).patch);
+    expect(alone.sheet!.bends).toEqual(led.sheet!.bends);
   });
 
   it('leads a cable of the overview', () => {
