@@ -27,7 +27,7 @@ interface FloatingProps {
 export function Floating({ box, at, width, children }: FloatingProps) {
   const fits = Math.min(width, Math.max(200, box.width - 16));
   return (
-    <div className="absolute z-10" style={{ ...beside(at, box, fits), width: fits }}>
+    <div className="absolute z-10 border-x border-rule bg-paper" style={{ ...beside(at, box, fits), width: fits }}>
       {children}
     </div>
   );

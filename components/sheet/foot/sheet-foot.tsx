@@ -54,7 +54,11 @@ function hint(mode: Mode, held: string, { mayEdit, mayDraw, crowded, coarse }: S
     case 'move':
       return `Arrows move by 2.5 mm: ${mode.dx}, ${mode.dy}. Enter leaves it there, Esc as it was.`;
     case 'tidy':
-      return 'The dashed drawing is how it would stand.';
+      return mode.moved === 0 ? 'All stands in its place.' : 'The dashed drawing is how it would stand.';
+    case 'draft':
+      return 'The dashed drawing is what the survey would draw.';
+    case 'choose':
+      return 'Two terminals lie close together: which one is meant?';
     default:
       if (crowded && mayEdit && !held) return 'Rooms lie over each other: tidy makes room.';
       if (held) return held;
