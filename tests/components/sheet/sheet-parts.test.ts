@@ -168,6 +168,19 @@ describe('examining beside the page', () => {
     expect(await third).toEqual({ value: 'new', ms: 1 });
   });
 
+  it('tells the worker a drawing once: what is asked of the same drawing again goes without it', () => {
+    const worker = new SlowWorker();
+    const examiner = new Examiner(() => worker);
+    const finding = examine(drawn()).findings[0]!;
+    void examiner.prove(drawn(), finding);
+    worker.answer('proof');
+    void examiner.prove(drawn(), finding);
+    expect(worker.asked.map(({ task }) => task)).toEqual([
+      { kind: 'prove', document: drawn(), finding },
+      { kind: 'prove-change', patch: {}, finding },
+    ]);
+  });
+
   it('says that it failed, and works again with a new worker', async () => {
     const workers: SlowWorker[] = [];
     const examiner = new Examiner(() => {
