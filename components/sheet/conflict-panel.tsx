@@ -26,6 +26,7 @@ function nameOfKey(docs: readonly Installation[], key: string): string {
     .find((found) => found !== undefined);
   const called = part ? `${part.ref ?? part.label ?? KIND_NAME[part.kind]}` : id;
   if ((ARRANGEMENTS as readonly string[]).includes(name)) return `Place of ${called} on the ${name}`;
+  if (name === 'bends') return `Run led by hand: ${id.slice(id.indexOf(':') + 1)}`;
   if (name === 'plans')
     return `Plan: ${docs.map((doc) => doc.plans?.find((plan) => plan.id === id)?.name).find(Boolean) ?? id}`;
   if (name === 'parts') return `${called}${part?.ref ? `, ${KIND_NAME[part.kind]}` : ''}`;

@@ -1,5 +1,5 @@
-import { ARRANGEMENTS, type Arrangement, type Installation, type Position } from '../document/schema';
-import { touched, type Patch } from '../document/patch';
+import { ARRANGEMENTS, type Installation } from '../document/schema';
+import { KEPT, touched, type Kept, type Patch } from '../document/patch';
 
 /**
  * Two people on one drawing. A key (`parts:Q1`, `overview:Q1`, `title`) names the smallest thing that a change sets or
@@ -9,7 +9,8 @@ import { touched, type Patch } from '../document/patch';
 type Side = Record<string, unknown>;
 type Item = { id: string };
 const LISTS: ReadonlySet<string> = new Set(['places', 'parts', 'wires', 'cables', 'survey', 'plans']);
-const isFace = (name: string): name is Arrangement => (ARRANGEMENTS as readonly string[]).includes(name);
+/** What the sheet keeps by id: positions and bends. */
+const isKept = (name: string): name is Kept => (KEPT as readonly string[]).includes(name);
 
 /** `parts:Q1` as its two halves; a field of the document has no second one. */
 export function splitKey(key: string): { name: string; id: string | null } {
@@ -21,7 +22,7 @@ export function splitKey(key: string): { name: string; id: string | null } {
 export function valueAt(doc: Installation, key: string): unknown {
   const { name, id } = splitKey(key);
   if (id === null) return doc[name as keyof Installation];
-  if (isFace(name)) return doc.sheet?.[name]?.[id];
+  if (isKept(name)) return doc.sheet?.[name]?.[id];
   return (doc[name as 'parts'] as readonly Item[] | undefined)?.find((item) => item.id === id);
 }
 
@@ -30,7 +31,7 @@ export function valueIn(patch: Patch, key: string): unknown {
   const { name, id } = splitKey(key);
   const side = (patch.set as Side | undefined)?.[name];
   if (id === null) return side;
-  if (isFace(name)) return (side as Record<string, Position> | undefined)?.[id];
+  if (isKept(name)) return (side as Record<string, unknown> | undefined)?.[id];
   return (side as readonly Item[] | undefined)?.find((item) => item.id === id);
 }
 
@@ -50,12 +51,12 @@ export function without(patch: Patch, keys: ReadonlySet<string>): Patch {
     const kept: Side = {};
     for (const [name, value] of Object.entries(side)) {
       if (value === undefined) continue;
-      if (Array.isArray(value) && (LISTS.has(name) || isFace(name))) {
+      if (Array.isArray(value) && (LISTS.has(name) || isKept(name))) {
         const rest = value.filter(
           (item: string | Item) => !keys.has(`${name}:${typeof item === 'string' ? item : item.id}`),
         );
         if (rest.length > 0) kept[name] = rest;
-      } else if (isFace(name)) {
+      } else if (isKept(name)) {
         const rest = Object.entries(value as object).filter(([id]) => !keys.has(`${name}:${id}`));
         if (rest.length > 0) kept[name] = Object.fromEntries(rest);
       } else if (!keys.has(name)) kept[name] = value;

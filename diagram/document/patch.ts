@@ -76,8 +76,8 @@ export type Patch = z.infer<typeof PatchSchema>;
 type Item = { id: string };
 const listIn = (doc: Installation, list: List): readonly Item[] => (doc[list] as readonly Item[] | undefined) ?? [];
 /** What the sheet keeps by id: positions on each face, and the bends set by hand. */
-const KEPT = [...ARRANGEMENTS, 'bends'] as const;
-type Kept = Arrangement | 'bends';
+export const KEPT = [...ARRANGEMENTS, 'bends'] as const;
+export type Kept = Arrangement | 'bends';
 const keptIn = (doc: Installation, kept: Kept): Record<string, unknown> => doc.sheet?.[kept] ?? {};
 
 function mergeList(items: readonly Item[], set: readonly Item[] = [], remove: readonly string[] = []): Item[] {
