@@ -40,15 +40,17 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
   const drag = useRef<{ from: Point; at: Point; moved: boolean; threshold: number } | null>(null);
   const { plan, placed, placing, ghost, carried, inHand, rights } = state;
   const held = inHand[0];
+  const { width: planWidth, height: planHeight } = plan ?? { width: 0, height: 0 };
 
   useEffect(() => {
     // On a small screen the whole plan would be too small to read: it opens larger, and is scrolled.
     const frame = requestAnimationFrame(() => {
-      const scale = svg.current?.getScreenCTM()?.a ?? 0;
+      const { width = 0, height = 0 } = box.current?.getBoundingClientRect() ?? {};
+      const scale = Math.min(width / (planWidth + 2 * EDGE), height / (planHeight + 2 * EDGE));
       if (scale > 0) setZoom((now) => (now === 1 ? Math.min(3, Math.max(1, LEAST_PX / (LETTERS * scale))) : now));
     });
     return () => cancelAnimationFrame(frame);
-  }, []);
+  }, [box, planWidth, planHeight]);
 
   useEffect(() => {
     box.current?.querySelector('[data-held]')?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
