@@ -1,6 +1,7 @@
 import { isSupplyJoint } from '../circuit/earth';
 import { recalled, seen } from './clauses';
 import { crossings } from './readings/crossings';
+import { mainEarthHome } from './readings/lead-earth';
 import { takeOut } from './readings/rewire';
 import type { Rule } from './types';
 import { sayWire } from './readings/words';
@@ -31,7 +32,7 @@ export const earthNeutralJoined: Rule = {
         parts: [graph.partOf[a]!.id, graph.partOf[b]!.id],
         wires: [wire],
         conditions,
-        remedies: [takeOut('Take the joint out', [wire])],
+        remedies: [takeOut('Take the joint out', [wire]), ...mainEarthHome(context, wire)],
       };
     }
   },

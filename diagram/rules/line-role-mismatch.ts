@@ -1,8 +1,9 @@
 import { natureOfRole, type Nature } from '../circuit/natures';
 import { isControl, isPoint } from '../terminals/roles-of-parts';
-import type { Role } from '../document/schema';
+import type { Part, Role } from '../document/schema';
 import { COMMON_PRACTICE } from './clauses';
 import type { Context } from './context';
+import { branches } from './readings/branches';
 import { crossings } from './readings/crossings';
 import { earthGaps } from './readings/earth-gaps';
 import { misledStretches } from './readings/misled';
@@ -48,8 +49,8 @@ function wiresAt({ graph }: Context, node: number): string[] {
 function told(context: Context): {
   wires: Set<string>;
   parts: Set<string>;
-  /** places where line and earth change places: live cases say it */
-  liveCases: Set<string | undefined>;
+  /** line and earth change places on the same way: the live cases say it */
+  isByLiveCase(part: Part): boolean;
 } {
   const wires = new Set<string>();
   const parts = new Set<string>();
@@ -73,7 +74,8 @@ function told(context: Context): {
       if (source && !fed && lineEnd === context.graph.node(part.id, 'N'))
         for (const number of lineEdges) addWire(context, number, wires);
   const cases = earthGaps(context).flatMap((gap) => (gap.on === 'line' ? gap.parts : []));
-  return { wires, parts, liveCases: new Set(cases.map((id) => context.graph.parts.get(id)!.place)) };
+  const ways = new Set(cases.map((id) => branches(context).get(id)));
+  return { wires, parts, isByLiveCase: ({ id }) => cases.length > 0 && ways.has(branches(context).get(id)) };
 }
 
 /** A wire drawn as one conductor that the graph shows is another. */
@@ -100,7 +102,7 @@ export const lineRoleMismatch: Rule = {
       if (is === undefined || is === drawn || drawn === 'D') return;
       if ([a, b].some((node) => known.parts.has(graph.partOf[node]!.id))) return;
       const ends = [a, b].map((node) => graph.partOf[node]!);
-      if (drawn !== 'N' && is !== 'N' && ends.some(({ place }) => known.liveCases.has(place))) return;
+      if (drawn !== 'N' && is !== 'N' && ends.some((part) => known.isByLiveCase(part))) return;
       // Wires one after the other that are drawn wrong the same way are one mistake of the pen.
       const place = ends.find((part) => !isPoint(part) && !isControl(part)) ?? ends[0]!;
       const key = `${drawn} ${is} ${place.id}`;

@@ -1,6 +1,7 @@
 import { closedEdges, reach, reaches, pathTo } from '../terminals/reach';
 import { recalled } from './clauses';
 import { crossings } from './readings/crossings';
+import { mainEarthHome } from './readings/lead-earth';
 import { takeOut } from './readings/rewire';
 import type { Rule } from './types';
 import { sayWire } from './readings/words';
@@ -32,7 +33,7 @@ export const shortCircuit: Rule = {
         parts: [...new Set([graph.partOf[a]!.id, graph.partOf[b]!.id, ...switches])],
         wires: [wire],
         conditions,
-        remedies: [takeOut('Take the wire out', [wire])],
+        remedies: [takeOut('Take the wire out', [wire]), ...mainEarthHome(context, wire)],
       };
     }
     const dc = closedEdges(graph, (each) => each.kind !== 'wire' && each.kind !== 'device');

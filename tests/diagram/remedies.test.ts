@@ -70,6 +70,16 @@ const CASES: Record<string, [rule: string, drawing: Drawing, offers: string[]]> 
     ['Join the supply in Hall to the earth bar in Hall'],
   ],
   'neutral and earth joined': ['earth-neutral-joined', smallHome().neutral('NB', 'EB'), ['Take the joint out']],
+  'the main earth core on the line of the supply': [
+    'short-circuit',
+    smallHome().move('SUP:E', 'EB', 'SUP:L'),
+    ['Move the main earth to E of the supply in Hall'],
+  ],
+  'the main earth core on the neutral of the supply': [
+    'earth-neutral-joined',
+    smallHome().move('SUP:E', 'EB', 'SUP:N'),
+    ['Move the main earth to E of the supply in Hall'],
+  ],
   'a short circuit': ['short-circuit', smallHome().line('JL11', 'JN11'), ['Take the wire out']],
   'a lamp without neutral': ['open-neutral', smallHome().cut('JN11', 'E1'), ['Join E1 to the joint in Study']],
   'a way without neutral': [

@@ -4,7 +4,8 @@ import { reaches } from '../../terminals/reach';
 import type { Context } from '../context';
 import type { Remedy } from '../types';
 import type { EarthGap } from './earth-gaps';
-import { barsWhere, cableFrom, freeNumber, joinTo, moveTo } from './rewire';
+import { barsWhere, cableFrom, freeNumber, joinTo, moveTo, withEnd } from './rewire';
+import { say } from './words';
 
 /** "Join X1 to JE11", "Move the earth core to EB": the earth led to an earthed joint of the same place, else to the main bar. */
 export function earthRemedies(context: Context, { parts, joints, wires, on }: EarthGap): Remedy[] {
@@ -35,4 +36,16 @@ export function earthRemedies(context: Context, { parts, joints, wires, on }: Ea
   const states = context.evaluated[0]!.points;
   const cable = cableFrom(context, states.get(parts.find((id) => states.has(id)) ?? ''), mainBar.place);
   return cable ? joinTo(context, 'earth', from, mainBar.id, cable) : [];
+}
+
+/** "Move the main earth to E of the supply": the main earth core that is landed on another terminal of the supply, where E is free. */
+export function mainEarthHome(context: Context, id: string): Remedy[] {
+  const { graph, document } = context;
+  const wire = graph.wires.get(id)!;
+  const at = [wire.from, wire.to].find(([part]) => graph.parts.get(part)!.kind === 'supply');
+  if (!at || wire.role !== 'earth' || document.supply.system === 'TT') return [];
+  const isTaken = ([part, mark]: End) => part === at[0] && mark === 'E';
+  if (document.wires.some(({ from, to }) => isTaken(from) || isTaken(to))) return [];
+  const label = `Move the main earth to E of ${say(context, at[0])}`;
+  return [{ label, patch: { set: { wires: [withEnd(wire, at, [at[0], 'E'])] } } }];
 }

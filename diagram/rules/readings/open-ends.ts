@@ -2,7 +2,7 @@ import { isBar, polesOf } from '../../document/kinds';
 import type { Part } from '../../document/schema';
 import { isControl, isOvercurrent } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
-import { branchesOf, isOfTrunk } from '../../circuit/branches';
+import { branches } from './branches';
 import { hasWire } from './earth-gaps';
 import { once } from './once';
 import { openRegions, type OpenRegion } from './open-regions';
@@ -57,14 +57,6 @@ function needed(part: Part): readonly (readonly string[])[] {
       return [];
   }
 }
-
-/**
- * Parts by what they are joined with outside the board: a lost wire leaves both its ends in one branch, over neutral
- * and cable.
- */
-const branches = once(({ graph }: Context) =>
-  branchesOf(graph, new Set([...graph.parts.values()].filter(isOfTrunk).map(({ id }) => id))),
-);
 
 /**
  * True when an open line or open neutral is told already at this terminal: it lies in the dead stretch, or at the end
