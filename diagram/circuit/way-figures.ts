@@ -93,7 +93,12 @@ function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, Behind> {
 /** Adds up what draws behind each device. */
 export function addUp(drawn: readonly Drawn[], loads: ReadonlyMap<string, WayLoad>, practice: Practice): Together {
   const behind = indexBehind(drawn);
-  const waysBehind = (device: string) => [...(behind.get(device)?.ways ?? [])].sort(byCode);
+  const listed = new Map<string, readonly string[]>();
+  const waysBehind = (device: string) => {
+    const ways = listed.get(device) ?? [...(behind.get(device)?.ways ?? [])].sort(byCode);
+    listed.set(device, ways);
+    return ways;
+  };
   // Devices in series carry the same ways: their demand is worked out once.
   const demands = new Map<string, Demand>();
   const together = (ways: readonly string[]): Demand => {

@@ -41,10 +41,10 @@ const addLoad: Edit = (doc, room, times) => {
   return { set: { parts: [{ id, kind: 'appliance', watts: 100, class: 1, place: room }], wires } };
 };
 
-/** The earth of the third lamp to the other of the two before it. */
+/** The earth of the last outlet to another one of its way. */
 const moveWire: Edit = (doc, room) => {
-  const [first, second, third] = inRoom(doc, 'lamp', room);
-  const wire = doc.wires.find(({ to }) => to[0] === third!.id && to[1] === 'E')!;
+  const [first, second, ...others] = inRoom(doc, 'socket', room);
+  const wire = doc.wires.find(({ to }) => to[0] === others.at(-1)!.id && to[1] === 'E')!;
   const from = wire.from[0] === first!.id ? second! : first!;
   return { set: { wires: [{ ...wire, from: [from.id, 'E'] }] } };
 };

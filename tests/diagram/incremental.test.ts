@@ -7,6 +7,7 @@ import { createExaminer } from '@/diagram/rules/incremental/examiner';
 import { BEYOND, WITHIN, type Edit } from './random-edits';
 import { cleanHomes } from './mutations/clean-homes';
 import { EXAMPLES, readExample } from './example-homes';
+import { plantedMistakes } from './planted';
 
 interface Step {
   /** an edit, or a number of edits to take back */
@@ -61,4 +62,34 @@ describe('the incremental examiner', () => {
     // Most steps are told from a part of the home; else this proves nothing.
     expect(seen.part).toBeGreaterThan(100);
   }, 120_000);
+
+  it('gives the same when a mistake is made and taken back, for every mistake of the collection', () => {
+    for (const { mistake, clean, wrong } of plantedMistakes(1)) {
+      const examiner = createExaminer();
+      const first = examiner.examine(clean);
+      const made = JSON.stringify(examiner.examine(wrong)) === JSON.stringify(examine(wrong));
+      const back = JSON.stringify(examiner.examine(clean)) === JSON.stringify(first);
+      expect({ mistake, made, back }).toEqual({ mistake, made: true, back: true });
+    }
+  }, 120_000);
+
+  it('does not look at the home again for a position, or for the label of what another name names', () => {
+    const home = readExample('clean-flat');
+    const examiner = createExaminer();
+    const { ways } = examiner.examine(home);
+    const [lamp, way] = [home.parts.find(({ kind }) => kind === 'lamp')!, home.parts.find(({ id }) => id === ways[0]!.part)!];
+    const edited = applyPatch(home, {
+      set: {
+        parts: [
+          { ...lamp, label: 'By the window' },
+          { ...way, label: 'Lamps of the hall' },
+        ],
+        overview: { [lamp.id]: { x: 1000, y: 2000 } },
+      },
+    });
+    const result = examiner.examine(edited);
+    expect(result.ways[0]!.label).toBe('Lamps of the hall');
+    expect(JSON.stringify(result)).toBe(JSON.stringify(examine(edited)));
+    expect(examiner.count).toEqual({ whole: 1, part: 0, none: 1 });
+  });
 });

@@ -95,6 +95,24 @@ const addLoad: Edit = (doc, { a, b }) => {
   return { set: { parts: [part], wires } };
 };
 
+/** A lead from one point into an outlet; or, where there is one already, its plug into another outlet or into none. */
+const plugIn: Edit = (doc, { a, b, c }) => {
+  const sockets = doc.parts.filter(({ kind }) => kind === 'socket');
+  const socket = pick(sockets, a);
+  const plug = doc.parts.find(({ kind }) => kind === 'plug');
+  if (!socket) return null;
+  if (plug) return { set: { parts: [c % 3 === 0 ? without(plug, 'in') : ({ ...plug, in: socket.id } as Part)] } };
+  const load = pick(points(doc), b)!;
+  const id = freshId(doc, 'plug');
+  const wires = (['L', 'N', 'E'] as const).map((mark): Wire => ({
+    id: `${id}.${mark}`,
+    from: [load.id, mark],
+    to: [id, mark],
+    role: ({ L: 'line', N: 'neutral', E: 'earth' } as const)[mark],
+  }));
+  return { set: { parts: [{ id, kind: 'plug', in: socket.id }], wires } };
+};
+
 const takeAway = (doc: Installation, part: Part | undefined): Patch | null => {
   if (!part) return null;
   const wires = wiresAt(doc, part.id).map(({ id }) => id);
@@ -180,6 +198,7 @@ export const BEYOND: readonly Edit[] = [
   removeWire,
   moveNeutral,
   join,
+  plugIn,
   redraw,
   changeTrunk,
   notice,

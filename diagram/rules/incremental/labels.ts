@@ -1,14 +1,15 @@
 import { findById, type Installation, type Part } from '../../document/schema';
+import { isOvercurrent } from '../../terminals/roles-of-parts';
 import type { WayResult } from '../examination';
 import type { Difference } from './difference';
 
-/** What of a part reaches a result: all but its label, where something else names it; of that, whether there is one. */
+/** What of a part reaches a result: all but its label, where something else names it; of a way's, whether there is one. */
 function withoutLabel({ places }: Installation, part: Part): Part {
   const named = part.ref !== undefined || places.some(({ id }) => id === part.place);
   // The group of an appliance in the sum of the demand is read from its label.
   if (!named || part.kind === 'appliance') return part;
   const { label = '', ...rest } = part;
-  return (label.trim() === '' ? rest : { ...rest, label: '*' }) as Part;
+  return { ...rest, label: isOvercurrent(part) && label.trim() !== '' ? '*' : '' } as Part;
 }
 
 /** Parts among the changed ones of which nothing but the label changed, to one that says as much: as they were. */

@@ -7,6 +7,7 @@ type Parts = Pick<Touched, 'before' | 'after'>;
 
 /** In order of id. */
 export function mergedMap<T>(known: ReadonlyMap<string, T>, now: ReadonlyMap<string, T>, { before, after }: Parts): Map<string, T> {
+  if (known.size + now.size === 0) return new Map();
   const merged = new Map(known);
   for (const id of before) if (!after.has(id) || !now.has(id)) merged.delete(id);
   const size = merged.size;

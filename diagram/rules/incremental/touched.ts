@@ -53,6 +53,13 @@ export function touchedBy(before: Installation, after: Installation, difference:
     else throw new Beyond(`what hangs on ${id}`);
   };
   difference.parts.forEach(touch);
+  // A plug joins its outlet without a wire: with one of the two comes the other.
+  for (const { parts } of [before, after])
+    for (const part of parts) {
+      if (part.kind !== 'plug' || part.in === undefined) continue;
+      const ends = [part.id, part.in].filter((id) => branchOf.has(id) || anew.has(id));
+      if (changed.has(part.id) || changed.has(part.in)) ends.forEach(touch);
+    }
   for (const { id, from, to } of wiresOf(before, after, difference)) {
     const outside = [from, to].filter(([part]) => !trunk.has(part));
     if (outside.length === 0) throw new Beyond(`what hangs on the wire ${id}`);

@@ -102,10 +102,8 @@ export function ownEdges(context: Context, state: PointState): number[] {
 }
 
 /** How every point is fed, in each position of its switches that brings it through other devices. */
-export const feedsIn = ({ points, otherwise }: Evaluated): PointState[] => [
-  ...points.values(),
-  ...[...otherwise.values()].flat(),
-];
+export const feedsIn = ({ points, otherwise }: Evaluated): Iterable<PointState> =>
+  otherwise.size === 0 ? points.values() : [...points.values(), ...[...otherwise.values()].flat()];
 
 /** Ways that use each own edge, the owner of its cable among them; a way before another stands for both. */
 function waysOfEdges(context: Context, evaluated: Evaluated): Map<number, Map<string, string[]>> {
