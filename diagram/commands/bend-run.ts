@@ -6,7 +6,10 @@ import type { Command, Refusal } from './types';
 
 /** Leading a run by hand: a stretch is moved at right angles to itself and stays on its line until the run is routed again. */
 
-const named = (doc: Installation, run: SceneRun): string => {
+/** What is asked of a run: its way, and what it carries. */
+type Led = Pick<SceneRun, 'wires' | 'points' | 'cable'>;
+
+const named = (doc: Installation, run: Led): string => {
   const cable = doc.cables.find(({ id }) => id === run.cable);
   return cable?.ref ? `cable ${cable.ref}` : run.cable ? 'a cable' : 'a wire';
 };
@@ -16,7 +19,7 @@ const named = (doc: Installation, run: SceneRun): string => {
  * @param stretch number of the stretch, from the run's first end
  * @param to 1/100 mm: x of an upright stretch, y of a level one; taken to the module
  */
-export function bendRun(doc: Installation, face: Face, run: SceneRun, stretch: number, to: number): Command | Refusal {
+export function bendRun(doc: Installation, face: Face, run: Led, stretch: number, to: number): Command | Refusal {
   const [a, b] = [run.points[stretch], run.points[stretch + 1]];
   if (!a || !b) return { refused: 'That run has no such stretch.' };
   const at = Math.round(to / MODULE) * MODULE;

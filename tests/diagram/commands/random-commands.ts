@@ -1,3 +1,4 @@
+import { bendRun, routeAgain } from '@/diagram/commands/bend-run';
 import { copyParts, pasteClip } from '@/diagram/commands/copy';
 import { deleteSelection } from '@/diagram/commands/delete-selection';
 import { copyRoom } from '@/diagram/commands/copy-room';
@@ -34,7 +35,7 @@ export function randomCommand(doc: Installation, pick: (below: number) => number
     return mark ? [id, mark] : null;
   };
   const outcome = ((): Command | Refusal | null => {
-    switch (pick(18)) {
+    switch (pick(20)) {
       case 0:
       case 1:
         return editRating(doc, part.id, of(RATINGS)!);
@@ -85,6 +86,14 @@ export function randomCommand(doc: Installation, pick: (below: number) => number
         const place = doc.places.length < 12 ? of(doc.places) : undefined;
         return place ? copyRoom(doc, { place: place.id, name: newId(), feed: pick(2) === 0 ? 'same' : 'new' }, newId) : null;
       }
+      case 17: {
+        const wire = of(doc.wires);
+        // any straight way will do: what is kept is the line, not where the run lay
+        const run = wire && { wires: [wire.id], points: [{ x: 0, y: 0 }, { x: 0, y: 5000 }] };
+        return run ? bendRun(doc, face, run, 0, pick(200) * 250) : null;
+      }
+      case 18:
+        return routeAgain(doc, face, [of(doc.wires)?.id ?? '']);
       default:
         return renumber(doc);
     }
