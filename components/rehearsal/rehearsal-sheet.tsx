@@ -192,7 +192,7 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
               cableOf={cableOf}
               answer={answer}
               station={station}
-              faultAt={fault?.at ?? null}
+              fault={fault ?? null}
               faultName={faultPart ? partName(document, faultPart) : ''}
               hand={hand}
               show={fault?.at ?? hand}

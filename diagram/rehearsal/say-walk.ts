@@ -201,7 +201,7 @@ export const say = {
     const live = steady.standing.condition.sources.map(({ part }) => part.id);
     const stays =
       live.length > 0
-        ? `${names(scene, live)} ${live.length === 1 ? 'stays' : 'stay'} live up to what has opened.`
+        ? `${capital(names(scene, live))} ${live.length === 1 ? 'stays' : 'stay'} live up to what has opened.`
         : '';
     return { heading: 'still', text: [cleared, lost, stays].filter(Boolean).join(' ') };
   },

@@ -1,6 +1,7 @@
 import { memo, useMemo } from 'react';
 import { Layer } from '@/components/sheet/canvas/layer';
 import { fontSize } from '@/diagram/layout/lettering';
+import type { FaultKind } from '@/diagram/circuit/fault-types';
 import type { Scene } from '@/diagram/layout/scene';
 import { ampText, voltText } from '@/diagram/rehearsal/words';
 import type { Station } from '@/diagram/rehearsal/walk';
@@ -61,18 +62,28 @@ interface PencilProps {
   /** id of the faulted part, and what its case is called */
   at: string;
   name: string;
+  kind: FaultKind;
   /** id of each wire's cable */
   cableOf: ReadonlyMap<string, string>;
 }
 
+/** What is called out at the faulted part: the case's volts, of a short circuit its amperes; nothing where there is neither. */
+function calloutOf(station: Station, kind: FaultKind, at: string, name: string) {
+  if (station.kind === 'before') return null;
+  if (kind === 'line-to-neutral') return { figure: ampText(station.faultAmps), words: `L to N at ${name}` };
+  if (station.figures.parts[at]?.caseVolts === undefined) return null;
+  return { figure: voltText(station.touchVolts), words: `${name} case to earth` };
+}
+
 /** The fault in red pencil: its path beside the wires it takes, the ring at its place, what stands at the case. */
-export const PencilLayer = memo(function PencilLayer({ scene, station, at, name, cableOf }: PencilProps) {
+export const PencilLayer = memo(function PencilLayer({ scene, station, at, name, kind, cableOf }: PencilProps) {
   const strokes = useMemo(() => pencilStrokes(scene, station.path, cableOf), [scene, station.path, cableOf]);
   const part = scene.parts.find(({ id }) => id === at);
-  const words = `${name} case to earth`;
+  const callout = calloutOf(station, kind, at, name);
+  const words = callout?.words ?? '';
   const width = Math.max(2600, words.length * 218 + 500);
   const box = useMemo(() => part && calloutPlace(scene, part, width, 1350), [scene, part, width]);
-  const shown = part && box && station.kind !== 'before' && station.figures.parts[at]?.caseVolts !== undefined;
+  const shown = part && box && callout;
   const middle = part && { x: part.x + part.width / 2, y: part.y + part.height / 2 };
   const radius = part ? Math.max(part.width, part.height) / 2 + 260 : 0;
   const bars = scene.parts.filter(
@@ -127,7 +138,7 @@ export const PencilLayer = memo(function PencilLayer({ scene, station, at, name,
           />
           <rect {...box} fill="var(--paper)" stroke="var(--red)" strokeWidth={58} />
           <Red x={box.x + 220} y={box.y + 640} size={420}>
-            {voltText(station.touchVolts)}
+            {callout.figure}
           </Red>
           <text x={box.x + 220} y={box.y + 1110} fontSize={fontSize(250)} fill="var(--ink)">
             {words}

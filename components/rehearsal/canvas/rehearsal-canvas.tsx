@@ -7,6 +7,7 @@ import { GroundLayer } from '@/components/sheet/canvas/ground-layer';
 import { HeldLayer } from '@/components/sheet/canvas/hand-layer';
 import { middle } from '@/components/sheet/canvas/pick';
 import { px } from '@/components/sheet/canvas/units';
+import type { Fault } from '@/diagram/circuit/fault-types';
 import type { Part } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
 import type { Rehearsed } from '@/diagram/rehearsal/rehearse';
@@ -39,8 +40,8 @@ interface CanvasProps {
   cableOf: ReadonlyMap<string, string>;
   answer: Rehearsed | null;
   station: Station | null;
-  /** id of the part at which the fault in hand is */
-  faultAt: string | null;
+  /** the fault in hand, and what its part is called */
+  fault: Fault | null;
   faultName: string;
   hand: string | null;
   /** id of the part that must be in sight */
@@ -68,7 +69,7 @@ function nodeFor(part: Scene['parts'][number], look: PartLook, operable: boolean
 
 /** The face as it stands in the rehearsal: a skin over a scene, which says what was touched. */
 export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps) {
-  const { scene, parts, cableOf, answer, station, faultAt, faultName, hand, show, onPart, onGround } = props;
+  const { scene, parts, cableOf, answer, station, fault, faultName, hand, show, onPart, onGround } = props;
   const flow = useReactFlow();
   const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
   const box = useFlowStore((state) => `${state.width} ${state.height}`);
@@ -175,8 +176,15 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
         partLooks={partLooks}
         runLooks={runLooks}
       />
-      {station && faultAt && (
-        <PencilLayer scene={scene} station={station} at={faultAt} name={faultName} cableOf={cableOf} />
+      {station && fault && (
+        <PencilLayer
+          scene={scene}
+          station={station}
+          at={fault.at}
+          kind={fault.kind}
+          name={faultName}
+          cableOf={cableOf}
+        />
       )}
     </ReactFlow>
   );
