@@ -1,4 +1,5 @@
 import { ACTIONS, type ActionContext } from '@/components/sheet/actions';
+import { askForCopy } from '@/components/sheet/copying';
 import { withPlaces } from '@/diagram/commands/place-new';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
 import type { OutlineItem } from '@/diagram/outline/types';
@@ -77,7 +78,7 @@ export function commandsFor(item: OutlineItem, context: ActionContext, hand: Out
         return [...actions(WITH_PART), wire, ...actions([...(loads ? WITH_LOAD : []), ...WITH_ANY]), show];
       case 'room':
         return [
-          { ...action('copy-room'), does: () => hands.askForCopy(item.place) },
+          { ...action('copy-room'), does: () => askForCopy(hands, item.place) },
           take('Take all of it in hand: to copy, move or delete it'),
           show,
         ];

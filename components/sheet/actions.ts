@@ -1,6 +1,7 @@
 import type { KeyHelp } from '@/components/frame/types';
 import type { Hands } from './hands';
 import { routeInHandAgain } from './leading';
+import { askForCopy } from './copying';
 import { align, distribute, unpin } from './placing';
 import { takeAll, takeKind, takeRoom } from './taking';
 import type { TidyWay } from './tidy/use-tidy';
@@ -113,7 +114,7 @@ export const ACTIONS: readonly Action[] = [
     words: 'Copy the room in hand whole to a new room, wired to the same or new ways',
     keys: 'Shift D',
     edits: true,
-    does: ({ hands }) => hands.askForCopy(),
+    does: ({ hands }) => askForCopy(hands),
   },
   { id: 'next-note', words: 'Next finding', keys: 'n', does: ({ nextNote }) => nextNote(1) },
   { id: 'last-note', words: 'Finding before', keys: 'Shift N', does: ({ nextNote }) => nextNote(-1) },
@@ -173,7 +174,7 @@ export const ACTIONS: readonly Action[] = [
     id: 'place',
     words: 'Place exactly: write the position in mm',
     edits: true,
-    does: ({ hands }) => hands.edit(),
+    does: ({ hands }) => hands.editPlace(),
   },
   {
     id: 'route-again',

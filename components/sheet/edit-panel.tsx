@@ -104,7 +104,7 @@ export function EditPanel({
       {part && (
         <>
           <EditField
-            first
+            first={mode.field === undefined}
             label={`Rating of ${name}`}
             value={sharedRating(hands.doc, ids)}
             hint={ratingExample(part)}
@@ -132,6 +132,7 @@ export function EditPanel({
           />
           {placeText(hands.doc, face, part.id) !== '' && (
             <EditField
+              first={mode.field === 'place'}
               label="Place, mm across and down"
               value={placeText(hands.doc, face, part.id)}
               hint="125, 62.5"

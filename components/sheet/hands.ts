@@ -1,5 +1,4 @@
 import { allowedFrom, joinTerminals } from '@/diagram/commands/join-terminals';
-import { copyRoom, type RoomCopy } from '@/diagram/commands/copy-room';
 import { deleteSelection } from '@/diagram/commands/delete-selection';
 import { marksOf, sameEnd, wiresAt } from '@/diagram/commands/ends';
 import { moveLoad } from '@/diagram/commands/move-load';
@@ -248,36 +247,26 @@ export class Hands {
     this.do(moveLoad(this.doc, loads, device, this.newId));
   }
 
-  /** Asks how a room is to be copied: the one named, else that of the part in hand. */
-  askForCopy(place?: string): void {
-    const room = place ?? this.doc.parts.find((part) => part.id === this.state.selection.parts[0])?.place;
-    if (!this.mayEdit) this.state.say('You may read this drawing.');
-    else if (room === undefined) this.state.say('Take a part of the room in hand first.');
-    else this.view.getState().setMode({ kind: 'room', place: room });
-  }
-
-  /** @returns why it cannot be, else null */
-  copyRoom(copy: RoomCopy): string | null {
-    const outcome = copyRoom(this.doc, copy, this.newId);
-    if (isRefusal(outcome)) return outcome.refused;
-    this.view.getState().setMode(REST);
-    this.do(outcome);
-    return null;
-  }
-
   /** Opens what is written at a part, or the rating that several share. A part that this face does not draw is edited at the sheet's corner. */
-  editPart(id: string, parts: readonly string[] = [id]): void {
+  editPart(id: string, parts: readonly string[] = [id], field?: 'place'): void {
     if (!this.mayEdit) return this.state.say('You may read this drawing.');
     const drawn = this.scene().parts.find((candidate) => candidate.id === id);
     if (parts.length === 1) this.state.select({ parts: [id], wires: [] });
     const at = drawn ? { x: drawn.x + drawn.width + 200, y: drawn.y } : { x: 0, y: 0 };
-    this.view.getState().setMode({ kind: 'edit', part: id, parts, at });
+    this.view.getState().setMode({ kind: 'edit', part: id, parts, at, ...(field && { field }) });
   }
 
   editRun(run: SceneRun): void {
     if (!this.mayEdit || !run.cable) return;
     const at = run.ticks?.at ?? run.points[Math.floor(run.points.length / 2)]!;
     this.view.getState().setMode({ kind: 'edit', cable: run.cable, at: { x: at.x + 400, y: at.y } });
+  }
+
+  /** Opens the place of the part in hand, to be written in mm. */
+  editPlace(): void {
+    const { parts } = this.state.selection;
+    if (parts.length === 1) this.editPart(parts[0]!, parts, 'place');
+    else this.state.say('Take one part in hand, to write where it stands.');
   }
 
   /** Enter: writes where the thing in hand is written. */

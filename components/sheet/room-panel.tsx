@@ -4,6 +4,7 @@ import { useLayoutEffect, useRef, useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/segmented';
 import type { RoomFeed } from '@/diagram/commands/copy-room';
+import { copyInHand } from './copying';
 import type { Hands } from './hands';
 import type { Mode } from './view';
 
@@ -40,7 +41,7 @@ export function RoomPanel({ mode, hands, onLeave }: { mode: Extract<Mode, { kind
       }}
       onSubmit={(event) => {
         event.preventDefault();
-        const refused = hands.copyRoom({ place: room.id, name, feed });
+        const refused = copyInHand(hands, { place: room.id, name, feed });
         if (refused === null) onLeave();
         else setError(refused);
       }}

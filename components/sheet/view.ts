@@ -16,7 +16,7 @@ export type Mode =
   /** the parts in hand follow the arrows, in modules */
   | { kind: 'move'; dx: number; dy: number }
   /** a rating, designation or cable is written where it stands */
-  | { kind: 'edit'; part?: string; parts?: readonly string[]; cable?: string; at: Point }
+  | { kind: 'edit'; part?: string; parts?: readonly string[]; cable?: string; field?: 'place'; at: Point }
   /** a room is to be copied whole */
   | { kind: 'room'; place: string }
   /** a finger met two terminals: which one is meant; then what was under way goes on */

@@ -74,7 +74,7 @@ describe('the command list', () => {
     // Every public act of the hands that a person can ask for is reached from an action, a panel or the pointer.
     const acts = [
       ...['extend', 'edit', 'editCable', 'wire', 'startMove', 'chooseWay'],
-      ...['remove', 'renumber', 'placeSupply', 'askForCopy', 'letGo'],
+      ...['remove', 'renumber', 'placeSupply', 'editPlace', 'letGo'],
     ];
     const asked = new Set<string>();
     const state = { selection: { parts: [], wires: [], terminal: null }, undo: vi.fn(), redo: vi.fn(), say: vi.fn(), select: vi.fn() };

@@ -2,6 +2,7 @@ import { fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { ActionContext } from '@/components/sheet/actions';
+import { askForCopy } from '@/components/sheet/copying';
 import { Hands } from '@/components/sheet/hands';
 import { notesOf } from '@/components/sheet/margin/notes';
 import { FindList } from '@/components/sheet/sheet-lists';
@@ -67,7 +68,7 @@ describe('who may only look', () => {
       expect(store.getState().document).toBe(home);
       expect(store.getState().notice).toBe('You may read this drawing.');
     }
-    for (const open of [() => hands.extend(), () => hands.wire(), () => hands.startMove(), () => hands.edit(), () => hands.askForCopy()]) {
+    for (const open of [() => hands.extend(), () => hands.wire(), () => hands.startMove(), () => hands.edit(), () => askForCopy(hands)]) {
       open();
       expect(view.getState().mode.kind).toBe('rest');
     }
