@@ -2,7 +2,6 @@
 
 import { useEffect } from 'react';
 import { applyPatch, isEmptyPatch } from '@/diagram/document/patch';
-import { draftPatch } from '@/diagram/survey/draft';
 import type { Hands } from './hands';
 import type { OpenDrawing } from './use-drawing';
 
@@ -12,7 +11,7 @@ export function useDraftPreview(drawing: OpenDrawing, hands: Hands, wanted: bool
     if (!wanted) return;
     let here = true;
     // Not before what was left unsent on this device has been found: the draft is made of the newest survey.
-    void drawing.keeper.ready.then(() => {
+    void Promise.all([import('@/diagram/survey/draft'), drawing.keeper.ready]).then(([{ draftPatch }]) => {
       if (!here) return;
       const patch = draftPatch(hands.doc, hoursWanted);
       if (!hands.mayEdit || isEmptyPatch(patch)) return hands.store.getState().say('Sheet 2 is in step with the survey.');
