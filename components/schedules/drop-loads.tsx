@@ -63,7 +63,7 @@ export function DropLoads({ plot, off, onOff, desk, drawing, document, mayEdit }
           const without = hoursWithout(plot, new Set([...off, load.id]));
           return (
             <li key={load.id}>
-              <label className="flex items-center gap-2 pointer-coarse:min-h-11">
+              <label className="flex min-h-6 items-center gap-2 pointer-coarse:min-h-11">
                 <input
                   type="checkbox"
                   className="accent-ink"

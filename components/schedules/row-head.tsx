@@ -49,7 +49,7 @@ export function RowHead({ desk, table, row, index, part, first, last, inHand, gr
       data-cell={cellName(rowKey(table.id, row.id), HEAD)}
       aria-label={label}
       aria-pressed={inHand}
-      className={`flex w-full cursor-pointer items-center justify-end focus-visible:-outline-offset-2 ${ROW_HEIGHT} ${isWay ? '' : 'px-1 text-small text-grey'} ${inHand ? 'font-bold text-ink' : ''}`}
+      className={`flex w-full scroll-mt-12 cursor-pointer items-center justify-end focus-visible:-outline-offset-2 ${ROW_HEIGHT} ${isWay ? '' : 'px-1 text-small text-grey'} ${inHand ? 'font-bold text-ink' : ''}`}
       onFocus={() => desk.getState().take(table.id, row.id, HEAD)}
       // Safari gives a button that is pressed no focus.
       onClick={(event) => event.currentTarget.focus()}

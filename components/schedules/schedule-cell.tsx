@@ -88,7 +88,7 @@ export function ScheduleCell({ desk, table, row, column, cell, document, read, m
         title={refused?.message ?? (text.length > column.width ? text : undefined)}
         placeholder={usual}
         numeric={field.numeric}
-        className={`mx-[3px] h-5! truncate border-b border-dotted border-rule focus:bg-paper focus:outline-offset-3! ${column.right ? 'text-right tabular-nums' : ''}`}
+        className={`mx-[3px] h-5! scroll-mt-12 truncate border-b border-dotted border-rule focus:bg-paper focus:outline-offset-3! ${column.right ? 'text-right tabular-nums' : ''}`}
         onTake={() => take(table, row.id, column.id)}
         onType={(typed) => type(table, row.id, column.id, typed)}
         onKey={onKey}
