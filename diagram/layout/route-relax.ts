@@ -1,5 +1,5 @@
 import type { Line } from './route-grid';
-import type { Ground } from './route-ground';
+import type { StepCosts } from './route-steps';
 
 /**
  * Least-cost ways over a piece of the grid, by sweeping: along rows, then along columns, each line that has become
@@ -75,18 +75,18 @@ export class Relaxer {
   private limit = Infinity;
 
   /** The cheapest way from any start to any goal that goes a stretch along each of the lines in turn, or null. */
-  relax(ground: Ground, starts: readonly Start[], goals: readonly Goal[], lines: readonly Line[]): Found | null {
-    const size = ground.width * ground.height;
+  relax(steps: StepCosts, starts: readonly Start[], goals: readonly Goal[], lines: readonly Line[]): Found | null {
+    const size = steps.width * steps.height;
     while (this.layers.length <= lines.length) this.layers.push({ level: axis(), upright: axis() });
     const layers = this.layers.slice(0, lines.length + 1);
     for (const { level, upright } of layers) for (const list of [level, upright]) clear(list, size);
     this.limit = Infinity;
     let best: Found | null = null;
-    const rows = new Uint8Array(ground.height);
-    const columns = new Uint8Array(ground.width);
+    const rows = new Uint8Array(steps.height);
+    const columns = new Uint8Array(steps.width);
     const mark = (at: number) => {
-      columns[at % ground.width] = 1;
-      rows[Math.floor(at / ground.width)] = 1;
+      columns[at % steps.width] = 1;
+      rows[Math.floor(at / steps.width)] = 1;
     };
     starts.forEach(({ at, heading, cost }, i) => {
       const { cost: costs, from } = heading % 2 === 1 ? this.layers[0]!.level : this.layers[0]!.upright;
@@ -96,16 +96,16 @@ export class Relaxer {
       mark(at);
     });
     layers.forEach((layer, k) => {
-      if (k > 0) this.along(ground, lines[k - 1]!, this.layers[k - 1]!, layer, mark);
+      if (k > 0) this.along(steps, lines[k - 1]!, this.layers[k - 1]!, layer, mark);
       const last = k === lines.length;
       const level: Sweep = {
         into: layer.level,
         source: layer.upright,
-        edge: ground.right,
-        enter: ground.level,
-        lines: ground.height,
-        length: ground.width,
-        across: ground.width,
+        edge: steps.right,
+        enter: steps.level,
+        lines: steps.height,
+        length: steps.width,
+        across: steps.width,
         along: 1,
         dirty: rows,
         told: columns,
@@ -113,19 +113,19 @@ export class Relaxer {
       const upright: Sweep = {
         into: layer.upright,
         source: layer.level,
-        edge: ground.down,
-        enter: ground.upright,
-        lines: ground.width,
-        length: ground.height,
+        edge: steps.down,
+        enter: steps.upright,
+        lines: steps.width,
+        length: steps.height,
         across: 1,
-        along: ground.width,
+        along: steps.width,
         dirty: columns,
         told: rows,
       };
       while (rows.includes(1) || columns.includes(1)) {
-        this.sweep(level, ground.bend, k === 0);
-        this.sweep(upright, ground.bend, k === 0);
-        if (last) best = this.reached(ground, starts, goals, layer, lines) ?? best;
+        this.sweep(level, steps.bend, k === 0);
+        this.sweep(upright, steps.bend, k === 0);
+        if (last) best = this.reached(steps, starts, goals, layer, lines) ?? best;
       }
     });
     return best;
@@ -170,17 +170,17 @@ export class Relaxer {
   }
 
   /** From one layer to the next: at least one step along a line, from wherever the layer before comes to it. */
-  private along(ground: Ground, line: Line, before: Layer, after: Layer, mark: (at: number) => void): void {
-    const index = ground.lineIn(line);
+  private along(steps: StepCosts, line: Line, before: Layer, after: Layer, mark: (at: number) => void): void {
+    const index = steps.lineIn(line);
     if (index < 0) return;
     const upright = line.x !== undefined;
     const [own, other] = upright ? [before.upright, before.level] : [before.level, before.upright];
     const { cost, from } = upright ? after.upright : after.level;
-    const edge = upright ? ground.down : ground.right;
-    const enter = upright ? ground.upright : ground.level;
+    const edge = upright ? steps.down : steps.right;
+    const enter = upright ? steps.upright : steps.level;
     const [length, step, first] = upright
-      ? [ground.height, ground.width, index]
-      : [ground.width, 1, index * ground.width];
+      ? [steps.height, steps.width, index]
+      : [steps.width, 1, index * steps.width];
     for (const back of [false, true]) {
       let running = Infinity;
       let began = -1;
@@ -192,7 +192,7 @@ export class Relaxer {
           from[at] = -1 - began;
           mark(at);
         }
-        const here = Math.min(own.cost[at]!, other.cost[at]! + ground.bend[at]!);
+        const here = Math.min(own.cost[at]!, other.cost[at]! + steps.bend[at]!);
         if (i === 0 || !(running <= here)) {
           running = here;
           began = at;
@@ -203,7 +203,7 @@ export class Relaxer {
 
   /** The best goal that the last layer comes to, if it is better than any before. */
   private reached(
-    ground: Ground,
+    steps: StepCosts,
     starts: readonly Start[],
     goals: readonly Goal[],
     { level, upright }: Layer,
@@ -221,14 +221,14 @@ export class Relaxer {
         const begun = list.from[goal.at]!;
         if (lines.length === 0 && begun < 0 && list === ahead && starts[-1 - begun]!.heading !== goal.into) continue;
         this.limit = cost;
-        best = { cost, goal: n, ...this.trace(ground, goal.at, list === level, lines.length) };
+        best = { cost, goal: n, ...this.trace(steps, goal.at, list === level, lines.length) };
       }
     });
     return best;
   }
 
   /** Back along the stretches, from a node that was come to on one axis. */
-  private trace(ground: Ground, goal: number, onLevel: boolean, last: number): { corners: number[]; start: number } {
+  private trace(steps: StepCosts, goal: number, onLevel: boolean, last: number): { corners: number[]; start: number } {
     const corners = [goal];
     let at = goal;
     let isLevel = onLevel;
@@ -243,12 +243,12 @@ export class Relaxer {
         k--;
         const { level, upright } = this.layers[k]!;
         const [own, other] = isLevel ? [level, upright] : [upright, level];
-        if (other.cost[next]! + ground.bend[next]! < own.cost[next]!) isLevel = !isLevel;
+        if (other.cost[next]! + steps.bend[next]! < own.cost[next]!) isLevel = !isLevel;
       } else {
         const [own, other] = isLevel ? [layer.level, layer.upright] : [layer.upright, layer.level];
         // a stretch begins at a start, or at a bend
         const begun = own.from[next]!;
-        if (k === 0 && begun < 0 && own.cost[next]! < other.cost[next]! + ground.bend[next]!)
+        if (k === 0 && begun < 0 && own.cost[next]! < other.cost[next]! + steps.bend[next]!)
           return { corners: corners.reverse(), start: -1 - begun };
         isLevel = !isLevel;
       }

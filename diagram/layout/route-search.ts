@@ -1,6 +1,6 @@
 import { lineAt, type Grid, type Line, type RouteEnd } from './route-grid';
 import { COST, joined, straight, stubs, type Occupancy, type Stub } from './route-occupancy';
-import { Ground, type Window } from './route-ground';
+import { StepCosts, type Window } from './route-steps';
 import { Relaxer, type Goal, type Start } from './route-relax';
 import type { Point } from './scene';
 import { MODULE } from '../symbols/types';
@@ -28,7 +28,7 @@ export interface Way {
 const BEYOND = 16 * MODULE;
 
 export class Search {
-  private readonly ground: Ground;
+  private readonly steps: StepCosts;
   private readonly relaxer = new Relaxer();
   private readonly all: Window;
 
@@ -40,7 +40,7 @@ export class Search {
     /** keep a free line between runs where there is room */
     spread: boolean,
   ) {
-    this.ground = new Ground(grid, occupancy, terminals, spread);
+    this.steps = new StepCosts(grid, occupancy, terminals, spread);
     this.all = { left: 0, right: grid.columns - 1, top: 0, bottom: grid.rows - 1 };
   }
 
@@ -70,31 +70,31 @@ export class Search {
   }
 
   private within(window: Window, starts: readonly Stub[], goals: readonly Stub[], ask: Question): Way | null {
-    const { ground } = this;
-    ground.survey(window, ask);
+    const { steps } = this;
+    steps.survey(window, ask);
     const outer = ({ nodes }: Stub): number => nodes.at(-1)!;
-    const inside = [starts, goals].map((list) => list.filter((stub) => ground.local(outer(stub)) >= 0));
+    const inside = [starts, goals].map((list) => list.filter((stub) => steps.local(outer(stub)) >= 0));
     const [mine, theirs] = inside as [Stub[], Stub[]];
     // a way does not come back through its own terminals
-    for (const stub of [...mine, ...theirs]) for (const node of stub.inside) ground.bar(node);
+    for (const stub of [...mine, ...theirs]) for (const node of stub.inside) steps.bar(node);
     const begin = mine.map((stub): Start => {
-      ground.allowBend(outer(stub), this.mayBend(stub, ask));
-      return { at: ground.local(outer(stub)), heading: stub.direction, cost: stub.penalty };
+      steps.allowBend(outer(stub), this.mayBend(stub, ask));
+      return { at: steps.local(outer(stub)), heading: stub.direction, cost: stub.penalty };
     });
     const end = theirs.map(
       (stub): Goal => ({
-        at: ground.local(outer(stub)),
+        at: steps.local(outer(stub)),
         into: (stub.direction + 2) % 4,
         cost: stub.penalty,
         bend: this.mayBend(stub, ask) ? COST.bend : Infinity,
       }),
     );
-    const found = this.relaxer.relax(ground, begin, end, ask.lines);
+    const found = this.relaxer.relax(steps, begin, end, ask.lines);
     if (!found) return null;
     return {
       nodes: [
         ...mine[found.start]!.nodes.slice(0, -1),
-        ...found.corners.flatMap((corner, i) => ground.stretch(found.corners[i - 1] ?? corner, corner)),
+        ...found.corners.flatMap((corner, i) => steps.stretch(found.corners[i - 1] ?? corner, corner)),
         ...[...theirs[found.goal]!.nodes].reverse().slice(1),
       ],
       cost: found.cost,

@@ -3,9 +3,11 @@ import { emptyDocument } from '@/diagram/document/schema';
 import { buildScene } from '@/diagram/layout/build-scene';
 import { connectionPages } from '@/diagram/layout/connections-page';
 import { fontSize } from '@/diagram/layout/lettering';
+import { textBox } from '@/diagram/layout/text-box';
 import { PAPER_SIZES, frameOf, paperSize } from '@/diagram/paper/iso-sheet';
 import type { Group, Mark, Page } from '@/diagram/paper/primitives';
 import { CHECK_LINE, findingsText, sheetPages, type SheetOptions } from '@/diagram/paper/sheet';
+import { cuts } from '@/diagram/paper/split';
 import { paperSvg } from '@/diagram/paper/svg';
 import { CAUTIONS, clipped } from '@/diagram/paper/title-block';
 import { light } from '@/diagram/symbols/palette';
@@ -129,6 +131,26 @@ describe('sheets of paper', () => {
       );
       expect(seen).toHaveLength(1);
     }
+  });
+
+  it('cuts into as few pieces as fit, through nothing that is drawn or written but runs, bars and frames', () => {
+    const scene = buildScene(toldHome(), 'overview');
+    for (const [axis, size] of [
+      ['x', 'width'],
+      ['y', 'height'],
+    ] as const)
+      for (const most of [18_000, 24_000, 47_000]) {
+        const edges = cuts(scene, axis, 0, scene[size], most);
+        expect(edges).toHaveLength(Math.ceil(scene[size] / most) + 1);
+        expect([edges[0], edges.at(-1)]).toEqual([0, scene[size]]);
+        edges.slice(1).forEach((edge, i) => expect(edge - edges[i]!).toBeLessThanOrEqual(most));
+        const whole = [
+          ...scene.parts.filter(({ kind }) => !kind.endsWith('-bar')),
+          ...[...scene.parts, ...scene.runs].flatMap(({ texts }) => texts.map(textBox)),
+        ];
+        for (const edge of edges.slice(1, -1))
+          expect(whole.filter((box) => box[axis] < edge && edge < box[axis] + box[size])).toEqual([]);
+      }
   });
 
   it('is black on white in the light palette, and tells conductors apart without colour', () => {

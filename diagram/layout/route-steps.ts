@@ -14,7 +14,7 @@ export interface Window {
 // named here once: they are read at every node
 const { bend: BEND, crossing: CROSSING, shared: SHARED, close: CLOSE, onLine: ON_LINE, pushing: PUSHING } = COST;
 
-export class Ground {
+export class StepCosts {
   width = 0;
   height = 0;
   /** cost of the edge to the right and of the edge down; infinite where it may not be walked */
