@@ -39,7 +39,9 @@ test('no page shows anything to a cookie that is nobody\u2019s: each reads the s
   const { rows } = (await (await page.request.get('/api/jobs')).json()) as { rows: { id: string; title: string }[] };
   const context = await browser.newContext({ baseURL, extraHTTPHeaders: { cookie: 'session.ohmstead=forged' } });
   const sheets = rows.flatMap(({ id }) =>
-    ['', '/survey', '/overview', '/connections', '/schedules', '/rehearsal', '/plan', '/photographs'].map((sheet) => `/jobs/${id}${sheet}`),
+    ['', '/survey', '/overview', '/connections', '/schedules', '/rehearsal', '/plan', '/photographs'].map(
+      (sheet) => `/jobs/${id}${sheet}`,
+    ),
   );
   for (const path of ['/jobs', '/jobs/new', '/people', '/account', ...sheets]) {
     const answer = await context.request.get(path, { maxRedirects: 0 });
