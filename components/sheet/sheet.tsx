@@ -94,7 +94,8 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
   const scene = drawn ?? EMPTY_SCENE;
   const ghost = useScene(ghostDocument, face, place, drawn);
   const hands = useHands(store, viewStore, scene);
-  const examined = useExamination(document);
+  // The drawing is shown first, then examined: the two would share the machine's time.
+  const examined = useExamination(drawn && document);
   const ghostExamined = useExamination(ghostDocument);
   const slip = useSlip(hands, hoursWanted, examined.examination);
   const notes = useMemo(
