@@ -73,6 +73,19 @@ describe('the incremental examiner', () => {
     }
   }, 120_000);
 
+  it('tells a terminal without its wire as the whole home does, with a stretch that lost a wire elsewhere', () => {
+    const home = cleanHomes().get('IEC TT without')!;
+    const without = (doc: Installation, id: string) => {
+      const wires = doc.wires.filter(({ from, to }) => from[0] === id || to[0] === id).map((wire) => wire.id);
+      return applyPatch(doc, { remove: { parts: [id], wires } });
+    };
+    const examiner = createExaminer();
+    examiner.examine(home);
+    const first = without(home, 'bath.way-outlets1');
+    for (const doc of [first, without(first, 'bedroom.outlet1'), first, home])
+      expect(JSON.stringify(examiner.examine(doc))).toBe(JSON.stringify(examine(doc)));
+  });
+
   it('does not look at the home again for a position, or for the label of what another name names', () => {
     const home = readExample('clean-flat');
     const examiner = createExaminer();

@@ -3,7 +3,7 @@ import type { Context } from '../context';
 import { rules } from '../index';
 import { runRules } from '../run';
 import type { Finding } from '../types';
-import { Beyond } from './beyond';
+import { Beyond, mustBe } from './beyond';
 import { OF_A_BRANCH } from './rule-reach';
 
 const branchRules = rules.filter(({ meta }) => OF_A_BRANCH.has(meta.id));
@@ -49,6 +49,21 @@ export function split(findings: readonly Finding[], place: Place): { own: Findin
   return found;
 }
 
+const hasOne = (findings: readonly Finding[], ...ids: string[]): boolean => findings.some(({ rule }) => ids.includes(rule));
+const hasLead = ({ parts }: Installation): boolean => parts.some((part) => part.kind === 'plug' && part.in === undefined);
+
+/**
+ * A terminal without its wire is told once with the stretch that lost it, wherever in the home that is: where the one may
+ * lie in these branches and the other elsewhere, neither shows it alone. A lead that hangs loose is such a stretch, unsaid.
+ */
+function mustShowGaps(was: ReturnType<typeof split>, is: ReturnType<typeof split>, docs: readonly Installation[]): void {
+  const isOpen = (findings: readonly Finding[]) => hasOne(findings, 'open-line', 'open-neutral') || docs.some(hasLead);
+  const hasEnd = (findings: readonly Finding[]) => hasOne(findings, 'open-terminal');
+  const others = [...was.others, ...was.trunk];
+  const apart = isOpen(was.own) || (isOpen(is.own) && hasEnd(others)) || (isOpen(others) && hasEnd(is.own));
+  mustBe(!apart, 'where a lost wire is told');
+}
+
 /** What the rules that look at one branch find in an excerpt. */
 export const findingsOf = (excerpt: Context, of = branchRules): Finding[] => runRules(excerpt, of, rules);
 
@@ -67,6 +82,7 @@ export interface FindingsInput {
 export function branchFindings({ known, before, after, now, excerptBefore }: FindingsInput): Finding[] {
   const was = split(known, before);
   const is = split(findingsOf(now), after);
+  mustShowGaps(was, is, [before.doc, after.doc]);
   if (was.trunk.length + is.trunk.length > 0) {
     // What is said of the trunk may come of any branch: it stands as long as these say the same of it as before.
     const then = split(findingsOf(excerptBefore()), before);
