@@ -1,5 +1,6 @@
 'use client';
 
+import { useMemo, useState } from 'react';
 import { KIND_NAME } from '@/diagram/document/kinds';
 import { byDesignation } from '@/diagram/document/names';
 import type { Installation } from '@/diagram/document/schema';
@@ -19,16 +20,19 @@ interface DeviceListProps {
 /** Every switch, device and load as a list: the whole rehearsal without the drawing. */
 export function DeviceList({ document, answer, figures, opened }: DeviceListProps) {
   const store = useRehearsalStore();
-  const sorted = [...document.parts].sort(byDesignation);
-  const devices = sorted.filter((part) => settingsOf(part).length > 0);
+  // A large home has hundreds: they are drawn when somebody looks.
+  const [devicesOpen, setDevicesOpen] = useState(false);
+  const [loadsOpen, setLoadsOpen] = useState(false);
+  const sorted = useMemo(() => [...document.parts].sort(byDesignation), [document]);
+  const devices = useMemo(() => sorted.filter((part) => settingsOf(part).length > 0), [sorted]);
   const loads = sorted.filter(({ id }) => figures.parts[id]?.load);
   const word = 'cursor-pointer text-left underline underline-offset-2 pointer-coarse:min-h-11';
   return (
     <div className="flex flex-col gap-2">
-      <details>
+      <details onToggle={(event) => setDevicesOpen(event.currentTarget.open)}>
         <summary className="cursor-pointer text-grey">{devices.length} switches and devices</summary>
         <ul className="mt-1 flex flex-col gap-1">
-          {devices.map((part) => {
+          {(devicesOpen ? devices : []).map((part) => {
             const setting = answer.settings[part.id]!;
             const name = partName(document, part);
             const stands = opened.includes(part.id) ? 'tripped' : settingWord(part, setting);
@@ -50,7 +54,7 @@ export function DeviceList({ document, answer, figures, opened }: DeviceListProp
           })}
         </ul>
       </details>
-      <details>
+      <details onToggle={(event) => setLoadsOpen(event.currentTarget.open)}>
         <summary className="cursor-pointer text-grey">{loads.length} loads and outlets</summary>
         <table className="mt-1 w-full text-left">
           <thead>
@@ -67,7 +71,7 @@ export function DeviceList({ document, answer, figures, opened }: DeviceListProp
             </tr>
           </thead>
           <tbody>
-            {loads.map((part) => {
+            {(loadsOpen ? loads : []).map((part) => {
               const { load } = figures.parts[part.id]!;
               return (
                 <tr key={part.id}>

@@ -1,6 +1,6 @@
 import { memo } from 'react';
 import { Layer } from '@/components/sheet/canvas/layer';
-import { coreInk, coreOf, pathOf } from '@/components/sheet/canvas/run-shape';
+import { coreInk, coreOf, pathOf as routeOf } from '@/components/sheet/canvas/run-shape';
 import { INK } from '@/components/sheet/canvas/units';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { CASED, CORE_DASH, HOP_RADIUS } from '@/diagram/paper/draw-scene';
@@ -15,13 +15,22 @@ interface ConductorsProps {
   looks: ReadonlyMap<string, RunLook>;
 }
 
+/** Paths of runs, worked out once: a run of a scene never changes. */
+const paths = new WeakMap<SceneRun, string>();
+function pathOf(run: SceneRun): string {
+  let d = paths.get(run);
+  if (d === undefined) paths.set(run, (d = routeOf(run)));
+  return d;
+}
+
 /** What is fed from the mains in one stroke, from a battery cased, what is dead dotted: the same on both faces. */
 export const ConductorsLayer = memo(function ConductorsLayer({ scene, looks }: ConductorsProps) {
   const cores = scene.face === 'connections';
   const widths = cores ? CASED_CORE : CASED;
   const live = scene.runs.filter((run) => looks.get(run.id)?.state !== 'dead');
   const cased = live.filter((run) => looks.get(run.id)?.cased && run.role !== 'earth');
-  const plain = live.filter((run) => !cased.includes(run));
+  const isCased = new Set(cased);
+  const plain = live.filter((run) => !isCased.has(run));
   const stroke = (run: SceneRun) => {
     const core = coreOf(run);
     return (

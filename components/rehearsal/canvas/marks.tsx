@@ -45,17 +45,41 @@ const liesOn = ({ x, y }: Point, { points }: SceneRun): boolean =>
     return Math.min(a.x, b.x) <= x && x <= Math.max(a.x, b.x) && Math.min(a.y, b.y) <= y && y <= Math.max(a.y, b.y);
   });
 
-/** The texts of a part as they read now: beneath a load its amperes, or 0 V, stand in the place of its rating. */
-function textsOf(part: ScenePart, look: PartLook, load: PartFigures['load']): SceneText[] {
-  const dead = look.state === 'dead';
-  let written = false;
-  return part.texts.map((text) => {
+interface PartTextsProps {
+  part: ScenePart;
+  dead: boolean;
+  /** what stands beneath a load in the place of its rating */
+  figure: string | undefined;
+}
+
+/** The lettering of a part as it reads now: grey when dead, beneath a load its amperes or 0 V. */
+const PartTexts = memo(function PartTexts({ part, dead, figure }: PartTextsProps) {
+  const rating = part.texts.findIndex(({ bold }) => !bold);
+  const texts = part.texts.flatMap((text, i): SceneText[] => {
     const grey = dead ? { ...text, tone: 'grey' as const } : text;
-    if (!load || text.bold || written) return load && written && !text.bold ? { ...grey, text: '' } : grey;
-    written = true;
-    const now = look.works ? tightAmps(load.amps) : voltText(load.volts).replace(' V', dead ? ' V' : 'V');
-    return { ...grey, text: now };
+    if (figure === undefined || text.bold) return [grey];
+    return i === rating ? [{ ...grey, text: figure }] : [];
   });
+  return <Letterings texts={texts} />;
+});
+
+const RunTexts = memo(function RunTexts({ run, dead }: { run: SceneRun; dead: boolean }) {
+  return <Letterings texts={dead ? run.texts.map((text) => ({ ...text, tone: 'grey' })) : run.texts} />;
+});
+
+/** What stands beneath a load: its amperes at work, else its volts. */
+function loadFigure(load: PartFigures['load'], look: PartLook): string | undefined {
+  if (!load) return undefined;
+  return look.works ? tightAmps(load.amps) : voltText(load.volts).replace(' V', look.state === 'dead' ? ' V' : 'V');
+}
+
+/** Which runs meet at a joint, and which leave a part: worked out once a scene. */
+function meetingsOf(scene: Scene) {
+  const atDot = scene.dots.map((dot) => scene.runs.filter((run) => liesOn(dot, run)).map(({ id }) => id));
+  const atPart = new Map<string, string[]>();
+  for (const { id, from, to } of scene.runs)
+    for (const [part] of [from, to]) atPart.set(part, [...(atPart.get(part) ?? []), id]);
+  return { atDot, atPart };
 }
 
 /** Volts and amperes beside what they are of. */
@@ -125,15 +149,15 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
   const isDead = (run: SceneRun) => runLooks.get(run.id)?.state === 'dead';
   const cores = scene.face === 'connections';
   const places = useMemo(() => figurePlaces(scene), [scene]);
-  const ofWay = (device: string) =>
-    scene.runs.filter(({ from, to }) => from[0] === device || to[0] === device).map(({ id }) => runLooks.get(id)!);
+  const meetings = useMemo(() => meetingsOf(scene), [scene]);
+  const ofWay = (device: string) => (meetings.atPart.get(device) ?? []).map((id) => runLooks.get(id)!);
   return (
     <Layer scene={scene} level={2} name="marks">
       {scene.runs.map((run) => (
         <Ticks key={run.id} run={run} cased={runLooks.get(run.id)?.cased ?? false} dead={isDead(run)} />
       ))}
-      {scene.dots.map((dot) => {
-        const dead = scene.runs.filter((run) => liesOn(dot, run)).every(isDead);
+      {scene.dots.map((dot, i) => {
+        const dead = meetings.atDot[i]!.every((id) => runLooks.get(id)?.state === 'dead');
         return (
           <circle key={`${dot.x} ${dot.y}`} cx={dot.x} cy={dot.y} r={100} fill={dead ? 'var(--grey)' : 'var(--ink)'} />
         );
@@ -192,18 +216,11 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
           })}
           {scene.parts.map((part) => {
             const look = partLooks.get(part.id);
-            return (
-              <Letterings
-                key={part.id}
-                texts={look ? textsOf(part, look, cores ? undefined : figures.parts[part.id]?.load) : part.texts}
-              />
-            );
+            const figure = look && !cores ? loadFigure(figures.parts[part.id]?.load, look) : undefined;
+            return <PartTexts key={part.id} part={part} dead={look?.state === 'dead'} figure={figure} />;
           })}
           {scene.runs.map((run) => (
-            <Letterings
-              key={run.id}
-              texts={isDead(run) ? run.texts.map((text) => ({ ...text, tone: 'grey' })) : run.texts}
-            />
+            <RunTexts key={run.id} run={run} dead={isDead(run)} />
           ))}
           <Letterings texts={scene.texts} />
           {!cores &&
