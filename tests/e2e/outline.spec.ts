@@ -141,7 +141,7 @@ test('a room is drawn, wired, examined and repaired in the outline, with no poin
 });
 
 test('from the outline a rating is written, a load moved, a room copied; one thing is in hand on both', async ({ page }) => {
-  test.setTimeout(180_000);
+  test.setTimeout(240_000);
   await signInAs(page, 'electrician');
   const job = await beginJob(page, 'Weir Mill 5');
   await open(page, job);
@@ -204,7 +204,7 @@ test('from the outline a rating is written, a load moved, a room copied; one thi
 for (const scheme of ['light', 'dark'] as const)
   for (const width of [1440, 1024, 390])
     test(`axe finds nothing on the outline, ${scheme}, ${width} px`, async ({ browser, baseURL }) => {
-      test.setTimeout(120_000);
+      test.setTimeout(180_000);
       const context = await browser.newContext({
         baseURL,
         colorScheme: scheme,
