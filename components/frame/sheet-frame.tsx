@@ -83,7 +83,7 @@ export function SheetFrame(props: SheetFrameProps) {
     { keys: ['?'], does: 'this list' },
   ];
 
-  const height = fit === 'screen' ? 'h-dvh' : 'min-h-dvh lap:h-dvh print:h-auto';
+  const height = fit === 'screen' ? 'h-dvh' : 'min-h-dvh lap:h-dvh print:h-auto!';
   return (
     <div className={`flex flex-col p-1 sm:px-2 sm:pb-2 ${height}`}>
       {props.skip && (
@@ -127,7 +127,7 @@ export function SheetFrame(props: SheetFrameProps) {
       <Paper>
         {props.strip}
         <div className="flex min-h-0 flex-1 flex-col lap:flex-row">
-          <main className={`relative min-h-0 min-w-0 flex-1 ${fit === 'screen' ? 'overflow-hidden' : 'lap:overflow-auto print:overflow-visible'}`}>{props.children}</main>
+          <main className={`relative min-h-0 min-w-0 flex-1 ${fit === 'screen' ? 'overflow-hidden' : 'lap:overflow-auto print:overflow-visible!'}`}>{props.children}</main>
           {margin && (
             <Margin label={marginLabel} narrow={narrowMargin} open={marginOpen} onClose={() => setMarginOpen(false)}>
               {typeof margin === 'function' ? margin(() => setMarginOpen(false)) : margin}
