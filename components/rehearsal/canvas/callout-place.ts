@@ -22,7 +22,12 @@ export function calloutPlace(scene: Scene, part: ScenePart, width: number, heigh
   );
   const middle = { x: part.x + part.width / 2, y: part.y + part.height / 2 };
   const own = { x: part.x - 400, y: part.y - 400, width: part.width + 800, height: part.height + 1600 };
-  const solid = [...scene.parts, ...texts];
+  // Only what lies near enough to be covered counts: a large home has thousands of stretches.
+  const far = REACH + Math.max(width, height);
+  const around = { x: middle.x - far, y: middle.y - far, width: 2 * far, height: 2 * far };
+  const isNear = (box: Box) => overlap(around, box) > 0;
+  const solid = [...scene.parts, ...texts].filter(isNear);
+  const near = runs.filter(isNear);
   let best: Box = { x: middle.x + 600, y: middle.y + 1500, width, height };
   let least = Infinity;
   for (let dy = -REACH; dy <= REACH; dy += STEP) {
@@ -33,7 +38,7 @@ export function calloutPlace(scene: Scene, part: ScenePart, width: number, heigh
       const cost =
         40 * overlap(box, own) +
         12 * solid.reduce((sum, each) => sum + overlap(box, each), 0) +
-        3 * runs.reduce((sum, each) => sum + overlap(box, each), 0) +
+        3 * near.reduce((sum, each) => sum + overlap(box, each), 0) +
         260 * Math.hypot(dx, dy);
       if (cost >= least) continue;
       least = cost;
