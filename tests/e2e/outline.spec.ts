@@ -247,7 +247,7 @@ for (const scheme of ['light', 'dark'] as const)
     });
 
 test('a piece is copied in one window and pasted in another, through the clipboard of the system', async ({ context, page }) => {
-  test.setTimeout(180_000);
+  test.setTimeout(240_000);
   await context.grantPermissions(['clipboard-read', 'clipboard-write']);
   await signInAs(page, 'electrician');
   const [one, two] = [await beginJob(page, 'Weir Mill 6'), await beginJob(page, 'Weir Mill 7')];
