@@ -16,7 +16,7 @@ export function ColumnPages({ pages, page, onTurn, of }: ColumnPagesProps) {
     <div
       role="group"
       aria-label={`Columns of the ${of.toLowerCase()}`}
-      className="mb-2 flex flex-wrap items-center gap-1 min-[901px]:hidden"
+      className="mb-2 flex flex-wrap items-center gap-1 min-[901px]:hidden print:hidden"
     >
       <button
         type="button"

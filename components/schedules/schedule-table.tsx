@@ -40,8 +40,8 @@ export function ScheduleTable({ desk, table, document, findings, mayEdit }: Sche
     ({ page: own, phone, roomy }: Column) => {
       if (roomy && own === page) return 'min-[901px]:max-lap:hidden';
       if (roomy) return 'max-lap:hidden';
-      if (own === 'stays') return phone === undefined || phone === page ? '' : 'max-[600px]:hidden';
-      return own === page ? '' : 'max-[900px]:hidden';
+      if (own === 'stays') return phone === undefined || phone === page ? '' : '[@media_screen_and_(max-width:600px)]:hidden';
+      return own === page ? '' : '[@media_screen_and_(max-width:900px)]:hidden';
     },
     [page],
   );

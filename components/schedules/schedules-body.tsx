@@ -36,7 +36,7 @@ export function SchedulesBody({ desk, worked, drawing, document, jobId, mayEdit,
   const tables = worked ? TABLES_OF[schedule].map((id) => worked.tables[id]) : [];
   const empty = tables.every(({ rows }) => rows.length === 0);
   return (
-    <div className="flex flex-col gap-4 px-2 pt-4 pb-8 sm:px-4">
+    <div className="flex flex-col gap-4 px-2 pt-4 pb-8 sm:px-4 print:pb-40">
       <header className="flex flex-wrap items-center gap-x-6 gap-y-2">
         <h1 className="text-title font-bold">{SCHEDULE_NAMES[schedule]}</h1>
         <Segmented
