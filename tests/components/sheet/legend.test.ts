@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { symbolsOn } from '@/components/sheet/foot/legend-lines';
 import { KIND_NAME } from '@/diagram/document/kinds';
-import type { Face, Kind } from '@/diagram/document/schema';
+import type { Face, Kind, Part } from '@/diagram/document/schema';
 import type { ScenePart } from '@/diagram/layout/scene';
 import { symbolFor } from '@/diagram/symbols';
 import { unknownSymbol } from '@/diagram/symbols/unknown';
@@ -10,7 +10,7 @@ const KINDS = Object.keys(KIND_NAME) as Kind[];
 
 /** A part of a kind as a face draws it. */
 const drawn = (kind: Kind, face: Face): ScenePart => {
-  const symbol = symbolFor({ kind }, face);
+  const symbol = symbolFor({ kind } as Part, face);
   const { id, width, height } = symbol;
   return { id: kind, kind, symbol: id, x: 0, y: 0, width, height, turn: 0, feed: 'mains', terminals: [], texts: [] };
 };
