@@ -1,6 +1,6 @@
 'use client';
 
-import { useCallback, useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { newUuid } from '@/components/sheet/identity';
 import { callApi } from '@/lib/shared/api-client';
 import type { UploadList, UploadPatch, UploadView } from '@/lib/shared/uploads';
@@ -31,6 +31,17 @@ export function usePictures(jobId: string, { uploads: first, mayEdit }: UploadLi
   const files = useRef(new Map<string, Waiting>());
   const chain = useRef<Promise<void>>(Promise.resolve());
   const changes = useRef<Promise<unknown>>(Promise.resolve());
+
+  useEffect(() => {
+    let here = true;
+    // Turned back to, a sheet shows the page as it was sent then; pictures may have come since. Without an answer that stays.
+    void callApi<UploadList>('GET', `/api/jobs/${jobId}/uploads`).then((answer) => {
+      if (here && answer.ok) setUploads(answer.data.uploads);
+    });
+    return () => {
+      here = false;
+    };
+  }, [jobId]);
 
   const mark = useCallback(
     (id: string, change: Partial<Sending> | null) =>

@@ -20,7 +20,7 @@ const gapBelow = (part: Part): number => (part.kind === 'isolator' || part.kind 
 /** The distributor's own, over the board. */
 const SERVICE: ReadonlySet<string> = new Set(['supply', 'fuse', 'meter']);
 /** From one bar to the next below it. */
-const BAR_PITCH = m(5);
+const BAR_PITCH = m(6);
 
 /** The board: the column at the left, each bar over its ways, neutral and earth bars above the line bar. */
 export function placeBoard(s: PageState): void {

@@ -31,6 +31,8 @@ export class Search {
   private readonly steps: StepCosts;
   private readonly relaxer = new Relaxer();
   private readonly all: Window;
+  /** nodes looked over so far, by all searches */
+  effort = 0;
 
   constructor(
     private readonly grid: Grid,
@@ -71,6 +73,7 @@ export class Search {
 
   private within(window: Window, starts: readonly Stub[], goals: readonly Stub[], ask: Question): Way | null {
     const { steps } = this;
+    this.effort += (window.right - window.left + 1) * (window.bottom - window.top + 1);
     steps.survey(window, ask);
     const outer = ({ nodes }: Stub): number => nodes.at(-1)!;
     const inside = [starts, goals].map((list) => list.filter((stub) => steps.local(outer(stub)) >= 0));

@@ -45,6 +45,8 @@ const leastCost = ({ from, to }: RouteRequest): number => {
 const WORTH = COST.crossing + COST.bend;
 /** How often one run may be moved away for others. */
 const MOVES = 12;
+/** Nodes that may be looked over for moving runs away on one page: on a very full page the last ones stay elbows. */
+const EFFORT = 12_000_000;
 
 /** A terminal's own sides first, then the others. */
 const anySide = (end: RouteEnd): Side[] => [...new Set<Side>([...end.sides, 'right', 'left', 'down', 'up'])];
@@ -81,8 +83,14 @@ class Router {
     if (found) this.lay(routed, found);
   }
 
+  /** Makes room for runs that found none, one after the other. */
+  insistOn(blocked: readonly Routed[]): void {
+    const effort = this.search.effort + EFFORT;
+    for (const routed of blocked) if (!routed.nodes) this.insist(routed, effort);
+  }
+
   /** Lays a run over others where it has no free way, and leads those round it. */
-  insist(routed: Routed): void {
+  private insist(routed: Routed, effort: number): void {
     const waiting = [routed];
     while (waiting.length > 0) {
       const next = waiting.shift()!;
@@ -91,7 +99,7 @@ class Router {
         this.lay(next, free);
         continue;
       }
-      const found = next.moved < MOVES ? this.look(next, true) : null;
+      const found = next.moved < MOVES && this.search.effort < effort ? this.look(next, true) : null;
       next.moved++;
       if (!found) continue;
       for (const other of this.under(found.nodes, next.net)) {
@@ -274,7 +282,7 @@ export function routeAll(
     for (const routed of pinned) router.route(routed);
     for (const routed of all) if (!routed.nodes) router.keep(routed);
     for (const routed of all) if (!routed.nodes) router.route(routed);
-    for (const routed of all) if (!routed.nodes) router.insist(routed);
+    router.insistOn(all.filter(({ nodes }) => !nodes));
     for (const routed of all) if (routed.nodes && routed.cost - leastCost(routed.request) > WORTH) router.improve(routed);
   }
   for (const { request, nodes } of all) {

@@ -116,7 +116,7 @@ test('a tab killed in mid-edit, again and again, loses nothing that it acknowled
     page = await context.newPage();
   }
   await openSurvey(page, job);
-  await saved(page);
+  await expect(page.getByText(/^Saved( \d\d:\d\d)?$/)).toBeVisible({ timeout: 60_000 });
   const there = rooms(await savedHome(page, job));
   expect(stood.length).toBeGreaterThan(4);
   expect(there).toEqual(expect.arrayContaining(stood));

@@ -61,6 +61,7 @@ test('photographs are added, refused in words, captioned, opened large, removed 
   const shown = dialog.getByRole('img');
   await expect.poll(() => shown.evaluate((img: HTMLImageElement) => img.naturalWidth)).toBe(900);
   await dialog.getByLabel('Caption').fill('The board with its cover off');
+  await dialog.getByLabel('Caption').press('Tab');
   await dialog.getByLabel('It shows').selectOption({ label: 'Board' });
   await expect(dialog.getByRole('heading', { name: 'The board with its cover off' })).toBeVisible();
   await dialog.getByRole('button', { name: 'Next' }).press('ArrowRight');
@@ -156,6 +157,7 @@ test('a picture becomes the plan of a storey: parts are placed on it by mouse an
   await page.getByRole('button', { name: 'take away' }).click();
   await expect(page.getByRole('heading', { name: 'No plan yet' })).toBeVisible();
   await page.getByRole('link', { name: /Overview/ }).first().click();
+  await expect(page).toHaveURL(/\/overview/);
   await page.goBack();
   await expect(page.getByRole('heading', { name: 'No plan yet' })).toBeVisible();
   await expect.poll(async () => (await savedHome(page, job)).plans, { timeout: 60_000 }).toBeUndefined();
