@@ -3,7 +3,7 @@ import type { Part } from '../document/schema';
 import { isOvercurrent, isResidual } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
 import type { Context } from './context';
-import { chainsOf, figuresOf } from './readings/figures';
+import { chainsOf } from './readings/figures';
 import { apart, delayed } from './readings/selectivity-remedies';
 import type { Rule } from './types';
 import { capital, inOrder, say, sayParts } from './readings/words';

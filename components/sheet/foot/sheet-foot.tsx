@@ -99,7 +99,7 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
           {mayEdit && (
             <button
               type="button"
-              className="cursor-pointer underline underline-offset-2 disabled:text-grey disabled:no-underline pointer-coarse:min-h-11"
+              className="min-h-6 cursor-pointer underline underline-offset-2 disabled:text-grey disabled:no-underline pointer-coarse:min-h-11"
               disabled={!undoable}
               onClick={undo}
               title={undoable}
@@ -131,7 +131,7 @@ function FootWord({ onClick, className = '', children }: { onClick(): void; clas
   return (
     <button
       type="button"
-      className={`cursor-pointer underline underline-offset-2 pointer-coarse:min-h-11 ${className}`}
+      className={`min-h-6 cursor-pointer underline underline-offset-2 pointer-coarse:min-h-11 ${className}`}
       onClick={onClick}
     >
       {children}
