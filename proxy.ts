@@ -12,6 +12,10 @@ const isOpen = (path: string) => path === '/' || OPEN.some((open) => path === op
 const isDevelopment = process.env.NODE_ENV === 'development';
 const isHttps = (process.env.NEXTAUTH_URL ?? '').startsWith('https:');
 
+/** What people made or sent: opened by its own address it is a picture or a sheet of paper, and can do nothing. */
+const FILES = /^\/api\/(drawings|uploads)\//;
+const FILE_POLICY = `sandbox; default-src 'none'; style-src 'unsafe-inline'; font-src data:`;
+
 /** Scripts run only with the nonce of this answer; the sheet's symbols and the canvas set style attributes. */
 function contentPolicy(nonce: string): string {
   return [
@@ -44,7 +48,7 @@ function withHeaders(response: NextResponse, policy: string): NextResponse {
 
 export function proxy(request: NextRequest): NextResponse {
   const { pathname, search } = request.nextUrl;
-  const policy = contentPolicy(Buffer.from(crypto.randomUUID()).toString('base64'));
+  const policy = FILES.test(pathname) ? FILE_POLICY : contentPolicy(Buffer.from(crypto.randomUUID()).toString('base64'));
   const hasCookie = request.cookies.has(sessionCookieName(isHttps));
   const isPage = !pathname.startsWith('/api/') && !pathname.startsWith('/_next/') && !/\.[a-z0-9]+$/i.test(pathname);
   if (isPage && !isOpen(pathname) && !hasCookie) {

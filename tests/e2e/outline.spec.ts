@@ -186,6 +186,7 @@ test('from the outline a rating is written, a load moved, a room copied; one thi
 
   // copied, and taken back as one step; way 1 lies open, for the moved lamp is in hand in it
   await page.keyboard.type('way 1');
+  await expect(inHand(page)).toHaveText(/^Way 1/);
   await down(page, /^Study/);
   await command(page, 'copy room');
   await expect(page.getByRole('dialog', { name: 'Copy Study whole' })).toBeVisible();
