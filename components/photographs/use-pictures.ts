@@ -36,11 +36,15 @@ export function usePictures(jobId: string, { uploads: first, mayEdit }: UploadLi
     let here = true;
     // Turned back to, a sheet shows the page as it was sent then; pictures may have come since. Without an answer that stays.
     void callApi<UploadList>('GET', `/api/jobs/${jobId}/uploads`).then((answer) => {
-      if (here && answer.ok) setUploads(answer.data.uploads);
+      if (!here || !answer.ok) return;
+      const { uploads: kept } = answer.data;
+      const sentSince = (one: UploadView) => !first.includes(one) && kept.every(({ id }) => id !== one.id);
+      setUploads((list) => [...kept, ...list.filter(sentSince)]);
     });
     return () => {
       here = false;
     };
+    // eslint-disable-next-line react-hooks/exhaustive-deps -- once, when the sheet opens
   }, [jobId]);
 
   const mark = useCallback(

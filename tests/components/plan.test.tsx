@@ -146,15 +146,20 @@ describe('the plan of a storey', () => {
 });
 
 describe('the photographs', () => {
-  const answers = (...list: [number, unknown][]) => {
+  const answers = (...queue: [number, unknown][]) => {
     const fetch = vi.fn(async (_path: string, _init?: RequestInit) => {
-      const [status, body] = list.shift()!;
+      const [status, body] = queue.shift()!;
       return new Response(JSON.stringify(body), { status });
     });
-    vi.stubGlobal('fetch', fetch);
+    // Once open, the sheet asks for the list again: that is no change, and answered with what was shown.
+    vi.stubGlobal('fetch', (path: string, init?: RequestInit) =>
+      init?.method === 'GET' ? Promise.resolve(new Response(JSON.stringify(list(shown)))) : fetch(path, init),
+    );
     return fetch;
   };
+  let shown: UploadView[] = [];
   const openPhotographs = (uploads: UploadView[], document = home()) => {
+    shown = uploads;
     const drawing = view(document);
     store = createDrawingStore(drawing, () => undefined);
     HTMLDialogElement.prototype.showModal ??= function (this: HTMLDialogElement) {
