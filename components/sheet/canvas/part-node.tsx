@@ -1,5 +1,5 @@
 import { memo } from 'react';
-import type { NodeProps } from 'reactflow';
+import { Handle, Position, type NodeProps } from 'reactflow';
 import type { ScenePart } from '@/diagram/layout/scene';
 import { symbolById } from '@/diagram/symbols';
 import { turnTransform } from '@/diagram/symbols/turn';
@@ -46,13 +46,17 @@ export function PartPicture({ part, ink = inkOf(part) }: { part: ScenePart; ink?
 /** One part on the canvas. Selection, terminals and lettering are layers of their own. */
 export const PartNodeView = memo(function PartNodeView({ data: { part } }: NodeProps<PartNode>) {
   return (
-    <svg
-      data-part={part.id}
-      viewBox={`0 0 ${part.width} ${part.height}`}
-      className="block h-full w-full overflow-visible"
-      aria-hidden="true"
-    >
-      <PartPicture part={part} />
-    </svg>
+    <>
+      <svg
+        data-part={part.id}
+        viewBox={`0 0 ${part.width} ${part.height}`}
+        className="block h-full w-full overflow-visible"
+        aria-hidden="true"
+      >
+        <PartPicture part={part} />
+      </svg>
+      {/* The library reads handles off the page; without one it draws no run for the pointer to take. */}
+      <Handle type="source" position={Position.Top} isConnectable={false} className="invisible" />
+    </>
   );
 });
