@@ -3,8 +3,9 @@ import { elkGraph } from '@/components/sheet/tidy/elk-graph';
 import { connectionPages } from '@/diagram/layout/connections-scene';
 import { buildScene } from '@/diagram/layout/build-scene';
 import { gesture, nodeInSight, quantile, zoomOut } from './bench-canvas/gestures';
-import { bareGraph, canvasHome, overviewOf } from './bench-canvas/home';
+import { bareGraph, overviewOf } from './bench-canvas/bare-graph';
 import { openWith, serveApp, serveBare } from './bench-canvas/pages';
+import { homeOfAtLeast } from './bench-home';
 
 /**
  * npm run bench -- canvas [--json]
@@ -158,7 +159,7 @@ async function tidying(page: Page, bare: Page): Promise<CanvasMeasure> {
 }
 
 async function measureCanvas(report: (measure: CanvasMeasure) => void): Promise<void> {
-  const home = canvasHome(PARTS);
+  const home = homeOfAtLeast(PARTS);
   const scene = overviewOf(home);
   // A room as people tidy it: larger graphs come to the limit after which elkjs is given up, here and there alike.
   const { place } = connectionPages(home).find((page) => page.place === TIDIED)!;
