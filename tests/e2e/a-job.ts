@@ -5,10 +5,15 @@ const supply = { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.4, zln: 0.3 
 /** What the tests look at in a document. */
 export interface Home {
   title: string;
-  parts: { id: string; kind: string; ref?: string; label?: string; watts?: number; rating?: number }[];
+  parts: { id: string; kind: string; ref?: string; label?: string; watts?: number; rating?: number; place?: string }[];
+  wires: { id: string; from: [string, string]; to: [string, string]; role: string }[];
+  places: { id: string; name: string }[];
   survey?: { id: string; name: string }[];
   plans?: { id: string; name: string; picture: string }[];
-  sheet?: { plan?: Record<string, { x: number; y: number; on: string }> };
+  sheet?: {
+    overview?: Record<string, { x: number; y: number; pinned?: boolean }>;
+    plan?: Record<string, { x: number; y: number; on: string }>;
+  };
 }
 
 /** A new job with an empty sheet. */

@@ -1,14 +1,7 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from 'playwright/test';
+import { faultsOf } from './axe';
 import { openPage } from './open-page';
 import { signInAs, type DemoRole } from './sign-in';
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-
-async function faultsOf(page: Page, what: string): Promise<string[]> {
-  const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-  return violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes.map(({ target }) => target.join(' ')).join('; ')}`);
-}
 
 /** Each screen with the state in which there is most to find fault with. */
 const screens: { path: string; role: DemoRole | null; open?: (page: Page) => Promise<void> }[] = [

@@ -1,34 +1,11 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from 'playwright/test';
+import { beginJob, savedHome, type Home } from './a-job';
+import { faultsOf } from './axe';
 import { signInAs } from './sign-in';
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-const supply = { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.4, zln: 0.3 };
-
-interface Home {
-  parts: { id: string; kind: string; ref?: string; rating?: number; label?: string; place?: string }[];
-  wires: { id: string; from: [string, string]; to: [string, string]; role: string }[];
-  places: { id: string; name: string }[];
-}
-
-async function beginJob(page: Page, title: string): Promise<string> {
-  const origin = new URL((await page.request.get('/signin')).url()).origin;
-  const answer = await page.request.post('/api/jobs', {
-    headers: { origin },
-    data: { title, client: 'M. Orrin', address: title, practice: 'IEC', supply, hoursWanted: 3, due: null },
-  });
-  expect(answer.status()).toBe(201);
-  return ((await answer.json()) as { id: string }).id;
-}
 
 const tree = (page: Page) => page.getByRole('tree', { name: /^Outline of/ });
 const inHand = (page: Page) => page.locator('[role=treeitem][tabindex="0"]');
 const saved = (page: Page) => expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 40_000 });
-
-async function savedHome(page: Page, job: string): Promise<Home> {
-  const { drawingId } = (await (await page.request.get(`/api/jobs/${job}`)).json()) as { drawingId: string };
-  return (await page.request.get(`/api/drawings/${drawingId}/json`)).json() as Promise<Home>;
-}
 
 async function open(page: Page, job: string, face = 'overview') {
   await page.goto(`/jobs/${job}/${face}`);
@@ -215,12 +192,6 @@ for (const scheme of ['light', 'dark'] as const)
       const page = await context.newPage();
       await signInAs(page, 'electrician');
       const job = await beginJob(page, `Outline ${scheme} ${width}`);
-      const look = async (what: string) => {
-        const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-        return violations.map(
-          ({ id, nodes }) => `${what}: ${id} at ${nodes.map(({ target }) => target.join(' ')).join('; ')}`,
-        );
-      };
       await open(page, job);
       if (width === 390) await page.getByRole('button', { name: 'Edit' }).click();
       await page.getByRole('button', { name: 'Place the supply' }).click();
@@ -232,16 +203,16 @@ for (const scheme of ['light', 'dark'] as const)
       await expect(board).toHaveAttribute('aria-expanded', 'true');
       await board.locator('[data-fold]').click();
       await expect(board).toHaveAttribute('aria-expanded', 'false');
-      const faults = await look('folded');
+      const faults = await faultsOf(page, 'folded');
       await board.locator('[data-fold]').click();
       await page.getByRole('treeitem', { name: /^Q0/ }).click();
       await expect(page.getByRole('treeitem', { name: /^Q0/ })).toHaveAttribute('aria-selected', 'true');
-      faults.push(...(await look('unfolded')));
+      faults.push(...(await faultsOf(page, 'unfolded')));
       await page.getByRole('button', { name: 'What can be done' }).click();
-      faults.push(...(await look('commands of a line')));
+      faults.push(...(await faultsOf(page, 'commands of a line')));
       await page.getByRole('option', { name: /^Edit the rating/ }).click();
       await expect(page.getByRole('dialog', { name: 'Edit Q0' })).toBeVisible();
-      faults.push(...(await look('edited from the outline')));
+      faults.push(...(await faultsOf(page, 'edited from the outline')));
       await context.close();
       expect(faults).toEqual([]);
     });

@@ -1,9 +1,7 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from 'playwright/test';
 import { beginJob, command, drawingOf, extend, openFace, saved, savedHome } from './a-job';
+import { faultsOf } from './axe';
 import { signInAs } from './sign-in';
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
 
 /** A picture as a camera or scanner would give it, drawn by the browser itself. */
 async function draw(page: Page, type: string, width: number, height: number): Promise<Buffer> {
@@ -32,11 +30,6 @@ async function openPhotographs(page: Page, job: string) {
   await page.goto(`/jobs/${job}/photographs`);
   await expect(page.getByRole('heading', { name: 'Photographs', exact: true, level: 1 })).toBeVisible();
   await page.waitForLoadState('networkidle');
-}
-
-async function axe(page: Page, what: string): Promise<string[]> {
-  const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-  return violations.map(({ id, nodes }) => `${what}: ${id} at ${nodes.map(({ target }) => target.join(' ')).join('; ')}`);
 }
 
 test('photographs are added, refused in words, captioned, opened large, removed and brought back', async ({ page }) => {
@@ -175,20 +168,20 @@ for (const scheme of ['light', 'dark'] as const)
     await command(page, 'place the supply');
     await saved(page);
     await openPhotographs(page, job);
-    const faults = await axe(page, 'no photograph');
+    const faults = await faultsOf(page, 'no photograph');
     await choose(page).setInputFiles({ name: 'a.png', mimeType: 'image/png', buffer: await draw(page, 'image/png', 800, 600) });
     await expect(prints(page)).toHaveCount(1, { timeout: 60_000 });
-    faults.push(...(await axe(page, 'photographs')));
+    faults.push(...(await faultsOf(page, 'photographs')));
     await prints(page).first().click();
-    faults.push(...(await axe(page, 'large')));
+    faults.push(...(await faultsOf(page, 'large')));
     await page.getByRole('button', { name: 'Draw on it as a floor plan' }).click();
     await expect(page.getByRole('application')).toBeVisible({ timeout: 60_000 });
     await page.getByRole('region', { name: 'Not placed yet' }).getByRole('button').first().click();
     await page.keyboard.press('Enter');
     await page.keyboard.press('Escape');
-    faults.push(...(await axe(page, 'plan')));
+    faults.push(...(await faultsOf(page, 'plan')));
     await page.setViewportSize({ width: 390, height: 844 });
-    faults.push(...(await axe(page, 'plan, narrow')));
+    faults.push(...(await faultsOf(page, 'plan, narrow')));
     await context.close();
     expect(faults).toEqual([]);
   });

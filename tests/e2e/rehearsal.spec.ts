@@ -1,8 +1,6 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from 'playwright/test';
+import { faultsOf } from './axe';
 import { signInAs } from './sign-in';
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
 
 interface Demo {
   job: string;
@@ -71,12 +69,7 @@ test('the mains are taken away, a switch is turned, a fault is put in and walked
   await expect(part('M1')).toHaveAttribute('data-state', 'dead');
   for (const scheme of ['light', 'dark'] as const) {
     await page.emulateMedia({ colorScheme: scheme });
-    const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-    expect(
-      violations.map(
-        ({ id, nodes }) => `${scheme}: ${id} at ${nodes.map(({ target }) => target.join(' ')).join('; ')}`,
-      ),
-    ).toEqual([]);
+    expect(await faultsOf(page, scheme)).toEqual([]);
   }
 
   // A reload keeps what is rehearsed; nothing of it has gone into the drawing.
@@ -122,7 +115,6 @@ test('by touch alone: a narrow screen has the conditions on the sheet and the st
   }
   await page.getByRole('button', { name: 'Step on' }).first().tap();
   await expect(page).toHaveURL(/step=3/);
-  const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-  expect(violations.map(({ id }) => id)).toEqual([]);
+  expect(await faultsOf(page, 'narrow')).toEqual([]);
   await context.close();
 });

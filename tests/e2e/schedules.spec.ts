@@ -1,4 +1,3 @@
-import AxeBuilder from '@axe-core/playwright';
 import { randomUUID } from 'node:crypto';
 import { readFile } from 'node:fs/promises';
 import { expect, test, type Page } from 'playwright/test';
@@ -8,9 +7,8 @@ import { draftPatch } from '../../diagram/survey/draft';
 import { parseSurvey } from '../../diagram/survey/parse';
 import { readCsv } from '../diagram/schedules/read-csv';
 import { beginJob, drawingOf, openFace, saved } from './a-job';
+import { faultsOf } from './axe';
 import { signInAs } from './sign-in';
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
 
 const ROOMS = `name;kind;lamps;fans;outlets;heavy;lamps kept;fans kept;hours
 Kitchen;room;2x12;;3;oven 3000;1;;3
@@ -167,11 +165,7 @@ test('axe finds nothing on any schedule, light and dark, wide and narrow', async
   const { rows } = (await (await page.request.get('/api/jobs?search=for review')).json()) as { rows: { id: string }[] };
   await openSchedules(page, rows[0]!.id);
   const faults: string[] = [];
-  const look = async (what: string) => {
-    const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-    const where = (nodes: (typeof violations)[number]['nodes']) => nodes.flatMap(({ target }) => target).slice(0, 4);
-    faults.push(...violations.map(({ id, nodes }) => `${what}: ${id} at ${where(nodes).join('; ')}`));
-  };
+  const look = async (what: string) => faults.push(...(await faultsOf(page, what)));
   for (const schedule of ['cables', 'loads', 'designations', 'backup', 'ways']) {
     await page.getByText(schedule, { exact: true }).click();
     await look(schedule);

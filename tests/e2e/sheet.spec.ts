@@ -1,26 +1,8 @@
 import { readFile, writeFile } from 'node:fs/promises';
-import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type BrowserContext, type Page } from 'playwright/test';
+import { beginJob, savedHome, type Home } from './a-job';
+import { faultsOf } from './axe';
 import { signInAs } from './sign-in';
-
-const TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
-const supply = { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.4, zln: 0.3 };
-
-interface Home {
-  parts: { id: string; kind: string; ref?: string; rating?: number; label?: string }[];
-  wires: { id: string; from: [string, string]; to: [string, string]; role: string }[];
-}
-
-/** A new job with an empty sheet. */
-async function beginJob(page: Page, title: string): Promise<string> {
-  const origin = new URL((await page.request.get('/signin')).url()).origin;
-  const answer = await page.request.post('/api/jobs', {
-    headers: { origin },
-    data: { title, client: 'M. Orrin', address: title, practice: 'IEC', supply, hoursWanted: 3, due: null },
-  });
-  expect(answer.status()).toBe(201);
-  return ((await answer.json()) as { id: string }).id;
-}
 
 const sheet = (page: Page) => page.getByRole('application');
 const saved = (page: Page) => expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 20_000 });
@@ -30,12 +12,6 @@ const heading = (page: Page, words: string | RegExp) => page.getByRole('heading'
 async function noDanger(page: Page) {
   await expect(page.locator('[aria-busy=true]')).toHaveCount(0, { timeout: 20_000 });
   await expect(page.locator('[data-note]').filter({ hasText: 'danger' })).toHaveCount(0, { timeout: 20_000 });
-}
-
-/** The document as the server has it. */
-async function savedHome(page: Page, job: string): Promise<Home> {
-  const { drawingId } = (await (await page.request.get(`/api/jobs/${job}`)).json()) as { drawingId: string };
-  return (await page.request.get(`/api/drawings/${drawingId}/json`)).json() as Promise<Home>;
 }
 
 const count = (home: Home, kind: string): number => home.parts.filter((part) => part.kind === kind).length;
@@ -336,14 +312,8 @@ for (const scheme of ['light', 'dark'] as const)
       const page = await context.newPage();
       await signInAs(page, 'electrician');
       const job = await beginJob(page, `Axe ${scheme} ${width}`);
-      const look = async (what: string) => {
-        const { violations } = await new AxeBuilder({ page }).withTags(TAGS).analyze();
-        return violations.map(
-          ({ id, nodes }) => `${what}: ${id} at ${nodes.map(({ target }) => target.join(' ')).join('; ')}`,
-        );
-      };
       await open(page, job);
-      const faults = await look('empty');
+      const faults = await faultsOf(page, 'empty');
       if (width === 390) await page.getByRole('button', { name: 'Edit' }).click();
       await page.getByRole('button', { name: 'Place the supply' }).click();
       await saved(page);
@@ -351,7 +321,7 @@ for (const scheme of ['light', 'dark'] as const)
       await page.keyboard.press('e');
       const slip = page.getByRole('listbox').or(page.getByRole('group', { name: 'What comes next' }));
       await expect(slip).toBeVisible();
-      faults.push(...(await look('slip')));
+      faults.push(...(await faultsOf(page, 'slip')));
       await page.keyboard.press('Escape');
       for (const [keys, name] of [
         ['Control+k', 'commands'],
@@ -360,11 +330,11 @@ for (const scheme of ['light', 'dark'] as const)
       ] as const) {
         await sheet(page).focus();
         await page.keyboard.press(keys);
-        faults.push(...(await look(name)));
+        faults.push(...(await faultsOf(page, name)));
         await page.keyboard.press('Escape');
       }
       await open(page, job, 'connections');
-      faults.push(...(await look('connections')));
+      faults.push(...(await faultsOf(page, 'connections')));
       await context.close();
       expect(faults).toEqual([]);
     });

@@ -1,4 +1,5 @@
 import { devices, expect, test, type CDPSession, type Locator, type Page } from 'playwright/test';
+import { beginJob, saved, savedHome as homeNow, type Home } from './a-job';
 import { signInAs } from './sign-in';
 
 /**
@@ -9,33 +10,14 @@ test.use({
   userAgent: devices['Galaxy Tab S4'].userAgent,
 });
 
-const supply = { system: 'TN-S', voltage: 230, frequency: 50, ze: 0.4, zln: 0.3 };
-
-interface Home {
-  parts: { id: string; kind: string; ref?: string; place?: string }[];
-  wires: { id: string; from: [string, string]; to: [string, string]; role: string }[];
-  sheet?: { overview?: Record<string, { x: number; y: number; pinned?: boolean }> };
-}
-
-async function beginJob(page: Page, title: string): Promise<string> {
-  const origin = new URL((await page.request.get('/signin')).url()).origin;
-  const answer = await page.request.post('/api/jobs', {
-    headers: { origin },
-    data: { title, client: 'R. Vance', address: title, practice: 'IEC', supply, hoursWanted: 3, due: null },
-  });
-  expect(answer.status()).toBe(201);
-  return ((await answer.json()) as { id: string }).id;
-}
-
 async function open(page: Page, job: string, path = 'overview') {
   await page.goto(`/jobs/${job}/${path}`);
   await expect(page.locator('[role=application][aria-busy=false]').first()).toBeVisible({ timeout: 30_000 });
 }
 
 async function savedHome(page: Page, job: string): Promise<Home> {
-  await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 60_000 });
-  const { drawingId } = (await (await page.request.get(`/api/jobs/${job}`)).json()) as { drawingId: string };
-  return (await page.request.get(`/api/drawings/${drawingId}/json`)).json() as Promise<Home>;
+  await saved(page);
+  return homeNow(page, job);
 }
 
 const slip = (page: Page) => page.getByRole('dialog', { name: /^What comes next after/ });
