@@ -1,4 +1,5 @@
 import { NextResponse, type NextRequest } from 'next/server';
+import { FILE_POLICY } from '@/lib/shared/file-policy';
 import { sessionCookieName } from '@/lib/shared/session-cookie';
 
 /**
@@ -12,9 +13,8 @@ const isOpen = (path: string) => path === '/' || OPEN.some((open) => path === op
 const isDevelopment = process.env.NODE_ENV === 'development';
 const isHttps = (process.env.NEXTAUTH_URL ?? '').startsWith('https:');
 
-/** What people made or sent: opened by its own address it is a picture or a sheet of paper, and can do nothing. */
+/** Here the headers of the file's own answer would be written over. */
 const FILES = /^\/api\/(drawings|uploads)\//;
-const FILE_POLICY = `sandbox; default-src 'none'; style-src 'unsafe-inline'; font-src data:`;
 
 /** Scripts run only with the nonce of this answer; the sheet's symbols and the canvas set style attributes. */
 function contentPolicy(nonce: string): string {

@@ -1,4 +1,5 @@
 import 'server-only';
+import { FILE_POLICY } from '@/lib/shared/file-policy';
 
 /** "OH-207 Heron Row 9, B": number, title and revision, without the signs that file systems and headers refuse. */
 export const fileName = (
@@ -24,7 +25,7 @@ export function fileAnswer(body: BodyInit, type: string, name: string): Response
     headers: {
       'content-type': type,
       'content-disposition': `attachment; filename="${plain}"; filename*=UTF-8''${exact}`,
-      'content-security-policy': `sandbox; default-src 'none'; style-src 'unsafe-inline'; font-src data:`,
+      'content-security-policy': FILE_POLICY,
       'cache-control': 'no-store',
       'x-content-type-options': 'nosniff',
     },

@@ -5,6 +5,7 @@ import { log } from '@/lib/server/log';
 import { storage } from '@/lib/server/storage/driver';
 import { findUpload } from '@/lib/server/uploads/find-upload';
 import { STORED_TYPE, keyOf } from '@/lib/server/uploads/keys';
+import { FILE_POLICY } from '@/lib/shared/file-policy';
 
 /** s a browser may show the picture again without asking: a lost right bites within it */
 const CACHE_S = 60;
@@ -25,7 +26,7 @@ export async function readUpload(actor: Actor, id: string, size: 'large' | 'smal
       'content-type': STORED_TYPE,
       'content-length': String(bytes.length),
       'content-disposition': `inline; filename="${upload.id}.webp"`,
-      'content-security-policy': `sandbox; default-src 'none'`,
+      'content-security-policy': FILE_POLICY,
       'cache-control': `private, max-age=${CACHE_S}, must-revalidate`,
       'x-content-type-options': 'nosniff',
       vary: 'cookie',
