@@ -25,8 +25,3 @@ export function edgeOhm(graph: Graph, edge: Edge, temperatureC?: number): number
   });
   return Math.max(ohm, CONTACT_OHM);
 }
-
-/** Resistance of a path of edges, in series. @returns ohm */
-export function pathOhm(graph: Graph, edges: readonly number[], temperatureC?: number): number {
-  return edges.reduce((sum, number) => sum + edgeOhm(graph, graph.edges[number]!, temperatureC), 0);
-}

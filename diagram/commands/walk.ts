@@ -24,13 +24,6 @@ export const endKey = ([part, mark]: End): string => `${part} ${mark}`;
 
 const CONTROL: ReadonlySet<Kind> = new Set(['switch', 'switch-2way', 'switch-cross', 'switch-2pole', 'regulator']);
 
-/** Terminals joined to `mark` inside a part whatever its position: where a conductor goes on. */
-export function throughPart(part: Part, mark: string): string[] {
-  return linksOf(part).flatMap(({ kind, from, to }) =>
-    kind === 'bond' ? [] : from === mark ? [to] : to === mark ? [from] : [],
-  );
-}
-
 type Near = { to: End; wire: string | null };
 
 /** Each terminal's neighbours: along its wires, and inside its part. */

@@ -13,8 +13,6 @@ export interface Stance {
   moved: Settings;
 }
 
-export const AT_REST: Stance = { supply: 'live', moved: {} };
-
 export type ConditionName = 'mains' | 'outage' | 'main-off' | 'isolated';
 
 /** The handles by which the conditions are made. */

@@ -1,26 +1,16 @@
 import { memo } from 'react';
 import { Layer } from '@/components/sheet/canvas/layer';
-import { coreInk, coreOf, pathOf as routeOf } from '@/components/sheet/canvas/run-shape';
+import { CASED_CORE, coreInk, hopPath, pathOf, runStroke } from '@/components/sheet/canvas/run-shape';
 import { INK } from '@/components/sheet/canvas/units';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
-import { CASED, CORE_DASH, HOP_RADIUS } from '@/diagram/paper/draw-scene';
+import { CASED } from '@/diagram/paper/draw-scene';
 import { STROKE } from '@/diagram/symbols/types';
 import type { RunLook } from '../looks';
 import { DOTTED } from './part-view';
 
-const CASED_CORE = { outer: 190, inner: 140 } as const;
-
 interface ConductorsProps {
   scene: Scene;
   looks: ReadonlyMap<string, RunLook>;
-}
-
-/** Paths of runs, worked out once: a run of a scene never changes. */
-const paths = new WeakMap<SceneRun, string>();
-function pathOf(run: SceneRun): string {
-  let d = paths.get(run);
-  if (d === undefined) paths.set(run, (d = routeOf(run)));
-  return d;
 }
 
 /** What is fed from the mains in one stroke, from a battery cased, what is dead dotted: the same on both faces. */
@@ -31,21 +21,7 @@ export const ConductorsLayer = memo(function ConductorsLayer({ scene, looks }: C
   const cased = live.filter((run) => looks.get(run.id)?.cased && run.role !== 'earth');
   const isCased = new Set(cased);
   const plain = live.filter((run) => !isCased.has(run));
-  const stroke = (run: SceneRun) => {
-    const core = coreOf(run);
-    return (
-      <path
-        key={run.id}
-        d={pathOf(run)}
-        fill="none"
-        stroke={cores ? coreInk(run) : 'var(--ink)'}
-        strokeWidth={(cores ? 50 : STROKE[run.weight]) * INK}
-        strokeDasharray={core === 'L' ? undefined : CORE_DASH[core].join(' ')}
-        strokeLinecap={core === 'L' ? 'round' : 'butt'}
-        strokeLinejoin="round"
-      />
-    );
-  };
+  const stroke = (run: SceneRun) => <path key={run.id} d={pathOf(run)} {...runStroke(run, cores)} />;
   const casing = (run: SceneRun, inside: boolean, d = pathOf(run)) => (
     <path
       key={`${run.id} ${inside}`}
@@ -76,7 +52,7 @@ export const ConductorsLayer = memo(function ConductorsLayer({ scene, looks }: C
       {cores && cased.map(stroke)}
       {cased.flatMap((run) =>
         run.hops.map((hop) => {
-          const d = `M${hop.x - HOP_RADIUS} ${hop.y}A${HOP_RADIUS} ${HOP_RADIUS} 0 0 1 ${hop.x + HOP_RADIUS} ${hop.y}`;
+          const d = hopPath(hop);
           return (
             <g key={`${run.id} ${hop.x} ${hop.y}`} fill="none">
               <path d={d} stroke="var(--paper)" strokeWidth={widths.outer + 80} />

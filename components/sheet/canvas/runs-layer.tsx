@@ -1,13 +1,11 @@
 import { memo } from 'react';
-import { CASED, CORE_DASH, HOP_RADIUS } from '@/diagram/paper/draw-scene';
+import { CASED } from '@/diagram/paper/draw-scene';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
-import { STROKE } from '@/diagram/symbols/types';
 import { useDrag } from './drag';
 import { Layer } from './layer';
-import { coreInk, coreOf, elbow, isCased, pathOf } from './run-shape';
+import { CASED_CORE, coreInk, elbow, hopPath, isCased, pathOf, runStroke } from './run-shape';
 import { INK } from './units';
 
-const CASED_CORE = { outer: 190, inner: 140 } as const;
 type Pass = 'plain' | 'outline' | 'inside' | 'core';
 
 /** Path of a run now: its route, or an elbow while one of its ends is dragged. One subscription a run. */
@@ -35,25 +33,14 @@ const RunLine = memo(function RunLine({ run, pass, cores }: RunProps) {
   const widths = cores ? CASED_CORE : CASED;
   if (pass === 'outline') return <path d={d} fill="none" stroke="var(--ink)" strokeWidth={widths.outer * 1.1} />;
   if (pass === 'inside') return <path d={d} fill="none" stroke="var(--paper)" strokeWidth={widths.inner} />;
-  const core = coreOf(run);
-  return (
-    <path
-      d={d}
-      fill="none"
-      stroke={cores ? coreInk(run) : 'var(--ink)'}
-      strokeWidth={(cores ? 50 : STROKE[run.weight]) * INK}
-      strokeDasharray={core === 'L' ? undefined : CORE_DASH[core].join(' ')}
-      strokeLinecap={core === 'L' ? 'round' : 'butt'}
-      strokeLinejoin="round"
-    />
-  );
+  return <path d={d} {...runStroke(run, cores)} />;
 });
 
 /** A cased run that hops is drawn over what it crosses. */
 const CasedHops = memo(function CasedHops({ run, cores }: { run: SceneRun; cores: boolean }) {
   const widths = cores ? CASED_CORE : CASED;
   return run.hops.map((hop) => {
-    const arc = `M${hop.x - HOP_RADIUS} ${hop.y}A${HOP_RADIUS} ${HOP_RADIUS} 0 0 1 ${hop.x + HOP_RADIUS} ${hop.y}`;
+    const arc = hopPath(hop);
     return (
       <g key={`${hop.x} ${hop.y}`} fill="none">
         <path d={arc} stroke="var(--paper)" strokeWidth={widths.outer + 80} />
