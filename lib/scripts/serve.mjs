@@ -13,8 +13,10 @@ export function serve({ dev = false, host, port, env, show = true }) {
   const child = spawn(
     process.execPath,
     [
-      '--import',
-      new URL('./trusted-headers.mjs', import.meta.url).href,
+      ...['trusted-headers', 'last-answers'].flatMap((name) => [
+        '--import',
+        new URL(`./${name}.mjs`, import.meta.url).href,
+      ]),
       NEXT,
       dev ? 'dev' : 'start',
       '-H',
