@@ -100,7 +100,7 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
       if (!action) return false;
       action.does(context);
     } else if (key.length === 1 && !event.altKey && (/[\p{L}\p{N}]/u.test(key) || typed.current.text !== '')) {
-      const grown = event.timeStamp - typed.current.at < ONE_WORD ? typed.current.text + key : key;
+      const grown = typed.current.text + key;
       typed.current = { text: grown, at: event.timeStamp };
       const to = typeAhead(rows, at.item.key, grown);
       if (to) outline.move({ to });
@@ -109,7 +109,8 @@ export function OutlinePane({ context, findings, onReady, onClose }: OutlinePane
   };
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.nativeEvent.isComposing || !tree.current?.contains(event.target as Node)) return;
-    if (event.timeStamp - typed.current.at >= ONE_WORD) typed.current = { text: '', at: 0 };
+    // Any key that writes nothing ends the word, and so does waiting.
+    if ((event.key.length > 1 && event.key !== 'Shift') || event.timeStamp - typed.current.at >= ONE_WORD) typed.current = { text: '', at: 0 };
     if (!act(event)) return;
     event.preventDefault();
     event.stopPropagation();
