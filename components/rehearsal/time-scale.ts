@@ -25,7 +25,7 @@ export const shareOf = (seconds: number, end: number): number =>
 /** The volts at the case as steps in time; what stands before the fault is not on a logarithmic axis. */
 export function touchCurve(walk: Walk, end: number): { t: number; volts: number }[] {
   const points = walk.stations
-    .filter(({ kind }) => kind === 'fault' || kind === 'opens')
+    .filter(({ kind }) => kind === 'fault' || kind === 'opens' || kind === 'takes-over')
     .map(({ t, touchVolts }) => ({ t: Math.max(FIRST_S, t ?? 0), volts: touchVolts }));
   const last = points.at(-1);
   return last ? [...points, { t: end, volts: last.volts }] : [];

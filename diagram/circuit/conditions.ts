@@ -1,8 +1,8 @@
 import { byDesignation } from '../document/names';
 import type { Part, PartOf } from '../document/schema';
 import type { Edge, Graph } from '../terminals/graph';
-import { closedEdges, reach, reaches } from '../terminals/reach';
-import { spread } from '../terminals/spread';
+import { closedEdges } from '../terminals/reach';
+import { backupSource, hasBattery, withMains } from './inverters';
 import { findMainSwitch } from './main-switch';
 
 /** What a source is in a condition: its two poles, as nodes. */
@@ -43,29 +43,6 @@ export interface Conditions {
  * pair of A and B, the others all at A or all at B.
  */
 export const MOST_COMBINED = 3;
-
-/**
- * True when a battery stands between the inverter's two dc terminals.
- * @param closed by edge, which dc contacts are closed; all where not given
- */
-export function hasBattery(graph: Graph, inverter: Part, closed?: Uint8Array): boolean {
-  const minus = graph.node(inverter.id, 'bat.-')!;
-  const dc = (edge: Edge, number: number) =>
-    (edge.kind === 'wire' || edge.kind === 'device') && closed?.[number] !== 0;
-  const nodes = new Set([graph.node(inverter.id, 'bat.+')!]);
-  let batteries = 0;
-  // Batteries in series are crossed one after the other; in parallel each is met at once.
-  for (const start of nodes) {
-    for (const node of spread(graph, [start], dc).nodes) {
-      nodes.add(node);
-      const part = graph.partOf[node]!;
-      if (part.kind !== 'battery') continue;
-      batteries++;
-      nodes.add(graph.node(part.id, graph.markOf[node] === '+' ? '-' : '+')!);
-    }
-  }
-  return batteries > 0 && nodes.has(minus);
-}
 
 function combinations(changeovers: readonly Part[]): Map<string, 'A' | '0' | 'B'>[] {
   const places = ['A', '0', 'B'] as const;
@@ -122,35 +99,14 @@ export function listConditions(graph: Graph): Conditions {
     if (base !== 'mains') {
       for (const id of isBackup) onBattery.add(id);
       // An inverter fed from before the open main switch still has mains: it passes them through.
-      if (base === 'main-off') {
-        const islanded = closedEdges(graph, (edge) => open(edge) || edge.kind === 'bypass');
-        const line = reach(
-          graph,
-          mains.map((source) => source.line),
-          islanded,
-        );
-        const neutral = reach(
-          graph,
-          mains.map((source) => source.neutral),
-          islanded,
-        );
-        for (const id of isBackup)
-          if (reaches(line, graph.node(id, 'in.L')) && reaches(neutral, graph.node(id, 'in.N'))) onBattery.delete(id);
-      }
+      if (base === 'main-off') for (const id of withMains(graph, mains, closed)) onBattery.delete(id);
     }
     graph.edges.forEach((edge, number) => {
       if (!edge.part || !onBattery.has(edge.part)) return;
       const inverter = graph.parts.get(edge.part) as PartOf<'inverter'>;
       if (edge.kind === 'bypass' || (edge.kind === 'through' && inverter.neutral === 'separate')) closed[number] = 0;
     });
-    const batteries = backups
-      .filter((part) => onBattery.has(part.id))
-      .map((part): Source => ({
-        part,
-        kind: 'backup',
-        line: graph.node(part.id, 'out.L')!,
-        neutral: graph.node(part.id, 'out.N')!,
-      }));
+    const batteries = backups.filter((part) => onBattery.has(part.id)).map((part) => backupSource(graph, part));
     const suffix = changeovers.map(({ id }) => positions.get(id)).join('');
     return {
       name: suffix ? `${base}/${suffix}` : base,

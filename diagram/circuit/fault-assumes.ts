@@ -1,7 +1,9 @@
 import { nameOf, byDesignation } from '../document/names';
 import type { Graph } from '../terminals/graph';
 import { isResidual } from '../terminals/roles-of-parts';
+import type { Standing } from './assemble';
 import type { Condition } from './conditions';
+import { takeOver } from './inverters';
 
 /**
  * What each type need not see, in words: AC is tested with sinusoidal residual current alone, A and F with pulsating
@@ -34,4 +36,10 @@ export function assumptions(graph: Graph, condition: Condition, moved: ReadonlyS
   if (devices.length === 0) return [];
   const inverters = condition.sources.filter(({ kind }) => kind === 'backup').map(({ part }) => part.id);
   return [...said, ...inverters.map((id) => `the output of ${name(id)} as a sine without a direct part`)];
+}
+
+/** A walk within one condition leaves inverters as that has them, though what has opened would make some take over. */
+export function stayAsTheyAre(graph: Graph, end: Standing): string[] {
+  const inverters = takeOver(graph, end)?.inverters ?? [];
+  return inverters.map((part) => `${nameOf(graph.document, part)} as it is in this condition: without mains it would take over`);
 }

@@ -30,6 +30,8 @@ export interface FaultStep {
   /** of a device that opens: A in its line, A by which its poles do not cancel */
   amps?: number;
   astrayAmps?: number;
+  /** true where an inverter begins to run from its battery */
+  takesOver?: true;
   /** other devices that may open first, as their bands overlap */
   orElse: string[];
   /** after the event: V of the faulted part's case to true earth, A in the fault */

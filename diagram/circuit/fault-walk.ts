@@ -4,13 +4,14 @@ import { reach, reaches } from '../terminals/reach';
 import type { Standing } from './assemble';
 import type { Condition } from './conditions';
 import type { Evaluated, Evaluation } from './evaluate';
-import { assumptions } from './fault-assumes';
+import { assumptions, stayAsTheyAre } from './fault-assumes';
 import { caseVoltsOf, darkLoads, liveParts, loadVoltsOf, wireAmpsOf } from './fault-reading';
 import { insertFault, type Inserted } from './fault-insert';
 import { withJoints, type DrawnJoint } from './fault-drawn';
 import { endure, firstOf, remaining, type Endured } from './fault-endurance';
 import { deviceLacks, urges } from './fault-trips';
 import { FaultError, type Fault, type FaultStep, type FaultWalk } from './fault-types';
+import { takeOver } from './inverters';
 import { size, solveStanding, standingsOf, type Steady } from './steady';
 
 /** A fault current below this is none. */
@@ -82,33 +83,36 @@ export function walkFaults(
   const evaluated = conditionNamed(evaluation, condition);
   const { standing, joints } = withJoints(graph, evaluated, startingStand(graph, evaluated, faults));
   if (faults.length + joints.length === 0) throw new FaultError('there is no fault to walk');
-  return walkFrom(graph, standing, faults, {}, joints);
+  return walkFrom(graph, standing, faults, { joints });
 }
 
-/** What a walk shows as it goes: the home solved before the first fault, and after each step. */
-export interface WalkWatch {
+/** How a walk is to go, and who looks on. */
+export interface Course {
+  /** short circuits and joints to earth that are in the drawing: they come before the first fault, as steps of their own */
+  joints?: readonly DrawnJoint[];
+  /** inverters run from their batteries as soon as the mains no longer reaches them; else all stay as the condition has them */
+  handsOver?: boolean;
+  /** is shown the home solved before the first fault */
   before?(steady: Steady): void;
+  /** is shown each step, and the home solved after it */
   step?(step: FaultStep, steady: Steady): void;
 }
 
 /**
  * Walks faults from a home that stands in any way: its switches and devices where somebody has put them.
- * @param joints short circuits and joints to earth that are in the drawing: they come before the first fault, as steps
- * of their own
  * @throws FaultError as {@link walkFaults}
  */
 export function walkFrom(
   graph: Graph,
   start: Standing,
   faults: readonly Fault[],
-  watch: WalkWatch = {},
-  joints: readonly DrawnJoint[] = [],
+  course: Course = {},
 ): FaultWalk {
+  const { joints = [], handsOver = false } = course;
   for (const { at } of faults) if (!graph.parts.has(at)) throw new FaultError(`there is no part "${at}"`);
   requireSupply(graph, start.condition, faults);
   const sound = solveStanding(graph, withoutJoints(start, joints));
-  watch.before?.(sound);
-  const watchesOvercurrent = sound.assembly.inverters.every(({ mostA }) => mostA !== null);
+  course.before?.(sound);
   const opened = new Set<string>();
   const moved = new Set<string>();
   const steps: FaultStep[] = [];
@@ -120,13 +124,28 @@ export function walkFrom(
   const add = (event: Pick<FaultStep, 'event'> & Partial<FaultStep>, inserted: Inserted) => {
     const step: FaultStep = { t, earliest, orElse: [], ...event, ...readingAt(graph, inserted, sound, now) };
     steps.push(step);
-    watch.step?.(step, now);
+    course.step?.(step, now);
+  };
+  /** Lets inverters take over that have lost the mains. @returns false where none has */
+  const handOver = (inserted: Inserted): boolean => {
+    const taken = handsOver ? takeOver(graph, standing) : null;
+    if (!taken) return false;
+    const seconds = Math.max(...taken.inverters.map(({ transfer = 0 }) => transfer)) / 1000;
+    t += seconds;
+    earliest += seconds;
+    standing = taken.standing;
+    now = solveStanding(graph, standing);
+    for (const part of taken.inverters)
+      add({ event: `${nameOf(graph.document, part)} takes over`, part: part.id, takesOver: true }, inserted);
+    return true;
   };
   /** Lets devices open until the home is still; says which made the fault dead, and when. */
   const settle = (inserted: Inserted): { by: string; at: number } | null => {
     const endured: Endured = new Map();
     let cleared: { by: string; at: number } | null = null;
+    handOver(inserted);
     for (;;) {
+      const watchesOvercurrent = now.assembly.inverters.every(({ mostA }) => mostA !== null);
       const pending = urges(graph, now, opened, watchesOvercurrent).map((urge) => remaining(urge, endured));
       for (const { urge } of pending) if (urge.astrayAmps > 0) moved.add(urge.part.id);
       const next = firstOf(pending);
@@ -143,8 +162,10 @@ export function walkFrom(
       now = solveStanding(graph, standing);
       add({ event: `${nameOf(graph.document, part)} opens`, part: part.id, amps, astrayAmps, orElse }, inserted);
       const flows = inserted.extra >= 0 || inserted.edge !== undefined;
-      if (!cleared && flows && isOver(graph, inserted, standing, steps[steps.length - 1]!))
-        cleared = { by: part.id, at: t };
+      const over = () => flows && isOver(graph, inserted, standing, steps[steps.length - 1]!);
+      if (!cleared && over()) cleared = { by: part.id, at: t };
+      // What takes over may feed the fault again.
+      if (handOver(inserted) && !over()) cleared = null;
     }
   };
 
@@ -191,7 +212,10 @@ export function walkFrom(
     live: end.live,
     dark: end.dark,
     lacks: deviceLacks(graph),
-    assumes: assumptions(graph, start.condition, moved),
+    assumes: [
+      ...assumptions(graph, standing.condition, moved),
+      ...(handsOver ? [] : stayAsTheyAre(graph, standing)),
+    ],
   };
 }
 

@@ -1,4 +1,4 @@
-import { hasBattery } from '../circuit/conditions';
+import { hasBattery } from '../circuit/inverters';
 import { polesOf } from '../document/kinds';
 import { byDesignation, compareDesignations } from '../document/names';
 import type { Kind, Part } from '../document/schema';

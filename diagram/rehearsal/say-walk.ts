@@ -183,6 +183,16 @@ export const say = {
     return { heading: step.event, text: [sees, sooner, rival, shut, goes].filter(Boolean).join(' ') };
   },
 
+  takesOver(scene: Scene, { step, steady }: Moment, fault: Fault, before: Figures): Told {
+    const figures = scene.read(steady);
+    const again = dark(scene, figures, before);
+    const feeds = again.length > 0 ? `Its battery feeds ${names(scene, again)} again` : 'Nothing hangs on it that was dark';
+    const volts = figures.parts[fault.at]?.caseVolts;
+    const stands = volts !== undefined && volts > LIVE_VOLTS ? `, case at ${voltText(volts)}` : '';
+    const fed = step.faultAmps < NOTHING_A && stands === '' ? '' : ` The fault is fed again: ${ampText(step.faultAmps)}${stands}.`;
+    return { heading: step.event, text: `No mains at its input. ${feeds}.${fed}` };
+  },
+
   holds(scene: Scene, { step, steady }: Moment, fault: Fault): Told {
     const volts = scene.read(steady).parts[fault.at]?.caseVolts;
     const amps = step.faultAmps < NOTHING_A ? '0.0 A' : ampText(step.faultAmps);

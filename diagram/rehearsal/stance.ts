@@ -1,4 +1,4 @@
-import { hasBattery } from '../circuit/conditions';
+import { hasBattery } from '../circuit/inverters';
 import { findMainSwitch } from '../circuit/main-switch';
 import { byDesignation } from '../document/names';
 import type { Part } from '../document/schema';

@@ -16,7 +16,7 @@ import { say, type Told } from './say-walk';
 
 /** The home at one station of a walk. */
 export interface Station {
-  kind: 'before' | 'fault' | 'opens' | 'holds' | 'still';
+  kind: 'before' | 'fault' | 'opens' | 'takes-over' | 'holds' | 'still';
   /** s from the first fault; null before it */
   t: number | null;
   earliest: number;
@@ -46,6 +46,8 @@ export interface Walk {
   /** what the walk teaches beyond its steps */
   remark: string | null;
   missing: Missing[];
+  /** what the drawing does not tell and the walk takes for granted */
+  assumes: string[];
 }
 
 export type WalkOutcome = { walk: Walk } | { cannot: string; missing: Missing[] };
@@ -56,6 +58,10 @@ interface Seen {
   /** the home before the fault that this step belongs to */
   before: Steady;
 }
+
+/** A fault is put in: no device opens, no inverter takes over. */
+const isFault = ({ amps, takesOver, event }: FaultStep): boolean =>
+  amps === undefined && !takesOver && event !== 'no device opens';
 
 /** Of the way in which the fault lies: whether its own overcurrent device would have cleared it, and when. */
 function withoutResidual(graph: Graph, seen: Seen, at: string): { way: string; seconds: number } | null {
@@ -102,10 +108,11 @@ export function walkOf(graph: Graph, start: Standing, faults: readonly Fault[]):
   let result;
   try {
     result = walkFrom(graph, start, faults, {
+      handsOver: true,
       before: (steady) => (first = last = before = steady),
       step(step, steady) {
-        // A fault is put in, no device has opened: what was before it is the end of what went on before.
-        if (step.amps === undefined && step.event !== 'no device opens') before = last;
+        // What was before a fault is the end of what went on before.
+        if (isFault(step)) before = last;
         last = steady;
         seen.push({ step, steady, before: before! });
       },
@@ -148,7 +155,8 @@ export function walkOf(graph: Graph, start: Standing, faults: readonly Fault[]):
   for (const each of seen) {
     const { step } = each;
     if (step.event === 'no device opens') add('holds', each, say.holds(scene, each, faults[fault]!));
-    else if (step.amps === undefined) add('fault', each, say.fault(scene, each, faults[++fault]!));
+    else if (isFault(step)) add('fault', each, say.fault(scene, each, faults[++fault]!));
+    else if (step.takesOver) add('takes-over', each, say.takesOver(scene, each, faults[fault]!, stations.at(-1)!.figures));
     else {
       opened.push(step.part!);
       add('opens', each, say.opens(scene, each, faults[fault]!, stations.at(-1)!.figures));
@@ -156,7 +164,7 @@ export function walkOf(graph: Graph, start: Standing, faults: readonly Fault[]):
   }
   const end = seen.at(-1)!;
   if (stations.at(-1)!.kind !== 'holds') add('still', end, say.still(scene, end, first!, result));
-  const struck = seen.findLast(({ step }) => step.amps === undefined && step.event !== 'no device opens')!;
+  const struck = seen.findLast(({ step }) => isFault(step))!;
   const by = result.by === null ? undefined : graph.parts.get(result.by);
   const alone =
     by && isResidual(by) && struck.step.faultAmps > 0 ? withoutResidual(graph, struck, faults.at(-1)!.at) : null;
@@ -170,6 +178,7 @@ export function walkOf(graph: Graph, start: Standing, faults: readonly Fault[]):
       limit,
       remark: alone && alone.seconds > limit.seconds ? say.alone(scene, alone, struck.step.faultAmps, start) : null,
       missing: missing.filter((each) => !each.stops),
+      assumes: result.assumes,
     },
   };
 }

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { Drawing } from '@/diagram/document/builder';
 import { backupHome, Home, smallHome } from '@/diagram/document/home';
-import { hasBattery, listConditions } from '@/diagram/circuit/conditions';
+import { listConditions } from '@/diagram/circuit/conditions';
+import { hasBattery } from '@/diagram/circuit/inverters';
 import { findMainSwitch } from '@/diagram/circuit/main-switch';
 import { buildGraph } from '@/diagram/terminals/graph';
 

@@ -1,7 +1,8 @@
 import { beforeAll, describe, expect, test } from 'vitest';
 import { evaluate } from '@/diagram/circuit/evaluate';
 import type { Fault, FaultWalk } from '@/diagram/circuit/fault-types';
-import { walkFaults } from '@/diagram/circuit/fault-walk';
+import { walkFaults, walkFrom } from '@/diagram/circuit/fault-walk';
+import { standingsOf } from '@/diagram/circuit/steady';
 import { backupHome, smallHome } from '@/diagram/document/home';
 import type { Installation } from '@/diagram/document/schema';
 import { buildGraph } from '@/diagram/terminals/graph';
@@ -24,6 +25,11 @@ const tt = smallHome({ supply: { system: 'TT', ra: 60, zln: 0.5 } }).document();
 const bonded = backup();
 const floating = backup({ bond: false });
 const apart = backup({ neutral: 'separate', bond: true });
+
+const slower = backupHome({ ...strong, neutral: 'separate', bond: true }, { supply: { system: 'TT', ra: 60, zln: 0.5 } })
+  .set('Q0', { sensitivity: 0.03, delay: 'none' })
+  .set('Q5', { sensitivity: 0.3, delay: 'S' })
+  .document();
 
 const CASES: [name: string, doc: Installation, condition: Condition, faults: Fault[]][] = [
   ['line to case on mains, TN-S', bonded, 'mains', [{ kind: 'line-to-case', at: 'X1' }]],
@@ -64,30 +70,47 @@ interface Moment {
   written: Written;
 }
 
+/** Where an inverter takes over that a device has parted from the mains. */
+const TAKEN_OVER: (typeof CASES)[number][] = [
+  ['a lamp behind a slower rcd than the main one, which clears it in the end', slower, 'mains', [{ kind: 'line-to-case', at: 'E2' }]],
+  ['the case of the inverter, its neutral floating', floating, 'mains', [{ kind: 'line-to-case', at: 'G1' }]],
+];
+
 /** Each step of a walk beside the network that the home then is: faults put in so far, devices opened so far. */
-function moments([name, doc, condition, faults]: (typeof CASES)[number]): Moment[] {
+function moments([name, doc, condition, faults]: (typeof CASES)[number], handsOver = false): Moment[] {
   const graph = buildGraph(doc);
-  const walk = walkFaults(graph, evaluate(graph), faults, condition);
+  const evaluation = evaluate(graph);
+  const walk = handsOver
+    ? walkFrom(graph, standingsOf(graph, evaluation.evaluated[0]!)[0]!.standing, faults, { handsOver })
+    : walkFaults(graph, evaluation, faults, condition);
   const opened = new Set<string>();
   let put = 0;
+  let tookOver = false;
   return walk.steps
     .filter(({ event }) => event !== 'no device opens')
     .map((step) => {
-      if (step.amps === undefined) put++;
+      if (step.takesOver) tookOver = true;
+      else if (step.amps === undefined) put++;
       else opened.add(step.part!);
-      const state = { condition, opened: new Set(opened), faults: faults.slice(0, put) };
+      const state = { condition, tookOver, opened: new Set(opened), faults: faults.slice(0, put) };
       return { step, written: networkOf(doc, name, state) };
     });
 }
 
 describe('every step of a fault walk against ngspice (Debian), on networks written apart from the product', () => {
-  const walked = CASES.map(moments);
+  const cases = [...CASES, ...TAKEN_OVER];
+  const walked = cases.map((each) => moments(each, TAKEN_OVER.includes(each)));
   let answers: SpiceAnswer[];
   beforeAll(() => {
     answers = spice(walked.flat().map(({ written }) => written.network));
   }, 60_000);
 
-  test.each(CASES.map(([name], i) => [name, i] as const))('%s: the volts of all cases and loads, the fault current', (_, i) => {
+  test('the inverter takes over in the walks that say so', () => {
+    for (const [i, each] of cases.entries())
+      expect(walked[i]!.some(({ step }) => step.takesOver)).toBe(TAKEN_OVER.includes(each));
+  });
+
+  test.each(cases.map(([name], i) => [name, i] as const))('%s: the volts of all cases and loads, the fault current', (_, i) => {
     const before = walked.slice(0, i).flat().length;
     expect(walked[i]!.length).toBeGreaterThan(0);
     walked[i]!.forEach(({ step, written }, at) => {

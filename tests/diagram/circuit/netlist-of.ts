@@ -21,6 +21,8 @@ export interface State {
   /** ids of devices that stand open */
   opened: ReadonlySet<string>;
   faults: readonly Fault[];
+  /** the inverter has taken over by itself */
+  tookOver?: boolean;
 }
 
 export interface Written {
@@ -42,7 +44,7 @@ const BOTH: [string, string][] = [
   ['3', '4'],
 ];
 
-export function networkOf(doc: Installation, name: string, { condition, opened, faults }: State): Written {
+export function networkOf(doc: Installation, name: string, { condition, opened, faults, tookOver = false }: State): Written {
   const index = new Map<string, number>();
   for (const part of doc.parts)
     for (const mark of isBar(part.kind) ? [''] : terminalsOf(part)) index.set(`${part.id} ${mark}`, index.size);
@@ -117,7 +119,7 @@ export function networkOf(doc: Installation, name: string, { condition, opened, 
       }
       case 'inverter': {
         join(node(part.id, 'in.E'), node(part.id, 'out.E'), CONTACT);
-        const battery = condition !== 'mains';
+        const battery = tookOver || condition !== 'mains';
         if (!battery || part.neutral === 'through') join(node(part.id, 'in.N'), node(part.id, 'out.N'), CONTACT);
         if (!battery) {
           join(node(part.id, 'in.L'), node(part.id, 'out.L'), CONTACT);
@@ -138,7 +140,9 @@ export function networkOf(doc: Installation, name: string, { condition, opened, 
   }
   for (const { kind, at } of faults) {
     const ends = { 'line-to-case': ['L', 'E'], 'line-to-neutral': ['L', 'N'], 'neutral-to-earth': ['N', 'E'] } as const;
-    if (kind !== 'neutral-open') join(node(at, ends[kind][0]), node(at, ends[kind][1]), CONTACT);
+    // An inverter's case and output are meant.
+    const end = (mark: string) => node(at, doc.parts.some(({ id, kind: is }) => id === at && is === 'inverter') ? `out.${mark}` : mark);
+    if (kind !== 'neutral-open') join(end(ends[kind][0]), end(ends[kind][1]), CONTACT);
   }
   for (let each = 0; each < index.size; each++) join(each, REFERENCE, INSULATION);
   return { network: { name, size: index.size, branches, held: new Map(), pushed }, node };

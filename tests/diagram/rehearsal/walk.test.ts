@@ -98,6 +98,36 @@ describe('a walk from where somebody has put the switches', () => {
     expect(walk.stations.at(-1)!.text).toContain('E1 and X1 dark.');
   });
 
+  test('an inverter takes over once the main rcd has opened, and feeds a fault again that lies before any rcd of its own', () => {
+    const doc = backedUp({ neutral: 'separate', transfer: 10 }).document();
+    const walk = walkOf(ask(doc, { faults: [{ kind: 'line-to-case', at: 'G1' }] }));
+    expect(walk.stations.map(({ kind }) => kind)).toEqual(['before', 'fault', 'opens', 'takes-over', 'still']);
+    const [, , opens, over] = walk.stations;
+    expect(opens).toMatchObject({ heading: 'Q0 opens', faultAmps: 0 });
+    // 700 VA drive at most twice that for a while: 1400 VA / 230 V, the surge that the inverter's data give.
+    expect(over!.faultAmps).toBeCloseTo(1400 / 230, 1);
+    expect(over!.t! - opens!.t!).toBeCloseTo(0.01, 9);
+    expect(over!.text).toMatch(/The fault is fed again: 6\.1 A/);
+    expect(over!.figures.sources.G1).toBeGreaterThan(0);
+    expect(walk).toMatchObject({ cleared: false, by: null, clearedAfter: null });
+  });
+
+  test('what hangs on it is dark only until then', () => {
+    const doc = backedUp().socket('X1', 'Q12').document();
+    const walk = walkOf(ask(doc, { faults: [{ kind: 'neutral-open', at: 'SUP' }] }));
+    const over = walk.stations.find(({ kind }) => kind === 'takes-over')!;
+    expect(over.text).toContain('Its battery feeds E2 and X1 again');
+    expect(over.figures.parts.E2).toMatchObject({ from: ['G1'], load: { works: true } });
+  });
+
+  test('one that is off, or has lost its battery, takes over nothing', () => {
+    const kinds = (moved: Record<string, string>) =>
+      walkOf(ask(backedUp().document(), { moved, faults: [{ kind: 'line-to-case', at: 'G1' }] })).stations.map(({ kind }) => kind);
+    expect(kinds({})).toContain('takes-over');
+    expect(kinds({ G1: 'off' })).not.toContain('takes-over');
+    expect(kinds({ F2: 'open' })).not.toContain('takes-over');
+  });
+
   test('walks are the same every time', () => {
     const doc = backedUp().document();
     const once = () =>
