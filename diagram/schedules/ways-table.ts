@@ -13,8 +13,8 @@ import { decidingCable, runsOf } from './way-runs';
 
 const COLUMNS: readonly Column[] = [
   { id: 'label', name: 'Way', width: 23, page: 'stays', spoken: 'name' },
-  { id: 'ref', name: 'Device', width: 5, page: 'cable', spoken: 'designation of the device' },
-  { id: 'rating', name: '', width: 7, page: 'stays', spoken: 'rating of the device' },
+  { id: 'ref', name: 'Device', width: 5, page: 'stays', phone: 'device', spoken: 'designation of the device' },
+  { id: 'rating', name: 'Rating', width: 7, page: 'stays', spoken: 'rating of the device' },
   { id: 'csa', name: 'Cable', unit: 'mm²', width: 5, right: true, page: 'cable', spoken: 'cable, mm²' },
   { id: 'length', name: 'Run', unit: 'm', width: 5, right: true, page: 'cable', spoken: 'run, metres' },
   {
