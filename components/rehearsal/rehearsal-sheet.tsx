@@ -15,7 +15,7 @@ import { walkFromSources } from '@/diagram/commands/walk';
 import { buildScene } from '@/diagram/layout/build-scene';
 import { connectionPages, type ConnectionPage } from '@/diagram/layout/connections-scene';
 import { nextSetting, settingsOf } from '@/diagram/rehearsal/settings';
-import { partName, timeText, voltText } from '@/diagram/rehearsal/words';
+import { partName } from '@/diagram/rehearsal/words';
 import { CONDITION_WORDS } from '@/diagram/rehearsal/say-change';
 import type { DrawingView } from '@/lib/shared/drawings';
 import { readAddress } from './address';
@@ -24,6 +24,7 @@ import { ConditionsRow } from './conditions-row';
 import { RehearsalLegend } from './legend';
 import { RehearsalMargin } from './rehearsal-margin';
 import type { Rehearser } from './rehearser';
+import { sayStation } from './say-station';
 import {
   createRehearsalStore,
   RehearsalProvider,
@@ -34,7 +35,7 @@ import {
   walkIn,
 } from './state';
 import { TimeLine } from './time-line';
-import { useAnswers } from './use-answers';
+import { useAddressBar, useAnswers } from './use-answers';
 import { REHEARSAL_KEYS, useRehearsalKeys } from './use-keys';
 import { usePlay } from './use-play';
 import { Zoom } from './zoom';
@@ -57,6 +58,7 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
   const titleBlock = useSheet(drawing.store, (state) => state.titleBlock);
   const mayEdit = useSheet(drawing.store, (state) => state.rights.edit);
   const askAgain = useAnswers(store, document, makeRehearser);
+  useAddressBar(store);
   const answer = useRehearsal((state) => state.answer);
   const failure = useRehearsal((state) => state.failure);
   const faults = useRehearsal((state) => state.faults);
@@ -112,9 +114,7 @@ function OnStore({ view, me, makeRehearser }: Omit<RehearsalProps, 'query'>) {
   const fault = faults.at(-1);
   const faultPart = fault && parts.get(fault.at);
   const condition = answer ? CONDITION_WORDS[answer.condition] : '';
-  const stepSaid = station
-    ? `Step ${index + 1} of ${walk!.stations.length}${station.t === null ? '' : `, ${timeText(station.t)}`}: ${station.heading}. ${station.text} Case at ${voltText(station.touchVolts)}.`
-    : '';
+  const stepSaid = walk ? sayStation(walk, index) : '';
   const empty = document.parts.length === 0;
   const inHand = parts.get(hand ?? '');
   const hint = mayEdit ? 'Click, tap or Enter turns a switch.' : 'You may rehearse; nothing is changed.';

@@ -19,6 +19,8 @@ export interface RehearsalState extends Address {
   choosing: boolean;
   /** what changed last, for the live region */
   said: string;
+  /** the walk goes from station to station by itself */
+  playing: boolean;
 
   /** asks for the home in a condition: the supply, the main switch and the battery's devices as it wants them */
   setCondition: (name: ConditionName) => void;
@@ -32,7 +34,7 @@ export interface RehearsalState extends Address {
   step: (to: number) => void;
   set: (
     state: Partial<
-      Pick<RehearsalState, 'answer' | 'failure' | 'choosing' | 'said' | 'place' | 'stance' | 'condition' | 'station'>
+      Pick<RehearsalState, 'answer' | 'failure' | 'choosing' | 'said' | 'playing' | 'place' | 'stance' | 'condition' | 'station'>
     >,
   ) => void;
 }
@@ -66,6 +68,7 @@ export const createRehearsalStore = (address: Address): RehearsalStore =>
       failure: null,
       choosing: false,
       said: '',
+      playing: false,
       setCondition: (name) => set({ condition: name, station: null }),
       operate: (id, setting) =>
         set({

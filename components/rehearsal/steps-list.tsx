@@ -8,8 +8,28 @@ import type { Walk } from '@/diagram/rehearsal/walk';
 import { timeText } from '@/diagram/rehearsal/words';
 import { stationIndex, useRehearsal, useRehearsalStore } from './state';
 
+interface StepsProps {
+  walk: Walk;
+  nameOf: (id: string) => string;
+}
+
+/** What a walk takes for granted, said before anybody leans on it. */
+export function Assumptions({ walk }: { walk: Walk }) {
+  if (walk.assumes.length === 0) return null;
+  return (
+    <div className="text-grey">
+      <p>Taken for granted, as no drawing tells it:</p>
+      <ul className="ml-4 list-disc">
+        {walk.assumes.map((words) => (
+          <li key={words}>{words}</li>
+        ))}
+      </ul>
+    </div>
+  );
+}
+
 /** The steps of a walk, the one in hand thick. */
-export function StepsList({ walk, nameOf }: { walk: Walk; nameOf: (id: string) => string }) {
+export function StepsList({ walk, nameOf }: StepsProps) {
   const store = useRehearsalStore();
   const now = useRehearsal(stationIndex);
   const { step, clearFaults } = store.getState();
@@ -32,6 +52,18 @@ export function StepsList({ walk, nameOf }: { walk: Walk; nameOf: (id: string) =
           <Key>Esc</Key>
         </div>
       </div>
+      <Stations walk={walk} />
+    </section>
+  );
+}
+
+/** The stations of a walk as a list to step by, what they come to, and what they rest on. */
+export function Stations({ walk }: { walk: Walk }) {
+  const store = useRehearsalStore();
+  const now = useRehearsal(stationIndex);
+  const { step } = store.getState();
+  return (
+    <>
       <ol className="flex flex-col gap-3">
         {walk.stations.map((station, i) => {
           const inHand = i === now;
@@ -57,6 +89,7 @@ export function StepsList({ walk, nameOf }: { walk: Walk; nameOf: (id: string) =
         })}
       </ol>
       {walk.remark && <p>{walk.remark}</p>}
-    </section>
+      <Assumptions walk={walk} />
+    </>
   );
 }

@@ -23,6 +23,11 @@ function writeAddressBar(state: RehearsalState): void {
   if (wanted !== `${window.location.pathname}${window.location.search}`) window.history.replaceState(null, '', wanted);
 }
 
+/** Keeps the address of the window in step with the rehearsal. */
+export function useAddressBar(store: RehearsalStore): void {
+  useEffect(() => store.subscribe(writeAddressBar), [store]);
+}
+
 /**
  * Keeps the answers in step with the questions: asks when the drawing or the rehearsal changes, and takes an answer only to
  * the question that was put last.
@@ -61,10 +66,7 @@ export function useAnswers(
       });
     };
     ask();
-    const stop = store.subscribe((state) => {
-      ask();
-      writeAddressBar(state);
-    });
+    const stop = store.subscribe(ask);
     return () => {
       stop();
       rehearser.close();

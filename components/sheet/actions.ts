@@ -2,7 +2,8 @@ import type { KeyHelp } from '@/components/frame/types';
 import type { Hands } from './hands';
 import { routeInHandAgain } from './leading';
 import { askForCopy } from './copying';
-import { align, distribute, unpin } from './placing';
+import { askToShow, playShown } from './margin/showing';
+import { align, distribute, lock, turn, unpin } from './placing';
 import { takeAll, takeKind, takeRoom } from './taking';
 import type { TidyWay } from './tidy/use-tidy';
 
@@ -118,6 +119,13 @@ export const ACTIONS: readonly Action[] = [
   },
   { id: 'next-note', words: 'Next finding', keys: 'n', does: ({ nextNote }) => nextNote(1) },
   { id: 'last-note', words: 'Finding before', keys: 'Shift N', does: ({ nextNote }) => nextNote(-1) },
+  {
+    id: 'show',
+    words: 'Show me: play the fault of the finding in hand on the sheet, or leave it',
+    keys: 'p',
+    does: ({ hands }) => askToShow(hands),
+  },
+  { id: 'play', words: 'Play or stop the fault that is shown', keys: 'Space', does: ({ hands }) => playShown(hands) },
   { id: 'outline', words: 'Outline: the drawing as a tree to walk and edit', keys: 'o', does: ({ outline }) => outline() },
   { id: 'face', words: 'Other face at the same place', keys: 'g', does: ({ otherFace }) => otherFace() },
   { id: 'schedule', words: 'Schedules and curves of the way in hand', keys: 's', does: ({ schedule }) => schedule() },
@@ -183,6 +191,20 @@ export const ACTIONS: readonly Action[] = [
     does: ({ hands }) => routeInHandAgain(hands),
   },
   {
+    id: 'turn',
+    words: 'Turn what is in hand by a quarter: rotate clockwise',
+    keys: 'r',
+    edits: true,
+    does: ({ hands }) => turn(hands),
+  },
+  {
+    id: 'lock',
+    words: 'Lock what is in hand in place, or unlock it',
+    keys: 'Shift L',
+    edits: true,
+    does: ({ hands }) => lock(hands),
+  },
+  {
     id: 'unpin',
     words: 'Let what is in hand be placed by the sheet again',
     edits: true,
@@ -217,9 +239,14 @@ export const KEYS_HELP: readonly KeyHelp[] = [
   { keys: ['↑', '↓', '←', '→'], does: 'follow the conductor: up is towards the source' },
   { keys: ['Shift', '↑', '↓', '←', '→'], does: 'take the next part in hand as well' },
   { keys: ['Tab'], does: 'next terminal of the part in hand' },
+  { keys: ['Alt'], does: 'held while a part is dragged: not drawn to what it nearly stands in line with' },
+  { keys: ['←', '→'], does: 'while a fault is shown: a step back, a step on' },
   // The frame tells of `?` itself.
   ...ACTIONS.filter((action) => action.keys && action.id !== 'keys').map((action) => ({ keys: [action.keys!], does: action.words })),
 ];
+
+/** Keys whose name is not what is printed on them. */
+const PRINTED: Readonly<Record<string, string>> = { Escape: 'Esc', '=': '+', ' ': 'Space' };
 
 /** The key of an event as it is printed: "Ctrl Shift Z", "Shift N", "e". Letters by what is typed, by place where it is not Latin. */
 export function keyName(event: Pick<KeyboardEvent, 'key' | 'code' | 'ctrlKey' | 'metaKey' | 'shiftKey'>): string {
@@ -230,7 +257,7 @@ export function keyName(event: Pick<KeyboardEvent, 'key' | 'code' | 'ctrlKey' | 
   const letter = /^[a-z]$/i.test(latin);
   if (ctrl) return `Ctrl ${event.shiftKey && letter ? 'Shift ' : ''}${letter ? latin.toUpperCase() : latin}`;
   if (letter) return event.shiftKey ? `Shift ${latin.toUpperCase()}` : latin.toLowerCase();
-  return latin === 'Escape' ? 'Esc' : latin === '=' ? '+' : latin;
+  return PRINTED[latin] ?? latin;
 }
 
 const BY_KEY = new Map(ACTIONS.flatMap((action) => (action.keys ? [[action.keys, action] as const] : [])));

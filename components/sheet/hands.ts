@@ -13,9 +13,12 @@ import type { End, Installation } from '@/diagram/document/schema';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
 import { Clipboard } from './clipboard';
+import { guided } from './guiding';
 import { leadBy, runInHand } from './leading';
+import { leaveWalk } from './margin/showing';
 import { firstPart, handEnd, nextPart, type Direction } from './navigate';
 import type { DrawingStore } from './store';
+import { lockHolds } from './placing';
 import { NOTHING } from './store';
 import { REST, type View } from './view';
 
@@ -105,7 +108,7 @@ export class Hands {
   letGo(): void {
     const { mode, setMode } = this.view.getState();
     if (mode.kind !== 'rest') setMode(REST);
-    else this.state.select(NOTHING);
+    else if (!leaveWalk(this.view)) this.state.select(NOTHING);
   }
 
   /** Of terminals that are drawn at one point, the one that is meant: where the wire in hand may go, else where drawing goes on. */
@@ -189,7 +192,7 @@ export class Hands {
     if (!this.mayEdit) this.state.say('You may read this drawing.');
     else if (this.state.selection.parts.length === 0 && !runInHand(this.scene(), this.state.selection))
       this.state.say('Take a part or a run in hand first.');
-    else this.view.getState().setMode({ kind: 'move', dx: 0, dy: 0 });
+    else if (!lockHolds(this, this.state.selection.parts)) this.view.getState().setMode({ kind: 'move', dx: 0, dy: 0 });
   }
 
   nudge(direction: Direction): void {
@@ -209,12 +212,18 @@ export class Hands {
     setMode(REST);
     if (mode.dx === 0 && mode.dy === 0) return;
     if (this.state.selection.parts.length === 0) leadBy(this, mode.dx, mode.dy);
-    else this.moveBy(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
+    else this.shift(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
   }
 
-  /** Lengths in 1/100 mm. */
+  /** A pointer lets go of parts that it has dragged so far, in 1/100 mm: they go where the guides show. */
   moveBy(ids: readonly string[], dx: number, dy: number): void {
+    const { dx: x, dy: y } = guided(this.scene(), ids, dx, dy) ?? { dx, dy };
+    this.shift(ids, x, y);
+  }
+
+  private shift(ids: readonly string[], dx: number, dy: number): void {
     const { terminal } = this.state.selection;
+    if (lockHolds(this, ids)) return;
     if (this.do(moveParts(this.doc, this.view.getState().face, ids, dx, dy)) && terminal)
       this.state.select({ terminal });
   }

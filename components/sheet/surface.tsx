@@ -7,6 +7,8 @@ import type { Scene } from '@/diagram/layout/scene';
 import { useSingleKeys } from '@/components/frame/single-keys';
 import type { ActionContext } from './actions';
 import { Canvas } from './canvas/canvas';
+import { GuidesLayer } from './canvas/guides-layer';
+import { LocksLayer } from './canvas/locks-layer';
 import { useBox } from './floating';
 import type { Slip } from './extend/use-slip';
 import { handWords } from './hand-words';
@@ -17,6 +19,7 @@ import { StartPanel } from './start-panel';
 import { useSheet, type OpenDrawing } from './use-drawing';
 import { useKeyboard } from './use-keyboard';
 import { REST, useView, useViewStore } from './view';
+import { WalkOnSheet } from './walk-on-sheet';
 
 interface SurfaceProps {
   sheet: RefObject<HTMLDivElement | null>;
@@ -119,6 +122,9 @@ export function SheetSurface(props: SurfaceProps) {
           ))}
         </nav>
       )}
+      <GuidesLayer scene={scene} drawing={drawing} />
+      <LocksLayer scene={scene} drawing={drawing} />
+      <WalkOnSheet drawing={drawing} scene={scene} />
       <Leader box={sheet} scene={scene} notes={notes} />
       <Panels
         box={box}

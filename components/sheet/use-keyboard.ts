@@ -3,6 +3,8 @@
 import { useCallback, type KeyboardEvent } from 'react';
 import { isTyping, useSingleKeysOn } from '@/components/frame/single-keys';
 import { actionFor, keyName, type ActionContext } from './actions';
+import { stepWalk } from '@/components/rehearsal/on-sheet/shown-walk';
+import { walkShown } from './margin/showing';
 import type { Direction } from './navigate';
 import { takeAlso } from './taking';
 
@@ -28,6 +30,11 @@ export function useKeyboard(context: ActionContext): (event: KeyboardEvent) => v
         event.preventDefault();
         event.stopPropagation();
       };
+      const walk = mode.kind === 'rest' ? walkShown(hands.view.getState()) : null;
+      if (walk && !event.ctrlKey && !event.metaKey && !event.shiftKey && (direction === 'left' || direction === 'right')) {
+        done();
+        return stepWalk(walk, direction === 'left' ? -1 : 1);
+      }
       if (direction && !event.ctrlKey && !event.metaKey) {
         done();
         if (mode.kind === 'wire') {

@@ -3,6 +3,7 @@ import { useStore } from 'zustand';
 import { createContext, useContext } from 'react';
 import type { End, Face, Installation } from '@/diagram/document/schema';
 import type { Point } from '@/diagram/layout/scene';
+import type { ShownWalk } from '@/components/rehearsal/on-sheet/shown-walk';
 import type { TidyWay } from './tidy/use-tidy';
 import type { Choice } from '@/diagram/commands/extend/types';
 
@@ -68,6 +69,10 @@ export interface ViewState {
   room: string | null;
   /** key of the finding in hand */
   finding: string | null;
+  /** key of the finding whose fault is to be shown as soon as it is worked out */
+  wantsWalk: string | null;
+  /** the fault walk that lies over the sheet, while its finding is in hand */
+  walk: ShownWalk | null;
   camera: Camera | null;
   /** phones open for reading */
   editing: boolean;
@@ -90,6 +95,8 @@ export const createView = (face: Face, place: string | null): View =>
     severities: new Set(['danger', 'defect', 'advice']),
     room: null,
     finding: null,
+    wantsWalk: null,
+    walk: null,
     camera: null,
     editing: true,
     outline: { shown: false, open: new Set(['sheet']), at: 'sheet', hand: false },

@@ -105,6 +105,9 @@ export const cloneParts = (doc: Installation, ids: readonly string[], newId: New
   return clip ? renamed(doc, clip, newId) : { ids: new Map<string, string>(), parts: [], wires: [], cables: [] };
 };
 
+/** A copy of what is held in place is not: it is to be moved to its own. */
+const free = ({ locked: _, ...at }: Position): Position => at;
+
 /** Puts a clip on the sheet, beside where it was. */
 export function pasteClip(
   doc: Installation,
@@ -118,7 +121,7 @@ export function pasteClip(
     ...Object.fromEntries(
       Object.entries(places).flatMap(([id, at]) =>
         fresh.ids.has(id)
-          ? [[fresh.ids.get(id)!, { ...at, x: at.x + 4 * MODULE, y: at.y + 2 * MODULE, pinned: true }]]
+          ? [[fresh.ids.get(id)!, { ...free(at), x: at.x + 4 * MODULE, y: at.y + 2 * MODULE, pinned: true }]]
           : [],
       ),
     ),

@@ -3,6 +3,7 @@ import { canonical, type FloorPlan, type Installation, type Kind, type Part, typ
 import { byDesignation, listNames, nameOf } from '../document/names';
 import { symbolFor } from '../symbols';
 import { MODULE } from '../symbols/types';
+import { unlocked } from './lock-parts';
 import type { Command } from './types';
 
 /** 1/100 mm: the longer side of a plan on the paper, so that symbols of the drawing stand on it in their own size. */
@@ -139,7 +140,7 @@ export function moveOnPlan(doc: Installation, planId: string, ids: readonly stri
   const names: string[] = [];
   for (const part of doc.parts) {
     const at = placed.get(part.id);
-    if (!plan || !at || !ids.includes(part.id)) continue;
+    if (!plan || !at || at.locked || !ids.includes(part.id)) continue;
     set[part.id] = { ...at, ...within(plan, part, at.x + dx, at.y + dy) };
     names.push(nameOf(doc, part));
   }
@@ -149,7 +150,7 @@ export function moveOnPlan(doc: Installation, planId: string, ids: readonly stri
 
 /** Turns parts on their plan by a quarter, clockwise: an outlet faces the room from whichever wall it is in. */
 export function turnOnPlan(doc: Installation, ids: readonly string[]): Command {
-  const turned = Object.entries(doc.sheet?.plan ?? {}).filter(([id]) => ids.includes(id));
+  const turned = Object.entries(doc.sheet?.plan ?? {}).filter(([id, { locked }]) => !locked && ids.includes(id));
   const set = turned.map(([id, at]): [string, PlanPosition] => {
     const { turn = 0, ...rest } = at;
     const next = ((turn + 1) % 4) as 0 | 1 | 2 | 3;
@@ -166,7 +167,8 @@ export function turnOnPlan(doc: Installation, ids: readonly string[]): Command {
 
 /** Takes parts off the plan, back among those that are not placed. */
 export function takeOffPlan(doc: Installation, ids: readonly string[]): Command {
-  const rest = Object.entries(doc.sheet?.plan ?? {}).filter(([id]) => !ids.includes(id));
-  const names = doc.parts.filter((part) => ids.includes(part.id)).map((part) => nameOf(doc, part));
+  const loose = new Set(unlocked(doc, 'plan', ids));
+  const rest = Object.entries(doc.sheet?.plan ?? {}).filter(([id]) => !loose.has(id));
+  const names = doc.parts.filter((part) => loose.has(part.id)).map((part) => nameOf(doc, part));
   return commandTo(doc, withPlan(doc, Object.fromEntries(rest)), `Take ${listNames(names, 3)} off the plan`);
 }

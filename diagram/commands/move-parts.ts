@@ -1,3 +1,5 @@
+import { symbolFor } from '../symbols';
+import { turnedSize } from '../symbols/turn';
 import { MODULE } from '../symbols/types';
 import { diff } from '../document/patch';
 import { applyPatch } from '../document/patch';
@@ -5,6 +7,7 @@ import { bendsMoved } from '../layout/bends';
 import { placeAll, positionsOn } from '../layout/place';
 import { byCode, canonical, type Face, type Installation, type Position } from '../document/schema';
 import { nameOf } from '../document/names';
+import { stays, unlocked } from './lock-parts';
 import type { Command, Refusal } from './types';
 
 const snap = (value: number): number => Math.round(value / MODULE) * MODULE;
@@ -21,7 +24,7 @@ function moved(
   const set: Record<string, Position> = {};
   for (const id of ids) {
     const at = all.get(id);
-    if (at) set[id] = place(id, at);
+    if (at && !at.locked) set[id] = place(id, at);
   }
   const next = canonical({ ...before, sheet: { ...before.sheet, [face]: { ...before.sheet?.[face], ...set } } });
   return { label, patch: diff(doc, next), parts: ids };
@@ -42,9 +45,21 @@ export function moveParts(doc: Installation, face: Face, ids: readonly string[],
     `Move ${named(doc, ids)}`,
   );
   // runs that were led by hand between parts that move together move with them
-  const bends = bendsMoved(doc, face, new Set(ids), snap(dx), snap(dy));
+  const bends = bendsMoved(doc, face, new Set(unlocked(doc, face, ids)), snap(dx), snap(dy));
   if (Object.keys(bends).length === 0) return command;
   return { ...command, patch: { ...command.patch, set: { ...command.patch.set, bends } } };
+}
+
+/** Turns parts by a quarter, clockwise, each about its own middle to the module; their runs follow to the terminals. */
+export function turnParts(doc: Installation, face: Face, ids: readonly string[]): Command {
+  const parts = new Map(doc.parts.map((part) => [part.id, part]));
+  const place = (id: string, { turn = 0, ...at }: Position): Position => {
+    const { width, height } = turnedSize(symbolFor(parts.get(id)!, face), turn);
+    const next = ((turn + 1) % 4) as 0 | 1 | 2 | 3;
+    const off = (width - height) / 2;
+    return { ...at, x: snap(at.x + off), y: snap(at.y - off), ...(next !== 0 && { turn: next }), pinned: true };
+  };
+  return moved(doc, face, place, ids, `Turn ${named(doc, ids)} by a quarter`);
 }
 
 /** Lines parts up with the first of them, in a row or in a column. */
@@ -88,6 +103,7 @@ export function placeExactly(doc: Installation, face: Face, id: string, text: st
   const found = /^\s*(-?\d+(?:[.,]\d+)?)\s*(?:mm)?\s*[;, ]\s*(-?\d+(?:[.,]\d+)?)\s*(?:mm)?\s*$/.exec(text);
   if (!found) return { refused: 'Two numbers in mm, across and down. For instance 125, 62.5.' };
   const [x, y] = [found[1]!, found[2]!].map((number) => snap(MM * Number(number.replace(',', '.'))));
+  if (unlocked(doc, face, [id]).length === 0) return { refused: stays(doc, [id]) };
   if (Math.abs(x!) > 1e6 || Math.abs(y!) > 1e6) return { refused: 'That lies off every sheet: at most 10 m.' };
   return moved(doc, face, (_, at) => ({ ...at, x: x!, y: y!, pinned: true }), [id], `Move ${named(doc, [id])}`);
 }
@@ -95,7 +111,7 @@ export function placeExactly(doc: Installation, face: Face, id: string, text: st
 /** Lets the layout place parts again: what a person pinned is let go. */
 export function unpinParts(doc: Installation, face: Face, ids: readonly string[]): Command {
   const positions = { ...doc.sheet?.[face] };
-  for (const id of ids) if (positions[id]?.pinned) delete positions[id];
+  for (const id of unlocked(doc, face, ids)) if (positions[id]?.pinned) delete positions[id];
   const loose = canonical({ ...doc, sheet: { ...doc.sheet, [face]: positions } });
   return {
     label: `Let ${named(doc, ids)} be placed again`,

@@ -227,6 +227,8 @@ export const PositionSchema = z.strictObject({
   turn: z.union([z.literal(0), z.literal(1), z.literal(2), z.literal(3)]).optional(),
   /** set by hand: tidying leaves it where it is */
   pinned: z.boolean().optional(),
+  /** held where it stands: no hand moves it until it is let go; what it is may still be changed */
+  locked: z.literal(true).optional(),
 });
 const positions = z.record(IdSchema, PositionSchema);
 

@@ -152,7 +152,7 @@ export const RehearsalMarks = memo(function RehearsalMarks(props: MarksProps) {
   const meetings = useMemo(() => meetingsOf(scene), [scene]);
   const ofWay = (device: string) => (meetings.atPart.get(device) ?? []).map((id) => runLooks.get(id)!);
   return (
-    <Layer scene={scene} level={2} name="marks">
+    <Layer scene={scene} level={2} name="figures">
       {scene.runs.map((run) => (
         <Ticks key={run.id} run={run} cased={runLooks.get(run.id)?.cased ?? false} dead={isDead(run)} />
       ))}

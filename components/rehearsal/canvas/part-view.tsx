@@ -37,11 +37,35 @@ function Line({ stroke, dead }: { stroke: Stroke; dead: boolean }) {
 
 const AROUND = 125;
 
-/** One part as it stands: dotted when dead, ringed when at work, its contact closed or apart. */
-export const LookNodeView = memo(function LookNodeView({ data: { part, look, operable } }: NodeProps<LookNode>) {
+/** 1/100 mm: radius of the ring about a part that draws current */
+const ringOf = ({ width, height }: Pick<ScenePart, 'width' | 'height'>): number => Math.max(width, height) / 2 + 95;
+
+/** A part as it stands, from its own corner: dotted when dead, ringed when at work, its contact closed or apart. */
+export const LookPicture = memo(function LookPicture({ part, look }: { part: ScenePart; look: PartLook }) {
   const symbol = symbolById(part.symbol, part.turn % 2 === 1 ? part.height : part.width);
-  const dead = look.state === 'dead';
-  const radius = Math.max(part.width, part.height) / 2 + 95;
+  return (
+    <>
+      <g transform={turnTransform(0, 0, symbol, part.turn)} style={{ color: inkOf(part, look) }}>
+        {strokesIn(symbol, look.setting).map((stroke, i) => (
+          <Line key={i} stroke={stroke} dead={look.state === 'dead'} />
+        ))}
+      </g>
+      {look.works && (
+        <circle
+          cx={part.width / 2}
+          cy={part.height / 2}
+          r={ringOf(part)}
+          fill="none"
+          stroke="var(--ink)"
+          strokeWidth={STROKE.normal * INK}
+        />
+      )}
+    </>
+  );
+});
+
+/** One part of the rehearsal as it stands, with room about it for a pointer where it can be turned. */
+export const LookNodeView = memo(function LookNodeView({ data: { part, look, operable } }: NodeProps<LookNode>) {
   return (
     <>
       <svg
@@ -63,26 +87,12 @@ export const LookNodeView = memo(function LookNodeView({ data: { part, look, ope
           <circle
             cx={part.width / 2}
             cy={part.height / 2}
-            r={Math.max(radius, 22 / px(1))}
+            r={Math.max(ringOf(part), 22 / px(1))}
             fill="transparent"
             className="hidden pointer-coarse:block"
           />
         )}
-        <g transform={turnTransform(0, 0, symbol, part.turn)} style={{ color: inkOf(part, look) }}>
-          {strokesIn(symbol, look.setting).map((stroke, i) => (
-            <Line key={i} stroke={stroke} dead={dead} />
-          ))}
-        </g>
-        {look.works && (
-          <circle
-            cx={part.width / 2}
-            cy={part.height / 2}
-            r={radius}
-            fill="none"
-            stroke="var(--ink)"
-            strokeWidth={STROKE.normal * INK}
-          />
-        )}
+        <LookPicture part={part} look={look} />
       </svg>
       <Handle type="source" position={Position.Top} isConnectable={false} className="invisible" />
     </>

@@ -13,11 +13,12 @@ import type { Scene } from '@/diagram/layout/scene';
 import type { Rehearsed } from '@/diagram/rehearsal/rehearse';
 import { settingsOf } from '@/diagram/rehearsal/settings';
 import type { Station } from '@/diagram/rehearsal/walk';
-import { partLook, runLook, type PartLook, type RunLook } from '../looks';
+import type { PartLook } from '../looks';
 import { ConductorsLayer } from './conductors-layer';
 import { RehearsalMarks } from './marks';
 import { lookNode, LookNodeView, type LookNode } from './part-view';
 import { PencilLayer } from './pencil-layer';
+import { useLooks } from './use-looks';
 
 const nodeTypes = { look: LookNodeView };
 const NO_ORIGIN = { hideAttribution: true };
@@ -30,8 +31,6 @@ const LARGE = 400;
 const IN_SIGHT = 20;
 /** px: below this the conditions lie on the sheet */
 const NARROW = 760;
-const NOTHING: Rehearsed['figures'] = { wires: {}, parts: {}, sources: {} };
-const NONE: readonly string[] = [];
 
 interface CanvasProps {
   scene: Scene;
@@ -73,27 +72,7 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
   const flow = useReactFlow();
   const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
   const box = useFlowStore((state) => `${state.width} ${state.height}`);
-  const figures = station?.figures ?? answer?.figures ?? NOTHING;
-  const opened = station?.opened ?? NONE;
-  const inverters = useMemo(
-    () => new Set([...parts.values()].filter(({ kind }) => kind === 'inverter').map(({ id }) => id)),
-    [parts],
-  );
-  const runLooks = useMemo(
-    () => new Map<string, RunLook>(scene.runs.map((run) => [run.id, runLook(run, figures, inverters)])),
-    [scene, figures, inverters],
-  );
-  const partLooks = useMemo(
-    () =>
-      new Map<string, PartLook>(
-        scene.parts.flatMap((drawn) => {
-          const part = parts.get(drawn.id);
-          if (!part) return [];
-          return [[drawn.id, partLook(part, figures, answer?.settings ?? {}, answer?.rest ?? {}, opened, inverters)]];
-        }),
-      ),
-    [scene, parts, figures, answer, opened, inverters],
-  );
+  const { figures, runLooks, partLooks } = useLooks(scene, parts, answer, station);
   const nodes = useMemo(
     () =>
       scene.parts.flatMap((drawn) => {

@@ -1,5 +1,6 @@
 'use client';
 
+import dynamic from 'next/dynamic';
 import { useMemo } from 'react';
 import { Button } from '@/components/ui/button';
 import type { Scene } from '@/diagram/layout/scene';
@@ -7,10 +8,13 @@ import type { ActionContext } from '../actions';
 import { handWords } from '../hand-words';
 import { useCoarse } from '../canvas/use-coarse';
 import type { MarkedNote } from '../margin/notes';
+import { leaveWalk, walkShown } from '../margin/showing';
 import { useSheet, type OpenDrawing } from '../use-drawing';
 import { useView, useViewStore, type Mode } from '../view';
 import { CoreLegend } from './core-legend';
 import { Strip } from './strip';
+
+const WalkFoot = dynamic(() => import('@/components/rehearsal/on-sheet/walk-foot'), { ssr: false });
 
 interface FootProps {
   drawing: OpenDrawing;
@@ -80,11 +84,13 @@ export function SheetFoot({ drawing, context, scene, drawn, notes }: FootProps) 
   const undoable = useSheet(drawing.store, (state) => state.undoSteps.at(-1)?.label);
   const { undo } = drawing.store.getState();
   const coarse = useCoarse();
+  const walk = useView(walkShown);
   const crowded = useMemo(() => roomsOverlap(scene), [scene]);
   const said =
     drawn || document.parts.length === 0
       ? hint(mode, handWords(document, selection), { mayEdit, mayDraw, crowded, coarse })
       : `Drawing ${document.parts.length} parts`;
+  if (walk) return <WalkFoot walk={walk} onLeave={() => leaveWalk(view)} />;
   return (
     <div className="flex h-full flex-col gap-x-4 gap-y-1 sm:flex-row">
       {scene.face === 'overview' ? <Strip scene={scene} notes={notes} /> : <CoreLegend practice={document.practice} />}

@@ -1,5 +1,6 @@
 'use client';
 
+import dynamic from 'next/dynamic';
 import Link from 'next/link';
 import { useEffect, useRef, useState } from 'react';
 import { Button, buttonClass } from '@/components/ui/button';
@@ -7,10 +8,13 @@ import { Note } from '@/components/ui/note';
 import { withPlaces } from '@/diagram/commands/place-new';
 import { applyPatch, type Patch } from '@/diagram/document/patch';
 import type { Hands } from '../hands';
+import { useView } from '../view';
 import type { Proof } from './examiner';
 import type { MarkedNote } from './notes';
-import { ProofView } from './proof-view';
+import { answerShow, askToShow } from './showing';
 import { SilenceForm } from './silence-form';
+
+const WalkSteps = dynamic(() => import('@/components/rehearsal/on-sheet/walk-steps'), { ssr: false });
 
 interface FindingNoteProps {
   note: MarkedNote;
@@ -28,13 +32,17 @@ export function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake
   const { finding } = note;
   const box = useRef<HTMLDivElement>(null);
   const [silencing, setSilencing] = useState(false);
-  const [shown, setShown] = useState(false);
+  const walk = useView((state) => (state.walk?.finding === note.key ? state.walk : null));
+  const wanted = useView((state) => state.wantsWalk === note.key);
   const preview = (patch: Patch | null) => {
     hands.view.getState().set({ ghost: patch && applyPatch(hands.doc, patch) });
   };
   useEffect(() => {
     if (inHand) box.current?.scrollIntoView({ block: 'nearest' });
   }, [inHand]);
+  useEffect(() => {
+    if (wanted && proof) answerShow(hands, note.key, proof);
+  }, [wanted, proof, hands, note.key]);
   const conditions = finding.conditions.map((name) => name.replace('main-off', 'main off')).join(', ');
   const meta = [finding.severity, conditions, note.grid ?? 'not on this face'].filter(Boolean);
   // Two edits that are called the same do the same for whoever reads them: the first is offered.
@@ -73,8 +81,8 @@ export function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake
                 </Button>
               ))}
             {proof?.walk && (
-              <Button aria-expanded={shown} onClick={() => setShown(!shown)}>
-                Show me
+              <Button aria-pressed={walk !== null} onClick={() => askToShow(hands)}>
+                {walk ? 'Back to the drawing' : 'Show me'}
               </Button>
             )}
             <Button onClick={onTake} aria-pressed={inHand}>
@@ -88,7 +96,7 @@ export function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake
         }
       >
         {finding.message}
-        {inHand && shown && proof?.walk && <ProofView walk={proof.walk} document={hands.doc} />}
+        {inHand && walk && <WalkSteps walk={walk} jobId={hands.store.getState().jobId} />}
         {inHand && proof?.cannot && <span className="mt-1 block text-grey">The fault {proof.cannot}.</span>}
         {finding.clause && finding.clause.length > 0 && (
           <span className="mt-1 block text-small text-grey">leans on {finding.clause.join('; ')}</span>
