@@ -1,5 +1,6 @@
 'use client';
 
+import Link from 'next/link';
 import { useStore } from 'zustand';
 import { ConflictPanel } from '@/components/sheet/conflict-panel';
 import { keyOf } from '@/components/sheet/margin/notes';
@@ -70,34 +71,51 @@ function RefusedNotes({ desk }: { desk: Desk }) {
   });
 }
 
-/** The other rows of this schedule with something grave, to walk to. */
-function OtherRows({ desk, worked }: { desk: Desk; worked: Worked }) {
+const GRAVE = { danger: 0, defect: 1, advice: 2 } as const;
+
+/** What else is found, the gravest first: each with the row that it is about, or with the sheet where there is none. */
+function Elsewhere({ desk, worked, jobId }: { desk: Desk; worked: Worked; jobId: string }) {
   const schedule = useStore(desk, (state) => state.schedule);
   const hand = useStore(desk, (state) => state.hand);
   const rows = TABLES_OF[schedule].flatMap((id) =>
-    worked.tables[id].rows.flatMap((row) => {
-      const grave = findingsOf(row, worked.findings).filter(({ severity }) => severity !== 'advice');
-      return grave.length > 0 && !(hand?.table === id && hand.row === row.id) ? [{ id, row, grave }] : [];
-    }),
+    worked.tables[id].rows.map((row) => ({
+      id,
+      row,
+      inHand: hand?.table === id && hand.row === row.id,
+      found: new Set(findingsOf(row, worked.findings)),
+    })),
   );
-  if (rows.length === 0) return null;
+  const others = worked.findings
+    .filter((finding) => !rows.some(({ inHand, found }) => inHand && found.has(finding)))
+    .sort((a, b) => GRAVE[a.severity] - GRAVE[b.severity]);
+  if (others.length === 0) return null;
   return (
     <section className="border-t border-rule pt-4">
-      <h2 className="text-head font-bold">Other rows not in order</h2>
-      <ul className="mt-1 flex flex-col gap-1">
-        {rows.slice(0, 12).map(({ id, row, grave }) => (
-          <li key={`${id} ${row.id}`}>
-            <WordButton onClick={() => focusCell(rowKey(id, row.id), HEAD)}>{row.name}</WordButton>{' '}
-            <span className="text-red">{grave[0]!.heading}</span>
-          </li>
-        ))}
+      <h2 className="text-head font-bold">{others.length < worked.findings.length ? 'Elsewhere' : 'Where'}</h2>
+      <ul className="mt-1 flex flex-col gap-2">
+        {others.slice(0, 12).map((finding) => {
+          const at = rows.find(({ found }) => found.has(finding));
+          return (
+            <li key={keyOf(finding)}>
+              {at ? (
+                <WordButton onClick={() => focusCell(rowKey(at.id, at.row.id), HEAD)}>{at.row.name}</WordButton>
+              ) : (
+                <Link className="underline underline-offset-[3px]" href={`/jobs/${jobId}/overview`}>
+                  On sheet 2
+                </Link>
+              )}{' '}
+              <span className={finding.severity === 'advice' ? '' : 'text-red'}>{finding.heading}</span>{' '}
+              <span className="text-grey">{finding.severity}</span>
+            </li>
+          );
+        })}
       </ul>
-      {rows.length > 12 && <p className="text-grey">{rows.length - 12} more; n goes through them</p>}
+      {others.length > 12 && <p className="text-grey">{others.length - 12} more on sheet 2</p>}
     </section>
   );
 }
 
-/** What is to be answered on the schedules: what could not be read, the row in hand, the other rows. */
+/** What is to be answered on the schedules: what could not be read, the row in hand, what else is found. */
 export function SchedulesMargin({ desk, drawing, state, document, me, jobId, mayEdit }: SchedulesMarginProps) {
   const news = useSheet(drawing.store, (current) => current.news);
   const { worked, failure, again } = state;
@@ -132,7 +150,7 @@ export function SchedulesMargin({ desk, drawing, state, document, me, jobId, may
       <SinceChange desk={desk} worked={worked} />
       <RefusedNotes desk={desk} />
       <RowNotes desk={desk} worked={worked} document={document} jobId={jobId} mayEdit={mayEdit} />
-      <OtherRows desk={desk} worked={worked} />
+      <Elsewhere desk={desk} worked={worked} jobId={jobId} />
     </div>
   );
 }
