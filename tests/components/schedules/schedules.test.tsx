@@ -217,6 +217,15 @@ describe('the schedule of ways', () => {
     expect(screen.getByText(/^1\.71 % is lost up to E7/)).toBeInTheDocument();
   });
 
+  it('lists all that is found, the gravest first, each with a row that it is about', () => {
+    const thin = house.cables.map((each) => (/heavy1\.run$/.test(each.id) ? { ...each, csa: 1.5 } : each));
+    open({ document: { ...house, cables: thin } });
+    const found = margin().getAllByRole('listitem').map(({ textContent }) => textContent);
+    expect(found).toContain('Way 5 Q8 does not protect its cable danger');
+    expect(found.at(-1)).toMatch(/advice$/);
+    expect(found).toContainEqual(expect.stringMatching(/^Way 13 With Q0 off, G1 is still there advice$/));
+  });
+
   it('goes through the rows that are not in order', async () => {
     const user = userEvent.setup();
     const thin = house.cables.map((each) => (/heavy1\.run$/.test(each.id) ? { ...each, csa: 1.5 } : each));
