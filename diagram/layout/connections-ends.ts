@@ -129,7 +129,7 @@ export function barBodies(
   cables: readonly PlacedCable[],
   marks: ReadonlyMap<string, readonly string[]>,
 ): Map<string, Body> {
-  const stubAt = new Map(cables.flatMap(({ stubs }) => stubs.map((stub) => [stub.core.wire.id, stub] as const)));
+  const stubAt = new Map(cables.flatMap(({ stubs }) => stubs.map((stub) => [stub.core.run, stub] as const)));
   const all = new Map(bodies);
   for (const part of page.parts)
     if (isLongBar(part.kind))
@@ -179,7 +179,7 @@ function barBody(
     }
   for (const cable of page.cables)
     for (const core of cable.cores) {
-      const stub = stubAt.get(core.wire.id);
+      const stub = stubAt.get(core.run);
       if (core.here[0] === part.id && stub) note(core.here[1], stub.x, stub.y);
     }
   wanted.sort((a, b) => a.x - b.x || Number(a.mark) - Number(b.mark));

@@ -146,7 +146,7 @@ export function letterPage(
           : []),
       ];
       keep(texts.wires, {
-        owner: core.wire.id,
+        owner: core.run,
         size: SMALL,
         lines,
         places: cable.atFoot

@@ -1,5 +1,6 @@
 import { byDesignation } from '../document/names';
 import { byCode, type Cable, type End, type Installation, type Part, type Wire } from '../document/schema';
+import { ON_BOARD, isLongBar } from './connections-page-state';
 import { coreOf } from './overview-graph';
 import { planOverview, type OverviewPlan } from './overview-plan';
 import { walk } from './overview-tree';
@@ -11,6 +12,8 @@ import { printedRef } from './overview-labels';
 
 export interface Core {
   wire: Wire;
+  /** of the run that is drawn of it here: the wire's own id, with {@link LEAVING} where it comes in on the same page too */
+  run: string;
   /** the end on this page, and the one elsewhere */
   here: End;
   far: End;
@@ -29,6 +32,11 @@ export interface PageCable {
   /** written over its brace: the first line bold */
   lines: string[];
 }
+
+/** Marks the run of a core at the foot of the board whose load stands on the same page. */
+export const LEAVING = '@board';
+/** A board of more ways is too wide for the cores of its own room to run past it: they leave and come in as all others. */
+const FEW_WAYS = 4;
 
 export interface Page {
   place: string;
@@ -136,27 +144,39 @@ export function readPage(doc: Installation, plan: OverviewPlan, place: string): 
   const parts = [...byId.values()].filter((part) => pageOf.get(part.id) === place);
   const inner: Wire[] = [];
   const groups = new Map<string, Core[]>();
+  const note = (key: string, wire: Wire, here: End, far: End, run = wire.id) =>
+    groups.set(key, [
+      ...(groups.get(key) ?? []),
+      { wire, run, here, far, core: coreOf(wire.role), home: homeOf(wire, far) },
+    ]);
+  const ways = plan.content.hanging.filter(({ head }) => head && pageOf.get(head.part.id) === place).length;
+  const onBoard = ([id]: End): boolean => ON_BOARD.has(byId.get(id)!.kind) || isLongBar(byId.get(id)!.kind);
   for (const wire of wires.get(place) ?? []) {
     const [from, to] = [pageOf.get(wire.from[0]) === place, pageOf.get(wire.to[0]) === place];
-    if (from && to) inner.push(wire);
-    if (from === to) continue;
     const [here, far] = from ? [wire.from, wire.to] : [wire.to, wire.from];
-    const key = wire.cable ? `cable ${wire.cable}` : `to ${byId.get(far[0])?.place ?? far[0]} at ${here[0]}`;
-    const core: Core = { wire, here, far, core: coreOf(wire.role), home: homeOf(wire, far) };
-    groups.set(key, [...(groups.get(key) ?? []), core]);
+    if (from !== to)
+      note(wire.cable ? `cable ${wire.cable}` : `to ${byId.get(far[0])?.place ?? far[0]} at ${here[0]}`, wire, here, far);
+    else if (wire.cable && ways > FEW_WAYS && onBoard(here) !== onBoard(far)) {
+      const [board, load] = onBoard(here) ? [here, far] : [far, here];
+      note(`cable ${wire.cable}`, wire, load, board);
+      note(`cable ${wire.cable}${LEAVING}`, wire, board, load, wire.id + LEAVING);
+    } else inner.push(wire);
   }
   const cables = [...groups].map(([id, cores]): PageCable => {
     cores.sort((a, b) => CORE_ORDER[a.core] - CORE_ORDER[b.core] || byCode(a.wire.id, b.wire.id));
     const live = cores.find(({ core }) => core === 'L');
+    const leaves = id.endsWith(LEAVING);
+    const comes = groups.has(id + LEAVING);
     // with the source at the far end it comes in
-    const outgoing =
+    const fedHere =
       live !== undefined && feeds.get(live.wire.id) !== undefined && feeds.get(live.wire.id) !== live.here[0];
+    const outgoing = leaves || (fedHere && !comes);
     const head = live && plan.content.hanging.find((item) => item.head?.part.id === live.here[0]);
     return {
       id,
       cores,
       outgoing,
-      atFoot: outgoing && (head !== undefined || isBoardPart(byId.get(live.here[0]))),
+      atFoot: leaves || (outgoing && live !== undefined && (head !== undefined || isBoardPart(byId.get(live.here[0])))),
       lines: cableLines(doc, plan, cores, outgoing, cablesById),
     };
   });
@@ -176,7 +196,8 @@ function cableLines(doc: Installation, plan: OverviewPlan, cores: readonly Core[
   const cable: Cable | undefined = cables.get(first.wire.cable ?? '');
   const way = plan.ways.find((w) => cores.some((core) => w.wires.includes(core.wire.id)));
   const far = plan.graph.byId.get(first.far[0]);
-  const room = doc.places.find((place) => place.id === far?.place)?.name;
+  const here = plan.graph.byId.get(first.here[0]);
+  const room = far?.place === here?.place ? undefined : doc.places.find((place) => place.id === far?.place)?.name;
   const named = way ? `way ${way.number}${way.backup ? ', backup' : ''}` : (cable?.ref ?? '');
   const data = cable ? [cableSize(cable, cores.length), lengthText(cable.length)].join(' ') : '';
   const where = far ? [outgoing ? 'to' : 'from', room ?? printedRef(far)].join(' ') : 'to nowhere';

@@ -1,5 +1,5 @@
 import { isBar } from '../document/kinds';
-import type { Installation, Part, Position, Wire } from '../document/schema';
+import type { End, Installation, Part, Position, Wire } from '../document/schema';
 import { practices } from '../practices';
 import { symbolFor } from '../symbols';
 import { barSymbol, type BarKind } from '../symbols/bar';
@@ -71,13 +71,10 @@ export function connectionsScene(doc: Installation, place?: string, before?: Sce
   const bodies = barBodies(page, positions, fixed, cables, marks);
   const feeds = feedsOf(doc);
   const frames = connectionFrames(doc, page, bodies, cables);
-  const lines = new Map(
-    [...page.inner, ...page.cables.flatMap(({ cores }) => cores.map(({ wire }) => wire))].map(({ id }) => [
-      id,
-      linesOf(doc, 'connections', [id]),
-    ]),
-  );
-  const routes = routeCores(page, bodies, cables, feeds, lines, new WaysBefore(before, 'connections', page.place));
+  const drawn = drawnRuns(page);
+  // a core that leaves and comes in on one page is led by hand where it comes in
+  const lines = new Map(drawn.map(({ id, wire }) => [id, id === wire.id ? linesOf(doc, 'connections', [id]) : undefined]));
+  const routes = routeCores(drawn, page, bodies, cables, feeds, lines, new WaysBefore(before, 'connections', page.place));
   const texts = letterPage(page, plan, bodies, cables, frames, routes.points);
   const { colours } = practices[doc.practice].colourSchemes[0];
 
@@ -101,22 +98,23 @@ export function connectionsScene(doc: Installation, place?: string, before?: Sce
       texts: texts.parts.get(part.id) ?? [],
     };
   });
-  const run = (wire: Wire): SceneRun => ({
-    id: `wire:${wire.id}`,
+  const run = ({ id, wire, far }: DrawnRun): SceneRun => ({
+    id: `wire:${id}`,
     wires: [wire.id],
     ...(wire.cable && { cable: wire.cable }),
     from: wire.from,
     to: wire.to,
-    points: routes.points.get(wire.id)!,
+    ...(far && bodies.has(far[0]) && { cut: far === wire.from ? ('from' as const) : ('to' as const) }),
+    points: routes.points.get(id)!,
     role: wire.role,
     feed: feeds.wires.get(wire.id) ?? 'none',
     colour: wire.colour ?? colours[wire.role].value[0],
     weight: 'normal',
-    texts: texts.wires.get(wire.id) ?? [],
-    ...(lines.get(wire.id) && { lines: lines.get(wire.id) }),
-    hops: routes.hops.get(wire.id) ?? [],
+    texts: texts.wires.get(id) ?? [],
+    ...(lines.get(id) && { lines: lines.get(id) }),
+    hops: routes.hops.get(id) ?? [],
   });
-  const runs = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map(run);
+  const runs = drawn.map(run);
   const reach: Point[] = [
     ...parts.map((part) => ({ x: part.x + part.width, y: part.y + part.height })),
     ...runs.flatMap((r) => r.points),
@@ -139,14 +137,28 @@ export function connectionsScene(doc: Installation, place?: string, before?: Sce
   };
 }
 
+/** A run of a page: a whole core, or what of one is drawn here. */
+interface DrawnRun {
+  id: string;
+  wire: Wire;
+  /** the end that is not drawn, or not by this run */
+  far?: End;
+}
+
+const drawnRuns = (page: Page): DrawnRun[] => [
+  ...page.inner.map((wire): DrawnRun => ({ id: wire.id, wire })),
+  ...page.cables.flatMap(({ cores }) => cores.map(({ run, wire, far }): DrawnRun => ({ id: run, wire, far }))),
+];
+
 interface CoreRoutes {
-  /** by id of the wire */
+  /** by id of the run */
   points: Map<string, Point[]>;
   hops: Map<string, Point[]>;
 }
 
 /** Every core for itself: cores meet at terminals and nowhere else. */
 function routeCores(
+  drawn: readonly DrawnRun[],
   page: Page,
   bodies: ReadonlyMap<string, Body>,
   cables: readonly PlacedCable[],
@@ -155,39 +167,36 @@ function routeCores(
   before: WaysBefore,
 ): CoreRoutes {
   const parts = new Map(page.parts.map((part) => [part.id, part]));
-  const stubs = new Map(cables.flatMap((cable) => cable.stubs.map((stub) => [stub.core.wire.id, stub] as const)));
-  const at = (end: readonly [string, string], stub?: Stub): RouteEnd | null => {
-    const part = parts.get(end[0]);
-    const body = bodies.get(end[0]);
-    if (part && body) {
-      const t = body.terminals.find((terminal) => terminal.mark === end[1]);
-      // a wire to a terminal that does not exist ends at the part's edge: the finding names it
-      return { part: part.id, x: t?.x ?? body.x, y: t?.y ?? body.y, ...sidesOf(part, t?.side ?? 'up') };
-    }
-    return stub ? { part: `stub ${stub.core.wire.id}`, x: stub.x, y: stub.y, sides: [stub.side] } : null;
+  const stubs = new Map(cables.flatMap((cable) => cable.stubs.map((stub) => [stub.core.run, stub] as const)));
+  const atPart = ([id, mark]: End): RouteEnd => {
+    const part = parts.get(id)!;
+    const body = bodies.get(id)!;
+    const t = body.terminals.find((terminal) => terminal.mark === mark);
+    // a wire to a terminal that does not exist ends at the part's edge: the finding names it
+    return { part: id, x: t?.x ?? body.x, y: t?.y ?? body.y, ...sidesOf(part, t?.side ?? 'up') };
   };
-  const requests = [...page.inner, ...page.cables.flatMap((cable) => cable.cores.map((core) => core.wire))].map(
-    (wire): RouteRequest => {
-      const stub = stubs.get(wire.id);
-      const from = at(wire.from, stub)!;
-      const to = at(wire.to, stub)!;
-      const lines = linesFor.get(wire.id);
-      const given = before.of(`wire:${wire.id}`, lines);
-      const late = [wire.from, wire.to].some(([id]) => parts.get(id)?.kind === 'spd');
-      return {
-        id: wire.id,
-        ...(late && { late }),
-        strand: wire.id,
-        family: wire.id,
-        net: wire.id,
-        from,
-        to,
-        backup: feeds.wires.get(wire.id) === 'backup',
-        ...(lines && { lines }),
-        ...(given && { given }),
-      };
-    },
-  );
+  const requests = drawn.map(({ id, wire, far }): RouteRequest => {
+    const atStub = ({ x, y, side }: Stub): RouteEnd => ({ part: `stub ${id}`, x, y, sides: [side] });
+    const [from, to] = [wire.from, wire.to].map((end) => (end === far ? atStub(stubs.get(id)!) : atPart(end))) as [
+      RouteEnd,
+      RouteEnd,
+    ];
+    const lines = linesFor.get(id);
+    const given = before.of(`wire:${id}`, lines);
+    const late = [wire.from, wire.to].some(([part]) => parts.get(part)?.kind === 'spd');
+    return {
+      id,
+      ...(late && { late }),
+      strand: id,
+      family: id,
+      net: id,
+      from,
+      to,
+      backup: feeds.wires.get(wire.id) === 'backup',
+      ...(lines && { lines }),
+      ...(given && { given }),
+    };
+  });
   const obstacles = [...bodies].map(([id, body]): Obstacle => ({
     id,
     x: body.x,

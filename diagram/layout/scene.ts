@@ -56,6 +56,8 @@ export interface SceneRun {
   cable?: string;
   from: End;
   to: End;
+  /** the end that another run of the same page draws: here it stops under or over the brace of its cable */
+  cut?: 'from' | 'to';
   /** orthogonal, at least two points */
   points: Point[];
   role: Role;

@@ -34,6 +34,9 @@ interface Leg {
   points: readonly Point[];
   first: string;
   last: string;
+  /** its points begin, or stop, at the brace of its cable: the rest of the core is another run */
+  begins: boolean;
+  stops: boolean;
   steps: PathStep[];
 }
 
@@ -60,29 +63,28 @@ class Pencil {
     for (const chain of chains) this.along(chain, true);
     const ridden = this.home(chains, homeward);
     for (const chain of this.chains(homeward.filter((leg) => !ridden.has(leg)))) this.along(chain, false);
-    for (const step of wires) if (!step.out && !this.runOf(step)) this.across(step);
+    for (const step of wires) if (!step.out && this.runsOf(step).length === 0) this.across(step);
     return this.strokes;
   }
 
   /**
-   * The run on which a wire lies: its own; on the overview, where a run stands for a whole cable, that of its cable; else
+   * The runs on which a wire lies: its own, two where it leaves a board and comes in again on the same page; on the overview, where a run stands for a whole cable, that of its cable; else
    * the one between the same two parts.
    */
-  private runOf({ wire, from, to }: PathStep): SceneRun | undefined {
+  private runsOf({ wire, from, to }: PathStep): SceneRun[] {
     const { runs, face } = this.scene;
-    const own = runs.find(({ wires }) => wires.includes(wire!));
-    if (own || face === 'connections') return own;
+    const own = runs.filter(({ wires }) => wires.includes(wire!));
+    if (own.length > 0 || face === 'connections') return own;
     const cable = this.cableOf.get(wire!);
     const pair = (run: SceneRun) =>
       (run.from[0] === from[0] && run.to[0] === to[0]) || (run.from[0] === to[0] && run.to[0] === from[0]);
-    return (cable === undefined ? undefined : runs.find((run) => run.cable === cable)) ?? runs.find(pair);
+    const found = (cable === undefined ? undefined : runs.find((run) => run.cable === cable)) ?? runs.find(pair);
+    return found ? [found] : [];
   }
 
   private legs(steps: readonly PathStep[]): Leg[] {
     const legs = new Map<string, Leg>();
-    for (const step of steps) {
-      const run = this.runOf(step);
-      if (!run) continue;
+    for (const [step, run] of steps.flatMap((step) => this.runsOf(step).map((run) => [step, run] as const))) {
       const known = legs.get(run.id);
       if (known) {
         known.steps.push(step);
@@ -91,7 +93,8 @@ class Pencil {
       const ahead = this.isForward(run, step);
       const points = ahead ? run.points : [...run.points].reverse();
       const [first, last] = ahead ? [run.from[0], run.to[0]] : [run.to[0], run.from[0]];
-      legs.set(run.id, { run, points, first, last, steps: [step] });
+      const stops = run.cut === (ahead ? 'to' : 'from');
+      legs.set(run.id, { run, points, first, last, stops, begins: run.cut !== undefined && !stops, steps: [step] });
     }
     return [...legs.values()];
   }
@@ -116,15 +119,16 @@ class Pencil {
   private chains(legs: readonly Leg[]): Leg[][] {
     const left = new Set(legs);
     const chains: Leg[][] = [];
-    const begins = legs.filter(({ first }) => !legs.some((other) => other.last === first));
-    for (const start of [...begins, ...legs]) {
+    const starts = legs.filter((leg) => leg.begins || !legs.some((other) => other.last === leg.first));
+    for (const start of [...starts, ...legs]) {
       if (!left.has(start)) continue;
       const chain: Leg[] = [];
       for (let leg: Leg | undefined = start; leg;) {
         left.delete(leg);
         chain.push(leg);
-        const { last }: Leg = leg;
-        leg = [...left].find(({ first }) => first === last);
+        const { last, stops }: Leg = leg;
+        // where a run stops at the brace of its cable, the pencil is set down anew
+        leg = stops ? undefined : [...left].find(({ first, begins }) => first === last && !begins);
       }
       chains.push(chain);
     }

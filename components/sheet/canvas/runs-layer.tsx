@@ -11,8 +11,8 @@ type Pass = 'plain' | 'outline' | 'inside' | 'core';
 /** Path of a run now: its route, or an elbow while one of its ends is dragged. One subscription a run. */
 function usePath(run: SceneRun): string {
   const shift = useDrag((drag) => {
-    const from = drag.ids.has(run.from[0]);
-    const to = drag.ids.has(run.to[0]);
+    const from = run.cut !== 'from' && drag.ids.has(run.from[0]);
+    const to = run.cut !== 'to' && drag.ids.has(run.to[0]);
     return from || to ? `${from ? 1 : 0} ${to ? 1 : 0} ${drag.dx} ${drag.dy}` : '';
   });
   if (shift === '') return pathOf(run);

@@ -6,9 +6,6 @@ import type { Scene } from '@/diagram/layout/scene';
 import * as check from './checks';
 import { draftedHomes, examples, toldHome } from './homes';
 
-/** Parts on one page from which the router may run out of effort: the last runs of such a page stay elbows. */
-const FULL = 200;
-
 /** What must hold of the sheet of any home. */
 const CHECKS: [name: string, check: (doc: Installation, scene: Scene) => string[]][] = [
   ['every run goes level or upright', (_, scene) => check.slanted(scene)],
@@ -65,22 +62,8 @@ describe('scenes', () => {
     expect(broken(homes, overview)).toEqual([]);
   });
 
-  it('draws the connections of 200 drafted homes without a fault: the board and two rooms of each', { timeout: 240_000 }, () => {
-    const homes = draftedHomes(200, 7)
-      .filter((doc) => doc.places.every(({ id }) => doc.parts.filter(({ place }) => place === id).length <= FULL))
-      .map((doc, i): [string, Installation] => [`home ${i}`, doc]);
-    expect(homes.length).toBeGreaterThanOrEqual(197);
-    let turn = 0;
-    const some = (doc: Installation): Scene[] => {
-      const [board, ...rooms] = connectionPages(doc);
-      const chosen = rooms.length > 2 ? [rooms[turn++ % rooms.length]!, rooms[turn++ % rooms.length]!] : rooms;
-      return [...(board ? [board] : []), ...chosen].map(({ place }) => buildScene(doc, 'connections', { place }));
-    };
-    expect(broken(homes, some)).toEqual([]);
-  });
-
-  it('draws every page of the connections of 12 drafted homes without a fault', { timeout: 240_000 }, () => {
-    const homes = draftedHomes(12, 11).map((doc, i): [string, Installation] => [`home ${i}`, doc]);
+  it('draws every page of the connections of 200 drafted homes without a fault', { timeout: 240_000 }, () => {
+    const homes = draftedHomes(200, 7).map((doc, i): [string, Installation] => [`home ${i}`, doc]);
     expect(broken(homes, connections)).toEqual([]);
   });
 });
