@@ -145,7 +145,7 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
           const room = rooms[Math.max(0, Math.min(rooms.length - 1, held + step))];
           if (!room) return;
           viewStore.getState().set({ place: room.place ?? null });
-          viewStore.getState().camera?.show({ x: room.x + room.width / 2, y: room.y }, true);
+          viewStore.getState().camera?.across(room.x + room.width / 2);
         } else {
           const index = pages.findIndex((candidate) => candidate.place === place);
           const next = pages[(index + step + pages.length) % Math.max(1, pages.length)];

@@ -37,8 +37,10 @@ export type Condition = 'all' | 'mains' | 'outage' | 'main-off';
 export interface Camera {
   all(): void;
   zoom(by: number): void;
-  /** brings a point of the drawing, in 1/100 mm, to the middle unless it is in sight already */
-  show(point: Point, always?: boolean): void;
+  /** brings a point of the drawing, in 1/100 mm, into sight: near ones by the least move, others to the middle */
+  show(point: Point): void;
+  /** brings a place along the drawing, in 1/100 mm, to the middle; the height stays */
+  across(x: number): void;
   /** moves the drawing up where so many px at the foot of the canvas hide a point of it */
   clear(point: Point, foot: number): void;
   /** where a point of the drawing stands, in px of the canvas box */

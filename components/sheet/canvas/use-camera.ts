@@ -15,6 +15,15 @@ const EDGE = 8;
 /** px: the names of the pages stand along the upper edge of the connections face */
 const PAGES = 40;
 
+/** below it what is gone to is made larger */
+const LEAST = 0.8;
+/** px from the edge at which a point counts as in sight */
+const IN_SIGHT = 24;
+
+/** px by which a point has to move along one side of the canvas to be in sight. */
+const toSight = (at: number, side: number): number =>
+  at < IN_SIGHT ? IN_SIGHT - at : at > side - IN_SIGHT ? side - IN_SIGHT - at : 0;
+
 /**
  * Where the canvas looks, and the camera by which the rest of the sheet moves it. A sheet opens whole; one that would then
  * be too small to read opens at the size at which it can be read, on the source and what lies about it.
@@ -53,12 +62,20 @@ export function useCamera(scene: Scene): void {
       camera: {
         all,
         zoom: (by) => void flow.zoomTo(flow.getZoom() * by),
-        show(point, always = false) {
+        show(point) {
           const { x, y, zoom } = flow.getViewport();
           const [w = 0, h = 0] = box.split(' ').map(Number);
           const at = { x: px(point.x) * zoom + x, y: px(point.y) * zoom + y };
-          if (!always && at.x > 60 && at.y > 60 && at.x < w - 60 && at.y < h - 60) return;
-          void flow.setCenter(px(point.x), px(point.y), { zoom: Math.max(zoom, 0.8) });
+          const [dx, dy] = [toSight(at.x, w), toSight(at.y, h)];
+          const near = zoom >= LEAST && Math.abs(dx) < w && Math.abs(dy) < h;
+          if (!near) void flow.setCenter(px(point.x), px(point.y), { zoom: Math.max(zoom, LEAST) });
+          // What lies just outside is brought in by as little as it takes: the eye keeps its place.
+          else if (dx !== 0 || dy !== 0) void flow.setViewport({ x: Math.round(x + dx), y: Math.round(y + dy), zoom });
+        },
+        across(x) {
+          const { y, zoom } = flow.getViewport();
+          const [w = 0] = box.split(' ').map(Number);
+          void flow.setViewport({ x: Math.round(w / 2 - px(x) * zoom), y, zoom });
         },
         clear(point, foot) {
           const { x, y, zoom } = flow.getViewport();
