@@ -1,6 +1,6 @@
 import { createStore, type StoreApi } from 'zustand/vanilla';
 import { applyPatch, diff, isEmptyPatch, type Patch } from '@/diagram/document/patch';
-import type { End, Installation } from '@/diagram/document/schema';
+import type { DocumentError, End, Installation } from '@/diagram/document/schema';
 import { disown, ownOnly } from '@/diagram/commands/merge';
 import type { DrawingRights, DrawingView, SavedChange, TitleBlock } from '@/lib/shared/drawings';
 import type { Peer } from '@/lib/shared/live';
@@ -35,6 +35,8 @@ export interface DrawingState {
   rev: number;
   rights: DrawingRights;
   titleBlock: TitleBlock;
+  /** what of the stored drawing could not be read; the sheets are then open for reading */
+  problems: readonly DocumentError[];
   selection: Selection;
   undoSteps: readonly HistoryStep[];
   redoSteps: readonly HistoryStep[];
@@ -109,6 +111,7 @@ export function createDrawingStore(view: DrawingView, keep: Keep): DrawingStore 
       rev: view.rev,
       rights: view.rights,
       titleBlock: view.titleBlock,
+      problems: view.problems ?? [],
       selection: NOTHING,
       undoSteps: [],
       redoSteps: [],

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { PatchSchema, type Patch } from '@/diagram/document/patch';
-import { IdSchema, type Installation } from '@/diagram/document/schema';
+import { IdSchema, type DocumentError, type Installation } from '@/diagram/document/schema';
 import { TABLE_IDS } from '@/diagram/schedules/types';
 
 /** Requests and answers of the drawing routes; the same schema serves the screen and the handler. */
@@ -45,6 +45,8 @@ export interface DrawingView {
   document: Installation;
   state: 'open' | 'submitted' | 'issued';
   rights: DrawingRights;
+  /** what of the stored drawing could not be read; absent where it is whole. It is then open for reading only */
+  problems?: readonly DocumentError[];
   /** for the title block */
   titleBlock: TitleBlock;
 }

@@ -199,7 +199,7 @@ describe('the log', () => {
     await expect(DrawingSnapshot.update({ body: '{}' }, { where })).rejects.toThrow(/never changed/);
   });
 
-  it('refuses to open a drawing whose snapshot is damaged, and says so without a trace', async () => {
+  it('draws nothing on a snapshot that is damaged: it opens for reading and says so', async () => {
     const { browser, params, teamId } = await studio();
     const { drawingId } = params;
     const snapshot = (await DrawingSnapshot.findOne({ where: { teamId, drawingId } }))!;
@@ -213,7 +213,8 @@ describe('the log', () => {
     await Drawing.update({ rev: 1, snapshotRev: 1 }, { where: { teamId, id: drawingId } });
     forget(teamId, drawingId);
     const { status, body } = await browser.ask(open, { params });
-    expect(status).toBe(500);
-    expect(body).toEqual({ error: 'failed', message: expect.any(String) });
+    expect([status, body.rights]).toEqual([200, { edit: false, record: false }]);
+    expect(body.problems).toEqual([{ path: 'snapshot 1', message: 'Its bytes are not the ones that were written.' }]);
+    expect((await browser.post(save, params, change(1, place('p1')))).status).toBe(409);
   });
 });

@@ -4,7 +4,7 @@ import { useRef, useLayoutEffect, useState, type FormEvent } from 'react';
 import { Button, buttonClass } from '@/components/ui/button';
 import { TextField } from '@/components/ui/field';
 import { saveFile } from '@/components/ui/save-file';
-import type { DocumentError } from '@/diagram/document/schema';
+import type { Installation } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
 import { PAPER_SIZES } from '@/diagram/paper/iso-sheet';
 import type { ErrorAnswer } from '@/lib/shared/errors';
@@ -12,7 +12,7 @@ import type { RevisionView } from '@/lib/shared/drawings';
 import type { Hands } from '../hands';
 import { keepAsFile } from '../save-state-view';
 import { useSheet, type OpenDrawing } from '../use-drawing';
-import { importCommand } from './import-file';
+import { importCommand, type NoDrawing } from './import-file';
 import { saveBlob, svgToPng } from './picture';
 
 const DPI = [150, 300, 600] as const;
@@ -45,7 +45,7 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
   const [dpi, setDpi] = useState<number>(300);
   const [shapes, setShapes] = useState(false);
   const [said, setSaid] = useState('');
-  const [errors, setErrors] = useState<readonly DocumentError[]>([]);
+  const [refused, setRefused] = useState<NoDrawing | null>(null);
   const [note, setNote] = useState('');
   const first = useRef<HTMLAnchorElement>(null);
   useLayoutEffect(() => first.current?.focus(), []);
@@ -76,11 +76,17 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
   const read = async (file: File | undefined) => {
     if (!file) return;
     const outcome = importCommand(hands.doc, file.name, await file.text());
-    setErrors('errors' in outcome ? outcome.errors : []);
+    setRefused('errors' in outcome ? outcome : null);
+    hands.view.getState().set({ ghost: null });
     if (!('errors' in outcome) && hands.do(outcome)) {
       hands.view.getState().camera?.all();
       onLeave();
     }
+  };
+  const show = (readable: Installation) => {
+    hands.view.getState().set({ ghost: readable });
+    hands.view.getState().camera?.all();
+    setSaid('Dashed on the sheet: what could be read of the file. It is gone when this is closed.');
   };
   const record = async (event: FormEvent) => {
     event.preventDefault();
@@ -172,19 +178,7 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
           )}
           <span className="text-small text-grey">One undo takes an import back.</span>
         </div>
-        {errors.length > 0 && (
-          <div role="alert" className="mt-2 border-l-4 border-red pl-3">
-            <p className="font-bold text-red">Nothing was changed. The file is no drawing:</p>
-            <ul>
-              {errors.slice(0, 8).map((error) => (
-                <li key={`${error.path} ${error.message}`}>
-                  <b>{error.path}</b>: {error.message}
-                </li>
-              ))}
-            </ul>
-            {errors.length > 8 && <p className="text-grey">and {errors.length - 8} more</p>}
-          </div>
-        )}
+        {refused && <Refused refused={refused} onShow={show} />}
       </section>
       {rights.record && (
         <form onSubmit={(event) => void record(event)}>
@@ -208,6 +202,28 @@ export function ExportPanel({ drawing, hands, scene, onLeave }: ExportPanelProps
         <Button onClick={onLeave}>Close</Button>
         <p role="status">{said}</p>
       </div>
+    </div>
+  );
+}
+
+/** What is wrong with a file, each fault by its place; what could be read of it may be looked at, and is not taken. */
+function Refused({ refused: { errors, readable }, onShow }: { refused: NoDrawing; onShow(readable: Installation): void }) {
+  return (
+    <div role="alert" className="mt-2 border-l-4 border-red pl-3">
+      <p className="font-bold text-red">Nothing was changed. The file is no whole drawing:</p>
+      <ul>
+        {errors.slice(0, 8).map((error) => (
+          <li key={`${error.path} ${error.message}`}>
+            <b>{error.path}</b>: {error.message}
+          </li>
+        ))}
+      </ul>
+      {errors.length > 8 && <p className="text-grey">and {errors.length - 8} more</p>}
+      {readable && (
+        <Button className="mt-2" onClick={() => onShow(readable)}>
+          Show what could be read: {readable.parts.length} parts
+        </Button>
+      )}
     </div>
   );
 }

@@ -4,8 +4,8 @@ import type { Actor } from '@/lib/server/actor';
 import { appendChange } from '@/lib/server/drawings/append-change';
 import { afterSave } from '@/lib/server/drawings/background';
 import { changesSince } from '@/lib/server/drawings/list-changes';
-import { loadState } from '@/lib/server/drawings/load-state';
-import { forget, keep } from '@/lib/server/drawings/state-cache';
+import { DamagedDrawing, loadState } from '@/lib/server/drawings/load-state';
+import { forget, keep, type DrawingState } from '@/lib/server/drawings/state-cache';
 import { AppError } from '@/lib/server/errors';
 import { findJob } from '@/lib/server/jobs/find-job';
 import { authorize } from '@/lib/server/policies';
@@ -31,7 +31,7 @@ export async function saveChange(actor: Actor, drawingId: string, change: Change
   if (before) return before;
   authorize(actor, 'drawing.edit', job);
 
-  const state = await loadState(teamId, drawingId);
+  const state = await wholeState(teamId, drawingId);
   const next = state.rev === change.base ? await commit(actor, drawingId, state, change) : null;
   if (next) {
     keep(teamId, drawingId, next);
@@ -45,7 +45,17 @@ export async function saveChange(actor: Actor, drawingId: string, change: Change
   throw new AppError('stale', 'Somebody else changed this drawing meanwhile.', { rev, since: changes });
 }
 
-async function commit(actor: Actor, drawingId: string, state: Awaited<ReturnType<typeof loadState>>, change: Change) {
+/** The newest state, to be drawn on. @throws AppError conflict where it cannot be read whole: nothing is written over it */
+async function wholeState(teamId: string, drawingId: string): Promise<DrawingState> {
+  try {
+    return await loadState(teamId, drawingId);
+  } catch (error) {
+    if (!(error instanceof DamagedDrawing)) throw error;
+    throw new AppError('conflict', 'This drawing cannot be read whole, so that nothing is written over it.');
+  }
+}
+
+async function commit(actor: Actor, drawingId: string, state: DrawingState, change: Change) {
   try {
     return await sequelize.transaction((transaction) => appendChange(actor, drawingId, state, change, transaction));
   } catch (error) {

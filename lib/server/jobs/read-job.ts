@@ -1,7 +1,7 @@
 import 'server-only';
 import { QueryTypes } from 'sequelize';
 import type { Actor } from '@/lib/server/actor';
-import { loadState } from '@/lib/server/drawings/load-state';
+import { readableState } from '@/lib/server/drawings/readable-state';
 import { findJob } from '@/lib/server/jobs/find-job';
 import { JOB_FROM, JOB_SELECT, presentRow, type JobRecord } from '@/lib/server/jobs/job-record';
 import { authorize, may } from '@/lib/server/policies';
@@ -22,7 +22,8 @@ export async function readJob(actor: Actor, jobId: string): Promise<JobView> {
     ),
     JobPerson.findAll({ where: { teamId, jobId }, order: [['personId', 'ASC']] }),
   ]);
-  const { document } = await loadState(teamId, record!.drawingId);
+  const { document, problems } = await readableState(teamId, record!.drawingId);
+  const draw = problems.length === 0 && may(actor, 'drawing.edit', job!);
   const reach = may(actor, 'client.read') && { clientPhone: record!.clientPhone, clientEmail: record!.clientEmail };
   return {
     ...presentRow(record!),
@@ -33,6 +34,6 @@ export async function readJob(actor: Actor, jobId: string): Promise<JobView> {
     hoursWanted: record!.hoursWanted,
     given: people.map(({ personId }) => personId),
     version: record!.version,
-    rights: { edit: may(actor, 'job.edit', job!), draw: may(actor, 'drawing.edit', job!) },
+    rights: { edit: may(actor, 'job.edit', job!), draw },
   };
 }
