@@ -1,12 +1,13 @@
 'use client';
 
-import { useRef, useLayoutEffect, useState, type KeyboardEvent } from 'react';
+import { useId, useRef, useLayoutEffect, useState, type KeyboardEvent } from 'react';
 import { editCable, editName, editRatings, sharedRating } from '@/diagram/commands/edit-in-place';
 import { placeExactly, placeText } from '@/diagram/commands/move-parts';
 import { cableText, ratingExample } from '@/diagram/commands/rating-text';
 import { isRefusal, type Command, type Refusal } from '@/diagram/commands/types';
 import { listNames, nameOf } from '@/diagram/document/names';
 import { KIND_NAME } from '@/diagram/document/kinds';
+import { Button } from '@/components/ui/button';
 import type { Hands } from './hands';
 import { REST, type Mode } from './view';
 
@@ -22,18 +23,21 @@ interface FieldProps {
 }
 
 function EditField({ label, value, hint, first = false, commit, hands, onDone }: FieldProps) {
+  const id = useId();
   const [text, setText] = useState(value);
   const [error, setError] = useState('');
   const field = useRef<HTMLInputElement>(null);
+  const left = useRef(false);
   useLayoutEffect(() => {
     if (first) field.current?.select();
   }, [first]);
   /** @returns true when the field is as it should be */
   const take = (): boolean => {
-    if (text.trim() === value) return true;
+    if (text.trim() === value || left.current) return true;
     const outcome = commit(text);
     if (isRefusal(outcome)) {
       setError(outcome.refused);
+      hands.store.getState().say(outcome.refused);
       return false;
     }
     hands.do(outcome);
@@ -41,21 +45,31 @@ function EditField({ label, value, hint, first = false, commit, hands, onDone }:
   };
   const onKeyDown = (event: KeyboardEvent) => {
     event.stopPropagation();
-    if (event.key === 'Escape') onDone();
-    else if (event.key === 'Enter' && !event.nativeEvent.isComposing && take()) onDone();
-    else if (event.key === 'Tab' && !take()) event.preventDefault();
+    if (event.key === 'Escape') {
+      left.current = true;
+      onDone();
+    } else if (event.key === 'Enter' && !event.nativeEvent.isComposing && take()) {
+      left.current = true;
+      onDone();
+    }
+    if (event.key === 'Tab' && !take()) event.preventDefault();
   };
   return (
-    <label className="block">
-      <span className="block text-small text-grey">{label}</span>
+    <div>
+      <label className="block text-small text-grey" htmlFor={id}>
+        {label}
+      </label>
       <input
+        id={id}
         ref={field}
+        aria-describedby={error ? `${id}-why` : undefined}
         value={text}
         onChange={(event) => {
           setText(event.target.value);
           setError('');
         }}
         onKeyDown={onKeyDown}
+        onBlur={take}
         placeholder={hint}
         aria-invalid={error ? true : undefined}
         className="w-full border-b border-ink bg-transparent px-1 font-bold outline-offset-0 placeholder:font-normal placeholder:text-grey aria-invalid:border-b-2 aria-invalid:border-red pointer-coarse:min-h-11"
@@ -63,11 +77,11 @@ function EditField({ label, value, hint, first = false, commit, hands, onDone }:
         spellCheck={false}
       />
       {error && (
-        <span role="alert" className="block text-small text-red">
+        <p id={`${id}-why`} role="alert" className="text-small text-red">
           {error}
-        </span>
+        </p>
       )}
-    </label>
+    </div>
   );
 }
 
@@ -154,7 +168,17 @@ export function EditPanel({
           onDone={leave}
         />
       )}
-      <p className="text-small text-grey">Enter takes, Esc leaves as it was.</p>
+      <p className="text-small text-grey pointer-coarse:hidden">Enter takes, Esc leaves as it was.</p>
+      <Button
+        className="hidden pointer-coarse:inline-flex"
+        solid
+        onClick={({ currentTarget }) => {
+          // The field that lost the focus to this has taken its text, or says why not.
+          if (!currentTarget.parentElement!.querySelector('[aria-invalid]')) leave();
+        }}
+      >
+        Take it
+      </Button>
     </div>
   );
 }

@@ -26,8 +26,12 @@ interface FloatingProps {
 /** A panel that lies on the sheet, beside the point it speaks of. */
 export function Floating({ box, at, width, children }: FloatingProps) {
   const fits = Math.min(width, Math.max(200, box.width - 16));
+  const place = beside(at, box, fits);
   return (
-    <div className="absolute z-10 border-x border-rule bg-paper" style={{ ...beside(at, box, fits), width: fits }}>
+    <div
+      className="absolute z-10 overflow-y-auto border-x border-rule bg-paper"
+      style={{ ...place, width: fits, maxHeight: Math.max(160, box.height - place.top - 4) }}
+    >
       {children}
     </div>
   );

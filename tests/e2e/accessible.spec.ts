@@ -11,7 +11,7 @@ const screens: { path: string; role: DemoRole | null; open?: (page: Page) => Pro
   { path: '/jobs?search=zzzz', role: 'electrician' },
   { path: '/jobs/new', role: 'electrician', open: (page) => page.getByRole('button', { name: 'Begin the job' }).click() },
   { path: '/people', role: 'admin', open: (page) => page.getByRole('button', { name: /^Change/ }).first().click() },
-  { path: '/account', role: 'trainer', open: (page) => page.getByRole('button', { name: 'Sign out everywhere' }).click() },
+  { path: '/account', role: 'admin', open: (page) => page.getByRole('button', { name: 'Sign out everywhere' }).click() },
   { path: '/rules', role: 'apprentice' },
   { path: '/rules/backfeed', role: 'apprentice' },
 ];
