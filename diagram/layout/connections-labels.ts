@@ -99,7 +99,8 @@ export function letterPage(
 ): PageTexts {
   const ground = new Ground();
   // nothing is written outside the page
-  ground.add({ x: -m(200), y: -m(10), width: m(200) + 300, height: m(2000) });
+  const lowest = Math.max(...[...bodies.values()].map(({ y, height }) => y + height), ...cables.map(({ y }) => y));
+  ground.add({ x: -m(40), y: -m(10), width: m(40) + 300, height: lowest + m(50) });
   const inside: { box: Body; id: string }[] = [];
   for (const [id, body] of bodies) {
     const part = plan.graph.byId.get(id)!;

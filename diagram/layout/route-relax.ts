@@ -52,6 +52,20 @@ function clear(list: Axis, size: number): void {
   list.from.fill(0, 0, size);
 }
 
+/** From where to where each line has become cheaper on the other axis; `to` before `from` where it has not. */
+interface Marks {
+  from: Int32Array;
+  to: Int32Array;
+}
+
+const marks = (lines: number): Marks => ({ from: new Int32Array(lines), to: new Int32Array(lines).fill(-1) });
+function mark(list: Marks, line: number, at: number): void {
+  if (list.to[line]! < 0) list.from[line] = list.to[line] = at;
+  else if (at < list.from[line]!) list.from[line] = at;
+  else if (at > list.to[line]!) list.to[line] = at;
+}
+const anyMarked = ({ to }: Marks): boolean => to.some((at) => at >= 0);
+
 /** Reads and clears the marks of a line: how many lines there are, how long, and the steps between them and along them. */
 interface Sweep {
   into: Axis;
@@ -64,9 +78,9 @@ interface Sweep {
   /** from one line to the next, and from one node of a line to the next */
   across: number;
   along: number;
-  dirty: Uint8Array;
-  /** lines of the other axis that became cheaper */
-  told: Uint8Array;
+  marked: Marks;
+  /** lines of the other axis that become cheaper */
+  told: Marks;
 }
 
 export class Relaxer {
@@ -74,29 +88,40 @@ export class Relaxer {
   private readonly layers: Layer[] = [];
   private limit = Infinity;
 
-  /** The cheapest way from any start to any goal that goes a stretch along each of the lines in turn, or null. */
-  relax(steps: StepCosts, starts: readonly Start[], goals: readonly Goal[], lines: readonly Line[]): Found | null {
+  /**
+   * The cheapest way from any start to any goal that goes a stretch along each of the lines in turn, or null.
+   * @param limit what it must cost less than
+   */
+  relax(
+    steps: StepCosts,
+    starts: readonly Start[],
+    goals: readonly Goal[],
+    lines: readonly Line[],
+    limit: number,
+  ): Found | null {
     const size = steps.width * steps.height;
     while (this.layers.length <= lines.length) this.layers.push({ level: axis(), upright: axis() });
     const layers = this.layers.slice(0, lines.length + 1);
     for (const { level, upright } of layers) for (const list of [level, upright]) clear(list, size);
-    this.limit = Infinity;
+    this.limit = limit;
     let best: Found | null = null;
-    const rows = new Uint8Array(steps.height);
-    const columns = new Uint8Array(steps.width);
-    const mark = (at: number) => {
-      columns[at % steps.width] = 1;
-      rows[Math.floor(at / steps.width)] = 1;
+    const rows = marks(steps.height);
+    const columns = marks(steps.width);
+    const note = (at: number) => {
+      const column = at % steps.width;
+      const row = (at - column) / steps.width;
+      mark(columns, column, row);
+      mark(rows, row, column);
     };
     starts.forEach(({ at, heading, cost }, i) => {
       const { cost: costs, from } = heading % 2 === 1 ? this.layers[0]!.level : this.layers[0]!.upright;
       if (costs[at]! <= cost) return;
       costs[at] = cost;
       from[at] = -1 - i;
-      mark(at);
+      note(at);
     });
     layers.forEach((layer, k) => {
-      if (k > 0) this.along(steps, lines[k - 1]!, this.layers[k - 1]!, layer, mark);
+      if (k > 0) this.along(steps, lines[k - 1]!, this.layers[k - 1]!, layer, note);
       const last = k === lines.length;
       const level: Sweep = {
         into: layer.level,
@@ -107,7 +132,7 @@ export class Relaxer {
         length: steps.width,
         across: steps.width,
         along: 1,
-        dirty: rows,
+        marked: rows,
         told: columns,
       };
       const upright: Sweep = {
@@ -119,10 +144,10 @@ export class Relaxer {
         length: steps.height,
         across: 1,
         along: steps.width,
-        dirty: columns,
+        marked: columns,
         told: rows,
       };
-      while (rows.includes(1) || columns.includes(1)) {
+      while (anyMarked(rows) || anyMarked(columns)) {
         this.sweep(level, steps.bend, k === 0);
         this.sweep(upright, steps.bend, k === 0);
         if (last) best = this.reached(steps, starts, goals, layer, lines) ?? best;
@@ -131,27 +156,37 @@ export class Relaxer {
     return best;
   }
 
-  /** Sweeps every line that is marked, there and back. */
+  /**
+   * Sweeps every line that is marked, there and back: from where it has become cheaper to where nothing is gained any more.
+   * Beyond a node that was come to as cheaply before, all is known.
+   */
   private sweep(s: Sweep, bend: Float64Array, begins: boolean): void {
     const { cost, from } = s.into;
     const turned = s.source.cost;
-    const { edge, enter, length, along, told } = s;
+    const { edge, enter, length, along, marked, told } = s;
     const { limit } = this;
     for (let line = 0; line < s.lines; line++) {
-      if (s.dirty[line] === 0) continue;
-      s.dirty[line] = 0;
+      const last = marked.to[line]!;
+      if (last < 0) continue;
+      const first = marked.from[line]!;
+      marked.to[line] = -1;
       for (let back = 0; back < 2; back++) {
-        let at = line * s.across + (back ? (length - 1) * along : 0);
-        const step = back ? -along : along;
+        const way = back ? -1 : 1;
+        const [start, end, stop] = back ? [last, first, -1] : [first, last, length];
+        let at = line * s.across + start * along;
+        const step = way * along;
         // the edge to the next node is kept at the one before it, to the last at itself
         const lag = back ? 0 : -along;
         let running = Infinity;
         let began = -1;
-        for (let i = 0; i < length; i++, at += step) {
+        for (let i = start; i !== stop; i += way, at += step) {
+          const beyond = (i - end) * way > 0;
           if (running !== Infinity) running += edge[at + lag]! + enter[at]!;
+          if (beyond && running >= limit) break;
           const known = cost[at]!;
           const bent = turned[at]! + bend[at]!;
           if (bent < running) {
+            if (beyond) break;
             running = bent;
             began = at;
           }
@@ -159,10 +194,12 @@ export class Relaxer {
             running = known;
             began = at;
           } else if (running >= limit) running = Infinity;
-          else if (running < known && began !== at) {
-            cost[at] = running;
-            from[at] = began;
-            told[back ? length - 1 - i : i] = 1;
+          else if (began !== at) {
+            if (running < known) {
+              cost[at] = running;
+              from[at] = began;
+              mark(told, i, line);
+            } else running = Infinity;
           }
         }
       }
@@ -170,7 +207,7 @@ export class Relaxer {
   }
 
   /** From one layer to the next: at least one step along a line, from wherever the layer before comes to it. */
-  private along(steps: StepCosts, line: Line, before: Layer, after: Layer, mark: (at: number) => void): void {
+  private along(steps: StepCosts, line: Line, before: Layer, after: Layer, note: (at: number) => void): void {
     const index = steps.lineIn(line);
     if (index < 0) return;
     const upright = line.x !== undefined;
@@ -190,7 +227,7 @@ export class Relaxer {
         if (running < cost[at]!) {
           cost[at] = running;
           from[at] = -1 - began;
-          mark(at);
+          note(at);
         }
         const here = Math.min(own.cost[at]!, other.cost[at]! + steps.bend[at]!);
         if (i === 0 || !(running <= here)) {

@@ -17,6 +17,8 @@ export interface Question {
   lines: readonly Line[];
   /** goes over other runs where it must: they are moved away afterwards. Never over a part or a terminal. */
   insists: boolean;
+  /** no other run is of its strand: nothing makes a step cheaper than its length */
+  alone: boolean;
 }
 
 export interface Way {
@@ -24,8 +26,10 @@ export interface Way {
   cost: number;
 }
 
-/** How far beyond the ends of a run a way is looked for first, 1/100 mm. */
+/** How far beyond the ends of a run a way is looked for, before the whole sheet is, 1/100 mm. */
 const BEYOND = 16 * MODULE;
+/** How far at first, where what is found there tells how far a better way could lie. */
+const CLOSE_BY = 4 * MODULE;
 
 export class Search {
   private readonly steps: StepCosts;
@@ -56,22 +60,59 @@ export class Search {
     const goals = stubs(grid, occupancy, to, ask.net, fixed);
     if (starts.length === 0 || goals.length === 0) return null;
     // near the straight way first: a long way round reads worse than a crossing, and is slow to look for
-    return this.within(this.around(from, to, ask.lines), starts, goals, ask) ?? this.within(this.all, starts, goals, ask);
+    const mayBound = ask.alone && ask.lines.length === 0 && !ask.insists;
+    return (
+      (mayBound ? this.nearest(starts, goals, ask) : null) ??
+      this.within(this.around(from, to, ask.lines), starts, goals, ask) ??
+      this.within(this.all, starts, goals, ask)
+    );
+  }
+
+  /**
+   * The best way close by, or a better one further out. A way that leaves the ground between the ends comes back again:
+   * that is two bends and twice how far it went, which tells how far out a better one could lie.
+   */
+  private nearest(starts: readonly Stub[], goals: readonly Stub[], ask: Question): Way | null {
+    const [from, to] = [starts, goals].map((list) => list.map((stub) => this.outerPoint(stub))) as [Point[], Point[]];
+    const found = this.within(this.about([...from, ...to], CLOSE_BY), starts, goals, ask);
+    if (!found) return null;
+    let least = Infinity;
+    for (const a of from) for (const b of to) least = Math.min(least, Math.abs(a.x - b.x) + Math.abs(a.y - b.y));
+    const further = Math.min(BEYOND, (found.cost - least - 2 * COST.bend) / 2);
+    if (further <= CLOSE_BY) return found;
+    return this.within(this.about([...from, ...to], further), starts, goals, ask, found.cost) ?? found;
+  }
+
+  private outerPoint({ nodes }: Stub): Point {
+    const node = nodes.at(-1)!;
+    const column = node % this.grid.columns;
+    return { x: this.grid.xs[column]!, y: this.grid.ys[(node - column) / this.grid.columns]! };
   }
 
   private around(from: RouteEnd, to: RouteEnd, lines: readonly Line[]): Window {
-    const xs = [from.x, to.x, ...lines.flatMap(({ x }) => x ?? [])];
-    const ys = [from.y, to.y, ...lines.flatMap(({ y }) => y ?? [])];
+    return this.about([from, to, ...lines.map(({ x = from.x, y = from.y }) => ({ x, y }))], BEYOND);
+  }
+
+  private about(points: readonly Point[], beyond: number): Window {
     const { grid, all } = this;
+    const xs = points.map(({ x }) => x);
+    const ys = points.map(({ y }) => y);
     return {
-      left: lineAt(grid.xs, Math.min(...xs) - BEYOND),
-      right: Math.min(all.right, lineAt(grid.xs, Math.max(...xs) + BEYOND)),
-      top: lineAt(grid.ys, Math.min(...ys) - BEYOND),
-      bottom: Math.min(all.bottom, lineAt(grid.ys, Math.max(...ys) + BEYOND)),
+      left: lineAt(grid.xs, Math.min(...xs) - beyond),
+      right: Math.min(all.right, lineAt(grid.xs, Math.max(...xs) + beyond)),
+      top: lineAt(grid.ys, Math.min(...ys) - beyond),
+      bottom: Math.min(all.bottom, lineAt(grid.ys, Math.max(...ys) + beyond)),
     };
   }
 
-  private within(window: Window, starts: readonly Stub[], goals: readonly Stub[], ask: Question): Way | null {
+  /** @param limit only a way that costs less is of use */
+  private within(
+    window: Window,
+    starts: readonly Stub[],
+    goals: readonly Stub[],
+    ask: Question,
+    limit = Infinity,
+  ): Way | null {
     const { steps } = this;
     this.effort += (window.right - window.left + 1) * (window.bottom - window.top + 1);
     steps.survey(window, ask);
@@ -92,7 +133,7 @@ export class Search {
         bend: this.mayBend(stub, ask) ? COST.bend : Infinity,
       }),
     );
-    const found = this.relaxer.relax(steps, begin, end, ask.lines);
+    const found = this.relaxer.relax(steps, begin, end, ask.lines, limit);
     if (!found) return null;
     return {
       nodes: [

@@ -61,6 +61,8 @@ class Router {
     private readonly terminals: ReadonlyMap<number, number>,
     netOf: readonly number[],
     familyOf: readonly number[],
+    /** how many runs each strand has */
+    private readonly strands: readonly number[],
     spread: boolean,
   ) {
     this.occupancy = emptyOccupancy(grid, netOf, familyOf);
@@ -114,7 +116,7 @@ class Router {
   /** The best way by the terminals' own sides; where those are taken, by any side. */
   private look({ request, net }: Routed, insists = false): Way | null {
     const { from, to, backup = false, lines = [] } = request;
-    const ask = { net, backup, insists };
+    const ask = { net, backup, insists, alone: this.strands[net] === 1 };
     const by = (wanted: readonly Line[]): Way | null =>
       this.search.find(from, to, { ...ask, lines: wanted }) ??
       this.search.find({ ...from, sides: anySide(from) }, { ...to, sides: anySide(to) }, { ...ask, lines: wanted });
@@ -259,9 +261,11 @@ export function routeAll(
   const families = numbered(requests.map((request) => request.family));
   const netOf: number[] = [0];
   const familyOf: number[] = [0];
+  const strandSizes: number[] = [];
   for (const { strand, net, family } of requests) {
     netOf[strands.get(strand)!] = nets.get(net)!;
     familyOf[strands.get(strand)!] = families.get(family)!;
+    strandSizes[strands.get(strand)!] = (strandSizes[strands.get(strand)!] ?? 0) + 1;
   }
   const all = sorted.map((request): Routed => ({
     request,
@@ -276,6 +280,7 @@ export function routeAll(
       terminalNodes(grid, all, netOf, options.pins ?? []),
       netOf,
       familyOf,
+      strandSizes,
       options.spread ?? false,
     );
     const pinned = all.filter(({ request }) => request.lines?.length && !request.given);
