@@ -4,6 +4,9 @@ import { useEffect, useRef, useState, type CSSProperties, type KeyboardEvent, ty
 import { symbolFor } from '@/diagram/symbols';
 import { light } from '@/diagram/symbols/palette';
 import { pictureHref } from '@/lib/shared/uploads';
+import { useSuspended, useSuspending } from '@/components/sheet/guiding';
+import { MeasureLine, ScaleMark } from './measure-line';
+import { PlanGuides } from './plan-guides';
 import { LETTERS, PlanPart } from './plan-part';
 import type { Plan, Point } from './use-plan';
 
@@ -38,7 +41,7 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
   const svg = useRef<SVGSVGElement>(null);
   const [zoom, setZoom] = useState(1);
   const drag = useRef<{ from: Point; at: Point; moved: boolean; threshold: number } | null>(null);
-  const { plan, placed, placing, ghost, carried, inHand, rights } = state;
+  const { plan, placed, placing, ghost, carried, inHand, rights, tool } = state;
   const held = inHand[0];
   const { width: planWidth, height: planHeight } = plan ?? { width: 0, height: 0 };
 
@@ -56,7 +59,10 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
     box.current?.querySelector('[data-held]')?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
   }, [box, held]);
 
+  const suspended = useSuspended((now) => now.suspended);
+  useSuspending(carried !== null || placing !== null);
   if (!plan) return null;
+  const guides = state.guides();
   const carriedPart = state.document.parts.find(({ id }) => id === placing);
 
   /** A place on the screen as a place on the plan. */
@@ -67,7 +73,7 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
   };
 
   const begin = (event: PointerEvent, id: string) => {
-    if (placing || event.button !== 0) return;
+    if (placing || tool.kind || event.button !== 0) return;
     event.stopPropagation();
     const add = event.shiftKey || event.ctrlKey || event.metaKey;
     if (!inHand.includes(id)) state.take(add ? [...inHand, id] : [id]);
@@ -78,6 +84,7 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
     drag.current = { from: onPlan(event), at: { x: event.clientX, y: event.clientY }, moved: false, threshold };
   };
   const move = (event: PointerEvent) => {
+    if (tool.kind) return tool.hover(onPlan(event));
     if (placing) return state.setGhost(onPlan(event));
     const now = drag.current;
     if (!now) return;
@@ -102,16 +109,20 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
   const onKeyDown = (event: KeyboardEvent) => {
     const way = ARROWS[event.key];
     if (way) {
-      const by = event.shiftKey ? STEP : placing ? FAR : STEP;
-      if (placing)
-        state.setGhost({
-          x: Math.min(plan.width, Math.max(0, ghost.x + way.x * by)),
-          y: Math.min(plan.height, Math.max(0, ghost.y + way.y * by)),
-        });
+      const by = event.shiftKey || !(placing || tool.kind) ? STEP : FAR;
+      const from = tool.kind ? tool.at : ghost;
+      const to = {
+        x: Math.min(plan.width, Math.max(0, from.x + way.x * by)),
+        y: Math.min(plan.height, Math.max(0, from.y + way.y * by)),
+      };
+      if (tool.kind) tool.hover(to);
+      else if (placing) state.setGhost(to);
       else state.nudgeBy(way.x * (event.shiftKey ? FAR : STEP), way.y * (event.shiftKey ? FAR : STEP));
       return event.preventDefault();
     }
-    if (placing && event.key === 'Enter') state.put(ghost);
+    if (tool.kind && event.key === 'Enter') tool.put(tool.at);
+    else if (tool.kind && (event.key === 'Backspace' || event.key === 'Delete')) tool.back();
+    else if (placing && event.key === 'Enter') state.put(ghost);
     else if (event.key === '+' || event.key === '=') setZoom(Math.min(MOST_ZOOM, zoom * ZOOM));
     else if (event.key === '-') setZoom(Math.max(1, zoom / ZOOM));
     else return onKey(event);
@@ -135,17 +146,21 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
           viewBox={viewBox}
           preserveAspectRatio="xMidYMid meet"
           style={{ ...PAPER, width: `${zoom * 100}%`, height: `${zoom * 100}%` }}
-          className={`block ${placing ? 'cursor-crosshair touch-none' : ''}`}
+          className={`block ${placing || tool.kind ? 'cursor-crosshair touch-none' : ''}`}
           onPointerMove={move}
           onPointerUp={end}
           onPointerCancel={cancel}
-          onClick={(event) => placing && state.put(onPlan(event))}
+          onClick={(event) => {
+            if (tool.kind) tool.put(onPlan(event));
+            else if (placing) state.put(onPlan(event));
+          }}
           onPointerDown={(event) => {
-            if (!placing && event.target === event.currentTarget) state.take([]);
+            if (!placing && !tool.kind && event.target === event.currentTarget) state.take([]);
           }}
         >
           <rect x={-EDGE} y={-EDGE} width={plan.width + 2 * EDGE} height={plan.height + 2 * EDGE} className="fill-paper" pointerEvents="none" />
           <image href={pictureHref(plan.picture)} width={plan.width} height={plan.height} pointerEvents="none" />
+          <ScaleMark plan={plan} />
           {placed.map(({ part, at }) => {
             const off = carried && inHand.includes(part.id) ? carried : null;
             return (
@@ -154,6 +169,7 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
                 part={part}
                 at={off ? { ...at, x: at.x + off.x, y: at.y + off.y } : at}
                 held={inHand.includes(part.id)}
+                locked={at.locked ?? false}
                 label={state.describe(part)}
                 onPointerDown={(event) => begin(event, part.id)}
               />
@@ -172,6 +188,8 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
               />
             </g>
           )}
+          {guides && <PlanGuides guided={guides} suspended={suspended} />}
+          <MeasureLine tool={tool} plan={plan} />
         </svg>
       </div>
       <div className="absolute right-3 bottom-3 flex border border-ink bg-paper">

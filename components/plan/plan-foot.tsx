@@ -5,7 +5,11 @@ import { Button, WordButton } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/segmented';
 import { useSheet, type OpenDrawing } from '@/components/sheet/use-drawing';
 import { changePlan, removePlan } from '@/diagram/commands/floor-plan';
+import { scaleText } from '@/diagram/document/plan-scale';
+import { MeasureFoot } from './measure-foot';
 import type { Plan } from './use-plan';
+
+const PAPERS = ['A4', 'A3'] as const;
 
 interface PlanFootProps {
   drawing: OpenDrawing;
@@ -27,7 +31,8 @@ export function PlanFoot({ drawing, state, onAnother }: PlanFootProps) {
   };
   return (
     <div className="flex flex-col gap-1">
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-1">
+      {state.tool.kind && <MeasureFoot state={state} />}
+      <div className={`flex flex-wrap items-center gap-x-4 gap-y-1 ${state.tool.kind ? 'hidden' : ''}`}>
         {plans.length > 1 && (
           <Segmented
             label="Storey"
@@ -61,10 +66,25 @@ export function PlanFoot({ drawing, state, onAnother }: PlanFootProps) {
             <WordButton onClick={() => setName(plan.name)}>rename</WordButton>
             <WordButton onClick={onAnother}>another storey</WordButton>
             <WordButton onClick={() => state.run(removePlan(document, plan.id))}>take away</WordButton>
+            <WordButton onClick={() => state.measure('scale')}>{plan.scale ? 'scale anew' : 'measure the scale'}</WordButton>
+            <WordButton onClick={() => state.measure('run')}>measure a run</WordButton>
             <WordButton onClick={undo}>undo</WordButton>
             <WordButton onClick={redo}>redo</WordButton>
           </>
         )}
+        {name === null &&
+          PAPERS.map((paper) => (
+            <a
+              key={paper}
+              className="text-ink underline underline-offset-[3px]"
+              href={`/api/drawings/${drawing.store.getState().drawingId}/pdf?face=plan&storey=${encodeURIComponent(plan.id)}&paper=${paper}`}
+              target="_blank"
+              rel="noreferrer"
+            >
+              print {paper}
+            </a>
+          ))}
+        <span className="text-grey">{scaleText(plan) ?? 'not measured'}</span>
       </div>
       <p role="status" className="min-h-4 truncate text-grey">
         {notice}

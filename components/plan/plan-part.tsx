@@ -1,6 +1,7 @@
 import type { PointerEvent } from 'react';
 import { SymbolGlyph } from '@/components/frame/symbol-glyph';
 import type { Part, PlanPosition } from '@/diagram/document/schema';
+import { Padlock } from '@/components/frame/padlock';
 import { symbolFor } from '@/diagram/symbols';
 import { turnedSize } from '@/diagram/symbols/turn';
 
@@ -12,6 +13,8 @@ interface PlanPartProps {
   part: Part;
   at: Pick<PlanPosition, 'x' | 'y' | 'turn'>;
   held?: boolean;
+  /** held where it hangs */
+  locked?: boolean;
   /** on its way to a place */
   ghost?: boolean;
   label?: string;
@@ -19,7 +22,7 @@ interface PlanPartProps {
 }
 
 /** A part on a floor plan: its symbol of the overview on a ground that keeps it readable over any picture. */
-export function PlanPart({ part, at, held = false, ghost = false, label, onPointerDown }: PlanPartProps) {
+export function PlanPart({ part, at, held = false, locked = false, ghost = false, label, onPointerDown }: PlanPartProps) {
   const symbol = symbolFor(part, 'overview');
   const turn = at.turn ?? 0;
   const { width, height } = turnedSize(symbol, turn);
@@ -48,6 +51,7 @@ export function PlanPart({ part, at, held = false, ghost = false, label, onPoint
         vectorEffect="non-scaling-stroke"
       />
       <SymbolGlyph symbol={symbol} x={x} y={y} turn={(turn * 90) as 0 | 90 | 180 | 270} />
+      {locked && <Padlock x={-ROOM} y={-ROOM} />}
       {part.ref && (
         <text
           x={width + 2 * ROOM}

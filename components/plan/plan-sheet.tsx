@@ -32,12 +32,16 @@ const KEYS: readonly KeyHelp[] = [
   { keys: ['←', '→', '↑', '↓'], does: 'move what is in hand by the module; with Shift farther' },
   { keys: ['Page Down', 'Page Up'], does: 'next part on the plan, the one before' },
   { keys: ['r'], does: 'turn it by a quarter' },
+  { keys: ['Shift', 'L'], does: 'lock it where it hangs, or unlock it' },
+  { keys: ['s'], does: 'measure the scale: two places, and how far they are apart' },
+  { keys: ['m'], does: 'measure the way of a run and write it at its cable' },
+  { keys: ['Alt'], does: 'held while a part is moved: not drawn to what it nearly stands in line with' },
   { keys: ['Delete'], does: 'take it off the plan' },
-  { keys: ['Enter'], does: 'put down what is carried' },
+  { keys: ['Enter'], does: 'put down what is carried, or a place to measure from' },
   { keys: ['g'], does: 'the same part on the overview' },
   { keys: ['+', '-'], does: 'larger, smaller' },
   { keys: ['Ctrl Z', 'Ctrl Shift Z'], does: 'take back, do again' },
-  { keys: ['Esc'], does: 'nothing carried, nothing in hand' },
+  { keys: ['Esc'], does: 'nothing measured, nothing carried, nothing in hand' },
 ];
 
 /** A storey's plan with the parts of the drawing where they hang in the home: a second arrangement of the same parts. */
@@ -74,11 +78,15 @@ export function PlanSheet({ view, me, list, storey }: PlanSheetProps) {
     else if (ctrl || event.altKey) return;
     else if (key === 'pagedown') state.step(1);
     else if (key === 'pageup') state.step(-1);
+    else if (letters && key === 'l' && event.shiftKey) state.lock();
+    else if (letters && key === 's') state.measure('scale');
+    else if (letters && key === 'm') state.measure('run');
     else if (letters && key === 'r') state.turn();
     else if (key === 'delete' || key === 'backspace') state.takeOff();
     else if (letters && key === 'g') router.push(`/jobs/${view.jobId}/overview`);
     else if (key === 'escape') {
-      if (state.placing) state.drop();
+      if (state.tool.kind) state.tool.leave();
+      else if (state.placing) state.drop();
       else state.take([]);
     } else return;
     event.preventDefault();

@@ -1,9 +1,31 @@
+'use client';
+
+import { useEffect } from 'react';
 import { create } from 'zustand';
 import { guide, type Box, type Guided } from '@/diagram/layout/guides';
 import type { Scene } from '@/diagram/layout/scene';
 
 /** Guides are always on; while a key is held they draw nothing to them, and a part goes to the plain module. */
 export const useSuspended = create<{ suspended: boolean }>(() => ({ suspended: false }));
+
+/** Hears the key that suspends the guides, only while something is moved. */
+export function useSuspending(moving: boolean): void {
+  useEffect(() => {
+    if (!moving) return;
+    const hear = (event: KeyboardEvent) => {
+      if (event.key !== 'Alt') return;
+      event.preventDefault();
+      useSuspended.setState({ suspended: event.type === 'keydown' });
+    };
+    window.addEventListener('keydown', hear);
+    window.addEventListener('keyup', hear);
+    return () => {
+      window.removeEventListener('keydown', hear);
+      window.removeEventListener('keyup', hear);
+      useSuspended.setState({ suspended: false });
+    };
+  }, [moving]);
+}
 
 /** The box about several. */
 export function boxAbout(boxes: readonly Box[]): Box | null {

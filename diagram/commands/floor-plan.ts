@@ -75,11 +75,13 @@ export function addPlan(doc: Installation, plan: FloorPlan): Command {
 export function changePlan(doc: Installation, planId: string, change: Partial<Omit<FloorPlan, 'id'>>): Command {
   const old = doc.plans?.find((plan) => plan.id === planId);
   if (!old) return { label: 'Change the plan', patch: {} };
-  const plan = { ...old, ...change };
-  const [sx, sy] = [plan.width / old.width, plan.height / old.height];
+  const [sx, sy] = [(change.width ?? old.width) / old.width, (change.height ?? old.height) / old.height];
+  const stretched = ({ x, y }: { x: number; y: number }) => ({ x: Math.round(x * sx), y: Math.round(y * sy) });
+  const scale = old.scale && { ...old.scale, a: stretched(old.scale.a), b: stretched(old.scale.b) };
+  const plan = { ...old, ...(scale && { scale }), ...change };
   const moved = [...placedOn(doc, planId)].map(([id, at]): [string, PlanPosition] => [
     id,
-    { ...at, x: Math.round(at.x * sx), y: Math.round(at.y * sy) },
+    { ...at, ...stretched(at) },
   ]);
   const plans = doc.plans!.map((other) => (other.id === planId ? plan : other));
   const next = withPlan(doc, { ...doc.sheet?.plan, ...Object.fromEntries(moved) }, plans);

@@ -245,6 +245,15 @@ export const FloorPlanSchema = z.strictObject({
   /** 1/100 mm, the size at which the picture lies on the paper; its upper left corner is the origin of positions */
   width: z.int().min(1000).max(200_000),
   height: z.int().min(1000).max(200_000),
+  /** two places on it and how far they are apart in the home: what makes a plan one that can be measured */
+  scale: z
+    .strictObject({
+      a: z.strictObject({ x: PositionSchema.shape.x, y: PositionSchema.shape.y }),
+      b: z.strictObject({ x: PositionSchema.shape.x, y: PositionSchema.shape.y }),
+      /** m */
+      metres: positive.max(1000),
+    })
+    .optional(),
 });
 
 /** Where a part stands on the plan of a storey; the other faces keep their own positions. */

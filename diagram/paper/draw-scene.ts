@@ -133,7 +133,8 @@ function tickMarks(run: SceneRun): Mark[] {
   });
 }
 
-function symbolGroup(part: ScenePart): Group {
+/** A part's symbol, turned as it stands. */
+export function symbolGroup(part: Pick<ScenePart, 'x' | 'y' | 'turn' | 'width' | 'symbol' | 'kind'>): Group {
   const symbol = symbolById(part.symbol, part.width);
   const origin = turnedPoint(0, 0, symbol, part.turn);
   const ink = part.kind === 'neutral-bar' ? cores.light.BU! : part.kind === 'earth-bar' ? cores.light.GNYE! : light.ink;

@@ -42,6 +42,8 @@ export interface Group {
   /** what is seen of it, in its own unit */
   clip?: { x: number; y: number; width: number; height: number };
   marks: Mark[];
+  /** a picture beneath the marks, from the group's origin: its name, and its size in the group's unit */
+  picture?: { name: string; width: number; height: number };
   /** groups within, painted after the marks */
   groups?: Group[];
 }

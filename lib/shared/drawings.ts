@@ -92,6 +92,13 @@ export const SheetQuerySchema = z.object({
 });
 export type SheetQuery = z.infer<typeof SheetQuerySchema>;
 
+/** The same with the plans of the storeys, which are printed over their pictures. */
+export const PdfQuerySchema = SheetQuerySchema.extend({
+  face: z.enum(['overview', 'connections', 'all', 'plan']).default('overview'),
+  /** id of one plan; all storeys where left out */
+  storey: IdSchema.optional(),
+});
+
 /** Which table of the schedules is asked for as a file. */
 export const TableQuerySchema = z.object({ table: z.enum(TABLE_IDS).default('ways') });
 

@@ -145,6 +145,77 @@ describe('the plan of a storey', () => {
   });
 });
 
+describe('measuring on the plan', () => {
+  const wired = (): Installation => ({
+    ...planned(),
+    wires: [{ id: 'w', from: ['a', 'L'], to: ['c', '2'], role: 'switched', cable: 'W1' }],
+    cables: [{ id: 'W1', ref: 'W1', csa: 1.5, material: 'Cu', insulation: 'PVC', method: 'C', length: 12 }],
+  });
+  const scaleOf = () => store.getState().document.plans![0]!.scale;
+
+  it('takes the scale, then a run, by keys alone: each one step of the history', async () => {
+    openPlan(wired());
+    const user = userEvent.setup();
+    screen.getByRole('application').focus();
+    // a run asks for the scale first
+    await user.keyboard('m{Enter}{ArrowRight}{ArrowRight}{ArrowRight}{ArrowRight}{Enter}');
+    await user.type(screen.getByRole('textbox', { name: /in metres/ }), '4,0{Enter}');
+    expect(scaleOf()).toMatchObject({ metres: 4, a: { x: 16_000, y: 12_000 }, b: { x: 20_000, y: 12_000 } });
+    expect(screen.getByText('1:100')).toBeInTheDocument();
+    screen.getByRole('application').focus();
+    await user.keyboard('m{Enter}{ArrowRight}{ArrowRight}{ArrowRight}{Enter}{ArrowDown}{ArrowDown}{Enter}{Backspace}{Enter}');
+    await user.type(screen.getByRole('textbox', { name: /up and down/ }), '2.4');
+    await user.selectOptions(screen.getByRole('combobox', { name: 'for' }), 'W1');
+    await user.click(screen.getByRole('button', { name: 'Write it' }));
+    expect(store.getState().document.cables[0]!.length).toBe(7.4);
+    expect(store.getState().undoSteps.map(({ label }) => label)).toEqual([
+      'Measure the Ground floor: 4 m',
+      'Measure W1, E1 to S1 on the plan: 7.4 m',
+    ]);
+    act(() => store.getState().undo());
+    act(() => store.getState().undo());
+    expect([store.getState().document.cables[0]!.length, scaleOf()]).toEqual([12, undefined]);
+  });
+
+  it('is left by Esc without a trace, and is not there for readers', async () => {
+    openPlan(wired());
+    const user = userEvent.setup();
+    screen.getByRole('application').focus();
+    await user.keyboard('s{Enter}');
+    expect(screen.getByRole('group', { name: 'Measuring' })).toBeInTheDocument();
+    await user.keyboard('{Escape}');
+    expect(screen.queryByRole('group', { name: 'Measuring' })).toBeNull();
+    expect(store.getState().undoSteps).toEqual([]);
+  });
+
+  it('prints the storey that is open, for readers too', () => {
+    openPlan(wired(), [], false);
+    expect(screen.getByRole('link', { name: 'print A3' })).toHaveAttribute(
+      'href',
+      '/api/drawings/drawing/pdf?face=plan&storey=ground&paper=A3',
+    );
+    expect(screen.queryByRole('button', { name: /measure/ })).toBeNull();
+  });
+});
+
+describe('a part that is locked on the plan', () => {
+  it('is moved, turned and taken off by nothing until it is unlocked, and says so', async () => {
+    openPlan(applyPatch(planned(), { set: { plan: { a: { x: 1000, y: 1000, on: 'ground' } } } }));
+    const user = userEvent.setup();
+    screen.getByRole('application').focus();
+    await user.keyboard('{PageDown}{Shift>}L{/Shift}');
+    expect(places().a).toEqual({ x: 1000, y: 1000, on: 'ground', pinned: true, locked: true });
+    for (const keys of ['{ArrowRight}', 'r', '{Delete}']) {
+      await user.keyboard(keys);
+      expect(places().a).toMatchObject({ x: 1000, locked: true });
+      expect(store.getState().notice).toBe('E1 is locked in place. Unlock with Shift L.');
+    }
+    await user.keyboard('{Shift>}L{/Shift}r');
+    expect(places().a).toMatchObject({ turn: 1 });
+    expect(store.getState().undoSteps.map(({ label }) => label)).toEqual(['Lock E1 in place', 'Unlock E1', 'Turn E1 on the plan']);
+  });
+});
+
 describe('the photographs', () => {
   const answers = (...queue: [number, unknown][]) => {
     const fetch = vi.fn(async (_path: string, _init?: RequestInit) => {

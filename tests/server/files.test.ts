@@ -6,7 +6,7 @@ import { POST as save } from '@/app/api/drawings/[drawingId]/changes/route';
 import { readDocument } from '@/diagram/document/schema';
 import { fileName } from '@/lib/server/drawings/file-answer';
 import { signedIn } from './browser';
-import { change, makeJob, makePerson, place } from './factories';
+import { change, makeJob, makePerson, makeUpload, place } from './factories';
 
 async function studio(title: string) {
   const person = await makePerson();
@@ -38,6 +38,31 @@ describe('a sheet on paper', () => {
     // Asked in this way, a failure does not print the whole file.
     for (const text of ['font/woff2;base64,', '&lt;script&gt;']) expect([text, body.includes(text)]).toEqual([text, true]);
     expect(/<script|<foreignObject|<image| on\w+="|href="/i.exec(body)).toBeNull();
+  });
+});
+
+describe('a plan on paper', () => {
+  const plan = { id: 'ground', name: 'Ground floor', width: 32_000, height: 24_000 };
+  it('carries the picture behind it, of its own job alone, and is not there for a storey that is not drawn', async () => {
+    const person = await makePerson();
+    const own = await makeJob(person, { title: 'Heron Row 9' });
+    const other = await makeJob(person, { title: 'Heron Row 11' });
+    const browser = await signedIn(person);
+    const params = { drawingId: own.drawingId };
+    const [mine, theirs] = [await makeUpload(person, own.id), await makeUpload(person, other.id)];
+    const lay = (base: number, picture: string) =>
+      browser.post(save, params, change(base, { set: { plans: [{ ...plan, picture }] } }));
+    const print = async (query = '') => browser.ask(pdf, { params, path: `/?face=plan&paper=A3${query}` });
+    expect((await print()).status).toBe(404);
+    await lay(0, mine.id);
+    const { status, body, headers } = await print('&storey=ground');
+    expect([status, body.slice(0, 5)]).toEqual([200, '%PDF-']);
+    expect(headers.get('content-disposition')).toContain('Heron Row 9 plan.pdf');
+    expect(body).toMatch(/\/Subtype \/Image/);
+    expect((await print('&storey=attic')).status).toBe(404);
+    await lay(1, theirs.id);
+    const without = await print();
+    expect([without.status, /\/Subtype \/Image/.test(without.body)]).toEqual([200, false]);
   });
 });
 

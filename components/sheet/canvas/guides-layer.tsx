@@ -1,11 +1,11 @@
 'use client';
 
-import { useEffect, useMemo } from 'react';
+import { useMemo } from 'react';
 import { useReactFlow } from 'reactflow';
 import type { Guide } from '@/diagram/layout/guides';
 import type { Scene } from '@/diagram/layout/scene';
 import { MODULE } from '@/diagram/symbols/types';
-import { guided, useSuspended } from '../guiding';
+import { guided, useSuspended, useSuspending } from '../guiding';
 import { useSheet, type OpenDrawing } from '../use-drawing';
 import { useView } from '../view';
 import { useDrag } from './drag';
@@ -23,24 +23,6 @@ const pathOf = ({ upright, at, from, to }: Guide): string =>
 /** A bar at either end of a gap, so that it reads as a measure and not as a wire. */
 const endsOf = ({ upright, at, from, to }: Guide, half: number): string =>
   [from, to].map((end) => (upright ? `M${at - half} ${end}H${at + half}` : `M${end} ${at - half}V${at + half}`)).join('');
-
-/** Registers the key that suspends the guides, only while something is dragged. */
-function useSuspending(): void {
-  useEffect(() => {
-    const hear = (event: KeyboardEvent) => {
-      if (event.key !== 'Alt') return;
-      event.preventDefault();
-      useSuspended.setState({ suspended: event.type === 'keydown' });
-    };
-    window.addEventListener('keydown', hear);
-    window.addEventListener('keyup', hear);
-    return () => {
-      window.removeEventListener('keydown', hear);
-      window.removeEventListener('keyup', hear);
-      useSuspended.setState({ suspended: false });
-    };
-  }, []);
-}
 
 function Guides({ scene, ids, dx, dy }: { scene: Scene; ids: readonly string[]; dx: number; dy: number }) {
   const zoom = useReactFlow().getZoom();
@@ -91,7 +73,7 @@ function Guides({ scene, ids, dx, dy }: { scene: Scene; ids: readonly string[]; 
 function DragGuides({ scene }: { scene: Scene }) {
   const { ids, dx, dy } = useDrag();
   const list = useMemo(() => [...ids], [ids]);
-  useSuspending();
+  useSuspending(true);
   return <Guides scene={scene} ids={list} dx={dx} dy={dy} />;
 }
 

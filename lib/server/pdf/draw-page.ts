@@ -6,20 +6,26 @@ import { fontName, runsOf } from './fonts';
 
 type Pdf = InstanceType<typeof PDFDocument>;
 
+/** JPEGs by the name that a page calls them. */
+export type Pictures = ReadonlyMap<string, Buffer>;
+const NO_PICTURES: Pictures = new Map();
+
 /** Draws the marks of a page. The unit of the PDF is 1/100 mm here; widths of strokes do not shrink with a group. */
-export function drawPage(pdf: Pdf, page: Page): void {
-  for (const group of page.groups) drawGroup(pdf, group, 1);
+export function drawPage(pdf: Pdf, page: Page, pictures: Pictures = NO_PICTURES): void {
+  for (const group of page.groups) drawGroup(pdf, group, 1, pictures);
 }
 
-function drawGroup(pdf: Pdf, group: Group, outer: number): void {
+function drawGroup(pdf: Pdf, group: Group, outer: number, pictures: Pictures): void {
   const scale = outer * group.scale;
   pdf.save();
   pdf.translate(group.x, group.y);
   if (group.scale !== 1) pdf.scale(group.scale);
   if (group.turn) pdf.rotate(90 * group.turn);
   if (group.clip) pdf.rect(group.clip.x, group.clip.y, group.clip.width, group.clip.height).clip();
+  const picture = group.picture && pictures.get(group.picture.name);
+  if (picture) pdf.image(picture, 0, 0, { width: group.picture!.width, height: group.picture!.height });
   for (const mark of group.marks) drawMark(pdf, mark, scale);
-  for (const child of group.groups ?? []) drawGroup(pdf, child, scale);
+  for (const child of group.groups ?? []) drawGroup(pdf, child, scale, pictures);
   pdf.restore();
 }
 

@@ -2,8 +2,11 @@ import 'server-only';
 import PDFDocument from 'pdfkit';
 import type { Installation } from '@/diagram/document/schema';
 import { outlinedPage } from '@/diagram/paper/outlines';
+import { planPages } from '@/diagram/paper/plan-pages';
+import type { Page } from '@/diagram/paper/primitives';
 import { sheetPages, type SheetOptions } from '@/diagram/paper/sheet';
-import { drawPage } from './draw-page';
+import type { SheetTitle } from '@/diagram/paper/title-block';
+import { drawPage, type Pictures } from './draw-page';
 import { registerFonts } from './fonts';
 import { glyphs } from './glyphs';
 
@@ -25,9 +28,24 @@ function dated(drawnOn: string): Date {
 }
 
 /** All sheets of a drawing as one PDF. */
-export async function sheetPdf({ document, outlines = false, ...options }: SheetPdfInput): Promise<Buffer> {
-  const pages = sheetPages(document, options);
-  const { title } = options;
+export const sheetPdf = ({ document, outlines = false, ...options }: SheetPdfInput): Promise<Buffer> =>
+  pagesPdf(sheetPages(document, options), options.title, { outlines });
+
+export interface PlanPdfInput extends SheetPdfInput {
+  /** id of one plan; all storeys where left out */
+  plan?: string;
+  pictures: Pictures;
+}
+
+/** The plans of the storeys as one PDF, each over its picture. */
+export const planPdf = ({ document, outlines = false, pictures, ...options }: PlanPdfInput): Promise<Buffer> =>
+  pagesPdf(planPages(document, options), options.title, { outlines, pictures });
+
+async function pagesPdf(
+  pages: readonly Page[],
+  title: SheetTitle,
+  { outlines, pictures }: { outlines: boolean; pictures?: Pictures },
+): Promise<Buffer> {
   const pdf = new PDFDocument({
     autoFirstPage: false,
     compress: true,
@@ -51,7 +69,7 @@ export async function sheetPdf({ document, outlines = false, ...options }: Sheet
   for (const page of pages) {
     pdf.addPage({ size: [page.width * POINTS, page.height * POINTS], margin: 0 });
     pdf.save().scale(POINTS);
-    drawPage(pdf, outlines ? outlinedPage(page, glyphs) : page);
+    drawPage(pdf, outlines ? outlinedPage(page, glyphs) : page, pictures);
     pdf.restore();
   }
   pdf.end();

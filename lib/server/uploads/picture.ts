@@ -73,6 +73,14 @@ async function encode(bytes: Buffer, kind: PictureType): Promise<Pictures> {
   return { width: info.width, height: info.height, large, small };
 }
 
+/** A stored picture as JPEG, which paper formats carry as it is. */
+export const asJpeg = (stored: Buffer): Promise<Buffer> =>
+  sharp(stored, { limitInputPixels: MOST_PIXELS })
+    .flatten({ background: '#ffffff' })
+    .jpeg({ quality: 88 })
+    .timeout({ seconds: TIMEOUT_S })
+    .toBuffer();
+
 let last: Promise<unknown> = Promise.resolve();
 let waiting = 0;
 
