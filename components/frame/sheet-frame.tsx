@@ -106,7 +106,7 @@ export function SheetFrame(props: SheetFrameProps) {
         )}
         <div className="ml-auto flex flex-wrap items-center justify-end gap-x-4 text-small lap:mb-1">
           {props.saveState}
-          <Link href="/account" aria-label={`${who}, your account`} className="text-ink no-underline hover:underline">
+          <Link href="/account" prefetch={false} aria-label={`${who}, your account`} className="text-ink no-underline hover:underline">
             {who}
           </Link>
           {props.find && (

@@ -43,6 +43,7 @@ export function SheetPicker({ tabs, current, sheet }: { tabs: readonly Tab[]; cu
           <li key={tab.id} className={tab.apart ? 'border-b border-hair' : ''}>
             <Link
               href={tab.href}
+              prefetch={false}
               aria-current={tab.id === current ? 'page' : undefined}
               className={`flex min-h-11 items-center px-3 text-ink no-underline ${tab.id === current ? 'bg-row font-bold' : ''}`}
               onClick={() => setOpen(false)}

@@ -14,6 +14,7 @@ export function SheetTabs({ tabs, current }: { tabs: readonly Tab[]; current: st
             <li key={tab.id} className={tab.apart ? 'mr-2' : ''}>
               <Link
                 href={tab.href}
+                prefetch={false}
                 aria-current={open ? 'page' : undefined}
                 className={`relative block border border-b-0 border-rule px-2 pt-[3px] pb-1 text-small text-ink no-underline ${
                   open ? 'z-10 -mb-px bg-paper pb-[5px] font-bold' : 'bg-behind hover:bg-paper'

@@ -10,6 +10,7 @@ import { walkFromSources, type Walk } from '@/diagram/commands/walk';
 import { applyPatch } from '@/diagram/document/patch';
 import { MODULE } from '@/diagram/symbols/types';
 import type { End, Installation } from '@/diagram/document/schema';
+import { buildScene } from '@/diagram/layout/build-scene';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
 import { Clipboard } from './clipboard';
@@ -36,7 +37,7 @@ export class Hands {
   readonly store: DrawingStore;
   readonly view: View;
   readonly newId: NewId;
-  private shown: Scene | null = null;
+  private shown: { scene: Scene; of: Installation } | null = null;
   private walked: { doc: Installation; walk: Walk } | null = null;
   readonly clipboard = new Clipboard(this);
 
@@ -46,14 +47,20 @@ export class Hands {
     this.newId = tools.newId;
   }
 
-  /** The canvas shows another scene: the hands act on that one from now on. */
-  show(scene: Scene): void {
-    this.shown = scene;
+  /** The canvas shows another scene: the hands act on that one from now on. @param of the document that it shows */
+  show(scene: Scene, of: Installation = this.doc): void {
+    this.shown = { scene, of };
   }
 
+  /** The page on the canvas, of the document as it stands: worked out here where hands are faster than the canvas. */
   scene(): Scene {
     if (!this.shown) throw new Error('no scene is on the canvas yet');
-    return this.shown;
+    if (this.shown.of !== this.doc) {
+      const { scene } = this.shown;
+      const { face, place } = scene;
+      this.show(buildScene(this.doc, face, { before: scene, ...(place !== undefined && { place }) }));
+    }
+    return this.shown.scene;
   }
 
   private get state() {
@@ -215,17 +222,21 @@ export class Hands {
     else this.shift(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
   }
 
-  /** A pointer lets go of parts that it has dragged so far, in 1/100 mm: they go where the guides show. */
-  moveBy(ids: readonly string[], dx: number, dy: number): void {
+  /**
+   * A pointer lets go of parts that it has dragged so far, in 1/100 mm: they go where the guides show.
+   * @returns whether they stand elsewhere now
+   */
+  moveBy(ids: readonly string[], dx: number, dy: number): boolean {
     const { dx: x, dy: y } = guided(this.scene(), ids, dx, dy) ?? { dx, dy };
-    this.shift(ids, x, y);
+    return this.shift(ids, x, y);
   }
 
-  private shift(ids: readonly string[], dx: number, dy: number): void {
+  private shift(ids: readonly string[], dx: number, dy: number): boolean {
     const { terminal } = this.state.selection;
-    if (lockHolds(this, ids)) return;
-    if (this.do(moveParts(this.doc, this.view.getState().face, ids, dx, dy)) && terminal)
-      this.state.select({ terminal });
+    if (lockHolds(this, ids)) return false;
+    const moved = this.do(moveParts(this.doc, this.view.getState().face, ids, dx, dy));
+    if (moved && terminal) this.state.select({ terminal });
+    return moved;
   }
 
   remove(): void {

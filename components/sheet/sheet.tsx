@@ -17,13 +17,13 @@ import { OutlinePane } from '@/components/outline/outline-pane';
 import { useTwoHands } from '@/components/outline/use-two-hands';
 import { KEYS_HELP, type ActionContext } from './actions';
 import { middle } from './canvas/pick';
-import { useBrowser, useScene } from './use-scene';
 import { useSlip } from './extend/use-slip';
 import { SheetFoot } from './foot/sheet-foot';
 import { notesOf, type MarkedNote } from './margin/notes';
 import { SheetMargin } from './margin/sheet-margin';
 import { useExamination } from './margin/use-examination';
 import { SaveStateView } from './save-state-view';
+import { useDrawn } from './scene/use-drawn';
 import { SheetSurface } from './surface';
 import { useTidy } from './tidy/use-tidy';
 import { useDraftPreview } from './use-draft-preview';
@@ -34,6 +34,8 @@ import { createView, useView, useViewStore, ViewProvider } from './view';
 
 interface SheetProps {
   view: DrawingView;
+  /** the face of the view's document as its scene in JSON; null: it is worked out here */
+  drawn: string | null;
   me: Me;
   face: Face;
   /** page of the connections face that the address asks for */
@@ -46,8 +48,7 @@ interface SheetProps {
 
 const NO_FINDINGS: readonly Finding[] = [];
 
-const EMPTY_SCENE = {
-  face: 'overview',
+const NO_SCENE: Omit<Scene, 'face'> = {
   width: 1,
   height: 1,
   bands: [],
@@ -57,7 +58,11 @@ const EMPTY_SCENE = {
   rings: [],
   dots: [],
   texts: [],
-} satisfies Scene;
+};
+const UNDRAWN: Record<Face, Scene> = {
+  overview: { ...NO_SCENE, face: 'overview' },
+  connections: { ...NO_SCENE, face: 'connections' },
+};
 
 const stillLive = (document: Installation): string | undefined => {
   const inverter = document.parts.find((part) => part.kind === 'inverter');
@@ -67,7 +72,7 @@ const stillLive = (document: Installation): string | undefined => {
     : undefined;
 };
 
-function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProps) {
+function SheetOnView({ view, drawn: first, me, face, hoursWanted, preview = false }: SheetProps) {
   const router = useRouter();
   const drawing = useDrawing(view, me);
   const { store } = drawing;
@@ -82,7 +87,6 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
   const wantedPlace = useView((state) => state.place);
   const editing = useView((state) => state.editing);
   const sheet = useRef<HTMLDivElement>(null);
-  const browser = useBrowser();
   const twoHands = useTwoHands(viewStore, sheet);
   const [help, setHelp] = useState(false);
   const { back: focusSheet, toSheet, openOutline } = twoHands;
@@ -90,12 +94,11 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
   const pages = useMemo(() => (face === 'connections' ? connectionPages(document) : []), [document, face]);
   const page = pages.find((candidate) => candidate.place === wantedPlace) ?? pages[0] ?? null;
   const place = face === 'connections' ? (page?.place ?? null) : null;
-  const drawn = useScene(browser ? document : null, face, place);
-  const scene = drawn ?? EMPTY_SCENE;
-  const ghost = useScene(ghostDocument, face, place, drawn);
-  const hands = useHands(store, viewStore, scene);
+  const drawn = useDrawn({ document, ghost: ghostDocument, face, place }, { scene: first, of: view.document });
+  const scene = drawn.scene ?? UNDRAWN[face];
+  const hands = useHands(store, viewStore, scene, drawn.of);
   // The drawing is shown first, then examined: the two would share the machine's time.
-  const examined = useExamination(drawn && document);
+  const examined = useExamination(drawn.scene && document);
   const ghostExamined = useExamination(ghostDocument);
   const slip = useSlip(hands, hoursWanted, examined.examination);
   const notes = useMemo(
@@ -220,7 +223,7 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
           </>
         )
       }
-      foot={<SheetFoot drawing={drawing} context={context} scene={scene} drawn={drawn !== null} notes={notes} />}
+      foot={<SheetFoot drawing={drawing} context={context} scene={scene} drawn={drawn.scene !== null} notes={notes} />}
     >
       <h1 className="sr-only">
         {face === 'overview' ? 'Overview' : `Connections, ${page?.name ?? 'no place yet'}`}: {titleBlock.title}
@@ -241,8 +244,8 @@ function SheetOnView({ view, me, face, hoursWanted, preview = false }: SheetProp
             drawing={drawing}
             context={context}
             scene={scene}
-            drawn={drawn !== null}
-            ghost={ghost}
+            drawn={drawn.scene !== null}
+            ghost={drawn.ghost}
             notes={notes}
             slip={slip}
             pages={pages}

@@ -18,7 +18,7 @@ interface Asked<Task, Answer> {
 
 /**
  * Asks a worker, one task at a time. Of those that wait only the newest is done; an answer that is no longer asked for is
- * null. A worker that fails is made anew for the next task.
+ * null, unless late ones are wanted as well. A worker that fails is made anew for the next task.
  */
 export class WorkerLine<Task, Message extends object, Answer extends object> {
   private worker: LineWorker<Message, Answer> | null = null;
@@ -29,11 +29,13 @@ export class WorkerLine<Task, Message extends object, Answer extends object> {
   /**
    * @param tell what the worker is told of a task; `fresh` when it has been told nothing yet
    * @param unloaded said where the worker cannot be loaded and the browser gives no reason
+   * @param late whether an answer is worth having though a newer task waits by then
    */
   constructor(
     private readonly makeWorker: () => LineWorker<Message, Answer>,
     private readonly tell: (task: Task, fresh: boolean) => Message,
     private readonly unloaded: string,
+    private readonly late = false,
   ) {}
 
   ask(task: Task): Promise<Answer | Failure | null> {
@@ -71,8 +73,8 @@ export class WorkerLine<Task, Message extends object, Answer extends object> {
     const asked = this.running;
     if (asked?.id !== id) return;
     this.running = null;
-    // A newer task waits: this answer is about what is no longer on the sheet.
-    asked.resolve(this.waiting ? null : (outcome as Answer | Failure));
+    // Where a newer task waits, this answer is about what is no longer on the sheet.
+    asked.resolve(this.waiting && !this.late ? null : (outcome as Answer | Failure));
     this.start();
   }
 

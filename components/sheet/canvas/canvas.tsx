@@ -1,6 +1,6 @@
 'use client';
 
-import { useCallback, useMemo, useRef, type MouseEvent as ReactMouseEvent } from 'react';
+import { useCallback, useLayoutEffect, useMemo, useRef, type MouseEvent as ReactMouseEvent } from 'react';
 import {
   ConnectionMode,
   ReactFlow,
@@ -17,7 +17,7 @@ import type { Hands } from '../hands';
 import type { MarkedNote } from '../margin/notes';
 import { useSheet } from '../use-drawing';
 import { useView, useViewStore } from '../view';
-import { endDrag, useDrag } from './drag';
+import { dropDrag, settleDrag, useDrag } from './drag';
 import { edgeOf, nodeOf, type PartNode, type RunEdge } from './flow-items';
 import { GhostLayer } from './ghost-layer';
 import { GroundLayer } from './ground-layer';
@@ -81,6 +81,8 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
   useCamera(scene.parts.length > 0 || !ghost ? scene : ghost);
   useHold(box, hands);
 
+  useLayoutEffect(settleDrag, [scene]);
+
   const nodes = useMemo(
     () =>
       scene.parts.map((part) => {
@@ -136,18 +138,20 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
       ids: new Set(group.map(({ id }) => id)),
       dx: node.position.x / PX - start.x,
       dy: node.position.y / PX - start.y,
+      dropped: false,
     });
   }, []);
 
   const onNodeDragStop = useCallback(
     (_: unknown, node: PartNode, group: PartNode[]) => {
       const start = node.data.part;
-      hands.moveBy(
-        group.map(({ id }) => id),
-        node.position.x / PX - start.x,
-        node.position.y / PX - start.y,
+      dropDrag(
+        hands.moveBy(
+          group.map(({ id }) => id),
+          node.position.x / PX - start.x,
+          node.position.y / PX - start.y,
+        ),
       );
-      endDrag();
     },
     [hands],
   );

@@ -1,5 +1,5 @@
 import { memo } from 'react';
-import { Handle, Position, type NodeProps } from 'reactflow';
+import type { NodeProps } from 'reactflow';
 import type { ScenePart } from '@/diagram/layout/scene';
 import { symbolById } from '@/diagram/symbols';
 import { turnTransform } from '@/diagram/symbols/turn';
@@ -55,8 +55,9 @@ export const PartNodeView = memo(function PartNodeView({ data: { part } }: NodeP
       >
         <PartPicture part={part} />
       </svg>
-      {/* The library reads handles off the page; without one it draws no run for the pointer to take. */}
-      <Handle type="source" position={Position.Top} isConnectable={false} className="invisible" />
+      {/* The library reads handles off the page: without one it draws no run for the pointer to take. Its own component
+          would listen to every move of the canvas, once a part. */}
+      <i className="source" data-handlepos="top" />
     </>
   );
 });

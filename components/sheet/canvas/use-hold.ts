@@ -3,7 +3,7 @@
 import { useEffect, type RefObject } from 'react';
 import { useReactFlow } from 'reactflow';
 import type { Hands } from '../hands';
-import { endDrag, useDrag } from './drag';
+import { dropDrag, endDrag, useDrag } from './drag';
 import { PX } from './units';
 
 /** ms that a finger rests on a part before it may move it */
@@ -51,7 +51,7 @@ export function useHold(box: RefObject<HTMLDivElement | null>, hands: Hands): vo
       carried.ids = id !== undefined && parts.includes(id) ? parts : carried.ids;
       hands.store.getState().select({ parts: carried.ids, wires: [], terminal: null });
       hands.store.getState().say('Taken up: move it, or lift the finger to leave it.');
-      useDrag.setState({ ids: new Set(carried.ids), dx: 0, dy: 0 });
+      useDrag.setState({ ids: new Set(carried.ids), dx: 0, dy: 0, dropped: false });
     };
 
     const down = (event: PointerEvent) => {
@@ -80,8 +80,9 @@ export function useHold(box: RefObject<HTMLDivElement | null>, hands: Hands): vo
       if (carried?.pointer !== event.pointerId) return;
       const { ids } = carried;
       const { dx, dy } = useDrag.getState();
-      putBack();
-      if (event.type === 'pointerup' && Math.hypot(dx, dy) * flow.getZoom() * PX > STILL) hands.moveBy(ids, dx, dy);
+      carried = null;
+      const meant = event.type === 'pointerup' && Math.hypot(dx, dy) * flow.getZoom() * PX > STILL;
+      dropDrag(meant && hands.moveBy(ids, dx, dy));
     };
     const keep = (event: TouchEvent) => {
       if (!carried) return;

@@ -88,7 +88,7 @@ export function FindingNote({ note, inHand, proof, by, maySilence, hands, onTake
             <Button onClick={onTake} aria-pressed={inHand}>
               Go there
             </Button>
-            <Link href={`/rules/${finding.rule}`} className={buttonClass()}>
+            <Link href={`/rules/${finding.rule}`} prefetch={false} className={buttonClass()}>
               Read the lesson
             </Link>
             {maySilence && !silencing && <Button onClick={() => setSilencing(true)}>Let it stand</Button>}

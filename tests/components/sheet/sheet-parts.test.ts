@@ -6,7 +6,7 @@ import { Examiner, type ExamineWorker, type Told } from '@/components/sheet/marg
 import { keyOf, letterOf, notesOf } from '@/components/sheet/margin/notes';
 import { nextPart, firstPart, handEnd } from '@/components/sheet/navigate';
 import { nodeOf } from '@/components/sheet/canvas/flow-items';
-import { stableScene } from '@/components/sheet/canvas/stable-scene';
+import { deltaOf, withDelta } from '@/components/sheet/scene/scene-delta';
 import { walkFromSources } from '@/diagram/commands/walk';
 import { placeSupply } from '@/diagram/commands/place-supply';
 import { suggest } from '@/diagram/commands/extend/catalogue';
@@ -90,7 +90,7 @@ describe('the canvas draws again only what changed', () => {
     const before = buildScene(doc, 'overview');
     const mcb = doc.parts.find((part) => part.kind === 'mcb')!;
     const changed = applyPatch(doc, { set: { parts: [{ ...mcb, rating: 16 } as typeof mcb] } });
-    const after = stableScene(before, buildScene(changed, 'overview'));
+    const after = withDelta(before, deltaOf(before, buildScene(changed, 'overview')));
     const fresh = after.parts.filter((part) => !before.parts.includes(part));
     expect(fresh.map((part) => part.id)).toEqual([mcb.id]);
     expect(after.runs.filter((run) => !before.runs.includes(run))).toEqual([]);

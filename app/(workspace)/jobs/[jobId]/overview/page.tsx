@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { Sheet } from '@/components/sheet/sheet';
+import { firstScene } from '@/lib/server/drawings/first-scene';
 import { openDrawing } from '@/lib/server/drawings/open-drawing';
 import { readJob } from '@/lib/server/jobs/read-job';
 import { requireActor } from '@/lib/server/session';
@@ -20,6 +21,7 @@ export default async function OverviewPage({ params, searchParams }: Props) {
     <Sheet
       face="overview"
       view={view}
+      drawn={firstScene(view.document, 'overview')}
       me={{ id: actor.personId, initials: actor.initials }}
       hoursWanted={job.hoursWanted}
       preview={(await searchParams).preview === 'draft'}
