@@ -150,27 +150,33 @@ function solveTrunk({ network, inverters, voltage }: Trunk, cells: readonly Cell
   }
 }
 
-/** V across points, by id. @param wanted those whose volts are asked for; a branch without any is not looked into */
-export function voltsOfPoints(
+/**
+ * V across the points that are asked for, each told by its id; a branch without any is not looked into.
+ * @param wanted what is asked for
+ */
+export function tellVolts(
   { trunk, points, branches }: BranchNet,
   wanted: (point: string) => boolean,
-): Map<string, number> {
+  tell: (point: string, volts: number) => void,
+): void {
   const cut = solveTrunk(
     trunk,
     branches.map(({ cell }) => cell),
   );
-  const volts = new Map<string, number>();
+  const isWanted = ({ id }: Ends) => wanted(id);
   const read = (list: readonly Ends[], { re, im }: Volts) => {
-    for (const { id, line, neutral } of list)
-      volts.set(id, Math.hypot(re[line]! - re[neutral]!, im[line]! - im[neutral]!));
+    for (const { id, line, neutral } of list) {
+      const [x, y] = [re[line]! - re[neutral]!, im[line]! - im[neutral]!];
+      tell(id, Math.sqrt(x * x + y * y));
+    }
   };
-  read(points, cut);
+  read(points.filter(isWanted), cut);
   const most = branches.reduce((size, { cell }) => Math.max(size, cell.own.size), 0);
   const inside = { re: new Float64Array(most), im: new Float64Array(most) };
-  for (const branch of branches) {
-    if (!branch.points.some(({ id }) => wanted(id))) continue;
-    cellVolts(branch.cell, cut, inside);
-    read(branch.points, inside);
+  for (const { cell, points: own } of branches) {
+    const asked = own.filter(isWanted);
+    if (asked.length === 0) continue;
+    cellVolts(cell, cut, inside);
+    read(asked, inside);
   }
-  return volts;
 }

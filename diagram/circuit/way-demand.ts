@@ -104,3 +104,15 @@ function workOutItems({ drawn }: WayLoad): DemandItem[] {
 /** The demand of several ways together, after the practice's allowances, line by line. */
 export const demandOf = (ways: readonly WayLoad[], practice: Practice): Demand =>
   maximumDemand(ways.flatMap(itemsOf), practice);
+
+/** True when two states of a way ask for the same. */
+export function asksAlike(a: WayLoad, b: WayLoad): boolean {
+  const [one, other] = [itemsOf(a), itemsOf(b)];
+  return (
+    one.length === other.length &&
+    one.every(({ group, watts, currentA }, i) => {
+      const item = other[i]!;
+      return group === item.group && watts === item.watts && currentA === item.currentA;
+    })
+  );
+}

@@ -35,6 +35,8 @@ export interface WayFigures {
   feeder: FeederFault | null;
 }
 
+type Demands = Map<string, { ways: readonly string[]; demand: Demand }>;
+
 /** What flows together through devices, from what draws behind each of them. */
 export interface Together {
   /** ids of the ways behind a device, itself among them when it is one */
@@ -45,6 +47,8 @@ export interface Together {
   demandBehind(device: string): Demand;
   /** demand of the home on mains */
   demand: Demand;
+  /** demands that were asked for, by the ids of their ways */
+  demands: Demands;
   /** all that passes an overcurrent device, A and W */
   carriedBy(device: string): Pick<WayFigures, 'ibA' | 'demandWatts' | 'connectedWatts'>;
 }
@@ -90,8 +94,13 @@ function indexBehind(drawn: readonly Drawn[]): ReadonlyMap<string, Behind> {
   return behind;
 }
 
-/** Adds up what draws behind each device. */
-export function addUp(drawn: readonly Drawn[], loads: ReadonlyMap<string, WayLoad>, practice: Practice): Together {
+/** Adds up what draws behind each device. @param known demands that were worked out before, where they stand */
+export function addUp(
+  drawn: readonly Drawn[],
+  loads: ReadonlyMap<string, WayLoad>,
+  practice: Practice,
+  known?: Demands,
+): Together {
   const behind = indexBehind(drawn);
   const listed = new Map<string, readonly string[]>();
   const waysBehind = (device: string) => {
@@ -100,27 +109,29 @@ export function addUp(drawn: readonly Drawn[], loads: ReadonlyMap<string, WayLoa
     return ways;
   };
   // Devices in series carry the same ways: their demand is worked out once.
-  const demands = new Map<string, Demand>();
+  const demands: Demands = new Map();
   const together = (ways: readonly string[]): Demand => {
     const key = ways.join(' ');
     const list = () => ways.map((id) => loads.get(id)!);
-    const demand = demands.get(key) ?? demandOf(list(), practice);
-    demands.set(key, demand);
+    const { demand } = demands.get(key) ?? known?.get(key) ?? { demand: demandOf(list(), practice) };
+    demands.set(key, { ways, demand });
     return demand;
   };
-  const onMains = new Set(drawn.flatMap(({ way, source }) => (way !== null && source?.kind === 'mains' ? [way] : [])));
+  const onMains = new Set<string>();
+  for (const { way, source } of drawn) if (way !== null && source?.kind === 'mains') onMains.add(way);
   return {
     waysBehind,
     firstBehind: (device) => behind.get(device)?.first,
     demandBehind: (device) => together(waysBehind(device)),
+    demands,
     demand: together([...onMains].sort(byCode)),
     carriedBy(device) {
       const ids = waysBehind(device);
       const demand = ids.length === 1 && ids[0] === device ? loads.get(device)! : together(ids);
-      const known = ids.every((id) => loads.get(id)!.known);
+      const allKnown = ids.every((id) => loads.get(id)!.known);
       return {
-        ibA: known ? demand.demandA : null,
-        demandWatts: known ? demand.demandWatts : null,
+        ibA: allKnown ? demand.demandA : null,
+        demandWatts: allKnown ? demand.demandWatts : null,
         connectedWatts: ids.reduce((sum, id) => sum + loads.get(id)!.watts, 0),
       };
     },

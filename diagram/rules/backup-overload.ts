@@ -32,7 +32,9 @@ export const backupOverload: Rule = {
           `The most of it is ${sayParts(context, [largest.part.id])}.`,
         parts: [inverter.id],
         conditions,
-        remedies: [...largerInverter(context, figures, load), ...waysToMains(context, figures)],
+        get remedies() {
+          return [...largerInverter(context, figures, load), ...waysToMains(context, figures)];
+        },
       };
     }
   },

@@ -38,10 +38,12 @@ export const backupSurge: Rule = {
         message: `With the rest running, that start takes ${voltAmps(load.surgeVa)}; ${say(context, inverter.id)} gives ${voltAmps(inverter.surge)} for a moment.`,
         parts: [inverter.id, load.starts],
         conditions,
-        remedies: [
-          ...largerInverter(context, figures, load),
-          ...drawn.flatMap(({ part, way }) => (part.id === load.starts && way !== null ? wayToMains(context, way) : [])),
-        ],
+        get remedies() {
+          return [
+            ...largerInverter(context, figures, load),
+            ...drawn.flatMap(({ part, way }) => (part.id === load.starts && way !== null ? wayToMains(context, way) : [])),
+          ];
+        },
       };
     }
   },

@@ -39,7 +39,9 @@ export const duplicateRef: Rule = {
         heading: `${ref} names ${ids.length} parts`,
         message: `${ids.length} parts carry the designation ${ref}. Charts, lists and findings cannot tell them apart.`,
         parts: ids,
-        remedies: renumber(context, ref, ids),
+        get remedies() {
+          return renumber(context, ref, ids);
+        },
       };
     }
   },

@@ -92,7 +92,9 @@ export const noBackupIsolation: Rule = {
             )}.`,
         parts: [id, ...(single ? [single.id] : [])],
         conditions: [...conditions],
-        remedies: twoPoles(context, inverter, single),
+        get remedies() {
+          return twoPoles(context, inverter, single);
+        },
       };
     }
   },

@@ -51,7 +51,9 @@ export const noMainSwitch: Rule = {
         'No one switch, breaker or rcd lies before everything that the mains feed: the home cannot be made dead in one action.',
       parts: meter ? [meter.id] : [],
       conditions: onMains(context),
-      remedies: meter ? mainSwitchBehind(context, meter) : [],
+      get remedies() {
+        return meter ? mainSwitchBehind(context, meter) : [];
+      },
     };
   },
 };

@@ -96,7 +96,9 @@ export const noRcd: Rule = {
         message: `${capital(DUTY_NAME[of])} must lie behind an rcd${limit}; on mains nothing of the kind lies before ${names}. A person who touches a fault is not saved.`,
         parts: [...devices, ...inOrder(context, points).map(({ id }) => id)],
         conditions: [...conditions],
-        remedies: guard(context, devices, points),
+        get remedies() {
+          return guard(context, devices, points);
+        },
       };
     }
   },

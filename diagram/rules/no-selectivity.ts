@@ -61,7 +61,9 @@ export const noSelectivity: Rule = {
         heading: `${capital(say(context, upper))} opens together with ${sayParts(context, ids, 3)}`,
         message: `The ratings of ${say(context, upper)} and ${sayParts(context, ids)} are less than ${LEAST_RATIO} times apart: an overload behind may open both.`,
         parts: [upper, ...ids],
-        remedies: apart(context, upper, ids),
+        get remedies() {
+          return apart(context, upper, ids);
+        },
       };
     }
     for (const [upper, lower] of pairs(context, isResidual, tripTogether)) {
@@ -70,7 +72,9 @@ export const noSelectivity: Rule = {
         heading: `${capital(say(context, upper))} opens together with ${sayParts(context, ids, 3)}`,
         message: `${capital(say(context, upper))} has no delay, or not three times the sensitivity of ${sayParts(context, ids)}: a fault to earth opens both.`,
         parts: [upper, ...ids],
-        remedies: delayed(context, upper, ids),
+        get remedies() {
+          return delayed(context, upper, ids);
+        },
       };
     }
   },

@@ -44,7 +44,9 @@ export const rcdIdleOnBackup: Rule = {
           ...inOrder(context, points).map(({ id }) => id),
         ],
         conditions: [...conditions],
-        remedies: ways.size === 1 ? rcboInPlace(context, [...ways][0]!) : [],
+        get remedies() {
+          return ways.size === 1 ? rcboInPlace(context, [...ways][0]!) : [];
+        },
       };
     }
   },

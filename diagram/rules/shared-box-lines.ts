@@ -16,7 +16,7 @@ const isolates = (part: Part): boolean =>
   (part.kind === 'mcb' && polesOf(part) === 2);
 
 /** By way, the devices before it that isolate it, the main switch apart. */
-const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
+export const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
   const found = new Map<string, Set<string>>();
   const seen = new Set<readonly string[]>();
   for (const { points } of context.evaluated)
@@ -28,22 +28,6 @@ const isolatorsByWay = once((context: Context): Map<string, Set<string>> => {
         if (id !== context.mainSwitch?.id && isolates(context.graph.parts.get(id)!)) isolators.add(id);
       found.set(overcurrent, isolators);
     }
-  return found;
-});
-
-/** By part, the ways whose line runs over its terminals. */
-export const waysByPart = once((context: Context): Map<string, Set<string>> => {
-  const found = new Map<string, Set<string>>();
-  const devices = new Set(context.ways.map(({ device }) => device));
-  for (const { device, nodes } of context.sections) {
-    if (!devices.has(device.id)) continue;
-    for (const node of nodes) {
-      const { id } = context.graph.partOf[node]!;
-      const ways = found.get(id);
-      if (ways) ways.add(device.id);
-      else found.set(id, new Set([device.id]));
-    }
-  }
   return found;
 });
 
@@ -66,13 +50,9 @@ export const sharedBoxLines: Rule = {
   },
   *check(context) {
     const byDevice = new Map(context.ways.map((way) => [way.device, way]));
-    const byPart = waysByPart(context);
     for (const board of switchboards(context).values()) {
-      if (board.parts.some(({ id }) => byDevice.has(id))) continue;
-      const here = new Set<string>();
-      for (const { id } of board.parts) for (const way of byPart.get(id) ?? []) here.add(way);
-      if (here.size < 2) continue;
-      const held = [...here].flatMap((id) => byDevice.get(id) ?? []).sort((a, b) => a.number - b.number);
+      if (board.ways.size < 2 || board.held.some(({ part }) => byDevice.has(part.id))) continue;
+      const held = [...board.ways].flatMap((id) => byDevice.get(id) ?? []).sort((a, b) => a.number - b.number);
       // Mains beside backup is the matter of the notice of two sources.
       const ways = [false, true]
         .map((backup) => held.filter((way) => way.backup === backup))

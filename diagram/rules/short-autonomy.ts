@@ -32,7 +32,9 @@ export const shortAutonomy: Rule = {
           `${Math.round(100 * assumed.ageing)} % left with age and a Peukert exponent of ${assumed.peukert}.`,
         parts: [inverter.id],
         conditions,
-        remedies: [...largerBank(context, figures, wanted), ...waysToMains(context, figures)],
+        get remedies() {
+          return [...largerBank(context, figures, wanted), ...waysToMains(context, figures)];
+        },
       };
     }
   },

@@ -71,7 +71,9 @@ export const singlePoleMain: Rule = {
           : `The neutral passes ${say(context, main.id)} by: it stays joined to the street when the switch is off.`,
       parts: [main.id],
       conditions: onMains(context),
-      remedies: twoPoles(context, main),
+      get remedies() {
+        return twoPoles(context, main);
+      },
     };
   },
 };

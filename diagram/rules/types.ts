@@ -22,6 +22,7 @@ export interface Violation {
   wires?: readonly string[];
   /** names of the conditions in which it holds; all of them where left out */
   conditions?: readonly string[];
+  /** a getter where they take work or read far: only who asks for the remedies of a finding has them worked out */
   remedies?: readonly Remedy[];
 }
 

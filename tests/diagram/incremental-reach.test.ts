@@ -49,7 +49,7 @@ function lookAt(doc: Installation, seen: Seen): void {
     if (!named.has(key) && key !== quiet) continue;
     const touched = touchedBy(doc, doc, { parts: [id], wires: [], cables: [], common: false }, shape);
     const excerpt = excerptOf(shape, doc, doc, touched);
-    const alone = contextAfter(doc, doc.practice, shape, excerpt, touched);
+    const alone = contextAfter(doc.practice, shape, excerpt, touched);
     const place = { doc, trunk: shape.trunk, parts: touched.before };
     seen.branches++;
     for (const rule of rules) {

@@ -10,27 +10,24 @@ export function mustBe(holds: boolean, what: string): void {
   if (!holds) throw new Beyond(what);
 }
 
-/** An object of which only some fields are known: reading any other throws `Beyond`, so that nothing is guessed. */
-export function onlyKnown<T extends object>(name: string, known: Partial<T>): T {
-  const unknown = new Proxy(Object.create(null) as object, {
-    get(_, key) {
-      throw new Beyond(`${name}.${String(key)}`);
-    },
-  });
-  // As a prototype it is asked only for what the object itself has not: what is known is read as fast as ever.
-  return Object.setPrototypeOf({ ...known }, unknown) as T;
+const walls = new Map<string, object>();
+
+/** What stands behind all objects of a name: a field that one of them has not is looked for here, and throws. */
+function wallOf(name: string): object {
+  const wall =
+    walls.get(name) ??
+    (new Proxy(Object.create(null) as object, {
+      get(_, key) {
+        throw new Beyond(`${name}.${String(key)}`);
+      },
+    }));
+  walls.set(name, wall);
+  return wall;
 }
 
-/** A field that is worked out when it is first asked for. */
-export function later<T extends object, K extends keyof T>(object: T, key: K, workOut: () => T[K]): void {
-  const put = (value: T[K]) => Object.defineProperty(object, key, { value, enumerable: true });
-  Object.defineProperty(object, key, {
-    configurable: true,
-    enumerable: true,
-    get: () => {
-      const value = workOut();
-      put(value);
-      return value;
-    },
-  });
-}
+/**
+ * Makes of an object one of which only the fields it has are known: reading any other throws `Beyond`, so that nothing is
+ * guessed. The wall is its prototype: what is known is read as fast as ever.
+ */
+export const onlyKnown = <T extends object>(name: string, known: Partial<T>): T =>
+  Object.setPrototypeOf(known, wallOf(name)) as T;

@@ -6,7 +6,7 @@ import type { Graph } from '../../terminals/graph';
 import type { Section, Way } from '../../terminals/ways';
 import type { Context } from '../context';
 import { figuresOf } from '../readings/figures';
-import { later, mustBe, onlyKnown } from './beyond';
+import { mustBe, onlyKnown } from './beyond';
 import { mergeFigures } from './merged-figures';
 import { giveReadings } from './merged-readings';
 import { insertInOrder, mergedMap } from './merging';
@@ -95,8 +95,6 @@ export function mergeContexts(
   const evaluated = known.evaluated.map((each, i) => mergeEvaluated(each, now.evaluated[i]!, touched));
   const sections = mergeSections(known.sections, now.sections, touched, spine);
   const graph = onlyKnown<Graph>('the net', { document, parts, places: now.graph.places, loose: [] });
-  later(graph, 'cables', () => new Map(document.cables.map((cable) => [cable.id, cable])));
-  later(graph, 'wires', () => new Map(document.wires.map((wire) => [wire.id, wire])));
   const { mainSwitch, backups, practice } = now;
   const byKind = new Map<Part['kind'], Part[]>();
   const partsOf = (kind: Part['kind']) => {

@@ -1,4 +1,5 @@
 import type { Drawn } from '../../circuit/drawn';
+import { asksAlike, type WayLoad } from '../../circuit/way-demand';
 import { addUp, type Figures, type WayFigures } from '../../circuit/way-figures';
 import { mustBe, onlyKnown } from './beyond';
 import { mergedList, mergedMap } from './merging';
@@ -17,6 +18,15 @@ function passed(drawn: readonly Drawn[], trunk: ReadonlySet<string>): string {
   return [...found].sort().join(' ');
 }
 
+/** Demands that stand: none of their ways asks for something else than before. */
+function demandsAfter({ demands, loads: before }: Figures, loads: ReadonlyMap<string, WayLoad>): Figures['demands'] {
+  const stands = (way: string) => {
+    const [was, is] = [before.get(way)!, loads.get(way)];
+    return is !== undefined && (was === is || asksAlike(was, is));
+  };
+  return new Map([...demands].filter(([, { ways }]) => ways.every(stands)));
+}
+
 /** A home in numbers after an edit. @param spine what of the trunk `now` has  @throws Beyond */
 export function mergeFigures(known: Figures, now: Figures, touched: Touched, spine: ReadonlySet<string>): Figures {
   const { practice } = known;
@@ -27,7 +37,7 @@ export function mergeFigures(known: Figures, now: Figures, touched: Touched, spi
   ];
   mustBe(passed(known.drawn, spine) === passed(drawn, spine), 'what the trunk feeds');
   const loads = mergedMap(known.loads, now.loads, touched);
-  const together = addUp(drawn, loads, practice);
+  const together = addUp(drawn, loads, practice, demandsAfter(known, loads));
   const ways = mergedMap(known.ways, now.ways, touched);
   for (const id of spine) {
     const figures = ways.get(id);

@@ -57,7 +57,8 @@ const hasLead = ({ parts }: Installation): boolean => parts.some((part) => part.
  * lie in these branches and the other elsewhere, neither shows it alone. A lead that hangs loose is such a stretch, unsaid.
  */
 function mustShowGaps(was: ReturnType<typeof split>, is: ReturnType<typeof split>, docs: readonly Installation[]): void {
-  const isOpen = (findings: readonly Finding[]) => hasOne(findings, 'open-line', 'open-neutral') || docs.some(hasLead);
+  const lead = docs.some(hasLead);
+  const isOpen = (findings: readonly Finding[]) => lead || hasOne(findings, 'open-line', 'open-neutral');
   const hasEnd = (findings: readonly Finding[]) => hasOne(findings, 'open-terminal');
   const others = [...was.others, ...was.trunk];
   const apart = isOpen(was.own) || (isOpen(is.own) && hasEnd(others)) || (isOpen(others) && hasEnd(is.own));

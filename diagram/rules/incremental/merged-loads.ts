@@ -1,11 +1,12 @@
-import type { BranchNet } from '../../circuit/branch-volts';
-import { condenseBranches, mergeNets } from '../../circuit/branch-volts';
+import { condenseBranches, mergeNets, tellVolts, type BranchNet } from '../../circuit/branch-volts';
 import { standingsOf } from '../../circuit/steady';
+import { byCode } from '../../document/schema';
 import type { Context } from '../context';
 import type { LoadResult } from '../examination';
 import { branchesIn } from '../readings/branch-nets';
-import { isListed, loadVolts, rowOf, type Volts } from '../results/load-results';
+import { isListed, isSolved, roundVolts, rowOf } from '../results/load-results';
 import { Beyond } from './beyond';
+import { mergedList } from './merging';
 import type { Touched } from './touched';
 
 /** The home in every condition after an edit: the touched branches condensed anew. @throws Beyond */
@@ -20,32 +21,57 @@ export function netsAfter(known: readonly BranchNet[] | null, now: Context, { be
   });
 }
 
-/** V at every point in every condition, by the home as it is now. */
-export const voltsIn = ({ document, evaluated }: Context, nets: readonly BranchNet[]): Volts[] =>
-  evaluated.map((each, i) => loadVolts(document, each, [{ net: nets[i]!, points: [...each.points.keys()] }]));
-
-const sameVolts = ({ conditions }: LoadResult, part: string, names: readonly string[], volts: readonly Volts[]) =>
-  names.every((name, i) => conditions[name]!.volts === (volts[i]!.get(part) ?? null));
+/** By number of the condition V at the loads that stand otherwise than their row says, by id; of a touched load always. */
+function movedVolts(
+  { document, evaluated }: Context,
+  rows: ReadonlyMap<string, LoadResult>,
+  { after }: Touched,
+  nets: readonly BranchNet[],
+): ReadonlyMap<string, number>[] {
+  return evaluated.map(({ condition: { name }, asDrawn }, i) => {
+    const moved = new Map<string, number>();
+    const standing = (id: string): LoadResult['conditions'][string] | undefined => rows.get(id)?.conditions[name];
+    tellVolts(
+      nets[i]!,
+      (id) => {
+        if (after.has(id)) return isSolved(document, asDrawn.get(id)!);
+        const known = standing(id);
+        return known !== undefined && known.fed && known.volts !== null;
+      },
+      (id, volts) => {
+        const now = roundVolts(volts);
+        if (after.has(id) || standing(id)?.volts !== now) moved.set(id, now);
+      },
+    );
+    return moved;
+  });
+}
 
 /**
  * The rows of the loads after an edit; what did not change is the same row.
- * @param volts by condition; null where the edit moves no current
+ * @param nets by condition; null where the edit moves no current
  */
 export function mergedRows(
   context: Context,
   known: readonly LoadResult[],
-  { after }: Touched,
-  volts: readonly Volts[] | null,
+  touched: Touched,
+  nets: readonly BranchNet[] | null,
 ): LoadResult[] {
+  const rows = new Map(known.map((row) => [row.part, row]));
   const names = context.evaluated.map(({ condition }) => condition.name);
-  const rows: LoadResult[] = [];
-  let at = 0;
-  for (const part of context.document.parts) {
-    while (at < known.length && known[at]!.part < part.id) at++;
-    if (!isListed(part)) continue;
-    const before = known[at]?.part === part.id ? known[at] : undefined;
-    if (before && !after.has(part.id) && (!volts || sameVolts(before, part.id, names, volts))) rows.push(before);
-    else rows.push(rowOf(context, part.id, (i) => (volts ? (volts[i]!.get(part.id) ?? null) : before!.conditions[names[i]!]!.volts)));
-  }
-  return rows;
+  const moved = nets && movedVolts(context, rows, touched, nets);
+  moved?.forEach((volts, i) => {
+    const name = names[i]!;
+    for (const [part, now] of volts) {
+      const row = rows.get(part);
+      if (!row || touched.after.has(part)) continue;
+      const conditions = { ...row.conditions, [name]: { ...row.conditions[name]!, volts: now } };
+      rows.set(part, { part, conditions });
+    }
+  });
+  const voltsOf = (part: string) => (i: number) =>
+    moved ? moved[i]!.get(part) : (rows.get(part)!.conditions[names[i]!]!.volts ?? undefined);
+  const { parts } = context.graph;
+  const anew = [...touched.after].filter((id) => isListed(parts.get(id)!)).sort(byCode);
+  return mergedList([...rows.values()], anew.map((id) => rowOf(context, id, voltsOf(id))), touched, ({ part }) => part);
 }

@@ -5,35 +5,37 @@ import { liveOnMainOff } from '../live-after-main-off';
 import { backupsOf, figuresOf } from '../readings/figures';
 import { neutralFaults } from '../readings/neutral-faults';
 import { onOwnRod } from '../readings/rcd-duty';
-import { boardOf, switchboards, type Switchboard } from '../readings/switchboards';
-import { waysByPart } from '../shared-box-lines';
-import { feedsByPart } from '../two-sources-unmarked';
+import { boardOf, switchboardOf, switchboards, type Switchboard } from '../readings/switchboards';
+import { isolatorsByWay } from '../shared-box-lines';
 import { breakers } from '../weak-breaking-capacity';
 import { mustBe } from './beyond';
 import { insertInOrder, mergedList, mergedMap, mergedSet } from './merging';
 import type { Touched } from './touched';
 
-/** Switchboards: those that hold a touched part anew. */
-function mergeBoards(known: Context, now: Context, { before, after }: Touched): ReadonlyMap<string, Switchboard> {
+const sourcesOf = ({ held }: Switchboard, part: string): string =>
+  [...new Set(held.find((each) => each.part.id === part)!.feeds)].sort().join(' ');
+
+/** Switchboards: those that hold a touched part anew. @throws Beyond where a part of the trunk holds other sources */
+function mergeBoards(
+  known: Context,
+  now: Context,
+  { before, after }: Touched,
+  spine: ReadonlySet<string>,
+): ReadonlyMap<string, Switchboard> {
   const merged = new Map(switchboards(known));
+  const anew = switchboards(now);
+  for (const [key, board] of anew)
+    for (const { part } of board.held)
+      if (spine.has(part.id))
+        mustBe(sourcesOf(merged.get(key)!, part.id) === sourcesOf(board, part.id), 'what feeds the trunk');
   const keysOf = ({ graph }: Context, ids: ReadonlySet<string>) =>
-    [...ids].flatMap((id) => {
-      const part = graph.parts.get(id)!;
-      const key = boardOf(part);
-      return key === undefined ? [] : [{ key, part }];
-    });
-  for (const { key } of keysOf(known, before)) {
-    const board = merged.get(key);
-    if (!board) continue;
-    const parts = board.parts.filter(({ id }) => !before.has(id));
-    if (parts.length > 0) merged.set(key, { ...board, parts });
+    [...ids].flatMap((id) => boardOf(graph.parts.get(id)!) ?? []);
+  for (const key of new Set([...keysOf(known, before), ...keysOf(now, after)])) {
+    const held = (merged.get(key)?.held ?? []).filter(({ part }) => !before.has(part.id));
+    const own = (anew.get(key)?.held ?? []).filter(({ part }) => after.has(part.id));
+    insertInOrder(held, own, (a, b) => byDesignation(a.part, b.part));
+    if (held.length > 0) merged.set(key, switchboardOf(held));
     else merged.delete(key);
-  }
-  for (const { key, part } of keysOf(now, after)) {
-    const board = merged.get(key) ?? { place: part.place!, board: part.board, parts: [] };
-    const parts = [...board.parts];
-    insertInOrder(parts, [part], byDesignation);
-    merged.set(key, { ...board, parts });
   }
   return merged;
 }
@@ -60,13 +62,9 @@ export function giveReadings(
   // Only a home without any is put together.
   neutralFaults.give(context, []);
   onOwnRod.give(context, mergedSet(onOwnRod(known), onOwnRod(now), touched));
-  switchboards.give(context, mergeBoards(known, now, touched));
-  waysByPart.give(context, mergedMap(waysByPart(known), waysByPart(now), touched));
+  switchboards.give(context, mergeBoards(known, now, touched, spine));
+  isolatorsByWay.give(context, mergedMap(isolatorsByWay(known), isolatorsByWay(now), touched));
   breakers.give(context, mergedList(breakers(known), breakers(now), touched, ({ device }) => device.id));
-  const kinds = (feeds: readonly string[] = []) => [...new Set(feeds)].sort().join(' ');
-  for (const id of spine)
-    mustBe(kinds(feedsByPart(known).get(id)) === kinds(feedsByPart(now).get(id)), 'what feeds the trunk');
-  feedsByPart.give(context, mergedMap(feedsByPart(known), feedsByPart(now), touched));
   liveOnMainOff.give(context, mergeLive(known, now, touched));
   backupsOf.give(context, workOutBackups(now.graph, context.evaluation, figuresOf(context).drawn));
 }

@@ -1,8 +1,9 @@
-import type { Branches } from '../../circuit/branches';
 import { ohmOf, supplySide } from '../../circuit/way-paths';
 import type { Context } from '../context';
+import { branchesIn } from '../readings/branch-nets';
 import { figuresOf } from '../readings/figures';
 import { neutralFaults } from '../readings/neutral-faults';
+import { once } from '../readings/once';
 import { ownEdges } from '../readings/shared-neutrals';
 
 /**
@@ -36,8 +37,9 @@ export function isRegular(context: Context, trunk: ReadonlySet<string>): boolean
 export type Leaning = ReadonlyMap<string, ReadonlySet<string>>;
 
 /** Finds what leans: the current of one such branch moves the volts that others lose. */
-export function leaning(context: Context, { trunk, branchOf }: Branches): Leaning {
+export const leaning = once((context: Context): Leaning => {
   const { graph } = context;
+  const { trunk, branchOf } = branchesIn(context);
   const outside = supplySide(graph);
   const resists = new Map<number, string>();
   graph.edges.forEach(({ a, b, wire }, number) => {
@@ -55,4 +57,4 @@ export function leaning(context: Context, { trunk, branchOf }: Branches): Leanin
       }
   }
   return found;
-}
+});

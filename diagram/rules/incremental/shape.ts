@@ -1,13 +1,18 @@
 import type { BranchNet } from '../../circuit/branch-volts';
 import { findLimbs, type Branches } from '../../circuit/branches';
+import type { Wire } from '../../document/schema';
 import type { Context } from '../context';
 import type { Finding } from '../types';
 import { branchesIn, branchNets } from '../readings/branch-nets';
+import { membersOf, type Members } from './members';
 import { isOfBranch } from './merged-findings';
 import { isRegular, leaning, type Leaning } from './regular';
 
 /** A home that falls into a trunk and branches, and what is known of each. */
 export interface Shape extends Branches {
+  /** by key of a branch */
+  members: ReadonlyMap<string, Members>;
+  trunkWires: readonly Wire[];
   /** by id of a part of the trunk, the limb that it belongs to; the rest of the trunk is in every excerpt */
   limbOf: ReadonlyMap<string, string>;
   /** by key of a branch, the cables of the trunk that its points draw over */
@@ -31,8 +36,9 @@ export function shapeOf(context: Context, findings: readonly Finding[]): Shape |
   if (!isRegular(context, branches.trunk)) return null;
   return {
     ...branches,
+    ...membersOf(context.document, branches),
     limbOf: findLimbs(context.graph, branches),
-    leaning: leaning(context, branches),
+    leaning: leaning(context),
     positions: context.evaluation.positions.count,
     findings: findings.filter(isOfBranch),
     nets: netsOf(context),

@@ -1,27 +1,26 @@
 import { isOfTrunk } from '../../circuit/branches';
-import type { Installation, Wire } from '../../document/schema';
+import { findById, type Installation, type Wire } from '../../document/schema';
 import { Beyond } from './beyond';
 import type { Difference } from './difference';
 import type { Shape } from './shape';
 
-/** The branches that an edit touches, by their keys before it, and their parts before and after it. */
+/** The branches that an edit touches, by their keys before it; their parts, and the wires at those, before and after it. */
 export interface Touched {
   keys: ReadonlySet<string>;
   before: ReadonlySet<string>;
   after: ReadonlySet<string>;
+  wires: { before: readonly Wire[]; after: readonly Wire[] };
 }
+
+const findAll = <T extends { id: string }>(list: readonly T[], ids: readonly string[]): T[] =>
+  ids.flatMap((id) => findById(list, id) ?? []);
 
 /** Every wire, of before and after, that an edit changed or that lies in a cable it changed. */
 function wiresOf(before: Installation, after: Installation, { wires, cables }: Difference): Wire[] {
-  if (wires.length + cables.length === 0) return [];
-  const changed = new Set(wires);
-  const lists = [before.wires, after.wires];
-  const inCables = new Set(cables);
-  for (const list of lists)
-    for (const { id, cable } of list) if (cable !== undefined && changed.has(id)) inCables.add(cable);
-  const found = lists.flatMap((list) =>
-    list.filter(({ id, cable }) => changed.has(id) || (cable !== undefined && inCables.has(cable))),
-  );
+  const found = [...findAll(before.wires, wires), ...findAll(after.wires, wires)];
+  const inCables = new Set([...cables, ...found.flatMap(({ cable }) => cable ?? [])]);
+  if (inCables.size > 0)
+    for (const wire of after.wires) if (wire.cable !== undefined && inCables.has(wire.cable)) found.push(wire);
   const used = new Set(found.map(({ cable }) => cable));
   for (const id of cables) if (!used.has(id)) throw new Beyond(`what the cable ${id} belongs to`);
   return found;
@@ -41,7 +40,7 @@ export function touchedBy(before: Installation, after: Installation, difference:
   if (difference.common) throw new Beyond('what hangs on the data of the home');
   const { trunk, branchOf } = shape;
   const changed = new Set(difference.parts);
-  const anew = new Map(after.parts.filter(({ id }) => changed.has(id)).map((part) => [part.id, part]));
+  const anew = new Map(findAll(after.parts, difference.parts).map((part) => [part.id, part]));
   const keys = new Set<string>();
   const fresh = new Set<string>();
   const touch = (id: string) => {
@@ -66,7 +65,17 @@ export function touchedBy(before: Installation, after: Installation, difference:
     for (const [part] of outside) touch(part);
   }
   addLeaning(keys, shape);
-  const own = new Set<string>();
-  for (const [id, key] of branchOf) if (keys.has(key)) own.add(id);
-  return { keys, before: own, after: new Set([...[...own].filter((id) => !changed.has(id) || anew.has(id)), ...fresh]) };
+  const touched = [...keys].map((key) => shape.members.get(key)!);
+  const own = new Set(touched.flatMap(({ parts }) => [...parts]));
+  const wires = touched.flatMap((members) => members.wires);
+  const changedWires = new Set(difference.wires);
+  return {
+    keys,
+    before: own,
+    after: new Set([...[...own].filter((id) => !changed.has(id) || anew.has(id)), ...fresh]),
+    wires: {
+      before: wires,
+      after: [...wires.filter(({ id }) => !changedWires.has(id)), ...findAll(after.wires, difference.wires)],
+    },
+  };
 }

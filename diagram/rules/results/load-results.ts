@@ -1,32 +1,36 @@
-import { voltsOfPoints } from '../../circuit/branch-volts';
-import type { Evaluated } from '../../circuit/evaluate';
+import { tellVolts } from '../../circuit/branch-volts';
+import type { Evaluated, PointState } from '../../circuit/evaluate';
 import type { Installation, Part } from '../../document/schema';
 import { isLoad } from '../../terminals/roles-of-parts';
 import type { Context } from '../context';
 import type { LoadResult } from '../examination';
 import { branchNets, type StandingNet } from '../readings/branch-nets';
 
-/** V at points, by id; null where it cannot be said */
-export type Volts = ReadonlyMap<string, number | null>;
+/** Without the supply's own loop it is not known what is lost before the origin: V on mains would be a guess. */
+const isGuess = ({ supply }: Installation, { source }: PointState): boolean =>
+  source?.kind === 'mains' && supply.zln === undefined;
 
-/**
- * V at every point with all loads on, by id. Null for all where the supply's own loop is not known: what is lost before
- * the origin would be a guess. What nothing feeds stands at 0.
- */
-export function loadVolts(
-  { supply }: Installation,
-  { condition, asDrawn }: Evaluated,
-  standings: readonly StandingNet[],
-): Volts {
-  const onMains = condition.sources.some(({ kind }) => kind === 'mains');
-  const found = new Map<string, number | null>();
+/** True where V at a point are to be solved for; what nothing feeds stands at 0. */
+export const isSolved = (document: Installation, state: PointState): boolean => state.fed && !isGuess(document, state);
+
+/** V as it is told: a millivolt is far below what any figure means. */
+export const roundVolts = (volts: number): number => Math.round(1000 * volts) / 1000;
+
+/** V at every load with all of them on, by id; those that are not solved are left out. */
+function loadVolts(document: Installation, { asDrawn }: Evaluated, standings: readonly StandingNet[]): Map<string, number> {
+  const found = new Map<string, number>();
   for (const { net, points } of standings) {
-    const volts = voltsOfPoints(net, (id) => asDrawn.get(id)!.fed);
-    for (const id of points) {
-      const { fed, source } = asDrawn.get(id)!;
-      const unknown = onMains && source?.kind === 'mains' && supply.zln === undefined;
-      found.set(id, unknown ? null : fed ? Math.round(1000 * volts.get(id)!) / 1000 : 0);
-    }
+    const here = new Set(
+      points.filter((id) => {
+        const state = asDrawn.get(id)!;
+        return isListed(state.part) && isSolved(document, state);
+      }),
+    );
+    tellVolts(
+      net,
+      (id) => here.has(id),
+      (id, volts) => found.set(id, roundVolts(volts)),
+    );
   }
   return found;
 }
@@ -34,12 +38,21 @@ export function loadVolts(
 /** Lamps, fans and appliances, and sockets that a load is assumed at. */
 export const isListed = (part: Part): boolean => isLoad(part) || (part.kind === 'socket' && part.load !== undefined);
 
-/** How a load stands in every condition. @param volts by number of the condition */
-export function rowOf({ evaluated }: Context, part: string, volts: (condition: number) => number | null): LoadResult {
+/**
+ * How a load stands in every condition.
+ * @param volts by number of the condition, where it is solved
+ */
+export function rowOf(
+  { document, evaluated }: Context,
+  part: string,
+  volts: (condition: number) => number | undefined,
+): LoadResult {
   const conditions: LoadResult['conditions'] = {};
   evaluated.forEach(({ condition, asDrawn }, i) => {
-    const { fed, source, overcurrent, rcd } = asDrawn.get(part)!;
-    conditions[condition.name] = { fed, from: source?.part.id ?? null, volts: volts(i), overcurrent, rcd };
+    const state = asDrawn.get(part)!;
+    const { fed, source, overcurrent, rcd } = state;
+    const known = isGuess(document, state) ? null : fed ? volts(i)! : 0;
+    conditions[condition.name] = { fed, from: source?.part.id ?? null, volts: known, overcurrent, rcd };
   });
   return { part, conditions };
 }
@@ -50,5 +63,5 @@ export function loadResults(context: Context): LoadResult[] {
   const volts = context.evaluated.map((each) => loadVolts(context.document, each, nets.get(each.condition.name)!));
   return context.document.parts
     .filter(isListed)
-    .map(({ id }) => rowOf(context, id, (condition) => volts[condition]!.get(id) ?? null));
+    .map(({ id }) => rowOf(context, id, (condition) => volts[condition]!.get(id)));
 }
