@@ -17,7 +17,7 @@ function Cell({ name, children, strong, className = '' }: { name: string; childr
   return (
     <div className={`min-w-0 border-r border-ink px-2 py-1 last:border-r-0 ${className}`}>
       <dt className="text-small leading-[14px] whitespace-nowrap text-grey">{name}</dt>
-      <dd className={`truncate leading-[15px] ${strong ? 'font-bold' : ''}`} title={typeof children === 'string' ? children : undefined}>
+      <dd dir="auto" className={`truncate leading-[15px] ${strong ? 'font-bold' : ''}`} title={typeof children === 'string' ? children : undefined}>
         {children}
       </dd>
     </div>

@@ -74,6 +74,7 @@ export function GridCell(props: GridCellProps) {
   return (
     <input
       ref={input}
+      dir={props.numeric ? undefined : 'auto'}
       data-cell={props.name}
       data-typing={typed === null ? undefined : ''}
       aria-label={props.label}

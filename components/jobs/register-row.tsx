@@ -58,7 +58,7 @@ export function RegisterRow({ job, today, mine, inHand, unfolded, sheet, mayEdit
           </button>
         </td>
         <td role="cell" className={`${cell} ${strong} py-1`}>
-          {job.title}, {job.client}
+          <bdi>{job.title}</bdi>, <bdi>{job.client}</bdi>
         </td>
         <td role="cell" className={`${cell} whitespace-nowrap max-[900px]:hidden`}>
           {drawnChecked(job) || '-'}

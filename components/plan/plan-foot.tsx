@@ -47,6 +47,7 @@ export function PlanFoot({ drawing, state, onAnother }: PlanFootProps) {
           <span className="flex gap-2">
             <input
               autoFocus
+              dir="auto"
               aria-label="Name of the storey"
               value={name}
               maxLength={60}

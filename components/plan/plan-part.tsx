@@ -51,7 +51,7 @@ export function PlanPart({ part, at, held = false, locked = false, ghost = false
         vectorEffect="non-scaling-stroke"
       />
       <SymbolGlyph symbol={symbol} x={x} y={y} turn={(turn * 90) as 0 | 90 | 180 | 270} />
-      {locked && <Padlock x={-ROOM} y={-ROOM} />}
+      {locked && <Padlock x={-ROOM - 220} y={0} />}
       {part.ref && (
         <text
           x={width + 2 * ROOM}

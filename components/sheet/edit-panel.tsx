@@ -62,6 +62,7 @@ function EditField({ label, value, hint, first = false, commit, hands, onDone }:
       <input
         id={id}
         ref={field}
+        dir="auto"
         aria-describedby={error ? `${id}-why` : undefined}
         value={text}
         onChange={(event) => {

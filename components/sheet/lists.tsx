@@ -46,6 +46,7 @@ export function ListPanel({ label, placeholder, items, onPick, onLeave, children
     <div role="dialog" aria-label={label} className="w-full border-y-2 border-ink bg-paper" onKeyDown={onKeyDown}>
       <input
         ref={field}
+        dir="auto"
         role="combobox"
         aria-expanded="true"
         aria-controls={list}

@@ -51,6 +51,7 @@ export function RoomPanel({ mode, hands, onLeave }: { mode: Extract<Mode, { kind
         <span className="block text-small text-grey">Name of the new room</span>
         <input
           ref={field}
+          dir="auto"
           value={name}
           maxLength={80}
           aria-invalid={error ? true : undefined}

@@ -16,6 +16,7 @@ export function PasteBox({ onPaste, onClose }: { onPaste(text: string): void; on
       </label>
       <textarea
         id="paste-rows"
+        dir="auto"
         autoFocus
         rows={4}
         value={text}

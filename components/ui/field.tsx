@@ -55,7 +55,7 @@ export function TextField({ label, hint, error, unit, optional, className = '', 
   const { id, describedBy } = useFieldIds(hint, error);
   return (
     <Around {...{ id, label, hint, error, unit, optional }}>
-      <input {...input} id={id} aria-invalid={error ? true : undefined} aria-describedby={describedBy} className={`${box} ${className}`} />
+      <input dir="auto" {...input} id={id} aria-invalid={error ? true : undefined} aria-describedby={describedBy} className={`${box} ${className}`} />
     </Around>
   );
 }

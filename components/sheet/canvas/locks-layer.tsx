@@ -12,7 +12,7 @@ export const LocksLayer = memo(function LocksLayer({ scene, drawing }: { scene: 
   return (
     <Layer scene={scene} level={3} name="locks">
       {locked.map((part) => (
-        <Padlock key={part.id} part={part.id} x={part.x - 130} y={part.y - 30} />
+        <Padlock key={part.id} part={part.id} x={part.x - 420} y={part.y} />
       ))}
     </Layer>
   );

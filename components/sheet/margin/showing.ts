@@ -26,10 +26,13 @@ export function askToShow({ view, store }: Hands): void {
 }
 
 /** The proof of a finding has come: its walk begins where it was asked for. */
-export function answerShow({ view, store }: Hands, finding: string, { walk, cannot }: Proof): void {
-  const { wantsWalk, set } = view.getState();
+export function answerShow({ view, store, doc }: Hands, finding: string, { walk, cannot }: Proof): void {
+  const { wantsWalk, face, set } = view.getState();
   if (wantsWalk !== finding) return;
   set({ wantsWalk: null, ...(walk && { walk: showWalk(finding, walk) }) });
+  const at = doc.parts.find(({ id }) => id === walk?.faults.at(-1)?.at)?.place;
+  // On the connections the page that is turned to is the one on which the fault is.
+  if (face === 'connections' && at !== undefined) set({ place: at });
   if (!walk) store.getState().say(cannot ? `The fault ${cannot}.` : 'No fault shows this finding: its words say it all.');
 }
 
