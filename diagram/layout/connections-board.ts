@@ -10,15 +10,16 @@ import {
   isLongBar,
   isOpen,
   putPart,
+  sizeOn,
   type PageState,
 } from './connections-page-state';
 import { feedsInverter, walk, type TreeNode } from './overview-tree';
 import type { Hanging } from './overview-ways';
 
-/** Below a device of the column: more where what leaves it for the bars and the arrester turns. */
-const gapBelow = (part: Part): number => (part.kind === 'isolator' || part.kind === 'mcb' ? m(6) : m(3));
 /** The distributor's own, over the board. */
 const SERVICE: ReadonlySet<string> = new Set(['supply', 'fuse', 'meter']);
+/** From the left edge of the service to the first device of the board: the meter's name and both tails stand between. */
+const BESIDE_SERVICE = m(24);
 /** From one bar to the next below it. */
 const BAR_PITCH = m(6);
 
@@ -56,14 +57,14 @@ export function placeBoard(s: PageState): void {
       if (feedsInverter(node) || node.part.kind === 'spd') side.push(node);
       else trunk.push(node);
     }
+  const devices = trunk.filter((node) => !isLongBar(node.part.kind));
+  const service = devices.filter((node) => SERVICE.has(node.part.kind));
   let y: number = TOP.first - m(8);
-  // the bars begin beside the first device that stands in the board: service fuse and meter stay over it
-  let boardTop: number = TOP.first;
-  for (const node of trunk.filter((n) => !isLongBar(n.part.kind))) {
-    y = putPart(s, node.part, LEFT, y).bottom + gapBelow(node.part);
-    if (SERVICE.has(node.part.kind)) boardTop = y;
-  }
-  const right = trunk.length > 0 ? LEFT + m(22) : LEFT;
+  for (const node of service) y = putPart(s, node.part, LEFT, y).bottom + m(3);
+  // the board stands beside the distributor's own, not under it: its tails rise to the first device
+  const column = service.length > 0 && service.length < devices.length ? LEFT + BESIDE_SERVICE : LEFT;
+  y = column === LEFT ? y : TOP.first;
+  const right = trunk.length > 0 ? column + m(22) : LEFT;
   // rows, from above: bars of the column, devices over the bars, earth, neutral, line, ways
   const trunkBars = trunk.filter((n) => isLongBar(n.part.kind));
   const chainRows = Math.max(0, ...[...chains.values()].map((chain) => chain.length));
@@ -71,7 +72,14 @@ export function placeBoard(s: PageState): void {
   const above = [...s.page.parts].filter(
     (part) => part.kind === 'neutral-bar' && ![...neutralOf.values()].flat().includes(part),
   );
-  let row = Math.max(TOP.first, boardTop);
+  // bars that a device further down is fed from stand between it and the one that feeds them
+  let row: number = TOP.first;
+  for (const [i, node] of devices.slice(service.length).entries()) {
+    const { bottom } = putPart(s, node.part, column, y);
+    const between = trunkBars[0]?.parent === node && service.length + i < devices.length - 1;
+    if (between) row = bottom + m(3);
+    y = bottom + (between ? BAR_PITCH * (above.length + trunkBars.length) + m(4) : m(6));
+  }
   for (const part of above) {
     putPart(s, part, right, row);
     row += BAR_PITCH;
@@ -83,9 +91,22 @@ export function placeBoard(s: PageState): void {
   // feeders and arresters hang from the bars of the column at their left end
   let sideX = right + m(2);
   const chainTop = row + m(1);
-  for (const node of side) sideX = putPart(s, node.part, sideX, chainTop).right + m(7);
+  // where the ways hang straight from the column, what feeds the backup stands beyond them
+  const beyond = chainRows === 0 ? side.filter(feedsInverter) : [];
+  // an arrester stands lower than what it hangs on
+  const under = ({ part, parent }: TreeNode): number => {
+    const above = part.kind === 'spd' && parent ? s.positions.get(parent.part.id) : undefined;
+    return above ? Math.max(chainTop, above.y + sizeOn(s, parent!.part).height + m(3)) : chainTop;
+  };
+  let sideBottom = chainTop;
+  for (const node of side) {
+    if (beyond.includes(node)) continue;
+    const { right: end, bottom } = putPart(s, node.part, sideX, under(node));
+    sideX = end + m(7);
+    sideBottom = Math.max(sideBottom, bottom + m(3));
+  }
   let x = side.length > 0 && chainRows === 0 ? right : side.length > 0 ? sideX : right;
-  row = chainTop + (chainRows > 0 || side.length > 0 ? Math.max(1, chainRows) * m(13) : 0);
+  row = Math.max(sideBottom, chainTop + (chainRows > 0 || side.length > 0 ? Math.max(1, chainRows) * m(13) : 0));
   const earthRow = row;
   for (const part of s.page.parts) if (part.kind === 'earth-bar') putPart(s, part, right, row);
   row += BAR_PITCH;
@@ -111,7 +132,7 @@ export function placeBoard(s: PageState): void {
     let slot = start + m(4);
     for (const item of [...items].sort((a, b) => a.order - b.order)) {
       const { right: end } = putPart(s, item.head!.part, slot, ways);
-      slot = end + m(1) + FOOT_CORE + FOOT_GAP;
+      slot = end + m(1) + FOOT_CORE + FOOT_GAP + (footCables(s, item.head!.part) - 1) * (2 * FOOT_CORE + FOOT_GAP + m(2));
     }
     const longest = Math.max(
       0,
@@ -120,6 +141,7 @@ export function placeBoard(s: PageState): void {
     const inRoom = Math.max(0, ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => ledAway(s, part)));
     x = Math.max(slot + inRoom * m(3), start + m(16), start + m(8) + longest * m(3)) + m(10);
   }
+  for (const node of beyond) x = putPart(s, node.part, x, chainTop).right + m(12);
   const earths = Math.max(
     0,
     ...s.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => s.marks.get(part.id)?.length ?? 0),
@@ -136,6 +158,10 @@ export function placeBoard(s: PageState): void {
     m(8) +
     m(3) * Math.max(0, ...s.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => ledAway(s, part)));
 }
+
+/** Cables that leave the board under a device: two where its way is a ring. */
+const footCables = (s: PageState, { id }: Part): number =>
+  Math.max(1, s.page.cables.filter(({ atFoot, cores }) => atFoot && cores.some(({ here }) => here[0] === id)).length);
 
 /** Cores of a bar that go to a load or joint of the same place: their terminals stand beyond those of the ways. */
 function ledAway(s: PageState, bar: Part): number {

@@ -79,7 +79,13 @@ export function placeCables(
   // over the terminal itself, or just left of the line bar it feeds
   const wish = (core: Core): number | undefined =>
     bodies.get(core.here[0])?.terminals.find((t) => t.mark === core.here[1])?.x ?? bars.get(core.here[0]);
-  const lowest = Math.max(TOP.first, ...[...bodies.values()].map((body) => body.y + body.height));
+  // what leaves at the foot leaves below all that stands over it, whatever hangs lower beside the board
+  const leaving = page.cables.flatMap(({ atFoot, cores }) => (atFoot ? cores.flatMap(({ here }) => bodies.get(here[0]) ?? []) : []));
+  const edge = leaving.length > 0 ? Math.max(...leaving.map(({ x, width }) => x + width)) + m(14) : Infinity;
+  const lowest = Math.max(
+    TOP.first,
+    ...[...bodies.values()].filter(({ x }) => x < edge).map((body) => body.y + body.height),
+  );
   const rowOf = (atFoot: boolean): PlacedCable[] => {
     const list = page.cables.filter((cable) => cable.atFoot === atFoot);
     const wishes = (cable: PageCable): number[] => cable.cores.flatMap((core) => wish(core) ?? []);
@@ -203,7 +209,10 @@ function barBody(
   for (const mark of [...later.sort((a, b) => Number(a) - Number(b)), ...used])
     if (!terminals.some((t) => t.mark === mark))
       terminals.push({ mark, x: (least += 3 * MODULE), y: axis, side: 'up' });
-  const right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 3 * MODULE;
+  let right = Math.max(at.x + 8 * MODULE, ...terminals.map((t) => t.x)) + 3 * MODULE;
+  // a terminal without a wire stands in no core's way
+  const passing = new Set([...stubAt.values()].map(({ x }) => x));
+  while (passing.has(right)) right += MODULE;
   let free = 1;
   while (terminals.some((t) => t.mark === String(free))) free++;
   terminals.push({ mark: String(free), x: right, y: axis, side: 'up' });

@@ -218,10 +218,12 @@ function edgesOfPage(requests: readonly RouteRequest[], cables: readonly PlacedC
   const xs = requests.flatMap(({ from, to }) => [from.x, to.x]);
   const [left, right] = [Math.min(...xs) - m(40), Math.max(...xs) + m(40)];
   const head = cables.find(({ cable }) => !cable.atFoot)?.stubs[0];
-  const foot = cables.find(({ cable }) => cable.atFoot)?.stubs[0];
+  const feet = cables.filter(({ cable }) => cable.atFoot);
+  const foot = feet[0]?.stubs[0];
+  const beyond = Math.max(...feet.map((cable) => cable.right)) + m(14);
   return [
     ...(head ? [{ id: 'head', x: left, y: head.y - m(20), width: right - left, height: m(20) - 1 }] : []),
-    ...(foot ? [{ id: 'foot', x: left, y: foot.y + 1, width: right - left, height: m(20) }] : []),
+    ...(foot ? [{ id: 'foot', x: left, y: foot.y + 1, width: beyond - left, height: m(20) }] : []),
   ];
 }
 
