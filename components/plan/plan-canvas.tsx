@@ -4,11 +4,13 @@ import { useEffect, useRef, useState, type CSSProperties, type KeyboardEvent, ty
 import { symbolFor } from '@/diagram/symbols';
 import { light } from '@/diagram/symbols/palette';
 import { pictureHref } from '@/lib/shared/uploads';
+import { useBox } from '@/components/sheet/floating';
 import { useSuspended, useSuspending } from '@/components/sheet/guiding';
 import { MeasureLine, ScaleMark } from './measure-line';
 import { PlanGuides } from './plan-guides';
 import { LETTERS, PlanPart } from './plan-part';
 import type { Plan, Point } from './use-plan';
+import { ZoomButtons } from './zoom-buttons';
 
 /** 1/100 mm of paper round the picture */
 const EDGE = 400;
@@ -45,15 +47,16 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
   const held = inHand[0];
   const { width: planWidth, height: planHeight } = plan ?? { width: 0, height: 0 };
 
+  /** px for 1/100 mm at which the whole plan is in sight; 0 before anything is laid out */
+  const { width: boxWidth, height: boxHeight } = useBox(box);
+  const fit = Math.min(boxWidth / (planWidth + 2 * EDGE), boxHeight / (planHeight + 2 * EDGE));
   useEffect(() => {
     // On a small screen the whole plan would be too small to read: it opens larger, and is scrolled.
     const frame = requestAnimationFrame(() => {
-      const { width = 0, height = 0 } = box.current?.getBoundingClientRect() ?? {};
-      const scale = Math.min(width / (planWidth + 2 * EDGE), height / (planHeight + 2 * EDGE));
-      if (scale > 0) setZoom((now) => (now === 1 ? Math.min(3, Math.max(1, LEAST_PX / (LETTERS * scale))) : now));
+      if (fit > 0) setZoom((now) => (now === 1 ? Math.min(3, Math.max(1, LEAST_PX / (LETTERS * fit))) : now));
     });
     return () => cancelAnimationFrame(frame);
-  }, [box, planWidth, planHeight]);
+  }, [fit]);
 
   useEffect(() => {
     box.current?.querySelector('[data-held]')?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
@@ -129,6 +132,11 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
     event.preventDefault();
   };
 
+  // As large as the plan is drawn: what lies beside it is no paper, and scrolls with nothing.
+  const size =
+    fit > 0
+      ? { width: Math.floor(zoom * fit * (plan.width + 2 * EDGE)), height: Math.floor(zoom * fit * (plan.height + 2 * EDGE)) }
+      : { width: '100%', height: '100%' };
   const viewBox = `${-EDGE} ${-EDGE} ${plan.width + 2 * EDGE} ${plan.height + 2 * EDGE}`;
   return (
     <div className="relative h-full min-h-[50dvh]">
@@ -137,7 +145,7 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
         role="application"
         aria-label={`Plan of the ${plan.name}`}
         tabIndex={0}
-        className="h-full overflow-auto bg-behind focus-visible:-outline-offset-2"
+        className="flex h-full overflow-auto bg-behind focus-visible:-outline-offset-2"
         onKeyDown={onKeyDown}
         onBlur={state.endNudge}
       >
@@ -145,8 +153,8 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
           ref={svg}
           viewBox={viewBox}
           preserveAspectRatio="xMidYMid meet"
-          style={{ ...PAPER, width: `${zoom * 100}%`, height: `${zoom * 100}%` }}
-          className={`block ${placing || tool.kind ? 'cursor-crosshair touch-none' : ''}`}
+          style={{ ...PAPER, ...size }}
+          className={`m-auto block shrink-0 ${placing || tool.kind ? 'cursor-crosshair touch-none' : ''}`}
           onPointerMove={move}
           onPointerUp={end}
           onPointerCancel={cancel}
@@ -192,24 +200,7 @@ export function PlanCanvas({ state, box, onKey }: PlanCanvasProps) {
           <MeasureLine tool={tool} plan={plan} />
         </svg>
       </div>
-      <div className="absolute right-3 bottom-3 flex border border-ink bg-paper">
-        {(
-          [
-            ['−', 'Smaller', () => setZoom(Math.max(1, zoom / ZOOM))],
-            ['+', 'Larger', () => setZoom(Math.min(MOST_ZOOM, zoom * ZOOM))],
-          ] as const
-        ).map(([sign, name, does]) => (
-          <button
-            key={name}
-            type="button"
-            aria-label={name}
-            className="min-h-8 min-w-8 cursor-pointer border-l border-ink text-head first:border-l-0 pointer-coarse:min-h-11 pointer-coarse:min-w-11"
-            onClick={does}
-          >
-            {sign}
-          </button>
-        ))}
-      </div>
+      <ZoomButtons onSmaller={() => setZoom(Math.max(1, zoom / ZOOM))} onLarger={() => setZoom(Math.min(MOST_ZOOM, zoom * ZOOM))} />
     </div>
   );
 }

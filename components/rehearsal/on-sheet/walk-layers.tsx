@@ -1,6 +1,6 @@
 'use client';
 
-import { memo, useEffect, useMemo } from 'react';
+import { memo, useEffect, useMemo, useRef } from 'react';
 import { useStore as useFlowStore } from 'reactflow';
 import { Layer } from '@/components/sheet/canvas/layer';
 import { middle } from '@/components/sheet/canvas/pick';
@@ -15,7 +15,7 @@ import { PencilLayer } from '../canvas/pencil-layer';
 import { useLooks } from '../canvas/use-looks';
 import type { PartLook } from '../looks';
 import { browserRehearser } from '../rehearser';
-import { RehearsalProvider, stationIn, stationIndex, useRehearsal, walkIn } from '../state';
+import { RehearsalProvider, stationIn, useRehearsal, walkIn } from '../state';
 import { useAnswers } from '../use-answers';
 import type { ShownWalk } from './shown-walk';
 
@@ -50,7 +50,6 @@ function Layers({ walk, document, scene, camera }: WalkLayersProps) {
   useAnswers(walk.store, document, browserRehearser);
   const answer = useRehearsal((state) => state.answer);
   const station = useRehearsal(stationIn);
-  const index = useRehearsal(stationIndex);
   const started = useRehearsal((state) => walkIn(state) !== null);
   const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
   const parts = useMemo(() => new Map(document.parts.map((part) => [part.id, part])), [document]);
@@ -79,10 +78,14 @@ function Layers({ walk, document, scene, camera }: WalkLayersProps) {
   const fault = store.getState().faults.at(-1);
   // What happens at this station is in sight: a device far from the fault that opens, then the fault again.
   const at = station?.part ?? fault?.at;
+  const begun = useRef(false);
   useEffect(() => {
     const happens = scene.parts.find(({ id }) => id === at);
-    if (happens) camera?.show(middle(happens));
-  }, [camera, scene, at, index]);
+    if (!happens || !station) return;
+    // It begins in the middle, where there is room for what is called out beside it.
+    camera?.show(middle(happens), !begun.current);
+    begun.current = true;
+  }, [camera, scene, at, station]);
 
   if (!answer) return null;
   const faultPart = fault && parts.get(fault.at);

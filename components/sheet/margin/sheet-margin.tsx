@@ -45,7 +45,7 @@ export function SheetMargin({
   if (mode === 'extend' && ghostExamined !== undefined)
     return <IfPlaced before={examined.examination} after={ghostExamined} />;
   return (
-    <div className="flex flex-col gap-6">
+    <div className="flex flex-col gap-6 max-lap:clear-both">
       <ConflictPanel drawing={drawing} me={me} />
       {news && (
         <p className="border-l-2 border-blue pl-3 text-blue">
