@@ -1,6 +1,6 @@
-import { byCode } from '../document/schema';
+import type { Part } from '../document/schema';
 import type { Graph } from '../terminals/graph';
-import { isPoint } from '../terminals/roles-of-parts';
+import { isLoad } from '../terminals/roles-of-parts';
 import { assemble, type Assembly, type Standing } from './assemble';
 import type { BranchOf } from './branches';
 import { cellVolts, cutOf, takeApart, withCells, type Cell, type Volts } from './condense';
@@ -17,7 +17,10 @@ interface Trunk {
   voltage: number;
 }
 
-/** A point by the numbers of its L and its N, in its cell or in the trunk. */
+/** Lamps, fans and appliances, and sockets that a load is assumed at: what volts are told of. */
+export const isListed = (part: Part): boolean => isLoad(part) || (part.kind === 'socket' && part.load !== undefined);
+
+/** One of these by the numbers of its L and its N, in its cell or in the trunk. */
 interface Ends {
   id: string;
   line: number;
@@ -41,45 +44,50 @@ export interface BranchNet {
 
 const terminal = (graph: Graph, node: number): string => `${graph.partOf[node]!.id} ${graph.markOf[node]!}`;
 
-/** By node the number of its branch, in order of first nodes, and -1 in the trunk; the first part of each branch. */
-function numberBranches(graph: Graph, branchOf: BranchOf): { cellOf: Int32Array; firsts: string[] } {
+/** Where the terminals of a home lie, in every condition alike. */
+export interface Places {
+  /** by node the number of its branch, in order of first nodes, and -1 in the trunk */
+  cellOf: Int32Array;
+  /** id of the first part of each branch */
+  firsts: readonly string[];
+  /** by node its number in the trunk, and -1 in a branch */
+  inTrunk: Int32Array;
+  /** how many nodes the trunk has here */
+  trunkSize: number;
+}
+
+/**
+ * Numbers the branches of a home and what they hang on.
+ * @param graph of the whole home, or of some branches and what of the trunk they hang on
+ * @param known the home, where `graph` has only some of its trunk
+ */
+export function placesOf(graph: Graph, branchOf: BranchOf, known?: BranchNet): Places {
   const numbers = new Map<string, number>();
   const firsts: string[] = [];
   const cellOf = new Int32Array(graph.size).fill(-1);
   graph.partOf.forEach(({ id }, node) => {
     const key = branchOf.get(id);
     if (key === undefined) return;
-    const known = numbers.get(key);
-    cellOf[node] = known ?? firsts.length;
-    if (known !== undefined) return;
+    const number = numbers.get(key);
+    cellOf[node] = number ?? firsts.length;
+    if (number !== undefined) return;
     numbers.set(key, firsts.length);
     firsts.push(id);
   });
-  return { cellOf, firsts };
-}
-
-/** By node its number among those of the trunk, -1 in a branch. */
-function numberTrunk(graph: Graph, cellOf: Int32Array, known?: Trunk): { inTrunk: Int32Array; size: number } {
-  let size = 0;
+  let trunkSize = 0;
   const inTrunk = Int32Array.from(cellOf, (cell, node) => {
     if (cell >= 0) return -1;
-    return known ? known.numbers.get(terminal(graph, node))! : size++;
+    return known ? known.trunk.numbers.get(terminal(graph, node))! : trunkSize++;
   });
-  return { inTrunk, size };
+  return { cellOf, firsts, inTrunk, trunkSize };
 }
 
-function trunkOf(
-  graph: Graph,
-  assembly: Assembly,
-  within: readonly number[],
-  inTrunk: Int32Array,
-  size: number,
-): Trunk {
+function trunkOf(graph: Graph, assembly: Assembly, within: readonly number[], { inTrunk, trunkSize }: Places): Trunk {
   const numbers = new Map<string, number>();
   inTrunk.forEach((at, node) => at >= 0 && numbers.set(terminal(graph, node), at));
   const branchAt = new Map(within.map((branch, at) => [branch, at]));
   return {
-    network: cutOf(assembly.network, within, size, inTrunk),
+    network: cutOf(assembly.network, within, trunkSize, inTrunk),
     numbers,
     inverters: assembly.inverters.map((each) => ({
       ...each,
@@ -100,11 +108,10 @@ function trunkOf(
 export function condenseBranches(
   graph: Graph,
   standing: Standing,
-  branchOf: BranchOf,
+  places: Places,
   { like, trunk }: { like?: BranchNet | undefined; trunk?: Trunk } = {},
 ): BranchNet {
-  const { cellOf, firsts } = numberBranches(graph, branchOf);
-  const { inTrunk, size } = numberTrunk(graph, cellOf, trunk);
+  const { cellOf, firsts, inTrunk } = places;
   const assembly = assemble(graph, standing);
   const { within, cells, numbers } = takeApart(
     assembly.network,
@@ -116,12 +123,12 @@ export function condenseBranches(
   const points = firsts.map((): Ends[] => []);
   const ofTrunk: Ends[] = [];
   for (const part of graph.parts.values()) {
-    if (!isPoint(part)) continue;
+    if (!isListed(part)) continue;
     const [line, neutral] = [graph.node(part.id, 'L')!, graph.node(part.id, 'N')!];
     (points[cellOf[line]!] ?? ofTrunk).push({ id: part.id, line: numbers[line]!, neutral: numbers[neutral]! });
   }
   return {
-    trunk: trunk ?? trunkOf(graph, assembly, within, inTrunk, size),
+    trunk: trunk ?? trunkOf(graph, assembly, within, places),
     points: ofTrunk,
     branches: cells.map((cell, i) => ({ first: firsts[i]!, cell, points: points[i]! })),
   };
@@ -129,8 +136,12 @@ export function condenseBranches(
 
 /** A home after some of its branches changed: theirs of `now`, all others as they were. */
 export function mergeNets(known: BranchNet, now: BranchNet, gone: ReadonlySet<string>): BranchNet {
-  const branches = [...known.branches.filter(({ first }) => !gone.has(first)), ...now.branches];
-  return { ...known, branches: branches.sort((a, b) => byCode(a.first, b.first)) };
+  const branches = known.branches.filter(({ first }) => !gone.has(first));
+  for (const branch of now.branches) {
+    const at = branches.findIndex(({ first }) => first > branch.first);
+    branches.splice(at < 0 ? branches.length : at, 0, branch);
+  }
+  return { ...known, branches };
 }
 
 /** The trunk with its branches in place, each inverter held to its greatest current. */

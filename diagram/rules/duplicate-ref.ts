@@ -1,4 +1,5 @@
 import type { Context } from './context';
+import { once } from './readings/once';
 import type { Remedy, Rule } from './types';
 
 /** Every part but the first with the next free number of the same letters. */
@@ -14,6 +15,18 @@ function renumber({ document, graph }: Context, ref: string, ids: readonly strin
   return [{ label: `Call the other ${parts.map((part) => part.ref).join(', ')}`, patch: { set: { parts } } }];
 }
 
+/** By designation, the parts that carry it. */
+export const byRef = once(({ document }: Context): ReadonlyMap<string, string[]> => {
+  const found = new Map<string, string[]>();
+  for (const { id, ref } of document.parts) {
+    if (!ref) continue;
+    const same = found.get(ref);
+    if (same) same.push(id);
+    else found.set(ref, [id]);
+  }
+  return found;
+});
+
 /** One designation on two parts. */
 export const duplicateRef: Rule = {
   meta: {
@@ -26,14 +39,7 @@ export const duplicateRef: Rule = {
     remedy: 'Give one of them the next free number.',
   },
   *check(context) {
-    const byRef = new Map<string, string[]>();
-    for (const { id, ref } of context.document.parts) {
-      if (!ref) continue;
-      const same = byRef.get(ref);
-      if (same) same.push(id);
-      else byRef.set(ref, [id]);
-    }
-    for (const [ref, ids] of byRef) {
+    for (const [ref, ids] of byRef(context)) {
       if (ids.length < 2) continue;
       yield {
         heading: `${ref} names ${ids.length} parts`,

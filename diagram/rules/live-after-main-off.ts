@@ -1,3 +1,5 @@
+import { byDesignation, listNames } from '../document/names';
+import type { Part } from '../document/schema';
 import { reach } from '../terminals/reach';
 import { isPoint } from '../terminals/roles-of-parts';
 import { recalled, seen } from './clauses';
@@ -5,7 +7,6 @@ import type { Context } from './context';
 import { once } from './readings/once';
 import type { Rule } from './types';
 import { inOrder, say, sayParts } from './readings/words';
-import { listNames } from '../document/names';
 
 /** By backup source, the parts that it keeps live on `main-off`, and in which of those conditions. */
 export const liveOnMainOff = once((context: Context): Map<string, { live: Set<string>; conditions: string[] }> => {
@@ -31,6 +32,18 @@ export const liveOnMainOff = once((context: Context): Map<string, { live: Set<st
   return found;
 });
 
+/** Names of the places that parts stand in, in order of the first part in each. */
+function placesOf({ graph }: Context, ids: ReadonlySet<string>): string[] {
+  const firsts = new Map<string, Part>();
+  for (const id of ids) {
+    const part = graph.parts.get(id)!;
+    if (part.place === undefined) continue;
+    const known = firsts.get(part.place);
+    if (!known || byDesignation(part, known) < 0) firsts.set(part.place, part);
+  }
+  return [...firsts.values()].sort(byDesignation).flatMap(({ place }) => graph.places.get(place!)?.name ?? []);
+}
+
 /** What stays live when the main switch is off: the notice and the isolation order are written from it. */
 export const liveAfterMainOff: Rule = {
   meta: {
@@ -52,11 +65,7 @@ export const liveAfterMainOff: Rule = {
       const ways = context.ways.filter(({ device }) => live.has(device) && device !== inverter.id);
       const points = [...live].filter((id) => isPoint(graph.parts.get(id)!));
       if (points.length === 0) continue;
-      const places = listNames(
-        [...new Set(inOrder(context, live).map(({ place }) => graph.places.get(place ?? '')?.name))].filter(
-          (name) => name !== undefined,
-        ),
-      );
+      const places = listNames(placesOf(context, live));
       const sockets = points.filter((id) => graph.parts.get(id)!.kind === 'socket');
       yield {
         heading: `With ${say(context, mainSwitch!.id)} off, ${say(context, inverter.id)} is still there`,

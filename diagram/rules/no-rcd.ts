@@ -1,8 +1,7 @@
 import { isResidual } from '../terminals/roles-of-parts';
 import { recalled } from './clauses';
 import type { Context } from './context';
-import { dutyOf, guardsOf, onOwnRod, serves, DUTY_NAME, type Duty } from './readings/rcd-duty';
-import { feedsIn } from './readings/shared-neutrals';
+import { bareOf, barePoints, guardsOf, onOwnRod, DUTY_NAME, type Duty } from './readings/rcd-duty';
 import { rcboInPlace } from './readings/rcbo-remedy';
 import { changePart } from './readings/remedies';
 import type { Lack, Remedy, Rule, Severity } from './types';
@@ -22,15 +21,11 @@ function unguarded(context: Context): Unguarded[] {
   const found = new Map<string, Unguarded>();
   const told = (duty: Duty): Severity =>
     duty.of === 'wet' || duty.of === 'tt' || context.document.supply.system === 'TT' ? 'danger' : 'defect';
-  for (const evaluated of context.evaluated) {
-    const { condition } = evaluated;
-    if (condition.base !== 'mains') continue;
-    for (const state of feedsIn(evaluated)) {
-      if (!state.fed || state.source?.kind !== 'mains') continue;
-      const duty = dutyOf(context, state.part);
-      if (!duty || guardsOf(context, state).some((device) => serves(device, duty))) continue;
-      // A neutral led round the rcd is that rule's finding: the rcd is there, and trips.
-      if (state.lineDevices.some((id) => serves(context.graph.parts.get(id)!, duty))) continue;
+  context.evaluated.forEach(({ condition, otherwise }, i) => {
+    if (condition.base !== 'mains') return;
+    const others = [...otherwise.values()].flat().flatMap((state) => bareOf(context, state));
+    for (const { state, duty } of [...barePoints(context)[i]!, ...others]) {
+      if (state.source?.kind !== 'mains') continue;
       const severity = told(duty);
       const key = `${severity} ${duty.of}`;
       const entry = found.get(key) ?? {
@@ -46,7 +41,7 @@ function unguarded(context: Context): Unguarded[] {
       entry.conditions.add(condition.name);
       found.set(key, entry);
     }
-  }
+  });
   return [...found.values()];
 }
 

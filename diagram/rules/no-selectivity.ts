@@ -16,12 +16,14 @@ function pairs(
 ): Map<string, Set<string>> {
   const { graph } = context;
   const found = new Map<string, Set<string>>();
-  for (const lineDevices of chainsOf(context)) {
-    const chain = lineDevices.map((id) => graph.parts.get(id)!).filter(isOne);
-    chain.slice(1).forEach((lower, i) => {
-      const upper = chain[i]!;
-      if (together(upper, lower)) found.set(upper.id, (found.get(upper.id) ?? new Set()).add(lower.id));
-    });
+  for (const chain of chainsOf(context)) {
+    let upper: Part | undefined;
+    for (const id of chain) {
+      const lower = graph.parts.get(id)!;
+      if (!isOne(lower)) continue;
+      if (upper && together(upper, lower)) found.set(upper.id, (found.get(upper.id) ?? new Set()).add(lower.id));
+      upper = lower;
+    }
   }
   return found;
 }

@@ -43,6 +43,7 @@ export const overloadedMains = once((context: Context): { devices: Main[]; deman
     const here = chain.filter((id) => over.has(id));
     if (here.length === 0) continue;
     const met = groups.filter((group) => here.some((id) => group.has(id)));
+    if (met.length === 1 && here.every((id) => met[0]!.has(id))) continue;
     for (const group of met) groups.splice(groups.indexOf(group), 1);
     groups.push(new Set([...met.flatMap((group) => [...group]), ...here]));
   }

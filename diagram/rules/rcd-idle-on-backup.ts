@@ -1,5 +1,5 @@
 import { recalled } from './clauses';
-import { dutyOf, guardsOf, serves } from './readings/rcd-duty';
+import { barePoints } from './readings/rcd-duty';
 import { rcboInPlace } from './readings/rcbo-remedy';
 import type { Rule } from './types';
 import { capital, inOrder, say, sayParts } from './readings/words';
@@ -19,19 +19,16 @@ export const rcdIdleOnBackup: Rule = {
   },
   *check(context) {
     const found = new Map<string, { points: Set<string>; ways: Set<string>; conditions: Set<string> }>();
-    for (const { condition, points } of context.evaluated) {
-      for (const state of points.values()) {
-        if (!state.fed || state.source?.kind !== 'backup') continue;
-        const duty = dutyOf(context, state.part);
-        if (!duty || guardsOf(context, state).some((device) => serves(device, duty))) continue;
-        if (state.lineDevices.some((id) => serves(context.graph.parts.get(id)!, duty))) continue;
+    context.evaluated.forEach(({ condition }, i) => {
+      for (const { state } of barePoints(context)[i]!) {
+        if (state.source?.kind !== 'backup') continue;
         const entry = found.get(state.source.part.id) ?? { points: new Set(), ways: new Set(), conditions: new Set() };
         entry.points.add(state.part.id);
         if (state.overcurrent) entry.ways.add(state.overcurrent);
         entry.conditions.add(condition.name);
         found.set(state.source.part.id, entry);
       }
-    }
+    });
     for (const [inverter, { points, ways, conditions }] of found) {
       const sockets = [...points].some((id) => context.graph.parts.get(id)!.kind === 'socket');
       yield {

@@ -1,22 +1,23 @@
-import { condenseBranches, mergeNets, tellVolts, type BranchNet } from '../../circuit/branch-volts';
+import { condenseBranches, isListed, mergeNets, placesOf, tellVolts, type BranchNet } from '../../circuit/branch-volts';
 import { standingsOf } from '../../circuit/steady';
 import { byCode } from '../../document/schema';
 import type { Context } from '../context';
 import type { LoadResult } from '../examination';
 import { branchesIn } from '../readings/branch-nets';
-import { isListed, isSolved, roundVolts, rowOf } from '../results/load-results';
-import { Beyond } from './beyond';
+import { isSolved, roundVolts, rowOf } from '../results/load-results';
+import { Beyond, mustBe } from './beyond';
 import { mergedList } from './merging';
 import type { Touched } from './touched';
 
 /** The home in every condition after an edit: the touched branches condensed anew. @throws Beyond */
 export function netsAfter(known: readonly BranchNet[] | null, now: Context, { before }: Touched): BranchNet[] {
-  const { branchOf } = branchesIn(now);
+  if (!known) throw new Beyond('how the switches stand');
+  const places = placesOf(now.graph, branchesIn(now).branchOf, known[0]);
   let like: BranchNet | undefined;
   return now.evaluated.map((each, i) => {
     const standings = standingsOf(now.graph, each);
-    if (!known || standings.length !== 1) throw new Beyond('how the switches stand');
-    like = condenseBranches(now.graph, standings[0]!.standing, branchOf, { like, trunk: known[i]!.trunk });
+    mustBe(standings.length === 1, 'how the switches stand');
+    like = condenseBranches(now.graph, standings[0]!.standing, places, { like, trunk: known[i]!.trunk });
     return mergeNets(known[i]!, like, before);
   });
 }

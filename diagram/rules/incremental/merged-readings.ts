@@ -1,10 +1,11 @@
 import { workOutBackups } from '../../circuit/backup-figures';
 import { byDesignation } from '../../document/names';
 import type { Context } from '../context';
+import { byRef } from '../duplicate-ref';
 import { liveOnMainOff } from '../live-after-main-off';
 import { backupsOf, figuresOf } from '../readings/figures';
 import { neutralFaults } from '../readings/neutral-faults';
-import { onOwnRod } from '../readings/rcd-duty';
+import { barePoints, onOwnRod, type Bare } from '../readings/rcd-duty';
 import { boardOf, switchboardOf, switchboards, type Switchboard } from '../readings/switchboards';
 import { isolatorsByWay } from '../shared-box-lines';
 import { breakers } from '../weak-breaking-capacity';
@@ -40,6 +41,10 @@ function mergeBoards(
   return merged;
 }
 
+/** True when the touched parts carry the same designations as before. */
+const isNamedAlike = (known: Context, now: Context, { before, after }: Touched): boolean =>
+  [...before, ...after].every((id) => known.graph.parts.get(id)?.ref === now.graph.parts.get(id)?.ref);
+
 function mergeLive(known: Context, now: Context, touched: Touched): ReturnType<typeof liveOnMainOff> {
   const anew = liveOnMainOff(now);
   return new Map(
@@ -61,7 +66,14 @@ export function giveReadings(
 ): void {
   // Only a home without any is put together.
   neutralFaults.give(context, []);
+  if (isNamedAlike(known, now, touched)) byRef.give(context, byRef(known));
   onOwnRod.give(context, mergedSet(onOwnRod(known), onOwnRod(now), touched));
+  const bare = barePoints(now);
+  const idOf = ({ state }: Bare) => state.part.id;
+  barePoints.give(
+    context,
+    barePoints(known).map((list, i) => mergedList(list, bare[i]!, touched, idOf)),
+  );
   switchboards.give(context, mergeBoards(known, now, touched, spine));
   isolatorsByWay.give(context, mergedMap(isolatorsByWay(known), isolatorsByWay(now), touched));
   breakers.give(context, mergedList(breakers(known), breakers(now), touched, ({ device }) => device.id));

@@ -1,4 +1,4 @@
-import { condenseBranches, type BranchNet } from '../../circuit/branch-volts';
+import { condenseBranches, placesOf, type BranchNet } from '../../circuit/branch-volts';
 import { findBranches } from '../../circuit/branches';
 import { standingsOf } from '../../circuit/steady';
 import type { Context } from '../context';
@@ -16,14 +16,14 @@ export interface StandingNet {
 /** By name of the condition, the standings that it takes to have every point on: one where no switch must stand both ways. */
 export const branchNets = once((context: Context): ReadonlyMap<string, readonly StandingNet[]> => {
   const { graph, evaluated } = context;
-  const { branchOf } = branchesIn(context);
+  const places = placesOf(graph, branchesIn(context).branchOf);
   // Most branches stand alike in every condition: what one comes to is worked out once.
   let like: BranchNet | undefined;
   return new Map(
     evaluated.map((each) => [
       each.condition.name,
       standingsOf(graph, each).map(({ standing, points }) => {
-        const net = (like = condenseBranches(graph, standing, branchOf, { like }));
+        const net = (like = condenseBranches(graph, standing, places, { like }));
         return { points, net };
       }),
     ]),

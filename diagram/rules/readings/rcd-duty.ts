@@ -14,7 +14,7 @@ export interface Duty {
 }
 
 /** The strictest duty of a point; undefined where the practice asks for no rcd before it. */
-export function dutyOf(context: Context, part: Part): Duty | undefined {
+function dutyOf(context: Context, part: Part): Duty | undefined {
   let strictest: Duty | undefined;
   for (const { value } of practices[context.practice].rcdDuties) {
     const { of, uptoA = Infinity } = value;
@@ -61,7 +61,7 @@ export function guardsOf({ graph }: Context, state: PointState): Part[] {
 }
 
 /** True when a device is sensitive enough for the duty; a device whose sensitivity is not stated is given the doubt. */
-export const serves = (device: Part, duty: Duty): boolean =>
+const serves = (device: Part, duty: Duty): boolean =>
   isResidual(device) && (device.sensitivity === undefined || device.sensitivity <= duty.sensitivityA + 1e-9);
 
 /** In words: "an outlet", "a wet place" ... */
@@ -71,3 +71,21 @@ export const DUTY_NAME: Record<Duty['of'], string> = {
   lighting: 'lighting in a dwelling',
   tt: 'every circuit on TT',
 };
+
+/** A point that must lie behind an rcd and does not, as it is fed. */
+export interface Bare {
+  state: PointState;
+  duty: Duty;
+}
+
+/** What makes a fed point bare. A neutral led round the rcd is another rule's finding: the rcd is there, and trips. */
+export function bareOf(context: Context, state: PointState): Bare[] {
+  const duty = state.fed ? dutyOf(context, state.part) : undefined;
+  if (!duty) return [];
+  return state.lineDevices.some((id) => serves(context.graph.parts.get(id)!, duty)) ? [] : [{ state, duty }];
+}
+
+/** By number of the condition, the bare points in order of id. */
+export const barePoints = once((context: Context): readonly (readonly Bare[])[] =>
+  context.evaluated.map(({ points }) => [...points.values()].flatMap((state) => bareOf(context, state))),
+);

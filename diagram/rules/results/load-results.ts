@@ -1,7 +1,6 @@
-import { tellVolts } from '../../circuit/branch-volts';
+import { isListed, tellVolts } from '../../circuit/branch-volts';
 import type { Evaluated, PointState } from '../../circuit/evaluate';
-import type { Installation, Part } from '../../document/schema';
-import { isLoad } from '../../terminals/roles-of-parts';
+import type { Installation } from '../../document/schema';
 import type { Context } from '../context';
 import type { LoadResult } from '../examination';
 import { branchNets, type StandingNet } from '../readings/branch-nets';
@@ -34,9 +33,6 @@ function loadVolts(document: Installation, { asDrawn }: Evaluated, standings: re
   }
   return found;
 }
-
-/** Lamps, fans and appliances, and sockets that a load is assumed at. */
-export const isListed = (part: Part): boolean => isLoad(part) || (part.kind === 'socket' && part.load !== undefined);
 
 /**
  * How a load stands in every condition.
