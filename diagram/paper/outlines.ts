@@ -11,6 +11,9 @@ export interface Glyph {
 /** Shapes of the shipped lettering. */
 export type Glyphs = (sign: string, bold: boolean) => Glyph;
 
+/** Scripts whose signs join and stack are shaped by the writer of the file: they stay text. */
+const JOINED = /[\u0590-\u06ff\u0750-\u077f\u08a0-\u097f\ua8e0-\ua8ff\ufb1d-\ufdff\ufe70-\ufefc]/;
+
 const LETTER = { moveTo: 'M', lineTo: 'L', curveTo: 'C', closePath: 'Z' } as const;
 const TURN = [
   [1, 0],
@@ -45,7 +48,7 @@ function outlined(mark: TextMark, glyphs: Glyphs): PathMark | null {
 
 function outlinedGroup(group: Group, glyphs: Glyphs): Group {
   const marks = group.marks.flatMap((mark): Mark[] => {
-    if (mark.kind === 'path') return [mark];
+    if (mark.kind === 'path' || JOINED.test(mark.text)) return [mark];
     const path = outlined(mark, glyphs);
     return path ? [path] : [];
   });

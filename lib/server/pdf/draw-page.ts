@@ -2,7 +2,7 @@ import 'server-only';
 import type PDFDocument from 'pdfkit';
 import { fontSizeOf, letterSpacing, type Group, type Mark, type Page, type TextMark } from '@/diagram/paper/primitives';
 import { ADVANCE } from '@/diagram/layout/lettering';
-import { fontName, runsOf } from './fonts';
+import { fontName, isJoined, runsFromRight, runsOf, type Run } from './fonts';
 
 type Pdf = InstanceType<typeof PDFDocument>;
 
@@ -50,6 +50,16 @@ function drawMark(pdf: Pdf, mark: Mark, scale: number): void {
 /** Ligatures off: `!=` and `->` stay two signs, as on the screen. The type of the package knows only the list form, which cannot switch off. */
 const PLAIN = { calt: false, liga: false, clig: false } as unknown as PDFKit.Mixins.TextOptions['features'];
 
+const SET = { lineBreak: false, baseline: 'alphabetic', features: PLAIN } as const;
+
+/** A run that is set whole: narrowed where it is wider than its room, and from the side from which it is read. */
+function drawJoined(pdf: Pdf, run: Run, at: number, room: number): void {
+  const width = pdf.widthOfString(run.text, { features: PLAIN });
+  const narrowed = Math.min(1, room / width);
+  const x = runsFromRight(run.script) ? at + room - width * narrowed : at;
+  pdf.text(run.text, x, 0, { ...SET, horizontalScaling: 100 * narrowed });
+}
+
 /** Text by its own metric, in runs of one script. */
 function drawText(pdf: Pdf, mark: TextMark): void {
   const spacing = letterSpacing(mark);
@@ -62,12 +72,11 @@ function drawText(pdf: Pdf, mark: TextMark): void {
   pdf.translate(mark.x, mark.y);
   if (mark.turn) pdf.rotate(90 * mark.turn);
   pdf.fontSize(size).fillColor(mark.colour);
-  for (const run of runs)
-    pdf.font(fontName(run.script, mark.bold ?? false)).text(run.text, left + run.offset * advance, 0, {
-      lineBreak: false,
-      baseline: 'alphabetic',
-      characterSpacing: spacing,
-      features: PLAIN,
-    });
+  for (const run of runs) {
+    pdf.font(fontName(run.script, mark.bold ?? false));
+    const at = left + run.offset * advance;
+    if (isJoined(run.script)) drawJoined(pdf, run, at, [...run.text].length * advance);
+    else pdf.text(run.text, at, 0, { ...SET, characterSpacing: spacing });
+  }
   pdf.restore();
 }

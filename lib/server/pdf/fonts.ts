@@ -3,7 +3,10 @@ import { join } from 'node:path';
 
 /** The shipped lettering by script: a text is drawn in runs, each from the file that holds its signs. */
 
-const SCRIPTS = ['latin', 'latin-ext', 'greek', 'cyrillic', 'cyrillic-ext', 'vietnamese'] as const;
+const SCRIPTS = [
+  ...(['latin', 'latin-ext', 'greek', 'cyrillic', 'cyrillic-ext', 'vietnamese'] as const),
+  ...(['arabic', 'hebrew', 'devanagari'] as const),
+] as const;
 type Script = (typeof SCRIPTS)[number];
 
 /** Ranges of the font's files, as its package states them; the first that holds a sign wins. */
@@ -62,8 +65,29 @@ const RANGES: Record<Script, readonly (readonly [number, number])[]> = {
     [0x2de0, 0x2dff],
     [0xa640, 0xa69f],
   ],
+  arabic: [
+    [0x600, 0x6ff],
+    [0x750, 0x77f],
+    [0x8a0, 0x8ff],
+    [0xfb50, 0xfdff],
+    [0xfe70, 0xfefc],
+  ],
+  hebrew: [
+    [0x590, 0x5ff],
+    [0xfb1d, 0xfb4f],
+  ],
+  devanagari: [
+    [0x900, 0x97f],
+    [0xa8e0, 0xa8ff],
+  ],
 };
-const ORDER: readonly Script[] = ['latin', 'vietnamese', 'latin-ext', 'greek', 'cyrillic', 'cyrillic-ext'];
+const ORDER: readonly Script[] = ['latin', 'vietnamese', 'latin-ext', 'greek', 'cyrillic', 'cyrillic-ext', 'arabic', 'hebrew', 'devanagari'];
+/** Scripts whose signs join and stack: a run of them is set whole, in widths of its own. */
+const JOINED: ReadonlySet<Script> = new Set<Script>(['arabic', 'hebrew', 'devanagari']);
+const FROM_RIGHT: ReadonlySet<Script> = new Set<Script>(['arabic', 'hebrew']);
+
+export const isJoined = (script: Script): boolean => JOINED.has(script);
+export const runsFromRight = (script: Script): boolean => FROM_RIGHT.has(script);
 
 /** Drawn for a sign that no file of the lettering holds. */
 const STAND_IN = '?';
@@ -80,28 +104,56 @@ export interface Run {
   offset: number;
 }
 
-/** A text in runs of one script; every sign is as wide as any other. */
+const countOf = (text: string): number => [...text].length;
+const turned = (text: string): string => [...text].reverse().join('');
+const isLetter = (sign: string): boolean => /\p{L}/u.test(sign);
+
+/** A space between two words of a script that is set whole belongs to it. */
+function scriptAt(signs: readonly string[], i: number): Script | null {
+  if (signs[i] !== ' ') return scriptOf(signs[i]!);
+  const [before, after] = [signs[i - 1], signs[i + 1]].map((sign) => (sign === undefined ? null : scriptOf(sign)));
+  return before && before === after && isJoined(before) ? before : 'latin';
+}
+
+/** From the left as they are seen: a text that begins from the right has its first run at the right. */
+function fromRight(runs: readonly Run[], signs: number): Run[] {
+  return runs
+    .map(({ script, text, offset }): Run => {
+      // what belongs to no script, a space or a comma, keeps to the side on which it was written
+      const [, lead = '', core = '', trail = ''] = /^([\s\p{P}]*)(.*?)([\s\p{P}]*)$/su.exec(text) ?? [];
+      const seen = isJoined(script) ? text : `${turned(trail)}${core}${turned(lead)}`;
+      return { script, text: seen, offset: signs - offset - countOf(text) };
+    })
+    .reverse();
+}
+
+/** A text in runs of one script, from the left as they are seen; every sign has the same room. */
 export function runsOf(text: string): Run[] {
   const runs: Run[] = [];
-  [...text].forEach((sign, offset) => {
+  const signs = [...text];
+  signs.forEach((sign, offset) => {
     // the electrical sign for ohm is drawn as the Greek letter it looks like
     const shown = sign === '\u2126' ? '\u03a9' : sign;
-    const script = scriptOf(shown);
+    const script = shown === sign ? scriptAt(signs, offset) : scriptOf(shown);
     const last = runs.at(-1);
     if (last && last.script === (script ?? 'latin')) last.text += script ? shown : STAND_IN;
     else runs.push({ script: script ?? 'latin', text: script ? shown : STAND_IN, offset });
   });
-  return runs;
+  const first = signs.find(isLetter);
+  const script = first === undefined ? null : scriptOf(first);
+  return script && runsFromRight(script) ? fromRight(runs, signs.length) : runs;
 }
 
 export const fontName = (script: Script, bold: boolean): string => `${script} ${bold ? 'bold' : 'regular'}`;
+
+const familyOf = (script: Script): string => (isJoined(script) ? `noto-sans-${script}` : 'jetbrains-mono');
 
 /** Where a file of the lettering lies. */
 export const fontFile = (script: Script, weight: 400 | 700): string =>
   join(
     process.cwd(),
-    'node_modules/@fontsource/jetbrains-mono/files',
-    `jetbrains-mono-${script}-${weight}-normal.woff`,
+    `node_modules/@fontsource/${familyOf(script)}/files`,
+    `${familyOf(script)}-${script}-${weight}-normal.woff`,
   );
 
 /** Makes all files known to a PDF; only those that are used are carried in it. */
