@@ -37,17 +37,19 @@ export const overloadedMains = once((context: Context): { devices: Main[]; deman
     const { demandA } = demandBehind(id);
     if (exceeds(demandA, device.rating)) over.set(id, { device, order, demandA });
   }
-  const groups: Set<string>[] = [];
   if (over.size === 0) return [];
+  const groupOf = new Map<string, Set<string>>();
   for (const chain of chainsOf(context)) {
-    const here = chain.filter((id) => over.has(id));
-    if (here.length === 0) continue;
-    const met = groups.filter((group) => here.some((id) => group.has(id)));
-    if (met.length === 1 && here.every((id) => met[0]!.has(id))) continue;
-    for (const group of met) groups.splice(groups.indexOf(group), 1);
-    groups.push(new Set([...met.flatMap((group) => [...group]), ...here]));
+    let group: Set<string> | undefined;
+    for (const id of chain) {
+      if (!over.has(id)) continue;
+      const known = groupOf.get(id);
+      group ??= known ?? new Set();
+      if (known === group) continue;
+      for (const each of known ?? [id]) groupOf.set(each, group.add(each));
+    }
   }
-  return groups.map((group) => {
+  return [...new Set(groupOf.values())].map((group) => {
     const members = [...group].map((id) => over.get(id)!).sort((a, b) => a.order - b.order);
     return { devices: members.map(({ device }) => device), demandA: members[0]!.demandA };
   });

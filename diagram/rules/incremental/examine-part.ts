@@ -55,8 +55,12 @@ function branchOfAfter(known: BranchOf, now: BranchOf, before: ReadonlySet<strin
 /** The shape after an edit: what is new of the touched branches in the place of what was. */
 function shapeAfter(shape: Shape, now: Context, { keys, before }: Touched): Omit<Shape, 'findings' | 'nets'> {
   const branches = branchesIn(now);
-  const inPlace = <T>(known: ReadonlyMap<string, T>, anew: ReadonlyMap<string, T>) =>
-    new Map([...[...known].filter(([key]) => !keys.has(key)), ...anew]);
+  const inPlace = <T>(known: ReadonlyMap<string, T>, anew: ReadonlyMap<string, T>) => {
+    const merged = new Map(known);
+    for (const key of keys) merged.delete(key);
+    for (const [key, value] of anew) merged.set(key, value);
+    return merged;
+  };
   return {
     ...shape,
     branchOf: branchOfAfter(shape.branchOf, branches.branchOf, before),

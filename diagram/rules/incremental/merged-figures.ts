@@ -19,12 +19,17 @@ function passed(drawn: readonly Drawn[], trunk: ReadonlySet<string>): string {
 }
 
 /** Demands that stand: none of their ways asks for something else than before. */
-function demandsAfter({ demands, loads: before }: Figures, loads: ReadonlyMap<string, WayLoad>): Figures['demands'] {
-  const stands = (way: string) => {
-    const [was, is] = [before.get(way)!, loads.get(way)];
-    return is !== undefined && (was === is || asksAlike(was, is));
-  };
-  return new Map([...demands].filter(([, { ways }]) => ways.every(stands)));
+function demandsAfter(
+  { demands, loads: before }: Figures,
+  loads: ReadonlyMap<string, WayLoad>,
+  touched: Touched,
+): Figures['demands'] {
+  const changed = [...new Set([...touched.before, ...touched.after])].filter((id) => {
+    const [was, is] = [before.get(id), loads.get(id)];
+    return was && !(is && asksAlike(was, is));
+  });
+  if (changed.length === 0) return demands;
+  return new Map([...demands].filter(([, { ways }]) => !changed.some((id) => ways.includes(id))));
 }
 
 /** A home in numbers after an edit. @param spine what of the trunk `now` has  @throws Beyond */
@@ -37,7 +42,7 @@ export function mergeFigures(known: Figures, now: Figures, touched: Touched, spi
   ];
   mustBe(passed(known.drawn, spine) === passed(drawn, spine), 'what the trunk feeds');
   const loads = mergedMap(known.loads, now.loads, touched);
-  const together = addUp(drawn, loads, practice, demandsAfter(known, loads));
+  const together = addUp(drawn, loads, practice, demandsAfter(known, loads, touched));
   const ways = mergedMap(known.ways, now.ways, touched);
   for (const id of spine) {
     const figures = ways.get(id);

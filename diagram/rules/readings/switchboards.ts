@@ -70,9 +70,13 @@ const feedsByPart = once(({ graph, feeds }: Context): Map<string, Feed[]> => {
 /** @param held of one enclosure */
 export function switchboardOf(held: readonly Held[]): Switchboard {
   const { place, board } = held[0]!.part;
+  const all = new Set<string>();
   const sources = new Map<Feed, string>();
-  for (const { part, feeds } of held) for (const feed of feeds) if (!sources.has(feed)) sources.set(feed, part.id);
-  return { place: place!, board, held, ways: new Set(held.flatMap(({ ways }) => ways)), sources };
+  for (const { part, ways, feeds } of held) {
+    for (const way of ways) all.add(way);
+    for (const feed of feeds) if (!sources.has(feed)) sources.set(feed, part.id);
+  }
+  return { place: place!, board, held, ways: all, sources };
 }
 
 /** Switchboards by place and board. */
