@@ -1,9 +1,10 @@
 'use client';
 
 import { memo, useEffect, useMemo, useRef } from 'react';
-import { useStore as useFlowStore } from 'reactflow';
+import { useReactFlow, useStore as useFlowStore } from 'reactflow';
 import { Layer } from '@/components/sheet/canvas/layer';
 import { middle } from '@/components/sheet/canvas/pick';
+import { px } from '@/components/sheet/canvas/units';
 import type { Camera } from '@/components/sheet/view';
 import type { Installation } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
@@ -20,6 +21,8 @@ import { useAnswers } from '../use-answers';
 import type { ShownWalk } from './shown-walk';
 
 const LETTERS_FROM = 0.42;
+/** below it the volts and amperes beside the runs would be too small to read */
+const LEAST_ZOOM = 0.8;
 
 interface WalkLayersProps {
   walk: ShownWalk;
@@ -79,13 +82,16 @@ function Layers({ walk, document, scene, camera }: WalkLayersProps) {
   // What happens at this station is in sight: a device far from the fault that opens, then the fault again.
   const at = station?.part ?? fault?.at;
   const begun = useRef(false);
+  const canvas = useReactFlow();
   useEffect(() => {
     const happens = scene.parts.find(({ id }) => id === at);
     if (!happens || !station) return;
     // It begins in the middle, where there is room for what is called out beside it.
-    camera?.show(middle(happens), !begun.current);
+    const { x, y } = middle(happens);
+    if (begun.current) camera?.show({ x, y });
+    else void canvas.setCenter(px(x), px(y), { zoom: Math.max(canvas.getZoom(), LEAST_ZOOM) });
     begun.current = true;
-  }, [camera, scene, at, station]);
+  }, [camera, canvas, scene, at, station]);
 
   if (!answer) return null;
   const faultPart = fault && parts.get(fault.at);

@@ -57,7 +57,8 @@ function drawJoined(pdf: Pdf, run: Run, at: number, room: number): void {
   const width = pdf.widthOfString(run.text, { features: PLAIN });
   const narrowed = Math.min(1, room / width);
   const x = runsFromRight(run.script) ? at + room - width * narrowed : at;
-  pdf.text(run.text, x, 0, { ...SET, horizontalScaling: 100 * narrowed });
+  // The package knows how to narrow a text, its types do not.
+  pdf.text(run.text, x, 0, { ...SET, horizontalScaling: 100 * narrowed } as PDFKit.Mixins.TextOptions);
 }
 
 /** Text by its own metric, in runs of one script. */

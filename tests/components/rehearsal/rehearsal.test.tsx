@@ -92,6 +92,9 @@ describe('the rehearsal sheet', () => {
     expect(margin().getByText('step 3 of 4')).toBeVisible();
     expect(live().join()).toMatch(/Step 3 of 4, 40 ms: Q5 opens\. It sees .* astray; 30 mA suffice\./);
     expect(search()).toContain('step=3');
+    // What no drawing tells, the walk says that it takes for granted.
+    expect(margin().getByText('Taken for granted, as no drawing tells it:')).toBeVisible();
+    expect(margin().getByText(/^a sinusoidal residual current at Q5/)).toBeVisible();
     await user.keyboard('{ArrowLeft}{ArrowLeft}{ArrowLeft}');
     expect(margin().getByText('step 1 of 4')).toBeVisible();
     await user.keyboard('{Escape}');

@@ -108,6 +108,12 @@ describe('the command list', () => {
     ['renumber', 'renumber'],
     ['copy room', 'copy-room'],
     ['outline', 'outline'],
+    ['rotate', 'turn'],
+    ['quarter', 'turn'],
+    ['lock', 'lock'],
+    ['unlock', 'lock'],
+    ['show me', 'show'],
+    ['play fault', 'play'],
   ])('finds "%s"', (typed, id) => {
     const found = ACTIONS.filter((action) => fitsWords(action.words, typed));
     expect(found.map((action) => action.id)).toContain(id);

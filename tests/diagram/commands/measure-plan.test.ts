@@ -4,13 +4,13 @@ import { cablesFor, measureCable, measurePlan } from '@/diagram/commands/measure
 import { isRefusal, type Command, type Refusal } from '@/diagram/commands/types';
 import { applyPatch, invert } from '@/diagram/document/patch';
 import { metresAlong, metresIn, metresPerUnit, scaleText } from '@/diagram/document/plan-scale';
-import { readDocument, type Installation } from '@/diagram/document/schema';
+import { readDocument, type FloorPlan, type Installation } from '@/diagram/document/schema';
 import { planPages } from '@/diagram/paper/plan-pages';
 import type { TextMark } from '@/diagram/paper/primitives';
 import { examine } from '@/diagram/rules/examine';
 import { draftedHome } from './drafted';
 
-const plan = { id: 'ground', name: 'Ground floor', picture: 'p-1', width: 32_000, height: 24_000 };
+const plan: FloorPlan = { id: 'ground', name: 'Ground floor', picture: 'p-1', width: 32_000, height: 24_000 };
 const done = (doc: Installation, outcome: Command | Refusal): Installation => {
   if (isRefusal(outcome)) throw new Error(outcome.refused);
   return applyPatch(doc, outcome.patch);
