@@ -1,5 +1,6 @@
 import { byDesignation } from '../document/names';
 import { byCode, type Cable, type End, type Installation, type Part, type Wire } from '../document/schema';
+import type { Way } from '../terminals/ways';
 import { ON_BOARD, isLongBar } from './connections-page-state';
 import { coreOf } from './overview-graph';
 import { planOverview, type OverviewPlan } from './overview-plan';
@@ -128,8 +129,24 @@ const book = perDocument((doc) => {
       if (list) list.push(wire);
       else wires.set(place, [wire]);
     }
+  const partsOf = new Map<string, Part[]>();
+  for (const part of [...byId.values()].sort(byDesignation)) {
+    const list = partsOf.get(pageOf.get(part.id)!);
+    if (list) list.push(part);
+    else partsOf.set(pageOf.get(part.id)!, [part]);
+  }
+  const wayOf = new Map<string, Way>();
+  for (const way of plan.ways) for (const wire of way.wires) if (!wayOf.has(wire)) wayOf.set(wire, way);
+  const heads = new Map<string, number>();
+  for (const { head } of plan.content.hanging) {
+    const place = pageOf.get(head?.part.id ?? '');
+    if (place !== undefined) heads.set(place, (heads.get(place) ?? 0) + 1);
+  }
   return {
     pageOf,
+    partsOf,
+    wayOf,
+    heads,
     wires,
     feeds: feedingWires(plan),
     homeOf: homes(doc, byId),
@@ -140,8 +157,7 @@ const book = perDocument((doc) => {
 /** Reads one page of a document. */
 export function readPage(doc: Installation, plan: OverviewPlan, place: string): Page {
   const { byId } = plan.graph;
-  const { pageOf, wires, feeds, homeOf, cables: cablesById } = book(doc);
-  const parts = [...byId.values()].filter((part) => pageOf.get(part.id) === place);
+  const { pageOf, partsOf, wayOf, heads, wires, feeds, homeOf, cables: cablesById } = book(doc);
   const inner: Wire[] = [];
   const groups = new Map<string, Core[]>();
   const note = (key: string, wire: Wire, here: End, far: End, run = wire.id) =>
@@ -149,7 +165,7 @@ export function readPage(doc: Installation, plan: OverviewPlan, place: string): 
       ...(groups.get(key) ?? []),
       { wire, run, here, far, core: coreOf(wire.role), home: homeOf(wire, far) },
     ]);
-  const ways = plan.content.hanging.filter(({ head }) => head && pageOf.get(head.part.id) === place).length;
+  const ways = heads.get(place) ?? 0;
   const onBoard = ([id]: End): boolean => ON_BOARD.has(byId.get(id)!.kind) || isLongBar(byId.get(id)!.kind);
   for (const wire of wires.get(place) ?? []) {
     const [from, to] = [pageOf.get(wire.from[0]) === place, pageOf.get(wire.to[0]) === place];
@@ -177,11 +193,11 @@ export function readPage(doc: Installation, plan: OverviewPlan, place: string): 
       cores,
       outgoing,
       atFoot: leaves || (outgoing && live !== undefined && (head !== undefined || isBoardPart(byId.get(live.here[0])))),
-      lines: cableLines(doc, plan, cores, outgoing, cablesById),
+      lines: cableLines(doc, plan, cores, outgoing, cablesById, wayOf),
     };
   });
   cables.sort((a, b) => byCode(a.id, b.id));
-  return { place, parts: parts.sort(byDesignation), inner, cables };
+  return { place, parts: partsOf.get(place) ?? [], inner, cables };
 }
 
 const isBoardPart = (part: Part | undefined): boolean =>
@@ -191,10 +207,11 @@ const isBoardPart = (part: Part | undefined): boolean =>
 function cableLines(doc: Installation, plan: OverviewPlan, cores: readonly Core[],
   outgoing: boolean,
   cables: ReadonlyMap<string, Cable>,
+  wayOf: ReadonlyMap<string, Way>,
 ): string[] {
   const first = cores[0]!;
   const cable: Cable | undefined = cables.get(first.wire.cable ?? '');
-  const way = plan.ways.find((w) => cores.some((core) => w.wires.includes(core.wire.id)));
+  const way = cores.map(({ wire }) => wayOf.get(wire.id)).find((found) => found !== undefined);
   const far = plan.graph.byId.get(first.far[0]);
   const here = plan.graph.byId.get(first.here[0]);
   const room = far?.place === here?.place ? undefined : doc.places.find((place) => place.id === far?.place)?.name;

@@ -30,13 +30,10 @@ export { connectionPages, type ConnectionPage } from './connections-page';
 export function connectionPositions(doc: Installation): Map<string, Position> {
   const plan = planOverview(doc);
   const all = new Map<string, Position>();
-  for (const { place } of connectionPages(doc))
-    for (const [id, at] of positionsOf(
-      doc,
-      readPage(doc, plan, place),
-      planPage(doc, plan, readPage(doc, plan, place)),
-    ))
-      all.set(id, at);
+  for (const { place } of connectionPages(doc)) {
+    const page = readPage(doc, plan, place);
+    for (const [id, at] of positionsOf(doc, page, planPage(doc, plan, page))) all.set(id, at);
+  }
   return all;
 }
 
