@@ -5,16 +5,18 @@ import { mustBe, onlyKnown } from './beyond';
 import { mergedList, mergedMap } from './merging';
 import type { Touched } from './touched';
 
-/** Devices of the trunk that some current passes. */
-function passed(drawn: readonly Drawn[], trunk: ReadonlySet<string>): string {
+/** Devices of the trunk that the current of some parts passes; of all parts where none are given. */
+function passed(drawn: readonly Drawn[], trunk: ReadonlySet<string>, parts?: ReadonlySet<string>): string {
   const found = new Set<string>();
   const seen = new Set<readonly string[]>();
-  for (const { lineDevices, neutralDevices } of drawn)
+  for (const { part, lineDevices, neutralDevices } of drawn) {
+    if (parts && !parts.has(part.id)) continue;
     for (const ids of [lineDevices, neutralDevices]) {
       if (seen.has(ids)) continue;
       seen.add(ids);
       for (const id of ids) if (trunk.has(id)) found.add(id);
     }
+  }
   return [...found].sort().join(' ');
 }
 
@@ -36,11 +38,11 @@ function demandsAfter(
 export function mergeFigures(known: Figures, now: Figures, touched: Touched, spine: ReadonlySet<string>): Figures {
   const { practice } = known;
   const points = ({ drawn }: Figures) => drawn.filter(({ isPoint }) => isPoint);
-  const drawn = [
-    ...mergedList(points(known), points(now), touched, ({ part }) => part.id),
-    ...now.drawn.filter(({ isPoint }) => !isPoint),
-  ];
-  mustBe(passed(known.drawn, spine) === passed(drawn, spine), 'what the trunk feeds');
+  const drawn = mergedList(points(known), points(now), touched, ({ part }) => part.id);
+  for (const each of now.drawn) if (!each.isPoint) drawn.push(each);
+  // Where the touched branches pass the same devices as before, all of them together do.
+  const alike = passed(known.drawn, spine, touched.before) === passed(now.drawn, spine, touched.after);
+  mustBe(alike || passed(known.drawn, spine) === passed(drawn, spine), 'what the trunk feeds');
   const loads = mergedMap(known.loads, now.loads, touched);
   const together = addUp(drawn, loads, practice, demandsAfter(known, loads, touched));
   const ways = mergedMap(known.ways, now.ways, touched);

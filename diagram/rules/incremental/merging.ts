@@ -38,7 +38,8 @@ export function mergedList<T>(
     while (next < anew.length && idOf(anew[next]!) < id) merged.push(anew[next++]!);
     merged.push(item);
   }
-  return [...merged, ...anew.slice(next)];
+  while (next < anew.length) merged.push(anew[next++]!);
+  return merged;
 }
 
 /** Puts items into a list at their places. @param list in order already */
