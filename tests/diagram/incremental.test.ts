@@ -105,4 +105,18 @@ describe('the incremental examiner', () => {
     expect(JSON.stringify(result)).toBe(JSON.stringify(examine(edited)));
     expect(examiner.count).toEqual({ whole: 1, part: 0, none: 1 });
   });
+
+  it('tells from a part of the home what has a remedy that reads all of it', () => {
+    const clean = readExample('clean-backup-home');
+    const inverter = clean.parts.find(({ kind }) => kind === 'inverter')!;
+    const home = applyPatch(clean, { set: { parts: [{ ...inverter, hoursWanted: 100 } as typeof inverter] } });
+    const examiner = createExaminer();
+    const before = examiner.examine(home);
+    const lamp = home.parts.find((part) => part.kind === 'lamp' && part.watts !== undefined)!;
+    const edited = applyPatch(home, { set: { parts: [{ ...lamp, watts: 17 } as typeof lamp] } });
+    const after = examiner.examine(edited);
+    for (const { findings } of [before, after]) expect(findings.map(({ rule }) => rule)).toContain('short-autonomy');
+    expect(JSON.stringify(after)).toBe(JSON.stringify(examine(edited)));
+    expect(examiner.count).toEqual({ whole: 1, part: 1, none: 0 });
+  });
 });
