@@ -9,6 +9,8 @@ import { scaleText } from '@/diagram/document/plan-scale';
 import { MeasureFoot } from './measure-foot';
 import type { Plan } from './use-plan';
 
+/** Words of 24 px, so that one is hit beside the other however they wrap. */
+const WORD = 'min-h-6 pointer-coarse:min-h-11';
 const PAPERS = ['A4', 'A3'] as const;
 
 interface PlanFootProps {
@@ -32,7 +34,7 @@ export function PlanFoot({ drawing, state, onAnother }: PlanFootProps) {
   return (
     <div className="flex flex-col gap-1">
       {state.tool.kind && <MeasureFoot state={state} />}
-      <div className={`flex flex-wrap items-center gap-x-4 gap-y-1 ${state.tool.kind ? 'hidden' : ''}`}>
+      <div className={`flex flex-wrap items-center gap-x-4 ${state.tool.kind ? 'hidden' : ''}`}>
         {plans.length > 1 && (
           <Segmented
             label="Storey"
@@ -64,20 +66,28 @@ export function PlanFoot({ drawing, state, onAnother }: PlanFootProps) {
         )}
         {rights.edit && name === null && (
           <>
-            <WordButton onClick={() => setName(plan.name)}>rename</WordButton>
-            <WordButton onClick={onAnother}>another storey</WordButton>
-            <WordButton onClick={() => state.run(removePlan(document, plan.id))}>take away</WordButton>
-            <WordButton onClick={() => state.measure('scale')}>{plan.scale ? 'scale anew' : 'measure the scale'}</WordButton>
-            <WordButton onClick={() => state.measure('run')}>measure a run</WordButton>
-            <WordButton onClick={undo}>undo</WordButton>
-            <WordButton onClick={redo}>redo</WordButton>
+            {(
+              [
+                ['rename', () => setName(plan.name)],
+                ['another storey', onAnother],
+                ['take away', () => state.run(removePlan(document, plan.id))],
+                [plan.scale ? 'scale anew' : 'measure the scale', () => state.measure('scale')],
+                ['measure a run', () => state.measure('run')],
+                ['undo', undo],
+                ['redo', redo],
+              ] as const
+            ).map(([words, does]) => (
+              <WordButton key={words} className={WORD} onClick={does}>
+                {words}
+              </WordButton>
+            ))}
           </>
         )}
         {name === null &&
           PAPERS.map((paper) => (
             <a
               key={paper}
-              className="text-ink underline underline-offset-[3px]"
+              className={`inline-flex items-center text-ink underline underline-offset-[3px] ${WORD}`}
               href={`/api/drawings/${drawing.store.getState().drawingId}/pdf?face=plan&storey=${encodeURIComponent(plan.id)}&paper=${paper}`}
               target="_blank"
               rel="noreferrer"
