@@ -7,9 +7,12 @@ import { aside, cleaned, merged } from '@/components/rehearsal/canvas/pencil-lin
 import { tightAmps } from '@/components/rehearsal/looks';
 import { decades, shareOf, stationPlaces } from '@/components/rehearsal/time-scale';
 import { buildScene } from '@/diagram/layout/build-scene';
+import type { Point } from '@/diagram/layout/scene';
 import { createRehearsal } from '@/diagram/rehearsal/rehearse';
 import type { Walk } from '@/diagram/rehearsal/walk';
+import { draftDocument } from '@/diagram/survey/draft';
 import { readExample } from '../../diagram/example-homes';
+import { optionsOf, room } from '../../diagram/survey/surveys';
 
 describe('the address of a rehearsal', () => {
   const id = fc.stringMatching(/^[A-Za-z0-9_.:-]{1,12}$/);
@@ -181,5 +184,41 @@ describe('the pencil', () => {
     expect(strokes.some(({ out, points }) => !out && near(points[0]!))).toBe(true);
     for (const { points } of strokes)
       points.slice(1).forEach((b, i) => expect(points[i]!.x === b.x || points[i]!.y === b.y).toBe(true));
+  });
+
+  it('is set down anew where a core leaves a board and comes in over a room of the same page', () => {
+    const rooms = [
+      room('Porch', { kind: 'intake', lamps: 2, run: 4 }),
+      ...[1, 2, 3, 4, 5].map((n) => room(`Room ${n}`, { outlets: 3, run: 9 })),
+    ];
+    const doc = draftDocument(
+      rooms.map((row, order) => ({ ...row, order })),
+      optionsOf(),
+    );
+    const scene = buildScene(doc, 'connections', { place: 'porch' });
+    const lamp = scene.parts.find(({ kind }) => kind === 'lamp')!;
+    const { outcome } = createRehearsal(doc)({
+      stance: null,
+      condition: 'mains',
+      faults: [{ kind: 'line-to-case', at: lamp.id }],
+      hand: null,
+    });
+    if (!outcome || !('walk' in outcome)) throw new Error('not walked');
+    const { path } = outcome.walk.stations[1]!;
+    const strokes = pencilStrokes(scene, path, new Map());
+    for (const { points } of strokes)
+      points.slice(1).forEach((b, i) => expect(points[i]!.x === b.x || points[i]!.y === b.y).toBe(true));
+    const halves = scene.runs.filter(({ cut, wires }) => cut && path.some(({ wire, out }) => out && wires[0] === wire));
+    expect(halves).toHaveLength(2);
+    // each half is followed from one end to the other, a little beside it
+    const beside = (end: Point, line: readonly Point[]): boolean =>
+      line.slice(1).some((b, i) => {
+        const a = line[i]!;
+        const near = (p: number, q: number, at: number) => at > Math.min(p, q) - 700 && at < Math.max(p, q) + 700;
+        return near(a.x, b.x, end.x) && near(a.y, b.y, end.y);
+      });
+    for (const { points } of halves)
+      for (const end of [points[0]!, points.at(-1)!])
+        expect(strokes.some((stroke) => stroke.out && beside(end, stroke.points))).toBe(true);
   });
 });
