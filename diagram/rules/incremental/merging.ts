@@ -5,14 +5,25 @@ import type { Touched } from './touched';
 
 type Parts = Pick<Touched, 'before' | 'after'>;
 
-/** In order of id. */
+/** In order of id, where the tables are. */
 export function mergedMap<T>(known: ReadonlyMap<string, T>, now: ReadonlyMap<string, T>, { before, after }: Parts): Map<string, T> {
-  if (known.size + now.size === 0) return new Map();
-  const merged = new Map(known);
-  for (const id of before) if (!after.has(id) || !now.has(id)) merged.delete(id);
-  const size = merged.size;
-  for (const id of after) if (now.has(id)) merged.set(id, now.get(id)!);
-  return merged.size === size ? merged : new Map([...merged].sort(([a], [b]) => byCode(a, b)));
+  const anew = [...after].filter((id) => now.has(id)).sort(byCode);
+  if (anew.every((id) => known.has(id))) {
+    // Each in its old place: a copy keeps the order.
+    const merged = new Map(known);
+    for (const id of before) if (!after.has(id) || !now.has(id)) merged.delete(id);
+    for (const id of anew) merged.set(id, now.get(id)!);
+    return merged;
+  }
+  const merged = new Map<string, T>();
+  let next = 0;
+  for (const [id, value] of known) {
+    if (before.has(id)) continue;
+    for (; next < anew.length && anew[next]! < id; next++) merged.set(anew[next]!, now.get(anew[next]!)!);
+    merged.set(id, value);
+  }
+  for (const id of anew.slice(next)) merged.set(id, now.get(id)!);
+  return merged;
 }
 
 export function mergedSet(known: ReadonlySet<string>, now: ReadonlySet<string>, { before, after }: Parts): Set<string> {
