@@ -64,7 +64,7 @@ export function placeBoard(s: PageState): void {
   // the board stands beside the distributor's own, not under it: its tails rise to the first device
   const column = service.length > 0 && service.length < devices.length ? LEFT + BESIDE_SERVICE : LEFT;
   y = column === LEFT ? y : TOP.first;
-  const right = trunk.length > 0 ? column + m(22) : LEFT;
+  const right = trunk.length > 0 ? column + m(25) : LEFT;
   // rows, from above: bars of the column, devices over the bars, earth, neutral, line, ways
   const trunkBars = trunk.filter((n) => isLongBar(n.part.kind));
   const chainRows = Math.max(0, ...[...chains.values()].map((chain) => chain.length));
