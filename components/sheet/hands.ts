@@ -2,21 +2,19 @@ import { allowedFrom, joinTerminals } from '@/diagram/commands/join-terminals';
 import { deleteSelection } from '@/diagram/commands/delete-selection';
 import { marksOf, sameEnd, wiresAt } from '@/diagram/commands/ends';
 import { moveLoad } from '@/diagram/commands/move-load';
-import { moveParts } from '@/diagram/commands/move-parts';
 import { placeSupply, placeSupplyAlone } from '@/diagram/commands/place-supply';
 import { renumber } from '@/diagram/commands/renumber';
 import { isRefusal, type Command, type NewId, type Refusal } from '@/diagram/commands/types';
 import { walkFromSources, type Walk } from '@/diagram/commands/walk';
-import { applyPatch } from '@/diagram/document/patch';
-import { MODULE } from '@/diagram/symbols/types';
 import type { End, Installation } from '@/diagram/document/schema';
 import { buildScene } from '@/diagram/layout/build-scene';
 import type { Scene, SceneRun } from '@/diagram/layout/scene';
 import { isPoint } from '@/diagram/terminals/roles-of-parts';
 import { Clipboard } from './clipboard';
 import { guided } from './guiding';
-import { leadBy, runInHand } from './leading';
+import { runInHand } from './leading';
 import { leaveWalk } from './margin/showing';
+import { shiftParts } from './moving';
 import { firstPart, handEnd, nextPart, type Direction } from './navigate';
 import type { DrawingStore } from './store';
 import { lockHolds } from './placing';
@@ -202,41 +200,13 @@ export class Hands {
     else if (!lockHolds(this, this.state.selection.parts)) this.view.getState().setMode({ kind: 'move', dx: 0, dy: 0 });
   }
 
-  nudge(direction: Direction): void {
-    const { mode, setMode, set } = this.view.getState();
-    if (mode.kind !== 'move') return;
-    const dx = mode.dx + (direction === 'left' ? -1 : direction === 'right' ? 1 : 0);
-    const dy = mode.dy + (direction === 'up' ? -1 : direction === 'down' ? 1 : 0);
-    setMode({ kind: 'move', dx, dy });
-    if (this.state.selection.parts.length === 0) return;
-    const moved = moveParts(this.doc, this.view.getState().face, this.state.selection.parts, dx * MODULE, dy * MODULE);
-    set({ ghost: applyPatch(this.doc, moved.patch) });
-  }
-
-  endMove(): void {
-    const { mode, setMode } = this.view.getState();
-    if (mode.kind !== 'move') return;
-    setMode(REST);
-    if (mode.dx === 0 && mode.dy === 0) return;
-    if (this.state.selection.parts.length === 0) leadBy(this, mode.dx, mode.dy);
-    else this.shift(this.state.selection.parts, mode.dx * MODULE, mode.dy * MODULE);
-  }
-
   /**
    * A pointer lets go of parts that it has dragged so far, in 1/100 mm: they go where the guides show.
    * @returns whether they stand elsewhere now
    */
   moveBy(ids: readonly string[], dx: number, dy: number): boolean {
     const { dx: x, dy: y } = guided(this.scene(), ids, dx, dy) ?? { dx, dy };
-    return this.shift(ids, x, y);
-  }
-
-  private shift(ids: readonly string[], dx: number, dy: number): boolean {
-    const { terminal } = this.state.selection;
-    if (lockHolds(this, ids)) return false;
-    const moved = this.do(moveParts(this.doc, this.view.getState().face, ids, dx, dy));
-    if (moved && terminal) this.state.select({ terminal });
-    return moved;
+    return shiftParts(this, ids, x, y);
   }
 
   remove(): void {

@@ -5,6 +5,7 @@ import { isTyping, useSingleKeysOn } from '@/components/frame/single-keys';
 import { actionFor, keyName, type ActionContext } from './actions';
 import { stepWalk } from '@/components/rehearsal/on-sheet/shown-walk';
 import { walkShown } from './margin/showing';
+import { endMove, nudge } from './moving';
 import type { Direction } from './navigate';
 import { takeAlso } from './taking';
 
@@ -41,7 +42,7 @@ export function useKeyboard(context: ActionContext): (event: KeyboardEvent) => v
           const count = hands.candidates(mode.from).length;
           const step = direction === 'down' || direction === 'right' ? 1 : -1;
           hands.view.getState().setMode({ ...mode, index: (mode.index + step + count) % count });
-        } else if (mode.kind === 'move') hands.nudge(direction);
+        } else if (mode.kind === 'move') nudge(hands, direction);
         else if (event.shiftKey) takeAlso(hands, direction);
         else hands.arrow(direction);
         return;
@@ -53,7 +54,7 @@ export function useKeyboard(context: ActionContext): (event: KeyboardEvent) => v
       if (key === 'Enter' && (mode.kind === 'wire' || mode.kind === 'move')) {
         done();
         if (mode.kind === 'wire') hands.endWire();
-        else hands.endMove();
+        else endMove(hands);
         return;
       }
       if (!singleKeys && !isPlain(key)) return;
