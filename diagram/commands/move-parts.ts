@@ -1,8 +1,7 @@
 import { symbolFor } from '../symbols';
 import { turnedSize } from '../symbols/turn';
 import { MODULE } from '../symbols/types';
-import { diff } from '../document/patch';
-import { applyPatch } from '../document/patch';
+import { applyPatch, diff, isEmptyPatch } from '../document/patch';
 import { bendsMoved } from '../layout/bends';
 import { placeAll, positionsOn } from '../layout/place';
 import { byCode, canonical, type Face, type Installation, type Position } from '../document/schema';
@@ -19,7 +18,8 @@ function moved(
   ids: readonly string[],
   label: string,
 ): Command {
-  const before = applyPatch(doc, placeAll(doc));
+  const missing = placeAll(doc);
+  const before = isEmptyPatch(missing) ? doc : applyPatch(doc, missing);
   const all = positionsOn(before, face);
   const set: Record<string, Position> = {};
   for (const id of ids) {
@@ -48,6 +48,20 @@ export function moveParts(doc: Installation, face: Face, ids: readonly string[],
   const bends = bendsMoved(doc, face, new Set(unlocked(doc, face, ids)), snap(dx), snap(dy));
   if (Object.keys(bends).length === 0) return command;
   return { ...command, patch: { ...command.patch, set: { ...command.patch.set, bends } } };
+}
+
+/** Moves parts of one face each its own way, to the module, and pins them there. Lengths in 1/100 mm. */
+export function moveEach(
+  doc: Installation,
+  face: Face,
+  ways: ReadonlyMap<string, { dx: number; dy: number }>,
+  label: string,
+): Command {
+  const place = (id: string, at: Position): Position => {
+    const { dx, dy } = ways.get(id)!;
+    return { ...at, x: snap(at.x + dx), y: snap(at.y + dy), pinned: true };
+  };
+  return moved(doc, face, place, [...ways.keys()], label);
 }
 
 /** Turns parts by a quarter, clockwise, each about its own middle to the module; their runs follow to the terminals. */

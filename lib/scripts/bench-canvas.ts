@@ -26,7 +26,7 @@ const ZOOM = 0.9;
 const FRAMES = 100;
 const ROUNDS = 5;
 const LONG_TASK = 50;
-const TIDIED = 'r001';
+const TIDIED = 'r0001';
 
 const median = (values: readonly number[]): number => quantile(values, 0.5);
 const most = (name: string, ours: number, theirs: number, bar: number, unit: string): CanvasMeasure => {

@@ -10,7 +10,7 @@ const bendsOf = async (page: Page, job: string): Promise<Bends> =>
   ((await savedHome(page, job)) as { sheet?: { bends?: Bends } }).sheet?.bends ?? {};
 
 const wayOf = async (page: Page, run: string): Promise<string> =>
-  (await page.locator(`.react-flow__edge[data-id="${run}"] .react-flow__edge-interaction`).getAttribute('d'))!;
+  (await page.locator(`path[data-run="${run}"]`).getAttribute('d'))!;
 
 interface Held {
   run: string;
@@ -22,8 +22,8 @@ interface Held {
 async function bentRun(page: Page): Promise<Held> {
   const find = () =>
     page.evaluate((): Held | null => {
-      for (const path of document.querySelectorAll<SVGPathElement>('.react-flow__edge-interaction')) {
-        const run = path.closest<HTMLElement>('.react-flow__edge')?.dataset.id;
+      for (const path of document.querySelectorAll<SVGPathElement>('path[data-run]')) {
+        const { run } = path.dataset;
         const corners = path.getAttribute('d')!.match(/-?\d+ -?\d+(?=[ML]|$)/g)!.map((pair) => pair.split(' ').map(Number));
         for (let i = 0; run && corners.length > 2 && i + 1 < corners.length; i++) {
           const [a, b] = [corners[i]!, corners[i + 1]!];

@@ -2,12 +2,10 @@
 
 import { useCallback, useLayoutEffect, useMemo, useRef, type MouseEvent as ReactMouseEvent } from 'react';
 import {
-  ConnectionMode,
   ReactFlow,
   SelectionMode,
   useReactFlow,
   useStore as useFlowStore,
-  type EdgeChange,
   type NodeChange,
 } from 'reactflow';
 import 'reactflow/dist/style.css';
@@ -18,7 +16,7 @@ import type { MarkedNote } from '../margin/notes';
 import { useSheet } from '../use-drawing';
 import { useView, useViewStore } from '../view';
 import { dropDrag, settleDrag, useDrag } from './drag';
-import { edgeOf, nodeOf, type PartNode, type RunEdge } from './flow-items';
+import { nodeOf, type PartNode } from './flow-items';
 import { GhostLayer } from './ghost-layer';
 import { GroundLayer } from './ground-layer';
 import { HandLayer, HeldLayer } from './hand-layer';
@@ -26,17 +24,16 @@ import { MarksLayer } from './marks-layer';
 import { NotesLayer } from './notes-layer';
 import { PartNodeView } from './part-node';
 import { endsNear, meant, REACH, type Near } from './pick';
-import { RunEdgeView } from './run-edge';
 import { RunGrips } from './run-grips';
+import { RunHits } from './run-hits';
 import { RunsLayer } from './runs-layer';
 import { PX, px } from './units';
 import { useCamera } from './use-camera';
 import { useCoarse } from './use-coarse';
 import { useHold } from './use-hold';
-import { useSight } from './use-sight';
+import { inSight, useSight } from './use-sight';
 
 const nodeTypes = { part: PartNodeView };
-const edgeTypes = { run: RunEdgeView };
 const PAN_MOUSE = [1, 2];
 const MANY = ['Control', 'Meta', 'Shift'];
 /** The authors' name stands in the legend and in the README, where it can be read. */
@@ -48,7 +45,6 @@ const RUNS_FROM = 0.25;
 /** parts above which those out of sight are left undrawn */
 const LARGE = 300;
 const NO_PARTS: ReadonlySet<string> = new Set();
-const NO_EDGES: RunEdge[] = [];
 
 interface CanvasProps {
   scene: Scene;
@@ -63,7 +59,7 @@ interface CanvasProps {
 export function Canvas({ scene, ghost, notes, hands, candidates, target }: CanvasProps) {
   const { store } = hands;
   const view = useViewStore();
-  const flow = useReactFlow<PartNode, RunEdge>();
+  const flow = useReactFlow<PartNode>();
   const box = useRef<HTMLDivElement>(null);
   const selection = useSheet(store, (state) => state.selection);
   const rights = useSheet(store, (state) => state.rights);
@@ -83,18 +79,23 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
 
   useLayoutEffect(settleDrag, [scene]);
 
+  // The library's own culling asks for every part at every move and draws them one by one as they come into sight.
+  const far = scene.parts.length > LARGE && letters ? sight : null;
+  const drawn = useMemo(
+    () => (far ? scene.parts.filter(({ id, x, width }) => inSight(far, x, width) || held.has(id)) : scene.parts),
+    [scene.parts, far, held],
+  );
   const nodes = useMemo(
     () =>
-      scene.parts.map((part) => {
+      drawn.map((part) => {
         const node = nodeOf(part);
         const selected = held.has(part.id);
         if (drag.ids.has(part.id))
           return { ...node, position: { x: px(part.x + drag.dx), y: px(part.y + drag.dy) }, selected };
         return selected ? { ...node, selected } : node;
       }),
-    [scene.parts, drag, held],
+    [drawn, drag, held],
   );
-  const edges = useMemo(() => (runs ? scene.runs.map(edgeOf) : NO_EDGES), [scene.runs, runs]);
 
   const onNodesChange = useCallback(
     (changes: NodeChange<PartNode>[]) => {
@@ -114,23 +115,12 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
     [store],
   );
 
-  const onEdgesChange = useCallback(
-    (changes: EdgeChange<RunEdge>[]) => {
-      const chosen = new Set(store.getState().selection.wires);
-      let selected = false;
-      for (const change of changes) {
-        if (change.type !== 'select') continue;
-        selected = true;
-        const run = scene.runs.find((candidate) => candidate.id === change.id);
-        for (const wire of run?.wires ?? []) {
-          if (change.selected) chosen.add(wire);
-          else chosen.delete(wire);
-        }
-      }
-      if (selected) store.getState().select({ wires: [...chosen] });
-    },
-    [store, scene.runs],
-  );
+  /** A box drawn about parts takes their runs as well. */
+  const onSelectionEnd = useCallback(() => {
+    const parts = new Set(store.getState().selection.parts);
+    const runs = scene.runs.filter(({ from, to }) => parts.has(from[0]) || parts.has(to[0]));
+    store.getState().select({ wires: runs.flatMap((run) => run.wires) });
+  }, [store, scene.runs]);
 
   const onNodeDrag = useCallback((_: unknown, node: PartNode, group: PartNode[]) => {
     const start = node.data.part;
@@ -200,10 +190,6 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
   );
 
   const onNodeDoubleClick = useCallback((_: unknown, node: PartNode) => hands.editPart(node.id), [hands]);
-  const onEdgeDoubleClick = useCallback(
-    (_: unknown, edge: RunEdge) => edge.data && hands.editRun(edge.data.run),
-    [hands],
-  );
   const onMoveEnd = useCallback(() => {
     const { x, y, zoom } = flow.getViewport();
     if (x !== Math.round(x) || y !== Math.round(y)) void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
@@ -211,25 +197,20 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
 
   return (
     <div ref={box} className="h-full w-full">
-      <ReactFlow<PartNode, RunEdge>
+      <ReactFlow<PartNode>
         nodes={nodes}
-        edges={edges}
         nodeTypes={nodeTypes}
-        edgeTypes={edgeTypes}
         onNodesChange={onNodesChange}
-        onEdgesChange={onEdgesChange}
         onNodeDrag={onNodeDrag}
         onNodeDragStop={onNodeDragStop}
         onNodeClick={onNodeClick}
         onNodeDoubleClick={onNodeDoubleClick}
-        onEdgeDoubleClick={onEdgeDoubleClick}
+        onSelectionEnd={onSelectionEnd}
         onPaneClick={onPaneClick}
         onMoveEnd={onMoveEnd}
-        connectionMode={ConnectionMode.Loose}
         nodesConnectable={false}
         nodesDraggable={mayEdit && !coarse}
         nodesFocusable={false}
-        edgesFocusable={false}
         disableKeyboardA11y
         deleteKeyCode={null}
         selectionKeyCode={null}
@@ -242,9 +223,7 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
         zoomOnDoubleClick={false}
         nodeDragThreshold={4}
         elevateNodesOnSelect={false}
-        elevateEdgesOnSelect={false}
         zIndexMode="manual"
-        onlyRenderVisibleElements={scene.parts.length > LARGE && letters}
         minZoom={0.12}
         maxZoom={4}
         proOptions={ORIGIN}
@@ -253,6 +232,7 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
         <GroundLayer scene={scene} names={letters} />
         <HeldLayer scene={scene} parts={drag.ids.size > 0 ? NO_PARTS : held} />
         <RunsLayer scene={scene} hand={wires} />
+        {runs && <RunHits scene={scene} hands={hands} />}
         <MarksLayer scene={scene} letters={letters} sight={sight} />
         <NotesLayer scene={scene} notes={notes} inHand={finding} />
         {mayEdit && <RunGrips scene={scene} hands={hands} />}

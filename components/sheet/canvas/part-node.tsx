@@ -46,18 +46,13 @@ export function PartPicture({ part, ink = inkOf(part) }: { part: ScenePart; ink?
 /** One part on the canvas. Selection, terminals and lettering are layers of their own. */
 export const PartNodeView = memo(function PartNodeView({ data: { part } }: NodeProps<PartNode>) {
   return (
-    <>
-      <svg
-        data-part={part.id}
-        viewBox={`0 0 ${part.width} ${part.height}`}
-        className="block h-full w-full overflow-visible"
-        aria-hidden="true"
-      >
-        <PartPicture part={part} />
-      </svg>
-      {/* The library reads handles off the page: without one it draws no run for the pointer to take. Its own component
-          would listen to every move of the canvas, once a part. */}
-      <i className="source" data-handlepos="top" />
-    </>
+    <svg
+      data-part={part.id}
+      viewBox={`0 0 ${part.width} ${part.height}`}
+      className="block h-full w-full overflow-visible"
+      aria-hidden="true"
+    >
+      <PartPicture part={part} />
+    </svg>
   );
 });

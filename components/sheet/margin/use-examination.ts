@@ -15,9 +15,23 @@ export interface ExaminationState {
   ms: number;
 }
 
+/** ms after which what waits for an idle moment is done anyway */
+const LONGEST = 400;
+
+/** Does something after what the browser is at, or when it has nothing to do. @returns what calls it off */
+function later(act: () => void, idle: boolean): () => void {
+  if (idle && 'requestIdleCallback' in window) {
+    const asked = requestIdleCallback(act, { timeout: LONGEST });
+    return () => cancelIdleCallback(asked);
+  }
+  const timer = setTimeout(act);
+  return () => clearTimeout(timer);
+}
+
 /** Examines a document as it changes; null is not examined. */
 export function useExamination(document: Installation | null): ExaminationState {
   const examiner = useRef<Examiner | null>(null);
+  const told = useRef(false);
   const [state, setState] = useState<{
     of: Installation | null;
     examination: Examination | null;
@@ -43,11 +57,12 @@ export function useExamination(document: Installation | null): ExaminationState 
       if ('failure' in answer) setState((before) => ({ ...before, of: document, failure: answer.failure }));
       else setState({ of: document, examination: answer.value, failure: null, ms: answer.ms });
     };
-    // The edit is painted before the worker is told what it changed.
-    const timer = setTimeout(() => void examine());
+    // The edit is painted before the worker is told what it changed; a sheet that is opened hears hands and keys first.
+    const callOff = later(() => void examine(), !told.current);
+    told.current = true;
     return () => {
       wanted = false;
-      clearTimeout(timer);
+      callOff();
     };
   }, [document]);
   return { examination: state.examination, stale: state.of !== document, failure: state.failure, ms: state.ms };

@@ -1,7 +1,6 @@
 import type { ElkNode } from 'elkjs/lib/elk-api';
-import { moveParts } from '@/diagram/commands/move-parts';
+import { moveEach } from '@/diagram/commands/move-parts';
 import type { Command } from '@/diagram/commands/types';
-import { applyPatch, diff } from '@/diagram/document/patch';
 import type { Installation } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
 import { MODULE } from '@/diagram/symbols/types';
@@ -62,11 +61,9 @@ export function elkCommand(doc: Installation, scene: Scene, laidOut: ElkNode): C
   const top = Math.min(...moved.map(({ part }) => part.y));
   const [x0, y0] = [Math.min(...moved.map(({ x }) => x)), Math.min(...moved.map(({ y }) => y))];
   const snap = (value: number) => Math.round(value / MODULE) * MODULE;
-  let next = doc;
-  for (const { part, x, y } of moved) {
-    const dx = snap(left + x - x0) - part.x;
-    const dy = snap(top + y - y0) - part.y;
-    if (dx !== 0 || dy !== 0) next = applyPatch(next, moveParts(next, scene.face, [part.id], dx, dy).patch);
-  }
-  return { label: 'Tidy for short wires', patch: diff(doc, next) };
+  const ways = moved
+    .map(({ part, x, y }) => ({ id: part.id, dx: snap(left + x - x0) - part.x, dy: snap(top + y - y0) - part.y }))
+    .filter(({ dx, dy }) => dx !== 0 || dy !== 0);
+  const { label, patch } = moveEach(doc, scene.face, new Map(ways.map((way) => [way.id, way])), 'Tidy for short wires');
+  return { label, patch };
 }
