@@ -19,7 +19,7 @@ import type { Hanging } from './overview-ways';
 /** The distributor's own, over the board. */
 const SERVICE: ReadonlySet<string> = new Set(['supply', 'fuse', 'meter']);
 /** From the left edge of the service to the first device of the board: the meter's name and both tails stand between. */
-const BESIDE_SERVICE = m(24);
+const BESIDE_SERVICE = m(22);
 /** From one bar to the next below it. */
 const BAR_PITCH = m(6);
 
@@ -64,7 +64,7 @@ export function placeBoard(s: PageState): void {
   // the board stands beside the distributor's own, not under it: its tails rise to the first device
   const column = service.length > 0 && service.length < devices.length ? LEFT + BESIDE_SERVICE : LEFT;
   y = column === LEFT ? y : TOP.first;
-  const right = trunk.length > 0 ? column + m(25) : LEFT;
+  const right = trunk.length > 0 ? column + m(24) : LEFT;
   // rows, from above: bars of the column, devices over the bars, earth, neutral, line, ways
   const trunkBars = trunk.filter((n) => isLongBar(n.part.kind));
   const chainRows = Math.max(0, ...[...chains.values()].map((chain) => chain.length));
@@ -141,7 +141,7 @@ export function placeBoard(s: PageState): void {
     const inRoom = Math.max(0, ...[from.part, ...(neutralOf.get(from) ?? [])].map((part) => ledAway(s, part)));
     x = Math.max(slot + inRoom * m(3), start + m(16), start + m(8) + longest * m(3)) + m(10);
   }
-  for (const node of beyond) x = putPart(s, node.part, x, chainTop).right + m(12);
+  for (const node of beyond) x = putPart(s, node.part, x - m(6), chainTop).right + m(12);
   const earths = Math.max(
     0,
     ...s.page.parts.filter((part) => part.kind === 'earth-bar').map((part) => s.marks.get(part.id)?.length ?? 0),
