@@ -11,7 +11,7 @@ export interface Sight {
 }
 
 /** px of the canvas at zoom 1: the sight moves on in steps of this, so that a pan seldom draws anything anew */
-const STEP = 1200;
+const STEP = 600;
 
 /**
  * The stretch of the drawing that is in sight, and a step more on either side: lettering outside it is not drawn. Homes
