@@ -8,14 +8,13 @@ export default defineConfig({
   testDir: '.',
   outputDir: '../../test-results/browser',
   fullyParallel: false,
-  workers: 1,
+  workers: 2,
   // One test looks at a dozen screens with axe: on a busy machine that takes a minute.
   timeout: 180_000,
   reporter: [['list'], ['json', { outputFile: process.env.E2E_REPORT ?? '../../test-results/browser.json' }]],
   use: {
     baseURL: url,
     viewport: { width: 1440, height: 900 },
-    trace: 'retain-on-failure',
     launchOptions: {
       executablePath: '/usr/bin/chromium',
       args: [
