@@ -18,6 +18,9 @@ export default {
       screens: { wide: '56.25rem', lap: '68.75rem' },
       colors: Object.fromEntries(Object.keys(light).map((name) => [name, `var(--${name})`])),
       fontFamily: { mono: ['"JetBrains Mono"', 'ui-monospace', 'monospace'], sans: ['"JetBrains Mono"', 'ui-monospace', 'monospace'] },
+      // A fetch shorter than the first fifth of a second shows nothing.
+      keyframes: { opening: { from: { transform: 'scaleX(0)' } } },
+      animation: { opening: 'opening 1.2s ease-out 0.2s both' },
       fontSize: { small: ['11px', '16px'], body: ['12px', '16px'], head: ['13px', '16px'], title: ['20px', '24px'] },
     },
   },

@@ -2,7 +2,7 @@
 
 import Link from 'next/link';
 import { useEffect, useId, useRef, useState } from 'react';
-import { tabName } from './sheet-tabs';
+import { TabWords, tabName } from './tab-words';
 import type { Tab } from './types';
 
 /** On a narrow screen the open sheet's name opens the set. */
@@ -46,9 +46,9 @@ export function SheetPicker({ tabs, current, sheet }: { tabs: readonly Tab[]; cu
               prefetch={false}
               aria-current={tab.id === current ? 'page' : undefined}
               className={`flex min-h-11 items-center px-3 text-ink no-underline ${tab.id === current ? 'bg-row font-bold' : ''}`}
-              onClick={() => setOpen(false)}
+              onClick={() => tab.id === current && setOpen(false)}
             >
-              {tabName(tab)}
+              <TabWords tab={tab} />
             </Link>
           </li>
         ))}

@@ -1,7 +1,6 @@
 import Link from 'next/link';
+import { TabWords } from './tab-words';
 import type { Tab } from './types';
-
-export const tabName = (tab: Tab): string => (tab.number === undefined ? tab.label : `${tab.number} ${tab.label}`);
 
 /** The sheets of the set, as tabs on the paper's upper edge. */
 export function SheetTabs({ tabs, current }: { tabs: readonly Tab[]; current: string }) {
@@ -20,7 +19,7 @@ export function SheetTabs({ tabs, current }: { tabs: readonly Tab[]; current: st
                   open ? 'z-10 -mb-px bg-paper pb-[5px] font-bold' : 'bg-behind hover:bg-paper'
                 }`}
               >
-                {tabName(tab)}
+                <TabWords tab={tab} />
               </Link>
             </li>
           );
