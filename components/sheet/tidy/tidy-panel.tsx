@@ -1,11 +1,12 @@
 'use client';
 
-import { useRef, useLayoutEffect } from 'react';
+import { useEffect, useRef, useLayoutEffect } from 'react';
 import { Button } from '@/components/ui/button';
 import { Segmented } from '@/components/ui/segmented';
 import { diff } from '@/diagram/document/patch';
 import type { Hands } from '../hands';
 import { useView, type Mode } from '../view';
+import { standBy, standDown } from './elk';
 import type { TidyWay } from './use-tidy';
 
 const WAYS: readonly { value: TidyWay; label: string }[] = [
@@ -25,6 +26,11 @@ export function TidyPanel({ mode, hands, tidy, onLeave }: TidyPanelProps) {
   const face = useView((state) => state.face);
   const first = useRef<HTMLButtonElement>(null);
   useLayoutEffect(() => first.current?.focus(), []);
+  useEffect(() => {
+    if (face !== 'connections') return;
+    standBy();
+    return standDown;
+  }, [face]);
   return (
     <div
       role="dialog"
