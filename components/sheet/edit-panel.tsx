@@ -171,7 +171,7 @@ export function EditPanel({
       )}
       <p className="text-small text-grey pointer-coarse:hidden">Enter takes, Esc leaves as it was.</p>
       <Button
-        className="hidden pointer-coarse:inline-flex"
+        className="not-pointer-coarse:hidden"
         solid
         onClick={({ currentTarget }) => {
           // The field that lost the focus to this has taken its text, or says why not.
