@@ -3,10 +3,12 @@
 import { memo, useCallback, useEffect, useMemo, useRef, type MouseEvent as ReactMouseEvent } from 'react';
 import { ReactFlow, useReactFlow, useStore as useFlowStore } from 'reactflow';
 import 'reactflow/dist/style.css';
+import { EDGE, firstView } from '@/components/sheet/canvas/first-view';
 import { GroundLayer } from '@/components/sheet/canvas/ground-layer';
 import { HeldLayer } from '@/components/sheet/canvas/hand-layer';
 import { middle } from '@/components/sheet/canvas/pick';
 import { px } from '@/components/sheet/canvas/units';
+import { useLetters } from '@/components/sheet/canvas/use-letters';
 import type { Fault } from '@/diagram/circuit/fault-types';
 import type { Part } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
@@ -23,14 +25,13 @@ import { useLooks } from './use-looks';
 const nodeTypes = { look: LookNodeView };
 const NO_ORIGIN = { hideAttribution: true };
 const NO_EDGES: never[] = [];
-const LETTERS_FROM = 0.42;
-/** below it the body size of the lettering would be under 11 px */
-const READABLE = 0.9;
 const LARGE = 400;
 /** px from the edge: nearer to it a part counts as out of sight */
 const IN_SIGHT = 20;
 /** px: below this the conditions lie on the sheet */
 const NARROW = 760;
+/** px that they take there */
+const CONDITIONS = 60;
 
 interface CanvasProps {
   scene: Scene;
@@ -70,7 +71,7 @@ function nodeFor(part: Scene['parts'][number], look: PartLook, operable: boolean
 export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps) {
   const { scene, parts, cableOf, answer, station, fault, faultName, hand, show, onPart, onGround } = props;
   const flow = useReactFlow();
-  const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
+  const letters = useLetters();
   const box = useFlowStore((state) => `${state.width} ${state.height}`);
   const { figures, runLooks, partLooks } = useLooks(scene, parts, answer, station);
   const nodes = useMemo(
@@ -87,16 +88,8 @@ export const RehearsalCanvas = memo(function RehearsalCanvas(props: CanvasProps)
   const all = useCallback(() => {
     const [w = 0, h = 0] = box.split(' ').map(Number);
     if (w === 0 || h === 0) return;
-    const [width, height] = [px(scene.width), px(scene.height)];
-    const fit = Math.min((w - 16) / width, (h - 16) / height);
-    const zoom = Math.min(1.6, Math.max(READABLE, fit));
-    const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
-    const centre = source ? px(source.x + source.width / 2) * zoom : 0;
-    const spare = w - width * zoom;
-    const x = spare >= 0 ? spare / 2 : Math.min(8, Math.max(spare - 8, w / 2 - centre));
     // On a narrow screen the conditions stand along the upper edge.
-    const y = Math.max(w < NARROW ? 60 : 8, (h - height * zoom) / 2);
-    void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
+    void flow.setViewport(firstView(scene, [w, h], w < NARROW ? CONDITIONS : EDGE));
   }, [box, flow, scene]);
 
   const shown = useRef<string | null>(null);

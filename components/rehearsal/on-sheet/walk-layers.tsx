@@ -5,6 +5,7 @@ import { useReactFlow, useStore as useFlowStore } from 'reactflow';
 import { Layer } from '@/components/sheet/canvas/layer';
 import { middle } from '@/components/sheet/canvas/pick';
 import { px } from '@/components/sheet/canvas/units';
+import { useLetters } from '@/components/sheet/canvas/use-letters';
 import type { Camera } from '@/components/sheet/view';
 import type { Installation } from '@/diagram/document/schema';
 import type { Scene } from '@/diagram/layout/scene';
@@ -20,7 +21,6 @@ import { RehearsalProvider, stationIn, useRehearsal, walkIn } from '../state';
 import { useAnswers } from '../use-answers';
 import type { ShownWalk } from './shown-walk';
 
-const LETTERS_FROM = 0.42;
 /** below it the volts and amperes beside the runs would be too small to read */
 const LEAST_ZOOM = 0.8;
 
@@ -54,7 +54,7 @@ function Layers({ walk, document, scene, camera }: WalkLayersProps) {
   const answer = useRehearsal((state) => state.answer);
   const station = useRehearsal(stationIn);
   const started = useRehearsal((state) => walkIn(state) !== null);
-  const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
+  const letters = useLetters();
   const parts = useMemo(() => new Map(document.parts.map((part) => [part.id, part])), [document]);
   const cableOf = useMemo(
     () => new Map(document.wires.flatMap(({ id, cable }) => (cable === undefined ? [] : [[id, cable] as const]))),

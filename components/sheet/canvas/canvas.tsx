@@ -29,6 +29,7 @@ import { RunHits } from './run-hits';
 import { RunsLayer } from './runs-layer';
 import { PX, px } from './units';
 import { useCamera } from './use-camera';
+import { useLetters } from './use-letters';
 import { useCoarse } from './use-coarse';
 import { useHold } from './use-hold';
 import { inSight, useSight } from './use-sight';
@@ -38,8 +39,6 @@ const PAN_MOUSE = [1, 2];
 const MANY = ['Control', 'Meta', 'Shift'];
 /** The authors' name stands in the legend and in the README, where it can be read. */
 const ORIGIN = { hideAttribution: true };
-/** zoom below which lettering and ticks would be a blur */
-const LETTERS_FROM = 0.42;
 /** zoom below which no pointer hits a single run */
 const RUNS_FROM = 0.25;
 /** parts above which those out of sight are left undrawn */
@@ -68,7 +67,7 @@ export function Canvas({ scene, ghost, notes, hands, candidates, target }: Canva
   const finding = useView((state) => state.finding);
   const drag = useDrag();
   const coarse = useCoarse();
-  const letters = useFlowStore((state) => state.transform[2] >= LETTERS_FROM);
+  const letters = useLetters();
   const runs = useFlowStore((state) => state.transform[2] >= RUNS_FROM);
   const held = useMemo(() => new Set(selection.parts), [selection.parts]);
   const wires = useMemo(() => new Set(selection.wires), [selection.wires]);

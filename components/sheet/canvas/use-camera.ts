@@ -4,14 +4,9 @@ import { useCallback, useEffect, useRef } from 'react';
 import { useReactFlow, useStore } from 'reactflow';
 import type { Scene } from '@/diagram/layout/scene';
 import { useViewStore } from '../view';
+import { EDGE, firstView } from './first-view';
 import { px } from './units';
 
-/** below it the body size of the lettering would be under 11 px */
-const READABLE = 0.9;
-/** the largest that a small drawing is shown */
-const LARGEST = 1.6;
-/** px kept free at the edges of the canvas */
-const EDGE = 8;
 /** px: the names of the pages stand along the upper edge of the connections face */
 const PAGES = 40;
 
@@ -24,30 +19,18 @@ const IN_SIGHT = 24;
 const toSight = (at: number, side: number): number =>
   at < IN_SIGHT ? IN_SIGHT - at : at > side - IN_SIGHT ? side - IN_SIGHT - at : 0;
 
-/**
- * Where the canvas looks, and the camera by which the rest of the sheet moves it. A sheet opens whole; one that would then
- * be too small to read opens at the size at which it can be read, on the source and what lies about it.
- */
+/** Where the canvas looks, and the camera by which the rest of the sheet moves it. */
 export function useCamera(scene: Scene): void {
   const view = useViewStore();
   const flow = useReactFlow();
   const box = useStore((state) => `${state.width} ${state.height}`);
-  const width = px(scene.width);
-  const height = px(scene.height);
+  const { face, parts, width, height } = scene;
 
   const all = useCallback(() => {
     const [w = 0, h = 0] = box.split(' ').map(Number);
     if (w === 0 || h === 0) return;
-    const top = scene.face === 'connections' ? PAGES : EDGE;
-    const fit = Math.min((w - 2 * EDGE) / width, (h - top - EDGE) / height);
-    const zoom = Math.min(LARGEST, Math.max(READABLE, fit));
-    const source = scene.face === 'overview' ? scene.parts.find((part) => part.kind === 'supply') : undefined;
-    const centre = source ? px(source.x + source.width / 2) * zoom : 0;
-    const spare = w - width * zoom;
-    const x = spare >= 0 ? spare / 2 : Math.min(EDGE, Math.max(spare - EDGE, w / 2 - centre));
-    const y = Math.max(top, (h - height * zoom) / 2);
-    void flow.setViewport({ x: Math.round(x), y: Math.round(y), zoom });
-  }, [box, flow, width, height, scene.face, scene.parts]);
+    void flow.setViewport(firstView({ face, parts, width, height }, [w, h], face === 'connections' ? PAGES : EDGE));
+  }, [box, flow, face, parts, width, height]);
 
   const shown = useRef<string | null>(null);
   const page = `${scene.face} ${scene.place ?? ''}`;
