@@ -43,16 +43,16 @@ function EditField({ label, value, hint, first = false, commit, hands, onDone }:
     hands.do(outcome);
     return true;
   };
+  const leave = () => {
+    // The focus goes with the panel: what it leaves behind is not taken.
+    left.current = true;
+    onDone();
+  };
   const onKeyDown = (event: KeyboardEvent) => {
     event.stopPropagation();
-    if (event.key === 'Escape') {
-      left.current = true;
-      onDone();
-    } else if (event.key === 'Enter' && !event.nativeEvent.isComposing && take()) {
-      left.current = true;
-      onDone();
-    }
-    if (event.key === 'Tab' && !take()) event.preventDefault();
+    if (event.key === 'Escape') leave();
+    else if (event.key === 'Enter' && !event.nativeEvent.isComposing && take()) leave();
+    else if (event.key === 'Tab' && !take()) event.preventDefault();
   };
   return (
     <div>
